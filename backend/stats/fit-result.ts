@@ -1,0 +1,247 @@
+/** The specification of a fit: everything beside the rows, the members and the own company that decides its figures. */
+export interface Specification {
+  /** Effects taken out of every variable. */
+  readonly effects: 'company';
+  readonly form: 'levels';
+  readonly lag: 0;
+  /** Covariance of the slopes, STATISTICS §2. */
+  readonly slopes: SlopeCovarianceName;
+  /** Confidence level of every interval of what the model estimates, strictly between 0 and 1. */
+  readonly confidence: number;
+  /** Seed of random draws; null where the specification draws none. */
+  readonly seed: number | null;
+}
+
+export type SlopeCovarianceName = 'cr2' | 'cr1' | 'cr0' | 'classical';
+
+/**
+ * One row a company and fiscal year, by column. All arrays have the same length, NaN stands for a missing cell.
+ * `company` holds codes into `companies`; rows need not be sorted.
+ */
+export interface PanelColumns {
+  readonly companies: readonly string[];
+  readonly company: Int32Array;
+  readonly year: Int32Array;
+  readonly outcome: NamedColumn;
+  readonly regressors: readonly NamedColumn[];
+  /** Line of the imported file that each row came from, the header being line 1. */
+  readonly fileRow: Int32Array;
+}
+
+export interface NamedColumn {
+  readonly name: string;
+  readonly values: Float64Array;
+}
+
+/** An F statistic with its degrees of freedom; the p value is null for a perfect fit, with the reason. */
+export interface FTest {
+  readonly value: number | null;
+  readonly df1: number;
+  readonly df2: number;
+  readonly pValue: number | null;
+  readonly pValueReason?: string;
+}
+
+/** An estimate with its interval; bounds are null with `intervalReason` where no honest interval exists. */
+export interface IntervalEstimate {
+  readonly estimate: number;
+  readonly standardError: number | null;
+  readonly low: number | null;
+  readonly high: number | null;
+  readonly intervalReason?: string;
+}
+
+export interface SlopeEstimate extends IntervalEstimate {
+  /** The regressor's name as the panel has it. */
+  readonly name: string;
+  readonly statistic: number | null;
+  readonly degreesOfFreedom: number | null;
+  readonly pValue: number | null;
+}
+
+export interface InterceptEstimate extends IntervalEstimate {
+  readonly company: string;
+  /** a_i minus the unweighted mean of all intercepts; null for a single-row company. */
+  readonly deviation: number | null;
+  readonly rows: number;
+}
+
+export interface Standing extends IntervalEstimate {
+  readonly company: string;
+  readonly calibration: number | null;
+  readonly cosines: number;
+  readonly persistence: number | null;
+  readonly ownPersistence: number | null;
+  /** Place by estimate, 1 = highest intercept; for records only, never shown without its rank set. */
+  readonly rank: number | null;
+  /** First and last place that the data cannot rule out; null with `rankReason`. */
+  readonly rankSet: readonly [number, number] | null;
+  readonly rankReason?: string;
+}
+
+/** The difference a_own − a_peer with the standard error of the rank set's steps (its own number of cosines). */
+export interface PairComparison extends IntervalEstimate {
+  readonly company: string;
+  /** +1 shown to be higher than the own company, −1 shown to be lower, 0 not told apart (Holm over all one-sided hypotheses). */
+  readonly shown: -1 | 0 | 1;
+}
+
+export interface GapYear {
+  readonly year: number;
+  /** How far the own company lay above its peers once the slopes are taken out. */
+  readonly gap: number;
+  /** Peers with a row in that year. */
+  readonly peers: number;
+}
+
+export interface Drift extends IntervalEstimate {
+  readonly pValue: number | null;
+}
+
+/** A year of the own company: actual market value and what the model expects. */
+export interface OwnYear {
+  readonly year: number;
+  readonly fileRow: number;
+  readonly actual: number;
+  readonly fitted: number;
+  readonly residual: number;
+  readonly regressors: readonly number[];
+}
+
+export interface FitWarning {
+  readonly code: WarningCode;
+  readonly detail: string;
+  /** Companies, regressors or years concerned. */
+  readonly subjects?: readonly string[];
+}
+
+export type WarningCode =
+  | 'few-companies'
+  | 'few-years'
+  | 'small-degrees-of-freedom'
+  | 'persistent-errors'
+  | 'persistence-capped'
+  | 'own-persistence'
+  | 'dominated'
+  | 'single-row'
+  | 'perfect-fit'
+  | 'ill-conditioned'
+  | 'spelling';
+
+export interface DroppedRow {
+  readonly row: number;
+  readonly column: string;
+  readonly reason: 'missing';
+}
+
+export interface Sample {
+  readonly companies: number;
+  readonly years: number;
+  readonly observations: number;
+  readonly balanced: boolean;
+  readonly firstYear: number;
+  readonly lastYear: number;
+  readonly dropped: readonly DroppedRow[];
+  readonly singleRow: readonly string[];
+}
+
+/** The bounds of one regressor over rows of the sample. */
+export interface ObservedRange {
+  readonly low: number;
+  readonly high: number;
+}
+
+/**
+ * All that prediction needs, on the server and in the browser. Vectors are over the contrast basis
+ * [own intercept, slope 1 … slope K]. STATISTICS §3 "Everything here is linear or quadratic in w" and §4.
+ */
+export interface PredictionBasis {
+  readonly company: string;
+  readonly regressors: readonly string[];
+  /** [own intercept, slopes …]. */
+  readonly coefficients: readonly number[];
+  /** Number of years T in the sample. */
+  readonly years: number;
+  /** λ_1 … λ_B, each over the basis. */
+  readonly lambdas: readonly (readonly number[])[];
+  /** A and D over the basis. */
+  readonly a: readonly (readonly number[])[];
+  readonly d: readonly (readonly number[])[];
+  /** t_B(1 − α/2). */
+  readonly quantile: number;
+  /** Why no calibrated interval exists, where none does. */
+  readonly intervalReason?: string;
+  readonly confidence: number;
+  /** Covariance of the slopes as chosen in the specification, K × K. */
+  readonly slopeCovariance: readonly (readonly number[])[];
+  /** Degrees of freedom of a contrast of slopes. */
+  readonly slopeDegreesOfFreedom: SlopeDegreesOfFreedom;
+  /** The own company's last observed year and its values. */
+  readonly last: OwnYear;
+  readonly ownMeans: readonly number[];
+  /** Q⁻¹ of the company-demeaned regressors, K × K. */
+  readonly inverseCrossProduct: readonly (readonly number[])[];
+  /** Largest leverage x̃'Q⁻¹x̃ of the own company, and of any company. */
+  readonly largestOwnLeverage: number;
+  readonly largestLeverage: number;
+  readonly ownRange: readonly ObservedRange[];
+  readonly peerRange: readonly ObservedRange[];
+}
+
+/**
+ * Fixed degrees of freedom, or Satterthwaite's for a contrast w of slopes:
+ * (w'Sw)² / Σ_kl,mn w_k w_l w_m w_n quartic[k][l][m][n], flattened row-major with K⁴ entries.
+ */
+export type SlopeDegreesOfFreedom =
+  | { readonly kind: 'fixed'; readonly value: number }
+  | {
+      readonly kind: 'satterthwaite';
+      readonly s: readonly (readonly number[])[];
+      readonly quartic: readonly number[];
+    };
+
+/** What one fit says. Numbers at full precision; what is not defined is null with a reason beside it. */
+export interface FitResult {
+  readonly engine: string;
+  /** SHA-256, hex, of the canonical JSON of rows used, members, own company, specification and engine version. */
+  readonly hash: string;
+  readonly specification: Specification;
+  readonly outcome: string;
+  readonly members: readonly string[];
+  readonly sample: Sample;
+  readonly slopes: readonly SlopeEstimate[];
+  readonly slopeCovariance: readonly (readonly number[])[];
+  readonly intercepts: readonly InterceptEstimate[];
+  readonly yearEffects: null;
+  readonly standing: Standing | null;
+  readonly pairs: readonly PairComparison[] | null;
+  readonly gapPath: readonly GapYear[] | null;
+  readonly drift: Drift | null;
+  readonly driftReason?: string;
+  readonly goodness: {
+    readonly withinRSquared: number;
+    readonly rSquared: number;
+    readonly adjustedRSquared: number;
+    readonly residualStandardError: number;
+    readonly f: FTest;
+    readonly fSlopes: FTest;
+  };
+  readonly pooled: {
+    readonly constant: number;
+    readonly slopes: Readonly<Record<string, number>>;
+    readonly rSquared: number;
+    readonly f: FTest;
+  };
+  readonly poolability: FTest;
+  /** Slopes and standing without each company in turn. */
+  readonly withoutCompany: readonly {
+    readonly company: string;
+    readonly slopes: readonly number[] | null;
+    readonly standing: number | null;
+    readonly reason?: string;
+  }[];
+  /** The own company's years, oldest first; null without an own company. */
+  readonly ownYears: readonly OwnYear[] | null;
+  readonly prediction: PredictionBasis | null;
+  readonly warnings: readonly FitWarning[];
+}
