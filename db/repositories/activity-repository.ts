@@ -1,0 +1,39 @@
+import type { Kysely } from 'kysely';
+import type { Database } from '../schema/database';
+
+export interface ActivityEntry {
+  readonly id: string;
+  readonly personId: string | null;
+  readonly action: string;
+  readonly subjectId: string | null;
+  readonly detail: object;
+}
+
+/** The append-only record of who did what. */
+export class ActivityRepository {
+  constructor(
+    private readonly db: Kysely<Database>,
+    private readonly workspaceId: string,
+  ) {}
+
+  async append(entry: ActivityEntry): Promise<void> {
+    await this.db
+      .insertInto('activity')
+      .values({
+        ...entry,
+        detail: JSON.stringify(entry.detail),
+        workspaceId: this.workspaceId,
+      })
+      .execute();
+  }
+
+  list(limit: number): Promise<(ActivityEntry & { readonly at: Date })[]> {
+    return this.db
+      .selectFrom('activity')
+      .select(['id', 'at', 'personId', 'action', 'subjectId', 'detail'])
+      .where('workspaceId', '=', this.workspaceId)
+      .orderBy('at', 'desc')
+      .limit(limit)
+      .execute();
+  }
+}

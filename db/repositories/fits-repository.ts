@@ -1,0 +1,162 @@
+import type { Kysely } from 'kysely';
+import { withNamedErrors } from '../errors';
+import type { Database } from '../schema/database';
+
+export type FitState = 'queued' | 'running' | 'done' | 'failed' | 'cancelled';
+
+export interface FitRow {
+  readonly id: string;
+  readonly panelVersionId: string;
+  readonly peerGroupId: string;
+  readonly ownCompany: string;
+  readonly specification: object;
+  readonly state: FitState;
+  readonly progress: object | null;
+  readonly hash: string | null;
+  readonly result: object | null;
+  readonly failure: object | null;
+  readonly createdAt: Date;
+  readonly createdByName: string;
+}
+
+export class FitsRepository {
+  constructor(
+    private readonly db: Kysely<Database>,
+    private readonly workspaceId: string,
+  ) {}
+
+  /** @throws {UniqueViolation} when the same fit is queued, running or done. */
+  async insert(fit: {
+    readonly id: string;
+    readonly panelVersionId: string;
+    readonly peerGroupId: string;
+    readonly specification: object;
+    readonly specificationKey: string;
+    readonly createdBy: string;
+  }): Promise<void> {
+    await withNamedErrors(() =>
+      this.db
+        .insertInto('fit')
+        .values({
+          ...fit,
+          specification: JSON.stringify(fit.specification),
+          state: 'queued',
+          workspaceId: this.workspaceId,
+        })
+        .execute(),
+    );
+  }
+
+  findSame(peerGroupId: string, specificationKey: string): Promise<FitRow | undefined> {
+    return this.fits()
+      .where('fit.peerGroupId', '=', peerGroupId)
+      .where('fit.specificationKey', '=', specificationKey)
+      .where('fit.state', 'in', ['queued', 'running', 'done'])
+      .executeTakeFirst();
+  }
+
+  find(id: string): Promise<FitRow | undefined> {
+    return this.fits().where('fit.id', '=', id).executeTakeFirst();
+  }
+
+  async state(id: string): Promise<FitState | undefined> {
+    const found = await this.db
+      .selectFrom('fit')
+      .select('state')
+      .where('workspaceId', '=', this.workspaceId)
+      .where('id', '=', id)
+      .executeTakeFirst();
+    return found?.state;
+  }
+
+  list(limit: number): Promise<FitRow[]> {
+    return this.fits().orderBy('fit.createdAt', 'desc').limit(limit).execute();
+  }
+
+  latestDone(): Promise<FitRow | undefined> {
+    return this.fits()
+      .where('fit.state', '=', 'done')
+      .orderBy('fit.createdAt', 'desc')
+      .limit(1)
+      .executeTakeFirst();
+  }
+
+  /** Takes a queued or interrupted fit up; false when it ended meanwhile. */
+  markRunning(id: string, progress: object): Promise<boolean> {
+    return this.changeUnfinished(id, { state: 'running', progress: JSON.stringify(progress) });
+  }
+
+  saveProgress(id: string, progress: object): Promise<boolean> {
+    return this.changeUnfinished(id, { progress: JSON.stringify(progress) });
+  }
+
+  finish(id: string, hash: string, result: object, at: Date): Promise<boolean> {
+    return this.changeUnfinished(id, {
+      state: 'done',
+      hash,
+      result: JSON.stringify(result),
+      progress: null,
+      finishedAt: at,
+    });
+  }
+
+  fail(id: string, failure: object, at: Date): Promise<boolean> {
+    return this.changeUnfinished(id, {
+      state: 'failed',
+      failure: JSON.stringify(failure),
+      progress: null,
+      finishedAt: at,
+    });
+  }
+
+  cancel(id: string, at: Date): Promise<boolean> {
+    return this.changeUnfinished(id, { state: 'cancelled', progress: null, finishedAt: at });
+  }
+
+  private async changeUnfinished(
+    id: string,
+    change: {
+      readonly state?: FitState;
+      readonly progress?: string | null;
+      readonly hash?: string;
+      readonly result?: string;
+      readonly failure?: string;
+      readonly finishedAt?: Date;
+    },
+  ): Promise<boolean> {
+    const result = await this.db
+      .updateTable('fit')
+      .set(change)
+      .where('workspaceId', '=', this.workspaceId)
+      .where('id', '=', id)
+      .where('state', 'in', ['queued', 'running'])
+      .executeTakeFirst();
+    return result.numUpdatedRows > 0n;
+  }
+
+  private fits() {
+    return this.db
+      .selectFrom('fit')
+      .innerJoin('person', 'person.id', 'fit.createdBy')
+      .innerJoin('peerGroupVersion', (join) =>
+        join
+          .onRef('peerGroupVersion.workspaceId', '=', 'fit.workspaceId')
+          .onRef('peerGroupVersion.id', '=', 'fit.peerGroupId'),
+      )
+      .select([
+        'fit.id',
+        'fit.panelVersionId',
+        'fit.peerGroupId',
+        'peerGroupVersion.ownCompany',
+        'fit.specification',
+        'fit.state',
+        'fit.progress',
+        'fit.hash',
+        'fit.result',
+        'fit.failure',
+        'fit.createdAt',
+        'person.name as createdByName',
+      ])
+      .where('fit.workspaceId', '=', this.workspaceId);
+  }
+}

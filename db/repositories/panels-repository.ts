@@ -1,0 +1,171 @@
+import { type Kysely, sql } from 'kysely';
+import type { Database } from '../schema/database';
+import type { StoredColumn } from '../schema/panel-tables';
+
+export interface PanelVersionRow {
+  readonly id: string;
+  readonly panelId: string;
+  readonly panelName: string;
+  readonly number: number;
+  readonly parentId: string | null;
+  readonly currency: string;
+  readonly unit: 'units' | 'thousands' | 'millions' | 'billions';
+  readonly companyHeader: string;
+  readonly yearHeader: string;
+  readonly columns: readonly StoredColumn[];
+  readonly note: string;
+  readonly companies: number;
+  readonly rowCount: number;
+  readonly firstYear: number;
+  readonly lastYear: number;
+  readonly createdAt: Date;
+  readonly createdByName: string;
+  readonly fileId: string;
+  readonly fileName: string;
+  readonly fileByteSize: number;
+  readonly fileSha256: string;
+}
+
+/** Rows of a panel version by column; `cells[row][column]`, null where a cell is missing. */
+export interface PanelRows {
+  readonly company: readonly string[];
+  readonly year: readonly number[];
+  readonly fileRow: readonly number[];
+  readonly cells: readonly (readonly (number | null)[])[];
+}
+
+/** Rows a statement: large enough to be quick, small enough to keep the statement's text in bounds. */
+const insertBatch = 5000;
+
+export class PanelsRepository {
+  constructor(
+    private readonly db: Kysely<Database>,
+    private readonly workspaceId: string,
+  ) {}
+
+  async insertPanel(id: string, name: string): Promise<void> {
+    await this.db.insertInto('panel').values({ workspaceId: this.workspaceId, id, name }).execute();
+  }
+
+  /** The newest version of the panel with this name. */
+  findLatestByName(name: string): Promise<PanelVersionRow | undefined> {
+    return this.versions()
+      .where('panel.name', '=', name)
+      .orderBy('panelVersion.number', 'desc')
+      .limit(1)
+      .executeTakeFirst();
+  }
+
+  async insertVersion(version: {
+    readonly id: string;
+    readonly panelId: string;
+    readonly number: number;
+    readonly parentId: string | null;
+    readonly fileId: string;
+    readonly currency: string;
+    readonly unit: 'units' | 'thousands' | 'millions' | 'billions';
+    readonly companyHeader: string;
+    readonly yearHeader: string;
+    readonly columns: readonly StoredColumn[];
+    readonly note: string;
+    readonly companies: number;
+    readonly rowCount: number;
+    readonly firstYear: number;
+    readonly lastYear: number;
+    readonly createdBy: string;
+  }): Promise<void> {
+    await this.db
+      .insertInto('panelVersion')
+      .values({
+        ...version,
+        columns: JSON.stringify(version.columns),
+        workspaceId: this.workspaceId,
+      })
+      .execute();
+  }
+
+  /** Arrays in, one statement a batch: 200,000 rows as single inserts would take minutes. */
+  async insertRows(panelVersionId: string, rows: PanelRows): Promise<void> {
+    for (let start = 0; start < rows.company.length; start += insertBatch) {
+      const end = start + insertBatch;
+      const cells = rows.cells
+        .slice(start, end)
+        .map((row) => `{${row.map((cell) => (cell === null ? 'NULL' : String(cell))).join(',')}}`);
+      await sql`insert into panel_row (workspace_id, panel_version_id, company, year, file_row, cells)
+        select ${this.workspaceId}::uuid, ${panelVersionId}::uuid, company, year, file_row,
+          cells::double precision[]
+        from unnest(
+          ${rows.company.slice(start, end)}::text[],
+          ${rows.year.slice(start, end)}::integer[],
+          ${rows.fileRow.slice(start, end)}::integer[],
+          ${cells}::text[]
+        ) as line(company, year, file_row, cells)`.execute(this.db);
+    }
+  }
+
+  findVersion(id: string): Promise<PanelVersionRow | undefined> {
+    return this.versions().where('panelVersion.id', '=', id).executeTakeFirst();
+  }
+
+  listVersions(): Promise<PanelVersionRow[]> {
+    return this.versions().orderBy('panelVersion.createdAt', 'desc').execute();
+  }
+
+  /** Rows in order of company and year; of the named companies only, where names are given. */
+  async rows(panelVersionId: string, companies?: readonly string[]): Promise<PanelRows> {
+    let query = this.db
+      .selectFrom('panelRow')
+      .select(['company', 'year', 'fileRow', 'cells'])
+      .where('workspaceId', '=', this.workspaceId)
+      .where('panelVersionId', '=', panelVersionId);
+    if (companies !== undefined)
+      query = query.where('company', '=', sql<string>`any(${[...companies]}::text[])`);
+    const found = await query.orderBy('company').orderBy('year').execute();
+    return {
+      company: found.map((row) => row.company),
+      year: found.map((row) => row.year),
+      fileRow: found.map((row) => row.fileRow),
+      cells: found.map((row) => row.cells),
+    };
+  }
+
+  private versions() {
+    return this.db
+      .selectFrom('panelVersion')
+      .innerJoin('panel', (join) =>
+        join
+          .onRef('panel.workspaceId', '=', 'panelVersion.workspaceId')
+          .onRef('panel.id', '=', 'panelVersion.panelId'),
+      )
+      .innerJoin('storedFile', (join) =>
+        join
+          .onRef('storedFile.workspaceId', '=', 'panelVersion.workspaceId')
+          .onRef('storedFile.id', '=', 'panelVersion.fileId'),
+      )
+      .innerJoin('person', 'person.id', 'panelVersion.createdBy')
+      .select([
+        'panelVersion.id',
+        'panelVersion.panelId',
+        'panel.name as panelName',
+        'panelVersion.number',
+        'panelVersion.parentId',
+        'panelVersion.currency',
+        'panelVersion.unit',
+        'panelVersion.companyHeader',
+        'panelVersion.yearHeader',
+        'panelVersion.columns',
+        'panelVersion.note',
+        'panelVersion.companies',
+        'panelVersion.rowCount',
+        'panelVersion.firstYear',
+        'panelVersion.lastYear',
+        'panelVersion.createdAt',
+        'person.name as createdByName',
+        'storedFile.id as fileId',
+        'storedFile.name as fileName',
+        'storedFile.byteSize as fileByteSize',
+        'storedFile.sha256 as fileSha256',
+      ])
+      .where('panelVersion.workspaceId', '=', this.workspaceId);
+  }
+}

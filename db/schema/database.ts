@@ -1,0 +1,44 @@
+import type {
+  ActivityTable,
+  BillingAccountTable,
+  InvitationTable,
+  MembershipTable,
+  PersonTable,
+  SignInThrottleTable,
+  WorkspaceTable,
+} from './accounts-tables';
+import type { EditionTable } from './edition-table';
+import type { FitTable, JobTicketTable } from './fit-tables';
+import type {
+  ImportDraftTable,
+  PanelRowTable,
+  PanelTable,
+  PanelVersionTable,
+  StoredFileTable,
+} from './panel-tables';
+import type { PeerChoiceTable, PeerGroupVersionTable } from './peer-tables';
+import type { ScenarioDraftTable, ScenarioTable, ScenarioVersionTable } from './scenario-tables';
+
+/** Tables by name; the session and queue tables belong to their packages. */
+export interface Database {
+  activity: ActivityTable;
+  billingAccount: BillingAccountTable;
+  edition: EditionTable;
+  fit: FitTable;
+  importDraft: ImportDraftTable;
+  invitation: InvitationTable;
+  jobTicket: JobTicketTable;
+  membership: MembershipTable;
+  panel: PanelTable;
+  panelRow: PanelRowTable;
+  panelVersion: PanelVersionTable;
+  peerChoice: PeerChoiceTable;
+  peerGroupVersion: PeerGroupVersionTable;
+  person: PersonTable;
+  scenario: ScenarioTable;
+  scenarioDraft: ScenarioDraftTable;
+  scenarioVersion: ScenarioVersionTable;
+  signInThrottle: SignInThrottleTable;
+  storedFile: StoredFileTable;
+  workspace: WorkspaceTable;
+}
