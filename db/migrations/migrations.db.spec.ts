@@ -23,7 +23,9 @@ describe('migrations', () => {
     expect(both.flat().length)
       .withContext('two at once run each migration once')
       .toBe(new Set(both.flat()).size);
-    expect(await migrate(options)).withContext('a second run changes nothing').toEqual([]);
+    expect(await migrate(options))
+      .withContext('a second run changes nothing')
+      .toEqual([]);
     client = new pg.Client({ connectionString: database.adminUrl });
     await client.connect();
   });
