@@ -1,0 +1,26 @@
+import { spawn } from 'node:child_process';
+import { once } from 'node:events';
+import { createInterface } from 'node:readline';
+import { fileURLToPath } from 'node:url';
+
+/**
+ * Starts database, stub and server in a process of their own before the first journey, and ends it after the last.
+ * Journeys read KINVALE_URL and KINVALE_ACCOUNTS (JSON: role, email and password of each demo person).
+ */
+export default async function startStack(): Promise<() => Promise<void>> {
+  const script = fileURLToPath(new URL('../tools/e2e-stack.mjs', import.meta.url));
+  // The open stdin tells the stack that we live: it stops by itself should this process be killed.
+  const stack = spawn(process.execPath, [script], { stdio: ['pipe', 'pipe', 'inherit'] });
+  const exited = once(stack, 'exit');
+  const firstLine = once(createInterface({ input: stack.stdout }), 'line') as Promise<[string]>;
+  const ready = await Promise.race([firstLine, exited.then(() => undefined)]);
+  if (ready === undefined)
+    throw new Error('the stack for the journeys did not start; it says why above');
+  const { url, accounts } = JSON.parse(ready[0]) as { url: string; accounts: unknown };
+  process.env['KINVALE_URL'] = url;
+  process.env['KINVALE_ACCOUNTS'] = JSON.stringify(accounts);
+  return async () => {
+    stack.stdin.end();
+    await exited;
+  };
+}

@@ -1,0 +1,50 @@
+/**
+ * Bundles the processes that Node.js runs into dist/, packages left outside.
+ *
+ * `--partial` leaves out entries whose source is not there; without it a missing one is an error.
+ */
+import { existsSync } from 'node:fs';
+import { rm } from 'node:fs/promises';
+import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { build } from 'esbuild';
+
+const root = fileURLToPath(new URL('..', import.meta.url));
+
+const entries = {
+  'backend/main': 'backend/main.ts',
+  'backend/migrate': 'backend/migrate-main.ts',
+  'backend/fit-worker': 'backend/compute/fit-worker.ts',
+  'backend/parse-child': 'backend/compute/parse-child.ts',
+  'stubs/stripe': 'stubs/stripe/main.ts',
+  'tools/seed-demo': 'tools/seed-demo.ts',
+};
+
+const missing = Object.values(entries).filter((source) => !existsSync(join(root, source)));
+if (missing.length > 0 && !process.argv.includes('--partial')) {
+  console.error(`expected every entry of the backend; missing: ${missing.join(', ')}`);
+  process.exit(1);
+}
+
+for (const folder of ['backend', 'stubs', 'tools']) {
+  await rm(join(root, 'dist', folder), { recursive: true, force: true });
+}
+await build({
+  absWorkingDir: root,
+  entryPoints: Object.fromEntries(
+    Object.entries(entries).filter(([, source]) => !missing.includes(source)),
+  ),
+  outdir: 'dist',
+  bundle: true,
+  packages: 'external',
+  platform: 'node',
+  target: 'node20',
+  format: 'esm',
+  splitting: true,
+  // Beside main.js: shared code finds fit-worker.js and parse-child.js next to its own import.meta.url.
+  chunkNames: 'backend/[name]-[hash]',
+  tsconfig: 'tsconfig.json',
+  sourcemap: true,
+  sourcesContent: false,
+  logLevel: 'warning',
+});

@@ -1,0 +1,37 @@
+import { createServer } from 'node:net';
+import { PlainFailure } from './plain-failure.mjs';
+
+/** A port on 127.0.0.1 that nobody listens on right now. */
+export function freePort() {
+  return listenBriefly('127.0.0.1', 0);
+}
+
+/** @throws {PlainFailure} when the port cannot be had. */
+export async function requirePort(host, port) {
+  try {
+    return await listenBriefly(host, port);
+  } catch (error) {
+    if (error.code === 'EADDRINUSE') {
+      throw new PlainFailure(
+        `Port ${port} on ${host} is taken: stop what uses it, or set PORT to another number.`,
+      );
+    }
+    if (error.code === 'EACCES') {
+      throw new PlainFailure(
+        `This user may not listen on port ${port}: set PORT to 1024 or above.`,
+      );
+    }
+    throw error;
+  }
+}
+
+function listenBriefly(host, port) {
+  return new Promise((resolve, reject) => {
+    const server = createServer();
+    server.once('error', reject);
+    server.listen(port, host, () => {
+      const bound = server.address().port;
+      server.close(() => resolve(bound));
+    });
+  });
+}
