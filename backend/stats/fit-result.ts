@@ -1,10 +1,20 @@
+import type { IntervalEstimate, OwnYear, PredictionBasis } from './prediction';
+
+export type {
+  IntervalEstimate,
+  ObservedRange,
+  OwnYear,
+  PredictionBasis,
+  SlopeDegreesOfFreedom,
+} from './prediction';
+
 /** The specification of a fit: everything beside the rows, the members and the own company that decides its figures. */
 export interface Specification {
   /** Effects taken out of every variable. */
   readonly effects: 'company';
   readonly form: 'levels';
   readonly lag: 0;
-  /** Covariance of the slopes, STATISTICS §2. */
+  /** Covariance of the slopes, by the names of `slopes/slope-covariance.ts`. */
   readonly slopes: SlopeCovarianceName;
   /** Confidence level of every interval of what the model estimates, strictly between 0 and 1. */
   readonly confidence: number;
@@ -40,15 +50,6 @@ export interface FTest {
   readonly df2: number;
   readonly pValue: number | null;
   readonly pValueReason?: string;
-}
-
-/** An estimate with its interval; bounds are null with `intervalReason` where no honest interval exists. */
-export interface IntervalEstimate {
-  readonly estimate: number;
-  readonly standardError: number | null;
-  readonly low: number | null;
-  readonly high: number | null;
-  readonly intervalReason?: string;
 }
 
 export interface SlopeEstimate extends IntervalEstimate {
@@ -88,24 +89,14 @@ export interface PairComparison extends IntervalEstimate {
 
 export interface GapYear {
   readonly year: number;
-  /** How far the own company lay above its peers once the slopes are taken out. */
-  readonly gap: number;
+  /** How far the own company lay above its peers once the slopes are taken out; null in a year without any peer. */
+  readonly gap: number | null;
   /** Peers with a row in that year. */
   readonly peers: number;
 }
 
 export interface Drift extends IntervalEstimate {
   readonly pValue: number | null;
-}
-
-/** A year of the own company: actual market value and what the model expects. */
-export interface OwnYear {
-  readonly year: number;
-  readonly fileRow: number;
-  readonly actual: number;
-  readonly fitted: number;
-  readonly residual: number;
-  readonly regressors: readonly number[];
 }
 
 export interface FitWarning {
@@ -145,61 +136,6 @@ export interface Sample {
   readonly singleRow: readonly string[];
 }
 
-/** The bounds of one regressor over rows of the sample. */
-export interface ObservedRange {
-  readonly low: number;
-  readonly high: number;
-}
-
-/**
- * All that prediction needs, on the server and in the browser. Vectors are over the contrast basis
- * [own intercept, slope 1 … slope K]. STATISTICS §3 "Everything here is linear or quadratic in w" and §4.
- */
-export interface PredictionBasis {
-  readonly company: string;
-  readonly regressors: readonly string[];
-  /** [own intercept, slopes …]. */
-  readonly coefficients: readonly number[];
-  /** Number of years T in the sample. */
-  readonly years: number;
-  /** λ_1 … λ_B, each over the basis. */
-  readonly lambdas: readonly (readonly number[])[];
-  /** A and D over the basis. */
-  readonly a: readonly (readonly number[])[];
-  readonly d: readonly (readonly number[])[];
-  /** t_B(1 − α/2). */
-  readonly quantile: number;
-  /** Why no calibrated interval exists, where none does. */
-  readonly intervalReason?: string;
-  readonly confidence: number;
-  /** Covariance of the slopes as chosen in the specification, K × K. */
-  readonly slopeCovariance: readonly (readonly number[])[];
-  /** Degrees of freedom of a contrast of slopes. */
-  readonly slopeDegreesOfFreedom: SlopeDegreesOfFreedom;
-  /** The own company's last observed year and its values. */
-  readonly last: OwnYear;
-  readonly ownMeans: readonly number[];
-  /** Q⁻¹ of the company-demeaned regressors, K × K. */
-  readonly inverseCrossProduct: readonly (readonly number[])[];
-  /** Largest leverage x̃'Q⁻¹x̃ of the own company, and of any company. */
-  readonly largestOwnLeverage: number;
-  readonly largestLeverage: number;
-  readonly ownRange: readonly ObservedRange[];
-  readonly peerRange: readonly ObservedRange[];
-}
-
-/**
- * Fixed degrees of freedom, or Satterthwaite's for a contrast w of slopes:
- * (w'Sw)² / Σ_kl,mn w_k w_l w_m w_n quartic[k][l][m][n], flattened row-major with K⁴ entries.
- */
-export type SlopeDegreesOfFreedom =
-  | { readonly kind: 'fixed'; readonly value: number }
-  | {
-      readonly kind: 'satterthwaite';
-      readonly s: readonly (readonly number[])[];
-      readonly quartic: readonly number[];
-    };
-
 /** What one fit says. Numbers at full precision; what is not defined is null with a reason beside it. */
 export interface FitResult {
   readonly engine: string;
@@ -214,6 +150,8 @@ export interface FitResult {
   readonly intercepts: readonly InterceptEstimate[];
   readonly yearEffects: null;
   readonly standing: Standing | null;
+  /** Why there is no standing, where an own company was named. */
+  readonly standingReason?: string;
   readonly pairs: readonly PairComparison[] | null;
   readonly gapPath: readonly GapYear[] | null;
   readonly drift: Drift | null;
@@ -243,5 +181,6 @@ export interface FitResult {
   /** The own company's years, oldest first; null without an own company. */
   readonly ownYears: readonly OwnYear[] | null;
   readonly prediction: PredictionBasis | null;
+  readonly predictionReason?: string;
   readonly warnings: readonly FitWarning[];
 }

@@ -1,0 +1,50 @@
+import { tQuantile } from '../distributions/t-distribution';
+import { type IntervalEstimate, symmetricInterval, withoutInterval } from '../prediction';
+import type { CompanyForms } from './company-forms';
+import type { Contrast } from './contrast';
+import { lambdasOf, residualForm, varianceForm } from './contrast-forms';
+
+/** A denominator below this share of its numerator calibrates nothing. */
+const calibrationTolerance = 1e-12;
+
+export const noCalibrationReason =
+  'The variation over time that an interval is calibrated on is practically zero for this figure.';
+
+/** Standard error of one contrast, with what made it. */
+export type CalibratedError =
+  | { readonly standardError: number; readonly calibration: number }
+  | { readonly standardError: null; readonly calibration: null; readonly reason: string };
+
+/**
+ * se = √(T·mean_j (h_j'e)²·c), c = max(1, Σ g_i'R_ig_i / (T·mean_j Σ (Mh_j)_i'R_i(Mh_j)_i)).
+ *
+ * @param cosines  B; at most what the forms were computed for.
+ */
+export function calibratedError(
+  forms: CompanyForms,
+  contrast: Contrast,
+  cosines: number,
+): CalibratedError {
+  const numerator = varianceForm(forms, contrast, contrast);
+  const denominator = forms.years * residualForm(forms, contrast, contrast, cosines);
+  if (!(denominator > calibrationTolerance * numerator)) {
+    return { standardError: null, calibration: null, reason: noCalibrationReason };
+  }
+  const calibration = Math.max(1, numerator / denominator);
+  const squares = lambdasOf(forms, contrast, cosines).reduce((sum, value) => sum + value ** 2, 0);
+  return {
+    standardError: Math.sqrt(((forms.years * squares) / cosines) * calibration),
+    calibration,
+  };
+}
+
+/** estimate ± t_B(1 − α/2)·se. */
+export function calibratedInterval(
+  estimate: number,
+  error: CalibratedError,
+  options: { readonly cosines: number; readonly confidence: number },
+): IntervalEstimate {
+  if (error.standardError === null) return withoutInterval(estimate, error.reason);
+  const quantile = tQuantile(1 - (1 - options.confidence) / 2, options.cosines);
+  return symmetricInterval(estimate, error.standardError, quantile);
+}

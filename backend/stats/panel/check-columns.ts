@@ -1,0 +1,58 @@
+import type { PanelColumns } from '../fit-result';
+import { type RowPlace, StatsError } from '../stats-error';
+
+/**
+ * Refuses columns that do not fit together, and numbers that are neither finite nor missing.
+ * @throws {StatsError} 'shape' or 'non-finite' with every place.
+ */
+export function checkColumns(data: PanelColumns): void {
+  const rows = data.company.length;
+  const columns = [data.outcome, ...data.regressors];
+  if (data.regressors.length === 0) {
+    throw new StatsError('shape', 'expected at least one regressor; found none');
+  }
+  for (const { name, values } of columns) refuseLength(name, values.length, rows);
+  refuseLength('year', data.year.length, rows);
+  refuseLength('fileRow', data.fileRow.length, rows);
+  const names = columns.map(({ name }) => name);
+  const twice = names.filter((name, index) => names.indexOf(name) !== index);
+  if (twice.length > 0) {
+    throw new StatsError('shape', `expected each column once; found ${twice.join(', ')} twice`, {
+      columns: twice,
+    });
+  }
+  if (data.company.some((code) => code < 0 || code >= data.companies.length)) {
+    throw new StatsError('shape', 'expected company codes to point into the list of companies');
+  }
+  refuseInfinite(data);
+}
+
+function refuseLength(name: string, found: number, expected: number): void {
+  if (found === expected) return;
+  throw new StatsError(
+    'shape',
+    `expected ${expected} values of ${name}, one a row; found ${found}`,
+    {
+      columns: [name],
+    },
+  );
+}
+
+function refuseInfinite(data: PanelColumns): void {
+  const rows: RowPlace[] = [];
+  for (const { name, values } of [data.outcome, ...data.regressors]) {
+    values.forEach((value, index) => {
+      if (!Number.isFinite(value) && !Number.isNaN(value)) {
+        rows.push({ row: data.fileRow[index], column: name });
+      }
+    });
+  }
+  if (rows.length === 0) return;
+  throw new StatsError(
+    'non-finite',
+    'expected finite numbers; found values too large to compute with',
+    {
+      rows,
+    },
+  );
+}

@@ -1,0 +1,33 @@
+import type { DroppedRow } from '../fit-result';
+
+/**
+ * The rows a fit is estimated from, sorted by company name and year: every company has two rows or more.
+ * n rows, N companies; company i holds rows starts[i] … starts[i + 1] − 1.
+ */
+export interface PanelSample {
+  readonly companies: readonly string[];
+  readonly starts: Int32Array;
+  readonly year: Int32Array;
+  /** Position of the row's year among the sample's years, 0 … T − 1. */
+  readonly position: Int32Array;
+  /** The T different years, ascending. */
+  readonly years: readonly number[];
+  readonly outcome: Float64Array;
+  readonly regressors: readonly Float64Array[];
+  readonly fileRow: Int32Array;
+  readonly outcomeName: string;
+  readonly regressorNames: readonly string[];
+  /** Companies with one row: listed, but part of no count, mean or ranking. */
+  readonly singles: readonly SingleRow[];
+  readonly dropped: readonly DroppedRow[];
+  /** Everyone who was asked for, sorted by name. */
+  readonly members: readonly string[];
+}
+
+export interface SingleRow {
+  readonly company: string;
+  readonly year: number;
+  readonly fileRow: number;
+  readonly outcome: number;
+  readonly regressors: readonly number[];
+}

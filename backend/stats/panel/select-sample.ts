@@ -1,0 +1,168 @@
+import type { DroppedRow, PanelColumns } from '../fit-result';
+import { type RowPlace, StatsError } from '../stats-error';
+import { checkColumns } from './check-columns';
+import type { PanelSample, SingleRow } from './panel-sample';
+
+/** More different years than this is no panel of fiscal years but a wrong column. */
+const mostYears = 1000;
+
+/**
+ * Takes the rows of the members that have every value, sorts them by company and year, and sets companies with a
+ * single row apart before anything is counted.
+ *
+ * @param own  is added to the members; null where the fit has no own company.
+ * @param members  names; undefined means every company of the data.
+ * @throws {StatsError} 'shape', 'non-finite', 'unknown-company', 'duplicate-rows', 'too-few-companies', 'too-many-years'.
+ */
+export function selectSample(
+  data: PanelColumns,
+  own: string | null,
+  members: readonly string[] | undefined,
+): PanelSample {
+  checkColumns(data);
+  const names = memberNames(data, own, members);
+  const rows = sortedRows(data, new Set(names));
+  refuseDuplicates(data, rows);
+  const columns = [data.outcome, ...data.regressors];
+  const dropped = rows.flatMap((row): DroppedRow[] =>
+    columns
+      .filter(({ values }) => Number.isNaN(values[row]))
+      .map(({ name }) => ({ row: data.fileRow[row], column: name, reason: 'missing' })),
+  );
+  const complete = rows.filter((row) => columns.every(({ values }) => !Number.isNaN(values[row])));
+  const groups = groupByCompany(data, complete);
+  const kept = groups.filter((group) => group.length > 1);
+  if (kept.length < 2) {
+    throw new StatsError(
+      'too-few-companies',
+      `expected at least 2 companies with 2 complete rows each; found ${kept.length}`,
+      { companies: kept.map((group) => data.companies[data.company[group[0]]]) },
+    );
+  }
+  return {
+    ...gather(data, kept),
+    singles: groups.filter((group) => group.length === 1).map(([row]) => singleRow(data, row)),
+    dropped: dropped.sort((left, right) => left.row - right.row),
+    members: names,
+  };
+}
+
+function memberNames(
+  data: PanelColumns,
+  own: string | null,
+  members: readonly string[] | undefined,
+): string[] {
+  const present = new Set<string>();
+  data.company.forEach((code) => present.add(data.companies[code]));
+  const names = new Set(members ?? present);
+  if (own !== null) names.add(own);
+  const unknown = [...names].filter((name) => !present.has(name));
+  if (unknown.length > 0) {
+    throw new StatsError(
+      'unknown-company',
+      `expected companies that have rows in the panel; found none for ${unknown.join(', ')}`,
+      { companies: unknown },
+    );
+  }
+  return [...names].sort(byCodeUnit);
+}
+
+/** The same order on every machine, whatever its language. */
+function byCodeUnit(left: string, right: string): number {
+  if (left === right) return 0;
+  return left < right ? -1 : 1;
+}
+
+function sortedRows(data: PanelColumns, members: ReadonlySet<string>): number[] {
+  const order = data.companies
+    .map((name, code) => ({ name, code }))
+    .sort((left, right) => byCodeUnit(left.name, right.name) || left.code - right.code);
+  const place = new Int32Array(data.companies.length);
+  order.forEach(({ name, code }, index) => {
+    const before = order[index - 1];
+    place[code] = before?.name === name ? place[before.code] : index;
+  });
+  const rows: number[] = [];
+  data.company.forEach((code, row) => {
+    if (members.has(data.companies[code])) rows.push(row);
+  });
+  return rows.sort(
+    (left, right) =>
+      place[data.company[left]] - place[data.company[right]] ||
+      data.year[left] - data.year[right] ||
+      data.fileRow[left] - data.fileRow[right],
+  );
+}
+
+function refuseDuplicates(data: PanelColumns, rows: readonly number[]): void {
+  const isSame = (left: number | undefined, right: number | undefined): boolean =>
+    left !== undefined &&
+    right !== undefined &&
+    data.year[left] === data.year[right] &&
+    data.companies[data.company[left]] === data.companies[data.company[right]];
+  const places = rows
+    .filter((row, index) => isSame(rows[index - 1], row) || isSame(row, rows[index + 1]))
+    .map((row): RowPlace => ({
+      row: data.fileRow[row],
+      company: data.companies[data.company[row]],
+      year: data.year[row],
+    }));
+  if (places.length === 0) return;
+  throw new StatsError(
+    'duplicate-rows',
+    `expected one row a company and year; found ${places.length} rows that share theirs with another`,
+    { rows: places, companies: [...new Set(places.map((place) => place.company as string))] },
+  );
+}
+
+function groupByCompany(data: PanelColumns, rows: readonly number[]): number[][] {
+  const groups: number[][] = [];
+  let last: string | undefined;
+  for (const row of rows) {
+    const company = data.companies[data.company[row]];
+    if (company !== last) groups.push([]);
+    groups[groups.length - 1].push(row);
+    last = company;
+  }
+  return groups;
+}
+
+function gather(
+  data: PanelColumns,
+  groups: readonly number[][],
+): Omit<PanelSample, 'singles' | 'dropped' | 'members'> {
+  const rows = groups.flat();
+  const starts = new Int32Array(groups.length + 1);
+  groups.forEach((group, index) => (starts[index + 1] = starts[index] + group.length));
+  const year = Int32Array.from(rows, (row) => data.year[row]);
+  const years = [...new Set(year)].sort((left, right) => left - right);
+  if (years.length > mostYears) {
+    throw new StatsError(
+      'too-many-years',
+      `expected at most ${mostYears} different fiscal years; found ${years.length}: is this the year's column?`,
+    );
+  }
+  const positions = new Map(years.map((value, index) => [value, index]));
+  return {
+    companies: groups.map((group) => data.companies[data.company[group[0]]]),
+    starts,
+    year,
+    position: Int32Array.from(year, (value) => positions.get(value) as number),
+    years,
+    outcome: Float64Array.from(rows, (row) => data.outcome.values[row]),
+    regressors: data.regressors.map(({ values }) => Float64Array.from(rows, (row) => values[row])),
+    fileRow: Int32Array.from(rows, (row) => data.fileRow[row]),
+    outcomeName: data.outcome.name,
+    regressorNames: data.regressors.map(({ name }) => name),
+  };
+}
+
+function singleRow(data: PanelColumns, row: number): SingleRow {
+  return {
+    company: data.companies[data.company[row]],
+    year: data.year[row],
+    fileRow: data.fileRow[row],
+    outcome: data.outcome.values[row],
+    regressors: data.regressors.map(({ values }) => values[row]),
+  };
+}

@@ -1,0 +1,23 @@
+export {
+  type Decomposition,
+  type DecompositionFromLast,
+  type DecompositionTerm,
+  decompositionFromLast,
+  decompositionToBase,
+} from './decomposition';
+export { expectedValue } from './expected-value';
+export {
+  type FamiliarRange,
+  familiarRange,
+  type RangePlace,
+  type RegressorPlace,
+} from './familiar-range';
+export { type IntervalEstimate, symmetricInterval, withoutInterval } from './interval-estimate';
+export type {
+  ObservedRange,
+  OwnYear,
+  PredictionBasis,
+  SlopeDegreesOfFreedom,
+} from './prediction-basis';
+export { quadraticForm } from './quadratic-form';
+export { contrastDegreesOfFreedom, differenceToBase, type TQuantile } from './slope-contrast';

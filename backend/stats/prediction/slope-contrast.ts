@@ -1,0 +1,66 @@
+import { type IntervalEstimate, symmetricInterval, withoutInterval } from './interval-estimate';
+import type { PredictionBasis, SlopeDegreesOfFreedom } from './prediction-basis';
+import { quadraticForm } from './quadratic-form';
+
+/** Quantile of Student's t at fractional degrees of freedom. */
+export type TQuantile = (probability: number, degreesOfFreedom: number) => number;
+
+/** Degrees of freedom of the contrast of slopes with the given weights, not all zero. */
+export function contrastDegreesOfFreedom(
+  degrees: SlopeDegreesOfFreedom,
+  weights: readonly number[],
+): number {
+  if (degrees.kind === 'fixed') return degrees.value;
+  const pairs = pairProducts(weights);
+  const size = pairs.length;
+  let denominator = 0;
+  for (let row = 0; row < size; row += 1) {
+    for (let column = 0; column < size; column += 1) {
+      denominator += pairs[row] * degrees.quartic[row * size + column] * pairs[column];
+    }
+  }
+  return quadraticForm(degrees.s, weights) ** 2 / denominator;
+}
+
+/**
+ * Σ b_k·Δx_k with the interval of the covariance chosen for the slopes and the degrees of freedom of this contrast.
+ *
+ * @param deltaRegressors  differences in the order and measure of `basis.regressors`.
+ * @see Pustejovsky & Tipton (2018), JBES 36, 672–683.
+ */
+export function differenceToBase(
+  basis: PredictionBasis,
+  deltaRegressors: readonly number[],
+  tQuantile: TQuantile,
+): IntervalEstimate {
+  const largest = Math.max(...deltaRegressors.map(Math.abs));
+  if (largest === 0) return { estimate: 0, standardError: 0, low: 0, high: 0 };
+  let estimate = 0;
+  deltaRegressors.forEach((delta, k) => (estimate += basis.coefficients[k + 1] * delta));
+  if (basis.slopeIntervalReason !== undefined) {
+    return withoutInterval(estimate, basis.slopeIntervalReason);
+  }
+  const standardError = Math.sqrt(
+    Math.max(0, quadraticForm(basis.slopeCovariance, deltaRegressors)),
+  );
+  // Degrees of freedom do not depend on the contrast's size: scaled, fourth powers neither overflow nor vanish.
+  const degrees = contrastDegreesOfFreedom(
+    basis.slopeDegreesOfFreedom,
+    deltaRegressors.map((delta) => delta / largest),
+  );
+  if (!(degrees > 0)) {
+    return withoutInterval(
+      estimate,
+      'This difference leaves no degrees of freedom to judge it by.',
+    );
+  }
+  const quantile = tQuantile(1 - (1 - basis.confidence) / 2, degrees);
+  return symmetricInterval(estimate, standardError, quantile);
+}
+
+/** w_k·w_l for k ≤ l, doubled for k < l. */
+function pairProducts(weights: readonly number[]): number[] {
+  return weights.flatMap((left, k) =>
+    weights.slice(k).map((right, offset) => (offset === 0 ? left * right : 2 * left * right)),
+  );
+}

@@ -1,0 +1,48 @@
+import type { SquareMatrix } from '../linear-algebra/square-matrix';
+import { symmetricPower } from '../linear-algebra/symmetric-power';
+import type { WithinFit } from '../regression/within-fit';
+
+/** Eigenvalues of I − H_ii below this are dropped: the company alone determines that direction. */
+const eigenvalueFloor = 1e-10;
+
+/**
+ * What a company adds to every cluster-robust figure, in the orthonormal basis U of the demeaned regressors.
+ * K × K products of its T_i rows take the place of its T_i × T_i block of the hat matrix.
+ */
+export interface CompanyProduct {
+  /** S_i = U_i'U_i; the S_i add up to the identity. */
+  readonly cross: SquareMatrix;
+  /** g_i = U_i'e_i. */
+  readonly score: Float64Array;
+  /** W_i = (I − S_i)^(−½), pseudo-inverse: A_i·U_i = U_i·W_i with A_i = (I − H_ii)^(−½). */
+  readonly adjustment: SquareMatrix;
+  /** Whether without this company the slopes are still determined. */
+  readonly isDispensable: boolean;
+}
+
+/** Cross-products of every company; cost n·K² + N·K³. */
+export function companyProducts(fit: WithinFit): CompanyProduct[] {
+  return fit.sample.companies.map((_, company) => companyProduct(fit, company));
+}
+
+function companyProduct(fit: WithinFit, company: number): CompanyProduct {
+  const size = fit.basis.length;
+  const from = fit.sample.starts[company];
+  const to = fit.sample.starts[company + 1];
+  const cross = new Float64Array(size * size);
+  const score = new Float64Array(size);
+  for (let k = 0; k < size; k += 1) {
+    const left = fit.basis[k];
+    for (let row = from; row < to; row += 1) score[k] += left[row] * fit.residuals[row];
+    for (let l = 0; l <= k; l += 1) {
+      const right = fit.basis[l];
+      let sum = 0;
+      for (let row = from; row < to; row += 1) sum += left[row] * right[row];
+      cross[k * size + l] = sum;
+      cross[l * size + k] = sum;
+    }
+  }
+  const rest = cross.map((value, index) => (index % (size + 1) === 0 ? 1 : 0) - value);
+  const power = symmetricPower(rest, size, -0.5, eigenvalueFloor);
+  return { cross, score, adjustment: power.matrix, isDispensable: power.dropped === 0 };
+}

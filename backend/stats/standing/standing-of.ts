@@ -1,0 +1,61 @@
+import type { PairComparison, Standing } from '../fit-result';
+import { calibratedInterval } from '../intervals/calibrated-interval';
+import { standingContrast } from '../intervals/contrast';
+import { contrastError, type IntervalContext } from '../intervals/interval-context';
+import { fewestRowsForRank, rowsOf } from '../intervals/interval-reasons';
+import { withoutInterval } from '../prediction';
+
+/**
+ * The own company's intercept minus the unweighted mean of the others', with its calibrated interval, and the places
+ * among the companies of 3 rows or more that the data cannot rule out.
+ *
+ * @param pairs  the own company's comparisons with every peer.
+ */
+export function standingOf(
+  context: IntervalContext,
+  own: number,
+  pairs: readonly PairComparison[],
+): Standing {
+  const { fit, cosines, persistence } = context;
+  const relative = fit.relativeIntercepts;
+  const others = relative.reduce((sum, value, index) => (index === own ? sum : sum + value), 0);
+  const estimate = relative[own] - others / (relative.length - 1);
+  const error = contrastError(context, standingContrast(fit, own), cosines);
+  const interval =
+    error.standardError === null
+      ? withoutInterval(estimate, error.reason)
+      : calibratedInterval(estimate, error, { cosines, confidence: context.confidence });
+  const ownPersistence = persistence.own[own];
+  return {
+    company: fit.sample.companies[own],
+    ...interval,
+    calibration: error.calibration,
+    cosines,
+    persistence: persistence.pooled,
+    ownPersistence: Number.isNaN(ownPersistence) ? null : ownPersistence,
+    ...rankOf(context, own, pairs),
+  };
+}
+
+function rankOf(
+  context: IntervalContext,
+  own: number,
+  pairs: readonly PairComparison[],
+): Pick<Standing, 'rank' | 'rankSet' | 'rankReason'> {
+  const { fit } = context;
+  if (rowsOf(fit, own) < fewestRowsForRank) {
+    const rankReason = `${fit.sample.companies[own]} has ${rowsOf(fit, own)} rows; a rank needs at least ${fewestRowsForRank}.`;
+    return { rank: null, rankSet: null, rankReason };
+  }
+  const ranked = fit.sample.companies
+    .map((_, index) => index)
+    .filter((index) => rowsOf(fit, index) >= fewestRowsForRank);
+  const higher = ranked.filter(
+    (index) => fit.relativeIntercepts[index] > fit.relativeIntercepts[own],
+  );
+  const rank = 1 + higher.length;
+  if (context.reason !== undefined) return { rank, rankSet: null, rankReason: context.reason };
+  const shownHigher = pairs.filter(({ shown }) => shown === 1).length;
+  const shownLower = pairs.filter(({ shown }) => shown === -1).length;
+  return { rank, rankSet: [1 + shownHigher, ranked.length - shownLower] };
+}

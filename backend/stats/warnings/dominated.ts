@@ -1,0 +1,35 @@
+import type { FitResult, FitWarning, SlopeEstimate } from '../fit-result';
+
+const manyStandardErrors = 2;
+
+/** One warning a company without which a slope changes its sign or moves by more than two standard errors. */
+export function dominatedWarnings(
+  slopes: readonly SlopeEstimate[],
+  withoutCompany: FitResult['withoutCompany'],
+): FitWarning[] {
+  return withoutCompany.flatMap(({ company, slopes: without, reason }): FitWarning[] => {
+    if (without === null) {
+      return [{ code: 'dominated', detail: `${company}: ${reason ?? ''}`, subjects: [company] }];
+    }
+    const moved = slopes.filter((slope, k) => isMoved(slope, without[k]));
+    if (moved.length === 0) return [];
+    const changes = moved.map((slope) => {
+      const value = without[slopes.indexOf(slope)];
+      return `${slope.name} goes from ${short(slope.estimate)} to ${short(value)}`;
+    });
+    const detail = `Without ${company}, ${changes.join(' and ')}: this one company decides the result.`;
+    return [{ code: 'dominated', detail, subjects: [company, ...moved.map(({ name }) => name)] }];
+  });
+}
+
+function isMoved(slope: SlopeEstimate, without: number): boolean {
+  if (Math.sign(slope.estimate) * Math.sign(without) < 0) return true;
+  return (
+    slope.standardError !== null &&
+    Math.abs(without - slope.estimate) > manyStandardErrors * slope.standardError
+  );
+}
+
+function short(value: number): string {
+  return String(Number(value.toPrecision(4))).replace('-', '−');
+}
