@@ -1,0 +1,106 @@
+import { createHash } from 'node:crypto';
+import {
+  demoOwnCompany,
+  demoPanelCsv,
+  demoPeerReasons,
+  demoPeople,
+  demoScenarios,
+  demoYears,
+} from './demo-panel';
+
+describe('the demo panel', () => {
+  const lines = demoPanelCsv().trimEnd().split('\n');
+  const rows = lines.slice(1).map((line) => line.split(','));
+  const column = (name: string): number => lines[0].split(',').indexOf(name);
+  const companies = [...new Set(rows.map(([company]) => company))];
+  const cell = (company: string, year: number, name: string): number => {
+    const row = rows.find((entry) => entry[0] === company && entry[1] === String(year));
+    return Number(row?.[column(name)]);
+  };
+
+  it('holds 14 companies over 18 fiscal years, one of them only from 2014', () => {
+    expect(lines[0]).toBe('company,fiscal_year,market_value,capex,book_equity,employees');
+    expect(companies.length).toBe(14);
+    expect(demoYears.length).toBe(18);
+    for (const company of companies) {
+      const years = rows.filter((row) => row[0] === company).map((row) => Number(row[1]));
+      const wanted = company === 'Yelvarno' ? demoYears.filter((year) => year >= 2014) : demoYears;
+      expect(years)
+        .withContext(company)
+        .toEqual([...wanted]);
+    }
+  });
+
+  it('leaves out five cells, none of the own company', () => {
+    const gaps = rows.filter((row) => row.some((text) => text === '' || text === 'n/a'));
+    expect(gaps.map((row) => row.slice(0, 2).join(' '))).toEqual([
+      'Kesdrin 2010',
+      'Bruxolan 2019',
+      'Dorvaleck 2013',
+      'Imbresk 2008',
+      'Fenquora 2012',
+    ]);
+    expect(gaps.flat().filter((text) => text === '' || text === 'n/a').length).toBe(5);
+  });
+
+  it('gives positive money with one decimal and whole employees everywhere else', () => {
+    for (const row of rows) {
+      for (const text of row.slice(2, 5)) {
+        expect(text).toMatch(/^$|^n\/a$|^[1-9]\d*\.\d$/);
+      }
+      expect(row[5]).toMatch(/^$|^[1-9]\d*0$/);
+    }
+  });
+
+  it('is the same file at every run, pinned by its digest, and another for another seed', () => {
+    const digest = createHash('sha256').update(demoPanelCsv()).digest('hex');
+    expect(digest).toBe('73c20c1ba7b424f268bfcb8aaff131bd42d65551a9a16b86ffdbf2c819be871b');
+    expect(demoPanelCsv(1)).not.toBe(demoPanelCsv(2));
+  });
+
+  it('shows the merger as a jump and companies of very different size', () => {
+    const before = cell('Jostrane', 2015, 'book_equity');
+    expect(cell('Jostrane', 2016, 'book_equity') / before).toBeGreaterThan(1.6);
+    const ratio = cell('Hostavrel', 2015, 'book_equity') / cell('Fenquora', 2015, 'book_equity');
+    expect(ratio).toBeGreaterThan(14);
+    expect(ratio).toBeLessThan(25);
+  });
+});
+
+describe('the demo story', () => {
+  const companies = new Set(
+    demoPanelCsv()
+      .trimEnd()
+      .split('\n')
+      .slice(1)
+      .map((line) => line.split(',')[0]),
+  );
+
+  it('gives each peer a reason of its own, and leaves one out', () => {
+    const peers = Object.entries(demoPeerReasons);
+    expect(new Set([demoOwnCompany, ...peers.map(([name]) => name)])).toEqual(companies);
+    expect(peers.filter(([, peer]) => !peer.included).map(([name]) => name)).toEqual(['Zethorin']);
+    expect(new Set(peers.map(([, { reason }]) => reason)).size).toBe(13);
+    for (const [name, { reason }] of peers) {
+      expect(reason.length).withContext(name).toBeGreaterThan(60);
+    }
+  });
+
+  it('plans the three years after the panel, twice', () => {
+    expect(new Set(demoScenarios.map(({ name }) => name)).size).toBe(2);
+    for (const { years } of demoScenarios) {
+      expect(years.map(({ year }) => year)).toEqual([2026, 2027, 2028]);
+    }
+  });
+
+  it('has one person for each role, at an address that cannot exist', () => {
+    expect(demoPeople.map(({ role }) => role)).toEqual([
+      'analyst',
+      'cfo',
+      'reader',
+      'billing_admin',
+    ]);
+    expect(new Set(demoPeople.map(({ name }) => name)).size).toBe(4);
+    for (const { email } of demoPeople) expect(email).toMatch(/^[a-z]+\.[a-z]+@velmara\.example$/);
+  });
+});
