@@ -1,12 +1,5 @@
 import { createHash } from 'node:crypto';
-import {
-  demoOwnCompany,
-  demoPanelCsv,
-  demoPeerReasons,
-  demoPeople,
-  demoScenarios,
-  demoYears,
-} from './demo-panel';
+import { demoPanelCsv, demoYears } from './demo-panel';
 
 describe('the demo panel', () => {
   const lines = demoPanelCsv().trimEnd().split('\n');
@@ -64,43 +57,5 @@ describe('the demo panel', () => {
     const ratio = cell('Hostavrel', 2015, 'book_equity') / cell('Fenquora', 2015, 'book_equity');
     expect(ratio).toBeGreaterThan(14);
     expect(ratio).toBeLessThan(25);
-  });
-});
-
-describe('the demo story', () => {
-  const companies = new Set(
-    demoPanelCsv()
-      .trimEnd()
-      .split('\n')
-      .slice(1)
-      .map((line) => line.split(',')[0]),
-  );
-
-  it('gives each peer a reason of its own, and leaves one out', () => {
-    const peers = Object.entries(demoPeerReasons);
-    expect(new Set([demoOwnCompany, ...peers.map(([name]) => name)])).toEqual(companies);
-    expect(peers.filter(([, peer]) => !peer.included).map(([name]) => name)).toEqual(['Zethorin']);
-    expect(new Set(peers.map(([, { reason }]) => reason)).size).toBe(13);
-    for (const [name, { reason }] of peers) {
-      expect(reason.length).withContext(name).toBeGreaterThan(60);
-    }
-  });
-
-  it('plans the three years after the panel, twice', () => {
-    expect(new Set(demoScenarios.map(({ name }) => name)).size).toBe(2);
-    for (const { years } of demoScenarios) {
-      expect(years.map(({ year }) => year)).toEqual([2026, 2027, 2028]);
-    }
-  });
-
-  it('has one person for each role, at an address that cannot exist', () => {
-    expect(demoPeople.map(({ role }) => role)).toEqual([
-      'analyst',
-      'cfo',
-      'reader',
-      'billing_admin',
-    ]);
-    expect(new Set(demoPeople.map(({ name }) => name)).size).toBe(4);
-    for (const { email } of demoPeople) expect(email).toMatch(/^[a-z]+\.[a-z]+@velmara\.example$/);
   });
 });

@@ -1,5 +1,6 @@
-import Stripe from 'stripe';
+import type Stripe from 'stripe';
 import { failureOf, priceId, startStub, type RunningStub } from './testing/running-stub';
+import { idOf } from './wire';
 
 describe('prices and products in the Stripe stub', () => {
   let stub: RunningStub;
@@ -37,7 +38,7 @@ describe('prices and products in the Stripe stub', () => {
   it('retrieves a price and its product, together when asked to expand', async () => {
     const id = await priceId(stub.stripe, 'reading_seat_yearly');
     const price = await stub.stripe.prices.retrieve(id);
-    const product = await stub.stripe.products.retrieve(String(price.product));
+    const product = await stub.stripe.products.retrieve(idOf(price.product));
     expect(product.id).toMatch(/^prod_[0-9A-Za-z]{14}$/);
     expect(product.name).toBe('Reading seat');
 

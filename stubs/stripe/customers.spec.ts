@@ -1,5 +1,6 @@
 import Stripe from 'stripe';
 import { failureOf, payingCustomer, startStub, type RunningStub } from './testing/running-stub';
+import { idOf } from './wire';
 
 describe('customers in the Stripe stub', () => {
   let stub: RunningStub;
@@ -46,7 +47,7 @@ describe('customers in the Stripe stub', () => {
   it('refuses a default payment method that belongs to another customer', async () => {
     const other = await payingCustomer(stripe);
     const { id } = await stripe.customers.create({ name: 'Velmara' });
-    const card = String(other.invoice_settings.default_payment_method);
+    const card = idOf(other.invoice_settings.default_payment_method);
     const failure = await failureOf(
       stripe.customers.update(id, { invoice_settings: { default_payment_method: card } }),
     );

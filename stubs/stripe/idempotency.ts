@@ -38,8 +38,8 @@ export function earlierAnswer(
 
 /** Keeps an answer for a day, and lets go of those older than that. */
 export function rememberAnswer(state: StubState, key: string, answer: StoredAnswer): void {
-  for (const [old, { created }] of Object.entries(state.answers)) {
-    if (created + keptSeconds <= answer.created) delete state.answers[old];
-  }
-  state.answers[key] = answer;
+  const kept = Object.entries(state.answers).filter(
+    ([, { created }]) => created + keptSeconds > answer.created,
+  );
+  state.answers = Object.fromEntries([...kept, [key, answer]]);
 }

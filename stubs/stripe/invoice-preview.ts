@@ -8,7 +8,7 @@ import { invoiceLine } from './invoice-line';
 import type { Call } from './route';
 import { badRequest, notInStub, StripeFailure } from './stripe-failure';
 import { subscriptionOf } from './subscriptions';
-import type { WireInvoice } from './wire';
+import { idOf, type WireInvoice } from './wire';
 
 /** Everything that would change the subscription first is outside the stub's scope. */
 const changes = nested({
@@ -54,7 +54,7 @@ export function previewRenewal({ form, state }: Call): WireInvoice {
     throw notInStub('subscription', 'a preview without a subscription');
   }
   const subscription = subscriptionOf(state, given.subscription, 'subscription');
-  const owner = String(subscription.customer);
+  const owner = idOf(subscription.customer);
   if (given.customer && given.customer !== owner) {
     throw badRequest(`The subscription does not belong to ${given.customer}`, 'customer');
   }

@@ -1,4 +1,4 @@
-import Stripe from 'stripe';
+import type Stripe from 'stripe';
 import {
   failureOf,
   payingCustomer,
@@ -7,6 +7,7 @@ import {
   startStub,
   type RunningStub,
 } from './testing/running-stub';
+import { idOf } from './wire';
 
 describe('invoices in the Stripe stub', () => {
   let stub: RunningStub;
@@ -32,7 +33,7 @@ describe('invoices in the Stripe stub', () => {
   afterEach(() => stub.stop());
 
   it('retrieves the first invoice, which points to its subscription through its parent', async () => {
-    const invoice = await stripe.invoices.retrieve(String(subscription.latest_invoice));
+    const invoice = await stripe.invoices.retrieve(idOf(subscription.latest_invoice));
     expect(invoice.id).toMatch(/^in_1[0-9A-Za-z]{23}$/);
     expect(invoice.number).toMatch(/^[0-9A-Z]{8}-0001$/);
     expect(invoice.billing_reason).toBe('subscription_create');
@@ -64,14 +65,14 @@ describe('invoices in the Stripe stub', () => {
     expect(preview.status).toBe('draft');
     expect(preview.total).toBe(2 * 8_900 + 4 * 1_900);
     expect(preview.created).toBe(end);
-    expect(preview.lines.data.map(({ id }) => /^il_tmp_1/.test(id))).toEqual([true, true]);
+    expect(preview.lines.data.map(({ id }) => id.startsWith('il_tmp_1'))).toEqual([true, true]);
     for (const line of preview.lines.data) {
       expect(line.period).toEqual({ start: end, end: Date.UTC(2026, 2, 31, 9, 30) / 1000 });
       expect(line.parent?.subscription_item_details?.proration).toBeFalse();
     }
     const { data } = await stripe.invoices.list({ subscription: subscription.id });
-    expect(data.map(({ id }) => id)).toEqual([String(subscription.latest_invoice)]);
-    const failure = await failureOf(stripe.invoices.retrieve(String(preview.id)));
+    expect(data.map(({ id }) => id)).toEqual([idOf(subscription.latest_invoice)]);
+    const failure = await failureOf(stripe.invoices.retrieve(preview.id));
     expect(failure.code).toBe('resource_missing');
   });
 
@@ -80,7 +81,7 @@ describe('invoices in the Stripe stub', () => {
     now = Date.UTC(2026, 2, 31, 9, 29) / 1000;
     const renewed = await stripe.subscriptions.retrieve(subscription.id);
     expect(renewed.items.data[0].current_period_end).toBe(Date.UTC(2026, 2, 31, 9, 30) / 1000);
-    const invoice = await stripe.invoices.retrieve(String(renewed.latest_invoice));
+    const invoice = await stripe.invoices.retrieve(idOf(renewed.latest_invoice));
     expect(invoice.billing_reason).toBe('subscription_cycle');
     expect(invoice.number).toMatch(/-0002$/);
     expect(invoice.created).toBe(preview.created);

@@ -14,7 +14,9 @@ if (!Number.isInteger(port) || port < 0 || port > 65_535) {
   process.exit(1);
 }
 
-const server = createServer(createStripeStub({ statePath: STRIPE_STUB_STATE || undefined }));
+const server = createServer(
+  createStripeStub({ statePath: STRIPE_STUB_STATE === '' ? undefined : STRIPE_STUB_STATE }),
+);
 server.on('error', (error) => {
   console.error(`The stub of Stripe cannot listen on 127.0.0.1:${port}: ${error.message}`);
   process.exit(1);

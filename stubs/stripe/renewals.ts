@@ -4,7 +4,7 @@ import { longId } from './ids';
 import { draftInvoice, payInFull } from './invoice';
 import { invoiceLine } from './invoice-line';
 import type { StubState } from './store';
-import type { WireSubscription } from './wire';
+import { idOf, type WireSubscription } from './wire';
 
 /**
  * Lets time pass: each period that has ended is renewed and paid an hour later, as the one test
@@ -27,7 +27,7 @@ function isDue(subscription: WireSubscription, now: number): boolean {
 }
 
 function endPeriod(state: StubState, subscription: WireSubscription): void {
-  const customer = customerOf(state, String(subscription.customer));
+  const customer = customerOf(state, idOf(subscription.customer));
   const end = subscription.items.data[0].current_period_end;
   if (customer.invoice_settings.default_payment_method !== null) {
     renew(state, subscription, end);
@@ -41,7 +41,7 @@ function endPeriod(state: StubState, subscription: WireSubscription): void {
 }
 
 function renew(state: StubState, subscription: WireSubscription, end: number): void {
-  const customer = customerOf(state, String(subscription.customer));
+  const customer = customerOf(state, idOf(subscription.customer));
   const id = longId('in_');
   const items = subscription.items.data;
   const invoice = draftInvoice({

@@ -24,7 +24,7 @@ export interface StubState {
   readonly paymentMethods: Record<string, StoredPaymentMethod>;
   readonly subscriptions: Record<string, WireSubscription>;
   readonly invoices: Record<string, WireInvoice>;
-  readonly answers: Record<string, StoredAnswer>;
+  answers: Record<string, StoredAnswer>;
 }
 
 /** Holds the state in memory and, with a path, in a file replaced whole at every change. */

@@ -19,6 +19,12 @@ export type WireProduct = Wire<Stripe.Product>;
 export type WireSubscription = Wire<Stripe.Subscription>;
 export type WireSubscriptionItem = Wire<Stripe.SubscriptionItem>;
 
+/** The id of a reference that may have been expanded. */
+export function idOf(reference: string | { readonly id: string } | null): string {
+  if (reference === null) throw new Error('expected a reference; found null');
+  return typeof reference === 'string' ? reference : reference.id;
+}
+
 export interface WireList<T> {
   object: 'list';
   data: T[];
