@@ -1,3 +1,5 @@
+// The stub of Stripe as a process of its own, for local use and tests. STRIPE_STUB_PORT: port on
+// 127.0.0.1, 0 for a free one. STRIPE_STUB_STATE: file that keeps its state, memory if absent.
 import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { createStripeStub } from './stripe-stub';
