@@ -1,0 +1,60 @@
+import { type DecimalSign, withoutSign } from './parse-number';
+
+/** How a column writes decimals, and whether its own numbers say so. */
+export interface ColumnDecimals {
+  readonly decimalSign: DecimalSign;
+  /** True where no number of the column tells, some could be read both ways, and the other columns decided. */
+  readonly isAmbiguous: boolean;
+}
+
+interface Evidence {
+  readonly dots: number;
+  readonly commas: number;
+  readonly ambiguous: number;
+}
+
+/**
+ * Decides the decimal sign of each column by its own numbers: `1.5` and `1,234.5` speak for the dot, `1,5` and
+ * `1.234,5` for the comma; `1,234` and `1.234` for neither. A column that says nothing follows the others, and the
+ * dot where they say nothing either.
+ *
+ * @param columns  cells, one array a column.
+ */
+export function decimalSigns(columns: readonly (readonly string[])[]): ColumnDecimals[] {
+  const evidence = columns.map(evidenceOf);
+  const dots = evidence.filter((column) => column.dots > column.commas).length;
+  const commas = evidence.filter((column) => column.commas > column.dots).length;
+  const common: DecimalSign = commas > dots ? ',' : '.';
+  return evidence.map((column): ColumnDecimals => {
+    if (column.commas > column.dots) return { decimalSign: ',', isAmbiguous: false };
+    if (column.dots > 0) return { decimalSign: '.', isAmbiguous: false };
+    return { decimalSign: common, isAmbiguous: column.ambiguous > 0 };
+  });
+}
+
+function evidenceOf(cells: readonly string[]): Evidence {
+  let dots = 0;
+  let commas = 0;
+  let ambiguous = 0;
+  for (const cell of cells) {
+    const sign = decimalSignIn(cell);
+    if (sign === '.') dots += 1;
+    else if (sign === ',') commas += 1;
+    else if (sign === 'either') ambiguous += 1;
+  }
+  return { dots, commas, ambiguous };
+}
+
+/** The decimal sign that one cell proves; undefined where it has neither sign or is no number. */
+function decimalSignIn(cell: string): DecimalSign | 'either' | undefined {
+  const digits = withoutSign(cell.trim()).digits.replace(/[eE][+-]?\d+$/u, '');
+  if (!/^[\d.,’' \u00a0\u202f]+$/u.test(digits)) return undefined;
+  const lastDot = digits.lastIndexOf('.');
+  const lastComma = digits.lastIndexOf(',');
+  if (lastDot === -1 && lastComma === -1) return undefined;
+  if (lastDot !== -1 && lastComma !== -1) return lastDot > lastComma ? '.' : ',';
+  const sign = lastDot === -1 ? ',' : '.';
+  const other = sign === '.' ? ',' : '.';
+  if (digits.indexOf(sign) !== digits.lastIndexOf(sign)) return other;
+  return /^[1-9]\d{0,2}[.,]\d{3}$/u.test(digits) ? 'either' : sign;
+}

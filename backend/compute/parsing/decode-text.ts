@@ -1,0 +1,77 @@
+import { TextDecoder } from 'node:util';
+import { TableError } from './table-error';
+
+/**
+ * Decodes a byte stream as UTF-8, or as UTF-16 where its byte order mark says so; the mark is taken off, and every
+ * line end becomes a line feed.
+ * @throws {TableError} 'csv-invalid' for bytes that are no text, or a NUL character, with its line.
+ */
+export async function* decodeText(
+  source: AsyncIterable<Uint8Array> | Iterable<Uint8Array>,
+): AsyncGenerator<string> {
+  let decoder: TextDecoder | undefined;
+  let head: Uint8Array = new Uint8Array(0);
+  let line = 1;
+  let heldBack = '';
+  const decode = (bytes?: Uint8Array): string => {
+    const text = heldBack + decodeStrictly(decoder as TextDecoder, bytes, line);
+    // A carriage return at the end of a chunk may be half of a line end.
+    heldBack = bytes !== undefined && text.endsWith('\r') ? '\r' : '';
+    const whole = text.slice(0, text.length - heldBack.length).replace(/\r\n?/gu, '\n');
+    line = refuseNul(whole, line);
+    return whole;
+  };
+  for await (const chunk of source) {
+    if (decoder === undefined) {
+      head = Buffer.concat([head, chunk]);
+      if (head.length < 3) continue;
+      decoder = decoderFor(head);
+      yield decode(head);
+    } else {
+      yield decode(chunk);
+    }
+  }
+  if (decoder === undefined) {
+    decoder = decoderFor(head);
+    yield decode(head);
+  }
+  yield decode();
+}
+
+function decoderFor(head: Uint8Array): TextDecoder {
+  if (head[0] === 0xff && head[1] === 0xfe) return new TextDecoder('utf-16le', { fatal: true });
+  if (head[0] === 0xfe && head[1] === 0xff) return new TextDecoder('utf-16be', { fatal: true });
+  return new TextDecoder('utf-8', { fatal: true });
+}
+
+function decodeStrictly(decoder: TextDecoder, bytes: Uint8Array | undefined, line: number): string {
+  try {
+    return bytes === undefined ? decoder.decode() : decoder.decode(bytes, { stream: true });
+  } catch (error) {
+    if (!(error instanceof TypeError)) throw error;
+    const message = `expected text in UTF-8, or UTF-16 with a byte order mark; found other bytes after line ${line}. Save the file as “CSV UTF-8” and try again`;
+    throw new TableError('csv-invalid', message, { row: line });
+  }
+}
+
+/** @returns the line after the text. */
+function refuseNul(text: string, line: number): number {
+  const place = text.indexOf('\0');
+  const end = place === -1 ? text.length : place;
+  let lines = line;
+  for (
+    let index = text.indexOf('\n');
+    index !== -1 && index < end;
+    index = text.indexOf('\n', index + 1)
+  ) {
+    lines += 1;
+  }
+  if (place === -1) return lines;
+  throw new TableError(
+    'csv-invalid',
+    `expected a text file; found a NUL character on line ${lines}`,
+    {
+      row: lines,
+    },
+  );
+}

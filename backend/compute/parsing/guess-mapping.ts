@@ -1,0 +1,105 @@
+import { isMissing } from './missing-cell';
+import { type ColumnRole, headerWords as words } from './header-words';
+import { decimalSigns } from './decimal-signs';
+import { parseNumber } from './parse-number';
+import { parseYear } from './parse-year';
+
+/** The likely meaning of a file's columns; a role that none fits is absent. */
+export interface MappingGuess {
+  readonly company?: string;
+  readonly year?: string;
+  readonly marketValue?: string;
+  readonly capex?: string;
+  readonly bookEquity?: string;
+  /** Further numeric columns. */
+  readonly others: readonly string[];
+}
+
+const numericRoles = new Set<ColumnRole>(['marketValue', 'capex', 'bookEquity']);
+
+/**
+ * Guesses which column is what by common header words and by what the first rows hold.
+ *
+ * @param headers  as the table has them.
+ * @param sampleRows  some rows, one cell a header.
+ */
+export function guessMapping(
+  headers: readonly string[],
+  sampleRows: readonly (readonly string[])[],
+): MappingGuess {
+  const columns = headers.map((header, index) => describe(header, index, sampleRows));
+  const guess: Partial<Record<ColumnRole, string>> = {};
+  const isFree = ({ header }: Column): boolean => !Object.values(guess).includes(header);
+  for (const role of Object.keys(words) as ColumnRole[]) {
+    const best = columns
+      .filter((column) => isFree(column) && suits(role, column))
+      .map((column) => ({ column, score: scoreOf(role, column.words) }))
+      .filter(({ score }) => score > 0)
+      .sort((left, right) => right.score - left.score)[0];
+    const fallback = columns.find((column) => isFree(column) && isLikely(role, column));
+    const chosen = best?.column ?? fallback;
+    if (chosen !== undefined) guess[role] = chosen.header;
+  }
+  const others = columns
+    .filter((column) => isFree(column) && column.isNumeric)
+    .map(({ header }) => header);
+  return { ...guess, others };
+}
+
+interface Column {
+  readonly header: string;
+  readonly words: string;
+  readonly isNumeric: boolean;
+  readonly isYear: boolean;
+}
+
+function describe(header: string, index: number, rows: readonly (readonly string[])[]): Column {
+  const cells = rows.map((row) => row[index] ?? '').filter((cell) => !isMissing(cell));
+  const [{ decimalSign }] = decimalSigns([cells]);
+  const isYear = cells.every((cell) => {
+    const year = parseYear(cell);
+    return year !== undefined && year >= 1800 && year <= 2200;
+  });
+  return {
+    header,
+    words: wordsOf(header),
+    isNumeric:
+      cells.length > 0 && cells.every((cell) => parseNumber(cell, decimalSign) !== undefined),
+    isYear: cells.length > 0 && isYear,
+  };
+}
+
+/** Lower case, words apart: `bookEquity_EUR` becomes `book equity eur`. */
+function wordsOf(header: string): string {
+  return header
+    .replace(/(\p{Ll})(\p{Lu})/gu, '$1 $2')
+    .toLowerCase()
+    .replace(/['’]/gu, '')
+    .replace(/[^\p{L}\p{N}]+/gu, ' ')
+    .trim();
+}
+
+function suits(role: ColumnRole, column: Column): boolean {
+  if (numericRoles.has(role)) return column.isNumeric;
+  return role === 'company' || column.isYear || !column.isNumeric;
+}
+
+/** A whole header is surer than a part of one, an earlier word than a later. */
+function scoreOf(role: ColumnRole, header: string): number {
+  const list = words[role];
+  const exact = list.findIndex((word) => compact(word) === compact(header));
+  if (exact !== -1) return 2 * list.length - exact;
+  const part = list.findIndex((word) => ` ${header} `.includes(` ${word} `));
+  return part === -1 ? 0 : list.length - part;
+}
+
+/** `CapEx` and `cap ex` are the same word. */
+function compact(text: string): string {
+  return text.replaceAll(' ', '');
+}
+
+/** Without a telling header: the first column of texts names companies, one of year numbers is the year. */
+function isLikely(role: ColumnRole, column: Column): boolean {
+  if (role === 'company') return !column.isNumeric && !column.isYear;
+  return role === 'year' && column.isYear;
+}

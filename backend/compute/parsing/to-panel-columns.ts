@@ -1,0 +1,46 @@
+import type { PanelColumns } from '../../stats';
+import { readPanel } from './read-panel';
+import type { Table } from './table';
+import type { TableFinding } from './table-finding';
+
+/** Which column of the file is what to a fit, by header. */
+export interface FitMapping {
+  readonly company: string;
+  readonly year: string;
+  readonly outcome: string;
+  readonly regressors: readonly string[];
+}
+
+/** Columns for a fit, and everything to say about their cells. */
+export interface PanelColumnsReading {
+  readonly data: PanelColumns;
+  /** All places that make the columns unusable: text in a number, a year that is none, a row twice. */
+  readonly problems: readonly TableFinding[];
+  /** Rows without company or year; they are in no column. */
+  readonly leftOut: readonly TableFinding[];
+}
+
+/** @throws {TableError} 'missing-column' or 'ambiguous-column' with the headers concerned. */
+export function toPanelColumns(table: Table, mapping: FitMapping): PanelColumnsReading {
+  const reading = readPanel(table, {
+    company: mapping.company,
+    year: mapping.year,
+    numbers: [mapping.outcome, ...mapping.regressors],
+  });
+  const [outcome, ...regressors] = reading.numbers;
+  const keys = new Set([mapping.company, mapping.year]);
+  return {
+    data: {
+      companies: reading.companies,
+      company: reading.company,
+      year: reading.year,
+      fileRow: reading.fileRow,
+      outcome,
+      regressors,
+    },
+    problems: reading.findings.filter(({ isBlocking }) => isBlocking),
+    leftOut: reading.findings.filter(
+      ({ code, column }) => code === 'no-company' || (code === 'missing' && keys.has(column)),
+    ),
+  };
+}
