@@ -1,0 +1,59 @@
+import { createHash } from 'node:crypto';
+import { createReadStream } from 'node:fs';
+import { readTable } from '../../backend/compute/parsing/read-table';
+import type { Table } from '../../backend/compute/parsing/table';
+import { toPanelColumns } from '../../backend/compute/parsing/to-panel-columns';
+import { type DroppedRow, fitPanel } from '../../backend/stats';
+import { type FitArguments, readArguments } from './fit-arguments';
+import { cellsProblem, FitProblem } from './fit-problem';
+import { fitReply } from './fit-reply';
+
+/**
+ * Fits a panel file as the server would, without a database.
+ *
+ * @param args  the command line behind the command's name.
+ * @returns the object to print.
+ * @throws {FitProblem | StatsError | TableError} for bad input.
+ */
+export async function runFit(args: readonly string[]): Promise<unknown> {
+  const request = readArguments(args);
+  const table = await readFile(request.panel);
+  const { data, problems, leftOut } = toPanelColumns(table, request);
+  if (problems.length > 0) throw cellsProblem(problems);
+  const result = fitPanel(data, request.specification, request.own, request.members, { sha256 });
+  const dropped = leftOut.filter(({ row }) => isInSample(table, row, request));
+  return fitReply(
+    result,
+    dropped.map(({ row, column }): DroppedRow => ({ row, column, reason: 'missing' })),
+  );
+}
+
+async function readFile(path: string): Promise<Table> {
+  try {
+    return await readTable(createReadStream(path));
+  } catch (error) {
+    const { code } = error as { code?: string };
+    if (code === undefined || !fileFaults.has(code)) throw error;
+    const detail = `expected a file at ${path}; ${fileFaults.get(code) as string}`;
+    throw new FitProblem('unreadable-file', 'The file cannot be read', detail);
+  }
+}
+
+const fileFaults = new Map([
+  ['ENOENT', 'there is none'],
+  ['EISDIR', 'it is a folder'],
+  ['EACCES', 'it may not be read'],
+  ['ENOTDIR', 'there is none'],
+]);
+
+/** A row without a year belongs to a company; it concerns the fit only where that company does. */
+function isInSample(table: Table, line: number, request: FitArguments): boolean {
+  if (request.members === undefined) return true;
+  const cells = table.rows[table.lines.indexOf(line)];
+  const company = cells[table.header.indexOf(request.company)];
+  return company === request.own || request.members.includes(company);
+}
+
+function sha256(text: string): string {
+  return createHash('sha256').update(text, 'utf8').digest('hex');
+}
