@@ -49,6 +49,8 @@ export const PredictionBasis = z.object({
   company: z.string(),
   regressors: z.array(z.string()),
   coefficients: z.array(z.number()),
+  ownLevel: z.number(),
+  ownMeans: z.array(z.number()),
   years: z.number().int(),
   lambdas: matrix,
   a: matrix,
@@ -61,8 +63,8 @@ export const PredictionBasis = z.object({
     z.object({ kind: z.literal('fixed'), value: z.number() }),
     z.object({ kind: z.literal('satterthwaite'), s: matrix, quartic: z.array(z.number()) }),
   ]),
+  slopeIntervalReason: z.string().optional(),
   last: ownYear,
-  ownMeans: z.array(z.number()),
   inverseCrossProduct: matrix,
   largestOwnLeverage: z.number(),
   largestLeverage: z.number(),
@@ -150,6 +152,7 @@ export const FitResult = z.object({
       rankReason: z.string().optional(),
     })
     .nullable(),
+  standingReason: z.string().optional(),
   pairs: z
     .array(
       z.object({
@@ -160,7 +163,7 @@ export const FitResult = z.object({
     )
     .nullable(),
   gapPath: z
-    .array(z.object({ year: z.number().int(), gap: z.number(), peers: z.number().int() }))
+    .array(z.object({ year: z.number().int(), gap: nullable, peers: z.number().int() }))
     .nullable(),
   drift: z.object({ ...interval, pValue: nullable }).nullable(),
   driftReason: z.string().optional(),
@@ -189,6 +192,7 @@ export const FitResult = z.object({
   ),
   ownYears: z.array(ownYear).nullable(),
   prediction: PredictionBasis.nullable(),
+  predictionReason: z.string().optional(),
   warnings: z.array(FitWarning),
 });
 export type FitResult = z.infer<typeof FitResult>;

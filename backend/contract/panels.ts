@@ -131,3 +131,7 @@ export const PanelCompaniesReply = z.object({
   ),
 });
 export type PanelCompaniesReply = z.infer<typeof PanelCompaniesReply>;
+
+/** Makes a checked import a panel version. */
+export const CommitImport = z.strictObject({ note: z.string().trim().max(2000) });
+export type CommitImport = z.infer<typeof CommitImport>;

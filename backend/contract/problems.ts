@@ -17,7 +17,6 @@ export const problemSlugs = [
   'unavailable',
   'internal',
   'four-eyes',
-  'no-free-seat',
   'import-not-ready',
   'stale-version',
   'cannot-fit',

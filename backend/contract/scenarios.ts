@@ -66,3 +66,7 @@ export const DraftReply = z.object({
   draft: SaveDraft.extend({ updatedAt: z.iso.datetime() }).nullable(),
 });
 export type DraftReply = z.infer<typeof DraftReply>;
+
+/** Query of a draft: of a saved scenario, or of a new one where it is absent. */
+export const DraftOf = z.strictObject({ scenario: z.uuid().optional() });
+export type DraftOf = z.infer<typeof DraftOf>;

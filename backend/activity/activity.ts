@@ -1,0 +1,35 @@
+import { randomUUID } from 'node:crypto';
+import type { WorkspaceRepositories } from '../../db/repositories/repositories';
+
+/** What people do that an auditor may ask for. */
+export type ActivityAction =
+  | 'workspace-created'
+  | 'signed-in'
+  | 'member-invited'
+  | 'invitation-withdrawn'
+  | 'member-joined'
+  | 'roles-changed'
+  | 'member-removed'
+  | 'file-uploaded'
+  | 'file-downloaded'
+  | 'panel-committed'
+  | 'peer-group-saved'
+  | 'fit-started'
+  | 'fit-cancelled'
+  | 'scenario-saved'
+  | 'scenario-deleted'
+  | 'scenario-restored'
+  | 'edition-published'
+  | 'edition-signed'
+  | 'edition-returned';
+
+/** Writes an entry of the append-only record within the transaction of what it records. */
+export async function record(
+  tx: WorkspaceRepositories,
+  personId: string,
+  action: ActivityAction,
+  subjectId: string | null,
+  detail: object = {},
+): Promise<void> {
+  await tx.activity.append({ id: randomUUID(), personId, action, subjectId, detail });
+}

@@ -1,0 +1,114 @@
+import compression from 'compression';
+import express, { type Express, type RequestHandler } from 'express';
+import type { Logger } from 'pino';
+import { isDatabaseFull, isDatabaseUnavailable } from '../db/errors';
+import { accountRoutes } from './accounts/account-routes';
+import { loadMember } from './accounts/load-member';
+import { memberRoutes } from './accounts/member-routes';
+import { createAuthenticator } from './accounts/sign-in-strategy';
+import { seatRoutes } from './billing/seat-routes';
+import { deskRoutes } from './board/desk-routes';
+import { editionRoutes } from './board/edition-routes';
+import type { Services } from './compose';
+import { AppError, NotFound, Unavailable } from './errors/app-error';
+import { fitRoutes } from './fits/fit-routes';
+import { applicationPage } from './http/application-page';
+import { CrossSiteGuard } from './http/cross-site';
+import { health } from './http/health';
+import { problemHandler } from './http/problem-handler';
+import { requestLog } from './http/request-id';
+import { securityHeaders } from './http/security-headers';
+import { sessions } from './http/session';
+import { panelRoutes } from './panels/panel-routes';
+import { peerRoutes } from './peers/peer-routes';
+import { scenarioRoutes } from './scenarios/scenario-routes';
+
+export interface AppOptions {
+  readonly services: Services;
+  readonly logger: Logger;
+  readonly sessionSecrets: readonly string[];
+  /** The pool of the session store. */
+  readonly sessionPool: unknown;
+  readonly isLocal: boolean;
+  readonly publicOrigin: string;
+  readonly trustProxyHops: number;
+  readonly now: () => Date;
+  readonly isStopping: () => boolean;
+  /** The built application, where this server serves it. */
+  readonly browserFolder: string | undefined;
+}
+
+const noStore: RequestHandler = (_req, res, next) => {
+  res.setHeader('Cache-Control', 'no-store');
+  next();
+};
+
+/** The Express application, without listening: a test can hold it. */
+export function createApp(options: AppOptions): Express {
+  const { services, now, isLocal } = options;
+  const app = express();
+  app.disable('x-powered-by');
+  app.set('trust proxy', options.trustProxyHops);
+  app.set('query parser', 'simple');
+
+  app.use(requestLog(options.logger));
+  app.use(securityHeaders(isLocal));
+  app.use(
+    health({
+      isSchemaCurrent: () => services.repositories.isAtLatestMigration(),
+      isStopping: options.isStopping,
+      folder: process.cwd(),
+    }),
+  );
+  app.use(compression());
+
+  const crossSite = new CrossSiteGuard({
+    secret: options.sessionSecrets[0],
+    isLocal,
+    origin: options.publicOrigin,
+  });
+  const authenticator = createAuthenticator(services.accounts);
+  app.use(
+    '/api',
+    noStore,
+    sessions({ secrets: options.sessionSecrets, isLocal, pool: options.sessionPool, now }),
+  );
+  app.use('/api', authenticator.session(), loadMember(services.repositories));
+  app.use((req, res, next) => {
+    if (req.path.startsWith('/api/')) crossSite.check(req, res, next);
+    else next();
+  });
+  app.use(express.json({ limit: '2mb' }));
+  app.use(
+    accountRoutes({
+      accounts: services.accounts,
+      members: services.members,
+      authenticator,
+      crossSite,
+      now,
+    }),
+  );
+  app.use(memberRoutes(services.members, now));
+  app.use(panelRoutes(services.imports, services.panels, services.samplePanel));
+  app.use(peerRoutes(services.peers));
+  app.use(fitRoutes(services.fits, services.lineage, now));
+  app.use(scenarioRoutes(services.scenarios));
+  app.use(deskRoutes(services.desk));
+  app.use(editionRoutes(services.editions, services.lineage));
+  app.use(seatRoutes(services.billing));
+
+  if (options.browserFolder !== undefined) app.use(applicationPage(options.browserFolder, isLocal));
+  app.use(() => {
+    throw new NotFound();
+  });
+  app.use(problemHandler(fromDatabase));
+  return app;
+}
+
+function fromDatabase(error: unknown): AppError | undefined {
+  if (isDatabaseFull(error))
+    return new AppError('storage-full', 507, 'The server has no space left to store this.');
+  if (isDatabaseUnavailable(error))
+    return new Unavailable('The database is busy or being restarted. Try again in a moment.');
+  return undefined;
+}

@@ -1,0 +1,15 @@
+import type { Repositories } from '../../db/repositories/repositories';
+
+/** The newest of each thing the work goes through, read together for the frame of every page. */
+export class DeskService {
+  constructor(private readonly repositories: Repositories) {}
+
+  read(workspaceId: string) {
+    return this.repositories.inWorkspace(workspaceId, async (tx) => ({
+      panelVersion: (await tx.panels.listVersions())[0],
+      peerGroup: await tx.peers.latest(),
+      fit: await tx.fits.latestDone(),
+      editionsWaiting: await tx.editions.countWaiting(),
+    }));
+  }
+}

@@ -1,0 +1,131 @@
+import { join } from 'node:path';
+import type { Logger } from 'pino';
+import { createDatabase, createPool } from '../db/connect';
+import { Repositories } from '../db/repositories/repositories';
+import { AccountService } from './accounts/account-service';
+import { MemberService } from './accounts/member-service';
+import { Passwords } from './accounts/passwords';
+import { SignInThrottle } from './accounts/sign-in-throttle';
+import { BillingService } from './billing/billing-service';
+import { workOpenBillingAccount } from './billing/open-account-job';
+import { StripeGateway } from './billing/stripe-gateway';
+import { DeskService } from './board/desk-service';
+import { EditionService } from './board/edition-service';
+import { FitPool } from './compute/fit-pool';
+import { ParseProcess } from './compute/parse-process';
+import { FitJob } from './fits/fit-job';
+import { FitService } from './fits/fit-service';
+import { LineageService } from './fits/lineage-service';
+import { JobQueue } from './jobs/job-queue';
+import { ImportService } from './panels/import-service';
+import { PanelService } from './panels/panel-service';
+import { readSamplePanel, type SamplePanel } from './panels/sample-panel';
+import { PeerService } from './peers/peer-service';
+import { ScenarioService } from './scenarios/scenario-service';
+
+export interface ComposeOptions {
+  readonly databaseUrl: string;
+  readonly stripe: { readonly secretKey: string; readonly apiUrl: string | undefined };
+  readonly fitThreads: number;
+  readonly now: () => Date;
+  readonly logger: Logger;
+  /** Where this file's built or source neighbours lie: workers and the sample panel are found from it. */
+  readonly backendFolder: string;
+}
+
+export interface Services {
+  readonly repositories: Repositories;
+  readonly accounts: AccountService;
+  readonly members: MemberService;
+  readonly imports: ImportService;
+  readonly panels: PanelService;
+  readonly samplePanel: SamplePanel;
+  readonly peers: PeerService;
+  readonly fits: FitService;
+  readonly lineage: LineageService;
+  readonly scenarios: ScenarioService;
+  readonly desk: DeskService;
+  readonly editions: EditionService;
+  readonly billing: BillingService;
+}
+
+export interface Composition {
+  readonly services: Services;
+  /** The session store's own small pool. */
+  readonly sessionPool: unknown;
+  /** Checks the database role and starts working the queues. */
+  start(): Promise<void>;
+  /** Stops taking jobs, waits for those under way, closes workers and pools, in this order. */
+  stop(): Promise<void>;
+}
+
+/** The composition root: the only place that constructs pools, repositories and services. */
+export function compose(options: ComposeOptions): Composition {
+  const { logger, now } = options;
+  const onConnectionError = (error: Error): void => {
+    logger.warn({ err: error }, 'database connection lost');
+  };
+  const pool = (applicationName: string, max: number, statementTimeoutMs: number) =>
+    createPool({
+      connectionString: options.databaseUrl,
+      max,
+      applicationName,
+      statementTimeoutMs,
+      onConnectionError,
+    });
+  const webPool = pool('kinvale-web', 10, 15_000);
+  const sessionPool = pool('kinvale-session', 4, 15_000);
+  const queuePool = pool('kinvale-queue', 3, 120_000);
+  const workPool = pool('kinvale-work', 3, 120_000);
+
+  const repositories = new Repositories(createDatabase(webPool));
+  const workRepositories = new Repositories(createDatabase(workPool));
+  const queue = new JobQueue({
+    repositories: workRepositories,
+    executeSql: (text, values) => queuePool.query(text, values),
+    onError: (error) => {
+      logger.error({ err: error }, 'job queue');
+    },
+  });
+  const isSource = !options.backendFolder.includes('dist');
+  const entry = (source: string, built: string): string =>
+    join(options.backendFolder, isSource ? source : built);
+  const fitPool = new FitPool(entry('compute/fit-worker.ts', 'fit-worker.js'), options.fitThreads);
+  const parser = new ParseProcess(entry('compute/parse-child.ts', 'parse-child.js'));
+  const passwords = new Passwords();
+  const throttle = new SignInThrottle(repositories, now);
+  const accounts = new AccountService({ repositories, passwords, throttle, queue });
+  const gateway = new StripeGateway(options.stripe);
+  const billing = new BillingService({ repositories, gateway, queue, now });
+
+  return {
+    sessionPool,
+    services: {
+      repositories,
+      accounts,
+      members: new MemberService({ repositories, passwords, now }),
+      imports: new ImportService(repositories, parser),
+      panels: new PanelService(repositories),
+      samplePanel: readSamplePanel(options.backendFolder),
+      peers: new PeerService(repositories),
+      fits: new FitService(repositories, queue),
+      lineage: new LineageService(repositories),
+      scenarios: new ScenarioService(repositories, now),
+      desk: new DeskService(repositories),
+      editions: new EditionService(repositories, accounts, now),
+      billing,
+    },
+    start: async () => {
+      await repositories.assertUnprivilegedRole();
+      await queue.start();
+      const fitJob = new FitJob(workRepositories, fitPool, now);
+      await queue.work('fit', (ticket) => fitJob.run(ticket));
+      await queue.work('open-billing-account', workOpenBillingAccount(billing));
+    },
+    stop: async () => {
+      await queue.stop();
+      await fitPool.close();
+      await Promise.all([webPool, sessionPool, queuePool, workPool].map((each) => each.end()));
+    },
+  };
+}

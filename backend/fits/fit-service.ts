@@ -1,0 +1,153 @@
+import { randomUUID } from 'node:crypto';
+import { UniqueViolation } from '../../db/errors';
+import type { PanelVersionRow } from '../../db/repositories/panels-repository';
+import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
+import { record } from '../activity/activity';
+import { Conflict, Invalid, NotFound } from '../errors/app-error';
+import type { JobQueue } from '../jobs/job-queue';
+import { findPeerGroup, type PeerGroup } from '../peers/peer-service';
+import { engineVersion, type FitResult, type SlopeCovarianceName } from '../stats';
+import { type StoredFit, type StoredSpecification, toStoredFit } from './fit-view';
+
+export interface FitRequest {
+  readonly peerGroupId: string;
+  readonly slopes: SlopeCovarianceName;
+  readonly confidence: number;
+  readonly furtherRegressors: readonly string[];
+}
+
+/** A fit with what it stands on. */
+export interface FitOnGround {
+  readonly fit: StoredFit;
+  readonly peerGroup: PeerGroup;
+  readonly panelVersion: PanelVersionRow;
+}
+
+/** A fit that is done. */
+export interface FinishedFit extends FitOnGround {
+  readonly result: FitResult;
+}
+
+const mostListed = 200;
+
+export class FitService {
+  constructor(
+    private readonly repositories: Repositories,
+    private readonly queue: JobQueue,
+  ) {}
+
+  /**
+   * Queues a fit; the same peer group and specification by the same engine answer with the fit that exists.
+   *
+   * @throws {NotFound} for an unknown peer group; {Invalid} for a column the panel does not have.
+   */
+  async start(
+    actor: { readonly personId: string; readonly workspaceId: string },
+    request: FitRequest,
+  ): Promise<FitOnGround> {
+    const id = await this.repositories
+      .inWorkspace(actor.workspaceId, (tx) => this.#queue(tx, actor.personId, request))
+      .catch((error: unknown) => {
+        if (error instanceof UniqueViolation) return undefined;
+        throw error;
+      });
+    this.queue.wake('fit');
+    // Somebody else asked for the same fit in the same moment: theirs is the one.
+    if (id === undefined) return this.start(actor, request);
+    return this.find(actor.workspaceId, id);
+  }
+
+  async #queue(tx: WorkspaceRepositories, personId: string, request: FitRequest): Promise<string> {
+    const group = await findPeerGroup(tx, request.peerGroupId);
+    const version = await tx.panels.findVersion(group.panelVersionId);
+    if (version === undefined) throw new NotFound('There is no such panel version.');
+    const specification = specificationOf(request, version);
+    const specificationKey = JSON.stringify([engineVersion, specification]);
+    const same = await tx.fits.findSame(group.id, specificationKey);
+    if (same !== undefined) return same.id;
+    const id = randomUUID();
+    await tx.fits.insert({
+      id,
+      panelVersionId: version.id,
+      peerGroupId: group.id,
+      specification,
+      specificationKey,
+      createdBy: personId,
+    });
+    await this.queue.enqueue(tx, 'fit', id);
+    await record(tx, personId, 'fit-started', id);
+    return id;
+  }
+
+  async list(workspaceId: string): Promise<readonly StoredFit[]> {
+    const rows = await this.repositories.inWorkspace(workspaceId, (tx) => tx.fits.list(mostListed));
+    return rows.map(toStoredFit);
+  }
+
+  /** @throws {NotFound} */
+  async find(workspaceId: string, id: string): Promise<FitOnGround> {
+    return this.repositories.inWorkspace(workspaceId, (tx) => findFit(tx, id));
+  }
+
+  /** Stops a fit that is queued or running. @throws {NotFound}; {Conflict} when it has ended. */
+  async cancel(
+    actor: { readonly personId: string; readonly workspaceId: string },
+    id: string,
+    now: Date,
+  ): Promise<void> {
+    await this.repositories.inWorkspace(actor.workspaceId, async (tx) => {
+      await findFit(tx, id);
+      if (!(await tx.fits.cancel(id, now)))
+        throw new Conflict('This fit has ended already; it stays as it is.');
+      await record(tx, actor.personId, 'fit-cancelled', id);
+    });
+  }
+}
+
+/** @throws {NotFound} */
+export async function findFit(tx: WorkspaceRepositories, id: string): Promise<FitOnGround> {
+  const row = await tx.fits.find(id);
+  if (row === undefined) throw new NotFound('There is no such fit.');
+  const panelVersion = await tx.panels.findVersion(row.panelVersionId);
+  if (panelVersion === undefined) throw new NotFound('There is no such panel version.');
+  return {
+    fit: toStoredFit(row),
+    panelVersion,
+    peerGroup: await findPeerGroup(tx, row.peerGroupId),
+  };
+}
+
+/** @throws {NotFound}; {Conflict} while it is not done. */
+export async function findFinishedFit(tx: WorkspaceRepositories, id: string): Promise<FinishedFit> {
+  const found = await findFit(tx, id);
+  if (found.fit.result === null)
+    throw new Conflict('This fit has no result. Wait for it, or start another.');
+  return { ...found, result: found.fit.result };
+}
+
+function specificationOf(request: FitRequest, version: PanelVersionRow): StoredSpecification {
+  const named = (role: string): string =>
+    version.columns.find((column) => column.role === role)?.name ?? '';
+  const others = version.columns.filter((column) => column.role === 'other');
+  const errors = request.furtherRegressors.flatMap((name, index) =>
+    others.some((column) => column.name === name)
+      ? []
+      : [
+          {
+            pointer: `/furtherRegressors/${index}`,
+            detail: `expected a further column of the panel; found “${name}”`,
+          },
+        ],
+  );
+  if (errors.length > 0) throw new Invalid('The specification does not fit the panel.', errors);
+  return {
+    effects: 'company',
+    form: 'levels',
+    lag: 0,
+    slopes: request.slopes,
+    confidence: request.confidence,
+    seed: null,
+    outcome: named('marketValue'),
+    regressors: [named('capex'), named('bookEquity'), ...new Set(request.furtherRegressors)],
+  };
+}

@@ -1,0 +1,82 @@
+import { randomUUID } from 'node:crypto';
+import PgBoss from 'pg-boss';
+import type { JobTicketRow } from '../../db/repositories/jobs-repository';
+import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
+import { queueSchema, type QueueName } from './install-queue';
+
+export interface JobQueueOptions {
+  readonly repositories: Repositories;
+  /** Runs the queue package's own SQL, outside any transaction of ours. */
+  readonly executeSql: (text: string, values: unknown[]) => Promise<{ rows: unknown[] }>;
+  readonly onError: (error: Error) => void;
+  /** How often a worker looks for work that another process queued. */
+  readonly pollSeconds?: number;
+}
+
+/** Jobs in PostgreSQL: what is queued survives a crash, and any server process may work it. */
+export class JobQueue {
+  readonly #boss: PgBoss;
+  readonly #workers = new Map<QueueName, string>();
+
+  constructor(private readonly options: JobQueueOptions) {
+    this.#boss = new PgBoss({
+      db: { executeSql: options.executeSql },
+      schema: queueSchema,
+      migrate: false,
+      schedule: false,
+    });
+    this.#boss.on('error', options.onError);
+  }
+
+  async start(): Promise<void> {
+    await this.#boss.start();
+  }
+
+  /** Stops taking jobs and waits for those under way. */
+  async stop(timeoutMs = 20_000): Promise<void> {
+    await this.#boss.stop({ graceful: true, wait: true, timeout: timeoutMs, close: false });
+  }
+
+  /** Queues a job within the caller's transaction: with it committed the job exists, without it there is none. */
+  async enqueue(tx: WorkspaceRepositories, kind: QueueName, subjectId: string): Promise<void> {
+    const id = randomUUID();
+    await tx.jobTickets.insert({ id, workspaceId: tx.workspaceId, kind, subjectId });
+    await this.#boss.send(
+      kind,
+      { ticketId: id },
+      { db: tx, retryLimit: 4, retryDelay: 1, retryBackoff: true, expireInSeconds: 900 },
+    );
+  }
+
+  /** Wakes this process's worker at once instead of at its next look. */
+  wake(kind: QueueName): void {
+    const worker = this.#workers.get(kind);
+    if (worker !== undefined) this.#boss.notifyWorker(worker);
+  }
+
+  /**
+   * Works a queue. The workspace comes from the ticket's row, never from the queued payload.
+   *
+   * @param handler  is told the ticket; a rejection queues the job again, up to its limit.
+   */
+  async work(kind: QueueName, handler: (ticket: JobTicketRow) => Promise<void>): Promise<void> {
+    const worker = await this.#boss.work<{ ticketId: unknown }>(
+      kind,
+      { pollingIntervalSeconds: this.options.pollSeconds ?? 0.5, batchSize: 1 },
+      async (jobs) => {
+        for (const job of jobs) await handler(await this.#ticket(kind, job.data));
+      },
+    );
+    this.#workers.set(kind, worker);
+  }
+
+  async #ticket(kind: QueueName, payload: { ticketId: unknown } | null): Promise<JobTicketRow> {
+    const ticketId = payload?.ticketId;
+    const ticket =
+      typeof ticketId === 'string'
+        ? await this.options.repositories.jobTickets.find(ticketId)
+        : undefined;
+    if (ticket?.kind !== kind) throw new Error(`a job of queue ${kind} names no ticket of it`);
+    return ticket;
+  }
+}

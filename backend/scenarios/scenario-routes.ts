@@ -1,0 +1,77 @@
+import express, { type Request, type Router } from 'express';
+import {
+  apiRoutes,
+  ChangeScenario,
+  DraftOf,
+  SaveDraft,
+  SaveScenario,
+  type ScenariosReply,
+} from '../contract';
+import { signedInMember } from '../http/member';
+import { parse } from '../http/parse';
+import { idParameter, register } from '../http/register';
+import { toDraftReply, toScenarioReply } from './scenario-replies';
+import type { ScenarioService } from './scenario-service';
+
+export function scenarioRoutes(scenarios: ScenarioService): Router {
+  const router = express.Router();
+  const scenarioId = (req: Request): string => idParameter(req, 'scenarioId');
+  const fitId = (req: Request): string => idParameter(req, 'fitId');
+
+  register(router, apiRoutes.listScenarios, async (req, res) => {
+    const found = await scenarios.list(signedInMember(req).workspaceId, fitId(req));
+    const reply: ScenariosReply = { scenarios: found.map(toScenarioReply) };
+    res.json(reply);
+  });
+
+  register(router, apiRoutes.readDraft, async (req, res) => {
+    const { scenario } = parse(DraftOf, req.query);
+    const draft = await scenarios.findDraft(signedInMember(req), fitId(req), scenario ?? null);
+    res.json(toDraftReply(draft));
+  });
+
+  register(router, apiRoutes.saveDraft, async (req, res) => {
+    const { scenarioId: of, ...text } = parse(SaveDraft, req.body);
+    res.json(toDraftReply(await scenarios.saveDraft(signedInMember(req), fitId(req), of, text)));
+  });
+
+  register(router, apiRoutes.discardDraft, async (req, res) => {
+    const { scenario } = parse(DraftOf, req.query);
+    await scenarios.discardDraft(signedInMember(req), fitId(req), scenario ?? null);
+    res.status(204).end();
+  });
+
+  register(router, apiRoutes.saveScenario, async (req, res) => {
+    const { fitId: of, ...text } = parse(SaveScenario, req.body);
+    const saved = await scenarios.save(signedInMember(req), of, text);
+    res.status(201).json(toScenarioReply(saved));
+  });
+
+  register(router, apiRoutes.readScenario, async (req, res) => {
+    const found = await scenarios.find(signedInMember(req).workspaceId, scenarioId(req));
+    res.json(toScenarioReply(found));
+  });
+
+  register(router, apiRoutes.changeScenario, async (req, res) => {
+    const { version, ...text } = parse(ChangeScenario, req.body);
+    const changed = await scenarios.change(signedInMember(req), scenarioId(req), version, text);
+    res.json(toScenarioReply(changed));
+  });
+
+  register(router, apiRoutes.deleteScenario, async (req, res) => {
+    await scenarios.remove(signedInMember(req), scenarioId(req));
+    res.status(204).end();
+  });
+
+  register(router, apiRoutes.restoreScenario, async (req, res) => {
+    res.json(toScenarioReply(await scenarios.restore(signedInMember(req), scenarioId(req))));
+  });
+
+  register(router, apiRoutes.copyScenario, async (req, res) => {
+    res
+      .status(201)
+      .json(toScenarioReply(await scenarios.copy(signedInMember(req), scenarioId(req))));
+  });
+
+  return router;
+}

@@ -1,0 +1,80 @@
+import { readFileSync } from 'node:fs';
+import type { FitReply } from '../contract';
+import type { TestClient } from './test-client';
+
+/** Market value on investment and capital stock of 11 companies, 1935 to 1954: open data, see stats/golden. */
+export function referencePanel(): string {
+  return readFileSync(
+    new URL('../stats/golden/grunfeld11_value_on_inv_capital.csv', import.meta.url),
+    'utf8',
+  );
+}
+
+export const referenceMapping = {
+  panelName: 'Reference',
+  company: 'company',
+  year: 'year',
+  marketValue: 'value',
+  capex: 'inv',
+  bookEquity: 'capital',
+  others: [],
+  currency: 'USD',
+  unit: 'millions',
+};
+
+/** Brings a panel in and answers its version's id. */
+export async function importPanel(
+  analyst: TestClient,
+  text = referencePanel(),
+  mapping: object = referenceMapping,
+): Promise<string> {
+  const uploaded = await analyst.upload('/api/imports', 'panel.csv', text);
+  const importId = idOf(uploaded, 201);
+  const checked = await analyst.put(`/api/imports/${importId}/mapping`, mapping);
+  idOf(checked, 200);
+  return idOf(await analyst.post(`/api/imports/${importId}/commit`, { note: 'first' }), 201);
+}
+
+/** Saves a peer group of the own company and all others, each with a reason. */
+export async function savePeers(
+  analyst: TestClient,
+  panelVersionId: string,
+  ownCompany: string,
+  parentId: string | null = null,
+): Promise<string> {
+  const listed = await analyst.get(`/api/panel-versions/${panelVersionId}/companies`);
+  const { companies } = listed.body as { companies: { name: string }[] };
+  const peers = companies
+    .filter(({ name }) => name !== ownCompany)
+    .map(({ name }) => ({ company: name, isIncluded: true, reason: 'In the reference set.' }));
+  const saved = await analyst.post('/api/peer-groups', {
+    panelVersionId,
+    ownCompany,
+    note: '',
+    parentId,
+    peers,
+  });
+  return idOf(saved, 201);
+}
+
+/** Starts a fit and waits for it, at most 20 seconds. */
+export async function runFit(analyst: TestClient, peerGroupId: string): Promise<FitReply> {
+  const started = await analyst.post('/api/fits', { peerGroupId });
+  if (started.status !== 202) throw new Error(`starting a fit answered ${started.text}`);
+  const { fit } = started.body as FitReply;
+  for (let look = 0; look < 200; look++) {
+    const found = (await analyst.get(`/api/fits/${fit.id}`)).body as FitReply;
+    if (!['queued', 'running'].includes(found.fit.state)) return found;
+    await new Promise((resolve) => setTimeout(resolve, 100));
+  }
+  throw new Error('the fit did not end within 20 seconds');
+}
+
+export function idOf(
+  response: { readonly status: number; readonly body: unknown; readonly text: string },
+  status: number,
+): string {
+  if (response.status !== status)
+    throw new Error(`expected status ${status}; found ${response.status}: ${response.text}`);
+  return (response.body as { id: string }).id;
+}

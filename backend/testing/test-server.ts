@@ -1,0 +1,88 @@
+import { createServer, type Server } from 'node:http';
+import type { AddressInfo } from 'node:net';
+import { dirname } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { pino } from 'pino';
+import { createTestDatabase, type TestDatabase } from '../../db/testing/test-database';
+import { createApp } from '../app';
+import { compose, type Composition } from '../compose';
+import { installQueue, queueSchema } from '../jobs/install-queue';
+
+/** A clock that a spec moves. */
+export class TestClock {
+  #offsetMs = 0;
+  readonly now = (): Date => new Date(Date.now() + this.#offsetMs);
+
+  advance(ms: number): void {
+    this.#offsetMs += ms;
+  }
+}
+
+/** A server process's worth of Kinvale, within the spec's own process. */
+export interface TestServer {
+  readonly url: string;
+  readonly clock: TestClock;
+  readonly composition: Composition;
+  /** What it logged, one JSON line each. */
+  readonly log: readonly string[];
+  close(): Promise<void>;
+}
+
+export interface TestServerOptions {
+  /** The payment provider's address; by default one where nobody answers. */
+  readonly stripeUrl?: string;
+  /** Plain http as `npm start` serves it; otherwise the cookies of production, for a spec that sends them itself. */
+  readonly isLocal?: boolean;
+}
+
+export function createMigratedDatabase(): Promise<TestDatabase> {
+  return createTestDatabase({ schema: queueSchema, install: installQueue });
+}
+
+/** Starts Kinvale on a free port of the loopback address, on a database that the caller owns. */
+export async function startTestServer(
+  database: TestDatabase,
+  options: TestServerOptions = {},
+): Promise<TestServer> {
+  const clock = new TestClock();
+  const log: string[] = [];
+  const logger = pino({ level: 'info' }, { write: (line: string) => log.push(line) });
+  const composition = compose({
+    databaseUrl: database.appUrl,
+    stripe: { secretKey: 'sk_test_spec', apiUrl: options.stripeUrl ?? 'http://127.0.0.1:9' },
+    fitThreads: 1,
+    now: clock.now,
+    logger,
+    backendFolder: dirname(dirname(fileURLToPath(import.meta.url))),
+  });
+  await composition.start();
+  const server = createServer();
+  await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
+  const url = `http://127.0.0.1:${(server.address() as AddressInfo).port}`;
+  server.on(
+    'request',
+    createApp({
+      services: composition.services,
+      sessionPool: composition.sessionPool,
+      logger,
+      sessionSecrets: ['a secret that only specs know, 32 characters'],
+      isLocal: options.isLocal ?? true,
+      publicOrigin: url,
+      trustProxyHops: 0,
+      now: clock.now,
+      isStopping: () => false,
+      browserFolder: undefined,
+    }),
+  );
+  return { url, clock, composition, log, close: () => closeAll(server, composition) };
+}
+
+async function closeAll(server: Server, composition: Composition): Promise<void> {
+  server.closeAllConnections();
+  await new Promise<void>((resolve) => {
+    server.close(() => {
+      resolve();
+    });
+  });
+  await composition.stop();
+}
