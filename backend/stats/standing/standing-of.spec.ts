@@ -1,0 +1,115 @@
+import type { FitResult } from '../fit-result';
+import { expectedValue } from '../prediction';
+import { expectDigits } from '../testing/expect-digits';
+import { fitOf, goldenJson, goldenPanel } from '../testing/golden-panels';
+
+interface GoldenStanding {
+  readonly estimate: number;
+  readonly standardError: number;
+  readonly low: number;
+  readonly high: number;
+  readonly calibration: number;
+  readonly persistence: number;
+  readonly ownPersistence: number | null;
+  readonly rank: number;
+  readonly rankSet: readonly [number, number];
+}
+
+interface GoldenStandings {
+  readonly results: readonly {
+    readonly file: string;
+    readonly outcome: string;
+    readonly regressors: readonly string[];
+    readonly cosines: number;
+    readonly standings: Readonly<Record<string, GoldenStanding>>;
+  }[];
+}
+
+interface GoldenInterval {
+  readonly estimate: number;
+  readonly standardError: number;
+}
+
+interface GapAndDrift {
+  readonly cases: readonly {
+    readonly file: string;
+    readonly outcome: string;
+    readonly regressors: readonly string[];
+    readonly own: string;
+    readonly gapPath: FitResult['gapPath'] & object;
+    readonly pairs: Readonly<Record<string, GoldenInterval>>;
+    readonly drift: GoldenInterval;
+    readonly expected: readonly (GoldenInterval & { readonly regressors: readonly number[] })[];
+    readonly interceptStandardErrors: Readonly<Record<string, number>>;
+  }[];
+}
+
+for (const { file, outcome, regressors, cosines, standings } of goldenJson<GoldenStandings>(
+  'standing.json',
+).results) {
+  describe(`standings of ${file}`, () => {
+    const data = goldenPanel(file, outcome, regressors);
+    for (const [company, golden] of Object.entries(standings)) {
+      it(`agrees for ${company}, rank set included`, () => {
+        const { standing } = fitOf(data, company);
+        for (const key of [
+          'estimate',
+          'standardError',
+          'low',
+          'high',
+          'calibration',
+          'persistence',
+        ] as const) {
+          expectDigits(standing?.[key], golden[key], 9, key);
+        }
+        if (golden.ownPersistence === null) expect(standing?.ownPersistence).toBeNull();
+        else expectDigits(standing?.ownPersistence, golden.ownPersistence, 9, 'own persistence');
+        expect(standing?.cosines).toBe(cosines);
+        expect(standing?.rank).toBe(golden.rank);
+        expect(standing?.rankSet).toEqual(golden.rankSet);
+      });
+    }
+  });
+}
+
+for (const golden of goldenJson<GapAndDrift>('gap-drift.json').cases) {
+  describe(`${golden.own} in ${golden.file}`, () => {
+    const fit = fitOf(goldenPanel(golden.file, golden.outcome, golden.regressors), golden.own);
+
+    it('has the gap path of the dense computation', () => {
+      expect(fit.gapPath?.map(({ year, peers }) => [year, peers])).toEqual(
+        golden.gapPath.map(({ year, peers }) => [year, peers]),
+      );
+      golden.gapPath.forEach(({ gap, year }, index) => {
+        expectDigits(fit.gapPath?.[index].gap, gap as number, 9, String(year));
+      });
+    });
+
+    it('has the drift of the dense augmented fit', () => {
+      expectDigits(fit.drift?.estimate, golden.drift.estimate, 9, 'estimate');
+      expectDigits(fit.drift?.standardError, golden.drift.standardError, 9, 'standard error');
+    });
+
+    it('has the pair comparisons of the dense computation', () => {
+      expect(fit.pairs?.length).toBe(Object.keys(golden.pairs).length);
+      for (const pair of fit.pairs ?? []) {
+        expectDigits(pair.estimate, golden.pairs[pair.company].estimate, 9, pair.company);
+        expectDigits(pair.standardError, golden.pairs[pair.company].standardError, 9, pair.company);
+      }
+    });
+
+    it('has the expected values of the dense computation from λ, A and D', () => {
+      for (const expected of golden.expected) {
+        const value = fit.prediction && expectedValue(fit.prediction, expected.regressors);
+        expectDigits(value?.estimate, expected.estimate, 9, 'estimate');
+        expectDigits(value?.standardError, expected.standardError, 9, 'standard error');
+      }
+    });
+
+    it('has the intercepts’ standard errors of the dense computation', () => {
+      for (const { company, standardError } of fit.intercepts) {
+        expectDigits(standardError, golden.interceptStandardErrors[company], 9, company);
+      }
+    });
+  });
+}
