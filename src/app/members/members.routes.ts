@@ -1,0 +1,4 @@
+import type { Routes } from '@angular/router';
+
+/** Pages under /members. */
+export const routes: Routes = [];

@@ -1,0 +1,145 @@
+import { Injectable, computed, signal } from '@angular/core';
+import {
+  type MoneyUnit,
+  type NegativeStyle,
+  boundsText,
+  columnDigits,
+  columnText,
+  digitsFor,
+  fixedText,
+  fullText,
+  intervalDigits,
+  intervalText,
+  missingText,
+  unitRatio,
+  unitText,
+} from '@figures';
+
+/**
+ * `money` is in the panel's unit and follows the unit switch; `plain` is a ratio, a slope or a statistic and does
+ * not; `percent` is a share, 0.62 for 62 %; `count` is a whole number.
+ */
+export type FigureKind = 'money' | 'plain' | 'percent' | 'count';
+
+/** Significant digits by place. */
+export const headlineDigits = 3;
+export const tableDigits = 4;
+
+/**
+ * How numbers are written, in one place: unit, sign, digits. All methods read signals, so that templates and
+ * `computed`s follow the person's settings by themselves. Years are written as they are, not through here.
+ */
+@Injectable({ providedIn: 'root' })
+export class NumberFormat {
+  /** ISO 4217 code of the panel; empty where no money is shown. Set through PageContext. */
+  readonly currency = signal('');
+  /** The unit of the panel's numbers. Set through PageContext. */
+  readonly panelUnit = signal<MoneyUnit>('units');
+  /** The unit in which the person wants to see money. Set by the shell from the preferences. */
+  readonly unit = signal<MoneyUnit>('millions');
+  readonly negatives = signal<NegativeStyle>('minus');
+  readonly locale = signal('en');
+
+  /** What a number of the panel is multiplied by to be shown. */
+  readonly factor = computed(() => unitRatio(this.panelUnit(), this.unit()));
+  /** Stands once in a header: `EUR m`. */
+  readonly unitLabel = computed(() => unitText(this.currency(), this.unit()));
+
+  /** The number as it is shown before rounding: money in the shown unit, a percentage times 100. */
+  shown(value: number, kind: FigureKind = 'money'): number {
+    if (kind === 'money') return value * this.factor();
+    return kind === 'percent' ? value * 100 : value;
+  }
+
+  /** Back from what a person typed in the shown unit to the panel's unit. */
+  toPanelUnit(shown: number): number {
+    return shown / this.factor();
+  }
+
+  /** Digits after the point that align a column of figures of one kind. */
+  columnDigits(values: readonly (number | null)[], kind: FigureKind = 'money'): number {
+    if (kind === 'count') return 0;
+    if (kind === 'percent') return 1;
+    return columnDigits(
+      values.map((value) => (value === null ? null : this.shown(value, kind))),
+      tableDigits,
+    );
+  }
+
+  /** A figure of a table: 4 significant digits, or `digits` after the point to align a column. */
+  figure(value: number | null | undefined, kind: FigureKind = 'money', digits?: number): string {
+    if (value === null || value === undefined || !Number.isFinite(value)) return missingText;
+    const shown = this.shown(value, kind);
+    const text = columnText(
+      shown,
+      digits ?? this.#digits(shown, kind, tableDigits),
+      this.negatives(),
+      this.locale(),
+    );
+    return kind === 'percent' && shown !== 0 ? `${text} %` : text;
+  }
+
+  /** A figure of a sentence or a headline: 3 significant digits, minus sign, zero as 0. */
+  headline(value: number, kind: FigureKind = 'money', significant = headlineDigits): string {
+    const shown = this.shown(value, kind);
+    const text = fixedText(shown, this.#digits(shown, kind, significant), this.locale());
+    return kind === 'percent' ? `${text} %` : text;
+  }
+
+  /** `2,410 (1,280 to 3,540)`: an estimate with its interval, 3 significant digits in headlines, 4 in tables. */
+  interval(
+    value: { readonly estimate: number; readonly low: number | null; readonly high: number | null },
+    kind: FigureKind = 'money',
+    significant = tableDigits,
+  ): string {
+    const [estimate, low, high] = this.#shownInterval(value, kind);
+    return intervalText(
+      estimate,
+      low,
+      high,
+      intervalDigits(estimate, low, high, significant),
+      this.locale(),
+    );
+  }
+
+  /** `1,275 to 3,539`, with the digits of its estimate; `no interval` where there is none. */
+  bounds(
+    value: { readonly estimate: number; readonly low: number | null; readonly high: number | null },
+    kind: FigureKind = 'money',
+    digits?: number,
+  ): string {
+    const [estimate, low, high] = this.#shownInterval(value, kind);
+    if (low === null || high === null) return 'no interval';
+    return boundsText(
+      low,
+      high,
+      digits ?? intervalDigits(estimate, low, high, tableDigits),
+      this.locale(),
+    );
+  }
+
+  /** Every digit, for the lineage drawer and copies. */
+  full(value: number | null, kind: FigureKind = 'money'): string {
+    return fullText(value === null ? null : this.shown(value, kind), this.locale());
+  }
+
+  #shownInterval(
+    value: { readonly estimate: number; readonly low: number | null; readonly high: number | null },
+    kind: FigureKind,
+  ): [number, number | null, number | null] {
+    const { estimate, low, high } = value;
+    return [
+      this.shown(estimate, kind),
+      low === null ? null : this.shown(low, kind),
+      high === null ? null : this.shown(high, kind),
+    ];
+  }
+
+  #digits(shown: number, kind: FigureKind, significant: number): number {
+    if (kind === 'count') return 0;
+    if (kind === 'percent') return 1;
+    const digits = digitsFor(shown, significant);
+    // In tables no whole number is rounded away: 12,345 stays 12,345.
+    return significant >= tableDigits ? Math.max(0, digits) : digits;
+  }
+}
