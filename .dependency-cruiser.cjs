@@ -11,7 +11,6 @@ const packages = (...names) =>
     (name) => `(^|/)node_modules/(${name}|@types/${name.replace('@', '').replace('/', '__')})/`,
   );
 
-const testTools = packages('jasmine', 'supertest', 'fast-check', 'superagent');
 const pureFolders = ['backend/stats', 'backend/contract', 'backend/figures'];
 const ground = ['jobs', 'mail', 'files', 'activity', 'entitlement'];
 const features = ['accounts', 'panels', 'peers', 'fits', 'scenarios', 'board', 'billing'];

@@ -21,7 +21,7 @@ const parts = [
       'backend/stats/prediction',
       'backend/figures',
     ],
-    command: ['node_modules/@angular/cli/bin/ng.js', 'build', '--no-progress'],
+    command: ['tools/build-browser.mjs'],
   },
   {
     name: 'server',

@@ -19,6 +19,8 @@ const jasmine = new Jasmine({ projectBaseDir: root });
 jasmine.loadConfig({ ...settings, spec_files: settings.spec_files.flatMap(keeps) });
 jasmine.jasmine.DEFAULT_TIMEOUT_INTERVAL = timeoutMs;
 
+jasmine.showColors(!process.env.NO_COLOR);
+
 const counts = { passed: 0, failed: 0 };
 jasmine.addReporter({
   specDone({ status }) {
