@@ -21,7 +21,8 @@ async function main(): Promise<void> {
   await composition.start();
 
   let isStopping = false;
-  const browserFolder = join(backendFolder, '..', 'browser');
+  const browserFolder =
+    process.env['KINVALE_BROWSER_FOLDER'] ?? join(backendFolder, '..', 'browser');
   const app = createApp({
     ...config,
     services: composition.services,
