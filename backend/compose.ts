@@ -1,3 +1,4 @@
+import { existsSync } from 'node:fs';
 import { join } from 'node:path';
 import type { Logger } from 'pino';
 import { createDatabase, createPool } from '../db/connect';
@@ -87,9 +88,10 @@ export function compose(options: ComposeOptions): Composition {
       logger.error({ err: error }, 'job queue');
     },
   });
-  const isSource = !options.backendFolder.includes('dist');
-  const entry = (source: string, built: string): string =>
-    join(options.backendFolder, isSource ? source : built);
+  const entry = (source: string, built: string): string => {
+    const sourceFile = join(options.backendFolder, source);
+    return existsSync(sourceFile) ? sourceFile : join(options.backendFolder, built);
+  };
   const fitPool = new FitPool(entry('compute/fit-worker.ts', 'fit-worker.js'), options.fitThreads);
   const parser = new ParseProcess(entry('compute/parse-child.ts', 'parse-child.js'));
   const passwords = new Passwords();

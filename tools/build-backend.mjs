@@ -4,7 +4,7 @@
  * `--partial` leaves out entries whose source is not there; without it a missing one is an error.
  */
 import { existsSync } from 'node:fs';
-import { rm } from 'node:fs/promises';
+import { copyFile, mkdir, rm } from 'node:fs/promises';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { build } from 'esbuild';
@@ -48,3 +48,10 @@ await build({
   sourcesContent: false,
   logLevel: 'warning',
 });
+
+// Data that the server reads beside its code.
+await mkdir(join(root, 'dist/backend/panels'), { recursive: true });
+await copyFile(
+  join(root, 'backend/panels/sample-panel.csv'),
+  join(root, 'dist/backend/panels/sample-panel.csv'),
+);
