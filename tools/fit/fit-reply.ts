@@ -46,7 +46,7 @@ export function fitReply(result: FitResult, leftOut: readonly DroppedRow[]): Jso
     engine: result.engine,
     hash: result.hash,
     specification: { ...result.specification },
-    ...(figures as { readonly [key: string]: Json }),
+    ...(figures as Readonly<Record<string, Json>>),
   };
 }
 
@@ -54,7 +54,7 @@ export function fitReply(result: FitResult, leftOut: readonly DroppedRow[]): Jso
 function withReasons(value: Json): Json {
   if (Array.isArray(value)) return value.map(withReasons);
   if (value === null || typeof value !== 'object') return value;
-  const object = value as { readonly [key: string]: Json };
+  const object = value as Readonly<Record<string, Json>>;
   const stated = object['intervalReason'] ?? object['pValueReason'];
   const result: Record<string, Json> = {};
   for (const [key, entry] of Object.entries(object)) {

@@ -34,7 +34,7 @@ async function readFile(path: string): Promise<Table> {
   } catch (error) {
     const { code } = error as { code?: string };
     if (code === undefined || !fileFaults.has(code)) throw error;
-    const detail = `expected a file at ${path}; ${fileFaults.get(code) as string}`;
+    const detail = `expected a file at ${path}; ${fileFaults.get(code)!}`;
     throw new FitProblem('unreadable-file', 'The file cannot be read', detail);
   }
 }

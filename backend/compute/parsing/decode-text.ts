@@ -14,7 +14,7 @@ export async function* decodeText(
   let line = 1;
   let heldBack = '';
   const decode = (bytes?: Uint8Array): string => {
-    const text = heldBack + decodeStrictly(decoder as TextDecoder, bytes, line);
+    const text = heldBack + decodeStrictly(decoder!, bytes, line);
     // A carriage return at the end of a chunk may be half of a line end.
     heldBack = bytes !== undefined && text.endsWith('\r') ? '\r' : '';
     const whole = text.slice(0, text.length - heldBack.length).replace(/\r\n?/gu, '\n');

@@ -40,7 +40,7 @@ export function contrastError(
 ): CalibratedError {
   const reason = context.reason ?? contrastIntervalReason(context.fit, contrast);
   if (context.forms === null || reason !== undefined) {
-    return { standardError: null, calibration: null, reason: reason as string };
+    return { standardError: null, calibration: null, reason: reason! };
   }
   return calibratedError(context.forms, contrast, cosines);
 }

@@ -111,7 +111,7 @@ function refuseDuplicates(data: PanelColumns, rows: readonly number[]): void {
   throw new StatsError(
     'duplicate-rows',
     `expected one row a company and year; found ${places.length} rows that share theirs with another`,
-    { rows: places, companies: [...new Set(places.map((place) => place.company as string))] },
+    { rows: places, companies: [...new Set(places.map((place) => place.company!))] },
   );
 }
 
@@ -147,7 +147,7 @@ function gather(
     companies: groups.map((group) => data.companies[data.company[group[0]]]),
     starts,
     year,
-    position: Int32Array.from(year, (value) => positions.get(value) as number),
+    position: Int32Array.from(year, (value) => positions.get(value)!),
     years,
     outcome: Float64Array.from(rows, (row) => data.outcome.values[row]),
     regressors: data.regressors.map(({ values }) => Float64Array.from(rows, (row) => values[row])),

@@ -5,6 +5,9 @@ import { quadraticForm } from './quadratic-form';
 /** Quantile of Student's t at fractional degrees of freedom. */
 export type TQuantile = (probability: number, degreesOfFreedom: number) => number;
 
+/** A contrast whose working variance is below this share of the classical one is determined by one company alone. */
+const judgedTolerance = 1e-10;
+
 /** Degrees of freedom of the contrast of slopes with the given weights, not all zero. */
 export function contrastDegreesOfFreedom(
   degrees: SlopeDegreesOfFreedom,
@@ -40,22 +43,28 @@ export function differenceToBase(
   if (basis.slopeIntervalReason !== undefined) {
     return withoutInterval(estimate, basis.slopeIntervalReason);
   }
-  const standardError = Math.sqrt(
-    Math.max(0, quadraticForm(basis.slopeCovariance, deltaRegressors)),
-  );
   // Degrees of freedom do not depend on the contrast's size: scaled, fourth powers neither overflow nor vanish.
-  const degrees = contrastDegreesOfFreedom(
-    basis.slopeDegreesOfFreedom,
-    deltaRegressors.map((delta) => delta / largest),
-  );
-  if (!(degrees > 0)) {
+  const weights = deltaRegressors.map((delta) => delta / largest);
+  if (!isJudged(basis, weights)) {
     return withoutInterval(
       estimate,
-      'This difference leaves no degrees of freedom to judge it by.',
+      'No degrees of freedom are left: one company alone determines this difference.',
     );
   }
+  const variance = Math.max(0, quadraticForm(basis.slopeCovariance, weights));
+  const standardError = largest * Math.sqrt(variance);
+  const degrees = contrastDegreesOfFreedom(basis.slopeDegreesOfFreedom, weights);
   const quantile = tQuantile(1 - (1 - basis.confidence) / 2, degrees);
   return symmetricInterval(estimate, standardError, quantile);
+}
+
+function isJudged(basis: PredictionBasis, weights: readonly number[]): boolean {
+  const degrees = basis.slopeDegreesOfFreedom;
+  if (degrees.kind === 'fixed') return true;
+  return (
+    quadraticForm(degrees.s, weights) >
+    judgedTolerance * quadraticForm(basis.inverseCrossProduct, weights)
+  );
 }
 
 /** w_k·w_l for k ≤ l, doubled for k < l. */

@@ -13,6 +13,9 @@ import type { SlopeDegreesOfFreedom } from '../prediction';
 import type { WithinFit } from '../regression/within-fit';
 import type { CompanyProduct } from './company-products';
 
+/** A contrast whose working variance is below this share of the classical one is determined by one company alone. */
+const traceTolerance = 1e-10;
+
 /**
  * Satterthwaite degrees of freedom of one contrast of slopes under `cr2` with a working identity.
  * With p_i = (I − H)_i'·A_i·U_i·c they are (Σ p_i'p_i)² / Σ_ij (p_i'p_j)², and
@@ -44,7 +47,8 @@ export function satterthwaiteDegreesOfFreedom(
     }
   }
   squares += dot(outer, outer);
-  return trace > 0 && squares > 0 ? (trace * trace) / squares : null;
+  const isJudged = trace > traceTolerance * dot(contrast, contrast);
+  return isJudged ? (trace * trace) / squares : null;
 }
 
 /** The same for any contrast, as forms in its weights; cost N·K⁴/4. */

@@ -5,7 +5,11 @@ import { type SlopeDegreesOfFreedom, symmetricInterval, withoutInterval } from '
 import { isPerfectFit, perfectFitReason } from '../regression/goodness';
 import type { WithinFit } from '../regression/within-fit';
 import type { CompanyProduct } from './company-products';
+import { slopeCovariance } from './slope-covariance';
 import { satterthwaiteDegreesOfFreedom, satterthwaiteForms } from './satterthwaite';
+
+/** A variance below this share of the classical one is rounding: nothing but one company moves this slope. */
+const varianceTolerance = 1e-20;
 
 const noDegreesReason = 'No degrees of freedom are left: one company alone determines this slope.';
 
@@ -18,6 +22,7 @@ export function slopeEstimates(
 ): SlopeEstimate[] {
   const size = fit.slopes.length;
   const isPerfect = isPerfectFit(fit);
+  const classical = slopeCovariance(fit, products, 'classical');
   return fit.sample.regressorNames.map((name, k): SlopeEstimate => {
     const estimate = fit.slopes[k];
     const weights = Float64Array.from({ length: size }, (_, index) => (index === k ? 1 : 0));
@@ -25,8 +30,10 @@ export function slopeEstimates(
       options.name === 'cr2'
         ? satterthwaiteDegreesOfFreedom(fit, products, weights)
         : fixedDegreesOfFreedom(fit, options.name);
-    const standardError = Math.sqrt(covariance[k * size + k]);
-    if (isPerfect || degreesOfFreedom === null || standardError === 0) {
+    const variance = covariance[k * size + k];
+    const isJudged = variance > varianceTolerance * classical[k * size + k];
+    const standardError = Math.sqrt(variance);
+    if (isPerfect || degreesOfFreedom === null || !isJudged) {
       const reason = isPerfect ? perfectFitReason : noDegreesReason;
       return {
         name,

@@ -81,7 +81,7 @@ for (const golden of goldenJson<GapAndDrift>('gap-drift.json').cases) {
         golden.gapPath.map(({ year, peers }) => [year, peers]),
       );
       golden.gapPath.forEach(({ gap, year }, index) => {
-        expectDigits(fit.gapPath?.[index].gap, gap as number, 9, String(year));
+        expectDigits(fit.gapPath?.[index].gap, gap!, 9, String(year));
       });
     });
 

@@ -56,7 +56,7 @@ function degreesWarnings(slopes: readonly SlopeEstimate[]): FitWarning[] {
   );
   if (small.length === 0) return [];
   const list = small
-    .map(({ name, degreesOfFreedom }) => `${(degreesOfFreedom as number).toFixed(2)} for ${name}`)
+    .map(({ name, degreesOfFreedom }) => `${degreesOfFreedom!.toFixed(2)} for ${name}`)
     .join(' and ');
   const detail = `Satterthwaite degrees of freedom are ${list}: one large company then drives the result.`;
   return [{ code: 'small-degrees-of-freedom', detail, subjects: small.map(({ name }) => name) }];
