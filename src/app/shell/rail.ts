@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { RouterLink, RouterLinkActive } from '@angular/router';
-import { Logo } from './logo';
+import { Logo } from '../ui/logo';
 
 export interface RailPage {
   readonly path: string;
