@@ -5,6 +5,13 @@ import { CommandFailed, Interrupted } from './plain-failure.mjs';
 const keptLines = 60;
 
 /**
+ * Whether a script of ours runs us already: then its process group is ours and our children's, so that one signal
+ * from above reaches all.
+ */
+const isInGroup = process.env.KINVALE_PROCESS_GROUP !== undefined;
+const inGroup = (env = process.env) => ({ ...env, KINVALE_PROCESS_GROUP: '1' });
+
+/**
  * Runs a command to its end, with stdin closed, in a process group of its own: Ctrl-C reaches this script only,
  * which then ends its children in order.
  *
@@ -21,8 +28,8 @@ export function run(command, args, options = {}) {
     if (signal?.aborted) return reject(new Interrupted(command));
     const child = spawn(command, args, {
       cwd,
-      env,
-      detached: true,
+      env: inGroup(env),
+      detached: !isInGroup,
       stdio: ['ignore', quiet ? 'ignore' : 'pipe', quiet ? 'ignore' : 'pipe'],
     });
     let stdout = '';
@@ -60,8 +67,8 @@ export function launch(command, args, options = {}) {
   const sink = log === undefined ? 'inherit' : openSync(log, 'w', 0o600);
   const child = spawn(command, args, {
     cwd,
-    env,
-    detached: true,
+    env: inGroup(env),
+    detached: !isInGroup,
     stdio: ['ignore', readsStdout ? 'pipe' : sink, sink],
   });
   if (typeof sink === 'number') closeSync(sink);
@@ -82,7 +89,7 @@ export function launch(command, args, options = {}) {
 function signalGroup(child, name) {
   if (child.pid === undefined) return;
   try {
-    process.kill(-child.pid, name);
+    process.kill(isInGroup ? child.pid : -child.pid, name);
   } catch (error) {
     if (error.code !== 'ESRCH') throw error; // gone already: nothing left to end
   }
