@@ -92,7 +92,14 @@ export function fitPanel(
     poolability,
     withoutCompany,
     prediction,
-    warnings: warningsOf({ context, slopes, withoutCompany, own: ownIndex, names: data.companies }),
+    warnings: warningsOf({
+      context,
+      covariance: specification.slopes,
+      slopes,
+      withoutCompany,
+      own: ownIndex,
+      names: data.companies,
+    }),
   };
 }
 

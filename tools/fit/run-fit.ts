@@ -33,8 +33,9 @@ async function readFile(path: string): Promise<Table> {
     return await readTable(createReadStream(path));
   } catch (error) {
     const { code } = error as { code?: string };
-    if (code === undefined || !fileFaults.has(code)) throw error;
-    const detail = `expected a file at ${path}; ${fileFaults.get(code)!}`;
+    const fault = code === undefined ? undefined : fileFaults.get(code);
+    if (fault === undefined) throw error;
+    const detail = `expected a file at ${path}; ${fault}`;
     throw new FitProblem('unreadable-file', 'The file cannot be read', detail);
   }
 }

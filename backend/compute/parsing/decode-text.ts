@@ -13,8 +13,8 @@ export async function* decodeText(
   let head: Uint8Array = new Uint8Array(0);
   let line = 1;
   let heldBack = '';
-  const decode = (bytes?: Uint8Array): string => {
-    const text = heldBack + decodeStrictly(decoder!, bytes, line);
+  const decode = (by: TextDecoder, bytes?: Uint8Array): string => {
+    const text = heldBack + decodeStrictly(by, bytes, line);
     // A carriage return at the end of a chunk may be half of a line end.
     heldBack = bytes !== undefined && text.endsWith('\r') ? '\r' : '';
     const whole = text.slice(0, text.length - heldBack.length).replace(/\r\n?/gu, '\n');
@@ -26,16 +26,16 @@ export async function* decodeText(
       head = Buffer.concat([head, chunk]);
       if (head.length < 3) continue;
       decoder = decoderFor(head);
-      yield decode(head);
+      yield decode(decoder, head);
     } else {
-      yield decode(chunk);
+      yield decode(decoder, chunk);
     }
   }
   if (decoder === undefined) {
     decoder = decoderFor(head);
-    yield decode(head);
+    yield decode(decoder, head);
   }
-  yield decode();
+  yield decode(decoder);
 }
 
 function decoderFor(head: Uint8Array): TextDecoder {

@@ -1,6 +1,11 @@
 import { type IntervalEstimate, withoutInterval } from '../prediction';
 import type { WithinFit } from '../regression/within-fit';
-import { type CalibratedError, calibratedError, calibratedInterval } from './calibrated-interval';
+import {
+  type CalibratedError,
+  calibratedError,
+  calibratedInterval,
+  noCalibrationReason,
+} from './calibrated-interval';
 import { type CompanyForms, companyForms } from './company-forms';
 import type { Contrast } from './contrast';
 import { intervalCosines, rankCosines } from './cosine-weights';
@@ -40,7 +45,7 @@ export function contrastError(
 ): CalibratedError {
   const reason = context.reason ?? contrastIntervalReason(context.fit, contrast);
   if (context.forms === null || reason !== undefined) {
-    return { standardError: null, calibration: null, reason: reason! };
+    return { standardError: null, calibration: null, reason: reason ?? noCalibrationReason };
   }
   return calibratedError(context.forms, contrast, cosines);
 }

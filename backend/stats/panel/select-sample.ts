@@ -111,7 +111,7 @@ function refuseDuplicates(data: PanelColumns, rows: readonly number[]): void {
   throw new StatsError(
     'duplicate-rows',
     `expected one row a company and year; found ${places.length} rows that share theirs with another`,
-    { rows: places, companies: [...new Set(places.map((place) => place.company!))] },
+    { rows: places, companies: [...new Set(places.flatMap(({ company }) => company ?? []))] },
   );
 }
 
@@ -142,12 +142,11 @@ function gather(
       `expected at most ${mostYears} different fiscal years; found ${years.length}: is this the year's column?`,
     );
   }
-  const positions = new Map(years.map((value, index) => [value, index]));
   return {
     companies: groups.map((group) => data.companies[data.company[group[0]]]),
     starts,
     year,
-    position: Int32Array.from(year, (value) => positions.get(value)!),
+    position: Int32Array.from(year, (value) => years.indexOf(value)),
     years,
     outcome: Float64Array.from(rows, (row) => data.outcome.values[row]),
     regressors: data.regressors.map(({ values }) => Float64Array.from(rows, (row) => values[row])),

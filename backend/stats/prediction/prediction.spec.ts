@@ -8,7 +8,6 @@ import {
   differenceToBase,
   expectedValue,
   familiarRange,
-  type PredictionBasis,
 } from './index';
 
 const data = goldenPanel('grunfeld11_value_on_inv_capital.csv', 'value', ['inv', 'capital']);

@@ -1,5 +1,5 @@
 import { fitOf, goldenPanel, panelOf, type PanelRow } from '../testing/golden-panels';
-import type { FitResult } from '../fit-result';
+import type { FitResult, Specification } from '../fit-result';
 
 const names = { outcome: 'y', regressors: ['x'] };
 
@@ -12,6 +12,7 @@ interface Shape {
 function noise(
   { companies, years }: Shape,
   change: (row: PanelRow, index: number) => PanelRow = (row) => row,
+  specification: Partial<Specification> = {},
 ): FitResult {
   let state = 4711;
   const random = (): number => {
@@ -30,7 +31,7 @@ function noise(
       index,
     );
   });
-  return fitOf(panelOf(rows, names), 'K0');
+  return fitOf(panelOf(rows, names), 'K0', specification);
 }
 
 const codes = (fit: FitResult): string[] => fit.warnings.map(({ code }) => code);
@@ -54,6 +55,11 @@ describe('warningsOf', () => {
       'Satterthwaite degrees of freedom are 2.07 for inv and 3.46 for capital: one large company then drives the result.',
     );
     expect(warning?.subjects).toEqual(['inv', 'capital']);
+  });
+
+  it('says nothing of Satterthwaite where the errors have other degrees of freedom', () => {
+    const fit = noise({ companies: 4, years: 20 }, undefined, { slopes: 'cr1' });
+    expect(codes(fit)).not.toContain('small-degrees-of-freedom');
   });
 
   it('names the one company without which a slope changes sign', () => {

@@ -1,4 +1,4 @@
-import type { FitResult, FitWarning, SlopeEstimate } from '../fit-result';
+import type { FitResult, FitWarning, SlopeCovarianceName, SlopeEstimate } from '../fit-result';
 import type { IntervalContext } from '../intervals/interval-context';
 import { isPerfectFit } from '../regression/goodness';
 import { dominatedWarnings } from './dominated';
@@ -7,6 +7,7 @@ import { spellingWarning } from './spelling';
 
 export interface WarningInput {
   readonly context: IntervalContext;
+  readonly covariance: SlopeCovarianceName;
   readonly slopes: readonly SlopeEstimate[];
   readonly withoutCompany: FitResult['withoutCompany'];
   /** Index of the own company; −1 without one. */
@@ -23,7 +24,7 @@ const largeConditionNumber = 1e6;
 export function warningsOf(input: WarningInput): FitWarning[] {
   return [
     ...sizeWarnings(input),
-    ...degreesWarnings(input.slopes),
+    ...(input.covariance === 'cr2' ? degreesWarnings(input.slopes) : []),
     ...persistenceWarnings(input.context, input.own),
     ...dominatedWarnings(input.slopes, input.withoutCompany),
     ...fitWarnings(input.context),
@@ -51,13 +52,11 @@ function sizeWarnings({ context }: WarningInput): FitWarning[] {
 }
 
 function degreesWarnings(slopes: readonly SlopeEstimate[]): FitWarning[] {
-  const small = slopes.filter(
-    ({ degreesOfFreedom }) => degreesOfFreedom !== null && degreesOfFreedom < smallDegreesOfFreedom,
+  const small = slopes.flatMap(({ name, degreesOfFreedom: degrees }) =>
+    degrees !== null && degrees < smallDegreesOfFreedom ? [{ name, degrees }] : [],
   );
   if (small.length === 0) return [];
-  const list = small
-    .map(({ name, degreesOfFreedom }) => `${degreesOfFreedom!.toFixed(2)} for ${name}`)
-    .join(' and ');
+  const list = small.map(({ name, degrees }) => `${degrees.toFixed(2)} for ${name}`).join(' and ');
   const detail = `Satterthwaite degrees of freedom are ${list}: one large company then drives the result.`;
   return [{ code: 'small-degrees-of-freedom', detail, subjects: small.map(({ name }) => name) }];
 }
