@@ -2,6 +2,7 @@ import { createServer, type Server } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { dirname } from 'node:path';
 import { fileURLToPath } from 'node:url';
+import type { Express } from 'express';
 import { pino } from 'pino';
 import { createTestDatabase, type TestDatabase } from '../../db/testing/test-database';
 import { createApp } from '../app';
@@ -20,6 +21,7 @@ export class TestClock {
 
 /** A server process's worth of Kinvale, within the spec's own process. */
 export interface TestServer {
+  readonly app: Express;
   readonly url: string;
   readonly clock: TestClock;
   readonly composition: Composition;
@@ -59,22 +61,20 @@ export async function startTestServer(
   const server = createServer();
   await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
   const url = `http://127.0.0.1:${(server.address() as AddressInfo).port}`;
-  server.on(
-    'request',
-    createApp({
-      services: composition.services,
-      sessionPool: composition.sessionPool,
-      logger,
-      sessionSecrets: ['a secret that only specs know, 32 characters'],
-      isLocal: options.isLocal ?? true,
-      publicOrigin: url,
-      trustProxyHops: 0,
-      now: clock.now,
-      isStopping: () => false,
-      browserFolder: undefined,
-    }),
-  );
-  return { url, clock, composition, log, close: () => closeAll(server, composition) };
+  const app = createApp({
+    services: composition.services,
+    sessionPool: composition.sessionPool,
+    logger,
+    sessionSecrets: ['a secret that only specs know, 32 characters'],
+    isLocal: options.isLocal ?? true,
+    publicOrigin: url,
+    trustProxyHops: 0,
+    now: clock.now,
+    isStopping: () => false,
+    browserFolder: undefined,
+  });
+  server.on('request', app);
+  return { app, url, clock, composition, log, close: () => closeAll(server, composition) };
 }
 
 async function closeAll(server: Server, composition: Composition): Promise<void> {

@@ -1,0 +1,231 @@
+import pg from 'pg';
+import type { TestDatabase } from '../db/testing/test-database';
+import { type ApiRoute, apiRoutes } from './contract';
+import { signUp, type TestClient, testPassword } from './testing/test-client';
+import { idOf, importPanel, referencePanel, runFit, savePeers } from './testing/test-model';
+import { createMigratedDatabase, startTestServer, type TestServer } from './testing/test-server';
+
+/** A workspace with something of everything, under names that only it has. */
+interface Filled {
+  readonly client: TestClient;
+  readonly ids: Readonly<Record<string, string>>;
+}
+
+async function fill(server: TestServer, canary: string): Promise<Filled> {
+  const client = await signUp(server, canary);
+  const { session } = (await client.get('/api/session')).body as {
+    session: { person: { id: string } };
+  };
+  const roles = ['analyst', 'billing_admin', 'cfo'];
+  expect((await client.put(`/api/members/${session.person.id}/roles`, { roles })).status).toBe(204);
+  const panel = referencePanel().replaceAll('C06', `${canary}-own`);
+  const uploaded = await client.upload('/api/imports', `${canary}.csv`, panel);
+  const importId = idOf(uploaded, 201);
+  const panelVersionId = await importPanel(client, panel);
+  const peerGroupId = await savePeers(client, panelVersionId, `${canary}-own`);
+  const { fit, panelVersion, result } = await runFit(client, peerGroupId);
+  const last = result?.prediction?.last;
+  const text = { name: `${canary} plan`, note: canary };
+  const plan = [{ year: (last?.year ?? 0) + 1, values: last?.regressors }];
+  const saved = await client.post('/api/scenarios', { fitId: fit.id, ...text, plan });
+  const published = await client.post('/api/editions', {
+    fitId: fit.id,
+    scenarioIds: [idOf(saved, 201)],
+    confidentiality: 'confidential',
+    comment: canary,
+  });
+  const { edition } = published.body as { edition: { id: string } };
+  const invitation = await client.post('/api/members/invitations', {
+    email: `${canary}@invited.example`,
+    roles: ['reader'],
+  });
+  return {
+    client,
+    ids: {
+      importId,
+      panelVersionId,
+      peerGroupId,
+      fitId: fit.id,
+      fileId: panelVersion.file.id,
+      scenarioId: idOf(saved, 201),
+      editionId: edition.id,
+      personId: session.person.id,
+      invitationId: idOf(invitation, 201),
+      figure: 'standing',
+    },
+  };
+}
+
+const bodies: Readonly<Record<string, (ids: Filled['ids']) => object>> = {
+  savePeerGroup: ({ panelVersionId }) => ({
+    panelVersionId,
+    ownCompany: 'C01',
+    note: '',
+    parentId: null,
+    peers: [{ company: 'C02', isIncluded: true, reason: 'x' }],
+  }),
+  startFit: ({ peerGroupId }) => ({ peerGroupId }),
+  saveDraft: () => ({
+    scenarioId: null,
+    name: 'x',
+    note: '',
+    plan: [{ year: 1955, values: [1, 1] }],
+  }),
+  saveScenario: ({ fitId }) => ({
+    fitId,
+    name: 'x',
+    note: '',
+    plan: [{ year: 1955, values: [1, 1] }],
+  }),
+  changeScenario: () => ({
+    name: 'x',
+    note: '',
+    version: 1,
+    plan: [{ year: 1955, values: [1, 1] }],
+  }),
+  publishEdition: ({ fitId }) => ({
+    fitId,
+    scenarioIds: [],
+    confidentiality: 'confidential',
+    comment: '',
+  }),
+  checkImport: () => ({
+    panelName: 'x',
+    company: 'company',
+    year: 'year',
+    marketValue: 'value',
+    capex: 'inv',
+    bookEquity: 'capital',
+    others: [],
+    currency: 'EUR',
+    unit: 'millions',
+  }),
+  commitImport: () => ({ note: '' }),
+  signEdition: () => ({ password: testPassword }),
+  returnEdition: () => ({ comment: 'no' }),
+  changeRoles: () => ({ roles: ['reader'] }),
+};
+
+/** Every route that takes an id of the other workspace, in its path or its body, answers 404 and nothing of it. */
+async function tryEveryRoute(mine: Filled, other: Filled, canary: string): Promise<number> {
+  let tried = 0;
+  for (const [name, route] of Object.entries<ApiRoute>(apiRoutes)) {
+    const body = bodies[name]?.(other.ids);
+    const isAimed = route.path.includes(':') || name in bodies;
+    if (!isAimed) continue;
+    const path = route.path.replace(/:(\w+)/g, (_, key: string) => other.ids[key]);
+    const method = route.method.toLowerCase() as 'get' | 'post' | 'put' | 'delete';
+    const reply = await mine.client[method](path, body);
+    tried++;
+    // A draft that is not there reads as none, and discarding none changes nothing.
+    if (name === 'readDraft') expect(reply.body).toEqual({ draft: null });
+    else if (name !== 'discardDraft')
+      expect(reply.status).withContext(`${route.method} ${path}`).toBe(404);
+    expect(JSON.stringify(reply.body) + reply.text)
+      .withContext(name)
+      .not.toContain(canary);
+  }
+  for (const list of [
+    'listPanelVersions',
+    'listPeerGroups',
+    'listFits',
+    'listEditions',
+    'listMembers',
+    'readDesk',
+  ] as const) {
+    const reply = await mine.client.get(apiRoutes[list].path);
+    expect(reply.status).withContext(list).toBe(200);
+    expect(reply.text).withContext(list).not.toContain(canary);
+  }
+  return tried;
+}
+
+describe('two workspaces', () => {
+  let database: TestDatabase;
+  let server: TestServer;
+  let first: Filled;
+  let second: Filled;
+
+  beforeAll(async () => {
+    database = await createMigratedDatabase();
+    server = await startTestServer(database);
+    first = await fill(server, 'heron');
+    second = await fill(server, 'osprey');
+  });
+
+  afterAll(async () => {
+    await server.close();
+    await database.drop();
+  });
+
+  it('reach nothing of each other by any route, with both walls up', async () => {
+    expect(await tryEveryRoute(first, second, 'osprey')).toBeGreaterThan(25);
+    expect(await tryEveryRoute(second, first, 'heron')).toBeGreaterThan(25);
+  });
+
+  it('see only their own rows by row level security alone, without any filter', async () => {
+    const app = new pg.Client({ connectionString: database.appUrl });
+    await app.connect();
+    try {
+      const tables = await app.query<{ relname: string }>(`select relname from pg_class
+        where relrowsecurity and relkind = 'r' and relnamespace = 'public'::regnamespace`);
+      expect(tables.rows.length).toBeGreaterThan(15);
+      for (const { relname } of tables.rows) {
+        const none = await app.query(`select workspace_id from ${relname}`);
+        expect(none.rowCount).withContext(`${relname} without a workspace`).toBe(0);
+        await app.query('begin');
+        const session = (await first.client.get('/api/session')).body as {
+          session: { workspace: { id: string } };
+        };
+        const id = session.session.workspace.id;
+        await app.query(`select set_config('app.workspace', $1, true)`, [id]);
+        const own = await app.query<{ workspace_id: string }>(
+          `select workspace_id from ${relname}`,
+        );
+        expect(own.rows.every((row) => row.workspace_id === id))
+          .withContext(relname)
+          .toBeTrue();
+        await app.query('commit');
+      }
+    } finally {
+      await app.end();
+    }
+  });
+
+  it('cannot write a row into, or move one to, another workspace', async () => {
+    const app = new pg.Client({ connectionString: database.appUrl });
+    await app.connect();
+    try {
+      await app.query('begin');
+      await app.query(`select set_config('app.workspace', gen_random_uuid()::text, true)`);
+      await expectAsync(
+        app.query(`insert into workspace (workspace_id, name) values (gen_random_uuid(), 'x')`),
+      ).toBeRejectedWithError(/row-level security/);
+      await app.query('rollback');
+    } finally {
+      await app.end();
+    }
+  });
+});
+
+describe('two workspaces with row level security taken down', () => {
+  it('still reach nothing of each other: the filter of the repositories is a wall of its own', async () => {
+    const database = await createMigratedDatabase();
+    const admin = new pg.Client({ connectionString: database.adminUrl });
+    await admin.connect();
+    const server = await startTestServer(database);
+    try {
+      await admin.query(`do $$ declare name text; begin
+        for name in select relname from pg_class where relrowsecurity and relkind = 'r' loop
+          execute format('alter table %I disable row level security', name);
+        end loop; end $$`);
+      const mine = await fill(server, 'heron');
+      const other = await fill(server, 'osprey');
+      expect(await tryEveryRoute(mine, other, 'osprey')).toBeGreaterThan(25);
+    } finally {
+      await admin.end();
+      await server.close();
+      await database.drop();
+    }
+  });
+});
