@@ -3,6 +3,7 @@ import { closeSync, openSync } from 'node:fs';
 import { CommandFailed, Interrupted } from './plain-failure.mjs';
 
 const keptLines = 60;
+const patienceMs = 4000;
 
 /**
  * Whether a script of ours runs us already: then its process group is ours and our children's, so that one signal
@@ -43,11 +44,16 @@ export function run(command, args, options = {}) {
       keep(text);
     });
     child.stderr?.setEncoding('utf8').on('data', keep);
-    const interrupt = () => signalGroup(child, 'SIGTERM');
+    let insist;
+    const interrupt = () => {
+      signalGroup(child, 'SIGTERM');
+      insist = setTimeout(() => signalGroup(child, 'SIGKILL'), patienceMs); // npm ci goes on for minutes
+    };
     signal?.addEventListener('abort', interrupt, { once: true });
     child.once('error', reject);
     child.once('close', (status, ended) => {
       signal?.removeEventListener('abort', interrupt);
+      clearTimeout(insist);
       if (signal?.aborted) reject(new Interrupted(command));
       else if (status === 0) resolve(stdout);
       else reject(new CommandFailed([command, ...args].join(' '), status ?? ended, tail));
