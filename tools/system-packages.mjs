@@ -48,7 +48,8 @@ async function rightToInstall() {
     await run('sudo', ['-n', 'true']);
     return ['sudo', '-n'];
   } catch (error) {
-    if (error instanceof CommandFailed || error.code === 'ENOENT') return undefined;
+    if (error instanceof CommandFailed || ['ENOENT', 'EACCES'].includes(error.code))
+      return undefined;
     throw error;
   }
 }
