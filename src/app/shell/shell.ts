@@ -13,7 +13,9 @@ import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { NavigationEnd, Router, RouterOutlet } from '@angular/router';
 import { type Preferences, maySee, pages } from '@contract';
 import { distinctUntilChanged, filter, map, skip } from 'rxjs';
+import { LineageStore } from '../api/lineage-store';
 import { SessionStore } from '../api/session-store';
+import { LineageDrawer } from '../ui/lineage-drawer/lineage-drawer';
 import { NumberFormat } from '../ui/number-format';
 import { PageContext } from '../ui/page-context';
 import { ProblemBannerState } from '../ui/problem';
@@ -25,7 +27,7 @@ import { TopBar } from './top-bar';
 /** The frame around every page that needs a session. */
 @Component({
   selector: 'kv-shell',
-  imports: [LineageLine, ProblemBanner, Rail, RouterOutlet, TopBar],
+  imports: [LineageDrawer, LineageLine, ProblemBanner, Rail, RouterOutlet, TopBar],
   templateUrl: './shell.html',
   styleUrl: './shell.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -37,12 +39,17 @@ export class Shell {
   readonly #numbers = inject(NumberFormat);
   readonly #banner = inject(ProblemBannerState);
   protected readonly context = inject(PageContext);
+  protected readonly lineage = inject(LineageStore);
 
   private readonly main = viewChild.required<ElementRef<HTMLElement>>('main');
 
   protected readonly session = this.#sessions.session;
   protected readonly pages = computed(() =>
     pages.filter((page) => maySee(page, this.#sessions.roles())),
+  );
+
+  protected readonly mayOpenPanel = computed(() =>
+    this.pages().some((page) => page.path === 'panel'),
   );
 
   constructor() {
@@ -64,6 +71,7 @@ export class Shell {
       )
       .subscribe(() => {
         this.#banner.dismiss();
+        this.lineage.close();
         this.main().nativeElement.focus({ preventScroll: true });
       });
   }
@@ -71,6 +79,12 @@ export class Shell {
   /** A page that goes takes its context with it: the next one shows its own, or none. */
   protected leavePage(): void {
     this.context.clear();
+  }
+
+  /** Goes on from one figure to one that it was made of. */
+  protected openInput(figure: string): void {
+    const view = this.lineage.view();
+    if (view.kind === 'ready') this.lineage.open(view.source, figure);
   }
 
   protected async changePreferences(change: Partial<Preferences>): Promise<void> {

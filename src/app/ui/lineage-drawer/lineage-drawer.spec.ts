@@ -1,0 +1,72 @@
+import { type ComponentFixture, TestBed } from '@angular/core/testing';
+import { provideRouter } from '@angular/router';
+import type { LineageReply } from '@contract';
+import { LineageDrawer } from './lineage-drawer';
+import { standingLineage } from './testing/standing-lineage';
+
+describe('LineageDrawer', () => {
+  let opener: HTMLButtonElement;
+  let fixture: ComponentFixture<LineageDrawer>;
+
+  beforeEach(() => {
+    TestBed.configureTestingModule({ providers: [provideRouter([])] });
+    opener = document.createElement('button');
+    document.body.append(opener);
+    opener.focus();
+    fixture = TestBed.createComponent(LineageDrawer);
+  });
+
+  afterEach(() => {
+    opener.remove();
+  });
+
+  async function show(lineage: LineageReply | null): Promise<HTMLElement> {
+    fixture.componentRef.setInput('lineage', lineage);
+    await fixture.whenStable();
+    return fixture.nativeElement as HTMLElement;
+  }
+
+  it('shows the value at full precision in the panel’s unit, with its interval', async () => {
+    const host = await show(standingLineage);
+    expect(host.querySelector('.value')?.textContent).toBe('2,407.091234 EUR m');
+    expect(host.textContent).toContain('95 % interval');
+    expect(host.textContent).toContain('1,275.2 to 3,538.98');
+  });
+
+  it('leads from each row of the file to its place in the panel', async () => {
+    const host = await show(standingLineage);
+    const link = host.querySelector<HTMLAnchorElement>('tbody a');
+    expect(link?.textContent.trim()).toBe('17');
+    expect(link?.getAttribute('href')).toBe(`/panel/${standingLineage.panelVersion.id}?row=17`);
+  });
+
+  it('gives no link to a panel that the person may not open', async () => {
+    fixture.componentRef.setInput('mayOpenPanel', false);
+    const host = await show(standingLineage);
+    expect(host.querySelector('tbody a')).toBeNull();
+    expect(host.querySelector('tbody td')?.textContent.trim()).toBe('17');
+  });
+
+  it('takes the focus while it reads, and gives it back to the figure', async () => {
+    const host = await show(null);
+    expect(host.contains(document.activeElement)).toBeTrue();
+    fixture.destroy();
+    expect(document.activeElement).toBe(opener);
+  });
+
+  it('closes on Esc', async () => {
+    const host = await show(standingLineage);
+    let closed = 0;
+    fixture.componentInstance.closed.subscribe(() => (closed += 1));
+    host.dispatchEvent(new KeyboardEvent('keydown', { key: 'Escape' }));
+    expect(closed).toBe(1);
+  });
+
+  it('goes on to a figure that went in', async () => {
+    const host = await show(standingLineage);
+    const asked: string[] = [];
+    fixture.componentInstance.figureSelected.subscribe((figure) => asked.push(figure));
+    host.querySelector<HTMLButtonElement>('dl button')?.click();
+    expect(asked).toEqual(['intercept.0']);
+  });
+});

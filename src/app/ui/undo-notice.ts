@@ -1,0 +1,18 @@
+import { Injectable, Injector, inject } from '@angular/core';
+
+const shownMs = 10_000;
+
+/** Says what was done and offers to take it back, for ten seconds. Never for errors. */
+@Injectable({ providedIn: 'root' })
+export class UndoNotice {
+  readonly #injector = inject(Injector);
+
+  /** `undo` runs when the person selects Undo; its own failure is for the caller's store to show. */
+  async show(message: string, undo: () => void): Promise<void> {
+    const { MatSnackBar } = await import('@angular/material/snack-bar');
+    const shown = this.#injector
+      .get(MatSnackBar)
+      .open(message, 'Undo', { duration: shownMs, politeness: 'polite' });
+    shown.onAction().subscribe(undo);
+  }
+}
