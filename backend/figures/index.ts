@@ -1,1 +1,11 @@
+export * from './coverage-map-layout';
+export * from './difference-bars-layout';
+export * from './expected-path-layout';
+export type { EndLabel } from './expected-path-labels';
+export * from './figure-types';
+export * from './fit-comparison-layout';
+export * from './gap-path-layout';
+export { diamondPath, planMarkPath } from './mark-paths';
 export * from './number-text';
+export * from './slope-intervals-layout';
+export * from './standing-chart-layout';

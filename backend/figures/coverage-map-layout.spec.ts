@@ -1,0 +1,46 @@
+import { type CoverageCell, coverageMapLayout } from './coverage-map-layout';
+
+const variables = ['market value', 'capex', 'book equity'];
+const cells: CoverageCell[] = [
+  { company: 'Ardwyne', year: 2020, missing: [] },
+  { company: 'Ardwyne', year: 2022, missing: ['capex'] },
+  { company: 'Velmara', year: 2020, missing: variables },
+  { company: 'Velmara', year: 2021, missing: [], isFlagged: true },
+];
+const data = { cells, variables, variable: null, ownCompany: 'Velmara' };
+
+describe('coverage map layout', () => {
+  it('puts the own company first and counts a year without a row as missing', () => {
+    const { rows } = coverageMapLayout(data, 600);
+    expect(rows.map((row) => row.company)).toEqual(['Velmara', 'Ardwyne']);
+    expect(rows[0].cells.map((cell) => cell.state)).toEqual(['none', 'complete', 'none']);
+    expect(rows[1].cells.map((cell) => cell.state)).toEqual(['complete', 'none', 'some']);
+    expect(rows[0].cells[1].isFlagged).toBeTrue();
+  });
+
+  it('judges by one variable where one is chosen', () => {
+    const [, ardwyne] = coverageMapLayout({ ...data, variable: 'capex' }, 600).rows;
+    expect(ardwyne.cells.map((cell) => cell.state)).toEqual(['complete', 'none', 'none']);
+    const byEquity = coverageMapLayout({ ...data, variable: 'book equity' }, 600).rows[1];
+    expect(byEquity.cells.map((cell) => cell.state)).toEqual(['complete', 'none', 'complete']);
+  });
+
+  it('keeps cells usable for 120 companies and 30 years, wider than the container if need be', () => {
+    const many = Array.from({ length: 120 * 30 }, (_, k) => ({
+      company: `Company ${Math.floor(k / 30)}`,
+      year: 1996 + (k % 30),
+      missing: [],
+    }));
+    const layout = coverageMapLayout({ ...data, cells: many, ownCompany: null }, 360);
+    expect(layout.rows.length).toBe(120);
+    expect(layout.cellSize).toBeGreaterThanOrEqual(18);
+    expect(layout.width).toBeGreaterThan(360);
+    expect(layout.years.at(-1)?.label).toBe('2025');
+  });
+
+  it('stands without cells', () => {
+    const layout = coverageMapLayout({ ...data, cells: [] }, 600);
+    expect([layout.rows, layout.years]).toEqual([[], []]);
+    expect(Number.isFinite(layout.height)).toBeTrue();
+  });
+});

@@ -1,0 +1,123 @@
+import { group, max } from 'd3';
+import type { PlacedTick } from './figure-types';
+import { clippedWords, wordsWidth } from './text-width';
+
+/** A row of the panel, by what it lacks. A company and year without a row lack everything. */
+export interface CoverageCell {
+  readonly company: string;
+  readonly year: number;
+  /** Names of the variables without a value. */
+  readonly missing: readonly string[];
+  /** A value that someone should look at. */
+  readonly isFlagged?: boolean;
+}
+
+export interface CoverageData {
+  readonly cells: readonly CoverageCell[];
+  /** Every variable that is wanted. */
+  readonly variables: readonly string[];
+  /** Only this variable counts; null counts all. */
+  readonly variable: string | null;
+  readonly ownCompany: string | null;
+}
+
+export type CoverageState = 'complete' | 'some' | 'none';
+
+export interface PlacedCoverageCell {
+  readonly year: number;
+  readonly x: number;
+  readonly state: CoverageState;
+  readonly missing: readonly string[];
+  readonly isFlagged: boolean;
+}
+
+export interface CoverageRow {
+  readonly company: string;
+  readonly name: string;
+  readonly isOwn: boolean;
+  readonly y: number;
+  readonly cells: readonly PlacedCoverageCell[];
+}
+
+export interface CoverageMapLayout {
+  readonly width: number;
+  readonly height: number;
+  readonly cellSize: number;
+  readonly markSize: number;
+  readonly nameX: number;
+  readonly left: number;
+  readonly top: number;
+  readonly years: readonly PlacedTick[];
+  /** Own company first, the others in the order of the alphabet. */
+  readonly rows: readonly CoverageRow[];
+}
+
+const leastCell = 18;
+const mostCell = 32;
+const yearLabel = 40;
+const headHeight = 28;
+
+function stateOf({ missing }: Pick<CoverageCell, 'missing'>, wanted: number): CoverageState {
+  if (missing.length === 0) return 'complete';
+  return missing.length >= wanted ? 'none' : 'some';
+}
+
+/** One row a company, one column a year of the whole span, and whether the values are there. */
+export function coverageMapLayout(data: CoverageData, width: number): CoverageMapLayout {
+  const wanted =
+    data.variable === null
+      ? data.variables
+      : data.variables.filter((variable) => variable === data.variable);
+  const byCompany = group(data.cells, (cell) => cell.company);
+  const companies = [...byCompany.keys()].sort(
+    (a, b) =>
+      Number(b === data.ownCompany) - Number(a === data.ownCompany) || a.localeCompare(b, 'en'),
+  );
+  const seen = data.cells.map((cell) => cell.year);
+  const first = seen.reduce((least, year) => Math.min(least, year), Infinity);
+  const last = seen.reduce((most, year) => Math.max(most, year), -Infinity);
+  const years =
+    seen.length === 0 ? [] : Array.from({ length: last - first + 1 }, (_, k) => first + k);
+
+  const longest = max(companies, (company) => wordsWidth(company, 13)) ?? 0;
+  const nameWidth = Math.min(longest, Math.max(84, width * 0.24));
+  const left = 18 + nameWidth + 10;
+  const room = (width - left - 8) / Math.max(1, years.length);
+  const cellSize = Math.floor(Math.min(mostCell, Math.max(leastCell, room)));
+  const rowHeight = Math.min(cellSize, 24);
+  const step = Math.max(1, Math.ceil(yearLabel / cellSize));
+  const placeOf = (year: number) => left + (year - first + 0.5) * cellSize;
+
+  return {
+    width: Math.max(left + years.length * cellSize + 14, Math.min(width, left + 60)),
+    height: headHeight + companies.length * rowHeight + 6,
+    cellSize: rowHeight,
+    markSize: rowHeight - 8,
+    nameX: 18,
+    left,
+    top: headHeight,
+    years: years
+      .filter((year) => (last - year) % step === 0)
+      .map((year) => ({ value: year, position: placeOf(year), label: String(year) })),
+    rows: companies.map((company, place) => {
+      const ofYear = new Map(byCompany.get(company)?.map((cell) => [cell.year, cell]));
+      return {
+        company,
+        name: clippedWords(company, nameWidth + 2, 13),
+        isOwn: company === data.ownCompany,
+        y: headHeight + (place + 0.5) * rowHeight,
+        cells: years.map((year) => {
+          const cell = ofYear.get(year);
+          const missing = wanted.filter((name) => cell?.missing.includes(name) ?? true);
+          return {
+            year,
+            x: placeOf(year),
+            state: stateOf({ missing }, wanted.length),
+            missing,
+            isFlagged: cell?.isFlagged ?? false,
+          };
+        }),
+      };
+    }),
+  };
+}

@@ -1,0 +1,220 @@
+import { area, line, max } from 'd3';
+import { type EndLabel, endLabels, endLabelsWidth, seriesLabels } from './expected-path-labels';
+import type { FigureFormats, PlacedText, PlacedTick, Plot, Point, Stretch } from './figure-types';
+import { planMarkPath } from './mark-paths';
+import { figuresWidth } from './text-width';
+import { placedTicks, valueScale } from './value-axis';
+import { placedYears, yearScale } from './year-axis';
+
+/** An expected value of a plan year with its interval, and the band of the market value itself where it is asked for. */
+export interface ExpectedYear {
+  readonly year: number;
+  readonly estimate: number;
+  readonly low: number | null;
+  readonly high: number | null;
+  readonly bandLow?: number | null;
+  readonly bandHigh?: number | null;
+}
+
+export interface ExpectedPlan {
+  readonly name: string;
+  readonly years: readonly ExpectedYear[];
+}
+
+export interface ExpectedPathData {
+  /** What happened, with what the model expected of it. */
+  readonly ownYears: readonly {
+    readonly year: number;
+    readonly actual: number;
+    readonly fitted: number;
+  }[];
+  /** The last actual values held; empty draws none. */
+  readonly base: readonly { readonly year: number; readonly estimate: number }[];
+  /** The first one is in question: its interval is an area. The others carry theirs at the last year. */
+  readonly plans: readonly ExpectedPlan[];
+}
+
+export interface ExpectedPathPoint extends Point {
+  readonly kind: 'own' | 'base' | 'plan';
+  readonly year: number;
+  /** Which of the plans; 0 for the others. */
+  readonly plan: number;
+  readonly actual: string;
+  readonly expected: string;
+  readonly bounds: string;
+}
+
+export interface PlacedPlan {
+  readonly name: string;
+  readonly path: string;
+  readonly mark: string;
+  readonly points: readonly Point[];
+  /** The interval at the last year, top to bottom, and where it stands. */
+  readonly interval: (Stretch & { readonly x: number }) | null;
+}
+
+export interface ExpectedPathLayout {
+  readonly width: number;
+  readonly height: number;
+  readonly plot: Plot;
+  readonly yTicks: readonly PlacedTick[];
+  readonly years: readonly PlacedTick[];
+  readonly actualPath: string;
+  readonly actualPoints: readonly Point[];
+  readonly fittedPath: string;
+  readonly planX: number | null;
+  readonly planLabel: PlacedText | null;
+  readonly basePath: string;
+  /** Areas of the first plan: the band of the market value, within it the interval of the expected value. */
+  readonly bandArea: string;
+  readonly intervalArea: string;
+  readonly plans: readonly PlacedPlan[];
+  readonly seriesLabels: readonly (PlacedText & { readonly series: 'actual' | 'expected' })[];
+  readonly endLabels: readonly EndLabel[];
+  /** Every year of every line, own years first, in the order in which arrow keys visit them. */
+  readonly points: readonly ExpectedPathPoint[];
+}
+
+type Seen = number | null | undefined;
+
+function valuesOf({ ownYears, base, plans }: ExpectedPathData): Seen[] {
+  return [
+    ...ownYears.flatMap(({ actual, fitted }) => [actual, fitted]),
+    ...base.map(({ estimate }) => estimate),
+    ...plans.flatMap(({ years }) =>
+      years.flatMap((year) => [year.estimate, year.low, year.high, year.bandLow, year.bandHigh]),
+    ),
+  ];
+}
+
+/** Actual and expected value until now, then what each plan would make of it. */
+export function expectedPathLayout(
+  data: ExpectedPathData,
+  width: number,
+  formats: FigureFormats,
+): ExpectedPathLayout {
+  const { ownYears, base, plans } = data;
+  const height = width < 480 ? 260 : 320;
+  const [top, bottom] = [24, height - 28];
+  const y = valueScale(valuesOf(data), [bottom, top], 5);
+  const yTicks = placedTicks(y, 5, formats.tick);
+  const left = (max(yTicks, (tick) => figuresWidth(tick.label)) ?? 0) + 16;
+  const isNarrow = width < 560;
+  const labelsWidth = endLabelsWidth(data, isNarrow, formats);
+  const plot = { left, right: Math.max(left + 60, width - labelsWidth - 16), top, bottom };
+
+  const years = [
+    ...new Set([...ownYears, ...base, ...plans.flatMap((plan) => plan.years)].map((at) => at.year)),
+  ].sort((a, b) => a - b);
+  const x = yearScale(years, [plot.left, plot.right]);
+  const last = ownYears.at(-1);
+  const through = line<Point>()
+    .x((point) => point.x)
+    .y((point) => point.y);
+  const place = (year: number, value: number): Point => ({ x: x(year), y: y(value) });
+  const actual = ownYears.map((own) => place(own.year, own.actual));
+  const fitted = ownYears.map((own) => place(own.year, own.fitted));
+  const start = last === undefined ? [] : [place(last.year, last.fitted)];
+  const isPlanned = base.length > 0 || plans.length > 0;
+  const planX = last !== undefined && isPlanned ? x(last.year) : null;
+
+  return {
+    width,
+    height,
+    plot,
+    yTicks,
+    years: years.length === 0 ? [] : placedYears(years, x, last?.year),
+    actualPath: through(actual) ?? '',
+    actualPoints: actual,
+    fittedPath: through(fitted) ?? '',
+    planX,
+    planLabel: planX === null ? null : { text: 'plan', x: planX + 6, y: 14, anchor: 'start' },
+    basePath:
+      base.length === 0
+        ? ''
+        : (through([...start, ...base.map((at) => place(at.year, at.estimate))]) ?? ''),
+    bandArea: areaOf(plans.at(0), x, y, (at) => [at.bandLow, at.bandHigh]),
+    intervalArea: areaOf(plans.at(0), x, y, (at) => [at.low, at.high]),
+    plans: plans.map((plan, index) => {
+      const points = plan.years.map((at) => place(at.year, at.estimate));
+      return {
+        name: plan.name,
+        path: through([...start, ...points]) ?? '',
+        mark: planMarkPath(index, 3.5),
+        points,
+        interval: intervalAtEnd(plan, index, plans.length, x, y),
+      };
+    }),
+    seriesLabels: seriesLabels(actual, fitted, plot),
+    endLabels: endLabels(data, isNarrow, plot, y, formats),
+    points: pointsOf(data, place, formats),
+  };
+}
+
+function areaOf(
+  plan: ExpectedPlan | undefined,
+  x: (year: number) => number,
+  y: (value: number) => number,
+  bounds: (year: ExpectedYear) => readonly [Seen, Seen],
+): string {
+  const known = (plan?.years ?? []).flatMap((at) => {
+    const [low, high] = bounds(at);
+    return low == null || high == null ? [] : [{ x: x(at.year), low: y(low), high: y(high) }];
+  });
+  const between = area<(typeof known)[number]>()
+    .x((at) => at.x)
+    .y0((at) => at.low)
+    .y1((at) => at.high);
+  return between(known) ?? '';
+}
+
+/** Plans that end in the same year stand a little apart, or their intervals would hide each other. */
+function intervalAtEnd(
+  plan: ExpectedPlan,
+  index: number,
+  count: number,
+  x: (year: number) => number,
+  y: (value: number) => number,
+): PlacedPlan['interval'] {
+  const end = plan.years.at(-1);
+  if (end?.low == null || end.high == null) return null;
+  return { x: x(end.year) - 3 * (count > 1 ? index : 0), from: y(end.high), to: y(end.low) };
+}
+
+function pointsOf(
+  { ownYears, base, plans }: ExpectedPathData,
+  place: (year: number, value: number) => Point,
+  formats: FigureFormats,
+): ExpectedPathPoint[] {
+  return [
+    ...ownYears.map((own) => ({
+      kind: 'own' as const,
+      plan: 0,
+      year: own.year,
+      ...place(own.year, own.actual),
+      actual: formats.value(own.actual),
+      expected: formats.value(own.fitted),
+      bounds: '',
+    })),
+    ...base.map((at) => ({
+      kind: 'base' as const,
+      plan: 0,
+      year: at.year,
+      ...place(at.year, at.estimate),
+      actual: '',
+      expected: formats.value(at.estimate),
+      bounds: '',
+    })),
+    ...plans.flatMap((plan, index) =>
+      plan.years.map((at) => ({
+        kind: 'plan' as const,
+        plan: index,
+        year: at.year,
+        ...place(at.year, at.estimate),
+        actual: '',
+        expected: formats.value(at.estimate),
+        bounds: formats.bounds(at),
+      })),
+    ),
+  ];
+}

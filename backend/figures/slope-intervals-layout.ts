@@ -1,0 +1,72 @@
+import { max } from 'd3';
+import { type FigureFormats, type IntervalFigure, type Stretch, hasBounds } from './figure-types';
+import { clippedWords, figuresWidth, wordsWidth } from './text-width';
+import { valueScale } from './value-axis';
+
+export interface SlopeIntervalRow {
+  readonly name: string;
+  readonly label: string;
+  readonly value: string;
+  readonly bounds: string;
+  /** Right end of the value; the bounds follow it to the chart's right edge. */
+  readonly valueX: number;
+  readonly textY: number;
+  readonly figuresY: number;
+  readonly lineY: number;
+  readonly x: number;
+  readonly zeroX: number;
+  readonly interval: Stretch | null;
+}
+
+export interface SlopeIntervalsLayout {
+  readonly width: number;
+  readonly height: number;
+  /** Whether one scale serves all rows. Slopes of very unlike size each get their own. */
+  readonly isOneScale: boolean;
+  readonly rows: readonly SlopeIntervalRow[];
+}
+
+const nameSize = 13;
+const unlike = 25;
+
+/** Name and figures on a line of text, under it the interval, a zero tick and the estimate. */
+export function slopeIntervalsLayout(
+  slopes: readonly (IntervalFigure & { readonly name: string })[],
+  width: number,
+  formats: FigureFormats,
+): SlopeIntervalsLayout {
+  const reach = slopes.map((slope) =>
+    Math.max(Math.abs(slope.estimate), Math.abs(slope.low ?? 0), Math.abs(slope.high ?? 0)),
+  );
+  const isOneScale = (max(reach) ?? 0) <= unlike * Math.min(...reach.filter((size) => size > 0));
+  const range = [6, width - 6] as const;
+  const seen = slopes.map((slope) => [slope.estimate, slope.low, slope.high, 0]);
+  const common = valueScale(seen.flat(), range, 5);
+
+  let y = 0;
+  const rows = slopes.map((slope, place): SlopeIntervalRow => {
+    const scale = isOneScale ? common : valueScale(seen[place], range, 5);
+    const value = formats.value(slope.estimate);
+    const bounds = formats.bounds(slope);
+    const figures = figuresWidth(value) + 8 + figuresWidth(bounds);
+    const isFolded = wordsWidth(slope.name, nameSize) + 16 + figures > width;
+    const textY = y + 20;
+    const figuresY = isFolded ? textY + 18 : textY;
+    const lineY = figuresY + 18;
+    y = lineY + 14;
+    return {
+      name: slope.name,
+      label: clippedWords(slope.name, isFolded ? width : width - figures - 12, nameSize),
+      value,
+      bounds,
+      valueX: width - figuresWidth(bounds) - 8,
+      textY,
+      figuresY,
+      lineY,
+      x: scale(slope.estimate),
+      zeroX: scale(0),
+      interval: hasBounds(slope) ? { from: scale(slope.low), to: scale(slope.high) } : null,
+    };
+  });
+  return { width, height: y, isOneScale, rows };
+}

@@ -1,0 +1,107 @@
+import { differenceBarsLayout } from './difference-bars-layout';
+import type { FigureFormats } from './figure-types';
+import { fitComparisonLayout } from './fit-comparison-layout';
+import { slopeIntervalsLayout } from './slope-intervals-layout';
+
+const formats: FigureFormats = {
+  value: (value) => value.toFixed(2),
+  bounds: ({ low, high }) =>
+    low === null || high === null ? 'no interval' : `${low.toFixed(2)} to ${high.toFixed(2)}`,
+  tick: (value) => value.toFixed(0),
+};
+const none = { low: null, high: null };
+
+describe('slope intervals layout', () => {
+  const capex = { name: '1 more of capex', estimate: 1.84, low: 0.92, high: 2.76 };
+  const equity = { name: '1 more of book equity', estimate: -0.31, low: -0.66, high: 0.04 };
+
+  it('puts slopes of like size on one scale, with one zero', () => {
+    const { rows, isOneScale } = slopeIntervalsLayout([capex, equity], 330, formats);
+    expect(isOneScale).toBeTrue();
+    expect(rows[0].zeroX).toBe(rows[1].zeroX);
+    expect(rows[0].x).toBeGreaterThan(rows[0].zeroX);
+    expect(rows[1].x).toBeLessThan(rows[1].zeroX);
+  });
+
+  it('gives slopes of very unlike size a scale each', () => {
+    const staff = { name: '1 more of staff', estimate: 300, low: 100, high: 500 };
+    const { rows, isOneScale } = slopeIntervalsLayout([equity, staff], 330, formats);
+    expect(isOneScale).toBeFalse();
+    expect(rows[0].interval!.to - rows[0].interval!.from).toBeGreaterThan(60);
+  });
+
+  it('folds the figures under a name that leaves no room for them', () => {
+    const long = { ...capex, name: '1 more of property, plant and equipment' };
+    const { rows } = slopeIntervalsLayout([capex, long], 330, formats);
+    expect(rows[0].figuresY).toBe(rows[0].textY);
+    expect(rows[1].figuresY).toBeGreaterThan(rows[1].textY);
+    expect(rows[1].label).toBe(long.name);
+  });
+
+  it('stands without slopes, and with one that is zero and has no interval', () => {
+    expect(slopeIntervalsLayout([], 330, formats).rows).toEqual([]);
+    const [row] = slopeIntervalsLayout([{ name: 'a', estimate: 0, ...none }], 330, formats).rows;
+    expect(row.x).toBe(row.zeroX);
+    expect(row.interval).toBeNull();
+  });
+});
+
+describe('difference bars layout', () => {
+  const total = { estimate: 540, low: 100, high: 980 };
+  const terms = [
+    { name: 'Capex', estimate: 790, ...none },
+    { name: 'Book equity', estimate: -250, ...none },
+  ];
+
+  it('starts each bar where the sum stands, and the total at zero', () => {
+    const { bars, zeroX } = differenceBarsLayout({ terms, total }, 560, formats);
+    expect(bars[0].x).toBeCloseTo(zeroX, 6);
+    expect(bars[1].x + bars[1].width).toBeCloseTo(bars[0].sumX, 6);
+    expect(bars[2].x).toBeCloseTo(zeroX, 6);
+    expect(bars[2].sumX).toBeCloseTo(bars[1].sumX, 6);
+  });
+
+  it('writes the sign of what is added', () => {
+    const { bars } = differenceBarsLayout({ terms, total }, 560, formats);
+    expect(bars.map((bar) => bar.value)).toEqual(['+790.00', '-250.00', '+540.00']);
+  });
+
+  it('stands with nothing that differs', () => {
+    const { bars, zeroX } = differenceBarsLayout(
+      { terms: [], total: { estimate: 0, ...none } },
+      320,
+      formats,
+    );
+    expect(bars.map((bar) => [bar.x, bar.width])).toEqual([[zeroX, 0]]);
+  });
+});
+
+describe('fit comparison layout', () => {
+  const standing = { estimate: 2100, low: 700, high: 3400 };
+
+  it('puts the standings on one scale and keeps the reason of a missing one', () => {
+    const { rows } = fitComparisonLayout(
+      [
+        { name: '6f3a91', standing },
+        { name: '0b77de', standing: null, reason: 'too few rows' },
+      ],
+      760,
+      formats,
+    );
+    expect(rows[0].figures).toBe('2100.00 (700.00 to 3400.00)');
+    expect(rows[1].x).toBeNull();
+    expect(rows[1].figures).toBe('too few rows');
+  });
+
+  it('draws equal standings at equal places, in any width', () => {
+    for (const width of [320, 760]) {
+      const { rows } = fitComparisonLayout(
+        ['a', 'b'].map((name) => ({ name, standing })),
+        width,
+        formats,
+      );
+      expect(rows[0].x).toBe(rows[1].x);
+      expect(rows[0].interval!.to).toBeLessThanOrEqual(width);
+    }
+  });
+});
