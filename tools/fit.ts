@@ -7,7 +7,8 @@ import { problemOf } from './fit/fit-problem';
 import { runFit } from './fit/run-fit';
 
 try {
-  const reply = await runFit(process.argv.slice(2));
+  // npm runs scripts in the project's folder; the caller's own stands in INIT_CWD.
+  const reply = await runFit(process.argv.slice(2), process.env['INIT_CWD']);
   process.stdout.write(`${JSON.stringify(reply, null, 2)}\n`);
 } catch (error) {
   const problem = problemOf(error);

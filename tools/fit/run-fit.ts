@@ -1,5 +1,6 @@
 import { createHash } from 'node:crypto';
 import { createReadStream } from 'node:fs';
+import { resolve } from 'node:path';
 import { readTable } from '../../backend/compute/parsing/read-table';
 import type { Table } from '../../backend/compute/parsing/table';
 import { toPanelColumns } from '../../backend/compute/parsing/to-panel-columns';
@@ -12,12 +13,16 @@ import { fitReply } from './fit-reply';
  * Fits a panel file as the server would, without a database.
  *
  * @param args  the command line behind the command's name.
+ * @param folder  what a relative path of the panel starts from.
  * @returns the object to print.
  * @throws {FitProblem | StatsError | TableError} for bad input.
  */
-export async function runFit(args: readonly string[]): Promise<unknown> {
+export async function runFit(
+  args: readonly string[],
+  folder: string = process.cwd(),
+): Promise<unknown> {
   const request = readArguments(args);
-  const table = await readFile(request.panel);
+  const table = await readFile(resolve(folder, request.panel));
   const { data, problems, leftOut } = toPanelColumns(table, request);
   if (problems.length > 0) throw cellsProblem(problems);
   const result = fitPanel(data, request.specification, request.own, request.members, { sha256 });

@@ -1,0 +1,274 @@
+import { spawnSync } from 'node:child_process';
+import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { problemOf } from './fit-problem';
+import { runFit } from './run-fit';
+
+const golden = fileURLToPath(
+  new URL('../../backend/stats/golden/grunfeld11_value_on_inv_capital.csv', import.meta.url),
+);
+const command = fileURLToPath(new URL('../fit.ts', import.meta.url));
+const columns = ['--company', 'company', '--year', 'year', '--outcome', 'value'];
+const plain = ['--panel', golden, ...columns, '--regressors', 'inv,capital'];
+
+const rows = ['A', 'B', 'C'].flatMap((company, index) =>
+  Array.from({ length: 6 }, (_, year) =>
+    [
+      company,
+      2000 + year,
+      9 * index + ((year * 7 + index) % 5),
+      (year * 3 + index) % 4,
+      (year * year + index) % 6,
+    ].join(','),
+  ),
+);
+
+describe('the fit command', () => {
+  const folder = mkdtempSync(join(tmpdir(), 'fit-'));
+  afterAll(() => {
+    rmSync(folder, { recursive: true });
+  });
+
+  function panel(...lines: string[]): string[] {
+    const path = join(folder, 'panel.csv');
+    writeFileSync(path, ['company,year,value,inv,capital', ...lines].join('\n'));
+    return ['--panel', path, ...columns, '--regressors', 'inv,capital'];
+  }
+
+  async function problem(...args: string[]): Promise<Record<string, unknown>> {
+    try {
+      await runFit(args);
+    } catch (error) {
+      const found = problemOf(error);
+      if (found === undefined) throw error;
+      const json = found.toJson();
+      return {
+        ...json,
+        type: String(json['type']).replace('https://kinvale.example/problems/', ''),
+      };
+    }
+    throw new Error('nothing was refused');
+  }
+
+  it('prints the documented keys, figures at full precision and a reason beside every null', async () => {
+    const reply = (await runFit([...plain, '--own', 'C06'])) as Record<string, unknown>;
+    expect(Object.keys(reply)).toEqual([
+      'engine',
+      'hash',
+      'specification',
+      'sample',
+      'slopes',
+      'slopeCovariance',
+      'intercepts',
+      'yearEffects',
+      'yearEffectsReason',
+      'standing',
+      'goodness',
+      'pooled',
+      'poolability',
+      'warnings',
+    ]);
+    expect(reply['hash']).toMatch(/^[0-9a-f]{64}$/u);
+    expect(reply['specification']).toEqual({
+      effects: 'company',
+      form: 'levels',
+      lag: 0,
+      slopes: 'cr2',
+      confidence: 0.95,
+      seed: null,
+    });
+    expect(reply['standing']).toEqual(
+      jasmine.objectContaining({
+        company: 'C06',
+        estimate: 2407.024642135653,
+        rank: 1,
+        rankSet: [1, 1],
+        cosines: 3,
+      }),
+    );
+    const [inv] = reply['slopes'] as Record<string, unknown>[];
+    expect(Object.keys(inv)).toEqual([
+      'name',
+      'estimate',
+      'standardError',
+      'low',
+      'high',
+      'statistic',
+      'degreesOfFreedom',
+      'pValue',
+    ]);
+  });
+
+  it('says beside a null why it is one', async () => {
+    const reply = (await runFit([...panel(...rows, 'S,2000,1,2,3'), '--own', 'S'])) as Record<
+      string,
+      unknown
+    >;
+    expect(reply['standing']).toBeNull();
+    expect(reply['standingReason']).toContain('one complete row');
+    const single = (reply['intercepts'] as Record<string, unknown>[]).find(
+      ({ company }) => company === 'S',
+    );
+    expect(single?.['low']).toBeNull();
+    expect(single?.['lowReason']).toContain('One row');
+    expect(single?.['deviationReason']).toContain('One row');
+  });
+
+  it('lists dropped rows with their lines, also those without a year', async () => {
+    const reply = (await runFit(
+      panel(...rows, 'A,,1,2,3', 'A,2010,NA,2,-', ',2011,1,2,3'),
+    )) as Record<string, Record<string, unknown>>;
+    expect(reply['sample']['dropped']).toEqual([
+      { row: 20, column: 'year', reason: 'missing' },
+      { row: 21, column: 'value', reason: 'missing' },
+      { row: 21, column: 'capital', reason: 'missing' },
+      { row: 22, column: 'company', reason: 'missing' },
+    ]);
+  });
+
+  it('takes names with commas in quotes, and restricts to the members', async () => {
+    const quoted = rows.map((row) => row.replace(/^B/u, '"B, Inc."'));
+    const args = [...panel(...quoted), '--members', 'A,"B, Inc."', '--own', 'C'];
+    const reply = (await runFit(args)) as { intercepts: { company: string }[] };
+    expect(reply.intercepts.map(({ company }) => company)).toEqual(['A', 'B, Inc.', 'C']);
+    const two = (await runFit(args.slice(0, -2))) as { intercepts: { company: string }[] };
+    expect(two.intercepts.length).toBe(2);
+  });
+
+  it('refuses cells that cannot be used, with all their places', async () => {
+    const found = await problem(
+      ...panel(...rows, 'A,2000,1,2,3', 'B,20x7,1,2,3', 'C,2008,1,two,3', 'C,2009.5,1,2,3'),
+    );
+    expect(found['type']).toBe('year-not-whole');
+    expect(
+      (found['rows'] as Record<string, unknown>[]).map(
+        ({ row, column, found: text, problem: kind }) => [row, column, text, kind],
+      ),
+    ).toEqual([
+      [2, 'year', '2000', 'duplicate-rows'],
+      [20, 'year', '2000', 'duplicate-rows'],
+      [21, 'year', '20x7', 'year-not-whole'],
+      [22, 'inv', 'two', 'not-a-number'],
+      [23, 'year', '2009.5', 'year-not-whole'],
+    ]);
+  });
+
+  it('refuses what cannot be estimated, naming what is concerned', async () => {
+    const change = (pattern: (cells: string[]) => string[]): string[] =>
+      panel(...rows.map((row) => pattern(row.split(',')).join(',')));
+    const cases: [string, string[], Record<string, unknown>][] = [
+      ['missing-column', [...panel(...rows).slice(0, -1), 'inv,zzz'], { columns: ['zzz'] }],
+      ['ambiguous-column', [...panel(...rows).slice(0, -1), 'inv,value'], { columns: ['value'] }],
+      ['unknown-company', [...plain, '--own', 'Z'], { companies: ['Z'] }],
+      ['unknown-company', [...plain, '--members', 'C01,Y'], { companies: ['Y'] }],
+      ['too-few-companies', [...plain, '--members', 'C01'], { companies: ['C01'] }],
+    ];
+    for (const [type, args, concerned] of cases) {
+      expect(await problem(...args))
+        .withContext(args.join(' '))
+        .toEqual(jasmine.objectContaining({ type, ...concerned }));
+    }
+    expect(
+      await problem(
+        ...change(([company, year, value, inv]) => [
+          company,
+          year,
+          value,
+          inv,
+          company.charCodeAt(0).toString(),
+        ]),
+      ),
+    ).toEqual(
+      jasmine.objectContaining({ type: 'constant-within-companies', columns: ['capital'] }),
+    );
+    expect(
+      await problem(
+        ...change(([company, year, value, inv]) => [
+          company,
+          year,
+          value,
+          inv,
+          String(2 * Number(inv) + 1),
+        ]),
+      ),
+    ).toEqual(
+      jasmine.objectContaining({ type: 'collinear-regressors', columns: ['inv', 'capital'] }),
+    );
+    expect(
+      (
+        await problem(
+          ...change(([company, year, , inv, capital]) => [company, year, '5', inv, capital]),
+        )
+      )['type'],
+    ).toBe('outcome-constant');
+    expect((await problem(...panel(rows[0], rows[1], rows[6], rows[7])))['type']).toBe(
+      'no-residual-degrees-of-freedom',
+    );
+  });
+
+  it('says what this version of the engine does not offer', async () => {
+    for (const extra of [
+      ['--evidence'],
+      ['--lag', '1'],
+      ['--form', 'log'],
+      ['--effects', 'company,year'],
+      ['--slopes', 'wild'],
+      ['--slopes', 'hc3'],
+      ['--slopes', 'driscoll-kraay'],
+    ]) {
+      expect((await problem(...plain, ...extra))['type'])
+        .withContext(extra.join(' '))
+        .toBe('not-offered');
+    }
+  });
+
+  it('refuses a command line it cannot read, and files that are no tables', async () => {
+    for (const args of [
+      [],
+      plain.slice(2),
+      [...plain, '--slopes', 'best'],
+      [...plain, '--confidence', '95'],
+      [...plain, '--seed', 'x'],
+      [...plain, '--unknown'],
+      [...plain, 'stray'],
+      [...plain, '--members', ','],
+      [...plain, '--members', '"A'],
+    ]) {
+      expect((await problem(...args))['type'])
+        .withContext(args.join(' '))
+        .toBe('bad-arguments');
+    }
+    expect((await problem('--panel', join(folder, 'none.csv'), ...plain.slice(2)))['type']).toBe(
+      'unreadable-file',
+    );
+    expect((await problem('--panel', folder, ...plain.slice(2)))['type']).toBe('unreadable-file');
+    writeFileSync(join(folder, 'broken.csv'), 'a,b\n"1,2\n');
+    expect(await problem('--panel', join(folder, 'broken.csv'), ...plain.slice(2))).toEqual(
+      jasmine.objectContaining({ type: 'csv-invalid', row: 2 }),
+    );
+  });
+
+  it('exits 0 with JSON on standard output, and 2 with the problem on standard error alone', () => {
+    const run = (...args: string[]): { status: number | null; stdout: string; stderr: string } =>
+      spawnSync(process.execPath, ['--import', 'tsx', command, ...args], {
+        encoding: 'utf8',
+      });
+    const good = run(...plain, '--own', 'C06');
+    expect(good.status).toBe(0);
+    expect(good.stderr).toBe('');
+    expect((JSON.parse(good.stdout) as { sample: unknown }).sample).toEqual(
+      jasmine.objectContaining({ companies: 11, observations: 220 }),
+    );
+    const bad = run(...plain, '--own', 'Z');
+    expect(bad.status).toBe(2);
+    expect(bad.stdout).toBe('');
+    expect(Object.keys(JSON.parse(bad.stderr) as object)).toEqual([
+      'type',
+      'title',
+      'detail',
+      'companies',
+    ]);
+  });
+});
