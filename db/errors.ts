@@ -42,6 +42,7 @@ export function isDatabaseUnavailable(error: unknown): boolean {
   if (code === 'ECONNREFUSED' || code === 'ECONNRESET' || code === 'EPIPE') return true;
   return (
     error.message.startsWith('timeout exceeded when trying to connect') ||
+    error.message.startsWith('Client has encountered a connection error') ||
     error.message.startsWith('Connection terminated')
   );
 }

@@ -17,10 +17,12 @@ export interface JobQueueOptions {
 export class JobQueue {
   readonly #boss: PgBoss;
   readonly #workers = new Map<QueueName, string>();
+  /** Statements of the queue package and handlers of ours that have not ended. */
+  #busy = 0;
 
   constructor(private readonly options: JobQueueOptions) {
     this.#boss = new PgBoss({
-      db: { executeSql: options.executeSql },
+      db: { executeSql: (text, values) => this.#whileBusy(options.executeSql(text, values)) },
       schema: queueSchema,
       migrate: false,
       schedule: false,
@@ -35,6 +37,21 @@ export class JobQueue {
   /** Stops taking jobs and waits for those under way. */
   async stop(timeoutMs = 20_000): Promise<void> {
     await this.#boss.stop({ graceful: true, wait: true, timeout: timeoutMs, close: false });
+    // A job fetched in the moment of stopping still runs: the package does not wait for it.
+    const until = Date.now() + timeoutMs;
+    for (let quietLooks = 0; quietLooks < 3 && Date.now() < until;) {
+      await new Promise((resolve) => setTimeout(resolve, 20));
+      quietLooks = this.#busy === 0 ? quietLooks + 1 : 0;
+    }
+  }
+
+  async #whileBusy<T>(work: Promise<T>): Promise<T> {
+    this.#busy++;
+    try {
+      return await work;
+    } finally {
+      this.#busy--;
+    }
   }
 
   /** Queues a job within the caller's transaction: with it committed the job exists, without it there is none. */
@@ -64,7 +81,7 @@ export class JobQueue {
       kind,
       { pollingIntervalSeconds: this.options.pollSeconds ?? 0.5, batchSize: 1 },
       async (jobs) => {
-        for (const job of jobs) await handler(await this.#ticket(kind, job.data));
+        for (const job of jobs) await this.#whileBusy(this.#ticket(kind, job.data).then(handler));
       },
     );
     this.#workers.set(kind, worker);

@@ -14,6 +14,11 @@ export class TestClient {
     this.agent = request.agent(url);
   }
 
+  /** The token of the page, as its cookie last had it. */
+  get token(): string {
+    return this.#token;
+  }
+
   /** The reply of a GET. */
   get(path: string): Promise<Response> {
     return this.#keepToken(this.agent.get(path));

@@ -1,0 +1,83 @@
+import pg from 'pg';
+import { sql } from 'kysely';
+import { createDatabase, createPool } from './connect';
+import { isDatabaseUnavailable } from './errors';
+import { Repositories } from './repositories/repositories';
+import { createTestDatabase, type TestDatabase } from './testing/test-database';
+
+describe('a connection pool', () => {
+  let database: TestDatabase;
+  let pool: pg.Pool;
+  const lost: Error[] = [];
+
+  beforeEach(async () => {
+    database = await createTestDatabase();
+    pool = createPool({
+      connectionString: database.appUrl,
+      max: 1,
+      applicationName: 'spec',
+      statementTimeoutMs: 400,
+      connectionTimeoutMs: 300,
+      onConnectionError: (error) => lost.push(error),
+    });
+  });
+
+  afterEach(async () => {
+    await pool.end();
+    await database.drop();
+  });
+
+  async function terminateOthers(): Promise<void> {
+    const admin = new pg.Client({ connectionString: database.adminUrl });
+    await admin.connect();
+    await admin.query(`select pg_terminate_backend(pid) from pg_stat_activity
+      where datname = current_database() and application_name = 'spec'`);
+    await admin.end();
+  }
+
+  it('outlives the end of a connection within an open transaction: the next query works', async () => {
+    const db = createDatabase(pool);
+    const broken = db.transaction().execute(async (trx) => {
+      await sql`select 1`.execute(trx);
+      await terminateOthers();
+      await new Promise((resolve) => setTimeout(resolve, 100));
+      await sql`select 1`.execute(trx);
+    });
+    const error: unknown = await broken.catch((caught: unknown) => caught);
+    expect(isDatabaseUnavailable(error)).withContext(String(error)).toBeTrue();
+    expect(lost.length).toBeGreaterThan(0);
+    expect((await sql<{ one: number }>`select 1 as one`.execute(db)).rows).toEqual([{ one: 1 }]);
+  });
+
+  it('cuts a statement that runs too long, and a wait for a connection', async () => {
+    const slow = pool.query('select pg_sleep(5)');
+    await expectAsync(pool.query('select 1')).toBeRejectedWithError(/timeout exceeded/);
+    const error: unknown = await slow.catch((caught: unknown) => caught);
+    expect((error as pg.DatabaseError).code).toBe('57014');
+  });
+
+  it('forgets the workspace of a transaction with its end', async () => {
+    const repositories = new Repositories(createDatabase(pool));
+    const id = '11111111-2222-4333-8444-555555555555';
+    await repositories.inWorkspace(id, (tx) => tx.members.insertWorkspace('W'));
+    const within = await repositories.inWorkspace(id, (tx) => tx.members.workspace());
+    expect(within?.name).toBe('W');
+    expect((await pool.query('select * from workspace')).rows).toEqual([]);
+  });
+
+  it('refuses a role that could step over row level security, or that owns tables', async () => {
+    for (const [url, words] of [
+      [database.adminUrl, /superuser/],
+      [database.ownerUrl, /owns tables/],
+    ] as const) {
+      const other = new pg.Pool({ connectionString: url, max: 1 });
+      await expectAsync(
+        new Repositories(createDatabase(other)).assertUnprivilegedRole(),
+      ).toBeRejectedWithError(words);
+      await other.end();
+    }
+    await expectAsync(
+      new Repositories(createDatabase(pool)).assertUnprivilegedRole(),
+    ).toBeResolved();
+  });
+});
