@@ -20,6 +20,13 @@ const screens = [
   'members',
   'activity',
 ];
+/** The edge of a feature: its routes, and what only they use: replies, sign-in strategy, request handlers. */
+const edge = [
+  '-routes\\.ts$',
+  '-repl(y|ies)\\.ts$',
+  '-strategy\\.ts$',
+  '/(load|upload)-[a-z-]+\\.ts$',
+];
 const within = (folder) => `^${folder}/`;
 
 /**
@@ -72,7 +79,10 @@ const ofFolder = [
   ...features.map((name, place) =>
     only(`backend/${name}`, [
       within(`backend/(${name}|errors|compute|stats|figures|contract|http|${ground.join('|')})`),
-      ...features.slice(0, place).map((earlier) => `^backend/${earlier}/[a-z-]+-service\\.ts$`),
+      // A reply that shows a thing of an earlier feature shows it in that feature's words.
+      ...features
+        .slice(0, place)
+        .map((earlier) => `^backend/${earlier}/[a-z-]+-(service|reply|replies)\\.ts$`),
       within('db/repositories'),
       '^db/errors\\.ts$',
       ...packages('express', 'express-serve-static-core', 'express-rate-limit', 'express-session'),
@@ -137,7 +147,7 @@ const acrossFolders = [
     severity: 'error',
     from: {
       path: `^backend/(${features.join('|')})/`,
-      pathNot: [spec, '-routes\\.ts$', '-repl(y|ies)\\.ts$'],
+      pathNot: [spec, ...edge],
     },
     to: {
       path: ['^backend/(contract|http)/', ...packages('express', 'multer', 'express-rate-limit')],
@@ -155,7 +165,30 @@ const acrossFolders = [
     comment: 'Only db knows SQL. compose.ts hands the pool to the session store and the queue.',
     severity: 'error',
     from: { path: '.', pathNot: ['^(db|tools)/', '^backend/compose\\.ts$', '(^|/)node_modules/'] },
-    to: { path: packages('kysely', 'pg') },
+    to: { path: packages('kysely') },
+  },
+  {
+    name: 'pool-lives-in-db',
+    comment:
+      'Only db opens connections; a db spec may, to try one wall alone or hold the session store.',
+    severity: 'error',
+    from: {
+      path: '.',
+      pathNot: [
+        '^(db|tools)/',
+        '^backend/compose\\.ts$',
+        '(^|/)node_modules/',
+        '\\.db\\.spec\\.ts$',
+      ],
+    },
+    to: { path: packages('pg') },
+  },
+  {
+    name: 'replies-at-the-edge',
+    comment: 'Services return plain values; only the edge makes replies of them.',
+    severity: 'error',
+    from: { path: '-service\\.ts$' },
+    to: { path: '-repl(y|ies)\\.ts$' },
   },
   {
     name: 'nobody-imports-tools',

@@ -39,6 +39,13 @@ const forbidden = [
   ],
   ['the engine uses Node.js', 'backend/stats/a.ts', 'node:fs', 'backend/stats-imports'],
   ['a service knows Kysely', 'backend/fits/fit-service.ts', 'kysely', 'sql-lives-in-db'],
+  ['a service opens a connection', 'backend/fits/fit-service.ts', 'pg', 'pool-lives-in-db'],
+  [
+    'a service makes a reply',
+    'backend/fits/fit-service.ts',
+    'backend/fits/fit-reply.ts',
+    'replies-at-the-edge',
+  ],
   [
     'a spec of a service knows Kysely',
     'backend/fits/fit-service.spec.ts',
