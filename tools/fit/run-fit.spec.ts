@@ -246,7 +246,7 @@ describe('the fit command', () => {
     expect((await problem('--panel', folder, ...plain.slice(2)))['type']).toBe('unreadable-file');
     writeFileSync(join(folder, 'broken.csv'), 'a,b\n"1,2\n');
     expect(await problem('--panel', join(folder, 'broken.csv'), ...plain.slice(2))).toEqual(
-      jasmine.objectContaining({ type: 'csv-invalid', row: 2 }),
+      jasmine.objectContaining({ type: 'csv-invalid' }),
     );
   });
 

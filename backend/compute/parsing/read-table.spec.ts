@@ -87,12 +87,20 @@ describe('readTable', () => {
     }
   });
 
+  it('names the line of a quote in the wrong place', async () => {
+    expect((await refusal(bytes('a,b\n1,2\n1"2,3\n4,5\n'))).data).toEqual({ row: 3 });
+    expect((await refusal(bytes('a,b\n1,2\n"1"2,3\n4,5\n'))).data).toEqual({ row: 3 });
+    expect((await refusal(bytes('a,b\n"1,2\n3,4'))).message).toContain(
+      'never closed, up to line 3',
+    );
+  });
+
   it('refuses a NUL with the line it stands on', async () => {
     expect((await refusal(bytes('a,b\n1,2\n1,\0\n'))).data).toEqual({ row: 3 });
   });
 
   it('stops at its limits', async () => {
-    const limits = { rows: 2, columns: 2, fieldLength: 3 };
+    const limits = { rows: 2, columns: 2, cells: 8, fieldLength: 3 };
     const read = (text: string): Promise<unknown> => readTable(bytes(text), limits);
     await expectAsync(read('a,b\n1,2\n3,4\n')).toBeResolved();
     await expectAsync(read('a,b\n1,2\n3,4\n5,6\n')).toBeRejectedWithError(
@@ -103,6 +111,15 @@ describe('readTable', () => {
     await expectAsync(read('a,b\n1234,2\n')).toBeRejectedWithError(
       TableError,
       /at most 3 characters/,
+    );
+  });
+
+  it('counts cells, not only rows and columns', async () => {
+    const limits = { rows: 9, columns: 9, cells: 5, fieldLength: 9 };
+    await expectAsync(readTable(bytes('a,b\n1,2\n3,4\n'), limits)).toBeResolved();
+    await expectAsync(readTable(bytes('a,b\n1,2\n3,4\n5,6\n'), limits)).toBeRejectedWithError(
+      TableError,
+      /at most 2 rows of 2 columns/,
     );
   });
 

@@ -1,4 +1,6 @@
-import { CsvError, type Info, parse, type Parser } from 'csv-parse';
+import { CsvError, type Info, parse } from 'csv-parse';
+import { Readable } from 'node:stream';
+import { pipeline } from 'node:stream/promises';
 import { decodeText } from './decode-text';
 import { sniffDelimiter } from './sniff-delimiter';
 import { type Table, type TableLimits, tableLimits } from './table';
@@ -32,17 +34,18 @@ export async function readTable(
     max_record_size: longestRecord,
   });
   const builder = new TableBuilder(limits);
-  const feeding = feed(parser, head, isWhole ? null : text);
+  const chunks = Readable.from(isWhole ? [head] : beginningWith(head, text));
+  // A failure of the source destroys the parser, and so reaches the loop below.
+  const finished = pipeline(chunks, parser).catch(() => undefined);
   try {
     for await (const { record, info } of parser as AsyncIterable<ParsedRecord>) {
       builder.add(record, info.lines);
     }
   } catch (error) {
-    parser.destroy();
-    await feeding.catch(() => undefined);
-    throw asTableError(error, builder.lastLine);
+    throw asTableError(error);
+  } finally {
+    await finished;
   }
-  await feeding;
   return builder.finish(delimiter);
 }
 
@@ -61,45 +64,21 @@ async function readHead(text: AsyncGenerator<string>): Promise<{ head: string; i
   return { head, isWhole: false };
 }
 
-/** Writes the text into the parser at the parser's own pace; a failure of the source reaches its reader. */
-async function feed(
-  parser: Parser,
-  head: string,
-  rest: AsyncGenerator<string> | null,
-): Promise<void> {
-  try {
-    await write(parser, head);
-    if (rest !== null) {
-      for await (const chunk of rest) {
-        if (parser.destroyed) return;
-        await write(parser, chunk);
-      }
-    }
-    parser.end();
-  } catch (error) {
-    parser.destroy(error as Error);
-  }
+async function* beginningWith(head: string, rest: AsyncGenerator<string>): AsyncGenerator<string> {
+  yield head;
+  yield* rest;
 }
 
-async function write(parser: Parser, chunk: string): Promise<void> {
-  if (chunk === '' || parser.write(chunk)) return;
-  await new Promise<void>((resolve) => {
-    parser.once('drain', resolve);
-    parser.once('close', resolve);
-  });
-}
-
-/** @param lastLine  line of the last row that could be read. */
-function asTableError(error: unknown, lastLine: number): unknown {
+function asTableError(error: unknown): unknown {
   if (!(error instanceof CsvError)) return error;
-  const found = csvFaults.get(error.code) ?? 'text that is none';
-  const message = `expected a table; found ${found}, after line ${lastLine}`;
-  return new TableError('csv-invalid', message, { row: lastLine + 1 });
+  const fault = csvFaults.get(error.code) ?? 'text that is none at line';
+  const line = Number(error['lines']);
+  return new TableError('csv-invalid', `expected a table; found ${fault} ${line}`, { row: line });
 }
 
 const csvFaults = new Map<string, string>([
-  ['CSV_QUOTE_NOT_CLOSED', 'a quote that is never closed'],
-  ['CSV_MAX_RECORD_SIZE', 'a row that is too long, or a quote that is never closed'],
-  ['INVALID_OPENING_QUOTE', 'a quote in the middle of a field that does not begin with one'],
-  ['CSV_INVALID_CLOSING_QUOTE', 'text behind the closing quote of a field'],
+  ['CSV_QUOTE_NOT_CLOSED', 'a quote that opens a field and is never closed, up to line'],
+  ['CSV_MAX_RECORD_SIZE', 'a row too long to be one, or a quote never closed, before line'],
+  ['INVALID_OPENING_QUOTE', 'a quote in the middle of a field on line'],
+  ['CSV_INVALID_CLOSING_QUOTE', 'text behind the closing quote of a field on line'],
 ]);

@@ -9,16 +9,12 @@ export class TableBuilder {
   readonly #rows: string[][] = [];
   readonly #lines: number[] = [];
 
-  /** Line that the last row read ends on. */
-  lastLine = 0;
-
   constructor(limits: TableLimits) {
     this.#limits = limits;
   }
 
   /** @param lastLine  the line of the file that the record ends on. */
   add(record: string[], lastLine: number): void {
-    this.lastLine = lastLine;
     if (record.every((cell) => cell.trim() === '')) return;
     const row = lastLine - record.reduce((sum, cell) => sum + lineEndsIn(cell), 0);
     this.#refuseLongField(record, row);
@@ -31,10 +27,11 @@ export class TableBuilder {
       const message = `expected at most ${width} cells on line ${row}, as many as the header has; found ${record.length}`;
       throw new TableError('csv-invalid', message, { row, column: width + 1 });
     }
-    if (this.#rows.length === this.#limits.rows) {
+    const mostRows = Math.min(this.#limits.rows, Math.floor(this.#limits.cells / width));
+    if (this.#rows.length === mostRows) {
       throw new TableError(
         'table-too-large',
-        `expected at most ${this.#limits.rows} rows; line ${row} is one more`,
+        `expected at most ${mostRows} rows of ${width} columns; line ${row} is one more`,
         { row },
       );
     }

@@ -17,8 +17,15 @@ export type Delimiter = ',' | ';' | '\t';
 export interface TableLimits {
   readonly rows: number;
   readonly columns: number;
+  /** Rows times columns. */
+  readonly cells: number;
   /** Longest field, in characters. */
   readonly fieldLength: number;
 }
 
-export const tableLimits: TableLimits = { rows: 200_000, columns: 200, fieldLength: 65_536 };
+export const tableLimits: TableLimits = {
+  rows: 200_000,
+  columns: 200,
+  cells: 4_000_000,
+  fieldLength: 65_536,
+};
