@@ -1,5 +1,5 @@
 import type { WithinFit } from '../regression/within-fit';
-import { correlationProduct } from './correlation-product';
+import { correlationProduct, yearDecays } from './correlation-product';
 import { cosineWeights } from './cosine-weights';
 
 /**
@@ -78,10 +78,9 @@ interface CompanyRows {
   readonly company: number;
   readonly count: number;
   readonly position: Int32Array;
-  readonly year: Int32Array;
   readonly basis: readonly Float64Array[];
   readonly residuals: Float64Array;
-  readonly persistence: number;
+  readonly decays: Float64Array;
 }
 
 function rowsOf(fit: WithinFit, company: number, persistence: number): CompanyRows {
@@ -91,10 +90,9 @@ function rowsOf(fit: WithinFit, company: number, persistence: number): CompanyRo
     company,
     count: to - from,
     position: fit.sample.position.subarray(from, to),
-    year: fit.sample.year.subarray(from, to),
     basis: fit.basis.map((column) => column.subarray(from, to)),
     residuals: fit.residuals.subarray(from, to),
-    persistence,
+    decays: yearDecays(fit.sample.year.subarray(from, to), persistence),
   };
 }
 
@@ -163,7 +161,7 @@ function correlatedGram(rows: CompanyRows, columns: readonly Float64Array[]): Fl
   const gram = new Float64Array(size * size);
   const product = new Float64Array(rows.count);
   columns.forEach((column, k) => {
-    correlationProduct(column, rows.year, rows.persistence, product);
+    correlationProduct(column, rows.decays, product);
     for (let l = 0; l <= k; l += 1) {
       let sum = 0;
       for (let row = 0; row < rows.count; row += 1) sum += columns[l][row] * product[row];

@@ -1,0 +1,19 @@
+import { correlationProduct, yearDecays } from './correlation-product';
+
+describe('correlationProduct', () => {
+  it('equals the product with the matrix written out, also over gaps', () => {
+    const year = Int32Array.of(2001, 2002, 2005, 2006, 2010);
+    const values = Float64Array.of(1, -2, 3, 0.5, 7);
+    for (const persistence of [0, 0.4, 0.95]) {
+      const product = new Float64Array(5);
+      correlationProduct(values, yearDecays(year, persistence), product);
+      year.forEach((left, row) => {
+        const expected = year.reduce(
+          (sum, right, column) => sum + persistence ** Math.abs(left - right) * values[column],
+          0,
+        );
+        expect(product[row]).toBeCloseTo(expected, 12);
+      });
+    }
+  });
+});
