@@ -3,7 +3,7 @@
  * settings, the demo workspace filled on request. Prints one JSON line when it is ready; ends with its stdin.
  */
 import { randomBytes } from 'node:crypto';
-import { mkdtemp, rm, writeFile } from 'node:fs/promises';
+import { mkdir, mkdtemp, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
@@ -69,7 +69,8 @@ async function serve() {
     STRIPE_SECRET_KEY: 'sk_test_journeys_stub_only',
   };
   await migrate(root, env, signal);
-  const log = process.env.KINVALE_SERVER_LOG ?? join(folder, 'server.log');
+  await mkdir(join(root, '.kinvale'), { recursive: true, mode: 0o711 });
+  const log = join(root, '.kinvale', 'journeys-server.log'); // stays for whoever looks into a failed journey
   const server = await launchServer(root, { url, log, env, signal });
   undo.push(server.stop);
   const accounts = await seedDemo(root, { ...env, KINVALE_SEED_DEMO: '1' }, signal);

@@ -6,8 +6,16 @@ export function freePort() {
   return listenBriefly('127.0.0.1', 0);
 }
 
-/** @throws {PlainFailure} when the port cannot be had. */
-export async function requirePort(host, port) {
+/**
+ * @param wanted  the port as the environment gives it; 0 takes any free one.
+ * @returns the port's number.
+ * @throws {PlainFailure} when the port cannot be had.
+ */
+export async function requirePort(host, wanted) {
+  const port = Number(wanted);
+  if (!Number.isInteger(port) || port < 0 || port > 65_535) {
+    throw new PlainFailure(`PORT must be a number from 0 to 65535; found "${wanted}".`);
+  }
   try {
     return await listenBriefly(host, port);
   } catch (error) {

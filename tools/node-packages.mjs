@@ -7,12 +7,18 @@ import { run } from './child-process.mjs';
 import { PlainFailure } from './plain-failure.mjs';
 
 const neededMb = 1500;
+const oldestNode = 20;
 
 /**
  * Installs the npm packages of the lock file unless the stamp says they are there. The stamp lies in node_modules
  * and is written last, so an interrupted installation is repeated.
  */
 export async function ensureNodePackages(root, { say, signal }) {
+  if (Number(process.versions.node.split('.')[0]) < oldestNode) {
+    throw new PlainFailure(
+      `Kinvale needs Node.js ${oldestNode} or later; this is ${process.versions.node}.`,
+    );
+  }
   const stamp = join(root, 'node_modules', '.kinvale-stamp');
   const lock = await readFile(join(root, 'package-lock.json'));
   const wanted = createHash('sha256')

@@ -53,7 +53,7 @@ process.exit();
 async function startLocal() {
   await mkdir(home, { recursive: true, mode: 0o711 }); // others pass through to the cluster, and read nothing
   await holdFolder();
-  const port = await requirePort('127.0.0.1', Number(process.env.PORT ?? 4300));
+  const port = await requirePort('127.0.0.1', process.env.PORT || '4300');
   await ensureNodePackages(root, { say, signal });
   const secrets = await localSecrets(home);
   const databaseUrls = await database(secrets);
