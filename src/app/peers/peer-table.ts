@@ -1,0 +1,74 @@
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  inject,
+  input,
+  output,
+  viewChildren,
+} from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { NumberFormat } from '../ui/number-format';
+import type { PanelCompany } from './peer-draft';
+import { yearsText } from './peer-words';
+import { ReasonField } from './reason-field';
+
+/** A company on one side of the choice, with what is known about it. */
+export interface PeerRow {
+  readonly company: PanelCompany;
+  readonly reason: string;
+  /** What the standing would be without it, where a fit of this version knows. */
+  readonly standingWithout?: number | null;
+}
+
+/** The companies of one side, in or out: each with its reason and the facts to defend it by. */
+@Component({
+  selector: 'kv-peer-table',
+  imports: [MatButton, ReasonField],
+  templateUrl: './peer-table.html',
+  styleUrl: './peer-table.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class PeerTable {
+  readonly #numbers = inject(NumberFormat);
+
+  readonly rows = input.required<readonly PeerRow[]>();
+  readonly side = input.required<'in' | 'out'>();
+  readonly isReadOnly = input(false);
+  /** Shows what leaving each out would change. */
+  readonly hasStandings = input(false);
+  readonly reasons = input<readonly string[]>([]);
+  readonly moved = output<string>();
+  readonly written = output<{ readonly company: string; readonly reason: string }>();
+
+  private readonly fields = viewChildren(ReasonField);
+
+  protected readonly unit = this.#numbers.unitLabel;
+  protected readonly digits = computed(() => {
+    const companies = this.rows().map(({ company }) => company);
+    const of = (measure: 'marketValue' | 'capex' | 'bookEquity') =>
+      this.#numbers.columnDigits(companies.map((company) => company[measure]));
+    return {
+      marketValue: of('marketValue'),
+      capex: of('capex'),
+      bookEquity: of('bookEquity'),
+      standing: this.#numbers.columnDigits(
+        this.rows().map(({ standingWithout }) => standingWithout ?? null),
+      ),
+    };
+  });
+
+  protected money(value: number | null | undefined, digits: number): string {
+    return this.#numbers.figure(value, 'money', digits);
+  }
+
+  protected years({ firstYear, lastYear }: PanelCompany): string {
+    return yearsText(firstYear, lastYear);
+  }
+
+  /** The reason that counts on the side a company moves to is written next. */
+  focusReason(company: string): void {
+    const index = this.rows().findIndex((row) => row.company.name === company);
+    this.fields().at(index)?.focus();
+  }
+}

@@ -1,0 +1,213 @@
+import { Injectable, computed, inject, signal } from '@angular/core';
+import type {
+  PanelVersionSummary,
+  PeerGroupReply,
+  PeerGroupSummary,
+  SavePeerGroup,
+} from '@contract';
+import { firstValueFrom } from 'rxjs';
+import { type ApiProblem, toApiProblem } from '../api/api-problem';
+import { DeskApi } from '../api/desk-api';
+import { FitsApi } from '../api/fits-api';
+import { PanelsApi } from '../api/panels-api';
+import { PeersApi } from '../api/peers-api';
+import {
+  type DraftChoice,
+  type PanelCompany,
+  type PeerDraft,
+  changeChoice,
+  isChanged,
+  isSameDraft,
+  lostCompanies,
+  moveDraft,
+  reasonsWritten,
+  startDraft,
+  toSavePeerGroup,
+} from './peer-draft';
+
+/** What the page stands on, as the server has it. */
+export interface PeersGround {
+  /** Newest first. */
+  readonly panelVersions: readonly PanelVersionSummary[];
+  /** Newest first. */
+  readonly versions: readonly PeerGroupSummary[];
+  /** The version shown; null before the first one is saved. */
+  readonly saved: PeerGroupReply | null;
+  /** Companies of the draft's panel version. */
+  readonly companies: readonly PanelCompany[];
+  /** The own company's standing without each peer, by the newest fit of the version shown; null where there is none. */
+  readonly without: ReadonlyMap<string, number | null> | null;
+}
+
+export type PeersView =
+  | { readonly kind: 'idle' }
+  | { readonly kind: 'loading' }
+  | { readonly kind: 'no-panel' }
+  | { readonly kind: 'ready'; readonly ground: PeersGround; readonly draft: PeerDraft }
+  | { readonly kind: 'failed'; readonly problem: ApiProblem };
+
+/** Somebody saved a version meanwhile. */
+export interface StaleVersion {
+  readonly latestId: string;
+  readonly detail: string;
+}
+
+/** The choice of peers: what is saved, what is on the screen, and the way from one to the other. */
+@Injectable()
+export class PeersStore {
+  readonly #peers = inject(PeersApi);
+  readonly #panels = inject(PanelsApi);
+  readonly #desk = inject(DeskApi);
+  readonly #fits = inject(FitsApi);
+  readonly #view = signal<PeersView>({ kind: 'idle' });
+  readonly #isSaving = signal(false);
+  readonly #problem = signal<ApiProblem | null>(null);
+  readonly #stale = signal<StaleVersion | null>(null);
+  #parentId: string | null = null;
+
+  readonly view = this.#view.asReadonly();
+  readonly isSaving = this.#isSaving.asReadonly();
+  /** Why the last save did not work. */
+  readonly problem = this.#problem.asReadonly();
+  readonly stale = this.#stale.asReadonly();
+
+  readonly isChanged = computed(() => {
+    const view = this.#view();
+    return view.kind === 'ready' && isChanged(view.draft, view.ground.saved);
+  });
+  /** Whether a person changed anything here; choices that only wait on a newer panel version are no loss. */
+  readonly hasInput = computed(() => {
+    const view = this.#view();
+    if (view.kind !== 'ready') return false;
+    const { companies, saved } = view.ground;
+    const untouched = startDraft(view.draft.panelVersionId, companies, saved);
+    return !isSameDraft(view.draft, untouched);
+  });
+  readonly reasons = computed(() => {
+    const view = this.#view();
+    return view.kind === 'ready' ? reasonsWritten(view.draft) : [];
+  });
+  readonly lost = computed(() => {
+    const view = this.#view();
+    return view.kind === 'ready' ? lostCompanies(view.ground.saved, view.ground.companies) : [];
+  });
+
+  /**
+   * Loads the version with this id, or the newest. `isOnNewestPanel` puts its choices on the newest panel version,
+   * ready to be saved; otherwise they stand on the version's own.
+   */
+  async load(peerGroupId: string | undefined, isOnNewestPanel: boolean): Promise<void> {
+    this.#view.set({ kind: 'loading' });
+    this.#problem.set(null);
+    this.#stale.set(null);
+    try {
+      this.#view.set(await this.#read(peerGroupId, isOnNewestPanel));
+    } catch (error) {
+      this.#view.set({ kind: 'failed', problem: toApiProblem(error) });
+    }
+  }
+
+  async choosePanelVersion(panelVersionId: string): Promise<void> {
+    const view = this.#view();
+    if (view.kind !== 'ready') return;
+    try {
+      const { companies } = await firstValueFrom(this.#panels.companies(panelVersionId));
+      const draft = moveDraft(view.draft, panelVersionId, companies);
+      this.#view.set({ kind: 'ready', ground: { ...view.ground, companies }, draft });
+    } catch (error) {
+      this.#problem.set(toApiProblem(error));
+    }
+  }
+
+  chooseOwnCompany(ownCompany: string): void {
+    this.#change((draft) => ({ ...draft, ownCompany }));
+  }
+
+  /** Moves a company in or out, or writes its reason. */
+  change(company: string, change: Partial<DraftChoice>): void {
+    this.#change((draft) => changeChoice(draft, company, change));
+  }
+
+  /** Puts the choices back to the version shown. */
+  discardChanges(): void {
+    const view = this.#view();
+    if (view.kind !== 'ready') return;
+    const { companies, saved } = view.ground;
+    const draft = startDraft(view.draft.panelVersionId, companies, saved);
+    this.#view.set({ ...view, draft });
+  }
+
+  /** Saves the choices as the next version. @returns its id, or null when it could not be saved. */
+  async save(note: string): Promise<string | null> {
+    const view = this.#view();
+    if (view.kind !== 'ready') return null;
+    this.#isSaving.set(true);
+    this.#problem.set(null);
+    try {
+      return await this.#save(view.ground, toSavePeerGroup(view.draft, note, this.#parentId));
+    } catch (error) {
+      this.#report(toApiProblem(error));
+      return null;
+    } finally {
+      this.#isSaving.set(false);
+    }
+  }
+
+  /** Saves the choices on top of the version that somebody else saved meanwhile. */
+  async saveOnTop(note: string): Promise<string | null> {
+    const stale = this.#stale();
+    if (stale === null) return null;
+    this.#parentId = stale.latestId;
+    this.#stale.set(null);
+    return this.save(note);
+  }
+
+  async #save(ground: PeersGround, body: SavePeerGroup): Promise<string> {
+    const saved = await firstValueFrom(this.#peers.save(body));
+    const { versions } = await firstValueFrom(this.#peers.list());
+    this.#parentId = saved.id;
+    this.#stale.set(null);
+    const draft = startDraft(saved.panelVersionId, ground.companies, saved);
+    this.#view.set({ kind: 'ready', ground: { ...ground, saved, versions, without: null }, draft });
+    return saved.id;
+  }
+
+  #report(problem: ApiProblem): void {
+    const latestId = problem.problem['latestId'];
+    if (problem.slug === 'stale-version' && typeof latestId === 'string')
+      this.#stale.set({ latestId, detail: problem.message });
+    else this.#problem.set(problem);
+  }
+
+  async #read(peerGroupId: string | undefined, isOnNewestPanel: boolean): Promise<PeersView> {
+    const [{ versions: panelVersions }, { versions }] = await Promise.all([
+      firstValueFrom(this.#panels.versions()),
+      firstValueFrom(this.#peers.list()),
+    ]);
+    if (panelVersions.length === 0) return { kind: 'no-panel' };
+    const shownId = peerGroupId ?? versions[0]?.id;
+    const saved = shownId === undefined ? null : await firstValueFrom(this.#peers.read(shownId));
+    // What is saved next comes after the newest version known here, whichever version is shown.
+    this.#parentId = versions[0]?.id ?? null;
+    const panelVersionId =
+      isOnNewestPanel || saved === null ? panelVersions[0].id : saved.panelVersionId;
+    const { companies } = await firstValueFrom(this.#panels.companies(panelVersionId));
+    const draft = startDraft(panelVersionId, companies, saved);
+    const without = saved === null ? null : await this.#readWithout(saved.id);
+    return { kind: 'ready', ground: { panelVersions, versions, saved, companies, without }, draft };
+  }
+
+  async #readWithout(peerGroupId: string): Promise<PeersGround['without']> {
+    const { fit } = await firstValueFrom(this.#desk.read());
+    if (fit?.peerGroupId !== peerGroupId) return null;
+    const { result } = await firstValueFrom(this.#fits.read(fit.id));
+    if (result?.standing == null) return null;
+    return new Map(result.withoutCompany.map(({ company, standing }) => [company, standing]));
+  }
+
+  #change(change: (draft: PeerDraft) => PeerDraft): void {
+    this.#view.update((view) =>
+      view.kind === 'ready' ? { ...view, draft: change(view.draft) } : view,
+    );
+  }
+}
