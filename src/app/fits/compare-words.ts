@@ -1,0 +1,72 @@
+import type { FitReply, FitResult } from '@contract';
+import { covarianceName } from './covariance-words';
+import { confidenceText, listed, regressorWord, shortHash } from './fit-words';
+
+/** A fit that is done, as the comparison takes it. */
+export interface FinishedFit {
+  readonly reply: FitReply;
+  readonly result: FitResult;
+}
+
+/** One line of the comparison: what each fit says, and whether they say the same. */
+export interface ComparedLine {
+  readonly label: string;
+  readonly a: string;
+  readonly b: string;
+  readonly isSame: boolean;
+}
+
+/** What the two fits were made from, line by line. */
+export function specificationLines(a: FinishedFit, b: FinishedFit): readonly ComparedLine[] {
+  const line = (label: string, of: (fit: FinishedFit) => string): ComparedLine => {
+    const [first, second] = [of(a), of(b)];
+    return { label, a: first, b: second, isSame: first === second };
+  };
+  return [
+    line('Own company', ({ reply }) => reply.fit.ownCompany),
+    line(
+      'Panel',
+      ({ reply: { panelVersion } }) => `${panelVersion.panelName} v${panelVersion.number}`,
+    ),
+    line('Peer group', ({ reply: { peerGroup } }) => `v${peerGroup.number}`),
+    line('Regressors', ({ result }) =>
+      listed(result.slopes.map(({ name }, index) => regressorWord(name, index))),
+    ),
+    line('Slope intervals', ({ reply }) => covarianceName(reply.fit.slopes)),
+    line('Confidence', ({ reply }) => confidenceText(reply.fit.confidence)),
+    line('Engine', ({ result }) => result.engine),
+  ];
+}
+
+export interface MemberDifference {
+  /** Members of the first fit alone. */
+  readonly onlyA: readonly string[];
+  /** Members of the second fit alone. */
+  readonly onlyB: readonly string[];
+  readonly both: number;
+}
+
+export function memberDifference(a: FitResult, b: FitResult): MemberDifference {
+  const [first, second] = [new Set(a.members), new Set(b.members)];
+  return {
+    onlyA: a.members.filter((company) => !second.has(company)),
+    onlyB: b.members.filter((company) => !first.has(company)),
+    both: a.members.filter((company) => second.has(company)).length,
+  };
+}
+
+/** The comparison's finding: in what the two differ. */
+export function comparisonFinding(a: FinishedFit, b: FinishedFit): string {
+  const different = specificationLines(a, b)
+    .filter(({ isSame }) => !isSame)
+    .map(({ label }) => label.toLowerCase());
+  const names = `Fits ${shortHash(a.reply.fit.hash)} and ${shortHash(b.reply.fit.hash)}`;
+  return different.length === 0
+    ? `${names} were made from the same`
+    : `${names} differ in ${listed(different)}`;
+}
+
+/** Names of slopes of either fit, each once, those of the first first. */
+export function slopeNames(a: FitResult, b: FitResult): readonly string[] {
+  return [...new Set([...a.slopes, ...b.slopes].map(({ name }) => name))];
+}

@@ -1,0 +1,47 @@
+import type { FitResult } from '@contract';
+import type { NumberFormat } from '../ui/number-format';
+import type { Remark } from '../ui/remark-list';
+
+const level = 0.05;
+
+/** Whether one line could serve all companies, and what each way explains. */
+export function poolabilityText(
+  { poolability, pooled, goodness }: Pick<FitResult, 'poolability' | 'pooled' | 'goodness'>,
+  numbers: NumberFormat,
+): string {
+  const share = (value: number): string => numbers.headline(value, 'percent');
+  const shares = `One pooled line explains ${share(pooled.rSquared)}, company levels with common slopes ${share(goodness.rSquared)}.`;
+  const { pValue, pValueReason } = poolability;
+  if (pValue === null)
+    return `Not decided: ${pValueReason ?? 'the test has no p-value here'}. ${shares}`;
+  return pValue < level
+    ? `No. Company levels differ, so each company keeps its own. ${shares}`
+    : `The data do not rule it out: company levels are not shown to differ. ${shares}`;
+}
+
+/** Title of the gap path: its course in words. */
+export function driftFinding(
+  { drift }: Pick<FitResult, 'drift'>,
+  ownCompany: string,
+  numbers: NumberFormat,
+): string {
+  if (drift?.low == null || drift.high === null)
+    return `The gap of ${ownCompany} to its peers, year by year`;
+  if (drift.low > 0)
+    return `${ownCompany} has gained on its peers by ${numbers.headline(drift.estimate)} a year`;
+  if (drift.high < 0)
+    return `${ownCompany} has lost ground to its peers by ${numbers.headline(-drift.estimate)} a year`;
+  return 'No clear drift in the gap to peers';
+}
+
+/** The engine's warnings in its own words; and in order to be said, that there is none. */
+export function warningRemarks({ warnings }: Pick<FitResult, 'warnings'>): readonly Remark[] {
+  if (warnings.length === 0)
+    return [
+      {
+        kind: 'fine',
+        text: 'Nothing found that weakens these figures: enough companies and years, and no single company decides the result.',
+      },
+    ];
+  return warnings.map(({ detail }) => ({ kind: 'caution', text: detail }));
+}

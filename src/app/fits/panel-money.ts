@@ -1,0 +1,29 @@
+import { type MoneyUnit, unitRatio } from '@figures';
+import type { NumberFormat } from '../ui/number-format';
+
+interface Bounded {
+  readonly estimate: number;
+  readonly low: number | null;
+  readonly high: number | null;
+}
+
+/** The estimate of one panel in the unit of another, so that both can be written by the same unit switch. */
+export function inUnit<T extends Bounded>(value: T, from: MoneyUnit, to: MoneyUnit): T {
+  const ratio = unitRatio(from, to);
+  return {
+    ...value,
+    estimate: value.estimate * ratio,
+    low: value.low === null ? null : value.low * ratio,
+    high: value.high === null ? null : value.high * ratio,
+  };
+}
+
+/** An estimate of any panel as a table writes it; another currency than the page's is named. */
+export function moneyOf(
+  value: Bounded,
+  panel: { readonly currency: string; readonly unit: MoneyUnit },
+  numbers: NumberFormat,
+): string {
+  const text = numbers.interval(inUnit(value, panel.unit, numbers.panelUnit()));
+  return panel.currency === numbers.currency() ? text : `${panel.currency} ${text}`;
+}

@@ -1,0 +1,63 @@
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { RouterLink } from '@angular/router';
+import type { FitResult } from '@contract';
+import { counted, yearsText } from './fit-words';
+
+const mostListed = 50;
+
+/** Which rows of the panel went in, and which dropped out and why. */
+@Component({
+  selector: 'kv-sample-notes',
+  imports: [RouterLink],
+  template: `
+    <p>{{ used() }}</p>
+    @if (dropped().length > 0) {
+      <p>{{ droppedWords() }}</p>
+      <ul>
+        @for (row of listed(); track $index) {
+          <li>
+            <a [routerLink]="['/panel', panelVersionId()]" [queryParams]="{ row: row.row }"
+              >Row {{ row.row }}</a
+            >: {{ row.column }} missing
+          </li>
+        }
+      </ul>
+      @if (dropped().length > listed().length) {
+        <p class="kv-caption">
+          {{ dropped().length - listed().length }} more are flagged on the panel.
+        </p>
+      }
+    } @else {
+      <p>No row dropped out.</p>
+    }
+  `,
+  styles: `
+    :host {
+      display: grid;
+      gap: 8px;
+    }
+    ul {
+      columns: 260px;
+      padding-inline-start: 16px;
+      font-size: 13px;
+      line-height: 24px;
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class SampleNotes {
+  readonly sample = input.required<FitResult['sample']>();
+  readonly panelVersionId = input.required<string>();
+
+  protected readonly dropped = computed(() => this.sample().dropped);
+  protected readonly listed = computed(() => this.dropped().slice(0, mostListed));
+  protected readonly used = computed(() => {
+    const { observations, companies, firstYear, lastYear, balanced } = this.sample();
+    const evenness = balanced ? 'each company has every year' : 'not every company has every year';
+    return `${counted(observations, 'row')} of ${counted(companies, 'company', 'companies')}, ${yearsText(firstYear, lastYear)}; ${evenness}.`;
+  });
+  protected readonly droppedWords = computed(() => {
+    const rows = new Set(this.dropped().map(({ row }) => row)).size;
+    return `${counted(rows, 'row')} of these companies dropped out for a missing cell:`;
+  });
+}
