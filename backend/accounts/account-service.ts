@@ -85,7 +85,8 @@ export class AccountService {
     address: string,
   ): Promise<{ readonly personId: string; readonly workspaceId: string }> {
     const { repositories, throttle } = this.uses;
-    const keys = [`account:${email}`, `address:${address}`];
+    const account = { kind: 'account', value: email } as const;
+    const keys = [account, { kind: 'address', value: address } as const];
     await throttle.assertMayTry(keys);
     const person = await repositories.people.findByEmail(email);
     if (!(await this.uses.passwords.matches(person?.passwordHash, password)) || !person) {
@@ -96,7 +97,7 @@ export class AccountService {
         'No account has this e-mail address and password together.',
       );
     }
-    await throttle.succeeded(`account:${email}`);
+    await throttle.succeeded(account);
     const membership = (await repositories.membershipsOf(person.id))[0];
     if (membership === undefined)
       throw new AppError(

@@ -1,13 +1,20 @@
 import type { Repositories } from '../../db/repositories/repositories';
 import { TooManyRequests } from '../errors/app-error';
 
-const freeFailures = 5;
+/** A whole office may stand behind one address: it is slowed down later than an account. */
+const freeFailures = { account: 5, address: 50 } as const;
 const longestDelayMs = 60_000;
 const forgetAfterMs = 15 * 60_000;
 
+/** What failures are counted by: an account, or the address that asks. */
+export interface ThrottleKey {
+  readonly kind: keyof typeof freeFailures;
+  readonly value: string;
+}
+
 /**
- * Slows guessing down without locking anybody out: after five failures each further one doubles the wait, up to a
- * minute, for the account and for the address apart.
+ * Slows guessing down without locking anybody out: after the free failures each further one doubles the wait,
+ * up to a minute, for the account and for the address apart.
  */
 export class SignInThrottle {
   constructor(
@@ -16,11 +23,14 @@ export class SignInThrottle {
   ) {}
 
   /** @throws {TooManyRequests} while the wait lasts. */
-  async assertMayTry(keys: readonly string[]): Promise<void> {
+  async assertMayTry(keys: readonly ThrottleKey[]): Promise<void> {
     for (const key of keys) {
-      const count = await this.repositories.signInThrottle.failures(key);
-      if (count === undefined || count.failures < freeFailures) continue;
-      const delayMs = Math.min(longestDelayMs, 1000 * 2 ** (count.failures - freeFailures));
+      const count = await this.repositories.signInThrottle.failures(stored(key));
+      if (count === undefined || count.failures < freeFailures[key.kind]) continue;
+      const delayMs = Math.min(
+        longestDelayMs,
+        1000 * 2 ** (count.failures - freeFailures[key.kind]),
+      );
       const leftMs = count.lastFailureAt.getTime() + delayMs - this.now().getTime();
       if (leftMs > 0 && leftMs <= longestDelayMs) {
         const seconds = Math.ceil(leftMs / 1000);
@@ -32,12 +42,16 @@ export class SignInThrottle {
     }
   }
 
-  async failed(keys: readonly string[]): Promise<void> {
+  async failed(keys: readonly ThrottleKey[]): Promise<void> {
     for (const key of keys)
-      await this.repositories.signInThrottle.addFailure(key, this.now(), forgetAfterMs);
+      await this.repositories.signInThrottle.addFailure(stored(key), this.now(), forgetAfterMs);
   }
 
-  async succeeded(key: string): Promise<void> {
-    await this.repositories.signInThrottle.clear(key);
+  async succeeded(key: ThrottleKey): Promise<void> {
+    await this.repositories.signInThrottle.clear(stored(key));
   }
+}
+
+function stored({ kind, value }: ThrottleKey): string {
+  return `${kind}:${value}`;
 }
