@@ -19,7 +19,7 @@ describe('PersonMenu', () => {
     } satisfies Preferences);
     document.body.append((host = fixture.nativeElement as HTMLElement));
     await fixture.whenStable();
-    opener = host.querySelector('button') as HTMLButtonElement;
+    opener = host.querySelector<HTMLButtonElement>('.opener')!;
   });
 
   async function open(): Promise<void> {

@@ -14,8 +14,8 @@ const afterTheRule: readonly string[] = ['seats', 'members', 'activity'];
   selector: 'kv-rail',
   imports: [Logo, RouterLink, RouterLinkActive],
   template: `
-    <a class="home" routerLink="/" aria-label="Kinvale, first page"><kv-logo /></a>
     <nav aria-label="Pages">
+      <a class="home" routerLink="/" aria-label="Kinvale, first page"><kv-logo /></a>
       <ul>
         @for (page of ordered(); track page.path) {
           <li [class.first-after-rule]="page.isFirstAfterRule">

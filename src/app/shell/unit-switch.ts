@@ -66,6 +66,11 @@ const units: readonly MoneyUnit[] = ['units', 'thousands', 'millions', 'billions
       font: inherit;
       font-size: 12px;
     }
+    @media (forced-colors: active) {
+      label.chosen {
+        text-decoration: underline 2px;
+      }
+    }
     @media (width < 960px) {
       fieldset {
         display: none;

@@ -18,13 +18,17 @@ export class Confirm {
 
   /** True when the person agrees; false for Esc, a click beside, or `Keep it as it is`. The dialog loads on first use. */
   async ask(question: ConfirmQuestion): Promise<boolean> {
-    const [{ MatDialog }, { ConfirmDialog }] = await Promise.all([
+    const [{ MatDialog, MatDialogConfig }, { ConfirmDialog }] = await Promise.all([
       import('@angular/material/dialog'),
       import('./confirm-dialog'),
     ]);
+    const config = Object.assign(new MatDialogConfig<ConfirmQuestion>(), {
+      data: question,
+      maxWidth: 480,
+    });
     const opened = this.#injector
       .get(MatDialog)
-      .open<unknown, ConfirmQuestion, boolean>(ConfirmDialog, { data: question, maxWidth: 480 });
+      .open<unknown, ConfirmQuestion, boolean>(ConfirmDialog, config);
     return (await firstValueFrom(opened.afterClosed(), { defaultValue: false })) ?? false;
   }
 }

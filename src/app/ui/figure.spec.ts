@@ -42,4 +42,13 @@ describe('Figure', () => {
     expect((await show({ value: null, low: null, high: null })).text()).toBe('n/a');
     expect((await show({ value: 5, low: null, high: null })).text()).toBe('5.000 no interval');
   });
+
+  it('leaves room for a parenthesis beside a positive figure, so that digits align', async () => {
+    TestBed.inject(NumberFormat).negatives.set('parentheses');
+    const positive = await show({ value: 5200, digits: 0 });
+    const negative = await show({ value: -5200, digits: 0 });
+    expect(negative.text()).toBe('(5,200)');
+    expect(positive.host).toHaveClass('beside-parentheses');
+    expect(negative.host).not.toHaveClass('beside-parentheses');
+  });
 });

@@ -33,7 +33,7 @@ import { type FigureKind, NumberFormat } from './number-format';
     </ng-template>
   `,
   styleUrl: './figure.css',
-  host: { class: 'kv-number' },
+  host: { class: 'kv-number', '[class.beside-parentheses]': 'leavesRoom()' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class Figure {
@@ -61,6 +61,10 @@ export class Figure {
   });
   protected readonly valueText = computed(() =>
     this.#numbers.figure(this.value(), this.kind(), this.digits()),
+  );
+  /** In a column of parentheses a positive figure leaves room for one, so that the digits align. */
+  protected readonly leavesRoom = computed(
+    () => this.#numbers.negatives() === 'parentheses' && !this.valueText().endsWith(')'),
   );
   protected readonly boundsText = computed(() => {
     const [estimate, low, high] = [this.value(), this.low(), this.high()];

@@ -9,10 +9,9 @@ export class UndoNotice {
 
   /** `undo` runs when the person selects Undo; its own failure is for the caller's store to show. */
   async show(message: string, undo: () => void): Promise<void> {
-    const { MatSnackBar } = await import('@angular/material/snack-bar');
-    const shown = this.#injector
-      .get(MatSnackBar)
-      .open(message, 'Undo', { duration: shownMs, politeness: 'polite' });
+    const { MatSnackBar, MatSnackBarConfig } = await import('@angular/material/snack-bar');
+    const config = Object.assign(new MatSnackBarConfig(), { duration: shownMs });
+    const shown = this.#injector.get(MatSnackBar).open(message, 'Undo', config);
     shown.onAction().subscribe(undo);
   }
 }
