@@ -1,8 +1,11 @@
 import type { PanelColumns } from '../fit-result';
 import { type RowPlace, StatsError } from '../stats-error';
 
+/** Fourth powers of larger numbers leave the range of a double. */
+const largestMagnitude = 1e60;
+
 /**
- * Refuses columns that do not fit together, and numbers that are neither finite nor missing.
+ * Refuses columns that do not fit together, and numbers that are infinite or too large.
  * @throws {StatsError} 'shape' or 'non-finite' with every place.
  */
 export function checkColumns(data: PanelColumns): void {
@@ -24,7 +27,7 @@ export function checkColumns(data: PanelColumns): void {
   if (data.company.some((code) => code < 0 || code >= data.companies.length)) {
     throw new StatsError('shape', 'expected company codes to point into the list of companies');
   }
-  refuseInfinite(data);
+  refuseTooLarge(data);
 }
 
 function refuseLength(name: string, found: number, expected: number): void {
@@ -38,11 +41,11 @@ function refuseLength(name: string, found: number, expected: number): void {
   );
 }
 
-function refuseInfinite(data: PanelColumns): void {
+function refuseTooLarge(data: PanelColumns): void {
   const rows: RowPlace[] = [];
   for (const { name, values } of [data.outcome, ...data.regressors]) {
     values.forEach((value, index) => {
-      if (!Number.isFinite(value) && !Number.isNaN(value)) {
+      if (Math.abs(value) > largestMagnitude) {
         rows.push({ row: data.fileRow[index], column: name });
       }
     });
@@ -50,7 +53,7 @@ function refuseInfinite(data: PanelColumns): void {
   if (rows.length === 0) return;
   throw new StatsError(
     'non-finite',
-    'expected finite numbers; found values too large to compute with',
+    `expected numbers up to ${largestMagnitude}; found larger ones`,
     {
       rows,
     },

@@ -98,7 +98,8 @@ describe('the sample of a fit', () => {
     expect(data.companies).toEqual(['A']);
   });
 
-  it('refuses an infinite number, with its place', () => {
+  it('refuses an infinite or enormous number, with its place', () => {
+    expect(refusal(change(plainRows(), 2, { outcome: -1e61 })).code).toBe('non-finite');
     const { code, data } = refusal(change(plainRows(), 2, { outcome: Infinity }));
     expect(code).toBe('non-finite');
     expect(data.rows).toEqual([{ row: 4, column: 'value' }]);

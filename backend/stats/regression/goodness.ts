@@ -36,7 +36,7 @@ export function fTest(
   if (squares.isPerfect) {
     return { value: null, df1, df2, pValue: null, pValueReason: perfectFitReason };
   }
-  const value = squares.gain / df1 / (squares.rest / df2);
+  const value = Math.max(0, squares.gain) / df1 / (squares.rest / df2);
   return { value, df1, df2, pValue: fUpperTail(value, df1, df2) };
 }
 

@@ -1,6 +1,7 @@
 import type { FitWarning } from '../fit-result';
 import type { IntervalContext } from '../intervals/interval-context';
 import { largestPersistence } from '../intervals/persistence';
+import { isPerfectFit } from '../regression/goodness';
 
 const highPersistence = 0.8;
 const ownExcess = 0.3;
@@ -9,7 +10,7 @@ const namesInWords = 5;
 /** What the carry-over of errors from year to year does to the intervals. */
 export function persistenceWarnings(context: IntervalContext, own: number): FitWarning[] {
   const { pooled, used } = context.persistence;
-  if (pooled === null) return [];
+  if (pooled === null || isPerfectFit(context.fit)) return [];
   const companies = context.fit.sample.companies;
   const warnings: FitWarning[] = [];
   if (pooled > highPersistence) {

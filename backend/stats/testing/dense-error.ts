@@ -1,0 +1,77 @@
+import { leastSquares } from '../linear-algebra/least-squares';
+import { solveUpperTransposed } from '../linear-algebra/triangular';
+import type { PanelRow } from './golden-panels';
+
+/** Weights of a contrast: by company name, and by regressor. */
+export interface DenseContrast {
+  readonly intercepts: Readonly<Record<string, number>>;
+  readonly slopes: readonly number[];
+}
+
+/**
+ * The calibrated standard error of a contrast, row by row from the full dummy regression and matrices written out:
+ * the definition itself, slow and without any of the engine's shortcuts.
+ *
+ * @param rows  sorted by company and year, every company with two rows or more.
+ * @param persistence  ρ by company.
+ */
+export function denseError(
+  rows: readonly PanelRow[],
+  contrast: DenseContrast,
+  persistence: (company: string) => number,
+  cosines: number,
+): number {
+  const companies = [...new Set(rows.map(({ company }) => company))];
+  const columns = [
+    ...companies.map((name) => Float64Array.from(rows, (row) => (row.company === name ? 1 : 0))),
+    ...contrast.slopes.map((_, k) => Float64Array.from(rows, (row) => row.regressors[k])),
+  ];
+  const outcome = Float64Array.from(rows, (row) => row.outcome);
+  const { basis, r, residuals } = leastSquares(columns, outcome);
+  const weights = [...companies.map((name) => contrast.intercepts[name] ?? 0), ...contrast.slopes];
+  const inner = solveUpperTransposed(r, weights);
+  const direct = rows.map((_, row) =>
+    basis.reduce((sum, column, k) => sum + column[row] * inner[k], 0),
+  );
+  const years = [...new Set(rows.map(({ year }) => year))].sort((left, right) => left - right);
+  const count = years.length;
+  const weighted = Array.from({ length: cosines }, (_, index) =>
+    direct.map((value, row) => {
+      const place = years.indexOf(rows[row].year) + 0.5;
+      return Math.sqrt(2 / count) * Math.cos((Math.PI * (index + 1) * place) / count) * value;
+    }),
+  );
+  const left = weighted.map((values) => {
+    const fitted = basis.map((column) =>
+      column.reduce((sum, value, row) => sum + value * values[row], 0),
+    );
+    return values.map((value, row) =>
+      basis.reduce((rest, column, k) => rest - column[row] * fitted[k], value),
+    );
+  });
+  const form = (values: readonly number[]): number => correlated(rows, values, persistence);
+  const mean = (values: readonly number[]): number =>
+    values.reduce((sum, value) => sum + value, 0) / values.length;
+  const calibration = Math.max(1, form(direct) / (count * mean(left.map(form))));
+  const squares = weighted.map(
+    (values) => values.reduce((sum, value, row) => sum + value * residuals[row], 0) ** 2,
+  );
+  return Math.sqrt(count * mean(squares) * calibration);
+}
+
+/** Σ_i v_i'R_iv_i. */
+function correlated(
+  rows: readonly PanelRow[],
+  values: readonly number[],
+  persistence: (company: string) => number,
+): number {
+  let sum = 0;
+  rows.forEach((one, first) => {
+    rows.forEach((other, second) => {
+      if (one.company !== other.company) return;
+      const correlation = persistence(one.company) ** Math.abs(one.year - other.year);
+      sum += values[first] * correlation * values[second];
+    });
+  });
+  return sum;
+}
