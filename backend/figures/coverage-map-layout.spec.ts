@@ -33,7 +33,7 @@ describe('coverage map layout', () => {
     }));
     const layout = coverageMapLayout({ ...data, cells: many, ownCompany: null }, 360);
     expect(layout.rows.length).toBe(120);
-    expect(layout.cellSize).toBeGreaterThanOrEqual(18);
+    expect(layout.cellWidth).toBeGreaterThanOrEqual(18);
     expect(layout.width).toBeGreaterThan(360);
     expect(layout.years.at(-1)?.label).toBe('2025');
   });

@@ -42,7 +42,8 @@ export interface CoverageRow {
 export interface CoverageMapLayout {
   readonly width: number;
   readonly height: number;
-  readonly cellSize: number;
+  readonly cellWidth: number;
+  readonly cellHeight: number;
   readonly markSize: number;
   readonly nameX: number;
   readonly left: number;
@@ -83,15 +84,16 @@ export function coverageMapLayout(data: CoverageData, width: number): CoverageMa
   const nameWidth = Math.min(longest, Math.max(84, width * 0.24));
   const left = 18 + nameWidth + 10;
   const room = (width - left - 8) / Math.max(1, years.length);
-  const cellSize = Math.floor(Math.min(mostCell, Math.max(leastCell, room)));
-  const rowHeight = Math.min(cellSize, 24);
-  const step = Math.max(1, Math.ceil(yearLabel / cellSize));
-  const placeOf = (year: number) => left + (year - first + 0.5) * cellSize;
+  const cellWidth = Math.floor(Math.min(mostCell, Math.max(leastCell, room)));
+  const rowHeight = Math.min(cellWidth, 24);
+  const step = Math.max(1, Math.ceil(yearLabel / cellWidth));
+  const placeOf = (year: number) => left + (year - first + 0.5) * cellWidth;
 
   return {
-    width: Math.max(left + years.length * cellSize + 14, Math.min(width, left + 60)),
+    width: Math.max(left + years.length * cellWidth + 14, Math.min(width, left + 60)),
     height: headHeight + companies.length * rowHeight + 6,
-    cellSize: rowHeight,
+    cellWidth,
+    cellHeight: rowHeight,
     markSize: rowHeight - 8,
     nameX: 18,
     left,

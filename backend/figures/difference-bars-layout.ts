@@ -1,7 +1,7 @@
 import { max } from 'd3';
 import { type FigureFormats, type IntervalFigure, type Stretch, hasBounds } from './figure-types';
 import { clippedWords, figuresWidth, wordsWidth } from './text-width';
-import { valueScale } from './value-axis';
+import { snugScale } from './value-axis';
 
 export interface DifferenceBar {
   readonly name: string;
@@ -24,6 +24,8 @@ export interface DifferenceBarsLayout {
   readonly height: number;
   readonly barHeight: number;
   readonly zeroX: number;
+  /** Stretches of the zero line, top to bottom: broken where names would cross it. */
+  readonly zeroLine: readonly Stretch[];
   readonly valueX: number;
   readonly ruleY: number;
   readonly bars: readonly DifferenceBar[];
@@ -66,7 +68,7 @@ export function differenceBarsLayout(
     return { from, to };
   });
   const ends = spans.flatMap(({ from, to }) => [from, to]);
-  const scale = valueScale([0, ...ends, total.low, total.high], range, 4);
+  const scale = snugScale([0, ...ends, total.low, total.high], range, 0);
 
   const rowHeight = isFolded ? 46 : 28;
   const ruleGap = 8;
@@ -89,8 +91,12 @@ export function differenceBarsLayout(
         item.isTotal && hasBounds(item) ? { from: scale(item.low), to: scale(item.high) } : null,
     };
   });
+  const besideBars = bars.map(({ y }) => ({ from: y - 3, to: y + barHeight + 3 }));
   return {
     width,
+    zeroLine: isFolded
+      ? besideBars
+      : [{ from: besideBars[0].from - 4, to: besideBars[besideBars.length - 1].to + 4 }],
     height: items.length * rowHeight + ruleGap + 4,
     barHeight,
     zeroX: scale(0),

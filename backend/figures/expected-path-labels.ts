@@ -10,8 +10,8 @@ export interface EndLabel extends Point {
   readonly value: string;
   readonly valueX: number;
   readonly valueY: number;
-  /** Where the line ends, for a leader when the label had to move. */
-  readonly lineY: number;
+  /** From the line's end to the label, where the label had to move; empty where it stands beside it. */
+  readonly leader: string;
 }
 
 interface Ended {
@@ -69,7 +69,10 @@ export function endLabels(
       y: baseline,
       valueX: isFolded ? x : x + wordsWidth(clipped) + 5,
       valueY: isFolded ? baseline + 14 : baseline,
-      lineY: wanted[index],
+      leader:
+        Math.abs(places[index] - wanted[index]) < 5
+          ? ''
+          : `M${x - 8},${wanted[index]}L${x - 2},${places[index]}`,
     };
   });
 }

@@ -49,8 +49,8 @@ export interface PlacedPlan {
   readonly path: string;
   readonly mark: string;
   readonly points: readonly Point[];
-  /** The interval at the last year, top to bottom, and where it stands. */
-  readonly interval: (Stretch & { readonly x: number }) | null;
+  /** The interval at the last year, top to bottom, with the place of its estimate. */
+  readonly interval: (Stretch & Point) | null;
 }
 
 export interface ExpectedPathLayout {
@@ -74,6 +74,9 @@ export interface ExpectedPathLayout {
   /** Every year of every line, own years first, in the order in which arrow keys visit them. */
   readonly points: readonly ExpectedPathPoint[];
 }
+
+/** Pixels between the intervals of plans at their common end. */
+const dodge = 7;
 
 type Seen = number | null | undefined;
 
@@ -99,10 +102,13 @@ export function expectedPathLayout(
   const y = valueScale(valuesOf(data), [bottom, top], 5);
   const yTicks = placedTicks(y, 5, formats.tick);
   const left = (max(yTicks, (tick) => figuresWidth(tick.label)) ?? 0) + 16;
-  const isNarrow = width < 560;
-  const labelsWidth = endLabelsWidth(data, isNarrow, formats);
+  // Long names fold onto two lines before they take the room of the lines they name.
+  const isFolded = width < 560 || endLabelsWidth(data, false, formats) > width * 0.22;
+  const labelsWidth =
+    endLabelsWidth(data, isFolded, formats) + dodge * Math.max(0, plans.length - 1);
   const plot = { left, right: Math.max(left + 60, width - labelsWidth - 16), top, bottom };
 
+  const labelsX = plot.right + dodge * Math.max(0, plans.length - 1);
   const years = [
     ...new Set([...ownYears, ...base, ...plans.flatMap((plan) => plan.years)].map((at) => at.year)),
   ].sort((a, b) => a - b);
@@ -142,11 +148,11 @@ export function expectedPathLayout(
         path: through([...start, ...points]) ?? '',
         mark: planMarkPath(index, 3.5),
         points,
-        interval: intervalAtEnd(plan, index, plans.length, x, y),
+        interval: intervalAtEnd(plan, index, x, y),
       };
     }),
     seriesLabels: seriesLabels(actual, fitted, plot),
-    endLabels: endLabels(data, isNarrow, plot, y, formats),
+    endLabels: endLabels(data, isFolded, { ...plot, right: labelsX }, y, formats),
     points: pointsOf(data, place, formats),
   };
 }
@@ -168,17 +174,16 @@ function areaOf(
   return between(known) ?? '';
 }
 
-/** Plans that end in the same year stand a little apart, or their intervals would hide each other. */
+/** Intervals of plans that end in the same year stand a little apart, or they would hide each other. */
 function intervalAtEnd(
   plan: ExpectedPlan,
   index: number,
-  count: number,
   x: (year: number) => number,
   y: (value: number) => number,
 ): PlacedPlan['interval'] {
   const end = plan.years.at(-1);
   if (end?.low == null || end.high == null) return null;
-  return { x: x(end.year) - 3 * (count > 1 ? index : 0), from: y(end.high), to: y(end.low) };
+  return { x: x(end.year) + dodge * index, y: y(end.estimate), from: y(end.high), to: y(end.low) };
 }
 
 function pointsOf(

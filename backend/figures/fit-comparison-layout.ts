@@ -8,7 +8,7 @@ import {
   hasBounds,
 } from './figure-types';
 import { clippedWords, figuresWidth, wordsWidth } from './text-width';
-import { placedTicks, valueScale } from './value-axis';
+import { placedTicks, snugScale } from './value-axis';
 
 export interface ComparedFit {
   /** `6f3a91, 12 Nov 2026`. */
@@ -69,7 +69,7 @@ export function fitComparisonLayout(
   const seen = fits.flatMap(({ standing }) =>
     standing === null ? [] : [standing.estimate, standing.low, standing.high],
   );
-  const scale = valueScale([0, ...seen], [plot.left, plot.right], count);
+  const scale = snugScale([0, ...seen], [plot.left, plot.right]);
   return {
     width,
     height: plot.bottom + 6,

@@ -9,3 +9,4 @@ export { diamondPath, planMarkPath } from './mark-paths';
 export * from './number-text';
 export * from './slope-intervals-layout';
 export * from './standing-chart-layout';
+export { wrappedWords } from './text-width';

@@ -1,5 +1,5 @@
 import { alongLine, leastCrowded, spreadApart } from './label-places';
-import { clippedWords, wordsWidth } from './text-width';
+import { clippedWords, wordsWidth, wrappedWords } from './text-width';
 import { placedTicks, valueScale } from './value-axis';
 
 describe('label places', () => {
@@ -38,6 +38,15 @@ describe('label places', () => {
     const clipped = clippedWords('Velmara Cold Chain Logistics', 80);
     expect(clipped.endsWith('…')).toBeTrue();
     expect(wordsWidth(clipped)).toBeLessThanOrEqual(80);
+  });
+
+  it('wraps a text into lines that fit, and loses no word', () => {
+    const text = 'Velmara stands 2,100 (700 to 3,400) above its peers, place 2 to 5 of 14';
+    const lines = wrappedWords(text, 160, 15);
+    expect(lines.length).toBeGreaterThan(2);
+    expect(lines.join(' ')).toBe(text);
+    for (const line of lines) expect(wordsWidth(line, 15)).toBeLessThanOrEqual(160);
+    expect(wrappedWords('', 160)).toEqual([]);
   });
 
   it('opens a scale around values that are all equal, and around none', () => {

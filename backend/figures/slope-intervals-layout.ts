@@ -1,7 +1,9 @@
 import { max } from 'd3';
-import { type FigureFormats, type IntervalFigure, type Stretch, hasBounds } from './figure-types';
+import { type IntervalFigure, type Stretch, hasBounds } from './figure-types';
 import { clippedWords, figuresWidth, wordsWidth } from './text-width';
-import { valueScale } from './value-axis';
+import { snugScale } from './value-axis';
+
+type Slope = IntervalFigure & { readonly name: string };
 
 export interface SlopeIntervalRow {
   readonly name: string;
@@ -29,11 +31,15 @@ export interface SlopeIntervalsLayout {
 const nameSize = 13;
 const unlike = 25;
 
-/** Name and figures on a line of text, under it the interval, a zero tick and the estimate. */
+/**
+ * Name and figures on a line of text, under it the interval, a zero tick and the estimate.
+ *
+ * @param format  value and bounds of one slope, in digits that suit both.
+ */
 export function slopeIntervalsLayout(
-  slopes: readonly (IntervalFigure & { readonly name: string })[],
+  slopes: readonly Slope[],
   width: number,
-  formats: FigureFormats,
+  format: (slope: Slope) => { readonly value: string; readonly bounds: string },
 ): SlopeIntervalsLayout {
   const reach = slopes.map((slope) =>
     Math.max(Math.abs(slope.estimate), Math.abs(slope.low ?? 0), Math.abs(slope.high ?? 0)),
@@ -41,13 +47,12 @@ export function slopeIntervalsLayout(
   const isOneScale = (max(reach) ?? 0) <= unlike * Math.min(...reach.filter((size) => size > 0));
   const range = [6, width - 6] as const;
   const seen = slopes.map((slope) => [slope.estimate, slope.low, slope.high, 0]);
-  const common = valueScale(seen.flat(), range, 5);
+  const common = snugScale(seen.flat(), range);
 
   let y = 0;
   const rows = slopes.map((slope, place): SlopeIntervalRow => {
-    const scale = isOneScale ? common : valueScale(seen[place], range, 5);
-    const value = formats.value(slope.estimate);
-    const bounds = formats.bounds(slope);
+    const scale = isOneScale ? common : snugScale(seen[place], range);
+    const { value, bounds } = format(slope);
     const figures = figuresWidth(value) + 8 + figuresWidth(bounds);
     const isFolded = wordsWidth(slope.name, nameSize) + 16 + figures > width;
     const textY = y + 20;

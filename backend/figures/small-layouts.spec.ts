@@ -1,5 +1,5 @@
 import { differenceBarsLayout } from './difference-bars-layout';
-import type { FigureFormats } from './figure-types';
+import type { FigureFormats, IntervalFigure } from './figure-types';
 import { fitComparisonLayout } from './fit-comparison-layout';
 import { slopeIntervalsLayout } from './slope-intervals-layout';
 
@@ -12,11 +12,15 @@ const formats: FigureFormats = {
 const none = { low: null, high: null };
 
 describe('slope intervals layout', () => {
+  const format = (slope: IntervalFigure) => ({
+    value: formats.value(slope.estimate),
+    bounds: formats.bounds(slope),
+  });
   const capex = { name: '1 more of capex', estimate: 1.84, low: 0.92, high: 2.76 };
   const equity = { name: '1 more of book equity', estimate: -0.31, low: -0.66, high: 0.04 };
 
   it('puts slopes of like size on one scale, with one zero', () => {
-    const { rows, isOneScale } = slopeIntervalsLayout([capex, equity], 330, formats);
+    const { rows, isOneScale } = slopeIntervalsLayout([capex, equity], 330, format);
     expect(isOneScale).toBeTrue();
     expect(rows[0].zeroX).toBe(rows[1].zeroX);
     expect(rows[0].x).toBeGreaterThan(rows[0].zeroX);
@@ -25,22 +29,22 @@ describe('slope intervals layout', () => {
 
   it('gives slopes of very unlike size a scale each', () => {
     const staff = { name: '1 more of staff', estimate: 300, low: 100, high: 500 };
-    const { rows, isOneScale } = slopeIntervalsLayout([equity, staff], 330, formats);
+    const { rows, isOneScale } = slopeIntervalsLayout([equity, staff], 330, format);
     expect(isOneScale).toBeFalse();
     expect(rows[0].interval!.to - rows[0].interval!.from).toBeGreaterThan(60);
   });
 
   it('folds the figures under a name that leaves no room for them', () => {
     const long = { ...capex, name: '1 more of property, plant and equipment' };
-    const { rows } = slopeIntervalsLayout([capex, long], 330, formats);
+    const { rows } = slopeIntervalsLayout([capex, long], 330, format);
     expect(rows[0].figuresY).toBe(rows[0].textY);
     expect(rows[1].figuresY).toBeGreaterThan(rows[1].textY);
     expect(rows[1].label).toBe(long.name);
   });
 
   it('stands without slopes, and with one that is zero and has no interval', () => {
-    expect(slopeIntervalsLayout([], 330, formats).rows).toEqual([]);
-    const [row] = slopeIntervalsLayout([{ name: 'a', estimate: 0, ...none }], 330, formats).rows;
+    expect(slopeIntervalsLayout([], 330, format).rows).toEqual([]);
+    const [row] = slopeIntervalsLayout([{ name: 'a', estimate: 0, ...none }], 330, format).rows;
     expect(row.x).toBe(row.zeroX);
     expect(row.interval).toBeNull();
   });

@@ -9,7 +9,7 @@ import {
   hasBounds,
 } from './figure-types';
 import { clippedWords, figuresWidth, wordsWidth } from './text-width';
-import { placedTicks, valueScale } from './value-axis';
+import { placedTicks, snugScale } from './value-axis';
 
 export interface StandingChartData {
   /** Company intercepts with their intervals, any order. */
@@ -46,6 +46,8 @@ export interface StandingChartLayout {
   /** Right edges of the columns of figures; null where there is no room for one. */
   readonly valueX: number | null;
   readonly boundsX: number | null;
+  /** Baseline of the line under the chart that says in full what the columns have no room for; null where they have. */
+  readonly readoutY: number | null;
   /** From highest to lowest estimate. */
   readonly rows: readonly StandingRow[];
 }
@@ -95,11 +97,13 @@ export function standingChartLayout(
 
   const tickCount = Math.max(2, Math.round((plot.right - plot.left) / 110));
   const seen = sorted.flatMap((row) => [row.estimate, row.low, row.high]);
-  const scale = valueScale([...seen, 0, meanOfPeers], [plot.left, plot.right], tickCount);
+  const scale = snugScale([...seen, 0, meanOfPeers], [plot.left, plot.right]);
 
+  const foot = plot.bottom + (meanOfPeers === null ? 8 : meanSpace);
   return {
     width,
-    height: plot.bottom + (meanOfPeers === null ? 8 : meanSpace),
+    height: foot + (hasBoundsColumn ? 0 : 24),
+    readoutY: hasBoundsColumn ? null : foot + 16,
     plot,
     rowHeight,
     markRadius: isRoomy ? 4.5 : 3,

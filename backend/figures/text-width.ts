@@ -28,3 +28,14 @@ export function clippedWords(text: string, width: number, size = 12): string {
   while (letters.length > 1 && wordsWidth(letters.join('') + '…', size) > width) letters.pop();
   return letters.join('').trimEnd() + '…';
 }
+
+/** The text in lines of at most `width`; a word longer than that stands alone. */
+export function wrappedWords(text: string, width: number, size = 12): string[] {
+  const lines: string[] = [];
+  for (const word of text.split(/\s+/).filter((part) => part !== '')) {
+    const longer = lines.length === 0 ? word : `${lines[lines.length - 1]} ${word}`;
+    if (lines.length > 0 && wordsWidth(longer, size) <= width) lines[lines.length - 1] = longer;
+    else lines.push(word);
+  }
+  return lines;
+}

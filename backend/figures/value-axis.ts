@@ -10,15 +10,24 @@ export function valueScale(
   range: readonly [number, number],
   ticks: number,
 ): ScaleLinear<number, number> {
+  return snugScale(values, range, 0).nice(Math.max(1, ticks));
+}
+
+/** The same, not widened to round numbers but by a share of its span: for scales that need no label at their ends. */
+export function snugScale(
+  values: readonly (number | null | undefined)[],
+  range: readonly [number, number],
+  margin = 0.02,
+): ScaleLinear<number, number> {
   const finite = values.filter(
     (value): value is number => typeof value === 'number' && Number.isFinite(value),
   );
   const [low = 0, high = 0] = extent(finite);
-  const half = low === high ? Math.max(Math.abs(low) * 0.1, low === 0 ? 1 : 0) : 0;
+  const aroundEqual = low === 0 ? 1 : Math.abs(low) * 0.1;
+  const more = low === high ? aroundEqual : (high - low) * margin;
   return scaleLinear()
-    .domain([low - half, high + half])
-    .range(range)
-    .nice(Math.max(1, ticks));
+    .domain([low - more, high + more])
+    .range(range);
 }
 
 /** About `count` round values of the scale, each with its place and its text. */

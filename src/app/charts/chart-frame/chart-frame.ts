@@ -1,0 +1,88 @@
+import {
+  ChangeDetectionStrategy,
+  Component,
+  DestroyRef,
+  ElementRef,
+  afterNextRender,
+  contentChild,
+  inject,
+  input,
+  model,
+  signal,
+} from '@angular/core';
+import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { fileNameOf, pngFile, saveFile, svgFile } from './picture-files';
+import { standalonePicture } from './standalone-picture';
+
+/**
+ * What every chart has around it: the same values as a table, export as SVG and PNG, a summary for screen readers,
+ * and its width as the container gives it. The chart is the projected `<svg #picture>`; a heading, where the page
+ * shows none, goes into `[chartHeading]`.
+ */
+@Component({
+  selector: 'kv-chart-frame',
+  templateUrl: './chart-frame.html',
+  styleUrl: './chart-frame.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ChartFrame {
+  readonly #host = inject<ElementRef<HTMLElement>>(ElementRef);
+
+  readonly text = input.required<ChartText>();
+  /** One or two sentences that say what the chart shows. */
+  readonly summary = input.required<string>();
+  readonly columns = input.required<readonly ChartColumn[]>();
+  readonly rows = input.required<readonly ChartRow[]>();
+  /** What the page says beside the chart and an export has to say itself, above the source. */
+  readonly note = input('');
+  /** Width of the container in CSS pixels, for the layout. */
+  readonly width = model(640);
+
+  readonly picture = contentChild.required<unknown, ElementRef<SVGSVGElement>>('picture', {
+    read: ElementRef,
+  });
+
+  protected readonly isTable = signal(false);
+  protected readonly trouble = signal('');
+
+  constructor() {
+    const observer = new ResizeObserver(() => this.#measure());
+    afterNextRender({
+      read: () => {
+        this.#measure();
+        observer.observe(this.#host.nativeElement);
+      },
+    });
+    inject(DestroyRef).onDestroy(() => observer.disconnect());
+  }
+
+  protected toggle(): void {
+    this.isTable.update((isTable) => !isTable);
+  }
+
+  protected async saveSvg(): Promise<void> {
+    await this.#save(svgFile, 'svg');
+  }
+
+  protected async savePng(): Promise<void> {
+    await this.#save(pngFile, 'png');
+  }
+
+  #measure(): void {
+    const width = Math.floor(this.#host.nativeElement.getBoundingClientRect().width);
+    if (width > 0) this.width.set(width); // 0 while it is hidden
+  }
+
+  async #save(fileOf: (picture: SVGSVGElement) => Promise<Blob>, ending: string): Promise<void> {
+    this.trouble.set('');
+    try {
+      const source = [this.note(), this.text().source].filter((part) => part !== '').join(' ');
+      const picture = standalonePicture(this.picture().nativeElement, { ...this.text(), source });
+      saveFile(await fileOf(picture), fileNameOf(this.text().title, ending));
+    } catch (error) {
+      // Fonts that did not load, a canvas the browser refuses: the person can act on it, so it is said here.
+      const found = error instanceof Error ? error.message : String(error);
+      this.trouble.set(`The ${ending.toUpperCase()} file could not be made: ${found}. Try again.`);
+    }
+  }
+}

@@ -1,0 +1,56 @@
+import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
+import { type DifferenceData, type IntervalFigure, differenceBarsLayout } from '@figures';
+import { type FigureKind, NumberFormat } from '../../ui/number-format';
+import { ChartFrame } from '../chart-frame/chart-frame';
+import { ChartPoint, ChartPoints } from '../chart-points';
+import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { figureFormats, withUnit } from '../figure-formats';
+
+/** A plan's difference to the base, regressor by regressor: bars that add up to the total. */
+@Component({
+  selector: 'kv-difference-bars',
+  imports: [ChartFrame, ChartPoint, ChartPoints],
+  templateUrl: './difference-bars.html',
+  styleUrls: ['../chart-marks.css', './difference-bars.css'],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class DifferenceBars {
+  readonly #numbers = inject(NumberFormat);
+
+  readonly text = input.required<ChartText>();
+  readonly terms = input.required<DifferenceData['terms']>();
+  readonly total = input.required<IntervalFigure>();
+  readonly kind = input<FigureKind>('money');
+
+  protected readonly width = signal(560);
+  readonly #formats = computed(() =>
+    figureFormats(this.#numbers, this.kind(), [
+      ...this.terms().map(({ estimate }) => estimate),
+      this.total().estimate,
+    ]),
+  );
+  protected readonly layout = computed(() =>
+    differenceBarsLayout(
+      { terms: this.terms(), total: this.total() },
+      this.width(),
+      this.#formats(),
+    ),
+  );
+
+  protected readonly summary = computed(() =>
+    this.layout()
+      .bars.map(({ name, value, bounds }) => `${name} ${value} (${bounds}).`)
+      .join(' '),
+  );
+  protected readonly columns = computed((): ChartColumn[] => [
+    { label: 'part', isNumber: false },
+    { label: withUnit('difference', this.#numbers, this.kind()), isNumber: true },
+    { label: 'interval', isNumber: true },
+  ]);
+  protected readonly rows = computed((): ChartRow[] =>
+    this.layout().bars.map(({ name, value, bounds, isTotal }) => ({
+      cells: [name, value, bounds],
+      isTotal,
+    })),
+  );
+}
