@@ -107,6 +107,7 @@ const ofScreens = [
       within('src'),
       '^backend/(contract|stats/prediction|figures)/index\\.ts$',
       ...packages('@angular/[^/]+', 'rxjs', 'zod', 'ag-grid-[a-z]+', '@fontsource/[^/]+', 'tslib'),
+      ...packages('@stdlib/stats-base-dists-t'), // the quantile that prediction is handed
     ],
     { builtIns: false },
   ),

@@ -1,4 +1,16 @@
-import type { Routes } from '@angular/router';
+import type { Routes, UrlMatchResult, UrlSegment } from '@angular/router';
 
-/** Pages under /scenarios. */
-export const routes: Routes = [];
+/** Pages under /scenarios: a new plan, or `:scenarioId`. One route, so that saving a new plan keeps the page. */
+export const routes: Routes = [
+  {
+    matcher: newOrSaved,
+    loadComponent: async () => (await import('./scenarios-page')).ScenariosPage,
+  },
+];
+
+function newOrSaved(segments: UrlSegment[]): UrlMatchResult | null {
+  if (segments.length > 1) return null;
+  return segments.length === 0
+    ? { consumed: [] }
+    : { consumed: segments, posParams: { scenarioId: segments[0] } };
+}

@@ -1,0 +1,120 @@
+import { DatePipe } from '@angular/common';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  effect,
+  inject,
+  input,
+  signal,
+  untracked,
+} from '@angular/core';
+import { MatDialog, MatDialogConfig } from '@angular/material/dialog';
+import { RouterLink } from '@angular/router';
+import { type EditionReply, apiRoutes, mayCall } from '@contract';
+import { unitRatio } from '@figures';
+import { LineageStore } from '../api/lineage-store';
+import { SessionStore } from '../api/session-store';
+import { Mark } from '../ui/mark';
+import { NumberFormat } from '../ui/number-format';
+import { PageContext } from '../ui/page-context';
+import { ProblemNotice } from '../ui/problem-notice';
+import { editionContext } from './edition-context';
+import { type EditionFigure, EditionSheet } from './edition-sheet';
+import { EditionStore } from './edition-store';
+import { EditionTrial } from './edition-trial';
+import { placesText, stateWords } from './edition-words';
+import { ReturnDialog, type ReturnQuestion } from './return-dialog';
+import { SignDialog, type SignQuestion } from './sign-dialog';
+import { SignatureBlock } from './signature-block';
+
+/** One edition: what do I tell the board? */
+@Component({
+  selector: 'kv-edition-page',
+  imports: [DatePipe, EditionSheet, EditionTrial, Mark, ProblemNotice, RouterLink, SignatureBlock],
+  templateUrl: './edition-page.html',
+  styleUrl: './edition-page.css',
+  providers: [EditionStore],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class EditionPage {
+  readonly #context = inject(PageContext);
+  readonly #dialog = inject(MatDialog);
+  readonly #lineage = inject(LineageStore);
+  readonly #numbers = inject(NumberFormat);
+  readonly #sessions = inject(SessionStore);
+  protected readonly store = inject(EditionStore);
+
+  readonly editionId = input.required<string>();
+
+  protected readonly stateWords = stateWords;
+  protected readonly isTrying = signal(false);
+  readonly #reply = computed(() => {
+    const view = this.store.view();
+    return view.kind === 'ready' ? view.reply : null;
+  });
+  /** The frozen prediction, for those who may read plans, where the edition holds one. */
+  protected readonly trialBasis = computed(() => {
+    const content = this.#reply()?.content;
+    const mayTry = mayCall(apiRoutes.readScenario, this.#sessions.roles());
+    return mayTry && content && content.scenarios.length > 0 ? content.fit.prediction : null;
+  });
+
+  constructor() {
+    effect(() => {
+      const id = this.editionId();
+      untracked(() => {
+        this.isTrying.set(false);
+        this.store.load(id);
+      });
+    });
+    effect(() => {
+      const reply = this.#reply();
+      const roles = this.#sessions.roles();
+      if (reply !== null) untracked(() => this.#context.show(editionContext(reply, roles)));
+    });
+  }
+
+  /** `1,900 (500 to 3,300), place 2 to 6 of 14`, in this edition's unit; null where the currencies differ. */
+  protected beforeText(before: EditionReply, now: EditionReply): string | null {
+    const { standing } = before.content.fit;
+    const [then, here] = [before.content.panelVersion, now.content.panelVersion];
+    if (standing === null || then.currency !== here.currency) return null;
+    const ratio = unitRatio(then.unit, here.unit);
+    const scaled = (value: number | null) => (value === null ? null : value * ratio);
+    const { estimate, low, high } = standing;
+    const value = { estimate: estimate * ratio, low: scaled(low), high: scaled(high) };
+    return `${this.#numbers.interval(value, 'money', 3)}, ${placesText(before.content.fit)}`;
+  }
+
+  protected openFigure({ key, planned }: EditionFigure): void {
+    this.#lineage.open({ editionId: this.editionId() }, key, planned);
+  }
+
+  protected print(): void {
+    window.print();
+  }
+
+  protected askToSign({ edition }: EditionReply, before: EditionReply | null): void {
+    const data: SignQuestion = {
+      number: edition.number,
+      sha256: edition.sha256,
+      supersedes: before?.edition.state === 'signed' ? before.edition.number : null,
+      sign: (password) => this.store.sign(password),
+    };
+    this.#dialog.open(SignDialog, dialogOf(data));
+  }
+
+  protected askToReturn({ edition }: EditionReply): void {
+    const data: ReturnQuestion = {
+      number: edition.number,
+      publishedBy: edition.publishedBy,
+      sendBack: (comment) => this.store.sendBack(comment),
+    };
+    this.#dialog.open(ReturnDialog, dialogOf(data));
+  }
+}
+
+function dialogOf<T>(data: T): MatDialogConfig<T> {
+  return Object.assign(new MatDialogConfig<T>(), { data, maxWidth: 560 });
+}

@@ -1,0 +1,124 @@
+import { DatePipe } from '@angular/common';
+import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
+import type { EditionContent } from '@contract';
+import { expectedValue } from '@prediction';
+import type { PlannedFigure } from '../api/lineage-store';
+import { ExpectedPath } from '../charts/expected-path/expected-path';
+import { Figure } from '../ui/figure';
+import { NumberFormat } from '../ui/number-format';
+import { namedParts } from '../ui/page-header';
+import { expectedPathData } from '../ui/plan/plan-data';
+import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
+import { planFinding } from '../ui/plan/plan-words';
+import { planLineage } from '../ui/plan/planned-figure';
+import { type Remark, RemarkList } from '../ui/remark-list';
+import { EditionPeers } from './edition-peers';
+import {
+  confidentialityWords,
+  editionHeadline,
+  labelsOf,
+  placesText,
+  sampleText,
+  shareText,
+} from './edition-words';
+import { type EvidenceLine, fiveLines } from './five-lines';
+
+/** A figure of the edition whose lineage is wanted. */
+export interface EditionFigure {
+  readonly key: string;
+  readonly planned?: PlannedFigure;
+}
+
+/**
+ * One edition on one sheet, from its frozen content and nothing else; what follows it (signature, or what keeps it
+ * from being published) goes into the slot.
+ */
+@Component({
+  selector: 'kv-edition-sheet',
+  imports: [DatePipe, EditionPeers, ExpectedPath, Figure, PlanTable, RemarkList],
+  templateUrl: './edition-sheet.html',
+  styleUrl: './edition-sheet.css',
+  host: { class: 'kv-sheet' },
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class EditionSheet {
+  readonly #numbers = inject(NumberFormat);
+
+  readonly content = input.required<EditionContent>();
+  /** SHA-256 of the content; empty while it is not frozen. */
+  readonly sha256 = input('');
+  /** Under another page's heading, so that the sentence is no heading of the first level. */
+  readonly isPreview = input(false);
+  readonly figureOpened = output<EditionFigure>();
+
+  protected readonly confidentialityWords = confidentialityWords;
+  protected readonly headline = computed(() =>
+    namedParts(editionHeadline(this.content(), this.#numbers), this.content().ownCompany),
+  );
+  protected readonly labels = computed(() => labelsOf(this.content()));
+  protected readonly level = computed(() => shareText(this.content().fit.specification.confidence));
+  protected readonly unit = this.#numbers.unitLabel;
+  protected readonly places = computed(() => placesText(this.content().fit));
+  protected readonly sample = computed(() => sampleText(this.content().fit));
+  protected readonly lines = computed(() => fiveLines(this.content(), this.#numbers));
+  protected readonly caption = computed(() => `${this.unit()} · ${this.level()} intervals`);
+  protected readonly warnings = computed(() =>
+    this.content().fit.warnings.map(({ detail }): Remark => ({ kind: 'caution', text: detail })),
+  );
+  protected readonly slopes = computed(() => {
+    const labels = this.labels();
+    return this.content().fit.slopes.map((slope, index) => ({
+      ...slope,
+      label: labels[index],
+      key: `slope.${index}`,
+    }));
+  });
+  protected readonly plans = computed(() =>
+    this.content().scenarios.map(({ name, note, plan, years }) => ({
+      name,
+      note,
+      years: years.map((year, index) => ({ ...year, values: plan[index].values })),
+    })),
+  );
+  protected readonly planTitle = computed(() => {
+    const [first] = this.plans();
+    const last = first?.years.at(-1);
+    if (last === undefined) return 'Actual and expected market value';
+    return planFinding(first.name, this.content().ownCompany, last, this.#numbers);
+  });
+  protected readonly path = computed(() => {
+    const { fit } = this.content();
+    if (fit.prediction === null || fit.ownYears === null) return null;
+    const base = expectedValue(fit.prediction, fit.prediction.last.regressors);
+    return expectedPathData(fit.ownYears, base, this.plans());
+  });
+
+  protected readonly pathText = computed(() => {
+    const { number, fit } = this.content();
+    return {
+      title: this.planTitle(),
+      caption: this.caption(),
+      source: `Edition ${number}, fit ${fit.hash.slice(0, 6)}`,
+    };
+  });
+
+  /** A year of the chart: what the model expected of it, or expects of it under the first plan. */
+  protected openYear(year: number): void {
+    const plan = this.plans().at(0);
+    const planned = plan?.years.find((candidate) => candidate.year === year);
+    if (plan !== undefined && planned !== undefined)
+      this.openPlanned({ plan, year: planned, kind: 'expected' });
+    else this.figureOpened.emit({ key: `fitted.${year}` });
+  }
+
+  protected openLine(line: EvidenceLine): void {
+    if (line.figure !== undefined) this.figureOpened.emit({ key: line.figure });
+  }
+
+  protected openPlanned(wanted: PlannedFigureWanted): void {
+    const basis = this.content().fit.prediction;
+    if (basis === null) return;
+    const { key, ...planned } = planLineage(wanted, this.labels(), basis.last.regressors);
+    this.figureOpened.emit({ key, planned });
+  }
+}

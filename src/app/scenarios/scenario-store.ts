@@ -1,0 +1,281 @@
+import { Injectable, computed, inject, signal } from '@angular/core';
+import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
+import { type ScenarioReply, apiRoutes, mayCall } from '@contract';
+import { type Observable, Subject, firstValueFrom, startWith, switchMap } from 'rxjs';
+import { ApiProblem } from '../api/api-problem';
+import { ScenariosApi } from '../api/scenarios-api';
+import { SessionStore } from '../api/session-store';
+import { readPlan } from '../ui/plan/read-plan';
+import { tQuantile } from '../ui/plan/t-quantile';
+import { DraftKeeper } from './draft-keeper';
+import { yearsThatDiffer } from './figures-agree';
+import {
+  type ScenarioAddress,
+  type ScenarioGround,
+  ScenarioGrounds,
+  type ScenarioView,
+} from './scenario-ground';
+import {
+  type ScenarioText,
+  type StoredText,
+  copyName,
+  isSameText,
+  noText,
+  storedText,
+  toStoredPlan,
+  toStoredText,
+  toText,
+  withScenario,
+} from './scenario-text';
+
+/** What the server said of the figures when the plan was saved. */
+export type Confirmation =
+  | { readonly kind: 'agrees'; readonly version: number }
+  | { readonly kind: 'differs'; readonly version: number; readonly years: readonly number[] };
+
+/** One plan on one fit: what is stored, what is on the page, and the way between them. */
+@Injectable()
+export class ScenarioStore {
+  readonly #api = inject(ScenariosApi);
+  readonly #drafts = inject(DraftKeeper);
+  readonly #grounds = inject(ScenarioGrounds);
+  readonly #sessions = inject(SessionStore);
+  readonly #addresses = new Subject<ScenarioAddress>();
+  readonly #view = signal<ScenarioView>({ kind: 'loading' });
+  readonly #text = signal<ScenarioText>(noText);
+  readonly #restoredAt = signal<string | null>(null);
+  readonly #setAside = signal<ScenarioText | null>(null);
+  readonly #conflict = signal<ApiProblem | null>(null);
+  readonly #problem = signal<ApiProblem | null>(null);
+  readonly #confirmation = signal<Confirmation | null>(null);
+  readonly #isSaving = signal(false);
+
+  readonly view = this.#view.asReadonly();
+  readonly text = this.#text.asReadonly();
+  /** When the draft that came back was kept; null when the page began with what is stored. */
+  readonly restoredAt = this.#restoredAt.asReadonly();
+  /** One's own plan while somebody else's version is looked at. */
+  readonly setAside = this.#setAside.asReadonly();
+  readonly conflict = this.#conflict.asReadonly();
+  readonly problem = this.#problem.asReadonly();
+  readonly confirmation = this.#confirmation.asReadonly();
+  readonly isSaving = this.#isSaving.asReadonly();
+  readonly draftState = this.#drafts.state;
+
+  readonly maySave = computed(() => mayCall(apiRoutes.saveScenario, this.#sessions.roles()));
+  readonly ground = computed(() => {
+    const view = this.#view();
+    return view.kind === 'ready' ? view.ground : null;
+  });
+  readonly reading = computed(() => {
+    const ground = this.ground();
+    return ground === null ? null : readPlan(ground.basis, this.#text().plan, tQuantile);
+  });
+  readonly isChanged = computed(() => {
+    const ground = this.ground();
+    return ground !== null && !isSameText(this.#text(), storedText(ground));
+  });
+
+  constructor() {
+    this.#addresses
+      .pipe(
+        switchMap((address): Observable<ScenarioView> =>
+          this.#grounds.read(address).pipe(startWith<ScenarioView>({ kind: 'loading' })),
+        ),
+        takeUntilDestroyed(),
+      )
+      .subscribe((view) => this.#show(view));
+  }
+
+  /** Opens what the address names, unless it is what the page shows already. */
+  open(address: ScenarioAddress): void {
+    const ground = this.ground();
+    const isShown =
+      ground !== null &&
+      (ground.saved?.id ?? null) === address.scenarioId &&
+      (address.scenarioId !== null || ground.fit.fit.id === address.fitId);
+    if (isShown) return;
+    void this.#drafts.flush();
+    this.#addresses.next(address);
+  }
+
+  change(change: Partial<ScenarioText>): void {
+    this.#text.update((text) => ({ ...text, ...change }));
+    this.#confirmation.set(null);
+    this.#keepDraft();
+  }
+
+  /** @returns the stored scenario, or null when it could not be stored. */
+  save(): Promise<ScenarioReply | null> {
+    return this.#store((ground, text) =>
+      ground.saved === null
+        ? this.#api.save({ fitId: ground.fit.fit.id, ...text })
+        : this.#api.change(ground.saved.id, { ...text, version: ground.saved.version }),
+    );
+  }
+
+  /** Stores the plan on the page beside the scenario that is open. */
+  async saveAsCopy(): Promise<ScenarioReply | null> {
+    const opened = this.ground()?.saved ?? null;
+    const copy = await this.#store((ground, text) =>
+      this.#api.save({ fitId: ground.fit.fit.id, ...text, name: copyName(text.name) }),
+    );
+    if (copy !== null && opened !== null)
+      await this.#guarded(() => this.#drafts.discard(copy.fitId, opened.id));
+    return copy;
+  }
+
+  /** Shows the version that somebody else stored meanwhile; one's own stays as a draft and can be brought back. */
+  async openTheirs(): Promise<void> {
+    const saved = this.ground()?.saved;
+    if (!saved) return;
+    const mine = this.#text();
+    this.#keepDraft();
+    await this.#drafts.flush();
+    await this.#guarded(async () => {
+      const theirs = await firstValueFrom(this.#api.read(saved.id));
+      this.#patchGround(theirs);
+      this.#text.set(toText(theirs));
+      this.#setAside.set(mine);
+      this.#conflict.set(null);
+    });
+  }
+
+  bringBack(): void {
+    const mine = this.#setAside();
+    if (mine === null) return;
+    this.#setAside.set(null);
+    this.change(mine);
+  }
+
+  /** Goes back to what is stored, or for a new plan to the base. */
+  async discard(): Promise<void> {
+    const ground = this.ground();
+    if (ground === null) return;
+    await this.#guarded(async () => {
+      await this.#drafts.discard(ground.fit.fit.id, ground.saved?.id ?? null);
+      this.#text.set(storedText(ground));
+      this.#restoredAt.set(null);
+      this.#setAside.set(null);
+      this.#conflict.set(null);
+      this.#confirmation.set(null);
+    });
+  }
+
+  /** @returns whether it is gone. */
+  async remove(scenario: ScenarioReply): Promise<boolean> {
+    const isGone = await this.#guarded(async () => {
+      if (scenario.id === this.ground()?.saved?.id) await this.#drafts.drop();
+      await firstValueFrom(this.#api.delete(scenario.id), { defaultValue: undefined });
+    });
+    if (isGone)
+      this.#patchScenarios((scenarios) => scenarios.filter(({ id }) => id !== scenario.id));
+    return isGone;
+  }
+
+  /** @returns whether it is back. */
+  restore(scenario: ScenarioReply): Promise<boolean> {
+    return this.#guarded(async () => {
+      const back = await firstValueFrom(this.#api.restore(scenario.id));
+      this.#patchScenarios((scenarios) => withScenario(scenarios, back));
+    });
+  }
+
+  /** @returns the copy, or null when there is none. */
+  async copy(scenario: ScenarioReply): Promise<ScenarioReply | null> {
+    let copy: ScenarioReply | null = null;
+    await this.#guarded(async () => {
+      copy = await firstValueFrom(this.#api.copy(scenario.id));
+    });
+    return copy;
+  }
+
+  dismissProblem(): void {
+    this.#problem.set(null);
+  }
+
+  async #store(
+    send: (ground: ScenarioGround, text: StoredText) => Observable<ScenarioReply>,
+  ): Promise<ScenarioReply | null> {
+    const [ground, reading] = [this.ground(), this.reading()];
+    if (ground === null || reading === null || this.#isSaving()) return null;
+    const text = toStoredText(this.#text());
+    this.#isSaving.set(true);
+    this.#conflict.set(null);
+    let stored: ScenarioReply | null = null;
+    await this.#guarded(async () => {
+      await this.#drafts.drop();
+      const reply = await firstValueFrom(send(ground, text));
+      this.#patchGround(reply);
+      this.#text.set(toText(reply));
+      this.#restoredAt.set(null);
+      this.#setAside.set(null);
+      const years = yearsThatDiffer(reading.years, reply.years);
+      this.#confirmation.set(
+        years.length === 0
+          ? { kind: 'agrees', version: reply.version }
+          : { kind: 'differs', version: reply.version, years },
+      );
+      stored = reply;
+    });
+    this.#isSaving.set(false);
+    if (stored === null) this.#keepDraft();
+    return stored;
+  }
+
+  /** Runs a change; a problem of the server stays on the page beside what was entered. */
+  async #guarded(work: () => Promise<void>): Promise<boolean> {
+    this.#problem.set(null);
+    try {
+      await work();
+      return true;
+    } catch (error) {
+      if (!(error instanceof ApiProblem)) throw error;
+      if (error.slug === 'stale-version') this.#conflict.set(error);
+      else this.#problem.set(error);
+      return false;
+    }
+  }
+
+  #show(view: ScenarioView): void {
+    this.#view.set(view);
+    this.#setAside.set(null);
+    this.#conflict.set(null);
+    this.#problem.set(null);
+    this.#confirmation.set(null);
+    if (view.kind !== 'ready') return;
+    const stored = storedText(view.ground);
+    const { draft } = view.ground;
+    const isRestored = draft !== null && !isSameText(draft, stored);
+    this.#text.set(isRestored ? toText(draft) : stored);
+    this.#restoredAt.set(isRestored ? draft.updatedAt : null);
+  }
+
+  #keepDraft(): void {
+    const ground = this.ground();
+    if (ground === null || !this.maySave()) return;
+    const { name, note, plan } = this.#text();
+    const scenarioId = ground.saved?.id ?? null;
+    const body = { scenarioId, name, note, plan: toStoredPlan(plan) };
+    this.#drafts.keep({ fitId: ground.fit.fit.id, body });
+  }
+
+  #patchGround(saved: ScenarioReply): void {
+    this.#patch((ground) => ({
+      ...ground,
+      saved,
+      draft: null,
+      scenarios: withScenario(ground.scenarios, saved),
+    }));
+  }
+
+  #patchScenarios(change: (scenarios: readonly ScenarioReply[]) => readonly ScenarioReply[]): void {
+    this.#patch((ground) => ({ ...ground, scenarios: change(ground.scenarios) }));
+  }
+
+  #patch(change: (ground: ScenarioGround) => ScenarioGround): void {
+    this.#view.update((view) =>
+      view.kind === 'ready' ? { kind: 'ready', ground: change(view.ground) } : view,
+    );
+  }
+}

@@ -1,0 +1,53 @@
+import type { PlanYear, SaveScenario, ScenarioReply } from '@contract';
+import { heldPlan, isSamePlan } from '../ui/plan/change-plan';
+import type { PlannedYear } from '../ui/plan/read-plan';
+import type { ScenarioGround } from './scenario-ground';
+
+/** A plan as it stands on the page, saved or not. */
+export interface ScenarioText {
+  readonly name: string;
+  readonly note: string;
+  readonly plan: readonly PlannedYear[];
+}
+
+/** What the server is sent of it. */
+export type StoredText = Omit<SaveScenario, 'fitId'>;
+
+export const noText: ScenarioText = { name: '', note: '', plan: [] };
+const firstYears = 3;
+const longestName = 120;
+
+/** What the page begins with: the scenario as it is stored, or the base without a name. */
+export function storedText({ saved, basis }: ScenarioGround): ScenarioText {
+  return saved === null ? { ...noText, plan: heldPlan(basis, firstYears) } : toText(saved);
+}
+
+export function toText({ name, note, plan }: ScenarioText): ScenarioText {
+  return { name, note, plan };
+}
+
+export function toStoredText({ name, note, plan }: ScenarioText): StoredText {
+  return { name, note, plan: toStoredPlan(plan) };
+}
+
+export function toStoredPlan(plan: readonly PlannedYear[]): PlanYear[] {
+  return plan.map(({ year, values }) => ({ year, values: [...values] }));
+}
+
+export function isSameText(left: ScenarioText, right: ScenarioText): boolean {
+  return left.name === right.name && left.note === right.note && isSamePlan(left.plan, right.plan);
+}
+
+export function copyName(name: string): string {
+  return `${name.slice(0, longestName - 7)} (copy)`;
+}
+
+/** The list with this scenario in its place, or at its end. */
+export function withScenario(
+  scenarios: readonly ScenarioReply[],
+  scenario: ScenarioReply,
+): readonly ScenarioReply[] {
+  return scenarios.some(({ id }) => id === scenario.id)
+    ? scenarios.map((other) => (other.id === scenario.id ? scenario : other))
+    : [...scenarios, scenario];
+}

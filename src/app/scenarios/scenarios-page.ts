@@ -1,0 +1,231 @@
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  effect,
+  inject,
+  input,
+  signal,
+  untracked,
+} from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { Router, RouterLink } from '@angular/router';
+import type { ScenarioReply } from '@contract';
+import { LineageStore } from '../api/lineage-store';
+import { DifferenceBars } from '../charts/difference-bars/difference-bars';
+import { ExpectedPath } from '../charts/expected-path/expected-path';
+import { CautionLine } from '../ui/caution-line';
+import { EmptyState } from '../ui/empty-state';
+import { NumberFormat } from '../ui/number-format';
+import { PageContext } from '../ui/page-context';
+import { PageHeader } from '../ui/page-header';
+import { withYearSet } from '../ui/plan/change-plan';
+import { FamiliarNotes } from '../ui/plan/familiar-notes';
+import { differenceData, expectedPathData } from '../ui/plan/plan-data';
+import { PlanEditor } from '../ui/plan/plan-editor';
+import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
+import { planFinding } from '../ui/plan/plan-words';
+import { planLineage } from '../ui/plan/planned-figure';
+import type { ReadYear } from '../ui/plan/read-plan';
+import { ProblemBannerState } from '../ui/problem';
+import { ProblemNotice } from '../ui/problem-notice';
+import { UndoNotice } from '../ui/undo-notice';
+import { DraftKeeper } from './draft-keeper';
+import { ScenarioList } from './scenario-list';
+import { ScenarioName, nameProblem } from './scenario-name';
+import { ScenarioNotices } from './scenario-notices';
+import { ScenarioStore } from './scenario-store';
+import { contextOf, shortHash } from './scenario-words';
+
+const unnamed = 'This plan';
+
+/** What would our plan do to the expected value? */
+@Component({
+  selector: 'kv-scenarios-page',
+  imports: [
+    CautionLine,
+    DifferenceBars,
+    EmptyState,
+    ExpectedPath,
+    FamiliarNotes,
+    MatButton,
+    PageHeader,
+    PlanEditor,
+    PlanTable,
+    ProblemNotice,
+    RouterLink,
+    ScenarioList,
+    ScenarioName,
+    ScenarioNotices,
+  ],
+  templateUrl: './scenarios-page.html',
+  styleUrl: './scenarios-page.css',
+  providers: [DraftKeeper, ScenarioStore],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ScenariosPage {
+  readonly #banner = inject(ProblemBannerState);
+  readonly #context = inject(PageContext);
+  readonly #lineage = inject(LineageStore);
+  readonly #numbers = inject(NumberFormat);
+  readonly #router = inject(Router);
+  readonly #undo = inject(UndoNotice);
+  protected readonly store = inject(ScenarioStore);
+
+  /** A saved scenario, from the path. */
+  readonly scenarioId = input<string>();
+  /** The fit of a new plan, from the query. */
+  readonly fit = input<string>();
+
+  protected readonly isTried = signal(false);
+  protected readonly drawn = signal<readonly string[]>([]);
+  protected readonly name = computed(() => this.store.text().name.trim() || unnamed);
+  protected readonly last = computed(() => this.store.reading()?.years.at(-1) ?? null);
+  protected readonly finding = computed(() => {
+    const [ground, last] = [this.store.ground(), this.last()];
+    if (ground === null || last === null) return 'Scenarios';
+    return planFinding(this.name(), ground.basis.company, last, this.#numbers);
+  });
+  protected readonly confidence = computed(() => {
+    const share = this.store.ground()?.basis.confidence ?? 0;
+    return `${Math.round(share * 1000) / 10} % intervals`;
+  });
+  protected readonly caption = computed(
+    () => `${this.#numbers.unitLabel()} · ${this.confidence()}`,
+  );
+  protected readonly source = computed(() => {
+    const ground = this.store.ground();
+    if (ground === null) return '';
+    const { basis, fit } = ground;
+    return `${this.caption()} · against the base, which holds FY${basis.last.year} · standing held fixed · fit ${shortHash(fit)}`;
+  });
+  protected readonly saveLabel = computed(() => {
+    const saved = this.store.ground()?.saved ?? null;
+    return saved === null ? 'Save scenario' : `Save as version ${saved.version + 1}`;
+  });
+  protected readonly draftWords = computed(() => {
+    if (!this.store.isChanged()) return this.store.ground()?.saved === null ? '' : 'Saved';
+    const state = this.store.draftState();
+    if (state === 'keeping') return 'Keeping your draft…';
+    return state === 'kept' ? 'Not saved; kept as your draft' : 'Not saved';
+  });
+  protected readonly plans = computed(() => {
+    const years = this.store.reading()?.years ?? [];
+    return [
+      {
+        name: this.name(),
+        years: years.map((year) => ({ ...year, familiar: year.familiar.kind })),
+      },
+    ];
+  });
+  protected readonly others = computed(() => {
+    const ground = this.store.ground();
+    return ground?.scenarios.filter(({ id }) => id !== ground.saved?.id) ?? [];
+  });
+  protected readonly path = computed(() => {
+    const [ground, reading] = [this.store.ground(), this.store.reading()];
+    if (ground === null || reading === null) return null;
+    const compared = this.others().filter(({ id }) => this.drawn().includes(id));
+    return expectedPathData(ground.fit.result?.ownYears ?? [], reading.base, [
+      { name: this.name(), years: reading.years },
+      ...compared,
+    ]);
+  });
+  protected readonly pathText = computed(() => ({
+    title: this.finding(),
+    caption: `Market value, ${this.caption()} of the expected value`,
+    source: this.source(),
+  }));
+  protected readonly parts = computed(() => {
+    const [ground, last] = [this.store.ground(), this.last()];
+    return ground === null || last === null ? null : differenceData(last, ground.labels);
+  });
+  protected readonly partsText = computed(() => ({
+    title: `What makes the difference to the base in FY${this.last()?.year ?? ''}`,
+    caption: this.caption(),
+    source: this.source(),
+  }));
+
+  constructor() {
+    effect(() => {
+      const address = { scenarioId: this.scenarioId() ?? null, fitId: this.fit() ?? null };
+      untracked(() => this.store.open(address));
+    });
+    effect(() => {
+      const ground = this.store.ground();
+      if (ground === null) return;
+      const name = ground.saved?.name ?? '';
+      untracked(() => this.#context.show(contextOf(ground, name)));
+    });
+  }
+
+  protected setInside({ year, familiar }: ReadYear): void {
+    this.store.change({ plan: withYearSet(this.store.text().plan, year, familiar.nearestInside) });
+  }
+
+  protected openFigure(wanted: PlannedFigureWanted): void {
+    const ground = this.store.ground();
+    if (ground === null) return;
+    const { key, ...planned } = planLineage(wanted, ground.labels, ground.basis.last.regressors);
+    this.#lineage.open({ fitId: ground.fit.fit.id }, key, planned);
+  }
+
+  /** A year of the chart: what the model expected of it, or expects of it under the plan. */
+  protected openYear(year: number): void {
+    const [plan] = this.plans();
+    const planned = plan.years.find((candidate) => candidate.year === year);
+    const ground = this.store.ground();
+    if (planned !== undefined) this.openFigure({ plan, year: planned, kind: 'expected' });
+    else if (ground !== null) this.#lineage.open({ fitId: ground.fit.fit.id }, `fitted.${year}`);
+  }
+
+  protected toggleDrawn(id: string): void {
+    this.drawn.update((ids) =>
+      ids.includes(id) ? ids.filter((other) => other !== id) : [...ids, id],
+    );
+  }
+
+  protected async save(): Promise<void> {
+    if (this.#hasNameProblem()) return;
+    await this.#goTo(await this.store.save());
+  }
+
+  protected async saveAsCopy(): Promise<void> {
+    if (this.#hasNameProblem()) return;
+    await this.#goTo(await this.store.saveAsCopy());
+  }
+
+  protected async copy(scenario: ScenarioReply): Promise<void> {
+    await this.#goTo(await this.store.copy(scenario));
+  }
+
+  protected async remove(scenario: ScenarioReply): Promise<void> {
+    const isOpen = scenario.id === this.store.ground()?.saved?.id;
+    if (!(await this.store.remove(scenario))) return;
+    if (isOpen)
+      await this.#router.navigate(['/scenarios'], { queryParams: { fit: scenario.fitId } });
+    await this.#undo.show(`Deleted “${scenario.name}”`, () => void this.#restore(scenario, isOpen));
+  }
+
+  async #restore(scenario: ScenarioReply, opens: boolean): Promise<void> {
+    const isHere = this.#router.url.startsWith('/scenarios');
+    if (await this.store.restore(scenario)) {
+      if (opens && isHere) await this.#goTo(scenario);
+      return;
+    }
+    // The notice outlives the page: what went wrong then has no other place.
+    const problem = this.store.problem();
+    if (problem !== null && !isHere) this.#banner.report(problem.shown);
+  }
+
+  #hasNameProblem(): boolean {
+    this.isTried.set(true);
+    return nameProblem(this.store.text().name) !== '';
+  }
+
+  async #goTo(scenario: ScenarioReply | null): Promise<void> {
+    if (scenario === null) return;
+    this.isTried.set(false);
+    await this.#router.navigate(['/scenarios', scenario.id]);
+  }
+}

@@ -1,0 +1,94 @@
+import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
+import type { PredictionBasis } from '@prediction';
+import { Mark } from '../mark';
+import { NumberFormat } from '../number-format';
+import { capitalised, familiarFinding, familiarReason } from './plan-words';
+import type { ReadYear } from './read-plan';
+
+/** For each planned year: whether the peer group has shown anything like it, why, and the way back inside. */
+@Component({
+  selector: 'kv-familiar-notes',
+  imports: [Mark],
+  template: `
+    <ul aria-live="polite">
+      @for (note of notes(); track note.year) {
+        <li>
+          <kv-mark [kind]="note.isInside ? 'fine' : 'caution'" />
+          <div>
+            <p>
+              <strong>{{ note.finding }}.</strong>
+              @if (!note.isInside) {
+                {{ note.reason }}
+              }
+            </p>
+            @if (!note.isInside) {
+              <p class="inside">
+                Nearest plan inside: {{ note.nearest }}.
+                <button
+                  type="button"
+                  class="kv-link kv-no-print"
+                  [attr.aria-label]="'Set FY' + note.year + ' to nearest inside'"
+                  (click)="insideWanted.emit(note.source)"
+                >
+                  Set to nearest inside
+                </button>
+              </p>
+            }
+          </div>
+        </li>
+      }
+    </ul>
+  `,
+  styles: `
+    ul {
+      display: grid;
+      gap: 8px;
+      padding: 0;
+      list-style: none;
+    }
+    li {
+      display: flex;
+      gap: 10px;
+      font-size: 13px;
+    }
+    li > div {
+      min-inline-size: 0;
+      overflow-wrap: anywhere;
+    }
+    kv-mark {
+      margin-block-start: 2px;
+    }
+    strong {
+      font-weight: 500;
+    }
+    .inside {
+      color: var(--kv-soft-ink);
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class FamiliarNotes {
+  readonly #numbers = inject(NumberFormat);
+
+  readonly basis = input.required<PredictionBasis>();
+  readonly labels = input.required<readonly string[]>();
+  readonly years = input.required<readonly ReadYear[]>();
+  /** The year whose values are wanted at `familiar.nearestInside`. */
+  readonly insideWanted = output<ReadYear>();
+
+  protected readonly notes = computed(() =>
+    this.years().map((year) => ({
+      year: year.year,
+      source: year,
+      isInside: year.familiar.kind === 'inside',
+      finding: familiarFinding(year.year, year.familiar.kind),
+      reason: familiarReason(this.basis(), this.labels(), year.familiar, this.#numbers),
+      nearest: this.labels()
+        .map((label, k) => {
+          const text = this.#numbers.figure(year.familiar.nearestInside[k]);
+          return `${k === 0 ? capitalised(label) : label} ${text}`;
+        })
+        .join(', '),
+    })),
+  );
+}

@@ -1,0 +1,45 @@
+import type { DifferenceData, ExpectedPathData } from '@figures';
+import type { IntervalEstimate, OwnYear } from '@prediction';
+import { capitalised } from './plan-words';
+import type { ReadYear } from './read-plan';
+
+export interface DrawnPlan {
+  readonly name: string;
+  readonly years: readonly { readonly year: number; readonly expected: IntervalEstimate }[];
+}
+
+/** What the chart of the expected value draws: history, the base held as long as the longest plan, and the plans. */
+export function expectedPathData(
+  ownYears: readonly OwnYear[],
+  base: IntervalEstimate,
+  plans: readonly DrawnPlan[],
+): ExpectedPathData {
+  const years = new Set(plans.flatMap((plan) => plan.years.map(({ year }) => year)));
+  return {
+    ownYears,
+    base: [...years].sort((a, b) => a - b).map((year) => ({ year, estimate: base.estimate })),
+    plans: plans.map((plan) => ({
+      name: plan.name,
+      years: plan.years.map(({ year, expected: { estimate, low, high } }) => ({
+        year,
+        estimate,
+        low,
+        high,
+      })),
+    })),
+  };
+}
+
+/** What the bars of a year's difference to the base draw; their terms add up to its total. */
+export function differenceData(year: ReadYear, labels: readonly string[]): DifferenceData {
+  return {
+    terms: year.parts.terms.map(({ estimate, low, high, intervalReason }, k) => ({
+      name: capitalised(labels[k]),
+      estimate,
+      low,
+      high,
+      ...(intervalReason === undefined ? {} : { intervalReason }),
+    })),
+    total: year.difference,
+  };
+}

@@ -1,0 +1,141 @@
+import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
+import type { FamiliarRange, IntervalEstimate } from '@prediction';
+import { Figure } from '../figure';
+import { NumberFormat } from '../number-format';
+import { capitalised } from './plan-words';
+import type { PlannedYear } from './read-plan';
+
+/** A planned year with its figures, from the screen or as they were stored. */
+export interface PlanTableYear extends PlannedYear {
+  readonly expected: IntervalEstimate;
+  readonly difference: IntervalEstimate;
+  readonly familiar: FamiliarRange['kind'];
+}
+
+export interface PlanTablePlan {
+  readonly name: string;
+  readonly years: readonly PlanTableYear[];
+}
+
+/** A figure of a plan that the person wants to see through. */
+export interface PlannedFigureWanted {
+  readonly plan: PlanTablePlan;
+  readonly year: PlanTableYear;
+  readonly kind: 'expected' | 'difference';
+}
+
+const familiarWords: Readonly<Record<FamiliarRange['kind'], string>> = {
+  inside: 'inside',
+  edge: 'at the edge',
+  outside: 'outside',
+};
+
+/** The figures of plans by year; each opens its lineage. */
+@Component({
+  selector: 'kv-plan-table',
+  imports: [Figure],
+  template: `
+    <div class="kv-table-scroll" tabindex="0" role="region" [attr.aria-label]="label()">
+      <table class="kv-table">
+        <caption>
+          {{
+            caption()
+          }}
+        </caption>
+        <thead>
+          <tr>
+            @if (plans().length > 1) {
+              <th scope="col">Scenario</th>
+            }
+            <th scope="col">Year</th>
+            @for (name of regressors(); track name) {
+              <th scope="col" class="kv-number">{{ name }}</th>
+            }
+            <th scope="col" class="kv-number">Expected value</th>
+            <th scope="col" class="kv-number">Against base</th>
+            <th scope="col">Familiar range</th>
+          </tr>
+        </thead>
+        <tbody>
+          @for (plan of plans(); track $index) {
+            @for (year of plan.years; track year.year; let first = $first) {
+              <tr>
+                @if (plans().length > 1 && first) {
+                  <th scope="rowgroup" class="kv-plan" [attr.rowspan]="plan.years.length">
+                    {{ plan.name }}
+                  </th>
+                }
+                <th scope="row">FY{{ year.year }}</th>
+                @for (value of year.values; track $index) {
+                  <td class="kv-number">
+                    {{ numbers.figure(value, 'money', valueDigits()[$index]) }}
+                  </td>
+                }
+                <td class="kv-number">
+                  <kv-figure
+                    [value]="year.expected.estimate"
+                    [low]="year.expected.low"
+                    [high]="year.expected.high"
+                    [digits]="expectedDigits()"
+                    [figure]="'expected.' + year.year"
+                    (opened)="opened.emit({ plan, year, kind: 'expected' })"
+                  />
+                </td>
+                <td class="kv-number">
+                  <kv-figure
+                    [value]="year.difference.estimate"
+                    [low]="year.difference.low"
+                    [high]="year.difference.high"
+                    [digits]="differenceDigits()"
+                    [hasPlus]="true"
+                    [figure]="'difference.' + year.year"
+                    (opened)="opened.emit({ plan, year, kind: 'difference' })"
+                  />
+                </td>
+                <td>{{ familiarWords[year.familiar] }}</td>
+              </tr>
+            }
+          }
+        </tbody>
+      </table>
+    </div>
+    @for (reason of reasons(); track reason) {
+      <p class="kv-caption">{{ reason }}</p>
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class PlanTable {
+  protected readonly numbers = inject(NumberFormat);
+
+  readonly plans = input.required<readonly PlanTablePlan[]>();
+  /** The regressors in words. */
+  readonly labels = input.required<readonly string[]>();
+  /** Unit and confidence level: `EUR m · 95 % intervals`. */
+  readonly caption = input.required<string>();
+  readonly label = input('Figures of the plan by year');
+  readonly opened = output<PlannedFigureWanted>();
+
+  protected readonly familiarWords = familiarWords;
+  protected readonly regressors = computed(() => this.labels().map(capitalised));
+  readonly #years = computed(() => this.plans().flatMap(({ years }) => years));
+  protected readonly valueDigits = computed(() =>
+    this.labels().map((_, k) =>
+      this.numbers.columnDigits(this.#years().map((year) => year.values[k])),
+    ),
+  );
+  protected readonly expectedDigits = computed(() =>
+    this.numbers.columnDigits(this.#years().map(({ expected }) => expected.estimate)),
+  );
+  protected readonly differenceDigits = computed(() =>
+    this.numbers.columnDigits(this.#years().map(({ difference }) => difference.estimate)),
+  );
+  /** Why figures have no interval, each reason once. */
+  protected readonly reasons = computed(() => [
+    ...new Set(
+      this.#years()
+        .flatMap(({ expected, difference }) => [expected, difference])
+        .flatMap(({ intervalReason }) => intervalReason ?? []),
+    ),
+  ]);
+}

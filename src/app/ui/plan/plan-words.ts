@@ -1,0 +1,85 @@
+import type { FamiliarRange, IntervalEstimate, PredictionBasis } from '@prediction';
+import type { NumberFormat } from '../number-format';
+import { listed } from './regressor-labels';
+
+/**
+ * A plan's finding: `Build-out lifts the expected value of Velmara by 285 (100 to 470) by FY2028`.
+ *
+ * Where the interval holds zero the sentence says `may`.
+ */
+export function planFinding(
+  plan: string,
+  company: string,
+  last: { readonly year: number; readonly difference: IntervalEstimate },
+  numbers: NumberFormat,
+): string {
+  const { difference, year } = last;
+  if (difference.estimate === 0)
+    return `${plan} leaves the expected value of ${company} where the base has it in FY${year}`;
+  const isLower = difference.estimate < 0;
+  const size = isLower ? turned(difference) : difference;
+  const isCertain = size.low !== null && size.low > 0;
+  const verb = isLower ? 'lower' : 'lift';
+  const says = isCertain ? `${verb}s` : `may ${verb}`;
+  return `${plan} ${says} the expected value of ${company} by ${numbers.interval(size, 'money', 3)} by FY${year}`;
+}
+
+const places: Readonly<Record<FamiliarRange['kind'], string>> = {
+  inside: 'inside the familiar range',
+  edge: 'at the edge of the familiar range',
+  outside: 'outside the familiar range',
+};
+
+/** `FY2028 is at the edge of the familiar range`. */
+export function familiarFinding(year: number, kind: FamiliarRange['kind']): string {
+  return `FY${year} is ${places[kind]}`;
+}
+
+/** Why a planned year lies where it does: as a whole, then value by value against what was observed. */
+export function familiarReason(
+  basis: PredictionBasis,
+  labels: readonly string[],
+  familiar: FamiliarRange,
+  numbers: NumberFormat,
+): string {
+  const { company } = basis;
+  const whole = {
+    inside: `${company} itself has been as far from its own average in a past year.`,
+    edge: `It lies further from ${company}’s own average than ${company} has ever been; a peer has been as far from its own.`,
+    outside: `It lies further from ${company}’s own average than any company of the group has been from its own, so the model has nothing to judge it by.`,
+  }[familiar.kind];
+  const odd = familiar.reasons.flatMap((reason, k) => {
+    if (reason.own === 'within') return [];
+    return [
+      `${capitalised(labels[k])} ${numbers.figure(reason.planned)} is ${reason.own} ${company}’s own range (${rangeText(basis.ownRange[k], numbers)}) and ${reason.peers} its peers’ (${rangeText(basis.peerRange[k], numbers)}).`,
+    ];
+  });
+  if (odd.length > 0) return `${whole} ${odd.join(' ')}`;
+  const together =
+    labels.length > 1 && familiar.kind !== 'inside'
+      ? ` Each value alone has been seen; ${listed(labels)} together have not.`
+      : '';
+  return whole + together;
+}
+
+function rangeText(
+  range: { readonly low: number; readonly high: number },
+  numbers: NumberFormat,
+): string {
+  const digits = numbers.columnDigits([range.low, range.high]);
+  return numbers.bounds({ estimate: range.high, ...range }, 'money', digits);
+}
+
+function turned(value: IntervalEstimate): IntervalEstimate {
+  const { estimate, low, high } = value;
+  return {
+    ...value,
+    estimate: -estimate,
+    low: high === null ? null : -high,
+    high: low === null ? null : -low,
+  };
+}
+
+export function capitalised(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1);
+}

@@ -1,0 +1,45 @@
+import type { PredictionBasis } from '@prediction';
+import type { PlannedYear } from './read-plan';
+
+export interface SliderRange {
+  readonly min: number;
+  readonly max: number;
+  readonly step: number;
+  /** What the own company and its peers have shown. */
+  readonly familiar: { readonly low: number; readonly high: number };
+}
+
+const stepsWanted = 200;
+
+/**
+ * Where a regressor's slider ends: half the own company's observed span below it and twice that above, never below
+ * zero where nothing was, and as far as the plan itself reaches where an amount was typed beyond.
+ */
+export function sliderRange(
+  basis: PredictionBasis,
+  regressor: number,
+  plan: readonly PlannedYear[],
+): SliderRange {
+  const own = basis.ownRange[regressor];
+  const peers = basis.peerRange[regressor];
+  const held = basis.last.regressors[regressor];
+  const span = Math.max(own.high - own.low, Math.abs(held) / 2) || 1;
+  const planned = plan.map(({ values }) => values[regressor]);
+  const floor = own.low >= 0 ? Math.max(0, own.low - span / 2) : own.low - span / 2;
+  const low = Math.min(floor, ...planned);
+  const high = Math.max(own.high + span, ...planned);
+  const step = roundStep((high - low) / stepsWanted);
+  return {
+    min: Math.floor(low / step) * step,
+    max: Math.ceil(high / step) * step,
+    step,
+    familiar: { low: Math.min(own.low, peers.low), high: Math.max(own.high, peers.high) },
+  };
+}
+
+/** The next of 1, 2, 5 · 10ⁿ. */
+function roundStep(wanted: number): number {
+  const power = 10 ** Math.floor(Math.log10(wanted));
+  const factor = [1, 2, 5, 10].find((candidate) => candidate * power >= wanted) ?? 10;
+  return factor * power;
+}
