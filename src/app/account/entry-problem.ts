@@ -1,7 +1,7 @@
 import type { FormControl } from '@angular/forms';
 import type { ApiProblem } from '../api/api-problem';
 import type { ShownProblem } from '../ui/problem';
-import { errorWords } from './contract-validator';
+import { errorWords } from '../ui/contract-validator';
 
 /** A field of a form with the name that stands on it and its place in the request. */
 export interface EntryField {

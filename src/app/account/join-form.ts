@@ -16,7 +16,7 @@ import { MatInputModule } from '@angular/material/input';
 import { type InvitationView, Password, PersonName } from '@contract';
 import { AccountsApi } from '../api/accounts-api';
 import { ProblemNotice } from '../ui/problem-notice';
-import { byContract, errorWords } from './contract-validator';
+import { byContract, errorWords } from '../ui/contract-validator';
 import { EntryForm } from './entry-form';
 import type { EntryField } from './entry-problem';
 import { PasswordField } from './password-field';

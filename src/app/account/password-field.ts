@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, input, signal } from '@an
 import { type FormControl, ReactiveFormsModule } from '@angular/forms';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInputModule } from '@angular/material/input';
-import { errorWords } from './contract-validator';
+import { errorWords } from '../ui/contract-validator';
 
 /** A password, hidden until the person wants to see it; password managers and pasting work. */
 @Component({

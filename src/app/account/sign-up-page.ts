@@ -14,7 +14,7 @@ import { SignUp } from '@contract';
 import { AccountsApi } from '../api/accounts-api';
 import { ProblemNotice } from '../ui/problem-notice';
 import { AccountSheet } from './account-sheet';
-import { byContract, errorWords } from './contract-validator';
+import { byContract, errorWords } from '../ui/contract-validator';
 import { EntryForm } from './entry-form';
 import { PasswordField } from './password-field';
 

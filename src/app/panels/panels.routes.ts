@@ -1,4 +1,14 @@
 import type { Routes } from '@angular/router';
 
-/** Pages under /panel. */
-export const routes: Routes = [];
+const loadPanelPage = async () => (await import('./panel-page')).PanelPage;
+
+/** Pages under /panel; without an id stands the newest panel version. */
+export const routes: Routes = [
+  { path: '', pathMatch: 'full', loadComponent: loadPanelPage },
+  {
+    path: 'import/:importId',
+    title: 'Bring in a panel',
+    loadComponent: async () => (await import('./import-page')).ImportPage,
+  },
+  { path: ':panelVersionId', loadComponent: loadPanelPage },
+];

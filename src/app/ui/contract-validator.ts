@@ -4,12 +4,12 @@ import type * as z from 'zod';
 /**
  * The contract's own rule as a form's, so that the form and the server agree.
  *
- * @param missing  what is said of an empty field, as `expected your name`.
+ * @param missing  what is said of an empty field, as `expected your name`; without it the rule itself decides.
  * @returns a validator whose error is `{ words }`: what was wanted and, where it helps, what was found.
  */
-export function byContract(schema: z.ZodType, missing: string): ValidatorFn {
+export function byContract(schema: z.ZodType, missing?: string): ValidatorFn {
   return ({ value }: AbstractControl<unknown>): ValidationErrors | null => {
-    if (value === '') return { words: missing };
+    if (value === '' && missing !== undefined) return { words: missing };
     const parsed = schema.safeParse(value);
     if (parsed.success) return null;
     const [issue] = parsed.error.issues;

@@ -1,0 +1,51 @@
+import type { ColumnRole, PanelVersionReply } from '@contract';
+
+/** One row of the panel as the grid shows it. */
+export interface PanelRow {
+  /** Line of the imported file. */
+  readonly fileRow: number;
+  readonly company: string;
+  readonly year: number;
+  /** In the order of the panel's columns. */
+  readonly values: readonly (number | null)[];
+}
+
+const roleNames: Readonly<Record<Exclude<ColumnRole, 'other'>, string>> = {
+  marketValue: 'Market value',
+  capex: 'Capex',
+  bookEquity: 'Book equity',
+};
+
+/** What a column is called on screen: what it is to the model, or its header in the file. */
+export function columnTitle(column: PanelVersionReply['columns'][number]): string {
+  return column.role === 'other' ? column.name : roleNames[column.role];
+}
+
+export function panelRows({ rows }: PanelVersionReply): readonly PanelRow[] {
+  return rows.fileRow.map((fileRow, row) => ({
+    fileRow,
+    company: rows.company[row],
+    year: rows.year[row],
+    values: rows.values.map((column) => column[row]),
+  }));
+}
+
+/** The titles of the columns in which the row has no value. */
+export function missingIn(row: PanelRow, titles: readonly string[]): readonly string[] {
+  return titles.filter((_, column) => row.values[column] === null);
+}
+
+/** `Market value is the file's column “mv”, capex “capex_eur”`: where the model's columns come from. */
+export function columnSources(panel: PanelVersionReply): string {
+  const named = [
+    { title: 'Company', name: panel.companyHeader },
+    { title: 'Year', name: panel.yearHeader },
+    ...panel.columns
+      .filter((column) => column.role !== 'other')
+      .map((column) => ({ title: columnTitle(column), name: column.name })),
+  ];
+  const words = named.map(({ title, name }, index) =>
+    index === 0 ? `${title} is the file’s column “${name}”` : `${title.toLowerCase()} “${name}”`,
+  );
+  return `${words.join(', ')}.`;
+}
