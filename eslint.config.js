@@ -113,6 +113,8 @@ export default defineConfig(
       ],
       // The house forbids index signatures by dot (compiler option), so the bracket form is wanted.
       '@typescript-eslint/dot-notation': ['error', { allowIndexSignaturePropertyAccess: true }],
+      // Material's configurations are classes, and object literals fill them everywhere.
+      '@typescript-eslint/no-unsafe-class-instance-assignment': 'off',
       // Type parameters that occur once document a promise, as in Repositories.transaction<Result>.
       '@typescript-eslint/no-unnecessary-type-parameters': 'off',
     },
