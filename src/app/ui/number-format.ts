@@ -1,4 +1,4 @@
-import { Injectable, computed, signal } from '@angular/core';
+import { Injectable, computed, inject, signal } from '@angular/core';
 import {
   type MoneyUnit,
   type NegativeStyle,
@@ -14,6 +14,7 @@ import {
   unitRatio,
   unitText,
 } from '@figures';
+import { PageContext } from './page-context';
 
 /**
  * `money` is in the panel's unit and follows the unit switch; `plain` is a ratio, a slope or a statistic and does
@@ -31,10 +32,12 @@ export const tableDigits = 4;
  */
 @Injectable({ providedIn: 'root' })
 export class NumberFormat {
-  /** ISO 4217 code of the panel; empty where no money is shown. Set through PageContext. */
-  readonly currency = signal('');
-  /** The unit of the panel's numbers. Set through PageContext. */
-  readonly panelUnit = signal<MoneyUnit>('units');
+  readonly #context = inject(PageContext);
+
+  /** ISO 4217 code of the panel; empty where no money is shown. The page's context sets it. */
+  readonly currency = this.#context.currency;
+  /** The unit of the panel's numbers. The page's context sets it. */
+  readonly panelUnit = this.#context.panelUnit;
   /** The unit in which the person wants to see money. Set by the shell from the preferences. */
   readonly unit = signal<MoneyUnit>('millions');
   readonly negatives = signal<NegativeStyle>('minus');

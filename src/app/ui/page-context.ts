@@ -1,6 +1,5 @@
-import { Injectable, inject, signal } from '@angular/core';
+import { Injectable, signal } from '@angular/core';
 import type { MoneyUnit } from '@figures';
-import { NumberFormat } from './number-format';
 
 /** One step of the lineage line: panel version, peer group version, fit, scenario. */
 export interface LineageStep {
@@ -31,24 +30,27 @@ export interface ShownContext {
 /**
  * What a page tells the frame around it: whose figures these are, in which currency, and where they come from.
  * A page calls `show` when its data is there; the shell clears it on leaving the page.
+ * The page's title needs it from the start, so it must not draw the chart layouts in: NumberFormat builds on it.
  */
 @Injectable({ providedIn: 'root' })
 export class PageContext {
-  readonly #numbers = inject(NumberFormat);
   readonly #ownCompany = signal('');
   readonly #lineage = signal<readonly LineageStep[]>([]);
   readonly #stale = signal<StaleNotice | null>(null);
 
   readonly ownCompany = this.#ownCompany.asReadonly();
-  readonly currency = this.#numbers.currency.asReadonly();
+  /** ISO 4217 code of the panel; empty where no money is shown. */
+  readonly currency = signal('');
+  /** The unit of the panel's numbers. */
+  readonly panelUnit = signal<MoneyUnit>('units');
   readonly lineage = this.#lineage.asReadonly();
   readonly stale = this.#stale.asReadonly();
 
   /** Replaces the whole context; what is left out is empty. */
   show(context: ShownContext): void {
     this.#ownCompany.set(context.ownCompany ?? '');
-    this.#numbers.currency.set(context.currency ?? '');
-    this.#numbers.panelUnit.set(context.unit ?? 'units');
+    this.currency.set(context.currency ?? '');
+    this.panelUnit.set(context.unit ?? 'units');
     this.#lineage.set(context.lineage ?? []);
     this.#stale.set(context.stale ?? null);
   }
