@@ -5,7 +5,7 @@ import { NumberFormat } from '../ui/number-format';
 import { moneyText } from './money-text';
 import { missingSeats, seatTotals } from './seats-headline';
 
-const kindWords = { analyst: 'Analyst seats', reading: 'Reading seats' } as const;
+const kindWords = { analyst: 'Analyst', reading: 'Reading' } as const;
 
 /** Bought, used, invited and free, by kind and in all. */
 @Component({
@@ -16,12 +16,12 @@ const kindWords = { analyst: 'Analyst seats', reading: 'Reading seats' } as cons
       <table class="kv-table">
         <thead>
           <tr>
-            <th scope="col">Kind</th>
+            <th scope="col">Seats</th>
             <th scope="col" class="kv-number">Bought</th>
             <th scope="col" class="kv-number">Used</th>
             <th scope="col" class="kv-number">Invited</th>
             <th scope="col" class="kv-number">Free</th>
-            <th scope="col" class="kv-number">One seat a {{ interval() }}</th>
+            <th scope="col" class="kv-number price">One a {{ interval() }}</th>
           </tr>
         </thead>
         <tbody>
@@ -35,7 +35,7 @@ const kindWords = { analyst: 'Analyst seats', reading: 'Reading seats' } as cons
             </tr>
           }
           <tr class="kv-total-row">
-            <th scope="row">All seats</th>
+            <th scope="row">All</th>
             @for (count of totals(); track $index) {
               <td class="kv-number">{{ count }}</td>
             }
@@ -57,6 +57,15 @@ const kindWords = { analyst: 'Analyst seats', reading: 'Reading seats' } as cons
     .missing {
       display: flex;
       gap: 8px;
+    }
+    @media (width < 480px) {
+      th,
+      td {
+        padding-inline-end: 8px;
+      }
+      th.price {
+        white-space: normal;
+      }
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -101,10 +101,10 @@ describe('the Seats page', () => {
       '3 of 8 seats are used, 1 is held by an invitation, 4 are free',
     );
     expect(table('Seats by kind')).toEqual([
-      ['Kind', 'Bought', 'Used', 'Invited', 'Free', 'One seat a month'],
-      ['Analyst seats', '3', '1', '1', '1', '€89.00'],
-      ['Reading seats', '5', '2', '–', '3', '€19.00'],
-      ['All seats', '8', '3', '1', '4', ''],
+      ['Seats', 'Bought', 'Used', 'Invited', 'Free', 'One a month'],
+      ['Analyst', '3', '1', '1', '1', '€89.00'],
+      ['Reading', '5', '2', '–', '3', '€19.00'],
+      ['All', '8', '3', '1', '4', ''],
     ]);
   });
 

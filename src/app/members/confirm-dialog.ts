@@ -33,6 +33,11 @@ export interface ConfirmDialogData {
       </button>
     </mat-dialog-actions>
   `,
+  styles: `
+    :host {
+      --mat-dialog-supporting-text-color: var(--kv-ink);
+    }
+  `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class ConfirmDialog {

@@ -1,12 +1,13 @@
 import {
   ChangeDetectionStrategy,
   Component,
-  computed,
+  type ElementRef,
+  afterNextRender,
   inject,
   output,
   signal,
+  viewChild,
 } from '@angular/core';
-import { toSignal } from '@angular/core/rxjs-interop';
 import {
   type AbstractControl,
   NonNullableFormBuilder,
@@ -56,19 +57,19 @@ export class InviteForm {
 
   readonly closed = output();
 
+  private readonly email = viewChild.required<ElementRef<HTMLInputElement>>('email');
+
   protected readonly form = inject(NonNullableFormBuilder).group({
     email: ['', [emailOfContract]],
   });
-  readonly #status = toSignal(this.form.statusChanges);
   protected readonly roles = signal<readonly Role[]>([]);
   protected readonly isTried = signal(false);
   protected readonly isSending = signal(false);
   protected readonly problem = signal<ShownProblem | null>(null);
-  protected readonly emailError = computed(() => {
-    this.#status();
-    const error: unknown = this.form.controls.email.getError('contract');
-    return typeof error === 'string' ? error : '';
-  });
+
+  constructor() {
+    afterNextRender(() => this.email().nativeElement.focus());
+  }
 
   protected async invite(): Promise<void> {
     this.isTried.set(true);
@@ -84,6 +85,5 @@ export class InviteForm {
 
 /** The contract's own rule, so that the form and the server agree. */
 function emailOfContract(control: AbstractControl<string>): ValidationErrors | null {
-  const parsed = EmailAddress.safeParse(control.value.trim());
-  return parsed.success ? null : { contract: parsed.error.issues[0].message };
+  return EmailAddress.safeParse(control.value.trim()).success ? null : { contract: true };
 }

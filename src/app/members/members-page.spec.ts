@@ -166,7 +166,7 @@ describe('the Members page', () => {
     await press('Invite a member');
     await press('Make the link');
     const form = page().querySelector('kv-invite-form');
-    expect(form?.textContent).toContain('expected an e-mail address');
+    expect(form?.textContent).toContain('Enter an e-mail address');
     expect(form?.textContent).toContain('Choose at least one role.');
   });
 
@@ -189,6 +189,7 @@ describe('the Members page', () => {
 
     await press('Done');
     expect(page().querySelector('kv-new-link')).toBeNull();
+    expect(document.activeElement?.textContent.trim()).toBe('Invite a member');
   });
 
   it('keeps the form with the server’s reason when an invitation is refused', async () => {
@@ -232,9 +233,9 @@ describe('the Members page', () => {
       { status: 409, statusText: 'Conflict' },
     );
     await settled();
-    expect(dialog().querySelector('[role="alert"]')?.textContent).toContain(
-      'The last billing admin stays.',
-    );
+    const notice = dialog().querySelector('[role="alert"]')?.textContent;
+    expect(notice).toContain('The roles were not changed');
+    expect(notice).toContain('The last billing admin stays.');
     expect(TestBed.inject(SessionStore).roles()).toContain('billing_admin');
   });
 
@@ -257,6 +258,8 @@ describe('the Members page', () => {
     expectCall('DELETE', `/api/members/${other}`).flush(null);
     await settled();
     await list({ members: reply.members.slice(0, 1), invitations: [] });
+    await settled();
+    expect(document.activeElement).toBe(page().querySelector('h1'));
     expect(page().querySelector('h1')?.textContent).toBe('1 member');
     expect(page().textContent).toContain('No invitation is open.');
   });

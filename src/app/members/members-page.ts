@@ -1,7 +1,19 @@
-import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { DOCUMENT } from '@angular/common';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  ElementRef,
+  Injector,
+  afterNextRender,
+  computed,
+  inject,
+  signal,
+  viewChild,
+} from '@angular/core';
 import { MatButtonModule } from '@angular/material/button';
 import { MatDialog, MatDialogConfig } from '@angular/material/dialog';
 import { Router, RouterLink } from '@angular/router';
+import { firstValueFrom } from 'rxjs';
 import { ProblemNotice } from '../ui/problem-notice';
 import { ConfirmDialog, type ConfirmDialogData } from './confirm-dialog';
 import { InvitationTable } from './invitation-table';
@@ -30,9 +42,16 @@ import { RolesDialog, type RolesDialogData } from './roles-dialog';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class MembersPage {
+  readonly #document = inject(DOCUMENT);
+  readonly #injector = inject(Injector);
   readonly #dialog = inject(MatDialog);
   readonly #router = inject(Router);
   protected readonly store = inject(MembersStore);
+
+  private readonly title = viewChild.required<ElementRef<HTMLElement>>('title');
+  private readonly inviteButton = viewChild<string, ElementRef<HTMLElement>>('inviteButton', {
+    read: ElementRef,
+  });
 
   protected readonly roleWords = roleWords;
   protected readonly isInviting = signal(false);
@@ -54,6 +73,17 @@ export class MembersPage {
     this.isInviting.set(true);
   }
 
+  /** The sheet with the link takes the focus when there is one; else it goes back to where inviting began. */
+  protected stopInviting(): void {
+    this.isInviting.set(false);
+    if (this.store.link() === null) this.#focusInviteButton();
+  }
+
+  protected putLinkAway(): void {
+    this.store.forgetLink();
+    this.#focusInviteButton();
+  }
+
   protected changeRoles(member: Member): void {
     const data: RolesDialogData = {
       member,
@@ -66,8 +96,8 @@ export class MembersPage {
     this.#dialog.open(RolesDialog, dialogOf(data));
   }
 
-  protected remove(member: Member): void {
-    this.#confirm({
+  protected remove(member: Member): Promise<void> {
+    return this.#confirm({
       title: `Remove ${member.name}?`,
       consequence:
         'They are signed out at once and can no longer open this workspace. What they made stays.',
@@ -76,8 +106,8 @@ export class MembersPage {
     });
   }
 
-  protected withdraw(invitation: Invitation): void {
-    this.#confirm({
+  protected withdraw(invitation: Invitation): Promise<void> {
+    return this.#confirm({
       title: `Withdraw the invitation to ${invitation.email}?`,
       consequence: 'The link that was made for it opens nothing any more.',
       action: 'Withdraw invitation',
@@ -85,8 +115,15 @@ export class MembersPage {
     });
   }
 
-  #confirm(data: ConfirmDialogData): void {
-    this.#dialog.open(ConfirmDialog, dialogOf(data));
+  /** The row that asked may be gone afterwards: then reading goes on at the top of the page. */
+  async #confirm(data: ConfirmDialogData): Promise<void> {
+    const dialog = this.#dialog.open(ConfirmDialog, dialogOf(data));
+    await firstValueFrom(dialog.afterClosed());
+    if (this.#document.activeElement === this.#document.body) this.title().nativeElement.focus();
+  }
+
+  #focusInviteButton(): void {
+    afterNextRender(() => this.inviteButton()?.nativeElement.focus(), { injector: this.#injector });
   }
 }
 

@@ -44,14 +44,14 @@ export class MembersStore {
 
   /** @returns the problem that kept the invitation from being made, or null. */
   invite(email: string, roles: readonly Role[]): Promise<ShownProblem | null> {
-    return this.#change(async () => {
+    return this.#change('The invitation was not made', async () => {
       const created = await firstValueFrom(this.#api.invite({ email, roles: [...roles] }));
       this.#link.set({ email, token: created.token, expiresAt: created.expiresAt });
     });
   }
 
   withdraw(invitation: Invitation): Promise<ShownProblem | null> {
-    return this.#change(async () => {
+    return this.#change('The invitation was not withdrawn', async () => {
       await done(this.#api.withdraw(invitation.id));
       // The link of a withdrawn invitation opens nothing any more.
       if (this.#link()?.email === invitation.email) this.#link.set(null);
@@ -59,7 +59,9 @@ export class MembersStore {
   }
 
   remove(member: Member): Promise<ShownProblem | null> {
-    return this.#change(() => done(this.#api.remove(member.personId)));
+    return this.#change(`${member.name} was not removed`, () =>
+      done(this.#api.remove(member.personId)),
+    );
   }
 
   /**
@@ -73,6 +75,7 @@ export class MembersStore {
   ): Promise<{ readonly problem: ShownProblem | null; readonly leaveTo: string | null }> {
     const keepsPage = !member.isYou || roles.includes('billing_admin');
     const problem = await this.#change(
+      'The roles were not changed',
       async () => {
         await done(this.#api.changeRoles(member.personId, { roles: [...roles] }));
         const session = this.#session.session();
@@ -84,7 +87,9 @@ export class MembersStore {
     return { problem, leaveTo: problem === null && !keepsPage ? landingPath(roles) : null };
   }
 
+  /** @param failure  title of what was wanted and did not happen. */
   async #change(
+    failure: string,
     work: () => Promise<void>,
     options: { readonly readAgain: boolean } = { readAgain: true },
   ): Promise<ShownProblem | null> {
@@ -92,7 +97,7 @@ export class MembersStore {
       await work();
     } catch (error) {
       if (!(error instanceof ApiProblem)) throw error;
-      return error.shown;
+      return { ...error.shown, title: failure };
     }
     if (options.readAgain) await this.#read();
     return null;

@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, input, output } from '@angular/core';
 import type { Role } from '@contract';
+import { Mark } from '../ui/mark';
 import { roleWords } from './role-words';
 
 let pickers = 0;
@@ -7,6 +8,7 @@ let pickers = 0;
 /** Roles to choose from, each with what it opens. */
 @Component({
   selector: 'kv-role-picker',
+  imports: [Mark],
   template: `
     <fieldset [attr.aria-describedby]="isMissing() ? errorId : null">
       <legend>{{ legend() }}</legend>
@@ -24,7 +26,9 @@ let pickers = 0;
         </label>
       }
       @if (isMissing()) {
-        <p class="error" role="alert" [id]="errorId">Choose at least one role.</p>
+        <p class="error" role="alert" [id]="errorId">
+          <kv-mark kind="error" /> Choose at least one role.
+        </p>
       }
     </fieldset>
   `,
@@ -57,7 +61,8 @@ let pickers = 0;
       accent-color: var(--kv-spruce);
     }
     .error {
-      color: var(--kv-brick);
+      display: flex;
+      gap: 12px;
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -21,7 +21,7 @@ export interface RolesDialogData {
     <h2 mat-dialog-title>Roles of {{ data.member.name }}</h2>
     <mat-dialog-content>
       <kv-role-picker
-        legend="Roles"
+        [legend]="data.member.isYou ? 'What you may do' : 'What they may do'"
         [roles]="roles()"
         [isMissing]="roles().length === 0"
         (rolesChanged)="roles.set($event)"
@@ -44,6 +44,11 @@ export interface RolesDialogData {
         Save roles
       </button>
     </mat-dialog-actions>
+  `,
+  styles: `
+    :host {
+      --mat-dialog-supporting-text-color: var(--kv-ink);
+    }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
