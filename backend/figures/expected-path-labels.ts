@@ -22,8 +22,16 @@ interface Ended {
   }[];
 }
 
-const longestName = 140;
-const longestFoldedName = 84;
+/** Pixels between the intervals of plans at their common end. */
+export const dodge = 7;
+
+/** How the labels stand: name and value on one line or on two, and how long a name may be. */
+export interface Fold {
+  readonly isFolded: boolean;
+  readonly nameWidth: number;
+}
+
+export const oneLine: Fold = { isFolded: false, nameWidth: 140 };
 
 function ends({ base, plans }: Ended) {
   const named = plans.map((plan) => ({
@@ -36,19 +44,25 @@ function ends({ base, plans }: Ended) {
 }
 
 /** Room that the labels at the right need. */
-export function endLabelsWidth(data: Ended, isFolded: boolean, formats: FigureFormats): number {
+export function endLabelsWidth(
+  data: Ended,
+  { isFolded, nameWidth }: Fold,
+  formats: FigureFormats,
+): number {
   const widths = ends(data).map(({ name, end }) => {
-    const nameWidth = Math.min(wordsWidth(name), isFolded ? longestFoldedName : longestName);
-    const valueWidth = wordsWidth(formats.value(end));
-    return isFolded ? Math.max(nameWidth, valueWidth) : nameWidth + 5 + valueWidth;
+    const first = Math.min(wordsWidth(name), nameWidth);
+    const second = wordsWidth(formats.value(end));
+    return isFolded ? Math.max(first, second) : first + 5 + second;
   });
   return (max(widths) ?? 0) + 12;
 }
 
+/** @param right  where the last of the intervals at the ends stands. */
 export function endLabels(
   data: Ended,
-  isFolded: boolean,
+  { isFolded, nameWidth }: Fold,
   plot: Plot,
+  right: number,
   y: (value: number) => number,
   formats: FigureFormats,
 ): EndLabel[] {
@@ -58,9 +72,10 @@ export function endLabels(
   const reach = isFolded ? 14 : 6;
   const places = spreadApart(wanted, gap, [plot.top + reach, plot.bottom - reach]);
   return lines.map(({ kind, name, end }, index) => {
-    const clipped = clippedWords(name, isFolded ? longestFoldedName : longestName);
-    const x = plot.right + 12;
+    const clipped = clippedWords(name, nameWidth);
+    const x = right + 12;
     const baseline = places[index] + (isFolded ? -2 : 4);
+    const lineEnd = plot.right + 5 + (kind === 'plan' ? dodge * index : 0);
     return {
       kind,
       name: clipped,
@@ -72,7 +87,7 @@ export function endLabels(
       leader:
         Math.abs(places[index] - wanted[index]) < 5
           ? ''
-          : `M${x - 8},${wanted[index]}L${x - 2},${places[index]}`,
+          : `M${lineEnd},${wanted[index]}L${x - 3},${places[index]}`,
     };
   });
 }
@@ -92,16 +107,22 @@ export function seriesLabels(
       .flatMap((point, index) => {
         const isUpper = point.y <= other[index].y;
         const baselines = isUpper ? [point.y - 9, point.y + 17] : [point.y + 17, point.y - 9];
-        const x = Math.min(Math.max(point.x, plot.left + half), plot.right - half);
-        return baselines.map((baseline, rank) => ({
-          x,
-          y: baseline,
-          left: x - half - 3,
-          right: x + half + 3,
-          top: baseline - 12,
-          bottom: baseline + 4,
-          preference: Math.abs(point.y - other[index].y) - rank * 1000,
-        }));
+        // On a slope a label goes well beside the point: below it to the right, above it to the left, and so on.
+        const aside = [0, half + 2, -half - 2];
+        return baselines.flatMap((baseline, rank) =>
+          aside.map((shift) => {
+            const x = Math.min(Math.max(point.x + shift, plot.left + half), plot.right - half);
+            return {
+              x,
+              y: baseline,
+              left: x - half - 3,
+              right: x + half + 3,
+              top: baseline - 12,
+              bottom: baseline + 4,
+              preference: Math.abs(point.y - other[index].y) - rank * 1000,
+            };
+          }),
+        );
       })
       .filter((box) => box.top >= 0 && box.bottom <= plot.bottom)
       .sort((a, b) => b.preference - a.preference);

@@ -1,5 +1,13 @@
 import { area, line, max } from 'd3';
-import { type EndLabel, endLabels, endLabelsWidth, seriesLabels } from './expected-path-labels';
+import {
+  type EndLabel,
+  type Fold,
+  dodge,
+  endLabels,
+  endLabelsWidth,
+  oneLine,
+  seriesLabels,
+} from './expected-path-labels';
 import type { FigureFormats, PlacedText, PlacedTick, Plot, Point, Stretch } from './figure-types';
 import { planMarkPath } from './mark-paths';
 import { figuresWidth } from './text-width';
@@ -56,6 +64,7 @@ export interface PlacedPlan {
 export interface ExpectedPathLayout {
   readonly width: number;
   readonly height: number;
+  readonly yearsY: number;
   readonly plot: Plot;
   readonly yTicks: readonly PlacedTick[];
   readonly years: readonly PlacedTick[];
@@ -74,9 +83,6 @@ export interface ExpectedPathLayout {
   /** Every year of every line, own years first, in the order in which arrow keys visit them. */
   readonly points: readonly ExpectedPathPoint[];
 }
-
-/** Pixels between the intervals of plans at their common end. */
-const dodge = 7;
 
 type Seen = number | null | undefined;
 
@@ -97,15 +103,15 @@ export function expectedPathLayout(
   formats: FigureFormats,
 ): ExpectedPathLayout {
   const { ownYears, base, plans } = data;
-  const height = width < 480 ? 260 : 320;
-  const [top, bottom] = [24, height - 28];
+  const yearsY = width < 480 ? 254 : 314;
+  const [top, bottom] = [24, yearsY - 22];
   const y = valueScale(valuesOf(data), [bottom, top], 5);
   const yTicks = placedTicks(y, 5, formats.tick);
   const left = (max(yTicks, (tick) => figuresWidth(tick.label)) ?? 0) + 16;
   // Long names fold onto two lines before they take the room of the lines they name.
-  const isFolded = width < 560 || endLabelsWidth(data, false, formats) > width * 0.22;
-  const labelsWidth =
-    endLabelsWidth(data, isFolded, formats) + dodge * Math.max(0, plans.length - 1);
+  const isFolded = width < 560 || endLabelsWidth(data, oneLine, formats) > width * 0.22;
+  const fold: Fold = isFolded ? { isFolded, nameWidth: Math.max(84, width * 0.2) } : oneLine;
+  const labelsWidth = endLabelsWidth(data, fold, formats) + dodge * Math.max(0, plans.length - 1);
   const plot = { left, right: Math.max(left + 60, width - labelsWidth - 16), top, bottom };
 
   const labelsX = plot.right + dodge * Math.max(0, plans.length - 1);
@@ -126,7 +132,8 @@ export function expectedPathLayout(
 
   return {
     width,
-    height,
+    height: yearsY + 6,
+    yearsY,
     plot,
     yTicks,
     years: years.length === 0 ? [] : placedYears(years, x, last?.year),
@@ -151,8 +158,8 @@ export function expectedPathLayout(
         interval: intervalAtEnd(plan, index, x, y),
       };
     }),
-    seriesLabels: seriesLabels(actual, fitted, plot),
-    endLabels: endLabels(data, isFolded, { ...plot, right: labelsX }, y, formats),
+    seriesLabels: seriesLabels(actual, fitted, { ...plot, right: (planX ?? plot.right) - 4 }),
+    endLabels: endLabels(data, fold, plot, labelsX, y, formats),
     points: pointsOf(data, place, formats),
   };
 }

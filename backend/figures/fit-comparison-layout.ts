@@ -37,6 +37,8 @@ export interface FitComparisonLayout {
   readonly plot: Plot;
   readonly ticks: readonly PlacedTick[];
   readonly zeroX: number;
+  /** Stretches of the upright lines, top to bottom: broken where words would cross them. */
+  readonly upright: readonly Stretch[];
   readonly figuresX: number;
   readonly rows: readonly FitComparisonRow[];
 }
@@ -59,11 +61,12 @@ export function fitComparisonLayout(
   const longestName = max(fits, (fit) => wordsWidth(fit.name, nameSize)) ?? 0;
   const isFolded = width < longestName + figuresWide + 240;
   const nameWidth = isFolded ? width : longestName;
+  const rowHeight = isFolded ? 62 : 28;
   const plot: Plot = {
     left: isFolded ? 8 : nameWidth + 20,
     right: isFolded ? width - 8 : width - figuresWide - 24,
     top,
-    bottom: top + fits.length * (isFolded ? 62 : 28),
+    bottom: top + fits.length * rowHeight,
   };
   const count = Math.max(2, Math.round((plot.right - plot.left) / 100));
   const seen = fits.flatMap(({ standing }) =>
@@ -72,18 +75,24 @@ export function fitComparisonLayout(
   const scale = snugScale([0, ...seen], [plot.left, plot.right]);
   return {
     width,
+    upright: isFolded
+      ? fits.map((_, place) => ({
+          from: top + place * rowHeight + 38,
+          to: top + place * rowHeight + 58,
+        }))
+      : [{ from: top - 4, to: plot.bottom }],
     height: plot.bottom + 6,
     plot,
     ticks: placedTicks(scale, count, formats.tick),
     zeroX: scale(0),
     figuresX: isFolded ? 0 : width,
     rows: fits.map(({ name, standing }, place) => {
-      const rowTop = top + place * (isFolded ? 62 : 28);
+      const rowTop = top + place * rowHeight;
       return {
         name,
         label: clippedWords(name, nameWidth + 2, nameSize),
         isFirst: place === 0,
-        textY: isFolded ? rowTop + 18 : rowTop + 18,
+        textY: rowTop + 18,
         figuresY: isFolded ? rowTop + 34 : rowTop + 18,
         y: isFolded ? rowTop + 48 : rowTop + 14,
         x: standing === null ? null : scale(standing.estimate),

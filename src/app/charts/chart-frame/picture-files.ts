@@ -2,6 +2,9 @@ import { bundledFaces } from './bundled-faces';
 
 const pixelsPerPoint = 2;
 
+/** An image starts reading the faces inside it when it is first drawn, and does not say when it has. */
+const facesMs = 250;
+
 /** The picture as an SVG file, the faces of its words inside. */
 export async function svgFile(picture: SVGSVGElement): Promise<Blob> {
   const faces = await bundledFaces();
@@ -23,7 +26,13 @@ export async function pngFile(picture: SVGSVGElement): Promise<Blob> {
     canvas.height = Math.ceil(Number(picture.getAttribute('height')) * pixelsPerPoint);
     const context = canvas.getContext('2d');
     if (context === null) throw new Error('expected a canvas to draw on; found none');
-    context.drawImage(image, 0, 0, canvas.width, canvas.height);
+    const draw = () => {
+      context.clearRect(0, 0, canvas.width, canvas.height);
+      context.drawImage(image, 0, 0, canvas.width, canvas.height);
+    };
+    draw();
+    await new Promise((resolve) => setTimeout(resolve, facesMs));
+    draw();
     return await new Promise((resolve, reject) => {
       canvas.toBlob((blob) => {
         if (blob === null) reject(new Error('expected a PNG of the canvas; found none'));

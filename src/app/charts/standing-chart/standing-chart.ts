@@ -7,7 +7,7 @@ import {
   output,
   signal,
 } from '@angular/core';
-import { type IntervalFigure, diamondPath, standingChartLayout } from '@figures';
+import { type IntervalFigure, type StandingRow, diamondPath, standingChartLayout } from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { ChartFrame } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
@@ -97,6 +97,12 @@ export class StandingChart {
   /** Value and interval of a company: `2,970 (1,570 to 4,270)`. */
   protected words(company: string): string {
     return this.#words().get(company) ?? '';
+  }
+
+  /** The row that narrow charts write out in full: the one asked for, else the own company's. */
+  protected readout(shown: number): StandingRow | undefined {
+    const { rows } = this.layout();
+    return shown < 0 ? rows.find((row) => row.isOwn) : rows[shown];
   }
 
   /** Rows too low for names show that of the own company and the one asked for; the latter wins where both meet. */
