@@ -1,0 +1,101 @@
+import { ChangeDetectionStrategy, Component, signal } from '@angular/core';
+import { TestBed } from '@angular/core/testing';
+import { ChartFrame } from './chart-frame';
+import { fileNameOf, pngFile, svgFile } from './picture-files';
+import { standalonePicture } from './standalone-picture';
+
+const text = {
+  title: 'Velmara stands 2,100 (700 to 3,400) above its peers',
+  caption: 'EUR m, FY2008–FY2025',
+  source: 'Panel v4, fit 6f3a91',
+};
+
+@Component({
+  selector: 'kv-framed',
+  imports: [ChartFrame],
+  template: `
+    <kv-chart-frame [text]="text" summary="Two marks." [columns]="[]" [rows]="[]" [(width)]="width">
+      <svg #picture [attr.width]="width()" height="40">
+        <rect class="own" width="10" height="10" role="img" aria-label="own" />
+        <circle class="ring" data-screen-only r="4" />
+        <g data-follows-scroll transform="translate(0,300)"><text>2025</text></g>
+      </svg>
+    </kv-chart-frame>
+  `,
+  styles: `
+    .own {
+      fill: var(--kv-copper);
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+class Framed {
+  protected readonly text = text;
+  readonly width = signal(640);
+}
+
+describe('chart frame', () => {
+  async function shown(hostWidth = 500) {
+    const fixture = TestBed.createComponent(Framed);
+    const page = fixture.nativeElement as HTMLElement;
+    page.style.display = 'block';
+    page.style.width = `${hostWidth}px`;
+    await fixture.whenStable();
+    return { fixture, page, svg: page.querySelector('svg')! };
+  }
+
+  afterEach(() => document.documentElement.removeAttribute('data-theme'));
+
+  it('hands the width of its container to the chart', async () => {
+    const { fixture } = await shown(432);
+    expect(fixture.componentInstance.width()).toBe(432);
+  });
+
+  it('sums the chart up for those who cannot see it, under its title', async () => {
+    const { page } = await shown();
+    expect(page.querySelector('figure')?.getAttribute('aria-label')).toBe(text.title);
+    expect(page.querySelector('p.kv-visually-hidden')?.textContent).toBe('Two marks.');
+  });
+
+  it('writes title, unit and source into a picture that needs no style sheet', async () => {
+    const { svg } = await shown();
+    const picture = standalonePicture(svg, text);
+    const words = [...picture.querySelectorAll('text')].map((word) => word.textContent);
+    expect(words).toEqual([text.title, text.caption, '2025', text.source]);
+    expect(picture.querySelector('[class], [style], [role], [data-screen-only]')).toBeNull();
+    expect(picture.querySelector('[transform]')).toBeNull();
+    expect(picture.querySelector('circle')).toBeNull();
+  });
+
+  it('draws the picture in light colours, whatever the screen shows', async () => {
+    const { svg } = await shown();
+    const fillIn = (theme: string) => {
+      document.documentElement.setAttribute('data-theme', theme);
+      return standalonePicture(svg, text).querySelector('rect[width="10"]')?.getAttribute('fill');
+    };
+    const light = fillIn('light');
+    expect(light).toMatch(/^rgb\(/);
+    expect(fillIn('dark')).toBe(light);
+    expect(svg.style.colorScheme).toBe('');
+  });
+
+  it('makes an SVG that parses and a PNG twice its size', async () => {
+    const { svg } = await shown(400);
+    const picture = standalonePicture(svg, text);
+    const parsed = new DOMParser().parseFromString(
+      await (await svgFile(picture)).text(),
+      'image/svg+xml',
+    );
+    expect(parsed.querySelector('parsererror')).toBeNull();
+    expect(parsed.documentElement.getAttribute('width')).toBe('448');
+    const bitmap = await createImageBitmap(await pngFile(picture));
+    expect(bitmap.width).toBe(896);
+  });
+
+  it('names the file after the title', () => {
+    expect(fileNameOf('Zürich: 2,100 (700 to 3,400)!', 'svg')).toBe(
+      'zurich-2-100-700-to-3-400.svg',
+    );
+    expect(fileNameOf('…', 'png')).toBe('chart.png');
+  });
+});
