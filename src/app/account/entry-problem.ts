@@ -1,7 +1,7 @@
 import type { FormControl } from '@angular/forms';
 import type { ApiProblem } from '../api/api-problem';
 import type { ShownProblem } from '../ui/problem';
-import { errorWords } from '../ui/contract-validator';
+import { rawWords } from '../ui/contract-validator';
 
 /** A field of a form with the name that stands on it and its place in the request. */
 export interface EntryField {
@@ -16,9 +16,12 @@ export function entryProblem(fields: readonly EntryField[]): ShownProblem | null
   const wrong = fields.filter(({ control }) => control.invalid);
   if (wrong.length === 0) return null;
   return {
-    title: wrong.length === 1 ? 'One entry is missing something' : 'Some entries miss something',
+    title:
+      wrong.length === 1
+        ? 'One field needs another entry'
+        : `${wrong.length} fields need another entry`,
     detail: 'Nothing was sent yet.',
-    places: wrong.map(({ label, control }) => `${label}: ${errorWords(control)}`),
+    places: wrong.map(({ label, control }) => `${label}: ${rawWords(control)}`),
   };
 }
 
@@ -30,5 +33,7 @@ export function serverProblem(problem: ApiProblem, fields: readonly EntryField[]
     control.setErrors({ words });
     control.markAsTouched();
   }
-  return problem.shown;
+  const { requestId, ...shown } = problem.shown;
+  // A refusal is explained by its words; the request's id helps only where the fault is the server's.
+  return problem.problem.status < 500 || requestId === undefined ? shown : { ...shown, requestId };
 }

@@ -9,7 +9,7 @@ import { errorWords } from '../ui/contract-validator';
   selector: 'kv-password-field',
   imports: [MatFormFieldModule, MatInputModule, ReactiveFormsModule],
   template: `
-    <mat-form-field appearance="outline">
+    <mat-form-field appearance="outline" hideRequiredMarker>
       <mat-label>{{ label() }}</mat-label>
       <input
         matInput

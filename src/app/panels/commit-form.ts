@@ -11,8 +11,8 @@ import { byContract, errorWords } from '../ui/contract-validator';
   selector: 'kv-commit-form',
   imports: [MatButtonModule, MatFormFieldModule, MatInputModule, ReactiveFormsModule],
   template: `
-    <form [formGroup]="form" (ngSubmit)="commit()" aria-label="Bring in the panel" novalidate>
-      <mat-form-field appearance="outline">
+    <form [formGroup]="form" (ngSubmit)="commit()" novalidate>
+      <mat-form-field appearance="outline" floatLabel="always">
         <mat-label>Note</mat-label>
         <textarea matInput formControlName="note" rows="2"></textarea>
         <mat-hint

@@ -7,8 +7,8 @@ import { MatButtonModule } from '@angular/material/button';
   imports: [MatButtonModule],
   template: `
     <p class="words">
-      <strong>Drag a CSV file here</strong>, or choose one. One row for each company and fiscal
-      year; market value, capex and book equity in columns.
+      <strong>Drag a CSV file here</strong>, or choose one. Market value, capex and book equity
+      stand in columns; what is missing or wrong is shown before anything is kept.
     </p>
     <button mat-flat-button type="button" [disabled]="isBusy()" (click)="picker.click()">
       {{ action() }}

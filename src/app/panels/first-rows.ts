@@ -2,6 +2,9 @@ import { ChangeDetectionStrategy, Component, computed, input } from '@angular/co
 import type { ImportReply } from '@contract';
 import { type MappingEntry, columnChoices } from './mapping-entry';
 
+/** Enough to see what a column holds, and few enough to keep the choices below in sight. */
+const shownRows = 6;
+
 /** The file's header and first rows as they stand, with line numbers and what each column is taken for. */
 @Component({
   selector: 'kv-first-rows',
@@ -20,7 +23,7 @@ import { type MappingEntry, columnChoices } from './mapping-entry';
           </tr>
         </thead>
         <tbody>
-          @for (row of draft().firstRows; track row.row) {
+          @for (row of rows(); track row.row) {
             <tr>
               <td class="kv-number line">{{ row.row }}</td>
               @for (cell of row.cells; track $index) {
@@ -70,6 +73,7 @@ export class FirstRows {
   readonly draft = input.required<ImportReply>();
   readonly entry = input.required<MappingEntry>();
 
+  protected readonly rows = computed(() => this.draft().firstRows.slice(0, shownRows));
   protected readonly columns = computed(() => {
     const entry = this.entry();
     return this.draft().headers.map((header) => {

@@ -1,6 +1,7 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  ElementRef,
   computed,
   effect,
   inject,
@@ -49,6 +50,7 @@ const { panelName, currency, unit } = ImportMapping.shape;
 })
 export class MappingForm {
   readonly #build = inject(NonNullableFormBuilder);
+  readonly #host = inject<ElementRef<HTMLElement>>(ElementRef);
 
   readonly draft = input.required<ImportReply>();
   readonly versions = input.required<readonly PanelVersionSummary[]>();
@@ -126,7 +128,12 @@ export class MappingForm {
     this.capitalise();
     for (const { key } of columnChoices) this.form.controls[key].updateValueAndValidity();
     this.form.markAllAsTouched();
-    if (this.form.invalid) return;
+    if (this.form.invalid) {
+      this.#host.nativeElement
+        .querySelector<HTMLElement>('mat-select.ng-invalid, input.ng-invalid')
+        ?.focus();
+      return;
+    }
     const entry = this.form.getRawValue();
     const further = this.further();
     this.checkWanted.emit(

@@ -5,6 +5,7 @@ import {
   effect,
   inject,
   input,
+  linkedSignal,
   numberAttribute,
   signal,
   untracked,
@@ -12,12 +13,14 @@ import {
 import { MatButtonModule } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
 import type { PanelVersionSummary } from '@contract';
+import type { CoverageCell } from '@figures';
 import { SessionStore } from '../api/session-store';
-import { EmptyState } from '../ui/empty-state';
 import { NumberFormat } from '../ui/number-format';
 import { PageContext, type StaleNotice } from '../ui/page-context';
 import { PageHeader } from '../ui/page-header';
 import { ProblemNotice } from '../ui/problem-notice';
+import type { ChartText } from '../charts/chart-text';
+import { CoverageMap } from '../charts/coverage-map/coverage-map';
 import { BringInPanel } from './bring-in-panel';
 import { counted, panelCompleteness, panelFinding, yearSpan } from './panel-finding';
 import { PanelGrid } from './panel-grid';
@@ -30,7 +33,7 @@ import { PanelVersions } from './panel-versions';
   selector: 'kv-panel-page',
   imports: [
     BringInPanel,
-    EmptyState,
+    CoverageMap,
     MatButtonModule,
     PageHeader,
     PanelGrid,
@@ -81,6 +84,23 @@ export class PanelPage {
     const complete = `${counted(rows, 'row')}, ${completeRows.toLocaleString('en')} of them complete`;
     return `${version.panelName}, version ${version.number} · ${this.#numbers.unitLabel()} · ${complete}`;
   });
+  protected readonly cells = computed((): readonly CoverageCell[] =>
+    this.#rows().map((row) => ({
+      company: row.company,
+      year: row.year,
+      missing: missingIn(row, this.titles()),
+    })),
+  );
+  /** The column that the map looks at; null for all. */
+  protected readonly variable = linkedSignal<readonly string[], string | null>({
+    source: this.titles,
+    computation: () => null,
+  });
+  protected readonly mapText = computed((): ChartText => ({
+    title: this.finding(),
+    caption: this.source(),
+    source: `File ${this.#panel()?.version.file.name ?? ''}, SHA-256 ${this.#panel()?.version.file.sha256 ?? ''}`,
+  }));
   protected readonly shownRows = computed(() =>
     this.hasOnlyGaps()
       ? this.#rows().filter((row) => missingIn(row, this.titles()).length > 0)
@@ -125,6 +145,10 @@ export class PanelPage {
     effect(() => {
       if (this.focusedRow() !== null) untracked(() => this.hasOnlyGaps.set(false));
     });
+  }
+
+  protected lookAt(title: string): void {
+    this.variable.set(title === '' ? null : title);
   }
 
   /** Leads to the row of the file behind a cell of the map; the address says which. */

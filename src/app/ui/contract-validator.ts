@@ -21,10 +21,12 @@ export function byContract(schema: z.ZodType, missing?: string): ValidatorFn {
 
 /** The error of a field as the sentence that stands under it; empty where there is none. */
 export function errorWords(control: AbstractControl): string {
-  const words: unknown = control.getError('words');
-  return typeof words === 'string' && words !== '' ? capitalised(words) : '';
+  const words = rawWords(control);
+  return words.charAt(0).toUpperCase() + words.slice(1);
 }
 
-export function capitalised(words: string): string {
-  return words.charAt(0).toUpperCase() + words.slice(1);
+/** The same words to go on after a colon: `expected your name`. */
+export function rawWords(control: AbstractControl): string {
+  const words: unknown = control.getError('words');
+  return typeof words === 'string' ? words : '';
 }
