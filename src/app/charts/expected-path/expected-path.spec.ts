@@ -58,6 +58,30 @@ describe('expected path', () => {
     ]);
   });
 
+  it('has the band of the market value itself in the table where one is drawn', async () => {
+    const { fixture, chart, page } = await shown();
+    const [year] = plan('Plan B', 10340).years;
+    const banded = { ...year, bandLow: 8000, bandHigh: 12680 };
+    fixture.componentRef.setInput('plans', [
+      { name: 'Plan B', years: [banded, { ...banded, year: 2027 }] },
+    ]);
+    await chart.toggle();
+    expect((await chart.headers()).slice(-2)).toEqual(['band low', 'band high']);
+    const table = await chart.table();
+    expect(table[0].slice(-2)).toEqual(['', '']);
+    expect(table.at(-1)).toEqual([
+      'Plan B',
+      '2027',
+      '',
+      '10,340',
+      '10,040',
+      '10,640',
+      '8,000',
+      '12,680',
+    ]);
+    expect(page.querySelector('.band-area')?.getAttribute('d')).not.toBe('');
+  });
+
   it('tells plans apart by the shape of their marks, and what happened by whole and broken lines', async () => {
     const { page } = await shown();
     const shapes = [...page.querySelectorAll('path.plan-mark')].map((mark) =>

@@ -18,7 +18,7 @@ import { ChartFrame } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats, withUnit } from '../figure-formats';
-import { expectedPathRows } from './expected-path-rows';
+import { expectedPathRows, hasBand } from './expected-path-rows';
 
 /** Actual and expected value until now, and what the plans and the base would make of it. */
 @Component({
@@ -78,6 +78,12 @@ export class ExpectedPath {
     { label: 'expected', isNumber: true },
     { label: 'low', isNumber: true },
     { label: 'high', isNumber: true },
+    ...(hasBand(this.plans())
+      ? [
+          { label: 'band low', isNumber: true },
+          { label: 'band high', isNumber: true },
+        ]
+      : []),
   ]);
   protected readonly rows = computed((): ChartRow[] =>
     expectedPathRows(this.#data(), this.#numbers, this.kind()),
