@@ -50,7 +50,9 @@ describe('label places', () => {
   });
 
   it('opens a scale around values that are all equal, and around none', () => {
-    expect(valueScale([7, null, 7], [0, 100], 4)(7)).toBeGreaterThan(0);
+    const equal = valueScale([7, null, 7], [0, 100], 4);
+    expect(equal(7)).toBeGreaterThan(0);
+    expect(equal(7.1)).toBeGreaterThan(equal(7));
     expect(valueScale([], [0, 100], 4)(0)).toBe(50);
     const ticks = placedTicks(valueScale([0, 10], [0, 100], 5), 5, (value) => String(value));
     expect(ticks.map((tick) => tick.position)).toEqual([0, 20, 40, 60, 80, 100]);
