@@ -73,7 +73,7 @@ export function createApp(options: AppOptions): Express {
     noStore,
     sessions({ secrets: options.sessionSecrets, isLocal, pool: options.sessionPool, now }),
   );
-  app.use('/api', authenticator.session(), loadMember(services.repositories));
+  app.use('/api', authenticator.session() as RequestHandler, loadMember(services.repositories));
   app.use((req, res, next) => {
     if (req.path.startsWith('/api/')) crossSite.check(req, res, next);
     else next();

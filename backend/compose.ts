@@ -11,6 +11,7 @@ import { BillingService } from './billing/billing-service';
 import { workOpenBillingAccount } from './billing/open-account-job';
 import { StripeGateway } from './billing/stripe-gateway';
 import { DeskService } from './board/desk-service';
+import { editionContent } from './board/edition-content-reply';
 import { EditionService } from './board/edition-service';
 import { FitPool } from './compute/fit-pool';
 import { ParseProcess } from './compute/parse-process';
@@ -114,7 +115,7 @@ export function compose(options: ComposeOptions): Composition {
       lineage: new LineageService(repositories),
       scenarios: new ScenarioService(repositories, now),
       desk: new DeskService(repositories),
-      editions: new EditionService(repositories, accounts, now),
+      editions: new EditionService(repositories, accounts, now, editionContent),
       billing,
     },
     start: async () => {

@@ -14,12 +14,8 @@ export interface PoolOptions {
   readonly onConnectionError: (error: Error) => void;
 }
 
-const typeParsers: pg.CustomTypesConfig = {
-  getTypeParser(oid: number, format?: 'text' | 'binary'): (value: string) => unknown {
-    if (oid === pg.types.builtins.INT8) return parseSafeInteger;
-    return pg.types.getTypeParser(oid, format as 'text') as (value: string) => unknown;
-  },
-} as pg.CustomTypesConfig;
+const types = new pg.TypeOverrides();
+types.setTypeParser(pg.types.builtins.INT8, parseSafeInteger);
 
 function parseSafeInteger(text: string): number {
   const value = Number(text);
@@ -40,7 +36,7 @@ export function createPool(options: PoolOptions): pg.Pool {
     statement_timeout: options.statementTimeoutMs,
     lock_timeout: 5000,
     idle_in_transaction_session_timeout: 10_000,
-    types: typeParsers,
+    types,
   });
   pool.on('error', options.onConnectionError);
   pool.on('connect', (client) => {

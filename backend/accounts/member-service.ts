@@ -3,8 +3,8 @@ import { UniqueViolation } from '../../db/errors';
 import type { InvitationRow, MemberRow } from '../../db/repositories/members-repository';
 import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import { record } from '../activity/activity';
-import type { Role } from '../contract';
 import { AppError, Conflict, Invalid, NotFound } from '../errors/app-error';
+import type { Role } from './role';
 import { startingPreferences } from './account-service';
 import { createInvitationToken, readInvitationToken } from './invitation-token';
 import type { Passwords } from './passwords';
@@ -173,12 +173,9 @@ export class MemberService {
 
   async #open(tx: WorkspaceRepositories, tokenHash: Buffer): Promise<InvitationRow> {
     const invitation = await tx.members.findInvitationByToken(tokenHash);
-    if (
-      invitation === undefined ||
-      invitation.acceptedAt !== null ||
-      invitation.withdrawnAt !== null ||
-      invitation.expiresAt <= this.uses.now()
-    )
+    if (invitation === undefined) return invalidLink();
+    const { acceptedAt, withdrawnAt, expiresAt } = invitation;
+    if (acceptedAt !== null || withdrawnAt !== null || expiresAt <= this.uses.now())
       return invalidLink();
     return invitation;
   }

@@ -1,7 +1,6 @@
 import express, { type Router } from 'express';
 import { apiRoutes, type DeskReply } from '../contract';
 import { toFitSummary } from '../fits/fit-replies';
-import { toStoredFit } from '../fits/fit-view';
 import { signedInMember } from '../http/member';
 import { register } from '../http/register';
 import { toPanelVersionSummary } from '../panels/panel-replies';
@@ -16,7 +15,7 @@ export function deskRoutes(desk: DeskService): Router {
     const reply: DeskReply = {
       panelVersion: found.panelVersion ? toPanelVersionSummary(found.panelVersion) : null,
       peerGroup: found.peerGroup ? toPeerGroupSummary(found.peerGroup) : null,
-      fit: found.fit ? toFitSummary(toStoredFit(found.fit)) : null,
+      fit: found.fit ? toFitSummary(found.fit) : null,
       editionsWaiting: found.editionsWaiting,
     };
     res.json(reply);

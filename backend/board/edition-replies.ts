@@ -1,5 +1,5 @@
 import type { EditionRow } from '../../db/repositories/editions-repository';
-import type { EditionReply, EditionSummary } from '../contract';
+import type { EditionContent, EditionReply, EditionSummary } from '../contract';
 import type { Edition } from './edition-service';
 
 export function toEditionSummary(row: EditionRow): EditionSummary {
@@ -25,5 +25,10 @@ export function toEditionSummary(row: EditionRow): EditionSummary {
 }
 
 export function toEditionReply({ row, content, whyNot }: Edition): EditionReply {
-  return { edition: toEditionSummary(row), content, maySign: whyNot === null, whyNot };
+  return {
+    edition: toEditionSummary(row),
+    content: content as EditionContent,
+    maySign: whyNot === null,
+    whyNot,
+  };
 }

@@ -4,22 +4,22 @@ import type { EditionRow, EditionState } from '../../db/repositories/editions-re
 import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import type { AccountService } from '../accounts/account-service';
 import { record } from '../activity/activity';
-import type { EditionContent, Role } from '../contract';
 import { AppError, Conflict, Forbidden, Invalid, NotFound } from '../errors/app-error';
 import { findFinishedFit, type FinishedFit } from '../fits/fit-service';
 import { findScenario, type Scenario } from '../scenarios/scenario-service';
 import { canonicalJson } from './canonical-json';
-import { editionContent } from './edition-content';
+import type { EditionParts } from './edition-parts';
 
 export interface Reader {
   readonly personId: string;
   readonly workspaceId: string;
-  readonly roles: readonly Role[];
+  readonly roles: readonly string[];
 }
 
 export interface Edition {
   readonly row: EditionRow;
-  readonly content: EditionContent;
+  /** What was frozen, as it was hashed. */
+  readonly content: unknown;
   /** Why the reader may neither sign nor return it; null when they may. */
   readonly whyNot: string | null;
 }
@@ -41,6 +41,8 @@ export class EditionService {
     private readonly repositories: Repositories,
     private readonly accounts: AccountService,
     private readonly now: () => Date,
+    /** Makes the content that is frozen, in the words of the contract. */
+    private readonly freeze: (parts: EditionParts) => unknown,
   ) {}
 
   async list(reader: Reader): Promise<readonly EditionRow[]> {
@@ -57,7 +59,7 @@ export class EditionService {
       if (text === undefined) throw new NotFound();
       return {
         row,
-        content: JSON.parse(text) as EditionContent,
+        content: JSON.parse(text) as unknown,
         whyNot: whyNotDecide(reader, row),
       };
     });
@@ -82,7 +84,7 @@ export class EditionService {
       const number = await tx.editions.nextNumber();
       const publishedAt = this.now();
       const content = canonicalJson(
-        editionContent({
+        this.freeze({
           number,
           workspaceName: workspace?.name ?? '',
           publishedBy: publisher?.name ?? '',

@@ -77,7 +77,7 @@ export class FitJob {
     if (!isRunning) abort.abort();
   }
 
-  #inWorkspace: Repositories['inWorkspace'] = (workspaceId, work) =>
+  readonly #inWorkspace: Repositories['inWorkspace'] = (workspaceId, work) =>
     this.repositories.inWorkspace(workspaceId, work);
 }
 

@@ -117,6 +117,12 @@ export async function findFit(tx: WorkspaceRepositories, id: string): Promise<Fi
   };
 }
 
+/** The newest fit that is done. */
+export async function findLatestFit(tx: WorkspaceRepositories): Promise<StoredFit | undefined> {
+  const row = await tx.fits.latestDone();
+  return row === undefined ? undefined : toStoredFit(row);
+}
+
 /** @throws {NotFound}; {Conflict} while it is not done. */
 export async function findFinishedFit(tx: WorkspaceRepositories, id: string): Promise<FinishedFit> {
   const found = await findFit(tx, id);

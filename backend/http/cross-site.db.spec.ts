@@ -2,7 +2,8 @@ import request from 'supertest';
 import type { TestDatabase } from '../../db/testing/test-database';
 import { type ApiRoute, apiRoutes } from '../contract';
 import { createMigratedDatabase, startTestServer, type TestServer } from '../testing/test-server';
-import { signUp, TestClient } from '../testing/test-client';
+import type { TestClient } from '../testing/test-client';
+import { signUp } from '../testing/test-client';
 
 describe('the guard against requests of other sites', () => {
   let database: TestDatabase;

@@ -19,7 +19,7 @@ describe('every reply', () => {
   for (const path of ['/livez', '/api/session', '/api/fits', '/no/such/page', '/api/none'])
     it(`carries the security headers at ${path}`, async () => {
       const { headers } = await request(server.url).get(path);
-      const policy = String(headers['content-security-policy']);
+      const policy = headers['content-security-policy'];
       for (const rule of [
         "default-src 'none'",
         "script-src 'self'",
@@ -53,7 +53,7 @@ describe('every reply', () => {
 
   it('names what is wrong with a body, field by field', async () => {
     const agent = request.agent(server.url);
-    const cookies = String((await agent.get('/api/session')).headers['set-cookie']);
+    const cookies = (await agent.get('/api/session')).headers['set-cookie'];
     const token = decodeURIComponent(/__Host-XSRF=([^;]+)/.exec(cookies)?.[1] ?? '');
     const send = (body: string) =>
       request(server.url)

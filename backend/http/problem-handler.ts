@@ -26,10 +26,8 @@ const titles: Readonly<Record<ProblemSlug, string>> = {
   'storage-full': 'No space left',
 };
 
-export interface ErrorTranslator {
-  /** Our error for one of a layer below, or undefined when the layer does not know it. */
-  (error: unknown): AppError | undefined;
-}
+/** Our error for one of a layer below, or undefined when the layer does not know it. */
+export type ErrorTranslator = (error: unknown) => AppError | undefined;
 
 /** The one place that answers errors, as `application/problem+json` (RFC 9457). */
 export function problemHandler(translate: ErrorTranslator): ErrorRequestHandler {

@@ -1,7 +1,8 @@
 import pg from 'pg';
 import request from 'supertest';
 import type { TestDatabase } from '../../db/testing/test-database';
-import { join, signUp, TestClient, testPassword } from '../testing/test-client';
+import type { TestClient } from '../testing/test-client';
+import { join, signUp, testPassword } from '../testing/test-client';
 import { createMigratedDatabase, startTestServer, type TestServer } from '../testing/test-server';
 
 const minute = 60_000;
@@ -84,8 +85,10 @@ describe('sessions', () => {
       const before = await request(production.url)
         .get('/api/session')
         .set('X-Forwarded-Proto', 'https');
-      expect(String(before.headers['set-cookie'])).not.toContain('__Host-sid');
-      expect(String(before.headers['set-cookie'])).toMatch(
+      expect((before.headers['set-cookie'] as unknown as string[]).join()).not.toContain(
+        '__Host-sid',
+      );
+      expect((before.headers['set-cookie'] as unknown as string[]).join()).toMatch(
         /^__Host-XSRF=[^;]+; Path=\/; Secure; SameSite=Lax$/,
       );
       expect(before.headers['strict-transport-security']).toBe(
@@ -137,6 +140,6 @@ function cookieOf(client: TestClient, server: TestServer): string {
     path: '/',
     secure: false,
     script: false,
-  } as never);
+  });
   return found === undefined ? '' : found.toValueString();
 }

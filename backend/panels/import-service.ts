@@ -188,7 +188,7 @@ function toDraft(row: ImportRow): ImportDraft {
     byteSize: row.byteSize,
     state: row.state,
     preview: row.preview as FilePreview,
-    mapping: row.mapping as Partial<PanelMapping>,
+    mapping: row.mapping,
     check: row.findings as FileCheck | null,
     panelVersionId: row.panelVersionId,
   };

@@ -151,8 +151,7 @@ export class ScenarioService {
 /** @throws {NotFound} for one that does not exist or was deleted. */
 export async function findScenario(tx: WorkspaceRepositories, id: string): Promise<Scenario> {
   const found = await tx.scenarios.find(id);
-  if (found === undefined || found.deletedAt !== null)
-    throw new NotFound('There is no such scenario.');
+  if (found?.deletedAt !== null) throw new NotFound('There is no such scenario.');
   return toScenario(found);
 }
 

@@ -9,7 +9,7 @@ import {
 } from '@angular/material/dialog';
 import { MatFormField, MatLabel } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
-import type { ConfirmQuestion } from './confirm';
+import type { ConfirmQuestion } from './confirm-question';
 
 /** Opened by `Confirm`; closes with true when the person agrees. */
 @Component({

@@ -5,7 +5,8 @@ import { TestBed } from '@angular/core/testing';
 import { MatButtonHarness } from '@angular/material/button/testing';
 import { MatDialogHarness } from '@angular/material/dialog/testing';
 import { MatInputHarness } from '@angular/material/input/testing';
-import { Confirm, type ConfirmQuestion } from './confirm';
+import { Confirm } from './confirm';
+import type { ConfirmQuestion } from './confirm-question';
 
 @Component({
   selector: 'kv-spec-root',

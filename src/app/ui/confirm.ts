@@ -1,15 +1,6 @@
 import { Injectable, Injector, inject } from '@angular/core';
 import { firstValueFrom } from 'rxjs';
-
-export interface ConfirmQuestion {
-  readonly title: string;
-  /** What will happen, and whether it can be taken back. */
-  readonly detail: string;
-  /** The verb on the button: `Remove member`. */
-  readonly action: string;
-  /** A word the person has to type first, where nothing can be taken back. */
-  readonly typed?: string;
-}
+import type { ConfirmQuestion } from './confirm-question';
 
 /** Asks before what cannot be undone. What can be undone is not asked about: it gets `UndoNotice`. */
 @Injectable({ providedIn: 'root' })

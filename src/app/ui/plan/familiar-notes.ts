@@ -11,29 +11,33 @@ import type { ReadYear } from './read-plan';
   imports: [Mark],
   template: `
     <ul aria-live="polite">
+      @if (inside(); as finding) {
+        <li>
+          <kv-mark kind="fine" />
+          <p>
+            <strong>{{ finding }}.</strong>
+          </p>
+        </li>
+      }
       @for (note of notes(); track note.year) {
         <li>
-          <kv-mark [kind]="note.isInside ? 'fine' : 'caution'" />
+          <kv-mark kind="caution" />
           <div>
             <p>
               <strong>{{ note.finding }}.</strong>
-              @if (!note.isInside) {
-                {{ note.reason }}
-              }
+              {{ note.reason }}
             </p>
-            @if (!note.isInside) {
-              <p class="inside">
-                Nearest plan inside: {{ note.nearest }}.
-                <button
-                  type="button"
-                  class="kv-link kv-no-print"
-                  [attr.aria-label]="'Set FY' + note.year + ' to nearest inside'"
-                  (click)="insideWanted.emit(note.source)"
-                >
-                  Set to nearest inside
-                </button>
-              </p>
-            }
+            <p class="inside">
+              Nearest plan inside: {{ note.nearest }}.
+              <button
+                type="button"
+                class="kv-link kv-no-print"
+                [attr.aria-label]="'Set FY' + note.year + ' to nearest inside'"
+                (click)="insideWanted.emit(note.source)"
+              >
+                Set to nearest inside
+              </button>
+            </p>
           </div>
         </li>
       }
@@ -76,19 +80,29 @@ export class FamiliarNotes {
   /** The year whose values are wanted at `familiar.nearestInside`. */
   readonly insideWanted = output<ReadYear>();
 
+  protected readonly inside = computed(() => {
+    const years = this.years().filter(({ familiar }) => familiar.kind === 'inside');
+    return years.length === 0
+      ? ''
+      : familiarFinding(
+          years.map(({ year }) => year),
+          'inside',
+        );
+  });
   protected readonly notes = computed(() =>
-    this.years().map((year) => ({
-      year: year.year,
-      source: year,
-      isInside: year.familiar.kind === 'inside',
-      finding: familiarFinding(year.year, year.familiar.kind),
-      reason: familiarReason(this.basis(), this.labels(), year.familiar, this.#numbers),
-      nearest: this.labels()
-        .map((label, k) => {
-          const text = this.#numbers.figure(year.familiar.nearestInside[k]);
-          return `${k === 0 ? capitalised(label) : label} ${text}`;
-        })
-        .join(', '),
-    })),
+    this.years()
+      .filter(({ familiar }) => familiar.kind !== 'inside')
+      .map((year) => ({
+        year: year.year,
+        source: year,
+        finding: familiarFinding([year.year], year.familiar.kind),
+        reason: familiarReason(this.basis(), this.labels(), year.familiar, this.#numbers),
+        nearest: this.labels()
+          .map((label, k) => {
+            const text = this.#numbers.figure(year.familiar.nearestInside[k]);
+            return `${k === 0 ? capitalised(label) : label} ${text}`;
+          })
+          .join(', '),
+      })),
   );
 }

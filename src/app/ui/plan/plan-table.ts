@@ -84,8 +84,8 @@ const familiarWords: Readonly<Record<FamiliarRange['kind'], string>> = {
                 <td class="kv-number">
                   <kv-figure
                     [value]="year.difference.estimate"
-                    [low]="year.difference.low"
-                    [high]="year.difference.high"
+                    [low]="boundOf(year.difference, 'low')"
+                    [high]="boundOf(year.difference, 'high')"
                     [digits]="differenceDigits()"
                     [hasPlus]="true"
                     [figure]="'difference.' + year.year"
@@ -101,6 +101,12 @@ const familiarWords: Readonly<Record<FamiliarRange['kind'], string>> = {
     </div>
     @for (reason of reasons(); track reason) {
       <p class="kv-caption">{{ reason }}</p>
+    }
+  `,
+  styles: `
+    :host {
+      display: block;
+      min-inline-size: 0;
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -138,4 +144,11 @@ export class PlanTable {
         .flatMap(({ intervalReason }) => intervalReason ?? []),
     ),
   ]);
+
+  /** At the base there is nothing to be unsure about, and no interval to show. */
+  protected boundOf(difference: IntervalEstimate, end: 'low' | 'high'): number | null | undefined {
+    return difference.estimate === 0 && difference.standardError === 0
+      ? undefined
+      : difference[end];
+  }
 }

@@ -30,9 +30,10 @@ const places: Readonly<Record<FamiliarRange['kind'], string>> = {
   outside: 'outside the familiar range',
 };
 
-/** `FY2028 is at the edge of the familiar range`. */
-export function familiarFinding(year: number, kind: FamiliarRange['kind']): string {
-  return `FY${year} is ${places[kind]}`;
+/** `FY2027 and FY2028 are at the edge of the familiar range`. */
+export function familiarFinding(years: readonly number[], kind: FamiliarRange['kind']): string {
+  const named = listed(years.map((year) => `FY${year}`));
+  return `${named} ${years.length === 1 ? 'is' : 'are'} ${places[kind]}`;
 }
 
 /** Why a planned year lies where it does: as a whole, then value by value against what was observed. */

@@ -1,22 +1,9 @@
-import type { FinishedFit } from '../fits/fit-service';
-import type { Scenario } from '../scenarios/scenario-service';
-import { cautions, type Confidentiality, type EditionContent } from '../contract';
+import { cautions, type EditionContent } from '../contract';
 import { toFitResultReply } from '../fits/fit-replies';
 import { toPanelVersionSummary } from '../panels/panel-replies';
 import { toPeerGroupReply } from '../peers/peer-replies';
 import { toPlan, toYears } from '../scenarios/scenario-replies';
-
-export interface EditionParts {
-  readonly number: number;
-  readonly workspaceName: string;
-  readonly publishedBy: string;
-  readonly publishedAt: Date;
-  readonly confidentiality: Confidentiality;
-  readonly comment: string;
-  readonly ground: FinishedFit;
-  readonly scenarios: readonly Scenario[];
-  readonly peerGroupsTried: number;
-}
+import type { EditionParts } from './edition-parts';
 
 /** All that an edition freezes: nothing shown on it is read from anywhere else later. */
 export function editionContent(parts: EditionParts): EditionContent {
