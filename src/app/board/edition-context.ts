@@ -40,7 +40,7 @@ export function fitSteps({
     {
       label: 'Peers',
       version: `v${peerGroup.number}`,
-      detail: `${peerGroup.peerCount} peers`,
+      detail: `${peerGroup.peerCount + 1} companies`,
       link: `/peers/${peerGroup.id}`,
     },
     { label: 'Fit', version: fit.hash.slice(0, hashLength), link: `/fit/${fitId}` },

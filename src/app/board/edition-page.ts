@@ -75,16 +75,23 @@ export class EditionPage {
     });
   }
 
-  /** `1,900 (500 to 3,300), place 2 to 6 of 14`, in this edition's unit; null where the currencies differ. */
-  protected beforeText(before: EditionReply, now: EditionReply): string | null {
-    const { standing } = before.content.fit;
-    const [then, here] = [before.content.panelVersion, now.content.panelVersion];
-    if (standing === null || then.currency !== here.currency) return null;
-    const ratio = unitRatio(then.unit, here.unit);
-    const scaled = (value: number | null) => (value === null ? null : value * ratio);
+  /** What the signed edition before it said, in this edition's unit; null where the currencies differ. */
+  protected beforeOf(before: EditionReply | null, now: EditionReply) {
+    const standing = before?.content.fit.standing ?? null;
+    if (before === null || standing === null) return null;
+    const { edition, content } = before;
+    const { currency, unit } = now.content.panelVersion;
+    if (content.panelVersion.currency !== currency) return null;
+    const ratio = unitRatio(content.panelVersion.unit, unit);
+    const scaled = (bound: number | null) => (bound === null ? null : bound * ratio);
     const { estimate, low, high } = standing;
     const value = { estimate: estimate * ratio, low: scaled(low), high: scaled(high) };
-    return `${this.#numbers.interval(value, 'money', 3)}, ${placesText(before.content.fit)}`;
+    return {
+      id: edition.id,
+      number: edition.number,
+      signedAt: edition.decision?.at,
+      words: `${this.#numbers.interval(value, 'money', 3)}, ${placesText(content.fit)}`,
+    };
   }
 
   protected openFigure({ key, planned }: EditionFigure): void {

@@ -41,28 +41,26 @@ import { labelsOf, shareText } from './edition-words';
       </p>
     }
     <h3>{{ finding() }}</h3>
-    <div class="columns">
-      <kv-plan-editor
+    <kv-plan-editor
+      [basis]="basis()"
+      [labels]="labels()"
+      [plan]="plan()"
+      (planChanged)="plan.set($event)"
+    />
+    <div class="figures">
+      <kv-plan-table
+        [plans]="plans()"
+        [labels]="labels()"
+        [caption]="caption()"
+        label="Figures of the tried plan by year"
+        (opened)="openPlanned($event)"
+      />
+      <kv-familiar-notes
         [basis]="basis()"
         [labels]="labels()"
-        [plan]="plan()"
-        (planChanged)="plan.set($event)"
+        [years]="reading().years"
+        (insideWanted)="setInside($event)"
       />
-      <div class="figures">
-        <kv-plan-table
-          [plans]="plans()"
-          [labels]="labels()"
-          [caption]="caption()"
-          label="Figures of the tried plan by year"
-          (opened)="openPlanned($event)"
-        />
-        <kv-familiar-notes
-          [basis]="basis()"
-          [labels]="labels()"
-          [years]="reading().years"
-          (insideWanted)="setInside($event)"
-        />
-      </div>
     </div>
   `,
   styles: `
@@ -80,21 +78,11 @@ import { labelsOf, shareText } from './edition-words';
       font-weight: 500;
       text-decoration: underline;
     }
-    .columns {
-      display: grid;
-      grid-template-columns: minmax(0, 1fr) minmax(0, 1fr);
-      gap: 24px 32px;
-    }
     .figures {
       display: grid;
       gap: 16px;
       align-content: start;
       min-inline-size: 0;
-    }
-    @media (width < 1120px) {
-      .columns {
-        grid-template-columns: minmax(0, 1fr);
-      }
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -114,7 +102,7 @@ export class EditionTrial {
     () => this.scenarios()[this.chosen()].plan,
   );
   protected readonly reading = computed(() => readPlan(this.basis(), this.plan(), tQuantile));
-  readonly #name = computed(() => `${this.scenarios()[this.chosen()].name}, tried`);
+  readonly #name = computed(() => `${this.scenarios()[this.chosen()].name} as tried`);
   protected readonly plans = computed(() => [
     {
       name: this.#name(),

@@ -9,6 +9,8 @@ export interface EvidenceLine extends Remark {
   readonly figure?: string;
 }
 
+const farPlaces = ['edge', 'outside'] as const;
+
 /** What a CFO has to know of a fit before signing, in five lines. */
 export function fiveLines(content: EditionContent, numbers: NumberFormat): readonly EvidenceLine[] {
   return [
@@ -96,9 +98,10 @@ function familiarLine({ scenarios, peerGroupsTried }: EditionContent): EvidenceL
       : `${peerGroupsTried} peer group versions were saved up to this edition.`;
   if (scenarios.length === 0) return { kind: 'fine', text: `The edition holds no plan. ${tried}` };
   const odd = scenarios.flatMap(({ name, years }) =>
-    years
-      .filter(({ familiar }) => familiar !== 'inside')
-      .map(({ year, familiar }) => `${name}: ${familiarFinding(year, familiar)}`),
+    farPlaces.flatMap((kind) => {
+      const found = years.filter(({ familiar }) => familiar === kind).map(({ year }) => year);
+      return found.length === 0 ? [] : [`${name}: ${familiarFinding(found, kind)}`];
+    }),
   );
   return odd.length === 0
     ? { kind: 'fine', text: `All planned years are inside the familiar range. ${tried}` }

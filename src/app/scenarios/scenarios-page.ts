@@ -1,6 +1,7 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  LOCALE_ID,
   computed,
   effect,
   inject,
@@ -67,6 +68,7 @@ export class ScenariosPage {
   readonly #banner = inject(ProblemBannerState);
   readonly #context = inject(PageContext);
   readonly #lineage = inject(LineageStore);
+  readonly #locale = inject(LOCALE_ID);
   readonly #numbers = inject(NumberFormat);
   readonly #router = inject(Router);
   readonly #undo = inject(UndoNotice);
@@ -154,8 +156,7 @@ export class ScenariosPage {
     effect(() => {
       const ground = this.store.ground();
       if (ground === null) return;
-      const name = ground.saved?.name ?? '';
-      untracked(() => this.#context.show(contextOf(ground, name)));
+      untracked(() => this.#context.show(contextOf(ground, this.#locale)));
     });
   }
 

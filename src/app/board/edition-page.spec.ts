@@ -1,0 +1,151 @@
+import { provideHttpClient } from '@angular/common/http';
+import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
+import { type ComponentFixture, TestBed } from '@angular/core/testing';
+import { provideRouter } from '@angular/router';
+import { type EditionReply, type Role, problemType } from '@contract';
+import { SessionStore } from '../api/session-store';
+import { NumberFormat } from '../ui/number-format';
+import { PageContext } from '../ui/page-context';
+import { EditionPage } from './edition-page';
+import { editionContent, editionSummary } from './testing/edition-content';
+
+const waiting: EditionReply = {
+  edition: editionSummary,
+  content: editionContent,
+  maySign: true,
+  whyNot: null,
+};
+const signed: EditionReply = {
+  ...waiting,
+  edition: {
+    ...editionSummary,
+    state: 'signed',
+    decision: { kind: 'signed', by: 'T. Emmerquist', at: '2026-11-15T09:00:00.000Z', comment: '' },
+  },
+  maySign: false,
+  whyNot: 'T. Emmerquist has signed this edition already.',
+};
+
+describe('the page of an edition', () => {
+  let fixture: ComponentFixture<EditionPage>;
+  let http: HttpTestingController;
+  const path = `/api/editions/${editionSummary.id}`;
+
+  beforeEach(() => {
+    TestBed.configureTestingModule({
+      providers: [provideHttpClient(), provideHttpClientTesting(), provideRouter([])],
+    });
+    http = TestBed.inject(HttpTestingController);
+    TestBed.inject(NumberFormat).unit.set('millions');
+  });
+  afterEach(() => {
+    http.verify();
+  });
+
+  async function settled(): Promise<void> {
+    await new Promise((resolve) => setTimeout(resolve));
+    await fixture.whenStable();
+  }
+
+  async function open(role: Role, reply: EditionReply): Promise<void> {
+    TestBed.inject(SessionStore).accept({
+      session: {
+        person: { id: editionSummary.id, name: 'A. Reader', email: 'a.reader@velmara.example' },
+        workspace: { id: editionSummary.id, name: 'Velmara Finance' },
+        roles: [role],
+        preferences: { theme: 'system', unit: 'millions', negatives: 'minus' },
+      },
+    });
+    fixture = TestBed.createComponent(EditionPage);
+    fixture.componentRef.setInput('editionId', editionSummary.id);
+    await settled();
+    http.expectOne(path).flush(reply);
+    http.expectOne('/api/editions').flush({ editions: [reply.edition] });
+    await settled();
+  }
+
+  const text = () => (fixture.nativeElement as HTMLElement).textContent.replace(/\s+/g, ' ');
+  const button = (name: string, within: ParentNode = fixture.nativeElement as HTMLElement) =>
+    [...within.querySelectorAll('button')].find((each) => each.textContent.trim() === name);
+
+  it('reads on one page, from the frozen content alone', async () => {
+    await open('cfo', waiting);
+    for (const words of [
+      'The market values Velmara 1,800 (1,170 to 2,430) above',
+      'place 1 to 2 of 3',
+      'Build-out lifts the expected value of Velmara by 160 (96.0 to 224) by FY2027',
+      'For the November meeting.',
+      'Concessions at revalued amounts.',
+      'Associations, not causes.',
+      editionSummary.sha256,
+      'waits for your signature',
+    ])
+      expect(text()).toContain(words);
+  });
+
+  it('has the CFO sign with the password, and says so when it is the wrong one', async () => {
+    await open('cfo', waiting);
+    button('Sign edition 7')?.click();
+    await settled();
+    const dialog = document.querySelector('kv-sign-dialog')!;
+    const box = dialog.querySelector('input')!;
+    const send = async (password: string, answer: () => void): Promise<void> => {
+      box.value = password;
+      box.dispatchEvent(new Event('input'));
+      button('Sign edition 7', dialog)?.click();
+      await settled();
+      answer();
+      await settled();
+    };
+    await send('not it', () => {
+      http
+        .expectOne(`${path}/sign`)
+        .flush(
+          { type: problemType('wrong-credentials'), title: 'No', status: 403 },
+          { status: 403, statusText: 'Forbidden' },
+        );
+    });
+    expect(dialog.textContent).toContain('This is not the password of your account.');
+    await send('a long passphrase', () => {
+      const request = http.expectOne(`${path}/sign`);
+      expect(request.request.body).toEqual({ password: 'a long passphrase' });
+      request.flush(signed);
+    });
+    expect(text()).toContain('Signed by T. Emmerquist on 15 Nov 2026');
+    expect(button('Sign edition 7')).toBeUndefined();
+  });
+
+  it('does not return an edition without a comment', async () => {
+    await open('cfo', waiting);
+    button('Return with a comment')?.click();
+    await settled();
+    const dialog = document.querySelector('kv-return-dialog')!;
+    button('Return edition 7', dialog)?.click();
+    await settled();
+    expect(dialog.textContent).toContain('expected a comment that says what to change');
+    http.expectNone(`${path}/return`);
+    button('Keep it', dialog)?.click();
+    await settled();
+  });
+
+  it('tells the publisher why they cannot sign', async () => {
+    const whyNot = 'You published this edition: another person has to sign it.';
+    await open('cfo', { ...waiting, maySign: false, whyNot });
+    expect(text()).toContain(whyNot);
+    expect(button('Sign edition 7')).toBeUndefined();
+  });
+
+  it('gives readers neither sliders nor links that they cannot open', async () => {
+    await open('reader', signed);
+    expect(button('Move the sliders')).toBeUndefined();
+    expect(TestBed.inject(PageContext).lineage()).toEqual([]);
+    expect(text()).toContain('Signed by T. Emmerquist');
+  });
+
+  it('reads the standing’s lineage through the edition', async () => {
+    await open('reader', signed);
+    button('place 1 to 2 of 3')?.click();
+    await settled();
+    http.expectOne(`${path}/lineage/rank-set`).flush(null, { status: 404, statusText: 'none' });
+  });
+});

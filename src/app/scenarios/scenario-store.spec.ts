@@ -1,0 +1,240 @@
+import { provideHttpClient } from '@angular/common/http';
+import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
+import { TestBed } from '@angular/core/testing';
+import { provideRouter } from '@angular/router';
+import { type ScenarioReply, problemType } from '@contract';
+import { SessionStore } from '../api/session-store';
+import { withValue } from '../ui/plan/change-plan';
+import { readPlan } from '../ui/plan/read-plan';
+import { tQuantile } from '../ui/plan/t-quantile';
+import { planBasis } from '../ui/plan/testing/plan-basis';
+import { DraftKeeper } from './draft-keeper';
+import { ScenarioStore } from './scenario-store';
+import { deskReply, fitId, fitReply, sessionOf } from './testing/scenario-replies';
+
+const scenarioId = '00000000-0000-4000-8000-000000000009';
+
+/** A stored scenario with the figures that its plan has. */
+function scenario(version: number, capex: number, name = 'Build-out'): ScenarioReply {
+  const plan = [{ year: 2026, values: [capex, 1000] }];
+  return {
+    id: scenarioId,
+    fitId,
+    name,
+    note: '',
+    version,
+    plan,
+    years: readPlan(planBasis, plan, tQuantile).years.map(
+      ({ year, expected, difference, familiar }) => ({
+        year,
+        expected: { ...expected },
+        difference: { ...difference },
+        familiar: familiar.kind,
+      }),
+    ),
+    createdBy: 'M. Oduya',
+    updatedBy: version === 1 ? 'M. Oduya' : 'I. Vandresson',
+    updatedAt: '2026-11-14T09:00:00.000Z',
+  };
+}
+
+describe('a scenario on the page', () => {
+  let http: HttpTestingController;
+  let store: ScenarioStore;
+
+  beforeEach(() => {
+    TestBed.configureTestingModule({
+      providers: [
+        provideHttpClient(),
+        provideHttpClientTesting(),
+        provideRouter([]),
+        DraftKeeper,
+        ScenarioStore,
+      ],
+    });
+    http = TestBed.inject(HttpTestingController);
+    TestBed.inject(SessionStore).accept(sessionOf('analyst'));
+    store = TestBed.inject(ScenarioStore);
+    jasmine.clock().install();
+  });
+  afterEach(() => {
+    jasmine.clock().uninstall();
+    http.verify();
+  });
+
+  const draftPath = `/api/fits/${fitId}/draft`;
+
+  /** Lets promises run that stand between an answer and the next request. */
+  async function settled(): Promise<void> {
+    for (let turn = 0; turn < 12; turn += 1) await Promise.resolve();
+  }
+
+  function openSaved(draft: object | null = null): void {
+    store.open({ scenarioId, fitId: null });
+    http.expectOne(`/api/scenarios/${scenarioId}`).flush(scenario(1, 120));
+    http.expectOne('/api/desk').flush(deskReply);
+    http.expectOne(`/api/fits/${fitId}`).flush(fitReply);
+    http.expectOne(`/api/fits/${fitId}/scenarios`).flush({ scenarios: [scenario(1, 120)] });
+    http.expectOne(`${draftPath}?scenario=${scenarioId}`).flush({ draft });
+  }
+
+  function openNew(): void {
+    store.open({ scenarioId: null, fitId: null });
+    http.expectOne('/api/desk').flush(deskReply);
+    http.expectOne(`/api/fits/${fitId}`).flush(fitReply);
+    http.expectOne(`/api/fits/${fitId}/scenarios`).flush({ scenarios: [] });
+    http.expectOne(draftPath).flush({ draft: null });
+  }
+
+  const planCapex = (capex: number): void => {
+    store.change({ plan: withValue(store.text().plan, 2026, 0, capex) });
+  };
+
+  it('starts a new plan from the last actual values of the newest fit', () => {
+    openNew();
+    expect(store.text().plan.map(({ year }) => year)).toEqual([2026, 2027, 2028]);
+    expect(store.reading()?.years[2].difference.estimate).toBe(0);
+    expect(store.isChanged()).toBeFalse();
+  });
+
+  it('follows each change at once, and keeps a draft once changes pause', async () => {
+    openNew();
+    planCapex(130);
+    planCapex(140);
+    expect(store.reading()?.years[0].difference.estimate).toBe(60);
+    jasmine.clock().tick(799);
+    await settled();
+    http.expectNone(draftPath);
+    jasmine.clock().tick(1);
+    await settled();
+    const kept = http.expectOne(draftPath);
+    const body = kept.request.body as { plan: { values: number[] }[] };
+    expect(kept.request.method).toBe('PUT');
+    expect(body.plan[0].values[0]).toBe(140);
+    kept.flush({ draft: { ...body, updatedAt: '2026-11-14T09:00:00.000Z' } });
+    await settled();
+    expect(store.draftState()).toBe('kept');
+  });
+
+  it('saves a new version, and says that the server computed the same', async () => {
+    openSaved();
+    planCapex(150);
+    const saving = store.save();
+    await settled();
+    const request = http.expectOne(`/api/scenarios/${scenarioId}`);
+    expect((request.request.body as { version: number }).version).toBe(1);
+    request.flush(scenario(2, 150));
+    expect((await saving)?.version).toBe(2);
+    expect(store.confirmation()).toEqual({ kind: 'agrees', version: 2 });
+    expect(store.isChanged()).toBeFalse();
+    jasmine.clock().tick(2000);
+    await settled();
+  });
+
+  it('names the years for which the server computed something else', async () => {
+    openSaved();
+    planCapex(150);
+    const saving = store.save();
+    await settled();
+    http.expectOne(`/api/scenarios/${scenarioId}`).flush({
+      ...scenario(2, 150),
+      years: scenario(2, 151).years,
+    });
+    await saving;
+    expect(store.confirmation()).toEqual({ kind: 'differs', version: 2, years: [2026] });
+  });
+
+  it('loses nothing when somebody else saved meanwhile: theirs opens, one’s own can be brought back', async () => {
+    openSaved();
+    planCapex(150);
+    const saving = store.save();
+    await settled();
+    http.expectOne(`/api/scenarios/${scenarioId}`).flush(
+      {
+        type: problemType('stale-version'),
+        title: 'Conflict',
+        status: 409,
+        detail: 'I. Vandresson saved version 2 of this scenario meanwhile.',
+      },
+      { status: 409, statusText: 'Conflict' },
+    );
+    expect(await saving).toBeNull();
+    expect(store.conflict()?.slug).toBe('stale-version');
+    expect(store.text().plan[0].values[0]).toBe(150);
+
+    const opening = store.openTheirs();
+    await settled();
+    const kept = http.expectOne(draftPath);
+    const body = kept.request.body as { plan: { values: number[] }[] };
+    expect(body.plan[0].values[0]).toBe(150);
+    kept.flush({ draft: { ...body, updatedAt: '2026-11-14T09:00:00.000Z' } });
+    await settled();
+    http.expectOne(`/api/scenarios/${scenarioId}`).flush(scenario(2, 200));
+    await opening;
+    expect(store.text().plan[0].values[0]).toBe(200);
+    expect(store.conflict()).toBeNull();
+
+    store.bringBack();
+    expect(store.text().plan[0].values[0]).toBe(150);
+    expect(store.ground()?.saved?.version).toBe(2);
+  });
+
+  it('saves the plan as a copy beside the scenario that it came from', async () => {
+    openSaved();
+    planCapex(150);
+    const saving = store.saveAsCopy();
+    await settled();
+    const request = http.expectOne('/api/scenarios');
+    expect((request.request.body as { name: string }).name).toBe('Build-out (copy)');
+    request.flush({ ...scenario(1, 150), id: '00000000-0000-4000-8000-00000000000a' });
+    await settled();
+    http.expectOne(`${draftPath}?scenario=${scenarioId}`).flush(null);
+    await saving;
+    expect(store.ground()?.scenarios.length).toBe(2);
+  });
+
+  it('brings an unsaved plan back, and goes back to what is stored when it is discarded', async () => {
+    openSaved({
+      scenarioId,
+      name: 'Build-out',
+      note: 'half done',
+      plan: [{ year: 2026, values: [170, 1000] }],
+      updatedAt: '2026-11-14T08:00:00.000Z',
+    });
+    expect(store.restoredAt()).toBe('2026-11-14T08:00:00.000Z');
+    expect(store.text().plan[0].values[0]).toBe(170);
+    const discarding = store.discard();
+    await settled();
+    http.expectOne(`${draftPath}?scenario=${scenarioId}`).flush(null);
+    await discarding;
+    expect(store.text().plan[0].values[0]).toBe(120);
+    expect(store.restoredAt()).toBeNull();
+  });
+
+  it('takes a scenario away and puts it back', async () => {
+    openSaved();
+    const removing = store.remove(scenario(1, 120));
+    await settled();
+    http.expectOne(`/api/scenarios/${scenarioId}`).flush(null);
+    expect(await removing).toBeTrue();
+    expect(store.ground()?.scenarios).toEqual([]);
+    const restoring = store.restore(scenario(1, 120));
+    await settled();
+    http.expectOne(`/api/scenarios/${scenarioId}/restore`).flush(scenario(1, 120));
+    expect(await restoring).toBeTrue();
+    expect(store.ground()?.scenarios.length).toBe(1);
+  });
+
+  it('moves for a CFO without asking for a draft or keeping one', async () => {
+    TestBed.inject(SessionStore).accept(sessionOf('cfo'));
+    store.open({ scenarioId: null, fitId });
+    http.expectOne('/api/desk').flush(deskReply);
+    http.expectOne(`/api/fits/${fitId}`).flush(fitReply);
+    http.expectOne(`/api/fits/${fitId}/scenarios`).flush({ scenarios: [] });
+    planCapex(150);
+    jasmine.clock().tick(5000);
+    await settled();
+    expect(store.maySave()).toBeFalse();
+    expect(store.reading()?.years[0].difference.estimate).toBe(80);
+  });
+});

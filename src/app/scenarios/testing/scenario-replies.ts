@@ -1,0 +1,120 @@
+import type { DeskReply, FitReply, FitSummary, Role, SessionReply } from '@contract';
+import { planBasis } from '../../ui/plan/testing/plan-basis';
+
+const uuid = (last: number) => `00000000-0000-4000-8000-00000000000${last}`;
+export const fitId = uuid(1);
+
+const panelVersion: FitReply['panelVersion'] = {
+  id: uuid(2),
+  panelId: uuid(3),
+  panelName: 'Pumps',
+  number: 4,
+  currency: 'EUR',
+  unit: 'millions',
+  note: '',
+  companies: 3,
+  rows: 36,
+  firstYear: 2014,
+  lastYear: 2025,
+  createdAt: '2026-11-10T09:00:00.000Z',
+  createdBy: 'M. Oduya',
+  file: { id: uuid(4), name: 'pumps.csv', byteSize: 1200, sha256: 'f'.repeat(64) },
+};
+
+const peerGroup: FitReply['peerGroup'] = {
+  id: uuid(5),
+  number: 2,
+  panelVersionId: uuid(2),
+  ownCompany: 'Velmara',
+  peerCount: 2,
+  note: '',
+  createdAt: '2026-11-11T09:00:00.000Z',
+  createdBy: 'M. Oduya',
+};
+
+const fit: FitSummary = {
+  id: fitId,
+  hash: '6f3a91bc52d0',
+  state: 'done',
+  peerGroupId: uuid(5),
+  panelVersionId: uuid(2),
+  ownCompany: 'Velmara',
+  regressors: ['capex', 'book_equity'],
+  slopes: 'cr2',
+  confidence: 0.95,
+  standing: null,
+  rankSet: null,
+  companies: 3,
+  createdAt: '2026-11-12T09:00:00.000Z',
+  createdBy: 'M. Oduya',
+};
+
+const noTest = { value: null, df1: 1, df2: 1, pValue: null };
+
+/** A fit with nothing but what a plan is read through; figures made up. */
+export const fitReply: FitReply = {
+  fit,
+  progress: null,
+  failure: null,
+  panelVersion,
+  peerGroup,
+  result: {
+    engine: '1.0.0',
+    hash: '6f3a91bc52d0',
+    specification: {
+      effects: 'company',
+      form: 'levels',
+      lag: 0,
+      slopes: 'cr2',
+      confidence: 0.95,
+      seed: null,
+    },
+    outcome: 'market_value',
+    members: ['Velmara', 'Sarvane', 'Kesdrin'],
+    sample: {
+      companies: 3,
+      years: 12,
+      observations: 36,
+      balanced: true,
+      firstYear: 2014,
+      lastYear: 2025,
+      dropped: [],
+      singleRow: [],
+    },
+    slopes: [],
+    slopeCovariance: [],
+    intercepts: [],
+    yearEffects: null,
+    standing: null,
+    pairs: null,
+    gapPath: null,
+    drift: null,
+    goodness: {
+      withinRSquared: 0.6,
+      rSquared: 0.9,
+      adjustedRSquared: 0.9,
+      residualStandardError: 40,
+      f: noTest,
+      fSlopes: noTest,
+    },
+    pooled: { constant: 0, slopes: {}, rSquared: 0.5, f: noTest },
+    poolability: noTest,
+    withoutCompany: [],
+    ownYears: [{ ...planBasis.last, regressors: [...planBasis.last.regressors] }],
+    prediction: structuredClone(planBasis) as NonNullable<FitReply['result']>['prediction'],
+    warnings: [],
+  },
+};
+
+export const deskReply: DeskReply = { panelVersion, peerGroup, fit, editionsWaiting: 0 };
+
+export function sessionOf(role: Role): SessionReply {
+  return {
+    session: {
+      person: { id: uuid(8), name: 'M. Oduya', email: 'm.oduya@velmara.example' },
+      workspace: { id: uuid(7), name: 'Velmara Finance' },
+      roles: [role],
+      preferences: { theme: 'system', unit: 'millions', negatives: 'minus' },
+    },
+  };
+}

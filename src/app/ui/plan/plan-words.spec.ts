@@ -1,0 +1,74 @@
+import { TestBed } from '@angular/core/testing';
+import { familiarRange } from '@prediction';
+import { NumberFormat } from '../number-format';
+import { familiarFinding, familiarReason, planFinding } from './plan-words';
+import { listed, regressorLabels } from './regressor-labels';
+import { planBasis } from './testing/plan-basis';
+
+describe('a plan in words', () => {
+  let numbers: NumberFormat;
+  const labels = ['capex', 'book equity'];
+  const finding = (estimate: number, low: number | null, high: number | null) =>
+    planFinding(
+      'Build-out',
+      'Velmara',
+      { year: 2028, difference: { estimate, standardError: 1, low, high } },
+      numbers,
+    );
+
+  beforeEach(() => {
+    numbers = TestBed.inject(NumberFormat);
+    numbers.panelUnit.set('millions');
+    numbers.unit.set('millions');
+  });
+
+  it('says that it lifts or lowers the expected value, with the interval the right way round', () => {
+    expect(finding(285, 100, 470)).toBe(
+      'Build-out lifts the expected value of Velmara by 285 (100 to 470) by FY2028',
+    );
+    expect(finding(-285, -470, -100)).toBe(
+      'Build-out lowers the expected value of Velmara by 285 (100 to 470) by FY2028',
+    );
+  });
+
+  it('says may where the interval holds zero or is missing', () => {
+    expect(finding(285, -100, 670)).toContain('may lift');
+    expect(finding(-285, null, null)).toContain('may lower');
+    expect(finding(0, 0, 0)).toBe(
+      'Build-out leaves the expected value of Velmara where the base has it in FY2028',
+    );
+  });
+
+  it('says which amount left whose range', () => {
+    const far = familiarRange(planBasis, [190, 1000]);
+    expect(far.kind).toBe('edge');
+    expect(familiarFinding([2027, 2028], far.kind)).toBe(
+      'FY2027 and FY2028 are at the edge of the familiar range',
+    );
+    expect(familiarReason(planBasis, labels, far, numbers)).toContain(
+      'Capex 190.0 is above Velmara’s own range (60.0 to 150.0) and within its peers’ (20.0 to 300.0).',
+    );
+  });
+
+  it('says so when each amount alone was seen and only together they were not', () => {
+    const together = familiarRange({ ...planBasis, largestOwnLeverage: 0.1 }, [140, 1200]);
+    expect(together.kind).toBe('edge');
+    expect(familiarReason(planBasis, labels, together, numbers)).toContain(
+      'Each value alone has been seen; capex and book equity together have not.',
+    );
+  });
+
+  it('names regressors by their role, and by their header where they have none', () => {
+    expect(regressorLabels(['inv', 'capital', 'research'])).toEqual([
+      'capex',
+      'book equity',
+      'research',
+    ]);
+    expect(regressorLabels(['equity', 'inv'], ['bookEquity', 'capex'])).toEqual([
+      'book equity',
+      'capex',
+    ]);
+    expect(listed(['a', 'b', 'c'])).toBe('a, b and c');
+    expect(listed(['a'])).toBe('a');
+  });
+});

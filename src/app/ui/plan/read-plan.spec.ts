@@ -1,0 +1,38 @@
+import { readPlan } from './read-plan';
+import { tQuantile } from './t-quantile';
+import { planBasis, quantileOfTen } from './testing/plan-basis';
+
+describe('readPlan', () => {
+  it('reads the base, which holds the last actual values', () => {
+    const { base } = readPlan(planBasis, [], quantileOfTen);
+    expect(base.estimate).toBe(2720);
+  });
+
+  it('gives each year its expected value, its difference to the base and the parts that add up to it', () => {
+    const plan = [{ year: 2026, values: [130, 1100] }];
+    const [year] = readPlan(planBasis, plan, quantileOfTen).years;
+    expect(year.expected.estimate).toBe(2710);
+    expect(year.difference.estimate).toBe(-10);
+    // √(20²·0.04 + 100²·0.0025) = √41, times t(10).
+    expect(year.difference.high).toBeCloseTo(-10 + Math.sqrt(41) * 2.2281388519649385, 10);
+    expect(year.parts.terms.map(({ estimate }) => estimate)).toEqual([40, -50]);
+    expect(year.parts.total).toBe(-10);
+    expect(year.familiar.kind).toBe('inside');
+  });
+
+  it('has no difference where the plan holds the last actual values', () => {
+    const plan = [{ year: 2026, values: [110, 1000] }];
+    expect(readPlan(planBasis, plan, quantileOfTen).years[0].difference).toEqual({
+      estimate: 0,
+      standardError: 0,
+      low: 0,
+      high: 0,
+    });
+  });
+
+  it('takes its quantile of Student’s t from the package that the server uses', () => {
+    // scipy 1.x: t.ppf(0.975, 10), t.ppf(0.975, 2.07).
+    expect(tQuantile(0.975, 10)).toBeCloseTo(2.2281388519649385, 12);
+    expect(tQuantile(0.975, 2.07)).toBeCloseTo(4.166185037146253, 10);
+  });
+});

@@ -1,0 +1,33 @@
+import { heldPlan, withValue } from './change-plan';
+import { sliderRange } from './slider-range';
+import { planBasis } from './testing/plan-basis';
+
+describe('sliderRange', () => {
+  const plan = heldPlan(planBasis, 2);
+
+  it('reaches beyond the own company’s range in round steps, and below zero only where something was', () => {
+    const capex = sliderRange(planBasis, 0, plan);
+    expect([capex.min, capex.max, capex.step]).toEqual([14, 240, 2]);
+    expect(capex.familiar).toEqual({ low: 20, high: 300 });
+    const low = { ...planBasis, ownRange: [{ low: 10, high: 150 }, planBasis.ownRange[1]] };
+    expect(sliderRange(low, 0, plan).min).toBe(0);
+    const debt = { ...planBasis, ownRange: [{ low: -50, high: 150 }, planBasis.ownRange[1]] };
+    expect(sliderRange(debt, 0, plan).min).toBe(-150);
+  });
+
+  it('widens to an amount that was typed beyond it', () => {
+    expect(sliderRange(planBasis, 0, withValue(plan, 2026, 0, 900)).max).toBe(900);
+    expect(sliderRange(planBasis, 0, withValue(plan, 2026, 0, -40)).min).toBe(-40);
+  });
+
+  it('has a step also for a company whose values never moved', () => {
+    const still = {
+      ...planBasis,
+      ownRange: [{ low: 0, high: 0 }, planBasis.ownRange[1]],
+      last: { ...planBasis.last, regressors: [0, 1000] },
+    };
+    const { min, max, step } = sliderRange(still, 0, heldPlan(still, 1));
+    expect(step).toBeGreaterThan(0);
+    expect(max).toBeGreaterThan(min);
+  });
+});
