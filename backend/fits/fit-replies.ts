@@ -6,7 +6,7 @@ import type { FitOnGround } from './fit-service';
 import type { StoredFit } from './fit-view';
 
 export function toFitSummary(fit: StoredFit): FitSummary {
-  const standing = fit.result?.standing ?? null;
+  const { standing } = fit;
   return {
     id: fit.id,
     hash: fit.hash,
@@ -28,18 +28,18 @@ export function toFitSummary(fit: StoredFit): FitSummary {
             intervalReason: standing.intervalReason,
           },
     rankSet: standing?.rankSet ? [standing.rankSet[0], standing.rankSet[1]] : null,
-    companies: fit.result?.sample.companies ?? null,
+    companies: fit.companies,
     createdAt: fit.createdAt.toISOString(),
     createdBy: fit.createdByName,
   };
 }
 
-export function toFitReply({ fit, panelVersion, peerGroup }: FitOnGround): FitReply {
+export function toFitReply({ fit, result, panelVersion, peerGroup }: FitOnGround): FitReply {
   return {
     fit: toFitSummary(fit),
     progress: fit.progress,
     failure: fit.failure === null ? null : { ...fit.failure, subjects: [...fit.failure.subjects] },
-    result: fit.result === null ? null : toFitResultReply(fit.result),
+    result: result === undefined ? null : toFitResultReply(result),
     panelVersion: toPanelVersionSummary(panelVersion),
     peerGroup: toPeerGroupSummary(peerGroup),
   };

@@ -16,9 +16,10 @@ export interface FitRequest {
   readonly furtherRegressors: readonly string[];
 }
 
-/** A fit with what it stands on. */
+/** A fit with what it stands on; without a result until it is done. */
 export interface FitOnGround {
   readonly fit: StoredFit;
+  readonly result: FitResult | undefined;
   readonly peerGroup: PeerGroup;
   readonly panelVersion: PanelVersionRow;
 }
@@ -112,6 +113,7 @@ export async function findFit(tx: WorkspaceRepositories, id: string): Promise<Fi
   if (panelVersion === undefined) throw new NotFound('There is no such panel version.');
   return {
     fit: toStoredFit(row),
+    result: (await tx.fits.result(id)) as FitResult | undefined,
     panelVersion,
     peerGroup: await findPeerGroup(tx, row.peerGroupId),
   };
@@ -126,9 +128,9 @@ export async function findLatestFit(tx: WorkspaceRepositories): Promise<StoredFi
 /** @throws {NotFound}; {Conflict} while it is not done. */
 export async function findFinishedFit(tx: WorkspaceRepositories, id: string): Promise<FinishedFit> {
   const found = await findFit(tx, id);
-  if (found.fit.result === null)
+  if (found.result === undefined)
     throw new Conflict('This fit has no result. Wait for it, or start another.');
-  return { ...found, result: found.fit.result };
+  return { ...found, result: found.result };
 }
 
 function specificationOf(request: FitRequest, version: PanelVersionRow): StoredSpecification {

@@ -1,5 +1,5 @@
 import type { FitRow } from '../../db/repositories/fits-repository';
-import type { FitResult, Specification } from '../stats';
+import type { Specification, Standing } from '../stats';
 
 /** What a fit's row keeps of its specification: the engine's, and which columns go in. */
 export interface StoredSpecification extends Specification {
@@ -22,11 +22,11 @@ export interface FitFailure {
 /** A fit's row with its JSON columns under their types. */
 export interface StoredFit extends Omit<
   FitRow,
-  'specification' | 'progress' | 'result' | 'failure'
+  'specification' | 'progress' | 'standing' | 'failure'
 > {
   readonly specification: StoredSpecification;
   readonly progress: FitProgress | null;
-  readonly result: FitResult | null;
+  readonly standing: Standing | null;
   readonly failure: FitFailure | null;
 }
 
@@ -35,7 +35,7 @@ export function toStoredFit(row: FitRow): StoredFit {
     ...row,
     specification: row.specification as StoredSpecification,
     progress: row.progress as FitProgress | null,
-    result: row.result as FitResult | null,
+    standing: row.standing as Standing | null,
     failure: row.failure as FitFailure | null,
   };
 }

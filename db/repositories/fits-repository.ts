@@ -1,4 +1,4 @@
-import type { Kysely } from 'kysely';
+import { type Kysely, sql } from 'kysely';
 import { withNamedErrors } from '../errors';
 import type { Database } from '../schema/database';
 
@@ -13,7 +13,9 @@ export interface FitRow {
   readonly state: FitState;
   readonly progress: object | null;
   readonly hash: string | null;
-  readonly result: object | null;
+  /** The standing and the number of companies of the result: a whole result can be megabytes. */
+  readonly standing: object | null;
+  readonly companies: number | null;
   readonly failure: object | null;
   readonly createdAt: Date;
   readonly createdByName: string;
@@ -59,14 +61,15 @@ export class FitsRepository {
     return this.fits().where('fit.id', '=', id).executeTakeFirst();
   }
 
-  async state(id: string): Promise<FitState | undefined> {
+  /** The whole result; undefined for a fit that is not done. */
+  async result(id: string): Promise<object | undefined> {
     const found = await this.db
       .selectFrom('fit')
-      .select('state')
+      .select('result')
       .where('workspaceId', '=', this.workspaceId)
       .where('id', '=', id)
       .executeTakeFirst();
-    return found?.state;
+    return found?.result ?? undefined;
   }
 
   list(limit: number): Promise<FitRow[]> {
@@ -152,7 +155,8 @@ export class FitsRepository {
         'fit.state',
         'fit.progress',
         'fit.hash',
-        'fit.result',
+        sql<object | null>`fit.result -> 'standing'`.as('standing'),
+        sql<number | null>`(fit.result #>> '{sample,companies}')::integer`.as('companies'),
         'fit.failure',
         'fit.createdAt',
         'person.name as createdByName',
