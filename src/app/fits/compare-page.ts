@@ -66,7 +66,7 @@ export class ComparePage {
     return {
       a,
       b,
-      finding: comparisonFinding(a, b),
+      finding: comparisonFinding(a, b, this.numbers),
       hasOneCurrency,
       lines: specificationLines(a, b),
       members: memberDifference(a.result, b.result),

@@ -1,6 +1,8 @@
 import type { FitReply, FitResult } from '@contract';
+import { type NumberFormat, headlineDigits } from '../ui/number-format';
 import { covarianceName } from './covariance-words';
 import { confidenceText, listed, regressorWord, shortHash } from './fit-words';
+import { moneyOf } from './panel-money';
 
 /** A fit that is done, as the comparison takes it. */
 export interface FinishedFit {
@@ -55,15 +57,20 @@ export function memberDifference(a: FitResult, b: FitResult): MemberDifference {
   };
 }
 
-/** The comparison's finding: in what the two differ. */
-export function comparisonFinding(a: FinishedFit, b: FinishedFit): string {
+/** The comparison's finding: what the standing is under each, and in what they differ. */
+export function comparisonFinding(a: FinishedFit, b: FinishedFit, numbers: NumberFormat): string {
   const different = specificationLines(a, b)
     .filter(({ isSame }) => !isSame)
     .map(({ label }) => label.toLowerCase());
-  const names = `Fits ${shortHash(a.reply.fit.hash)} and ${shortHash(b.reply.fit.hash)}`;
-  return different.length === 0
-    ? `${names} were made from the same`
-    : `${names} differ in ${listed(different)}`;
+  const cause =
+    different.length === 0 ? 'made from the same' : `they differ in ${listed(different)}`;
+  const standing = ({ reply, result }: FinishedFit): string => {
+    const name = `fit ${shortHash(reply.fit.hash)}`;
+    return result.standing === null
+      ? `none under ${name}`
+      : `${moneyOf(result.standing, reply.panelVersion, numbers, headlineDigits)} under ${name}`;
+  };
+  return `Standing ${standing(a)}, ${standing(b)}: ${cause}`;
 }
 
 /** Names of slopes of either fit, each once, those of the first first. */

@@ -41,6 +41,8 @@ export class FitList {
 
   /** The fit of the page, where there is one. */
   readonly shownId = input<string>();
+  /** Its state: the list is read again when that changes. */
+  readonly shownState = input<FitState>();
 
   protected readonly unit = this.#numbers.unitLabel;
   protected readonly chosen = signal<readonly string[]>([]);
@@ -58,6 +60,7 @@ export class FitList {
   constructor() {
     effect(() => {
       this.shownId();
+      this.shownState();
       untracked(() => void this.store.load());
     });
   }
@@ -83,7 +86,8 @@ export class FitList {
         standing === null || panelVersion === undefined
           ? 'n/a'
           : moneyOf(standing, panelVersion, this.#numbers),
-      places: rankSet === null ? 'n/a' : placesText(rankSet, fit.companies),
+      places: rankSet === null ? 'n/a' : placesText(rankSet, null),
+      companies: fit.companies,
       createdBy: fit.createdBy,
       createdAt: fit.createdAt,
     };

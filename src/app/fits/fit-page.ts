@@ -10,6 +10,7 @@ import {
   untracked,
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
+import type { MatDialogConfig } from '@angular/material/dialog';
 import { Router, RouterLink } from '@angular/router';
 import { type FitReply, apiRoutes, mayCall } from '@contract';
 import { firstValueFrom } from 'rxjs';
@@ -123,15 +124,19 @@ export class FitPage {
         import('./specification-dialog'),
         firstValueFrom(this.#panels.version(panelVersionId)),
       ]);
+      const settings: Pick<
+        MatDialogConfig<SpecificationQuestion>,
+        'data' | 'maxWidth' | 'autoFocus'
+      > = {
+        data: { specification, columns: furtherColumns(panel) },
+        maxWidth: 640,
+        autoFocus: 'first-heading',
+      };
       const opened = this.#injector
         .get(MatDialog)
         .open<SpecificationDialog, SpecificationQuestion, Specification>(
           dialog.SpecificationDialog,
-          {
-            data: { specification, columns: furtherColumns(panel) },
-            maxWidth: 640,
-            autoFocus: 'first-heading',
-          },
+          settings,
         );
       return await firstValueFrom(opened.afterClosed(), { defaultValue: undefined });
     } catch (error) {

@@ -1,6 +1,6 @@
 import { DatePipe } from '@angular/common';
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
-import type { FitReply, FitResult } from '@contract';
+import type { FitReply, FitResult, IntervalEstimate } from '@contract';
 import { LineageStore } from '../api/lineage-store';
 import type { ChartText } from '../charts/chart-text';
 import { GapPath } from '../charts/gap-path/gap-path';
@@ -15,11 +15,10 @@ import { covarianceName } from './covariance-words';
 import { driftFinding, poolabilityText, warningRemarks } from './evidence-words';
 import {
   confidenceText,
-  fText,
-  pText,
   placesText,
   regressorWord,
   shortHash,
+  testText,
   yearsText,
 } from './fit-words';
 import { GoodnessList } from './goodness-list';
@@ -74,10 +73,9 @@ export class FitResultView {
     })),
   );
   protected readonly poolability = computed(() => poolabilityText(this.result(), this.numbers));
-  protected readonly poolabilityTest = computed(() => {
-    const { poolability } = this.result();
-    return `${fText(poolability, this.numbers)}, ${pText(poolability.pValue)}`;
-  });
+  protected readonly poolabilityTest = computed(() =>
+    testText(this.result().poolability, this.numbers),
+  );
   protected readonly drift = computed(() =>
     driftFinding(this.result(), this.ownCompany(), this.numbers),
   );
@@ -98,6 +96,11 @@ export class FitResultView {
       gapPath: of(this.drift(), `${this.unit()} · ${percent} intervals · ${years}`),
     };
   });
+
+  /** Digits that an estimate shares with its bounds. */
+  protected digitsOf({ estimate, low, high }: IntervalEstimate): number {
+    return this.numbers.columnDigits([estimate, low, high]);
+  }
 
   protected open(figure: string): void {
     this.#lineage.open({ fitId: this.reply().fit.id }, figure);

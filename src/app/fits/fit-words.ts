@@ -46,12 +46,13 @@ export function pText(pValue: number | null): string {
   return pValue < 0.001 ? 'p < 0.001' : `p ${pValue.toFixed(3)}`;
 }
 
-/** `F 115.9 on 10 and 207`: a statistic with its degrees of freedom. */
-export function fText(
-  test: { readonly value: number | null; readonly df1: number; readonly df2: number },
+/** `on 10 and 207, p < 0.001`: what stands beside a statistic. */
+export function testText(
+  test: { readonly df1: number; readonly df2: number; readonly pValue: number | null },
   numbers: NumberFormat,
 ): string {
-  return `${numbers.figure(test.value, 'plain')} on ${numbers.headline(test.df1, 'count')} and ${numbers.headline(test.df2, 'count')}`;
+  const [first, second] = [test.df1, test.df2].map((df) => numbers.headline(df, 'count'));
+  return `on ${first} and ${second}, ${pText(test.pValue)}`;
 }
 
 /** What of a specification is not the default, and always slopes and confidence: `CR2 · 95 % · with employees`. */

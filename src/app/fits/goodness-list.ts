@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, output } f
 import type { FitResult } from '@contract';
 import { type FigureKind, NumberFormat } from '../ui/number-format';
 import { Figure } from '../ui/figure';
-import { pText } from './fit-words';
+import { testText } from './fit-words';
 
 interface Measure {
   readonly label: string;
@@ -68,8 +68,7 @@ export class GoodnessList {
     const { goodness } = this.result();
     const { f, fSlopes } = goodness;
     const plain = { kind: 'plain', detail: '' } as const;
-    const test = (each: typeof f): string =>
-      `on ${this.#numbers.headline(each.df1, 'count')} and ${this.#numbers.headline(each.df2, 'count')}, ${pText(each.pValue)}`;
+    const test = (each: typeof f): string => testText(each, this.#numbers);
     return [
       { ...plain, label: 'R²', value: goodness.rSquared, figure: 'r-squared' },
       {

@@ -1,5 +1,5 @@
 import { type MoneyUnit, unitRatio } from '@figures';
-import type { NumberFormat } from '../ui/number-format';
+import { type NumberFormat, tableDigits } from '../ui/number-format';
 
 interface Bounded {
   readonly estimate: number;
@@ -23,7 +23,9 @@ export function moneyOf(
   value: Bounded,
   panel: { readonly currency: string; readonly unit: MoneyUnit },
   numbers: NumberFormat,
+  significant = tableDigits,
 ): string {
-  const text = numbers.interval(inUnit(value, panel.unit, numbers.panelUnit()));
+  const shown = inUnit(value, panel.unit, numbers.panelUnit());
+  const text = numbers.interval(shown, 'money', significant);
   return panel.currency === numbers.currency() ? text : `${panel.currency} ${text}`;
 }

@@ -17,8 +17,8 @@ const mostListed = 50;
         @for (row of listed(); track $index) {
           <li>
             <a [routerLink]="['/panel', panelVersionId()]" [queryParams]="{ row: row.row }"
-              >Row {{ row.row }}</a
-            >: {{ row.column }} missing
+              >Row {{ row.row }}: {{ row.column }} missing</a
+            >
           </li>
         }
       </ul>

@@ -11,6 +11,7 @@ import { MatButton } from '@angular/material/button';
 import { NumberFormat } from '../ui/number-format';
 import type { PanelCompany } from './peer-draft';
 import { yearsText } from './peer-words';
+import type { StandingsWithout } from './peers-store';
 import { ReasonField } from './reason-field';
 
 /** A company on one side of the choice, with what is known about it. */
@@ -35,15 +36,14 @@ export class PeerTable {
   readonly rows = input.required<readonly PeerRow[]>();
   readonly side = input.required<'in' | 'out'>();
   readonly isReadOnly = input(false);
-  /** Shows what leaving each out would change. */
-  readonly hasStandings = input(false);
+  /** Shows what leaving each out would change, by this fit. */
+  readonly without = input<Pick<StandingsWithout, 'fitName' | 'standing'> | null>(null);
   readonly reasons = input<readonly string[]>([]);
   readonly moved = output<string>();
   readonly written = output<{ readonly company: string; readonly reason: string }>();
 
   private readonly fields = viewChildren(ReasonField);
 
-  protected readonly unit = this.#numbers.unitLabel;
   protected readonly digits = computed(() => {
     const companies = this.rows().map(({ company }) => company);
     const of = (measure: 'marketValue' | 'capex' | 'bookEquity') =>
@@ -56,6 +56,14 @@ export class PeerTable {
         this.rows().map(({ standingWithout }) => standingWithout ?? null),
       ),
     };
+  });
+
+  protected readonly caption = computed(() => {
+    const values = `Last reported values in ${this.#numbers.unitLabel()}`;
+    const without = this.without();
+    return without === null
+      ? values
+      : `${values}; the standing with all peers is ${this.#numbers.interval(without.standing)} by fit ${without.fitName}`;
   });
 
   protected money(value: number | null | undefined, digits: number): string {

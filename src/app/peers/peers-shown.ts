@@ -43,7 +43,7 @@ export function peersShown(ground: PeersGround, draft: PeerDraft, search: string
       reason: choice === undefined ? '' : reasonOf(choice),
       ...(ground.without === null
         ? {}
-        : { standingWithout: ground.without.get(company.name) ?? null }),
+        : { standingWithout: ground.without.byCompany.get(company.name) ?? null }),
     };
   };
   const missing = [...inside, ...outside]

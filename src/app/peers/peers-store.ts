@@ -1,5 +1,6 @@
 import { Injectable, computed, inject, signal } from '@angular/core';
 import type {
+  IntervalEstimate,
   PanelVersionSummary,
   PeerGroupReply,
   PeerGroupSummary,
@@ -35,8 +36,17 @@ export interface PeersGround {
   readonly saved: PeerGroupReply | null;
   /** Companies of the draft's panel version. */
   readonly companies: readonly PanelCompany[];
-  /** The own company's standing without each peer, by the newest fit of the version shown; null where there is none. */
-  readonly without: ReadonlyMap<string, number | null> | null;
+  /** What leaving each peer out changes, by the newest fit of the version shown; null where there is none. */
+  readonly without: StandingsWithout | null;
+}
+
+export interface StandingsWithout {
+  /** First characters of the fit's hash. */
+  readonly fitName: string;
+  /** With every peer. */
+  readonly standing: IntervalEstimate;
+  /** The own company's standing without each peer; null where none can be estimated. */
+  readonly byCompany: ReadonlyMap<string, number | null>;
 }
 
 export type PeersView =
@@ -202,7 +212,11 @@ export class PeersStore {
     if (fit?.peerGroupId !== peerGroupId) return null;
     const { result } = await firstValueFrom(this.#fits.read(fit.id));
     if (result?.standing == null) return null;
-    return new Map(result.withoutCompany.map(({ company, standing }) => [company, standing]));
+    return {
+      fitName: result.hash.slice(0, 6),
+      standing: result.standing,
+      byCompany: new Map(result.withoutCompany.map(({ company, standing }) => [company, standing])),
+    };
   }
 
   #change(change: (draft: PeerDraft) => PeerDraft): void {

@@ -4,40 +4,48 @@ import {
   type ElementRef,
   computed,
   effect,
-  inject,
   input,
   output,
-  signal,
   viewChild,
 } from '@angular/core';
-import { DestroyRef } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { FormControl, ReactiveFormsModule } from '@angular/forms';
-import { MatAutocompleteModule } from '@angular/material/autocomplete';
+import { MatMenuModule } from '@angular/material/menu';
 
-const mostOffered = 8;
 const longestReason = 2000;
 
-/** One company's reason, written in place; reasons written elsewhere are offered for use again. */
+/** One company's reason, written in place; while it is empty, reasons written elsewhere can be taken over. */
 @Component({
   selector: 'kv-reason-field',
-  imports: [MatAutocompleteModule, ReactiveFormsModule],
+  imports: [MatMenuModule, ReactiveFormsModule],
   template: `
     <textarea
       #box
       rows="1"
+      autocomplete="off"
       [attr.aria-label]="label()"
       [attr.maxlength]="longest"
-      [placeholder]="placeholder()"
+      placeholder="Reason missing"
       [formControl]="control"
-      [matAutocomplete]="list"
       (keydown.enter)="$event.preventDefault()"
     ></textarea>
-    <mat-autocomplete #list="matAutocomplete" [class]="'kv-reasons'">
-      @for (reason of matching(); track reason) {
-        <mat-option [value]="reason">{{ reason }}</mat-option>
-      }
-    </mat-autocomplete>
+    @if (mayReuse()) {
+      <button
+        type="button"
+        class="kv-link"
+        [matMenuTriggerFor]="list"
+        [attr.aria-label]="label() + ': use a reason already written'"
+      >
+        Use a reason already written
+      </button>
+    }
+    <mat-menu #list="matMenu" class="kv-reasons">
+      <ng-template matMenuContent>
+        @for (reason of reasons(); track reason) {
+          <button mat-menu-item type="button" (click)="take(reason)">{{ reason }}</button>
+        }
+      </ng-template>
+    </mat-menu>
   `,
   styles: `
     :host {
@@ -60,16 +68,15 @@ const longestReason = 2000;
     }
     textarea::placeholder {
       color: var(--kv-soft-ink);
+      opacity: 1;
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class ReasonField {
-  readonly #destroyed = inject(DestroyRef);
-
   readonly value = input.required<string>();
+  /** As `Why Kesdrin is in`. */
   readonly label = input.required<string>();
-  readonly placeholder = input('');
   /** Reasons that are written already. */
   readonly reasons = input<readonly string[]>([]);
   readonly written = output<string>();
@@ -78,30 +85,26 @@ export class ReasonField {
 
   protected readonly longest = longestReason;
   protected readonly control = new FormControl('', { nonNullable: true });
-  readonly #typed = signal('');
-  protected readonly matching = computed(() => {
-    const typed = this.#typed().trim().toLowerCase();
-    return this.reasons()
-      .filter((reason) => {
-        const lower = reason.toLowerCase();
-        return lower !== typed && lower.includes(typed);
-      })
-      .slice(0, mostOffered);
-  });
+  protected readonly mayReuse = computed(
+    () => this.value().trim() === '' && this.reasons().length > 0,
+  );
 
   constructor() {
     effect(() => {
       const value = this.value();
       if (value !== this.control.value) this.control.setValue(value, { emitEvent: false });
-      this.#typed.set(value);
     });
-    this.control.valueChanges.pipe(takeUntilDestroyed(this.#destroyed)).subscribe((value) => {
-      this.#typed.set(value);
+    this.control.valueChanges.pipe(takeUntilDestroyed()).subscribe((value) => {
       this.written.emit(value);
     });
   }
 
   focus(): void {
     this.box().nativeElement.focus();
+  }
+
+  protected take(reason: string): void {
+    this.control.setValue(reason);
+    this.focus();
   }
 }

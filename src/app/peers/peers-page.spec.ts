@@ -1,0 +1,239 @@
+import { provideHttpClient } from '@angular/common/http';
+import {
+  HttpTestingController,
+  type TestRequest,
+  provideHttpClientTesting,
+} from '@angular/common/http/testing';
+import { type ComponentFixture, TestBed } from '@angular/core/testing';
+import { provideRouter } from '@angular/router';
+import {
+  type PanelVersionSummary,
+  type PeerGroupReply,
+  type Role,
+  type SavePeerGroup,
+  problemType,
+} from '@contract';
+import { SessionStore } from '../api/session-store';
+import type { PanelCompany } from './peer-draft';
+import { PeersPage } from './peers-page';
+
+const id = (last: number): string => `0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a00${10 + last}`;
+
+const panelVersion: PanelVersionSummary = {
+  id: id(1),
+  panelId: id(0),
+  panelName: 'Flow control',
+  number: 1,
+  currency: 'EUR',
+  unit: 'millions',
+  note: '',
+  companies: 3,
+  rows: 33,
+  firstYear: 2010,
+  lastYear: 2020,
+  createdAt: '2026-03-04T12:00:00.000Z',
+  createdBy: 'Ilvo Brenn',
+  file: { id: id(2), name: 'flow.csv', byteSize: 900, sha256: 'ab'.repeat(32) },
+};
+const companies: PanelCompany[] = ['Kesdrin', 'Sarvane', 'Velmara'].map((name) => ({
+  name,
+  rows: 11,
+  completeRows: name === 'Kesdrin' ? 10 : 11,
+  firstYear: 2010,
+  lastYear: 2020,
+  marketValue: 1234.5,
+  capex: 88,
+  bookEquity: null,
+}));
+const saved: PeerGroupReply = {
+  id: id(3),
+  number: 1,
+  panelVersionId: panelVersion.id,
+  ownCompany: 'Velmara',
+  peerCount: 2,
+  note: 'First choice',
+  createdAt: panelVersion.createdAt,
+  createdBy: 'Ilvo Brenn',
+  peers: [
+    { company: 'Kesdrin', isIncluded: true, reason: 'Same customers' },
+    { company: 'Sarvane', isIncluded: true, reason: '' },
+  ],
+};
+
+describe('the Peers page', () => {
+  let fixture: ComponentFixture<PeersPage>;
+  let http: HttpTestingController;
+
+  function start(roles: Role[]): void {
+    TestBed.configureTestingModule({
+      providers: [
+        provideHttpClient(),
+        provideHttpClientTesting(),
+        provideRouter([{ path: '**', children: [] }]),
+      ],
+    });
+    TestBed.inject(SessionStore).accept({
+      session: {
+        person: { id: id(8), name: 'Ilvo Brenn', email: 'ilvo@velmara.example' },
+        workspace: { id: id(9), name: 'Velmara' },
+        roles,
+        preferences: { theme: 'system', unit: 'millions', negatives: 'minus' },
+      },
+    });
+    http = TestBed.inject(HttpTestingController);
+    fixture = TestBed.createComponent(PeersPage);
+    fixture.detectChanges();
+  }
+
+  afterEach(() => {
+    http.verify();
+  });
+
+  /** An answer passes through promises before a signal shows it. */
+  async function settled(): Promise<void> {
+    await new Promise((resolve) => setTimeout(resolve));
+    await fixture.whenStable();
+  }
+
+  async function answer(address: string, body: object): Promise<void> {
+    http.expectOne(address).flush(body);
+    await settled();
+  }
+
+  async function load(group: PeerGroupReply | null): Promise<void> {
+    http.expectOne('/api/panel-versions').flush({ versions: [panelVersion] });
+    await answer('/api/peer-groups', { versions: group === null ? [] : [group] });
+    if (group !== null) await answer(`/api/peer-groups/${group.id}`, group);
+    await answer(`/api/panel-versions/${panelVersion.id}/companies`, { companies });
+    if (group !== null)
+      await answer('/api/desk', { panelVersion, peerGroup: group, fit: null, editionsWaiting: 0 });
+  }
+
+  function page(): HTMLElement {
+    return fixture.nativeElement as HTMLElement;
+  }
+
+  function words(): string {
+    return (page().textContent ?? '').replace(/\s+/g, ' ');
+  }
+
+  async function press(name: string): Promise<void> {
+    const button = [...page().querySelectorAll('button')].find(
+      (each) => (each.getAttribute('aria-label') ?? each.textContent ?? '').trim() === name,
+    );
+    if (button === undefined) throw new Error(`expected a button “${name}”; found none`);
+    button.click();
+    await settled();
+  }
+
+  function sent(): { readonly request: TestRequest; readonly body: SavePeerGroup } {
+    const request = http.expectOne({ method: 'POST', url: '/api/peer-groups' });
+    return { request, body: request.request.body as SavePeerGroup };
+  }
+
+  it('counts who is in and out, and lists what has no reason', async () => {
+    start(['analyst']);
+    await load(saved);
+    expect(page().querySelector('h1')?.textContent).toContain('Velmara');
+    expect(words()).toContain('2 in, 0 out, 1 reason missing.');
+    expect(words()).toContain('before each of these has a reason: Sarvane');
+    expect(words()).toContain('10 of 11');
+  });
+
+  it('sends the choice on top of the version it started from', async () => {
+    start(['analyst']);
+    await load(saved);
+    await press('Take Sarvane out');
+    expect(words()).toContain('1 in, 1 out, 1 reason missing.');
+    const field = page().querySelector<HTMLTextAreaElement>(
+      'textarea[aria-label="Why Sarvane is out"]',
+    );
+    if (field === null) throw new Error('expected a field for the reason; found none');
+    field.value = 'Another business';
+    field.dispatchEvent(new Event('input'));
+    await settled();
+    await press('Save peer group');
+    const { request, body } = sent();
+    expect(body).toEqual({
+      panelVersionId: panelVersion.id,
+      ownCompany: 'Velmara',
+      note: '',
+      parentId: saved.id,
+      peers: [
+        { company: 'Kesdrin', isIncluded: true, reason: 'Same customers' },
+        { company: 'Sarvane', isIncluded: false, reason: 'Another business' },
+      ],
+    });
+    const next: PeerGroupReply = {
+      ...saved,
+      id: id(4),
+      number: 2,
+      peerCount: 1,
+      peers: body.peers,
+    };
+    request.flush(next);
+    await settled();
+    await answer('/api/peer-groups', { versions: [next, saved] });
+    expect(words()).toContain('Version 2 shown');
+    expect(words()).not.toContain('Save peer group');
+  });
+
+  it('keeps what was entered when somebody saved meanwhile, and can save it after theirs', async () => {
+    start(['analyst']);
+    await load(saved);
+    await press('Take Sarvane out');
+    await press('Save peer group');
+    sent().request.flush(
+      {
+        type: problemType('stale-version'),
+        title: 'A newer version exists',
+        status: 409,
+        detail: 'Sera Quillon saved version 2 of the peer group meanwhile.',
+        latestId: id(5),
+      },
+      { status: 409, statusText: 'Conflict' },
+    );
+    await settled();
+    expect(words()).toContain('Sera Quillon saved version 2');
+    expect(words()).toContain('1 in, 1 out');
+    expect(page().querySelector(`a[href="/peers/${id(5)}"]`)).not.toBeNull();
+    await press('Save mine after it');
+    const { request, body } = sent();
+    expect(body.parentId).toBe(id(5));
+    request.flush(null, { status: 503, statusText: 'Unavailable' });
+    await settled();
+    expect(words()).toContain('The server does not answer');
+    expect(words()).toContain('1 in, 1 out');
+  });
+
+  it('asks for an own company before a first version can be saved', async () => {
+    start(['analyst']);
+    await load(null);
+    const save = [...page().querySelectorAll('button')].find((each) =>
+      each.textContent?.includes('Save peer group'),
+    );
+    expect(save?.disabled).toBeTrue();
+    const own = [...page().querySelectorAll('select')][1];
+    own.value = 'Velmara';
+    own.dispatchEvent(new Event('change'));
+    await settled();
+    expect(save?.disabled).toBeFalse();
+    expect(words()).toContain('is compared with all 2 other companies of the panel');
+  });
+
+  it('lets a CFO read and change nothing', async () => {
+    start(['cfo']);
+    await load(saved);
+    expect(page().querySelector('textarea')).toBeNull();
+    expect(page().querySelector('select')).toBeNull();
+    expect(words()).not.toContain('Take out');
+    expect(words()).toContain('No reason written');
+  });
+
+  it('offers to bring in a panel where there is none', async () => {
+    start(['analyst']);
+    http.expectOne('/api/panel-versions').flush({ versions: [] });
+    await answer('/api/peer-groups', { versions: [] });
+    expect(page().querySelector('a[href="/panel"]')?.textContent).toContain('Bring in a panel');
+  });
+});
