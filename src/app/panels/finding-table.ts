@@ -9,7 +9,7 @@ const shownAtFirst = 50;
   selector: 'kv-finding-table',
   imports: [Mark],
   template: `
-    <div class="kv-table-scroll" tabindex="0" role="region" aria-label="What the check found">
+    <div class="kv-table-scroll" tabindex="0" role="region" aria-label="Findings, line by line">
       <table class="kv-table">
         <thead>
           <tr>

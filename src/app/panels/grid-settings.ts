@@ -1,10 +1,8 @@
 import {
   CellStyleModule,
   ClientSideRowModelModule,
-  ColumnAutoSizeModule,
   type Module,
   NumberFilterModule,
-  RenderApiModule,
   RowApiModule,
   RowStyleModule,
   ScrollApiModule,
@@ -16,14 +14,15 @@ import {
 export const gridModules: readonly Module[] = [
   CellStyleModule,
   ClientSideRowModelModule,
-  ColumnAutoSizeModule,
   NumberFilterModule,
-  RenderApiModule,
   RowApiModule,
   RowStyleModule,
   ScrollApiModule,
   TextFilterModule,
 ];
+
+export const gridRowHeight = 32;
+export const gridHeadHeight = 40;
 
 /** The grid on our paper: every colour is a token, so that light and dark follow by themselves. */
 export const gridTheme = themeQuartz.withParams({
@@ -52,7 +51,7 @@ export const gridTheme = themeQuartz.withParams({
   cellFontFamily: 'var(--kv-words)',
   fontSize: '13px',
   headerFontSize: '12px',
-  rowHeight: '32px',
-  headerHeight: '40px',
+  rowHeight: `${gridRowHeight}px`,
+  headerHeight: `${gridHeadHeight}px`,
   iconSize: '16px',
 });

@@ -1,4 +1,5 @@
-import { type PanelRow, missingIn } from './panel-rows';
+import { rowsWithGaps, shorterCompanies, span } from './panel-gaps';
+import type { PanelRow } from './panel-rows';
 
 /** How complete a panel is. */
 export interface PanelCompleteness {
@@ -17,30 +18,19 @@ export function panelCompleteness(
   rows: readonly PanelRow[],
   titles: readonly string[],
 ): PanelCompleteness {
-  const yearsOf = new Map<string, Set<number>>();
-  let missingCells = 0;
-  let completeRows = 0;
-  for (const row of rows) {
-    const missing = missingIn(row, titles).length;
-    missingCells += missing;
-    if (missing === 0) completeRows += 1;
-    const years = yearsOf.get(row.company) ?? new Set<number>();
-    yearsOf.set(row.company, years.add(row.year));
-  }
-  let yearsWithoutRow = 0;
-  for (const years of yearsOf.values()) {
-    const [first, last] = span(years);
-    yearsWithoutRow += last - first + 1 - years.size;
-  }
+  const gaps = rowsWithGaps(rows, titles);
   const [firstYear, lastYear] = span(rows.map(({ year }) => year));
   return {
-    companies: yearsOf.size,
+    companies: new Set(rows.map(({ company }) => company)).size,
     firstYear,
     lastYear,
     rows: rows.length,
-    completeRows,
-    missingCells,
-    yearsWithoutRow,
+    completeRows: rows.length - gaps.length,
+    missingCells: gaps.reduce((sum, { missing }) => sum + missing.length, 0),
+    yearsWithoutRow: shorterCompanies(rows).reduce(
+      (sum, company) => sum + company.yearsWithoutRow.length,
+      0,
+    ),
   };
 }
 
@@ -73,14 +63,4 @@ export function yearSpan(first: number, last: number): string {
 /** `1 cell`, `5 cells`, `1,200 cells`. */
 export function counted(count: number, one: string, many = `${one}s`): string {
   return `${count.toLocaleString('en')} ${count === 1 ? one : many}`;
-}
-
-function span(years: Iterable<number>): readonly [number, number] {
-  let first = Infinity;
-  let last = -Infinity;
-  for (const year of years) {
-    first = Math.min(first, year);
-    last = Math.max(last, year);
-  }
-  return [first, last];
 }

@@ -22,8 +22,9 @@ import { ProblemNotice } from '../ui/problem-notice';
 import type { ChartText } from '../charts/chart-text';
 import { CoverageMap } from '../charts/coverage-map/coverage-map';
 import { BringInPanel } from './bring-in-panel';
+import { GapList } from './gap-list';
 import { counted, panelCompleteness, panelFinding, yearSpan } from './panel-finding';
-import { PanelGrid } from './panel-grid';
+import { PanelGrid, type RowFocus } from './panel-grid';
 import { columnSources, columnTitle, missingIn, panelRows } from './panel-rows';
 import { PanelStore } from './panel-store';
 import { PanelVersions } from './panel-versions';
@@ -34,6 +35,7 @@ import { PanelVersions } from './panel-versions';
   imports: [
     BringInPanel,
     CoverageMap,
+    GapList,
     MatButtonModule,
     PageHeader,
     PanelGrid,
@@ -66,12 +68,12 @@ export class PanelPage {
     const view = this.store.view();
     return view.kind === 'ready' ? view.panel : null;
   });
-  readonly #rows = computed(() => {
+  protected readonly rows = computed(() => {
     const panel = this.#panel();
     return panel === null ? [] : panelRows(panel);
   });
   protected readonly titles = computed(() => this.#panel()?.columns.map(columnTitle) ?? []);
-  protected readonly found = computed(() => panelCompleteness(this.#rows(), this.titles()));
+  protected readonly found = computed(() => panelCompleteness(this.rows(), this.titles()));
   protected readonly finding = computed(() => panelFinding(this.found()));
   protected readonly sources = computed(() => {
     const panel = this.#panel();
@@ -85,7 +87,7 @@ export class PanelPage {
     return `${version.panelName}, version ${version.number} · ${this.#numbers.unitLabel()} · ${complete}`;
   });
   protected readonly cells = computed((): readonly CoverageCell[] =>
-    this.#rows().map((row) => ({
+    this.rows().map((row) => ({
       company: row.company,
       year: row.year,
       missing: missingIn(row, this.titles()),
@@ -101,19 +103,16 @@ export class PanelPage {
     caption: this.source(),
     source: `File ${this.#panel()?.version.file.name ?? ''}, SHA-256 ${this.#panel()?.version.file.sha256 ?? ''}`,
   }));
-  protected readonly shownRows = computed(() =>
-    this.hasOnlyGaps()
-      ? this.#rows().filter((row) => missingIn(row, this.titles()).length > 0)
-      : this.#rows(),
-  );
-  /** The line that the address names, where this version has it. */
-  protected readonly focusedRow = computed(() => {
+  /** The row that the address names, where this version has it; new each time it is asked for. */
+  protected readonly focusedRow = linkedSignal((): RowFocus | null => {
     const line = this.row();
-    return this.#rows().some(({ fileRow }) => fileRow === line) ? line : null;
+    return line !== null && this.rows().some(({ fileRow }) => fileRow === line) ? { line } : null;
   });
   protected readonly missedLine = computed(() =>
     this.#panel() !== null && this.focusedRow() === null ? this.row() : null,
   );
+  /** The cell of the map that has no row behind it. */
+  protected readonly emptyPlace = signal('');
 
   constructor() {
     effect(() => {
@@ -153,11 +152,17 @@ export class PanelPage {
 
   /** Leads to the row of the file behind a cell of the map; the address says which. */
   protected openRow(place: { readonly company: string; readonly year: number }): void {
-    const found = this.#rows().find(
+    const found = this.rows().find(
       (row) => row.company === place.company && row.year === place.year,
     );
+    this.emptyPlace.set(found === undefined ? `${place.company} ${place.year}` : '');
+    const line = found?.fileRow ?? null;
+    if (line !== null && line === this.row()) {
+      this.focusedRow.set({ line });
+      return;
+    }
     void this.#router.navigate([], {
-      queryParams: { row: found?.fileRow ?? null },
+      queryParams: { row: line },
       replaceUrl: true,
     });
   }

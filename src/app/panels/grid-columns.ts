@@ -1,0 +1,69 @@
+import type { PanelColumn } from '@contract';
+import type { ColDef, ValueFormatterParams } from 'ag-grid-community';
+import type { FigureKind, NumberFormat } from '../ui/number-format';
+import { type PanelRow, columnTitle } from './panel-rows';
+
+/** Figures of the model are money; a further column may be anything, so no unit is put on it. */
+export function kindOf(column: PanelColumn): FigureKind {
+  return column.role === 'other' ? 'plain' : 'money';
+}
+
+/** The grid's columns: company, year, every figure, and the line of the file. */
+export function gridColumns(
+  columns: readonly PanelColumn[],
+  rows: readonly PanelRow[],
+  numbers: NumberFormat,
+): ColDef<PanelRow>[] {
+  return [
+    {
+      colId: 'company',
+      headerName: 'Company',
+      field: 'company',
+      filter: 'agTextColumnFilter',
+      flex: 1.4,
+    },
+    { colId: 'year', headerName: 'Year', field: 'year', ...wholeNumber },
+    ...columns.map((column, index) => figureColumn({ column, index, rows, numbers })),
+    { colId: 'fileRow', headerName: 'Line of file', field: 'fileRow', ...wholeNumber },
+  ];
+}
+
+const wholeNumber: ColDef<PanelRow> = {
+  filter: 'agNumberColumnFilter',
+  headerClass: 'kv-number-header',
+  cellClass: 'kv-number-cell',
+};
+
+function figureColumn(from: {
+  readonly column: PanelColumn;
+  readonly index: number;
+  readonly rows: readonly PanelRow[];
+  readonly numbers: NumberFormat;
+}): ColDef<PanelRow> {
+  const { column, index, rows, numbers } = from;
+  const kind = kindOf(column);
+  const digits = numbers.columnDigits(
+    rows.map((row) => row.values[index]),
+    kind,
+  );
+  // The formatter runs long after this function: what it reads of the settings is fixed here, so that a change
+  // makes new columns.
+  const negatives = numbers.negatives();
+  return {
+    colId: `figure-${index}`,
+    headerName: columnTitle(column),
+    valueGetter: ({ data }) => data?.values[index] ?? null,
+    valueFormatter: ({ value }: ValueFormatterParams<PanelRow, number | null>) =>
+      numbers.figure(value, kind, digits),
+    context: { digits, negatives },
+    filter: 'agNumberColumnFilter',
+    // What a person types is in the unit that is shown.
+    filterValueGetter: ({ data }) => {
+      const value = data?.values[index] ?? null;
+      return value === null ? null : numbers.shown(value, kind);
+    },
+    headerClass: 'kv-number-header',
+    cellClass: 'kv-number-cell',
+    cellClassRules: { 'kv-missing-cell': ({ value }) => value === null },
+  };
+}

@@ -1,0 +1,231 @@
+import { provideHttpClient } from '@angular/common/http';
+import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
+import { type ComponentFixture, TestBed } from '@angular/core/testing';
+import { Router, provideRouter } from '@angular/router';
+import {
+  type PanelVersionReply,
+  type PanelVersionSummary,
+  type Role,
+  problemType,
+} from '@contract';
+import { SessionStore } from '../api/session-store';
+import { PageContext } from '../ui/page-context';
+import { PanelPage } from './panel-page';
+
+const id = (last: number): string => `0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a00${10 + last}`;
+
+const version: PanelVersionSummary = {
+  id: id(1),
+  panelId: id(2),
+  panelName: 'Flow control',
+  number: 1,
+  currency: 'EUR',
+  unit: 'millions',
+  note: 'From the filings',
+  companies: 2,
+  rows: 3,
+  firstYear: 2010,
+  lastYear: 2011,
+  createdAt: '2026-03-04T12:00:00.000Z',
+  createdBy: 'Ilvo Brenn',
+  file: { id: id(3), name: 'flow.csv', byteSize: 900, sha256: 'ab'.repeat(32) },
+};
+
+const panel: PanelVersionReply = {
+  version,
+  companyHeader: 'firm',
+  yearHeader: 'fy',
+  columns: [
+    { name: 'mv', role: 'marketValue' },
+    { name: 'capex', role: 'capex' },
+    { name: 'equity', role: 'bookEquity' },
+  ],
+  rows: {
+    fileRow: [2, 3, 4],
+    company: ['Sarvane', 'Sarvane', 'Velmara'],
+    year: [2010, 2011, 2011],
+    values: [
+      [100, 110, 900],
+      [null, 11, 90],
+      [50, 55, 450],
+    ],
+  },
+};
+
+const peerGroup = {
+  id: id(4),
+  number: 1,
+  panelVersionId: version.id,
+  ownCompany: 'Velmara',
+  peerCount: 1,
+  note: '',
+  createdAt: version.createdAt,
+  createdBy: 'Ilvo Brenn',
+};
+
+describe('the Panel page', () => {
+  let fixture: ComponentFixture<PanelPage>;
+  let http: HttpTestingController;
+
+  function open(roles: Role[], inputs: Record<string, string> = {}): void {
+    TestBed.configureTestingModule({
+      providers: [
+        provideHttpClient(),
+        provideHttpClientTesting(),
+        provideRouter([{ path: '**', children: [] }]),
+      ],
+    });
+    TestBed.inject(SessionStore).accept({
+      session: {
+        person: { id: id(8), name: 'Ilvo Brenn', email: 'ilvo@velmara.example' },
+        workspace: { id: id(9), name: 'Velmara' },
+        roles,
+        preferences: { theme: 'system', unit: 'millions', negatives: 'minus' },
+      },
+    });
+    http = TestBed.inject(HttpTestingController);
+    fixture = TestBed.createComponent(PanelPage);
+    for (const [name, value] of Object.entries(inputs)) fixture.componentRef.setInput(name, value);
+    fixture.detectChanges();
+  }
+
+  afterEach(() => {
+    http.verify();
+  });
+
+  async function settled(): Promise<void> {
+    await new Promise((resolve) => setTimeout(resolve));
+    await fixture.whenStable();
+  }
+
+  async function answer(
+    versions: readonly PanelVersionSummary[],
+    group: typeof peerGroup | null = peerGroup,
+  ): Promise<void> {
+    http.expectOne('/api/panel-versions').flush({ versions });
+    http
+      .expectOne('/api/desk')
+      .flush({
+        panelVersion: versions.at(0) ?? null,
+        peerGroup: group,
+        fit: null,
+        editionsWaiting: 0,
+      });
+    if (versions.length > 0) http.expectOne(`/api/panel-versions/${version.id}`).flush(panel);
+    await settled();
+  }
+
+  function page(): HTMLElement {
+    return fixture.nativeElement as HTMLElement;
+  }
+
+  function words(): string {
+    return (page().textContent ?? '').replace(/\s+/g, ' ');
+  }
+
+  function named(name: string): HTMLElement | undefined {
+    return [...page().querySelectorAll<HTMLElement>('button, a')].find(
+      (each) => each.textContent.trim() === name,
+    );
+  }
+
+  it('says what is missing, with its place, its unit and its source', async () => {
+    open(['analyst']);
+    await answer([version]);
+    expect(page().querySelector('h1')?.textContent).toContain(
+      '2 companies, FY2010–FY2011: 1 cell missing',
+    );
+    expect(words()).toContain('Flow control, version 1 · EUR m · 3 rows, 2 of them complete');
+    expect(page().querySelector('kv-gap-list')?.textContent).toContain('Sarvane FY2010');
+    expect(page().querySelector('kv-gap-list')?.textContent).toContain('Velmara FY2011');
+    expect(words()).toContain('capex “capex”, book equity “equity”');
+  });
+
+  it('offers the next step to an analyst, and the original file to everybody', async () => {
+    open(['analyst']);
+    await answer([version]);
+    expect(named('Choose peers')?.getAttribute('href')).toBe('/peers');
+    expect(named('Bring in a file')).toBeDefined();
+    expect(named('flow.csv')?.getAttribute('href')).toBe(`/api/files/${version.file.id}`);
+  });
+
+  it('shows the CFO the same without a way to change it', async () => {
+    open(['cfo']);
+    await answer([version]);
+    expect(page().querySelector('h1')?.textContent).toContain('1 cell missing');
+    expect(named('Choose peers')).toBeUndefined();
+    expect(named('Bring in a file')).toBeUndefined();
+    expect(named('flow.csv')).toBeDefined();
+  });
+
+  it('tells the frame whose figures these are, and that a newer version exists', async () => {
+    open(['cfo'], { panelVersionId: version.id });
+    await answer([{ ...version, id: id(5), number: 2 }, version]);
+    const context = TestBed.inject(PageContext);
+    expect(context.ownCompany()).toBe('Velmara');
+    expect(context.currency()).toBe('EUR');
+    expect(context.lineage()[0].link).toBe(`/panel/${version.id}`);
+    expect(context.stale()?.text).toContain('v2');
+    expect(context.stale()?.action?.link).toBe(`/panel/${id(5)}`);
+  });
+
+  it('names no own company before peers are chosen, nor one that is not in this panel', async () => {
+    open(['analyst']);
+    await answer([version], { ...peerGroup, ownCompany: 'Elsewhere' });
+    expect(TestBed.inject(PageContext).ownCompany()).toBe('');
+  });
+
+  it('leads from a missing cell to its row, by the line of the file', async () => {
+    open(['analyst']);
+    await answer([version]);
+    named('Sarvane FY2010')?.click();
+    await settled();
+    expect(TestBed.inject(Router).url).toContain('row=2');
+  });
+
+  it('says that a line asked for has no row here', async () => {
+    open(['analyst'], { row: '77' });
+    await answer([version]);
+    expect(words()).toContain('no row from line 77');
+  });
+
+  it('begins an empty workspace with one step, or with the sample', async () => {
+    open(['analyst', 'billing_admin']);
+    await answer([]);
+    expect(page().querySelector('h1')?.textContent).toContain('Bring in a panel');
+    named('Open the sample panel')?.click();
+    await settled();
+    http
+      .expectOne({ method: 'POST', url: '/api/imports/sample' })
+      .flush(
+        { type: problemType('internal'), title: 'Something went wrong on our side', status: 500 },
+        { status: 500, statusText: 'Internal Server Error' },
+      );
+    await settled();
+    expect(page().querySelector('[role=alert]')?.textContent).toContain('Something went wrong');
+    expect(named('Open the sample panel')).toBeDefined();
+  });
+
+  it('tells the CFO of an empty workspace whom to wait for', async () => {
+    open(['cfo']);
+    await answer([]);
+    expect(words()).toContain('as soon as an analyst of your workspace has brought one in');
+    expect(page().querySelector('input[type=file]')).toBeNull();
+  });
+
+  it('leads from a version that does not exist to the newest', async () => {
+    open(['analyst'], { panelVersionId: version.id });
+    http.expectOne('/api/panel-versions').flush({ versions: [version] });
+    http
+      .expectOne('/api/desk')
+      .flush({ panelVersion: version, peerGroup: null, fit: null, editionsWaiting: 0 });
+    http
+      .expectOne(`/api/panel-versions/${version.id}`)
+      .flush(
+        { type: problemType('not-found'), title: 'Not found', status: 404 },
+        { status: 404, statusText: 'Not Found' },
+      );
+    await settled();
+    expect(named('Open the newest panel')?.getAttribute('href')).toBe('/panel');
+  });
+});
