@@ -73,7 +73,7 @@ describe('the page of an edition', () => {
     for (const words of [
       'The market values Velmara 1,800 (1,170 to 2,430) above',
       'place 1 to 2 of 3',
-      'Build-out lifts the expected value of Velmara by 160 (96.0 to 224) by FY2027',
+      'Build-out lifts the expected value of Velmara by 160 (96 to 224) by FY2027',
       'For the November meeting.',
       'Concessions at revalued amounts.',
       'Associations, not causes.',
@@ -146,6 +146,11 @@ describe('the page of an edition', () => {
     await open('reader', signed);
     button('place 1 to 2 of 3')?.click();
     await settled();
-    http.expectOne(`${path}/lineage/rank-set`).flush(null, { status: 404, statusText: 'none' });
+    const asked = http.expectOne(`${path}/lineage/rank-set`);
+    expect(asked.request.method).toBe('GET');
+    asked.flush(
+      { type: 'about:blank', title: 'None', status: 404 },
+      { status: 404, statusText: 'None' },
+    );
   });
 });

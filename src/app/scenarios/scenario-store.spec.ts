@@ -57,7 +57,11 @@ describe('a scenario on the page', () => {
     store = TestBed.inject(ScenarioStore);
     jasmine.clock().install();
   });
-  afterEach(() => {
+  afterEach(async () => {
+    // A draft that still waits goes out before the page is gone.
+    jasmine.clock().tick(1000);
+    await settled();
+    http.match(({ url, method }) => url === draftPath && method === 'PUT');
     jasmine.clock().uninstall();
     http.verify();
   });
