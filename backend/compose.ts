@@ -106,7 +106,7 @@ export function compose(options: ComposeOptions): Composition {
     services: {
       repositories,
       accounts,
-      members: new MemberService({ repositories, passwords, now }),
+      members: new MemberService({ repositories, passwords, accounts, now }),
       imports: new ImportService(repositories, parser),
       panels: new PanelService(repositories),
       samplePanel: readSamplePanel(options.backendFolder),
@@ -122,7 +122,11 @@ export function compose(options: ComposeOptions): Composition {
       await repositories.assertUnprivilegedRole();
       await queue.start();
       const fitJob = new FitJob(workRepositories, fitPool, now);
-      await queue.work('fit', (ticket) => fitJob.run(ticket));
+      await queue.work(
+        'fit',
+        (ticket) => fitJob.run(ticket),
+        (ticket) => fitJob.giveUp(ticket),
+      );
       await queue.work('open-billing-account', workOpenBillingAccount(billing));
     },
     stop: async () => {

@@ -6,7 +6,7 @@ import { pages, type Role } from '../backend/contract';
 import startStack from '../e2e/start-stack';
 
 /**
- * Takes a picture of every page in each role, in three sizes, light and dark, into test-results/pages: to be looked at.
+ * Takes a picture of every page in each role, in three sizes, light and dark, into .kinvale/pages: to be looked at.
  * `npm run screenshots -- fit board` takes the named pages alone.
  */
 const sizes = [
@@ -15,7 +15,7 @@ const sizes = [
   { width: 360, height: 740 },
 ] as const;
 const schemes = ['light', 'dark'] as const;
-const folder = fileURLToPath(new URL('../test-results/pages', import.meta.url));
+const folder = fileURLToPath(new URL('../.kinvale/pages', import.meta.url));
 
 interface Account {
   readonly role: Role;

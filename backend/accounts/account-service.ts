@@ -111,10 +111,19 @@ export class AccountService {
     return { personId: person.id, workspaceId: membership.workspaceId };
   }
 
-  /** Whether this is the person's password: asked again before a signature. */
+  /**
+   * Whether this is the person's password: asked again before a signature and before joining a workspace.
+   *
+   * @throws {TooManyRequests} after repeated failures, counted together with those of signing in.
+   */
   async confirmPassword(personId: string, password: string): Promise<boolean> {
     const person = await this.uses.repositories.people.find(personId);
-    return this.uses.passwords.matches(person?.passwordHash, password);
+    const account = { kind: 'account', value: person?.email ?? personId } as const;
+    await this.uses.throttle.assertMayTry([account]);
+    const isRight = await this.uses.passwords.matches(person?.passwordHash, password);
+    if (isRight) await this.uses.throttle.succeeded(account);
+    else await this.uses.throttle.failed([account]);
+    return isRight;
   }
 
   /** @throws {NotSignedIn} when the person does not exist. */

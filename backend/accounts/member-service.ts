@@ -5,7 +5,7 @@ import type { Repositories, WorkspaceRepositories } from '../../db/repositories/
 import { record } from '../activity/activity';
 import { AppError, Conflict, Invalid, NotFound } from '../errors/app-error';
 import type { Role } from './role';
-import { startingPreferences } from './account-service';
+import { type AccountService, startingPreferences } from './account-service';
 import { createInvitationToken, readInvitationToken } from './invitation-token';
 import type { Passwords } from './passwords';
 
@@ -14,6 +14,7 @@ const invitationMs = 72 * 3_600_000;
 export interface MemberServiceDependencies {
   readonly repositories: Repositories;
   readonly passwords: Passwords;
+  readonly accounts: AccountService;
   readonly now: () => Date;
 }
 
@@ -116,7 +117,7 @@ export class MemberService {
     // Hashing happens before the transaction: nothing slow is awaited while one is open.
     const passwordHash =
       existing === undefined ? await this.uses.passwords.hash(password) : undefined;
-    if (existing && !(await this.uses.passwords.matches(existing.passwordHash, password)))
+    if (existing && !(await this.uses.accounts.confirmPassword(existing.id, password)))
       throw new AppError('wrong-credentials', 401, 'This is not the password of your account.');
     if (existing === undefined && name === undefined)
       throw new Invalid('The request is not as expected.', [

@@ -31,6 +31,17 @@ export class FitJob {
     );
   }
 
+  /** After the last try failed: whoever waits for the fit is told. */
+  async giveUp({ workspaceId, subjectId: fitId }: JobTicketRow): Promise<void> {
+    const failure: FitFailure = {
+      code: 'ended',
+      detail:
+        'The server could not finish this fit. Start it again; if that fails too, tell whoever runs the server.',
+      subjects: [],
+    };
+    await this.#inWorkspace(workspaceId, (tx) => tx.fits.fail(fitId, failure, this.now()));
+  }
+
   /** Undefined when the fit was cancelled on the way. */
   async #estimate(workspaceId: string, fitId: string): Promise<FitAnswer | undefined> {
     const found = await this.#inWorkspace(workspaceId, (tx) => findFit(tx, fitId));

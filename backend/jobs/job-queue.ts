@@ -61,7 +61,7 @@ export class JobQueue {
     await this.#boss.send(
       kind,
       { ticketId: id },
-      { db: tx, retryLimit: 4, retryDelay: 1, retryBackoff: true, expireInSeconds: 900 },
+      { db: tx, retryLimit: 4, retryDelay: 1, retryBackoff: true, expireInSeconds: 300 },
     );
   }
 
@@ -75,16 +75,45 @@ export class JobQueue {
    * Works a queue. The workspace comes from the ticket's row, never from the queued payload.
    *
    * @param handler  is told the ticket; a rejection queues the job again, up to its limit.
+   * @param giveUp  is told the ticket when the last try failed, so that nobody waits for ever.
    */
-  async work(kind: QueueName, handler: (ticket: JobTicketRow) => Promise<void>): Promise<void> {
+  async work(
+    kind: QueueName,
+    handler: (ticket: JobTicketRow) => Promise<void>,
+    giveUp?: (ticket: JobTicketRow) => Promise<void>,
+  ): Promise<void> {
     const worker = await this.#boss.work<{ ticketId: unknown }>(
       kind,
-      { pollingIntervalSeconds: this.options.pollSeconds ?? 0.5, batchSize: 1 },
+      {
+        pollingIntervalSeconds: this.options.pollSeconds ?? 0.5,
+        batchSize: 1,
+        includeMetadata: true,
+      },
       async (jobs) => {
-        for (const job of jobs) await this.#whileBusy(this.#ticket(kind, job.data).then(handler));
+        for (const job of jobs) {
+          const isLast = job.retryCount >= job.retryLimit;
+          await this.#whileBusy(this.#try(kind, job.data, handler, isLast ? giveUp : undefined));
+        }
       },
     );
     this.#workers.set(kind, worker);
+  }
+
+  async #try(
+    kind: QueueName,
+    payload: { ticketId: unknown } | null,
+    handler: (ticket: JobTicketRow) => Promise<void>,
+    giveUp: ((ticket: JobTicketRow) => Promise<void>) | undefined,
+  ): Promise<void> {
+    let ticket: JobTicketRow | undefined;
+    try {
+      ticket = await this.#ticket(kind, payload);
+      await handler(ticket);
+    } catch (error) {
+      this.options.onError(new Error(`a job of queue ${kind} failed`, { cause: error }));
+      if (ticket !== undefined) await giveUp?.(ticket);
+      throw error;
+    }
   }
 
   async #ticket(kind: QueueName, payload: { ticketId: unknown } | null): Promise<JobTicketRow> {
