@@ -14,7 +14,7 @@ describe('Figure', () => {
 
   it('shows a figure with its interval at the same digits', async () => {
     const { text } = await show({ value: 2407.1, low: 1275.2, high: 3539.4 });
-    expect(text()).toBe('2,407 1,275 to 3,539');
+    expect(text()).toBe('2,407 (1,275 to 3,539)');
   });
 
   it('asks for its lineage when selected', async () => {

@@ -69,6 +69,7 @@ export class Figure {
   protected readonly boundsText = computed(() => {
     const [estimate, low, high] = [this.value(), this.low(), this.high()];
     if (estimate === null || low === undefined || high === undefined) return '';
-    return this.#numbers.bounds({ estimate, low, high }, this.kind(), this.digits());
+    const bounds = this.#numbers.bounds({ estimate, low, high }, this.kind(), this.digits());
+    return low === null || high === null ? bounds : `(${bounds})`;
   });
 }
