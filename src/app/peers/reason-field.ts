@@ -23,7 +23,7 @@ const longestReason = 2000;
       #box
       rows="1"
       autocomplete="off"
-      [attr.aria-label]="label()"
+      [attr.aria-label]="'Why ' + company() + ' is ' + side()"
       [attr.maxlength]="longest"
       placeholder="Reason missing"
       [formControl]="control"
@@ -34,7 +34,7 @@ const longestReason = 2000;
         type="button"
         class="kv-link"
         [matMenuTriggerFor]="list"
-        [attr.aria-label]="label() + ': use a reason already written'"
+        [attr.aria-label]="'Use a reason already written for ' + company()"
       >
         Use a reason already written
       </button>
@@ -42,7 +42,9 @@ const longestReason = 2000;
     <mat-menu #list="matMenu" class="kv-reasons">
       <ng-template matMenuContent>
         @for (reason of reasons(); track reason) {
-          <button mat-menu-item type="button" (click)="take(reason)">{{ reason }}</button>
+          <button mat-menu-item class="reason" type="button" (click)="take(reason)">
+            <span class="words">{{ reason }}</span>
+          </button>
         }
       </ng-template>
     </mat-menu>
@@ -66,6 +68,23 @@ const longestReason = 2000;
       resize: vertical;
       field-sizing: content;
     }
+    .reason {
+      min-block-size: 48px;
+      border-block-end: var(--kv-rule);
+    }
+    .reason:last-child {
+      border-block-end: 0;
+    }
+    .words {
+      display: -webkit-box;
+      overflow: hidden;
+      -webkit-box-orient: vertical;
+      -webkit-line-clamp: 2;
+      line-clamp: 2;
+      font-size: 13px;
+      font-weight: 400;
+      line-height: 16px;
+    }
     textarea::placeholder {
       color: var(--kv-soft-ink);
       opacity: 1;
@@ -75,8 +94,8 @@ const longestReason = 2000;
 })
 export class ReasonField {
   readonly value = input.required<string>();
-  /** As `Why Kesdrin is in`. */
-  readonly label = input.required<string>();
+  readonly company = input.required<string>();
+  readonly side = input.required<'in' | 'out'>();
   /** Reasons that are written already. */
   readonly reasons = input<readonly string[]>([]);
   readonly written = output<string>();
