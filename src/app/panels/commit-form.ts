@@ -12,7 +12,7 @@ import { byContract, errorWords } from '../ui/contract-validator';
   imports: [MatButtonModule, MatFormFieldModule, MatInputModule, ReactiveFormsModule],
   template: `
     <form [formGroup]="form" (ngSubmit)="commit()" novalidate>
-      <mat-form-field appearance="outline" floatLabel="always">
+      <mat-form-field appearance="outline" floatLabel="always" subscriptSizing="dynamic">
         <mat-label>Note</mat-label>
         <textarea matInput formControlName="note" rows="2"></textarea>
         <mat-hint

@@ -70,8 +70,9 @@ const shownAtFirst = 50;
       margin-inline-end: 4px;
     }
     .found {
-      max-inline-size: 200px;
-      overflow-wrap: anywhere;
+      min-inline-size: 96px;
+      max-inline-size: 240px;
+      overflow-wrap: break-word;
     }
     .empty {
       color: var(--kv-soft-ink);

@@ -6,11 +6,11 @@ export type MappingEntry = Omit<ImportMapping, 'unit'> & {
 };
 
 export const columnChoices = [
-  { key: 'company', label: 'Company', hint: 'Names, one company one spelling' },
-  { key: 'year', label: 'Fiscal year', hint: 'Whole numbers, as 2023 or FY2023' },
-  { key: 'marketValue', label: 'Market value', hint: 'At the end of the fiscal year' },
-  { key: 'capex', label: 'Capex', hint: 'Capital expenditure of the year' },
-  { key: 'bookEquity', label: 'Book equity', hint: 'At the end of the fiscal year' },
+  { key: 'company', label: 'Company', hint: 'One spelling for each' },
+  { key: 'year', label: 'Fiscal year', hint: 'As 2023 or FY2023' },
+  { key: 'marketValue', label: 'Market value', hint: 'At the end of the year' },
+  { key: 'capex', label: 'Capex', hint: 'Spent over the year' },
+  { key: 'bookEquity', label: 'Book equity', hint: 'At the end of the year' },
 ] as const;
 
 export type ColumnChoiceKey = (typeof columnChoices)[number]['key'];

@@ -103,14 +103,12 @@ describe('the Panel page', () => {
     group: typeof peerGroup | null = peerGroup,
   ): Promise<void> {
     http.expectOne('/api/panel-versions').flush({ versions });
-    http
-      .expectOne('/api/desk')
-      .flush({
-        panelVersion: versions.at(0) ?? null,
-        peerGroup: group,
-        fit: null,
-        editionsWaiting: 0,
-      });
+    http.expectOne('/api/desk').flush({
+      panelVersion: versions.at(0) ?? null,
+      peerGroup: group,
+      fit: null,
+      editionsWaiting: 0,
+    });
     if (versions.length > 0) http.expectOne(`/api/panel-versions/${version.id}`).flush(panel);
     await settled();
   }
