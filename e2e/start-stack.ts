@@ -5,9 +5,12 @@ import { fileURLToPath } from 'node:url';
 
 /**
  * Starts database, stub and server in a process of their own before the first journey, and ends it after the last.
- * Journeys read KINVALE_URL and KINVALE_ACCOUNTS (JSON: role, email and password of each demo person).
+ * Journeys read KINVALE_URL and KINVALE_ACCOUNTS (JSON: role, email and password of each demo person). Where both are
+ * given, that stack is used and left running.
  */
 export default async function startStack(): Promise<() => Promise<void>> {
+  if (process.env['KINVALE_URL'] !== undefined && process.env['KINVALE_ACCOUNTS'] !== undefined)
+    return () => Promise.resolve();
   const script = fileURLToPath(new URL('../tools/e2e-stack.mjs', import.meta.url));
   // The open stdin tells the stack that we live: it stops by itself should this process be killed.
   const stack = spawn(process.execPath, [script], { stdio: ['pipe', 'pipe', 'inherit'] });

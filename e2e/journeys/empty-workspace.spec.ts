@@ -1,0 +1,16 @@
+import { expect, test } from '../pages/checked-page';
+import { invented } from '../pages/demo-accounts';
+import { EntryPage } from '../pages/entry-page';
+import { PanelPage } from '../pages/panel-pages';
+
+test('an empty workspace opens the sample panel in one step and takes it in', async ({ page }) => {
+  await new EntryPage(page).signUp(invented('Lieke Soranth'), 'Lower Kesting Works');
+  await expect(page).toHaveURL(/\/panel$/);
+  const empty = await new PanelPage(page).openEmpty();
+  await expect(empty.fileChooser).toBeVisible();
+  const sample = await empty.openSample();
+  await expect(sample.heading).toContainText('none keeps the file out');
+  const panel = await sample.commit();
+  await expect(panel.heading).toContainText(/^14 companies, FY2008–FY2025: \d+ cells missing$/);
+  await expect(page).toHaveURL(/\/panel\/[0-9a-f-]{36}$/);
+});

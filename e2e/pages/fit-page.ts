@@ -1,0 +1,68 @@
+import type { Locator } from '@playwright/test';
+import { CheckedPage, expect, plainText } from './checked-page';
+import { LineageDrawer } from './lineage-drawer';
+
+/** Where the own company stands, and what that rests on. */
+export class FitPage extends CheckedPage {
+  readonly #slopes = this.page.getByRole('region', { name: 'Slopes, table' });
+  readonly #companies = this.page.getByRole('region', { name: 'Companies, table' });
+
+  /** Runs the fit as it is offered: the defaults are right without a choice. */
+  async runAsOffered(): Promise<this> {
+    const run = this.page.getByRole('button', { name: 'Run the fit' });
+    await this.arrive(run);
+    await run.click();
+    return this.read();
+  }
+
+  async openNewest(): Promise<this> {
+    await this.page.goto('/fit');
+    return this.read();
+  }
+
+  async read(): Promise<this> {
+    return this.arrive(this.#slopes);
+  }
+
+  /** Slope, interval, standard error, t, degrees of freedom, p. */
+  slope(of: 'capex' | 'book equity'): Promise<readonly string[]> {
+    return this.cellsOf(this.#slopes, new RegExp(`^${of}`));
+  }
+
+  /** A company's level and what follows it in the table. */
+  company(name: string): Promise<readonly string[]> {
+    return this.cellsOf(this.#companies, name);
+  }
+
+  /** What stands beside a term: value, interval, test. */
+  async figure(term: string | RegExp): Promise<string> {
+    return plainText(await this.besideTerm(term).innerText());
+  }
+
+  async openFigure(term: string | RegExp): Promise<LineageDrawer> {
+    await this.besideTerm(term).getByRole('button').click();
+    return new LineageDrawer(this.page).read();
+  }
+
+  async openSlope(of: 'capex' | 'book equity'): Promise<LineageDrawer> {
+    await this.#slopes
+      .getByRole('row')
+      .filter({ has: this.page.getByRole('rowheader', { name: new RegExp(`^${of}`) }) })
+      .getByRole('button')
+      .press('Enter');
+    return new LineageDrawer(this.page).read();
+  }
+
+  sentence(words: RegExp): Locator {
+    return this.page.getByText(words).first();
+  }
+
+  async runScenarios(): Promise<void> {
+    await this.page.getByRole('link', { name: 'Run scenarios' }).click();
+  }
+
+  async expectFits(count: number): Promise<void> {
+    const rows = this.page.getByRole('region', { name: 'All fits, table' }).getByRole('rowheader');
+    await expect(rows).toHaveCount(count);
+  }
+}

@@ -1,0 +1,102 @@
+import type { Locator } from '@playwright/test';
+import { CheckedPage, expect } from './checked-page';
+
+/** A plan by year, and what it would do to the expected value. */
+export class ScenariosPage extends CheckedPage {
+  readonly #figures = this.page.getByRole('region', { name: 'Figures of the plan by year' });
+  readonly #others = this.page.getByRole('region', { name: 'Other scenarios of this fit' });
+
+  async open(path = '/scenarios'): Promise<this> {
+    await this.page.goto(path);
+    return this.read();
+  }
+
+  async read(): Promise<this> {
+    return this.arrive(this.page.getByRole('heading', { name: 'Figures by year' }));
+  }
+
+  slider(label: string): Locator {
+    return this.page.getByRole('slider', { name: label, exact: true });
+  }
+
+  /** The box beside a slider: takes any number exactly. */
+  box(label: string): Locator {
+    return this.page.getByRole('textbox', { name: label, exact: true });
+  }
+
+  /** Moves a slider by keys, as `ArrowRight` or `PageUp`. */
+  async press(label: string, key: string, times = 1): Promise<void> {
+    for (let time = 0; time < times; time += 1) await this.slider(label).press(key);
+  }
+
+  async enter(label: string, amount: string): Promise<void> {
+    await this.box(label).fill(amount);
+    await this.box(label).press('Enter');
+  }
+
+  async reset(label: string): Promise<void> {
+    await this.page.getByRole('button', { name: `${label}: reset to base` }).click();
+  }
+
+  async addYear(year: number): Promise<void> {
+    await this.page.getByRole('button', { name: `Add FY${year}` }).click();
+  }
+
+  /** Capex, book equity, expected value, difference to the base and familiar range of a planned year. */
+  async year(year: number): Promise<{
+    readonly expected: string;
+    readonly difference: string;
+    readonly familiar: string;
+  }> {
+    const cells = await this.cellsOf(this.#figures, `FY${year}`);
+    const [expected, difference, familiar] = cells.slice(-3);
+    return { expected, difference, familiar };
+  }
+
+  async name(text: string): Promise<void> {
+    await this.page.getByLabel('Name of the scenario').fill(text);
+  }
+
+  async save(): Promise<void> {
+    await this.page.getByRole('button', { name: /^Save (scenario|as version \d+)$/ }).click();
+    await expect(this.page.getByText('The server computed the same figures.')).toBeVisible();
+    await this.read();
+  }
+
+  async expectDraftKept(): Promise<void> {
+    await expect(this.page.getByText('Not saved; kept as your draft')).toBeVisible();
+  }
+
+  /** Says that an unsaved plan was brought back. */
+  get restored(): Locator {
+    return this.page.getByText(/Your unsaved plan of .* is back/);
+  }
+
+  note(words: RegExp): Locator {
+    return this.page.getByRole('listitem').filter({ hasText: words });
+  }
+
+  async setToNearestInside(year: number): Promise<void> {
+    await this.page.getByRole('button', { name: `Set FY${year} to nearest inside` }).click();
+  }
+
+  async copy(): Promise<void> {
+    await this.page.getByRole('button', { name: 'Copy', exact: true }).click();
+  }
+
+  async delete(): Promise<void> {
+    await this.page.getByRole('button', { name: 'Delete', exact: true }).click();
+  }
+
+  async undo(): Promise<void> {
+    await this.page.getByRole('button', { name: 'Undo' }).click();
+  }
+
+  other(name: string): Locator {
+    return this.#others.getByRole('link', { name, exact: true });
+  }
+
+  get nameBox(): Locator {
+    return this.page.getByLabel('Name of the scenario');
+  }
+}
