@@ -12,6 +12,7 @@ import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
 import { planFinding } from '../ui/plan/plan-words';
 import { planLineage } from '../ui/plan/planned-figure';
 import { type Remark, RemarkList } from '../ui/remark-list';
+import { EditionLevels } from './edition-levels';
 import { EditionPeers } from './edition-peers';
 import {
   confidentialityWords,
@@ -35,7 +36,7 @@ export interface EditionFigure {
  */
 @Component({
   selector: 'kv-edition-sheet',
-  imports: [DatePipe, EditionPeers, ExpectedPath, Figure, PlanTable, RemarkList],
+  imports: [DatePipe, EditionLevels, EditionPeers, ExpectedPath, Figure, PlanTable, RemarkList],
   templateUrl: './edition-sheet.html',
   styleUrl: './edition-sheet.css',
   host: { class: 'kv-sheet' },

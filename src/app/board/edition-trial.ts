@@ -16,7 +16,7 @@ import { PlanEditor } from '../ui/plan/plan-editor';
 import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
 import { planFinding } from '../ui/plan/plan-words';
 import { planLineage } from '../ui/plan/planned-figure';
-import { type PlannedYear, type ReadYear, readPlan } from '../ui/plan/read-plan';
+import { type PlannedYear, readPlan } from '../ui/plan/read-plan';
 import { tQuantile } from '../ui/plan/t-quantile';
 import type { EditionFigure } from './edition-sheet';
 import { labelsOf, shareText } from './edition-words';
@@ -117,8 +117,8 @@ export class EditionTrial {
     () => `${this.#numbers.unitLabel()} · ${shareText(this.basis().confidence)} intervals`,
   );
 
-  protected setInside({ year, familiar }: ReadYear): void {
-    this.plan.set(withYearSet(this.plan(), year, familiar.nearestInside));
+  protected setInside({ year, values }: PlannedYear): void {
+    this.plan.set(withYearSet(this.plan(), year, values));
   }
 
   protected openPlanned(wanted: PlannedFigureWanted): void {

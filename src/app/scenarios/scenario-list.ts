@@ -97,6 +97,10 @@ import type { PlannedFigureWanted } from '../ui/plan/plan-table';
     </div>
   `,
   styles: `
+    :host {
+      display: block;
+      min-inline-size: 0;
+    }
     .actions {
       white-space: nowrap;
     }

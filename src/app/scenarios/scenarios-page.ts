@@ -27,7 +27,7 @@ import { PlanEditor } from '../ui/plan/plan-editor';
 import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
 import { planFinding } from '../ui/plan/plan-words';
 import { planLineage } from '../ui/plan/planned-figure';
-import type { ReadYear } from '../ui/plan/read-plan';
+import type { PlannedYear } from '../ui/plan/read-plan';
 import { ProblemBannerState } from '../ui/problem';
 import { ProblemNotice } from '../ui/problem-notice';
 import { UndoNotice } from '../ui/undo-notice';
@@ -160,8 +160,8 @@ export class ScenariosPage {
     });
   }
 
-  protected setInside({ year, familiar }: ReadYear): void {
-    this.store.change({ plan: withYearSet(this.store.text().plan, year, familiar.nearestInside) });
+  protected setInside({ year, values }: PlannedYear): void {
+    this.store.change({ plan: withYearSet(this.store.text().plan, year, values) });
   }
 
   protected openFigure(wanted: PlannedFigureWanted): void {

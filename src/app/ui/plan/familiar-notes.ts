@@ -2,8 +2,9 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, output } f
 import type { PredictionBasis } from '@prediction';
 import { Mark } from '../mark';
 import { NumberFormat } from '../number-format';
-import { capitalised, familiarFinding, familiarReason } from './plan-words';
-import type { ReadYear } from './read-plan';
+import { familiarFinding, familiarReason } from './plan-words';
+import type { PlannedYear, ReadYear } from './read-plan';
+import { steppedInside } from './slider-range';
 
 /** For each planned year: whether the peer group has shown anything like it, why, and the way back inside. */
 @Component({
@@ -33,7 +34,7 @@ import type { ReadYear } from './read-plan';
                 type="button"
                 class="kv-link kv-no-print"
                 [attr.aria-label]="'Set FY' + note.year + ' to nearest inside'"
-                (click)="insideWanted.emit(note.source)"
+                (click)="insideWanted.emit(note.inside)"
               >
                 Set to nearest inside
               </button>
@@ -77,8 +78,8 @@ export class FamiliarNotes {
   readonly basis = input.required<PredictionBasis>();
   readonly labels = input.required<readonly string[]>();
   readonly years = input.required<readonly ReadYear[]>();
-  /** The year whose values are wanted at `familiar.nearestInside`. */
-  readonly insideWanted = output<ReadYear>();
+  /** The year with the values that bring it back inside. */
+  readonly insideWanted = output<PlannedYear>();
 
   protected readonly inside = computed(() => {
     const years = this.years().filter(({ familiar }) => familiar.kind === 'inside');
@@ -92,17 +93,18 @@ export class FamiliarNotes {
   protected readonly notes = computed(() =>
     this.years()
       .filter(({ familiar }) => familiar.kind !== 'inside')
-      .map((year) => ({
-        year: year.year,
-        source: year,
-        finding: familiarFinding([year.year], year.familiar.kind),
-        reason: familiarReason(this.basis(), this.labels(), year.familiar, this.#numbers),
-        nearest: this.labels()
-          .map((label, k) => {
-            const text = this.#numbers.figure(year.familiar.nearestInside[k]);
-            return `${k === 0 ? capitalised(label) : label} ${text}`;
-          })
-          .join(', '),
-      })),
+      .map(({ year, familiar }) => {
+        const values = steppedInside(this.basis(), familiar, this.years());
+        const amounts = this.labels().map(
+          (label, k) => `${label} ${this.#numbers.figure(values[k])}`,
+        );
+        return {
+          year,
+          inside: { year, values },
+          finding: familiarFinding([year], familiar.kind),
+          reason: familiarReason(this.basis(), this.labels(), familiar, this.#numbers),
+          nearest: amounts.join(', '),
+        };
+      }),
   );
 }

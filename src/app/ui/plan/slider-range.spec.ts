@@ -1,5 +1,6 @@
+import { familiarRange } from '@prediction';
 import { heldPlan, withValue } from './change-plan';
-import { sliderRange } from './slider-range';
+import { sliderRange, steppedInside } from './slider-range';
 import { planBasis } from './testing/plan-basis';
 
 describe('sliderRange', () => {
@@ -29,5 +30,33 @@ describe('sliderRange', () => {
     const { min, max, step } = sliderRange(still, 0, heldPlan(still, 1));
     expect(step).toBeGreaterThan(0);
     expect(max).toBeGreaterThan(min);
+  });
+});
+
+describe('steppedInside', () => {
+  const plan = heldPlan(planBasis, 1);
+
+  it('takes the nearest amounts inside that the slider can show', () => {
+    const far = familiarRange(planBasis, [400, 1300]);
+    const [capex, equity] = steppedInside(planBasis, far, plan);
+    const steps = [0, 1].map((k) => sliderRange(planBasis, k, plan).step);
+    expect(capex / steps[0]).toBe(Math.round(capex / steps[0]));
+    expect(equity / steps[1]).toBe(Math.round(equity / steps[1]));
+    expect(familiarRange(planBasis, [capex, equity]).kind).toBe('inside');
+    expect(far.nearestInside[0] - capex).toBeLessThan(steps[0]);
+  });
+
+  it('keeps the exact amounts where rounding would leave the range', () => {
+    // Far along one direction, hardly at all across it: 124 and 1,155 on the sliders lie across.
+    const narrow = {
+      ...planBasis,
+      ownMeans: planBasis.last.regressors,
+      inverseCrossProduct: [
+        [1, -0.1],
+        [-0.1, 0.01001],
+      ],
+    };
+    const far = familiarRange(narrow, [160, 1500]);
+    expect(steppedInside(narrow, far, plan)).toEqual(far.nearestInside);
   });
 });

@@ -1,4 +1,4 @@
-import type { PredictionBasis } from '@prediction';
+import { type FamiliarRange, type PredictionBasis, familiarRange } from '@prediction';
 import type { PlannedYear } from './read-plan';
 
 export interface SliderRange {
@@ -42,4 +42,24 @@ function roundStep(wanted: number): number {
   const power = 10 ** Math.floor(Math.log10(wanted));
   const factor = [1, 2, 5, 10].find((candidate) => candidate * power >= wanted) ?? 10;
   return factor * power;
+}
+
+/**
+ * The nearest plan inside on the slider's own steps, each amount rounded towards the last actual one; the exact one
+ * where the rounded amounts together are not inside.
+ */
+export function steppedInside(
+  basis: PredictionBasis,
+  familiar: FamiliarRange,
+  plan: readonly PlannedYear[],
+): readonly number[] {
+  const rounded = familiar.nearestInside.map((value, k) => {
+    const { step } = sliderRange(basis, k, plan);
+    const held = basis.last.regressors[k];
+    if (value === held) return value;
+    return value > held
+      ? Math.max(held, Math.floor(value / step) * step)
+      : Math.min(held, Math.ceil(value / step) * step);
+  });
+  return familiarRange(basis, rounded).kind === 'inside' ? rounded : familiar.nearestInside;
 }
