@@ -72,9 +72,10 @@ export class SlopesTable {
   protected readonly confidence = computed(() =>
     confidenceText(this.result().specification.confidence),
   );
-  protected readonly covariance = computed(() =>
-    covarianceName(this.result().specification.slopes).toLowerCase(),
-  );
+  protected readonly covariance = computed(() => {
+    const name = covarianceName(this.result().specification.slopes);
+    return name.charAt(0).toLowerCase() + name.slice(1);
+  });
   protected readonly rows = computed(() =>
     this.result().slopes.map((slope, index) => ({
       name: slope.name,

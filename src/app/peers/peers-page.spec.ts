@@ -14,6 +14,7 @@ import {
   problemType,
 } from '@contract';
 import { SessionStore } from '../api/session-store';
+import { Confirm } from '../ui/confirm';
 import type { PanelCompany } from './peer-draft';
 import { PeersPage } from './peers-page';
 
@@ -204,6 +205,18 @@ describe('the Peers page', () => {
     await settled();
     expect(words()).toContain('The server does not answer');
     expect(words()).toContain('1 in, 1 out');
+  });
+
+  it('asks before it is left only while something entered is not saved', async () => {
+    start(['analyst']);
+    await load(saved);
+    const ask = spyOn(TestBed.inject(Confirm), 'ask').and.resolveTo(false);
+    expect(await fixture.componentInstance.mayLeave()).toBeTrue();
+    await press('Take Sarvane out');
+    expect(await fixture.componentInstance.mayLeave()).toBeFalse();
+    await press('Discard changes');
+    expect(await fixture.componentInstance.mayLeave()).toBeTrue();
+    expect(ask).toHaveBeenCalledTimes(1);
   });
 
   it('asks for an own company before a first version can be saved', async () => {

@@ -48,6 +48,7 @@ import { peersContext } from './peers-context';
   templateUrl: './peers-page.html',
   styleUrl: './peers-page.css',
   providers: [PeersStore],
+  host: { '(window:beforeunload)': 'holdBack($event)' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class PeersPage {
@@ -120,10 +121,14 @@ export class PeersPage {
     await this.#show(await this.store.saveOnTop(this.note()));
   }
 
+  /** Has the browser ask before the tab is closed on choices that are not saved. */
+  protected holdBack(event: BeforeUnloadEvent): void {
+    if (!this.isReadOnly() && this.store.hasInput()) event.preventDefault();
+  }
+
   /** Asks before choices that are not saved are lost. */
   async mayLeave(): Promise<boolean> {
-    const view = this.store.view();
-    if (this.isReadOnly() || view.kind !== 'ready' || !this.store.hasInput()) return true;
+    if (this.isReadOnly() || !this.store.hasInput()) return true;
     return this.#confirm.ask({
       title: 'Leave without saving?',
       detail: 'The choice of peers and the reasons on this page are not saved as a version yet.',
