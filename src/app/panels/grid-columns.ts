@@ -20,6 +20,7 @@ export function gridColumns(
       headerName: 'Company',
       field: 'company',
       filter: 'agTextColumnFilter',
+      filterParams: { maxNumConditions: 1 },
       flex: 1.4,
     },
     { colId: 'year', headerName: 'Year', field: 'year', ...wholeNumber },
@@ -28,8 +29,14 @@ export function gridColumns(
   ];
 }
 
-const wholeNumber: ColDef<PanelRow> = {
+/** One condition: who needs more sorts or exports. A figure is asked for as at least so much. */
+const numberFilter: Pick<ColDef<PanelRow>, 'filter' | 'filterParams'> = {
   filter: 'agNumberColumnFilter',
+  filterParams: { maxNumConditions: 1, defaultOption: 'greaterThanOrEqual' },
+};
+
+const wholeNumber: ColDef<PanelRow> = {
+  ...numberFilter,
   headerClass: 'kv-number-header',
   cellClass: 'kv-number-cell',
 };
@@ -46,17 +53,13 @@ function figureColumn(from: {
     rows.map((row) => row.values[index]),
     kind,
   );
-  // The formatter runs long after this function: what it reads of the settings is fixed here, so that a change
-  // makes new columns.
-  const negatives = numbers.negatives();
   return {
     colId: `figure-${index}`,
     headerName: columnTitle(column),
     valueGetter: ({ data }) => data?.values[index] ?? null,
     valueFormatter: ({ value }: ValueFormatterParams<PanelRow, number | null>) =>
       numbers.figure(value, kind, digits),
-    context: { digits, negatives },
-    filter: 'agNumberColumnFilter',
+    ...numberFilter,
     // What a person types is in the unit that is shown.
     filterValueGetter: ({ data }) => {
       const value = data?.values[index] ?? null;

@@ -94,9 +94,11 @@ export class PanelGrid {
       'kv-focused-row': ({ data }) => focused !== undefined && data?.fileRow === focused,
     };
   });
-  protected readonly columnDefs = computed(() =>
-    gridColumns(this.columns(), this.rows(), this.#numbers),
-  );
+  protected readonly columnDefs = computed(() => {
+    // Cells are written after this has run: a change of the person's sign has to make new columns, as one of the unit does.
+    this.#numbers.negatives();
+    return gridColumns(this.columns(), this.rows(), this.#numbers);
+  });
 
   readonly #cell = signal<{ readonly row: PanelRow; readonly colId: string } | null>(null);
   /** The focused cell in words, its value with every digit. */
@@ -128,6 +130,8 @@ export class PanelGrid {
         if (api === null || focus === null || focus === this.#followed || !this.isRendered())
           return;
         const node = api.getRowNode(String(focus.line));
+        // A filter of the grid may hide the row that is asked for: then the filters give way.
+        if (node?.rowIndex === null) api.setFilterModel(null);
         if (node?.rowIndex == null) return;
         this.#followed = focus;
         api.redrawRows();
