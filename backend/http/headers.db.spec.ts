@@ -23,6 +23,7 @@ describe('every reply', () => {
       for (const rule of [
         "default-src 'none'",
         "script-src 'self'",
+        "style-src-attr 'none'",
         "connect-src 'self'",
         "frame-ancestors 'none'",
         "base-uri 'none'",
