@@ -56,17 +56,21 @@ interface Column {
 function describe(header: string, index: number, rows: readonly (readonly string[])[]): Column {
   const cells = rows.map((row) => row[index] ?? '').filter((cell) => !isMissing(cell));
   const [{ decimalSign }] = decimalSigns([cells]);
-  const isYear = cells.every((cell) => {
+  const isYear = isMostly(cells, (cell) => {
     const year = parseYear(cell);
     return year !== undefined && year >= 1800 && year <= 2200;
   });
   return {
     header,
     words: wordsOf(header),
-    isNumeric:
-      cells.length > 0 && cells.every((cell) => parseNumber(cell, decimalSign) !== undefined),
-    isYear: cells.length > 0 && isYear,
+    isNumeric: isMostly(cells, (cell) => parseNumber(cell, decimalSign) !== undefined),
+    isYear,
   };
+}
+
+/** A few slips, which the check names one by one, do not hide what a column is. */
+function isMostly(cells: readonly string[], isFine: (cell: string) => boolean): boolean {
+  return cells.length > 0 && cells.filter(isFine).length >= 0.8 * cells.length;
 }
 
 /** Lower case, words apart: `bookEquity_EUR` becomes `book equity eur`. */

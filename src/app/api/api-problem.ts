@@ -19,11 +19,12 @@ export class ApiProblem extends Error {
     readonly requestId?: string;
     readonly places?: readonly string[];
   } {
-    const { title, detail, instance, errors } = this.problem;
+    const { title, detail, status, instance, errors } = this.problem;
     return {
       title,
       ...(detail === undefined ? {} : { detail }),
-      ...(instance === undefined ? {} : { requestId: instance }),
+      // Whoever looks into a fault of ours needs the id; for the person's own slip it is noise.
+      ...(instance === undefined || status < 500 ? {} : { requestId: instance }),
       ...(errors === undefined ? {} : { places: errors.map((error) => error.detail) }),
     };
   }
