@@ -9,7 +9,7 @@ import { NumberFormat } from '../ui/number-format';
 import { namedParts } from '../ui/page-header';
 import { expectedPathData } from '../ui/plan/plan-data';
 import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
-import { planFinding } from '../ui/plan/plan-words';
+import { decidingYear, planFinding } from '../ui/plan/plan-words';
 import { planLineage } from '../ui/plan/planned-figure';
 import { type Remark, RemarkList } from '../ui/remark-list';
 import { EditionLevels } from './edition-levels';
@@ -83,7 +83,7 @@ export class EditionSheet {
   );
   protected readonly planTitle = computed(() => {
     const [first] = this.plans();
-    const last = first?.years.at(-1);
+    const last = first && decidingYear(first.years);
     if (last === undefined) return 'Actual and expected market value';
     return planFinding(first.name, this.content().ownCompany, last, this.#numbers);
   });

@@ -14,7 +14,7 @@ import { withYearSet } from '../ui/plan/change-plan';
 import { FamiliarNotes } from '../ui/plan/familiar-notes';
 import { PlanEditor } from '../ui/plan/plan-editor';
 import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
-import { planFinding } from '../ui/plan/plan-words';
+import { decidingYear, planFinding } from '../ui/plan/plan-words';
 import { planLineage } from '../ui/plan/planned-figure';
 import { type PlannedYear, readPlan } from '../ui/plan/read-plan';
 import { tQuantile } from '../ui/plan/t-quantile';
@@ -110,8 +110,10 @@ export class EditionTrial {
     },
   ]);
   protected readonly finding = computed(() => {
-    const { years } = this.reading();
-    return planFinding(this.#name(), this.basis().company, years[years.length - 1], this.#numbers);
+    const last = decidingYear(this.reading().years);
+    return last === undefined
+      ? this.#name()
+      : planFinding(this.#name(), this.basis().company, last, this.#numbers);
   });
   protected readonly caption = computed(
     () => `${this.#numbers.unitLabel()} · ${shareText(this.basis().confidence)} intervals`,

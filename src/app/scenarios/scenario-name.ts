@@ -1,4 +1,12 @@
-import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  effect,
+  input,
+  output,
+  untracked,
+} from '@angular/core';
+import { type AbstractControl, FormControl, ReactiveFormsModule } from '@angular/forms';
 import { MatFormField, MatHint, MatLabel, MatError } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { SaveScenario } from '@contract';
@@ -6,7 +14,7 @@ import { SaveScenario } from '@contract';
 /** A scenario's name and note, held to the contract's own rules. */
 @Component({
   selector: 'kv-scenario-name',
-  imports: [MatError, MatFormField, MatHint, MatInput, MatLabel],
+  imports: [MatError, MatFormField, MatHint, MatInput, MatLabel, ReactiveFormsModule],
   template: `
     <mat-form-field appearance="outline">
       <mat-label>Name of the scenario</mat-label>
@@ -15,13 +23,10 @@ import { SaveScenario } from '@contract';
         matInput
         autocomplete="off"
         maxlength="120"
-        [value]="name()"
-        [errorStateMatcher]="matcher"
+        [formControl]="nameControl"
         (input)="nameChanged.emit(nameBox.value)"
       />
-      @if (complaint(); as words) {
-        <mat-error>{{ words }}</mat-error>
-      }
+      <mat-error>{{ complaint() }}</mat-error>
     </mat-form-field>
     <mat-form-field appearance="outline">
       <mat-label>Note</mat-label>
@@ -52,8 +57,29 @@ export class ScenarioName {
   readonly nameChanged = output<string>();
   readonly noteChanged = output<string>();
 
-  protected readonly complaint = computed(() => (this.isTried() ? nameProblem(this.name()) : ''));
-  protected readonly matcher = { isErrorState: () => this.complaint() !== '' };
+  protected readonly nameControl = new FormControl('', {
+    nonNullable: true,
+    validators: ({ value }: AbstractControl<string>) =>
+      nameProblem(value) === '' ? null : { contract: true },
+  });
+
+  constructor() {
+    // The store owns the text: a draft that came back or another version replaces what stands here.
+    effect(() => {
+      const name = this.name();
+      untracked(() => {
+        if (this.nameControl.value !== name) this.nameControl.setValue(name);
+      });
+    });
+    effect(() => {
+      if (this.isTried()) this.nameControl.markAsTouched();
+      else this.nameControl.markAsUntouched();
+    });
+  }
+
+  protected complaint(): string {
+    return nameProblem(this.nameControl.value);
+  }
 }
 
 /** What is wrong with a name; empty when nothing is. */

@@ -25,7 +25,7 @@ import { FamiliarNotes } from '../ui/plan/familiar-notes';
 import { differenceData, expectedPathData } from '../ui/plan/plan-data';
 import { PlanEditor } from '../ui/plan/plan-editor';
 import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
-import { planFinding } from '../ui/plan/plan-words';
+import { decidingYear, planFinding } from '../ui/plan/plan-words';
 import { planLineage } from '../ui/plan/planned-figure';
 import type { PlannedYear } from '../ui/plan/read-plan';
 import { ProblemBannerState } from '../ui/problem';
@@ -82,7 +82,7 @@ export class ScenariosPage {
   protected readonly isTried = signal(false);
   protected readonly drawn = signal<readonly string[]>([]);
   protected readonly name = computed(() => this.store.text().name.trim() || unnamed);
-  protected readonly last = computed(() => this.store.reading()?.years.at(-1) ?? null);
+  protected readonly last = computed(() => decidingYear(this.store.reading()?.years ?? []) ?? null);
   protected readonly finding = computed(() => {
     const [ground, last] = [this.store.ground(), this.last()];
     if (ground === null || last === null) return 'Scenarios';

@@ -1,7 +1,7 @@
 import { TestBed } from '@angular/core/testing';
 import { familiarRange } from '@prediction';
 import { NumberFormat } from '../number-format';
-import { familiarFinding, familiarReason, planFinding } from './plan-words';
+import { decidingYear, familiarFinding, familiarReason, planFinding } from './plan-words';
 import { listed, regressorLabels } from './regressor-labels';
 import { planBasis } from './testing/plan-basis';
 
@@ -37,6 +37,17 @@ describe('a plan in words', () => {
     expect(finding(0, 0, 0)).toBe(
       'Build-out leaves the expected value of Velmara where the base has it in FY2028',
     );
+  });
+
+  it('judges a plan by the last year that differs from the base', () => {
+    const year = (number: number, estimate: number) => ({
+      year: number,
+      difference: { estimate, standardError: 1, low: null, high: null },
+    });
+    expect(decidingYear([year(2026, 5), year(2027, 9), year(2028, 0)])?.year).toBe(2027);
+    expect(decidingYear([year(2026, 0), year(2027, 0)])?.year).toBe(2027);
+    const none: ReturnType<typeof year>[] = [];
+    expect(decidingYear(none)).toBeUndefined();
   });
 
   it('says which amount left whose range', () => {

@@ -2,6 +2,13 @@ import type { FamiliarRange, IntervalEstimate, PredictionBasis } from '@predicti
 import type { NumberFormat } from '../number-format';
 import { listed } from './regressor-labels';
 
+/** The year that a plan is judged by: the last one that differs from the base, or else its last. */
+export function decidingYear<T extends { readonly difference: IntervalEstimate }>(
+  years: readonly T[],
+): T | undefined {
+  return years.findLast(({ difference }) => difference.estimate !== 0) ?? years.at(-1);
+}
+
 /**
  * A plan's finding: `Build-out lifts the expected value of Velmara by 285 (100 to 470) by FY2028`.
  *

@@ -27,14 +27,13 @@ export function planLineage(
 ): PlanLineage {
   const planned = labels.map((label, k) => input(`${capitalised(label)} planned`, year.values[k]));
   const base = labels.map((label, k) => input(`${capitalised(label)} of the base`, held[k]));
-  const named = plan.name === '' ? 'the plan' : plan.name;
   return {
     key: `${kind}.${year.year}`,
     value: year[kind],
     label:
       kind === 'expected'
-        ? `Expected value in ${year.year}, ${named}`
-        : `Difference to the base in ${year.year}, ${named}`,
+        ? `${plan.name}: expected value in ${year.year}`
+        : `${plan.name}: difference to the base in ${year.year}`,
     inputs: kind === 'expected' ? planned : [...planned, ...base],
   };
 }
