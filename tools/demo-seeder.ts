@@ -32,8 +32,8 @@ export class DemoSeeder {
     const cfo = await this.#actor('cfo');
     const panelVersionId = await this.#panel(analyst);
     const firstGroup = await this.#peerGroup(analyst, panelVersionId, 1);
-    const secondGroup = await this.#peerGroup(analyst, panelVersionId, 2);
     await this.#signedEdition(analyst, cfo, await this.#fit(analyst, firstGroup));
+    const secondGroup = await this.#peerGroup(analyst, panelVersionId, 2);
     await this.#waitingEdition(analyst, await this.#fit(analyst, secondGroup));
   }
 
