@@ -16,6 +16,16 @@ describe('sliderRange', () => {
     expect(sliderRange(debt, 0, plan).min).toBe(-150);
   });
 
+  it('counts its steps from the held amount, so that it can be reached again', () => {
+    for (const held of [100, 101.3, 0.7]) {
+      const basis = { ...planBasis, last: { ...planBasis.last, regressors: [held, 1000] } };
+      const { min, max, step } = sliderRange(basis, 0, heldPlan(basis, 2));
+      for (const end of [min, max])
+        expect((held - end) / step).toBeCloseTo(Math.round((held - end) / step), 9);
+      expect(min).toBeGreaterThanOrEqual(0);
+    }
+  });
+
   it('widens to an amount that was typed beyond it', () => {
     expect(sliderRange(planBasis, 0, withValue(plan, 2026, 0, 900)).max).toBe(900);
     expect(sliderRange(planBasis, 0, withValue(plan, 2026, 0, -40)).min).toBe(-40);
@@ -40,8 +50,11 @@ describe('steppedInside', () => {
     const far = familiarRange(planBasis, [400, 1300]);
     const [capex, equity] = steppedInside(planBasis, far, plan);
     const steps = [0, 1].map((k) => sliderRange(planBasis, k, plan).step);
-    expect(capex / steps[0]).toBe(Math.round(capex / steps[0]));
-    expect(equity / steps[1]).toBe(Math.round(equity / steps[1]));
+    const held = planBasis.last.regressors;
+    for (const [k, amount] of [capex, equity].entries()) {
+      const stepsAway = (amount - held[k]) / steps[k];
+      expect(stepsAway).toBeCloseTo(Math.round(stepsAway), 9);
+    }
     expect(familiarRange(planBasis, [capex, equity]).kind).toBe('inside');
     expect(far.nearestInside[0] - capex).toBeLessThan(steps[0]);
   });

@@ -13,7 +13,8 @@ const stepsWanted = 200;
 
 /**
  * Where a regressor's slider ends: half the own company's observed span below it and twice that above, never below
- * zero where nothing was, and as far as the plan itself reaches where an amount was typed beyond.
+ * zero where nothing was, and as far as the plan itself reaches where an amount was typed beyond. The steps are counted
+ * from the held amount, so that as many steps back as forth lead to it again.
  */
 export function sliderRange(
   basis: PredictionBasis,
@@ -29,12 +30,20 @@ export function sliderRange(
   const low = Math.min(floor, ...planned);
   const high = Math.max(own.high + span, ...planned);
   const step = roundStep((high - low) / stepsWanted);
+  const min = startOfSteps(held, low, step, planned);
   return {
-    min: Math.floor(low / step) * step,
-    max: Math.ceil(high / step) * step,
+    min,
+    max: min + Math.ceil((high - min) / step) * step,
     step,
     familiar: { low: Math.min(own.low, peers.low), high: Math.max(own.high, peers.high) },
   };
+}
+
+/** The lowest amount a whole number of steps from the held one that reaches `low`, and zero at the lowest if `low` is not below. */
+function startOfSteps(held: number, low: number, step: number, planned: readonly number[]): number {
+  const start = held - Math.ceil((held - low) / step) * step;
+  if (start >= 0 || low < 0) return start;
+  return planned.some((value) => value < start + step) ? low : start + step;
 }
 
 /** The next of 1, 2, 5 · 10ⁿ. */
@@ -56,10 +65,7 @@ export function steppedInside(
   const rounded = familiar.nearestInside.map((value, k) => {
     const { step } = sliderRange(basis, k, plan);
     const held = basis.last.regressors[k];
-    if (value === held) return value;
-    return value > held
-      ? Math.max(held, Math.floor(value / step) * step)
-      : Math.min(held, Math.ceil(value / step) * step);
+    return held + Math.trunc((value - held) / step) * step;
   });
   return familiarRange(basis, rounded).kind === 'inside' ? rounded : familiar.nearestInside;
 }
