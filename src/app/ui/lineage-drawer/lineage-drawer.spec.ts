@@ -54,6 +54,13 @@ describe('LineageDrawer', () => {
     expect(document.activeElement).toBe(opener);
   });
 
+  it('takes the focus when the reply came before the drawer', async () => {
+    const host = await show(standingLineage);
+    expect(host.contains(document.activeElement)).toBeTrue();
+    fixture.destroy();
+    expect(document.activeElement).toBe(opener);
+  });
+
   it('closes on Esc', async () => {
     const host = await show(standingLineage);
     let closed = 0;

@@ -4,6 +4,7 @@ import {
   Component,
   DestroyRef,
   ElementRef,
+  afterNextRender,
   afterRenderEffect,
   computed,
   inject,
@@ -80,7 +81,11 @@ export class LineageDrawer {
   );
 
   constructor() {
-    // Each figure begins by being read: that is when focus comes here.
+    // The first reply may be here before the drawer, which is loaded when it is wanted.
+    afterNextRender(() => {
+      this.#takeFocus();
+    });
+    // Each further figure begins by being read: that is when focus comes here again.
     afterRenderEffect(() => {
       if (this.lineage() === null) this.#takeFocus();
     });
