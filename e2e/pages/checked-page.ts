@@ -78,18 +78,21 @@ export const test = playwrightTest.extend<{
 
 export { expect };
 
-/** Holds what is on the screen to WCAG 2.2 AA. `hold` may be `expect.soft`, to go on and name all. */
-export async function expectAccessible(
-  page: Page,
-  hold: typeof expect.soft = expect,
-  name = page.url(),
-): Promise<void> {
-  const { violations } = await new AxeBuilder({ page }).withTags(wcag22AA).analyze();
-  const found = violations.flatMap(({ id, nodes }) =>
+/** Rules of axe that a colour scheme can break; all others hold in both or in none. */
+export const colourRules = ['color-contrast', 'link-in-text-block'] as const;
+
+/** What axe finds against WCAG 2.2 AA on the screen, in one line each; all rules, or those that are named. */
+export async function breachesOfWcag(page: Page, rules?: readonly string[]): Promise<string[]> {
+  const axe = new AxeBuilder({ page });
+  const asked = rules === undefined ? axe.withTags(wcag22AA) : axe.withRules([...rules]);
+  const { violations } = await asked.analyze();
+  return violations.flatMap(({ id, nodes }) =>
     nodes.map((node) => `${id}: ${node.target.join(' ')}: ${node.failureSummary ?? ''}`),
   );
-  hold(found, `accessibility of ${name}`).toEqual([]);
 }
+
+/** What each browser's page has been held to already, by address and sign. */
+const held = new WeakMap<Page, Set<string>>();
 
 /** A page of Kinvale: it knows what to look for, and is checked whenever it is visited. */
 export abstract class CheckedPage {
@@ -105,10 +108,17 @@ export abstract class CheckedPage {
     return this.page.getByRole('alert');
   }
 
-  /** Ends when the page has come, by something that stands on it alone, and axe found nothing on it. */
+  /**
+   * Ends when the page has come, by something that stands on it alone, and axe found nothing on it. The same sign at the
+   * same address is held to WCAG once.
+   */
   protected async arrive(sign: Locator): Promise<this> {
     await expect(sign).toBeVisible();
-    await expectAccessible(this.page);
+    const seen = held.get(this.page) ?? new Set();
+    const what = `${sign.toString()} at ${this.page.url()}`;
+    if (seen.has(what)) return this;
+    held.set(this.page, seen.add(what));
+    expect(await breachesOfWcag(this.page), `axe on ${what}`).toEqual([]);
     return this;
   }
 

@@ -1,0 +1,62 @@
+import { expect, test } from '../pages/checked-page';
+import { invented } from '../pages/demo-accounts';
+import { PreparedWorkspace } from '../pages/prepared-workspace';
+import { ScenariosPage } from '../pages/scenarios-page';
+
+test('plans, keeps the unsaved plan, warns, saves, copies, deletes and takes it back', async ({
+  page,
+}) => {
+  const workspace = new PreparedWorkspace(page);
+  await workspace.signUp(invented('Runa Tessmark'), 'Velmara planning');
+  await workspace.fitSample();
+  const plan = await new ScenariosPage(page).open();
+
+  await test.step('figures follow the slider at once', async () => {
+    const before = await plan.year(2026);
+    await plan.press('Capex FY2026', 'ArrowRight', 2);
+    const after = await plan.year(2026);
+    expect(after.expected).not.toBe(before.expected);
+    expect(after.difference).toMatch(/^\+[\d.,]+ \([\d.,−]+ to [\d.,−]+\)$/);
+    await plan.reset('Capex FY2026');
+    expect(await plan.year(2026)).toEqual(before);
+  });
+
+  await test.step('a plan that is not saved comes back after a reload', async () => {
+    await plan.press('Capex FY2026', 'PageUp');
+    const left = await plan.year(2026);
+    await plan.expectDraftKept();
+    await plan.open();
+    await expect(plan.restored).toBeVisible();
+    expect(await plan.year(2026)).toEqual(left);
+  });
+
+  await test.step('a plan far from what was seen is marked, and led back inside', async () => {
+    await plan.enter('Capex FY2026', '25000');
+    await expect(plan.note(/FY2026 is outside the familiar range/)).toBeVisible();
+    expect((await plan.year(2026)).familiar).toBe('outside');
+    await plan.setToNearestInside(2026);
+    await expect(plan.note(/FY2026 is outside the familiar range/)).toHaveCount(0);
+    expect((await plan.year(2026)).familiar).toBe('inside');
+  });
+
+  await test.step('a saved plan can be copied, deleted and taken back', async () => {
+    await plan.addYear(2029);
+    await plan.enter('Book equity FY2029', '2600');
+    await plan.name('Lower payout');
+    await plan.save();
+    await expect(page).toHaveURL(/\/scenarios\/[0-9a-f-]{36}$/); // amounts never stand in an address
+    const saved = await plan.year(2029);
+    await plan.copy();
+    await expect(plan.nameBox).not.toHaveValue('Lower payout');
+    await expect(plan.other('Lower payout')).toBeVisible();
+    expect(await plan.year(2029)).toEqual(saved);
+    await plan.other('Lower payout').click();
+    await expect(plan.nameBox).toHaveValue('Lower payout');
+    await plan.delete();
+    await expect(plan.nameBox).toHaveValue('');
+    await expect(plan.other('Lower payout')).toHaveCount(0);
+    await plan.undo();
+    await expect(plan.nameBox).toHaveValue('Lower payout');
+    expect(await plan.year(2029)).toEqual(saved);
+  });
+});
