@@ -57,10 +57,11 @@ export class EditionService {
       const row = await findEdition(tx, reader, id);
       const text = await tx.editions.content(id);
       if (text === undefined) throw new NotFound();
+      const signed = await tx.editions.findSigned();
       return {
         row,
         content: JSON.parse(text) as unknown,
-        whyNot: whyNotDecide(reader, row),
+        whyNot: whyNotDecide(reader, row, signed),
       };
     });
   }
@@ -116,8 +117,8 @@ export class EditionService {
       throw new AppError('wrong-credentials', 403, 'This is not the password of your account.');
     await this.#decide(reader, id, async (tx, row) => {
       const signed = await tx.editions.findSigned();
-      if (signed !== undefined && signed.number > row.number)
-        throw new Conflict(`Edition ${signed.number} is later and is signed already.`);
+      const overtaker = laterSigned(row, signed);
+      if (overtaker !== undefined) throw new Conflict(overtakenBy(overtaker));
       if (signed !== undefined) await tx.editions.supersede(signed.id, id);
       return { state: 'signed', comment: '' };
     });
@@ -172,12 +173,27 @@ async function findEdition(
   return found;
 }
 
-function whyNotDecide(reader: Reader, row: EditionRow): string | null {
+function whyNotDecide(
+  reader: Reader,
+  row: EditionRow,
+  signed: EditionRow | undefined,
+): string | null {
   if (row.state !== 'waiting') return decidedAlready(row);
+  const overtaker = laterSigned(row, signed);
+  if (overtaker !== undefined) return overtakenBy(overtaker);
   if (!reader.roles.includes('cfo')) return 'Signing is for the CFO.';
   if (row.publishedBy === reader.personId)
     return 'You published this edition: another person has to sign it.';
   return null;
+}
+
+/** The signed edition, where it is later than this one. */
+function laterSigned(row: EditionRow, signed: EditionRow | undefined): EditionRow | undefined {
+  return signed !== undefined && signed.number > row.number ? signed : undefined;
+}
+
+function overtakenBy(signed: EditionRow): string {
+  return `Edition ${signed.number} is later and is signed already.`;
 }
 
 function decidedAlready(row: EditionRow): string {

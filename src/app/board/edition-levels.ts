@@ -2,8 +2,9 @@ import { ChangeDetectionStrategy, Component, computed, input, output } from '@an
 import type { EditionContent } from '@contract';
 import { GapPath } from '../charts/gap-path/gap-path';
 import { StandingChart } from '../charts/standing-chart/standing-chart';
-import { listed } from '../ui/plan/regressor-labels';
+
 import { labelsOf } from './edition-words';
+import { listed } from '../ui/phrases';
 
 /** Where every company of an edition stands, and how the own company's gap to its peers went over the years. */
 @Component({

@@ -1,6 +1,7 @@
 import type { EditionContent, EditionSummary, FitResult } from '@contract';
 import type { NumberFormat } from '../ui/number-format';
-import { listed, regressorLabels } from '../ui/plan/regressor-labels';
+import { regressorLabels } from '../ui/plan/regressor-labels';
+import { listed } from '../ui/phrases';
 
 /** An edition's regressors in words. */
 export function labelsOf(content: EditionContent): readonly string[] {

@@ -17,5 +17,8 @@ export function landingEdition(
         (best, edition) => (best === undefined || edition.number > best.number ? edition : best),
         undefined,
       );
-  return (signs ? newest('waiting') : undefined) ?? newest('signed');
+  const signed = newest('signed');
+  const waiting = signs ? newest('waiting') : undefined;
+  // One that a later signed edition has overtaken waits for nothing.
+  return waiting !== undefined && waiting.number > (signed?.number ?? 0) ? waiting : signed;
 }

@@ -2,8 +2,9 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, output } f
 import type { FitResult } from '@contract';
 import { Figure } from '../ui/figure';
 import { NumberFormat } from '../ui/number-format';
-import { confidenceText } from './fit-words';
+
 import { shownText } from './standing-words';
+import { confidenceText } from '../ui/phrases';
 
 /** Every company's level with its interval, and the own company's difference to it. */
 @Component({

@@ -2,9 +2,10 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, output } f
 import { Figure } from '../ui/figure';
 import { type FigureKind, NumberFormat } from '../ui/number-format';
 import { type FinishedFit, slopeNames } from './compare-words';
-import { placesText, regressorWord, shortHash } from './fit-words';
+import { placesText, regressorWord } from './fit-words';
 import { inUnit } from './panel-money';
 import { rankedCount } from './standing-words';
+import { shortHash } from '../ui/phrases';
 
 interface Cell {
   readonly estimate: number;

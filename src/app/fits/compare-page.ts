@@ -26,8 +26,9 @@ import {
   memberDifference,
   specificationLines,
 } from './compare-words';
-import { confidenceText, shortHash, yearsText } from './fit-words';
+
 import { inUnit } from './panel-money';
+import { confidenceText, shortHash, yearsText } from '../ui/phrases';
 
 /** Two fits side by side: how far the standing depends on what went in. */
 @Component({

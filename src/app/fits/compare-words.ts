@@ -1,8 +1,9 @@
 import type { FitReply, FitResult } from '@contract';
 import { type NumberFormat, headlineDigits } from '../ui/number-format';
 import { covarianceName } from './covariance-words';
-import { confidenceText, listed, regressorWord, shortHash } from './fit-words';
+import { regressorWord } from './fit-words';
 import { moneyOf } from './panel-money';
+import { confidenceText, listed, shortHash } from '../ui/phrases';
 
 /** A fit that is done, as the comparison takes it. */
 export interface FinishedFit {

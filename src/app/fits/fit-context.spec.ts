@@ -1,4 +1,4 @@
-import { fitContext, staleNotice } from './fit-context';
+import { fitContext, staleNotice } from '../ui/fit-context';
 import { exampleDesk, exampleFit, examplePanelVersion } from './testing/example-fit';
 
 describe('what the frame shows around a fit', () => {

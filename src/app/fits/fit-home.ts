@@ -18,8 +18,9 @@ import { ProblemNotice } from '../ui/problem-notice';
 import { FitList } from './fit-list';
 import { FitStartStore } from './fit-start-store';
 import { FitStarter } from './fit-starter';
-import { counted, yearsText } from './fit-words';
+
 import { type Specification, SpecificationForm } from './specification-form';
+import { counted, yearsText } from '../ui/phrases';
 
 /** Leads to the newest fit, or offers to run one. */
 @Component({

@@ -15,9 +15,10 @@ import { RouterLink } from '@angular/router';
 import type { FitState } from '@contract';
 import { NumberFormat } from '../ui/number-format';
 import { ProblemNotice } from '../ui/problem-notice';
-import { placesText, shortHash, specificationText } from './fit-words';
+import { placesText, specificationText } from './fit-words';
 import { FitsListStore, type ListedFit } from './fits-list-store';
 import { moneyOf } from './panel-money';
+import { shortHash } from '../ui/phrases';
 
 const stateWords: Readonly<Record<Exclude<FitState, 'done'>, string>> = {
   queued: 'waiting to run',

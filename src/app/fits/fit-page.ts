@@ -22,16 +22,17 @@ import { PageContext } from '../ui/page-context';
 import { PageHeader } from '../ui/page-header';
 import { ProblemNotice } from '../ui/problem-notice';
 import { ProgressLine } from '../ui/progress-line';
-import { fitContext } from './fit-context';
+import { fitContext } from '../ui/fit-context';
 import { FitList } from './fit-list';
 import { FitResultView } from './fit-result-view';
 import { FitStarter } from './fit-starter';
 import { FitStore } from './fit-store';
-import { counted, specificationText } from './fit-words';
+import { specificationText } from './fit-words';
 import { furtherColumns } from './further-columns';
 import type { SpecificationDialog, SpecificationQuestion } from './specification-dialog';
 import type { Specification } from './specification-form';
 import { standingFinding, standingSource } from './standing-words';
+import { counted } from '../ui/phrases';
 
 /** Where do we stand, and can I defend it? */
 @Component({

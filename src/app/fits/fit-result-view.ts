@@ -13,19 +13,13 @@ import { RemarkList } from '../ui/remark-list';
 import { CompaniesTable } from './companies-table';
 import { covarianceName } from './covariance-words';
 import { driftFinding, poolabilityText, warningRemarks } from './evidence-words';
-import {
-  confidenceText,
-  placesText,
-  regressorWord,
-  shortHash,
-  testText,
-  yearsText,
-} from './fit-words';
+import { placesText, regressorWord, testText } from './fit-words';
 import { GoodnessList } from './goodness-list';
 import { SampleNotes } from './sample-notes';
 import { slopeRemark, slopeSentence } from './slope-words';
 import { SlopesTable } from './slopes-table';
 import { meanOfPeers, rankedCount, standingFinding, standingSource } from './standing-words';
+import { confidenceText, shortHash, yearsText } from '../ui/phrases';
 
 /** A fit that is done: the standing first, then what it rests on. */
 @Component({

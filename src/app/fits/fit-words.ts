@@ -1,36 +1,10 @@
 import type { FitSummary } from '@contract';
 import type { NumberFormat } from '../ui/number-format';
-
-/** `1 company`, `14 companies`. */
-export function counted(count: number, one: string, many = `${one}s`): string {
-  return `${count} ${count === 1 ? one : many}`;
-}
-
-/** `FY2008–FY2025`, or `FY2008` for one year. */
-export function yearsText(firstYear: number, lastYear: number): string {
-  return firstYear === lastYear ? `FY${firstYear}` : `FY${firstYear}–FY${lastYear}`;
-}
-
-/** The first characters of a hash, for the eye. */
-export function shortHash(hash: string | null): string {
-  return hash === null ? 'n/a' : hash.slice(0, 6);
-}
-
-/** `95 %`. */
-export function confidenceText(confidence: number): string {
-  return `${Number((confidence * 100).toPrecision(4))} %`;
-}
+import { confidenceText, listed } from '../ui/phrases';
 
 /** Regressors in the reader's words: a fit's first two are always capex and book equity. */
 export function regressorWord(name: string, index: number): string {
   return index === 0 ? 'capex' : index === 1 ? 'book equity' : name;
-}
-
-/** `capex, book equity and employees`. */
-export function listed(words: readonly string[]): string {
-  return words.length < 2
-    ? words.join('')
-    : `${words.slice(0, -1).join(', ')} and ${words[words.length - 1]}`;
 }
 
 /** `place 2 to 5 of 13`, or `place 1 of 11`. */

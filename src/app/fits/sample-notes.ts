@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import type { FitResult } from '@contract';
-import { counted, yearsText } from './fit-words';
+import { counted, yearsText } from '../ui/phrases';
 
 const mostListed = 50;
 

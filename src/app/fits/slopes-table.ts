@@ -3,7 +3,8 @@ import type { FitResult } from '@contract';
 import { Figure } from '../ui/figure';
 import { NumberFormat } from '../ui/number-format';
 import { covarianceName } from './covariance-words';
-import { confidenceText, pText, regressorWord } from './fit-words';
+import { pText, regressorWord } from './fit-words';
+import { confidenceText } from '../ui/phrases';
 
 /** The slopes as a table: estimate, interval, standard error, t with its degrees of freedom, p. */
 @Component({

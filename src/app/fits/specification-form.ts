@@ -6,7 +6,7 @@ import { MatCheckbox } from '@angular/material/checkbox';
 import { MatRadioModule } from '@angular/material/radio';
 import type { SlopeCovariance } from '@contract';
 import { covarianceWords } from './covariance-words';
-import { confidenceText } from './fit-words';
+import { confidenceText } from '../ui/phrases';
 
 export interface Specification {
   readonly slopes: SlopeCovariance;

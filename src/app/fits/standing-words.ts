@@ -1,6 +1,7 @@
 import type { FitResult } from '@contract';
 import { type NumberFormat, headlineDigits } from '../ui/number-format';
-import { confidenceText, counted, listed, placesText, regressorWord, yearsText } from './fit-words';
+import { placesText, regressorWord } from './fit-words';
+import { confidenceText, counted, listed, yearsText } from '../ui/phrases';
 
 /** How many companies have a place: those with an intercept that counts. */
 export function rankedCount(result: Pick<FitResult, 'intercepts'>): number {

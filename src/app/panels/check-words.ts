@@ -1,5 +1,6 @@
 import type { ImportReply } from '@contract';
-import { companiesAndYears, counted } from './panel-finding';
+import { companiesAndYears } from './panel-finding';
+import { counted } from '../ui/phrases';
 
 export type ImportCheck = NonNullable<ImportReply['check']>;
 

@@ -1,8 +1,9 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import { Mark } from '../ui/mark';
-import { counted, yearSpan } from './panel-finding';
+import { yearSpan } from './panel-finding';
 import { rowsWithGaps, shorterCompanies } from './panel-gaps';
 import type { PanelRow } from './panel-rows';
+import { counted } from '../ui/phrases';
 
 const shownGaps = 8;
 const shownCompanies = 6;

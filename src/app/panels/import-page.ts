@@ -22,8 +22,9 @@ import { FirstRows } from './first-rows';
 import { ImportStore } from './import-store';
 import { type MappingEntry, isSameEntry, nextVersion, startingEntry } from './mapping-entry';
 import { MappingForm } from './mapping-form';
-import { counted } from './panel-finding';
+
 import { RememberedMapping } from './remembered-mapping';
+import { counted } from '../ui/phrases';
 
 /** From a file to a panel version: its first rows, which column is what, what the check finds, and bringing it in. */
 @Component({

@@ -1,5 +1,6 @@
-import { companiesAndYears, counted, panelCompleteness, panelFinding } from './panel-finding';
+import { companiesAndYears, panelCompleteness, panelFinding } from './panel-finding';
 import type { PanelRow } from './panel-rows';
+import { counted } from '../ui/phrases';
 
 const titles = ['Market value', 'Capex'];
 

@@ -1,5 +1,6 @@
 import { rowsWithGaps, shorterCompanies, span } from './panel-gaps';
 import type { PanelRow } from './panel-rows';
+import { counted } from '../ui/phrases';
 
 /** How complete a panel is. */
 export interface PanelCompleteness {
@@ -58,9 +59,4 @@ export function companiesAndYears(found: {
 /** `FY2008–FY2025`, or `FY2008` where there is one year. */
 export function yearSpan(first: number, last: number): string {
   return first === last ? `FY${first}` : `FY${first}–FY${last}`;
-}
-
-/** `1 cell`, `5 cells`, `1,200 cells`. */
-export function counted(count: number, one: string, many = `${one}s`): string {
-  return `${count.toLocaleString('en')} ${count === 1 ? one : many}`;
 }

@@ -23,11 +23,12 @@ import type { ChartText } from '../charts/chart-text';
 import { CoverageMap } from '../charts/coverage-map/coverage-map';
 import { BringInPanel } from './bring-in-panel';
 import { GapList } from './gap-list';
-import { counted, panelCompleteness, panelFinding, yearSpan } from './panel-finding';
+import { panelCompleteness, panelFinding, yearSpan } from './panel-finding';
 import { PanelGrid, type RowFocus } from './panel-grid';
 import { columnSources, columnTitle, missingIn, panelRows } from './panel-rows';
 import { PanelStore } from './panel-store';
 import { PanelVersions } from './panel-versions';
+import { counted } from '../ui/phrases';
 
 /** Is my data complete and right? The coverage of a panel version, its rows, and where it came from. */
 @Component({

@@ -10,9 +10,10 @@ import {
 import { MatButton } from '@angular/material/button';
 import { NumberFormat } from '../ui/number-format';
 import type { PanelCompany } from './peer-draft';
-import { yearsText } from './peer-words';
+
 import type { StandingsWithout } from './peers-store';
 import { ReasonField } from './reason-field';
+import { yearsText } from '../ui/phrases';
 
 /** A company on one side of the choice, with what is known about it. */
 export interface PeerRow {

@@ -1,7 +1,8 @@
 import type { ShownContext, StaleNotice } from '../ui/page-context';
 import type { PeerDraft } from './peer-draft';
-import { counted, yearsText } from './peer-words';
+
 import type { PeersGround } from './peers-store';
+import { counted, yearsText } from '../ui/phrases';
 
 /** What the frame shows around the choice of peers. */
 export function peersContext(ground: PeersGround, draft: PeerDraft): ShownContext {

@@ -25,10 +25,11 @@ import { PageHeader } from '../ui/page-header';
 import { ProblemNotice } from '../ui/problem-notice';
 import { PeerTable } from './peer-table';
 import { PeerVersions } from './peer-versions';
-import { counted } from './peer-words';
+
 import { PeersStore } from './peers-store';
 import { type PeersShown, peersShown } from './peers-shown';
 import { peersContext } from './peers-context';
+import { counted } from '../ui/phrases';
 
 /** Who do we compare ourselves with, and why? */
 @Component({

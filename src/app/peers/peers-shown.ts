@@ -1,8 +1,9 @@
 import { nearestFirst } from './nearness';
 import { type PanelCompany, type PeerDraft, reasonOf } from './peer-draft';
 import type { PeerRow } from './peer-table';
-import { counted, peersFinding, yearsText } from './peer-words';
+import { peersFinding } from './peer-words';
 import type { PeersGround } from './peers-store';
+import { counted, yearsText } from '../ui/phrases';
 
 const mostShown = 200;
 

@@ -36,7 +36,8 @@ import { ScenarioList } from './scenario-list';
 import { ScenarioName, nameProblem } from './scenario-name';
 import { ScenarioNotices } from './scenario-notices';
 import { ScenarioStore } from './scenario-store';
-import { contextOf, shortHash } from './scenario-words';
+import { contextOf } from './scenario-words';
+import { shortHash } from '../ui/phrases';
 
 const unnamed = 'This plan';
 
@@ -99,7 +100,7 @@ export class ScenariosPage {
     const ground = this.store.ground();
     if (ground === null) return '';
     const { basis, fit } = ground;
-    return `${this.caption()} · against the base, which holds FY${basis.last.year} · standing held fixed · fit ${shortHash(fit)}`;
+    return `${this.caption()} · against the base, which holds FY${basis.last.year} · standing held fixed · fit ${shortHash(fit.fit.hash)}`;
   });
   protected readonly saveLabel = computed(() => {
     const saved = this.store.ground()?.saved ?? null;

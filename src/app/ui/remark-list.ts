@@ -28,7 +28,7 @@ const spoken: Readonly<Record<Remark['kind'], string>> = {
             <span class="kv-visually-hidden">{{ spoken[remark.kind] }}</span>
             {{ remark.text }}
             @if (remark.actionLabel; as label) {
-              <button type="button" class="kv-link" (click)="selected.emit(remark)">
+              <button type="button" class="kv-link kv-no-print" (click)="selected.emit(remark)">
                 {{ label }}
               </button>
             }

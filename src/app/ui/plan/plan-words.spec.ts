@@ -2,8 +2,9 @@ import { TestBed } from '@angular/core/testing';
 import { familiarRange } from '@prediction';
 import { NumberFormat } from '../number-format';
 import { decidingYear, familiarFinding, familiarReason, planFinding } from './plan-words';
-import { listed, regressorLabels } from './regressor-labels';
+import { regressorLabels } from './regressor-labels';
 import { planBasis } from './testing/plan-basis';
+import { listed } from '../phrases';
 
 describe('a plan in words', () => {
   let numbers: NumberFormat;

@@ -1,6 +1,6 @@
 import type { FamiliarRange, IntervalEstimate, PredictionBasis } from '@prediction';
 import type { NumberFormat } from '../number-format';
-import { listed } from './regressor-labels';
+import { listed } from '../phrases';
 
 /** The year that a plan is judged by: the last one that differs from the base, or else its last. */
 export function decidingYear<T extends { readonly difference: IntervalEstimate }>(

@@ -16,9 +16,3 @@ export function regressorLabels(
     return roles[index] === 'bookEquity' ? 'book equity' : name;
   });
 }
-
-/** `capex, book equity and research`. */
-export function listed(words: readonly string[]): string {
-  if (words.length < 2) return words.join('');
-  return `${words.slice(0, -1).join(', ')} and ${words[words.length - 1]}`;
-}

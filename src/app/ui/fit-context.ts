@@ -1,7 +1,7 @@
 import type { DeskReply, FitReply } from '@contract';
 import { formatDate } from '@angular/common';
-import type { ShownContext, StaleNotice } from '../ui/page-context';
-import { counted, shortHash, yearsText } from './fit-words';
+import type { ShownContext, StaleNotice } from './page-context';
+import { counted, shortHash, yearsText } from './phrases';
 
 /** What the frame shows around a fit. */
 export function fitContext(reply: FitReply, desk: DeskReply, locale: string): ShownContext {

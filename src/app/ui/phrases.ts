@@ -1,0 +1,26 @@
+/** `1 company`, `12 companies`, `1,200 rows`. */
+export function counted(count: number, one: string, many = `${one}s`): string {
+  return `${count.toLocaleString('en')} ${count === 1 ? one : many}`;
+}
+
+/** `FY2008–FY2025`, or `FY2008` for one year. */
+export function yearsText(firstYear: number, lastYear: number): string {
+  return firstYear === lastYear ? `FY${firstYear}` : `FY${firstYear}–FY${lastYear}`;
+}
+
+/** The first characters of a hash, for the eye. */
+export function shortHash(hash: string | null): string {
+  return hash === null ? 'n/a' : hash.slice(0, 6);
+}
+
+/** `capex, book equity and staff`. */
+export function listed(words: readonly string[]): string {
+  return words.length < 2
+    ? words.join('')
+    : `${words.slice(0, -1).join(', ')} and ${words[words.length - 1]}`;
+}
+
+/** `95 %`. */
+export function confidenceText(confidence: number): string {
+  return `${Number((confidence * 100).toPrecision(4))} %`;
+}
