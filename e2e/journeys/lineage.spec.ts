@@ -34,3 +34,16 @@ test('follows the standing from the Fit page to the cell of the panel that it re
 function numbersOf(texts: readonly string[]): readonly number[] {
   return texts.map((text) => Number(text.replaceAll(',', ''))).filter((value) => !isNaN(value));
 }
+
+test('shows how far the standing depends on the choice of peers, two fits side by side', async ({
+  page,
+}) => {
+  await new EntryPage(page).signIn(demoAccount('analyst'));
+  const both = await (await new FitPage(page).openNewest()).compareTwo();
+  const [first, second] = await both.figure(/^Standing/);
+  expect(first).toMatch(/^[−\d][\d.,]* \(.+ to .+\)$/);
+  expect(second).toMatch(/^[−\d][\d.,]* \(.+ to .+\)$/);
+  expect(second).not.toBe(first);
+  expect((await both.making(/^Peers|^Peer group/)).at(-1)).toBe('differs');
+  expect((await both.making(/^Panel/)).at(-1)).toBe('same');
+});

@@ -7,6 +7,7 @@ import { Frame } from '../pages/frame';
 import { MembersPage } from '../pages/members-page';
 import { PanelPage, openDataFile } from '../pages/panel-pages';
 import { PeersPage } from '../pages/peers-page';
+import { PreparedWorkspace } from '../pages/prepared-workspace';
 import { ScenariosPage } from '../pages/scenarios-page';
 
 const companies = Array.from(
@@ -135,6 +136,17 @@ test('from a file to a signed edition, with the figures that R gives', async ({
     expect((await list.edition(1))[0]).toMatch(/signed/);
     await list.openNumber(1);
     await expect(new EditionPage(page).signature).toHaveText(/Signed by Piet Kalderon on/);
+  });
+
+  await test.step('a reader who joins then lands on the signed edition', async () => {
+    const reader = invented('Cato Brevick');
+    const readerPage = await newcomer();
+    const token = await new PreparedWorkspace(page).invite(reader.email, 'reader');
+    await new PreparedWorkspace(readerPage).join(token, reader);
+    await readerPage.goto('/');
+    const edition = await new EditionPage(readerPage).read(1);
+    await expect(edition.signature).toHaveText(/Signed by Piet Kalderon on/);
+    expect(await new Frame(readerPage).entries()).toEqual(['Board']);
   });
 });
 

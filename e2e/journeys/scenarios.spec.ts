@@ -17,7 +17,7 @@ test('plans, keeps the unsaved plan, warns, saves, copies, deletes and takes it 
     const after = await plan.year(2026);
     expect(after.expected).not.toBe(before.expected);
     expect(after.difference).toMatch(/^\+[\d.,]+ \([\d.,−]+ to [\d.,−]+\)$/);
-    await plan.reset('Capex FY2026');
+    await plan.press('Capex FY2026', 'ArrowLeft', 2);
     expect(await plan.year(2026)).toEqual(before);
   });
 

@@ -61,8 +61,37 @@ export class FitPage extends CheckedPage {
     await this.page.getByRole('link', { name: 'Run scenarios' }).click();
   }
 
+  /** Chooses the first two fits of the list. */
+  async compareTwo(): Promise<ComparePage> {
+    const boxes = this.page.getByRole('checkbox', { name: /^Compare fit/ });
+    await boxes.nth(0).check();
+    await boxes.nth(1).check();
+    await this.page.getByRole('link', { name: 'Compare the two' }).click();
+    return new ComparePage(this.page).read();
+  }
+
   async expectFits(count: number): Promise<void> {
     const rows = this.page.getByRole('region', { name: 'All fits, table' }).getByRole('rowheader');
     await expect(rows).toHaveCount(count);
+  }
+}
+
+/** Two fits side by side. */
+export class ComparePage extends CheckedPage {
+  readonly #figures = this.page.getByRole('region', { name: 'Figures of both fits, table' });
+  readonly #makings = this.page.getByRole('region', { name: /^What each fit was made from/ });
+
+  async read(): Promise<this> {
+    return this.arrive(this.#figures);
+  }
+
+  /** A figure of the first fit, then of the second. */
+  figure(name: string | RegExp): Promise<readonly string[]> {
+    return this.cellsOf(this.#figures, name);
+  }
+
+  /** What the first was made from, the second, and whether it is the same. */
+  making(name: string | RegExp): Promise<readonly string[]> {
+    return this.cellsOf(this.#makings, name);
   }
 }

@@ -34,10 +34,6 @@ export class ScenariosPage extends CheckedPage {
     await this.box(label).press('Enter');
   }
 
-  async reset(label: string): Promise<void> {
-    await this.page.getByRole('button', { name: `${label}: reset to base` }).click();
-  }
-
   async addYear(year: number): Promise<void> {
     await this.page.getByRole('button', { name: `Add FY${year}` }).click();
   }
