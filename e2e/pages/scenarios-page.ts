@@ -1,6 +1,13 @@
 import type { Locator } from '@playwright/test';
 import { CheckedPage, expect } from './checked-page';
 
+export interface PlannedFigures {
+  readonly expected: string;
+  /** Against the base. */
+  readonly difference: string;
+  readonly familiar: string;
+}
+
 /** A plan by year, and what it would do to the expected value. */
 export class ScenariosPage extends CheckedPage {
   readonly #figures = this.page.getByRole('region', { name: 'Figures of the plan by year' });
@@ -38,15 +45,20 @@ export class ScenariosPage extends CheckedPage {
     await this.page.getByRole('button', { name: `Add FY${year}` }).click();
   }
 
-  /** Capex, book equity, expected value, difference to the base and familiar range of a planned year. */
-  async year(year: number): Promise<{
-    readonly expected: string;
-    readonly difference: string;
-    readonly familiar: string;
-  }> {
+  /** What the table says of a planned year. */
+  async year(year: number): Promise<PlannedFigures> {
     const cells = await this.cellsOf(this.#figures, `FY${year}`);
     const [expected, difference, familiar] = cells.slice(-3);
     return { expected, difference, familiar };
+  }
+
+  /** Ends when a moved plan has other figures: they follow at once, so the wait is short. */
+  async expectDifferent(year: number, before: PlannedFigures): Promise<void> {
+    const changed = async () => {
+      const now = await this.year(year);
+      return now.expected !== before.expected && now.difference !== before.difference;
+    };
+    await expect.poll(changed, { timeout: 3000 }).toBe(true);
   }
 
   async name(text: string): Promise<void> {
