@@ -61,7 +61,7 @@ const ofFolder = [
   only('backend/http', [
     within('backend/(http|errors|contract)'),
     '^backend/stats/.*stats-error\\.ts$',
-    ...packages('express', 'express-session', 'express-rate-limit', 'connect-pg-simple', 'helmet'),
+    ...packages('express', 'express-session', 'connect-pg-simple', 'helmet'),
     ...packages('pino', 'pino-http', 'passport', 'express-serve-static-core', 'multer', 'zod'),
   ]),
   only('backend/compute', [
@@ -85,7 +85,7 @@ const ofFolder = [
         .map((earlier) => `^backend/${earlier}/[a-z-]+-(service|reply|replies)\\.ts$`),
       within('db/repositories'),
       '^db/errors\\.ts$',
-      ...packages('express', 'express-serve-static-core', 'express-rate-limit', 'express-session'),
+      ...packages('express', 'express-serve-static-core', 'express-session'),
       ...packages(
         ...({
           accounts: ['@node-rs/argon2', 'passport', 'passport-local'],
@@ -151,7 +151,7 @@ const acrossFolders = [
       pathNot: [spec, ...edge],
     },
     to: {
-      path: ['^backend/(contract|http)/', ...packages('express', 'multer', 'express-rate-limit')],
+      path: ['^backend/(contract|http)/', ...packages('express', 'multer')],
     },
   },
   {
