@@ -66,6 +66,7 @@ export const PredictionBasis = z.object({
   slopeIntervalReason: z.string().optional(),
   last: ownYear,
   inverseCrossProduct: matrix,
+  residualVariance: z.number(),
   largestOwnLeverage: z.number(),
   largestLeverage: z.number(),
   ownRange: z.array(observedRange),

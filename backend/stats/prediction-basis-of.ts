@@ -39,6 +39,7 @@ export function predictionBasisOf(
     slopeIntervalReason: isPerfectFit(fit) ? perfectFitReason : undefined,
     last: ownYears[ownYears.length - 1],
     inverseCrossProduct,
+    residualVariance: fit.residualSquares / fit.residualDegreesOfFreedom,
     largestOwnLeverage,
     largestLeverage: Math.max(largestOwnLeverage, peerLeverage(fit, own)),
     ...observedRanges(fit.sample, own),

@@ -20,4 +20,9 @@ export type {
   SlopeDegreesOfFreedom,
 } from './prediction-basis';
 export { quadraticForm } from './quadratic-form';
-export { contrastDegreesOfFreedom, differenceToBase, type TQuantile } from './slope-contrast';
+export {
+  contrastDegreesOfFreedom,
+  differenceToBase,
+  type TQuantile,
+  varianceTolerance,
+} from './slope-contrast';

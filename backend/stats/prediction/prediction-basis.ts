@@ -51,6 +51,8 @@ export interface PredictionBasis {
   readonly last: OwnYear;
   /** Q⁻¹ of the company-demeaned regressors, K × K. */
   readonly inverseCrossProduct: readonly (readonly number[])[];
+  /** σ² = Σe²/(n − N − K): σ²·Q⁻¹ is the classical covariance of the slopes, whichever was chosen. */
+  readonly residualVariance: number;
   /** Largest leverage x̃'Q⁻¹x̃ of the own company, and of any company. */
   readonly largestOwnLeverage: number;
   readonly largestLeverage: number;

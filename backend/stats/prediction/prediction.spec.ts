@@ -1,7 +1,8 @@
 import * as fc from 'fast-check';
 import { tQuantile } from '../distributions/t-distribution';
 import { expectDigits } from '../testing/expect-digits';
-import { fitOf, goldenPanel } from '../testing/golden-panels';
+import { fitOf, goldenPanel, panelOf } from '../testing/golden-panels';
+import { randomNumbers } from '../testing/random-panels';
 import {
   decompositionFromLast,
   decompositionToBase,
@@ -76,6 +77,31 @@ describe('differenceToBase', () => {
       classical.prediction && differenceToBase(classical.prediction, [1, 0], tQuantile);
     expectDigits(difference?.high, classical.slopes[0].high ?? NaN, 12);
   });
+
+  for (const slopes of ['cr2', 'cr1', 'cr0'] as const)
+    it(`has no interval where one company alone determines it, just as the slope has none (${slopes})`, () => {
+      // b varies in C3 only, a in the others only: C3's residuals are orthogonal to b, so a sandwich sees no variance.
+      const random = randomNumbers(7);
+      const rows = Array.from({ length: 8 * 12 }, (_, index) => {
+        const company = Math.floor(index / 12);
+        const regressors = company === 3 ? [4, 50 * random()] : [100 * random(), 9];
+        const outcome = 100 * company + 2 * regressors[0] - regressors[1] + 40 * random();
+        return { company: `C${company}`, year: 2000 + (index % 12), outcome, regressors };
+      });
+      const alone = fitOf(panelOf(rows, { outcome: 'y', regressors: ['a', 'b'] }), 'C3', {
+        slopes,
+      });
+      const reason = 'No variance is left to judge it by: one company alone determines this';
+      expect(alone.slopes[0].standardError).toBeGreaterThan(0);
+      expect(alone.slopes[1].standardError).toBeNull();
+      expect(alone.slopes[1].intervalReason).toBe(`${reason} slope.`);
+      const difference = differenceToBase(alone.prediction!, [0, 3], tQuantile);
+      expect(difference.standardError).toBeNull();
+      expect(difference.intervalReason).toBe(`${reason} difference.`);
+      expectDigits(difference.estimate, 3 * alone.slopes[1].estimate, 12);
+      const other = differenceToBase(alone.prediction!, [1, 0], tQuantile);
+      expectDigits(other.high, alone.slopes[0].high ?? NaN, 12);
+    });
 
   it('has no interval where the slopes have none', () => {
     const difference = differenceToBase(

@@ -6,7 +6,10 @@ import { quadraticForm } from './quadratic-form';
 export type TQuantile = (probability: number, degreesOfFreedom: number) => number;
 
 /** A contrast whose working variance is below this share of the classical one is determined by one company alone. */
-const judgedTolerance = 1e-10;
+const workingTolerance = 1e-10;
+
+/** A variance below this share of the classical one is rounding: residuals that sum to zero are all it rests on. */
+export const varianceTolerance = 1e-20;
 
 /** Degrees of freedom of the contrast of slopes with the given weights, not all zero. */
 export function contrastDegreesOfFreedom(
@@ -48,7 +51,7 @@ export function differenceToBase(
   if (!isJudged(basis, weights)) {
     return withoutInterval(
       estimate,
-      'No degrees of freedom are left: one company alone determines this difference.',
+      'No variance is left to judge it by: one company alone determines this difference.',
     );
   }
   const variance = Math.max(0, quadraticForm(basis.slopeCovariance, weights));
@@ -59,11 +62,12 @@ export function differenceToBase(
 }
 
 function isJudged(basis: PredictionBasis, weights: readonly number[]): boolean {
+  const crossProduct = quadraticForm(basis.inverseCrossProduct, weights);
+  const variance = quadraticForm(basis.slopeCovariance, weights);
+  if (!(variance > varianceTolerance * basis.residualVariance * crossProduct)) return false;
   const degrees = basis.slopeDegreesOfFreedom;
-  if (degrees.kind === 'fixed') return true;
   return (
-    quadraticForm(degrees.s, weights) >
-    judgedTolerance * quadraticForm(basis.inverseCrossProduct, weights)
+    degrees.kind === 'fixed' || quadraticForm(degrees.s, weights) > workingTolerance * crossProduct
   );
 }
 

@@ -1,17 +1,20 @@
 import { tQuantile, tTwoSided } from '../distributions/t-distribution';
 import type { SlopeCovarianceName, SlopeEstimate } from '../fit-result';
 import type { SquareMatrix } from '../linear-algebra/square-matrix';
-import { type SlopeDegreesOfFreedom, symmetricInterval, withoutInterval } from '../prediction';
+import {
+  type SlopeDegreesOfFreedom,
+  symmetricInterval,
+  varianceTolerance,
+  withoutInterval,
+} from '../prediction';
 import { isPerfectFit, perfectFitReason } from '../regression/goodness';
 import type { WithinFit } from '../regression/within-fit';
 import type { CompanyProduct } from './company-products';
 import { slopeCovariance } from './slope-covariance';
 import { satterthwaiteDegreesOfFreedom, satterthwaiteForms } from './satterthwaite';
 
-/** A variance below this share of the classical one is rounding: nothing but one company moves this slope. */
-const varianceTolerance = 1e-20;
-
-const noDegreesReason = 'No degrees of freedom are left: one company alone determines this slope.';
+const noVarianceReason =
+  'No variance is left to judge it by: one company alone determines this slope.';
 
 /** Slopes with the covariance and the degrees of freedom chosen in the specification. */
 export function slopeEstimates(
@@ -34,7 +37,7 @@ export function slopeEstimates(
     const isJudged = variance > varianceTolerance * classical[k * size + k];
     const standardError = Math.sqrt(variance);
     if (isPerfect || degreesOfFreedom === null || !isJudged) {
-      const reason = isPerfect ? perfectFitReason : noDegreesReason;
+      const reason = isPerfect ? perfectFitReason : noVarianceReason;
       return {
         name,
         ...withoutInterval(estimate, reason),

@@ -42,6 +42,7 @@ export const planBasis: PredictionBasis = {
     [0.0001, 0],
     [0, 0.000001],
   ],
+  residualVariance: 400,
   // Leverage is (Δcapex/100)² + (Δequity/1000)²: the own company went 50 away from its mean, a peer 100.
   largestOwnLeverage: 0.25,
   largestLeverage: 1,
