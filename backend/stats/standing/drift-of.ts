@@ -7,7 +7,8 @@ import type { IntervalContext } from '../intervals/interval-context';
 import { rowsOf } from '../intervals/interval-reasons';
 import type { PanelSample } from '../panel/panel-sample';
 import { withoutInterval } from '../prediction';
-import { withinFit } from '../regression/within-fit';
+import { isPerfectFit, perfectFitReason } from '../regression/goodness';
+import { type WithinFit, withinFit } from '../regression/within-fit';
 import { StatsError } from '../stats-error';
 
 const fewestRows = 8;
@@ -31,19 +32,15 @@ export function driftOf(context: IntervalContext, own: number): DriftOrReason {
     return { drift: null, reason };
   }
   const augmented = augmentedFit(fit.sample, own);
-  if (augmented === null) {
-    const reason =
-      'The regressors themselves run in a straight line over time, so a drift cannot be told from them.';
-    return { drift: null, reason };
-  }
+  if (typeof augmented === 'string') return { drift: null, reason: augmented };
   const slopes = augmented.slopes.length;
   const weights = new Float64Array(slopes);
   weights[slopes - 2] = 1;
   weights[slopes - 1] = -1;
   const estimate = augmented.slopes[slopes - 2] - augmented.slopes[slopes - 1];
-  if (context.reason !== undefined) {
-    return { drift: { ...withoutInterval(estimate, context.reason), pValue: null } };
-  }
+  const reason = context.reason ?? (isPerfectFit(augmented) ? perfectFitReason : undefined);
+  if (reason !== undefined)
+    return { drift: { ...withoutInterval(estimate, reason), pValue: null } };
   const forms = companyForms(augmented, context.persistence.used, cosines);
   const error = calibratedError(forms, slopeContrast(augmented, weights), cosines);
   const interval = calibratedInterval(estimate, error, { cosines, confidence });
@@ -52,7 +49,8 @@ export function driftOf(context: IntervalContext, own: number): DriftOrReason {
   return { drift: { ...interval, pValue } };
 }
 
-function augmentedFit(sample: PanelSample, own: number): ReturnType<typeof withinFit> | null {
+/** The fit with the two trends beside its regressors, or why there is none. */
+function augmentedFit(sample: PanelSample, own: number): WithinFit | string {
   const from = sample.starts[own];
   const to = sample.starts[own + 1];
   const middle = (sample.years[0] + sample.years[sample.years.length - 1]) / 2;
@@ -66,13 +64,18 @@ function augmentedFit(sample: PanelSample, own: number): ReturnType<typeof withi
       regressorNames: [...sample.regressorNames, 'year of the own company', 'year of the peers'],
     });
   } catch (error) {
-    if (error instanceof StatsError && undetermined.has(error.code)) return null;
-    throw error;
+    const reason = error instanceof StatsError ? reasons[error.code] : undefined;
+    if (reason === undefined) throw error;
+    return reason;
   }
 }
 
-const undetermined = new Set<StatsError['code']>([
-  'collinear-regressors',
-  'constant-within-companies',
-  'no-residual-degrees-of-freedom',
-]);
+const straightLineReason =
+  'The regressors themselves run in a straight line over time, so a drift cannot be told from them.';
+
+const reasons: Readonly<Partial<Record<StatsError['code'], string>>> = {
+  'collinear-regressors': straightLineReason,
+  'constant-within-companies': straightLineReason,
+  'no-residual-degrees-of-freedom':
+    'The rows are too few for the two more slopes that a drift needs.',
+};

@@ -1,7 +1,8 @@
 import type { FitResult } from '../fit-result';
 import { expectedValue } from '../prediction';
 import { expectDigits } from '../testing/expect-digits';
-import { fitOf, goldenJson, goldenPanel } from '../testing/golden-panels';
+import { fitOf, goldenJson, goldenPanel, panelOf, type PanelRow } from '../testing/golden-panels';
+import { randomNumbers } from '../testing/random-panels';
 
 interface GoldenStanding {
   readonly estimate: number;
@@ -113,3 +114,50 @@ for (const golden of goldenJson<GapAndDrift>('gap-drift.json').cases) {
     });
   });
 }
+
+describe('a drift', () => {
+  const random = randomNumbers(3);
+  const rows = ['A', 'B', 'C', 'D'].flatMap((company, index) =>
+    Array.from({ length: 10 }, (_, year): PanelRow => {
+      const x = 100 * random();
+      const slope = company === 'A' ? 3 : 1;
+      const outcome = 10 * index + 2 * x + slope * year;
+      return { company, year: 2000 + year, outcome, regressors: [x] };
+    }),
+  );
+  const names = { outcome: 'y', regressors: ['x'] };
+
+  it('has neither interval nor p where it leaves no residual', () => {
+    const { drift } = fitOf(panelOf(rows, names), 'A');
+    expectDigits(drift?.estimate, 2, 9);
+    expect(drift).toEqual(
+      jasmine.objectContaining({ standardError: null, low: null, high: null, pValue: null }),
+    );
+    expect(drift?.intervalReason).toContain('perfect');
+  });
+
+  it('is not told from regressors that run in a straight line over time', () => {
+    const noisy = rows.map((row) => ({
+      ...row,
+      outcome: row.outcome + 9 * random(),
+      regressors: [row.year],
+    }));
+    const fit = fitOf(panelOf(noisy, names), 'A');
+    expect(fit.drift).toBeNull();
+    expect(fit.driftReason).toContain('straight line');
+  });
+
+  it('needs rows for two more slopes, and says so', () => {
+    const few = rows.filter(({ company, year }) => company === 'A' || year < 2002).slice(0, 12);
+    const wide = few.map((row) => ({
+      ...row,
+      regressors: Array.from({ length: 8 }, () => random()),
+    }));
+    const regressors = wide[0].regressors.map((_, k) => `x${k}`);
+    const fit = fitOf(panelOf(wide, { outcome: 'y', regressors }), 'A');
+    expect(fit.drift).toBeNull();
+    expect(fit.driftReason).toBe(
+      'The rows are too few for the two more slopes that a drift needs.',
+    );
+  });
+});
