@@ -29,6 +29,7 @@ export function fitReply(result: FitResult, leftOut: readonly DroppedRow[]): Jso
         ? null
         : {
             ...standing,
+            ...(standing.rankSet === null && { rankSetReason: standing.rankReason }),
             ...(standing.ownPersistence === null && {
               ownPersistenceReason:
                 'The own company has fewer than 8 rows, or no two fiscal years in a row.',

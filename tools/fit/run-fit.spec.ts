@@ -116,6 +116,31 @@ describe('the fit command', () => {
     expect(single?.['deviationReason']).toContain('One row');
   });
 
+  it('says why there is no rank, beside the rank and its set', async () => {
+    const short = ['P', 'Q', 'R', 'S'].flatMap((company, index) =>
+      [2000, 2001].map((year) =>
+        [company, year, index + (year % 7), year % 2, index % 3].join(','),
+      ),
+    );
+    const own = Array.from({ length: 20 }, (_, year) =>
+      ['A', 2000 + year, (year * 7) % 5, (year * 3) % 4, (year * year) % 7].join(','),
+    );
+    const reply = (await runFit([...panel(...own, ...short), '--own', 'A'])) as Record<
+      string,
+      Record<string, unknown>
+    >;
+    const reason = 'No peer has 3 rows or more, so there is no one to rank against.';
+    expect(reply['standing']).toEqual(
+      jasmine.objectContaining({
+        rank: null,
+        rankReason: reason,
+        rankSet: null,
+        rankSetReason: reason,
+      }),
+    );
+    expect(reply['standing']['low']).not.toBeNull();
+  });
+
   it('lists dropped rows with their lines, also those without a year', async () => {
     const reply = (await runFit(
       panel(...rows, 'A,,1,2,3', 'A,2010,NA,2,-', ',2011,1,2,3'),

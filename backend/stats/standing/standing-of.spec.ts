@@ -161,3 +161,21 @@ describe('a drift', () => {
     );
   });
 });
+
+describe('a rank', () => {
+  it('is none where no peer has rows enough to be compared with', () => {
+    const random = randomNumbers(11);
+    const rows = ['A', 'B', 'C'].flatMap((company) =>
+      Array.from({ length: company === 'A' ? 20 : 2 }, (_, year): PanelRow => {
+        const regressors = [random()];
+        return { company, year: 2000 + year, outcome: random(), regressors };
+      }),
+    );
+    const { standing } = fitOf(panelOf(rows, { outcome: 'y', regressors: ['x'] }), 'A');
+    expect(standing?.rank).toBeNull();
+    expect(standing?.rankSet).toBeNull();
+    expect(standing?.rankReason).toBe(
+      'No peer has 3 rows or more, so there is no one to rank against.',
+    );
+  });
+});

@@ -7,7 +7,8 @@ import { withoutInterval } from '../prediction';
 
 /**
  * The own company's intercept minus the unweighted mean of the others', with its calibrated interval, and the places
- * among the companies of 3 rows or more that the data cannot rule out.
+ * among the companies of 3 rows or more that the data cannot rule out. The mean takes in every peer; places and the
+ * correction behind them count only those of 3 rows or more, because the others' intercepts have no interval.
  *
  * @param pairs  the own company's comparisons with every peer.
  */
@@ -50,6 +51,10 @@ function rankOf(
   const ranked = fit.sample.companies
     .map((_, index) => index)
     .filter((index) => rowsOf(fit, index) >= fewestRowsForRank);
+  if (ranked.length < 2) {
+    const rankReason = `No peer has ${fewestRowsForRank} rows or more, so there is no one to rank against.`;
+    return { rank: null, rankSet: null, rankReason };
+  }
   const higher = ranked.filter(
     (index) => fit.relativeIntercepts[index] > fit.relativeIntercepts[own],
   );
