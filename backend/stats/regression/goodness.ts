@@ -3,7 +3,11 @@ import type { FitResult, FTest } from '../fit-result';
 import { sumOfSquares } from './sum-of-squares';
 import type { WithinFit } from './within-fit';
 
-/** A fit whose residuals are below this share of the outcome's variation is perfect but for rounding. */
+/**
+ * A fit whose residuals are below this share of the outcome's variation is perfect but for rounding. The variation is
+ * the total one of R², between companies too: rounding grows with the figures, and large companies' figures are large
+ * however little they move from year to year.
+ */
 const perfectFitTolerance = 1e-20;
 
 export const perfectFitReason = 'The fit is perfect: no residual is left to judge an estimate by.';

@@ -8,7 +8,9 @@ import { holmRejections } from './holm';
 
 /**
  * a_own − a_peer for every peer, each with the standard error at the ranks' number of cosines, and what Holm's
- * correction over all one-sided hypotheses shows. A pair without an interval is told apart by nothing.
+ * correction over all one-sided hypotheses shows. A pair without an interval is told apart by nothing. Holm's m is
+ * twice the number of peers with 3 rows or more: a shorter one has no place in the rank set, so no hypothesis about it
+ * is tested, and counting it would only make the others harder to tell apart.
  *
  * @param own  index of the own company.
  */
