@@ -6,7 +6,7 @@ import type { IntervalContext } from './intervals/interval-context';
 import { contrastIntervalReason } from './intervals/interval-reasons';
 import { congruence, type SquareMatrix, toRows } from './linear-algebra/square-matrix';
 import { ownLeverages, observedRanges, peerLeverage } from './observed-range';
-import type { SlopeDegreesOfFreedom } from './prediction';
+import { type SlopeDegreesOfFreedom, twoSidedQuantile } from './prediction';
 import { isPerfectFit, perfectFitReason } from './regression/goodness';
 import type { WithinFit } from './regression/within-fit';
 
@@ -51,7 +51,7 @@ function calibratedForms(
   own: number,
 ): Pick<PredictionBasis, 'lambdas' | 'a' | 'd' | 'quantile' | 'intervalReason'> {
   const { fit, forms, cosines } = context;
-  const quantile = tQuantile(1 - (1 - context.confidence) / 2, cosines);
+  const quantile = twoSidedQuantile(tQuantile, context.confidence, cosines);
   const basis = basisContrasts(fit, own);
   const intervalReason = context.reason ?? contrastIntervalReason(fit, basis[0]);
   if (forms === null || intervalReason !== undefined) {

@@ -1,5 +1,10 @@
 import { tQuantile } from '../distributions/t-distribution';
-import { type IntervalEstimate, symmetricInterval, withoutInterval } from '../prediction';
+import {
+  type IntervalEstimate,
+  symmetricInterval,
+  twoSidedQuantile,
+  withoutInterval,
+} from '../prediction';
 import type { CompanyForms } from './company-forms';
 import type { Contrast } from './contrast';
 import { lambdasOf, residualForm, varianceForm } from './contrast-forms';
@@ -45,6 +50,6 @@ export function calibratedInterval(
   options: { readonly cosines: number; readonly confidence: number },
 ): IntervalEstimate {
   if (error.standardError === null) return withoutInterval(estimate, error.reason);
-  const quantile = tQuantile(1 - (1 - options.confidence) / 2, options.cosines);
+  const quantile = twoSidedQuantile(tQuantile, options.confidence, options.cosines);
   return symmetricInterval(estimate, error.standardError, quantile);
 }

@@ -1,6 +1,7 @@
 import type { IntervalEstimate } from './interval-estimate';
 import type { PredictionBasis } from './prediction-basis';
-import { differenceToBase, type TQuantile } from './slope-contrast';
+import { differenceToBase } from './slope-contrast';
+import type { TQuantile } from './two-sided-quantile';
 
 /** b_k·Δx_k of one regressor, with its own interval. */
 export interface DecompositionTerm extends IntervalEstimate {

@@ -20,9 +20,5 @@ export type {
   SlopeDegreesOfFreedom,
 } from './prediction-basis';
 export { quadraticForm } from './quadratic-form';
-export {
-  contrastDegreesOfFreedom,
-  differenceToBase,
-  type TQuantile,
-  varianceTolerance,
-} from './slope-contrast';
+export { contrastDegreesOfFreedom, differenceToBase, varianceTolerance } from './slope-contrast';
+export { type TQuantile, twoSidedQuantile } from './two-sided-quantile';

@@ -71,6 +71,17 @@ describe('differenceToBase', () => {
     });
   });
 
+  it('has finite bounds at the largest confidence below 1, as every other interval has', () => {
+    const sure = fitOf(data, 'C06', { confidence: 1 - 2 ** -53 });
+    const difference = differenceToBase(sure.prediction!, [1, 0], tQuantile);
+    const value = expectedValue(sure.prediction!, [1, 0]);
+    for (const interval of [difference, value, ...sure.slopes, sure.standing, sure.drift]) {
+      expect(interval?.high).toBeLessThan(Infinity);
+      expect(interval?.low).toBeGreaterThan(-Infinity);
+      expect(interval?.high).toBeGreaterThan(interval?.estimate ?? NaN);
+    }
+  });
+
   it('takes fixed degrees of freedom where the covariance has them', () => {
     const classical = fitOf(data, 'C06', { slopes: 'classical' });
     const difference =

@@ -1,9 +1,7 @@
 import { type IntervalEstimate, symmetricInterval, withoutInterval } from './interval-estimate';
 import type { PredictionBasis, SlopeDegreesOfFreedom } from './prediction-basis';
 import { quadraticForm } from './quadratic-form';
-
-/** Quantile of Student's t at fractional degrees of freedom. */
-export type TQuantile = (probability: number, degreesOfFreedom: number) => number;
+import { type TQuantile, twoSidedQuantile } from './two-sided-quantile';
 
 /** A contrast whose working variance is below this share of the classical one is determined by one company alone. */
 const workingTolerance = 1e-10;
@@ -57,7 +55,7 @@ export function differenceToBase(
   const variance = Math.max(0, quadraticForm(basis.slopeCovariance, weights));
   const standardError = largest * Math.sqrt(variance);
   const degrees = contrastDegreesOfFreedom(basis.slopeDegreesOfFreedom, weights);
-  const quantile = tQuantile(1 - (1 - basis.confidence) / 2, degrees);
+  const quantile = twoSidedQuantile(tQuantile, basis.confidence, degrees);
   return symmetricInterval(estimate, standardError, quantile);
 }
 

@@ -4,6 +4,7 @@ import type { SquareMatrix } from '../linear-algebra/square-matrix';
 import {
   type SlopeDegreesOfFreedom,
   symmetricInterval,
+  twoSidedQuantile,
   varianceTolerance,
   withoutInterval,
 } from '../prediction';
@@ -46,7 +47,7 @@ export function slopeEstimates(
         pValue: null,
       };
     }
-    const quantile = tQuantile(1 - (1 - options.confidence) / 2, degreesOfFreedom);
+    const quantile = twoSidedQuantile(tQuantile, options.confidence, degreesOfFreedom);
     const statistic = estimate / standardError;
     return {
       name,

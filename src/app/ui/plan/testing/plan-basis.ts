@@ -56,7 +56,7 @@ export const planBasis: PredictionBasis = {
   ],
 };
 
-/** t(10), the only quantile that the basis asks for at 95 %. */
+/** t(10) at 2.5 %, the only quantile that the basis asks for at 95 %. */
 export function quantileOfTen(): number {
-  return 2.2281388519649385;
+  return -2.2281388519649385;
 }
