@@ -80,7 +80,7 @@ const cellKinds = [
 const titles: Readonly<Record<StatsError['code'], string>> = {
   shape: 'The columns do not fit together',
   specification: 'The specification is not offered',
-  'non-finite': 'A number is too large',
+  'non-finite': 'A number is too large or too small',
   'duplicate-rows': 'A company has a year twice',
   'unknown-company': 'A company is not in the file',
   'too-many-years': 'Too many different years',

@@ -1,12 +1,16 @@
-import type { PanelColumns } from '../fit-result';
+import type { NamedColumn, PanelColumns } from '../fit-result';
 import { type RowPlace, StatsError } from '../stats-error';
 
 /** Fourth powers of larger numbers leave the range of a double. */
 const largestMagnitude = 1e60;
 
+/** Fourth powers of a column that holds nothing but smaller numbers vanish, and with them its slope's error. */
+const smallestMagnitude = 1e-60;
+
 /**
- * Refuses columns that do not fit together, and numbers that are infinite or too large.
- * @throws {StatsError} 'shape' or 'non-finite' with every place.
+ * Refuses columns that do not fit together, numbers that are infinite or too large, and columns of numbers that are all
+ * too small. A column of zeros is not refused here: it never varies, which the design says.
+ * @throws {StatsError} 'shape', or 'non-finite' with every place or column.
  */
 export function checkColumns(data: PanelColumns): void {
   const rows = data.company.length;
@@ -28,6 +32,7 @@ export function checkColumns(data: PanelColumns): void {
     throw new StatsError('shape', 'expected company codes to point into the list of companies');
   }
   refuseTooLarge(data);
+  refuseTooSmall(columns);
 }
 
 function refuseLength(name: string, found: number, expected: number): void {
@@ -57,5 +62,21 @@ function refuseTooLarge(data: PanelColumns): void {
     {
       rows,
     },
+  );
+}
+
+function refuseTooSmall(columns: readonly NamedColumn[]): void {
+  const tooSmall = columns.flatMap(({ name, values }) => {
+    const largest = values.reduce(
+      (size, value) => (Math.abs(value) > size ? Math.abs(value) : size),
+      0,
+    );
+    return largest > 0 && largest < smallestMagnitude ? [name] : [];
+  });
+  if (tooSmall.length === 0) return;
+  throw new StatsError(
+    'non-finite',
+    `expected a number of ${smallestMagnitude} or more in each column; found only smaller ones in ${tooSmall.join(', ')}`,
+    { columns: tooSmall },
   );
 }

@@ -105,6 +105,21 @@ describe('the sample of a fit', () => {
     expect(data.rows).toEqual([{ row: 4, column: 'value' }]);
   });
 
+  it('refuses a column of numbers too small to square, by name, but not zeros beside ordinary ones', () => {
+    const tiny = plainRows().map((row) => ({
+      ...row,
+      regressors: [row.regressors[0], row.regressors[1] * 1e-62],
+    }));
+    const { code, data, message } = refusal(tiny);
+    expect(code).toBe('non-finite');
+    expect(data.columns).toEqual(['equity']);
+    expect(message).toContain('1e-60');
+    const still = plainRows().map((row) => ({ ...row, regressors: [row.regressors[0], 0] }));
+    expect(refusal(still).code).toBe('constant-within-companies');
+    const one = change(plainRows(), 2, { outcome: 1e-70 });
+    expect(fitOf(panelOf(one, names)).sample.observations).toBe(18);
+  });
+
   it('refuses more years than any company has fiscal years', () => {
     const rows = ['A', 'B'].flatMap((company) =>
       Array.from({ length: 1001 }, (_, year) => ({
