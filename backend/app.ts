@@ -1,7 +1,13 @@
 import compression from 'compression';
 import express, { type Express, type RequestHandler } from 'express';
 import type { Logger } from 'pino';
-import { isDatabaseFull, isDatabaseUnavailable } from '../db/errors';
+import {
+  isDatabaseFull,
+  isDatabaseUnavailable,
+  isMissingReference,
+  isUnstorableText,
+  UniqueViolation,
+} from '../db/errors';
 import { accountRoutes } from './accounts/account-routes';
 import { loadMember } from './accounts/load-member';
 import { memberRoutes } from './accounts/member-routes';
@@ -10,7 +16,7 @@ import { seatRoutes } from './billing/seat-routes';
 import { deskRoutes } from './board/desk-routes';
 import { editionRoutes } from './board/edition-routes';
 import type { Services } from './compose';
-import { AppError, NotFound, Unavailable } from './errors/app-error';
+import { AppError, Conflict, Invalid, NotFound, Unavailable } from './errors/app-error';
 import { fitRoutes } from './fits/fit-routes';
 import { applicationPage } from './http/application-page';
 import { CrossSiteGuard } from './http/cross-site';
@@ -18,7 +24,7 @@ import { health } from './http/health';
 import { problemHandler } from './http/problem-handler';
 import { requestLog } from './http/request-id';
 import { securityHeaders } from './http/security-headers';
-import { sessions } from './http/session';
+import { sessions, type SessionPool } from './http/session';
 import { panelRoutes } from './panels/panel-routes';
 import { peerRoutes } from './peers/peer-routes';
 import { scenarioRoutes } from './scenarios/scenario-routes';
@@ -28,7 +34,7 @@ export interface AppOptions {
   readonly logger: Logger;
   readonly sessionSecrets: readonly string[];
   /** The pool of the session store. */
-  readonly sessionPool: unknown;
+  readonly sessionPool: SessionPool;
   readonly isLocal: boolean;
   readonly publicOrigin: string;
   readonly trustProxyHops: number;
@@ -74,10 +80,7 @@ export function createApp(options: AppOptions): Express {
     sessions({ secrets: options.sessionSecrets, isLocal, pool: options.sessionPool, now }),
   );
   app.use('/api', authenticator.session() as RequestHandler, loadMember(services.repositories));
-  app.use((req, res, next) => {
-    if (req.path.startsWith('/api/')) crossSite.check(req, res, next);
-    else next();
-  });
+  app.use('/api', crossSite.check);
   app.use(express.json({ limit: '2mb' }));
   app.use(
     accountRoutes({
@@ -108,6 +111,10 @@ export function createApp(options: AppOptions): Express {
 function fromDatabase(error: unknown): AppError | undefined {
   if (isDatabaseFull(error))
     return new AppError('storage-full', 507, 'The server has no space left to store this.');
+  if (isUnstorableText(error))
+    return new Invalid('A text has a character that cannot be stored. Take it out and try again.');
+  if (error instanceof UniqueViolation || isMissingReference(error))
+    return new Conflict('Something changed meanwhile. Load the page again and try once more.');
   if (isDatabaseUnavailable(error))
     return new Unavailable('The database is busy or being restarted. Try again in a moment.');
   return undefined;

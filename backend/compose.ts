@@ -18,11 +18,13 @@ import { ParseProcess } from './compute/parse-process';
 import { FitJob } from './fits/fit-job';
 import { FitService } from './fits/fit-service';
 import { LineageService } from './fits/lineage-service';
+import type { SessionPool } from './http/session';
 import { JobQueue } from './jobs/job-queue';
 import { ImportService } from './panels/import-service';
 import { PanelService } from './panels/panel-service';
 import { readSamplePanel, type SamplePanel } from './panels/sample-panel';
 import { PeerService } from './peers/peer-service';
+import { queueSql } from './queue-sql';
 import { ScenarioService } from './scenarios/scenario-service';
 
 export interface ComposeOptions {
@@ -54,7 +56,7 @@ export interface Services {
 export interface Composition {
   readonly services: Services;
   /** The session store's own small pool. */
-  readonly sessionPool: unknown;
+  readonly sessionPool: SessionPool;
   /** Checks the database role and starts working the queues. */
   start(): Promise<void>;
   /** Stops taking jobs, waits for those under way, closes workers and pools, in this order. */
@@ -84,7 +86,7 @@ export function compose(options: ComposeOptions): Composition {
   const workRepositories = new Repositories(createDatabase(workPool));
   const queue = new JobQueue({
     repositories: workRepositories,
-    executeSql: (text, values) => queuePool.query(text, values),
+    executeSql: queueSql(queuePool),
     onError: (error) => {
       logger.error({ err: error }, 'job queue');
     },
@@ -120,18 +122,19 @@ export function compose(options: ComposeOptions): Composition {
     },
     start: async () => {
       await repositories.assertUnprivilegedRole();
+      await throttle.prune();
       await queue.start();
       const fitJob = new FitJob(workRepositories, fitPool, now);
-      await queue.work(
-        'fit',
-        (ticket) => fitJob.run(ticket),
-        (ticket) => fitJob.giveUp(ticket),
-      );
+      for (let worker = 0; worker < options.fitThreads; worker++)
+        await queue.work(
+          'fit',
+          (ticket) => fitJob.run(ticket),
+          (ticket) => fitJob.giveUp(ticket),
+        );
       await queue.work('open-billing-account', workOpenBillingAccount(billing));
     },
     stop: async () => {
-      await queue.stop();
-      await fitPool.close();
+      await queue.stop(() => fitPool.close());
       await Promise.all([webPool, sessionPool, queuePool, workPool].map((each) => each.end()));
     },
   };

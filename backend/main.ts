@@ -5,6 +5,7 @@ import { createServer as createHttpsServer } from 'node:https';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { pino } from 'pino';
+import { isDatabaseUnavailable } from '../db/errors';
 import { createApp } from './app';
 import { compose } from './compose';
 import { type Config, ConfigError, readConfig } from './config';
@@ -65,6 +66,11 @@ async function main(): Promise<void> {
   process.on('SIGINT', stop);
   for (const event of ['uncaughtException', 'unhandledRejection'] as const)
     process.on(event, (error: unknown) => {
+      // The queue package does not wait for all it writes: a database that is away ends no server.
+      if (isDatabaseUnavailable(error)) {
+        logger.error({ err: error }, event);
+        return;
+      }
       logger.fatal({ err: error }, event);
       process.exitCode = 1;
       process.exit(1);

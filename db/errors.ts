@@ -32,6 +32,8 @@ const unavailable = new Set([
   '08006',
   '53300',
   '57014',
+  '55P03',
+  '40P01',
 ]);
 
 /** Whether an error says that the database cannot be reached or is too busy. */
@@ -50,6 +52,18 @@ export function isDatabaseUnavailable(error: unknown): boolean {
 /** Whether the volume of the database is full. */
 export function isDatabaseFull(error: unknown): boolean {
   return error instanceof pg.DatabaseError && error.code === '53100';
+}
+
+/** Whether a row refers to one that is not, or is no longer, there. */
+export function isMissingReference(error: unknown): boolean {
+  return error instanceof pg.DatabaseError && error.code === '23503';
+}
+
+/** Whether a text holds what PostgreSQL cannot store: a NUL, or half of a surrogate pair. */
+export function isUnstorableText(error: unknown): boolean {
+  return (
+    error instanceof pg.DatabaseError && ['22021', '22P05', '22P02'].includes(error.code ?? '')
+  );
 }
 
 /** Runs a query and gives PostgreSQL's constraint errors our names. */

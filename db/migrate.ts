@@ -27,14 +27,17 @@ export interface MigrateOptions {
 export async function migrate(options: MigrateOptions): Promise<readonly string[]> {
   const pool = new pg.Pool({
     connectionString: options.ownerUrl,
-    max: 2,
+    max: 3,
     connectionTimeoutMillis: 5000,
   });
   pool.on('error', (error) => {
     process.stderr.write(`connection lost while migrating: ${error.message}\n`);
   });
   const db = new Kysely<unknown>({ dialect: new PostgresDialect({ pool }) });
+  // Held over all of it: the migrator's own lock does not cover the rights that are granted after it.
+  const lock = await pool.connect();
   try {
+    await lock.query('select pg_advisory_lock(743201)');
     const migrator = new Migrator({ db, provider: new Migrations(options.appRole) });
     const { error, results } = await migrator.migrateToLatest();
     if (error !== undefined) throw new Error('the migration failed', { cause: error });
@@ -49,6 +52,7 @@ export async function migrate(options: MigrateOptions): Promise<readonly string[
     }
     return (results ?? []).map((result) => result.migrationName);
   } finally {
+    lock.release(true);
     await db.destroy();
   }
 }

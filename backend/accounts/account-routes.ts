@@ -72,7 +72,7 @@ export function accountRoutes(options: AccountRoutesOptions): Router {
 
   register(router, apiRoutes.signOut, async (req, res) => {
     await endSession(req);
-    res.setHeader('Clear-Site-Data', '"cache", "storage"');
+    res.setHeader('Clear-Site-Data', '"cache", "cookies", "storage"');
     res.status(204).end();
   });
 

@@ -87,17 +87,16 @@ export class AccountService {
     const { repositories, throttle } = this.uses;
     const account = { kind: 'account', value: email } as const;
     const keys = [account, { kind: 'address', value: address } as const];
-    await throttle.assertMayTry(keys);
+    await throttle.countTry(keys);
     const person = await repositories.people.findByEmail(email);
     if (!(await this.uses.passwords.matches(person?.passwordHash, password)) || !person) {
-      await throttle.failed(keys);
       throw new AppError(
         'wrong-credentials',
         401,
         'No account has this e-mail address and password together.',
       );
     }
-    await throttle.succeeded(account);
+    await throttle.succeeded(keys);
     const membership = (await repositories.membershipsOf(person.id))[0];
     if (membership === undefined)
       throw new AppError(
@@ -119,10 +118,9 @@ export class AccountService {
   async confirmPassword(personId: string, password: string): Promise<boolean> {
     const person = await this.uses.repositories.people.find(personId);
     const account = { kind: 'account', value: person?.email ?? personId } as const;
-    await this.uses.throttle.assertMayTry([account]);
+    await this.uses.throttle.countTry([account]);
     const isRight = await this.uses.passwords.matches(person?.passwordHash, password);
-    if (isRight) await this.uses.throttle.succeeded(account);
-    else await this.uses.throttle.failed([account]);
+    if (isRight) await this.uses.throttle.succeeded([account]);
     return isRight;
   }
 

@@ -54,6 +54,18 @@ describe('accounts', () => {
     expect((await guesser.post('/api/session', right)).status).toBe(200);
   });
 
+  it('let no more guesses through at once than one after the other', async () => {
+    const email = await emailOf(await signUp(server));
+    const guesses = await Promise.all(
+      Array.from({ length: 20 }, async () => {
+        const guesser = new TestClient(server.url);
+        return guesser.post('/api/session', { email, password: 'not this one either' });
+      }),
+    );
+    expect(guesses.filter(({ status }) => status === 401).length).toBe(5);
+    expect(guesses.filter(({ status }) => status === 429).length).toBe(15);
+  });
+
   it('are one for each address', async () => {
     const email = await emailOf(await signUp(server));
     const reply = await new TestClient(server.url).post('/api/accounts', {

@@ -1,20 +1,24 @@
 import type { Repositories } from '../../db/repositories/repositories';
 import { TooManyRequests } from '../errors/app-error';
 
-/** A whole office may stand behind one address: it is slowed down later than an account. */
-const freeFailures = { account: 5, address: 50 } as const;
-const longestDelayMs = 60_000;
-const forgetAfterMs = 15 * 60_000;
+const day = 86_400_000;
+const common = { longestWaitSeconds: 60, forgetAfterSeconds: 15 * 60 } as const;
 
-/** What failures are counted by: an account, or the address that asks. */
+/** A whole office may stand behind one address: it is slowed down later than an account. */
+const rules = {
+  account: { ...common, freeTries: 5 },
+  address: { ...common, freeTries: 50 },
+} as const;
+
+/** What tries are counted by: an account, or the address that asks. */
 export interface ThrottleKey {
-  readonly kind: keyof typeof freeFailures;
+  readonly kind: keyof typeof rules;
   readonly value: string;
 }
 
 /**
- * Slows guessing down without locking anybody out: after the free failures each further one doubles the wait,
- * up to a minute, for the account and for the address apart.
+ * Slows guessing down without locking anybody out: after the free tries each further one that fails doubles the wait,
+ * up to a minute, for the account and for the address apart. A try counts before it is judged.
  */
 export class SignInThrottle {
   constructor(
@@ -23,32 +27,32 @@ export class SignInThrottle {
   ) {}
 
   /** @throws {TooManyRequests} while the wait lasts. */
-  async assertMayTry(keys: readonly ThrottleKey[]): Promise<void> {
+  async countTry(keys: readonly ThrottleKey[]): Promise<void> {
     for (const key of keys) {
-      const count = await this.repositories.signInThrottle.failures(stored(key));
-      if (count === undefined || count.failures < freeFailures[key.kind]) continue;
-      const delayMs = Math.min(
-        longestDelayMs,
-        1000 * 2 ** (count.failures - freeFailures[key.kind]),
+      const seconds = await this.repositories.signInThrottle.countTry(
+        stored(key),
+        this.now(),
+        rules[key.kind],
       );
-      const leftMs = count.lastFailureAt.getTime() + delayMs - this.now().getTime();
-      if (leftMs > 0 && leftMs <= longestDelayMs) {
-        const seconds = Math.ceil(leftMs / 1000);
+      if (seconds > 0)
         throw new TooManyRequests(
-          `Too many failed attempts. Try again in ${seconds} seconds.`,
+          `Too many failed attempts. Try again in ${seconds} ${seconds === 1 ? 'second' : 'seconds'}.`,
           seconds,
         );
-      }
     }
   }
 
-  async failed(keys: readonly ThrottleKey[]): Promise<void> {
-    for (const key of keys)
-      await this.repositories.signInThrottle.addFailure(stored(key), this.now(), forgetAfterMs);
+  /** The account’s count starts anew; the address only gets this try back. */
+  async succeeded(keys: readonly ThrottleKey[]): Promise<void> {
+    for (const key of keys) {
+      if (key.kind === 'account') await this.repositories.signInThrottle.clear(stored(key));
+      else await this.repositories.signInThrottle.forgive(stored(key));
+    }
   }
 
-  async succeeded(key: ThrottleKey): Promise<void> {
-    await this.repositories.signInThrottle.clear(stored(key));
+  /** Drops counts of more than a day ago. */
+  async prune(): Promise<void> {
+    await this.repositories.signInThrottle.prune(new Date(this.now().getTime() - day));
   }
 }
 

@@ -93,7 +93,7 @@ export class ParseProcess {
       child.once('exit', (code, signal) => {
         clearTimeout(timer);
         // Out of memory, the process aborts; any other end without an answer is a fault of ours.
-        if (signal !== null || code === 134)
+        if (signal === 'SIGABRT' || code === 134)
           reject(
             new ParseRefused(
               'parse_memory',

@@ -53,6 +53,16 @@ describe('the guard against requests of other sites', () => {
       }
     });
 
+  it('guards the same routes under any spelling of their path', async () => {
+    for (const path of ['/API/accounts', '/Api/fits', '/api/FITS']) {
+      const reply = await client.agent
+        .post(path)
+        .set('Origin', 'https://elsewhere.example')
+        .send({});
+      expect(reply.status).withContext(path).toBe(403);
+    }
+  });
+
   it('gives no CORS header to anybody', async () => {
     const reply = await request(server.url)
       .get('/api/session')

@@ -23,7 +23,7 @@ export class CrossSiteGuard {
   constructor(private readonly options: CrossSiteOptions) {}
 
   readonly check: RequestHandler = (req, _res, next) => {
-    if (req.get('sec-fetch-dest') === 'document' && !req.path.startsWith('/api/files/'))
+    if (req.get('sec-fetch-dest') === 'document' && !req.originalUrl.startsWith('/api/files/'))
       throw refused('The API is not a page.');
     if (safeMethods.has(req.method)) {
       next();

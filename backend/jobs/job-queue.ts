@@ -13,10 +13,14 @@ export interface JobQueueOptions {
   readonly pollSeconds?: number;
 }
 
+/** The same job for the same subject is queued once in this time, however often it is asked for. */
+const onceInSeconds = 30;
+const stopWaitMs = 3000;
+
 /** Jobs in PostgreSQL: what is queued survives a crash, and any server process may work it. */
 export class JobQueue {
   readonly #boss: PgBoss;
-  readonly #workers = new Map<QueueName, string>();
+  readonly #workers: { readonly kind: QueueName; readonly id: string }[] = [];
   /** Statements of the queue package and handlers of ours that have not ended. */
   #busy = 0;
 
@@ -34,10 +38,19 @@ export class JobQueue {
     await this.#boss.start();
   }
 
-  /** Stops taking jobs and waits for those under way. */
-  async stop(timeoutMs = 20_000): Promise<void> {
-    await this.#boss.stop({ graceful: true, wait: true, timeout: timeoutMs, close: false });
-    // A job fetched in the moment of stopping still runs: the package does not wait for it.
+  /**
+   * Stops taking jobs, waits a while for those under way, then has the caller end them: a job that is cut off is tried
+   * again, here or on another server.
+   */
+  async stop(endJobs: () => Promise<void> = () => Promise.resolve()): Promise<void> {
+    await this.#boss.stop({ graceful: true, wait: true, timeout: stopWaitMs, close: false });
+    await this.#quiet(stopWaitMs);
+    await endJobs();
+    await this.#quiet(stopWaitMs);
+  }
+
+  /** A job fetched in the moment of stopping still runs: the package does not wait for it. */
+  async #quiet(timeoutMs: number): Promise<void> {
     const until = Date.now() + timeoutMs;
     for (let quietLooks = 0; quietLooks < 3 && Date.now() < until;) {
       await new Promise((resolve) => setTimeout(resolve, 20));
@@ -58,17 +71,26 @@ export class JobQueue {
   async enqueue(tx: WorkspaceRepositories, kind: QueueName, subjectId: string): Promise<void> {
     const id = randomUUID();
     await tx.jobTickets.insert({ id, workspaceId: tx.workspaceId, kind, subjectId });
-    await this.#boss.send(
+    const queued = await this.#boss.send(
       kind,
       { ticketId: id },
-      { db: tx, retryLimit: 4, retryDelay: 1, retryBackoff: true, expireInSeconds: 300 },
+      {
+        db: tx,
+        retryLimit: 4,
+        retryDelay: 1,
+        retryBackoff: true,
+        expireInSeconds: 300,
+        singletonKey: subjectId,
+        singletonSeconds: onceInSeconds,
+      },
     );
+    if (queued === null) await tx.jobTickets.remove(id);
   }
 
   /** Wakes this process's worker at once instead of at its next look. */
   wake(kind: QueueName): void {
-    const worker = this.#workers.get(kind);
-    if (worker !== undefined) this.#boss.notifyWorker(worker);
+    for (const worker of this.#workers)
+      if (worker.kind === kind) this.#boss.notifyWorker(worker.id);
   }
 
   /**
@@ -96,7 +118,7 @@ export class JobQueue {
         }
       },
     );
-    this.#workers.set(kind, worker);
+    this.#workers.push({ kind, id: worker });
   }
 
   async #try(

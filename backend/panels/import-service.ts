@@ -111,7 +111,8 @@ export class ImportService {
   /** Takes back an import that is not committed, its file with it. */
   async discard(workspaceId: string, importId: string): Promise<void> {
     await this.repositories.inWorkspace(workspaceId, async (tx) => {
-      const found = await findImport(tx, importId);
+      const found = await tx.imports.findForUpdate(importId);
+      if (found === undefined) throw new NotFound('There is no such import.');
       if (found.state === 'committed')
         throw new Conflict('This import is a panel version already; it stays.');
       await tx.imports.remove(importId);
@@ -242,7 +243,7 @@ async function refuseUnreadable<T>(work: () => Promise<T>): Promise<T> {
     return await work();
   } catch (error) {
     if (!(error instanceof ParseRefused)) throw error;
-    if (error.code === 'too_large') throw new AppError('too-large', 413, error.message);
+    if (error.code === 'table-too-large') throw new AppError('too-large', 413, error.message);
     throw new Unprocessable(error.message, 'unreadable-file', { code: error.code });
   }
 }

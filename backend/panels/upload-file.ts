@@ -16,6 +16,8 @@ export const uploadFile: RequestHandler = (req, res, next) => {
   receive(req, res, (error: unknown) => {
     if (error instanceof MulterError)
       next(error.code === 'LIMIT_FILE_SIZE' ? tooLarge() : new Invalid(error.message));
+    else if (error instanceof Error && !('code' in error))
+      next(new Invalid('The upload was cut off or is no upload. Choose the file again.'));
     else next(error);
   });
 };

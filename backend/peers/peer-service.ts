@@ -40,18 +40,12 @@ export class PeerService {
     group: NewPeerGroup,
   ): Promise<PeerGroup> {
     return this.repositories.inWorkspace(actor.workspaceId, async (tx) => {
-      await tx.members.lockWorkspace();
       if ((await tx.panels.findVersion(group.panelVersionId)) === undefined)
         throw new NotFound('There is no such panel version.');
-      const rows = await tx.panels.rows(group.panelVersionId);
-      assertChoice(group, new Set(rows.company));
+      assertChoice(group, new Set(await tx.panels.companyNames(group.panelVersionId)));
+      await tx.members.lockWorkspace();
       const latest = await tx.peers.latest();
-      if (latest !== undefined && latest.id !== group.parentId)
-        throw new Conflict(
-          `${latest.createdByName} saved version ${latest.number} of the peer group meanwhile. Open it and make the change there.`,
-          'stale-version',
-          { latestId: latest.id },
-        );
+      if ((latest?.id ?? null) !== group.parentId) throw overtaken(latest);
       const id = randomUUID();
       const number = (latest?.number ?? 0) + 1;
       const peerCount = group.peers.filter((peer) => peer.isIncluded).length;
@@ -61,6 +55,16 @@ export class PeerService {
       return findPeerGroup(tx, id);
     });
   }
+}
+
+function overtaken(latest: PeerGroupRow | undefined): Conflict {
+  return latest === undefined
+    ? new Conflict('The version that this choice started from does not exist.', 'stale-version')
+    : new Conflict(
+        `${latest.createdByName} saved version ${latest.number} of the peer group meanwhile. Open it and make the change there.`,
+        'stale-version',
+        { latestId: latest.id },
+      );
 }
 
 /** @throws {NotFound} */

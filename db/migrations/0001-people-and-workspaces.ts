@@ -52,9 +52,15 @@ export async function peopleAndWorkspaces(db: Kysely<unknown>, appRole: string):
   await sql`alter table membership enable row level security`.execute(db);
   await sql`alter table membership force row level security`.execute(db);
   // A person finds the workspaces they belong to before any workspace is set: rows of their own may be read, not written.
-  await sql`create policy workspace_wall on membership as restrictive for all
-    using (workspace_id = current_workspace() or person_id = current_person())
+  await sql`create policy workspace_wall on membership as restrictive for select
+    using (workspace_id = current_workspace() or person_id = current_person())`.execute(db);
+  await sql`create policy workspace_wall_insert on membership as restrictive for insert
     with check (workspace_id = current_workspace())`.execute(db);
+  await sql`create policy workspace_wall_update on membership as restrictive for update
+    using (workspace_id = current_workspace())
+    with check (workspace_id = current_workspace())`.execute(db);
+  await sql`create policy workspace_wall_delete on membership as restrictive for delete
+    using (workspace_id = current_workspace())`.execute(db);
   await sql`create policy application on membership as permissive for all to ${sql.id(appRole)}
     using (true) with check (true)`.execute(db);
   await grant(db, 'membership', appRole, ['select', 'insert', 'update', 'delete']);

@@ -26,14 +26,4 @@ export class ActivityRepository {
       })
       .execute();
   }
-
-  list(limit: number): Promise<(ActivityEntry & { readonly at: Date })[]> {
-    return this.db
-      .selectFrom('activity')
-      .select(['id', 'at', 'personId', 'action', 'subjectId', 'detail'])
-      .where('workspaceId', '=', this.workspaceId)
-      .orderBy('at', 'desc')
-      .limit(limit)
-      .execute();
-  }
 }

@@ -16,6 +16,10 @@ export class JobTicketsRepository {
     await this.db.insertInto('jobTicket').values(ticket).execute();
   }
 
+  async remove(id: string): Promise<void> {
+    await this.db.deleteFrom('jobTicket').where('id', '=', id).execute();
+  }
+
   find(id: string): Promise<JobTicketRow | undefined> {
     return this.db
       .selectFrom('jobTicket')

@@ -45,7 +45,8 @@ export class MembersRepository {
       .selectFrom('workspace')
       .select('workspaceId')
       .where('workspaceId', '=', this.workspaceId)
-      .forUpdate()
+      // Not a full lock: rows that refer to the workspace are written meanwhile.
+      .forNoKeyUpdate()
       .execute();
   }
 

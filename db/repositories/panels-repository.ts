@@ -111,6 +111,19 @@ export class PanelsRepository {
     return this.versions().orderBy('panelVersion.createdAt', 'desc').execute();
   }
 
+  /** The companies of a version, in order of name. */
+  async companyNames(panelVersionId: string): Promise<string[]> {
+    const found = await this.db
+      .selectFrom('panelRow')
+      .select('company')
+      .distinct()
+      .where('workspaceId', '=', this.workspaceId)
+      .where('panelVersionId', '=', panelVersionId)
+      .orderBy('company')
+      .execute();
+    return found.map(({ company }) => company);
+  }
+
   /** Rows in order of company and year; of the named companies only, where names are given. */
   async rows(panelVersionId: string, companies?: readonly string[]): Promise<PanelRows> {
     let query = this.db

@@ -77,7 +77,7 @@ export class Repositories {
     });
   }
 
-  /** The workspaces that a person belongs to, oldest membership first. */
+  /** The workspaces that a person belongs to, newest membership first. */
   async membershipsOf(personId: string): Promise<readonly Membership[]> {
     const found = await this.db.transaction().execute(async (trx) => {
       await sql`select set_config('app.person', ${personId}, true)`.execute(trx);
@@ -85,7 +85,7 @@ export class Repositories {
         .selectFrom('membership')
         .select(['workspaceId', 'roles'])
         .where('personId', '=', personId)
-        .orderBy('joinedAt')
+        .orderBy('joinedAt', 'desc')
         .execute();
     });
     return Promise.all(

@@ -76,7 +76,7 @@ export async function startBillingBench(): Promise<BillingBench> {
       );
     },
     close: async () => {
-      await queue.stop(2_000);
+      await queue.stop();
       await bench.stub.stop();
       await pool.end();
       await database.drop();
