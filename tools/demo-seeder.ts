@@ -26,6 +26,7 @@ export class DemoSeeder {
   ) {}
 
   async seed(): Promise<void> {
+    if (await this.#isFilled()) return;
     const founder = await this.#founder();
     for (const role of ['analyst', 'cfo', 'reader'] as const) await this.#member(founder, role);
     const analyst = await this.#actor('analyst');
@@ -37,15 +38,26 @@ export class DemoSeeder {
     await this.#waitingEdition(analyst, await this.#fit(analyst, secondGroup));
   }
 
+  /** The last step makes edition 2: with it there the demo is its users', and nothing of theirs is undone. */
+  async #isFilled(): Promise<boolean> {
+    const { people } = this.services.repositories;
+    if ((await people.findByEmail(person('analyst').email)) === undefined) return false;
+    const analyst = await this.#actor('analyst');
+    const editions = await this.services.editions.list(analyst);
+    return editions.some((edition) => edition.number >= 2);
+  }
+
   async #founder(): Promise<Actor> {
     const { accounts, members } = this.services;
     const { name, email } = person('billing_admin');
     if ((await this.services.repositories.people.findByEmail(email)) === undefined) {
       const workspaceName = `${demoOwnCompany} Flow Control`;
-      const made = await accounts.signUp({ name, email, password: this.password, workspaceName });
-      await members.changeRoles(made.workspaceId, made.personId, made.personId, ['billing_admin']);
+      await accounts.signUp({ name, email, password: this.password, workspaceName });
     }
-    return this.#actor('billing_admin');
+    const founder = await this.#actor('billing_admin');
+    const { workspaceId, personId } = founder;
+    await members.changeRoles(workspaceId, personId, personId, ['billing_admin']);
+    return founder;
   }
 
   async #member(founder: Actor, role: Role): Promise<void> {
@@ -63,6 +75,7 @@ export class DemoSeeder {
     const found = await this.services.repositories.people.findByEmail(person(role).email);
     if (found === undefined) throw new Error(`the demo has nobody with role ${role}`);
     const [membership] = await this.services.repositories.membershipsOf(found.id);
+    if (membership === undefined) throw new Error(`the demo’s ${role} belongs to no workspace`);
     return { personId: found.id, workspaceId: membership.workspaceId, roles: [role] };
   }
 

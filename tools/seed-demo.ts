@@ -5,7 +5,7 @@ import { compose } from '../backend/compose';
 import { DemoSeeder } from './demo-seeder';
 import { demoPeople } from './demo-panel';
 
-/** Everybody's password in the demo workspace; it exists on a developer's machine alone. */
+/** Everybody's password in the demo workspace: on a developer's machine, and in the journeys that ask for it. */
 const password = 'a demo passphrase';
 
 /**
