@@ -82,7 +82,7 @@ const titles: Readonly<Record<StatsError['code'], string>> = {
   specification: 'The specification is not offered',
   'non-finite': 'A number is too large or too small',
   'duplicate-rows': 'A company has a year twice',
-  'unknown-company': 'A company is not in the file',
+  'unknown-company': 'A company has no rows with a year',
   'too-many-years': 'Too many different years',
   'too-few-companies': 'Too few companies with two rows',
   'outcome-constant': 'The outcome never varies within a company',

@@ -233,6 +233,18 @@ describe('the fit command', () => {
     );
   });
 
+  it('says of a company without a year that it has no rows with one, not that it is missing', async () => {
+    const found = await problem(...panel(...rows, 'D,,1,2,3'), '--own', 'D');
+    expect(found).toEqual(
+      jasmine.objectContaining({
+        type: 'unknown-company',
+        title: 'A company has no rows with a year',
+        detail: 'expected rows with a year in the panel for every company; found none for D',
+        companies: ['D'],
+      }),
+    );
+  });
+
   it('says what this version of the engine does not offer', async () => {
     for (const extra of [
       ['--evidence'],

@@ -88,7 +88,11 @@ describe('the sample of a fit', () => {
   });
 
   it('refuses an own company or a member without rows, by name', () => {
-    expect(refusal(plainRows(), 'Z').data.companies).toEqual(['Z']);
+    const { data, message } = refusal(plainRows(), 'Z');
+    expect(data.companies).toEqual(['Z']);
+    expect(message).toBe(
+      'expected rows with a year in the panel for every company; found none for Z',
+    );
     expect(refusal(plainRows(), null, ['A', 'B', 'Y']).code).toBe('unknown-company');
   });
 

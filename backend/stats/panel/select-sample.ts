@@ -60,7 +60,7 @@ function memberNames(
   if (unknown.length > 0) {
     throw new StatsError(
       'unknown-company',
-      `expected companies that have rows in the panel; found none for ${unknown.join(', ')}`,
+      `expected rows with a year in the panel for every company; found none for ${unknown.join(', ')}`,
       { companies: unknown },
     );
   }
