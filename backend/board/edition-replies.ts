@@ -24,11 +24,12 @@ export function toEditionSummary(row: EditionRow): EditionSummary {
   };
 }
 
-export function toEditionReply({ row, content, whyNot }: Edition): EditionReply {
+export function toEditionReply({ row, content, whyNot, mayReturn }: Edition): EditionReply {
   return {
     edition: toEditionSummary(row),
     content: content as EditionContent,
     maySign: whyNot === null,
+    mayReturn,
     whyNot,
   };
 }

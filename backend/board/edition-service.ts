@@ -20,8 +20,9 @@ export interface Edition {
   readonly row: EditionRow;
   /** What was frozen, as it was hashed. */
   readonly content: unknown;
-  /** Why the reader may neither sign nor return it; null when they may. */
+  /** Why the reader may not sign it; null when they may. */
   readonly whyNot: string | null;
+  readonly mayReturn: boolean;
 }
 
 export interface EditionRequest {
@@ -61,7 +62,8 @@ export class EditionService {
       return {
         row,
         content: JSON.parse(text) as unknown,
-        whyNot: whyNotDecide(reader, row, signed),
+        whyNot: whyNotSign(reader, row, signed),
+        mayReturn: whyNotSign(reader, row, undefined) === null,
       };
     });
   }
@@ -173,7 +175,7 @@ async function findEdition(
   return found;
 }
 
-function whyNotDecide(
+function whyNotSign(
   reader: Reader,
   row: EditionRow,
   signed: EditionRow | undefined,

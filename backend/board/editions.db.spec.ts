@@ -76,6 +76,17 @@ describe('editions', () => {
     expect((await reader.get(path)).status).toBe(404);
   });
 
+  it('that a later signed one overtook can be returned, not signed', async () => {
+    const early = await publish(analyst);
+    const late = await publish(analyst);
+    expect((await sign(cfo, late.edition.id)).status).toBe(200);
+    const path = `/api/editions/${early.edition.id}`;
+    const seen = (await cfo.get(path)).body as EditionReply;
+    expect([seen.maySign, seen.mayReturn]).toEqual([false, true]);
+    expect((await sign(cfo, early.edition.id)).status).toBe(409);
+    expect((await sendBack(cfo, early.edition.id)).status).toBe(200);
+  });
+
   it('cannot be signed or returned by whoever published them, whatever their roles', async () => {
     const { edition, maySign, whyNot } = await publish(cfo);
     expect(maySign).toBeFalse();

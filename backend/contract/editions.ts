@@ -88,8 +88,10 @@ export type EditionsReply = z.infer<typeof EditionsReply>;
 export const EditionReply = z.object({
   edition: EditionSummary,
   content: EditionContent,
-  /** Whether the person who asks may sign or return it, and if not, why. */
+  /** Whether the person who asks may sign it, and if not, why. */
   maySign: z.boolean(),
+  /** One that a later signed edition overtook can still be returned. */
+  mayReturn: z.boolean(),
   whyNot: z.string().nullable(),
 });
 export type EditionReply = z.infer<typeof EditionReply>;

@@ -13,6 +13,7 @@ const waiting: EditionReply = {
   edition: editionSummary,
   content: editionContent,
   maySign: true,
+  mayReturn: true,
   whyNot: null,
 };
 const signed: EditionReply = {
@@ -23,6 +24,7 @@ const signed: EditionReply = {
     decision: { kind: 'signed', by: 'T. Emmerquist', at: '2026-11-15T09:00:00.000Z', comment: '' },
   },
   maySign: false,
+  mayReturn: false,
   whyNot: 'T. Emmerquist has signed this edition already.',
 };
 
@@ -130,7 +132,7 @@ describe('the page of an edition', () => {
 
   it('tells the publisher why they cannot sign', async () => {
     const whyNot = 'You published this edition: another person has to sign it.';
-    await open('cfo', { ...waiting, maySign: false, whyNot });
+    await open('cfo', { ...waiting, maySign: false, mayReturn: false, whyNot });
     expect(text()).toContain(whyNot);
     expect(button('Sign edition 7')).toBeUndefined();
   });

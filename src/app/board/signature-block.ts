@@ -38,14 +38,16 @@ import { shortSha } from './edition-words';
         <p>{{ reply().whyNot }}</p>
       }
     </div>
-    @if (reply().maySign) {
+    @if (reply().mayReturn) {
       <div class="actions kv-no-print">
         <button matButton="outlined" type="button" (click)="returnWanted.emit()">
           Return with a comment
         </button>
-        <button matButton="filled" type="button" (click)="signWanted.emit()">
-          Sign edition {{ edition.number }}
-        </button>
+        @if (reply().maySign) {
+          <button matButton="filled" type="button" (click)="signWanted.emit()">
+            Sign edition {{ edition.number }}
+          </button>
+        }
       </div>
     }
   `,
