@@ -56,6 +56,31 @@ describe('checkTable', () => {
     );
   });
 
+  it('lists text in a number also of rows that name no company or no year, but not their gaps', () => {
+    const table = tableOf(
+      header,
+      ['A', '2020', '1', '2'],
+      ['', '2020', 'one', ''],
+      ['B', '', '1', 'two'],
+      ['B', '20x0', 'three', 'NA'],
+      ['B', '2021', '3', '4'],
+    );
+    const check = checkTable(table, mapping);
+    expect(
+      check.findings.map(({ row, column, found, code }) => [row, column, found, code]),
+    ).toEqual([
+      [3, 'y', 'one', 'not-a-number'],
+      [4, 'x', 'two', 'not-a-number'],
+      [5, 'year', '20x0', 'year'],
+      [5, 'y', 'three', 'not-a-number'],
+      [3, 'company', '', 'no-company'],
+      [4, 'year', '', 'missing'],
+    ]);
+    expect(check.blockingCount).toBe(4);
+    expect(check.rows).toBe(2);
+    expect(check.completeRows).toBe(2);
+  });
+
   it('lists no more than asked and still counts all', () => {
     const rows = Array.from({ length: 20 }, (_, index) => ['A', String(2000 + index), 'x', '1']);
     const check = checkTable(tableOf(header, ...rows), mapping, 5);
@@ -107,6 +132,23 @@ describe('toPanelColumns', () => {
     expect([...data.outcome.values]).toEqual([1.5, 2]);
     expect([...data.regressors[0].values]).toEqual([NaN, 3]);
     expect(data.companies).toEqual(['A', 'B']);
+  });
+
+  it('reads a column’s decimals off all of its rows, also those that it leaves out', () => {
+    const table = tableOf(
+      header,
+      ['A', '2020', '1.250', '1'],
+      ['Sum', '', '1,5', '1'],
+      ['B', '2020', '2.250', '1'],
+    );
+    const { data, problems } = toPanelColumns(table, {
+      company: 'company',
+      year: 'year',
+      outcome: 'y',
+      regressors: ['x'],
+    });
+    expect([...data.outcome.values]).toEqual([1250, 2250]);
+    expect(problems).toEqual([]);
   });
 });
 

@@ -103,33 +103,40 @@ function readKey(
   return isMissing(company) || year === undefined || Number.isNaN(year) ? undefined : year;
 }
 
+/**
+ * The numbers of the placed rows. A text where a number belongs is found in every row, also in one that names no
+ * company or year: it may be the sign of a shifted line. A gap is found in placed rows only.
+ *
+ * @param placed  indices of the rows that stand in the panel, ascending.
+ */
 function readNumbers(
   table: Table,
-  rows: readonly number[],
+  placed: readonly number[],
   names: readonly string[],
   indices: readonly number[],
   findings: TableFinding[],
 ): NamedColumn[] {
-  const columns = indices.map((index) => rows.map((row) => table.rows[row][index]));
+  const isPlaced = new Set(placed);
+  const columns = indices.map((index) => table.rows.map((cells) => cells[index]));
   const signs = decimalSigns(columns);
   return columns.map((cells, k): NamedColumn => {
     const column = names[k];
     const { decimalSign } = signs[k];
-    const values = Float64Array.from(cells, (found, index) => {
+    const values = cells.map((found, row) => {
       const value = parseNumber(found, decimalSign);
-      const place = { row: table.lines[rows[index]], column, found };
+      const place = { row: table.lines[row], column, found };
       if (value === undefined) {
         const wording = decimalSign === ',' ? 'decimal comma' : 'decimal point';
         const detail = `Expected a number with a ${wording}, as the rest of the column has.`;
         findings.push({ ...place, code: 'not-a-number', detail, isBlocking: true });
         return NaN;
       }
-      if (Number.isNaN(value)) {
+      if (Number.isNaN(value) && isPlaced.has(row)) {
         const detail = 'No value: the row counts in no fit that uses this column.';
         findings.push({ ...place, code: 'missing', detail, isBlocking: false });
       }
       return value;
     });
-    return { name: column, values };
+    return { name: column, values: Float64Array.from(placed, (row) => values[row]) };
   });
 }
