@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import type pg from 'pg';
+import PgBoss from 'pg-boss';
 import { createDatabase, createPool } from '../../db/connect';
 import { Repositories } from '../../db/repositories/repositories';
 import type { TestDatabase } from '../../db/testing/test-database';
@@ -51,6 +52,18 @@ describe('the job queue', () => {
       'open-billing-account',
     ]);
     expect(jobs.rowCount).toBe(0);
+  });
+
+  it('is kept in order under the application role: what ended is archived, what is old is dropped', async () => {
+    const boss = new PgBoss({
+      db: { executeSql: (text: string, values: unknown[]) => pool.query(text, values) },
+      migrate: false,
+      supervise: false,
+      schedule: false,
+    });
+    await boss.start();
+    await expectAsync(boss.maintain()).toBeResolved();
+    await boss.stop({ graceful: false });
   });
 
   it('tries a failing job again, says each failure, and gives up after the last try', async () => {
