@@ -89,7 +89,7 @@ export interface PairComparison extends IntervalEstimate {
 
 export interface GapYear {
   readonly year: number;
-  /** How far the own company lay above its peers once the slopes are taken out; null in a year without any peer. */
+  /** How far the own company lay above its peers once the slopes are taken out; null in a year without any peer, which `peers` says. */
   readonly gap: number | null;
   /** Peers with a row in that year. */
   readonly peers: number;
@@ -136,7 +136,10 @@ export interface Sample {
   readonly singleRow: readonly string[];
 }
 
-/** What one fit says. Numbers at full precision; what is not defined is null with a reason beside it. */
+/**
+ * What one fit says. Numbers at full precision; what is not defined is null with a reason beside it. Where no own company
+ * was named, all that is said of one is null without further words.
+ */
 export interface FitResult {
   readonly engine: string;
   /** SHA-256, hex, of the canonical JSON of rows used, members, own company, specification and engine version. */
@@ -152,7 +155,9 @@ export interface FitResult {
   readonly standing: Standing | null;
   /** Why there is no standing, where an own company was named. */
   readonly standingReason?: string;
+  /** Null where there is no standing, for the same reason. */
   readonly pairs: readonly PairComparison[] | null;
+  /** Null where there is no standing, for the same reason. */
   readonly gapPath: readonly GapYear[] | null;
   readonly drift: Drift | null;
   readonly driftReason?: string;
@@ -178,7 +183,7 @@ export interface FitResult {
     readonly standing: number | null;
     readonly reason?: string;
   }[];
-  /** The own company's years, oldest first; null without an own company. */
+  /** The own company's years, oldest first; null where there is no standing, for the same reason. */
   readonly ownYears: readonly OwnYear[] | null;
   readonly prediction: PredictionBasis | null;
   readonly predictionReason?: string;

@@ -5,13 +5,15 @@ import type { WithinColumn } from '../panel/within-transform';
 import type { WithinFit } from '../regression/within-fit';
 import type { CompanyProduct } from './company-products';
 
+const noOwnReason =
+  'No company of two complete rows or more is the own one, so there is no standing.';
 const notDeterminedReason = 'Without this company the slopes are no longer determined.';
 
 /**
  * Slopes and the own company's standing without each company in turn, from company cross-products:
  * b₍ᵢ₎ = b − R⁻¹(I − S_i)⁻¹g_i. No refit; cost N·(K³ + K).
  *
- * @param own  index of the own company; −1 without one.
+ * @param own  index of the own company; −1 where none is named or it has fewer than two complete rows.
  */
 export function withoutEachCompany(
   fit: WithinFit,
@@ -24,7 +26,7 @@ export function withoutEachCompany(
       return { company, slopes: null, standing: null, reason: notDeterminedReason };
     }
     const slopes = slopesWithout(fit, products[left]);
-    if (own === -1) return { company, slopes, standing: null };
+    if (own === -1) return { company, slopes, standing: null, reason: noOwnReason };
     if (left === own) {
       return {
         company,
