@@ -174,10 +174,7 @@ describe('two workspaces', () => {
         const none = await app.query(`select workspace_id from ${relname}`);
         expect(none.rowCount).withContext(`${relname} without a workspace`).toBe(0);
         await app.query('begin');
-        const session = (await first.client.get('/api/session')).body as {
-          session: { workspace: { id: string } };
-        };
-        const id = session.session.workspace.id;
+        const id = await workspaceOf(first.client);
         await app.query(`select set_config('app.workspace', $1, true)`, [id]);
         const own = await app.query<{ workspace_id: string }>(
           `select workspace_id from ${relname}`,
@@ -202,11 +199,38 @@ describe('two workspaces', () => {
         app.query(`insert into workspace (workspace_id, name) values (gen_random_uuid(), 'x')`),
       ).toBeRejectedWithError(/row-level security/);
       await app.query('rollback');
+
+      const ids = await Promise.all([first, second].map(({ client }) => workspaceOf(client)));
+      await app.query('begin');
+      await app.query(`select set_config('app.workspace', $1, true)`, [ids[0]]);
+      await expectAsync(
+        app.query('update scenario set workspace_id = $1', [ids[1]]),
+      ).toBeRejectedWithError(/row-level security/);
+      await app.query('rollback');
+
+      // A reference across workspaces: row level security does not see foreign keys, so the keys name the workspace.
+      await app.query('begin');
+      await app.query(`select set_config('app.workspace', $1, true)`, [ids[0]]);
+      await expectAsync(
+        app.query(
+          `insert into scenario (workspace_id, id, fit_id, version, created_by)
+            values ($1, gen_random_uuid(), $2, 1, $3)`,
+          [ids[0], second.ids['fitId'], first.ids['personId']],
+        ),
+      ).toBeRejectedWithError(/foreign key/);
+      await app.query('rollback');
     } finally {
       await app.end();
     }
   });
 });
+
+async function workspaceOf(client: TestClient): Promise<string> {
+  const { session } = (await client.get('/api/session')).body as {
+    session: { workspace: { id: string } };
+  };
+  return session.workspace.id;
+}
 
 describe('two workspaces with row level security taken down', () => {
   it('still reach nothing of each other: the filter of the repositories is a wall of its own', async () => {

@@ -1,5 +1,5 @@
 import pg from 'pg';
-import request from 'supertest';
+import request, { type Response, type Test } from 'supertest';
 import type { TestDatabase } from '../../db/testing/test-database';
 import type { TestClient } from '../testing/test-client';
 import { join, signUp, testPassword } from '../testing/test-client';
@@ -104,20 +104,31 @@ describe('sessions', () => {
   });
 
   it('get a new id at signing in, and a cookie that scripts and other sites cannot use', async () => {
-    const production = await startTestServer(database, { isLocal: false });
+    const production = await startTestServer(database, { isLocal: false, trustProxyHops: 1 });
     try {
-      const before = await request(production.url)
-        .get('/api/session')
-        .set('X-Forwarded-Proto', 'https');
-      expect((before.headers['set-cookie'] as unknown as string[]).join()).not.toContain(
-        '__Host-sid',
+      const before = await overTls(production, request(production.url).get('/api/session'));
+      expect(cookiesOf(before)).toEqual([
+        jasmine.stringMatching(/^__Host-XSRF=[^;]+; Path=\/; Secure; SameSite=Lax$/),
+      ]);
+      const account = { email: 'over.tls@people.example', password: testPassword };
+      const signedUp = await overTls(
+        production,
+        request(production.url).post('/api/accounts'),
+        before,
+      ).send({ ...account, name: 'Over TLS', workspaceName: 'Over TLS' });
+      expect(signedUp.status).toBe(201);
+      expect(sidOf(signedUp)).toMatch(
+        /^__Host-sid=s%3A[^;]+; Path=\/; Expires=[^;]+; HttpOnly; Secure; SameSite=Lax$/,
       );
-      expect((before.headers['set-cookie'] as unknown as string[]).join()).toMatch(
-        /^__Host-XSRF=[^;]+; Path=\/; Secure; SameSite=Lax$/,
-      );
-      expect(before.headers['strict-transport-security']).toBe(
-        'max-age=31536000; includeSubDomains',
-      );
+      const again = await overTls(
+        production,
+        request(production.url).post('/api/session'),
+        signedUp,
+      ).send(account);
+      expect(again.status).toBe(200);
+      expect(sidOf(again)).not.toBe(sidOf(signedUp));
+      const old = await overTls(production, request(production.url).get('/api/session'), signedUp);
+      expect(old.body).toEqual({ session: null });
     } finally {
       await production.close();
     }
@@ -166,4 +177,24 @@ function cookieOf(client: TestClient, server: TestServer): string {
     script: false,
   });
   return found === undefined ? '' : found.toValueString();
+}
+
+/** A request as it comes through a proxy that ends TLS, with the cookies and token of an earlier reply. */
+function overTls(server: TestServer, test: Test, earlier?: Response): Test {
+  const cookies =
+    earlier === undefined ? [] : cookiesOf(earlier).map((cookie) => cookie.split(';')[0]);
+  const token = cookies.find((cookie) => cookie.startsWith('__Host-XSRF='))?.split('=')[1] ?? '';
+  return test
+    .set('X-Forwarded-Proto', 'https')
+    .set('Origin', server.url)
+    .set('Cookie', cookies.join('; '))
+    .set('X-XSRF-TOKEN', decodeURIComponent(token));
+}
+
+function cookiesOf(response: Response): string[] {
+  return response.headers['set-cookie'] as unknown as string[];
+}
+
+function sidOf(response: Response): string | undefined {
+  return cookiesOf(response).find((cookie) => cookie.startsWith('__Host-sid='));
 }

@@ -35,6 +35,8 @@ export interface TestServerOptions {
   readonly stripeUrl?: string;
   /** Plain http as `npm start` serves it; otherwise the cookies of production, for a spec that sends them itself. */
   readonly isLocal?: boolean;
+  /** Proxies in front; with one, `X-Forwarded-Proto: https` stands for TLS. */
+  readonly trustProxyHops?: number;
 }
 
 export function createMigratedDatabase(): Promise<TestDatabase> {
@@ -68,7 +70,7 @@ export async function startTestServer(
     sessionSecrets: ['a secret that only specs know, 32 characters'],
     isLocal: options.isLocal ?? true,
     publicOrigin: url,
-    trustProxyHops: 0,
+    trustProxyHops: options.trustProxyHops ?? 0,
     now: clock.now,
     isStopping: () => false,
     browserFolder: undefined,
