@@ -76,6 +76,9 @@ export function compose(options: ComposeOptions): Composition {
       applicationName,
       statementTimeoutMs,
       onConnectionError,
+      onWarning: (message) => {
+        logger.error({ warning: message }, 'database warning');
+      },
     });
   const webPool = pool('kinvale-web', 10, 15_000);
   const sessionPool = pool('kinvale-session', 4, 15_000);

@@ -9,6 +9,7 @@ describe('a connection pool', () => {
   let database: TestDatabase;
   let pool: pg.Pool;
   const lost: Error[] = [];
+  const warnings: string[] = [];
 
   beforeEach(async () => {
     database = await createTestDatabase();
@@ -19,6 +20,7 @@ describe('a connection pool', () => {
       statementTimeoutMs: 400,
       connectionTimeoutMs: 300,
       onConnectionError: (error) => lost.push(error),
+      onWarning: (message) => warnings.push(message),
     });
   });
 
@@ -54,6 +56,11 @@ describe('a connection pool', () => {
     await expectAsync(pool.query('select 1')).toBeRejectedWithError(/timeout exceeded/);
     const error: unknown = await slow.catch((caught: unknown) => caught);
     expect((error as pg.DatabaseError).code).toBe('57014');
+  });
+
+  it('tells of a setting that was made outside a transaction and does nothing', async () => {
+    await pool.query(`set local app.workspace = 'x'`);
+    expect(warnings).toEqual(['SET LOCAL can only be used in transaction blocks']);
   });
 
   it('forgets the workspace of a transaction with its end', async () => {

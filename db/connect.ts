@@ -12,6 +12,8 @@ export interface PoolOptions {
   readonly connectionTimeoutMs?: number;
   /** Told of errors on idle and checked-out connections, as a database restart makes them. */
   readonly onConnectionError: (error: Error) => void;
+  /** Told of the server's warnings, as of a setting made for a transaction that is not there. */
+  readonly onWarning: (message: string) => void;
 }
 
 const types = new pg.TypeOverrides();
@@ -41,6 +43,9 @@ export function createPool(options: PoolOptions): pg.Pool {
   pool.on('error', options.onConnectionError);
   pool.on('connect', (client) => {
     client.on('error', options.onConnectionError);
+    client.on('notice', ({ severity, message }) => {
+      if (severity === 'WARNING') options.onWarning(message ?? '');
+    });
   });
   return pool;
 }

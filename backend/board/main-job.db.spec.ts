@@ -22,6 +22,8 @@ describe('the main job, from a file to a signed edition', () => {
   });
 
   afterAll(async () => {
+    const warnings = server.log.filter((line) => line.includes('database warning'));
+    expect(warnings).withContext('settings outside a transaction').toEqual([]);
     await server.close();
     await database.drop();
   });

@@ -23,6 +23,7 @@ describe('the job queue', () => {
       applicationName: 'spec',
       statementTimeoutMs: 5000,
       onConnectionError: (error) => errors.push(error),
+      onWarning: (message) => errors.push(new Error(message)),
     });
     repositories = new Repositories(createDatabase(pool));
     queue = new JobQueue({

@@ -32,6 +32,7 @@ export async function startBillingBench(): Promise<BillingBench> {
     applicationName: 'billing-spec',
     statementTimeoutMs: 5_000,
     onConnectionError: fail,
+    onWarning: fail,
   });
   const repositories = new Repositories(createDatabase(pool));
   const queue = new JobQueue({
