@@ -30,7 +30,7 @@ async function fill(server: TestServer, canary: string): Promise<Filled> {
   const saved = await client.post('/api/scenarios', { fitId: fit.id, ...text, plan });
   const published = await client.post('/api/editions', {
     fitId: fit.id,
-    scenarioIds: [idOf(saved, 201)],
+    scenarios: [{ id: idOf(saved, 201), version: 1 }],
     confidentiality: 'confidential',
     comment: canary,
   });
@@ -85,7 +85,7 @@ const bodies: Readonly<Record<string, (ids: Filled['ids']) => object>> = {
   }),
   publishEdition: ({ fitId }) => ({
     fitId,
-    scenarioIds: [],
+    scenarios: [],
     confidentiality: 'confidential',
     comment: '',
   }),

@@ -156,7 +156,7 @@ export class DemoSeeder {
       first?.id ??
       (await editions.publish(analyst, {
         fitId,
-        scenarioIds: [],
+        scenarios: [],
         confidentiality: 'confidential',
         comment: 'First reading for the audit committee, before the review of the peer group.',
       }));
@@ -179,7 +179,7 @@ export class DemoSeeder {
     saved = await scenarios.list(analyst.workspaceId, fitId);
     await editions.publish(analyst, {
       fitId,
-      scenarioIds: saved.map((scenario) => scenario.id),
+      scenarios: saved.map(({ id, version }) => ({ id, version })),
       confidentiality: 'inside-information',
       comment:
         'Peer group reviewed: Zethorin is out. Both capex plans of the November budget are read through the model.',

@@ -27,7 +27,7 @@ export interface Edition {
 
 export interface EditionRequest {
   readonly fitId: string;
-  readonly scenarioIds: readonly string[];
+  readonly scenarios: readonly { readonly id: string; readonly version: number }[];
   readonly confidentiality: 'confidential' | 'inside-information';
   readonly comment: string;
 }
@@ -71,7 +71,7 @@ export class EditionService {
   /**
    * Freezes figures, plans, peers with reasons, lineage and cautions under the next number.
    *
-   * @throws {Invalid} for a peer without a reason or a scenario of another fit.
+   * @throws {Invalid} for a peer without a reason or a scenario of another fit; {Conflict} for another version than seen.
    */
   async publish(reader: Reader, request: EditionRequest): Promise<string> {
     const id = randomUUID();
@@ -79,8 +79,15 @@ export class EditionService {
       await tx.members.lockWorkspace();
       const ground = await findFinishedFit(tx, request.fitId);
       const scenarios: Scenario[] = [];
-      for (const scenarioId of request.scenarioIds)
-        scenarios.push(await findScenario(tx, scenarioId));
+      for (const seen of request.scenarios) {
+        const scenario = await findScenario(tx, seen.id);
+        if (scenario.version !== seen.version)
+          throw new Conflict(
+            `${scenario.updatedByName} saved version ${scenario.version} of “${scenario.name}” meanwhile. Load the page again to see what the edition would freeze.`,
+            'stale-version',
+          );
+        scenarios.push(scenario);
+      }
       assertPublishable(ground, scenarios);
       const workspace = await tx.members.workspace();
       const publisher = await tx.members.find(reader.personId);

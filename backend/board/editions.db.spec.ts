@@ -1,6 +1,6 @@
 import pg from 'pg';
 import type { TestDatabase } from '../../db/testing/test-database';
-import type { EditionReply, EditionsReply } from '../contract';
+import type { EditionReply, EditionsReply, FitReply } from '../contract';
 import { join, signUp, type TestClient, testPassword } from '../testing/test-client';
 import { importPanel, runFit, savePeers } from '../testing/test-model';
 import { createMigratedDatabase, startTestServer, type TestServer } from '../testing/test-server';
@@ -34,7 +34,7 @@ describe('editions', () => {
   async function publish(by: TestClient): Promise<EditionReply> {
     const reply = await by.post('/api/editions', {
       fitId,
-      scenarioIds: [],
+      scenarios: [],
       confidentiality: 'confidential',
       comment: '',
     });
@@ -85,6 +85,28 @@ describe('editions', () => {
     expect([seen.maySign, seen.mayReturn]).toEqual([false, true]);
     expect((await sign(cfo, early.edition.id)).status).toBe(409);
     expect((await sendBack(cfo, early.edition.id)).status).toBe(200);
+  });
+
+  it('freeze no other version of a scenario than the publisher saw', async () => {
+    const { result } = (await analyst.get(`/api/fits/${fitId}`)).body as FitReply;
+    const last = result?.prediction?.last;
+    const plan = [{ year: (last?.year ?? 0) + 1, values: last?.regressors }];
+    const text = { name: 'Held', note: '', plan };
+    const saved = await analyst.post('/api/scenarios', { fitId, ...text });
+    const { id } = saved.body as { id: string };
+    await analyst.put(`/api/scenarios/${id}`, { ...text, name: 'Held again', version: 1 });
+    const request = { fitId, confidentiality: 'confidential', comment: '' };
+    const stale = await analyst.post('/api/editions', {
+      ...request,
+      scenarios: [{ id, version: 1 }],
+    });
+    expect(stale.status).toBe(409);
+    expect((stale.body as { type: string }).type).toContain('stale-version');
+    const seen = await analyst.post('/api/editions', {
+      ...request,
+      scenarios: [{ id, version: 2 }],
+    });
+    expect(seen.status).toBe(201);
   });
 
   it('cannot be signed or returned by whoever published them, whatever their roles', async () => {
@@ -151,7 +173,7 @@ describe('editions', () => {
     const fit = await runFit(analyst, (saved.body as { id: string }).id);
     const reply = await analyst.post('/api/editions', {
       fitId: fit.fit.id,
-      scenarioIds: [],
+      scenarios: [],
       confidentiality: 'confidential',
       comment: '',
     });

@@ -71,7 +71,7 @@ describe('the main job, from a file to a signed edition', () => {
 
     const published = await analyst.post('/api/editions', {
       fitId: fit.fit.id,
-      scenarioIds: [scenario.id],
+      scenarios: [{ id: scenario.id, version: 1 }],
       confidentiality: 'confidential',
       comment: 'For the meeting.',
     });

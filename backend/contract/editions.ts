@@ -9,7 +9,8 @@ export type Confidentiality = z.infer<typeof Confidentiality>;
 
 export const PublishEdition = z.strictObject({
   fitId: z.uuid(),
-  scenarioIds: z.array(z.uuid()).max(4),
+  /** With the versions that the publisher saw: one stored meanwhile is a conflict. */
+  scenarios: z.array(z.strictObject({ id: z.uuid(), version: z.number().int() })).max(4),
   confidentiality: Confidentiality,
   /** What the publisher wants the CFO to know. */
   comment: z.string().trim().max(4000),

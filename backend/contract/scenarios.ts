@@ -15,7 +15,14 @@ export type Plan = z.infer<typeof Plan>;
 const name = z.string().trim().min(1, 'expected a name').max(120);
 const note = z.string().trim().max(2000);
 
-export const SaveScenario = z.strictObject({ fitId: z.uuid(), name, note, plan: Plan });
+export const SaveScenario = z.strictObject({
+  fitId: z.uuid(),
+  name,
+  note,
+  plan: Plan,
+  /** Whether the person's draft of a new plan stays: this one was not made from it. */
+  keepsDraft: z.boolean().default(false),
+});
 export type SaveScenario = z.infer<typeof SaveScenario>;
 
 export const ChangeScenario = z.strictObject({

@@ -42,8 +42,10 @@ export function scenarioRoutes(scenarios: ScenarioService): Router {
   });
 
   register(router, apiRoutes.saveScenario, async (req, res) => {
-    const { fitId: of, ...text } = parse(SaveScenario, req.body);
-    const saved = await scenarios.save(signedInMember(req), of, text);
+    const { fitId: of, keepsDraft, ...text } = parse(SaveScenario, req.body);
+    const member = signedInMember(req);
+    const saved = await scenarios.save(member, of, text);
+    if (!keepsDraft) await scenarios.discardDraft(member, of, null);
     res.status(201).json(toScenarioReply(saved));
   });
 

@@ -164,7 +164,6 @@ async function insertScenario(
   const years = await evaluateOn(tx, fitId, text.plan);
   const id = randomUUID();
   await tx.scenarios.insert(id, fitId, { ...text, years, createdBy: actor.personId });
-  await tx.scenarios.removeDraft({ fitId, personId: actor.personId, scenarioId: null });
   await record(tx, actor.personId, 'scenario-saved', id, { version: 1 });
   return findScenario(tx, id);
 }

@@ -9,6 +9,7 @@ import {
   apiRoutes,
 } from '@contract';
 import type { Observable } from 'rxjs';
+import type * as z from 'zod';
 import { ApiClient } from './api-client';
 
 /** Saved scenarios of a fit, and one's own unsaved plans. */
@@ -24,7 +25,7 @@ export class ScenariosApi {
     return this.#client.call(apiRoutes.readScenario, ScenarioReply, { path: { scenarioId } });
   }
 
-  save(body: SaveScenario): Observable<ScenarioReply> {
+  save(body: z.input<typeof SaveScenario>): Observable<ScenarioReply> {
     return this.#client.call(apiRoutes.saveScenario, ScenarioReply, { body });
   }
 

@@ -132,10 +132,12 @@ export class PublishPage {
 
   protected async publish(): Promise<void> {
     const ground = this.#ground();
-    if (ground === null || this.hindrances().length > 0) return;
+    const preview = this.preview();
+    if (ground === null || preview === null || this.hindrances().length > 0) return;
     const published = await this.store.publish({
       fitId: ground.fit.fit.id,
-      scenarioIds: [...this.chosen()],
+      // The versions that the preview shows: the server refuses to freeze another.
+      scenarios: preview.scenarios.map(({ id, version }) => ({ id, version })),
       confidentiality: this.confidentiality(),
       comment: this.comment(),
     });
