@@ -76,6 +76,17 @@ describe('PlanSlider', () => {
     expect(emitted).toEqual([1500]);
   });
 
+  it('leaves a number that is no money alone when the unit of money changes', async () => {
+    set({ label: 'Employees FY2026', value: 12000, base: 11000, kind: 'plain' });
+    TestBed.inject(NumberFormat).unit.set('billions');
+    await fixture.whenStable();
+    expect(find<HTMLInputElement>('input[type=text]').value).toBe('12,000');
+    expect(find('input[type=range]').getAttribute('aria-valuetext')).toBe('12,000');
+    expect(find('.note').textContent).toContain('+1,000 against base');
+    await type('13,000');
+    expect(emitted).toEqual([13000]);
+  });
+
   it('shows the difference to base, warns outside what has been seen, and goes back', async () => {
     set({ value: 1680, familiar: { low: 300, high: 1590 } });
     await fixture.whenStable();

@@ -10,14 +10,14 @@ import {
   viewChild,
 } from '@angular/core';
 import { fixedText, tickDigits } from '@figures';
-import { NumberFormat } from '../number-format';
+import { type FigureKind, NumberFormat } from '../number-format';
 import { readNumber } from '../number-entry';
 
 const pageSteps = 10;
 
 /**
  * One planned amount: a slider, and a box with − and + that does all the slider does and takes any number exactly.
- * Amounts go in and out in the panel's unit; they are shown in the person's unit. Emits while the slider moves, so
+ * Money goes in and out in the panel's unit and is shown in the person's; plain numbers are as they are. Emits while the slider moves, so
  * that what depends on it can follow at once.
  *
  * `<kv-plan-slider label="Capex FY2026" [value]="1240" [base]="1180" [min]="0" [max]="2400" [step]="10"
@@ -42,6 +42,7 @@ export class PlanSlider {
   readonly step = input.required<number>();
   /** What the own company and its peers have shown; the thick stretch. */
   readonly familiar = input<{ readonly low: number; readonly high: number } | null>(null);
+  readonly kind = input<FigureKind>('money');
   readonly isDisabled = input(false);
 
   readonly valueChanged = output<number>();
@@ -49,9 +50,11 @@ export class PlanSlider {
   private readonly box = viewChild.required<ElementRef<HTMLInputElement>>('box');
 
   protected readonly complaint = signal('');
-  readonly #digits = computed(() => tickDigits(this.step() * this.#numbers.factor()));
+  readonly #digits = computed(() => tickDigits(this.#numbers.shown(this.step(), this.kind())));
   protected readonly text = computed(() => this.#write(this.value()));
-  protected readonly spoken = computed(() => `${this.text()} ${this.#numbers.unitLabel()}`);
+  protected readonly spoken = computed(() =>
+    this.kind() === 'money' ? `${this.text()} ${this.#numbers.unitLabel()}` : this.text(),
+  );
   protected readonly basePlace = computed(() => this.#place(this.base()));
   protected readonly stretch = computed(() => {
     const familiar = this.familiar();
@@ -100,7 +103,7 @@ export class PlanSlider {
     }
     this.complaint.set('');
     // The same text again is no change: the box may show fewer digits than the value has.
-    if (text !== this.text()) this.valueChanged.emit(this.#numbers.toPanelUnit(shown));
+    if (text !== this.text()) this.valueChanged.emit(this.#read(shown));
     this.box().nativeElement.value = this.text();
   }
 
@@ -109,8 +112,12 @@ export class PlanSlider {
     this.box().nativeElement.value = this.text();
   }
 
+  #read(shown: number): number {
+    return this.kind() === 'money' ? this.#numbers.toPanelUnit(shown) : shown;
+  }
+
   #write(value: number): string {
-    const shown = this.#numbers.shown(value);
+    const shown = this.#numbers.shown(value, this.kind());
     const digits = this.#digits();
     const isExact = Math.abs(shown - Number(shown.toFixed(digits))) <= 1e-9 * Math.abs(shown);
     const text = fixedText(shown, isExact ? digits : digits + 3, this.#numbers.locale());

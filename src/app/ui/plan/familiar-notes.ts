@@ -4,6 +4,7 @@ import { Mark } from '../mark';
 import { NumberFormat } from '../number-format';
 import { familiarFinding, familiarReason } from './plan-words';
 import type { PlannedYear, ReadYear } from './read-plan';
+import { regressorKind } from './regressor-labels';
 import { steppedInside } from './slider-range';
 
 /** For each planned year: whether the peer group has shown anything like it, why, and the way back inside. */
@@ -96,7 +97,7 @@ export class FamiliarNotes {
       .map(({ year, familiar }) => {
         const values = steppedInside(this.basis(), familiar, this.years());
         const amounts = this.labels().map(
-          (label, k) => `${label} ${this.#numbers.figure(values[k])}`,
+          (label, k) => `${label} ${this.#numbers.figure(values[k], regressorKind(k))}`,
         );
         return {
           year,

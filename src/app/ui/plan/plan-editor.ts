@@ -4,6 +4,7 @@ import { PlanSlider } from '../plan-slider/plan-slider';
 import { heldPlan, mostYears, withValue, withYearAdded, withYearRemoved } from './change-plan';
 import { capitalised } from './plan-words';
 import type { PlannedYear } from './read-plan';
+import { regressorKind } from './regressor-labels';
 import { sliderRange } from './slider-range';
 
 /**
@@ -40,6 +41,7 @@ import { sliderRange } from './slider-range';
               [max]="cell.range.max"
               [step]="cell.range.step"
               [familiar]="cell.range.familiar"
+              [kind]="cell.kind"
               (valueChanged)="setValue(row.year, cell.regressor, $event)"
             />
           </div>
@@ -72,6 +74,7 @@ export class PlanEditor {
       cells: this.labels().map((label, regressor) => ({
         regressor,
         label,
+        kind: regressorKind(regressor),
         name: `${capitalised(label)} FY${year}`,
         value: values[regressor],
         base: this.basis().last.regressors[regressor],

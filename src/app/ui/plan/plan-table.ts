@@ -4,6 +4,7 @@ import { Figure } from '../figure';
 import { NumberFormat } from '../number-format';
 import { capitalised } from './plan-words';
 import type { PlannedYear } from './read-plan';
+import { regressorKind } from './regressor-labels';
 
 /** A planned year with its figures, from the screen or as they were stored. */
 export interface PlanTableYear extends PlannedYear {
@@ -68,7 +69,7 @@ const familiarWords: Readonly<Record<FamiliarRange['kind'], string>> = {
                 <th scope="row">FY{{ year.year }}</th>
                 @for (value of year.values; track $index) {
                   <td class="kv-number">
-                    {{ numbers.figure(value, 'money', valueDigits()[$index]) }}
+                    {{ numbers.figure(value, regressorKind($index), valueDigits()[$index]) }}
                   </td>
                 }
                 <td class="kv-number">
@@ -123,11 +124,15 @@ export class PlanTable {
   readonly opened = output<PlannedFigureWanted>();
 
   protected readonly familiarWords = familiarWords;
+  protected readonly regressorKind = regressorKind;
   protected readonly regressors = computed(() => this.labels().map(capitalised));
   readonly #years = computed(() => this.plans().flatMap(({ years }) => years));
   protected readonly valueDigits = computed(() =>
     this.labels().map((_, k) =>
-      this.numbers.columnDigits(this.#years().map((year) => year.values[k])),
+      this.numbers.columnDigits(
+        this.#years().map((year) => year.values[k]),
+        regressorKind(k),
+      ),
     ),
   );
   protected readonly expectedDigits = computed(() =>

@@ -1,6 +1,7 @@
 import type { FamiliarRange, IntervalEstimate, PredictionBasis } from '@prediction';
-import type { NumberFormat } from '../number-format';
+import type { FigureKind, NumberFormat } from '../number-format';
 import { listed } from '../phrases';
+import { regressorKind } from './regressor-labels';
 
 /** The year that a plan is judged by: the last one that differs from the base, or else its last. */
 export function decidingYear<T extends { readonly difference: IntervalEstimate }>(
@@ -58,8 +59,10 @@ export function familiarReason(
   }[familiar.kind];
   const odd = familiar.reasons.flatMap((reason, k) => {
     if (reason.own === 'within') return [];
+    const kind = regressorKind(k);
+    const planned = numbers.figure(reason.planned, kind);
     return [
-      `${capitalised(labels[k])} ${numbers.figure(reason.planned)} is ${reason.own} ${company}’s own range (${rangeText(basis.ownRange[k], numbers)}) and ${reason.peers} its peers’ (${rangeText(basis.peerRange[k], numbers)}).`,
+      `${capitalised(labels[k])} ${planned} is ${reason.own} ${company}’s own range (${rangeText(basis.ownRange[k], kind, numbers)}) and ${reason.peers} its peers’ (${rangeText(basis.peerRange[k], kind, numbers)}).`,
     ];
   });
   if (odd.length > 0) return `${whole} ${odd.join(' ')}`;
@@ -72,10 +75,11 @@ export function familiarReason(
 
 function rangeText(
   range: { readonly low: number; readonly high: number },
+  kind: FigureKind,
   numbers: NumberFormat,
 ): string {
-  const digits = numbers.columnDigits([range.low, range.high]);
-  return numbers.bounds({ estimate: range.high, ...range }, 'money', digits);
+  const digits = numbers.columnDigits([range.low, range.high], kind);
+  return numbers.bounds({ estimate: range.high, ...range }, kind, digits);
 }
 
 function turned(value: IntervalEstimate): IntervalEstimate {

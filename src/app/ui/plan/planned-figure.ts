@@ -1,5 +1,6 @@
 import type { PlannedFigureWanted } from './plan-table';
 import { capitalised } from './plan-words';
+import { regressorKind } from './regressor-labels';
 
 /** What only the screen knows of a plan's figure, for the lineage drawer: its value and the amounts planned. */
 export interface PlanLineage {
@@ -25,8 +26,10 @@ export function planLineage(
   labels: readonly string[],
   held: readonly number[],
 ): PlanLineage {
-  const planned = labels.map((label, k) => input(`${capitalised(label)} planned`, year.values[k]));
-  const base = labels.map((label, k) => input(`${capitalised(label)} of the base`, held[k]));
+  const planned = labels.map((label, k) =>
+    input(`${capitalised(label)} planned`, year.values[k], k),
+  );
+  const base = labels.map((label, k) => input(`${capitalised(label)} of the base`, held[k], k));
   return {
     key: `${kind}.${year.year}`,
     value: year[kind],
@@ -38,6 +41,6 @@ export function planLineage(
   };
 }
 
-function input(label: string, value: number): PlanLineage['inputs'][number] {
-  return { label, value, isMoney: true, figure: null };
+function input(label: string, value: number, regressor: number): PlanLineage['inputs'][number] {
+  return { label, value, isMoney: regressorKind(regressor) === 'money', figure: null };
 }
