@@ -175,6 +175,19 @@ describe('the import page', () => {
     expect(button('Bring in as version 2')).toBeDefined();
   });
 
+  it('does not bring in columns that were changed while the check ran', async () => {
+    await open(draft);
+    await press('Check the file');
+    await typeName('Another name');
+    http.expectOne(`/api/imports/${draft.id}/mapping`).flush(checked);
+    await settled();
+    expect(words()).toContain('The entries above have changed since');
+    expect(page().querySelector('kv-commit-form')).toBeNull();
+    expect(button('Check the file')?.disabled).toBeFalse();
+    await typeName('Flow control');
+    expect(button('Bring in as version 2')).toBeDefined();
+  });
+
   it('asks for a mended file while a finding keeps this one out', async () => {
     const blocking = { ...check.findings[0], found: 'abc', isBlocking: true };
     await open({ ...checked, check: { ...check, findings: [blocking], blockingCount: 1 } });

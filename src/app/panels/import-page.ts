@@ -50,8 +50,15 @@ export class ImportPage {
     const { draft, versions } = view;
     return startingEntry(draft, this.#remembered.recall(draft.headers), versions.at(0));
   });
-  /** What stands in the form now. */
-  protected readonly entry = linkedSignal(() => this.start());
+  readonly #openImportId = computed(() => {
+    const view = this.store.view();
+    return view.kind === 'ready' ? view.draft.id : null;
+  });
+  /** What stands in the form now: a check's reply does not touch it, another import starts it anew. */
+  protected readonly entry = linkedSignal({
+    source: this.#openImportId,
+    computation: () => untracked(this.start),
+  });
   protected readonly isChecked = computed(() => {
     const view = this.store.view();
     const entry = this.entry();

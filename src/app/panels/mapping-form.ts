@@ -90,6 +90,11 @@ export class MappingForm {
   protected readonly currencies = computed(() =>
     matchingCurrencies(this.entry().currency, this.#allCurrencies),
   );
+  /** A ticked column that was chosen for something else since comes along only once. */
+  readonly #wantedOthers = computed(() => {
+    const further = this.further();
+    return this.entry().others.filter((name) => further.includes(name));
+  });
   readonly #importId = computed(() => this.draft().id);
 
   constructor() {
@@ -100,7 +105,7 @@ export class MappingForm {
       });
     });
     effect(() => {
-      this.entryChanged.emit(this.entry());
+      this.entryChanged.emit({ ...this.entry(), others: this.#wantedOthers() });
     });
   }
 
@@ -134,13 +139,8 @@ export class MappingForm {
         ?.focus();
       return;
     }
-    const entry = this.form.getRawValue();
-    const further = this.further();
     this.checkWanted.emit(
-      ImportMapping.parse({
-        ...entry,
-        others: entry.others.filter((name) => further.includes(name)),
-      }),
+      ImportMapping.parse({ ...this.form.getRawValue(), others: this.#wantedOthers() }),
     );
   }
 
