@@ -4,6 +4,7 @@ import { type Observable, Subject, catchError, map, of, startWith, switchMap } f
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { ApiClient } from './api-client';
 import { type ApiProblem, toApiProblem } from './api-problem';
+import { SessionStore } from './session-store';
 
 /** Which fit a figure belongs to: one of the workspace, or the one frozen in an edition. */
 export type LineageSource = { readonly fitId: string } | { readonly editionId: string };
@@ -42,6 +43,11 @@ export class LineageStore {
       )
       .subscribe((view) => {
         this.#view.set(view);
+      });
+    inject(SessionStore)
+      .ended.pipe(takeUntilDestroyed())
+      .subscribe(() => {
+        this.close();
       });
   }
 

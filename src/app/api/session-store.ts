@@ -1,7 +1,7 @@
 import { HttpClient } from '@angular/common/http';
 import { Injectable, computed, inject, signal } from '@angular/core';
 import { type Preferences, type Session, SessionReply, apiRoutes } from '@contract';
-import { firstValueFrom } from 'rxjs';
+import { Subject, firstValueFrom } from 'rxjs';
 
 export const defaultPreferences: Preferences = {
   theme: 'system',
@@ -14,7 +14,11 @@ export const defaultPreferences: Preferences = {
 export class SessionStore {
   readonly #http = inject(HttpClient);
   readonly #session = signal<Session | null>(null);
+  readonly #ended = new Subject<void>();
   #loading: Promise<Session | null> | undefined;
+
+  /** The session known here is over: what a store of the whole application holds of it has to go. */
+  readonly ended = this.#ended.asObservable();
 
   /** Null when nobody is signed in, or before the first `load`. */
   readonly session = this.#session.asReadonly();
@@ -34,6 +38,8 @@ export class SessionStore {
 
   /** Takes over the session that signing in, signing up or joining was answered with. */
   accept(reply: SessionReply): void {
+    const before = this.#session();
+    if (before !== null && !isSamePlace(before, reply.session)) this.#ended.next();
     this.#session.set(reply.session);
     this.#loading = Promise.resolve(reply.session);
   }
@@ -42,6 +48,7 @@ export class SessionStore {
   forget(): void {
     this.#session.set(null);
     this.#loading = undefined;
+    this.#ended.next();
   }
 
   /** Shows the change at once and stores it; puts the old preferences back when it cannot be stored. */
@@ -69,4 +76,8 @@ export class SessionStore {
     this.#session.set(session);
     return session;
   }
+}
+
+function isSamePlace(before: Session, now: Session | null): boolean {
+  return before.person.id === now?.person.id && before.workspace.id === now.workspace.id;
 }

@@ -1,13 +1,23 @@
-import { Injectable } from '@angular/core';
+import { Injectable, inject } from '@angular/core';
+import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import type { ImportMapping } from '@contract';
+import { SessionStore } from '../api/session-store';
 
 /**
- * What the analyst said of a file's columns, kept while the application is open: a mended file with the same header
+ * What the analyst said of a file's columns, kept until the session ends: a mended file with the same header
  * is not asked about again.
  */
 @Injectable({ providedIn: 'root' })
 export class RememberedMapping {
   readonly #byHeader = new Map<string, ImportMapping>();
+
+  constructor() {
+    inject(SessionStore)
+      .ended.pipe(takeUntilDestroyed())
+      .subscribe(() => {
+        this.#byHeader.clear();
+      });
+  }
 
   remember(headers: readonly string[], mapping: ImportMapping): void {
     this.#byHeader.set(keyOf(headers), mapping);

@@ -3,6 +3,7 @@ import { DOCUMENT } from '@angular/common';
 import {
   ChangeDetectionStrategy,
   Component,
+  DestroyRef,
   type ElementRef,
   computed,
   effect,
@@ -60,6 +61,10 @@ export class Shell {
       const root = this.#document.documentElement;
       if (theme === 'system') root.removeAttribute('data-theme');
       else root.setAttribute('data-theme', theme);
+    });
+    // A shell that goes away sees no further navigation: its drawer must not wait for the next shell.
+    inject(DestroyRef).onDestroy(() => {
+      this.lineage.close();
     });
     this.#router.events
       .pipe(
