@@ -63,7 +63,10 @@ export class EditionStore {
     if (view.kind !== 'ready') return null;
     try {
       const reply = await firstValueFrom(send(view.reply.edition.id));
-      this.#view.set({ ...view, reply });
+      // Meanwhile the page may have gone on to another edition.
+      this.#view.update((now) =>
+        now.kind === 'ready' && now.reply.edition.id === reply.edition.id ? { ...now, reply } : now,
+      );
       return null;
     } catch (error) {
       if (!(error instanceof ApiProblem)) throw error;
