@@ -101,11 +101,14 @@ describe('the Peers page', () => {
     await settled();
   }
 
-  async function load(group: PeerGroupReply | null): Promise<void> {
-    http.expectOne('/api/panel-versions').flush({ versions: [panelVersion] });
+  async function load(
+    group: PeerGroupReply | null,
+    newer: PanelVersionSummary[] = [],
+  ): Promise<void> {
+    http.expectOne('/api/panel-versions').flush({ versions: [...newer, panelVersion] });
     await answer('/api/peer-groups', { versions: group === null ? [] : [group] });
     if (group !== null) await answer(`/api/peer-groups/${group.id}`, group);
-    await answer(`/api/panel-versions/${panelVersion.id}/companies`, { companies });
+    await answer(`/api/panel-versions/${(newer[0] ?? panelVersion).id}/companies`, { companies });
     if (group !== null)
       await answer('/api/desk', { panelVersion, peerGroup: group, fit: null, editionsWaiting: 0 });
   }
@@ -116,6 +119,21 @@ describe('the Peers page', () => {
 
   function words(): string {
     return (page().textContent ?? '').replace(/\s+/g, ' ');
+  }
+
+  async function writeReason(label: string, reason: string): Promise<void> {
+    const field = page().querySelector<HTMLTextAreaElement>(`textarea[aria-label="${label}"]`);
+    if (field === null) throw new Error(`expected a field “${label}”; found none`);
+    field.value = reason;
+    field.dispatchEvent(new Event('input'));
+    await settled();
+  }
+
+  async function choosePanel(panelVersionId: string): Promise<void> {
+    const select = page().querySelector('select')!;
+    select.value = panelVersionId;
+    select.dispatchEvent(new Event('change'));
+    await settled();
   }
 
   async function press(name: string): Promise<void> {
@@ -146,13 +164,7 @@ describe('the Peers page', () => {
     await load(saved);
     await press('Take Sarvane out');
     expect(words()).toContain('1 in, 1 out, 1 reason missing.');
-    const field = page().querySelector<HTMLTextAreaElement>(
-      'textarea[aria-label="Why Sarvane is out"]',
-    );
-    if (field === null) throw new Error('expected a field for the reason; found none');
-    field.value = 'Another business';
-    field.dispatchEvent(new Event('input'));
-    await settled();
+    await writeReason('Why Sarvane is out', 'Another business');
     await press('Save peer group');
     const { request, body } = sent();
     expect(body).toEqual({
@@ -205,6 +217,52 @@ describe('the Peers page', () => {
     await settled();
     expect(words()).toContain('The server does not answer');
     expect(words()).toContain('1 in, 1 out');
+  });
+
+  it('keeps what is written while another panel version loads, and follows the last choice', async () => {
+    start(['analyst']);
+    const newest = { ...panelVersion, id: id(6), number: 3 };
+    const second = { ...panelVersion, id: id(7), number: 2 };
+    await load(saved, [newest, second]);
+    await choosePanel(second.id);
+    const overtaken = http.expectOne(`/api/panel-versions/${second.id}/companies`);
+    await choosePanel(panelVersion.id);
+    await writeReason('Why Sarvane is in', 'Same buyers');
+    await answer(`/api/panel-versions/${panelVersion.id}/companies`, { companies });
+    overtaken.flush({ companies: companies.slice(1) });
+    await settled();
+    expect(words()).toContain('every reason written');
+    await press('Save peer group');
+    const { request, body } = sent();
+    expect(body.panelVersionId).toBe(panelVersion.id);
+    expect(body.peers).toEqual([
+      { company: 'Kesdrin', isIncluded: true, reason: 'Same customers' },
+      { company: 'Sarvane', isIncluded: true, reason: 'Same buyers' },
+    ]);
+    request.flush({ ...saved, id: id(4), number: 2, peers: body.peers });
+    await settled();
+    await answer('/api/peer-groups', { versions: [saved] });
+  });
+
+  it('keeps what is written while a version is saved, and calls it saved without the list', async () => {
+    start(['analyst']);
+    await load(saved);
+    await press('Take Sarvane out');
+    await press('Save peer group');
+    const { request, body } = sent();
+    await writeReason('Why Sarvane is out', 'Another business');
+    request.flush({ ...saved, id: id(4), number: 2, peerCount: 1, peers: body.peers });
+    await settled();
+    http
+      .expectOne('/api/peer-groups')
+      .flush(null, { status: 503, statusText: 'Service Unavailable' });
+    await settled();
+    expect(page().querySelector('[role=alert]')).toBeNull();
+    expect(words()).toContain('Version 2 shown');
+    await press('Save peer group');
+    const again = sent();
+    expect(again.body.parentId).toBe(id(4));
+    expect(again.body.peers[1].reason).toBe('Another business');
   });
 
   it('asks before it is left only while something entered is not saved', async () => {

@@ -95,6 +95,8 @@ export class PeersPage {
   }
 
   protected readonly counted = counted;
+  /** Going on to the version just saved leaves nothing behind: the page stays, with what was entered since. */
+  #isGoingOn = false;
 
   protected load(): void {
     const id = this.peerGroupId();
@@ -115,11 +117,13 @@ export class PeersPage {
   }
 
   protected async save(): Promise<void> {
-    await this.#show(await this.store.save(this.note()));
+    const note = this.note();
+    await this.#show(await this.store.save(note), note);
   }
 
   protected async saveOnTop(): Promise<void> {
-    await this.#show(await this.store.saveOnTop(this.note()));
+    const note = this.note();
+    await this.#show(await this.store.saveOnTop(note), note);
   }
 
   /** Has the browser ask before the tab is closed on choices that are not saved. */
@@ -129,7 +133,7 @@ export class PeersPage {
 
   /** Asks before choices that are not saved are lost. */
   async mayLeave(): Promise<boolean> {
-    if (this.isReadOnly() || !this.store.hasInput()) return true;
+    if (this.#isGoingOn || this.isReadOnly() || !this.store.hasInput()) return true;
     return this.#confirm.ask({
       title: 'Leave without saving?',
       detail: 'The choice of peers and the reasons on this page are not saved as a version yet.',
@@ -137,9 +141,14 @@ export class PeersPage {
     });
   }
 
-  async #show(savedId: string | null): Promise<void> {
+  async #show(savedId: string | null, savedNote: string): Promise<void> {
     if (savedId === null) return;
-    this.note.set('');
-    await this.#router.navigate(['/peers', savedId], { replaceUrl: true });
+    if (this.note() === savedNote) this.note.set('');
+    this.#isGoingOn = true;
+    try {
+      await this.#router.navigate(['/peers', savedId], { replaceUrl: true });
+    } finally {
+      this.#isGoingOn = false;
+    }
   }
 }

@@ -4,10 +4,9 @@ import type {
   PanelVersionSummary,
   PeerGroupReply,
   PeerGroupSummary,
-  SavePeerGroup,
 } from '@contract';
 import { firstValueFrom } from 'rxjs';
-import { type ApiProblem, toApiProblem } from '../api/api-problem';
+import { ApiProblem, toApiProblem } from '../api/api-problem';
 import { DeskApi } from '../api/desk-api';
 import { FitsApi } from '../api/fits-api';
 import { PanelsApi } from '../api/panels-api';
@@ -74,6 +73,9 @@ export class PeersStore {
   readonly #problem = signal<ApiProblem | null>(null);
   readonly #stale = signal<StaleVersion | null>(null);
   #parentId: string | null = null;
+  /** Counts what was asked for, so that a reply that was overtaken changes nothing. */
+  #loads = 0;
+  #moves = 0;
 
   readonly view = this.#view.asReadonly();
   readonly isSaving = this.#isSaving.asReadonly();
@@ -107,25 +109,36 @@ export class PeersStore {
    * ready to be saved; otherwise they stand on the version's own.
    */
   async load(peerGroupId: string | undefined, isOnNewestPanel: boolean): Promise<void> {
+    const turn = ++this.#loads;
+    this.#moves++;
     this.#view.set({ kind: 'loading' });
     this.#problem.set(null);
     this.#stale.set(null);
     try {
-      this.#view.set(await this.#read(peerGroupId, isOnNewestPanel));
+      const view = await this.#read(peerGroupId, isOnNewestPanel);
+      if (turn !== this.#loads) return;
+      // What is saved next comes after the newest version known here, whichever version is shown.
+      if (view.kind === 'ready') this.#parentId = view.ground.versions[0]?.id ?? null;
+      this.#view.set(view);
     } catch (error) {
-      this.#view.set({ kind: 'failed', problem: toApiProblem(error) });
+      const problem = toApiProblem(error);
+      if (turn === this.#loads) this.#view.set({ kind: 'failed', problem });
     }
   }
 
   async choosePanelVersion(panelVersionId: string): Promise<void> {
-    const view = this.#view();
-    if (view.kind !== 'ready') return;
+    if (this.#view().kind !== 'ready') return;
+    const turn = ++this.#moves;
     try {
       const { companies } = await firstValueFrom(this.#panels.companies(panelVersionId));
+      const view = this.#view();
+      if (turn !== this.#moves || view.kind !== 'ready') return;
+      // The draft as it is now: reasons may have been written while the companies were fetched.
       const draft = moveDraft(view.draft, panelVersionId, companies);
       this.#view.set({ kind: 'ready', ground: { ...view.ground, companies }, draft });
     } catch (error) {
-      this.#problem.set(toApiProblem(error));
+      const problem = toApiProblem(error);
+      if (turn === this.#moves) this.#problem.set(problem);
     }
   }
 
@@ -154,7 +167,8 @@ export class PeersStore {
     this.#isSaving.set(true);
     this.#problem.set(null);
     try {
-      return await this.#save(view.ground, toSavePeerGroup(view.draft, note, this.#parentId));
+      const saved = await this.#save(view.draft, note);
+      return saved.id;
     } catch (error) {
       this.#report(toApiProblem(error));
       return null;
@@ -172,14 +186,33 @@ export class PeersStore {
     return this.save(note);
   }
 
-  async #save(ground: PeersGround, body: SavePeerGroup): Promise<string> {
+  async #save(sent: PeerDraft, note: string): Promise<PeerGroupReply> {
+    const loads = this.#loads;
+    const body = toSavePeerGroup(sent, note, this.#parentId);
     const saved = await firstValueFrom(this.#peers.save(body));
-    const { versions } = await firstValueFrom(this.#peers.list());
+    const listed = await this.#list();
+    const view = this.#view();
+    // Another version was opened meanwhile: it stays, with what belongs to it.
+    if (loads !== this.#loads || view.kind !== 'ready') return saved;
     this.#parentId = saved.id;
     this.#stale.set(null);
-    const draft = startDraft(saved.panelVersionId, ground.companies, saved);
-    this.#view.set({ kind: 'ready', ground: { ...ground, saved, versions, without: null }, draft });
-    return saved.id;
+    const versions = listed ?? [saved, ...view.ground.versions];
+    const ground = { ...view.ground, saved, versions, without: null };
+    const draft = isSameDraft(view.draft, sent)
+      ? startDraft(saved.panelVersionId, ground.companies, saved)
+      : view.draft;
+    this.#view.set({ kind: 'ready', ground, draft });
+    return saved;
+  }
+
+  /** @returns null where the list cannot be had: the version is saved all the same, and must not be called unsaved. */
+  async #list(): Promise<readonly PeerGroupSummary[] | null> {
+    try {
+      return (await firstValueFrom(this.#peers.list())).versions;
+    } catch (error) {
+      if (!(error instanceof ApiProblem)) throw error;
+      return null;
+    }
   }
 
   #report(problem: ApiProblem): void {
@@ -197,8 +230,6 @@ export class PeersStore {
     if (panelVersions.length === 0) return { kind: 'no-panel' };
     const shownId = peerGroupId ?? versions[0]?.id;
     const saved = shownId === undefined ? null : await firstValueFrom(this.#peers.read(shownId));
-    // What is saved next comes after the newest version known here, whichever version is shown.
-    this.#parentId = versions[0]?.id ?? null;
     const panelVersionId =
       isOnNewestPanel || saved === null ? panelVersions[0].id : saved.panelVersionId;
     const { companies } = await firstValueFrom(this.#panels.companies(panelVersionId));
