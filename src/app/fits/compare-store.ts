@@ -17,23 +17,28 @@ export class CompareStore {
   readonly #fits = inject(FitsApi);
   readonly #view = signal<CompareView>({ kind: 'loading' });
   readonly view = this.#view.asReadonly();
+  /** Counts the loads, so that a reply that was overtaken changes nothing. */
+  #loads = 0;
 
   async load(a: string | undefined, b: string | undefined): Promise<void> {
+    const turn = ++this.#loads;
     this.#view.set({ kind: 'loading' });
     if (a === undefined || b === undefined) {
       this.#view.set({ kind: 'unfinished' });
       return;
     }
-    try {
-      const [first, second] = await Promise.all([this.#read(a), this.#read(b)]);
-      this.#view.set(
-        first === null || second === null
-          ? { kind: 'unfinished' }
-          : { kind: 'ready', a: first, b: second },
-      );
-    } catch (error) {
-      this.#view.set({ kind: 'failed', problem: toApiProblem(error) });
-    }
+    const view = await this.#readBoth(a, b).catch((error: unknown): CompareView => ({
+      kind: 'failed',
+      problem: toApiProblem(error),
+    }));
+    if (turn === this.#loads) this.#view.set(view);
+  }
+
+  async #readBoth(a: string, b: string): Promise<CompareView> {
+    const [first, second] = await Promise.all([this.#read(a), this.#read(b)]);
+    return first === null || second === null
+      ? { kind: 'unfinished' }
+      : { kind: 'ready', a: first, b: second };
   }
 
   async #read(fitId: string): Promise<FinishedFit | null> {

@@ -33,15 +33,18 @@ export class FitStartStore {
   readonly #view = signal<FitStartView>({ kind: 'loading' });
 
   readonly view = this.#view.asReadonly();
+  /** Counts the loads, so that a reply that was overtaken changes nothing. */
+  #loads = 0;
 
   /** The newest fit of the peer group version, or of all where none is given. */
   async load(peerGroupId: string | undefined): Promise<void> {
+    const turn = ++this.#loads;
     this.#view.set({ kind: 'loading' });
-    try {
-      this.#view.set(await this.#read(peerGroupId));
-    } catch (error) {
-      this.#view.set({ kind: 'failed', problem: toApiProblem(error) });
-    }
+    const view = await this.#read(peerGroupId).catch((error: unknown): FitStartView => ({
+      kind: 'failed',
+      problem: toApiProblem(error),
+    }));
+    if (turn === this.#loads) this.#view.set(view);
   }
 
   async #read(peerGroupId: string | undefined): Promise<FitStartView> {
