@@ -3,6 +3,7 @@ import type { FitResult } from '@contract';
 import { Figure } from '../ui/figure';
 import { NumberFormat } from '../ui/number-format';
 
+import { regressorsText } from './fit-words';
 import { shownText } from './standing-words';
 import { confidenceText } from '../ui/phrases';
 
@@ -25,6 +26,7 @@ export class CompaniesTable {
   protected readonly confidence = computed(() =>
     confidenceText(this.result().specification.confidence),
   );
+  protected readonly regressors = computed(() => regressorsText(this.result()));
   protected readonly digits = computed(() => {
     const { intercepts, pairs } = this.result();
     return {

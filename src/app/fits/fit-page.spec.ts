@@ -5,7 +5,7 @@ import { provideRouter } from '@angular/router';
 import type { FitReply, Role } from '@contract';
 import { SessionStore } from '../api/session-store';
 import { FitPage } from './fit-page';
-import { exampleDesk, exampleFit } from './testing/example-fit';
+import { exampleDesk, exampleFit, exampleResult } from './testing/example-fit';
 
 describe('the Fit page', () => {
   let fixture: ComponentFixture<FitPage>;
@@ -87,6 +87,20 @@ describe('the Fit page', () => {
     );
     const scenarios = page().querySelector(`a[href="/scenarios?fit=${exampleFit.fit.id}"]`);
     expect(scenarios?.textContent).toContain('Run scenarios');
+  });
+
+  it('says what the company levels are net of, further regressors included', async () => {
+    start(['cfo']);
+    const further = { ...exampleResult.slopes[1], name: 'employees' };
+    const result = { ...exampleResult, slopes: [...exampleResult.slopes, further] };
+    await answer({ ...exampleFit, result });
+    await answerList();
+    expect(page().querySelector('h2#levels')?.textContent).toBe(
+      'Company levels, capex, book equity and employees taken out',
+    );
+    expect(page().querySelector('kv-companies-table caption')?.textContent).toMatch(
+      /market value with\s+capex, book equity and employees taken out/,
+    );
   });
 
   it('opens the lineage of a figure that is selected', async () => {

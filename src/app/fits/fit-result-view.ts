@@ -13,7 +13,7 @@ import { RemarkList } from '../ui/remark-list';
 import { CompaniesTable } from './companies-table';
 import { covarianceName } from './covariance-words';
 import { driftFinding, poolabilityText, warningRemarks } from './evidence-words';
-import { placesText, regressorWord, testText } from './fit-words';
+import { placesText, regressorWord, regressorsText, testText } from './fit-words';
 import { GoodnessList } from './goodness-list';
 import { SampleNotes } from './sample-notes';
 import { slopeRemark, slopeSentence } from './slope-words';
@@ -57,6 +57,7 @@ export class FitResultView {
       ? null
       : placesText(standing.rankSet, rankedCount(this.result()));
   });
+  protected readonly regressors = computed(() => regressorsText(this.result()));
   protected readonly slopes = computed(() =>
     this.result().slopes.map((slope, index) => ({
       ...slope,

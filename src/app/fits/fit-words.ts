@@ -1,10 +1,15 @@
-import type { FitSummary } from '@contract';
+import type { FitResult, FitSummary } from '@contract';
 import type { NumberFormat } from '../ui/number-format';
 import { confidenceText, listed } from '../ui/phrases';
 
 /** Regressors in the reader's words: a fit's first two are always capex and book equity. */
 export function regressorWord(name: string, index: number): string {
   return index === 0 ? 'capex' : index === 1 ? 'book equity' : name;
+}
+
+/** What company levels are net of: `capex, book equity and employees`. */
+export function regressorsText({ slopes }: Pick<FitResult, 'slopes'>): string {
+  return listed(slopes.map(({ name }, index) => regressorWord(name, index)));
 }
 
 /** `place 2 to 5 of 13`, or `place 1 of 11`. */
