@@ -118,7 +118,12 @@ export class ScenarioStore {
   async saveAsCopy(): Promise<ScenarioReply | null> {
     const opened = this.ground()?.saved ?? null;
     const copy = await this.#store((ground, text) =>
-      this.#api.save({ fitId: ground.fit.fit.id, ...text, name: copyName(text.name) }),
+      this.#api.save({
+        fitId: ground.fit.fit.id,
+        ...text,
+        name: copyName(text.name),
+        keepsDraft: true,
+      }),
     );
     if (copy !== null && opened !== null)
       await this.#guarded(() => this.#drafts.discard(copy.fitId, opened.id));

@@ -11,7 +11,7 @@ export interface ScenarioText {
 }
 
 /** What the server is sent of it. */
-export type StoredText = Omit<SaveScenario, 'fitId'>;
+export type StoredText = Omit<SaveScenario, 'fitId' | 'keepsDraft'>;
 
 export const noText: ScenarioText = { name: '', note: '', plan: [] };
 const firstYears = 3;
