@@ -9,7 +9,7 @@ const waitMs = 800;
 
 export type DraftState = 'none' | 'keeping' | 'kept' | 'failed';
 
-interface Draft {
+export interface Draft {
   readonly fitId: string;
   readonly body: SaveDraft;
 }
@@ -57,9 +57,12 @@ export class DraftKeeper {
     return this.#sent;
   }
 
-  /** Takes the stored draft away. @throws {ApiProblem} */
+  /** Takes the stored draft away; one of another plan that waits stays. @throws {ApiProblem} */
   async discard(fitId: string, scenarioId: string | null): Promise<void> {
-    await this.drop();
+    const waiting = this.#waiting;
+    const isOfAnother =
+      waiting !== null && (waiting.fitId !== fitId || waiting.body.scenarioId !== scenarioId);
+    await (isOfAnother ? this.#sent : this.drop());
     await firstValueFrom(this.#api.discardDraft(fitId, scenarioId), { defaultValue: undefined });
   }
 

@@ -37,6 +37,11 @@ export interface ScenarioGround {
   readonly desk: DeskReply;
 }
 
+/** Whether two grounds are of the same scenario on the same fit, in whatever version. */
+export function isSameGround(left: ScenarioGround | null, right: ScenarioGround | null): boolean {
+  return left?.fit.fit.id === right?.fit.fit.id && left?.saved?.id === right?.saved?.id;
+}
+
 export type ScenarioView =
   | { readonly kind: 'loading' }
   | { readonly kind: 'no-fit' }

@@ -5,6 +5,7 @@ import { provideRouter } from '@angular/router';
 import { type ScenarioReply, problemType } from '@contract';
 import { SessionStore } from '../api/session-store';
 import { withValue } from '../ui/plan/change-plan';
+import { ProblemBannerState } from '../ui/problem';
 import { readPlan } from '../ui/plan/read-plan';
 import { tQuantile } from '../ui/plan/t-quantile';
 import { planBasis } from '../ui/plan/testing/plan-basis';
@@ -133,6 +134,68 @@ describe('a scenario on the page', () => {
     expect(store.isChanged()).toBeFalse();
     jasmine.clock().tick(2000);
     await settled();
+  });
+
+  it('keeps what was changed while a new plan was being saved, as a draft of the saved one', async () => {
+    openNew();
+    store.change({ name: 'Build-out' });
+    planCapex(150);
+    const saving = store.save();
+    await settled();
+    planCapex(160);
+    http.expectOne('/api/scenarios').flush(scenario(1, 150));
+    await settled();
+    http.expectOne(draftPath).flush(null);
+    expect((await saving)?.version).toBe(1);
+    expect(store.text().plan[0].values[0]).toBe(160);
+    expect(store.isChanged()).toBeTrue();
+    expect(store.confirmation()).toBeNull();
+    jasmine.clock().tick(800);
+    await settled();
+    const kept = http.expectOne(draftPath).request.body as {
+      scenarioId: string;
+      plan: { values: number[] }[];
+    };
+    expect(kept.scenarioId).toBe(scenarioId);
+    expect(kept.plan[0].values[0]).toBe(160);
+  });
+
+  it('leaves the plan alone that the page has gone on to when a reply comes late', async () => {
+    openSaved();
+    planCapex(150);
+    const saving = store.save();
+    await settled();
+    store.open({ scenarioId: null, fitId });
+    http.expectOne('/api/desk').flush(deskReply);
+    http.expectOne(`/api/fits/${fitId}`).flush(fitReply);
+    http.expectOne(`/api/fits/${fitId}/scenarios`).flush({ scenarios: [] });
+    http.expectOne(draftPath).flush({ draft: null });
+    http.expectOne(`/api/scenarios/${scenarioId}`).flush(scenario(2, 150));
+    await saving;
+    expect(store.ground()?.saved).toBeNull();
+    expect(store.text().name).toBe('');
+    expect(store.text().plan[0].values[0]).toBe(110);
+    expect(store.confirmation()).toBeNull();
+  });
+
+  it('says in the banner what failed for a plan that was left, and keeps its draft', async () => {
+    openSaved();
+    planCapex(150);
+    const saving = store.save();
+    await settled();
+    openNew();
+    http
+      .expectOne(`/api/scenarios/${scenarioId}`)
+      .flush(
+        { type: problemType('stale-version'), title: 'Conflict', status: 409, detail: 'Version 2' },
+        { status: 409, statusText: 'Conflict' },
+      );
+    expect(await saving).toBeNull();
+    expect(store.conflict()).toBeNull();
+    expect(TestBed.inject(ProblemBannerState).problem()).not.toBeNull();
+    await settled();
+    const kept = http.expectOne(draftPath).request.body as { scenarioId: string };
+    expect(kept.scenarioId).toBe(scenarioId);
   });
 
   it('names the years for which the server computed something else', async () => {

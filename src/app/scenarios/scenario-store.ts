@@ -1,10 +1,11 @@
-import { Injectable, computed, inject, signal } from '@angular/core';
+import { DestroyRef, Injectable, computed, inject, signal } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { type ScenarioReply, apiRoutes, mayCall } from '@contract';
 import { type Observable, Subject, firstValueFrom, startWith, switchMap } from 'rxjs';
 import { ApiProblem } from '../api/api-problem';
 import { ScenariosApi } from '../api/scenarios-api';
 import { SessionStore } from '../api/session-store';
+import { ProblemBannerState } from '../ui/problem';
 import { readPlan } from '../ui/plan/read-plan';
 import { tQuantile } from '../ui/plan/t-quantile';
 import { DraftKeeper } from './draft-keeper';
@@ -14,15 +15,16 @@ import {
   type ScenarioGround,
   ScenarioGrounds,
   type ScenarioView,
+  isSameGround,
 } from './scenario-ground';
 import {
   type ScenarioText,
   type StoredText,
   copyName,
+  draftOf,
   isSameText,
   noText,
   storedText,
-  toStoredPlan,
   toStoredText,
   toText,
   withScenario,
@@ -37,6 +39,8 @@ export type Confirmation =
 @Injectable()
 export class ScenarioStore {
   readonly #api = inject(ScenariosApi);
+  readonly #banner = inject(ProblemBannerState);
+  readonly #page = inject(DestroyRef);
   readonly #drafts = inject(DraftKeeper);
   readonly #grounds = inject(ScenarioGrounds);
   readonly #sessions = inject(SessionStore);
@@ -132,16 +136,17 @@ export class ScenarioStore {
 
   /** Shows the version that somebody else stored meanwhile; one's own stays as a draft and can be brought back. */
   async openTheirs(): Promise<void> {
-    const saved = this.ground()?.saved;
+    const ground = this.ground();
+    const saved = ground?.saved;
     if (!saved) return;
-    const mine = this.#text();
     this.#keepDraft();
     await this.#drafts.flush();
     await this.#guarded(async () => {
       const theirs = await firstValueFrom(this.#api.read(saved.id));
+      if (!this.#isShown(ground)) return;
       this.#patchGround(theirs);
+      this.#setAside.set(this.#text());
       this.#text.set(toText(theirs));
-      this.#setAside.set(mine);
       this.#conflict.set(null);
     });
   }
@@ -157,9 +162,12 @@ export class ScenarioStore {
   async discard(): Promise<void> {
     const ground = this.ground();
     if (ground === null) return;
+    const given = this.#text();
     await this.#guarded(async () => {
       await this.#drafts.discard(ground.fit.fit.id, ground.saved?.id ?? null);
-      this.#text.set(storedText(ground));
+      if (!this.#isShown(ground)) return;
+      if (this.#text() === given) this.#text.set(storedText(ground));
+      else this.#keepDraft();
       this.#restoredAt.set(null);
       this.#setAside.set(null);
       this.#conflict.set(null);
@@ -169,12 +177,13 @@ export class ScenarioStore {
 
   /** @returns whether it is gone. */
   async remove(scenario: ScenarioReply): Promise<boolean> {
+    const ground = this.ground();
     const isGone = await this.#guarded(async () => {
-      if (scenario.id === this.ground()?.saved?.id) await this.#drafts.drop();
+      if (scenario.id === ground?.saved?.id) await this.#drafts.drop();
       await firstValueFrom(this.#api.delete(scenario.id), { defaultValue: undefined });
     });
-    if (isGone)
-      this.#patchScenarios((scenarios) => scenarios.filter(({ id }) => id !== scenario.id));
+    if (!isGone) this.#keepEdit(ground);
+    else this.#patchScenarios((scenarios) => scenarios.filter(({ id }) => id !== scenario.id));
     return isGone;
   }
 
@@ -182,6 +191,7 @@ export class ScenarioStore {
   restore(scenario: ScenarioReply): Promise<boolean> {
     return this.#guarded(async () => {
       const back = await firstValueFrom(this.#api.restore(scenario.id));
+      if (this.ground()?.fit.fit.id !== back.fitId) return;
       this.#patchScenarios((scenarios) => withScenario(scenarios, back));
     });
   }
@@ -204,39 +214,48 @@ export class ScenarioStore {
   ): Promise<ScenarioReply | null> {
     const [ground, reading] = [this.ground(), this.reading()];
     if (ground === null || reading === null || this.#isSaving()) return null;
-    const text = toStoredText(this.#text());
+    const sent = this.#text();
     this.#isSaving.set(true);
     this.#conflict.set(null);
     let stored: ScenarioReply | null = null;
     await this.#guarded(async () => {
       await this.#drafts.drop();
-      const reply = await firstValueFrom(send(ground, text));
+      const reply = await firstValueFrom(send(ground, toStoredText(sent)));
+      stored = reply;
+      if (!this.#isShown(ground)) return;
       this.#patchGround(reply);
-      this.#text.set(toText(reply));
       this.#restoredAt.set(null);
       this.#setAside.set(null);
+      // What was changed while the reply was on its way is not saved: it stays, as a draft of what now is.
+      if (!isSameText(this.#text(), sent)) {
+        this.#keepDraft();
+        if (ground.saved === null) await this.#drafts.discard(ground.fit.fit.id, null);
+        return;
+      }
+      this.#text.set(toText(reply));
       const years = yearsThatDiffer(reading.years, reply.years);
       this.#confirmation.set(
         years.length === 0
           ? { kind: 'agrees', version: reply.version }
           : { kind: 'differs', version: reply.version, years },
       );
-      stored = reply;
     });
     this.#isSaving.set(false);
-    if (stored === null) this.#keepDraft();
+    if (stored === null) this.#keepEdit(ground, sent);
     return stored;
   }
 
-  /** Runs a change; a problem of the server stays on the page beside what was entered. */
+  /** Runs a change; its problem stays beside what was entered, and goes to the banner when the page has gone on. */
   async #guarded(work: () => Promise<void>): Promise<boolean> {
+    const ground = this.ground();
     this.#problem.set(null);
     try {
       await work();
       return true;
     } catch (error) {
       if (!(error instanceof ApiProblem)) throw error;
-      if (error.slug === 'stale-version') this.#conflict.set(error);
+      if (!this.#isShown(ground)) this.#banner.report(error.shown);
+      else if (error.slug === 'stale-version') this.#conflict.set(error);
       else this.#problem.set(error);
       return false;
     }
@@ -259,10 +278,23 @@ export class ScenarioStore {
   #keepDraft(): void {
     const ground = this.ground();
     if (ground === null || !this.maySave()) return;
-    const { name, note, plan } = this.#text();
-    const scenarioId = ground.saved?.id ?? null;
-    const body = { scenarioId, name, note, plan: toStoredPlan(plan) };
-    this.#drafts.keep({ fitId: ground.fit.fit.id, body });
+    this.#drafts.keep(draftOf(ground, this.#text()));
+  }
+
+  /** Keeps the draft again that a failed change had dropped; `sent` when the page has gone on to another plan. */
+  #keepEdit(ground: ScenarioGround | null, sent?: ScenarioText): void {
+    if (this.#isShown(ground)) {
+      if (this.isChanged()) this.#keepDraft();
+    } else if (ground !== null && sent !== undefined) {
+      void this.#drafts.flush();
+      this.#drafts.keep(draftOf(ground, sent));
+      void this.#drafts.flush();
+    }
+  }
+
+  /** Whether a reply for this ground still finds it on the page. */
+  #isShown(ground: ScenarioGround | null): boolean {
+    return !this.#page.destroyed && isSameGround(ground, this.ground());
   }
 
   #patchGround(saved: ScenarioReply): void {

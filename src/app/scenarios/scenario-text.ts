@@ -1,6 +1,7 @@
 import type { PlanYear, SaveScenario, ScenarioReply } from '@contract';
 import { heldPlan, isSamePlan } from '../ui/plan/change-plan';
 import type { PlannedYear } from '../ui/plan/read-plan';
+import type { Draft } from './draft-keeper';
 import type { ScenarioGround } from './scenario-ground';
 
 /** A plan as it stands on the page, saved or not. */
@@ -30,7 +31,12 @@ export function toStoredText({ name, note, plan }: ScenarioText): StoredText {
   return { name, note, plan: toStoredPlan(plan) };
 }
 
-export function toStoredPlan(plan: readonly PlannedYear[]): PlanYear[] {
+/** The text as the draft of what it was written on. */
+export function draftOf({ fit, saved }: ScenarioGround, text: ScenarioText): Draft {
+  return { fitId: fit.fit.id, body: { scenarioId: saved?.id ?? null, ...toStoredText(text) } };
+}
+
+function toStoredPlan(plan: readonly PlannedYear[]): PlanYear[] {
   return plan.map(({ year, values }) => ({ year, values: [...values] }));
 }
 

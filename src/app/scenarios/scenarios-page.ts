@@ -1,6 +1,7 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  DestroyRef,
   LOCALE_ID,
   computed,
   effect,
@@ -28,7 +29,6 @@ import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
 import { decidingYear, planFinding } from '../ui/plan/plan-words';
 import { planLineage } from '../ui/plan/planned-figure';
 import type { PlannedYear } from '../ui/plan/read-plan';
-import { ProblemBannerState } from '../ui/problem';
 import { ProblemNotice } from '../ui/problem-notice';
 import { UndoNotice } from '../ui/undo-notice';
 import { DraftKeeper } from './draft-keeper';
@@ -66,7 +66,7 @@ const unnamed = 'This plan';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class ScenariosPage {
-  readonly #banner = inject(ProblemBannerState);
+  readonly #destroyRef = inject(DestroyRef);
   readonly #context = inject(PageContext);
   readonly #lineage = inject(LineageStore);
   readonly #locale = inject(LOCALE_ID);
@@ -189,35 +189,30 @@ export class ScenariosPage {
 
   protected async save(): Promise<void> {
     if (this.#hasNameProblem()) return;
-    await this.#goTo(await this.store.save());
+    await this.#follow(() => this.store.save());
   }
 
   protected async saveAsCopy(): Promise<void> {
     if (this.#hasNameProblem()) return;
-    await this.#goTo(await this.store.saveAsCopy());
+    await this.#follow(() => this.store.saveAsCopy());
   }
 
   protected async copy(scenario: ScenarioReply): Promise<void> {
-    await this.#goTo(await this.store.copy(scenario));
+    await this.#follow(() => this.store.copy(scenario));
   }
 
   protected async remove(scenario: ScenarioReply): Promise<void> {
     const isOpen = scenario.id === this.store.ground()?.saved?.id;
+    const { url } = this.#router;
     if (!(await this.store.remove(scenario))) return;
-    if (isOpen)
+    if (isOpen && this.#isStillAt(url))
       await this.#router.navigate(['/scenarios'], { queryParams: { fit: scenario.fitId } });
     await this.#undo.show(`Deleted “${scenario.name}”`, () => void this.#restore(scenario, isOpen));
   }
 
   async #restore(scenario: ScenarioReply, opens: boolean): Promise<void> {
-    const isHere = this.#router.url.startsWith('/scenarios');
-    if (await this.store.restore(scenario)) {
-      if (opens && isHere) await this.#goTo(scenario);
-      return;
-    }
-    // The notice outlives the page: what went wrong then has no other place.
-    const problem = this.store.problem();
-    if (problem !== null && !isHere) this.#banner.report(problem.shown);
+    const restored = async () => ((await this.store.restore(scenario)) ? scenario : null);
+    await (opens ? this.#follow(restored) : restored());
   }
 
   #hasNameProblem(): boolean {
@@ -225,9 +220,16 @@ export class ScenariosPage {
     return nameProblem(this.store.text().name) !== '';
   }
 
-  async #goTo(scenario: ScenarioReply | null): Promise<void> {
-    if (scenario === null) return;
+  /** Goes to the scenario that comes of the work, unless the person has gone elsewhere meanwhile. */
+  async #follow(work: () => Promise<ScenarioReply | null>): Promise<void> {
+    const { url } = this.#router;
+    const scenario = await work();
+    if (scenario === null || !this.#isStillAt(url)) return;
     this.isTried.set(false);
     await this.#router.navigate(['/scenarios', scenario.id]);
+  }
+
+  #isStillAt(url: string): boolean {
+    return !this.#destroyRef.destroyed && this.#router.url === url;
   }
 }
