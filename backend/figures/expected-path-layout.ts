@@ -52,6 +52,14 @@ export interface ExpectedPathPoint extends Point {
   readonly bounds: string;
 }
 
+/** A year of one of the lines, as it is chosen: of what happened, of the base, or of the plan with this index. */
+export interface ExpectedPathChoice {
+  readonly kind: 'actual' | 'base' | 'plan';
+  /** Which of the plans; 0 for the others. */
+  readonly plan: number;
+  readonly year: number;
+}
+
 export interface PlacedPlan {
   readonly name: string;
   readonly path: string;

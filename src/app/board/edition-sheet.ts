@@ -1,12 +1,14 @@
 import { DatePipe } from '@angular/common';
 import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
 import type { EditionContent } from '@contract';
+import type { ExpectedPathChoice } from '@figures';
 import { expectedValue } from '@prediction';
 import type { PlannedFigure } from '../api/lineage-store';
 import { ExpectedPath } from '../charts/expected-path/expected-path';
 import { Figure } from '../ui/figure';
 import { NumberFormat } from '../ui/number-format';
 import { namedParts } from '../ui/page-header';
+import { chosenFigure } from '../ui/plan/chosen-figure';
 import { expectedPathData } from '../ui/plan/plan-data';
 import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
 import { decidingYear, planFinding } from '../ui/plan/plan-words';
@@ -103,13 +105,12 @@ export class EditionSheet {
     };
   });
 
-  /** A year of the chart: what the model expected of it, or expects of it under the first plan. */
-  protected openYear(year: number): void {
-    const plan = this.plans().at(0);
-    const planned = plan?.years.find((candidate) => candidate.year === year);
-    if (plan !== undefined && planned !== undefined)
-      this.openPlanned({ plan, year: planned, kind: 'expected' });
-    else this.figureOpened.emit({ key: `fitted.${year}` });
+  /** A year of the chart: what the model expected of it, or expects of it under the plan that was chosen. */
+  protected openYear(choice: ExpectedPathChoice): void {
+    if (choice.kind === 'actual') this.figureOpened.emit({ key: `fitted.${choice.year}` });
+    const basis = this.content().fit.prediction;
+    const planned = basis === null ? undefined : chosenFigure(basis, this.plans(), choice);
+    if (planned !== undefined) this.openPlanned(planned);
   }
 
   protected openLine(line: EvidenceLine): void {

@@ -4,6 +4,7 @@ import type { ScenarioReply } from '@contract';
 import { Figure } from '../ui/figure';
 import { NumberFormat } from '../ui/number-format';
 import type { PlannedFigureWanted } from '../ui/plan/plan-table';
+import { storedFigures } from './scenario-text';
 
 /** The fit's other scenarios: what each comes to by its last year. */
 @Component({
@@ -132,11 +133,8 @@ export class ScenarioList {
 
   protected readonly rows = computed(() =>
     this.scenarios().map((scenario) => {
-      const years = scenario.years.map((year, index) => ({
-        ...year,
-        values: scenario.plan[index].values,
-      }));
-      return { scenario, plan: { name: scenario.name, years }, last: years[years.length - 1] };
+      const plan = storedFigures(scenario);
+      return { scenario, plan, last: plan.years[plan.years.length - 1] };
     }),
   );
   protected readonly expectedDigits = computed(() =>

@@ -1,5 +1,6 @@
 import type { PlanYear, SaveScenario, ScenarioReply } from '@contract';
 import { heldPlan, isSamePlan } from '../ui/plan/change-plan';
+import type { PlanTablePlan } from '../ui/plan/plan-table';
 import type { PlannedYear } from '../ui/plan/read-plan';
 import type { Draft } from './draft-keeper';
 import type { ScenarioGround } from './scenario-ground';
@@ -29,6 +30,11 @@ export function toText({ name, note, plan }: ScenarioText): ScenarioText {
 
 export function toStoredText({ name, note, plan }: ScenarioText): StoredText {
   return { name, note, plan: toStoredPlan(plan) };
+}
+
+/** A stored scenario as a plan with its figures. */
+export function storedFigures({ name, plan, years }: ScenarioReply): PlanTablePlan {
+  return { name, years: years.map((year, index) => ({ ...year, values: plan[index].values })) };
 }
 
 /** The text as the draft of what it was written on. */

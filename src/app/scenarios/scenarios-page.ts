@@ -13,6 +13,7 @@ import {
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
 import type { ScenarioReply } from '@contract';
+import type { ExpectedPathChoice } from '@figures';
 import { LineageStore } from '../api/lineage-store';
 import { DifferenceBars } from '../charts/difference-bars/difference-bars';
 import { ExpectedPath } from '../charts/expected-path/expected-path';
@@ -22,6 +23,7 @@ import { NumberFormat } from '../ui/number-format';
 import { PageContext } from '../ui/page-context';
 import { PageHeader } from '../ui/page-header';
 import { withYearSet } from '../ui/plan/change-plan';
+import { chosenFigure } from '../ui/plan/chosen-figure';
 import { FamiliarNotes } from '../ui/plan/familiar-notes';
 import { differenceData, expectedPathData } from '../ui/plan/plan-data';
 import { PlanEditor } from '../ui/plan/plan-editor';
@@ -36,6 +38,7 @@ import { ScenarioList } from './scenario-list';
 import { ScenarioName, nameProblem } from './scenario-name';
 import { ScenarioNotices } from './scenario-notices';
 import { ScenarioStore } from './scenario-store';
+import { storedFigures } from './scenario-text';
 import { contextOf } from './scenario-words';
 import { shortHash } from '../ui/phrases';
 
@@ -125,14 +128,16 @@ export class ScenariosPage {
     const ground = this.store.ground();
     return ground?.scenarios.filter(({ id }) => id !== ground.saved?.id) ?? [];
   });
+  /** The plans of the chart, the one on the page first. */
+  protected readonly drawnPlans = computed(() => {
+    const compared = this.others().filter(({ id }) => this.drawn().includes(id));
+    return [...this.plans(), ...compared.map(storedFigures)];
+  });
   protected readonly path = computed(() => {
     const [ground, reading] = [this.store.ground(), this.store.reading()];
     if (ground === null || reading === null) return null;
-    const compared = this.others().filter(({ id }) => this.drawn().includes(id));
-    return expectedPathData(ground.fit.result?.ownYears ?? [], reading.base, [
-      { name: this.name(), years: reading.years },
-      ...compared,
-    ]);
+    const ownYears = ground.fit.result?.ownYears ?? [];
+    return expectedPathData(ownYears, reading.base, this.drawnPlans());
   });
   protected readonly pathText = computed(() => ({
     title: this.finding(),
@@ -172,13 +177,14 @@ export class ScenariosPage {
     this.#lineage.open({ fitId: ground.fit.fit.id }, key, planned);
   }
 
-  /** A year of the chart: what the model expected of it, or expects of it under the plan. */
-  protected openYear(year: number): void {
-    const [plan] = this.plans();
-    const planned = plan.years.find((candidate) => candidate.year === year);
+  /** A year of the chart: what the model expected of it, or expects of it under the plan that was chosen. */
+  protected openYear(choice: ExpectedPathChoice): void {
     const ground = this.store.ground();
-    if (planned !== undefined) this.openFigure({ plan, year: planned, kind: 'expected' });
-    else if (ground !== null) this.#lineage.open({ fitId: ground.fit.fit.id }, `fitted.${year}`);
+    if (ground === null) return;
+    const planned = chosenFigure(ground.basis, this.drawnPlans(), choice);
+    if (planned !== undefined) this.openFigure(planned);
+    if (choice.kind === 'actual')
+      this.#lineage.open({ fitId: ground.fit.fit.id }, `fitted.${choice.year}`);
   }
 
   protected toggleDrawn(id: string): void {

@@ -2,6 +2,7 @@ import { TestKey } from '@angular/cdk/testing';
 import { TestbedHarnessEnvironment } from '@angular/cdk/testing/testbed';
 import { TestBed } from '@angular/core/testing';
 import type { FitResult } from '@contract';
+import type { ExpectedPathChoice } from '@figures';
 import { NumberFormat } from '../../ui/number-format';
 import { ChartHarness } from '../chart-harness';
 import { ExpectedPath } from './expected-path';
@@ -94,15 +95,24 @@ describe('expected path', () => {
     expect(new Set(['.expected-line', '.plan-line', '.base-line'].map(dashes)).size).toBe(3);
   });
 
-  it('reads out the point with the focus, and tells which year was chosen', async () => {
+  it('reads out the point with the focus, and tells which year of which line was chosen', async () => {
     const { fixture, chart, page } = await shown();
-    const chosen: number[] = [];
-    fixture.componentInstance.yearSelected.subscribe((year) => chosen.push(year));
+    const chosen: ExpectedPathChoice[] = [];
+    fixture.componentInstance.yearSelected.subscribe((choice) => chosen.push(choice));
     await chart.press(TestKey.END);
     expect(page.querySelector('.readout')?.textContent.trim()).toBe(
       '2026, Plan A: expected 9,890 (9,590 to 10,190)',
     );
     await chart.press(TestKey.ENTER);
-    expect(chosen).toEqual([2026]);
+    await chart.press(TestKey.HOME);
+    await chart.press(TestKey.ENTER);
+    await chart.press(TestKey.RIGHT_ARROW);
+    await chart.press(TestKey.RIGHT_ARROW);
+    await chart.press(TestKey.ENTER);
+    expect(chosen).toEqual([
+      { kind: 'plan', plan: 1, year: 2026 },
+      { kind: 'actual', plan: 0, year: 2024 },
+      { kind: 'base', plan: 0, year: 2026 },
+    ]);
   });
 });

@@ -8,6 +8,7 @@ import {
   signal,
 } from '@angular/core';
 import {
+  type ExpectedPathChoice,
   type ExpectedPathData,
   type ExpectedPathPoint,
   type ExpectedPlan,
@@ -39,7 +40,7 @@ export class ExpectedPath {
   readonly plans = input<readonly ExpectedPlan[]>([]);
   readonly kind = input<FigureKind>('money');
 
-  readonly yearSelected = output<number>();
+  readonly yearSelected = output<ExpectedPathChoice>();
 
   protected readonly width = signal(640);
   readonly #data = computed((): ExpectedPathData => ({
@@ -88,6 +89,10 @@ export class ExpectedPath {
   protected readonly rows = computed((): ChartRow[] =>
     expectedPathRows(this.#data(), this.#numbers, this.kind()),
   );
+
+  protected choose({ kind, plan, year }: ExpectedPathPoint): void {
+    this.yearSelected.emit({ kind: kind === 'own' ? 'actual' : kind, plan, year });
+  }
 
   /** `2028, Plan B: expected 10,340 (9,600 to 11,080)`. */
   protected label(point: ExpectedPathPoint): string {
