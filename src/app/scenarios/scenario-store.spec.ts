@@ -76,6 +76,10 @@ describe('a scenario on the page', () => {
 
   function openSaved(draft: object | null = null): void {
     store.open({ scenarioId, fitId: null });
+    answerSaved(draft);
+  }
+
+  function answerSaved(draft: object | null = null): void {
     http.expectOne(`/api/scenarios/${scenarioId}`).flush(scenario(1, 120));
     http.expectOne('/api/desk').flush(deskReply);
     http.expectOne(`/api/fits/${fitId}`).flush(fitReply);
@@ -100,6 +104,19 @@ describe('a scenario on the page', () => {
     expect(store.text().plan.map(({ year }) => year)).toEqual([2026, 2027, 2028]);
     expect(store.reading()?.years[2].difference.estimate).toBe(0);
     expect(store.isChanged()).toBeFalse();
+  });
+
+  it('asks for the same address again when reading it failed', () => {
+    store.open({ scenarioId, fitId: null });
+    http
+      .expectOne(`/api/scenarios/${scenarioId}`)
+      .flush(null, { status: 503, statusText: 'Service Unavailable' });
+    expect(store.view().kind).toBe('failed');
+    store.retry();
+    expect(store.view().kind).toBe('loading');
+    answerSaved();
+    expect(store.ground()?.saved?.id).toBe(scenarioId);
+    expect(store.text().plan[0].values[0]).toBe(120);
   });
 
   it('follows each change at once, and keeps a draft once changes pause', async () => {

@@ -45,6 +45,7 @@ export class ScenarioStore {
   readonly #grounds = inject(ScenarioGrounds);
   readonly #sessions = inject(SessionStore);
   readonly #addresses = new Subject<ScenarioAddress>();
+  #address: ScenarioAddress = { scenarioId: null, fitId: null };
   readonly #view = signal<ScenarioView>({ kind: 'loading' });
   readonly #text = signal<ScenarioText>(noText);
   readonly #restoredAt = signal<string | null>(null);
@@ -100,7 +101,13 @@ export class ScenarioStore {
       (address.scenarioId !== null || ground.fit.fit.id === address.fitId);
     if (isShown) return;
     void this.#drafts.flush();
+    this.#address = address;
     this.#addresses.next(address);
+  }
+
+  /** Reads once more what was asked for last, after it could not be read. */
+  retry(): void {
+    this.#addresses.next(this.#address);
   }
 
   change(change: Partial<ScenarioText>): void {
