@@ -258,9 +258,17 @@ describe('a scenario on the page', () => {
     expect(store.text().plan[0].values[0]).toBe(200);
     expect(store.conflict()).toBeNull();
 
+    planCapex(210);
+    jasmine.clock().tick(2000);
+    await settled();
+    http.expectNone(draftPath);
     store.bringBack();
     expect(store.text().plan[0].values[0]).toBe(150);
     expect(store.ground()?.saved?.version).toBe(2);
+    jasmine.clock().tick(800);
+    await settled();
+    const again = http.expectOne(draftPath).request.body as typeof body;
+    expect(again.plan[0].values[0]).toBe(150);
   });
 
   it('saves the plan as a copy beside the scenario that it came from', async () => {

@@ -152,7 +152,7 @@ export class ScenarioStore {
       const theirs = await firstValueFrom(this.#api.read(saved.id));
       if (!this.#isShown(ground)) return;
       this.#patchGround(theirs);
-      this.#setAside.set(this.#text());
+      this.#setAside.set(this.#setAside() ?? this.#text());
       this.#text.set(toText(theirs));
       this.#conflict.set(null);
     });
@@ -282,9 +282,10 @@ export class ScenarioStore {
     this.#restoredAt.set(isRestored ? draft.updatedAt : null);
   }
 
+  /** While somebody else's version is looked at the draft is one's own plan, and no edit of theirs takes its place. */
   #keepDraft(): void {
     const ground = this.ground();
-    if (ground === null || !this.maySave()) return;
+    if (ground === null || !this.maySave() || this.#setAside() !== null) return;
     this.#drafts.keep(draftOf(ground, this.#text()));
   }
 

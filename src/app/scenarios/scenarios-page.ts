@@ -111,6 +111,7 @@ export class ScenariosPage {
   });
   protected readonly draftWords = computed(() => {
     if (!this.store.isChanged()) return this.store.ground()?.saved === null ? '' : 'Saved';
+    if (this.store.setAside() !== null) return 'Not saved';
     const state = this.store.draftState();
     if (state === 'keeping') return 'Keeping your draft…';
     return state === 'kept' ? 'Not saved; kept as your draft' : 'Not saved';
