@@ -317,6 +317,43 @@ describe('a scenario on the page', () => {
     expect(store.ground()?.scenarios.length).toBe(1);
   });
 
+  it('puts a scenario of another fit back without listing it on this one', async () => {
+    openSaved();
+    const ofAnother = { ...scenario(1, 120), fitId: '00000000-0000-4000-8000-00000000000f' };
+    const elsewhere = { ...ofAnother, id: '00000000-0000-4000-8000-00000000000b' };
+    const restoring = store.restore(elsewhere);
+    http.expectOne(`/api/scenarios/${elsewhere.id}/restore`).flush(elsewhere);
+    expect(await restoring).toBeTrue();
+    expect(store.ground()?.scenarios.map(({ id }) => id)).toEqual([scenarioId]);
+  });
+
+  it('keeps the draft again when the scenario could not be taken away', async () => {
+    openSaved();
+    planCapex(150);
+    const removing = store.remove(scenario(1, 120));
+    await settled();
+    http
+      .expectOne(`/api/scenarios/${scenarioId}`)
+      .flush(null, { status: 503, statusText: 'Service Unavailable' });
+    expect(await removing).toBeFalse();
+    expect(store.problem()).not.toBeNull();
+    jasmine.clock().tick(800);
+    await settled();
+    const kept = http.expectOne(draftPath).request.body as { plan: { values: number[] }[] };
+    expect(kept.plan[0].values[0]).toBe(150);
+  });
+
+  it('keeps an edit made while the draft was being discarded', async () => {
+    openSaved();
+    planCapex(150);
+    const discarding = store.discard();
+    await settled();
+    planCapex(170);
+    http.expectOne(`${draftPath}?scenario=${scenarioId}`).flush(null);
+    await discarding;
+    expect(store.text().plan[0].values[0]).toBe(170);
+  });
+
   it('moves for a CFO without asking for a draft or keeping one', async () => {
     TestBed.inject(SessionStore).accept(sessionOf('cfo'));
     store.open({ scenarioId: null, fitId });
