@@ -19,7 +19,6 @@ export const problemSlugs = [
   'four-eyes',
   'import-not-ready',
   'stale-version',
-  'cannot-fit',
   'billing-unavailable',
   'storage-full',
 ] as const;

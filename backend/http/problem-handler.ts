@@ -21,7 +21,6 @@ const titles: Readonly<Record<ProblemSlug, string>> = {
   'four-eyes': 'Four eyes: another person has to sign',
   'import-not-ready': 'The import is not ready',
   'stale-version': 'A newer version exists',
-  'cannot-fit': 'The fit cannot be made',
   'billing-unavailable': 'Billing cannot be reached just now',
   'storage-full': 'No space left',
 };
