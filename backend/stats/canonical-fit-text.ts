@@ -23,17 +23,18 @@ export function canonicalFitText(
   });
 }
 
-/** [company, year, outcome, regressors …], by company and year. */
+/** [company, year, outcome, regressors …] in the panel's measure, by company and year. */
 function rowsUsed(sample: PanelSample): (string | number)[][] {
+  const { levels } = sample;
   const rows = sample.companies.flatMap((company, index) => {
     const from = sample.starts[index];
     return Array.from({ length: sample.starts[index + 1] - from }, (_, offset) => {
       const row = from + offset;
-      const regressors = sample.regressors.map((column) => column[row]);
-      return [company, sample.year[row], sample.outcome[row], ...regressors];
+      const regressors = levels.regressors.map((column) => column[row]);
+      return [company, sample.year[row], levels.outcome[row], ...regressors];
     });
   });
-  const singles = sample.singles.map(({ company, year, outcome, regressors }) => [
+  const singles = sample.singles.map(({ company, year, levels: { outcome, regressors } }) => [
     company,
     year,
     outcome,

@@ -11,10 +11,12 @@ export type {
 /** The specification of a fit: everything beside the rows, the members and the own company that decides its figures. */
 export interface Specification {
   /** Effects taken out of every variable. */
-  readonly effects: 'company';
-  readonly form: 'levels';
-  readonly lag: 0;
-  /** Covariance of the slopes, by the names of `slopes/slope-covariance.ts`. */
+  readonly effects: Effects;
+  /** Natural logs of outcome and regressors, or their levels. */
+  readonly form: 'levels' | 'log';
+  /** 1: every regressor is replaced by its value one calendar year earlier. */
+  readonly lag: 0 | 1;
+  /** Covariance of the slopes, by the names of `slopes/covariance-table.ts`. */
   readonly slopes: SlopeCovarianceName;
   /** Confidence level of every interval of what the model estimates, strictly between 0 and 1. */
   readonly confidence: number;
@@ -22,7 +24,20 @@ export interface Specification {
   readonly seed: number | null;
 }
 
-export type SlopeCovarianceName = 'cr2' | 'cr1' | 'cr0' | 'classical';
+export type Effects = 'company' | 'company,year';
+
+export type SlopeCovarianceName =
+  | 'cr2'
+  | 'wild'
+  | 'cr1'
+  | 'cr0'
+  | 'classical'
+  | 'hc0'
+  | 'hc1'
+  | 'hc2'
+  | 'hc3'
+  | 'two-way'
+  | 'driscoll-kraay';
 
 /**
  * One row a company and fiscal year, by column. All arrays have the same length, NaN stands for a missing cell.
@@ -58,6 +73,8 @@ export interface SlopeEstimate extends IntervalEstimate {
   readonly statistic: number | null;
   readonly degreesOfFreedom: number | null;
   readonly pValue: number | null;
+  /** Which ends a bootstrap interval does not have. */
+  readonly unbounded?: 'low' | 'high' | 'both';
 }
 
 export interface InterceptEstimate extends IntervalEstimate {
@@ -78,6 +95,26 @@ export interface Standing extends IntervalEstimate {
   /** First and last place that the data cannot rule out; null with `rankReason`. */
   readonly rankSet: readonly [number, number] | null;
   readonly rankReason?: string;
+  /** In log form: the standing and its ends as percent, 100 · (exp(·) − 1). */
+  readonly percent?: IntervalPercent;
+}
+
+export interface IntervalPercent {
+  readonly estimate: number;
+  readonly low: number | null;
+  readonly high: number | null;
+}
+
+/** A year's effect; with year effects they sum to zero over the sample's years. */
+export interface YearEffect {
+  readonly year: number;
+  readonly estimate: number;
+}
+
+/** Duan's smearing factor of a log form: mean of exp(e), over all rows and over the own company's. */
+export interface Smearing {
+  readonly factor: number;
+  readonly own: number | null;
 }
 
 /** The difference a_own − a_peer with the standard error of the rank set's steps (its own number of cosines). */
@@ -117,7 +154,10 @@ export type WarningCode =
   | 'single-row'
   | 'perfect-fit'
   | 'ill-conditioned'
-  | 'spelling';
+  | 'spelling'
+  | 'wild-set-disconnected'
+  | 'negative-eigenvalues'
+  | 'smear-differs';
 
 export interface DroppedRow {
   readonly row: number;
@@ -149,9 +189,14 @@ export interface FitResult {
   readonly members: readonly string[];
   readonly sample: Sample;
   readonly slopes: readonly SlopeEstimate[];
-  readonly slopeCovariance: readonly (readonly number[])[];
+  /** Null for the bootstrap, which has none. */
+  readonly slopeCovariance: readonly (readonly number[])[] | null;
+  readonly slopeCovarianceReason?: string;
   readonly intercepts: readonly InterceptEstimate[];
-  readonly yearEffects: null;
+  /** Null without year effects. */
+  readonly yearEffects: readonly YearEffect[] | null;
+  /** Null in levels. */
+  readonly smearing: Smearing | null;
   readonly standing: Standing | null;
   /** Why there is no standing, where an own company was named. */
   readonly standingReason?: string;

@@ -42,15 +42,19 @@ export function ownLeverages(
   );
 }
 
-/** The largest x̃'Q⁻¹x̃ of any peer's row. */
-export function peerLeverage(fit: WithinFit, own: number): number {
+/**
+ * The largest x̃'Q⁻¹x̃ of any peer's row.
+ *
+ * @param basis  orthonormal basis of the company-demeaned regressors, K columns.
+ */
+export function peerLeverage(fit: WithinFit, basis: readonly Float64Array[], own: number): number {
   const from = fit.sample.starts[own];
   const to = fit.sample.starts[own + 1];
   let largest = 0;
   for (let row = 0; row < fit.sample.year.length; row += 1) {
     if (row >= from && row < to) continue;
     let leverage = 0;
-    for (const column of fit.basis) leverage += column[row] * column[row];
+    for (const column of basis) leverage += column[row] * column[row];
     largest = Math.max(largest, leverage);
   }
   return largest;

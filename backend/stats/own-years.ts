@@ -1,19 +1,24 @@
 import type { OwnYear } from './fit-result';
 import type { WithinFit } from './regression/within-fit';
 
-/** The own company's years, oldest first. */
-export function ownYearsOf(fit: WithinFit, own: number): OwnYear[] {
+/**
+ * The own company's years, oldest first. Actual, fitted and regressors in the panel's measure, the residual in the
+ * model's scale; in log form the fitted value is the mean, exp(·) · smear.
+ */
+export function ownYearsOf(fit: WithinFit, own: number, smear: number | null): OwnYear[] {
   const { sample } = fit;
+  const { levels } = sample;
   const from = sample.starts[own];
   return Array.from({ length: sample.starts[own + 1] - from }, (_, index): OwnYear => {
     const row = from + index;
+    const fitted = sample.outcome[row] - fit.residuals[row];
     return {
       year: sample.year[row],
       fileRow: sample.fileRow[row],
-      actual: sample.outcome[row],
-      fitted: sample.outcome[row] - fit.residuals[row],
+      actual: levels.outcome[row],
+      fitted: smear === null ? fitted : Math.exp(fitted) * smear,
       residual: fit.residuals[row],
-      regressors: sample.regressors.map((column) => column[row]),
+      regressors: levels.regressors.map((column) => column[row]),
     };
   });
 }

@@ -1,22 +1,28 @@
-import type { OwnYear, PredictionBasis } from './fit-result';
+import type { OwnYear, PredictionBasis, Smearing } from './fit-result';
 import { tQuantile } from './distributions/t-distribution';
 import { levelContrast, slopeContrast } from './intervals/contrast';
 import { lambdasOf, residualForm, varianceForm } from './intervals/contrast-forms';
 import type { IntervalContext } from './intervals/interval-context';
 import { contrastIntervalReason } from './intervals/interval-reasons';
 import { congruence, type SquareMatrix, toRows } from './linear-algebra/square-matrix';
+import type { FitParts } from './open-fit';
 import { ownLeverages, observedRanges, peerLeverage } from './observed-range';
 import { type SlopeDegreesOfFreedom, twoSidedQuantile } from './prediction';
 import { isPerfectFit, perfectFitReason } from './regression/goodness';
 import type { WithinFit } from './regression/within-fit';
 
+export interface PredictionInput extends Pick<FitParts, 'context' | 'ownIndex' | 'inference'> {
+  readonly ownYears: readonly OwnYear[];
+  readonly smearing: Smearing | null;
+}
+
 /** All that prediction of the own company needs; see `PredictionBasis` for the measures. */
-export function predictionBasisOf(
-  context: IntervalContext,
-  own: number,
-  slopes: { readonly covariance: SquareMatrix; readonly degrees: SlopeDegreesOfFreedom },
-  ownYears: readonly OwnYear[],
-): PredictionBasis {
+export function predictionBasisOf({
+  context,
+  ownIndex: own,
+  inference: slopes,
+  ownYears,
+}: PredictionInput): PredictionBasis {
   const { fit } = context;
   const size = fit.slopes.length;
   const ownMeans = fit.regressors.map(({ origin, means }) => origin + means[own]);
@@ -34,14 +40,14 @@ export function predictionBasisOf(
     years: fit.sample.years.length,
     ...calibratedForms(context, own),
     confidence: context.confidence,
-    slopeCovariance: toRows(slopes.covariance, size),
-    slopeDegreesOfFreedom: slopes.degrees,
+    slopeCovariance: toRows(slopes.covariance!, size),
+    slopeDegreesOfFreedom: slopes.degrees!,
     slopeIntervalReason: isPerfectFit(fit) ? perfectFitReason : undefined,
     last: ownYears[ownYears.length - 1],
     inverseCrossProduct,
     residualVariance: fit.residualSquares / fit.residualDegreesOfFreedom,
     largestOwnLeverage,
-    largestLeverage: Math.max(largestOwnLeverage, peerLeverage(fit, own)),
+    largestLeverage: Math.max(largestOwnLeverage, peerLeverage(fit, fit.basis, own)),
     ...observedRanges(fit.sample, own),
   };
 }

@@ -10,6 +10,9 @@ export type StatsErrorCode =
   | 'outcome-constant'
   | 'constant-within-companies'
   | 'collinear-regressors'
+  | 'same-for-all-companies'
+  | 'not-positive'
+  | 'disconnected-years'
   | 'no-residual-degrees-of-freedom';
 
 /** A row of the imported file that a refusal concerns; the header is line 1. */

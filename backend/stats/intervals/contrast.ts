@@ -24,7 +24,7 @@ export function contrastOf(
   slopeWeights: ArrayLike<number>,
 ): Contrast {
   const distance = Float64Array.from(slopeWeights);
-  fit.regressors.forEach(({ means }, k) => {
+  fit.columns.forEach(({ means }, k) => {
     companies.forEach((company, index) => (distance[k] -= weights[index] * means[company]));
   });
   return { companies, weights, slopePart: solveUpperTransposed(fit.r, distance) };
@@ -36,13 +36,13 @@ export function interceptContrast(fit: WithinFit, company: number): Contrast {
     fit,
     [company],
     [1],
-    fit.regressors.map(({ origin }) => -origin),
+    fit.columns.map(({ origin }) => -origin),
   );
 }
 
 /** a_left − a_right. */
 export function pairContrast(fit: WithinFit, left: number, right: number): Contrast {
-  const none = new Float64Array(fit.regressors.length);
+  const none = new Float64Array(fit.columns.length);
   return left < right
     ? contrastOf(fit, [left, right], [1, -1], none)
     : contrastOf(fit, [right, left], [-1, 1], none);
@@ -56,16 +56,21 @@ export function standingContrast(fit: WithinFit, own: number): Contrast {
     fit,
     companies,
     companies.map((company) => (company === own ? 1 : share)),
-    new Float64Array(fit.regressors.length),
+    new Float64Array(fit.columns.length),
   );
 }
 
-/** A company's level at its own means, a_i + x̄_i'b: the mean of its outcomes. */
+/** A company's level at its own means, a_i + x̄_i'b (+ the mean of its years' effects): the mean of its outcomes. */
 export function levelContrast(fit: WithinFit, company: number): Contrast {
-  return { companies: [company], weights: [1], slopePart: new Float64Array(fit.regressors.length) };
+  return { companies: [company], weights: [1], slopePart: new Float64Array(fit.columns.length) };
 }
 
-/** One slope, or a combination of slopes. */
+/** One slope, or a combination of slopes; K weights. */
 export function slopeContrast(fit: WithinFit, slopeWeights: ArrayLike<number>): Contrast {
-  return { companies: [], weights: [], slopePart: solveUpperTransposed(fit.r, slopeWeights) };
+  return columnContrast(fit, [...new Float64Array(fit.yearColumns), ...Array.from(slopeWeights)]);
+}
+
+/** A combination of the design's coefficients, years and slopes; P weights. */
+export function columnContrast(fit: WithinFit, weights: ArrayLike<number>): Contrast {
+  return { companies: [], weights: [], slopePart: solveUpperTransposed(fit.r, weights) };
 }

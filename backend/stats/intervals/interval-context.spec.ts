@@ -17,7 +17,7 @@ function both(rows: readonly PanelRow[]): {
 } | null {
   const data = panelOf(rows, randomPanelNames);
   const fit = fitOf(data, 'K1');
-  const context = intervalContext(withinFit(selectSample(data, 'K1', undefined)), 0.95);
+  const context = intervalContext(withinFit(selectSample(data, 'K1', undefined), 'company'), 0.95);
   if (context.forms === null) return null;
   const { used } = context.persistence;
   const persistence = (company: string): number =>

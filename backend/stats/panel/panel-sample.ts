@@ -12,8 +12,12 @@ export interface PanelSample {
   readonly position: Int32Array;
   /** The T different years, ascending. */
   readonly years: readonly number[];
+  /** In the model's scale: natural logs in log form. */
   readonly outcome: Float64Array;
+  /** In the model's scale; with a lag, of the calendar year before. */
   readonly regressors: readonly Float64Array[];
+  /** The same in the panel's measure; the same arrays in levels. */
+  readonly levels: ModelLevels;
   readonly fileRow: Int32Array;
   readonly outcomeName: string;
   readonly regressorNames: readonly string[];
@@ -24,10 +28,17 @@ export interface PanelSample {
   readonly members: readonly string[];
 }
 
+export interface ModelLevels {
+  readonly outcome: Float64Array;
+  readonly regressors: readonly Float64Array[];
+}
+
+/** A row in the model's scale. */
 export interface SingleRow {
   readonly company: string;
   readonly year: number;
   readonly fileRow: number;
   readonly outcome: number;
   readonly regressors: readonly number[];
+  readonly levels: { readonly outcome: number; readonly regressors: readonly number[] };
 }

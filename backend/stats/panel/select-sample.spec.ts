@@ -175,10 +175,12 @@ describe('the design of a fit', () => {
   it('refuses a specification it does not offer', () => {
     for (const specification of [
       { confidence: 1 },
-      { lag: 1 },
+      { lag: 2 },
       { slopes: 'wild' },
-      { effects: 'company,year' },
-      { form: 'log' },
+      { slopes: 'cr3' },
+      { seed: 1 },
+      { effects: 'year' },
+      { form: 'sqrt' },
     ]) {
       expect(() =>
         fitOf(panelOf(plainRows(), names), null, specification as object),

@@ -1,35 +1,44 @@
-import type { DroppedRow, PanelColumns } from '../fit-result';
+import type { DroppedRow, PanelColumns, Specification } from '../fit-result';
 import { type RowPlace, StatsError } from '../stats-error';
 import { checkColumns } from './check-columns';
+import { type ModelColumns, modelColumns, refuseNotPositive } from './model-columns';
 import type { PanelSample, SingleRow } from './panel-sample';
+
+/** How a specification changes the columns before anything is estimated. */
+export type ColumnForm = Pick<Specification, 'form' | 'lag'>;
 
 /** More different years than this is no panel of fiscal years but a wrong column. */
 const mostYears = 1000;
 
 /**
  * Takes the rows of the members that have every value, sorts them by company and year, and sets companies with a
- * single row apart before anything is counted.
+ * single row apart before anything is counted. Regressors are lagged and logarithms taken where the form says so.
  *
  * @param own  is added to the members; null where the fit has no own company.
  * @param members  names; undefined means every company of the data.
- * @throws {StatsError} 'shape', 'non-finite', 'unknown-company', 'duplicate-rows', 'too-few-companies', 'too-many-years'.
+ * @throws {StatsError} 'shape', 'non-finite', 'unknown-company', 'duplicate-rows', 'too-few-companies', 'too-many-years',
+ *   'not-positive'.
  */
 export function selectSample(
   data: PanelColumns,
   own: string | null,
   members: readonly string[] | undefined,
+  { form, lag }: ColumnForm = { form: 'levels', lag: 0 },
 ): PanelSample {
   checkColumns(data);
-  const names = memberNames(data, own, members);
-  const rows = sortedRows(data, new Set(names));
+  const asked = memberNames(data, own, members);
+  const rows = sortedRows(data, new Set(asked));
   refuseDuplicates(data, rows);
-  const columns = [data.outcome, ...data.regressors];
+  const columns = modelColumns(data, rows, lag);
+  const values = [columns.outcome, ...columns.regressors];
+  const names = [data.outcome, ...data.regressors].map(({ name }) => name);
   const dropped = rows.flatMap((row): DroppedRow[] =>
-    columns
-      .filter(({ values }) => Number.isNaN(values[row]))
-      .map(({ name }) => ({ row: data.fileRow[row], column: name, reason: 'missing' })),
+    names
+      .filter((_, index) => Number.isNaN(values[index][row]))
+      .map((column) => ({ row: data.fileRow[row], column, reason: 'missing' })),
   );
-  const complete = rows.filter((row) => columns.every(({ values }) => !Number.isNaN(values[row])));
+  const complete = rows.filter((row) => values.every((column) => !Number.isNaN(column[row])));
+  if (form === 'log') refuseNotPositive(data, columns, complete);
   const groups = groupByCompany(data, complete);
   const kept = groups.filter((group) => group.length > 1);
   if (kept.length < 2) {
@@ -40,10 +49,12 @@ export function selectSample(
     );
   }
   return {
-    ...gather(data, kept),
-    singles: groups.filter((group) => group.length === 1).map(([row]) => singleRow(data, row)),
+    ...gather(data, columns, { groups: kept, form }),
+    singles: groups
+      .filter((group) => group.length === 1)
+      .map(([row]) => singleRow(data, columns, { row, form })),
     dropped: dropped.sort((left, right) => left.row - right.row),
-    members: names,
+    members: asked,
   };
 }
 
@@ -129,7 +140,8 @@ function groupByCompany(data: PanelColumns, rows: readonly number[]): number[][]
 
 function gather(
   data: PanelColumns,
-  groups: readonly number[][],
+  columns: ModelColumns,
+  { groups, form }: { readonly groups: readonly number[][]; readonly form: ColumnForm['form'] },
 ): Omit<PanelSample, 'singles' | 'dropped' | 'members'> {
   const rows = groups.flat();
   const starts = new Int32Array(groups.length + 1);
@@ -142,26 +154,45 @@ function gather(
       `expected at most ${mostYears} different fiscal years; found ${years.length}: is this the year's column?`,
     );
   }
+  const levels = {
+    outcome: Float64Array.from(rows, (row) => columns.outcome[row]),
+    regressors: columns.regressors.map((values) => Float64Array.from(rows, (row) => values[row])),
+  };
   return {
     companies: groups.map((group) => data.companies[data.company[group[0]]]),
     starts,
     year,
     position: Int32Array.from(year, (value) => years.indexOf(value)),
     years,
-    outcome: Float64Array.from(rows, (row) => data.outcome.values[row]),
-    regressors: data.regressors.map(({ values }) => Float64Array.from(rows, (row) => values[row])),
+    outcome: inForm(levels.outcome, form),
+    regressors: levels.regressors.map((values) => inForm(values, form)),
+    levels,
     fileRow: Int32Array.from(rows, (row) => data.fileRow[row]),
     outcomeName: data.outcome.name,
     regressorNames: data.regressors.map(({ name }) => name),
   };
 }
 
-function singleRow(data: PanelColumns, row: number): SingleRow {
+function inForm(values: Float64Array, form: ColumnForm['form']): Float64Array {
+  return form === 'log' ? values.map(Math.log) : values;
+}
+
+function singleRow(
+  data: PanelColumns,
+  columns: ModelColumns,
+  { row, form }: { readonly row: number; readonly form: ColumnForm['form'] },
+): SingleRow {
+  const levels = {
+    outcome: columns.outcome[row],
+    regressors: columns.regressors.map((values) => values[row]),
+  };
+  const scaled = (value: number): number => (form === 'log' ? Math.log(value) : value);
   return {
     company: data.companies[data.company[row]],
     year: data.year[row],
     fileRow: data.fileRow[row],
-    outcome: data.outcome.values[row],
-    regressors: data.regressors.map(({ values }) => values[row]),
+    outcome: scaled(levels.outcome),
+    regressors: levels.regressors.map(scaled),
+    levels,
   };
 }

@@ -1,5 +1,6 @@
 import { fUpperTail } from '../distributions/f-upper-tail';
 import type { FitResult, FTest } from '../fit-result';
+import { dot } from '../linear-algebra/square-matrix';
 import { sumOfSquares } from './sum-of-squares';
 import type { WithinFit } from './within-fit';
 
@@ -44,14 +45,27 @@ export function fTest(
   return { value, df1, df2, pValue: fUpperTail(value, df1, df2) };
 }
 
-/** Goodness of the fixed effects regression, each figure under its own name; R² is centred. */
+/**
+ * What the slopes take off the sum of squares that the effects leave: the outcome's projections on the basis of the
+ * regressors, which comes after that of the year columns.
+ */
+function explainedBySlopes(fit: WithinFit): number {
+  return sumOfSquares(
+    fit.basis.slice(fit.yearColumns).map((column) => dot(column, fit.outcome.values)),
+  );
+}
+
+/**
+ * Goodness of the fixed effects regression, each figure under its own name. R² is centred; the within R² is the share
+ * of what the effects leave, both of them where there are year effects.
+ */
 export function goodnessOf(fit: WithinFit): FitResult['goodness'] {
   const rest = fit.residualSquares;
-  const within = sumOfSquares(fit.outcome.values);
+  const within = rest + explainedBySlopes(fit);
   const total = totalSquares(fit);
   const isPerfect = isPerfectFit(fit);
   const slopes = fit.slopes.length;
-  const dummies = fit.sample.companies.length - 1;
+  const dummies = fit.sample.companies.length - 1 + fit.yearColumns;
   const df2 = fit.residualDegreesOfFreedom;
   return {
     withinRSquared: 1 - rest / within,

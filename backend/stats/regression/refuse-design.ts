@@ -1,4 +1,5 @@
-import { type ColumnRank, columnRank } from '../linear-algebra/column-rank';
+import { type ColumnRank, columnRank, rankTolerance } from '../linear-algebra/column-rank';
+import { leastSquares } from '../linear-algebra/least-squares';
 import type { PanelSample } from '../panel/panel-sample';
 import type { WithinColumn } from '../panel/within-transform';
 import { StatsError } from '../stats-error';
@@ -7,18 +8,22 @@ import { sumOfSquares } from './sum-of-squares';
 /** Variation within companies below this share of a column's size is rounding of its numbers. */
 const variationTolerance = 1e-14;
 
+/** The demeaned columns of a regression: outcome, year columns if any, regressors. */
+export interface DemeanedDesign {
+  readonly outcome: WithinColumn;
+  readonly years: readonly WithinColumn[];
+  readonly regressors: readonly WithinColumn[];
+}
+
 /**
  * Refuses a design whose slopes are not determined.
  *
- * @returns the rank of the demeaned regressors, with their condition number.
- * @throws {StatsError} 'outcome-constant', 'constant-within-companies', 'collinear-regressors' or
- *   'no-residual-degrees-of-freedom', naming what is concerned.
+ * @returns the rank of the regressors without the effects, with their condition number.
+ * @throws {StatsError} 'outcome-constant', 'constant-within-companies', 'same-for-all-companies',
+ *   'collinear-regressors' or 'no-residual-degrees-of-freedom', naming what is concerned.
  */
-export function refuseDesign(
-  sample: PanelSample,
-  outcome: WithinColumn,
-  regressors: readonly WithinColumn[],
-): ColumnRank {
+export function refuseDesign(sample: PanelSample, design: DemeanedDesign): ColumnRank {
+  const { outcome, years, regressors } = design;
   if (isConstantWithin(sample.outcome, outcome)) {
     throw new StatsError(
       'outcome-constant',
@@ -35,29 +40,51 @@ export function refuseDesign(
       { columns: constant },
     );
   }
-  refuseDegreesOfFreedom(sample);
-  const rank = columnRank(regressors.map(({ values }) => values));
+  refuseDegreesOfFreedom(sample, years.length);
+  const columns = withoutYears(sample, years, regressors);
+  const rank = columnRank(columns);
   if (rank.combination === null) return rank;
   const combination = rank.combination.map(({ column, weight }) => ({
     column: names[column],
     weight,
   }));
-  const columns = combination.map(({ column }) => column);
+  const involved = combination.map(({ column }) => column);
   throw new StatsError(
     'collinear-regressors',
-    `within companies ${columns.join(', ')} move together exactly: ${inWords(combination)} never varies`,
-    { columns, combination },
+    `within companies ${involved.join(', ')} move together exactly${years.length > 0 ? ' but for the year effects' : ''}: ${inWords(combination)} never varies`,
+    { columns: involved, combination },
   );
 }
 
-function refuseDegreesOfFreedom(sample: PanelSample): void {
+/** The demeaned regressors less their year effects; as they are without any. */
+function withoutYears(
+  sample: PanelSample,
+  years: readonly WithinColumn[],
+  regressors: readonly WithinColumn[],
+): Float64Array[] {
+  if (years.length === 0) return regressors.map(({ values }) => values);
+  const yearValues = years.map(({ values }) => values);
+  const rest = regressors.map(({ values }) => leastSquares(yearValues, values).residuals);
+  const same = sample.regressorNames.filter(
+    (_, k) => sumOfSquares(rest[k]) <= rankTolerance ** 2 * sumOfSquares(regressors[k].values),
+  );
+  if (same.length === 0) return rest;
+  throw new StatsError(
+    'same-for-all-companies',
+    `${same.join(', ')} moves by the same amount for all companies in every year: the year effects take it up entirely`,
+    { columns: same },
+  );
+}
+
+function refuseDegreesOfFreedom(sample: PanelSample, years: number): void {
   const observations = sample.year.length;
   const companies = sample.companies.length;
   const slopes = sample.regressorNames.length;
-  if (observations - companies - slopes > 0) return;
+  if (observations - companies - years - slopes > 0) return;
+  const effects = years > 0 ? `, ${years} year effects` : '';
   throw new StatsError(
     'no-residual-degrees-of-freedom',
-    `${observations} rows leave nothing to judge the fit by: ${companies} company intercepts and ${slopes} slopes use them up`,
+    `${observations} rows leave nothing to judge the fit by: ${companies} company intercepts${effects} and ${slopes} slopes use them up`,
   );
 }
 

@@ -25,7 +25,8 @@ export function withoutEachCompany(
     if (!products[left].isDispensable) {
       return { company, slopes: null, standing: null, reason: notDeterminedReason };
     }
-    const slopes = slopesWithout(fit, products[left]);
+    const coefficients = coefficientsWithout(fit, products[left]);
+    const slopes = coefficients.slice(fit.yearColumns);
     if (own === -1) return { company, slopes, standing: null, reason: noOwnReason };
     if (left === own) {
       return {
@@ -43,29 +44,29 @@ export function withoutEachCompany(
         reason: 'Without the only peer there is no standing.',
       };
     }
-    return { company, slopes, standing: standingWithout(fit, slopes, own, left) };
+    return { company, slopes, standing: standingWithout(fit, coefficients, own, left) };
   });
 }
 
-function slopesWithout(fit: WithinFit, product: CompanyProduct): number[] {
-  const size = fit.slopes.length;
+function coefficientsWithout(fit: WithinFit, product: CompanyProduct): number[] {
+  const size = fit.coefficients.length;
   const rest = product.cross.map((value, index) => (index % (size + 1) === 0 ? 1 : 0) - value);
   const inverse = symmetricPower(rest, size, -1, 0).matrix;
   const change = timesVector(fit.inverseR, timesVector(inverse, product.score));
-  return Array.from(fit.slopes, (slope, k) => slope - change[k]);
+  return Array.from(fit.coefficients, (value, k) => value - change[k]);
 }
 
-/** Own intercept minus the mean of the others' with the given slopes and one company left out. */
+/** Own intercept minus the mean of the others' with the given coefficients and one company left out. */
 function standingWithout(
   fit: WithinFit,
-  slopes: readonly number[],
+  coefficients: readonly number[],
   own: number,
   left: number,
 ): number {
   const distance = ({ means, meansTotal }: WithinColumn): number =>
     means[own] - (meansTotal - means[own] - means[left]) / (means.length - 2);
-  return fit.regressors.reduce(
-    (rest, column, k) => rest - slopes[k] * distance(column),
+  return fit.columns.reduce(
+    (rest, column, k) => rest - coefficients[k] * distance(column),
     distance(fit.outcome),
   );
 }

@@ -5,6 +5,7 @@ import { companyForms } from '../intervals/company-forms';
 import { slopeContrast } from '../intervals/contrast';
 import type { IntervalContext } from '../intervals/interval-context';
 import { rowsOf } from '../intervals/interval-reasons';
+import { dot } from '../linear-algebra/square-matrix';
 import type { PanelSample } from '../panel/panel-sample';
 import { withoutInterval } from '../prediction';
 import { isPerfectFit, perfectFitReason } from '../regression/goodness';
@@ -19,7 +20,7 @@ export type DriftOrReason =
 
 /**
  * How much the gap between the own company and its peers widens a year: δ_own − δ_peers of the fit augmented by the
- * year for the own company and the year for all peers, with the calibrated interval of that fit and the persistence
+ * year for the own company and the year for all peers (δ_own alone beside year effects), with the calibrated interval of that fit and the persistence
  * of the original one.
  *
  * @param own  index of the own company.
@@ -31,13 +32,10 @@ export function driftOf(context: IntervalContext, own: number): DriftOrReason {
     const reason = `${fit.sample.companies[own]} has ${rows} rows; a drift needs at least ${fewestRows}.`;
     return { drift: null, reason };
   }
-  const augmented = augmentedFit(fit.sample, own);
+  const augmented = augmentedFit(fit, own);
   if (typeof augmented === 'string') return { drift: null, reason: augmented };
-  const slopes = augmented.slopes.length;
-  const weights = new Float64Array(slopes);
-  weights[slopes - 2] = 1;
-  weights[slopes - 1] = -1;
-  const estimate = augmented.slopes[slopes - 2] - augmented.slopes[slopes - 1];
+  const weights = Float64Array.from(augmented.slopes, (_, k) => driftWeight(fit, k));
+  const estimate = dot(weights, augmented.slopes);
   const reason = context.reason ?? (isPerfectFit(augmented) ? perfectFitReason : undefined);
   if (reason !== undefined)
     return { drift: { ...withoutInterval(estimate, reason), pValue: null } };
@@ -49,20 +47,36 @@ export function driftOf(context: IntervalContext, own: number): DriftOrReason {
   return { drift: { ...interval, pValue } };
 }
 
-/** The fit with the two trends beside its regressors, or why there is none. */
-function augmentedFit(sample: PanelSample, own: number): WithinFit | string {
+/** +1 for the own company's trend, −1 for the peers', 0 for a regressor; k counts the augmented slopes. */
+function driftWeight(fit: WithinFit, k: number): number {
+  const place = k - fit.slopes.length;
+  if (place < 0) return 0;
+  return place === 0 ? 1 : -1;
+}
+
+/**
+ * The fit with the trends beside its regressors, or why there is none. Year effects take up a trend of all peers, so
+ * with them the own company's alone is added.
+ */
+function augmentedFit(fit: WithinFit, own: number): WithinFit | string {
+  const { sample } = fit;
   const from = sample.starts[own];
   const to = sample.starts[own + 1];
   const middle = (sample.years[0] + sample.years[sample.years.length - 1]) / 2;
   const isOwn = (row: number): boolean => row >= from && row < to;
   const trend = (isIncluded: (row: number) => boolean): Float64Array =>
     Float64Array.from(sample.year, (year, row) => (isIncluded(row) ? year - middle : 0));
+  const trends = [{ name: 'year of the own company', values: trend(isOwn) }];
+  if (fit.yearColumns === 0) {
+    trends.push({ name: 'year of the peers', values: trend((row) => !isOwn(row)) });
+  }
+  const augmented: PanelSample = {
+    ...sample,
+    regressors: [...sample.regressors, ...trends.map(({ values }) => values)],
+    regressorNames: [...sample.regressorNames, ...trends.map(({ name }) => name)],
+  };
   try {
-    return withinFit({
-      ...sample,
-      regressors: [...sample.regressors, trend(isOwn), trend((row) => !isOwn(row))],
-      regressorNames: [...sample.regressorNames, 'year of the own company', 'year of the peers'],
-    });
+    return withinFit(augmented, fit.effects);
   } catch (error) {
     const reason = error instanceof StatsError ? reasons[error.code] : undefined;
     if (reason === undefined) throw error;
@@ -76,6 +90,7 @@ const straightLineReason =
 const reasons: Readonly<Partial<Record<StatsError['code'], string>>> = {
   'collinear-regressors': straightLineReason,
   'constant-within-companies': straightLineReason,
+  'same-for-all-companies': straightLineReason,
   'no-residual-degrees-of-freedom':
     'The rows are too few for the two more slopes that a drift needs.',
 };

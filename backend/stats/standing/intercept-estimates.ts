@@ -3,7 +3,9 @@ import { interceptContrast } from '../intervals/contrast';
 import { contrastInterval, type IntervalContext } from '../intervals/interval-context';
 import { rowsOf } from '../intervals/interval-reasons';
 import { withoutInterval } from '../prediction';
+import type { SingleRow } from '../panel/panel-sample';
 import type { WithinFit } from '../regression/within-fit';
+import { yearWeights } from '../regression/year-columns';
 
 const singleRowReason = 'One row fixes the intercept exactly and leaves nothing to judge it by.';
 
@@ -26,17 +28,24 @@ export function interceptEstimates(context: IntervalContext): InterceptEstimate[
   }));
   const single = singles.map((row): InterceptEstimate => ({
     company: row.company,
-    ...withoutInterval(singleIntercept(fit, row.outcome, row.regressors), singleRowReason),
+    ...withoutInterval(singleIntercept(fit, row), singleRowReason),
     deviation: null,
     rows: 1,
   }));
   return [...estimated, ...single].sort((left, right) => (left.company < right.company ? -1 : 1));
 }
 
-function singleIntercept(fit: WithinFit, outcome: number, regressors: readonly number[]): number {
-  let distance = outcome - fit.outcome.origin;
-  regressors.forEach((value, k) => {
-    distance -= (value - fit.regressors[k].origin) * fit.slopes[k];
+/** y − x'b (− the effect of its year; 0, their mean, where the sample has no such year). */
+function singleIntercept(fit: WithinFit, single: SingleRow): number {
+  const { years } = fit.sample;
+  const position = years.indexOf(single.year);
+  const inYears =
+    fit.yearColumns === 0 || position === -1
+      ? new Float64Array(fit.yearColumns)
+      : yearWeights(years.length, position);
+  let distance = single.outcome - fit.outcome.origin;
+  [...inYears, ...single.regressors].forEach((value, k) => {
+    distance -= (value - fit.columns[k].origin) * fit.coefficients[k];
   });
   return distance + fit.interceptOrigin;
 }

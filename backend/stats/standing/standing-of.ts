@@ -1,21 +1,27 @@
-import type { PairComparison, Standing } from '../fit-result';
+import type { IntervalPercent, PairComparison, Specification, Standing } from '../fit-result';
 import { calibratedInterval } from '../intervals/calibrated-interval';
 import { standingContrast } from '../intervals/contrast';
 import { contrastError, type IntervalContext } from '../intervals/interval-context';
 import { fewestRowsForRank, rowsOf } from '../intervals/interval-reasons';
-import { withoutInterval } from '../prediction';
+import { type IntervalEstimate, withoutInterval } from '../prediction';
+
+export interface StandingInput {
+  /** Index of the own company. */
+  readonly own: number;
+  /** The own company's comparisons with every peer. */
+  readonly pairs: readonly PairComparison[];
+  readonly form: Specification['form'];
+}
 
 /**
  * The own company's intercept minus the unweighted mean of the others', with its calibrated interval, and the places
  * among the companies of 3 rows or more that the data cannot rule out. The mean takes in every peer; places and the
  * correction behind them count only those of 3 rows or more, because the others' intercepts have no interval.
- *
- * @param pairs  the own company's comparisons with every peer.
+ * In log form the standing is also given as percent, 100 · (exp(·) − 1).
  */
 export function standingOf(
   context: IntervalContext,
-  own: number,
-  pairs: readonly PairComparison[],
+  { own, pairs, form }: StandingInput,
 ): Standing {
   const { fit, cosines, persistence } = context;
   const relative = fit.relativeIntercepts;
@@ -35,6 +41,16 @@ export function standingOf(
     persistence: persistence.pooled,
     ownPersistence: Number.isNaN(ownPersistence) ? null : ownPersistence,
     ...rankOf(context, own, pairs),
+    ...(form === 'log' && { percent: percentOf(interval) }),
+  };
+}
+
+function percentOf({ estimate, low, high }: IntervalEstimate): IntervalPercent {
+  const percent = (value: number): number => 100 * Math.expm1(value);
+  return {
+    estimate: percent(estimate),
+    low: low === null ? null : percent(low),
+    high: high === null ? null : percent(high),
   };
 }
 

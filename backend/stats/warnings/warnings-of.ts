@@ -1,6 +1,13 @@
-import type { FitResult, FitWarning, SlopeCovarianceName, SlopeEstimate } from '../fit-result';
+import type {
+  FitResult,
+  FitWarning,
+  SlopeCovarianceName,
+  SlopeEstimate,
+  Smearing,
+} from '../fit-result';
 import type { IntervalContext } from '../intervals/interval-context';
 import { isPerfectFit } from '../regression/goodness';
+import type { SlopeInference } from '../slopes/slope-inference';
 import { dominatedWarnings } from './dominated';
 import { persistenceWarnings } from './persistence-warnings';
 import { spellingWarning } from './spelling';
@@ -8,7 +15,9 @@ import { spellingWarning } from './spelling';
 export interface WarningInput {
   readonly context: IntervalContext;
   readonly covariance: SlopeCovarianceName;
-  readonly slopes: readonly SlopeEstimate[];
+  readonly inference: SlopeInference;
+  /** Null in levels. */
+  readonly smearing: Smearing | null;
   readonly withoutCompany: FitResult['withoutCompany'];
   /** Index of the own company; −1 without one. */
   readonly own: number;
@@ -19,15 +28,18 @@ export interface WarningInput {
 const fewest = 8;
 const smallDegreesOfFreedom = 4;
 const largeConditionNumber = 1e6;
+const noticeableSmear = 0.1;
 
 /** Everything a reader has to know before relying on a figure, in plain words. */
 export function warningsOf(input: WarningInput): FitWarning[] {
   return [
     ...sizeWarnings(input),
-    ...(input.covariance === 'cr2' ? degreesWarnings(input.slopes) : []),
+    ...(input.covariance === 'cr2' ? degreesWarnings(input.inference.slopes) : []),
     ...persistenceWarnings(input.context, input.own),
-    ...dominatedWarnings(input.slopes, input.withoutCompany),
+    ...dominatedWarnings(input.inference.slopes, input.withoutCompany),
     ...fitWarnings(input.context),
+    ...input.inference.notes,
+    ...smearingWarnings(input),
     ...spellingWarning(input.names),
   ];
 }
@@ -73,4 +85,14 @@ function fitWarnings({ fit }: IntervalContext): FitWarning[] {
     warnings.push({ code: 'ill-conditioned', detail, subjects: fit.sample.regressorNames });
   }
   return warnings;
+}
+
+function smearingWarnings({ smearing, own, context }: WarningInput): FitWarning[] {
+  if (smearing === null || smearing.own === null) return [];
+  const distance = smearing.own / smearing.factor - 1;
+  if (Math.abs(distance) <= noticeableSmear) return [];
+  const company = context.fit.sample.companies[own];
+  const percent = Math.abs(100 * distance).toFixed(0);
+  const detail = `${company}’s own mean of exp(residual) lies ${percent} % ${distance > 0 ? 'above' : 'below'} that of all companies, which turns logs back into levels: expected values may be that far off.`;
+  return [{ code: 'smear-differs', detail, subjects: [company] }];
 }
