@@ -20,7 +20,7 @@ describe('canonicalFitText', () => {
       'A',
     );
     expect(text).toBe(
-      '{"engine":"1.0.1","members":["A","B"],"outcome":"y","own":"A","regressors":["x"],"rows":[["A",2000,0.1,1],["A",2001,1.1,2],["A",2002,4.1,3],["B",2000,0.1,1],["B",2001,1.1,2],["B",2002,4.1,3]],' +
+      '{"engine":"2.0.0","members":["A","B"],"outcome":"y","own":"A","regressors":["x"],"rows":[["A",2000,0.1,1],["A",2001,1.1,2],["A",2002,4.1,3],["B",2000,0.1,1],["B",2001,1.1,2],["B",2002,4.1,3]],' +
         '"specification":{"confidence":0.95,"effects":"company","form":"levels","lag":0,"seed":null,"slopes":"cr2"}}',
     );
     expect(fitOf(panelOf(rows, names), 'A').hash).toBe(sha256(text));
