@@ -1,4 +1,4 @@
-import type { IntervalEstimate, SlopeCovarianceName } from '../fit-result';
+import type { Effects, IntervalEstimate, SlopeCovarianceName, Specification } from '../fit-result';
 
 /** What speaks for and against a fit, beside its result. What is not defined is null with a reason beside it. */
 export interface Evidence {
@@ -10,6 +10,8 @@ export interface Evidence {
   readonly lines: readonly RegressorLines[];
   /** "Is the standing steady?": the standing without each year. */
   readonly withoutYear: readonly WithoutYear[];
+  /** Why the list above is empty. */
+  readonly withoutYearReason?: string;
   /** "Could it be only trends?" and the estimators that stand beside the fixed effects. */
   readonly estimators: readonly EstimatorSummary[];
   /** "Which intervals?": every covariance for the same slopes, in the table's order. */
@@ -41,8 +43,10 @@ export interface Objection {
 /** Straight lines of the outcome against one regressor, the others at each company's own mean; in the model's scale. */
 export interface RegressorLines {
   readonly regressor: string;
-  /** Over the company's observed range of the regressor. */
+  /** Over the company's observed range of the regressor; at most `mostCompanyLines`, the own company always kept. */
   readonly companies: readonly CompanyLine[];
+  /** Companies that have a line. */
+  readonly of: number;
   /** The pooled line over the range of all rows, the other regressors at their means. */
   readonly pooled: LineEnds;
 }
@@ -61,6 +65,8 @@ export interface WithoutYear {
   readonly slopes: readonly number[] | null;
   readonly standing: number | null;
   readonly reason?: string;
+  /** Companies that the year leaves with fewer than two rows, so that they drop out with it. */
+  readonly leftOut?: readonly string[];
 }
 
 export type EstimatorCode =
@@ -113,15 +119,22 @@ export interface CovarianceSummary {
   readonly notes: readonly string[];
 }
 
+/** 'this-fit': the specification itself, listed where it combines several of the others and equals none of them. */
 export type AlternativeCode =
-  'pooled' | 'fixed-effects' | 'year-effects' | 'log-form' | 'lag' | 'random-effects';
+  'this-fit' | 'pooled' | 'fixed-effects' | 'year-effects' | 'log-form' | 'lag' | 'random-effects';
 
 /** The question asked of another model: the same members and rows where the model allows. */
 export interface Alternative {
   readonly code: AlternativeCode;
   readonly isThisFit: boolean;
+  /** Effects taken out of every variable; null for one constant or effects drawn from one distribution. */
+  readonly effects: Effects | null;
+  readonly form: Specification['form'];
+  readonly lag: Specification['lag'];
   readonly observations: number | null;
   readonly slopes: readonly EstimatorSlope[] | null;
+  /** Which covariance the slopes' intervals come from, where it is not the specification's. */
+  readonly slopesNote?: string;
   /** In the outcome's unit, or in percent (100 · (exp(·) − 1)) in log form. */
   readonly standing: IntervalEstimate | null;
   readonly standingUnit: 'level' | 'percent';
