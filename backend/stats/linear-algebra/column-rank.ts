@@ -1,5 +1,4 @@
 import { Matrix, SingularValueDecomposition } from 'ml-matrix';
-import { householderQr } from './householder';
 
 /** Singular values below this share of the largest count as zero, on columns of unit length. */
 export const rankTolerance = 1e-10;
@@ -15,23 +14,20 @@ export interface ColumnRank {
 }
 
 /**
- * Tells whether columns are linearly independent, and if not, by which combination.
+ * Tells from their R whether columns are linearly independent, and if not, by which combination.
  *
- * @param columns  K columns of n rows, n ≥ K, none of them zero; left unchanged.
+ * @param r  K × K, row-major, upper triangular, of columns none of which is zero.
  */
-export function columnRank(columns: readonly Float64Array[]): ColumnRank {
-  const size = columns.length;
-  const norms = columns.map((column) => largest(column) * scaledNorm(column));
-  const unit = columns.map((column, k) => column.map((value) => value / norms[k]));
-  const { r } = householderQr(unit);
-  const decomposition = new SingularValueDecomposition(
-    Matrix.from1DArray(size, size, Array.from(r)),
-    { autoTranspose: true },
-  );
+export function columnRank(r: Float64Array): ColumnRank {
+  const size = Math.sqrt(r.length);
+  const norms = columnNorms(r, size);
+  const decomposition = unitDecomposition(r, norms);
   const values = decomposition.diagonal;
   const smallest = values[size - 1];
-  const conditionNumber = smallest > 0 ? values[0] / smallest : Infinity;
-  if (smallest > rankTolerance * values[0]) return { conditionNumber, combination: null };
+  const condition = smallest > 0 ? values[0] / smallest : Infinity;
+  if (smallest > rankTolerance * values[0]) {
+    return { conditionNumber: condition, combination: null };
+  }
   const vector = decomposition.rightSingularVectors.getColumn(size - 1);
   const bound = combinationTolerance * Math.max(...vector.map(Math.abs));
   const involved = vector
@@ -39,21 +35,31 @@ export function columnRank(columns: readonly Float64Array[]): ColumnRank {
     .filter(({ share }) => Math.abs(share) > bound);
   const lead = involved[0].weight;
   return {
-    conditionNumber,
+    conditionNumber: condition,
     combination: involved.map(({ column, weight }) => ({ column, weight: weight / lead })),
   };
 }
 
-function largest(column: Float64Array): number {
-  let result = 0;
-  for (const value of column) result = Math.max(result, Math.abs(value));
-  return result;
+/** Largest by smallest singular value of the columns at unit length; Infinity where one is zero. */
+export function conditionNumber(r: Float64Array): number {
+  const size = Math.sqrt(r.length);
+  const norms = columnNorms(r, size);
+  if (norms.some((norm) => norm === 0)) return Infinity;
+  const values = unitDecomposition(r, norms).diagonal;
+  return values[size - 1] > 0 ? values[0] / values[size - 1] : Infinity;
 }
 
-/** Euclidean norm of the column divided by its largest entry. */
-function scaledNorm(column: Float64Array): number {
-  const scale = largest(column);
-  let sum = 0;
-  for (const value of column) sum += (value / scale) ** 2;
-  return Math.sqrt(sum);
+function unitDecomposition(r: Float64Array, norms: readonly number[]): SingularValueDecomposition {
+  const size = norms.length;
+  const unit = Array.from(r, (value, index) => value / norms[index % size]);
+  return new SingularValueDecomposition(Matrix.from1DArray(size, size, unit), {
+    autoTranspose: true,
+  });
+}
+
+/** Lengths of R's columns, which are those of the columns it was made from; no square leaves a double's range. */
+function columnNorms(r: Float64Array, size: number): number[] {
+  return Array.from({ length: size }, (_, column) =>
+    Math.hypot(...Array.from({ length: column + 1 }, (__, row) => r[row * size + column])),
+  );
 }

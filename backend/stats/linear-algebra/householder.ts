@@ -15,11 +15,18 @@ export interface HouseholderFactors {
  * Factors a tall matrix.
  *
  * @param columns  K columns of n rows, n ≥ K; left unchanged.
+ * @param divisors  K powers of two that the columns are divided by.
  * @returns reflections and R; cost 2nK² operations, n·K numbers of memory.
  */
-export function householderQr(columns: readonly Float64Array[]): HouseholderFactors {
+export function householderQr(
+  columns: readonly Float64Array[],
+  divisors: readonly number[],
+): HouseholderFactors {
   const size = columns.length;
-  const work = columns.map((column) => Float64Array.from(column));
+  const work = columns.map((column, k) => {
+    const factor = 1 / divisors[k];
+    return column.map((value) => value * factor);
+  });
   const scales = new Float64Array(size);
   const r = new Float64Array(size * size);
   for (let k = 0; k < size; k += 1) {

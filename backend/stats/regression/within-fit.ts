@@ -1,9 +1,9 @@
 import type { Effects } from '../fit-result';
-import { leastSquares } from '../linear-algebra/least-squares';
+import { solveLeastSquares } from '../linear-algebra/least-squares';
 import { invertUpper } from '../linear-algebra/triangular';
 import type { PanelSample } from '../panel/panel-sample';
 import { type WithinColumn, withinTransform } from '../panel/within-transform';
-import { refuseDesign } from './refuse-design';
+import { factorDesign } from './factor-design';
 import { sumOfSquares } from './sum-of-squares';
 import { yearColumns } from './year-columns';
 
@@ -49,19 +49,16 @@ export interface WithinFit {
  * the regressors, as the regression of demeaned columns (Frisch–Waugh–Lovell): exact on unbalanced panels too.
  * a_i = ȳ_i − x̄_i'b − c̄_i.
  *
- * @throws {StatsError} what `refuseDesign` and `yearColumns` refuse.
+ * @throws {StatsError} what `factorDesign` and `yearColumns` refuse.
  */
 export function withinFit(sample: PanelSample, effects: Effects): WithinFit {
   const demeaned = (column: Float64Array): WithinColumn => withinTransform(column, sample.starts);
   const outcome = demeaned(sample.outcome);
   const years = effects === 'company' ? [] : yearColumns(sample).map(demeaned);
   const regressors = sample.regressors.map(demeaned);
-  const { conditionNumber } = refuseDesign(sample, { outcome, years, regressors });
+  const { factored, conditionNumber } = factorDesign(sample, { outcome, years, regressors });
   const columns = [...years, ...regressors];
-  const solution = leastSquares(
-    columns.map(({ values }) => values),
-    outcome.values,
-  );
+  const solution = solveLeastSquares(factored, outcome.values);
   const { coefficients } = solution;
   return {
     sample,

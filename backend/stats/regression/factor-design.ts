@@ -1,5 +1,5 @@
-import { type ColumnRank, columnRank, rankTolerance } from '../linear-algebra/column-rank';
-import { leastSquares } from '../linear-algebra/least-squares';
+import { columnRank, rankTolerance } from '../linear-algebra/column-rank';
+import { type FactoredColumns, factorColumns } from '../linear-algebra/least-squares';
 import type { PanelSample } from '../panel/panel-sample';
 import type { WithinColumn } from '../panel/within-transform';
 import { StatsError } from '../stats-error';
@@ -15,14 +15,21 @@ export interface DemeanedDesign {
   readonly regressors: readonly WithinColumn[];
 }
 
+/** The design's one factorisation. */
+export interface FactoredDesign {
+  /** Of the year columns, then the regressors. */
+  readonly factored: FactoredColumns;
+  /** Of the scaled regressors without the effects. */
+  readonly conditionNumber: number;
+}
+
 /**
- * Refuses a design whose slopes are not determined.
+ * Factors a design, and refuses one whose slopes are not determined.
  *
- * @returns the rank of the regressors without the effects, with their condition number.
  * @throws {StatsError} 'outcome-constant', 'constant-within-companies', 'same-for-all-companies',
  *   'collinear-regressors' or 'no-residual-degrees-of-freedom', naming what is concerned.
  */
-export function refuseDesign(sample: PanelSample, design: DemeanedDesign): ColumnRank {
+export function factorDesign(sample: PanelSample, design: DemeanedDesign): FactoredDesign {
   const { outcome, years, regressors } = design;
   if (isConstantWithin(sample.outcome, outcome)) {
     throw new StatsError(
@@ -41,9 +48,9 @@ export function refuseDesign(sample: PanelSample, design: DemeanedDesign): Colum
     );
   }
   refuseDegreesOfFreedom(sample, years.length);
-  const columns = withoutYears(sample, years, regressors);
-  const rank = columnRank(columns);
-  if (rank.combination === null) return rank;
+  const factored = factorColumns([...years, ...regressors].map(({ values }) => values));
+  const rank = columnRank(withoutYears(names, factored.r, years.length));
+  if (rank.combination === null) return { factored, conditionNumber: rank.conditionNumber };
   const combination = rank.combination.map(({ column, weight }) => ({
     column: names[column],
     weight,
@@ -56,24 +63,31 @@ export function refuseDesign(sample: PanelSample, design: DemeanedDesign): Colum
   );
 }
 
-/** The demeaned regressors less their year effects; as they are without any. */
-function withoutYears(
-  sample: PanelSample,
-  years: readonly WithinColumn[],
-  regressors: readonly WithinColumn[],
-): Float64Array[] {
-  if (years.length === 0) return regressors.map(({ values }) => values);
-  const yearValues = years.map(({ values }) => values);
-  const rest = regressors.map(({ values }) => leastSquares(yearValues, values).residuals);
-  const same = sample.regressorNames.filter(
-    (_, k) => sumOfSquares(rest[k]) <= rankTolerance ** 2 * sumOfSquares(regressors[k].values),
+/**
+ * R of the regressors less their year effects, K × K: the last block of the R of year columns and regressors together.
+ *
+ * @throws {StatsError} 'same-for-all-companies' where year effects leave nothing of a regressor.
+ */
+function withoutYears(names: readonly string[], r: Float64Array, years: number): Float64Array {
+  const size = years + names.length;
+  const lengthFrom = (row: number, column: number): number =>
+    Math.hypot(
+      ...Array.from({ length: column + 1 - row }, (_, index) => r[(row + index) * size + column]),
+    );
+  const same = names.filter(
+    (_, k) => lengthFrom(years, years + k) <= rankTolerance * lengthFrom(0, years + k),
   );
-  if (same.length === 0) return rest;
-  throw new StatsError(
-    'same-for-all-companies',
-    `${same.join(', ')} moves by the same amount for all companies in every year: the year effects take it up entirely`,
-    { columns: same },
-  );
+  if (same.length > 0) {
+    throw new StatsError(
+      'same-for-all-companies',
+      `${same.join(', ')} moves by the same amount for all companies in every year: the year effects take it up entirely`,
+      { columns: same },
+    );
+  }
+  return Float64Array.from({ length: names.length ** 2 }, (_, index) => {
+    const row = years + Math.floor(index / names.length);
+    return r[row * size + years + (index % names.length)];
+  });
 }
 
 function refuseDegreesOfFreedom(sample: PanelSample, years: number): void {
