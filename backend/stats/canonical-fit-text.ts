@@ -12,35 +12,34 @@ export function canonicalFitText(
   specification: Specification,
   own: string | null,
 ): string {
-  return canonicalJson({
+  const head = canonicalJson({
     engine: engineVersion,
     members: sample.members,
     outcome: sample.outcomeName,
     own,
     regressors: sample.regressorNames,
-    rows: rowsUsed(sample),
-    specification: { ...specification },
   });
+  const tail = canonicalJson({ specification: { ...specification } });
+  return `${head.slice(0, -1)},"rows":[${rowsUsed(sample)}],${tail.slice(1)}`;
 }
 
-/** [company, year, outcome, regressors …] in the panel's measure, by company and year. */
-function rowsUsed(sample: PanelSample): (string | number)[][] {
+/** [company, year, outcome, regressors …] in the panel's measure, by company and year; the single rows last; numbers as JSON writes them. */
+function rowsUsed(sample: PanelSample): string {
   const { levels } = sample;
-  const rows = sample.companies.flatMap((company, index) => {
-    const from = sample.starts[index];
-    return Array.from({ length: sample.starts[index + 1] - from }, (_, offset) => {
-      const row = from + offset;
-      const regressors = levels.regressors.map((column) => column[row]);
-      return [company, sample.year[row], levels.outcome[row], ...regressors];
-    });
+  const rows: string[] = [];
+  sample.companies.forEach((company, index) => {
+    const name = JSON.stringify(company);
+    for (let row = sample.starts[index]; row < sample.starts[index + 1]; row += 1) {
+      let text = `[${name},${sample.year[row]},${levels.outcome[row]}`;
+      for (const column of levels.regressors) text += `,${column[row]}`;
+      rows.push(`${text}]`);
+    }
   });
-  const singles = sample.singles.map(({ company, year, levels: { outcome, regressors } }) => [
-    company,
-    year,
-    outcome,
-    ...regressors,
-  ]);
-  return [...rows, ...singles];
+  for (const { company, year, levels: single } of sample.singles) {
+    const values = [year, single.outcome, ...single.regressors];
+    rows.push(`[${JSON.stringify(company)},${values.join(',')}]`);
+  }
+  return rows.join(',');
 }
 
 type Json = string | number | null | readonly Json[] | { readonly [key: string]: Json };

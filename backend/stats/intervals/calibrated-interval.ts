@@ -30,17 +30,36 @@ export function calibratedError(
   contrast: Contrast,
   cosines: number,
 ): CalibratedError {
-  const numerator = varianceForm(forms, contrast, contrast);
-  const denominator = forms.years * residualForm(forms, contrast, contrast, cosines);
+  const squares = lambdasOf(forms, contrast, cosines).reduce((sum, value) => sum + value ** 2, 0);
+  return errorFrom({
+    years: forms.years,
+    numerator: varianceForm(forms, contrast, contrast),
+    residualForm: residualForm(forms, contrast, contrast, cosines),
+    meanSquare: squares / cosines,
+  });
+}
+
+/** What a calibrated standard error is made of. */
+export interface ErrorParts {
+  /** T. */
+  readonly years: number;
+  /** Σ g_i'R_ig_i. */
+  readonly numerator: number;
+  /** mean_j Σ (Mh_j)_i'R_i(Mh_j)_i. */
+  readonly residualForm: number;
+  /** mean_j (h_j'e)². */
+  readonly meanSquare: number;
+}
+
+/** se = √(T·mean_j (h_j'e)²·c) with c = max(1, numerator / (T·residualForm)). */
+export function errorFrom(parts: ErrorParts): CalibratedError {
+  const { years, numerator, meanSquare } = parts;
+  const denominator = years * parts.residualForm;
   if (!(denominator > calibrationTolerance * numerator)) {
     return { standardError: null, calibration: null, reason: noCalibrationReason };
   }
   const calibration = Math.max(1, numerator / denominator);
-  const squares = lambdasOf(forms, contrast, cosines).reduce((sum, value) => sum + value ** 2, 0);
-  return {
-    standardError: Math.sqrt(((forms.years * squares) / cosines) * calibration),
-    calibration,
-  };
+  return { standardError: Math.sqrt(years * meanSquare * calibration), calibration };
 }
 
 /** estimate ± t_B(1 − α/2)·se. */

@@ -3,9 +3,9 @@ import { correlationProduct, yearDecays } from './correlation-product';
 import { cosineWeights } from './cosine-weights';
 
 /**
- * What the calibrated interval of any contrast is made of, computed once a fit. With K slopes, B cosines c_j and
- * the working correlation R_i = [ρ_i^|year − year'|]; U_i, e_i are the company's rows of basis and residuals.
- * Arrays by company and cosine are flattened, company first.
+ * What the calibrated interval of any contrast is made of, computed once a fit. With P coefficients beside the company
+ * intercepts, B cosines c_j and the working correlation R_i = [ρ_i^|year − year'|]; U_i, e_i are the company's rows of
+ * basis and residuals. Arrays by company and cosine are flattened, company first.
  */
 export interface CompanyForms {
   readonly slopes: number;
@@ -13,28 +13,28 @@ export interface CompanyForms {
   readonly cosines: number;
   /** 1'R_i1 / T_i², one a company. */
   readonly meanVariance: Float64Array;
-  /** U_i'R_i1 / T_i, K a company. */
+  /** U_i'R_i1 / T_i, P a company. */
   readonly meanWithBasis: Float64Array;
-  /** Σ U_i'R_iU_i, K × K. */
+  /** Σ U_i'R_iU_i, P × P. */
   readonly basisVariance: Float64Array;
   /** Σ_t c_j·e / T_i, by company and cosine. */
   readonly meanScore: Float64Array;
-  /** Σ_it c_j·e·u, K a cosine. */
+  /** Σ_it c_j·e·u, P a cosine. */
   readonly basisScore: Float64Array;
-  /** Σ_t c_j·u / T_i, K a company and cosine. */
+  /** Σ_t c_j·u / T_i, P a company and cosine. */
   readonly meanProjection: Float64Array;
-  /** Σ_it c_j·u·u', K × K a cosine. */
+  /** Σ_it c_j·u·u', P × P a cosine. */
   readonly basisProjection: Float64Array;
   /** a'R_ia with a the demeaned c_j / T_i, by company and cosine. */
   readonly residualMean: Float64Array;
-  /** a'R_i[B, U] with B the demeaned c_j·U, 2K a company and cosine. */
+  /** a'R_i[B, U] with B the demeaned c_j·U, 2P a company and cosine. */
   readonly residualCross: Float64Array;
-  /** Σ_i [B, U]'R_i[B, U], 2K × 2K a cosine. */
+  /** Σ_i [B, U]'R_i[B, U], 2P × 2P a cosine. */
   readonly residualBasis: Float64Array;
 }
 
 /**
- * Cost n·B·K² operations and N·B·(2 + 3K) numbers: no n × N matrix.
+ * Cost n·B·P² operations and N·B·(2 + 3P) numbers: no n × N matrix.
  *
  * @param persistence  ρ_i, one a company.
  */
@@ -62,15 +62,16 @@ export function companyForms(
     residualBasis: new Float64Array(cosines * 4 * slopes * slopes),
   };
   const weights = cosineWeights(years, cosines);
+  const scratch = scratchOf(fit);
   for (let company = 0; company < companies; company += 1) {
     const rows = rowsOf(fit, company, persistence[company]);
-    addVariance(forms, rows);
-    weights.forEach((weight, cosine) => {
-      const values = Float64Array.from(rows.position, (position) => weight[position]);
-      addScores(forms, rows, values, cosine);
-      addResidualForms(forms, rows, values, cosine);
-    });
+    addVariance(forms, rows, scratch);
+    for (let cosine = 0; cosine < cosines; cosine += 1) {
+      addScores(forms, rows, weights[cosine], cosine);
+      addResidualForms(forms, rows, { weight: weights[cosine], cosine, scratch });
+    }
   }
+  addBasisVariance(forms);
   return forms;
 }
 
@@ -81,6 +82,25 @@ interface CompanyRows {
   readonly basis: readonly Float64Array[];
   readonly residuals: Float64Array;
   readonly decays: Float64Array;
+}
+
+/** Columns of one company's rows, used again for each. */
+interface Scratch {
+  /** The demeaned c_j / T_i and c_j·U: 1 + P columns. */
+  readonly weighted: readonly Float64Array[];
+  readonly product: Float64Array;
+}
+
+function scratchOf({ sample, basis }: WithinFit): Scratch {
+  const { starts } = sample;
+  let longest = 0;
+  for (let company = 1; company < starts.length; company += 1) {
+    longest = Math.max(longest, starts[company] - starts[company - 1]);
+  }
+  return {
+    weighted: Array.from({ length: 1 + basis.length }, () => new Float64Array(longest)),
+    product: new Float64Array(longest),
+  };
 }
 
 function rowsOf(fit: WithinFit, company: number, persistence: number): CompanyRows {
@@ -96,15 +116,21 @@ function rowsOf(fit: WithinFit, company: number, persistence: number): CompanyRo
   };
 }
 
-function addVariance(forms: CompanyForms, rows: CompanyRows): void {
+function addVariance(forms: CompanyForms, rows: CompanyRows, scratch: Scratch): void {
   const size = forms.slopes;
-  const mean = new Float64Array(rows.count).fill(1 / rows.count);
-  const gram = correlatedGram(rows, [mean, ...rows.basis]);
-  forms.meanVariance[rows.company] = gram[0];
+  const { product } = scratch;
+  const mean = scratch.weighted[0].fill(1 / rows.count);
+  correlationProduct(mean, rows, product);
+  forms.meanVariance[rows.company] = dotRows(mean, product, rows.count);
   for (let k = 0; k < size; k += 1) {
-    forms.meanWithBasis[rows.company * size + k] = gram[k + 1];
-    for (let l = 0; l < size; l += 1) {
-      forms.basisVariance[k * size + l] += gram[(k + 1) * (size + 1) + l + 1];
+    forms.meanWithBasis[rows.company * size + k] = dotRows(rows.basis[k], product, rows.count);
+  }
+  for (let k = 0; k < size; k += 1) {
+    correlationProduct(rows.basis[k], rows, product);
+    for (let l = 0; l <= k; l += 1) {
+      const sum = dotRows(rows.basis[l], product, rows.count);
+      forms.basisVariance[k * size + l] += sum;
+      if (l < k) forms.basisVariance[l * size + k] += sum;
     }
   }
 }
@@ -117,17 +143,29 @@ function addScores(
 ): void {
   const size = forms.slopes;
   const place = rows.company * forms.cosines + cosine;
-  for (let row = 0; row < rows.count; row += 1) {
-    const weighted = weight[row] * rows.residuals[row];
-    forms.meanScore[place] += weighted / rows.count;
-    for (let k = 0; k < size; k += 1) {
-      const value = rows.basis[k][row];
-      forms.basisScore[cosine * size + k] += weighted * value;
-      forms.meanProjection[place * size + k] += (weight[row] * value) / rows.count;
-      for (let l = 0; l < size; l += 1) {
-        forms.basisProjection[(cosine * size + k) * size + l] +=
-          weight[row] * value * rows.basis[l][row];
+  const { position, residuals, basis, count } = rows;
+  let meanScore = 0;
+  for (let row = 0; row < count; row += 1) meanScore += weight[position[row]] * residuals[row];
+  forms.meanScore[place] = meanScore / count;
+  for (let k = 0; k < size; k += 1) {
+    const column = basis[k];
+    let score = 0;
+    let sum = 0;
+    for (let row = 0; row < count; row += 1) {
+      const weighted = weight[position[row]] * column[row];
+      sum += weighted;
+      score += weighted * residuals[row];
+    }
+    forms.basisScore[cosine * size + k] += score;
+    forms.meanProjection[place * size + k] = sum / count;
+    for (let l = 0; l <= k; l += 1) {
+      const other = basis[l];
+      let projection = 0;
+      for (let row = 0; row < count; row += 1) {
+        projection += weight[position[row]] * column[row] * other[row];
       }
+      forms.basisProjection[(cosine * size + k) * size + l] += projection;
+      if (l < k) forms.basisProjection[(cosine * size + l) * size + k] += projection;
     }
   }
 }
@@ -135,46 +173,81 @@ function addScores(
 function addResidualForms(
   forms: CompanyForms,
   rows: CompanyRows,
-  weight: Float64Array,
-  cosine: number,
+  {
+    weight,
+    cosine,
+    scratch: { weighted, product },
+  }: { readonly weight: Float64Array; readonly cosine: number; readonly scratch: Scratch },
 ): void {
-  const double = 2 * forms.slopes;
+  const size = forms.slopes;
+  const double = 2 * size;
+  const { count, basis } = rows;
   const place = rows.company * forms.cosines + cosine;
-  const mean = demeaned(weight.map((value) => value / rows.count));
-  const weighted = rows.basis.map((column) =>
-    demeaned(column.map((value, row) => value * weight[row])),
-  );
-  const gram = correlatedGram(rows, [mean, ...weighted, ...rows.basis]);
-  forms.residualMean[place] = gram[0];
-  for (let k = 0; k < double; k += 1) {
-    forms.residualCross[place * double + k] = gram[k + 1];
-    for (let l = 0; l < double; l += 1) {
-      forms.residualBasis[(cosine * double + k) * double + l] +=
-        gram[(k + 1) * (double + 1) + l + 1];
+  weighRows(rows, weight, weighted);
+  for (let k = 0; k <= size; k += 1) {
+    correlationProduct(weighted[k], rows, product);
+    for (let l = k; l < 1 + double; l += 1) {
+      const sum = dotRows(l <= size ? weighted[l] : basis[l - size - 1], product, count);
+      if (k === 0) {
+        if (l === 0) forms.residualMean[place] = sum;
+        else forms.residualCross[place * double + l - 1] = sum;
+      } else {
+        addSymmetric(forms.residualBasis, { cosine, double, row: k - 1, column: l - 1 }, sum);
+      }
     }
   }
 }
 
-/** Z'R_iZ, row-major. */
-function correlatedGram(rows: CompanyRows, columns: readonly Float64Array[]): Float64Array {
-  const size = columns.length;
-  const gram = new Float64Array(size * size);
-  const product = new Float64Array(rows.count);
-  columns.forEach((column, k) => {
-    correlationProduct(column, rows.decays, product);
-    for (let l = 0; l <= k; l += 1) {
-      let sum = 0;
-      for (let row = 0; row < rows.count; row += 1) sum += columns[l][row] * product[row];
-      gram[k * size + l] = sum;
-      gram[l * size + k] = sum;
+/** Fills `weighted` with the company's demeaned c_j / T_i and c_j·U. */
+function weighRows(
+  { basis, position, count }: CompanyRows,
+  weight: Float64Array,
+  weighted: readonly Float64Array[],
+): void {
+  weighted.forEach((target, k) => {
+    let sum = 0;
+    for (let row = 0; row < count; row += 1) {
+      const value =
+        k === 0 ? weight[position[row]] / count : weight[position[row]] * basis[k - 1][row];
+      target[row] = value;
+      sum += value;
     }
+    const mean = sum / count;
+    for (let row = 0; row < count; row += 1) target[row] -= mean;
   });
-  return gram;
 }
 
-function demeaned(values: Float64Array): Float64Array {
+/** The block of U with U is the same for every cosine. */
+function addBasisVariance(forms: CompanyForms): void {
+  const size = forms.slopes;
+  const double = 2 * size;
+  for (let cosine = 0; cosine < forms.cosines; cosine += 1) {
+    for (let k = 0; k < size; k += 1) {
+      for (let l = 0; l < size; l += 1) {
+        forms.residualBasis[(cosine * double + size + k) * double + size + l] =
+          forms.basisVariance[k * size + l];
+      }
+    }
+  }
+}
+
+function addSymmetric(
+  target: Float64Array,
+  place: {
+    readonly cosine: number;
+    readonly double: number;
+    readonly row: number;
+    readonly column: number;
+  },
+  value: number,
+): void {
+  const { cosine, double, row, column } = place;
+  target[(cosine * double + row) * double + column] += value;
+  if (row !== column) target[(cosine * double + column) * double + row] += value;
+}
+
+function dotRows(left: Float64Array, right: Float64Array, count: number): number {
   let sum = 0;
-  for (const value of values) sum += value;
-  const mean = sum / values.length;
-  return values.map((value) => value - mean);
+  for (let row = 0; row < count; row += 1) sum += left[row] * right[row];
+  return sum;
 }

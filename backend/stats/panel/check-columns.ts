@@ -49,11 +49,11 @@ function refuseLength(name: string, found: number, expected: number): void {
 function refuseTooLarge(data: PanelColumns): void {
   const rows: RowPlace[] = [];
   for (const { name, values } of [data.outcome, ...data.regressors]) {
-    values.forEach((value, index) => {
-      if (Math.abs(value) > largestMagnitude) {
+    for (let index = 0; index < values.length; index += 1) {
+      if (Math.abs(values[index]) > largestMagnitude) {
         rows.push({ row: data.fileRow[index], column: name });
       }
-    });
+    }
   }
   if (rows.length === 0) return;
   throw new StatsError(
@@ -67,10 +67,11 @@ function refuseTooLarge(data: PanelColumns): void {
 
 function refuseTooSmall(columns: readonly NamedColumn[]): void {
   const tooSmall = columns.flatMap(({ name, values }) => {
-    const largest = values.reduce(
-      (size, value) => (Math.abs(value) > size ? Math.abs(value) : size),
-      0,
-    );
+    let largest = 0;
+    for (const value of values) {
+      const size = Math.abs(value);
+      if (size > largest) largest = size;
+    }
     return largest > 0 && largest < smallestMagnitude ? [name] : [];
   });
   if (tooSmall.length === 0) return;

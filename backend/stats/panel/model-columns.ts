@@ -16,13 +16,13 @@ export interface ModelColumns {
  */
 export function modelColumns(
   data: PanelColumns,
-  rows: readonly number[],
+  rows: Int32Array,
   lag: Specification['lag'],
 ): ModelColumns {
   const outcome = data.outcome.values;
   const source = new Int32Array(outcome.length).fill(-1);
   if (lag === 0) {
-    source.forEach((_, row) => (source[row] = row));
+    for (let row = 0; row < source.length; row += 1) source[row] = row;
     return { outcome, regressors: data.regressors.map(({ values }) => values), source };
   }
   for (let index = 1; index < rows.length; index += 1) {
@@ -41,7 +41,7 @@ export function modelColumns(
 export function refuseNotPositive(
   data: PanelColumns,
   columns: ModelColumns,
-  rows: readonly number[],
+  rows: Int32Array,
 ): void {
   const places = new Map<string, RowPlace>();
   const note = (row: number, name: string): void => {

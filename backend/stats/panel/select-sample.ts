@@ -3,6 +3,7 @@ import { type RowPlace, StatsError } from '../stats-error';
 import { checkColumns } from './check-columns';
 import { type ModelColumns, modelColumns, refuseNotPositive } from './model-columns';
 import type { PanelSample, SingleRow } from './panel-sample';
+import { memberNames, sortedRows } from './sorted-rows';
 
 /** How a specification changes the columns before anything is estimated. */
 export type ColumnForm = Pick<Specification, 'form' | 'lag'>;
@@ -27,126 +28,109 @@ export function selectSample(
 ): PanelSample {
   checkColumns(data);
   const asked = memberNames(data, own, members);
-  const rows = sortedRows(data, new Set(asked));
+  const rows = sortedRows(data, asked);
   refuseDuplicates(data, rows);
   const columns = modelColumns(data, rows, lag);
-  const values = [columns.outcome, ...columns.regressors];
-  const names = [data.outcome, ...data.regressors].map(({ name }) => name);
-  const dropped = rows.flatMap((row): DroppedRow[] =>
-    names
-      .filter((_, index) => Number.isNaN(values[index][row]))
-      .map((column) => ({ row: data.fileRow[row], column, reason: 'missing' })),
-  );
-  const complete = rows.filter((row) => values.every((column) => !Number.isNaN(column[row])));
+  const { complete, dropped } = splitComplete(data, columns, rows);
   if (form === 'log') refuseNotPositive(data, columns, complete);
-  const groups = groupByCompany(data, complete);
-  const kept = groups.filter((group) => group.length > 1);
-  if (kept.length < 2) {
+  const { kept, starts, singles } = groupByCompany(data, complete);
+  if (starts.length < 3) {
+    const found = starts.length - 1;
     throw new StatsError(
       'too-few-companies',
-      `expected at least 2 companies with 2 complete rows each; found ${kept.length}`,
-      { companies: kept.map((group) => data.companies[data.company[group[0]]]) },
+      `expected at least 2 companies with 2 complete rows each; found ${found}`,
+      { companies: found === 0 ? [] : [nameOf(data, kept[0])] },
     );
   }
   return {
-    ...gather(data, columns, { groups: kept, form }),
-    singles: groups
-      .filter((group) => group.length === 1)
-      .map(([row]) => singleRow(data, columns, { row, form })),
-    dropped: dropped.sort((left, right) => left.row - right.row),
+    ...gather(data, columns, { rows: kept, starts, form }),
+    singles: singles.map((row) => singleRow(data, columns, { row, form })),
+    dropped,
     members: asked,
   };
 }
 
-function memberNames(
-  data: PanelColumns,
-  own: string | null,
-  members: readonly string[] | undefined,
-): string[] {
-  const present = new Set<string>();
-  data.company.forEach((code) => present.add(data.companies[code]));
-  const names = new Set(members ?? present);
-  if (own !== null) names.add(own);
-  const unknown = [...names].filter((name) => !present.has(name));
-  if (unknown.length > 0) {
-    throw new StatsError(
-      'unknown-company',
-      `expected rows with a year in the panel for every company; found none for ${unknown.join(', ')}`,
-      { companies: unknown },
-    );
+function nameOf(data: PanelColumns, row: number): string {
+  return data.companies[data.company[row]];
+}
+
+function refuseDuplicates(data: PanelColumns, rows: Int32Array): void {
+  const places = new Set<number>();
+  for (let index = 1; index < rows.length; index += 1) {
+    const before = rows[index - 1];
+    const row = rows[index];
+    if (data.year[before] === data.year[row] && nameOf(data, before) === nameOf(data, row)) {
+      places.add(before).add(row);
+    }
   }
-  return [...names].sort(byCodeUnit);
-}
-
-/** The same order on every machine, whatever its language. */
-function byCodeUnit(left: string, right: string): number {
-  if (left === right) return 0;
-  return left < right ? -1 : 1;
-}
-
-function sortedRows(data: PanelColumns, members: ReadonlySet<string>): number[] {
-  const order = data.companies
-    .map((name, code) => ({ name, code }))
-    .sort((left, right) => byCodeUnit(left.name, right.name) || left.code - right.code);
-  const place = new Int32Array(data.companies.length);
-  order.forEach(({ name, code }, index) => {
-    const before = order[index - 1];
-    place[code] = before?.name === name ? place[before.code] : index;
-  });
-  const rows: number[] = [];
-  data.company.forEach((code, row) => {
-    if (members.has(data.companies[code])) rows.push(row);
-  });
-  return rows.sort(
-    (left, right) =>
-      place[data.company[left]] - place[data.company[right]] ||
-      data.year[left] - data.year[right] ||
-      data.fileRow[left] - data.fileRow[right],
-  );
-}
-
-function refuseDuplicates(data: PanelColumns, rows: readonly number[]): void {
-  const isSame = (left: number | undefined, right: number | undefined): boolean =>
-    left !== undefined &&
-    right !== undefined &&
-    data.year[left] === data.year[right] &&
-    data.companies[data.company[left]] === data.companies[data.company[right]];
-  const places = rows
-    .filter((row, index) => isSame(rows[index - 1], row) || isSame(row, rows[index + 1]))
-    .map((row): RowPlace => ({
-      row: data.fileRow[row],
-      company: data.companies[data.company[row]],
-      year: data.year[row],
-    }));
-  if (places.length === 0) return;
+  if (places.size === 0) return;
+  const list = [...places].map((row): RowPlace => ({
+    row: data.fileRow[row],
+    company: nameOf(data, row),
+    year: data.year[row],
+  }));
   throw new StatsError(
     'duplicate-rows',
-    `expected one row a company and year; found ${places.length} rows that share theirs with another`,
-    { rows: places, companies: [...new Set(places.flatMap(({ company }) => company ?? []))] },
+    `expected one row a company and year; found ${list.length} rows that share theirs with another`,
+    { rows: list, companies: [...new Set(list.flatMap(({ company }) => company ?? []))] },
   );
 }
 
-function groupByCompany(data: PanelColumns, rows: readonly number[]): number[][] {
-  const groups: number[][] = [];
-  let last: string | undefined;
-  for (const row of rows) {
-    const company = data.companies[data.company[row]];
-    if (company !== last) groups.push([]);
-    groups[groups.length - 1].push(row);
-    last = company;
+/** Rows with every value, and what the others lack. */
+function splitComplete(
+  data: PanelColumns,
+  { outcome, regressors }: ModelColumns,
+  rows: Int32Array,
+): { readonly complete: Int32Array; readonly dropped: DroppedRow[] } {
+  const values = [outcome, ...regressors];
+  const names = [data.outcome, ...data.regressors].map(({ name }) => name);
+  const dropped: DroppedRow[] = [];
+  const complete = rows.filter((row) => {
+    const before = dropped.length;
+    for (let index = 0; index < values.length; index += 1) {
+      if (Number.isNaN(values[index][row])) {
+        dropped.push({ row: data.fileRow[row], column: names[index], reason: 'missing' });
+      }
+    }
+    return dropped.length === before;
+  });
+  return { complete, dropped: dropped.sort((left, right) => left.row - right.row) };
+}
+
+interface Groups {
+  /** Rows of the companies with two or more. */
+  readonly kept: Int32Array;
+  /** Company i holds kept[starts[i]] … kept[starts[i + 1] − 1]. */
+  readonly starts: Int32Array;
+  readonly singles: readonly number[];
+}
+
+function groupByCompany(data: PanelColumns, rows: Int32Array): Groups {
+  const kept = new Int32Array(rows.length);
+  const starts = [0];
+  const singles: number[] = [];
+  let count = 0;
+  for (let from = 0; from < rows.length;) {
+    const name = nameOf(data, rows[from]);
+    let to = from + 1;
+    while (to < rows.length && nameOf(data, rows[to]) === name) to += 1;
+    if (to - from === 1) singles.push(rows[from]);
+    else {
+      kept.set(rows.subarray(from, to), count);
+      count += to - from;
+      starts.push(count);
+    }
+    from = to;
   }
-  return groups;
+  return { kept: kept.slice(0, count), starts: Int32Array.from(starts), singles };
 }
 
 function gather(
   data: PanelColumns,
   columns: ModelColumns,
-  { groups, form }: { readonly groups: readonly number[][]; readonly form: ColumnForm['form'] },
+  { rows, starts, form }: SampleRows,
 ): Omit<PanelSample, 'singles' | 'dropped' | 'members'> {
-  const rows = groups.flat();
-  const starts = new Int32Array(groups.length + 1);
-  groups.forEach((group, index) => (starts[index + 1] = starts[index] + group.length));
-  const year = Int32Array.from(rows, (row) => data.year[row]);
+  const year = rows.map((row) => data.year[row]);
   const years = [...new Set(year)].sort((left, right) => left - right);
   if (years.length > mostYears) {
     throw new StatsError(
@@ -154,23 +138,38 @@ function gather(
       `expected at most ${mostYears} different fiscal years; found ${years.length}: is this the year's column?`,
     );
   }
+  const positions = new Map(years.map((value, position) => [value, position]));
   const levels = {
-    outcome: Float64Array.from(rows, (row) => columns.outcome[row]),
-    regressors: columns.regressors.map((values) => Float64Array.from(rows, (row) => values[row])),
+    outcome: pick(columns.outcome, rows),
+    regressors: columns.regressors.map((values) => pick(values, rows)),
   };
   return {
-    companies: groups.map((group) => data.companies[data.company[group[0]]]),
+    companies: Array.from({ length: starts.length - 1 }, (_, company) =>
+      nameOf(data, rows[starts[company]]),
+    ),
     starts,
     year,
-    position: Int32Array.from(year, (value) => years.indexOf(value)),
+    position: year.map((value) => positions.get(value) ?? 0),
     years,
     outcome: inForm(levels.outcome, form),
     regressors: levels.regressors.map((values) => inForm(values, form)),
     levels,
-    fileRow: Int32Array.from(rows, (row) => data.fileRow[row]),
+    fileRow: rows.map((row) => data.fileRow[row]),
     outcomeName: data.outcome.name,
     regressorNames: data.regressors.map(({ name }) => name),
   };
+}
+
+interface SampleRows {
+  readonly rows: Int32Array;
+  readonly starts: Int32Array;
+  readonly form: ColumnForm['form'];
+}
+
+function pick(values: Float64Array, rows: Int32Array): Float64Array {
+  const picked = new Float64Array(rows.length);
+  for (let index = 0; index < rows.length; index += 1) picked[index] = values[rows[index]];
+  return picked;
 }
 
 function inForm(values: Float64Array, form: ColumnForm['form']): Float64Array {
@@ -188,7 +187,7 @@ function singleRow(
   };
   const scaled = (value: number): number => (form === 'log' ? Math.log(value) : value);
   return {
-    company: data.companies[data.company[row]],
+    company: nameOf(data, row),
     year: data.year[row],
     fileRow: data.fileRow[row],
     outcome: scaled(levels.outcome),

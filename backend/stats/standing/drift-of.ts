@@ -1,12 +1,12 @@
 import { tTwoSided } from '../distributions/t-distribution';
 import type { Drift } from '../fit-result';
-import { calibratedError, calibratedInterval } from '../intervals/calibrated-interval';
-import { companyForms } from '../intervals/company-forms';
+import { calibratedInterval } from '../intervals/calibrated-interval';
 import { slopeContrast } from '../intervals/contrast';
 import type { IntervalContext } from '../intervals/interval-context';
 import { rowsOf } from '../intervals/interval-reasons';
 import { dot } from '../linear-algebra/square-matrix';
 import type { PanelSample } from '../panel/panel-sample';
+import { singleContrastError } from '../intervals/single-contrast';
 import { withoutInterval } from '../prediction';
 import { isPerfectFit, perfectFitReason } from '../regression/goodness';
 import { type WithinFit, withinFit } from '../regression/within-fit';
@@ -39,8 +39,8 @@ export function driftOf(context: IntervalContext, own: number): DriftOrReason {
   const reason = context.reason ?? (isPerfectFit(augmented) ? perfectFitReason : undefined);
   if (reason !== undefined)
     return { drift: { ...withoutInterval(estimate, reason), pValue: null } };
-  const forms = companyForms(augmented, context.persistence.used, cosines);
-  const error = calibratedError(forms, slopeContrast(augmented, weights), cosines);
+  const contrast = slopeContrast(augmented, weights);
+  const error = singleContrastError(augmented, contrast, context.persistence.used, cosines);
   const interval = calibratedInterval(estimate, error, { cosines, confidence });
   const pValue =
     error.standardError === null ? null : tTwoSided(estimate / error.standardError, cosines);

@@ -1,0 +1,68 @@
+import type { PanelColumns } from '../fit-result';
+import { StatsError } from '../stats-error';
+
+/**
+ * Everyone who is asked for, sorted by name.
+ *
+ * @throws {StatsError} 'unknown-company' for a name without a row.
+ */
+export function memberNames(
+  data: PanelColumns,
+  own: string | null,
+  members: readonly string[] | undefined,
+): string[] {
+  const isPresent = new Uint8Array(data.companies.length);
+  for (const code of data.company) isPresent[code] = 1;
+  const present = new Set(data.companies.filter((_, code) => isPresent[code] === 1));
+  const names = new Set(members ?? present);
+  if (own !== null) names.add(own);
+  const unknown = [...names].filter((name) => !present.has(name));
+  if (unknown.length > 0) {
+    throw new StatsError(
+      'unknown-company',
+      `expected rows with a year in the panel for every company; found none for ${unknown.join(', ')}`,
+      { companies: unknown },
+    );
+  }
+  return [...names].sort(byCodeUnit);
+}
+
+/** Rows of the members by company name, year and line of the file; those of a sorted panel are only picked. */
+export function sortedRows(data: PanelColumns, members: readonly string[]): Int32Array {
+  const place = companyPlaces(data);
+  const wanted = new Set(members);
+  const isMember = data.companies.map((name) => wanted.has(name));
+  const rows = new Int32Array(data.company.length);
+  let count = 0;
+  for (let row = 0; row < rows.length; row += 1) {
+    if (isMember[data.company[row]]) rows[count++] = row;
+  }
+  const picked = rows.slice(0, count);
+  const order = (left: number, right: number): number =>
+    place[data.company[left]] - place[data.company[right]] ||
+    data.year[left] - data.year[right] ||
+    data.fileRow[left] - data.fileRow[right];
+  for (let index = 1; index < count; index += 1) {
+    if (order(picked[index - 1], picked[index]) > 0) return picked.sort(order);
+  }
+  return picked;
+}
+
+/** Place of each company code in the order of names; codes of the same name share theirs. */
+function companyPlaces(data: PanelColumns): Int32Array {
+  const order = data.companies
+    .map((name, code) => ({ name, code }))
+    .sort((left, right) => byCodeUnit(left.name, right.name) || left.code - right.code);
+  const place = new Int32Array(data.companies.length);
+  order.forEach(({ name, code }, index) => {
+    const before = order[index - 1];
+    place[code] = before?.name === name ? place[before.code] : index;
+  });
+  return place;
+}
+
+/** The same order on every machine, whatever its language. */
+function byCodeUnit(left: string, right: string): number {
+  if (left === right) return 0;
+  return left < right ? -1 : 1;
+}
