@@ -1,7 +1,6 @@
 import * as fc from 'fast-check';
 import type { FitResult, PanelColumns } from './fit-result';
 import { leastSquares } from './linear-algebra/least-squares';
-import { contrastDegreesOfFreedom } from './prediction';
 import { expectDigits } from './testing/expect-digits';
 import { fitOf, panelOf, type PanelRow } from './testing/golden-panels';
 import { randomPanelNames as names, randomPanels as panels } from './testing/random-panels';
@@ -42,17 +41,7 @@ describe('the laws of company effects', () => {
         const companies = [...new Set(rows.map(({ company }) => company))];
         const reference = companies[pick % companies.length];
         const dummies = companies.filter((company) => company !== reference);
-        const columns = [
-          Float64Array.from(rows, () => 1),
-          ...dummies.map((company) =>
-            Float64Array.from(rows, (row) => (row.company === company ? 1 : 0)),
-          ),
-          ...names.regressors.map((_, k) => Float64Array.from(rows, (row) => row.regressors[k])),
-        ];
-        const { coefficients } = leastSquares(
-          columns,
-          Float64Array.from(rows, ({ outcome }) => outcome),
-        );
+        const coefficients = dummyRegression(rows, dummies, []);
         const fit = fitOf(panelOf(rows, names));
         fit.slopes.forEach(({ estimate }, k) =>
           expectDigits(estimate, coefficients[companies.length + k], 9, 'slope'),
@@ -147,40 +136,132 @@ describe('the laws of company effects', () => {
     );
   });
 
-  it('degrees of freedom of a contrast from the stored forms equal those of the fit', () => {
+  it('the differences of intercepts are the dummies’ coefficients, whichever company is the reference', () => {
     fc.assert(
       fc.property(panels, (rows) => {
-        const fit = fitOf(panelOf(rows, names), 'K1');
-        fit.slopes.forEach(({ degreesOfFreedom }, k) => {
-          const weights = names.regressors.map((_, index) => (index === k ? 1 : 0));
-          const stored = fit.prediction?.slopeDegreesOfFreedom;
-          expectDigits(
-            stored && contrastDegreesOfFreedom(stored, weights),
-            degreesOfFreedom ?? 0,
-            8,
-          );
+        const companies = [...new Set(rows.map(({ company }) => company))];
+        for (const reference of companies) {
+          const dummies = companies.filter((company) => company !== reference);
+          const coefficients = dummyRegression(rows, dummies, []);
+          for (const { company, estimate } of fitOf(panelOf(rows, names), reference).pairs ?? []) {
+            const expected = -coefficients[1 + dummies.indexOf(company)];
+            expect(Math.abs(estimate - expected)).toBeLessThan(1e-8);
+          }
+        }
+      }),
+      runs,
+    );
+  });
+
+  it('with year effects the within regression equals N − 1 company and T − 1 year dummies, on unbalanced panels too', () => {
+    fc.assert(
+      fc.property(panels, fc.nat(), fc.nat(), (rows, one, other) => {
+        const companies = [...new Set(rows.map(({ company }) => company))];
+        const years = [...new Set(rows.map(({ year }) => year))].sort();
+        const reference = years[other % years.length];
+        const dummies = companies.filter((_, index) => index !== one % companies.length);
+        const yearDummies = years.filter((year) => year !== reference);
+        const coefficients = dummyRegression(rows, dummies, yearDummies);
+        const fit = fitOf(panelOf(rows, names), null, { effects: 'company,year' });
+        const first = coefficients.length - names.regressors.length;
+        fit.slopes.forEach(({ estimate }, k) =>
+          expectDigits(estimate, coefficients[first + k], 9, 'slope'),
+        );
+        const dummyOf = (year: number): number =>
+          year === reference ? 0 : coefficients[1 + dummies.length + yearDummies.indexOf(year)];
+        const effects = fit.yearEffects!;
+        const offset = effects.find(({ year }) => year === reference)!.estimate;
+        for (const { year, estimate } of effects) {
+          expect(Math.abs(estimate - offset - dummyOf(year))).toBeLessThan(1e-8);
+        }
+      }),
+      runs,
+    );
+  });
+
+  it('a constant added to the outcome shifts every intercept by it and nothing else', () => {
+    fc.assert(
+      fc.property(panels, fc.double({ min: -1e4, max: 1e4, noNaN: true }), (rows, constant) => {
+        const plain = fitOf(panelOf(rows, names), 'K1');
+        const shifted = fitOf(
+          mapRows(rows, (row) => ({ ...row, outcome: row.outcome + constant })),
+          'K1',
+        );
+        expectSame(shifted, plain, 7);
+        plain.intercepts.forEach((intercept, index) => {
+          const moved = shifted.intercepts[index];
+          expect(Math.abs(moved.estimate - intercept.estimate - constant)).toBeLessThan(1e-7);
+          expectDigits(moved.standardError, intercept.standardError ?? NaN, 7);
         });
       }),
       runs,
     );
   });
 
-  it('a contrast of two slopes has the degrees of freedom of the slope it becomes in other regressors', () => {
+  it('a company with one row changes no figure, and is listed with y − x’b', () => {
     fc.assert(
       fc.property(panels, (rows) => {
-        // y = b·x + c·z = (b − c)·x + c·(x + z): the contrast b − c is a slope of the second form.
-        const plain = fitOf(panelOf(rows, names), 'K1').prediction;
-        const turned = fitOf(
-          mapRows(rows, (row) => ({
-            ...row,
-            regressors: [row.regressors[0], row.regressors[0] + row.regressors[1]],
-          })),
-          'K1',
+        const single = { company: 'K9', year: 2003, outcome: 55, regressors: [10, 4] };
+        const plain = fitOf(panelOf(rows, names), 'K1');
+        const fit = fitOf(panelOf([...rows, single], names), 'K1');
+        expect(figures(fit)).toEqual(figures(plain));
+        expect(fit.sample.singleRow).toEqual(['K9']);
+        const listed = fit.intercepts.find(({ company }) => company === 'K9');
+        const fitted = single.regressors.reduce(
+          (sum, value, k) => sum + value * fit.slopes[k].estimate,
+          0,
         );
-        const degrees = plain && contrastDegreesOfFreedom(plain.slopeDegreesOfFreedom, [1, -1]);
-        expectDigits(degrees, turned.slopes[0].degreesOfFreedom ?? 0, 7);
+        expectDigits(listed?.estimate, single.outcome - fitted, 9);
+        expect(listed?.low).toBeNull();
       }),
       runs,
     );
   });
+
+  // With X'X and RSS doubled, RSS/df·(X'X)⁻¹ changes by the degrees of freedom alone; the sandwich of scores has none.
+  for (const effects of ['company', 'company,year'] as const) {
+    it(`a panel held twice under new names halves variances but for the degrees of freedom, with ${effects} effects`, () => {
+      fc.assert(
+        fc.property(panels, (rows) => {
+          const twice = [...rows, ...rows.map((row) => ({ ...row, company: `${row.company} b` }))];
+          const companies = new Set(rows.map(({ company }) => company)).size;
+          const years = new Set(rows.map(({ year }) => year)).size;
+          const parameters = names.regressors.length + (effects === 'company' ? 0 : years - 1);
+          const df = rows.length - companies - parameters;
+          const dfTwice = 2 * (rows.length - companies) - parameters;
+          const variance = (
+            panel: readonly PanelRow[],
+            slopes: 'classical' | 'cr0',
+            k: number,
+          ): number =>
+            fitOf(panelOf(panel, names), null, { effects, slopes }).slopeCovariance![k][k];
+          names.regressors.forEach((_, k) => {
+            const classical = variance(rows, 'classical', k);
+            expectDigits(variance(twice, 'classical', k), (classical * df) / dfTwice, 8);
+            expectDigits(variance(twice, 'cr0', k), variance(rows, 'cr0', k) / 2, 8);
+          });
+        }),
+        runs,
+      );
+    });
+  }
 });
+
+/** Least squares with a constant, dummies of these companies and years, and the regressors, in this order. */
+function dummyRegression(
+  rows: readonly PanelRow[],
+  companies: readonly string[],
+  years: readonly number[],
+): Float64Array {
+  const column = (value: (row: PanelRow) => number): Float64Array => Float64Array.from(rows, value);
+  const columns = [
+    column(() => 1),
+    ...companies.map((company) => column((row) => (row.company === company ? 1 : 0))),
+    ...years.map((year) => column((row) => (row.year === year ? 1 : 0))),
+    ...names.regressors.map((_, k) => column((row) => row.regressors[k])),
+  ];
+  return leastSquares(
+    columns,
+    column(({ outcome }) => outcome),
+  ).coefficients;
+}
