@@ -26,20 +26,22 @@ export function canonicalFitText(
 /** [company, year, outcome, regressors …] in the panel's measure, by company and year; the single rows last; numbers as JSON writes them. */
 function rowsUsed(sample: PanelSample): string {
   const { levels } = sample;
-  const rows: string[] = [];
+  const parts: string[] = [];
   sample.companies.forEach((company, index) => {
     const name = JSON.stringify(company);
+    let text = '';
     for (let row = sample.starts[index]; row < sample.starts[index + 1]; row += 1) {
-      let text = `[${name},${sample.year[row]},${levels.outcome[row]}`;
+      text += `${text === '' ? '' : ','}[${name},${sample.year[row]},${levels.outcome[row]}`;
       for (const column of levels.regressors) text += `,${column[row]}`;
-      rows.push(`${text}]`);
+      text += ']';
     }
+    parts.push(text);
   });
   for (const { company, year, levels: single } of sample.singles) {
     const values = [year, single.outcome, ...single.regressors];
-    rows.push(`[${JSON.stringify(company)},${values.join(',')}]`);
+    parts.push(`[${JSON.stringify(company)},${values.join(',')}]`);
   }
-  return rows.join(',');
+  return parts.join(',');
 }
 
 type Json = string | number | null | readonly Json[] | { readonly [key: string]: Json };

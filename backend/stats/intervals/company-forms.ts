@@ -1,5 +1,5 @@
 import type { WithinFit } from '../regression/within-fit';
-import { correlationProduct, yearDecays } from './correlation-product';
+import { correlationProduct, fillYearDecays } from './correlation-product';
 import { cosineWeights } from './cosine-weights';
 
 /**
@@ -64,7 +64,7 @@ export function companyForms(
   const weights = cosineWeights(years, cosines);
   const scratch = scratchOf(fit);
   for (let company = 0; company < companies; company += 1) {
-    const rows = rowsOf(fit, company, persistence[company]);
+    const rows = rowsOf(fit, { company, persistence: persistence[company], scratch });
     addVariance(forms, rows, scratch);
     for (let cosine = 0; cosine < cosines; cosine += 1) {
       addScores(forms, rows, weights[cosine], cosine);
@@ -75,6 +75,7 @@ export function companyForms(
   return forms;
 }
 
+/** One company's rows, from 0 on. */
 interface CompanyRows {
   readonly company: number;
   readonly count: number;
@@ -89,6 +90,7 @@ interface Scratch {
   /** The demeaned c_j / T_i and c_j·U: 1 + P columns. */
   readonly weighted: readonly Float64Array[];
   readonly product: Float64Array;
+  readonly decays: Float64Array;
 }
 
 function scratchOf({ sample, basis }: WithinFit): Scratch {
@@ -100,19 +102,28 @@ function scratchOf({ sample, basis }: WithinFit): Scratch {
   return {
     weighted: Array.from({ length: 1 + basis.length }, () => new Float64Array(longest)),
     product: new Float64Array(longest),
+    decays: new Float64Array(longest),
   };
 }
 
-function rowsOf(fit: WithinFit, company: number, persistence: number): CompanyRows {
+function rowsOf(
+  fit: WithinFit,
+  {
+    company,
+    persistence,
+    scratch: { decays },
+  }: { readonly company: number; readonly persistence: number; readonly scratch: Scratch },
+): CompanyRows {
   const from = fit.sample.starts[company];
   const to = fit.sample.starts[company + 1];
+  fillYearDecays(fit.sample.year, { from, to, persistence }, decays, 0);
   return {
     company,
     count: to - from,
     position: fit.sample.position.subarray(from, to),
     basis: fit.basis.map((column) => column.subarray(from, to)),
     residuals: fit.residuals.subarray(from, to),
-    decays: yearDecays(fit.sample.year.subarray(from, to), persistence),
+    decays,
   };
 }
 

@@ -1,4 +1,4 @@
-import { correlationForm, correlationProduct, yearDecays } from './correlation-product';
+import { correlationForm, correlationProduct, fillYearDecays } from './correlation-product';
 
 describe('correlationProduct', () => {
   it('equals the product with the matrix written out, also over gaps', () => {
@@ -6,10 +6,11 @@ describe('correlationProduct', () => {
     const values = Float64Array.of(1, -2, 3, 0.5, 7);
     for (const persistence of [0, 0.4, 0.95]) {
       const product = new Float64Array(5);
-      const rows = { count: 5, decays: yearDecays(year, persistence) };
-      correlationProduct(values, rows, product);
+      const decays = new Float64Array(5);
+      fillYearDecays(year, { from: 0, to: 5, persistence }, decays, 0);
+      correlationProduct(values, { count: 5, decays }, product);
       const form = values.reduce((sum, value, row) => sum + value * product[row], 0);
-      expect(correlationForm(values, rows)).toBeCloseTo(form, 11);
+      expect(correlationForm(values, decays)).toBeCloseTo(form, 11);
       year.forEach((left, row) => {
         const expected = year.reduce(
           (sum, right, column) => sum + persistence ** Math.abs(left - right) * values[column],

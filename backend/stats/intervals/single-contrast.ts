@@ -1,7 +1,7 @@
 import type { WithinFit } from '../regression/within-fit';
 import { type CalibratedError, errorFrom } from './calibrated-interval';
 import type { Contrast } from './contrast';
-import { correlationForm, yearDecays } from './correlation-product';
+import { correlationForm, fillYearDecays } from './correlation-product';
 import { cosineWeights } from './cosine-weights';
 
 /**
@@ -17,35 +17,39 @@ export function singleContrastError(
   persistence: Float64Array,
   cosines: number,
 ): CalibratedError {
-  const { sample, basis } = fit;
+  const { sample, residuals } = fit;
+  const decays = decaysOf(fit, persistence);
   const direct = rowWeights(fit, contrast);
-  const weights = cosineWeights(sample.years.length, cosines);
-  const numerator = sumOverCompanies(fit, persistence, (from, to, decays) =>
-    correlationForm(direct.subarray(from, to), { count: to - from, decays }),
-  );
+  const rest = new Float64Array(direct.length);
   let squares = 0;
   let residualForms = 0;
-  const rest = new Float64Array(direct.length);
-  for (const weight of weights) {
+  for (const weight of cosineWeights(sample.years.length, cosines)) {
     let lambda = 0;
     for (let row = 0; row < direct.length; row += 1) {
       const value = weight[sample.position[row]] * direct[row];
       rest[row] = value;
-      lambda += value * fit.residuals[row];
+      lambda += value * residuals[row];
     }
     squares += lambda * lambda;
-    takeOut(basis, rest);
-    residualForms += sumOverCompanies(fit, persistence, (from, to, decays) => {
-      demean(rest, from, to);
-      return correlationForm(rest.subarray(from, to), { count: to - from, decays });
-    });
+    takeOut(fit, rest);
+    residualForms += correlationForm(rest, decays);
   }
   return errorFrom({
     years: sample.years.length,
-    numerator,
+    numerator: correlationForm(direct, decays),
     residualForm: residualForms / cosines,
     meanSquare: squares / cosines,
   });
+}
+
+function decaysOf({ sample }: WithinFit, persistence: Float64Array): Float64Array {
+  const decays = new Float64Array(sample.year.length);
+  for (let company = 0; company < persistence.length; company += 1) {
+    const from = sample.starts[company];
+    const span = { from, to: sample.starts[company + 1], persistence: persistence[company] };
+    fillYearDecays(sample.year, span, decays, from);
+  }
+  return decays;
 }
 
 /** g_it = w_i/T_i + r'u_it. */
@@ -65,32 +69,20 @@ function rowWeights({ sample, basis }: WithinFit, contrast: Contrast): Float64Ar
   return direct;
 }
 
-/** Leaves the part of a column that is orthogonal to the basis, which knows no company means. */
-function takeOut(basis: readonly Float64Array[], values: Float64Array): void {
+/** Leaves the part of a column that is orthogonal to the design: company means and basis. */
+function takeOut({ sample, basis }: WithinFit, values: Float64Array): void {
   for (const column of basis) {
     let product = 0;
     for (let row = 0; row < values.length; row += 1) product += column[row] * values[row];
     for (let row = 0; row < values.length; row += 1) values[row] -= product * column[row];
   }
-}
-
-function demean(values: Float64Array, from: number, to: number): void {
-  let sum = 0;
-  for (let row = from; row < to; row += 1) sum += values[row];
-  const mean = sum / (to - from);
-  for (let row = from; row < to; row += 1) values[row] -= mean;
-}
-
-function sumOverCompanies(
-  { sample }: WithinFit,
-  persistence: Float64Array,
-  term: (from: number, to: number, decays: Float64Array) => number,
-): number {
-  let sum = 0;
-  persistence.forEach((value, company) => {
-    const from = sample.starts[company];
-    const to = sample.starts[company + 1];
-    sum += term(from, to, yearDecays(sample.year.subarray(from, to), value));
-  });
-  return sum;
+  const { starts } = sample;
+  for (let company = 1; company < starts.length; company += 1) {
+    const from = starts[company - 1];
+    const to = starts[company];
+    let sum = 0;
+    for (let row = from; row < to; row += 1) sum += values[row];
+    const mean = sum / (to - from);
+    for (let row = from; row < to; row += 1) values[row] -= mean;
+  }
 }
