@@ -1,9 +1,9 @@
-import type { ObservedRange, OwnYear, PredictionBasis } from './fit-result';
+import type { ObservedRange, PredictionBasis } from './fit-result';
 import { quadraticForm } from './prediction';
 import type { PanelSample } from './panel/panel-sample';
 import type { WithinFit } from './regression/within-fit';
 
-/** Bounds of each regressor over the own company's rows and over all peers' rows. */
+/** Bounds of each regressor over the own company's rows and over all peers' rows, in the panel's measure. */
 export function observedRanges(
   sample: PanelSample,
   own: number,
@@ -11,8 +11,8 @@ export function observedRanges(
   const from = sample.starts[own];
   const to = sample.starts[own + 1];
   return {
-    ownRange: sample.regressors.map((column) => rangeOf(column.subarray(from, to))),
-    peerRange: sample.regressors.map((column) =>
+    ownRange: sample.levels.regressors.map((column) => rangeOf(column.subarray(from, to))),
+    peerRange: sample.levels.regressors.map((column) =>
       rangeOf(column.filter((_, row) => row < from || row >= to)),
     ),
   };
@@ -28,16 +28,17 @@ function rangeOf(values: Float64Array): ObservedRange {
   return { low, high };
 }
 
-/** x̃'Q⁻¹x̃ of the own company's years, by the very sums that a plan's leverage is computed with. */
+/** x̃'Q⁻¹x̃ of the own company's rows, by the very sums that a plan's leverage is computed with. */
 export function ownLeverages(
+  sample: PanelSample,
   inverseCrossProduct: readonly (readonly number[])[],
-  ownMeans: readonly number[],
-  ownYears: readonly OwnYear[],
+  { own, ownMeans }: { readonly own: number; readonly ownMeans: readonly number[] },
 ): number[] {
-  return ownYears.map(({ regressors }) =>
+  const from = sample.starts[own];
+  return Array.from({ length: sample.starts[own + 1] - from }, (_, index) =>
     quadraticForm(
       inverseCrossProduct,
-      regressors.map((value, k) => value - ownMeans[k]),
+      sample.regressors.map((column, k) => column[from + index] - ownMeans[k]),
     ),
   );
 }

@@ -1,70 +1,82 @@
-import type { OwnYear, PredictionBasis, Smearing } from './fit-result';
 import { tQuantile } from './distributions/t-distribution';
-import { levelContrast, slopeContrast } from './intervals/contrast';
+import { familiarGroundOf } from './familiar-ground';
+import type { OwnYear, PredictionBasis, Smearing } from './fit-result';
+import { heldValues } from './held-values';
+import { type Contrast, levelContrast, slopeContrast } from './intervals/contrast';
 import { lambdasOf, residualForm, varianceForm } from './intervals/contrast-forms';
 import type { IntervalContext } from './intervals/interval-context';
 import { contrastIntervalReason } from './intervals/interval-reasons';
-import { congruence, type SquareMatrix, toRows } from './linear-algebra/square-matrix';
+import { toRows } from './linear-algebra/square-matrix';
 import type { FitParts } from './open-fit';
-import { ownLeverages, observedRanges, peerLeverage } from './observed-range';
-import { type SlopeDegreesOfFreedom, twoSidedQuantile } from './prediction';
+import { ownErrorsOf } from './own-errors';
+import { peerYearsOf } from './peer-years';
+import { twoSidedQuantile, yearEffectOrder } from './prediction';
 import { isPerfectFit, perfectFitReason } from './regression/goodness';
 import type { WithinFit } from './regression/within-fit';
+import { yearEffectChoices } from './year-effect-choices';
 
-export interface PredictionInput extends Pick<FitParts, 'context' | 'ownIndex' | 'inference'> {
+export interface PredictionInput extends Pick<
+  FitParts,
+  'context' | 'ownIndex' | 'inference' | 'data' | 'specification'
+> {
   readonly ownYears: readonly OwnYear[];
   readonly smearing: Smearing | null;
 }
 
 /** All that prediction of the own company needs; see `PredictionBasis` for the measures. */
-export function predictionBasisOf({
-  context,
-  ownIndex: own,
-  inference: slopes,
-  ownYears,
-}: PredictionInput): PredictionBasis {
+export function predictionBasisOf(input: PredictionInput): PredictionBasis {
+  const { context, ownIndex: own, inference, data, specification, ownYears, smearing } = input;
   const { fit } = context;
-  const size = fit.slopes.length;
+  const company = fit.sample.companies[own];
   const ownMeans = fit.regressors.map(({ origin, means }) => origin + means[own]);
-  const unit = Float64Array.from({ length: size * size }, (_, index) =>
-    index % (size + 1) === 0 ? 1 : 0,
-  );
-  const inverseCrossProduct = toRows(congruence(fit.inverseR, unit, size), size);
-  const largestOwnLeverage = Math.max(...ownLeverages(inverseCrossProduct, ownMeans, ownYears));
+  const last = ownYears[ownYears.length - 1];
+  const { covariance } = inference;
   return {
-    company: fit.sample.companies[own],
+    company,
     regressors: fit.sample.regressorNames,
+    form: specification.form,
+    lag: specification.lag,
+    smear: smearing?.factor ?? null,
     coefficients: [fit.relativeIntercepts[own] + fit.interceptOrigin, ...fit.slopes],
     ownLevel: fit.outcome.origin + fit.outcome.means[own],
     ownMeans,
-    years: fit.sample.years.length,
     ...calibratedForms(context, own),
+    years: fit.sample.years.length,
     confidence: context.confidence,
-    slopeCovariance: toRows(slopes.covariance!, size),
-    slopeDegreesOfFreedom: slopes.degrees!,
-    slopeIntervalReason: isPerfectFit(fit) ? perfectFitReason : undefined,
-    last: ownYears[ownYears.length - 1],
-    inverseCrossProduct,
+    slopeCovariance: covariance === null ? null : toRows(covariance, fit.slopes.length),
+    slopeDegreesOfFreedom: inference.degrees,
+    slopeIntervalReason: isPerfectFit(fit) ? perfectFitReason : inference.covarianceReason,
+    last,
+    held: heldValues({ data, form: specification.form }, company, last.year),
+    ownErrors: ownErrorsOf(context, own),
+    peers: peerYearsOf(fit, own),
     residualVariance: fit.residualSquares / fit.residualDegreesOfFreedom,
-    largestOwnLeverage,
-    largestLeverage: Math.max(largestOwnLeverage, peerLeverage(fit, fit.basis, own)),
-    ...observedRanges(fit.sample, own),
+    ...familiarGroundOf(fit, own, ownMeans),
   };
 }
 
-function calibratedForms(
-  context: IntervalContext,
-  own: number,
-): Pick<PredictionBasis, 'lambdas' | 'a' | 'd' | 'quantile' | 'intervalReason'> {
+type CalibratedForms = Pick<
+  PredictionBasis,
+  'yearEffects' | 'lambdas' | 'a' | 'd' | 'quantile' | 'intervalReason'
+>;
+
+/** λ, A and D over [own level, slopes, year effects in `yearEffectOrder`]. */
+function calibratedForms(context: IntervalContext, own: number): CalibratedForms {
   const { fit, forms, cosines } = context;
   const quantile = twoSidedQuantile(tQuantile, context.confidence, cosines);
-  const basis = basisContrasts(fit, own);
-  const intervalReason = context.reason ?? contrastIntervalReason(fit, basis[0]);
+  const years = yearEffectChoices(fit, own);
+  const yearEffects = years?.estimates ?? null;
+  const level = levelContrast(fit, own);
+  // A company of fewer than 3 rows has no interval at all here, though a carried gap can weigh it by less than one half.
+  const intervalReason = context.reason ?? contrastIntervalReason(fit, level);
   if (forms === null || intervalReason !== undefined) {
-    return { lambdas: [], a: [], d: [], quantile, intervalReason };
+    return { yearEffects, lambdas: [], a: [], d: [], quantile, intervalReason };
   }
+  const ofYears = years === null ? [] : yearEffectOrder.map((name) => years.contrasts[name]);
+  const basis = [level, ...slopeContrasts(fit), ...ofYears];
   const lambdas = basis.map((contrast) => lambdasOf(forms, contrast, cosines));
   return {
+    yearEffects,
     lambdas: Array.from({ length: cosines }, (_, cosine) => lambdas.map((row) => row[cosine])),
     a: basis.map((left) => basis.map((right) => varianceForm(forms, left, right))),
     d: basis.map((left) => basis.map((right) => residualForm(forms, left, right, cosines))),
@@ -72,15 +84,11 @@ function calibratedForms(
   };
 }
 
-function basisContrasts(fit: WithinFit, own: number): ReturnType<typeof levelContrast>[] {
-  const size = fit.slopes.length;
-  return [
-    levelContrast(fit, own),
-    ...Array.from({ length: size }, (_, k) =>
-      slopeContrast(
-        fit,
-        Float64Array.from({ length: size }, (__, index) => (index === k ? 1 : 0)),
-      ),
+function slopeContrasts(fit: WithinFit): Contrast[] {
+  return Array.from(fit.slopes, (_, k) =>
+    slopeContrast(
+      fit,
+      fit.slopes.map((__, index) => (index === k ? 1 : 0)),
     ),
-  ];
+  );
 }

@@ -1,36 +1,74 @@
+import { basisError } from './basis-error';
 import { type IntervalEstimate, symmetricInterval, withoutInterval } from './interval-estimate';
+import { inModelScale } from './model-scale';
+import type { Outlook } from './outlook';
+import { plannedContrast } from './planned-contrast';
 import type { PredictionBasis } from './prediction-basis';
-import { quadraticForm, weightedSum } from './quadratic-form';
 
-/** A calibration whose denominator is below this share of its numerator is no calibration. */
-const calibrationTolerance = 1e-12;
+/** An expected value of a log form, each figure under its own name; money but for `inLogs`. */
+export interface LogFigures {
+  /** Which of the two the estimate is: the median where the gap is carried, for then there is no mean. */
+  readonly shown: 'mean' | 'median';
+  /** exp(·)·smear; null where the gap is carried. */
+  readonly mean: number | null;
+  /** exp(·). */
+  readonly median: number;
+  readonly inLogs: IntervalEstimate;
+}
+
+/** In log form `standardError` is null though there is an interval: it lies in `log.inLogs`, in logs. */
+export interface ExpectedValue extends IntervalEstimate {
+  readonly log?: LogFigures;
+}
 
 /**
- * The model's market value of the own company at given regressors, a_own + x'b, with its calibrated interval.
+ * The own company's expected market value at given regressors, with its calibrated interval.
  *
- * @param regressors  planned values, in the order and measure of `basis.regressors`.
- * @see Lazarus, Lewis, Stock & Watson (2018), JBES 36, 541–559, for the cosine weights behind λ.
+ * @param regressors  planned values, in the order of `basis.regressors` and the panel's measure.
+ * @throws {RangeError} for values the model cannot read, and for a gap that cannot be carried; `predict` gives these as
+ *   reasons instead.
+ * @see Duan (1983), JASA 78, 605–610, for the smearing factor, taken as known.
  */
 export function expectedValue(
   basis: PredictionBasis,
   regressors: readonly number[],
-): IntervalEstimate {
-  const distances = regressors.map((value, k) => value - basis.ownMeans[k]);
-  const estimate = basis.ownLevel + weightedSum(basis.coefficients.slice(1), distances);
-  if (basis.intervalReason !== undefined) return withoutInterval(estimate, basis.intervalReason);
-  const weights = [1, ...distances];
-  const numerator = quadraticForm(basis.a, weights);
-  const denominator = basis.years * quadraticForm(basis.d, weights);
-  if (!(denominator >= calibrationTolerance * numerator) || denominator === 0) {
-    return withoutInterval(
-      estimate,
-      'The variation over time that an interval is calibrated on is practically zero for this plan.',
-    );
-  }
-  const calibration = Math.max(1, numerator / denominator);
-  const meanSquare =
-    basis.lambdas.reduce((sum, lambda) => sum + weightedSum(lambda, weights) ** 2, 0) /
-    basis.lambdas.length;
-  const standardError = Math.sqrt(basis.years * meanSquare * calibration);
-  return symmetricInterval(estimate, standardError, basis.quantile);
+  outlook: Outlook = {},
+): ExpectedValue {
+  const { estimate, weights } = plannedContrast(basis, inModelScale(basis, regressors), outlook);
+  const error = basisError(basis, weights);
+  const interval =
+    error.standardError === null
+      ? withoutInterval(estimate, error.reason)
+      : symmetricInterval(estimate, error.standardError, basis.quantile);
+  return basis.form === 'log' ? fromLogs(basis, interval, outlook) : interval;
+}
+
+/** The factor between exp(·) and the estimate that is shown: Duan's for a mean, none for a median. */
+export function shownFactor(basis: PredictionBasis, { start }: Outlook): number {
+  return start === 'carry-the-gap' ? 1 : (basis.smear ?? 1);
+}
+
+function fromLogs(
+  basis: PredictionBasis,
+  inLogs: IntervalEstimate,
+  outlook: Outlook,
+): ExpectedValue {
+  const factor = shownFactor(basis, outlook);
+  const isMedian = outlook.start === 'carry-the-gap';
+  const scaled = (value: number | null): number | null =>
+    value === null ? null : Math.exp(value) * factor;
+  const median = Math.exp(inLogs.estimate);
+  return {
+    ...inLogs,
+    estimate: median * factor,
+    standardError: null,
+    low: scaled(inLogs.low),
+    high: scaled(inLogs.high),
+    log: {
+      shown: isMedian ? 'median' : 'mean',
+      mean: isMedian ? null : median * factor,
+      median,
+      inLogs,
+    },
+  };
 }

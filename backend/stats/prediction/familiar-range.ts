@@ -1,3 +1,5 @@
+import { inModelScale, inPanelMeasure } from './model-scale';
+import { lastInModelScale } from './planned-contrast';
 import type { ObservedRange, PredictionBasis } from './prediction-basis';
 import { quadraticForm } from './quadratic-form';
 
@@ -15,23 +17,28 @@ export interface RegressorPlace {
 export interface FamiliarRange {
   /** `inside` up to the own company's largest leverage, `edge` up to the largest of any company, else `outside`. */
   readonly kind: 'inside' | 'edge' | 'outside';
-  /** x̃'Q⁻¹x̃ of the plan's distance from the own company's means. */
+  /** x̃'Q⁻¹x̃ of the plan's distance from the own company's means, in the model's scale and without the 1/T of an intercept. */
   readonly leverage: number;
   readonly reasons: readonly RegressorPlace[];
-  /** The last plan inside on the line from the last actual values to this plan; the plan itself where it is inside. */
+  /**
+   * The last plan inside on the line from what the model last read to this plan; the plan itself where it is inside. In
+   * log form that line is straight in logs. Panel's measure.
+   */
   readonly nearestInside: readonly number[];
 }
 
 /**
  * Leverage of a plan against the sample's own, and each planned value against the observed ranges.
  *
- * @param regressors  planned values, in the order and measure of `basis.regressors`.
+ * @param regressors  planned values, in the order of `basis.regressors` and the panel's measure.
+ * @throws {RangeError} for values the model cannot read.
  */
 export function familiarRange(
   basis: PredictionBasis,
   regressors: readonly number[],
 ): FamiliarRange {
-  const leverage = leverageOf(basis, regressors);
+  const values = inModelScale(basis, regressors);
+  const leverage = leverageOf(basis, values);
   const kind =
     leverage <= basis.largestOwnLeverage
       ? 'inside'
@@ -47,30 +54,37 @@ export function familiarRange(
       own: placeIn(basis.ownRange[k], regressors[k]),
       peers: placeIn(basis.peerRange[k], regressors[k]),
     })),
-    nearestInside: kind === 'inside' ? regressors : shrinkInside(basis, regressors),
+    nearestInside: kind === 'inside' ? regressors : shrinkInside(basis, values),
   };
 }
 
-function leverageOf(basis: PredictionBasis, regressors: readonly number[]): number {
+function leverageOf(basis: PredictionBasis, values: readonly number[]): number {
   return quadraticForm(
     basis.inverseCrossProduct,
-    regressors.map((value, k) => value - basis.ownMeans[k]),
+    values.map((value, k) => value - basis.ownMeans[k]),
   );
 }
 
-/** Bisection: leverage is convex along the line and the last actual values lie inside. */
-function shrinkInside(basis: PredictionBasis, regressors: readonly number[]): readonly number[] {
-  const start = basis.last.regressors;
-  const at = (share: number): number[] =>
-    start.map((value, k) => value + share * (regressors[k] - value));
+/** Bisection: leverage is convex along the line and what the model last read lies inside. Panel's measure. */
+function shrinkInside(basis: PredictionBasis, values: readonly number[]): readonly number[] {
+  const start = lastInModelScale(basis);
+  const at = (share: number): readonly number[] =>
+    inPanelMeasure(
+      basis,
+      start.map((value, k) => value + share * (values[k] - value)),
+    );
+  let nearest = basis.last.regressors;
   let inside = 0;
   let outside = 1;
   for (let step = 0; step < 60; step += 1) {
     const middle = (inside + outside) / 2;
-    if (leverageOf(basis, at(middle)) <= basis.largestOwnLeverage) inside = middle;
-    else outside = middle;
+    const candidate = at(middle);
+    if (leverageOf(basis, inModelScale(basis, candidate)) <= basis.largestOwnLeverage) {
+      inside = middle;
+      nearest = candidate;
+    } else outside = middle;
   }
-  return at(inside);
+  return nearest;
 }
 
 function placeIn(range: ObservedRange, value: number): RangePlace {

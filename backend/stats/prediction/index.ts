@@ -4,21 +4,50 @@ export {
   type DecompositionTerm,
   decompositionFromLast,
   decompositionToBase,
+  differenceOfPlans,
 } from './decomposition';
-export { expectedValue } from './expected-value';
+export { differenceToPeer, type PeerDifference, peersMean } from './difference-to-peer';
+export { type ExpectedValue, expectedValue, type LogFigures } from './expected-value';
 export {
   type FamiliarRange,
   familiarRange,
   type RangePlace,
   type RegressorPlace,
 } from './familiar-range';
-export { type IntervalEstimate, symmetricInterval, withoutInterval } from './interval-estimate';
-export type {
-  ObservedRange,
-  OwnYear,
-  PredictionBasis,
-  SlopeDegreesOfFreedom,
+export type { FiellerRange } from './fieller';
+export {
+  asFactor,
+  type IntervalEstimate,
+  symmetricInterval,
+  withoutInterval,
+} from './interval-estimate';
+export { type BandOutlook, type MarketValueBand, marketValueBand } from './market-value-band';
+export { inModelScale, unreadableReason } from './model-scale';
+export {
+  carryingReason,
+  type Outlook,
+  type StartingPoint,
+  stepsAhead,
+  type YearEffectChoice,
+} from './outlook';
+export {
+  heldRegressors,
+  planRegressors,
+  type PlanYear,
+  type ReadableYear,
+} from './plan-regressors';
+export { type PredictedYear, type PredictRequest, predict } from './predict';
+export {
+  type ObservedRange,
+  type OwnErrors,
+  type OwnYear,
+  type PeerYear,
+  type PredictionBasis,
+  type SlopeDegreesOfFreedom,
+  type YearEffectEstimates,
+  yearEffectOrder,
 } from './prediction-basis';
 export { quadraticForm } from './quadratic-form';
+export { type Reach, type ReachRequest, reachValue } from './reach-value';
 export { contrastDegreesOfFreedom, differenceToBase, varianceTolerance } from './slope-contrast';
 export { type TQuantile, twoSidedQuantile } from './two-sided-quantile';

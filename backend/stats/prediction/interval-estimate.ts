@@ -21,3 +21,15 @@ export function symmetricInterval(
   const reach = quantile * standardError;
   return { estimate, standardError, low: estimate - reach, high: estimate + reach };
 }
+
+/** A difference of logs as the factor it multiplies by: exp of the estimate and its ends. */
+export function asFactor(inLogs: IntervalEstimate): IntervalEstimate {
+  const factor = (value: number | null): number | null => (value === null ? null : Math.exp(value));
+  return {
+    ...inLogs,
+    estimate: Math.exp(inLogs.estimate),
+    standardError: null,
+    low: factor(inLogs.low),
+    high: factor(inLogs.high),
+  };
+}

@@ -29,7 +29,8 @@ export function contrastDegreesOfFreedom(
 /**
  * Σ b_k·Δx_k with the interval of the covariance chosen for the slopes and the degrees of freedom of this contrast.
  *
- * @param deltaRegressors  differences in the order and measure of `basis.regressors`.
+ * @param deltaRegressors  differences in the order of `basis.regressors` and the model's scale: of logs in log form.
+ * @returns in the model's scale.
  * @see Pustejovsky & Tipton (2018), JBES 36, 672–683.
  */
 export function differenceToBase(
@@ -41,31 +42,39 @@ export function differenceToBase(
   if (largest === 0) return { estimate: 0, standardError: 0, low: 0, high: 0 };
   let estimate = 0;
   deltaRegressors.forEach((delta, k) => (estimate += basis.coefficients[k + 1] * delta));
-  if (basis.slopeIntervalReason !== undefined) {
-    return withoutInterval(estimate, basis.slopeIntervalReason);
+  const { slopeCovariance, slopeDegreesOfFreedom } = basis;
+  if (
+    basis.slopeIntervalReason !== undefined ||
+    slopeCovariance === null ||
+    slopeDegreesOfFreedom === null
+  ) {
+    return withoutInterval(
+      estimate,
+      basis.slopeIntervalReason ?? 'The slopes have no covariance, so their differences have none.',
+    );
   }
   // Degrees of freedom do not depend on the contrast's size: scaled, fourth powers neither overflow nor vanish.
   const weights = deltaRegressors.map((delta) => delta / largest);
-  if (!isJudged(basis, weights)) {
+  const variance = quadraticForm(slopeCovariance, weights);
+  if (!isJudged(basis, weights, variance)) {
     return withoutInterval(
       estimate,
       'No variance is left to judge it by: one company alone determines this difference.',
     );
   }
-  const variance = Math.max(0, quadraticForm(basis.slopeCovariance, weights));
   const standardError = largest * Math.sqrt(variance);
-  const degrees = contrastDegreesOfFreedom(basis.slopeDegreesOfFreedom, weights);
+  const degrees = contrastDegreesOfFreedom(slopeDegreesOfFreedom, weights);
   const quantile = twoSidedQuantile(tQuantile, basis.confidence, degrees);
   return symmetricInterval(estimate, standardError, quantile);
 }
 
-function isJudged(basis: PredictionBasis, weights: readonly number[]): boolean {
-  const crossProduct = quadraticForm(basis.inverseCrossProduct, weights);
-  const variance = quadraticForm(basis.slopeCovariance, weights);
+function isJudged(basis: PredictionBasis, weights: readonly number[], variance: number): boolean {
+  const crossProduct = quadraticForm(basis.slopeInverse ?? basis.inverseCrossProduct, weights);
   if (!(variance > varianceTolerance * basis.residualVariance * crossProduct)) return false;
   const degrees = basis.slopeDegreesOfFreedom;
   return (
-    degrees.kind === 'fixed' || quadraticForm(degrees.s, weights) > workingTolerance * crossProduct
+    degrees?.kind !== 'satterthwaite' ||
+    quadraticForm(degrees.s, weights) > workingTolerance * crossProduct
   );
 }
 
