@@ -1,11 +1,6 @@
+import { Invalid } from '../errors/app-error';
 import { tQuantile } from '../stats';
-import {
-  differenceToBase,
-  expectedValue,
-  familiarRange,
-  type IntervalEstimate,
-  type PredictionBasis,
-} from '../stats/prediction';
+import { type IntervalEstimate, predict, type PredictionBasis } from '../stats/prediction';
 
 export interface PlannedYear {
   readonly year: number;
@@ -15,24 +10,24 @@ export interface PlannedYear {
 export interface EvaluatedYear {
   readonly year: number;
   readonly expected: IntervalEstimate;
+  /** Against the base; a difference of logs where the fit's form is log. */
   readonly difference: IntervalEstimate;
   readonly familiar: 'inside' | 'edge' | 'outside';
 }
 
-/** Reads a plan through a fit, by the same code that the browser runs; the base holds the last actual values. */
+/**
+ * Reads a plan through a fit, by the same code that the browser runs; the base holds the last observed values.
+ *
+ * @throws {Invalid} where the model cannot read a year of it.
+ */
 export function evaluatePlan(
   basis: PredictionBasis,
   plan: readonly PlannedYear[],
 ): readonly EvaluatedYear[] {
-  const base = basis.last.regressors;
-  return plan.map(({ year, values }) => ({
-    year,
-    expected: expectedValue(basis, values),
-    difference: differenceToBase(
-      basis,
-      values.map((value, k) => value - base[k]),
-      tQuantile,
-    ),
-    familiar: familiarRange(basis, values).kind,
-  }));
+  const years = plan.map(({ year, values }) => ({ year, regressors: values }));
+  return predict(basis, { years }, tQuantile).map((predicted): EvaluatedYear => {
+    if (predicted.expected === null) throw new Invalid(predicted.reason);
+    const { year, expected, difference, familiar } = predicted;
+    return { year, expected, difference, familiar: familiar.kind };
+  });
 }

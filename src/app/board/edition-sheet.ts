@@ -2,7 +2,7 @@ import { DatePipe } from '@angular/common';
 import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
 import type { EditionContent } from '@contract';
 import type { ExpectedPathChoice } from '@figures';
-import { expectedValue } from '@prediction';
+import { expectedValue, heldRegressors } from '@prediction';
 import type { PlannedFigure } from '../api/lineage-store';
 import { ExpectedPath } from '../charts/expected-path/expected-path';
 import { Figure } from '../ui/figure';
@@ -92,7 +92,7 @@ export class EditionSheet {
   protected readonly path = computed(() => {
     const { fit } = this.content();
     if (fit.prediction === null || fit.ownYears === null) return null;
-    const base = expectedValue(fit.prediction, fit.prediction.last.regressors);
+    const base = expectedValue(fit.prediction, heldRegressors(fit.prediction));
     return expectedPathData(fit.ownYears, base, this.plans());
   });
 
@@ -120,7 +120,7 @@ export class EditionSheet {
   protected openPlanned(wanted: PlannedFigureWanted): void {
     const basis = this.content().fit.prediction;
     if (basis === null) return;
-    const { key, ...planned } = planLineage(wanted, this.labels(), basis.last.regressors);
+    const { key, ...planned } = planLineage(wanted, this.labels(), heldRegressors(basis));
     this.figureOpened.emit({ key, planned });
   }
 }

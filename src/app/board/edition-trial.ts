@@ -8,7 +8,7 @@ import {
   output,
 } from '@angular/core';
 import type { EditionContent } from '@contract';
-import type { PredictionBasis } from '@prediction';
+import { type PredictionBasis, heldRegressors } from '@prediction';
 import { NumberFormat } from '../ui/number-format';
 import { withYearSet } from '../ui/plan/change-plan';
 import { FamiliarNotes } from '../ui/plan/familiar-notes';
@@ -124,7 +124,7 @@ export class EditionTrial {
   }
 
   protected openPlanned(wanted: PlannedFigureWanted): void {
-    const { key, ...planned } = planLineage(wanted, this.labels(), this.basis().last.regressors);
+    const { key, ...planned } = planLineage(wanted, this.labels(), heldRegressors(this.basis()));
     this.figureOpened.emit({ key, planned });
   }
 }

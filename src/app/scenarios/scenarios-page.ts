@@ -14,6 +14,7 @@ import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
 import type { ScenarioReply } from '@contract';
 import type { ExpectedPathChoice } from '@figures';
+import { heldRegressors } from '@prediction';
 import { LineageStore } from '../api/lineage-store';
 import { DifferenceBars } from '../charts/difference-bars/difference-bars';
 import { ExpectedPath } from '../charts/expected-path/expected-path';
@@ -174,7 +175,7 @@ export class ScenariosPage {
   protected openFigure(wanted: PlannedFigureWanted): void {
     const ground = this.store.ground();
     if (ground === null) return;
-    const { key, ...planned } = planLineage(wanted, ground.labels, ground.basis.last.regressors);
+    const { key, ...planned } = planLineage(wanted, ground.labels, heldRegressors(ground.basis));
     this.#lineage.open({ fitId: ground.fit.fit.id }, key, planned);
   }
 

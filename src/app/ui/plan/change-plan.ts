@@ -1,14 +1,15 @@
-import type { PredictionBasis } from '@prediction';
+import { type PredictionBasis, heldRegressors } from '@prediction';
 import type { PlannedYear } from './read-plan';
 
 export const mostYears = 5;
 
 /** The plan that changes nothing: the last actual values, for so many coming years. */
 export function heldPlan(basis: PredictionBasis, years: number): readonly PlannedYear[] {
-  const { year, regressors } = basis.last;
+  const { year } = basis.last;
+  const values = heldRegressors(basis);
   return Array.from({ length: years }, (_, index) => ({
     year: year + 1 + index,
-    values: regressors,
+    values,
   }));
 }
 

@@ -1,5 +1,5 @@
 import type { ExpectedPathChoice } from '@figures';
-import { type PredictionBasis, expectedValue, familiarRange } from '@prediction';
+import { type PredictionBasis, expectedValue, familiarRange, heldRegressors } from '@prediction';
 import type { PlanTablePlan, PlannedFigureWanted } from './plan-table';
 
 /**
@@ -18,7 +18,7 @@ export function chosenFigure(
 }
 
 function basePlan(basis: PredictionBasis, year: number): PlanTablePlan {
-  const values = basis.last.regressors;
+  const values = heldRegressors(basis);
   const expected = expectedValue(basis, values);
   const difference = { estimate: 0, standardError: 0, low: 0, high: 0 };
   const familiar = familiarRange(basis, values).kind;

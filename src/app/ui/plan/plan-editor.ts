@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import type { PredictionBasis } from '@prediction';
+import { type PredictionBasis, heldRegressors } from '@prediction';
 import { PlanSlider } from '../plan-slider/plan-slider';
 import { heldPlan, mostYears, withValue, withYearAdded, withYearRemoved } from './change-plan';
 import { capitalised } from './plan-words';
@@ -77,7 +77,7 @@ export class PlanEditor {
         kind: regressorKind(regressor),
         name: `${capitalised(label)} FY${year}`,
         value: values[regressor],
-        base: this.basis().last.regressors[regressor],
+        base: heldRegressors(this.basis())[regressor],
         range: this.#ranges()[regressor],
       })),
     })),

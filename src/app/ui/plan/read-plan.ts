@@ -4,10 +4,9 @@ import {
   type IntervalEstimate,
   type PredictionBasis,
   type TQuantile,
-  decompositionToBase,
-  differenceToBase,
   expectedValue,
-  familiarRange,
+  heldRegressors,
+  predict,
 } from '@prediction';
 
 /** Planned regressors of one year, in the fit's order and the panel's unit. */
@@ -19,7 +18,7 @@ export interface PlannedYear {
 /** What the fit says about one planned year. */
 export interface ReadYear extends PlannedYear {
   readonly expected: IntervalEstimate;
-  /** Against the base, which holds the last actual values. */
+  /** Against the base, which holds the last actual values; a difference of logs where the fit's form is log. */
   readonly difference: IntervalEstimate;
   readonly familiar: FamiliarRange;
   /** The difference taken apart, regressor by regressor. */
@@ -30,6 +29,8 @@ export interface PlanReading {
   /** The expected value with the last actual values held; the same in every year. */
   readonly base: IntervalEstimate;
   readonly years: readonly ReadYear[];
+  /** Planned years that the model cannot read, and why. */
+  readonly refused: readonly { readonly year: number; readonly reason: string }[];
 }
 
 /** Reads a plan through a fit, by the code that the server confirms a saved plan with. */
@@ -38,20 +39,16 @@ export function readPlan(
   plan: readonly PlannedYear[],
   tQuantile: TQuantile,
 ): PlanReading {
-  const held = basis.last.regressors;
-  return {
-    base: expectedValue(basis, held),
-    years: plan.map(({ year, values }) => ({
-      year,
-      values,
-      expected: expectedValue(basis, values),
-      difference: differenceToBase(
-        basis,
-        values.map((value, k) => value - held[k]),
-        tQuantile,
-      ),
-      familiar: familiarRange(basis, values),
-      parts: decompositionToBase(basis, values, held, tQuantile),
-    })),
-  };
+  const years: ReadYear[] = [];
+  const refused: { year: number; reason: string }[] = [];
+  const asked = plan.map(({ year, values }) => ({ year, regressors: values }));
+  predict(basis, { years: asked }, tQuantile).forEach((predicted, index) => {
+    if (predicted.expected === null) {
+      refused.push({ year: predicted.year, reason: predicted.reason });
+      return;
+    }
+    const { year, expected, difference, familiar, toBase } = predicted;
+    years.push({ year, values: plan[index].values, expected, difference, familiar, parts: toBase });
+  });
+  return { base: expectedValue(basis, heldRegressors(basis)), years, refused };
 }

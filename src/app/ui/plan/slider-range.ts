@@ -1,4 +1,9 @@
-import { type FamiliarRange, type PredictionBasis, familiarRange } from '@prediction';
+import {
+  type FamiliarRange,
+  type PredictionBasis,
+  familiarRange,
+  heldRegressors,
+} from '@prediction';
 import type { PlannedYear } from './read-plan';
 
 export interface SliderRange {
@@ -23,7 +28,7 @@ export function sliderRange(
 ): SliderRange {
   const own = basis.ownRange[regressor];
   const peers = basis.peerRange[regressor];
-  const held = basis.last.regressors[regressor];
+  const held = heldRegressors(basis)[regressor];
   const span = Math.max(own.high - own.low, Math.abs(held) / 2) || 1;
   const planned = plan.map(({ values }) => values[regressor]);
   const floor = own.low >= 0 ? Math.max(0, own.low - span / 2) : own.low - span / 2;
@@ -64,7 +69,7 @@ export function steppedInside(
 ): readonly number[] {
   const rounded = familiar.nearestInside.map((value, k) => {
     const { step } = sliderRange(basis, k, plan);
-    const held = basis.last.regressors[k];
+    const held = heldRegressors(basis)[k];
     return held + Math.trunc((value - held) / step) * step;
   });
   return familiarRange(basis, rounded).kind === 'inside' ? rounded : familiar.nearestInside;
