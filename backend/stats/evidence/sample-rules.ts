@@ -1,0 +1,27 @@
+import { type VerdictInput, type VerdictRule, warningRule } from './verdict-rule';
+
+const muchMissing = 0.1;
+
+/** What speaks against a fit because of the rows it rests on. */
+export const sampleRules: readonly VerdictRule[] = [
+  {
+    ...warningRule('perfect-fit', 'serious'),
+    leavesNothing: true,
+  },
+  warningRule('few-companies', 'serious'),
+  warningRule('few-years', 'notable'),
+  warningRule('single-row', 'notable'),
+  warningRule('spelling', 'notable'),
+  { code: 'missing-rows', weight: 'notable', when: missingRows },
+];
+
+/** A lag takes the first row of every company by construction, which is not counted as missing. */
+function missingRows({ result: { sample, specification } }: VerdictInput): string | null {
+  const left = new Set(sample.dropped.map(({ row }) => row)).size;
+  const used = sample.observations + sample.singleRow.length;
+  const byLag = specification.lag * (sample.companies + sample.singleRow.length);
+  const missing = Math.max(0, left - byLag);
+  const share = missing / (missing + used);
+  if (share <= muchMissing) return null;
+  return `${missing} of ${missing + used} rows (${(100 * share).toFixed(0)} %) lack a value and are left out.`;
+}
