@@ -11,6 +11,7 @@ import type { Contrast } from './contrast';
 import { intervalCosines, rankCosines } from './cosine-weights';
 import { contrastIntervalReason, fitIntervalReason } from './interval-reasons';
 import { type Persistence, persistenceOf } from './persistence';
+import { singleContrastError } from './single-contrast';
 
 /** Everything that calibrated intervals of one fit share. */
 export interface IntervalContext {
@@ -21,7 +22,7 @@ export interface IntervalContext {
   readonly cosines: number;
   /** B of rank sets, pairs and the drift. */
   readonly rankCosines: number;
-  /** Null where no contrast of this fit has an interval, for `reason`. */
+  /** Computed when first asked for; null where no contrast of this fit has an interval, for `reason`. */
   readonly forms: CompanyForms | null;
   readonly reason?: string;
 }
@@ -32,12 +33,24 @@ export function intervalContext(fit: WithinFit, confidence: number): IntervalCon
   const years = fit.sample.years.length;
   const cosines = intervalCosines(years);
   const forRanks = rankCosines(years);
-  const forms =
-    reason === undefined ? companyForms(fit, persistence.used, Math.max(cosines, forRanks)) : null;
-  return { fit, persistence, confidence, cosines, rankCosines: forRanks, forms, reason };
+  let forms: CompanyForms | null = null;
+  return {
+    fit,
+    persistence,
+    confidence,
+    cosines,
+    rankCosines: forRanks,
+    reason,
+    get forms() {
+      if (reason === undefined) {
+        forms ??= companyForms(fit, persistence.used, Math.max(cosines, forRanks));
+      }
+      return forms;
+    },
+  };
 }
 
-/** Standard error of a contrast with B cosines, or why it has none. */
+/** Standard error of one contrast among many with B cosines, or why it has none. */
 export function contrastError(
   context: IntervalContext,
   contrast: Contrast,
@@ -48,6 +61,15 @@ export function contrastError(
     return { standardError: null, calibration: null, reason: reason ?? noCalibrationReason };
   }
   return calibratedError(context.forms, contrast, cosines);
+}
+
+/** Standard error of a contrast that stands alone, straight through the rows, or why it has none. */
+export function aloneError(context: IntervalContext, contrast: Contrast): CalibratedError {
+  const { fit, persistence, cosines } = context;
+  const reason = context.reason ?? contrastIntervalReason(fit, contrast);
+  return reason === undefined
+    ? singleContrastError(fit, contrast, persistence.used, cosines)
+    : { standardError: null, calibration: null, reason };
 }
 
 /** Interval of a contrast with B cosines, or why it has none. */

@@ -25,7 +25,9 @@ export function householderQr(
   const size = columns.length;
   const work = columns.map((column, k) => {
     const factor = 1 / divisors[k];
-    return column.map((value) => value * factor);
+    const scaled = new Float64Array(column.length);
+    for (let row = 0; row < column.length; row += 1) scaled[row] = column[row] * factor;
+    return scaled;
   });
   const scales = new Float64Array(size);
   const r = new Float64Array(size * size);

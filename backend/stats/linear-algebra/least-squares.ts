@@ -117,7 +117,8 @@ function easyBasis(columns: readonly Float64Array[], r: Float64Array): Float64Ar
   const inverse = invertUpper(r, size);
   return columns.map((own, k) => {
     const factor = inverse[k * size + k];
-    const result = own.map((value) => factor * value);
+    const result = new Float64Array(own.length);
+    for (let row = 0; row < own.length; row += 1) result[row] = factor * own[row];
     for (let l = 0; l < k; l += 1) {
       const share = inverse[l * size + k];
       const column = columns[l];
@@ -187,8 +188,8 @@ function columnResidual(
 /** Scaling by a power of two changes no digit. */
 function powerOfTwoNearNorm(column: Float64Array): number {
   let largest = 0;
-  for (const value of column) {
-    const size = Math.abs(value);
+  for (let row = 0; row < column.length; row += 1) {
+    const size = Math.abs(column[row]);
     if (size > largest) largest = size;
   }
   return largest > 0 ? 2 ** Math.round(Math.log2(largest * Math.sqrt(column.length))) : 1;

@@ -1,7 +1,7 @@
 import type { IntervalPercent, PairComparison, Specification, Standing } from '../fit-result';
 import { calibratedInterval } from '../intervals/calibrated-interval';
 import { standingContrast } from '../intervals/contrast';
-import { contrastError, type IntervalContext } from '../intervals/interval-context';
+import { aloneError, type IntervalContext } from '../intervals/interval-context';
 import { fewestRowsForRank, rowsOf } from '../intervals/interval-reasons';
 import { type IntervalEstimate, withoutInterval } from '../prediction';
 
@@ -27,7 +27,7 @@ export function standingOf(
   const relative = fit.relativeIntercepts;
   const others = relative.reduce((sum, value, index) => (index === own ? sum : sum + value), 0);
   const estimate = relative[own] - others / (relative.length - 1);
-  const error = contrastError(context, standingContrast(fit, own), cosines);
+  const error = aloneError(context, standingContrast(fit, own));
   const interval =
     error.standardError === null
       ? withoutInterval(estimate, error.reason)
