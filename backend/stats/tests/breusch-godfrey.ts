@@ -22,7 +22,7 @@ export const breuschGodfreyTest: EvidenceTest = {
     'n·R² of the residuals on the demeaned regressors and the residual of the row before, χ²(1).',
   source:
     'Godfrey (1978), Econometrica 46, 1293–1301; Breusch (1978), Australian Economic Papers 17, 334–355',
-  reference: 'breusch_godfrey_order1',
+  reference: 'tests.breusch_godfrey_order1',
   inHolm: false,
   caution:
     'Without persistence it rejects at 5 % in 14 % of simulated panels of 12 companies and 20 years. A company’s first row is set against the last row of the company before it.',

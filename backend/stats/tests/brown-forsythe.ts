@@ -16,7 +16,7 @@ export const brownForsytheTest: EvidenceTest = {
   definition:
     'One-way F test by company of the residuals’ distances from their company’s median, F(N − 1, n − N).',
   source: 'Brown & Forsythe (1974), Journal of the American Statistical Association 69, 364–367',
-  reference: 'brown_forsythe',
+  reference: 'brown-forsythe',
   inHolm: true,
   caution:
     'With equal variances it rejects at 5 % in 4 %, 20 % and 72 % of simulated panels of 12 companies and 20 years whose errors persist by 0, 0.5 and 0.8.',

@@ -14,7 +14,7 @@ export const durbinWatsonTest: EvidenceTest = {
   definition:
     'Squared differences of consecutive residuals of one company over squared residuals; after a calendar gap the residual’s own square.',
   source: 'Bhargava, Franzini & Narendranathan (1982), Review of Economic Studies 49, 533–549',
-  reference: 'bhargava_dw',
+  reference: 'tests.bhargava_dw',
   inHolm: false,
   readings: {
     rejects: 'Errors persist from year to year.',

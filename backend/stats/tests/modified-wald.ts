@@ -18,7 +18,7 @@ export const modifiedWaldTest: EvidenceTest = {
   definition:
     'Squared distances of the companies’ mean squared residuals from that of all, each over its variance, summed; χ²(N).',
   source: 'Greene (2000), Econometric Analysis, 4th ed., §15.2',
-  reference: 'modified_wald',
+  reference: 'tests.modified_wald',
   inHolm: false,
   caution:
     'With equal variances it rejects at 5 % in 47 %, 74 % and 97 % of simulated panels of 12 companies and 20 years whose errors persist by 0, 0.5 and 0.8.',

@@ -23,7 +23,7 @@ export const pesaranCdTest: EvidenceTest = {
   definition:
     'Correlations of two companies’ residuals over their common years, each times √years, summed over pairs with at least three and divided by √pairs; N(0, 1), two-sided.',
   source: 'Pesaran (2021), Empirical Economics 60, 13–50',
-  reference: 'pesaran_cd',
+  reference: 'tests.pesaran_cd',
   inHolm: true,
   caution:
     'Without dependence it rejects at 5 % in 5 %, 9 % and 16 % of simulated panels of 12 companies and 20 years whose errors persist by 0, 0.5 and 0.8.',

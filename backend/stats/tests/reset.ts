@@ -22,7 +22,7 @@ export const resetTest: EvidenceTest = {
   definition:
     'F test of the squared fitted values of the full dummy regression added to it, F(1, n − N − K − 1).',
   source: 'Ramsey (1969), Journal of the Royal Statistical Society B 31, 350–371',
-  reference: 'reset_power2',
+  reference: 'tests.reset_power2',
   inHolm: true,
   readings: {
     rejects: 'The straight line misses a bend: compare the log form before the standing is stated.',

@@ -27,7 +27,7 @@ export const slopeHomogeneityTest: EvidenceTest = {
   definition:
     'F test of slopes common to all companies against each company’s own regression, F((N − 1)K, n − N(K + 1)).',
   source: 'Baltagi (2021), Econometric Analysis of Panel Data, 6th ed., §4.1',
-  reference: 'slope_homogeneity_F',
+  reference: 'tests.slope_homogeneity_F',
   inHolm: true,
   caution:
     'Assumes errors that do not persist. Without any difference it rejects at 5 % in 4 %, 62 % and 92 % of simulated panels of 12 companies and 20 years whose errors persist by 0, 0.5 and 0.8.',

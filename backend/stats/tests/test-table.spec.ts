@@ -30,9 +30,7 @@ const files = [
 
 const digits = 9;
 
-const further = {
-  ...goldenJson<{ panels: Readonly<Record<string, Blocks>> }>('panel-tests.json').panels,
-};
+const further = goldenJson<{ panels: Readonly<Record<string, Blocks>> }>('panel-tests.json').panels;
 const brownForsythe = goldenJson<{ panels: Readonly<Record<string, Blocks>> }>(
   'brown-forsythe.json',
 ).panels;

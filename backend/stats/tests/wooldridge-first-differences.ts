@@ -31,7 +31,7 @@ export const wooldridgeFirstDifferencesTest: EvidenceTest = {
     'Slope of each first-difference residual on the one before against −½, clustered by company without a factor, F(1, pairs − 2).',
   source:
     'Wooldridge (2010), Econometric Analysis of Cross Section and Panel Data, 2nd ed., §10.6.3',
-  reference: 'wooldridge_fd_h0fe',
+  reference: 'tests.wooldridge_fd_h0fe',
   inHolm: true,
   readings: {
     rejects: 'First differences too show errors that persist from year to year.',

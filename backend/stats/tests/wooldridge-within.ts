@@ -17,7 +17,7 @@ export const wooldridgeWithinTest: EvidenceTest = {
     'Slope of each residual on the one of the row before against −1/(T − 1), clustered by company without a factor, F(1, N − 1).',
   source:
     'Wooldridge (2010), Econometric Analysis of Cross Section and Panel Data, 2nd ed., §10.5.4',
-  reference: 'wooldridge_within_pwartest',
+  reference: 'tests.wooldridge_within_pwartest',
   inHolm: true,
   caution:
     'Without persistence it rejects at 5 % in 6 % of simulated panels of 12 companies and 20 years.',
