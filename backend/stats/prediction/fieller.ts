@@ -29,10 +29,11 @@ export function fiellerRange(
       : { kind: 'rays', upTo: end, from: null };
   }
   const discriminant = m01 * m01 + leading * m00;
-  if (discriminant < 0) return { kind: 'every-value' };
+  if (discriminant < 0 || (discriminant === 0 && leading < 0)) return { kind: 'every-value' };
   // The root away from zero is taken without cancellation, the other from their product −m00/leading.
   const sum = m01 + (m01 < 0 ? -1 : 1) * Math.sqrt(discriminant);
-  const roots = [sum / leading, -m00 / sum].sort((left, right) => left - right);
+  const other = sum === 0 ? 0 : -m00 / sum;
+  const roots = [sum / leading, other].sort((left, right) => left - right);
   return leading > 0
     ? { kind: 'interval', low: roots[0], high: roots[1] }
     : { kind: 'rays', upTo: roots[0], from: roots[1] };
