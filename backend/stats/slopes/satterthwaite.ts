@@ -1,13 +1,9 @@
 import {
   addScaled,
-  bilinear,
-  congruence,
   dot,
   type SquareMatrix,
-  times,
   timesVector,
   toRows,
-  transpose,
 } from '../linear-algebra/square-matrix';
 import type { SlopeDegreesOfFreedom } from '../prediction';
 import type { WithinFit } from '../regression/within-fit';
@@ -30,15 +26,15 @@ export function satterthwaiteDegreesOfFreedom(
   products: readonly CompanyProduct[],
   weights: ArrayLike<number>,
 ): number | null {
-  const size = fit.slopes.length;
-  const contrast = timesVector(transpose(fit.inverseR, size), weights);
+  const size = fit.coefficients.length;
+  const contrast = basisContrast(fit, weights);
   const outer = new Float64Array(size * size);
   let trace = 0;
   let squares = 0;
   for (const { cross, adjustment } of products) {
     const adjusted = timesVector(adjustment, contrast);
     const shared = timesVector(cross, adjusted);
-    const own = bilinear(cross, adjusted, adjusted);
+    const own = dot(adjusted, shared);
     const common = dot(shared, shared);
     trace += own - common;
     squares += own * own - 2 * own * common;
@@ -51,34 +47,72 @@ export function satterthwaiteDegreesOfFreedom(
   return isJudged ? (trace * trace) / squares : null;
 }
 
-/** The same for any contrast, as forms in its weights; cost N·K⁴/4. */
+/**
+ * The same for any contrast of the K slopes, as forms in its weights: K × K, and pairs of slopes × pairs of slopes, however
+ * many year columns there are; cost N·(P²K + P²K²/4).
+ */
 export function satterthwaiteForms(
   fit: WithinFit,
   products: readonly CompanyProduct[],
 ): SlopeDegreesOfFreedom {
   const size = fit.slopes.length;
+  const all = fit.coefficients.length;
   const pairs = (size * (size + 1)) / 2;
+  const contrasts = Array.from({ length: size }, (_, k) =>
+    basisContrast(
+      fit,
+      Float64Array.from({ length: size }, (__, index) => (index === k ? 1 : 0)),
+    ),
+  );
   const s = new Float64Array(size * size);
   const quartic = new Float64Array(pairs * pairs);
   // Rows: pairs (a, b) of the outer product Σ B_icc'B_i', columns: pairs of c; off-diagonal rows count twice.
-  const outer = new Float64Array(pairs * pairs);
+  const outer = new Float64Array(((all * (all + 1)) / 2) * pairs);
   for (const { cross, adjustment } of products) {
-    const own = congruence(
-      fit.inverseR,
-      times(times(adjustment, cross, size), adjustment, size),
-      size,
-    );
-    const shared = times(times(cross, adjustment, size), transpose(fit.inverseR, size), size);
-    const common = times(transpose(shared, size), shared, size);
+    const adjusted = contrasts.map((contrast) => timesVector(adjustment, contrast));
+    const shared = adjusted.map((vector) => timesVector(cross, vector));
+    const own = innerProducts(adjusted, shared);
+    const common = innerProducts(shared, shared);
     addScaled(s, own, 1);
     addScaled(s, common, -1);
-    addPairProducts(quartic, upperPairs(own, size), upperPairs(own, size), 1);
-    addPairProducts(quartic, upperPairs(own, size), upperPairs(common, size), -1);
-    addPairProducts(quartic, upperPairs(common, size), upperPairs(own, size), -1);
-    addOuter(outer, shared, size);
+    const ownPairs = upperPairs(own, size);
+    const commonPairs = upperPairs(common, size);
+    addPairProducts(quartic, ownPairs, ownPairs, 1);
+    addPairProducts(quartic, ownPairs, commonPairs, -1);
+    addPairProducts(quartic, commonPairs, ownPairs, -1);
+    addOuter(outer, shared);
   }
-  addOuterSquares(quartic, outer, size);
+  addOuterSquares(quartic, outer, all, pairs);
   return { kind: 'satterthwaite', s: toRows(s, size), quartic: Array.from(quartic) };
+}
+
+/** R⁻ᵀ·w of a contrast with weights on the slopes only: P numbers, 0 on the year columns. */
+function basisContrast(fit: WithinFit, weights: ArrayLike<number>): Float64Array {
+  const size = fit.coefficients.length;
+  const contrast = new Float64Array(size);
+  for (let slope = 0; slope < weights.length; slope += 1) {
+    const row = fit.yearColumns + slope;
+    for (let k = row; k < size; k += 1)
+      contrast[k] += weights[slope] * fit.inverseR[row * size + k];
+  }
+  return contrast;
+}
+
+/** left_k'right_l, K × K; of vectors whose products are symmetric. */
+function innerProducts(
+  left: readonly Float64Array[],
+  right: readonly Float64Array[],
+): SquareMatrix {
+  const size = left.length;
+  const products = new Float64Array(size * size);
+  for (let k = 0; k < size; k += 1) {
+    for (let l = 0; l <= k; l += 1) {
+      const value = (dot(left[k], right[l]) + dot(left[l], right[k])) / 2;
+      products[k * size + l] = value;
+      products[l * size + k] = value;
+    }
+  }
+  return products;
 }
 
 function upperPairs(matrix: SquareMatrix, size: number): Float64Array {
@@ -104,15 +138,20 @@ function addPairProducts(
   }
 }
 
-/** Adds the linear map from pairs c_k·c_l to entries (a, b) of B_icc'B_i'. */
-function addOuter(outer: Float64Array, shared: SquareMatrix, size: number): void {
+/**
+ * Adds the linear map from pairs c_k·c_l to entries (a, b) of B_icc'B_i'.
+ *
+ * @param shared  the columns of B_i in the slopes, K of P numbers.
+ */
+function addOuter(outer: Float64Array, shared: readonly Float64Array[]): void {
+  const all = shared[0].length;
   let index = 0;
-  for (let a = 0; a < size; a += 1) {
-    for (let b = a; b < size; b += 1) {
-      for (let k = 0; k < size; k += 1) {
-        for (let l = k; l < size; l += 1) {
-          const straight = shared[a * size + k] * shared[b * size + l];
-          const crossed = shared[a * size + l] * shared[b * size + k];
+  for (let a = 0; a < all; a += 1) {
+    for (let b = a; b < all; b += 1) {
+      for (let k = 0; k < shared.length; k += 1) {
+        for (let l = k; l < shared.length; l += 1) {
+          const straight = shared[k][a] * shared[l][b];
+          const crossed = shared[l][a] * shared[k][b];
           outer[index++] += (straight + crossed) / 2;
         }
       }
@@ -120,11 +159,15 @@ function addOuter(outer: Float64Array, shared: SquareMatrix, size: number): void
   }
 }
 
-function addOuterSquares(quartic: Float64Array, outer: Float64Array, size: number): void {
-  const pairs = (size * (size + 1)) / 2;
+function addOuterSquares(
+  quartic: Float64Array,
+  outer: Float64Array,
+  all: number,
+  pairs: number,
+): void {
   let row = 0;
-  for (let a = 0; a < size; a += 1) {
-    for (let b = a; b < size; b += 1) {
+  for (let a = 0; a < all; a += 1) {
+    for (let b = a; b < all; b += 1) {
       const entry = outer.subarray(row * pairs, (row + 1) * pairs);
       addPairProducts(quartic, entry, entry, a === b ? 1 : 2);
       row += 1;

@@ -1,6 +1,5 @@
 import { tQuantile, tTwoSided } from '../distributions/t-distribution';
-import type { SlopeCovarianceName, SlopeEstimate } from '../fit-result';
-import type { SquareMatrix } from '../linear-algebra/square-matrix';
+import type { SlopeEstimate } from '../fit-result';
 import {
   type SlopeDegreesOfFreedom,
   symmetricInterval,
@@ -9,36 +8,27 @@ import {
   withoutInterval,
 } from '../prediction';
 import { isPerfectFit, perfectFitReason } from '../regression/goodness';
-import type { WithinFit } from '../regression/within-fit';
-import type { CompanyProduct } from './company-products';
-import { slopeCovariance } from './slope-covariance';
+import { classical } from './covariances/classical';
+import type { MatrixMethod, SlopeCovariance } from './covariance-method';
 import { satterthwaiteDegreesOfFreedom, satterthwaiteForms } from './satterthwaite';
+import type { SlopeGround } from './slope-ground';
 
-const noVarianceReason =
-  'No variance is left to judge it by: one company alone determines this slope.';
-
-/** Slopes with the covariance and the degrees of freedom chosen in the specification. */
+/** Slopes with a method's covariance and its degrees of freedom. */
 export function slopeEstimates(
-  fit: WithinFit,
-  products: readonly CompanyProduct[],
-  covariance: SquareMatrix,
-  options: { readonly name: SlopeCovarianceName; readonly confidence: number },
+  ground: SlopeGround,
+  method: MatrixMethod,
+  covariance: SlopeCovariance,
+  confidence: number,
 ): SlopeEstimate[] {
+  const { fit } = ground;
   const size = fit.slopes.length;
+  const judged = judgedSlopes(ground, covariance.matrix);
   const isPerfect = isPerfectFit(fit);
-  const classical = slopeCovariance(fit, products, 'classical');
   return fit.sample.regressorNames.map((name, k): SlopeEstimate => {
     const estimate = fit.slopes[k];
-    const weights = Float64Array.from({ length: size }, (_, index) => (index === k ? 1 : 0));
-    const degreesOfFreedom =
-      options.name === 'cr2'
-        ? satterthwaiteDegreesOfFreedom(fit, products, weights)
-        : fixedDegreesOfFreedom(fit, options.name);
-    const variance = covariance[k * size + k];
-    const isJudged = variance > varianceTolerance * classical[k * size + k];
-    const standardError = Math.sqrt(variance);
-    if (isPerfect || degreesOfFreedom === null || !isJudged) {
-      const reason = isPerfect ? perfectFitReason : noVarianceReason;
+    const degreesOfFreedom = slopeDegreesOfFreedom(ground, method, k);
+    if (isPerfect || degreesOfFreedom === null || !judged[k]) {
+      const reason = isPerfect ? perfectFitReason : method.noVarianceReason;
       return {
         name,
         ...withoutInterval(estimate, reason),
@@ -47,7 +37,8 @@ export function slopeEstimates(
         pValue: null,
       };
     }
-    const quantile = twoSidedQuantile(tQuantile, options.confidence, degreesOfFreedom);
+    const standardError = Math.sqrt(covariance.matrix[k * size + k]);
+    const quantile = twoSidedQuantile(tQuantile, confidence, degreesOfFreedom);
     const statistic = estimate / standardError;
     return {
       name,
@@ -59,18 +50,30 @@ export function slopeEstimates(
   });
 }
 
-/** Degrees of freedom of every contrast of slopes, for prediction. */
-export function contrastDegrees(
-  fit: WithinFit,
-  products: readonly CompanyProduct[],
-  name: SlopeCovarianceName,
-): SlopeDegreesOfFreedom {
-  return name === 'cr2'
-    ? satterthwaiteForms(fit, products)
-    : { kind: 'fixed', value: fixedDegreesOfFreedom(fit, name) };
+/** Whether each slope has more variance than rounding leaves: measured by its classical one. */
+export function judgedSlopes(ground: SlopeGround, covariance: Float64Array): boolean[] {
+  const size = ground.fit.slopes.length;
+  const { matrix } = classical.covariance(ground);
+  return Array.from({ length: size }, (_, k) => {
+    const at = k * size + k;
+    return covariance[at] > varianceTolerance * matrix[at];
+  });
 }
 
-/** G − 1 by company, n − N − K classical. */
-function fixedDegreesOfFreedom(fit: WithinFit, name: Exclude<SlopeCovarianceName, 'cr2'>): number {
-  return name === 'classical' ? fit.residualDegreesOfFreedom : fit.sample.companies.length - 1;
+/** Degrees of freedom of every contrast of slopes, for prediction. */
+export function contrastDegrees(ground: SlopeGround, method: MatrixMethod): SlopeDegreesOfFreedom {
+  const { degreesOfFreedom } = method;
+  return degreesOfFreedom === 'satterthwaite'
+    ? satterthwaiteForms(ground.fit, ground.products)
+    : { kind: 'fixed', value: degreesOfFreedom(ground) };
+}
+
+function slopeDegreesOfFreedom(
+  { fit, products }: SlopeGround,
+  { degreesOfFreedom }: MatrixMethod,
+  slope: number,
+): number | null {
+  if (degreesOfFreedom !== 'satterthwaite') return degreesOfFreedom({ fit, products });
+  const weights = fit.slopes.map((_, index) => (index === slope ? 1 : 0));
+  return satterthwaiteDegreesOfFreedom(fit, products, weights);
 }

@@ -1,0 +1,11 @@
+import type { SlopeGround } from './slope-ground';
+
+/** Each company's score on the slopes' columns, N × K row-major. */
+export function companyScores({ fit, products }: SlopeGround): Float64Array {
+  const size = fit.slopes.length;
+  const scores = new Float64Array(products.length * size);
+  products.forEach(({ score }, company) => {
+    scores.set(score.subarray(fit.yearColumns), company * size);
+  });
+  return scores;
+}
