@@ -1,4 +1,4 @@
-import { leastSquares } from '../linear-algebra/least-squares';
+import { type LeastSquares, leastSquares } from '../linear-algebra/least-squares';
 import { invertUpper } from '../linear-algebra/triangular';
 import type { WithinColumn } from '../panel/within-transform';
 import { sumOfSquares } from '../regression/sum-of-squares';
@@ -50,10 +50,13 @@ export function companyMeansFit(
   );
   const kept = independentColumns(scaled, sizes);
   const scaledOutcome = scale(response.values);
-  const solution = leastSquares(
-    kept.map((k) => scaled[k]),
-    scaledOutcome,
-  );
+  const solution =
+    kept.length === 0
+      ? constantOnly(scaledOutcome)
+      : leastSquares(
+          kept.map((k) => scaled[k]),
+          scaledOutcome,
+        );
   return {
     columns: scaled,
     outcome: scaledOutcome,
@@ -69,6 +72,12 @@ export function companyMeansFit(
       solution.basis.reduce((sum, column) => sum + column[company] ** 2, weight / total),
     ),
   };
+}
+
+/** The regression where no column tells the companies apart. */
+function constantOnly(outcome: Float64Array): LeastSquares {
+  const none = new Float64Array(0);
+  return { coefficients: none, residuals: outcome, basis: [], r: none };
 }
 
 /** Company means less their weighted mean, and that mean. */

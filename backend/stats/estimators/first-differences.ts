@@ -21,6 +21,11 @@ export interface FirstDifferencesFit {
   readonly inverseR: Float64Array;
 }
 
+interface YearlyRows {
+  readonly ordered: Int32Array;
+  readonly starts: Int32Array;
+}
+
 /**
  * Least squares of year-on-year changes without constant. With year effects every year that a change ends in has its own
  * constant, which is what differences make of them.
@@ -34,8 +39,8 @@ export function firstDifferencesFit(
 ): FirstDifferencesFit | NotComputed {
   const { sample } = fit;
   const slopes = sample.regressors.length;
-  const ordered = fit.yearColumns === 0 ? rows : byPosition(sample, rows);
-  const starts = fit.yearColumns === 0 ? null : positionStarts(sample, ordered);
+  const { ordered, starts } =
+    fit.yearColumns === 0 ? { ordered: rows, starts: null } : byYear(sample, rows);
   const years = starts === null ? 0 : starts.length - 1;
   const degreesOfFreedom = rows.length - years - slopes;
   if (degreesOfFreedom <= 0) {
@@ -79,17 +84,19 @@ export function consecutiveRows({ companies, starts, year }: PanelSample): Int32
   return Int32Array.from(rows);
 }
 
-function byPosition({ position }: PanelSample, rows: Int32Array): Int32Array {
-  return Int32Array.from(rows).sort((left, right) => position[left] - position[right]);
-}
-
-/** Where each year's changes start among rows sorted by year, and their end. */
-function positionStarts({ position }: PanelSample, rows: Int32Array): Int32Array {
-  const starts: number[] = [];
-  rows.forEach((row, index) => {
-    if (index === 0 || position[row] !== position[rows[index - 1]]) starts.push(index);
-  });
-  return Int32Array.from([...starts, rows.length]);
+/** The rows in order of their year, and where each year among them starts, their end last. */
+function byYear({ position, years }: PanelSample, rows: Int32Array): YearlyRows {
+  const ends = new Int32Array(years.length);
+  for (const row of rows) ends[position[row]] += 1;
+  for (let year = 1; year < ends.length; year += 1) ends[year] += ends[year - 1];
+  const next = Int32Array.from(ends, (_, year) => (year === 0 ? 0 : ends[year - 1]));
+  const ordered = new Int32Array(rows.length);
+  for (const row of rows) {
+    ordered[next[position[row]]] = row;
+    next[position[row]] += 1;
+  }
+  // A year that no change ends in starts where it ends.
+  return { ordered, starts: Int32Array.from(new Set([0, ...ends])) };
 }
 
 export const firstDifferencesEstimator: Estimator = {

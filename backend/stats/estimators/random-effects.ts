@@ -1,5 +1,5 @@
 import { leastSquares } from '../linear-algebra/least-squares';
-import type { SquareMatrix } from '../linear-algebra/square-matrix';
+import { type SquareMatrix, timesVector } from '../linear-algebra/square-matrix';
 import { invertUpper } from '../linear-algebra/triangular';
 import type { WithinColumn } from '../panel/within-transform';
 import { isPerfectFit, perfectFitReason } from '../regression/goodness';
@@ -67,58 +67,71 @@ export function randomEffectsFit(fit: WithinFit): RandomEffectsFit | NotComputed
   };
 }
 
-/** Least squares of the rows less θ_i of their company's mean; the constant is centred out. */
+/**
+ * Least squares of the rows less θ_i of their company's mean. Within companies that is the fit's own regression, orthogonal
+ * to what is left of the means: its R and R·b stand in for the n rows, and N rows of (1 − θ_i)·√T_i·(x̄_i − c) follow, with
+ * the c that makes them orthogonal to the constant's own column. Cost (N + P)·P².
+ */
 function quasiDemeaned(
   fit: WithinFit,
   rows: Float64Array,
   theta: Float64Array,
 ): Pick<RandomEffectsFit, 'slopes' | 'constant' | 'covariance'> {
   const observations = fit.sample.year.length;
-  const weights = rows.map((count, company) => count * (1 - theta[company]) ** 2);
-  const outcome = quasiDemeanedColumn(fit.outcome, fit.sample.starts, theta, weights);
-  const columns = fit.columns.map((column) =>
-    quasiDemeanedColumn(column, fit.sample.starts, theta, weights),
-  );
+  const parameters = fit.columns.length;
+  const roots = rows.map((count, company) => Math.sqrt(count) * (1 - theta[company]));
+  const outcome = meansRows(fit.outcome, roots);
+  const columns = fit.columns.map((column) => meansRows(column, roots));
+  const within = timesVector(fit.r, fit.coefficients);
   const { coefficients, residuals, r } = leastSquares(
-    columns.map(({ values }) => values),
-    outcome.values,
+    columns.map(({ values }, k) =>
+      stacked(
+        within.map((_, row) => fit.r[row * parameters + k]),
+        values,
+      ),
+    ),
+    stacked(within, outcome.values),
   );
-  const degreesOfFreedom = observations - columns.length - 1;
-  const block = lastBlock(r, columns.length, fit.slopes.length);
+  const slopes = fit.slopes.length;
+  const rest = fit.residualSquares + sumOfSquares(residuals);
   return {
     slopes: coefficients.slice(fit.yearColumns),
     constant: columns.reduce(
-      (rest, { centre }, k) => rest - centre * coefficients[k],
+      (left, { centre }, k) => left - centre * coefficients[k],
       outcome.centre,
     ),
     // The regressors come last, so their block of (R'R)⁻¹ is made of their block of R alone.
     covariance: classicalCovariance(
-      invertUpper(block, fit.slopes.length),
-      sumOfSquares(residuals) / degreesOfFreedom,
+      invertUpper(lastBlock(r, parameters, slopes), slopes),
+      rest / (observations - parameters - 1),
     ),
   };
 }
 
-/** x̃_it + (1 − θ_i)(x̄_i − c), with the c that makes the column orthogonal to the constant's own, 1 − θ_i. */
-function quasiDemeanedColumn(
-  { values, means, origin }: WithinColumn,
-  starts: Int32Array,
-  theta: Float64Array,
-  weights: Float64Array,
+/** √w_i·(x̄_i − c) with c the mean weighted by w_i = roots², and c in the panel's measure. */
+function meansRows(
+  { means, origin }: WithinColumn,
+  roots: Float64Array,
 ): { values: Float64Array; centre: number } {
   let sum = 0;
   let total = 0;
   means.forEach((mean, company) => {
-    sum += weights[company] * mean;
-    total += weights[company];
+    const weight = roots[company] ** 2;
+    sum += weight * mean;
+    total += weight;
   });
   const centre = sum / total;
-  const result = Float64Array.from(values);
-  means.forEach((mean, company) => {
-    const part = (1 - theta[company]) * (mean - centre);
-    for (let row = starts[company]; row < starts[company + 1]; row += 1) result[row] += part;
-  });
-  return { values: result, centre: origin + centre };
+  return {
+    values: means.map((mean, company) => roots[company] * (mean - centre)),
+    centre: origin + centre,
+  };
+}
+
+function stacked(upper: Float64Array, lower: Float64Array): Float64Array {
+  const result = new Float64Array(upper.length + lower.length);
+  result.set(upper);
+  result.set(lower, upper.length);
+  return result;
 }
 
 /** The last `count` rows and columns of a square matrix. */
