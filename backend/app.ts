@@ -17,7 +17,9 @@ import { deskRoutes } from './board/desk-routes';
 import { editionRoutes } from './board/edition-routes';
 import type { Services } from './compose';
 import { AppError, Conflict, Invalid, NotFound, Unavailable } from './errors/app-error';
+import { evidenceRoutes } from './fits/evidence-routes';
 import { fitRoutes } from './fits/fit-routes';
+import { replicationRoutes } from './fits/replication/replication-routes';
 import { applicationPage } from './http/application-page';
 import { CrossSiteGuard } from './http/cross-site';
 import { health } from './http/health';
@@ -95,6 +97,8 @@ export function createApp(options: AppOptions): Express {
   app.use(panelRoutes(services.imports, services.panels, services.samplePanel));
   app.use(peerRoutes(services.peers));
   app.use(fitRoutes(services.fits, services.lineage, now));
+  app.use(evidenceRoutes(services.evidence, services.bootstraps, now));
+  app.use(replicationRoutes(services.replication));
   app.use(scenarioRoutes(services.scenarios));
   app.use(deskRoutes(services.desk));
   app.use(editionRoutes(services.editions, services.lineage));

@@ -15,9 +15,13 @@ import { editionContent } from './board/edition-content-reply';
 import { EditionService } from './board/edition-service';
 import { FitPool } from './compute/fit-pool';
 import { ParseProcess } from './compute/parse-process';
+import { BootstrapJob } from './fits/bootstrap-job';
+import { BootstrapService } from './fits/bootstrap-service';
+import { EvidenceService } from './fits/evidence-service';
 import { FitJob } from './fits/fit-job';
 import { FitService } from './fits/fit-service';
 import { LineageService } from './fits/lineage-service';
+import { ReplicationService } from './fits/replication/replication-service';
 import type { SessionPool } from './http/session';
 import { JobQueue } from './jobs/job-queue';
 import { ImportService } from './panels/import-service';
@@ -47,6 +51,9 @@ export interface Services {
   readonly peers: PeerService;
   readonly fits: FitService;
   readonly lineage: LineageService;
+  readonly evidence: EvidenceService;
+  readonly bootstraps: BootstrapService;
+  readonly replication: ReplicationService;
   readonly scenarios: ScenarioService;
   readonly desk: DeskService;
   readonly editions: EditionService;
@@ -118,6 +125,12 @@ export function compose(options: ComposeOptions): Composition {
       peers: new PeerService(repositories),
       fits: new FitService(repositories, queue),
       lineage: new LineageService(repositories),
+      evidence: new EvidenceService(repositories),
+      bootstraps: new BootstrapService(repositories, queue),
+      replication: new ReplicationService(
+        repositories,
+        join(options.backendFolder, 'fits', 'replication', 'replication.R'),
+      ),
       scenarios: new ScenarioService(repositories, now),
       desk: new DeskService(repositories),
       editions: new EditionService(repositories, accounts, now, editionContent),
@@ -134,6 +147,12 @@ export function compose(options: ComposeOptions): Composition {
           (ticket) => fitJob.run(ticket),
           (ticket) => fitJob.giveUp(ticket),
         );
+      const bootstrapJob = new BootstrapJob(workRepositories, fitPool, now);
+      await queue.work(
+        'bootstrap',
+        (ticket) => bootstrapJob.run(ticket),
+        (ticket) => bootstrapJob.giveUp(ticket),
+      );
       await queue.work('open-billing-account', workOpenBillingAccount(billing));
     },
     stop: async () => {

@@ -65,6 +65,7 @@ const bodies: Readonly<Record<string, (ids: Filled['ids']) => object>> = {
     peers: [{ company: 'C02', isIncluded: true, reason: 'x' }],
   }),
   startFit: ({ peerGroupId }) => ({ peerGroupId }),
+  startBootstrap: () => ({ seed: 1 }),
   saveDraft: () => ({
     scenarioId: null,
     name: 'x',

@@ -133,6 +133,9 @@ export class DemoSeeder {
     const { fits } = this.services;
     const request = {
       peerGroupId,
+      effects: 'company',
+      form: 'levels',
+      lag: 0,
       slopes: 'cr2',
       confidence: 0.95,
       furtherRegressors: [],

@@ -1,20 +1,38 @@
-import { createHash } from 'node:crypto';
-import { fitPanel, StatsError } from '../stats';
-import type { FitAnswer, FitTask } from './messages';
+import { evidenceOf } from '../stats/evidence/evidence-of';
+import type { BootstrapAnswer, BootstrapTask, EvidenceAnswer, FitTask } from './messages';
+import { openSubject, refusalOf, storeShare } from './open-subject';
+import { bootstrapSummary } from '../stats/slopes/covariance-summaries';
 
-/** Runs one fit in a worker thread. */
-export default function runFit(task: FitTask): FitAnswer {
+/** Runs one fit in a worker thread: tells its result, then computes its evidence. */
+export function runFit(task: FitTask): EvidenceAnswer {
+  const { answerTo, progress } = task;
+  let open;
   try {
-    const result = fitPanel(task.columns, task.specification, task.own, task.members, {
-      sha256: (text) => createHash('sha256').update(text).digest('hex'),
-      onProgress: (share) => {
-        Atomics.store(task.progress, 0, Math.round(share * 1000));
-      },
-    });
-    return { kind: 'done', result };
+    open = openSubject(task, storeShare(progress));
   } catch (error) {
-    if (error instanceof StatsError)
-      return { kind: 'refused', code: error.code, detail: error.message, data: error.data };
-    throw error;
+    const refusal = refusalOf(error);
+    answerTo.postMessage(refusal);
+    return refusal;
+  }
+  answerTo.postMessage({ kind: 'done', result: open.result });
+  try {
+    return { kind: 'done', evidence: evidenceOf(open) };
+  } catch (error) {
+    return refusalOf(error);
+  }
+}
+
+/** Bootstraps the slopes of one fit in a worker thread. */
+export function runBootstrap(task: BootstrapTask): BootstrapAnswer {
+  try {
+    const { ground, specification } = openSubject(task);
+    const summary = bootstrapSummary(ground, {
+      confidence: specification.confidence,
+      seed: task.seed,
+      onProgress: storeShare(task.progress),
+    });
+    return { kind: 'done', summary };
+  } catch (error) {
+    return refusalOf(error);
   }
 }

@@ -60,6 +60,10 @@ export const apiRoutes = {
   startFit: { method: 'POST', path: '/api/fits', allow: ['analyst'] },
   readFit: { method: 'GET', path: '/api/fits/:fitId', allow: model },
   cancelFit: { method: 'DELETE', path: '/api/fits/:fitId', allow: ['analyst'] },
+  readEvidence: { method: 'GET', path: '/api/fits/:fitId/evidence', allow: model },
+  startBootstrap: { method: 'POST', path: '/api/fits/:fitId/bootstrap', allow: ['analyst'] },
+  cancelBootstrap: { method: 'DELETE', path: '/api/fits/:fitId/bootstrap', allow: ['analyst'] },
+  downloadReplication: { method: 'GET', path: '/api/fits/:fitId/replication', allow: model },
   readLineage: { method: 'GET', path: '/api/fits/:fitId/lineage/:figure', allow: model },
 
   listScenarios: { method: 'GET', path: '/api/fits/:fitId/scenarios', allow: model },

@@ -2,16 +2,50 @@ import * as z from 'zod';
 import { PeerGroupSummary } from './peers';
 import { PanelVersionSummary } from './panels';
 
-export const SlopeCovariance = z.enum(['cr2', 'cr1', 'cr0', 'classical']);
+export const SlopeCovariance = z.enum([
+  'cr2',
+  'wild',
+  'cr1',
+  'cr0',
+  'classical',
+  'hc0',
+  'hc1',
+  'hc2',
+  'hc3',
+  'two-way',
+  'driscoll-kraay',
+]);
 export type SlopeCovariance = z.infer<typeof SlopeCovariance>;
 
+export const Effects = z.enum(['company', 'company,year']);
+export type Effects = z.infer<typeof Effects>;
+
+export const ModelForm = z.enum(['levels', 'log']);
+export type ModelForm = z.infer<typeof ModelForm>;
+
+export const Lag = z.union([z.literal(0), z.literal(1)]);
+export type Lag = z.infer<typeof Lag>;
+
+/** Of random draws: a whole number that a double holds exactly. */
+export const Seed = z.int().min(0);
+
 /** Starts a fit; regressors beside capex and book equity are named columns of the panel. */
-export const StartFit = z.strictObject({
-  peerGroupId: z.uuid(),
-  slopes: SlopeCovariance.default('cr2'),
-  confidence: z.number().gt(0.5).lt(1).default(0.95),
-  furtherRegressors: z.array(z.string().min(1)).max(10).default([]),
-});
+export const StartFit = z
+  .strictObject({
+    peerGroupId: z.uuid(),
+    effects: Effects.default('company'),
+    form: ModelForm.default('levels'),
+    lag: Lag.default(0),
+    slopes: SlopeCovariance.default('cr2'),
+    confidence: z.number().gt(0.5).lt(1).default(0.95),
+    /** Of the wild bootstrap, 1 unless named; the other covariances draw nothing. */
+    seed: Seed.optional(),
+    furtherRegressors: z.array(z.string().min(1)).max(10).default([]),
+  })
+  .refine(({ slopes, seed }) => slopes === 'wild' || seed === undefined, {
+    path: ['seed'],
+    message: 'expected a seed with the wild bootstrap alone',
+  });
 export type StartFit = z.infer<typeof StartFit>;
 
 const nullable = z.number().nullable();
@@ -45,12 +79,26 @@ const ownYear = z.object({
 
 const observedRange = z.object({ low: z.number(), high: z.number() });
 
+/** What is optional is missing in fits of engines before 2; see `PredictionBasis` of the engine for the measures. */
 export const PredictionBasis = z.object({
   company: z.string(),
   regressors: z.array(z.string()),
+  form: ModelForm.optional(),
+  lag: Lag.optional(),
+  smear: nullable.optional(),
   coefficients: z.array(z.number()),
   ownLevel: z.number(),
   ownMeans: z.array(z.number()),
+  yearEffects: z
+    .object({
+      ownMean: z.number(),
+      last: z.number(),
+      lastYear: z.number().int(),
+      lastThree: z.number(),
+      ownLast: z.number(),
+    })
+    .nullable()
+    .optional(),
   years: z.number().int(),
   lambdas: matrix,
   a: matrix,
@@ -58,14 +106,36 @@ export const PredictionBasis = z.object({
   quantile: z.number(),
   intervalReason: z.string().optional(),
   confidence: z.number(),
-  slopeCovariance: matrix,
-  slopeDegreesOfFreedom: z.discriminatedUnion('kind', [
-    z.object({ kind: z.literal('fixed'), value: z.number() }),
-    z.object({ kind: z.literal('satterthwaite'), s: matrix, quartic: z.array(z.number()) }),
-  ]),
+  slopeCovariance: matrix.nullable(),
+  slopeDegreesOfFreedom: z
+    .discriminatedUnion('kind', [
+      z.object({ kind: z.literal('fixed'), value: z.number() }),
+      z.object({ kind: z.literal('satterthwaite'), s: matrix, quartic: z.array(z.number()) }),
+    ])
+    .nullable(),
   slopeIntervalReason: z.string().optional(),
   last: ownYear,
+  held: z.array(z.number()).nullable().optional(),
+  ownErrors: z
+    .object({
+      persistence: nullable,
+      persistenceReason: z.string().optional(),
+      years: z.array(z.number().int()),
+      variance: z.number(),
+    })
+    .optional(),
+  peers: z
+    .array(
+      z.object({
+        company: z.string(),
+        interceptGap: z.number(),
+        regressors: z.array(z.number()),
+        residual: z.number(),
+      }),
+    )
+    .optional(),
   inverseCrossProduct: matrix,
+  slopeInverse: matrix.optional(),
   residualVariance: z.number(),
   largestOwnLeverage: z.number(),
   largestLeverage: z.number(),
@@ -86,6 +156,9 @@ const warningCode = z.enum([
   'perfect-fit',
   'ill-conditioned',
   'spelling',
+  'wild-set-disconnected',
+  'negative-eigenvalues',
+  'smear-differs',
 ]);
 
 export const FitWarning = z.object({
@@ -95,14 +168,22 @@ export const FitWarning = z.object({
 });
 export type FitWarning = z.infer<typeof FitWarning>;
 
-/** Estimates as the engine gives them; money in the panel's currency unit. */
+const percent = z.object({ estimate: z.number(), low: nullable, high: nullable });
+
+/** Which ends a bootstrap interval does not have. */
+export const Unbounded = z.enum(['low', 'high', 'both']);
+
+/**
+ * Estimates as the engine gives them; money in the panel's currency unit, in log form estimates of logs. What results
+ * of engines before 2 lack, in fits and in editions, has what it would have been as its default.
+ */
 export const FitResult = z.object({
   engine: z.string(),
   hash: z.string(),
   specification: z.object({
-    effects: z.literal('company'),
-    form: z.literal('levels'),
-    lag: z.literal(0),
+    effects: Effects,
+    form: ModelForm,
+    lag: Lag,
     slopes: SlopeCovariance,
     confidence: z.number(),
     seed: nullable,
@@ -128,9 +209,11 @@ export const FitResult = z.object({
       statistic: nullable,
       degreesOfFreedom: nullable,
       pValue: nullable,
+      unbounded: Unbounded.optional(),
     }),
   ),
-  slopeCovariance: matrix,
+  slopeCovariance: matrix.nullable(),
+  slopeCovarianceReason: z.string().optional(),
   intercepts: z.array(
     z.object({
       company: z.string(),
@@ -139,7 +222,8 @@ export const FitResult = z.object({
       rows: z.number().int(),
     }),
   ),
-  yearEffects: z.null(),
+  yearEffects: z.array(z.object({ year: z.number().int(), estimate: z.number() })).nullable(),
+  smearing: z.object({ factor: z.number(), own: nullable }).nullable().default(null),
   standing: z
     .object({
       company: z.string(),
@@ -151,6 +235,7 @@ export const FitResult = z.object({
       rank: nullable,
       rankSet: z.tuple([z.number().int(), z.number().int()]).nullable(),
       rankReason: z.string().optional(),
+      percent: percent.optional(),
     })
     .nullable(),
   standingReason: z.string().optional(),
@@ -210,8 +295,12 @@ export const FitSummary = z.object({
   panelVersionId: z.uuid(),
   ownCompany: z.string(),
   regressors: z.array(z.string()),
+  effects: Effects,
+  form: ModelForm,
+  lag: Lag,
   slopes: SlopeCovariance,
   confidence: z.number(),
+  /** In the panel's currency unit, or in log form a difference of logs. */
   standing: IntervalEstimate.nullable(),
   rankSet: z.tuple([z.number().int(), z.number().int()]).nullable(),
   companies: z.number().int().nullable(),

@@ -2,6 +2,7 @@ export * from './access';
 export * from './cautions';
 export * from './desk';
 export * from './editions';
+export * from './evidence';
 export * from './fits';
 export * from './lineage';
 export * from './members';

@@ -15,6 +15,9 @@ export function toFitSummary(fit: StoredFit): FitSummary {
     panelVersionId: fit.panelVersionId,
     ownCompany: fit.ownCompany,
     regressors: [...fit.specification.regressors],
+    effects: fit.specification.effects,
+    form: fit.specification.form,
+    lag: fit.specification.lag,
     slopes: fit.specification.slopes,
     confidence: fit.specification.confidence,
     standing:

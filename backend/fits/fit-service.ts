@@ -6,13 +6,14 @@ import { record } from '../activity/activity';
 import { Conflict, Invalid, NotFound } from '../errors/app-error';
 import type { JobQueue } from '../jobs/job-queue';
 import { findPeerGroup, type PeerGroup } from '../peers/peer-service';
-import { engineVersion, type FitResult, type SlopeCovarianceName } from '../stats';
+import { engineVersion, type FitResult, type Specification } from '../stats';
 import { type StoredFit, type StoredSpecification, toStoredFit } from './fit-view';
+import { toFitResult } from './stored-result';
 
-export interface FitRequest {
+export interface FitRequest extends Omit<Specification, 'seed'> {
   readonly peerGroupId: string;
-  readonly slopes: SlopeCovarianceName;
-  readonly confidence: number;
+  /** Of the wild bootstrap, 1 where it is not named; the other covariances draw nothing. */
+  readonly seed?: number | undefined;
   readonly furtherRegressors: readonly string[];
 }
 
@@ -111,9 +112,10 @@ export async function findFit(tx: WorkspaceRepositories, id: string): Promise<Fi
   if (row === undefined) throw new NotFound('There is no such fit.');
   const panelVersion = await tx.panels.findVersion(row.panelVersionId);
   if (panelVersion === undefined) throw new NotFound('There is no such panel version.');
+  const result = await tx.fits.result(id);
   return {
     fit: toStoredFit(row),
-    result: (await tx.fits.result(id)) as FitResult | undefined,
+    result: result === undefined ? undefined : toFitResult(result),
     panelVersion,
     peerGroup: await findPeerGroup(tx, row.peerGroupId),
   };
@@ -149,12 +151,12 @@ function specificationOf(request: FitRequest, version: PanelVersionRow): StoredS
   );
   if (errors.length > 0) throw new Invalid('The specification does not fit the panel.', errors);
   return {
-    effects: 'company',
-    form: 'levels',
-    lag: 0,
+    effects: request.effects,
+    form: request.form,
+    lag: request.lag,
     slopes: request.slopes,
     confidence: request.confidence,
-    seed: null,
+    seed: request.slopes === 'wild' ? (request.seed ?? 1) : null,
     outcome: named('marketValue'),
     regressors: [named('capex'), named('bookEquity'), ...new Set(request.furtherRegressors)],
   };

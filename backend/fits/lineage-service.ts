@@ -3,7 +3,7 @@ import type { Repositories } from '../../db/repositories/repositories';
 import { NotFound } from '../errors/app-error';
 import { accountFor } from './figure-accounts';
 import type { FigureAccount } from './figure-text';
-import { memberNames } from './fit-job';
+import { memberNames } from './fit-subject';
 import { findFinishedFit, type FinishedFit } from './fit-service';
 
 /** A figure with its fit and the cells that went into it. */

@@ -11,11 +11,18 @@ export interface JobQueueOptions {
   readonly onError: (error: Error) => void;
   /** How often a worker looks for work that another process queued. */
   readonly pollSeconds?: number;
+  /** How often a server says that it still works a job, and how long until a silent one counts as dead. */
+  readonly heartbeat?: { readonly everySeconds: number; readonly silentSeconds: number };
 }
 
 /** The same job for the same subject is queued once in this time, however often it is asked for. */
 const onceInSeconds = 30;
 const stopWaitMs = 3000;
+/** Longest that a job may take; death is noticed much sooner, by its silence. */
+const longestSeconds = 1800;
+const usualHeartbeat = { everySeconds: 5, silentSeconds: 20 };
+
+type TicketHandler = (ticket: JobTicketRow) => Promise<void>;
 
 /** Jobs in PostgreSQL: what is queued survives a crash, and any server process may work it. */
 export class JobQueue {
@@ -23,6 +30,9 @@ export class JobQueue {
   readonly #workers: { readonly kind: QueueName; readonly id: string }[] = [];
   /** Statements of the queue package and handlers of ours that have not ended. */
   #busy = 0;
+  /** What to do, by queue, when the last try of a job ended without a word. */
+  readonly #giveUp = new Map<string, TicketHandler | undefined>();
+  #rounds: NodeJS.Timeout | undefined;
 
   constructor(private readonly options: JobQueueOptions) {
     this.#boss = new PgBoss({
@@ -36,6 +46,12 @@ export class JobQueue {
 
   async start(): Promise<void> {
     await this.#boss.start();
+    const { everySeconds } = this.#heartbeat;
+    this.#rounds = setInterval(() => void this.#takeBackSilent(), everySeconds * 1000);
+  }
+
+  get #heartbeat(): NonNullable<JobQueueOptions['heartbeat']> {
+    return this.options.heartbeat ?? usualHeartbeat;
   }
 
   /**
@@ -43,6 +59,7 @@ export class JobQueue {
    * again, here or on another server.
    */
   async stop(endJobs: () => Promise<void> = () => Promise.resolve()): Promise<void> {
+    clearInterval(this.#rounds);
     await this.#boss.stop({ graceful: true, wait: true, timeout: stopWaitMs, close: false });
     await this.#quiet(stopWaitMs);
     await endJobs();
@@ -79,7 +96,7 @@ export class JobQueue {
         retryLimit: 4,
         retryDelay: 1,
         retryBackoff: true,
-        expireInSeconds: 300,
+        expireInSeconds: longestSeconds,
         singletonKey: subjectId,
         singletonSeconds: onceInSeconds,
       },
@@ -99,11 +116,8 @@ export class JobQueue {
    * @param handler  is told the ticket; a rejection queues the job again, up to its limit.
    * @param giveUp  is told the ticket when the last try failed, so that nobody waits for ever.
    */
-  async work(
-    kind: QueueName,
-    handler: (ticket: JobTicketRow) => Promise<void>,
-    giveUp?: (ticket: JobTicketRow) => Promise<void>,
-  ): Promise<void> {
+  async work(kind: QueueName, handler: TicketHandler, giveUp?: TicketHandler): Promise<void> {
+    this.#giveUp.set(kind, giveUp);
     const worker = await this.#boss.work<{ ticketId: unknown }>(
       kind,
       {
@@ -114,7 +128,9 @@ export class JobQueue {
       async (jobs) => {
         for (const job of jobs) {
           const isLast = job.retryCount >= job.retryLimit;
-          await this.#whileBusy(this.#try(kind, job.data, handler, isLast ? giveUp : undefined));
+          await this.#whileBusy(
+            this.#try(kind, job, { handler, giveUp: isLast ? giveUp : undefined }),
+          );
         }
       },
     );
@@ -123,18 +139,50 @@ export class JobQueue {
 
   async #try(
     kind: QueueName,
-    payload: { ticketId: unknown } | null,
-    handler: (ticket: JobTicketRow) => Promise<void>,
-    giveUp: ((ticket: JobTicketRow) => Promise<void>) | undefined,
+    job: { readonly id: string; readonly data: { ticketId: unknown } | null },
+    { handler, giveUp }: { readonly handler: TicketHandler; readonly giveUp?: TicketHandler },
   ): Promise<void> {
     let ticket: JobTicketRow | undefined;
     try {
-      ticket = await this.#ticket(kind, payload);
-      await handler(ticket);
+      ticket = await this.#ticket(kind, job.data);
+      await this.#whileBeating(ticket, job.id, handler);
     } catch (error) {
       this.options.onError(new Error(`a job of queue ${kind} failed`, { cause: error }));
       if (ticket !== undefined) await giveUp?.(ticket);
       throw error;
+    }
+  }
+
+  /** Works a job and says all the while that this server lives. */
+  async #whileBeating(ticket: JobTicketRow, jobId: string, handler: TicketHandler): Promise<void> {
+    const { jobTickets } = this.options.repositories;
+    await jobTickets.beat(ticket.id, jobId);
+    const beats = setInterval(() => {
+      jobTickets.beat(ticket.id, jobId).catch((error: unknown) => {
+        this.options.onError(new Error('a job’s heartbeat was not written', { cause: error }));
+      });
+    }, this.#heartbeat.everySeconds * 1000);
+    try {
+      await handler(ticket);
+    } finally {
+      clearInterval(beats);
+      await jobTickets.rest(ticket.id);
+    }
+  }
+
+  /** Jobs of servers that died are tried again at once; after the last try whoever waits is told. */
+  async #takeBackSilent(): Promise<void> {
+    try {
+      const { jobTickets } = this.options.repositories;
+      for (const ticket of await jobTickets.takeSilent(this.#heartbeat.silentSeconds)) {
+        const { kind, jobId } = ticket;
+        this.options.onError(new Error(`a job of queue ${kind} fell silent and is taken back`));
+        await this.#boss.fail(kind, jobId, { message: 'the server that worked it fell silent' });
+        const job = await this.#boss.getJobById(kind, jobId);
+        if (job?.state === 'failed') await this.#giveUp.get(kind)?.(ticket);
+      }
+    } catch (error) {
+      this.options.onError(new Error('silent jobs could not be taken back', { cause: error }));
     }
   }
 

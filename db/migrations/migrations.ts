@@ -2,12 +2,14 @@ import type { Kysely, Migration, MigrationProvider } from 'kysely';
 import { peopleAndWorkspaces } from './0001-people-and-workspaces';
 import { panelsAndPeers } from './0002-panels-and-peers';
 import { fitsScenariosEditions } from './0003-fits-scenarios-editions';
+import { evidenceAndBootstraps } from './0004-evidence-and-bootstraps';
 
 /** In order, append-only: a merged migration is never edited. */
 const steps: Readonly<Record<string, (db: Kysely<unknown>, appRole: string) => Promise<void>>> = {
   '0001-people-and-workspaces': peopleAndWorkspaces,
   '0002-panels-and-peers': panelsAndPeers,
   '0003-fits-scenarios-editions': fitsScenariosEditions,
+  '0004-evidence-and-bootstraps': evidenceAndBootstraps,
 };
 
 export const latestMigration = Object.keys(steps).at(-1) ?? '';

@@ -13,6 +13,8 @@ export interface FitRow {
   readonly state: FitState;
   readonly progress: object | null;
   readonly hash: string | null;
+  /** Version of the engine that computed the result. */
+  readonly engine: string | null;
   /** The standing and the number of companies of the result: a whole result can be megabytes. */
   readonly standing: object | null;
   readonly companies: number | null;
@@ -155,6 +157,7 @@ export class FitsRepository {
         'fit.state',
         'fit.progress',
         'fit.hash',
+        sql<string | null>`fit.result ->> 'engine'`.as('engine'),
         sql<object | null>`fit.result -> 'standing'`.as('standing'),
         sql<number | null>`(fit.result #>> '{sample,companies}')::integer`.as('companies'),
         'fit.failure',

@@ -1,4 +1,4 @@
-import type { Kysely } from 'kysely';
+import { type Kysely, sql } from 'kysely';
 import type { Database } from '../schema/database';
 
 export interface JobTicketRow {
@@ -6,6 +6,11 @@ export interface JobTicketRow {
   readonly workspaceId: string;
   readonly kind: string;
   readonly subjectId: string;
+}
+
+/** A ticket whose server has fallen silent, with the queue package's id of the job. */
+export interface SilentTicketRow extends JobTicketRow {
+  readonly jobId: string;
 }
 
 /** Tickets that queued jobs name; over all workspaces, since a worker learns the workspace from the ticket. */
@@ -26,5 +31,34 @@ export class JobTicketsRepository {
       .select(['id', 'workspaceId', 'kind', 'subjectId'])
       .where('id', '=', id)
       .executeTakeFirst();
+  }
+
+  /** Says that the job is being worked; by the database's clock, since servers' may differ. */
+  async beat(id: string, jobId: string): Promise<void> {
+    await this.db
+      .updateTable('jobTicket')
+      .set({ jobId, heartbeatAt: sql`now()` })
+      .where('id', '=', id)
+      .execute();
+  }
+
+  /** Says that nobody works the job any more. */
+  async rest(id: string): Promise<void> {
+    await this.db
+      .updateTable('jobTicket')
+      .set({ heartbeatAt: null })
+      .where('id', '=', id)
+      .execute();
+  }
+
+  /** Takes the tickets that nobody has spoken of for a while; each is given to one caller alone. */
+  async takeSilent(seconds: number): Promise<SilentTicketRow[]> {
+    const taken = await this.db
+      .updateTable('jobTicket')
+      .set({ heartbeatAt: null })
+      .where('heartbeatAt', '<', sql<Date>`now() - make_interval(secs => ${seconds})`)
+      .returning(['id', 'workspaceId', 'kind', 'subjectId', 'jobId'])
+      .execute();
+    return taken.flatMap((row) => (row.jobId === null ? [] : [{ ...row, jobId: row.jobId }]));
   }
 }

@@ -3,7 +3,9 @@ import type { Database } from '../schema/database';
 import { latestMigration } from '../migrations/migrations';
 import { ActivityRepository } from './activity-repository';
 import { BillingRepository } from './billing-repository';
+import { BootstrapsRepository } from './bootstraps-repository';
 import { EditionsRepository } from './editions-repository';
+import { EvidenceRepository } from './evidence-repository';
 import { FilesRepository } from './files-repository';
 import { FitsRepository } from './fits-repository';
 import { ImportsRepository } from './imports-repository';
@@ -25,6 +27,8 @@ export interface WorkspaceRepositories {
   readonly panels: PanelsRepository;
   readonly peers: PeersRepository;
   readonly fits: FitsRepository;
+  readonly evidence: EvidenceRepository;
+  readonly bootstraps: BootstrapsRepository;
   readonly scenarios: ScenariosRepository;
   readonly editions: EditionsRepository;
   readonly billing: BillingRepository;
@@ -65,6 +69,8 @@ export class Repositories {
         panels: new PanelsRepository(trx, workspaceId),
         peers: new PeersRepository(trx, workspaceId),
         fits: new FitsRepository(trx, workspaceId),
+        evidence: new EvidenceRepository(trx, workspaceId),
+        bootstraps: new BootstrapsRepository(trx, workspaceId),
         scenarios: new ScenariosRepository(trx, workspaceId),
         editions: new EditionsRepository(trx, workspaceId),
         billing: new BillingRepository(trx, workspaceId),

@@ -8,7 +8,7 @@ import type {
   WorkspaceTable,
 } from './accounts-tables';
 import type { EditionTable } from './edition-table';
-import type { FitTable, JobTicketTable } from './fit-tables';
+import type { FitBootstrapTable, FitEvidenceTable, FitTable, JobTicketTable } from './fit-tables';
 import type {
   ImportDraftTable,
   PanelRowTable,
@@ -25,6 +25,8 @@ export interface Database {
   billingAccount: BillingAccountTable;
   edition: EditionTable;
   fit: FitTable;
+  fitBootstrap: FitBootstrapTable;
+  fitEvidence: FitEvidenceTable;
   importDraft: ImportDraftTable;
   invitation: InvitationTable;
   jobTicket: JobTicketTable;

@@ -1,0 +1,51 @@
+import type { JobTicketRow } from '../../db/repositories/jobs-repository';
+import type { Repositories } from '../../db/repositories/repositories';
+import type { FitPool, Run } from '../compute/fit-pool';
+import type { BootstrapAnswer } from '../compute/messages';
+import { randomDraws } from '../stats/slopes/bootstrap/sign-draws';
+import { findFit } from './fit-service';
+import { readSubject } from './fit-subject';
+import { watchedRun } from './watched-run';
+
+/** Works one queued bootstrap in a worker thread of its own and keeps its intervals with the fit. */
+export class BootstrapJob {
+  constructor(
+    private readonly repositories: Repositories,
+    private readonly pool: FitPool,
+    private readonly now: () => Date,
+  ) {}
+
+  async run({ workspaceId, subjectId: id }: JobTicketRow): Promise<void> {
+    const taken = await this.repositories.inWorkspace(workspaceId, async (tx) => {
+      const bootstrap = await tx.bootstraps.find(id);
+      if (bootstrap === undefined || !(await tx.bootstraps.markRunning(id))) return undefined;
+      return { bootstrap, subject: await readSubject(tx, await findFit(tx, bootstrap.fitId)) };
+    });
+    if (taken === undefined) return;
+    const ended = await watchedRun<BootstrapAnswer, Run<BootstrapAnswer>>(
+      (signal) => this.pool.bootstrap(taken.subject, taken.bootstrap.seed, signal),
+      (share) => {
+        const drawn = { done: Math.round(share * randomDraws), total: randomDraws };
+        return this.repositories.inWorkspace(workspaceId, (tx) =>
+          tx.bootstraps.saveProgress(id, drawn),
+        );
+      },
+    );
+    if (ended === undefined) return;
+    const { answer } = ended;
+    await this.repositories.inWorkspace(workspaceId, (tx) =>
+      answer.kind === 'done'
+        ? tx.bootstraps.finish(id, answer.summary, this.now())
+        : tx.bootstraps.fail(id, answer.detail, this.now()),
+    );
+  }
+
+  /** After the last try failed: whoever waits for it is told. */
+  async giveUp({ workspaceId, subjectId: id }: JobTicketRow): Promise<void> {
+    const failure =
+      'The server could not finish this bootstrap. Start it again; if that fails too, tell whoever runs the server.';
+    await this.repositories.inWorkspace(workspaceId, (tx) =>
+      tx.bootstraps.fail(id, failure, this.now()),
+    );
+  }
+}

@@ -1,0 +1,40 @@
+import { Evidence as EvidenceReply, type Evidence as EvidenceOfContract } from '../contract';
+import { openFit, type Specification } from '../stats';
+import type { Evidence } from '../stats/evidence/evidence';
+import { evidenceOf } from '../stats/evidence/evidence-of';
+import { goldenPanel, plainSpecification, sha256 } from '../stats/testing/golden-panels';
+import { toEvidence } from './evidence-reply';
+
+type Plain<Value> = { -readonly [Key in keyof Value]: Plain<Value[Key]> };
+
+/** Compiles only while the contract's members and the engine's are the same. */
+const asContract = (evidence: Plain<Evidence>): EvidenceOfContract => evidence;
+const asEngine = (evidence: EvidenceOfContract): Evidence => evidence;
+
+const specifications: readonly Partial<Specification>[] = [
+  {},
+  { effects: 'company,year' },
+  { form: 'log' },
+  { lag: 1 },
+  { slopes: 'wild', seed: 1 },
+];
+
+describe('the contract’s evidence', () => {
+  for (const specification of specifications)
+    it(`takes every member of the engine’s and loses none (${JSON.stringify(specification)})`, () => {
+      for (const own of ['C06', null]) {
+        const open = openFit(
+          {
+            data: goldenPanel('grunfeld11_value_on_inv_capital.csv', 'value', ['inv', 'capital']),
+            specification: { ...plainSpecification, ...specification },
+            own,
+            members: undefined,
+          },
+          { sha256 },
+        );
+        const sent: unknown = JSON.parse(JSON.stringify(toEvidence(evidenceOf(open))));
+        const read = asEngine(asContract(EvidenceReply.parse(sent)));
+        expect(read).toEqual(sent as Evidence);
+      }
+    });
+});

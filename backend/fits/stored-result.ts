@@ -1,0 +1,9 @@
+import type { FitResult } from '../stats';
+
+/**
+ * A result as it is stored, whichever engine made it: engines before 2 knew neither logs nor years, and said nothing of
+ * them.
+ */
+export function toFitResult(stored: object): FitResult {
+  return { smearing: null, ...stored } as FitResult;
+}
