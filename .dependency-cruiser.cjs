@@ -90,6 +90,7 @@ const ofFolder = [
         ...({
           accounts: ['@node-rs/argon2', 'passport', 'passport-local'],
           panels: ['multer'],
+          fits: ['yazl', 'csv-stringify'],
           billing: ['stripe'],
         }[name] ?? []),
       ),

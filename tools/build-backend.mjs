@@ -5,7 +5,7 @@
  */
 import { existsSync } from 'node:fs';
 import { copyFile, mkdir, rm } from 'node:fs/promises';
-import { join } from 'node:path';
+import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { build } from 'esbuild';
 
@@ -50,8 +50,7 @@ await build({
 });
 
 // Data that the server reads beside its code.
-await mkdir(join(root, 'dist/backend/panels'), { recursive: true });
-await copyFile(
-  join(root, 'backend/panels/sample-panel.csv'),
-  join(root, 'dist/backend/panels/sample-panel.csv'),
-);
+for (const file of ['backend/panels/sample-panel.csv', 'backend/fits/replication/replication.R']) {
+  await mkdir(dirname(join(root, 'dist', file)), { recursive: true });
+  await copyFile(join(root, file), join(root, 'dist', file));
+}

@@ -1,0 +1,56 @@
+import type { FitResult } from '../../stats';
+import type { Evidence } from '../../stats/evidence/evidence';
+import type { RowUsed } from './rows-used';
+
+/** All that a replication pack is made of, as plain data. */
+export interface ReplicationPack {
+  readonly rows: readonly RowUsed[];
+  /** Names of the panel's columns. */
+  readonly names: {
+    readonly company: string;
+    readonly year: string;
+    readonly regressors: readonly string[];
+  };
+  readonly ownCompany: string | null;
+  /** Of amounts; null where the panel names none. */
+  readonly currency: string | null;
+  readonly unit: 'units' | 'thousands' | 'millions' | 'billions' | null;
+  readonly result: FitResult;
+  /** Null where the engine that made the fit wrote none. */
+  readonly evidence: Evidence | null;
+  /** Null for a fit that no workspace keeps. */
+  readonly lineage: PackLineage | null;
+  /** Text of `replication.R`. */
+  readonly script: string;
+}
+
+interface Made {
+  /** ISO 8601, UTC. */
+  readonly createdAt: string;
+  readonly createdBy: string;
+}
+
+/** The chain that a fit stands on. */
+export interface PackLineage {
+  readonly fit: Made & { readonly id: string };
+  readonly peerGroupVersion: Made & {
+    readonly number: number;
+    readonly note: string;
+    readonly companies: readonly {
+      readonly company: string;
+      readonly isIncluded: boolean;
+      readonly reason: string;
+    }[];
+  };
+  readonly panelVersion: Made & {
+    readonly panel: string;
+    readonly number: number;
+    readonly note: string;
+  };
+  readonly importedFile: { readonly name: string; readonly sha256: string };
+}
+
+export interface PackFile {
+  readonly name: string;
+  readonly text: string;
+}

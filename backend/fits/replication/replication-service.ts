@@ -1,0 +1,70 @@
+import { readFile } from 'node:fs/promises';
+import type { Repositories } from '../../../db/repositories/repositories';
+import { record } from '../../activity/activity';
+import { findEvidence } from '../evidence-service';
+import { findFinishedFit, type FinishedFit } from '../fit-service';
+import { readSubject } from '../fit-subject';
+import type { PackLineage, ReplicationPack } from './replication-pack';
+import { rowsUsed } from './rows-used';
+
+/** Hands out all that somebody needs to compute a fit again. */
+export class ReplicationService {
+  /** @param scriptFile  path of `replication.R`. */
+  constructor(
+    private readonly repositories: Repositories,
+    private readonly scriptFile: string,
+  ) {}
+
+  /** Records who took it. @throws {NotFound}; {Conflict} while the fit is not done. */
+  async export(
+    actor: { readonly personId: string; readonly workspaceId: string },
+    fitId: string,
+  ): Promise<ReplicationPack> {
+    const script = await readFile(this.scriptFile, 'utf8');
+    return this.repositories.inWorkspace(actor.workspaceId, async (tx) => {
+      const found = await findFinishedFit(tx, fitId);
+      const { fit, result, panelVersion, peerGroup } = found;
+      const { columns } = await readSubject(tx, found);
+      const evidence = await findEvidence(tx, fitId);
+      await record(tx, actor.personId, 'fit-exported', fitId, { hash: result.hash });
+      return {
+        rows: rowsUsed(columns, result),
+        names: {
+          company: panelVersion.companyHeader,
+          year: panelVersion.yearHeader,
+          regressors: fit.specification.regressors,
+        },
+        ownCompany: peerGroup.ownCompany,
+        currency: panelVersion.currency,
+        unit: panelVersion.unit,
+        result,
+        evidence: evidence.state === 'ready' ? evidence.evidence : null,
+        lineage: lineageOf(found),
+        script,
+      };
+    });
+  }
+}
+
+function lineageOf({ fit, peerGroup, panelVersion }: FinishedFit): PackLineage {
+  const made = (row: { readonly createdAt: Date; readonly createdByName: string }) => ({
+    createdAt: row.createdAt.toISOString(),
+    createdBy: row.createdByName,
+  });
+  return {
+    fit: { id: fit.id, ...made(fit) },
+    peerGroupVersion: {
+      number: peerGroup.number,
+      note: peerGroup.note,
+      companies: peerGroup.choices,
+      ...made(peerGroup),
+    },
+    panelVersion: {
+      panel: panelVersion.panelName,
+      number: panelVersion.number,
+      note: panelVersion.note,
+      ...made(panelVersion),
+    },
+    importedFile: { name: panelVersion.fileName, sha256: panelVersion.fileSha256 },
+  };
+}
