@@ -1,7 +1,11 @@
 import { breuschGodfreyTest } from './breusch-godfrey';
+import { breuschPaganLmTest } from './breusch-pagan-lm';
 import { brownForsytheTest } from './brown-forsythe';
 import { durbinWatsonTest } from './durbin-watson';
 import type { EvidenceTest } from './evidence-test';
+import { hausmanClassicalTest } from './hausman-classical';
+import { hausmanClusteredTest } from './hausman-clustered';
+import { hondaTest } from './honda';
 import { modifiedWaldTest } from './modified-wald';
 import { pesaranCdTest } from './pesaran-cd';
 import { poolabilityTest } from './poolability';
@@ -14,6 +18,9 @@ import { wooldridgeWithinTest } from './wooldridge-within';
 export const testTable: readonly EvidenceTest[] = [
   poolabilityTest,
   slopeHomogeneityTest,
+  hausmanClassicalTest,
+  hausmanClusteredTest,
+  breuschPaganLmTest,
   wooldridgeWithinTest,
   wooldridgeFirstDifferencesTest,
   durbinWatsonTest,
@@ -22,4 +29,5 @@ export const testTable: readonly EvidenceTest[] = [
   modifiedWaldTest,
   resetTest,
   breuschGodfreyTest,
+  hondaTest,
 ];
