@@ -83,7 +83,7 @@ describe('the classical Hausman test', () => {
       );
       const outcome = hausmanClassicalTest.compute(open);
       expect(outcome.statistic).toBeNull();
-      return 'reason' in outcome ? outcome.reason : '';
+      return 'reason' in outcome ? (outcome.reason ?? '') : '';
     };
     const row = (company: number, year: number, noise: number): PanelRow => ({
       company: `K${company}`,
