@@ -1,6 +1,7 @@
 import { parse as parseCsv } from 'csv-parse/sync';
 import { parseArgs } from 'node:util';
-import type { SlopeCovarianceName, Specification } from '../../backend/stats';
+import type { Specification } from '../../backend/stats';
+import { covarianceNames } from '../../backend/stats/slopes/covariance-names';
 import { FitProblem } from './fit-problem';
 
 /** What the command was asked for. */
@@ -13,6 +14,7 @@ export interface FitArguments {
   readonly own: string | null;
   readonly members: readonly string[] | undefined;
   readonly specification: Specification;
+  readonly isEvidenceAsked: boolean;
 }
 
 const options = {
@@ -27,22 +29,14 @@ const options = {
   form: { type: 'string', default: 'levels' },
   slopes: { type: 'string', default: 'cr2' },
   confidence: { type: 'string', default: '0.95' },
-  seed: { type: 'string' },
+  seed: { type: 'string', default: '1' },
   lag: { type: 'string', default: '0' },
   evidence: { type: 'boolean', default: false },
 } as const;
 
-/** Values of the published interface that this version of the engine does not compute yet. */
-const notOffered: Readonly<Record<string, readonly string[]>> = {
-  effects: ['company,year'],
-  form: ['log'],
-  slopes: ['wild', 'hc0', 'hc1', 'hc2', 'hc3', 'two-way', 'driscoll-kraay'],
-  lag: ['1'],
-};
-
 /**
  * Reads the command line.
- * @throws {FitProblem} 'bad-arguments' or 'not-offered'.
+ * @throws {FitProblem} 'bad-arguments'.
  */
 export function readArguments(args: readonly string[]): FitArguments {
   const values = parseStrictly(args);
@@ -51,14 +45,16 @@ export function readArguments(args: readonly string[]): FitArguments {
     if (value === undefined || value === '') throw badArguments(`expected --${name}; found none`);
     return value;
   };
-  if (values.evidence) throw isNotOffered('--evidence');
+  const slopes = choice(values, 'slopes', covarianceNames);
+  const seed = seedOf(values.seed);
   const specification: Specification = {
-    effects: choice(values, 'effects', ['company']),
-    form: choice(values, 'form', ['levels']),
-    lag: Number(choice(values, 'lag', ['0'])) as 0,
-    slopes: choice<SlopeCovarianceName>(values, 'slopes', ['cr2', 'cr1', 'cr0', 'classical']),
+    effects: choice(values, 'effects', ['company', 'company,year']),
+    form: choice(values, 'form', ['levels', 'log']),
+    lag: choice(values, 'lag', ['0', '1']) === '1' ? 1 : 0,
+    slopes,
     confidence: confidenceOf(values.confidence),
-    seed: refuseBrokenSeed(values.seed),
+    // Only the bootstrap draws: elsewhere a seed would decide nothing, and two seeds would make two fits of one.
+    seed: slopes === 'wild' ? seed : null,
   };
   return {
     panel: required('panel'),
@@ -69,6 +65,7 @@ export function readArguments(args: readonly string[]): FitArguments {
     own: values.own ?? null,
     members: values.members === undefined ? undefined : listOf('members', values.members),
     specification,
+    isEvidenceAsked: values.evidence,
   };
 }
 
@@ -93,7 +90,6 @@ function choice<Choice extends string>(
   const value = values[name];
   const found = offered.find((one) => one === value);
   if (found !== undefined) return found;
-  if (notOffered[name].includes(value)) throw isNotOffered(`--${name} ${value}`);
   throw badArguments(`expected --${name} to be ${offered.join(', ')}; found ${value}`);
 }
 
@@ -103,9 +99,8 @@ function confidenceOf(text: string): number {
   throw badArguments(`expected --confidence between 0 and 1, as 0.95; found ${text}`);
 }
 
-/** No estimate of this version draws random numbers, so a seed decides nothing and the specification holds none. */
-function refuseBrokenSeed(text: string | undefined): null {
-  if (text === undefined || /^\d{1,15}$/u.test(text)) return null;
+function seedOf(text: string): number {
+  if (/^\d{1,15}$/u.test(text)) return Number(text);
   throw badArguments(`expected --seed to be a whole number; found ${text}`);
 }
 
@@ -126,9 +121,4 @@ function listOf(name: string, text: string): string[] {
 
 function badArguments(detail: string): FitProblem {
   return new FitProblem('bad-arguments', 'The command line cannot be read', detail);
-}
-
-function isNotOffered(what: string): FitProblem {
-  const detail = `${what} is not offered by this version of the engine`;
-  return new FitProblem('not-offered', 'Not offered', detail);
 }

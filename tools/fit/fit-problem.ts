@@ -88,6 +88,9 @@ const titles: Readonly<Record<StatsError['code'], string>> = {
   'outcome-constant': 'The outcome never varies within a company',
   'constant-within-companies': 'A regressor never varies within a company',
   'collinear-regressors': 'Regressors move together exactly',
+  'same-for-all-companies': 'A regressor moves alike in every company',
+  'not-positive': 'A number is zero or less in log form',
+  'disconnected-years': 'The years fall into groups without a common company',
   'no-residual-degrees-of-freedom': 'No residual degrees of freedom',
 };
 

@@ -1,13 +1,20 @@
 import type { DroppedRow, FitResult } from '../../backend/stats';
-
-type Json = string | number | boolean | null | readonly Json[] | { readonly [key: string]: Json };
+import type { Evidence } from '../../backend/stats/evidence/evidence';
+import { evidenceReply } from './evidence-reply';
+import { slopeReasons } from './slope-reasons';
+import { type Json, withReasons } from './with-reasons';
 
 /**
  * What the command prints of a fit: the documented keys, and beside every null a `…Reason`.
  *
  * @param leftOut  rows that name no company or no year and therefore never reached the engine.
+ * @param evidence  where it was asked for.
  */
-export function fitReply(result: FitResult, leftOut: readonly DroppedRow[]): Json {
+export function fitReply(
+  result: FitResult,
+  leftOut: readonly DroppedRow[],
+  evidence?: Evidence,
+): Json {
   const { sample, standing } = result;
   const dropped = [...sample.dropped, ...leftOut].sort((left, right) => left.row - right.row);
   const figures = withReasons({
@@ -19,11 +26,16 @@ export function fitReply(result: FitResult, leftOut: readonly DroppedRow[]): Jso
       dropped,
       singleRow: sample.singleRow,
     },
-    slopes: result.slopes,
+    slopes: result.slopes.map((slope) => ({ ...slope, ...slopeReasons(slope) })),
     slopeCovariance: result.slopeCovariance,
+    ...(result.slopeCovariance === null && {
+      slopeCovarianceReason: result.slopeCovarianceReason,
+    }),
     intercepts: result.intercepts,
-    yearEffects: null,
-    yearEffectsReason: 'The specification has no year effects.',
+    yearEffects: result.yearEffects,
+    ...(result.yearEffects === null && {
+      yearEffectsReason: 'The specification has no year effects.',
+    }),
     standing:
       standing === null
         ? null
@@ -42,6 +54,7 @@ export function fitReply(result: FitResult, leftOut: readonly DroppedRow[]): Jso
     pooled: result.pooled,
     poolability: result.poolability,
     warnings: result.warnings.map(({ code, detail, subjects }) => ({ code, detail, subjects })),
+    ...(evidence !== undefined && { evidence: evidenceReply(evidence) }),
   } as unknown as Json);
   return {
     engine: result.engine,
@@ -49,20 +62,4 @@ export function fitReply(result: FitResult, leftOut: readonly DroppedRow[]): Jso
     specification: { ...result.specification },
     ...(figures as Readonly<Record<string, Json>>),
   };
-}
-
-/** Gives every null its own `…Reason`, taken from the reason that its object states. */
-function withReasons(value: Json): Json {
-  if (Array.isArray(value)) return value.map(withReasons);
-  if (value === null || typeof value !== 'object') return value;
-  const object = value as Readonly<Record<string, Json>>;
-  const stated = object['intervalReason'] ?? object['pValueReason'];
-  const result: Record<string, Json> = {};
-  for (const [key, entry] of Object.entries(object)) {
-    if (entry === undefined || key === 'intervalReason') continue;
-    result[key] = withReasons(entry);
-    const own = `${key}Reason`;
-    if (entry === null && !(own in object) && stated !== undefined) result[own] = stated;
-  }
-  return result;
 }

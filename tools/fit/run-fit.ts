@@ -4,7 +4,8 @@ import { resolve } from 'node:path';
 import { readTable } from '../../backend/compute/parsing/read-table';
 import type { Table } from '../../backend/compute/parsing/table';
 import { toPanelColumns } from '../../backend/compute/parsing/to-panel-columns';
-import { type DroppedRow, fitPanel } from '../../backend/stats';
+import { type DroppedRow, openFit } from '../../backend/stats';
+import { evidenceOf } from '../../backend/stats/evidence/evidence-of';
 import { type FitArguments, readArguments } from './fit-arguments';
 import { cellsProblem, FitProblem } from './fit-problem';
 import { fitReply } from './fit-reply';
@@ -25,11 +26,13 @@ export async function runFit(
   const table = await readFile(resolve(folder, request.panel));
   const { data, problems, leftOut } = toPanelColumns(table, request);
   if (problems.length > 0) throw cellsProblem(problems);
-  const result = fitPanel(data, request.specification, request.own, request.members, { sha256 });
+  const { specification, own, members } = request;
+  const open = openFit({ data, specification, own, members }, { sha256 });
   const dropped = leftOut.filter(({ row }) => isInSample(table, row, request));
   return fitReply(
-    result,
+    open.result,
     dropped.map(({ row, column }): DroppedRow => ({ row, column, reason: 'missing' })),
+    request.isEvidenceAsked ? evidenceOf(open) : undefined,
   );
 }
 
