@@ -1,12 +1,16 @@
+export * from './company-lines-layout';
 export * from './coverage-map-layout';
 export * from './difference-bars-layout';
 export * from './expected-path-layout';
 export type { EndLabel } from './expected-path-labels';
 export * from './figure-types';
-export * from './fit-comparison-layout';
 export * from './gap-path-layout';
+export * from './interval-rows-layout';
+export * from './leave-one-out-layout';
 export { diamondPath, planMarkPath } from './mark-paths';
 export * from './number-text';
+export * from './residual-groups-layout';
+export * from './residual-scatter-layout';
 export * from './slope-intervals-layout';
 export * from './standing-chart-layout';
 export { wrappedWords } from './text-width';

@@ -1,3 +1,5 @@
+import type { Point } from './figure-types';
+
 /** The own company's mark, `radius` from centre to corner, around the origin. */
 export function diamondPath(radius: number): string {
   return `M0,${-radius}L${radius},0L0,${radius}L${-radius},0Z`;
@@ -14,4 +16,20 @@ export function planMarkPath(place: number, radius = 4): string {
     default:
       return `M0,${-r * 1.2}L${r * 1.1},${r * 0.9}H${-r * 1.1}Z`;
   }
+}
+
+/** The own company's mark around a place, for many in one path. */
+export function diamondAt({ x, y }: Point, radius: number): string {
+  return `M${rounded(x)},${rounded(y - radius)}l${radius},${radius}l${-radius},${radius}l${-radius},${-radius}Z`;
+}
+
+/** A peer's mark around a place, for many in one path. */
+export function circleAt({ x, y }: Point, radius: number): string {
+  const arc = `a${radius},${radius} 0 1 1`;
+  return `M${rounded(x - radius)},${rounded(y)}${arc} ${2 * radius},0${arc} ${-2 * radius},0Z`;
+}
+
+/** A tenth of a pixel is finer than anyone sees, and keeps a path of thousands of marks short. */
+function rounded(pixels: number): number {
+  return Math.round(pixels * 10) / 10;
 }

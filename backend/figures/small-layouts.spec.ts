@@ -1,6 +1,5 @@
 import { differenceBarsLayout } from './difference-bars-layout';
 import type { FigureFormats, IntervalFigure } from './figure-types';
-import { fitComparisonLayout } from './fit-comparison-layout';
 import { slopeIntervalsLayout } from './slope-intervals-layout';
 
 const formats: FigureFormats = {
@@ -77,35 +76,5 @@ describe('difference bars layout', () => {
       formats,
     );
     expect(bars.map((bar) => [bar.x, bar.width])).toEqual([[zeroX, 0]]);
-  });
-});
-
-describe('fit comparison layout', () => {
-  const standing = { estimate: 2100, low: 700, high: 3400 };
-
-  it('puts the standings on one scale and keeps the reason of a missing one', () => {
-    const { rows } = fitComparisonLayout(
-      [
-        { name: '6f3a91', standing },
-        { name: '0b77de', standing: null, reason: 'too few rows' },
-      ],
-      760,
-      formats,
-    );
-    expect(rows[0].figures).toBe('2100.00 (700.00 to 3400.00)');
-    expect(rows[1].x).toBeNull();
-    expect(rows[1].figures).toBe('too few rows');
-  });
-
-  it('draws equal standings at equal places, in any width', () => {
-    for (const width of [320, 760]) {
-      const { rows } = fitComparisonLayout(
-        ['a', 'b'].map((name) => ({ name, standing })),
-        width,
-        formats,
-      );
-      expect(rows[0].x).toBe(rows[1].x);
-      expect(rows[0].interval!.to).toBeLessThanOrEqual(width);
-    }
   });
 });

@@ -75,6 +75,12 @@ describe('fit comparison', () => {
     expect(page.querySelectorAll('path.own').length).toBe(2);
     expect(page.querySelectorAll('path.own.other').length).toBe(1);
     await chart.toggle();
-    expect((await chart.table())[2]).toEqual(['the first', 'n/a', 'n/a', 'n/a']);
+    expect((await chart.table())[2]).toEqual([
+      'the first',
+      'n/a',
+      'n/a',
+      'n/a',
+      'own company left out',
+    ]);
   });
 });
