@@ -24,6 +24,11 @@ export class ChartHarness extends ComponentHarness {
   /** The grid of a map, which takes keys for all its cells. */
   readonly grid = this.locatorFor('[role="grid"]');
 
+  /** The plot of a cloud of points, which takes keys for all of them. */
+  readonly cloud = this.locatorFor('svg[role="listbox"]');
+
+  readonly #option = this.locatorForOptional('[role="option"]');
+
   async title(): Promise<string | null> {
     return (await this.#figure()).getAttribute('aria-label');
   }
@@ -47,6 +52,12 @@ export class ChartHarness extends ComponentHarness {
     for (const point of await this.#points())
       if (await point.isFocused()) return point.getAttribute('aria-label');
     return null;
+  }
+
+  /** What the point of a cloud says that the keys stand on; null in an empty one. */
+  async cloudPoint(): Promise<string | null> {
+    const option = await this.#option();
+    return option === null ? null : option.getAttribute('aria-label');
   }
 
   async clickPoint(label: string | RegExp): Promise<void> {
