@@ -1,6 +1,6 @@
 import type { FitReply, FitResult } from '@contract';
 import { type NumberFormat, headlineDigits } from '../ui/number-format';
-import { covarianceName } from './covariance-words';
+import { covarianceName } from '../ui/covariance-words';
 import { regressorWord } from './fit-words';
 import { moneyOf } from './panel-money';
 import { confidenceText, listed, shortHash } from '../ui/phrases';
@@ -34,6 +34,13 @@ export function specificationLines(a: FinishedFit, b: FinishedFit): readonly Com
     line('Peer group', ({ reply: { peerGroup } }) => `v${peerGroup.number}`),
     line('Regressors', ({ result }) =>
       listed(result.slopes.map(({ name }, index) => regressorWord(name, index))),
+    ),
+    line('Held fixed', ({ reply }) =>
+      reply.fit.effects === 'company' ? 'company levels' : 'company levels and year effects',
+    ),
+    line('Measure', ({ reply }) => (reply.fit.form === 'levels' ? 'amounts' : 'logs')),
+    line('Regressors of', ({ reply }) =>
+      reply.fit.lag === 0 ? 'the same year' : 'the year before',
     ),
     line('Slope intervals', ({ reply }) => covarianceName(reply.fit.slopes)),
     line('Confidence', ({ reply }) => confidenceText(reply.fit.confidence)),

@@ -106,14 +106,13 @@ export class FitHome {
     });
   }
 
-  protected async start({ slopes, confidence, furtherRegressors }: Specification): Promise<void> {
+  protected async start(specification: Specification): Promise<void> {
     const ground = this.ground();
     if (ground === null) return;
     const fitId = await this.starter.start({
+      ...specification,
       peerGroupId: ground.peerGroup.id,
-      slopes,
-      confidence,
-      furtherRegressors: [...furtherRegressors],
+      furtherRegressors: [...specification.furtherRegressors],
     });
     if (fitId !== null) this.#open(fitId);
   }

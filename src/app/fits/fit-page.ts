@@ -95,20 +95,12 @@ export class FitPage {
   }
 
   /** Asks for another specification and runs it as a fit of its own. */
-  protected async changeSpecification({ fit, panelVersion }: FitReply): Promise<void> {
-    const chosen = await this.#ask(
-      {
-        slopes: fit.slopes,
-        confidence: fit.confidence,
-        furtherRegressors: fit.regressors.slice(2),
-      },
-      panelVersion.id,
-    );
+  protected async changeSpecification(reply: FitReply): Promise<void> {
+    const chosen = await this.#ask(specificationOf(reply), reply.panelVersion.id);
     if (chosen === undefined) return;
     const fitId = await this.starter.start({
-      peerGroupId: fit.peerGroupId,
-      slopes: chosen.slopes,
-      confidence: chosen.confidence,
+      ...chosen,
+      peerGroupId: reply.fit.peerGroupId,
       furtherRegressors: [...chosen.furtherRegressors],
     });
     if (fitId !== null) await this.#router.navigate(['/fit', fitId]);
@@ -145,4 +137,12 @@ export class FitPage {
       return undefined;
     }
   }
+}
+
+/** A fit's specification as its form starts with it. */
+function specificationOf({ fit, result }: FitReply): Specification {
+  const { effects, form, lag, slopes, confidence, regressors } = fit;
+  const seed = result?.specification.seed ?? undefined;
+  const furtherRegressors = regressors.slice(2);
+  return { effects, form, lag, slopes, seed, confidence, furtherRegressors };
 }

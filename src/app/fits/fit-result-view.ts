@@ -11,7 +11,7 @@ import { Figure } from '../ui/figure';
 import { NumberFormat } from '../ui/number-format';
 import { RemarkList } from '../ui/remark-list';
 import { CompaniesTable } from './companies-table';
-import { covarianceName } from './covariance-words';
+import { covarianceName } from '../ui/covariance-words';
 import { driftFinding, poolabilityText, warningRemarks } from './evidence-words';
 import { placesText, regressorWord, regressorsText, testText } from './fit-words';
 import { GoodnessList } from './goodness-list';

@@ -1,5 +1,6 @@
 import type { FitResult, FitSummary } from '@contract';
 import type { NumberFormat } from '../ui/number-format';
+import { covarianceShort } from '../ui/covariance-words';
 import { confidenceText, listed } from '../ui/phrases';
 
 /** Regressors in the reader's words: a fit's first two are always capex and book equity. */
@@ -36,12 +37,15 @@ export function testText(
 
 /** What of a specification is not the default, and always slopes and confidence: `CR2 · 95 % · with employees`. */
 export function specificationText(
-  fit: Pick<FitSummary, 'slopes' | 'confidence' | 'regressors'>,
+  fit: Pick<FitSummary, 'effects' | 'form' | 'lag' | 'slopes' | 'confidence' | 'regressors'>,
 ): string {
   const further = fit.regressors.slice(2);
   return [
-    fit.slopes === 'classical' ? 'classical' : fit.slopes.toUpperCase(),
+    covarianceShort(fit.slopes),
     confidenceText(fit.confidence),
+    ...(fit.effects === 'company' ? [] : ['year effects']),
+    ...(fit.form === 'levels' ? [] : ['logs']),
+    ...(fit.lag === 0 ? [] : ['year before']),
     ...(further.length === 0 ? [] : [`with ${listed(further)}`]),
   ].join(' · ');
 }

@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, output } f
 import type { FitResult } from '@contract';
 import { Figure } from '../ui/figure';
 import { NumberFormat } from '../ui/number-format';
-import { covarianceName } from './covariance-words';
+import { covarianceName } from '../ui/covariance-words';
 import { pText, regressorWord } from './fit-words';
 import { confidenceText } from '../ui/phrases';
 

@@ -16,17 +16,11 @@ import {
 import { RouterLink } from '@angular/router';
 import type { LineageReply } from '@contract';
 import { fullText, unitText } from '@figures';
+import { covarianceName } from '../covariance-words';
 import type { ShownProblem } from '../problem';
 import { ProblemNotice } from '../problem-notice';
 
 const rowsAtFirst = 60;
-
-const slopeWords: Readonly<Record<LineageReply['fit']['slopes'], string>> = {
-  cr2: 'clustered by company, bias-reduced (CR2), Satterthwaite degrees of freedom',
-  cr1: 'clustered by company (CR1)',
-  cr0: 'clustered by company (CR0)',
-  classical: 'classical',
-};
 
 /**
  * How one figure came about: its exact value, the formula in words, what went in, and the file and cells behind it.
@@ -74,7 +68,7 @@ export class LineageDrawer {
   );
   protected readonly slopes = computed(() => {
     const lineage = this.lineage();
-    return lineage === null ? '' : slopeWords[lineage.fit.slopes];
+    return lineage === null ? '' : covarianceName(lineage.fit.slopes);
   });
   protected readonly confidence = computed(() =>
     Number(((this.lineage()?.confidence ?? 0) * 100).toPrecision(6)),
