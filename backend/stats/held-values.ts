@@ -9,11 +9,11 @@ export function heldValues(
   company: string,
   year: number,
 ): readonly number[] | null {
-  const row = data.company.findIndex(
-    (code, index) => data.year[index] === year && data.companies[code] === company,
-  );
-  if (row === -1) return null;
-  const values = data.regressors.map((column) => column.values[row]);
-  const isReadable = values.every((value) => (form === 'log' ? value > 0 : !Number.isNaN(value)));
-  return isReadable ? values : null;
+  for (let row = 0; row < data.year.length; row += 1) {
+    if (data.year[row] !== year || data.companies[data.company[row]] !== company) continue;
+    const values = data.regressors.map((column) => column.values[row]);
+    const isReadable = values.every((value) => (form === 'log' ? value > 0 : !Number.isNaN(value)));
+    return isReadable ? values : null;
+  }
+  return null;
 }

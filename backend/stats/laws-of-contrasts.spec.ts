@@ -57,7 +57,9 @@ describe('the laws of contrasts', () => {
           ),
           'K1',
         );
-        const degrees = plain && contrastDegreesOfFreedom(plain.slopeDegreesOfFreedom, [1, -1]);
+        const degrees =
+          plain?.slopeDegreesOfFreedom &&
+          contrastDegreesOfFreedom(plain.slopeDegreesOfFreedom, [1, -1]);
         expectDigits(degrees, turned.slopes[0].degreesOfFreedom ?? 0, 7);
       }),
       runs,

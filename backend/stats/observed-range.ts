@@ -10,20 +10,30 @@ export function observedRanges(
 ): Pick<PredictionBasis, 'ownRange' | 'peerRange'> {
   const from = sample.starts[own];
   const to = sample.starts[own + 1];
+  const everything = sample.year.length;
   return {
-    ownRange: sample.levels.regressors.map((column) => rangeOf(column.subarray(from, to))),
+    ownRange: sample.levels.regressors.map((column) => rangeOf(column, [[from, to]])),
     peerRange: sample.levels.regressors.map((column) =>
-      rangeOf(column.filter((_, row) => row < from || row >= to)),
+      rangeOf(column, [
+        [0, from],
+        [to, everything],
+      ]),
     ),
   };
 }
 
-function rangeOf(values: Float64Array): ObservedRange {
+/** Bounds over stretches of rows, each from its first row to before its last. */
+function rangeOf(
+  values: Float64Array,
+  stretches: readonly (readonly [number, number])[],
+): ObservedRange {
   let low = Infinity;
   let high = -Infinity;
-  for (const value of values) {
-    low = Math.min(low, value);
-    high = Math.max(high, value);
+  for (const [from, to] of stretches) {
+    for (let row = from; row < to; row += 1) {
+      if (values[row] < low) low = values[row];
+      if (values[row] > high) high = values[row];
+    }
   }
   return { low, high };
 }
@@ -56,7 +66,7 @@ export function peerLeverage(fit: WithinFit, basis: readonly Float64Array[], own
     if (row >= from && row < to) continue;
     let leverage = 0;
     for (const column of basis) leverage += column[row] * column[row];
-    largest = Math.max(largest, leverage);
+    if (leverage > largest) largest = leverage;
   }
   return largest;
 }

@@ -5,19 +5,17 @@ import type { WithinFit } from './regression/within-fit';
 export function peerYearsOf(fit: WithinFit, own: number): PeerYear[] {
   const { sample, residuals, relativeIntercepts } = fit;
   const lastYear = sample.year[sample.starts[own + 1] - 1];
-  return sample.companies.flatMap((company, index): PeerYear[] => {
-    if (index === own) return [];
-    const from = sample.starts[index];
-    const place = sample.year.subarray(from, sample.starts[index + 1]).indexOf(lastYear);
-    if (place === -1) return [];
-    const row = from + place;
-    return [
-      {
-        company,
-        interceptGap: relativeIntercepts[own] - relativeIntercepts[index],
-        regressors: sample.levels.regressors.map((column) => column[row]),
-        residual: residuals[row],
-      },
-    ];
+  const peers: PeerYear[] = [];
+  sample.companies.forEach((company, index) => {
+    let row = sample.starts[index + 1] - 1;
+    while (row > sample.starts[index] && sample.year[row] > lastYear) row -= 1;
+    if (index === own || sample.year[row] !== lastYear) return;
+    peers.push({
+      company,
+      interceptGap: relativeIntercepts[own] - relativeIntercepts[index],
+      regressors: sample.levels.regressors.map((column) => column[row]),
+      residual: residuals[row],
+    });
   });
+  return peers;
 }

@@ -7,11 +7,11 @@ import { lambdasOf, residualForm, varianceForm } from './intervals/contrast-form
 import type { IntervalContext } from './intervals/interval-context';
 import { contrastIntervalReason } from './intervals/interval-reasons';
 import { toRows } from './linear-algebra/square-matrix';
-import type { FitParts } from './open-fit';
+import type { FitParts } from './fit-parts';
 import { ownErrorsOf } from './own-errors';
 import { peerYearsOf } from './peer-years';
 import { twoSidedQuantile, yearEffectOrder } from './prediction';
-import { isPerfectFit, perfectFitReason } from './regression/goodness';
+import { perfectFitReason } from './regression/goodness';
 import type { WithinFit } from './regression/within-fit';
 import { yearEffectChoices } from './year-effect-choices';
 
@@ -45,9 +45,13 @@ export function predictionBasisOf(input: PredictionInput): PredictionBasis {
     confidence: context.confidence,
     slopeCovariance: covariance === null ? null : toRows(covariance, fit.slopes.length),
     slopeDegreesOfFreedom: inference.degrees,
-    slopeIntervalReason: isPerfectFit(fit) ? perfectFitReason : inference.covarianceReason,
+    slopeIntervalReason:
+      context.reason === perfectFitReason ? perfectFitReason : inference.covarianceReason,
     last,
-    held: heldValues({ data, form: specification.form }, company, last.year),
+    held:
+      specification.lag === 0
+        ? last.regressors
+        : heldValues({ data, form: specification.form }, company, last.year),
     ownErrors: ownErrorsOf(context, own),
     peers: peerYearsOf(fit, own),
     residualVariance: fit.residualSquares / fit.residualDegreesOfFreedom,
