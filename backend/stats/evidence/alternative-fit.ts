@@ -1,6 +1,6 @@
 import type { FitResult, Specification } from '../fit-result';
-import { intervalContext } from '../intervals/interval-context';
-import type { OpenFit } from '../open-fit';
+import { type IntervalContext, intervalContext } from '../intervals/interval-context';
+import type { OpenFit } from '../fit-parts';
 import { selectSample } from '../panel/select-sample';
 import type { PanelSample } from '../panel/panel-sample';
 import { type WithinFit, withinFit } from '../regression/within-fit';
@@ -21,7 +21,10 @@ export interface AlternativeFigures extends Pick<
 }
 
 /** Operations beyond which another model takes longer than a reader waits for a side glance. */
-const mostWork = 1e10;
+const mostWork = 5e8;
+
+/** The same of its rank set, whose steps are cheaper each. */
+const mostRankWork = 1e9;
 
 export function isModelOf(specification: Specification, model: AlternativeModel): boolean {
   return (
@@ -62,12 +65,12 @@ function sampleFor(open: OpenFit, { form, lag }: AlternativeModel): PanelSample 
   return isSame ? open.sample : selectSample(open.data, open.own, open.members, { form, lag });
 }
 
-/** The calibrated interval's forms cost most: n·B·(2P + 1)², B about 0.4·T at most. */
+/** Factor and company products cost n·P² + N·P³. */
 function tooLargeReason(sample: PanelSample, { effects }: AlternativeModel): string | undefined {
   if (effects === 'company') return undefined;
   const years = sample.years.length;
   const columns = years - 1 + sample.regressors.length;
-  const work = sample.year.length * Math.max(3, 0.4 * years) * (2 * columns + 1) ** 2;
+  const work = (sample.year.length + sample.companies.length * columns) * columns ** 2;
   if (work <= mostWork) return undefined;
   return `Year effects take ${years - 1} more columns beside ${sample.year.length} rows: choose them in the specification to fit this model.`;
 }
@@ -86,6 +89,16 @@ function standingIn(
     return { standing: null, standingReason };
   }
   const context = intervalContext(fit, specification.confidence);
-  const pairs = pairComparisons(context, index);
-  return { standing: standingOf(context, { own: index, pairs, form: model.form }) };
+  const rankReason = noRankReason(context);
+  const pairs = rankReason === undefined ? pairComparisons(context, index) : [];
+  const standing = standingOf(context, { own: index, pairs, form: model.form });
+  if (rankReason === undefined) return { standing };
+  return { standing: { ...standing, rankSet: null, rankReason } };
+}
+
+/** The forms behind every pair cost n·B·(2P + 1)². */
+function noRankReason({ fit, rankCosines }: IntervalContext): string | undefined {
+  const rows = fit.sample.year.length;
+  if (rows * rankCosines * (2 * fit.columns.length + 1) ** 2 <= mostRankWork) return undefined;
+  return `${rows} rows and ${fit.columns.length} columns are too many to compare every pair beside the fit.`;
 }

@@ -9,6 +9,7 @@ import {
   plainSpecification,
   sha256,
 } from '../testing/golden-panels';
+import { randomNumbers } from '../testing/random-panels';
 import { alternativesOf } from './alternatives';
 import type { Alternative, AlternativeCode } from './evidence';
 
@@ -219,5 +220,23 @@ describe('alternatives', () => {
     expect(found.get('year-effects')?.reason).toBe(
       'Year effects take 499 more columns beside 4000 rows: choose them in the specification to fit this model.',
     );
+  });
+
+  it('leave the rank set out where comparing every pair takes too long, and say so', () => {
+    const random = randomNumbers(5);
+    const rows = Array.from({ length: 6000 }, (_, index) => ({
+      company: `K${index % 100}`,
+      year: 1 + Math.floor(index / 100),
+      outcome: random(),
+      regressors: [random()],
+    }));
+    const found = alternatives(panelOf(rows, { outcome: 'y', regressors: ['x'] }), 'K0');
+    const years = found.get('year-effects');
+    expect(years?.standing?.low).not.toBeNull();
+    expect(years?.rankSet).toBeNull();
+    expect(years?.rankReason).toBe(
+      '6000 rows and 60 columns are too many to compare every pair beside the fit.',
+    );
+    expect(found.get('fixed-effects')?.rankSet).not.toBeNull();
   });
 });

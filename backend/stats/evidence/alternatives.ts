@@ -1,5 +1,5 @@
 import type { FitResult, IntervalEstimate, Specification } from '../fit-result';
-import type { OpenFit } from '../open-fit';
+import type { OpenFit } from '../fit-parts';
 import { StatsError } from '../stats-error';
 import { type AlternativeModel, alternativeFit, isModelOf } from './alternative-fit';
 import type { Alternative, AlternativeCode, EstimatorSlope, EstimatorSummary } from './evidence';
@@ -84,7 +84,8 @@ function fixedEffects(
       slopesNote: open.specification.slopes === 'wild' && !isThisFit ? bootstrapNote : undefined,
       standing: standing === null ? null : inItsUnit(standing),
       standingReason: standing === null ? (standingReason ?? noOwnReason) : undefined,
-      rankSet: standing === null ? null : standing.rankSet,
+      rankSet: standing?.rankSet ?? null,
+      rankReason: standing?.rankReason,
     };
   } catch (error) {
     if (!(error instanceof StatsError)) throw error;

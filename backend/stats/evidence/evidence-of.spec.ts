@@ -1,5 +1,5 @@
 import { openFit, type PanelColumns, type Specification } from '../index';
-import type { OpenFit } from '../open-fit';
+import type { OpenFit } from '../fit-parts';
 import { goldenJson, goldenPanel, plainSpecification, sha256 } from '../testing/golden-panels';
 import { evidenceOf } from './evidence-of';
 

@@ -1,7 +1,7 @@
 import { engineVersion } from '../engine-version';
 import { estimatorSummaries } from '../estimators/estimator-summaries';
 import { residualSummary } from '../influence/residual-summary';
-import type { OpenFit } from '../open-fit';
+import type { OpenFit } from '../fit-parts';
 import { covarianceSummaries } from '../slopes/covariance-summaries';
 import { testSummary } from '../tests/test-summary';
 import { alternativesOf } from './alternatives';

@@ -140,6 +140,8 @@ export interface Alternative {
   readonly standingUnit: 'level' | 'percent';
   readonly standingReason?: string;
   readonly rankSet: readonly [number, number] | null;
+  /** Why there is no rank set, where there is a standing. */
+  readonly rankReason?: string;
   readonly reason?: string;
 }
 

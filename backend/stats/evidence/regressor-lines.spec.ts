@@ -1,5 +1,5 @@
 import { openFit, type PanelColumns } from '../index';
-import type { OpenFit } from '../open-fit';
+import type { OpenFit } from '../fit-parts';
 import { expectDigits } from '../testing/expect-digits';
 import {
   goldenJson,

@@ -1,6 +1,6 @@
 import * as fc from 'fast-check';
 import { openFit, type Specification } from '../index';
-import type { OpenFit } from '../open-fit';
+import type { OpenFit } from '../fit-parts';
 import { expectDigits } from '../testing/expect-digits';
 import {
   fitOf,

@@ -5,7 +5,7 @@ import type { Evidence, WithoutYear } from './evidence';
 import { withoutYearSample } from './without-year-sample';
 
 /** Rows × years × squared columns beyond which refitting without every year takes longer than a reader waits. */
-const mostWork = 4e8;
+const mostWork = 2e8;
 
 /**
  * Slopes and the own company's standing without each year in turn, a refit each: the rows of the year leave the sample,
