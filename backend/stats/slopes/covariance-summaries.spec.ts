@@ -1,5 +1,6 @@
 import type { Specification } from '../fit-result';
-import { openFit, type OpenFit } from '../open-fit';
+import type { OpenFit } from '../fit-parts';
+import { openFit } from '../open-fit';
 import { goldenPanel, panelOf, plainSpecification, sha256 } from '../testing/golden-panels';
 import { randomNumbers } from '../testing/random-panels';
 import { covarianceNames } from './covariance-names';

@@ -1,4 +1,5 @@
-import { openFit, type OpenFit } from '../open-fit';
+import type { OpenFit } from '../fit-parts';
+import { openFit } from '../open-fit';
 import type { SlopeCovarianceName, SlopeEstimate, Specification } from '../fit-result';
 import { expectDigits } from '../testing/expect-digits';
 import { goldenJson, goldenPanel, plainSpecification, sha256 } from '../testing/golden-panels';

@@ -1,6 +1,7 @@
 import type { PanelColumns, SlopeEstimate, Specification } from '../../fit-result';
 import { leastSquares } from '../../linear-algebra/least-squares';
-import { openFit, type OpenFit } from '../../open-fit';
+import type { OpenFit } from '../../fit-parts';
+import { openFit } from '../../open-fit';
 import type { WithinFit } from '../../regression/within-fit';
 import { expectDigits } from '../../testing/expect-digits';
 import {

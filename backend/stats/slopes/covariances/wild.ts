@@ -8,8 +8,9 @@ import {
   isAccepted,
   type Stretch,
 } from '../bootstrap/accepted-values';
+import { blockedStatistics } from '../bootstrap/blocked-statistics';
 import { drawStatistics, slopeScores } from '../bootstrap/draw-statistics';
-import { type SignDraws, signDraws } from '../bootstrap/sign-draws';
+import { mostEnumerated, type SignDraws, signDraws } from '../bootstrap/sign-draws';
 import { type BootstrapMethod, oneCompanyReason, type SlopeNote } from '../covariance-method';
 import { judgedSlopes } from '../slope-estimates';
 import { cr0 } from './cr0';
@@ -37,7 +38,8 @@ export const wild: BootstrapMethod = {
       if (!judged[k]) return withoutDraws(name, estimate, oneCompanyReason);
       const standardError = Math.sqrt(matrix[k * size + k]);
       const draws = signDraws(products.length, options.seed);
-      const statistics = drawStatistics(slopeScores(ground, k, standardError), draws, (share) => {
+      const statisticsOf = products.length > mostEnumerated ? blockedStatistics : drawStatistics;
+      const statistics = statisticsOf(slopeScores(ground, k, standardError), draws, (share) => {
         onProgress((k + share) / size);
       });
       const slope = { name, estimate, standardError };
