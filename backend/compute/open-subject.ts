@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto';
 import { type FitOptions, openFit, StatsError } from '../stats';
-import type { OpenFit } from '../stats/open-fit';
+import type { OpenFit } from '../stats/fit-parts';
 import type { FitSubject, Refusal } from './messages';
 
 /** @throws {StatsError} for input the engine refuses. */

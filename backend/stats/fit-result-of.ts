@@ -1,7 +1,7 @@
 import { engineVersion } from './engine-version';
 import type { FitResult, Sample, Smearing } from './fit-result';
 import { toRows } from './linear-algebra/square-matrix';
-import type { FitParts } from './open-fit';
+import type { FitParts } from './fit-parts';
 import { ownYearsOf } from './own-years';
 import type { PanelSample } from './panel/panel-sample';
 import { predictionBasisOf } from './prediction-basis-of';

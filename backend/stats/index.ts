@@ -1,7 +1,12 @@
 export { canonicalFitText } from './canonical-fit-text';
 export { tQuantile } from './distributions/t-distribution';
 export { engineVersion } from './engine-version';
+export type * from './evidence/evidence';
+export { evidenceOf } from './evidence/evidence-of';
 export { fitPanel } from './fit-panel';
-export { type FitOptions, type FitRequest, openFit } from './open-fit';
+export type { FitRequest, OpenFit } from './fit-parts';
+export { type FitOptions, openFit } from './open-fit';
 export type * from './fit-result';
+export { bootstrapSummary } from './slopes/covariance-summaries';
+export { covarianceNames } from './slopes/covariance-names';
 export { type RowPlace, StatsError, type StatsErrorCode, type StatsErrorData } from './stats-error';

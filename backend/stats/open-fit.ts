@@ -1,26 +1,15 @@
 import { canonicalFitText } from './canonical-fit-text';
 import { checkSpecification } from './check-specification';
-import type { FitResult, PanelColumns, Specification } from './fit-result';
+import type { FitParts, FitRequest, OpenFit } from './fit-parts';
 import { fitResultOf } from './fit-result-of';
-import { type IntervalContext, intervalContext } from './intervals/interval-context';
-import type { PanelSample } from './panel/panel-sample';
+import { intervalContext } from './intervals/interval-context';
 import { selectSample } from './panel/select-sample';
-import { type PooledFit, pooledFit } from './regression/pooled-fit';
-import { type WithinFit, withinFit } from './regression/within-fit';
+import { pooledFit } from './regression/pooled-fit';
+import { withinFit } from './regression/within-fit';
 import { companyProducts } from './slopes/company-products';
 import type { SlopeGround } from './slopes/slope-ground';
-import { type SlopeInference, slopeInference } from './slopes/slope-inference';
+import { slopeInference } from './slopes/slope-inference';
 import { withoutEachCompany } from './slopes/without-company';
-
-/** What is to be fitted. */
-export interface FitRequest {
-  readonly data: PanelColumns;
-  readonly specification: Specification;
-  /** The own company; null for a fit without a standing. */
-  readonly own: string | null;
-  /** Names of the peer group, the own company is added; undefined means every company of the panel. */
-  readonly members: readonly string[] | undefined;
-}
 
 /** What a fit needs from its surroundings. */
 export interface FitOptions {
@@ -28,24 +17,6 @@ export interface FitOptions {
   readonly sha256: (text: string) => string;
   /** Told the share done, 0 to 1, at each step. */
   readonly onProgress?: (share: number) => void;
-}
-
-/** A fit with everything it was made from: its result and its evidence are read off it. */
-export interface OpenFit extends FitParts {
-  readonly result: FitResult;
-}
-
-export interface FitParts extends FitRequest {
-  readonly hash: string;
-  readonly sample: PanelSample;
-  readonly fit: WithinFit;
-  readonly pooled: PooledFit;
-  readonly ground: SlopeGround;
-  readonly context: IntervalContext;
-  /** Index of the own company among the sample's; −1 without one of two rows or more. */
-  readonly ownIndex: number;
-  readonly inference: SlopeInference;
-  readonly withoutCompany: FitResult['withoutCompany'];
 }
 
 /**

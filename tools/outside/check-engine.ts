@@ -2,7 +2,7 @@ import { createReadStream } from 'node:fs';
 import { readTable } from '../../backend/compute/parsing/read-table';
 import { toPanelColumns } from '../../backend/compute/parsing/to-panel-columns';
 import { openFit, type PanelColumns, type Specification } from '../../backend/stats';
-import type { OpenFit } from '../../backend/stats/open-fit';
+import type { OpenFit } from '../../backend/stats/fit-parts';
 import { sha256 } from '../../backend/stats/testing/golden-panels';
 import { engineFigures } from '../../backend/stats/testing/outside/engine-figures';
 import {

@@ -1,5 +1,5 @@
 import type { EstimatorSummary } from '../evidence/evidence';
-import type { OpenFit } from '../open-fit';
+import type { OpenFit } from '../fit-parts';
 
 /** A way to estimate the slopes: one file an estimator, one line in the table. */
 export interface Estimator {

@@ -1,4 +1,4 @@
-import type { OpenFit } from '../open-fit';
+import type { OpenFit } from '../fit-parts';
 
 /** A test of §5 of the evidence: one file a test, one line in the table. */
 export interface EvidenceTest {

@@ -1,4 +1,5 @@
-import { type FitRequest, openFit } from '../open-fit';
+import type { FitRequest } from '../fit-parts';
+import { openFit } from '../open-fit';
 import { expectDigits } from '../testing/expect-digits';
 import { goldenJson, goldenPanel, plainSpecification, sha256 } from '../testing/golden-panels';
 import type { EvidenceTest, TestGround, TestOutcome } from './evidence-test';

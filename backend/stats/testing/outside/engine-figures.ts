@@ -1,4 +1,4 @@
-import type { OpenFit } from '../../open-fit';
+import type { OpenFit } from '../../fit-parts';
 import { evidenceFigures } from './evidence-figures';
 import type { FigureValues } from './figure-values';
 import { predictionFigures } from './prediction-figures';

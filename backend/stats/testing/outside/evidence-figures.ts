@@ -3,7 +3,7 @@ import type { EstimatorSummary } from '../../evidence/evidence';
 import { withoutEachYear } from '../../evidence/without-year';
 import type { SlopeCovarianceName, SlopeEstimate } from '../../fit-result';
 import { residualSummary } from '../../influence/residual-summary';
-import type { OpenFit } from '../../open-fit';
+import type { OpenFit } from '../../fit-parts';
 import { covarianceTable } from '../../slopes/covariance-table';
 import { slopeInference } from '../../slopes/slope-inference';
 import { testTable } from '../../tests/test-table';

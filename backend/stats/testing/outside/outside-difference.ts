@@ -2,8 +2,8 @@
 export interface OutsideFigure {
   readonly call: string;
   readonly value: readonly (number | null)[];
-  /** Beside a number's own size, where that says little: an interval's end is held against the standard error. */
-  readonly scale?: readonly number[];
+  /** Beside a number's own size, where that says little: an interval's end is held against the standard error. One for all or one each. */
+  readonly scale?: number | readonly number[];
   /** Why the outside program computes none. */
   readonly refused?: string;
 }
@@ -23,7 +23,8 @@ export function outsideDifference(
       return expected === actual ? largest : Infinity;
     }
     if (expected === actual) return largest;
-    const apart = Math.abs(actual - expected) / Math.max(Math.abs(expected), scale?.[index] ?? 0);
+    const size = typeof scale === 'number' ? scale : (scale?.[index] ?? 0);
+    const apart = Math.abs(actual - expected) / Math.max(Math.abs(expected), size);
     return Number.isNaN(apart) ? Infinity : Math.max(largest, apart);
   }, 0);
 }
