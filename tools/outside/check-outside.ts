@@ -2,25 +2,12 @@ import { readFile, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { toleranceOf } from '../../backend/stats/testing/outside/tolerances';
 import { type OutsideCase, outsideCases } from './cases';
+import type { CheckSurroundings } from './check-surroundings';
 import { checkCase, type FigureCheck, openCase, type OutsideAnswer } from './check-engine';
 import { differenceTable, type DifferenceRow } from './difference-table';
 import { freezeOutside } from './freeze-outside';
 import { furthestBy } from './furthest-by';
 import { replicatePacks } from './replicate-packs';
-
-/** What the check needs from its surroundings. */
-export interface CheckSurroundings {
-  /** The project's root. */
-  readonly root: URL;
-  /** An empty folder for requests, answers and packs. */
-  readonly folder: string;
-  readonly runR: RunR;
-  readonly say: (text: string) => void;
-  /** Whether the outside numbers are to be written for the specs. */
-  readonly freeze: boolean;
-}
-
-export type RunR = (args: readonly string[], options?: { readonly cwd: string }) => Promise<string>;
 
 /** R processes at once: each loads its packages in a second or two, so more would not pay. */
 const processes = 2;

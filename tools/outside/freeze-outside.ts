@@ -7,7 +7,6 @@ const frozenCases: readonly string[] = [
   'grunfeld10_unbalanced: company',
   'grunfeld10_unbalanced: company, year',
   'grunfeld10_unbalanced: lag',
-  'grunfeld11_value_on_inv_capital: company',
   'grunfeld11_value_on_inv_capital: log',
   'grunfeld11_value_on_inv_capital: log, year, lag',
   'usairlines: company, year',

@@ -25,12 +25,13 @@ exact_json <- function(values) {
   structure(paste0("[", paste(digits, collapse = ","), "]"), class = "json")
 }
 
-# What is printed and frozen of one figure: what made it, its numbers, and the size that differences are held against.
+# What is printed and frozen of one figure: what made it, its numbers, and the size that differences are held against,
+# one for all numbers or one each.
 figure <- function(call, value, scale = 0) {
   scale <- rep_len(as.numeric(scale), length(value))
   scale[!is.finite(scale)] <- 0
   result <- list(call = call, value = exact_json(value))
-  if (any(scale > 0)) result$scale <- exact_json(scale)
+  if (any(scale > 0)) result$scale <- if (length(unique(scale)) == 1) scale[1] else exact_json(scale)
   result
 }
 

@@ -6,7 +6,7 @@ import type { Specification } from '../../backend/stats';
 import { covarianceTable } from '../../backend/stats/slopes/covariance-table';
 import { type OutsideCase, outsideCases } from './cases';
 import { openCase, openData } from './check-engine';
-import type { CheckSurroundings } from './check-outside';
+import type { CheckSurroundings } from './check-surroundings';
 import type { DifferenceRow } from './difference-table';
 import { furthestBy } from './furthest-by';
 

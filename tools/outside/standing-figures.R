@@ -46,9 +46,14 @@ without <- function(panel, keep, case) {
   rest <- keep_rows(panel, keep)
   counts <- table(rest$company)
   rest <- keep_rows(rest, counts[rest$company] > 1)
-  fit <- dummy_fit(rest, case$effects)
+  design <- full_design(rest, case$effects)
+  beta <- qr.coef(qr(design, LAPACK = TRUE), rest$y)
+  intercepts <- setNames(beta[seq_along(rest$companies)], rest$companies)
   has_own <- case$own %in% rest$companies && length(rest$companies) > 1
-  list(slopes = fit$slopes, standing = if (has_own) sum(standing_weights(fit, case$own) * fit$beta) else NA)
+  list(
+    slopes = beta[ncol(design) - ncol(rest$x) + seq_len(ncol(rest$x))],
+    standing = if (has_own) intercepts[[case$own]] - mean(intercepts[names(intercepts) != case$own]) else NA
+  )
 }
 
 gap_path <- function(fit, own) {

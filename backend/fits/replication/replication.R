@@ -71,12 +71,16 @@ year_columns <- function(panel) {
   contr.sum(count)[panel$position, , drop = FALSE]
 }
 
-# Least squares on one dummy a company, year columns where asked, and the regressors, by a Householder QR decomposition.
+# One dummy a company and no constant, year columns where asked, and the regressors.
+full_design <- function(panel, effects, x = panel$x) {
+  dummies <- outer(panel$company, panel$companies, "==") + 0
+  cbind(dummies, if (effects == "company,year") year_columns(panel), x)
+}
+
+# Least squares on the full design by a Householder QR decomposition.
 dummy_fit <- function(panel, effects, x = panel$x) {
   companies <- panel$companies
-  dummies <- outer(panel$company, companies, "==") + 0
-  years <- if (effects == "company,year") year_columns(panel) else matrix(0, length(panel$y), 0)
-  design <- cbind(dummies, years, x)
+  design <- full_design(panel, effects, x)
   decomposition <- qr(design, LAPACK = TRUE)
   q <- qr.Q(decomposition)
   r <- qr.R(decomposition)
@@ -88,12 +92,13 @@ dummy_fit <- function(panel, effects, x = panel$x) {
   correction[decomposition$pivot] <- backsolve(r, crossprod(q, residuals))
   beta <- beta + correction
   residuals <- drop(panel$y - design %*% beta)
-  slopes <- length(companies) + ncol(years) + seq_len(ncol(x))
+  years <- length(companies) + seq_len(ncol(design) - length(companies) - ncol(x))
+  slopes <- ncol(design) - ncol(x) + seq_len(ncol(x))
   list(
     panel = panel, q = q, r = r, pivot = decomposition$pivot, beta = beta, residuals = residuals,
     intercepts = setNames(beta[seq_along(companies)], companies), slopes = beta[slopes], slope_places = slopes,
-    year_places = length(companies) + seq_len(ncol(years)),
-    year_effects = if (ncol(years) > 0) drop(contr.sum(length(panel$years)) %*% beta[length(companies) + seq_len(ncol(years))]),
+    year_places = years,
+    year_effects = if (length(years) > 0) drop(contr.sum(length(panel$years)) %*% beta[years]),
     degrees_of_freedom = nrow(design) - ncol(design)
   )
 }
