@@ -19,7 +19,10 @@ export function benchPanel(companies: number, years: number): PanelColumns {
     outcome[row] = 50 * (company[row] % 11) + 2 * capex[row] + 0.5 * equity[row] + error;
   }
   return {
-    companies: Array.from({ length: companies }, (_, index) => `C${String(index).padStart(6, '0')}`),
+    companies: Array.from(
+      { length: companies },
+      (_, index) => `C${String(index).padStart(6, '0')}`,
+    ),
     company,
     year,
     outcome: { name: 'market value', values: outcome },

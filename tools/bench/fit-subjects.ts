@@ -1,5 +1,13 @@
 import { createHash } from 'node:crypto';
-import { type FitResult, openFit, type PanelColumns, type Specification } from '../../backend/stats';
+import {
+  type Evidence,
+  evidenceOf,
+  type FitResult,
+  type OpenFit,
+  openFit,
+  type PanelColumns,
+  type Specification,
+} from '../../backend/stats';
 import { intervalContext } from '../../backend/stats/intervals/interval-context';
 import { selectSample } from '../../backend/stats/panel/select-sample';
 import { withinFit } from '../../backend/stats/regression/within-fit';
@@ -42,9 +50,18 @@ export function estimates(data: PanelColumns): unknown {
 }
 
 /** All that a fit shows: every interval, rank set, goodness, leave-one-out, drift, the basis of scenarios, the hash. */
-export function wholeFit(data: PanelColumns, specification: Specification = plain): FitResult {
+export function wholeFit(data: PanelColumns): FitResult {
+  return opened(data).result;
+}
+
+/** A whole fit and its evidence, without the bootstrap by draws. */
+export function evidence(data: PanelColumns): Evidence {
+  return evidenceOf(opened(data));
+}
+
+function opened(data: PanelColumns): OpenFit {
   return openFit(
-    { data, specification, own, members: undefined },
+    { data, specification: plain, own, members: undefined },
     { sha256: (text) => createHash('sha256').update(text).digest('hex') },
-  ).result;
+  );
 }
