@@ -117,10 +117,10 @@ export function intervalRowsLayout(
   return {
     width,
     upright: isFolded
-      ? rows.map((_, place) => ({
-          from: top + place * rowHeight + 38,
-          to: top + place * rowHeight + 58,
-        }))
+      ? rows.flatMap(({ figure }, place) => {
+          const rowTop = top + place * rowHeight;
+          return figure === null ? [] : [{ from: rowTop + 38, to: rowTop + 58 }];
+        })
       : [{ from: top - 4, to: plot.bottom }],
     height: plot.bottom + 6,
     plot,

@@ -7,7 +7,14 @@ import {
   type Stretch,
   hasBounds,
 } from './figure-types';
-import { columnHeads, heightOfNamedRows, nameSize, rowColumns } from './row-columns';
+import {
+  columnHeads,
+  heightOfNamedRows,
+  nameSize,
+  rowColumns,
+  ticksBesideHeads,
+  ticksFor,
+} from './row-columns';
 import { clippedWords, wordsWidth } from './text-width';
 import { placedTicks, snugScale } from './value-axis';
 
@@ -105,7 +112,7 @@ export function leaveOneOutLayout(
     0.04,
   );
   const [low, high] = scale.domain();
-  const count = Math.max(2, Math.round((plot.right - plot.left) / 110));
+  const heads = columnHeads(columns, places, 16);
   const left = data.leftOut.length - drawn.length;
   const moreY = plot.bottom + 40;
   const foot = left > 0 ? moreY + 8 : plot.bottom + 26;
@@ -115,14 +122,14 @@ export function leaveOneOutLayout(
     plot,
     rowHeight,
     nameX: places.nameX,
-    ticks: placedTicks(scale, count, formats.tick),
+    ticks: ticksBesideHeads(placedTicks(scale, ticksFor(plot), formats.tick), heads),
     zeroX: low <= 0 && high >= 0 ? scale(0) : null,
     full: {
       x: scale(full.estimate),
       band: hasBounds(full) ? { from: scale(full.low), to: scale(full.high) } : null,
       label: fullLabel(data, scale(full.estimate), plot.bottom + 18, { width, formats }),
     },
-    heads: columnHeads(columns, places, 16),
+    heads,
     valueX,
     changeX,
     readoutY: changeX === null ? foot + 12 : null,

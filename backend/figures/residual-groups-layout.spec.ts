@@ -45,7 +45,7 @@ describe('residual groups layout', () => {
     const perUnit = (rows[1].x - rows[0].x) / 42;
     expect(rows[1].spread!.to).toBeCloseTo(rows[1].x + 60 * perUnit, 6);
     expect(rows[1].largestX).toBeCloseTo(zeroX + 130 * perUnit, 6);
-    expect(rows[1].mean).toBe('30');
+    expect(rows[1].figures).toEqual(['30', '60', '130']);
   });
 
   it('draws the 30 widest of 120 with the own company among them, and no more than fits a page', () => {
@@ -67,10 +67,10 @@ describe('residual groups layout', () => {
   it('keeps columns inside the width and gives them up for the line under the chart', () => {
     const wide = residualGroupsLayout(companies, 640, formats);
     expect(wide.heads.map(({ text }) => text)).toEqual(['st. dev.', 'largest']);
-    expect(wide.largestX).toBeLessThanOrEqual(640);
+    expect(wide.columnX.at(-1)).toBeLessThanOrEqual(640);
     expect(wide.readoutY).toBeNull();
     const narrow = residualGroupsLayout(companies, 300, formats);
-    expect(narrow.largestX).toBeNull();
+    expect(narrow.columnX.at(-1)).toBeNull();
     expect(narrow.readoutY).toBeLessThan(narrow.height);
   });
 

@@ -1,6 +1,13 @@
 import { ascending, descending } from 'd3';
 import type { FigureFormats, PlacedText, PlacedTick, Plot, Stretch } from './figure-types';
-import { columnHeads, heightOfNamedRows, nameSize, rowColumns } from './row-columns';
+import {
+  columnHeads,
+  heightOfNamedRows,
+  nameSize,
+  rowColumns,
+  ticksBesideHeads,
+  ticksFor,
+} from './row-columns';
 import { clippedWords } from './text-width';
 import { placedTicks, snugScale } from './value-axis';
 
@@ -38,7 +45,10 @@ export interface ResidualGroupRow {
   readonly largestX: number | null;
   readonly deviation: string;
   readonly largest: string;
+  /** Empty where the group has none of its own. */
   readonly mean: string;
+  /** One a column. */
+  readonly figures: readonly string[];
 }
 
 export interface ResidualGroupsLayout {
@@ -50,9 +60,8 @@ export interface ResidualGroupsLayout {
   readonly ticks: readonly PlacedTick[];
   readonly zeroX: number;
   readonly heads: readonly PlacedText[];
-  /** Right edges of the columns of figures; null where there is no room for one. */
-  readonly deviationX: number | null;
-  readonly largestX: number | null;
+  /** Right edges of the columns: the mean where groups have one, standard deviation, largest. Null: no room for it. */
+  readonly columnX: readonly (number | null)[];
   /** Baseline of the line that says in full what the columns have no room for; null where they have. */
   readonly readoutY: number | null;
   readonly rows: readonly ResidualGroupRow[];
@@ -93,6 +102,9 @@ export function residualGroupsLayout(
     largest: written(largest),
   }));
   const columns = [
+    ...(drawn.some(({ mean }) => mean !== undefined)
+      ? [{ label: 'mean', texts: texts.map(({ mean }) => mean) }]
+      : []),
     { label: 'st. dev.', texts: texts.map(({ deviation }) => deviation) },
     { label: 'largest', texts: texts.map(({ largest }) => largest) },
   ];
@@ -101,7 +113,8 @@ export function residualGroupsLayout(
     columns,
     width,
   );
-  const [deviationX, largestX] = places.columnX;
+  const { columnX } = places;
+  const isCramped = columnX.includes(null);
   const rowHeight = heightOfNamedRows(drawn.length);
   const plot: Plot = {
     left: places.left,
@@ -116,24 +129,20 @@ export function residualGroupsLayout(
     mean + (standardDeviation ?? 0),
   ]);
   const scale = snugScale([0, ...seen], [plot.left, plot.right], 0.04);
+  const heads = columnHeads(columns, places, 16);
   const left = data.groups.length - drawn.length;
   const foot = plot.bottom + (left > 0 ? 28 : 8);
   return {
     width,
-    height: foot + (largestX === null ? 20 : 0),
+    height: foot + (isCramped ? 20 : 0),
     plot,
     rowHeight,
     nameX: places.nameX,
-    ticks: placedTicks(
-      scale,
-      Math.max(2, Math.round((plot.right - plot.left) / 110)),
-      formats.tick,
-    ),
+    ticks: ticksBesideHeads(placedTicks(scale, ticksFor(plot), formats.tick), heads),
     zeroX: scale(0),
-    heads: columnHeads(columns, places, 16),
-    deviationX,
-    largestX,
-    readoutY: largestX === null ? foot + 12 : null,
+    heads,
+    columnX,
+    readoutY: isCramped ? foot + 12 : null,
     rows: drawn.map(({ label, mean = 0, standardDeviation, largest }, place) => ({
       label,
       name: clippedWords(label, places.nameWidth + 2, nameSize),
@@ -146,6 +155,7 @@ export function residualGroupsLayout(
           : { from: scale(mean - standardDeviation), to: scale(mean + standardDeviation) },
       largestX: largest === null ? null : scale(largest),
       ...texts[place],
+      figures: columns.map((column) => column.texts[place]),
     })),
     more:
       left > 0

@@ -65,7 +65,7 @@ describe('residual scatter layout', () => {
       const { names } = shown([...crowd, ...outliers], width);
       expect(names.length).toBeGreaterThan(0);
       expect(names.length).toBeLessThanOrEqual(width < 480 ? 3 : 8);
-      expect(names[0].text).toBe('Tolvane 2001');
+      expect(names.every(({ text }) => text.startsWith('Tolvane'))).toBeTrue();
       const boxes = names.map(boxOf);
       boxes.forEach((a, place) => {
         expect(a.right).toBeLessThanOrEqual(width + 2);

@@ -1,4 +1,4 @@
-import { columnHeads, rowColumns } from './row-columns';
+import { columnHeads, rowColumns, ticksBesideHeads, ticksFor } from './row-columns';
 
 const columns = [
   { label: '', texts: ['2,100', '900'] },
@@ -32,6 +32,19 @@ describe('row columns', () => {
     const heads = columnHeads(columns, rowColumns(['Tolvane'], columns, 640), 14);
     expect(heads).toEqual([{ text: 'change', x: 632, y: 14, anchor: 'end' }]);
     expect(columnHeads(columns, rowColumns(['Tolvane'], columns, 320), 14)).toEqual([]);
+  });
+
+  it('drops the mark of an axis that would run into a head, and no other', () => {
+    const tick = (position: number) => ({ value: position, position, label: '3,500' });
+    const ticks = [tick(100), tick(560), tick(590)];
+    const heads = columnHeads(columns, rowColumns(['Tolvane'], columns, 640), 14);
+    expect(ticksBesideHeads(ticks, heads).map(({ position }) => position)).toEqual([100, 560]);
+    expect(ticksBesideHeads(ticks, []).length).toBe(3);
+  });
+
+  it('has room for three marks at least', () => {
+    expect(ticksFor({ left: 20, right: 60 })).toBe(3);
+    expect(ticksFor({ left: 0, right: 770 })).toBe(7);
   });
 
   it('stands without names and columns', () => {

@@ -1,5 +1,5 @@
 import { max } from 'd3';
-import type { PlacedText } from './figure-types';
+import type { PlacedText, PlacedTick, Plot } from './figure-types';
 import { figuresWidth, wordsWidth } from './text-width';
 
 /** A column of figures at the right of a chart of rows. */
@@ -71,4 +71,19 @@ export function columnHeads(
 export function heightOfNamedRows(count: number): number {
   if (count <= 16) return 28;
   return count <= 24 ? 24 : 20;
+}
+
+/** How many marks a level axis has room for, three at least. */
+export function ticksFor({ left, right }: Pick<Plot, 'left' | 'right'>): number {
+  return Math.max(3, Math.round((right - left) / 110));
+}
+
+/** The marks whose labels do not run into the words over the columns. */
+export function ticksBesideHeads(
+  ticks: readonly PlacedTick[],
+  heads: readonly PlacedText[],
+): PlacedTick[] {
+  const edges = heads.map(({ text, x }) => x - wordsWidth(text));
+  const most = Math.min(...edges, Infinity) - edge;
+  return ticks.filter(({ position, label }) => position + figuresWidth(label) / 2 <= most);
 }

@@ -1,9 +1,13 @@
 import { max } from 'd3';
-import { type IntervalFigure, type Stretch, hasBounds } from './figure-types';
+import { type IntervalFigure, type Stretch } from './figure-types';
 import { clippedWords, figuresWidth, wordsWidth } from './text-width';
 import { snugScale } from './value-axis';
 
-type Slope = IntervalFigure & { readonly name: string };
+type Slope = IntervalFigure & {
+  readonly name: string;
+  /** Ends that do not exist because nothing there is ruled out: the line runs to the edge. */
+  readonly unbounded?: 'low' | 'high' | 'both';
+};
 
 export interface SlopeIntervalRow {
   readonly name: string;
@@ -70,8 +74,18 @@ export function slopeIntervalsLayout(
       lineY,
       x: scale(slope.estimate),
       zeroX: scale(0),
-      interval: hasBounds(slope) ? { from: scale(slope.low), to: scale(slope.high) } : null,
+      interval: placedInterval(slope, scale, range),
     };
   });
   return { width, height: y, isOneScale, rows };
+}
+
+function placedInterval(
+  { low, high, unbounded }: Slope,
+  scale: (value: number) => number,
+  [left, right]: readonly [number, number],
+): Stretch | null {
+  const from = low === null ? (unbounded === 'low' ? left : null) : scale(low);
+  const to = high === null ? (unbounded === 'high' ? right : null) : scale(high);
+  return from === null || to === null ? null : { from, to };
 }

@@ -1,7 +1,7 @@
 import { type ScaleLinear, max } from 'd3';
 import type { PlacedText, PlacedTick, Plot } from './figure-types';
 import { figuresWidth } from './text-width';
-import { placedTicks, valueScale } from './value-axis';
+import { placedTicks, snugScale } from './value-axis';
 
 /** One value against another: the plot, its two scales and their marks. */
 export interface ValuePlot {
@@ -27,6 +27,8 @@ export interface ValueAxis {
 
 const top = 32;
 const foot = 44;
+/** Share of each span left free at its ends, so that no mark is cut. */
+const margin = 0.04;
 
 /**
  * The same proportions for every chart of one value against another: lower as there is less room, never a letter box.
@@ -42,12 +44,12 @@ export function valuePlot(
   const height = Math.round(Math.min(460, Math.max(300, width * 0.56)));
   const bottom = height - foot;
   const rows = Math.max(3, Math.round((bottom - top) / 56));
-  const y = valueScale(up.values, [bottom, top], rows);
+  const y = snugScale(up.values, [bottom, top], margin);
   const yTicks = placedTicks(y, rows, up.tick);
   const left = (max(yTicks, (tick) => figuresWidth(tick.label)) ?? 0) + 16;
   const plot: Plot = { left, right: Math.max(left + 40, width - size.right), top, bottom };
-  const columns = Math.max(2, Math.round((plot.right - plot.left) / 100));
-  const x = valueScale(across.values, [plot.left, plot.right], columns);
+  const columns = Math.max(3, Math.round((plot.right - plot.left) / 100));
+  const x = snugScale(across.values, [plot.left, plot.right], margin);
   return {
     height,
     plot,

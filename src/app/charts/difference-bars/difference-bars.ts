@@ -21,6 +21,8 @@ export class DifferenceBars {
   readonly terms = input.required<DifferenceData['terms']>();
   readonly total = input.required<IntervalFigure>();
   readonly kind = input<FigureKind>('money');
+  /** The table's header over the figures. */
+  readonly figureName = input('difference');
 
   protected readonly width = signal(560);
   readonly #formats = computed(() =>
@@ -44,7 +46,7 @@ export class DifferenceBars {
   );
   protected readonly columns = computed((): ChartColumn[] => [
     { label: 'part', isNumber: false },
-    { label: withUnit('difference', this.#numbers, this.kind()), isNumber: true },
+    { label: withUnit(this.figureName(), this.#numbers, this.kind()), isNumber: true },
     { label: 'interval', isNumber: true },
   ]);
   protected readonly rows = computed((): ChartRow[] =>

@@ -1,9 +1,11 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
-import { type IntervalFigure, intervalDigits, slopeIntervalsLayout } from '@figures';
-import { type FigureKind, NumberFormat } from '../../ui/number-format';
+import { intervalDigits, slopeIntervalsLayout } from '@figures';
+import { type FigureKind, type IntervalValue, NumberFormat } from '../../ui/number-format';
 import { ChartFrame } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+
+type Slope = IntervalValue & { readonly name: string; readonly intervalReason?: string };
 
 /** What one more of each regressor goes with, each with its interval and a mark at zero. */
 @Component({
@@ -18,7 +20,7 @@ export class SlopeIntervals {
 
   readonly text = input.required<ChartText>();
   /** `name` as it is to be read: `1 more of capex`. */
-  readonly slopes = input.required<readonly (IntervalFigure & { readonly name: string })[]>();
+  readonly slopes = input.required<readonly Slope[]>();
   /** A slope on a regressor in money is a plain ratio; on any other it is money. */
   readonly kind = input<FigureKind>('plain');
 
@@ -43,21 +45,23 @@ export class SlopeIntervals {
   ];
   protected readonly rows = computed((): ChartRow[] =>
     this.slopes().map((slope) => {
-      const figures = [slope.estimate, slope.low, slope.high];
+      const { unbounded } = slope;
       const digits = this.#digits(slope);
       const figure = (value: number | null) => this.#numbers.figure(value, this.kind(), digits);
-      return { cells: [slope.name, ...figures.map(figure)] };
+      const low = unbounded === 'low' ? 'open' : figure(slope.low);
+      const high = unbounded === 'high' ? 'open' : figure(slope.high);
+      return { cells: [slope.name, figure(slope.estimate), low, high] };
     }),
   );
 
   /** Each slope by itself: an estimate and its bounds have the same digits, and lines are read one by one. */
-  #digits({ estimate, low, high }: IntervalFigure): number {
+  #digits({ estimate, low, high }: IntervalValue): number {
     const shown = (value: number | null) =>
       value === null ? null : this.#numbers.shown(value, this.kind());
     return Math.max(0, intervalDigits(shown(estimate) ?? 0, shown(low), shown(high), 3));
   }
 
-  #format(slope: IntervalFigure): { value: string; bounds: string } {
+  #format(slope: IntervalValue): { value: string; bounds: string } {
     const digits = this.#digits(slope);
     return {
       value: this.#numbers.figure(slope.estimate, this.kind(), digits),
