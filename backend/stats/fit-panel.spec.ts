@@ -1,4 +1,3 @@
-import type { SlopeCovarianceName } from './fit-result';
 import { expectDigits } from './testing/expect-digits';
 import { fitOf, goldenJson, goldenPanel } from './testing/golden-panels';
 
@@ -69,12 +68,12 @@ const files = [
   'instinnovation120',
 ];
 
-const blocks: Readonly<Record<SlopeCovarianceName, string>> = {
+const blocks = {
   cr2: 'CR2_satterthwaite',
   cr1: 'CR1_nested',
   cr0: 'CR0_company',
   classical: 'classical',
-};
+} as const;
 
 /** R's own results of CR2 through another route differ by 1e-11 on the largest file: 9 digits hold on every panel. */
 const digits = 9;
@@ -85,7 +84,7 @@ for (const file of files) {
   const data = goldenPanel(`${file}.csv`, dependent, regressors);
 
   describe(`fitPanel on ${file}`, () => {
-    for (const slopes of Object.keys(blocks) as SlopeCovarianceName[]) {
+    for (const slopes of Object.keys(blocks) as (keyof typeof blocks)[]) {
       it(`agrees on the slopes with ${slopes} errors`, () => {
         const block = golden.within_se[blocks[slopes]];
         const fit = fitOf(data, null, { slopes });
@@ -100,7 +99,7 @@ for (const file of files) {
           expectDigits(slope.low, block.ci95_low[name], digits, `low of ${name}`);
           expectDigits(slope.high, block.ci95_high[name], digits, `high of ${name}`);
           block.vcov.values[k].forEach((value, l) => {
-            expectDigits(fit.slopeCovariance[k][l], value, digits, `covariance ${k}, ${l}`);
+            expectDigits(fit.slopeCovariance?.[k][l], value, digits, `covariance ${k}, ${l}`);
           });
         });
       });

@@ -4,6 +4,7 @@ import { checkColumns } from './check-columns';
 import { type ModelColumns, modelColumns, refuseNotPositive } from './model-columns';
 import type { PanelSample, SingleRow } from './panel-sample';
 import { memberNames, sortedRows } from './sorted-rows';
+import { positionsOf, yearsOf } from './year-positions';
 
 /** How a specification changes the columns before anything is estimated. */
 export type ColumnForm = Pick<Specification, 'form' | 'lag'>;
@@ -85,16 +86,20 @@ function splitComplete(
   const values = [outcome, ...regressors];
   const names = [data.outcome, ...data.regressors].map(({ name }) => name);
   const dropped: DroppedRow[] = [];
-  const complete = rows.filter((row) => {
-    const before = dropped.length;
-    for (let index = 0; index < values.length; index += 1) {
-      if (Number.isNaN(values[index][row])) {
-        dropped.push({ row: data.fileRow[row], column: names[index], reason: 'missing' });
-      }
+  const isMissing = new Uint8Array(data.company.length);
+  values.forEach((column, index) => {
+    for (let place = 0; place < rows.length; place += 1) {
+      const row = rows[place];
+      if (!Number.isNaN(column[row])) continue;
+      isMissing[row] = 1;
+      dropped.push({ row: data.fileRow[row], column: names[index], reason: 'missing' });
     }
-    return dropped.length === before;
   });
-  return { complete, dropped: dropped.sort((left, right) => left.row - right.row) };
+  if (dropped.length === 0) return { complete: rows, dropped };
+  return {
+    complete: rows.filter((row) => isMissing[row] === 0),
+    dropped: dropped.sort((left, right) => left.row - right.row),
+  };
 }
 
 interface Groups {
@@ -111,9 +116,12 @@ function groupByCompany(data: PanelColumns, rows: Int32Array): Groups {
   const singles: number[] = [];
   let count = 0;
   for (let from = 0; from < rows.length;) {
-    const name = nameOf(data, rows[from]);
+    const code = data.company[rows[from]];
+    const name = data.companies[code];
+    const isSame = (row: number): boolean =>
+      data.company[row] === code || nameOf(data, row) === name;
     let to = from + 1;
-    while (to < rows.length && nameOf(data, rows[to]) === name) to += 1;
+    while (to < rows.length && isSame(rows[to])) to += 1;
     if (to - from === 1) singles.push(rows[from]);
     else {
       kept.set(rows.subarray(from, to), count);
@@ -130,15 +138,14 @@ function gather(
   columns: ModelColumns,
   { rows, starts, form }: SampleRows,
 ): Omit<PanelSample, 'singles' | 'dropped' | 'members'> {
-  const year = rows.map((row) => data.year[row]);
-  const years = [...new Set(year)].sort((left, right) => left - right);
+  const year = pickWhole(data.year, rows);
+  const years = yearsOf(year);
   if (years.length > mostYears) {
     throw new StatsError(
       'too-many-years',
       `expected at most ${mostYears} different fiscal years; found ${years.length}: is this the year's column?`,
     );
   }
-  const positions = new Map(years.map((value, position) => [value, position]));
   const levels = {
     outcome: pick(columns.outcome, rows),
     regressors: columns.regressors.map((values) => pick(values, rows)),
@@ -149,12 +156,12 @@ function gather(
     ),
     starts,
     year,
-    position: year.map((value) => positions.get(value) ?? 0),
+    position: positionsOf(year, years),
     years,
     outcome: inForm(levels.outcome, form),
     regressors: levels.regressors.map((values) => inForm(values, form)),
     levels,
-    fileRow: rows.map((row) => data.fileRow[row]),
+    fileRow: pickWhole(data.fileRow, rows),
     outcomeName: data.outcome.name,
     regressorNames: data.regressors.map(({ name }) => name),
   };
@@ -164,6 +171,12 @@ interface SampleRows {
   readonly rows: Int32Array;
   readonly starts: Int32Array;
   readonly form: ColumnForm['form'];
+}
+
+function pickWhole(values: Int32Array, rows: Int32Array): Int32Array {
+  const picked = new Int32Array(rows.length);
+  for (let index = 0; index < rows.length; index += 1) picked[index] = values[rows[index]];
+  return picked;
 }
 
 function pick(values: Float64Array, rows: Int32Array): Float64Array {

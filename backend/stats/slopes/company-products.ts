@@ -1,13 +1,13 @@
 import type { SquareMatrix } from '../linear-algebra/square-matrix';
-import { symmetricPower } from '../linear-algebra/symmetric-power';
+import { type SymmetricPower, symmetricPower } from '../linear-algebra/symmetric-power';
 import type { WithinFit } from '../regression/within-fit';
 
 /** Eigenvalues of I − H_ii below this are dropped: the company alone determines that direction. */
 const eigenvalueFloor = 1e-10;
 
 /**
- * What a company adds to every cluster-robust figure, in the orthonormal basis U of the demeaned regressors.
- * K × K products of its T_i rows take the place of its T_i × T_i block of the hat matrix.
+ * What a company adds to every cluster-robust figure, in the orthonormal basis U of the demeaned design.
+ * P × P products of its T_i rows take the place of its T_i × T_i block of the hat matrix.
  */
 export interface CompanyProduct {
   /** S_i = U_i'U_i; the S_i add up to the identity. */
@@ -20,7 +20,7 @@ export interface CompanyProduct {
   readonly isDispensable: boolean;
 }
 
-/** Cross-products of every company; cost n·K² + N·K³. */
+/** Cross-products of every company, cost n·P²; what needs eigenvalues, N·P³, is computed when first asked for. */
 export function companyProducts(fit: WithinFit): CompanyProduct[] {
   return fit.sample.companies.map((_, company) => companyProduct(fit, company));
 }
@@ -42,7 +42,21 @@ function companyProduct(fit: WithinFit, company: number): CompanyProduct {
       cross[l * size + k] = sum;
     }
   }
+  let power: SymmetricPower | undefined;
+  const adjusted = (): SymmetricPower => (power ??= adjustmentOf(cross, size));
+  return {
+    cross,
+    score,
+    get adjustment() {
+      return adjusted().matrix;
+    },
+    get isDispensable() {
+      return adjusted().dropped === 0;
+    },
+  };
+}
+
+function adjustmentOf(cross: SquareMatrix, size: number): SymmetricPower {
   const rest = cross.map((value, index) => (index % (size + 1) === 0 ? 1 : 0) - value);
-  const power = symmetricPower(rest, size, -0.5, eigenvalueFloor);
-  return { cross, score, adjustment: power.matrix, isDispensable: power.dropped === 0 };
+  return symmetricPower(rest, size, -0.5, eigenvalueFloor);
 }
