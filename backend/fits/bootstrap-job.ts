@@ -16,14 +16,15 @@ export class BootstrapJob {
   ) {}
 
   async run({ workspaceId, subjectId: id }: JobTicketRow): Promise<void> {
-    const taken = await this.repositories.inWorkspace(workspaceId, async (tx) => {
-      const bootstrap = await tx.bootstraps.find(id);
-      if (bootstrap === undefined || !(await tx.bootstraps.markRunning(id))) return undefined;
-      return { bootstrap, subject: await readSubject(tx, await findFit(tx, bootstrap.fitId)) };
-    });
-    if (taken === undefined) return;
+    const bootstrap = await this.repositories.inWorkspace(workspaceId, async (tx) =>
+      (await tx.bootstraps.markRunning(id)) ? tx.bootstraps.find(id) : undefined,
+    );
+    if (bootstrap === undefined) return;
+    const subject = await this.repositories.inWorkspace(workspaceId, async (tx) =>
+      readSubject(tx, await findFit(tx, bootstrap.fitId)),
+    );
     const ended = await watchedRun<BootstrapAnswer, Run<BootstrapAnswer>>(
-      (signal) => this.pool.bootstrap(taken.subject, taken.bootstrap.seed, signal),
+      (signal) => this.pool.bootstrap(subject, bootstrap.seed, signal),
       (share) => {
         const drawn = { done: Math.round(share * randomDraws), total: randomDraws };
         return this.repositories.inWorkspace(workspaceId, (tx) =>

@@ -30,6 +30,7 @@ describe('the job queue', () => {
       repositories,
       executeSql: (text, values) => pool.query(text, values),
       onError: (error) => errors.push(error),
+      heartbeat: { everySeconds: 0.1, silentSeconds: 5 },
     });
     await queue.start();
     await repositories.inWorkspace(workspaceId, (tx) => tx.members.insertWorkspace('W'));
@@ -93,5 +94,59 @@ describe('the job queue', () => {
     const said = errors.filter((error) => error.message === 'a job of queue fit failed');
     expect(said.length).toBe(5);
     expect((said[0].cause as Error).message).toBe('no luck');
+  });
+
+  /** As a server leaves a job behind that dies while it works it. */
+  async function leaveBehind(subject: string, retryCount: number): Promise<void> {
+    await repositories.inWorkspace(workspaceId, (tx) => queue.enqueue(tx, 'bootstrap', subject));
+    const { rows } = await pool.query<{ id: string }>(
+      `update pgboss.job set state = 'active', started_on = now(), retry_count = $1
+        where name = 'bootstrap' and data ->> 'ticketId' =
+          (select id::text from job_ticket where subject_id = $2) returning id`,
+      [retryCount, subject],
+    );
+    await pool.query(
+      `update job_ticket set job_id = $1, heartbeat_at = now() - interval '6 seconds'
+        where subject_id = $2`,
+      [rows[0].id, subject],
+    );
+  }
+
+  it('takes a job back whose server fell silent, and gives it up after the last try', async () => {
+    const [worked, givenUp] = [randomUUID(), randomUUID()];
+    await leaveBehind(worked, 0);
+    await leaveBehind(givenUp, 4);
+    const tried: string[] = [];
+    const told = new Promise<string>((resolve) => {
+      void queue.work(
+        'bootstrap',
+        ({ subjectId }) => {
+          tried.push(subjectId);
+          return Promise.resolve();
+        },
+        ({ subjectId }) => {
+          resolve(subjectId);
+          return Promise.resolve();
+        },
+      );
+    });
+    expect(await told).toBe(givenUp);
+    for (let look = 0; look < 100 && tried.length === 0; look++)
+      await new Promise((resolve) => setTimeout(resolve, 100));
+    expect(tried).toEqual([worked]);
+    const spoken = await pool.query('select from job_ticket where heartbeat_at is not null');
+    expect(spoken.rowCount).toBe(0);
+  });
+
+  it('leaves a job alone whose server says that it works it', async () => {
+    const subject = randomUUID();
+    await leaveBehind(subject, 0);
+    const { rows } = await pool.query<{ id: string; job_id: string }>(
+      'select id, job_id from job_ticket where subject_id = $1',
+      [subject],
+    );
+    await repositories.jobTickets.beat(rows[0].id, rows[0].job_id);
+    expect(await repositories.jobTickets.takeSilent(['bootstrap'], 5)).toEqual([]);
+    await repositories.jobTickets.rest(rows[0].id);
   });
 });

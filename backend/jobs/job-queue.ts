@@ -30,7 +30,7 @@ export class JobQueue {
   readonly #workers: { readonly kind: QueueName; readonly id: string }[] = [];
   /** Statements of the queue package and handlers of ours that have not ended. */
   #busy = 0;
-  /** What to do, by queue, when the last try of a job ended without a word. */
+  /** The queues that are worked here, and what to do when the last try of a job ended without a word. */
   readonly #giveUp = new Map<string, TicketHandler | undefined>();
   #rounds: NodeJS.Timeout | undefined;
 
@@ -174,7 +174,8 @@ export class JobQueue {
   async #takeBackSilent(): Promise<void> {
     try {
       const { jobTickets } = this.options.repositories;
-      for (const ticket of await jobTickets.takeSilent(this.#heartbeat.silentSeconds)) {
+      const kinds = [...this.#giveUp.keys()];
+      for (const ticket of await jobTickets.takeSilent(kinds, this.#heartbeat.silentSeconds)) {
         const { kind, jobId } = ticket;
         this.options.onError(new Error(`a job of queue ${kind} fell silent and is taken back`));
         await this.#boss.fail(kind, jobId, { message: 'the server that worked it fell silent' });

@@ -51,11 +51,13 @@ export class JobTicketsRepository {
       .execute();
   }
 
-  /** Takes the tickets that nobody has spoken of for a while; each is given to one caller alone. */
-  async takeSilent(seconds: number): Promise<SilentTicketRow[]> {
+  /** Takes the tickets of these kinds that nobody has spoken of for a while; each is given to one caller alone. */
+  async takeSilent(kinds: readonly string[], seconds: number): Promise<SilentTicketRow[]> {
+    if (kinds.length === 0) return [];
     const taken = await this.db
       .updateTable('jobTicket')
       .set({ heartbeatAt: null })
+      .where('kind', 'in', kinds)
       .where('heartbeatAt', '<', sql<Date>`now() - make_interval(secs => ${seconds})`)
       .returning(['id', 'workspaceId', 'kind', 'subjectId', 'jobId'])
       .execute();
