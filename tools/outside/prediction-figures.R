@@ -41,6 +41,7 @@ prediction_figures <- function(panel, fit, case) {
     expected <- NULL
     bands <- NULL
     carried <- NULL
+    from_last <- NULL
     for (plan in plans) {
       x <- scale_of(plan)
       w <- w_of(x, year)
@@ -59,6 +60,7 @@ prediction_figures <- function(panel, fit, case) {
         carry_point <- point + fade * fit$residuals[last]
         reach <- qt(1 - (1 - band_confidence) / 2, spread$df) * sqrt(spread$s2 * (1 - fade^2) + carry_error^2)
         interval <- t_interval(carry_point, carry_error, cosines, case$confidence)
+        from_last <- c(from_last, point + if (is.null(smear)) 0 else log(smear), carry_point)
         carried <- rbind(carried, c(unlist(interval), in_measure(carry_point + c(-1, 1) * reach)))
       }
     }
@@ -66,6 +68,9 @@ prediction_figures <- function(panel, fit, case) {
     result[[paste0("band", suffix)]] <- figure("band of the market value at the model's level, h = 1, 3, 5, own code", t(bands), if (is.null(smear)) expected[1, 2] else 0)
     result[[paste0("carriedGap", suffix)]] <- figure(
       "best linear unbiased prediction under AR(1), h = 1, 3, 5: estimate, error, ends, band; own code", t(carried), expected[1, 2])
+    result[[paste0("fromLast", suffix)]] <- figure(
+      "expected value less the last actual one, h = 1, 3, 5, at the model's level and with the gap carried; logs in log form",
+      from_last - panel$y[last], expected[1, 2])
     if (!is.null(smear)) {
       result[[paste0("expectedValue", suffix)]] <- figure("exp(.) * mean(exp(e)), interval exp(ends) * mean(exp(e))", t(exp(expected[, c(1, 3, 4)]) * smear))
       result[[paste0("medianValue", suffix)]] <- figure("exp(.)", exp(expected[, 1]))
@@ -74,6 +79,7 @@ prediction_figures <- function(panel, fit, case) {
   }
   if (!is.null(smear)) result$smearing <- figure("mean(exp(e)) over all rows and over the own company's", c(smear, mean(exp(fit$residuals[at]))))
   result$planDifference <- difference_figure(panel, case, lapply(plans, scale_of))
+  result$peersMean <- peers_figure(panel, fit, own)
   result$familiarRange <- familiar_figure(panel, own, lapply(plans, scale_of))
   list(plans = plans, figures = result)
 }
@@ -141,4 +147,16 @@ difference_figure <- function(panel, case, plans) {
     contrasts = contrasts, level = case$confidence, test = "Satterthwaite")
   figure("clubSandwich::linear_contrast(vcov = 'CR2', test = 'Satterthwaite') on demeaned columns",
     c(found$Est, found$SE, found$CI_L, found$CI_U), c(found$SE, 0 * found$SE, found$SE, found$SE))
+}
+
+# The last actual value less the mean of the peers' of that year: intercepts, slopes, residuals, and all together.
+peers_figure <- function(panel, fit, own) {
+  at <- which(panel$company == own)
+  last <- at[length(at)]
+  peers <- which(panel$year == panel$year[last] & panel$company != own)
+  intercepts <- fit$intercepts[[own]] - mean(fit$intercepts[panel$company[peers]])
+  slopes <- sum(fit$slopes * (panel$x[last, ] - colMeans(panel$x[peers, , drop = FALSE])))
+  residuals <- fit$residuals[last] - mean(fit$residuals[peers])
+  parts <- c(intercepts, slopes, residuals, panel$y[last] - mean(panel$y[peers]))
+  figure("by its definition in words, own code", parts, max(abs(parts)))
 }

@@ -27,10 +27,11 @@ export function runR(args, options = {}) {
  */
 export async function ensureR(say) {
   if (await hasPackages()) return;
-  await installPackages(['r-base-core', ...packages.values()], 'R with its panel packages', say);
+  const wanted = ['r-base-core', ...packages.values()];
+  await installPackages(wanted, 'R with its panel packages', say);
   if (!(await hasPackages())) {
     throw new PlainFailure(
-      `R does not load ${[...packages.keys()].join(', ')}: install Debian's ${[...packages.values()].join(' ')} and start again.`,
+      `R does not load ${[...packages.keys()].join(', ')}: install Debian's ${wanted.join(' ')} and start again.`,
     );
   }
 }

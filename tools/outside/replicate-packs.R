@@ -7,6 +7,7 @@ largest <- lapply(arguments[-1], function(folder) {
   table <- replicate_fit(folder)
   table <- table[table$numbers > 0, ]
   worst <- which.max(table$difference)
-  list(folder = basename(folder), figure = table$figure[worst], numbers = sum(table$numbers), difference = sprintf("%.17g", table$difference[worst]))
+  apart <- table$difference[worst]
+  list(figure = table$figure[worst], difference = if (is.finite(apart)) sprintf("%.17g", apart) else "Infinity")
 })
 jsonlite::write_json(largest, arguments[1], auto_unbox = TRUE)

@@ -20,11 +20,9 @@ interface PackedFit {
   readonly folder: string;
 }
 
-/** What `replicate-packs.R` answers. */
+/** What `replicate-packs.R` answers, a pack after the other: the figure furthest from the results, and how far. */
 interface ReplicatedPack {
-  readonly folder: string;
   readonly figure: string;
-  readonly numbers: number;
   readonly difference: string;
 }
 

@@ -13,9 +13,10 @@
 # Slopes and most covariances come from packages. The intervals of intercepts and of the standing come from the full
 # dummy regression below, by the definitions written beside each function.
 # A difference is relative to the larger of the figure and its standard error. Exit status 1 above 1e-8.
+# All of it is one file, however long, so that a pack carries one script.
 
 tolerance <- 1e-8
-largest_dense_design <- 5e7 # cells; beyond that the full dummy regression does not fit into ordinary memory
+largest_dense_design <- 1e7 # cells; beyond that the full dummy regression takes many minutes and gigabytes
 
 # ---- Rows ------------------------------------------------------------------------------------------------------------
 
@@ -380,6 +381,11 @@ difference_of <- function(figure, ours, theirs, scale = 0) {
 
 field <- function(list, name) lapply(list, function(entry) entry[[name]])
 
+compare_estimates <- function(panel, results) {
+  within <- package_fit(panel, results$specification$effects)
+  difference_of("slopes", unname(coef(within)), field(results$slopes, "estimate"), sqrt(diag(vcov(within))))
+}
+
 compare_slopes <- function(panel, results) {
   specification <- results$specification
   within <- package_fit(panel, specification$effects)
@@ -519,7 +525,9 @@ replicate_fit <- function(folder = ".") {
   effects <- results$specification$effects
   cells <- length(panel$y) * (length(panel$companies) + length(panel$years) + ncol(panel$x))
   if (cells > largest_dense_design) {
-    cat("The full dummy regression of this fit has", cells, "cells; intercepts, standing and poolability are left out.\n")
+    cat("The full dummy regression of this fit has ", cells, " cells; only its slopes are recomputed, with their covariance\n",
+      "unless that needs the leverages of the full regression.\n", sep = "")
+    if (startsWith(results$specification$slopes, "hc")) return(compare_estimates(panel, results))
     return(compare_slopes(panel, results))
   }
   fit <- dummy_fit(panel, effects)

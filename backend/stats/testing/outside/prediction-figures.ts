@@ -1,11 +1,14 @@
 import { tQuantile } from '../../distributions/t-distribution';
 import type { PredictionBasis } from '../../fit-result';
 import {
+  decompositionFromLast,
   differenceOfPlans,
+  differenceToPeer,
   expectedValue,
   familiarRange,
   marketValueBand,
   type Outlook,
+  peersMean,
   reachValue,
 } from '../../prediction';
 import { type FigureValues, intervalValues } from './figure-values';
@@ -28,6 +31,7 @@ export function predictionFigures(basis: PredictionBasis, plans: Plans): FigureV
   const familiar = plans.map((plan) => familiarRange(basis, plan).leverage);
   const figures: FigureValues = {
     planDifference: [0, 1, 2, 3].flatMap((place) => differences.map((values) => values[place])),
+    peersMean: peersMeanValues(basis),
     familiarRange: [...familiar, basis.largestOwnLeverage, basis.largestLeverage],
   };
   if (basis.yearEffects === null || basis.yearEffects === undefined) {
@@ -66,6 +70,14 @@ function outlookFigures(
         return [...intervalValues(value.log?.inLogs ?? value), ...ends(plan, at)];
       }),
     ),
+    fromLast: plans.flatMap((plan) =>
+      horizons.flatMap((h) =>
+        (['model-level', 'carry-the-gap'] as const).map(
+          (start) =>
+            decompositionFromLast(basis, plan, tQuantile, { ...inHorizon(h), start }).total,
+        ),
+      ),
+    ),
     reachedValue: reachedShares.flatMap((share) =>
       reachedValues(basis, plans[0], share * expected[0].estimate, outlook),
     ),
@@ -86,4 +98,13 @@ function reachedValues(
   return reach.range?.kind === 'interval'
     ? [target, reach.value, reach.range.low, reach.range.high]
     : [target, reach.value, null, null];
+}
+
+/** Intercepts, slopes, residuals and their sum; a null without a peer in the own company's last year. */
+function peersMeanValues(basis: PredictionBasis): (number | null)[] {
+  const mean = peersMean(basis, 'mean of the peers');
+  if (mean === null) return [null];
+  const { intercepts, terms, residuals, total } = differenceToPeer(basis, mean, tQuantile);
+  const ofSlopes = terms.reduce((sum, { estimate }) => sum + estimate, 0);
+  return [intercepts, ofSlopes, residuals, total];
 }
