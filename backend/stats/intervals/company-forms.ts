@@ -71,7 +71,7 @@ export function companyForms(
       addResidualForms(forms, rows, { weight: weights[cosine], cosine, scratch });
     }
   }
-  addBasisVariance(forms);
+  completeResidualBasis(forms);
   return forms;
 }
 
@@ -197,14 +197,14 @@ function addResidualForms(
   weighRows(rows, weight, weighted);
   for (let k = 0; k <= size; k += 1) {
     correlationProduct(weighted[k], rows, product);
-    for (let l = k; l < 1 + double; l += 1) {
-      const sum = dotRows(l <= size ? weighted[l] : basis[l - size - 1], product, count);
-      if (k === 0) {
-        if (l === 0) forms.residualMean[place] = sum;
-        else forms.residualCross[place * double + l - 1] = sum;
-      } else {
-        addSymmetric(forms.residualBasis, { cosine, double, row: k - 1, column: l - 1 }, sum);
-      }
+    const target = k === 0 ? forms.residualCross : forms.residualBasis;
+    const at = k === 0 ? place * double : (cosine * double + k - 1) * double;
+    if (k === 0) forms.residualMean[place] = dotRows(weighted[0], product, count);
+    for (let l = Math.max(1, k); l <= size; l += 1) {
+      target[at + l - 1] += dotRows(weighted[l], product, count);
+    }
+    for (let l = 0; l < size; l += 1) {
+      target[at + size + l] += dotRows(basis[l], product, count);
     }
   }
 }
@@ -228,33 +228,25 @@ function weighRows(
   });
 }
 
-/** The block of U with U is the same for every cosine. */
-function addBasisVariance(forms: CompanyForms): void {
+/** Fills what `addResidualForms` leaves out: the block of U with U, the same for every cosine, and the lower triangle. */
+function completeResidualBasis(forms: CompanyForms): void {
   const size = forms.slopes;
   const double = 2 * size;
   for (let cosine = 0; cosine < forms.cosines; cosine += 1) {
+    const at = cosine * double * double;
     for (let k = 0; k < size; k += 1) {
       for (let l = 0; l < size; l += 1) {
-        forms.residualBasis[(cosine * double + size + k) * double + size + l] =
+        forms.residualBasis[at + (size + k) * double + size + l] =
           forms.basisVariance[k * size + l];
       }
     }
+    for (let row = 1; row < double; row += 1) {
+      for (let column = 0; column < row; column += 1) {
+        forms.residualBasis[at + row * double + column] =
+          forms.residualBasis[at + column * double + row];
+      }
+    }
   }
-}
-
-function addSymmetric(
-  target: Float64Array,
-  place: {
-    readonly cosine: number;
-    readonly double: number;
-    readonly row: number;
-    readonly column: number;
-  },
-  value: number,
-): void {
-  const { cosine, double, row, column } = place;
-  target[(cosine * double + row) * double + column] += value;
-  if (row !== column) target[(cosine * double + column) * double + row] += value;
 }
 
 function dotRows(left: Float64Array, right: Float64Array, count: number): number {

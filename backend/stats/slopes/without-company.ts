@@ -1,5 +1,4 @@
 import type { FitResult } from '../fit-result';
-import { symmetricPower } from '../linear-algebra/symmetric-power';
 import { timesVector } from '../linear-algebra/square-matrix';
 import type { WithinColumn } from '../panel/within-transform';
 import type { WithinFit } from '../regression/within-fit';
@@ -11,7 +10,7 @@ const notDeterminedReason = 'Without this company the slopes are no longer deter
 
 /**
  * Slopes and the own company's standing without each company in turn, from company cross-products:
- * b₍ᵢ₎ = b − R⁻¹(I − S_i)⁻¹g_i. No refit; cost N·(K³ + K).
+ * b₍ᵢ₎ = b − R⁻¹(I − S_i)⁻¹g_i. No refit; cost N·P².
  *
  * @param own  index of the own company; −1 where none is named or it has fewer than two complete rows.
  */
@@ -49,10 +48,10 @@ export function withoutEachCompany(
 }
 
 function coefficientsWithout(fit: WithinFit, product: CompanyProduct): number[] {
-  const size = fit.coefficients.length;
-  const rest = product.cross.map((value, index) => (index % (size + 1) === 0 ? 1 : 0) - value);
-  const inverse = symmetricPower(rest, size, -1, 0).matrix;
-  const change = timesVector(fit.inverseR, timesVector(inverse, product.score));
+  // W_i·W_i = (I − S_i)⁻¹: a company without which the slopes are determined has no eigenvalue dropped.
+  const { adjustment, score } = product;
+  const adjusted = timesVector(adjustment, timesVector(adjustment, score));
+  const change = timesVector(fit.inverseR, adjusted);
   return Array.from(fit.coefficients, (value, k) => value - change[k]);
 }
 
