@@ -68,8 +68,8 @@ function refuseTooLarge(data: PanelColumns): void {
 function refuseTooSmall(columns: readonly NamedColumn[]): void {
   const tooSmall = columns.flatMap(({ name, values }) => {
     let largest = 0;
-    for (const value of values) {
-      const size = Math.abs(value);
+    for (let row = 0; row < values.length; row += 1) {
+      const size = Math.abs(values[row]);
       if (size > largest) largest = size;
     }
     return largest > 0 && largest < smallestMagnitude ? [name] : [];

@@ -12,7 +12,7 @@ export function memberNames(
   members: readonly string[] | undefined,
 ): string[] {
   const isPresent = new Uint8Array(data.companies.length);
-  for (const code of data.company) isPresent[code] = 1;
+  for (let row = 0; row < data.company.length; row += 1) isPresent[data.company[row]] = 1;
   const present = new Set(data.companies.filter((_, code) => isPresent[code] === 1));
   const names = new Set(members ?? present);
   if (own !== null) names.add(own);
@@ -42,10 +42,16 @@ export function sortedRows(data: PanelColumns, members: readonly string[]): Int3
     place[data.company[left]] - place[data.company[right]] ||
     data.year[left] - data.year[right] ||
     data.fileRow[left] - data.fileRow[right];
-  for (let index = 1; index < count; index += 1) {
-    if (order(picked[index - 1], picked[index]) > 0) return picked.sort(order);
+  let isSorted = true;
+  for (let index = 1; isSorted && index < count; index += 1) {
+    const before = picked[index - 1];
+    const row = picked[index];
+    isSorted =
+      data.company[before] === data.company[row]
+        ? data.year[before] < data.year[row]
+        : order(before, row) < 0;
   }
-  return picked;
+  return isSorted ? picked : picked.sort(order);
 }
 
 /** Place of each company code in the order of names; codes of the same name share theirs. */
