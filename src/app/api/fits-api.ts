@@ -1,10 +1,21 @@
 import { Injectable, inject } from '@angular/core';
-import { FitReply, FitsReply, type StartFit, apiRoutes } from '@contract';
+import {
+  Bootstrap,
+  EvidenceReply,
+  FitReply,
+  FitsReply,
+  type StartBootstrap,
+  type StartFit,
+  apiRoutes,
+} from '@contract';
 import { type Observable, exhaustMap, takeWhile, timer } from 'rxjs';
 import type * as z from 'zod';
-import { ApiClient } from './api-client';
+import { ApiClient, addressOf } from './api-client';
 
 const lookEveryMs = 400;
+
+/** Evidence of a large panel is a megabyte: it is asked for less often. */
+const lookForEvidenceEveryMs = 1000;
 
 /** Fits: start one, follow it, read it. */
 @Injectable({ providedIn: 'root' })
@@ -34,4 +45,34 @@ export class FitsApi {
   cancel(fitId: string): Observable<void> {
     return this.#client.send(apiRoutes.cancelFit, { path: { fitId } });
   }
+
+  readEvidence(fitId: string): Observable<EvidenceReply> {
+    return this.#client.call(apiRoutes.readEvidence, EvidenceReply, { path: { fitId } });
+  }
+
+  /** The evidence as it is now, and again while it or a bootstrap beside it is under way; completes with its end. */
+  followEvidence(fitId: string): Observable<EvidenceReply> {
+    return timer(0, lookForEvidenceEveryMs).pipe(
+      exhaustMap(() => this.readEvidence(fitId)),
+      takeWhile(isUnderWay, true),
+    );
+  }
+
+  startBootstrap(fitId: string, body: z.input<typeof StartBootstrap>): Observable<Bootstrap> {
+    return this.#client.call(apiRoutes.startBootstrap, Bootstrap, { path: { fitId }, body });
+  }
+
+  cancelBootstrap(fitId: string): Observable<void> {
+    return this.#client.send(apiRoutes.cancelBootstrap, { path: { fitId } });
+  }
+
+  /** Where the browser finds the fit's replication pack. */
+  replicationAddress(fitId: string): string {
+    return addressOf(apiRoutes.downloadReplication, { fitId });
+  }
+}
+
+function isUnderWay(reply: EvidenceReply): boolean {
+  if (reply.state !== 'ready') return reply.state === 'computing';
+  return reply.bootstrap?.state === 'queued' || reply.bootstrap?.state === 'running';
 }

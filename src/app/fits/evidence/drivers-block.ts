@@ -1,0 +1,101 @@
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  inject,
+  input,
+  linkedSignal,
+  output,
+} from '@angular/core';
+import type { FitReply, FitResult } from '@contract';
+import { LeaveOneOut } from '../../charts/leave-one-out/leave-one-out';
+import { NumberFormat } from '../../ui/number-format';
+import { EvidenceBlock } from './evidence-block';
+import { chartText } from './evidence-ground';
+import {
+  type FigureChoice,
+  choiceWord,
+  chosenFigure,
+  figureChoices,
+  kindOf,
+} from './figure-choice';
+import { FigureSwitch } from './figure-switch';
+import { withoutEachCompany } from './left-out';
+import { leftOutMeaning, leftOutTitle } from './left-out-words';
+import { questions } from './questions';
+
+/** "Who drives it?": standing and slopes without each company. */
+@Component({
+  selector: 'kv-drivers-block',
+  imports: [EvidenceBlock, FigureSwitch, LeaveOneOut],
+  template: `
+    <kv-evidence-block [question]="question" [meaning]="meaning()">
+      <kv-figure-switch
+        legend="Shown without each company"
+        [choices]="choices()"
+        [chosen]="chosen()"
+        (chosenChange)="chosen.set($event)"
+      />
+      @if (picture(); as drawn) {
+        @defer (on viewport) {
+          <kv-leave-one-out
+            [text]="drawn.text"
+            [leftOut]="drawn.left"
+            [full]="drawn.full"
+            [fullName]="drawn.fullName"
+            [marks]="chosen() === 'standing' ? 'own' : 'model'"
+            [kind]="drawn.kind"
+            [figureName]="drawn.word"
+            (companySelected)="companySelected.emit($event)"
+          >
+            <h4 chartHeading>{{ drawn.text.title }}</h4>
+          </kv-leave-one-out>
+        } @placeholder {
+          <div class="waiting"></div>
+        }
+        <p class="kv-caption kv-no-print">Select a company to see why it is a peer.</p>
+      }
+    </kv-evidence-block>
+  `,
+  styleUrl: './block.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class DriversBlock {
+  readonly #numbers = inject(NumberFormat);
+
+  readonly reply = input.required<FitReply>();
+  readonly result = input.required<FitResult>();
+
+  readonly companySelected = output<string>();
+
+  protected readonly question = questions.drivers;
+  protected readonly choices = computed(() => figureChoices(this.result()));
+  protected readonly chosen = linkedSignal((): FigureChoice => this.choices()[0].choice);
+  readonly #left = computed(() => {
+    const full = chosenFigure(this.result(), this.chosen());
+    return full === null ? [] : withoutEachCompany(this.result(), this.chosen(), full);
+  });
+  protected readonly meaning = computed(() =>
+    leftOutMeaning(
+      this.result(),
+      { choice: this.chosen(), left: this.#left(), many: 'companies' },
+      this.#numbers,
+    ),
+  );
+  protected readonly picture = computed(() => {
+    const [result, choice, left] = [this.result(), this.chosen(), this.#left()];
+    const full = chosenFigure(result, choice);
+    if (full === null || left.length === 0) return null;
+    const kind = kindOf(result, choice);
+    const title = leftOutTitle(result, { choice, left, one: 'company' }, this.#numbers);
+    const unit = kind === 'money' ? this.#numbers.unitLabel() : '';
+    return {
+      left,
+      full,
+      kind,
+      fullName: `all ${result.sample.companies} companies`,
+      word: choiceWord(result, choice),
+      text: chartText({ reply: this.reply(), result }, title, unit),
+    };
+  });
+}

@@ -1,0 +1,79 @@
+import type { FitResult } from '@contract';
+import type { LeftOut } from '@figures';
+import { type NumberFormat, headlineDigits } from '../../ui/number-format';
+import { listed } from '../../ui/phrases';
+import { placesText } from '../fit-words';
+import { rankedCount } from '../standing-words';
+import { type FigureChoice, choiceWord, chosenFigure, kindOf } from './figure-choice';
+import { leaving, mostMoving, rangeOf, turning } from './left-out';
+
+const mostNamed = 4;
+
+/** `A, B and C`, or how many where they are many. */
+function named(left: readonly LeftOut[], many: string): string {
+  return left.length > mostNamed
+    ? `any of ${left.length} ${many}`
+    : listed(left.map(({ name }) => name)).replace(/ and (?=[^ ]+$)/, ' or ');
+}
+
+/** Title of a picture of what is left out: the figure with all, then how far it goes without one. */
+export function leftOutTitle(
+  result: FitResult,
+  { choice, left, one }: { choice: FigureChoice; left: readonly LeftOut[]; one: string },
+  numbers: NumberFormat,
+): string {
+  const full = chosenFigure(result, choice);
+  const word = choiceWord(result, choice);
+  if (full === null) return `There is no ${word} to compare`;
+  const kind = kindOf(result, choice);
+  const rankSet = choice === 'standing' ? result.standing?.rankSet : null;
+  const places = rankSet == null ? '' : `, ${placesText(rankSet, rankedCount(result))}`;
+  const head = `${choice === 'standing' ? 'Standing' : `${word[0].toUpperCase()}${word.slice(1)}`} ${numbers.interval(full, kind, headlineDigits)}${places}`;
+  const range = rangeOf(left);
+  if (range === null) return head;
+  const [low, high] = range.map((value) => numbers.headline(value, kind));
+  return `${head}; without any one ${one} from ${low} to ${high}`;
+}
+
+interface LeftOutFigure {
+  readonly choice: FigureChoice;
+  readonly left: readonly LeftOut[];
+  /** What is left out, many of them: `companies`. */
+  readonly many: string;
+}
+
+/** Without which one a figure moves most, and whether any changes what can be stated. */
+export function leftOutMeaning(
+  result: FitResult,
+  picture: LeftOutFigure,
+  numbers: NumberFormat,
+): string {
+  const { choice, left, many } = picture;
+  const full = chosenFigure(result, choice);
+  const word = choiceWord(result, choice);
+  const most = full === null ? null : mostMoving(left, full);
+  if (full === null || most === null) return `There is no ${word} without one of the ${many}.`;
+  const [to, from] = [most.estimate, full.estimate].map((value) =>
+    numbers.headline(value, kindOf(result, choice)),
+  );
+  return `The ${word} moves most without ${most.name}: to ${to} from ${from}. ${leftOutConsequence(result, picture)}`;
+}
+
+/** Whether a figure changes its side or leaves its interval when one is left out, in a sentence. */
+export function leftOutConsequence(
+  result: FitResult,
+  { choice, left, many }: LeftOutFigure,
+): string {
+  const full = chosenFigure(result, choice);
+  const word = choiceWord(result, choice);
+  if (full === null || rangeOf(left) === null)
+    return `There is no ${word} without one of the ${many}.`;
+  const turned = turning(left, full);
+  if (turned.length > 0)
+    return `Without ${named(turned, many)} the ${word} lies on the other side of zero.`;
+  const gone = leaving(left, full);
+  if (gone.length > 0)
+    return `Without ${named(gone, many)} the ${word} leaves the interval that it has with all.`;
+  const stay = full.low === null ? 'on its side of zero' : 'inside its interval';
+  return `Whichever of the ${many} is left out, the ${word} stays ${stay}.`;
+}

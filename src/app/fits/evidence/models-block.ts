@@ -1,0 +1,76 @@
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  inject,
+  input,
+  linkedSignal,
+} from '@angular/core';
+import type { Evidence, FitReply, FitResult } from '@contract';
+import { IntervalRows } from '../../charts/interval-rows/interval-rows';
+import { NumberFormat } from '../../ui/number-format';
+import { EvidenceBlock } from './evidence-block';
+import { chartText } from './evidence-ground';
+import { type FigureChoice, choiceWord, figureChoices, kindOf } from './figure-choice';
+import { FigureSwitch } from './figure-switch';
+import { modelRows, modelsMeaning, modelsTitle } from './model-words';
+import { questions } from './questions';
+
+/** "What if the model were another?": standing and slopes under each specification. */
+@Component({
+  selector: 'kv-models-block',
+  imports: [EvidenceBlock, FigureSwitch, IntervalRows],
+  template: `
+    @let drawn = picture();
+    <kv-evidence-block [question]="question" [meaning]="drawn.meaning">
+      <kv-figure-switch
+        legend="Shown in each model"
+        [choices]="choices()"
+        [chosen]="chosen()"
+        (chosenChange)="chosen.set($event)"
+      />
+      @defer (on viewport) {
+        <kv-interval-rows
+          [text]="drawn.text"
+          [rows]="drawn.rows"
+          [marks]="chosen() === 'standing' ? 'own' : 'model'"
+          [kind]="drawn.kind"
+          [figureName]="drawn.word"
+          rowName="model"
+        >
+          <h4 chartHeading>{{ drawn.text.title }}</h4>
+        </kv-interval-rows>
+      } @placeholder {
+        <div class="waiting"></div>
+      }
+    </kv-evidence-block>
+  `,
+  styleUrl: './block.css',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ModelsBlock {
+  readonly #numbers = inject(NumberFormat);
+
+  readonly reply = input.required<FitReply>();
+  readonly result = input.required<FitResult>();
+  readonly evidence = input.required<Evidence>();
+
+  protected readonly question = questions.models;
+  protected readonly choices = computed(() => figureChoices(this.result()));
+  protected readonly chosen = linkedSignal((): FigureChoice => this.choices()[0].choice);
+  protected readonly picture = computed(() => {
+    const [result, choice] = [this.result(), this.chosen()];
+    const { alternatives } = this.evidence();
+    const numbers = this.#numbers;
+    const kind = kindOf(result, choice);
+    const title = modelsTitle(result, alternatives, { choice, numbers });
+    const unit = kind === 'money' ? numbers.unitLabel() : '';
+    return {
+      kind,
+      rows: modelRows(result, alternatives, { choice, numbers }),
+      word: choiceWord(result, choice),
+      meaning: modelsMeaning(result, alternatives, choice),
+      text: chartText({ reply: this.reply(), result }, title, unit),
+    };
+  });
+}

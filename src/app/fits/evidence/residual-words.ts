@@ -1,0 +1,63 @@
+import type { FitResult, ResidualPoint, ResidualSummary } from '@contract';
+import { type NumberFormat } from '../../ui/number-format';
+import { levelKind } from '../../ui/model-form';
+import { counted } from '../../ui/phrases';
+
+/** Externally studentised; a row beyond it is far outside what its company's other rows lead to expect. */
+const far = 3;
+
+type Residuals = Pick<ResidualSummary, 'largest' | 'points' | 'of'>;
+
+function rowsBeyond({ points }: Residuals): number {
+  return points.filter(({ studentised }) => studentised !== null && Math.abs(studentised) > far)
+    .length;
+}
+
+function missOf(
+  { residual }: ResidualPoint,
+  { specification }: Pick<FitResult, 'specification'>,
+  numbers: NumberFormat,
+): string {
+  const side = residual < 0 ? 'below' : 'above';
+  if (specification.form === 'log')
+    return `${numbers.headline(Math.abs(Math.expm1(residual)), 'percent')} ${side}`;
+  return `${numbers.headline(Math.abs(residual))} ${numbers.unitLabel()} ${side}`;
+}
+
+/** Which row the model misses most, and how many lie far off. */
+export function residualMeaning(
+  residuals: Residuals,
+  result: Pick<FitResult, 'specification'>,
+  numbers: NumberFormat,
+): string {
+  const most = residuals.largest.at(0);
+  if (most === undefined) return 'Every row lies where the model expects it.';
+  const head = `${most.company} ${most.year} is missed most: ${missOf(most, result, numbers)} what is expected.`;
+  const beyond = rowsBeyond(residuals);
+  const rows = counted(residuals.of, 'row');
+  return beyond === 0
+    ? `${head} No row of ${rows} lies more than ${far} times its usual spread away.`
+    : `${head} ${beyond} of ${rows} ${beyond === 1 ? 'lies' : 'lie'} more than ${far} times the usual spread away: check their cells.`;
+}
+
+export function scatterTitle(residuals: Residuals): string {
+  const beyond = rowsBeyond(residuals);
+  return `${beyond === 0 ? 'No' : beyond} of ${counted(residuals.of, 'row')} beyond ${far} studentised residuals`.replace(
+    /^No of /,
+    'None of ',
+  );
+}
+
+/** Where residuals scatter most: `Tolvane scatters most, by 420`. */
+export function widestTitle(
+  groups: readonly { readonly label: string; readonly standardDeviation: number }[],
+  { specification }: Pick<FitResult, 'specification'>,
+  numbers: NumberFormat,
+): string {
+  let widest = groups.at(0);
+  if (widest === undefined) return 'There are no residuals';
+  for (const group of groups)
+    if (group.standardDeviation > widest.standardDeviation) widest = group;
+  const kind = levelKind(specification.form);
+  return `Residuals scatter most in ${widest.label}, by ${numbers.headline(widest.standardDeviation, kind)}`;
+}

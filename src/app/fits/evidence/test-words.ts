@@ -1,0 +1,60 @@
+import type { FitResult, TestResult, TestSummary } from '@contract';
+import type { NumberFormat } from '../../ui/number-format';
+import { confidenceText, counted } from '../../ui/phrases';
+import { degreesText, pCell } from './interval-choice-words';
+
+const letters: Readonly<Record<NonNullable<TestResult['distribution']>, string>> = {
+  F: 'F',
+  'chi-squared': 'χ²',
+  normal: 'z',
+  t: 't',
+};
+
+const holmWords: Readonly<Record<TestResult['holm'], string>> = {
+  rejects: 'rejects',
+  keeps: 'does not reject',
+  'shown-only': 'not judged',
+  none: '–',
+};
+
+export interface TestLine extends Pick<
+  TestResult,
+  'code' | 'name' | 'definition' | 'source' | 'reading' | 'caution' | 'reason'
+> {
+  readonly statistic: string;
+  readonly degreesOfFreedom: string;
+  readonly pValue: string;
+  readonly holm: string;
+}
+
+export function testLines(
+  { list }: Pick<TestSummary, 'list'>,
+  numbers: NumberFormat,
+): readonly TestLine[] {
+  return list.map((test) => {
+    const { statistic, distribution, degreesOfFreedom } = test;
+    const letter = distribution === null ? '' : `${letters[distribution]} `;
+    return {
+      ...test,
+      statistic: statistic === null ? 'n/a' : `${letter}${numbers.figure(statistic, 'plain')}`,
+      degreesOfFreedom:
+        degreesOfFreedom.length === 0
+          ? '–'
+          : degreesOfFreedom.map((value) => degreesText(value, numbers)).join(' and '),
+      pValue: test.pValue === null ? '–' : pCell(test.pValue),
+      holm: holmWords[test.holm],
+    };
+  });
+}
+
+/** How many tests were looked at, and how many of those that count reject when all are allowed for. */
+export function testsMeaning(
+  { lookedAt, inHolm, level, list }: TestSummary,
+  { warnings }: Pick<FitResult, 'warnings'>,
+): string {
+  const rejecting = list.filter(({ holm }) => holm === 'rejects').length;
+  const head = `${counted(lookedAt, 'test')} looked at, ${inHolm} of them judged together by Holm’s correction at ${confidenceText(level)}: ${rejecting === 0 ? 'none rejects' : `${rejecting} ${rejecting === 1 ? 'rejects' : 'reject'}`}.`;
+  return warnings.some(({ code }) => code === 'persistent-errors')
+    ? `${head} Errors persist here, so tests that assume they do not reject too often.`
+    : head;
+}
