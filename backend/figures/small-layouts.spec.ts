@@ -33,6 +33,15 @@ describe('slope intervals layout', () => {
     expect(rows[0].interval!.to - rows[0].interval!.from).toBeGreaterThan(60);
   });
 
+  it('runs an interval with an open end to the edge of the chart', () => {
+    const open = { ...capex, high: null, unbounded: 'high' as const };
+    const [row] = slopeIntervalsLayout([open], 330, format).rows;
+    expect(row.interval?.from).toBeLessThan(row.x);
+    expect(row.interval?.to).toBe(324);
+    const bare = { ...capex, low: null, high: null, unbounded: 'both' as const };
+    expect(slopeIntervalsLayout([bare], 330, format).rows[0].interval).toBeNull();
+  });
+
   it('folds the figures under a name that leaves no room for them', () => {
     const long = { ...capex, name: '1 more of property, plant and equipment' };
     const { rows } = slopeIntervalsLayout([capex, long], 330, format);

@@ -4,7 +4,12 @@ import { type ComponentFixture, TestBed } from '@angular/core/testing';
 import { provideRouter } from '@angular/router';
 import type { FitReply } from '@contract';
 import { ComparePage } from './compare-page';
-import { exampleFit, examplePanelVersion, exampleResult } from './testing/example-fit';
+import {
+  exampleFit,
+  exampleLogFit,
+  examplePanelVersion,
+  exampleResult,
+} from './testing/example-fit';
 
 describe('two fits on one page', () => {
   let fixture: ComponentFixture<ComparePage>;
@@ -63,6 +68,26 @@ describe('two fits on one page', () => {
     expect(cells('Regressors')).toEqual(['capex and book equity', 'capex', 'differs']);
     expect(words()).toMatch(/Only in 2c85db\s*Zethorin/);
     http.verify();
+  });
+
+  it('draws no scale for an amount and a percentage, and writes each in its own unit', async () => {
+    await open('a', 'b');
+    await answer(exampleLogFit);
+    expect(words()).toContain('a percentage and an amount are not comparable');
+    expect((fixture.nativeElement as HTMLElement).querySelector('kv-fit-comparison')).toBeNull();
+    expect(cells('Standing, EUR m beside percent')).toEqual([
+      '1,811 (1,172 to 2,450)',
+      '34.2 % (12.0 to 60.3 %)',
+    ]);
+    expect(cells('Slope of book equity, amount for 1 beside percent for 1 %')).toEqual([
+      '−0.5080 (−1.2000 to 0.1840)',
+      '0.3000 (0.0500 and up)',
+    ]);
+    expect(cells('Residual standard error, EUR m beside natural logs')).toEqual([
+      '325.2',
+      '0.2100',
+    ]);
+    expect(words()).toContain('R² within, each fit’s own effects taken out');
   });
 
   it('asks for two fits with results', async () => {

@@ -14,6 +14,7 @@ import type { ChartText } from '../charts/chart-text';
 import { FitComparison } from '../charts/fit-comparison/fit-comparison';
 import { CautionLine } from '../ui/caution-line';
 import { EmptyState } from '../ui/empty-state';
+import { asDifference, differenceKind, differenceUnit } from '../ui/model-form';
 import { NumberFormat } from '../ui/number-format';
 import { PageContext } from '../ui/page-context';
 import { PageHeader } from '../ui/page-header';
@@ -23,6 +24,7 @@ import { CompareStore } from './compare-store';
 import {
   type FinishedFit,
   comparisonFinding,
+  incomparableReason,
   memberDifference,
   specificationLines,
 } from './compare-words';
@@ -62,13 +64,12 @@ export class ComparePage {
     const view = this.store.view();
     if (view.kind !== 'ready') return null;
     const { a, b } = view;
-    const { panelVersion } = a.reply;
-    const hasOneCurrency = panelVersion.currency === b.reply.panelVersion.currency;
     return {
       a,
       b,
       finding: comparisonFinding(a, b, this.numbers),
-      hasOneCurrency,
+      incomparable: incomparableReason(a, b),
+      kind: differenceKind(a.reply.fit.form),
       lines: specificationLines(a, b),
       members: memberDifference(a.result, b.result),
       text: this.#text(a, b),
@@ -113,7 +114,7 @@ export class ComparePage {
     ];
     return {
       title: `Standing under fits ${shortHash(a.reply.fit.hash)} and ${shortHash(b.reply.fit.hash)}`,
-      caption: `${this.numbers.unitLabel()} · ${confidences.join(' and ')} intervals`,
+      caption: `${this.#units(a, b)} · ${confidences.join(' and ')} intervals`,
       source: [a, b]
         .map(
           ({ reply, result }) =>
@@ -123,15 +124,23 @@ export class ComparePage {
     };
   }
 
-  /** The standing in the first fit's unit, so that one scale serves both. */
+  #units(...fits: readonly FinishedFit[]): string {
+    const units = fits.map(({ reply }) => differenceUnit(reply.fit.form, this.numbers));
+    return [...new Set(units)].join(' beside ');
+  }
+
+  /** The standing in the first fit's unit, or as a percentage, so that one scale serves both. */
   #standing({ reply, result }: FinishedFit, first: FinishedFit) {
     const { standing, standingReason } = result;
+    const { form } = reply.fit;
     return {
       name: `${shortHash(reply.fit.hash)}, ${reply.fit.ownCompany}`,
       standing:
         standing === null
           ? null
-          : inUnit(standing, reply.panelVersion.unit, first.reply.panelVersion.unit),
+          : form === 'log'
+            ? asDifference(standing, form)
+            : inUnit(standing, reply.panelVersion.unit, first.reply.panelVersion.unit),
       ...(standingReason === undefined ? {} : { reason: standingReason }),
     };
   }

@@ -1,12 +1,20 @@
 import type { NumberFormat } from '../ui/number-format';
 import {
+  type FinishedFit,
   comparisonFinding,
+  incomparableReason,
   memberDifference,
   slopeNames,
   specificationLines,
 } from './compare-words';
 import { inUnit, moneyOf } from './panel-money';
-import { exampleFit, examplePanelVersion, exampleResult } from './testing/example-fit';
+import {
+  exampleFit,
+  exampleLogFit,
+  exampleLogResult,
+  examplePanelVersion,
+  exampleResult,
+} from './testing/example-fit';
 import { exampleNumbers } from './testing/example-numbers';
 
 describe('two fits beside each other', () => {
@@ -52,6 +60,20 @@ describe('two fits beside each other', () => {
     expect(comparisonFinding(a, b, numbers)).toBe(
       'Standing 1,810 (1,170 to 2,450) under fit 6f3a91, none under fit 2c85db: they differ in peer group, regressors and slope intervals',
     );
+  });
+
+  it('writes a percentage beside an amount, and says why no scale holds both', () => {
+    const inLogs: FinishedFit = { reply: exampleLogFit, result: exampleLogResult };
+    expect(comparisonFinding(a, inLogs, numbers)).toContain(
+      'Standing 1,810 (1,170 to 2,450) under fit 6f3a91, 34.2 % (12.0 to 60.3 %) under fit a41b7c',
+    );
+    expect(incomparableReason(a, inLogs)).toContain('not comparable');
+    expect(incomparableReason(a, a)).toBe('');
+    const swedish = {
+      ...a,
+      reply: { ...a.reply, panelVersion: { ...examplePanelVersion, currency: 'SEK' } },
+    };
+    expect(incomparableReason(a, swedish)).toContain('different currencies');
   });
 
   it('lists the slopes of either once', () => {

@@ -2,7 +2,7 @@ import type { FitReply, FitResult } from '@contract';
 import { type NumberFormat, headlineDigits } from '../ui/number-format';
 import { covarianceName } from '../ui/covariance-words';
 import { regressorWord } from './fit-words';
-import { moneyOf } from './panel-money';
+import { standingOf } from './panel-money';
 import { confidenceText, listed, shortHash } from '../ui/phrases';
 
 /** A fit that is done, as the comparison takes it. */
@@ -74,11 +74,23 @@ export function comparisonFinding(a: FinishedFit, b: FinishedFit, numbers: Numbe
     different.length === 0 ? 'made from the same' : `they differ in ${listed(different)}`;
   const standing = ({ reply, result }: FinishedFit): string => {
     const name = `fit ${shortHash(reply.fit.hash)}`;
+    const of = { form: reply.fit.form, panel: reply.panelVersion };
     return result.standing === null
       ? `none under ${name}`
-      : `${moneyOf(result.standing, reply.panelVersion, numbers, headlineDigits)} under ${name}`;
+      : `${standingOf(result.standing, of, numbers, headlineDigits)} under ${name}`;
   };
   return `Standing ${standing(a)}, ${standing(b)}: ${cause}`;
+}
+
+/** Why no scale can show the standings of both; empty where one can. */
+export function incomparableReason(a: FinishedFit, b: FinishedFit): string {
+  if (a.reply.fit.form !== b.reply.fit.form)
+    return 'One fit is in logs, the other in amounts: a percentage and an amount are not comparable, so one scale cannot show both.';
+  const isOneCurrency = a.reply.panelVersion.currency === b.reply.panelVersion.currency;
+  // Percentages have no currency.
+  return isOneCurrency || a.reply.fit.form === 'log'
+    ? ''
+    : 'The panels are in different currencies, so one scale cannot show both.';
 }
 
 /** Names of slopes of either fit, each once, those of the first first. */

@@ -1,6 +1,11 @@
 import type { NumberFormat } from '../ui/number-format';
-import { driftFinding, poolabilityText, warningRemarks } from './evidence-words';
-import { exampleResult } from './testing/example-fit';
+import {
+  driftFinding,
+  poolabilityCaution,
+  poolabilityText,
+  warningRemarks,
+} from './evidence-words';
+import { exampleLogResult, exampleResult } from './testing/example-fit';
 import { exampleNumbers } from './testing/example-numbers';
 
 describe('evidence in words', () => {
@@ -35,18 +40,34 @@ describe('evidence in words', () => {
     expect(driftFinding(exampleResult, 'Velmara', numbers)).toBe(
       'No clear drift in the gap to peers',
     );
-    expect(driftFinding({ drift }, 'Velmara', numbers)).toBe(
+    expect(driftFinding({ ...exampleResult, drift }, 'Velmara', numbers)).toBe(
       'Velmara has gained on its peers by 84.0 a year',
     );
     expect(
       driftFinding(
-        { drift: { ...drift, estimate: -84, low: -156, high: -12 } },
+        { ...exampleResult, drift: { ...drift, estimate: -84, low: -156, high: -12 } },
         'Velmara',
         numbers,
       ),
     ).toBe('Velmara has lost ground to its peers by 84.0 a year');
-    expect(driftFinding({ drift: null }, 'Velmara', numbers)).toBe(
+    expect(driftFinding({ ...exampleResult, drift: null }, 'Velmara', numbers)).toBe(
       'The gap of Velmara to its peers, year by year',
+    );
+  });
+
+  it('gives the drift of a fit in logs as a percentage', () => {
+    expect(driftFinding(exampleLogResult, 'Velmara', numbers)).toBe(
+      'Velmara has gained on its peers by 2.0 % a year',
+    );
+  });
+
+  it('names what the test of company levels is against where year effects are there', () => {
+    expect(poolabilityCaution(exampleResult)).toBe(
+      'The test assumes errors that do not persist from year to year.',
+    );
+    expect(poolabilityCaution(exampleLogResult)).toContain('against year effects alone');
+    expect(poolabilityText(exampleLogResult, numbers)).toContain(
+      'company levels and year effects with common slopes 96.3 %',
     );
   });
 

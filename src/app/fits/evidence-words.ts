@@ -1,16 +1,33 @@
 import type { FitResult } from '@contract';
+import { asDifference, differenceKind } from '../ui/model-form';
 import type { NumberFormat } from '../ui/number-format';
 import type { Remark } from '../ui/remark-list';
 
 const level = 0.05;
 
+/** What the test of company levels sets them against, and what it takes for granted. */
+export function poolabilityCaution({ specification }: Pick<FitResult, 'specification'>): string {
+  const against =
+    specification.effects === 'company,year'
+      ? 'Company levels beside year effects, against year effects alone. '
+      : '';
+  return `${against}The test assumes errors that do not persist from year to year.`;
+}
+
 /** Whether one line could serve all companies, and what each way explains. */
 export function poolabilityText(
-  { poolability, pooled, goodness }: Pick<FitResult, 'poolability' | 'pooled' | 'goodness'>,
+  {
+    poolability,
+    pooled,
+    goodness,
+    specification,
+  }: Pick<FitResult, 'poolability' | 'pooled' | 'goodness' | 'specification'>,
   numbers: NumberFormat,
 ): string {
   const share = (value: number): string => numbers.headline(value, 'percent');
-  const shares = `One pooled line explains ${share(pooled.rSquared)}, company levels with common slopes ${share(goodness.rSquared)}.`;
+  const levels =
+    specification.effects === 'company' ? 'company levels' : 'company levels and year effects';
+  const shares = `One pooled line explains ${share(pooled.rSquared)}, ${levels} with common slopes ${share(goodness.rSquared)}.`;
   const { pValue, pValueReason } = poolability;
   if (pValue === null)
     return `Not decided: ${pValueReason ?? 'the test has no p-value here'}. ${shares}`;
@@ -21,16 +38,17 @@ export function poolabilityText(
 
 /** Title of the gap path: its course in words. */
 export function driftFinding(
-  { drift }: Pick<FitResult, 'drift'>,
+  { drift, specification }: Pick<FitResult, 'drift' | 'specification'>,
   ownCompany: string,
   numbers: NumberFormat,
 ): string {
+  const { form } = specification;
   if (drift?.low == null || drift.high === null)
     return `The gap of ${ownCompany} to its peers, year by year`;
-  if (drift.low > 0)
-    return `${ownCompany} has gained on its peers by ${numbers.headline(drift.estimate)} a year`;
-  if (drift.high < 0)
-    return `${ownCompany} has lost ground to its peers by ${numbers.headline(-drift.estimate)} a year`;
+  const { estimate } = asDifference(drift, form);
+  const size = numbers.headline(Math.abs(estimate), differenceKind(form));
+  if (drift.low > 0) return `${ownCompany} has gained on its peers by ${size} a year`;
+  if (drift.high < 0) return `${ownCompany} has lost ground to its peers by ${size} a year`;
   return 'No clear drift in the gap to peers';
 }
 

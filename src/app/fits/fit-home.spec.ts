@@ -85,6 +85,9 @@ describe('the way to a fit', () => {
     const start = http.expectOne({ method: 'POST', url: '/api/fits' });
     expect(start.request.body).toEqual({
       peerGroupId: group.id,
+      effects: 'company',
+      form: 'levels',
+      lag: 0,
       slopes: 'cr2',
       confidence: 0.95,
       furtherRegressors: ['employees'],

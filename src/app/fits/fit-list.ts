@@ -17,7 +17,7 @@ import { NumberFormat } from '../ui/number-format';
 import { ProblemNotice } from '../ui/problem-notice';
 import { placesText, specificationText } from './fit-words';
 import { FitsListStore, type ListedFit } from './fits-list-store';
-import { moneyOf } from './panel-money';
+import { standingOf } from './panel-money';
 import { shortHash } from '../ui/phrases';
 
 const stateWords: Readonly<Record<Exclude<FitState, 'done'>, string>> = {
@@ -45,7 +45,10 @@ export class FitList {
   /** Its state: the list is read again when that changes. */
   readonly shownState = input<FitState>();
 
-  protected readonly unit = this.#numbers.unitLabel;
+  protected readonly unit = computed(() => {
+    const isAnyLog = this.rows().some(({ form }) => form === 'log');
+    return `${this.#numbers.unitLabel()}${isAnyLog ? ', of fits in logs in percent' : ''}`;
+  });
   protected readonly chosen = signal<readonly string[]>([]);
   protected readonly rows = computed(() => {
     const view = this.store.view();
@@ -82,11 +85,12 @@ export class FitList {
       ownCompany: fit.ownCompany,
       panel: panelVersion === undefined ? 'n/a' : `v${panelVersion.number}`,
       peers: peerGroup === undefined ? 'n/a' : `v${peerGroup.number}`,
+      form: fit.form,
       specification: specificationText(fit),
       standing:
         standing === null || panelVersion === undefined
           ? 'n/a'
-          : moneyOf(standing, panelVersion, this.#numbers),
+          : standingOf(standing, { form: fit.form, panel: panelVersion }, this.#numbers),
       places: rankSet === null ? 'n/a' : placesText(rankSet, null),
       companies: fit.companies,
       createdBy: fit.createdBy,

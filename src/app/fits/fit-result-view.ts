@@ -1,6 +1,6 @@
 import { DatePipe } from '@angular/common';
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
-import type { FitReply, FitResult, IntervalEstimate } from '@contract';
+import type { FitReply, FitResult } from '@contract';
 import { LineageStore } from '../api/lineage-store';
 import type { ChartText } from '../charts/chart-text';
 import { GapPath } from '../charts/gap-path/gap-path';
@@ -8,17 +8,31 @@ import { SlopeIntervals } from '../charts/slope-intervals/slope-intervals';
 import { StandingChart } from '../charts/standing-chart/standing-chart';
 import { CautionLine } from '../ui/caution-line';
 import { Figure } from '../ui/figure';
+import {
+  type Bounded,
+  asDifference,
+  asShownGaps,
+  differenceKind,
+  differenceUnit,
+  levelKind,
+} from '../ui/model-form';
 import { NumberFormat } from '../ui/number-format';
 import { RemarkList } from '../ui/remark-list';
 import { CompaniesTable } from './companies-table';
 import { covarianceName } from '../ui/covariance-words';
-import { driftFinding, poolabilityText, warningRemarks } from './evidence-words';
-import { placesText, regressorWord, regressorsText, testText } from './fit-words';
+import {
+  driftFinding,
+  poolabilityCaution,
+  poolabilityText,
+  warningRemarks,
+} from './evidence-words';
+import { placesText, regressorsText, testText } from './fit-words';
 import { GoodnessList } from './goodness-list';
 import { SampleNotes } from './sample-notes';
-import { slopeRemark, slopeSentence } from './slope-words';
+import { slopeChange, slopeRemark, slopeSentence } from './slope-words';
 import { SlopesTable } from './slopes-table';
-import { meanOfPeers, rankedCount, standingFinding, standingSource } from './standing-words';
+import { levelsSource, meanOfPeers, rankedCount, standingFinding } from './standing-words';
+import { YearEffectsTable } from './year-effects-table';
 import { confidenceText, shortHash, yearsText } from '../ui/phrases';
 
 /** A fit that is done: the standing first, then what it rests on. */
@@ -36,6 +50,7 @@ import { confidenceText, shortHash, yearsText } from '../ui/phrases';
     SlopeIntervals,
     SlopesTable,
     StandingChart,
+    YearEffectsTable,
   ],
   templateUrl: './fit-result-view.html',
   styleUrl: './fit-result-view.css',
@@ -49,7 +64,14 @@ export class FitResultView {
   readonly result = input.required<FitResult>();
 
   protected readonly ownCompany = computed(() => this.reply().fit.ownCompany);
-  protected readonly unit = this.numbers.unitLabel;
+  readonly #form = computed(() => this.result().specification.form);
+  protected readonly levelKind = computed(() => levelKind(this.#form()));
+  protected readonly differenceKind = computed(() => differenceKind(this.#form()));
+  /** Of the standing, the gap path and the drift. */
+  protected readonly unit = computed(() => differenceUnit(this.#form(), this.numbers));
+  protected readonly standing = computed(() => this.#asShown(this.result().standing));
+  protected readonly driftFigure = computed(() => this.#asShown(this.result().drift));
+  protected readonly gapPath = computed(() => asShownGaps(this.result().gapPath, this.#form()));
   protected readonly meanOfPeers = computed(() => meanOfPeers(this.result(), this.ownCompany()));
   protected readonly places = computed(() => {
     const { standing } = this.result();
@@ -57,17 +79,24 @@ export class FitResultView {
       ? null
       : placesText(standing.rankSet, rankedCount(this.result()));
   });
+  protected readonly levelsName = computed(() =>
+    this.#form() === 'log' ? 'Company levels in logs' : 'Company levels',
+  );
   protected readonly regressors = computed(() => regressorsText(this.result()));
   protected readonly slopes = computed(() =>
-    this.result().slopes.map((slope, index) => ({
-      ...slope,
-      name: `1 more of ${regressorWord(slope.name, index)}`,
-      figure: `slope.${index}`,
-      sentence: slopeSentence(slope, index, this.numbers),
-      remark: slopeRemark(slope, index, this.reply().panelVersion),
-    })),
+    this.result().slopes.map((slope, index) => {
+      const reading = { ...this.result().specification, index };
+      return {
+        ...slope,
+        name: slopeChange(slope, reading),
+        figure: `slope.${index}`,
+        sentence: slopeSentence(slope, reading, this.numbers),
+        remark: slopeRemark(slope, reading, this.reply().panelVersion),
+      };
+    }),
   );
   protected readonly poolability = computed(() => poolabilityText(this.result(), this.numbers));
+  protected readonly poolabilityCaution = computed(() => poolabilityCaution(this.result()));
   protected readonly poolabilityTest = computed(() =>
     testText(this.result().poolability, this.numbers),
   );
@@ -80,21 +109,22 @@ export class FitResultView {
   protected readonly texts = computed(() => {
     const result = this.result();
     const { fit, panelVersion, peerGroup } = this.reply();
-    const caption = standingSource(result, this.numbers);
+    const caption = levelsSource(result, this.numbers);
+    const readAs = this.#form() === 'log' ? 'percent for 1 % more · ' : '';
     const source = `Fit ${shortHash(fit.hash)} · ${panelVersion.panelName} v${panelVersion.number} · peer group v${peerGroup.number} · engine ${result.engine}`;
     const years = yearsText(result.sample.firstYear, result.sample.lastYear);
     const percent = confidenceText(result.specification.confidence);
     const of = (title: string, own = caption): ChartText => ({ title, caption: own, source });
     return {
       standing: of(standingFinding(result, fit.ownCompany, this.numbers)),
-      slopes: of('What goes with market value', `${percent} intervals · ${years}`),
+      slopes: of('What goes with market value', `${readAs}${percent} intervals · ${years}`),
       gapPath: of(this.drift(), `${this.unit()} · ${percent} intervals · ${years}`),
     };
   });
 
   /** Digits that an estimate shares with its bounds. */
-  protected digitsOf({ estimate, low, high }: IntervalEstimate): number {
-    return this.numbers.columnDigits([estimate, low, high]);
+  protected digitsOf({ estimate, low, high }: Bounded): number {
+    return this.numbers.columnDigits([estimate, low, high], this.differenceKind());
   }
 
   protected open(figure: string): void {
@@ -104,5 +134,9 @@ export class FitResultView {
   protected openCompany(company: string): void {
     const index = this.result().intercepts.findIndex((row) => row.company === company);
     if (index >= 0) this.open(`intercept.${index}`);
+  }
+
+  #asShown(value: Bounded | null): Bounded | null {
+    return value === null ? null : asDifference(value, this.#form());
   }
 }

@@ -1,16 +1,39 @@
-import type { FitResult, FitSummary } from '@contract';
+import type { Effects, FitResult, FitSummary, Lag } from '@contract';
 import type { NumberFormat } from '../ui/number-format';
+import { modelNotes } from '../ui/model-form';
 import { covarianceShort } from '../ui/covariance-words';
-import { confidenceText, listed } from '../ui/phrases';
+import { confidenceText, lagText, listed } from '../ui/phrases';
 
 /** Regressors in the reader's words: a fit's first two are always capex and book equity. */
 export function regressorWord(name: string, index: number): string {
   return index === 0 ? 'capex' : index === 1 ? 'book equity' : name;
 }
 
-/** What company levels are net of: `capex, book equity and employees`. */
-export function regressorsText({ slopes }: Pick<FitResult, 'slopes'>): string {
-  return listed(slopes.map(({ name }, index) => regressorWord(name, index)));
+/** A regressor as the model read it: `capex`, or `capex of the year before`. */
+export function readRegressor(name: string, index: number, lag: Lag): string {
+  return regressorWord(name, index) + lagText(lag);
+}
+
+/** What company levels are net of: `capex, book equity and employees`, with a lag `… of the year before`. */
+export function regressorsText({
+  slopes,
+  specification,
+}: Pick<FitResult, 'slopes' | 'specification'>): string {
+  return (
+    listed(slopes.map(({ name }, index) => regressorWord(name, index))) + lagText(specification.lag)
+  );
+}
+
+/** What the company levels come from: `market value on capex and book equity, in logs, year effects taken out`. */
+export function modelText(result: Pick<FitResult, 'slopes' | 'specification'>): string {
+  return [`market value on ${regressorsText(result)}`, ...modelNotes(result.specification)].join(
+    ', ',
+  );
+}
+
+/** The name of the R² that the slopes have for themselves. */
+export function withinName(effects: Effects): string {
+  return effects === 'company' ? 'R² within companies' : 'R² within, both effects taken out';
 }
 
 /** `place 2 to 5 of 13`, or `place 1 of 11`. */

@@ -2,7 +2,8 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, output } f
 import type { FitResult } from '@contract';
 import { type FigureKind, NumberFormat } from '../ui/number-format';
 import { Figure } from '../ui/figure';
-import { testText } from './fit-words';
+import { levelKind, levelUnit } from '../ui/model-form';
+import { testText, withinName } from './fit-words';
 
 interface Measure {
   readonly label: string;
@@ -65,12 +66,19 @@ export class GoodnessList {
   readonly opened = output<string>();
 
   protected readonly measures = computed((): readonly Measure[] => {
-    const { goodness } = this.result();
+    const { goodness, specification } = this.result();
+    const isLog = specification.form === 'log';
     const { f, fSlopes } = goodness;
     const plain = { kind: 'plain', detail: '' } as const;
     const test = (each: typeof f): string => testText(each, this.#numbers);
     return [
-      { ...plain, label: 'R²', value: goodness.rSquared, figure: 'r-squared' },
+      {
+        ...plain,
+        label: 'R²',
+        value: goodness.rSquared,
+        figure: 'r-squared',
+        detail: isLog ? 'of the log of market value' : '',
+      },
       {
         ...plain,
         label: 'R² adjusted',
@@ -79,14 +87,14 @@ export class GoodnessList {
       },
       {
         ...plain,
-        label: 'R² within companies',
+        label: withinName(specification.effects),
         value: goodness.withinRSquared,
         figure: 'within-r-squared',
       },
       {
-        label: `Residual standard error, ${this.#numbers.unitLabel()}`,
+        label: `Residual standard error, ${levelUnit(specification.form, this.#numbers)}`,
         value: goodness.residualStandardError,
-        kind: 'money',
+        kind: levelKind(specification.form),
         figure: 'residual-standard-error',
         detail: '',
       },

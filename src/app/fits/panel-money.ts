@@ -1,4 +1,6 @@
+import type { ModelForm } from '@contract';
 import { type MoneyUnit, unitRatio } from '@figures';
+import { asDifference } from '../ui/model-form';
 import { type NumberFormat, tableDigits } from '../ui/number-format';
 
 interface Bounded {
@@ -28,4 +30,20 @@ export function moneyOf(
   const shown = inUnit(value, panel.unit, numbers.panelUnit());
   const text = numbers.interval(shown, 'money', significant);
   return panel.currency === numbers.currency() ? text : `${panel.currency} ${text}`;
+}
+
+/** A standing of any fit as a table writes it: money of its panel, or a percentage where the fit is in logs. */
+export function standingOf(
+  standing: Bounded,
+  fit: {
+    readonly form: ModelForm;
+    readonly panel: { readonly currency: string; readonly unit: MoneyUnit };
+  },
+  numbers: NumberFormat,
+  significant = tableDigits,
+): string {
+  const { form, panel } = fit;
+  return form === 'log'
+    ? numbers.interval(asDifference(standing, form), 'percent', significant)
+    : moneyOf(standing, panel, numbers, significant);
 }

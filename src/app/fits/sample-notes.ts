@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import type { FitResult } from '@contract';
-import { counted, yearsText } from '../ui/phrases';
+import type { FitResult, Lag } from '@contract';
+import { counted, lagText, yearsText } from '../ui/phrases';
 
 const mostListed = 50;
 
@@ -17,7 +17,7 @@ const mostListed = 50;
         @for (row of listed(); track $index) {
           <li>
             <a [routerLink]="['/panel', panelVersionId()]" [queryParams]="{ row: row.row }"
-              >Row {{ row.row }}: {{ row.column }} missing</a
+              >Row {{ row.row }}: {{ row.column }}{{ row.of }} missing</a
             >
           </li>
         }
@@ -47,10 +47,17 @@ const mostListed = 50;
 })
 export class SampleNotes {
   readonly sample = input.required<FitResult['sample']>();
+  /** Column of the market value, which no lag moves. */
+  readonly outcome = input.required<string>();
+  readonly lag = input.required<Lag>();
   readonly panelVersionId = input.required<string>();
 
   protected readonly dropped = computed(() => this.sample().dropped);
-  protected readonly listed = computed(() => this.dropped().slice(0, mostListed));
+  protected readonly listed = computed(() =>
+    this.dropped()
+      .slice(0, mostListed)
+      .map((row) => ({ ...row, of: row.column === this.outcome() ? '' : lagText(this.lag()) })),
+  );
   protected readonly used = computed(() => {
     const { observations, companies, firstYear, lastYear, balanced } = this.sample();
     const evenness = balanced ? 'each company has every year' : 'not every company has every year';
@@ -58,6 +65,7 @@ export class SampleNotes {
   });
   protected readonly droppedWords = computed(() => {
     const rows = new Set(this.dropped().map(({ row }) => row)).size;
-    return `${counted(rows, 'row')} of these companies dropped out for a missing cell:`;
+    const cell = this.lag() === 0 ? 'a missing cell' : 'a missing cell, or one of the year before';
+    return `${counted(rows, 'row')} of these companies dropped out for ${cell}:`;
   });
 }

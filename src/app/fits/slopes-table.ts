@@ -3,7 +3,7 @@ import type { FitResult } from '@contract';
 import { Figure } from '../ui/figure';
 import { NumberFormat } from '../ui/number-format';
 import { covarianceName } from '../ui/covariance-words';
-import { pText, regressorWord } from './fit-words';
+import { pText, readRegressor, regressorWord } from './fit-words';
 import { confidenceText } from '../ui/phrases';
 
 /** The slopes as a table: estimate, interval, standard error, t with its degrees of freedom, p. */
@@ -14,7 +14,9 @@ import { confidenceText } from '../ui/phrases';
     <div class="kv-table-scroll" tabindex="0" role="region" aria-label="Slopes, table">
       <table class="kv-table">
         <caption>
-          Market value that goes with 1 more of each; intervals at
+          {{
+            reading()
+          }}; intervals at
           {{
             confidence()
           }},
@@ -38,8 +40,8 @@ import { confidenceText } from '../ui/phrases';
             <tr>
               <th scope="row">
                 {{ row.word }}
-                @if (row.word !== row.name) {
-                  <span class="kv-caption">{{ row.name }}</span>
+                @if (row.header) {
+                  <span class="kv-caption">{{ row.header }}</span>
                 }
               </th>
               <td class="kv-number">
@@ -73,14 +75,19 @@ export class SlopesTable {
   protected readonly confidence = computed(() =>
     confidenceText(this.result().specification.confidence),
   );
+  protected readonly reading = computed(() =>
+    this.result().specification.form === 'log'
+      ? 'Percent of market value that go with 1 % more of each'
+      : 'Market value that goes with 1 more of each',
+  );
   protected readonly covariance = computed(() => {
     const name = covarianceName(this.result().specification.slopes);
     return name.charAt(0).toLowerCase() + name.slice(1);
   });
   protected readonly rows = computed(() =>
     this.result().slopes.map((slope, index) => ({
-      name: slope.name,
-      word: regressorWord(slope.name, index),
+      word: readRegressor(slope.name, index, this.result().specification.lag),
+      header: regressorWord(slope.name, index) === slope.name ? '' : slope.name,
       estimate: slope.estimate,
       figure: `slope.${index}`,
       bounds: this.#numbers.bounds(slope, 'plain'),

@@ -1,7 +1,13 @@
 import type { FitResult } from '@contract';
 import type { NumberFormat } from '../ui/number-format';
-import { meanOfPeers, rankedCount, standingFinding, standingSource } from './standing-words';
-import { exampleResult } from './testing/example-fit';
+import {
+  levelsSource,
+  meanOfPeers,
+  rankedCount,
+  standingFinding,
+  standingSource,
+} from './standing-words';
+import { exampleLogResult, exampleResult } from './testing/example-fit';
 import { exampleNumbers } from './testing/example-numbers';
 
 describe('the finding of a fit', () => {
@@ -46,6 +52,31 @@ describe('the finding of a fit', () => {
     expect(standingFinding({ ...exampleResult, standing: null }, 'Velmara', numbers)).toBe(
       'Velmara has no standing among its peers',
     );
+  });
+
+  it('is a percentage in logs, whatever the unit of money', () => {
+    numbers.unit.set('thousands');
+    expect(standingFinding(exampleLogResult, 'Velmara', numbers)).toBe(
+      'Velmara stands 34.2 % (12.0 to 60.3 %) above its peers, place 1 to 2 of 3',
+    );
+    const standing = exampleLogResult.standing && {
+      ...exampleLogResult.standing,
+      estimate: Math.log(0.8),
+      low: Math.log(0.7),
+      high: Math.log(0.9),
+      rankSet: null,
+    };
+    expect(standingFinding({ ...exampleLogResult, standing }, 'Velmara', numbers)).toBe(
+      'Velmara stands 20.0 % (10.0 to 30.0 %) below its peers',
+    );
+  });
+
+  it('names logs, year effects and the year before in its source, with the unit of each chart', () => {
+    const model =
+      '95 % intervals · company intercepts of market value on capex and book equity of the year before, in logs, year effects taken out · 3 companies';
+    expect(standingSource(exampleLogResult, numbers)).toContain(`percent · ${model}`);
+    expect(levelsSource(exampleLogResult, numbers)).toContain(`natural logs · ${model}`);
+    expect(levelsSource(exampleResult, numbers)).toBe(standingSource(exampleResult, numbers));
   });
 
   it('follows the unit switch', () => {

@@ -44,6 +44,8 @@ export class Figure {
   /** Bounds of the interval; leave both out for a bare figure. Null says that there is no interval. */
   readonly low = input<number | null>();
   readonly high = input<number | null>();
+  /** Which bounds do not exist because nothing there is ruled out. */
+  readonly unbounded = input<'low' | 'high' | 'both'>();
   readonly kind = input<FigureKind>('money');
   /** Digits after the point, to align a column: NumberFormat.columnDigits(values). */
   readonly digits = input<number>();
@@ -69,7 +71,8 @@ export class Figure {
   protected readonly boundsText = computed(() => {
     const [estimate, low, high] = [this.value(), this.low(), this.high()];
     if (estimate === null || low === undefined || high === undefined) return '';
-    const bounds = this.#numbers.bounds({ estimate, low, high }, this.kind(), this.digits());
-    return low === null || high === null ? bounds : `(${bounds})`;
+    const value = { estimate, low, high, unbounded: this.unbounded() };
+    const bounds = this.#numbers.bounds(value, this.kind(), this.digits());
+    return low === null && high === null ? bounds : `(${bounds})`;
   });
 }

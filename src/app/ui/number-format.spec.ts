@@ -47,6 +47,31 @@ describe('NumberFormat', () => {
     );
   });
 
+  it('marks a share and both its bounds as percent, and never by the unit of money', () => {
+    const numbers = panelInMillions();
+    numbers.unit.set('billions');
+    const share = { estimate: 0.3418, low: 0.1196, high: 0.6032 };
+    expect(numbers.interval(share, 'percent', 3)).toBe('34.2 % (12.0 to 60.3 %)');
+    expect(numbers.interval({ ...share, low: null }, 'percent')).toBe('34.2 % (no interval)');
+    expect(numbers.bounds({ ...share, low: -0.05 }, 'percent')).toBe('\u22125.0 to 60.3 %');
+    expect(numbers.interval({ estimate: 0.0012, low: 0, high: 0.0024 }, 'percent', 3)).toBe(
+      '0.1 % (0.0 to 0.2 %)',
+    );
+  });
+
+  it('says at which end an interval is open', () => {
+    const numbers = panelInMillions();
+    const slope = { estimate: 2, low: 0.92, high: null, unbounded: 'high' as const };
+    expect(numbers.bounds(slope, 'plain')).toBe('0.920 and up');
+    expect(numbers.interval(slope, 'plain', 3)).toBe('2.00 (0.92 and up)');
+    expect(numbers.bounds({ estimate: 2, low: null, high: 3, unbounded: 'low' }, 'plain', 2)).toBe(
+      '3.00 and down',
+    );
+    expect(numbers.bounds({ estimate: 2, low: null, high: null, unbounded: 'both' }, 'plain')).toBe(
+      'no interval',
+    );
+  });
+
   it('tells zero from missing', () => {
     const numbers = panelInMillions();
     expect(numbers.figure(0)).toBe('–');

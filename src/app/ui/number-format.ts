@@ -22,6 +22,14 @@ import { PageContext } from './page-context';
  */
 export type FigureKind = 'money' | 'plain' | 'percent' | 'count';
 
+/** An estimate with its bounds; `unbounded` says which of them do not exist because nothing there is ruled out. */
+export interface IntervalValue {
+  readonly estimate: number;
+  readonly low: number | null;
+  readonly high: number | null;
+  readonly unbounded?: 'low' | 'high' | 'both';
+}
+
 /** Significant digits by place. */
 export const headlineDigits = 3;
 export const tableDigits = 4;
@@ -89,36 +97,32 @@ export class NumberFormat {
     return kind === 'percent' ? `${text} %` : text;
   }
 
-  /** `2,410 (1,280 to 3,540)`: an estimate with its interval, 3 significant digits in headlines, 4 in tables. */
-  interval(
-    value: { readonly estimate: number; readonly low: number | null; readonly high: number | null },
-    kind: FigureKind = 'money',
-    significant = tableDigits,
-  ): string {
+  /**
+   * `2,410 (1,280 to 3,540)`: an estimate with its interval, 3 significant digits in headlines, 4 in tables; a share is
+   * `34.2 % (12.1 to 60.4 %)`.
+   */
+  interval(value: IntervalValue, kind: FigureKind = 'money', significant = tableDigits): string {
     const [estimate, low, high] = this.#shownInterval(value, kind);
-    return intervalText(
-      estimate,
-      low,
-      high,
-      intervalDigits(estimate, low, high, significant),
-      this.locale(),
-    );
+    const digits = intervalDigits(estimate, low, high, significant);
+    if (kind !== 'percent' && value.unbounded === undefined)
+      return intervalText(estimate, low, high, digits, this.locale());
+    const shownDigits = kind === 'percent' ? Math.min(1, digits) : digits;
+    const text = fixedText(estimate, shownDigits, this.locale());
+    const bounds = this.bounds(value, kind, shownDigits);
+    return `${kind === 'percent' ? `${text} %` : text} (${bounds})`;
   }
 
-  /** `1,275 to 3,539`, with the digits of its estimate; `no interval` where there is none. */
-  bounds(
-    value: { readonly estimate: number; readonly low: number | null; readonly high: number | null },
-    kind: FigureKind = 'money',
-    digits?: number,
-  ): string {
+  /** `1,275 to 3,539`, with the digits of its estimate; `no interval` where there is none, `1,275 and up` with no upper end. */
+  bounds(value: IntervalValue, kind: FigureKind = 'money', digits?: number): string {
     const [estimate, low, high] = this.#shownInterval(value, kind);
+    const shownDigits =
+      digits ?? (kind === 'percent' ? 1 : intervalDigits(estimate, low, high, tableDigits));
+    const mark = kind === 'percent' ? ' %' : '';
+    const end = (bound: number) => fixedText(bound, shownDigits, this.locale()) + mark;
+    if (low !== null && value.unbounded === 'high') return `${end(low)} and up`;
+    if (high !== null && value.unbounded === 'low') return `${end(high)} and down`;
     if (low === null || high === null) return 'no interval';
-    return boundsText(
-      low,
-      high,
-      digits ?? intervalDigits(estimate, low, high, tableDigits),
-      this.locale(),
-    );
+    return boundsText(low, high, shownDigits, this.locale()) + mark;
   }
 
   /** Every digit, for the lineage drawer and copies. */
@@ -126,10 +130,7 @@ export class NumberFormat {
     return fullText(value === null ? null : this.shown(value, kind), this.locale());
   }
 
-  #shownInterval(
-    value: { readonly estimate: number; readonly low: number | null; readonly high: number | null },
-    kind: FigureKind,
-  ): [number, number | null, number | null] {
+  #shownInterval(value: IntervalValue, kind: FigureKind): [number, number | null, number | null] {
     const { estimate, low, high } = value;
     return [
       this.shown(estimate, kind),

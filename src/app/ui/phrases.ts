@@ -20,6 +20,11 @@ export function listed(words: readonly string[]): string {
     : `${words.slice(0, -1).join(', ')} and ${words[words.length - 1]}`;
 }
 
+/** What is said of regressors that the model reads a year late. */
+export function lagText(lag: 0 | 1 | undefined): string {
+  return lag === 1 ? ' of the year before' : '';
+}
+
 /** `95 %`. */
 export function confidenceText(confidence: number): string {
   return `${Number((confidence * 100).toPrecision(4))} %`;

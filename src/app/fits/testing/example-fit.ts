@@ -82,6 +82,7 @@ export const exampleResult: FitResult = {
     },
   ],
   yearEffects: null,
+  smearing: null,
   standing: {
     company: 'Velmara',
     estimate: 1811,
@@ -120,6 +121,73 @@ export const exampleResult: FitResult = {
   warnings: [],
 };
 
+/** The same companies in logs, with year effects and the year before: all differences are of logs. */
+export const exampleLogResult: FitResult = {
+  ...exampleResult,
+  specification: {
+    ...exampleResult.specification,
+    effects: 'company,year',
+    form: 'log',
+    lag: 1,
+    slopes: 'wild',
+    seed: 1,
+  },
+  slopes: [
+    {
+      name: 'capex',
+      estimate: 0.42,
+      standardError: 0.14,
+      low: 0.1,
+      high: 0.7,
+      statistic: 3,
+      degreesOfFreedom: null,
+      pValue: 0.012,
+    },
+    {
+      name: 'equity',
+      estimate: 0.3,
+      standardError: 0.2,
+      low: 0.05,
+      high: null,
+      unbounded: 'high',
+      statistic: 1.5,
+      degreesOfFreedom: null,
+      pValue: 0.04,
+    },
+  ],
+  slopeCovariance: null,
+  slopeCovarianceReason: 'The bootstrap has no covariance.',
+  intercepts: exampleResult.intercepts.map((row, index) => ({
+    ...row,
+    estimate: 1 + index / 10,
+    low: 0.5,
+    high: 1.5,
+  })),
+  yearEffects: [
+    { year: 2010, estimate: -0.1 },
+    { year: 2011, estimate: 0.1 },
+  ],
+  smearing: { factor: 1.02, own: 1.03 },
+  standing: exampleResult.standing && {
+    ...exampleResult.standing,
+    estimate: 0.294,
+    low: 0.113,
+    high: 0.472,
+    percent: { estimate: 0.3418, low: 0.1196, high: 0.6032 },
+  },
+  pairs: [
+    { company: 'Kesdrin', estimate: 0.5, standardError: 0.1, low: 0.2, high: 0.8, shown: -1 },
+    { company: 'Sarvane', estimate: 0.1, standardError: 0.1, low: -0.2, high: 0.4, shown: 0 },
+  ],
+  gapPath: [
+    { year: 2010, gap: 0.4, peers: 2 },
+    { year: 2011, gap: 0.2, peers: 1 },
+  ],
+  drift: { estimate: 0.02, standardError: 0.005, low: 0.005, high: 0.035, pValue: 0.02 },
+  goodness: { ...exampleResult.goodness, residualStandardError: 0.21 },
+  withoutCompany: [{ company: 'Kesdrin', slopes: [0.4, 0.3], standing: 0.1 }],
+};
+
 export const examplePanelVersion: PanelVersionSummary = {
   id: '0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a0011',
   panelId: '0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a0010',
@@ -151,6 +219,9 @@ export const exampleFit: FitReply = {
     panelVersionId: examplePanelVersion.id,
     ownCompany: 'Velmara',
     regressors: ['capex', 'equity'],
+    effects: 'company',
+    form: 'levels',
+    lag: 0,
     slopes: 'cr2',
     confidence: 0.95,
     standing: exampleResult.standing,
@@ -181,4 +252,18 @@ export const exampleDesk: DeskReply = {
   peerGroup: exampleFit.peerGroup,
   fit: exampleFit.fit,
   editionsWaiting: 0,
+};
+
+export const exampleLogFit: FitReply = {
+  ...exampleFit,
+  fit: {
+    ...exampleFit.fit,
+    hash: 'a41b7c09d3e2',
+    effects: 'company,year',
+    form: 'log',
+    lag: 1,
+    slopes: 'wild',
+    standing: exampleLogResult.standing,
+  },
+  result: { ...exampleLogResult, hash: 'a41b7c09d3e2' },
 };
