@@ -8,7 +8,7 @@ import {
   viewChildren,
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
-import { NumberFormat } from '../ui/number-format';
+import { type FigureKind, NumberFormat } from '../ui/number-format';
 import type { PanelCompany } from './peer-draft';
 
 import type { StandingsWithout } from './peers-store';
@@ -38,7 +38,7 @@ export class PeerTable {
   readonly side = input.required<'in' | 'out'>();
   readonly isReadOnly = input(false);
   /** Shows what leaving each out would change, by this fit. */
-  readonly without = input<Pick<StandingsWithout, 'fitName' | 'standing'> | null>(null);
+  readonly without = input<Pick<StandingsWithout, 'fitName' | 'kind' | 'standing'> | null>(null);
   readonly reasons = input<readonly string[]>([]);
   readonly moved = output<string>();
   readonly written = output<{ readonly company: string; readonly reason: string }>();
@@ -55,6 +55,7 @@ export class PeerTable {
       bookEquity: of('bookEquity'),
       standing: this.#numbers.columnDigits(
         this.rows().map(({ standingWithout }) => standingWithout ?? null),
+        this.without()?.kind,
       ),
     };
   });
@@ -64,11 +65,15 @@ export class PeerTable {
     const without = this.without();
     return without === null
       ? values
-      : `${values}; the standing with all peers is ${this.#numbers.interval(without.standing)} by fit ${without.fitName}`;
+      : `${values}; the standing with all peers is ${this.#numbers.interval(without.standing, without.kind)} by fit ${without.fitName}`;
   });
 
-  protected money(value: number | null | undefined, digits: number): string {
-    return this.#numbers.figure(value, 'money', digits);
+  protected money(
+    value: number | null | undefined,
+    digits: number,
+    kind: FigureKind = 'money',
+  ): string {
+    return this.#numbers.figure(value, kind, digits);
   }
 
   protected years({ firstYear, lastYear }: PanelCompany): string {

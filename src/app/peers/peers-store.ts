@@ -1,16 +1,13 @@
 import { Injectable, computed, inject, signal } from '@angular/core';
-import type {
-  IntervalEstimate,
-  PanelVersionSummary,
-  PeerGroupReply,
-  PeerGroupSummary,
-} from '@contract';
+import type { PanelVersionSummary, PeerGroupReply, PeerGroupSummary } from '@contract';
 import { firstValueFrom } from 'rxjs';
 import { ApiProblem, toApiProblem } from '../api/api-problem';
 import { DeskApi } from '../api/desk-api';
 import { FitsApi } from '../api/fits-api';
 import { PanelsApi } from '../api/panels-api';
 import { PeersApi } from '../api/peers-api';
+import { type Bounded, asDifference, differenceKind } from '../ui/model-form';
+import type { FigureKind } from '../ui/number-format';
 import {
   type DraftChoice,
   type PanelCompany,
@@ -42,8 +39,10 @@ export interface PeersGround {
 export interface StandingsWithout {
   /** First characters of the fit's hash. */
   readonly fitName: string;
+  /** How it writes its standings: money, or of a fit in logs a percentage. */
+  readonly kind: FigureKind;
   /** With every peer. */
-  readonly standing: IntervalEstimate;
+  readonly standing: Bounded;
   /** The own company's standing without each peer; null where none can be estimated. */
   readonly byCompany: ReadonlyMap<string, number | null>;
 }
@@ -243,10 +242,18 @@ export class PeersStore {
     if (fit?.peerGroupId !== peerGroupId) return null;
     const { result } = await firstValueFrom(this.#fits.read(fit.id));
     if (result?.standing == null) return null;
+    const { form } = result.specification;
+    const shown = (estimate: number) => asDifference({ estimate, low: null, high: null }, form);
     return {
       fitName: result.hash.slice(0, 6),
-      standing: result.standing,
-      byCompany: new Map(result.withoutCompany.map(({ company, standing }) => [company, standing])),
+      kind: differenceKind(form),
+      standing: asDifference(result.standing, form),
+      byCompany: new Map(
+        result.withoutCompany.map(({ company, standing }) => [
+          company,
+          standing === null ? null : shown(standing).estimate,
+        ]),
+      ),
     };
   }
 
