@@ -12,6 +12,8 @@ export type LineageSource = { readonly fitId: string } | { readonly editionId: s
 /** What the screen knows and the server does not: the figures of a plan that is not saved. */
 export type PlannedFigure = Pick<LineageReply, 'value'> & {
   readonly label?: string;
+  /** Where the screen knows better than the figure's key: a difference of logs is no money. */
+  readonly isMoney?: boolean;
   readonly inputs?: LineageReply['inputs'];
 };
 
@@ -90,6 +92,7 @@ function withPlanned(found: LineageReply, planned: PlannedFigure): LineageReply 
     ...found,
     value: planned.value,
     label: planned.label ?? found.label,
+    isMoney: planned.isMoney ?? found.isMoney,
     inputs: [...(planned.inputs ?? []), ...found.inputs],
   };
 }

@@ -1,10 +1,17 @@
-import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
 import type { EditionContent } from '@contract';
 import { GapPath } from '../charts/gap-path/gap-path';
 import { StandingChart } from '../charts/standing-chart/standing-chart';
-
-import { labelsOf } from './edition-words';
-import { listed } from '../ui/phrases';
+import {
+  asDifference,
+  asShownGaps,
+  differenceKind,
+  differenceUnit,
+  levelKind,
+  levelUnit,
+} from '../ui/model-form';
+import { NumberFormat } from '../ui/number-format';
+import { shareText, takenOut } from './edition-words';
 
 /** Where every company of an edition stands, and how the own company's gap to its peers went over the years. */
 @Component({
@@ -14,17 +21,19 @@ import { listed } from '../ui/phrases';
     <kv-standing-chart
       [text]="levelsText()"
       [intercepts]="content().fit.intercepts"
+      [kind]="levelKind()"
       [ownCompany]="content().ownCompany"
       [meanOfPeers]="meanOfPeers()"
       (companySelected)="openCompany($event)"
     >
       <h2 chartHeading>{{ levelsText().title }}</h2>
     </kv-standing-chart>
-    @if (content().fit.gapPath; as path) {
+    @if (gapPath(); as path) {
       <kv-gap-path
         [text]="gapText()"
         [years]="path"
-        [standing]="content().fit.standing"
+        [standing]="standing()"
+        [kind]="differenceKind()"
         (yearSelected)="figureOpened.emit('gap.' + $event)"
       >
         <h2 chartHeading>{{ gapText().title }}</h2>
@@ -52,9 +61,9 @@ import { listed } from '../ui/phrases';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class EditionLevels {
+  readonly #numbers = inject(NumberFormat);
+
   readonly content = input.required<EditionContent>();
-  /** Unit and confidence level: `EUR m · 95 % intervals`. */
-  readonly caption = input.required<string>();
   /** The key of the figure whose lineage is wanted. */
   readonly figureOpened = output<string>();
 
@@ -62,14 +71,27 @@ export class EditionLevels {
     const { number, fit } = this.content();
     return `Edition ${number}, fit ${fit.hash.slice(0, 6)}`;
   });
+  readonly #form = computed(() => this.content().fit.specification.form);
+  readonly #confidence = computed(
+    () => `${shareText(this.content().fit.specification.confidence)} intervals`,
+  );
+  protected readonly levelKind = computed(() => levelKind(this.#form()));
+  protected readonly differenceKind = computed(() => differenceKind(this.#form()));
+  protected readonly standing = computed(() => {
+    const { standing } = this.content().fit;
+    return standing === null ? null : asDifference(standing, this.#form());
+  });
+  protected readonly gapPath = computed(() =>
+    asShownGaps(this.content().fit.gapPath, this.#form()),
+  );
   protected readonly levelsText = computed(() => ({
-    title: `Company levels, ${listed(labelsOf(this.content()))} taken out`,
-    caption: this.caption(),
+    title: `Company levels${this.#form() === 'log' ? ' in logs' : ''}, ${takenOut(this.content())} taken out`,
+    caption: `${levelUnit(this.#form(), this.#numbers)} · ${this.#confidence()}`,
     source: this.#source(),
   }));
   protected readonly gapText = computed(() => ({
     title: 'Gap to the peers, year by year',
-    caption: this.caption(),
+    caption: `${differenceUnit(this.#form(), this.#numbers)} · ${this.#confidence()}`,
     source: this.#source(),
   }));
   protected readonly meanOfPeers = computed(() => {

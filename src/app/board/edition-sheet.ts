@@ -6,12 +6,15 @@ import { expectedValue, heldRegressors } from '@prediction';
 import type { PlannedFigure } from '../api/lineage-store';
 import { ExpectedPath } from '../charts/expected-path/expected-path';
 import { Figure } from '../ui/figure';
+import { asDifference, differenceKind } from '../ui/model-form';
 import { NumberFormat } from '../ui/number-format';
 import { namedParts } from '../ui/page-header';
+import { lagText } from '../ui/phrases';
 import { chosenFigure } from '../ui/plan/chosen-figure';
+import { PlanAssumptions } from '../ui/plan/plan-assumptions';
 import { expectedPathData } from '../ui/plan/plan-data';
 import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
-import { decidingYear, planFinding } from '../ui/plan/plan-words';
+import { decidingYear, expectedName, planFinding } from '../ui/plan/plan-words';
 import { planLineage } from '../ui/plan/planned-figure';
 import { type Remark, RemarkList } from '../ui/remark-list';
 import { EditionLevels } from './edition-levels';
@@ -20,6 +23,7 @@ import {
   confidentialityWords,
   editionHeadline,
   labelsOf,
+  modelText,
   placesText,
   sampleText,
   shareText,
@@ -38,7 +42,16 @@ export interface EditionFigure {
  */
 @Component({
   selector: 'kv-edition-sheet',
-  imports: [DatePipe, EditionLevels, EditionPeers, ExpectedPath, Figure, PlanTable, RemarkList],
+  imports: [
+    DatePipe,
+    EditionLevels,
+    EditionPeers,
+    ExpectedPath,
+    Figure,
+    PlanAssumptions,
+    PlanTable,
+    RemarkList,
+  ],
   templateUrl: './edition-sheet.html',
   styleUrl: './edition-sheet.css',
   host: { class: 'kv-sheet' },
@@ -58,6 +71,18 @@ export class EditionSheet {
   protected readonly headline = computed(() =>
     namedParts(editionHeadline(this.content(), this.#numbers), this.content().ownCompany),
   );
+  readonly #form = computed(() => this.content().fit.specification.form);
+  protected readonly isLog = computed(() => this.#form() === 'log');
+  protected readonly differenceKind = computed(() => differenceKind(this.#form()));
+  protected readonly standing = computed(() => {
+    const { standing } = this.content().fit;
+    return standing === null ? null : asDifference(standing, this.#form());
+  });
+  protected readonly model = computed(() => modelText(this.content().fit.specification));
+  protected readonly expectedName = computed(() => expectedName(this.#form()).toLowerCase());
+  protected readonly longestPlan = computed(() =>
+    Math.max(0, ...this.plans().map(({ years }) => years.length)),
+  );
   protected readonly labels = computed(() => labelsOf(this.content()));
   protected readonly level = computed(() => shareText(this.content().fit.specification.confidence));
   protected readonly unit = this.#numbers.unitLabel;
@@ -70,9 +95,10 @@ export class EditionSheet {
   );
   protected readonly slopes = computed(() => {
     const labels = this.labels();
+    const { lag } = this.content().fit.specification;
     return this.content().fit.slopes.map((slope, index) => ({
       ...slope,
-      label: labels[index],
+      label: `${this.isLog() ? '1 % more' : 'Each extra 1 of'} ${labels[index]}${lagText(lag)}`,
       key: `slope.${index}`,
     }));
   });
@@ -87,7 +113,9 @@ export class EditionSheet {
     const [first] = this.plans();
     const last = first && decidingYear(first.years);
     if (last === undefined) return 'Actual and expected market value';
-    return planFinding(first.name, this.content().ownCompany, last, this.#numbers);
+    const { ownCompany } = this.content();
+    const form = this.#form();
+    return planFinding(first.name, { company: ownCompany, form }, last, this.#numbers);
   });
   protected readonly path = computed(() => {
     const { fit } = this.content();
@@ -120,7 +148,7 @@ export class EditionSheet {
   protected openPlanned(wanted: PlannedFigureWanted): void {
     const basis = this.content().fit.prediction;
     if (basis === null) return;
-    const { key, ...planned } = planLineage(wanted, this.labels(), heldRegressors(basis));
+    const { key, ...planned } = planLineage(wanted, this.labels(), basis);
     this.figureOpened.emit({ key, planned });
   }
 }

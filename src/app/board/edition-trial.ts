@@ -8,10 +8,11 @@ import {
   output,
 } from '@angular/core';
 import type { EditionContent } from '@contract';
-import { type PredictionBasis, heldRegressors } from '@prediction';
+import type { PredictionBasis } from '@prediction';
 import { NumberFormat } from '../ui/number-format';
 import { withYearSet } from '../ui/plan/change-plan';
 import { FamiliarNotes } from '../ui/plan/familiar-notes';
+import { PlanAssumptions } from '../ui/plan/plan-assumptions';
 import { PlanEditor } from '../ui/plan/plan-editor';
 import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
 import { decidingYear, planFinding } from '../ui/plan/plan-words';
@@ -24,7 +25,7 @@ import { labelsOf, shareText } from './edition-words';
 /** Moves the plans of an edition without saving: the same prediction on the frozen fit, and no part of the edition. */
 @Component({
   selector: 'kv-edition-trial',
-  imports: [FamiliarNotes, PlanEditor, PlanTable],
+  imports: [FamiliarNotes, PlanAssumptions, PlanEditor, PlanTable],
   template: `
     @if (scenarios().length > 1) {
       <p role="group" aria-label="Scenario to try">
@@ -47,11 +48,13 @@ import { labelsOf, shareText } from './edition-words';
       [plan]="plan()"
       (planChanged)="plan.set($event)"
     />
+    <kv-plan-assumptions [basis]="basis()" [years]="plan().length" [refused]="reading().refused" />
     <div class="figures">
       <kv-plan-table
         [plans]="plans()"
         [labels]="labels()"
         [caption]="caption()"
+        [form]="basis().form"
         label="Figures of the tried plan by year"
         (opened)="openPlanned($event)"
       />
@@ -113,7 +116,7 @@ export class EditionTrial {
     const last = decidingYear(this.reading().years);
     return last === undefined
       ? this.#name()
-      : planFinding(this.#name(), this.basis().company, last, this.#numbers);
+      : planFinding(this.#name(), this.basis(), last, this.#numbers);
   });
   protected readonly caption = computed(
     () => `${this.#numbers.unitLabel()} · ${shareText(this.basis().confidence)} intervals`,
@@ -124,7 +127,7 @@ export class EditionTrial {
   }
 
   protected openPlanned(wanted: PlannedFigureWanted): void {
-    const { key, ...planned } = planLineage(wanted, this.labels(), heldRegressors(this.basis()));
+    const { key, ...planned } = planLineage(wanted, this.labels(), this.basis());
     this.figureOpened.emit({ key, planned });
   }
 }

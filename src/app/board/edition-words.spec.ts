@@ -1,8 +1,15 @@
 import { TestBed } from '@angular/core/testing';
 import type { EditionContent } from '@contract';
 import { NumberFormat } from '../ui/number-format';
-import { editionHeadline, placesText, sampleText, shortSha } from './edition-words';
-import { editionContent } from './testing/edition-content';
+import {
+  editionHeadline,
+  modelText,
+  placesText,
+  sampleText,
+  shortSha,
+  takenOut,
+} from './edition-words';
+import { editionContent, logEditionContent } from './testing/edition-content';
 
 describe('the words of an edition', () => {
   let numbers: NumberFormat;
@@ -31,6 +38,20 @@ describe('the words of an edition', () => {
     expect(editionHeadline(unclear, numbers)).toBe(
       'Nothing shows that the market values Velmara otherwise than what capex and book equity alone would suggest against its peers: 300 (−400 to 1,000)',
     );
+  });
+
+  it('give a standing in logs as a percentage, whatever the unit, and name the model', () => {
+    numbers.unit.set('billions');
+    expect(editionHeadline(logEditionContent, numbers)).toBe(
+      'The market values Velmara 34.0 % (12.0 to 60.0 %) above what capex and book equity of the year before alone would suggest against its peers',
+    );
+    expect(takenOut(logEditionContent)).toBe(
+      'capex and book equity of the year before and year effects',
+    );
+    expect(modelText(logEditionContent.fit.specification)).toBe(
+      'in logs, year effects taken out, regressors of the year before',
+    );
+    expect(modelText(editionContent.fit.specification)).toBe('');
   });
 
   it('follow the unit that the reader chose', () => {

@@ -1,7 +1,8 @@
 import type { EditionContent, EditionSummary, FitResult } from '@contract';
+import { type Bounded, asDifference, differenceKind, modelNotes } from '../ui/model-form';
 import type { NumberFormat } from '../ui/number-format';
 import { regressorLabels } from '../ui/plan/regressor-labels';
-import { listed } from '../ui/phrases';
+import { lagText, listed } from '../ui/phrases';
 
 /** An edition's regressors in words. */
 export function labelsOf(content: EditionContent): readonly string[] {
@@ -11,19 +12,37 @@ export function labelsOf(content: EditionContent): readonly string[] {
   );
 }
 
+/** What the company levels are net of: `capex and book equity of the year before and year effects`. */
+export function takenOut(content: EditionContent): string {
+  const { effects, lag } = content.fit.specification;
+  const years = effects === 'company' ? '' : ' and year effects';
+  return listed(labelsOf(content)) + lagText(lag) + years;
+}
+
+/** What of the model is not the plain one, for the line of facts; empty where nothing is. */
+export function modelText(
+  specification: Pick<FitResult['specification'], 'effects' | 'form' | 'lag'>,
+): string {
+  const lag = specification.lag === 1 ? ['regressors of the year before'] : [];
+  return [...modelNotes(specification), ...lag].join(', ');
+}
+
 /** The one sentence of an edition: where the market values the own company against its peers. */
 export function editionHeadline(content: EditionContent, numbers: NumberFormat): string {
-  const { standing } = content.fit;
-  const suggestion = `what ${listed(labelsOf(content))} alone would suggest against its peers`;
+  const { standing, specification } = content.fit;
+  const regressors = listed(labelsOf(content)) + lagText(specification.lag);
+  const suggestion = `what ${regressors} alone would suggest against its peers`;
   if (standing === null) return `${content.ownCompany} has no standing in this fit`;
-  const { estimate, low, high } = standing;
+  const shown = asDifference(standing, specification.form);
+  const kind = differenceKind(specification.form);
+  const { estimate, low, high } = shown;
   if (low !== null && high !== null && low <= 0 && high >= 0)
-    return `Nothing shows that the market values ${content.ownCompany} otherwise than ${suggestion}: ${numbers.interval(standing, 'money', 3)}`;
+    return `Nothing shows that the market values ${content.ownCompany} otherwise than ${suggestion}: ${numbers.interval(shown, kind, 3)}`;
   const isAbove = estimate >= 0;
-  const size = isAbove
-    ? { estimate, low, high }
+  const size: Bounded = isAbove
+    ? shown
     : { estimate: -estimate, low: negated(high), high: negated(low) };
-  return `The market values ${content.ownCompany} ${numbers.interval(size, 'money', 3)} ${isAbove ? 'above' : 'below'} ${suggestion}`;
+  return `The market values ${content.ownCompany} ${numbers.interval(size, kind, 3)} ${isAbove ? 'above' : 'below'} ${suggestion}`;
 }
 
 function negated(value: number | null): number | null {

@@ -2,7 +2,7 @@ import { TestBed } from '@angular/core/testing';
 import type { EditionContent } from '@contract';
 import { NumberFormat } from '../ui/number-format';
 import { fiveLines } from './five-lines';
-import { editionContent } from './testing/edition-content';
+import { editionContent, logEditionContent } from './testing/edition-content';
 
 describe('an edition in five lines', () => {
   let numbers: NumberFormat;
@@ -51,6 +51,11 @@ describe('an edition in five lines', () => {
     expect(line(falling, 3).text).toContain('falls by −30.0 (−45.0 to −15.0) a year');
     const short = withFit({ drift: null, driftReason: 'It has 6 rows' });
     expect(line(short, 3).text).toContain('It has 6 rows');
+  });
+
+  it('gives standing and drift of a fit in logs in percent', () => {
+    expect(line(logEditionContent, 2).text).toContain('stays between 25.0 % and 40.0 %');
+    expect(line(logEditionContent, 3).text).toContain('rises by 2.0 % (1.0 to 3.0 %) a year');
   });
 
   it('repeats where a plan leaves the familiar range, and how many peer groups were tried', () => {

@@ -1,4 +1,5 @@
 import type { EditionContent, FitResult } from '@contract';
+import { asDifference, differenceKind } from '../ui/model-form';
 import type { NumberFormat } from '../ui/number-format';
 import { familiarFinding } from '../ui/plan/plan-words';
 import type { Remark } from '../ui/remark-list';
@@ -59,22 +60,29 @@ function driversLine(fit: FitResult, numbers: NumberFormat): EvidenceLine {
   const dominated = fit.warnings.filter(({ code }) => code === 'dominated');
   if (dominated.length > 0)
     return { kind: 'caution', text: dominated.map(({ detail }) => detail).join(' ') };
-  const standings = fit.withoutCompany.flatMap(({ standing }) => standing ?? []);
+  const { form } = fit.specification;
+  const shown = (estimate: number) => asDifference({ estimate, low: null, high: null }, form);
+  const standings = fit.withoutCompany.flatMap(({ standing }) =>
+    standing === null ? [] : shown(standing).estimate,
+  );
+  const written = (standing: number) => numbers.headline(standing, differenceKind(form));
   const [low, high] = [Math.min(...standings), Math.max(...standings)];
   const range =
     standings.length === 0
       ? ''
-      : ` Leaving out one peer at a time, the standing stays between ${numbers.headline(low)} and ${numbers.headline(high)}.`;
+      : ` Leaving out one peer at a time, the standing stays between ${written(low)} and ${written(high)}.`;
   return { kind: 'fine', text: `No single company decides the slopes.${range}` };
 }
 
-function driftLine({ drift, driftReason }: FitResult, numbers: NumberFormat): EvidenceLine {
+function driftLine(fit: FitResult, numbers: NumberFormat): EvidenceLine {
+  const { drift, driftReason } = fit;
+  const { form } = fit.specification;
   if (drift === null)
     return {
       kind: 'caution',
       text: `Whether the gap to the peers drifts cannot be said: ${driftReason ?? 'too few years'}.`,
     };
-  const amount = `${numbers.interval(drift, 'money', 3)} a year`;
+  const amount = `${numbers.interval(asDifference(drift, form), differenceKind(form), 3)} a year`;
   if (drift.low === null || drift.high === null)
     return { kind: 'caution', text: `The gap to the peers moves by ${amount}.`, figure: 'drift' };
   if (drift.low <= 0 && drift.high >= 0)

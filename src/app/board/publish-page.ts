@@ -23,7 +23,7 @@ import { ProblemNotice } from '../ui/problem-notice';
 import { type Remark, RemarkList } from '../ui/remark-list';
 import { contentContext, fitSteps } from './edition-context';
 import { type EditionFigure, EditionSheet } from './edition-sheet';
-import { confidentialityWords } from './edition-words';
+import { confidentialityWords, modelText } from './edition-words';
 import { hindrances, previewContent } from './preview-content';
 import { PublishStore } from './publish-store';
 
@@ -63,6 +63,7 @@ export class PublishPage {
 
   protected readonly mostScenarios = mostScenarios;
   protected readonly confidentialityWords = confidentialityWords;
+  protected readonly modelText = modelText;
   protected readonly levels: readonly EditionContent['confidentiality'][] = [
     'confidential',
     'inside-information',

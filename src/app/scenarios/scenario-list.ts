@@ -1,9 +1,12 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import type { ScenarioReply } from '@contract';
+import type { PredictionBasis } from '@prediction';
 import { Figure } from '../ui/figure';
+import { asDifference, differenceKind } from '../ui/model-form';
 import { NumberFormat } from '../ui/number-format';
 import type { PlannedFigureWanted } from '../ui/plan/plan-table';
+import { expectedName } from '../ui/plan/plan-words';
 import { storedFigures } from './scenario-text';
 
 /** The fit's other scenarios: what each comes to by its last year. */
@@ -27,7 +30,7 @@ import { storedFigures } from './scenario-text';
           <tr>
             <th scope="col">Scenario</th>
             <th scope="col">By</th>
-            <th scope="col" class="kv-number">Expected value</th>
+            <th scope="col" class="kv-number">{{ expectedName() }}</th>
             <th scope="col" class="kv-number">Against base</th>
             <th scope="col">In the chart</th>
             @if (mayChange()) {
@@ -54,9 +57,10 @@ import { storedFigures } from './scenario-text';
               </td>
               <td class="kv-number">
                 <kv-figure
-                  [value]="row.last.difference.estimate"
-                  [low]="row.last.difference.low"
-                  [high]="row.last.difference.high"
+                  [kind]="differenceKind()"
+                  [value]="row.difference.estimate"
+                  [low]="row.difference.low"
+                  [high]="row.difference.high"
                   [digits]="differenceDigits()"
                   [hasPlus]="true"
                   [figure]="'difference.' + row.last.year"
@@ -123,6 +127,7 @@ export class ScenarioList {
 
   readonly scenarios = input.required<readonly ScenarioReply[]>();
   readonly caption = input.required<string>();
+  readonly form = input<PredictionBasis['form']>();
   /** Ids of those that the chart shows. */
   readonly drawn = input.required<readonly string[]>();
   readonly mayChange = input(false);
@@ -131,16 +136,22 @@ export class ScenarioList {
   readonly copyWanted = output<ScenarioReply>();
   readonly removalWanted = output<ScenarioReply>();
 
+  protected readonly expectedName = computed(() => expectedName(this.form()));
+  protected readonly differenceKind = computed(() => differenceKind(this.form()));
   protected readonly rows = computed(() =>
     this.scenarios().map((scenario) => {
       const plan = storedFigures(scenario);
-      return { scenario, plan, last: plan.years[plan.years.length - 1] };
+      const last = plan.years[plan.years.length - 1];
+      return { scenario, plan, last, difference: asDifference(last.difference, this.form()) };
     }),
   );
   protected readonly expectedDigits = computed(() =>
     this.#numbers.columnDigits(this.rows().map(({ last }) => last.expected.estimate)),
   );
   protected readonly differenceDigits = computed(() =>
-    this.#numbers.columnDigits(this.rows().map(({ last }) => last.difference.estimate)),
+    this.#numbers.columnDigits(
+      this.rows().map(({ difference }) => difference.estimate),
+      this.differenceKind(),
+    ),
   );
 }

@@ -14,12 +14,12 @@ import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
 import type { ScenarioReply } from '@contract';
 import type { ExpectedPathChoice } from '@figures';
-import { heldRegressors } from '@prediction';
 import { LineageStore } from '../api/lineage-store';
 import { DifferenceBars } from '../charts/difference-bars/difference-bars';
 import { ExpectedPath } from '../charts/expected-path/expected-path';
 import { CautionLine } from '../ui/caution-line';
 import { EmptyState } from '../ui/empty-state';
+import { levelKind, logUnit } from '../ui/model-form';
 import { NumberFormat } from '../ui/number-format';
 import { PageContext } from '../ui/page-context';
 import { PageHeader } from '../ui/page-header';
@@ -27,9 +27,10 @@ import { withYearSet } from '../ui/plan/change-plan';
 import { chosenFigure } from '../ui/plan/chosen-figure';
 import { FamiliarNotes } from '../ui/plan/familiar-notes';
 import { differenceData, expectedPathData } from '../ui/plan/plan-data';
+import { PlanAssumptions } from '../ui/plan/plan-assumptions';
 import { PlanEditor } from '../ui/plan/plan-editor';
 import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
-import { decidingYear, planFinding } from '../ui/plan/plan-words';
+import { decidingYear, expectedName, planFinding } from '../ui/plan/plan-words';
 import { planLineage } from '../ui/plan/planned-figure';
 import type { PlannedYear } from '../ui/plan/read-plan';
 import { ProblemNotice } from '../ui/problem-notice';
@@ -56,6 +57,7 @@ const unnamed = 'This plan';
     FamiliarNotes,
     MatButton,
     PageHeader,
+    PlanAssumptions,
     PlanEditor,
     PlanTable,
     ProblemNotice,
@@ -87,11 +89,16 @@ export class ScenariosPage {
   protected readonly isTried = signal(false);
   protected readonly drawn = signal<readonly string[]>([]);
   protected readonly name = computed(() => this.store.text().name.trim() || unnamed);
+  protected readonly form = computed(() => this.store.ground()?.basis.form);
+  protected readonly partsKind = computed(() => levelKind(this.form()));
+  protected readonly partsName = computed(() =>
+    this.form() === 'log' ? `difference, ${logUnit}` : 'difference',
+  );
   protected readonly last = computed(() => decidingYear(this.store.reading()?.years ?? []) ?? null);
   protected readonly finding = computed(() => {
     const [ground, last] = [this.store.ground(), this.last()];
     if (ground === null || last === null) return 'Scenarios';
-    return planFinding(this.name(), ground.basis.company, last, this.#numbers);
+    return planFinding(this.name(), ground.basis, last, this.#numbers);
   });
   protected readonly confidence = computed(() => {
     const share = this.store.ground()?.basis.confidence ?? 0;
@@ -143,18 +150,27 @@ export class ScenariosPage {
   });
   protected readonly pathText = computed(() => ({
     title: this.finding(),
-    caption: `Market value, ${this.caption()} of the expected value`,
+    caption: `Market value, ${this.caption()} of the ${expectedName(this.form()).toLowerCase()}`,
     source: this.source(),
   }));
   protected readonly parts = computed(() => {
     const [ground, last] = [this.store.ground(), this.last()];
-    return ground === null || last === null ? null : differenceData(last, ground.labels);
+    return ground === null || last === null
+      ? null
+      : differenceData(last, ground.labels, ground.basis.lag);
   });
-  protected readonly partsText = computed(() => ({
-    title: `What makes the difference to the base in FY${this.last()?.year ?? ''}`,
-    caption: this.caption(),
-    source: this.source(),
-  }));
+  protected readonly partsText = computed(() => {
+    const title = `What makes the difference to the base in FY${this.last()?.year ?? ''}`;
+    const source = this.source();
+    // Shares do not add up, logs do.
+    return this.form() === 'log'
+      ? {
+          title: `${title}, in ${logUnit}`,
+          caption: `${logUnit}, whose parts add up: 0.1 is 10.5 % more · ${this.confidence()}`,
+          source,
+        }
+      : { title, caption: this.caption(), source };
+  });
 
   constructor() {
     effect(() => {
@@ -175,7 +191,7 @@ export class ScenariosPage {
   protected openFigure(wanted: PlannedFigureWanted): void {
     const ground = this.store.ground();
     if (ground === null) return;
-    const { key, ...planned } = planLineage(wanted, ground.labels, heldRegressors(ground.basis));
+    const { key, ...planned } = planLineage(wanted, ground.labels, ground.basis);
     this.#lineage.open({ fitId: ground.fit.fit.id }, key, planned);
   }
 

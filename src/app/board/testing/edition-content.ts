@@ -1,5 +1,5 @@
 import type { EditionContent, EditionSummary } from '@contract';
-import { planBasis } from '../../ui/plan/testing/plan-basis';
+import { logBasis, planBasis } from '../../ui/plan/testing/plan-basis';
 
 const interval = (estimate: number, low: number, high: number) => ({
   estimate,
@@ -94,13 +94,14 @@ export const editionContent: EditionContent = {
         pValue: 0.004,
       },
     ],
-    slopeCovariance: planBasis.slopeCovariance.map((row) => [...row]),
+    slopeCovariance: (planBasis.slopeCovariance ?? []).map((row) => [...row]),
     intercepts: [
       { company: 'Kesdrin', ...interval(900, 700, 1100), deviation: -900, rows: 12 },
       { company: 'Sarvane', ...interval(1500, 1300, 1700), deviation: -300, rows: 12 },
       { company: 'Velmara', ...interval(3000, 2600, 3400), deviation: 1200, rows: 12 },
     ],
     yearEffects: null,
+    smearing: null,
     standing: {
       company: 'Velmara',
       ...interval(1800, 1170, 2430),
@@ -191,3 +192,66 @@ export const editionSummary: EditionSummary = {
   decision: null,
   supersededBy: null,
 };
+
+/** The same edition on a fit in logs with year effects and regressors of the year before. */
+export const logEditionContent: EditionContent = {
+  ...editionContent,
+  fit: {
+    ...editionContent.fit,
+    specification: {
+      ...editionContent.fit.specification,
+      effects: 'company,year',
+      form: 'log',
+      lag: 1,
+    },
+    slopes: editionContent.fit.slopes.map((slope) => ({
+      ...slope,
+      ...interval(0.42, 0.1, 0.7),
+    })),
+    intercepts: editionContent.fit.intercepts.map((row, index) => ({
+      ...row,
+      ...interval(1 + index / 10, 0.5, 1.5),
+    })),
+    standing: editionContent.fit.standing && {
+      ...editionContent.fit.standing,
+      ...interval(Math.log(1.34), Math.log(1.12), Math.log(1.6)),
+    },
+    gapPath: [{ year: 2025, gap: Math.log(1.5), peers: 2 }],
+    drift: { ...interval(Math.log(1.02), Math.log(1.01), Math.log(1.03)), pValue: 0.01 },
+    yearEffects: [
+      { year: 2024, estimate: -0.1 },
+      { year: 2025, estimate: 0.1 },
+    ],
+    smearing: { factor: 1.02, own: 1.01 },
+    withoutCompany: [
+      { company: 'Kesdrin', slopes: [0.4, 0.4], standing: Math.log(1.25) },
+      { company: 'Sarvane', slopes: [0.4, 0.4], standing: Math.log(1.4) },
+    ],
+    prediction: {
+      ...(structuredClone(logBasis) as NonNullable<EditionContent['fit']['prediction']>),
+      lag: 1,
+      yearEffects: { ownMean: 0, last: 0.1, lastYear: 2025, lastThree: 0, ownLast: 0.1 },
+      lambdas: logBasis.lambdas.map((row) => [...row, 0, 0.001, 0, 0.001]),
+      a: withYears(logBasis.a),
+      d: withYears(logBasis.d),
+    },
+  },
+  scenarios: editionContent.scenarios.map((scenario) => ({
+    ...scenario,
+    years: scenario.years.map((year) => ({
+      ...year,
+      difference: interval(Math.log(1.1), Math.log(1.05), Math.log(1.15)),
+    })),
+  })),
+};
+
+/** A form of the basis with four year effects more, which weigh nothing but by themselves. */
+function withYears(form: readonly (readonly number[])[]): number[][] {
+  const size = form.length + 4;
+  return Array.from({ length: size }, (_, row) =>
+    Array.from(
+      { length: size },
+      (_cell, column) => form.at(row)?.at(column) ?? (row === column ? 0.001 : 0),
+    ),
+  );
+}

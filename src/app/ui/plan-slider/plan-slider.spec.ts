@@ -68,6 +68,18 @@ describe('PlanSlider', () => {
     expect(find('[role=alert]').textContent).toContain('expected a number, as 1,240; found lots');
   });
 
+  it('takes no amount that has no log where the fit reads logs', async () => {
+    set({ isAboveZero: true, min: 10 });
+    await type('0');
+    expect(find('[role=alert]').textContent).toContain(
+      'expected an amount above zero, for the fit reads logs; found 0',
+    );
+    await type('-5');
+    expect(emitted).toEqual([]);
+    await type('0.5');
+    expect(emitted).toEqual([0.5]);
+  });
+
   it('reads and shows in the person’s unit and emits in the panel’s', async () => {
     TestBed.inject(NumberFormat).unit.set('billions');
     await fixture.whenStable();

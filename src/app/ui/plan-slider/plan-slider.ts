@@ -43,6 +43,8 @@ export class PlanSlider {
   /** What the own company and its peers have shown; the thick stretch. */
   readonly familiar = input<{ readonly low: number; readonly high: number } | null>(null);
   readonly kind = input<FigureKind>('money');
+  /** Whether only amounts above zero can be read, as where logs are taken of them. */
+  readonly isAboveZero = input(false);
   readonly isDisabled = input(false);
 
   readonly valueChanged = output<number>();
@@ -99,6 +101,12 @@ export class PlanSlider {
     const shown = readNumber(text);
     if (shown === undefined) {
       this.complaint.set(`expected a number, as ${this.text()}; found ${text.trim() || 'nothing'}`);
+      return;
+    }
+    if (this.isAboveZero() && !(shown > 0)) {
+      this.complaint.set(
+        `expected an amount above zero, for the fit reads logs; found ${text.trim()}`,
+      );
       return;
     }
     this.complaint.set('');

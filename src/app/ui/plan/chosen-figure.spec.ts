@@ -18,7 +18,7 @@ describe('the figure behind a point of the expected path', () => {
   const plans = [plan('Build-out', 150, [2026]), plan('Hold back', 80, [2026, 2027])];
   const lineage = (kind: 'actual' | 'base' | 'plan', index: number, year: number) => {
     const wanted = chosenFigure(planBasis, plans, { kind, plan: index, year });
-    return wanted && planLineage(wanted, ['capex', 'book equity'], planBasis.last.regressors);
+    return wanted && planLineage(wanted, ['capex', 'book equity'], planBasis);
   };
 
   it('is of the plan whose line was chosen, not of the first', () => {

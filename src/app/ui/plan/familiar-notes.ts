@@ -30,15 +30,19 @@ import { steppedInside } from './slider-range';
               {{ note.reason }}
             </p>
             <p class="inside">
-              Nearest plan inside: {{ note.nearest }}.
-              <button
-                type="button"
-                class="kv-link kv-no-print"
-                [attr.aria-label]="'Set FY' + note.year + ' to nearest inside'"
-                (click)="insideWanted.emit(note.inside)"
-              >
-                Set to nearest inside
-              </button>
+              @if (note.inside; as inside) {
+                Nearest plan inside: {{ note.nearest }}.
+                <button
+                  type="button"
+                  class="kv-link kv-no-print"
+                  [attr.aria-label]="'Set FY' + inside.year + ' to nearest inside'"
+                  (click)="insideWanted.emit(inside)"
+                >
+                  Set to nearest inside
+                </button>
+              } @else {
+                It reads FY{{ note.of }} as it was, which no plan changes.
+              }
             </p>
           </div>
         </li>
@@ -94,14 +98,16 @@ export class FamiliarNotes {
   protected readonly notes = computed(() =>
     this.years()
       .filter(({ familiar }) => familiar.kind !== 'inside')
-      .map(({ year, familiar }) => {
+      .map(({ year, of, familiar }) => {
         const values = steppedInside(this.basis(), familiar, this.years());
         const amounts = this.labels().map(
           (label, k) => `${label} ${this.#numbers.figure(values[k], regressorKind(k))}`,
         );
         return {
           year,
-          inside: { year, values },
+          of,
+          // With a lag the values to change are those of the year before, where that one is planned.
+          inside: of > this.basis().last.year ? { year: of, values } : null,
           finding: familiarFinding([year], familiar.kind),
           reason: familiarReason(this.basis(), this.labels(), familiar, this.#numbers),
           nearest: amounts.join(', '),

@@ -76,7 +76,7 @@ describe('a further regressor of a plan, which is no money', () => {
   it('is no money among the inputs of a planned figure', () => {
     const year = { ...plan[0], expected: none, difference: none, familiar: 'inside' as const };
     const wanted = { plan: { name: 'Build-out', years: [year] }, year, kind: 'expected' as const };
-    expect(planLineage(wanted, labels, [110, 1000, 12000]).inputs).toEqual([
+    expect(planLineage(wanted, labels, basis).inputs).toEqual([
       { label: 'Capex planned', value: 1000, isMoney: true, figure: null },
       { label: 'Book equity planned', value: 2000, isMoney: true, figure: null },
       { label: 'Employees planned', value: 12000, isMoney: false, figure: null },

@@ -1,5 +1,6 @@
 import type { DifferenceData, ExpectedPathData } from '@figures';
-import type { IntervalEstimate, OwnYear } from '@prediction';
+import type { IntervalEstimate, OwnYear, PredictionBasis } from '@prediction';
+import { lagText } from '../phrases';
 import { capitalised } from './plan-words';
 import type { ReadYear } from './read-plan';
 
@@ -30,11 +31,15 @@ export function expectedPathData(
   };
 }
 
-/** What the bars of a year's difference to the base draw; their terms add up to its total. */
-export function differenceData(year: ReadYear, labels: readonly string[]): DifferenceData {
+/** What the bars of a year's difference to the base draw; their terms add up to its total, in log form as logs do. */
+export function differenceData(
+  year: ReadYear,
+  labels: readonly string[],
+  lag: PredictionBasis['lag'],
+): DifferenceData {
   return {
     terms: year.parts.terms.map(({ estimate, low, high, intervalReason }, k) => ({
-      name: capitalised(labels[k]),
+      name: capitalised(labels[k]) + lagText(lag),
       estimate,
       low,
       high,

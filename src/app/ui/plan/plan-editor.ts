@@ -42,6 +42,7 @@ import { sliderRange } from './slider-range';
               [step]="cell.range.step"
               [familiar]="cell.range.familiar"
               [kind]="cell.kind"
+              [isAboveZero]="basis().form === 'log'"
               (valueChanged)="setValue(row.year, cell.regressor, $event)"
             />
           </div>

@@ -1,8 +1,9 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
-import type { FamiliarRange, IntervalEstimate } from '@prediction';
+import type { FamiliarRange, IntervalEstimate, PredictionBasis } from '@prediction';
 import { Figure } from '../figure';
+import { type Bounded, asDifference, differenceKind } from '../model-form';
 import { NumberFormat } from '../number-format';
-import { capitalised } from './plan-words';
+import { capitalised, expectedName } from './plan-words';
 import type { PlannedYear } from './read-plan';
 import { regressorKind } from './regressor-labels';
 
@@ -52,7 +53,7 @@ const familiarWords: Readonly<Record<FamiliarRange['kind'], string>> = {
             @for (name of regressors(); track name) {
               <th scope="col" class="kv-number">{{ name }}</th>
             }
-            <th scope="col" class="kv-number">Expected value</th>
+            <th scope="col" class="kv-number">{{ expectedName() }}</th>
             <th scope="col" class="kv-number">Against base</th>
             <th scope="col">Familiar range</th>
           </tr>
@@ -84,9 +85,10 @@ const familiarWords: Readonly<Record<FamiliarRange['kind'], string>> = {
                 </td>
                 <td class="kv-number">
                   <kv-figure
-                    [value]="year.difference.estimate"
-                    [low]="boundOf(year.difference, 'low')"
-                    [high]="boundOf(year.difference, 'high')"
+                    [kind]="differenceKind()"
+                    [value]="differenceOf(year).estimate"
+                    [low]="boundOf(year, 'low')"
+                    [high]="boundOf(year, 'high')"
                     [digits]="differenceDigits()"
                     [hasPlus]="true"
                     [figure]="'difference.' + year.year"
@@ -120,11 +122,15 @@ export class PlanTable {
   readonly labels = input.required<readonly string[]>();
   /** Unit and confidence level: `EUR m · 95 % intervals`. */
   readonly caption = input.required<string>();
+  /** Of the fit: in logs an expected value is a mean and a difference a percentage. */
+  readonly form = input<PredictionBasis['form']>();
   readonly label = input('Figures of the plan by year');
   readonly opened = output<PlannedFigureWanted>();
 
   protected readonly familiarWords = familiarWords;
   protected readonly regressorKind = regressorKind;
+  protected readonly expectedName = computed(() => expectedName(this.form()));
+  protected readonly differenceKind = computed(() => differenceKind(this.form()));
   protected readonly regressors = computed(() => this.labels().map(capitalised));
   readonly #years = computed(() => this.plans().flatMap(({ years }) => years));
   protected readonly valueDigits = computed(() =>
@@ -139,7 +145,10 @@ export class PlanTable {
     this.numbers.columnDigits(this.#years().map(({ expected }) => expected.estimate)),
   );
   protected readonly differenceDigits = computed(() =>
-    this.numbers.columnDigits(this.#years().map(({ difference }) => difference.estimate)),
+    this.numbers.columnDigits(
+      this.#years().map((year) => this.differenceOf(year).estimate),
+      this.differenceKind(),
+    ),
   );
   /** Why figures have no interval, each reason once. */
   protected readonly reasons = computed(() => [
@@ -151,9 +160,12 @@ export class PlanTable {
   ]);
 
   /** At the base there is nothing to be unsure about, and no interval to show. */
-  protected boundOf(difference: IntervalEstimate, end: 'low' | 'high'): number | null | undefined {
-    return difference.estimate === 0 && difference.standardError === 0
-      ? undefined
-      : difference[end];
+  protected boundOf(year: PlanTableYear, end: 'low' | 'high'): number | null | undefined {
+    const { estimate, standardError } = year.difference;
+    return estimate === 0 && standardError === 0 ? undefined : this.differenceOf(year)[end];
+  }
+
+  protected differenceOf({ difference }: PlanTableYear): Bounded {
+    return asDifference(difference, this.form());
   }
 }

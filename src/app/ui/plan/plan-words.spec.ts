@@ -1,9 +1,16 @@
 import { TestBed } from '@angular/core/testing';
 import { familiarRange } from '@prediction';
 import { NumberFormat } from '../number-format';
-import { decidingYear, familiarFinding, familiarReason, planFinding } from './plan-words';
+import {
+  decidingYear,
+  expectedName,
+  familiarFinding,
+  familiarReason,
+  planAssumptions,
+  planFinding,
+} from './plan-words';
 import { regressorLabels } from './regressor-labels';
-import { planBasis } from './testing/plan-basis';
+import { lagBasis, logBasis, planBasis } from './testing/plan-basis';
 import { listed } from '../phrases';
 
 describe('a plan in words', () => {
@@ -12,7 +19,7 @@ describe('a plan in words', () => {
   const finding = (estimate: number, low: number | null, high: number | null) =>
     planFinding(
       'Build-out',
-      'Velmara',
+      planBasis,
       { year: 2028, difference: { estimate, standardError: 1, low, high } },
       numbers,
     );
@@ -38,6 +45,34 @@ describe('a plan in words', () => {
     expect(finding(0, 0, 0)).toBe(
       'Build-out leaves the expected value of Velmara where the base has it in FY2028',
     );
+  });
+
+  it('says the difference of a fit in logs in percent', () => {
+    const difference = {
+      estimate: Math.log(0.9),
+      standardError: 0.03,
+      low: Math.log(0.85),
+      high: Math.log(0.95),
+    };
+    expect(planFinding('Build-out', logBasis, { year: 2028, difference }, numbers)).toBe(
+      'Build-out lowers the expected value of Velmara by 10.0 % (5.0 to 15.0 %) by FY2028',
+    );
+  });
+
+  it('says what a plan takes for granted, and nothing of a plain fit', () => {
+    const yearEffects = { ownMean: 0, last: 5, lastYear: 2025, lastThree: 2, ownLast: 5 };
+    expect(planAssumptions(planBasis, 3)).toEqual([]);
+    expect(planAssumptions({ ...lagBasis, yearEffects }, 3)).toEqual([
+      'This fit reads regressors of the year before: this year’s plan acts next year. FY2026 reads FY2025 as it was; the plan of FY2028 acts in FY2029, which is not shown.',
+      'Year effect of every planned year: that of FY2025, the last observed.',
+    ]);
+    expect(planAssumptions(logBasis, 1)).toEqual([
+      'This fit reads logs: expected values are means, brought back to amounts; differences are percentages. Every amount has to be above zero.',
+    ]);
+    expect([expectedName('log'), expectedName(undefined)]).toEqual([
+      'Expected value, mean',
+      'Expected value',
+    ]);
   });
 
   it('judges a plan by the last year that differs from the base', () => {

@@ -1,6 +1,7 @@
 import type { FamiliarRange, IntervalEstimate, PredictionBasis } from '@prediction';
+import { type Bounded, asDifference, differenceKind } from '../model-form';
 import type { FigureKind, NumberFormat } from '../number-format';
-import { listed } from '../phrases';
+import { lagText, listed } from '../phrases';
 import { regressorKind } from './regressor-labels';
 
 /** The year that a plan is judged by: the last one that differs from the base, or else its last. */
@@ -11,25 +12,25 @@ export function decidingYear<T extends { readonly difference: IntervalEstimate }
 }
 
 /**
- * A plan's finding: `Build-out lifts the expected value of Velmara by 285 (100 to 470) by FY2028`.
- *
- * Where the interval holds zero the sentence says `may`.
+ * A plan's finding: `Build-out lifts the expected value of Velmara by 285 (100 to 470) by FY2028`, in log form by
+ * `3.2 % (1.1 to 5.4 %)`. Where the interval holds zero the sentence says `may`.
  */
 export function planFinding(
   plan: string,
-  company: string,
+  { company, form }: Pick<PredictionBasis, 'company' | 'form'>,
   last: { readonly year: number; readonly difference: IntervalEstimate },
   numbers: NumberFormat,
 ): string {
-  const { difference, year } = last;
-  if (difference.estimate === 0)
+  const { year } = last;
+  if (last.difference.estimate === 0)
     return `${plan} leaves the expected value of ${company} where the base has it in FY${year}`;
+  const difference = asDifference(last.difference, form);
   const isLower = difference.estimate < 0;
   const size = isLower ? turned(difference) : difference;
   const isCertain = size.low !== null && size.low > 0;
   const verb = isLower ? 'lower' : 'lift';
   const says = isCertain ? `${verb}s` : `may ${verb}`;
-  return `${plan} ${says} the expected value of ${company} by ${numbers.interval(size, 'money', 3)} by FY${year}`;
+  return `${plan} ${says} the expected value of ${company} by ${numbers.interval(size, differenceKind(form), 3)} by FY${year}`;
 }
 
 const places: Readonly<Record<FamiliarRange['kind'], string>> = {
@@ -37,6 +38,35 @@ const places: Readonly<Record<FamiliarRange['kind'], string>> = {
   edge: 'at the edge of the familiar range',
   outside: 'outside the familiar range',
 };
+
+/** The header over expected values: in log form which of the two it is. */
+export function expectedName(form: PredictionBasis['form']): string {
+  return form === 'log' ? 'Expected value, mean' : 'Expected value';
+}
+
+/** What the model assumes of a plan beyond its amounts, a sentence each. */
+export function planAssumptions(basis: PredictionBasis, years: number): readonly string[] {
+  const { last, yearEffects } = basis;
+  const first = last.year + 1;
+  const lastPlanned = last.year + years;
+  return [
+    ...(basis.lag === 1
+      ? [
+          `This fit reads regressors${lagText(basis.lag)}: this year’s plan acts next year. FY${first} reads FY${last.year} as it was; the plan of FY${lastPlanned} acts in FY${lastPlanned + 1}, which is not shown.`,
+        ]
+      : []),
+    ...(yearEffects === undefined || yearEffects === null
+      ? []
+      : [
+          `Year effect of every planned year: that of FY${yearEffects.lastYear}, the last observed.`,
+        ]),
+    ...(basis.form === 'log'
+      ? [
+          'This fit reads logs: expected values are means, brought back to amounts; differences are percentages. Every amount has to be above zero.',
+        ]
+      : []),
+  ];
+}
 
 /** `FY2027 and FY2028 are at the edge of the familiar range`. */
 export function familiarFinding(years: readonly number[], kind: FamiliarRange['kind']): string {
@@ -82,10 +112,8 @@ function rangeText(
   return numbers.bounds({ estimate: range.high, ...range }, kind, digits);
 }
 
-function turned(value: IntervalEstimate): IntervalEstimate {
-  const { estimate, low, high } = value;
+function turned({ estimate, low, high }: Bounded): Bounded {
   return {
-    ...value,
     estimate: -estimate,
     low: high === null ? null : -high,
     high: low === null ? null : -low,

@@ -1,6 +1,6 @@
 import { readPlan } from './read-plan';
 import { tQuantile } from './t-quantile';
-import { planBasis, quantileOfTen } from './testing/plan-basis';
+import { lagBasis, logBasis, planBasis, quantileOfTen } from './testing/plan-basis';
 
 describe('readPlan', () => {
   it('reads the base, which holds the last actual values', () => {
@@ -28,6 +28,37 @@ describe('readPlan', () => {
       low: 0,
       high: 0,
     });
+  });
+
+  it('gives the mean in amounts and the difference in logs where the fit is in logs', () => {
+    const plan = [{ year: 2026, values: [121, 1000] }];
+    const [year] = readPlan(logBasis, plan, quantileOfTen).years;
+    // exp(ln 2700 + 0.4·ln 1.21)·1.02, and 0.4·ln 1.1 against a base of 110.
+    expect(year.expected.estimate).toBeCloseTo(2700 * 1.21 ** 0.4 * 1.02, 8);
+    expect(year.difference.estimate).toBeCloseTo(0.4 * Math.log(1.1), 12);
+    expect(year.parts.total).toBeCloseTo(year.difference.estimate, 12);
+  });
+
+  it('refuses an amount that has no log, and gives no figure for its year', () => {
+    const plan = [
+      { year: 2026, values: [0, 1000] },
+      { year: 2027, values: [120, 1000] },
+    ];
+    const { years, refused } = readPlan(logBasis, plan, quantileOfTen);
+    expect(years.map(({ year }) => year)).toEqual([2027]);
+    expect(refused.map(({ year }) => year)).toEqual([2026]);
+    expect(refused[0].reason).toContain('capex is not');
+  });
+
+  it('reads the plan of the year before with a lag, and the last actual values first', () => {
+    const plan = [
+      { year: 2026, values: [130, 1000] },
+      { year: 2027, values: [150, 1000] },
+    ];
+    const { years } = readPlan(lagBasis, plan, quantileOfTen);
+    expect(years.map(({ of }) => of)).toEqual([2025, 2026]);
+    expect(years.map(({ difference }) => difference.estimate)).toEqual([0, 40]);
+    expect(years[1].values).toEqual([150, 1000]);
   });
 
   it('takes its quantile of Student’s t from the package that the server uses', () => {

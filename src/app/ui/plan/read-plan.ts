@@ -17,6 +17,8 @@ export interface PlannedYear {
 
 /** What the fit says about one planned year. */
 export interface ReadYear extends PlannedYear {
+  /** The year whose values the model read for it: with a lag the one before. */
+  readonly of: number;
   readonly expected: IntervalEstimate;
   /** Against the base, which holds the last actual values; a difference of logs where the fit's form is log. */
   readonly difference: IntervalEstimate;
@@ -47,8 +49,9 @@ export function readPlan(
       refused.push({ year: predicted.year, reason: predicted.reason });
       return;
     }
-    const { year, expected, difference, familiar, toBase } = predicted;
-    years.push({ year, values: plan[index].values, expected, difference, familiar, parts: toBase });
+    const { year, of, expected, difference, familiar, toBase } = predicted;
+    const { values } = plan[index];
+    years.push({ year, of, values, expected, difference, familiar, parts: toBase });
   });
   return { base: expectedValue(basis, heldRegressors(basis)), years, refused };
 }

@@ -1,7 +1,7 @@
 import { familiarRange } from '@prediction';
 import { heldPlan, withValue } from './change-plan';
 import { sliderRange, steppedInside } from './slider-range';
-import { planBasis } from './testing/plan-basis';
+import { logBasis, planBasis } from './testing/plan-basis';
 
 describe('sliderRange', () => {
   const plan = heldPlan(planBasis, 2);
@@ -14,6 +14,15 @@ describe('sliderRange', () => {
     expect(sliderRange(low, 0, plan).min).toBe(0);
     const debt = { ...planBasis, ownRange: [{ low: -50, high: 150 }, planBasis.ownRange[1]] };
     expect(sliderRange(debt, 0, plan).min).toBe(-150);
+  });
+
+  it('stays above zero in logs, down to a smaller amount that was typed', () => {
+    const ownRange = [{ low: 10, high: 150 }, logBasis.ownRange[1]];
+    const low = { ...logBasis, ownRange };
+    const { min, step } = sliderRange(low, 0, plan);
+    expect(min).toBeGreaterThan(0);
+    expect(min).toBeLessThanOrEqual(step);
+    expect(sliderRange(low, 0, withValue(plan, 2026, 0, 0.25)).min).toBe(0.25);
   });
 
   it('counts its steps from the held amount, so that it can be reached again', () => {

@@ -18,7 +18,7 @@ const stepsWanted = 200;
 
 /**
  * Where a regressor's slider ends: half the own company's observed span below it and twice that above, never below
- * zero where nothing was, and as far as the plan itself reaches where an amount was typed beyond. The steps are counted
+ * zero where nothing was, above zero in log form, and as far as the plan itself reaches where an amount was typed beyond. The steps are counted
  * from the held amount, so that as many steps back as forth lead to it again.
  */
 export function sliderRange(
@@ -35,7 +35,8 @@ export function sliderRange(
   const low = Math.min(floor, ...planned);
   const high = Math.max(own.high + span, ...planned);
   const step = roundStep((high - low) / stepsWanted);
-  const min = startOfSteps(held, low, step, planned);
+  const start = startOfSteps(held, low, step, planned);
+  const min = basis.form === 'log' ? Math.min(start > 0 ? start : start + step, ...planned) : start;
   return {
     min,
     max: min + Math.ceil((high - min) / step) * step,

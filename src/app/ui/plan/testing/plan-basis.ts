@@ -56,6 +56,34 @@ export const planBasis: PredictionBasis = {
   ],
 };
 
+/** The same company in logs: 0.4 % for 1 % more capex, 0.2 % for 1 % more book equity; figures made up. */
+export const logBasis: PredictionBasis = {
+  ...planBasis,
+  form: 'log',
+  smear: 1.02,
+  coefficients: [4, 0.4, 0.2],
+  ownLevel: Math.log(2700),
+  ownMeans: [Math.log(100), Math.log(1000)],
+  lambdas: [
+    [0.01, 0.001, 0.001],
+    [-0.008, 0.001, -0.001],
+    [0.005, -0.001, 0.001],
+  ],
+  slopeCovariance: [
+    [0.0025, 0],
+    [0, 0.0004],
+  ],
+  inverseCrossProduct: [
+    [1, 0],
+    [0, 1],
+  ],
+  residualVariance: 0.01,
+  held: [110, 1000],
+};
+
+/** The plain one with regressors of the year before. */
+export const lagBasis: PredictionBasis = { ...planBasis, lag: 1, held: [110, 1000] };
+
 /** t(10) at 2.5 %, the only quantile that the basis asks for at 95 %. */
 export function quantileOfTen(): number {
   return -2.2281388519649385;
