@@ -28,6 +28,14 @@ export function evaluatePlan(
   return predict(basis, { years }, tQuantile).map((predicted): EvaluatedYear => {
     if (predicted.expected === null) throw new Invalid(predicted.reason);
     const { year, expected, difference, familiar } = predicted;
-    return { year, expected, difference, familiar: familiar.kind };
+    // Of the log form's figures the mean alone is stored: what is confirmed, frozen and hashed has one shape for all fits.
+    const { estimate, standardError, low, high, intervalReason } = expected;
+    const mean = { estimate, standardError, low, high };
+    return {
+      year,
+      expected: intervalReason === undefined ? mean : { ...mean, intervalReason },
+      difference,
+      familiar: familiar.kind,
+    };
   });
 }

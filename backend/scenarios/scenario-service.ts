@@ -50,7 +50,8 @@ export class ScenarioService {
   /**
    * Saves a new scenario with the figures that this server computes for its plan.
    *
-   * @throws {Invalid} for a plan that does not follow the last observed year or has the wrong number of values.
+   * @throws {Invalid} for a plan that does not follow the last observed year, has the wrong number of values, or in log
+   *   form one that is not above zero.
    */
   async save(actor: Actor, fitId: string, text: ScenarioText): Promise<Scenario> {
     return this.repositories.inWorkspace(actor.workspaceId, (tx) =>
@@ -195,6 +196,15 @@ function assertPlan(plan: readonly PlannedYear[], basis: PredictionBasis): void 
       found.push({
         pointer: `/plan/${index}/values`,
         detail: `expected ${basis.regressors.length} values, for ${basis.regressors.join(' and ')}; found ${values.length}`,
+      });
+    // Also of a last year that with a lag nothing reads yet.
+    if (basis.form === 'log')
+      values.forEach((value, regressor) => {
+        if (!(value > 0))
+          found.push({
+            pointer: `/plan/${index}/values/${regressor}`,
+            detail: `expected an amount above zero, for the fit reads logs; found ${value}`,
+          });
       });
     return found;
   });

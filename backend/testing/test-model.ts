@@ -1,5 +1,5 @@
 import { readFileSync } from 'node:fs';
-import type { FitReply } from '../contract';
+import type { FitReply, StartFit } from '../contract';
 import type { TestClient } from './test-client';
 
 /** Market value on investment and capital stock of 11 companies, 1935 to 1954: open data, see stats/golden. */
@@ -57,9 +57,13 @@ export async function savePeers(
   return idOf(saved, 201);
 }
 
-/** Starts a fit and waits for it, at most 20 seconds. */
-export async function runFit(analyst: TestClient, peerGroupId: string): Promise<FitReply> {
-  const started = await analyst.post('/api/fits', { peerGroupId });
+/** Starts a fit, the plain one unless a specification is given, and waits for it, at most 20 seconds. */
+export async function runFit(
+  analyst: TestClient,
+  peerGroupId: string,
+  specification: Partial<StartFit> = {},
+): Promise<FitReply> {
+  const started = await analyst.post('/api/fits', { ...specification, peerGroupId });
   if (started.status !== 202) throw new Error(`starting a fit answered ${started.text}`);
   const { fit } = started.body as FitReply;
   for (let look = 0; look < 200; look++) {
