@@ -15,6 +15,24 @@ export class FitPage extends CheckedPage {
     return this.read();
   }
 
+  /** Runs another fit on the same peers, with these of the form's choices taken. */
+  async runWith(...choices: readonly RegExp[]): Promise<this> {
+    const before = this.page.url();
+    await this.page.getByRole('button', { name: 'Change specification' }).click();
+    const dialog = this.page.getByRole('dialog', { name: 'Change specification' });
+    for (const name of choices) await dialog.getByRole('radio', { name }).check();
+    await dialog.getByRole('button', { name: 'Run the fit' }).click();
+    await expect(this.page).not.toHaveURL(before);
+    return this.read();
+  }
+
+  /** Year effects in their fold, a row a year. */
+  async yearEffects(): Promise<readonly string[]> {
+    await this.page.locator('kv-year-effects-table summary').click();
+    const rows = this.page.getByRole('region', { name: 'Year effects, table' }).getByRole('row');
+    return (await rows.allInnerTexts()).map(plainText).slice(1);
+  }
+
   async openNewest(): Promise<this> {
     await this.page.goto('/fit');
     return this.read();
