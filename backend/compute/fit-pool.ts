@@ -72,7 +72,7 @@ function answerBefore(evidence: Promise<EvidenceAnswer>, port: MessagePort): Pro
     port.once('message', resolve);
     const ended = (): void => {
       // What the worker sent before its end lies on this side already, told or not.
-      const waiting = receiveMessageOnPort(port) as { readonly message: FitAnswer } | undefined;
+      const waiting: { readonly message: FitAnswer } | undefined = receiveMessageOnPort(port);
       if (waiting === undefined) reject(new Error('a worker ended without its answer'));
       else resolve(waiting.message);
     };

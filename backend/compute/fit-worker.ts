@@ -1,7 +1,6 @@
-import { evidenceOf } from '../stats/evidence/evidence-of';
+import { bootstrapSummary, evidenceOf } from '../stats';
 import type { BootstrapAnswer, BootstrapTask, EvidenceAnswer, FitTask } from './messages';
 import { openSubject, refusalOf, storeShare } from './open-subject';
-import { bootstrapSummary } from '../stats/slopes/covariance-summaries';
 
 /** Runs one fit in a worker thread: tells its result, then computes its evidence. */
 export function runFit(task: FitTask): EvidenceAnswer {

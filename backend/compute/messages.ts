@@ -1,6 +1,12 @@
 import type { MessagePort } from 'node:worker_threads';
-import type { FitResult, PanelColumns, Specification, StatsErrorData } from '../stats';
-import type { CovarianceSummary, Evidence } from '../stats/evidence/evidence';
+import type {
+  CovarianceSummary,
+  Evidence,
+  FitResult,
+  PanelColumns,
+  Specification,
+  StatsErrorData,
+} from '../stats';
 
 /** What is to be fitted; the columns' buffers are transferred, not copied. */
 export interface FitSubject {

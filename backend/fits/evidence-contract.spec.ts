@@ -1,7 +1,5 @@
 import { Evidence as EvidenceReply, type Evidence as EvidenceOfContract } from '../contract';
-import { openFit, type Specification } from '../stats';
-import type { Evidence } from '../stats/evidence/evidence';
-import { evidenceOf } from '../stats/evidence/evidence-of';
+import { type Evidence, evidenceOf, openFit, type Specification } from '../stats';
 import { goldenPanel, plainSpecification, sha256 } from '../stats/testing/golden-panels';
 import { toEvidence } from './evidence-reply';
 

@@ -1,6 +1,6 @@
 import type { BootstrapRow } from '../../db/repositories/bootstraps-repository';
 import type { Bootstrap, Evidence as EvidenceOfContract, EvidenceReply } from '../contract';
-import type { Evidence } from '../stats/evidence/evidence';
+import type { Evidence } from '../stats';
 import type { EvidenceView } from './evidence-service';
 
 export function toEvidenceReply(view: EvidenceView): EvidenceReply {

@@ -2,8 +2,7 @@ import type { BootstrapRow } from '../../db/repositories/bootstraps-repository';
 import type { FitRow } from '../../db/repositories/fits-repository';
 import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import { NotFound } from '../errors/app-error';
-import { engineVersion } from '../stats';
-import type { CovarianceSummary, Evidence } from '../stats/evidence/evidence';
+import { type CovarianceSummary, engineVersion, type Evidence } from '../stats';
 
 /** The evidence of a fit, or why there is none. */
 export type EvidenceView =

@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import pg from 'pg';
 import type { TestDatabase } from '../../db/testing/test-database';
-import { type CovarianceSummary, EvidenceReply, FitReply } from '../contract';
+import { type CovarianceSummary, EvidenceReply, FitReply, LineageReply } from '../contract';
 import { signUp, type TestClient } from '../testing/test-client';
 import { importPanel, referenceMapping, runFit, savePeers } from '../testing/test-model';
 import { createMigratedDatabase, startTestServer, type TestServer } from '../testing/test-server';
@@ -208,5 +208,10 @@ describe('the evidence of a fit', () => {
     expect(wildOf(found)?.isChosen).toBeTrue();
     const done = FitReply.parse((await client.get(`/api/fits/${fit.id}`)).body);
     expect(done.result?.specification.seed).toBe(1);
+    const lineage = await client.get(`/api/fits/${fit.id}/lineage/intercept.0`);
+    const { cells } = LineageReply.parse(lineage.body);
+    expect(cells.rows.map(({ year }) => year))
+      .withContext('the year that the first lagged row comes from, too')
+      .toEqual(Array.from({ length: 20 }, (_, index) => 1935 + index));
   });
 });

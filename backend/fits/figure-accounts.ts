@@ -1,5 +1,6 @@
 import type { FTest, FitResult } from '../stats';
 import { bare, type FigureAccount, type FigureWriter, slopeInputs } from './figure-text';
+import { inModelWords } from './model-words';
 
 const interceptFormula =
   'The company’s mean market value minus its mean capex and mean book equity (and any further regressor) times their slopes. Its interval comes from how the company’s residuals move over the years, equal-weighted cosines calibrated for persistence.';
@@ -204,7 +205,8 @@ const writers: Readonly<Record<string, FigureWriter>> = {
 /** Accounts for the figure with this key; undefined when the fit has none. */
 export function accountFor(result: FitResult, figure: string): FigureAccount | undefined {
   const [kind, index] = figure.split('.');
-  return Object.hasOwn(writers, kind) ? writers[kind](result, Number(index)) : undefined;
+  const account = Object.hasOwn(writers, kind) ? writers[kind](result, Number(index)) : undefined;
+  return account === undefined ? undefined : inModelWords(account, kind, result.specification);
 }
 
 function plannedFigure(

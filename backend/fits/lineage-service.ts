@@ -33,7 +33,10 @@ export class LineageService {
   }
 }
 
-/** The rows of the sample and, of each, the columns of the specification. */
+/**
+ * The rows of the sample and, of each, the columns of the specification; with a lag also the rows of the year before,
+ * which the regressors come from.
+ */
 function cellsUsed(
   { fit, panelVersion, result }: FinishedFit,
   rows: PanelRows,
@@ -44,9 +47,12 @@ function cellsUsed(
     panelVersion.columns.findIndex((column) => column.name === name),
   );
   const dropped = new Set(result.sample.dropped.map(({ row }) => row));
-  const kept = rows.fileRow.flatMap((fileRow, row) =>
+  const sample = rows.fileRow.flatMap((fileRow, row) =>
     !dropped.has(fileRow) && (year === undefined || rows.year[row] === year) ? [row] : [],
   );
+  const { lag } = fit.specification;
+  // Rows come by company and year: a lagged row of the sample has its year before on the line above.
+  const kept = [...new Set(sample.flatMap((row) => (lag === 0 ? [row] : [row - 1, row])))];
   return {
     columns: indices.map((index) => panelVersion.columns[index]),
     rows: {

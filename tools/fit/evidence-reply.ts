@@ -1,4 +1,4 @@
-import type { Alternative, Evidence } from '../../backend/stats/evidence/evidence';
+import type { Alternative, Evidence } from '../../backend/stats';
 import { slopeReasons } from './slope-reasons';
 import { reasonsOf } from './with-reasons';
 

@@ -1,7 +1,6 @@
 import { parse as parseCsv } from 'csv-parse/sync';
 import { parseArgs } from 'node:util';
-import type { Specification } from '../../backend/stats';
-import { covarianceNames } from '../../backend/stats/slopes/covariance-names';
+import { covarianceNames, type Specification } from '../../backend/stats';
 import { FitProblem } from './fit-problem';
 
 /** What the command was asked for. */

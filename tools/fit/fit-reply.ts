@@ -1,5 +1,4 @@
-import type { DroppedRow, FitResult } from '../../backend/stats';
-import type { Evidence } from '../../backend/stats/evidence/evidence';
+import type { DroppedRow, Evidence, FitResult } from '../../backend/stats';
 import { evidenceReply } from './evidence-reply';
 import { slopeReasons } from './slope-reasons';
 import { type Json, withReasons } from './with-reasons';

@@ -1,5 +1,4 @@
-import type { FitResult } from '../../stats';
-import type { Evidence } from '../../stats/evidence/evidence';
+import type { Evidence, FitResult } from '../../stats';
 import type { RowUsed } from './rows-used';
 
 /** All that a replication pack is made of, as plain data. */
