@@ -25,7 +25,8 @@ import {
   valueMeasure,
   wildMeasure,
 } from './measures';
-import { type SimulatedPanel, trueSlope } from './simulate-panel';
+import type { SimulatedPanel } from './simulate-panel';
+import { trueSlope } from './company-paths';
 import { judge, judgeInterval, type Tallies } from './tally';
 import { keepsTrueSlope } from './wild-rejection';
 

@@ -1,12 +1,12 @@
 import { writeFile } from 'node:fs/promises';
-import { reportOptions } from './report-options';
+import { type ReportOptions, reportOptions } from './report-options';
 import { reportText } from './report-text';
 import { breaksPromise, shortfallsOf } from './shortfalls';
 import { shortfallLine } from './shortfall-line';
 import { simulateSettings } from './simulate-settings';
 
 const [target, ...args] = process.argv.slice(2);
-const { settings, replications, isWhole } = reportOptions(args);
+const { settings, replications, isWhole } = optionsOrEnd(args);
 const started = performance.now();
 const results = await simulateSettings(settings, {
   replications,
@@ -24,3 +24,14 @@ for (const shortfall of shortfallsOf(results)) {
 }
 if (isWhole) process.stderr.write(`Written to ${target}\n`);
 process.exitCode = breaksPromise(results) ? 1 : 0;
+
+/** Ends with status 2, and what was wrong, where the options cannot be read. */
+function optionsOrEnd(given: readonly string[]): ReportOptions {
+  try {
+    return reportOptions(given);
+  } catch (error) {
+    if (!(error instanceof RangeError || error instanceof TypeError)) throw error;
+    process.stderr.write(`${error.message}\n`);
+    process.exit(2);
+  }
+}

@@ -15,6 +15,7 @@ export const usualReplications = 4000;
  * `--settings NAME,…` and `--replications N`, for a quick look.
  *
  * @throws {RangeError} for a setting there is none of, or a number of replications out of bounds.
+ * @throws {TypeError} for another option.
  */
 export function reportOptions(args: readonly string[]): ReportOptions {
   const { values } = parseArgs({

@@ -9,7 +9,7 @@ import {
 import { cr0 } from '../../backend/stats/slopes/covariances/cr0';
 import type { SlopeGround } from '../../backend/stats/slopes/slope-ground';
 import { nominal } from './measures';
-import { trueSlope } from './simulate-panel';
+import { trueSlope } from './company-paths';
 
 /** Fewer than a fit's 9,999: the size of a test at .05 needs no finer p. */
 export const simulatedDraws = 999;
