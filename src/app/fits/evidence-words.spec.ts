@@ -1,10 +1,5 @@
 import type { NumberFormat } from '../ui/number-format';
-import {
-  driftFinding,
-  poolabilityCaution,
-  poolabilityText,
-  warningRemarks,
-} from './evidence-words';
+import { driftFinding, poolabilityCaution, warningRemarks } from './evidence-words';
 import { exampleLogResult, exampleResult } from './testing/example-fit';
 import { exampleNumbers } from './testing/example-numbers';
 
@@ -13,26 +8,6 @@ describe('evidence in words', () => {
 
   beforeEach(() => {
     numbers = exampleNumbers();
-  });
-
-  it('keeps company levels where one line is ruled out, and says what each explains', () => {
-    expect(poolabilityText(exampleResult, numbers)).toBe(
-      'No. Company levels differ, so each company keeps its own. One pooled line explains 75.3 %, company levels with common slopes 96.3 %.',
-    );
-  });
-
-  it('does not call companies equal where one line is not ruled out', () => {
-    const poolability = { ...exampleResult.poolability, pValue: 0.2 };
-    expect(poolabilityText({ ...exampleResult, poolability }, numbers)).toMatch(
-      /^The data do not rule it out/,
-    );
-  });
-
-  it('gives the reason where the test has no p-value', () => {
-    const poolability = { ...exampleResult.poolability, pValue: null, pValueReason: 'perfect fit' };
-    expect(poolabilityText({ ...exampleResult, poolability }, numbers)).toMatch(
-      /^Not decided: perfect fit\./,
-    );
   });
 
   it('tells a drift from none by its interval', () => {
@@ -66,9 +41,6 @@ describe('evidence in words', () => {
       'The test assumes errors that do not persist from year to year.',
     );
     expect(poolabilityCaution(exampleLogResult)).toContain('against year effects alone');
-    expect(poolabilityText(exampleLogResult, numbers)).toContain(
-      'company levels and year effects with common slopes 96.3 %',
-    );
   });
 
   it('says every warning, and that there is none', () => {

@@ -3,8 +3,6 @@ import { asDifference, differenceKind } from '../ui/model-form';
 import type { NumberFormat } from '../ui/number-format';
 import type { Remark } from '../ui/remark-list';
 
-const level = 0.05;
-
 /** What the test of company levels sets them against, and what it takes for granted. */
 export function poolabilityCaution({ specification }: Pick<FitResult, 'specification'>): string {
   const against =
@@ -12,28 +10,6 @@ export function poolabilityCaution({ specification }: Pick<FitResult, 'specifica
       ? 'Company levels beside year effects, against year effects alone. '
       : '';
   return `${against}The test assumes errors that do not persist from year to year.`;
-}
-
-/** Whether one line could serve all companies, and what each way explains. */
-export function poolabilityText(
-  {
-    poolability,
-    pooled,
-    goodness,
-    specification,
-  }: Pick<FitResult, 'poolability' | 'pooled' | 'goodness' | 'specification'>,
-  numbers: NumberFormat,
-): string {
-  const share = (value: number): string => numbers.headline(value, 'percent');
-  const levels =
-    specification.effects === 'company' ? 'company levels' : 'company levels and year effects';
-  const shares = `One pooled line explains ${share(pooled.rSquared)}, ${levels} with common slopes ${share(goodness.rSquared)}.`;
-  const { pValue, pValueReason } = poolability;
-  if (pValue === null)
-    return `Not decided: ${pValueReason ?? 'the test has no p-value here'}. ${shares}`;
-  return pValue < level
-    ? `No. Company levels differ, so each company keeps its own. ${shares}`
-    : `The data do not rule it out: company levels are not shown to differ. ${shares}`;
 }
 
 /** Title of the gap path: its course in words. */

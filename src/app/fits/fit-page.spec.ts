@@ -2,8 +2,9 @@ import { provideHttpClient } from '@angular/common/http';
 import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
 import { type ComponentFixture, TestBed } from '@angular/core/testing';
 import { provideRouter } from '@angular/router';
-import type { FitReply, Role } from '@contract';
+import type { EvidenceReply, FitReply, Role } from '@contract';
 import { SessionStore } from '../api/session-store';
+import { exampleEvidence } from './evidence/testing/example-evidence';
 import { FitPage } from './fit-page';
 import { exampleDesk, exampleFit, exampleResult } from './testing/example-fit';
 
@@ -30,6 +31,12 @@ describe('the Fit page', () => {
     fixture.detectChanges();
   }
 
+  let evidence: EvidenceReply;
+
+  beforeEach(() => {
+    evidence = { state: 'unavailable', reason: 'Written by an engine before it.' };
+  });
+
   afterEach(() => {
     fixture.destroy();
     http.verify();
@@ -52,6 +59,7 @@ describe('the Fit page', () => {
     http.expectOne('/api/fits').flush({ fits: [exampleFit.fit] });
     http.expectOne('/api/peer-groups').flush({ versions: [exampleFit.peerGroup] });
     http.expectOne('/api/panel-versions').flush({ versions: [exampleFit.panelVersion] });
+    for (const request of http.match(`${address}/evidence`)) request.flush(evidence);
     await settled(20);
   }
 
@@ -101,6 +109,38 @@ describe('the Fit page', () => {
     expect(page().querySelector('kv-companies-table caption')?.textContent).toMatch(
       /market value with\s+capex, book equity and employees taken out/,
     );
+  });
+
+  it('shows the warnings while there is no evidence, then what the evidence comes to', async () => {
+    start(['cfo']);
+    const warnings = [{ code: 'few-years' as const, detail: 'Only 6 fiscal years.' }];
+    const warned = { ...exampleFit, result: { ...exampleResult, warnings } };
+    await answer(warned);
+    await answerList();
+    const statement = (): string =>
+      page().querySelector('section[aria-labelledby=statement]')?.textContent ?? '';
+    expect(statement()).toContain('Only 6 fiscal years.');
+    fixture.destroy();
+    TestBed.resetTestingModule();
+
+    evidence = { state: 'ready', evidence: exampleEvidence, bootstrap: null };
+    start(['cfo']);
+    await answer(warned);
+    await answerList();
+    expect(statement()).toContain(exampleEvidence.verdict.sentence);
+    expect(statement()).not.toContain('Only 6 fiscal years.');
+  });
+
+  it('hands out the replication pack with the cautions beside it', async () => {
+    start(['cfo']);
+    await answer(exampleFit);
+    await answerList();
+    const pack = page().querySelector(`a[href="${address}/replication"]`);
+    expect(pack?.textContent).toBe('Export replication pack');
+    expect(pack?.hasAttribute('download')).toBeTrue();
+    expect(
+      page().querySelector('section[aria-labelledby=made] kv-caution-line')?.textContent,
+    ).toContain('All cautions');
   });
 
   it('opens the lineage of a figure that is selected', async () => {

@@ -1,5 +1,13 @@
 import { DatePipe } from '@angular/common';
-import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  effect,
+  inject,
+  input,
+  untracked,
+} from '@angular/core';
 import type { FitReply, FitResult } from '@contract';
 import { LineageStore } from '../api/lineage-store';
 import type { ChartText } from '../charts/chart-text';
@@ -20,13 +28,12 @@ import { NumberFormat } from '../ui/number-format';
 import { RemarkList } from '../ui/remark-list';
 import { CompaniesTable } from './companies-table';
 import { covarianceName } from '../ui/covariance-words';
-import {
-  driftFinding,
-  poolabilityCaution,
-  poolabilityText,
-  warningRemarks,
-} from './evidence-words';
-import { placesText, regressorsText, testText } from './fit-words';
+import { driftFinding, warningRemarks } from './evidence-words';
+import { EvidenceSection } from './evidence/evidence-section';
+import { EvidenceStore } from './evidence/evidence-store';
+import { QuestionList } from './evidence/question-list';
+import { ReplicationLink } from './evidence/replication-link';
+import { placesText, regressorsText } from './fit-words';
 import { GoodnessList } from './goodness-list';
 import { SampleNotes } from './sample-notes';
 import { slopeChange, slopeRemark, slopeSentence } from './slope-words';
@@ -42,10 +49,13 @@ import { confidenceText, shortHash, yearsText } from '../ui/phrases';
     CautionLine,
     CompaniesTable,
     DatePipe,
+    EvidenceSection,
     Figure,
     GapPath,
     GoodnessList,
+    QuestionList,
     RemarkList,
+    ReplicationLink,
     SampleNotes,
     SlopeIntervals,
     SlopesTable,
@@ -54,10 +64,12 @@ import { confidenceText, shortHash, yearsText } from '../ui/phrases';
   ],
   templateUrl: './fit-result-view.html',
   styleUrl: './fit-result-view.css',
+  providers: [EvidenceStore],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class FitResultView {
   readonly #lineage = inject(LineageStore);
+  readonly #evidence = inject(EvidenceStore);
   protected readonly numbers = inject(NumberFormat);
 
   readonly reply = input.required<FitReply>();
@@ -95,14 +107,17 @@ export class FitResultView {
       };
     }),
   );
-  protected readonly poolability = computed(() => poolabilityText(this.result(), this.numbers));
-  protected readonly poolabilityCaution = computed(() => poolabilityCaution(this.result()));
-  protected readonly poolabilityTest = computed(() =>
-    testText(this.result().poolability, this.numbers),
-  );
   protected readonly drift = computed(() =>
     driftFinding(this.result(), this.ownCompany(), this.numbers),
   );
+  /** What the evidence comes to; null while there is none, when the warnings stand in its place. */
+  protected readonly verdict = computed(() => {
+    const view = this.#evidence.view();
+    return view.kind === 'ready' ? view.evidence.verdict : null;
+  });
+  protected readonly evidenceHeading = [
+    { id: 'evidence', words: 'What speaks for and against it' },
+  ];
   protected readonly remarks = computed(() => warningRemarks(this.result()));
   protected readonly covariance = computed(() => covarianceName(this.reply().fit.slopes));
   protected readonly hash = computed(() => shortHash(this.reply().fit.hash));
@@ -121,6 +136,15 @@ export class FitResultView {
       gapPath: of(this.drift(), `${this.unit()} · ${percent} intervals · ${years}`),
     };
   });
+
+  constructor() {
+    effect(() => {
+      const fitId = this.reply().fit.id;
+      untracked(() => {
+        this.#evidence.show(fitId);
+      });
+    });
+  }
 
   /** Digits that an estimate shares with its bounds. */
   protected digitsOf({ estimate, low, high }: Bounded): number {

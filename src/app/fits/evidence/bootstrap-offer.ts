@@ -33,7 +33,7 @@ const firstSeed = 1;
           <button type="button" class="kv-link kv-no-print" (click)="started.emit(seed())">
             Run {{ draws }} draws
           </button>
-          <span class="kv-caption">of the wild bootstrap, seed {{ seed() }}.</span>
+          <span class="kv-caption">&ngsp;of the wild bootstrap, seed {{ seed() }}.</span>
         } @else {
           <span class="kv-caption">
             The wild bootstrap has not been run; an analyst can run its {{ draws }} draws.

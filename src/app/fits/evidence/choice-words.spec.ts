@@ -59,7 +59,7 @@ describe('the choices behind a fit in words', () => {
         'First differences cannot be taken: no company has two years in a row.',
       );
       expect(trendRows({ estimators }, judgedResult, 0)[1]).toEqual({
-        name: 'First differences: changes from year to year',
+        name: 'First differences',
         figure: null,
         reason: 'no company has two years in a row.',
       });
@@ -145,7 +145,7 @@ describe('the choices behind a fit in words', () => {
           : one,
       );
       expect(modelsMeaning(judgedResult, turned, 'standing')).toMatch(
-        /^The choice of model matters: the standing changes its side under company and year effects\./,
+        /^The choice of model matters: the standing changes its side under “with year effects”\./,
       );
     });
   });

@@ -14,12 +14,14 @@ import { EvidenceBlock } from './evidence-block';
 import { chartText } from './evidence-ground';
 import {
   type FigureChoice,
+  choiceUnit,
   choiceWord,
   chosenFigure,
   figureChoices,
   kindOf,
 } from './figure-choice';
 import { FigureSwitch } from './figure-switch';
+import { Finding } from './finding';
 import { withoutEachCompany } from './left-out';
 import { leftOutMeaning, leftOutTitle } from './left-out-words';
 import { questions } from './questions';
@@ -27,7 +29,7 @@ import { questions } from './questions';
 /** "Who drives it?": standing and slopes without each company. */
 @Component({
   selector: 'kv-drivers-block',
-  imports: [EvidenceBlock, FigureSwitch, LeaveOneOut],
+  imports: [EvidenceBlock, FigureSwitch, Finding, LeaveOneOut],
   template: `
     <kv-evidence-block [question]="question" [meaning]="meaning()">
       <kv-figure-switch
@@ -48,7 +50,7 @@ import { questions } from './questions';
             [figureName]="drawn.word"
             (companySelected)="companySelected.emit($event)"
           >
-            <h4 chartHeading>{{ drawn.text.title }}</h4>
+            <kv-finding chartHeading [text]="drawn.text" />
           </kv-leave-one-out>
         } @placeholder {
           <div class="waiting"></div>
@@ -88,14 +90,14 @@ export class DriversBlock {
     if (full === null || left.length === 0) return null;
     const kind = kindOf(result, choice);
     const title = leftOutTitle(result, { choice, left, one: 'company' }, this.#numbers);
-    const unit = kind === 'money' ? this.#numbers.unitLabel() : '';
+    const words = { panel: this.reply().panelVersion, numbers: this.#numbers };
     return {
       left,
       full,
       kind,
       fullName: `all ${result.sample.companies} companies`,
       word: choiceWord(result, choice),
-      text: chartText({ reply: this.reply(), result }, title, unit),
+      text: chartText({ reply: this.reply(), result }, title, choiceUnit(result, choice, words)),
     };
   });
 }

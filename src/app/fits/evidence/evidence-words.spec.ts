@@ -1,4 +1,5 @@
 import type { NumberFormat } from '../../ui/number-format';
+import { exampleLogResult } from '../testing/example-fit';
 import { exampleNumbers } from '../testing/example-numbers';
 import { outcomeAxis, regressorAxis } from './axis-words';
 import { figureChoices } from './figure-choice';
@@ -31,6 +32,12 @@ describe('the evidence in words', () => {
     it('keeps company levels where one line is ruled out, and says what each explains', () => {
       expect(oneLineMeaning(judgedResult, numbers)).toBe(
         'No: company levels differ, so each company keeps its own. One pooled line explains 75.3 %, company levels with common slopes 96.3 %.',
+      );
+    });
+
+    it('says that year effects share in what company levels explain', () => {
+      expect(oneLineMeaning(exampleLogResult, numbers)).toContain(
+        'company levels and year effects with common slopes 96.3 %',
       );
     });
 

@@ -1,7 +1,7 @@
 import type { FitResult } from '@contract';
-import type { IntervalFigure } from '@figures';
-import type { FigureKind } from '../../ui/number-format';
-import { asDifference, differenceKind } from '../../ui/model-form';
+import { type IntervalFigure, type MoneyUnit, unitText } from '@figures';
+import type { FigureKind, NumberFormat } from '../../ui/number-format';
+import { asDifference, differenceKind, differenceUnit } from '../../ui/model-form';
 import { regressorWord } from '../fit-words';
 
 /** Which figure a picture is of: the standing, or a slope by its place. */
@@ -42,4 +42,23 @@ export function choiceWord({ slopes }: Pick<FitResult, 'slopes'>, choice: Figure
   return choice === 'standing'
     ? 'standing'
     : `slope on ${regressorWord(slopes[choice].name, choice)}`;
+}
+
+/** What the figure is in, for the line under a title: `EUR m`, or what a slope is for. */
+export function choiceUnit(
+  { specification }: Pick<FitResult, 'specification'>,
+  choice: FigureChoice,
+  {
+    panel,
+    numbers,
+  }: {
+    readonly panel: { readonly currency: string; readonly unit: MoneyUnit };
+    readonly numbers: NumberFormat;
+  },
+): string {
+  if (choice === 'standing') return differenceUnit(specification.form, numbers);
+  if (specification.form === 'log') return 'percent of market value for 1 % more';
+  return choice < 2
+    ? 'market value for 1 more'
+    : `${unitText(panel.currency, panel.unit)} of market value for 1 more`;
 }

@@ -13,8 +13,9 @@ import { NumberFormat } from '../../ui/number-format';
 import { BootstrapOffer } from './bootstrap-offer';
 import { EvidenceBlock } from './evidence-block';
 import { chartText } from './evidence-ground';
-import { type FigureChoice, choiceWord, slopeChoices } from './figure-choice';
+import { type FigureChoice, choiceUnit, choiceWord, slopeChoices } from './figure-choice';
 import { FigureSwitch } from './figure-switch';
+import { Finding } from './finding';
 import {
   covarianceLines,
   covarianceRows,
@@ -26,7 +27,7 @@ import { questions } from './questions';
 /** "Which intervals?": every covariance side by side. */
 @Component({
   selector: 'kv-intervals-block',
-  imports: [BootstrapOffer, EvidenceBlock, FigureSwitch, IntervalRows],
+  imports: [BootstrapOffer, EvidenceBlock, FigureSwitch, Finding, IntervalRows],
   templateUrl: './intervals-block.html',
   styleUrl: './block.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -60,10 +61,11 @@ export class IntervalsBlock {
   protected readonly picture = computed(() => {
     const [evidence, result, index] = [this.evidence(), this.result(), this.#index()];
     const title = intervalsTitle(evidence, result, { index, numbers: this.#numbers });
+    const words = { panel: this.reply().panelVersion, numbers: this.#numbers };
     return {
       rows: covarianceRows(evidence, result, index),
       word: choiceWord(result, index),
-      text: chartText({ reply: this.reply(), result }, title, ''),
+      text: chartText({ reply: this.reply(), result }, title, choiceUnit(result, index, words)),
     };
   });
   protected readonly lines = computed(() =>

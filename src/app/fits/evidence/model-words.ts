@@ -1,7 +1,7 @@
 import type { Alternative, FitResult } from '@contract';
 import type { IntervalFigure, IntervalRow } from '@figures';
 import { type FigureKind, type NumberFormat, headlineDigits } from '../../ui/number-format';
-import { counted } from '../../ui/phrases';
+import { counted, listed } from '../../ui/phrases';
 import { placesText } from '../fit-words';
 import { type FigureChoice, choiceWord, chosenFigure, kindOf } from './figure-choice';
 
@@ -9,9 +9,9 @@ const names: Readonly<Record<Alternative['code'], string>> = {
   'this-fit': 'As specified',
   pooled: 'One pooled line',
   'fixed-effects': 'Company effects',
-  'year-effects': 'Company and year effects',
-  'log-form': 'Company effects, log form',
-  lag: 'Company effects, regressors of the year before',
+  'year-effects': 'With year effects',
+  'log-form': 'In log form',
+  lag: 'Regressors of the year before',
   'random-effects': 'Random effects',
 };
 
@@ -144,8 +144,8 @@ export function modelsMeaning(
     ({ figure }) => Math.sign(figure.estimate) * Math.sign(own.estimate) < 0,
   );
   const sure = figures.filter(({ figure: { low, high } }) => (low ?? -1) > 0 || (high ?? 1) < 0);
-  const counts = `In ${sure.length} of ${counted(figures.length, 'model')} the interval excludes zero.`;
+  const counts = `In ${sure.length === 0 ? 'none' : sure.length} of ${counted(figures.length, 'model')} the interval excludes zero.`;
   return turned.length === 0
     ? `The ${word} lies on the same side of zero in every model that gives one. ${counts}`
-    : `The choice of model matters: the ${word} changes its side under ${turned.map(({ code }) => names[code].toLowerCase()).join('; ')}. ${counts}`;
+    : `The choice of model matters: the ${word} changes its side under ${listed(turned.map(({ code }) => `“${names[code].toLowerCase()}”`))}. ${counts}`;
 }

@@ -11,15 +11,16 @@ import { IntervalRows } from '../../charts/interval-rows/interval-rows';
 import { NumberFormat } from '../../ui/number-format';
 import { EvidenceBlock } from './evidence-block';
 import { chartText } from './evidence-ground';
-import { type FigureChoice, choiceWord, figureChoices, kindOf } from './figure-choice';
+import { type FigureChoice, choiceUnit, choiceWord, figureChoices, kindOf } from './figure-choice';
 import { FigureSwitch } from './figure-switch';
+import { Finding } from './finding';
 import { modelRows, modelsMeaning, modelsTitle } from './model-words';
 import { questions } from './questions';
 
 /** "What if the model were another?": standing and slopes under each specification. */
 @Component({
   selector: 'kv-models-block',
-  imports: [EvidenceBlock, FigureSwitch, IntervalRows],
+  imports: [EvidenceBlock, FigureSwitch, Finding, IntervalRows],
   template: `
     @let drawn = picture();
     <kv-evidence-block [question]="question" [meaning]="drawn.meaning">
@@ -38,7 +39,7 @@ import { questions } from './questions';
           [figureName]="drawn.word"
           rowName="model"
         >
-          <h4 chartHeading>{{ drawn.text.title }}</h4>
+          <kv-finding chartHeading [text]="drawn.text" />
         </kv-interval-rows>
       } @placeholder {
         <div class="waiting"></div>
@@ -64,13 +65,13 @@ export class ModelsBlock {
     const numbers = this.#numbers;
     const kind = kindOf(result, choice);
     const title = modelsTitle(result, alternatives, { choice, numbers });
-    const unit = kind === 'money' ? numbers.unitLabel() : '';
+    const words = { panel: this.reply().panelVersion, numbers: this.#numbers };
     return {
       kind,
       rows: modelRows(result, alternatives, { choice, numbers }),
       word: choiceWord(result, choice),
       meaning: modelsMeaning(result, alternatives, choice),
-      text: chartText({ reply: this.reply(), result }, title, unit),
+      text: chartText({ reply: this.reply(), result }, title, choiceUnit(result, choice, words)),
     };
   });
 }

@@ -16,15 +16,16 @@ import { testText } from '../fit-words';
 import { outcomeAxis, regressorAxis } from './axis-words';
 import { EvidenceBlock } from './evidence-block';
 import { chartText } from './evidence-ground';
-import { type FigureChoice, slopeChoices } from './figure-choice';
+import { type FigureChoice, choiceUnit, slopeChoices } from './figure-choice';
 import { FigureSwitch } from './figure-switch';
+import { Finding } from './finding';
 import { comparedSlopes, linesTitle, oneLineMeaning } from './one-line-words';
 import { questions } from './questions';
 
 /** "Does one line for all do?" */
 @Component({
   selector: 'kv-one-line-block',
-  imports: [CompanyLines, EvidenceBlock, Figure, FigureSwitch],
+  imports: [CompanyLines, EvidenceBlock, Figure, FigureSwitch, Finding],
   templateUrl: './one-line-block.html',
   styleUrl: './block.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -72,7 +73,11 @@ export class OneLineBlock {
     const title = linesTitle(result, place, this.#numbers);
     return {
       ...lines,
-      text: chartText({ reply: this.reply(), result }, title, ''),
+      text: chartText(
+        { reply: this.reply(), result },
+        title,
+        choiceUnit(result, place, { panel, numbers: this.#numbers }),
+      ),
       across: regressorAxis(result, place, { panel, numbers: this.#numbers }),
       up: outcomeAxis(result, panel, this.#numbers),
       points: evidence.residuals.points.map(({ company, regressors, actual }) => ({

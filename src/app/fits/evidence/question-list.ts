@@ -2,11 +2,11 @@ import { DOCUMENT } from '@angular/common';
 import { ChangeDetectionStrategy, Component, inject, input } from '@angular/core';
 import type { EvidenceQuestion } from './questions';
 
-/** The evidence's questions as links to their answers further down. */
+/** Links to headings further down the page. */
 @Component({
   selector: 'kv-question-list',
   template: `
-    <nav aria-label="Questions of the evidence" class="kv-no-print">
+    <nav class="kv-no-print" [attr.aria-label]="label()">
       <ul>
         @for (question of questions(); track question.id) {
           <li>
@@ -38,6 +38,8 @@ export class QuestionList {
   readonly #document = inject(DOCUMENT);
 
   readonly questions = input.required<readonly EvidenceQuestion[]>();
+
+  readonly label = input('Questions of the evidence');
 
   protected path(): string {
     return this.#document.location.pathname;

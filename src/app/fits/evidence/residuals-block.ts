@@ -7,6 +7,7 @@ import { levelKind, levelUnit } from '../../ui/model-form';
 import { NumberFormat } from '../../ui/number-format';
 import { EvidenceBlock } from './evidence-block';
 import { chartText } from './evidence-ground';
+import { Finding } from './finding';
 import { LargestResiduals } from './largest-residuals';
 import { questions } from './questions';
 import { residualMeaning, scatterTitle, widestTitle } from './residual-words';
@@ -14,7 +15,7 @@ import { residualMeaning, scatterTitle, widestTitle } from './residual-words';
 /** What the model leaves of each row: against what it expects, by company, by year, and the largest with their rows. */
 @Component({
   selector: 'kv-residuals-block',
-  imports: [EvidenceBlock, LargestResiduals, ResidualGroups, ResidualScatter],
+  imports: [EvidenceBlock, Finding, LargestResiduals, ResidualGroups, ResidualScatter],
   templateUrl: './residuals-block.html',
   styleUrl: './block.css',
   changeDetection: ChangeDetectionStrategy.OnPush,

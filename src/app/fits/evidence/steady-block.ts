@@ -13,12 +13,14 @@ import { EvidenceBlock } from './evidence-block';
 import { chartText } from './evidence-ground';
 import {
   type FigureChoice,
+  choiceUnit,
   choiceWord,
   chosenFigure,
   figureChoices,
   kindOf,
 } from './figure-choice';
 import { FigureSwitch } from './figure-switch';
+import { Finding } from './finding';
 import { withoutEachYear } from './left-out';
 import { leftOutConsequence, leftOutTitle } from './left-out-words';
 import { questions } from './questions';
@@ -27,7 +29,7 @@ import { driftMeaning } from './steady-words';
 /** "Is the standing steady?": the drift of the gap, and the figures without each year. */
 @Component({
   selector: 'kv-steady-block',
-  imports: [EvidenceBlock, FigureSwitch, LeaveOneOut],
+  imports: [EvidenceBlock, FigureSwitch, Finding, LeaveOneOut],
   template: `
     <kv-evidence-block [question]="question" [meaning]="meaning()">
       <p class="kv-caption">The path of the gap, year by year, is drawn above.</p>
@@ -51,7 +53,7 @@ import { driftMeaning } from './steady-words';
             [isChoice]="false"
             rowName="year"
           >
-            <h4 chartHeading>{{ drawn.text.title }}</h4>
+            <kv-finding chartHeading [text]="drawn.text" />
           </kv-leave-one-out>
         } @placeholder {
           <div class="waiting"></div>
@@ -84,7 +86,7 @@ export class SteadyBlock {
     if (full === null || left.length === 0) return null;
     const kind = kindOf(result, choice);
     const title = leftOutTitle(result, { choice, left, one: 'year' }, this.#numbers);
-    const unit = kind === 'money' ? this.#numbers.unitLabel() : '';
+    const words = { panel: this.reply().panelVersion, numbers: this.#numbers };
     return {
       left,
       full,
@@ -92,7 +94,7 @@ export class SteadyBlock {
       fullName: `all ${result.sample.years} years`,
       word: choiceWord(result, choice),
       consequence: leftOutConsequence(result, { choice, left, many: 'years' }),
-      text: chartText({ reply: this.reply(), result }, title, unit),
+      text: chartText({ reply: this.reply(), result }, title, choiceUnit(result, choice, words)),
     };
   });
   protected readonly meaning = computed(() =>

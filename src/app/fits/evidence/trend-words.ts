@@ -25,9 +25,9 @@ export function trendRows(
   const slope = slopes[index];
   const estimator = differences(evidence);
   const other = sameSlope(estimator, slope.name);
-  const name = 'First differences: changes from year to year';
+  const name = 'First differences';
   return [
-    { name: 'Fixed effects: this fit', figure: slope, isMarked: true },
+    { name: 'Fixed effects', note: 'this fit', figure: slope, isMarked: true },
     other === undefined
       ? { name, figure: null, reason: estimator?.reason ?? 'n/a' }
       : { name, note: 'classical interval', figure: other },

@@ -5,15 +5,16 @@ import { Figure } from '../../ui/figure';
 import { NumberFormat } from '../../ui/number-format';
 import { EvidenceBlock } from './evidence-block';
 import { chartText } from './evidence-ground';
-import { type FigureChoice, choiceWord, slopeChoices } from './figure-choice';
+import { type FigureChoice, choiceUnit, choiceWord, slopeChoices } from './figure-choice';
 import { FigureSwitch } from './figure-switch';
+import { Finding } from './finding';
 import { questions } from './questions';
 import { trendMeaning, trendRows, trendTitle } from './trend-words';
 
 /** "Could it be only trends?": first differences beside the fit, and how far errors persist. */
 @Component({
   selector: 'kv-trends-block',
-  imports: [EvidenceBlock, Figure, FigureSwitch, IntervalRows],
+  imports: [EvidenceBlock, Figure, FigureSwitch, Finding, IntervalRows],
   template: `
     <kv-evidence-block [question]="question" [meaning]="meaning()">
       <kv-figure-switch
@@ -30,7 +31,7 @@ import { trendMeaning, trendRows, trendTitle } from './trend-words';
           [figureName]="drawn.word"
           rowName="estimator"
         >
-          <h4 chartHeading>{{ drawn.text.title }}</h4>
+          <kv-finding chartHeading [text]="drawn.text" />
         </kv-interval-rows>
       } @placeholder {
         <div class="waiting"></div>
@@ -69,10 +70,11 @@ export class TrendsBlock {
     const index = choice === 'standing' ? 0 : choice;
     const [evidence, result] = [this.evidence(), this.result()];
     const title = trendTitle(evidence, result, { index, numbers: this.#numbers });
+    const words = { panel: this.reply().panelVersion, numbers: this.#numbers };
     return {
       rows: trendRows(evidence, result, index),
       word: choiceWord(result, index),
-      text: chartText({ reply: this.reply(), result }, title, ''),
+      text: chartText({ reply: this.reply(), result }, title, choiceUnit(result, index, words)),
     };
   });
 }
