@@ -184,7 +184,7 @@ describe('the choices behind a fit in words', () => {
       expect(residualMeaning(residuals, judgedResult, numbers)).toBe(
         'Velmara 2014 is missed most: 600 EUR m above what is expected. 1 of 32 rows lies more than 3 times the usual spread away: check their cells.',
       );
-      expect(scatterTitle(residuals)).toBe('1 of 32 rows beyond 3 studentised residuals');
+      expect(scatterTitle(residuals)).toBe('1 of 32 rows has a studentised residual beyond 3');
     });
 
     it('gives a residual of logs as a share', () => {
@@ -198,7 +198,7 @@ describe('the choices behind a fit in words', () => {
 
     it('says that none is far away', () => {
       const near = { ...residuals, points: [] };
-      expect(scatterTitle(near)).toBe('None of 32 rows beyond 3 studentised residuals');
+      expect(scatterTitle(near)).toBe('None of 32 rows has a studentised residual beyond 3');
       expect(residualMeaning({ ...near, largest: [] }, judgedResult, numbers)).toBe(
         'Every row lies where the model expects it.',
       );

@@ -11,7 +11,7 @@ import type { FitReply, FitResult } from '@contract';
 import { LeaveOneOut } from '../../charts/leave-one-out/leave-one-out';
 import { NumberFormat } from '../../ui/number-format';
 import { EvidenceBlock } from './evidence-block';
-import { chartText } from './evidence-ground';
+import { chartText } from './chart-words';
 import {
   type FigureChoice,
   choiceUnit,

@@ -131,7 +131,7 @@ describe('the evidence on the Fit page', () => {
       'Slope on capex 2.01 (1.20 to 2.82), in changes from year to year 1.60 (1.00 to 2.20)',
       'Slope on capex 2.01: the interval excludes zero in 2 of 3 ways',
       'Standing above zero in 3 of 3 models that give one, from 1,500 to 1,810',
-      '1 of 32 rows beyond 3 studentised residuals',
+      '1 of 32 rows has a studentised residual beyond 3',
       'Residuals scatter most in Velmara, by 300',
       'Residuals scatter most in 2014, by 310',
     ]);

@@ -4,6 +4,7 @@ import { covarianceShort } from '../../ui/covariance-words';
 import type { NumberFormat } from '../../ui/number-format';
 import { counted, listed } from '../../ui/phrases';
 import { regressorWord } from '../fit-words';
+import { degreesText, pCell } from './statistic-words';
 
 type Covariances = Pick<Evidence, 'covariances'>;
 type Slope = NonNullable<CovarianceSummary['slopes']>[number];
@@ -126,16 +127,4 @@ export function covarianceLines(
       source: covariance.source,
     };
   });
-}
-
-/** Whole degrees of freedom as they are, Satterthwaite's at two places. */
-export function degreesText(value: number | null, numbers: NumberFormat): string {
-  if (value === null) return 'n/a';
-  return Number.isInteger(value) ? numbers.headline(value, 'count') : value.toFixed(2);
-}
-
-/** A p value in a column: `< 0.001`, `0.034`. */
-export function pCell(pValue: number | null): string {
-  if (pValue === null) return 'n/a';
-  return pValue < 0.001 ? '< 0.001' : pValue.toFixed(3);
 }

@@ -10,7 +10,7 @@ import type { Evidence, FitReply, FitResult } from '@contract';
 import { IntervalRows } from '../../charts/interval-rows/interval-rows';
 import { NumberFormat } from '../../ui/number-format';
 import { EvidenceBlock } from './evidence-block';
-import { chartText } from './evidence-ground';
+import { chartText } from './chart-words';
 import { type FigureChoice, choiceUnit, choiceWord, figureChoices, kindOf } from './figure-choice';
 import { FigureSwitch } from './figure-switch';
 import { Finding } from './finding';

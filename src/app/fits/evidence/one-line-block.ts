@@ -15,7 +15,7 @@ import { poolabilityCaution } from '../evidence-words';
 import { testText } from '../fit-words';
 import { outcomeAxis, regressorAxis } from './axis-words';
 import { EvidenceBlock } from './evidence-block';
-import { chartText } from './evidence-ground';
+import { chartText } from './chart-words';
 import { type FigureChoice, choiceUnit, slopeChoices } from './figure-choice';
 import { FigureSwitch } from './figure-switch';
 import { Finding } from './finding';

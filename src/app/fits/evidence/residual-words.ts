@@ -42,10 +42,8 @@ export function residualMeaning(
 
 export function scatterTitle(residuals: Residuals): string {
   const beyond = rowsBeyond(residuals);
-  return `${beyond === 0 ? 'No' : beyond} of ${counted(residuals.of, 'row')} beyond ${far} studentised residuals`.replace(
-    /^No of /,
-    'None of ',
-  );
+  const rows = counted(residuals.of, 'row');
+  return `${beyond === 0 ? 'None' : beyond} of ${rows} ${beyond > 1 ? 'have' : 'has'} a studentised residual beyond ${far}`;
 }
 
 /** Where residuals scatter most: `Tolvane scatters most, by 420`. */

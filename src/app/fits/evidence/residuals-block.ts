@@ -6,7 +6,7 @@ import { ResidualScatter } from '../../charts/residual-scatter/residual-scatter'
 import { levelKind, levelUnit } from '../../ui/model-form';
 import { NumberFormat } from '../../ui/number-format';
 import { EvidenceBlock } from './evidence-block';
-import { chartText } from './evidence-ground';
+import { plainChartText } from './chart-words';
 import { Finding } from './finding';
 import { LargestResiduals } from './largest-residuals';
 import { questions } from './questions';
@@ -39,7 +39,7 @@ export class ResidualsBlock {
     const [reply, result, numbers] = [this.reply(), this.result(), this.#numbers];
     const { byCompany, byYear } = this.residuals();
     const unit = levelUnit(result.specification.form, numbers);
-    const of = (title: string) => chartText({ reply, result }, title, unit);
+    const of = (title: string) => plainChartText({ reply, result }, title, unit);
     return {
       scatter: of(scatterTitle(this.residuals())),
       companies: of(widestTitle(byCompany, result, numbers)),

@@ -1,7 +1,7 @@
 import type { FitResult, TestResult, TestSummary } from '@contract';
 import type { NumberFormat } from '../../ui/number-format';
 import { confidenceText, counted } from '../../ui/phrases';
-import { degreesText, pCell } from './interval-choice-words';
+import { degreesText, pCell } from './statistic-words';
 
 const letters: Readonly<Record<NonNullable<TestResult['distribution']>, string>> = {
   F: 'F',

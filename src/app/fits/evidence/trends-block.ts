@@ -4,7 +4,7 @@ import { IntervalRows } from '../../charts/interval-rows/interval-rows';
 import { Figure } from '../../ui/figure';
 import { NumberFormat } from '../../ui/number-format';
 import { EvidenceBlock } from './evidence-block';
-import { chartText } from './evidence-ground';
+import { chartText } from './chart-words';
 import { type FigureChoice, choiceUnit, choiceWord, slopeChoices } from './figure-choice';
 import { FigureSwitch } from './figure-switch';
 import { Finding } from './finding';
