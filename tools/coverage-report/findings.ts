@@ -15,21 +15,25 @@ import { coverageOf } from './tally';
 
 /** What the tables say, a sentence each, the figures read off them; one without its settings is left out. */
 export function findings(results: readonly SettingResult[]): string[] {
-  const independent = results.filter(
-    ({ setting }) => setting.commonShock !== 'errors and regressors',
+  const isShared = ({ commonShock }: Setting): boolean => commonShock === 'errors and regressors';
+  const shared = results.filter(
+    ({ setting }) => isShared(setting) && setting.effects === 'company',
   );
+  const byYear = results.filter(
+    ({ setting }) => isShared(setting) && setting.effects === 'company,year',
+  );
+  const independent = results.filter((result) => !shared.includes(result));
   const whole = independent.filter(({ setting }) => isUsual(setting));
   const skewed = whole.filter(({ setting }) => setting.sizes === 'skewed');
   const weak = results.filter(({ setting }) => setting.persistence.kind === 'own apart');
   const varied = results.filter(({ setting }) => setting.persistence.kind === 'varied');
   const short = results.filter(({ setting }) => setting.rows === 'last five of the own');
-  const shared = results.filter(({ setting }) => setting.commonShock === 'errors and regressors');
   return [
     sentence(
       independent,
       [slopeMeasure('cr2')],
       (range) =>
-        `\`cr2\` covers the slope in ${range} of samples wherever companies are independent given the regressors.`,
+        `\`cr2\` covers the slope in ${range} of samples wherever companies are independent given the regressors and the effects.`,
     ),
     sentence(
       skewed,
@@ -47,7 +51,7 @@ export function findings(results: readonly SettingResult[]): string[] {
       shared,
       [slopeMeasure('cr2')],
       (range) =>
-        `Where shocks to errors and to regressors are both common to all companies, no covariance here is honest: \`cr2\` covers ${range}, \`two-way\` ${rangeOf(shared, [slopeMeasure('two-way')])}, \`driscoll-kraay\` ${rangeOf(shared, [slopeMeasure('driscoll-kraay')])}.`,
+        `Where shocks to errors and to regressors are both common to all companies, \`cr2\` covers ${range}, \`two-way\` ${rangeOf(shared, [slopeMeasure('two-way')])}, \`driscoll-kraay\` ${rangeOf(shared, [slopeMeasure('driscoll-kraay')])}; with year effects, \`cr2\` covers ${rangeOf(byYear, [slopeMeasure('cr2')])}.`,
     ),
     sentence(
       results,
@@ -92,8 +96,8 @@ export function findings(results: readonly SettingResult[]): string[] {
   ].flatMap((text) => text ?? []);
 }
 
-function isUsual({ persistence, rows }: Setting): boolean {
-  return persistence.kind === 'like' && rows === 'all';
+function isUsual({ persistence, rows, effects }: Setting): boolean {
+  return persistence.kind === 'like' && rows === 'all' && effects === 'company';
 }
 
 function sentence(

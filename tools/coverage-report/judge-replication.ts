@@ -30,7 +30,7 @@ import { trueSlope } from './company-paths';
 import { judge, judgeInterval, type Tallies } from './tally';
 import { keepsTrueSlope } from './wild-rejection';
 
-const specification: Specification = {
+const usual: Specification = {
   effects: 'company',
   form: 'levels',
   lag: 0,
@@ -41,37 +41,41 @@ const specification: Specification = {
 
 type Opened = Pick<FitParts, 'context' | 'ownIndex' | 'inference' | 'data' | 'specification'>;
 
-/**
- * Fits one simulated panel by the engine's own pieces and counts which of its intervals hold the truth.
- *
- * @param wildSeed  of the bootstrap's draws; null where it is not tried.
- */
+export interface FitChoice {
+  readonly effects: Specification['effects'];
+  /** Of the bootstrap's draws; null where it is not tried. */
+  readonly wildSeed: number | null;
+}
+
+/** Fits one simulated panel by the engine's own pieces and counts which of its intervals hold the truth. */
 export function judgeReplication(
   tallies: Tallies,
   panel: SimulatedPanel,
-  wildSeed: number | null,
+  { effects, wildSeed }: FitChoice,
 ): void {
+  const specification: Specification = { ...usual, effects };
   const sample = selectSample(panel.data, panel.own, undefined, specification);
-  const fit = withinFit(sample, specification.effects);
+  const fit = withinFit(sample, effects);
   const ground: SlopeGround = { fit, products: companyProducts(fit) };
-  const options = { confidence: nominal, seed: null };
-  const inference = slopeInference(ground, specification.slopes, options);
+  const inference = slopeInference(ground, specification.slopes, specification);
   for (const name of matrixCovariances) {
     const { slopes } =
-      name === specification.slopes ? inference : slopeInference(ground, name, options);
+      name === specification.slopes ? inference : slopeInference(ground, name, specification);
     judgeInterval(tallies, slopeMeasure(name), slopes[0], trueSlope);
   }
   if (wildSeed !== null) judge(tallies, wildMeasure, keepsTrueSlope(ground, wildSeed));
   const context = intervalContext(fit, nominal);
   const ownIndex = sample.companies.indexOf(panel.own);
   judgeStanding(tallies, context, ownIndex);
-  judgeAhead(tallies, panel, { context, ownIndex, inference, data: panel.data, specification });
+  if (effects === 'company') {
+    judgeAhead(tallies, panel, { context, ownIndex, inference, data: panel.data, specification });
+  }
 }
 
 /** All intercepts are equal: the standing is 0, and whoever is shown to be higher or lower is shown wrongly. */
 function judgeStanding(tallies: Tallies, context: FitParts['context'], own: number): void {
   const pairs = pairComparisons(context, own);
-  const standing = standingOf(context, { own, pairs, form: specification.form });
+  const standing = standingOf(context, { own, pairs, form: usual.form });
   judgeInterval(tallies, standingMeasure, standing, 0);
   judge(
     tallies,

@@ -23,7 +23,7 @@ export async function reportText(
   const lowest = sharePoints(lowestShare);
   const paragraphs = [
     '# How often the intervals hold the truth',
-    `Simulated by engine ${engineVersion}, ${replications.toLocaleString('en')} replications a setting; written by \`npm run coverage-report\`, which gives the same figures again. Every interval comes from the engine's own code. Figures are shares of intervals that hold the truth, at a nominal ${sharePoints(nominal)} unless told otherwise, ± their Monte Carlo standard error √(p(1 − p)/n). **Bold** figures are promised to reach ${lowest}; the command fails where one does not.`,
+    `Simulated by engine ${engineVersion}, ${replications.toLocaleString('en')} replications a setting; written by \`npm run coverage-report\`, which gives the same figures again. Every interval comes from the engine's own code. Figures are shares of intervals that hold the truth, at a nominal ${sharePoints(nominal)} unless told otherwise, ± their Monte Carlo standard error √(p(1 − p)/n). **Bold** figures are promised to reach ${lowest}; the command fails where one does not. A sample in which a method gives no interval, such as a two-way variance below 0, is left out of that method's figure; a dash stands where it never gives one.`,
     '## What it says',
     list(findings(results)),
     `Promised and below ${lowest}:`,
@@ -31,7 +31,7 @@ export async function reportText(
     `Defaults below ${lowest} where nothing is promised:`,
     list(unpromised.length === 0 ? ['nothing'] : unpromised),
     '## Settings',
-    `Outcome y = Σ x_k + s_i·e with x_k = 2 + s_i·z_k; z_k and e are AR(1) with unit variance, started from their stationary distribution; with two regressors z_1 and z_2 correlate at .5. Sizes s_i: all 1, or exp(−1.5) to exp(1.5) in even steps of the exponent. All intercepts are 0: no other interval depends on them, and a rank set can then err about every peer. A common shock makes half the variance the same for all companies in a year, each regressor having its own. Five more years are drawn behind the last one: the plan of year h holds the regressors that come, and the market value is the one that comes. Replication r of a setting draws from xoshiro128** seeded with its seed + r.`,
+    `Outcome y = Σ x_k + s_i·e with x_k = 2 + s_i·z_k; z_k and e are AR(1) with unit variance, started from their stationary distribution; with two regressors z_1 and z_2 correlate at .5. Sizes s_i: all 1, or exp(−1.5) to exp(1.5) in even steps of the exponent. All intercepts are 0: no other interval depends on them, and a rank set can then err about every peer. A common shock makes half the variance the same for all companies in a year, each regressor having its own. Five more years are drawn behind the last one: the plan of year h holds the regressors that come, and the market value is the one that comes; nothing is planned with year effects. Replication r of a setting draws from xoshiro128** seeded with its seed + r.`,
     settingsTable(results.map(({ setting }) => setting)),
     '## Slopes, by covariance',
     'The slope of the first regressor.',

@@ -1,3 +1,5 @@
+import type { Specification } from '../../backend/stats';
+
 /** How one setting of the report makes its panels. */
 export interface Setting {
   readonly name: string;
@@ -14,6 +16,8 @@ export interface Setting {
   /** Half the variance of errors, or of errors and regressors, is the same for all companies in a year. */
   readonly commonShock: 'none' | 'errors' | 'errors and regressors';
   readonly rows: 'all' | 'last five of the own' | 'one in five missing';
+  /** Of the fit; with year effects nothing is planned, for the effects of years to come are not known. */
+  readonly effects: Specification['effects'];
   /** Whether the wild bootstrap is tried too. */
   readonly hasWild: boolean;
 }

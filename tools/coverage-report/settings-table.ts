@@ -14,6 +14,7 @@ export function settingsTable(settings: readonly Setting[]): string {
       'own company',
       'common shock',
       'rows',
+      'effects',
     ],
     settings.map((setting) => [
       setting.name,
@@ -26,6 +27,7 @@ export function settingsTable(settings: readonly Setting[]): string {
       setting.own === 'each' ? 'each in turn' : setting.own,
       setting.commonShock,
       setting.rows,
+      setting.effects,
     ]),
   );
 }

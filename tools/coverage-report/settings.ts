@@ -13,6 +13,7 @@ const usual: Usual = {
   own: 'each',
   commonShock: 'none',
   rows: 'all',
+  effects: 'company',
   hasWild: false,
 };
 
@@ -59,6 +60,11 @@ export const settings: readonly Setting[] = [
   like(12, 10, 0.8, { rows: 'one in five missing', suffix: 'missing-rows' }),
   like(12, 20, 0.5, { ...skewed, own: 'largest', suffix: 'own-largest' }),
   like(12, 20, 0.5, { ...skewed, own: 'smallest', suffix: 'own-smallest' }),
+  like(12, 20, 0.5, {
+    commonShock: 'errors and regressors',
+    effects: 'company,year',
+    suffix: 'shock-in-both-year-effects',
+  }),
 ].map((setting, index) => ({ ...setting, seed: (index + 1) * mostReplications }));
 
 function like(

@@ -18,7 +18,7 @@ export function simulateBlock({ setting, from, to }: Block): Tallies {
   for (let replication = from; replication < to; replication += 1) {
     const panel = simulatePanel(setting, replication);
     const wildSeed = setting.hasWild ? wildOffset + setting.seed + replication : null;
-    judgeReplication(tallies, panel, wildSeed);
+    judgeReplication(tallies, panel, { effects: setting.effects, wildSeed });
   }
   return tallies;
 }
