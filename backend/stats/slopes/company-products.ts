@@ -1,4 +1,4 @@
-import type { SquareMatrix } from '../linear-algebra/square-matrix';
+import { dot, type SquareMatrix, times, timesVector } from '../linear-algebra/square-matrix';
 import { type SymmetricPower, symmetricPower } from '../linear-algebra/symmetric-power';
 import type { WithinFit } from '../regression/within-fit';
 
@@ -16,7 +16,9 @@ export interface CompanyProduct {
   readonly score: Float64Array;
   /** W_i = (I − S_i)^(−½), pseudo-inverse: A_i·U_i = U_i·W_i with A_i = (I − H_ii)^(−½). */
   readonly adjustment: SquareMatrix;
-  /** Whether without this company the slopes are still determined. */
+  /** W_i·W_i·(I − S_i): the projector onto what the other companies determine; null where that is everything. */
+  readonly determined: SquareMatrix | null;
+  /** Whether without this company the slopes are still determined; effects of years that it alone has need not be. */
   readonly isDispensable: boolean;
 }
 
@@ -42,21 +44,47 @@ function companyProduct(fit: WithinFit, company: number): CompanyProduct {
       cross[l * size + k] = sum;
     }
   }
+  const rest = (): SquareMatrix =>
+    cross.map((value, index) => (index % (size + 1) === 0 ? 1 : 0) - value);
   let power: SymmetricPower | undefined;
-  const adjusted = (): SymmetricPower => (power ??= adjustmentOf(cross, size));
+  const adjusted = (): SymmetricPower =>
+    (power ??= symmetricPower(rest(), size, -0.5, eigenvalueFloor));
   return {
     cross,
     score,
     get adjustment() {
       return adjusted().matrix;
     },
+    get determined() {
+      const { matrix, dropped } = adjusted();
+      return dropped === 0 ? null : times(times(matrix, matrix, size), rest(), size);
+    },
     get isDispensable() {
-      return adjusted().dropped === 0;
+      return adjusted().dropped === 0 || areSlopesDetermined(rest(), size, fit.yearColumns);
     },
   };
 }
 
-function adjustmentOf(cross: SquareMatrix, size: number): SymmetricPower {
-  const rest = cross.map((value, index) => (index % (size + 1) === 0 ? 1 : 0) - value);
-  return symmetricPower(rest, size, -0.5, eigenvalueFloor);
+/**
+ * Whether I − S_i has full rank in the slopes once the year columns, which come first, are taken out of them: its Schur
+ * complement has. A direction that only years of this company's own span drops out with them.
+ */
+function areSlopesDetermined(rest: SquareMatrix, size: number, years: number): boolean {
+  const slopes = size - years;
+  if (years === 0) return false;
+  const block = (rows: number, from: number, columns: number, start: number): Float64Array =>
+    Float64Array.from(
+      { length: rows * columns },
+      (_, index) => rest[(from + Math.floor(index / columns)) * size + start + (index % columns)],
+    );
+  const ofYears = symmetricPower(block(years, 0, years, 0), years, -1, eigenvalueFloor).matrix;
+  const complement = block(slopes, years, slopes, years);
+  const shared = Array.from({ length: slopes }, (_, k) => block(1, years + k, years, 0));
+  const taken = shared.map((one) => timesVector(ofYears, one));
+  for (let k = 0; k < slopes; k += 1) {
+    for (let l = 0; l < slopes; l += 1) {
+      complement[k * slopes + l] -= (dot(shared[k], taken[l]) + dot(shared[l], taken[k])) / 2;
+    }
+  }
+  return symmetricPower(complement, slopes, -1, eigenvalueFloor).dropped === 0;
 }
