@@ -78,11 +78,24 @@ async function shoot(page: Page, path: string, name: string): Promise<void> {
       await page.goto(path);
       await page.waitForLoadState('networkidle');
       await page.evaluate('document.fonts.ready');
+      await scrollThrough(page);
       await page.screenshot({
         path: join(folder, `${name}-${size.width}-${colorScheme}.png`),
         fullPage: true,
       });
     }
+}
+
+/** What is drawn only when it comes into view is drawn. */
+async function scrollThrough(page: Page): Promise<void> {
+  const { height } = page.viewportSize() ?? sizes[0];
+  const total = Number(await page.evaluate('document.documentElement.scrollHeight'));
+  for (let top = 0; top < total; top += height / 2) {
+    await page.evaluate(`window.scrollTo(0, ${top})`);
+    await page.waitForTimeout(60);
+  }
+  await page.waitForLoadState('networkidle');
+  await page.evaluate('window.scrollTo(0, 0)');
 }
 
 await main();
