@@ -44,7 +44,7 @@ export const StartFit = z
   })
   .refine(({ slopes, seed }) => slopes === 'wild' || seed === undefined, {
     path: ['seed'],
-    message: 'expected a seed with the wild bootstrap alone',
+    error: 'expected a seed with the wild bootstrap alone',
   });
 export type StartFit = z.infer<typeof StartFit>;
 
@@ -168,7 +168,13 @@ export const FitWarning = z.object({
 });
 export type FitWarning = z.infer<typeof FitWarning>;
 
-const percent = z.object({ estimate: z.number(), low: nullable, high: nullable });
+/** Null where a double cannot hold it, with the reason. */
+const percent = z.object({
+  estimate: nullable,
+  low: nullable,
+  high: nullable,
+  intervalReason: z.string().optional(),
+});
 
 /** Which ends a bootstrap interval does not have. */
 export const Unbounded = z.enum(['low', 'high', 'both']);

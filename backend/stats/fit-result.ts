@@ -99,10 +99,12 @@ export interface Standing extends IntervalEstimate {
   readonly percent?: IntervalPercent;
 }
 
+/** Null where a double cannot hold the percent, with `intervalReason`. */
 export interface IntervalPercent {
-  readonly estimate: number;
+  readonly estimate: number | null;
   readonly low: number | null;
   readonly high: number | null;
+  readonly intervalReason?: string;
 }
 
 /** A year's effect; with year effects they sum to zero over the sample's years. */

@@ -1,4 +1,4 @@
-import type { FitResult, IntervalEstimate, Specification } from '../fit-result';
+import type { FitResult, Specification } from '../fit-result';
 import type { OpenFit } from '../fit-parts';
 import { StatsError } from '../stats-error';
 import { type AlternativeModel, alternativeFit, isModelOf } from './alternative-fit';
@@ -82,8 +82,9 @@ function fixedEffects(
       observations,
       slopes: slopes.map(plainSlope),
       slopesNote: open.specification.slopes === 'wild' && !isThisFit ? bootstrapNote : undefined,
-      standing: standing === null ? null : inItsUnit(standing),
-      standingReason: standing === null ? (standingReason ?? noOwnReason) : undefined,
+      ...(standing === null
+        ? { standing, standingReason: standingReason ?? noOwnReason }
+        : inItsUnit(standing)),
       rankSet: standing?.rankSet ?? null,
       rankReason: standing?.rankReason,
     };
@@ -107,11 +108,17 @@ function plainSlope({
 }
 
 /** In levels as it is; in log form as percent, which has no standard error of its own. */
-function inItsUnit(standing: NonNullable<FitResult['standing']>): IntervalEstimate {
+function inItsUnit(
+  standing: NonNullable<FitResult['standing']>,
+): Pick<Alternative, 'standing' | 'standingReason'> {
   const { estimate, standardError, low, high, intervalReason, percent } = standing;
-  return percent === undefined
-    ? { estimate, standardError, low, high, intervalReason }
-    : { ...percent, standardError: null, intervalReason };
+  if (percent === undefined) {
+    return { standing: { estimate, standardError, low, high, intervalReason } };
+  }
+  if (percent.estimate === null) {
+    return { standing: null, standingReason: percent.intervalReason };
+  }
+  return { standing: { ...percent, estimate: percent.estimate, standardError: null } };
 }
 
 function estimated(

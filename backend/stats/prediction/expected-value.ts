@@ -1,6 +1,7 @@
 import { basisError } from './basis-error';
 import { type IntervalEstimate, symmetricInterval, withoutInterval } from './interval-estimate';
 import { inModelScale } from './model-scale';
+import { outOfLogs } from './out-of-logs';
 import type { Outlook } from './outlook';
 import { plannedContrast } from './planned-contrast';
 import type { PredictionBasis } from './prediction-basis';
@@ -25,8 +26,8 @@ export interface ExpectedValue extends IntervalEstimate {
  * The own company's expected market value at given regressors, with its calibrated interval.
  *
  * @param regressors  planned values, in the order of `basis.regressors` and the panel's measure.
- * @throws {RangeError} for values the model cannot read, and for a gap that cannot be carried; `predict` gives these as
- *   reasons instead.
+ * @throws {RangeError} for values the model cannot read, a gap that cannot be carried and an estimate that a double
+ *   cannot hold; `predict` gives these as reasons instead.
  * @see Duan (1983), JASA 78, 605–610, for the smearing factor, taken as known.
  */
 export function expectedValue(
@@ -34,7 +35,25 @@ export function expectedValue(
   regressors: readonly number[],
   outlook: Outlook = {},
 ): ExpectedValue {
+  const expected = heldExpectedValue(basis, regressors, outlook);
+  if (expected === null) throw new RangeError(beyondReason);
+  return expected;
+}
+
+export const beyondReason = 'The expected value is beyond what a number can hold.';
+
+/**
+ * The same, null where a double cannot hold the estimate.
+ *
+ * @throws {RangeError} for values the model cannot read and a gap that cannot be carried.
+ */
+export function heldExpectedValue(
+  basis: PredictionBasis,
+  regressors: readonly number[],
+  outlook: Outlook,
+): ExpectedValue | null {
   const { estimate, weights } = plannedContrast(basis, inModelScale(basis, regressors), outlook);
+  if (!Number.isFinite(estimate)) return null;
   const error = basisError(basis, weights);
   const interval =
     error.standardError === null
@@ -52,21 +71,20 @@ function fromLogs(
   basis: PredictionBasis,
   inLogs: IntervalEstimate,
   outlook: Outlook,
-): ExpectedValue {
+): ExpectedValue | null {
   const factor = shownFactor(basis, outlook);
   const isMedian = outlook.start === 'carry-the-gap';
-  const scaled = (value: number | null): number | null =>
-    value === null ? null : Math.exp(value) * factor;
+  const { estimate, ...ends } = outOfLogs(inLogs, (log) => Math.exp(log) * factor);
+  // The median is no larger than the mean: the smearing factor is 1 or more.
   const median = Math.exp(inLogs.estimate);
+  if (estimate === null) return null;
   return {
-    ...inLogs,
-    estimate: median * factor,
+    estimate,
     standardError: null,
-    low: scaled(inLogs.low),
-    high: scaled(inLogs.high),
+    ...ends,
     log: {
       shown: isMedian ? 'median' : 'mean',
-      mean: isMedian ? null : median * factor,
+      mean: isMedian ? null : estimate,
       median,
       inLogs,
     },

@@ -15,14 +15,10 @@ export {
   type RegressorPlace,
 } from './familiar-range';
 export type { FiellerRange } from './fieller';
-export {
-  asFactor,
-  type IntervalEstimate,
-  symmetricInterval,
-  withoutInterval,
-} from './interval-estimate';
+export { type IntervalEstimate, symmetricInterval, withoutInterval } from './interval-estimate';
 export { type BandOutlook, type MarketValueBand, marketValueBand } from './market-value-band';
 export { inModelScale, unreadableReason } from './model-scale';
+export { asFactor, type OutOfLogs, outOfLogs } from './out-of-logs';
 export {
   carryingReason,
   type Outlook,

@@ -12,24 +12,18 @@ export function withoutInterval(estimate: number, intervalReason: string): Inter
   return { estimate, standardError: null, low: null, high: null, intervalReason };
 }
 
-/** estimate ± quantile · standard error. */
+const endsReason = 'The ends of its interval lie beyond what a number can hold.';
+
+/** estimate ± quantile · standard error; without an interval where a double cannot hold the ends. */
 export function symmetricInterval(
   estimate: number,
   standardError: number,
   quantile: number,
 ): IntervalEstimate {
   const reach = quantile * standardError;
-  return { estimate, standardError, low: estimate - reach, high: estimate + reach };
-}
-
-/** A difference of logs as the factor it multiplies by: exp of the estimate and its ends. */
-export function asFactor(inLogs: IntervalEstimate): IntervalEstimate {
-  const factor = (value: number | null): number | null => (value === null ? null : Math.exp(value));
-  return {
-    ...inLogs,
-    estimate: Math.exp(inLogs.estimate),
-    standardError: null,
-    low: factor(inLogs.low),
-    high: factor(inLogs.high),
-  };
+  const low = estimate - reach;
+  const high = estimate + reach;
+  return Number.isFinite(low) && Number.isFinite(high)
+    ? { estimate, standardError, low, high }
+    : withoutInterval(estimate, endsReason);
 }

@@ -1,5 +1,6 @@
 import { basisError } from './basis-error';
 import { inModelScale } from './model-scale';
+import { heldNumber } from './out-of-logs';
 import { earlierEngineReason, type Outlook, stepsAhead } from './outlook';
 import { plannedContrast } from './planned-contrast';
 import type { OwnErrors, PredictionBasis } from './prediction-basis';
@@ -69,8 +70,12 @@ export function marketValueBand(
   const squared = (ownErrors.persistence ?? 0) ** 2;
   const degreesOfFreedom = Math.max(2, (rows * (1 - squared)) / (1 + squared) - 1);
   const reach = twoSidedQuantile(tQuantile, confidence, degreesOfFreedom) * standardError;
-  const ends = [estimate - reach, estimate + reach];
-  const [low, high] = basis.form === 'log' ? ends.map(Math.exp) : ends;
+  const measure = basis.form === 'log' ? Math.exp : (value: number): number => value;
+  const low = heldNumber(measure(estimate - reach));
+  const high = heldNumber(measure(estimate + reach));
+  if (low === null || high === null) {
+    return none('An end of the band lies beyond what a number can hold.');
+  }
   return { confidence, low, high, standardError, degreesOfFreedom };
 }
 

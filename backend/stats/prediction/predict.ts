@@ -5,7 +5,7 @@ import {
   decompositionToBase,
   differenceOfPlans,
 } from './decomposition';
-import { type ExpectedValue, expectedValue } from './expected-value';
+import { beyondReason, type ExpectedValue, heldExpectedValue } from './expected-value';
 import { type FamiliarRange, familiarRange } from './familiar-range';
 import type { IntervalEstimate } from './interval-estimate';
 import { type MarketValueBand, marketValueBand } from './market-value-band';
@@ -45,6 +45,8 @@ export type PredictedYear =
     }
   | { readonly year: number; readonly expected: null; readonly reason: string };
 
+const baseBeyondReason = 'The expected value of the base is beyond what a number can hold.';
+
 /** Everything that is shown of a plan, year by year, in the order of the plan. */
 export function predict(
   basis: PredictionBasis,
@@ -61,11 +63,11 @@ export function predict(
       (outlook.start === 'carry-the-gap' ? carryingReason(basis) : undefined);
     if (reason !== undefined) return none(reason);
     const inYear = { ...outlook, year };
-    const expected = expectedValue(basis, regressors, inYear);
-    if (!Number.isFinite(expected.estimate)) {
-      return none('The expected value is beyond what a number can hold.');
-    }
+    const expected = heldExpectedValue(basis, regressors, inYear);
+    if (expected === null) return none(beyondReason);
     const held = heldRegressors(basis);
+    const base = heldExpectedValue(basis, held, inYear);
+    if (base === null) return none(baseBeyondReason);
     return {
       year,
       stepsAhead: stepsAhead(basis, inYear),
@@ -74,7 +76,7 @@ export function predict(
       expected,
       band: marketValueBand(basis, regressors, { ...inYear, bandConfidence }, tQuantile),
       familiar: familiarRange(basis, regressors),
-      base: expectedValue(basis, held, inYear),
+      base,
       difference: differenceOfPlans(basis, regressors, held, tQuantile),
       toBase: decompositionToBase(basis, regressors, held, tQuantile),
       fromLast: decompositionFromLast(basis, regressors, tQuantile, inYear),

@@ -2,6 +2,7 @@ import { basisError } from './basis-error';
 import { shownFactor } from './expected-value';
 import { fiellerRange, type FiellerRange } from './fieller';
 import { inModelScale } from './model-scale';
+import { heldNumber } from './out-of-logs';
 import { carryingReason, type Outlook } from './outlook';
 import { plannedContrast } from './planned-contrast';
 import type { PredictionBasis } from './prediction-basis';
@@ -49,7 +50,7 @@ export function reachValue(basis: PredictionBasis, request: ReachRequest): Reach
   const slope = basis.coefficients[regressor + 1];
   const solution = start + (wanted - plannedContrast(basis, values, request).estimate) / slope;
   const value = isLog ? Math.exp(solution) : solution;
-  if (!Number.isFinite(value) || (isLog && value === 0)) {
+  if (heldValue(value, isLog) === null) {
     return { value: null, reason: 'No value that a number can hold reaches it.' };
   }
   const atSolution = values.map((other, k) => (k === regressor ? solution : other));
@@ -63,9 +64,12 @@ export function reachValue(basis: PredictionBasis, request: ReachRequest): Reach
     m01: factor * weightedSum(error.lambdas, ofSlope),
     m11: factor * weightedSum(ofSlope, ofSlope),
   });
-  const toMeasure = (distance: number): number =>
-    isLog ? Math.exp(solution + distance) : solution + distance;
-  return { value, range: placed(range, toMeasure) };
+  const toMeasure = (distance: number): number | null =>
+    heldValue(isLog ? Math.exp(solution + distance) : solution + distance, isLog);
+  const inMeasure = placed(range, toMeasure);
+  return inMeasure === null
+    ? { value, range: null, rangeReason: rangeBeyondReason }
+    : { value, range: inMeasure };
 }
 
 function requestReason(basis: PredictionBasis, request: ReachRequest): string | undefined {
@@ -82,10 +86,23 @@ function requestReason(basis: PredictionBasis, request: ReachRequest): string | 
   return unreadableReason(basis, others) ?? carrying;
 }
 
-function placed(range: FiellerRange, toMeasure: (distance: number) => number): FiellerRange {
+/** A value that a double holds and the model reads: above zero in log form. */
+function heldValue(value: number, isLog: boolean): number | null {
+  return isLog && value === 0 ? null : heldNumber(value);
+}
+
+const rangeBeyondReason = 'An end of its range lies beyond what a number can hold.';
+
+/** The range in the panel's measure. A ray that holds no number is not there; an interval without an end is null. */
+function placed(
+  range: FiellerRange,
+  toMeasure: (distance: number) => number | null,
+): FiellerRange | null {
   const place = (end: number | null): number | null => (end === null ? null : toMeasure(end));
   if (range.kind === 'interval') {
-    return { kind: 'interval', low: toMeasure(range.low), high: toMeasure(range.high) };
+    const low = toMeasure(range.low);
+    const high = toMeasure(range.high);
+    return low === null || high === null ? null : { kind: 'interval', low, high };
   }
   return range.kind === 'rays'
     ? { kind: 'rays', upTo: place(range.upTo), from: place(range.from) }

@@ -3,7 +3,7 @@ import { calibratedInterval } from '../intervals/calibrated-interval';
 import { standingContrast } from '../intervals/contrast';
 import { aloneError, type IntervalContext } from '../intervals/interval-context';
 import { fewestRowsForRank, rowsOf } from '../intervals/interval-reasons';
-import { type IntervalEstimate, withoutInterval } from '../prediction';
+import { type IntervalEstimate, outOfLogs, withoutInterval } from '../prediction';
 
 export interface StandingInput {
   /** Index of the own company. */
@@ -45,13 +45,8 @@ export function standingOf(
   };
 }
 
-function percentOf({ estimate, low, high }: IntervalEstimate): IntervalPercent {
-  const percent = (value: number): number => 100 * Math.expm1(value);
-  return {
-    estimate: percent(estimate),
-    low: low === null ? null : percent(low),
-    high: high === null ? null : percent(high),
-  };
+function percentOf(interval: IntervalEstimate): IntervalPercent {
+  return outOfLogs(interval, (log) => 100 * Math.expm1(log));
 }
 
 function rankOf(
