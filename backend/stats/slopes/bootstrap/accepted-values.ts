@@ -43,7 +43,7 @@ export function isAccepted(pValue: number, level: number): boolean {
 /**
  * Every τ within ±1e6 whose p value is at least α, as stretches in ascending order. Each draw is as far out as the data
  * where a polynomial of the fourth degree in τ is not negative, so it is bracketed and bisected by draw, and no hole and
- * no island is missed.
+ * no island is missed. The estimate itself is always among them, alone where nothing around it is accepted.
  *
  * @param tie  how far a draw's |t| may lie below the data's own and still count as it.
  */
@@ -66,7 +66,18 @@ export function acceptedStretches(
     }
   }
   if (from !== null) addStretch(stretches, { from, to: farthest });
-  return stretches;
+  return withEstimate(stretches);
+}
+
+/** The stretches with the estimate itself, τ = 0, where every draw is as far out as the data: p = 1 at any level. */
+function withEstimate(stretches: readonly Stretch[]): Stretch[] {
+  const isNear = ({ from, to }: Stretch): boolean => from < narrowest && to > -narrowest;
+  if (stretches.some(isNear)) {
+    return stretches.map((one) =>
+      isNear(one) ? { from: Math.min(0, one.from), to: Math.max(0, one.to) } : one,
+    );
+  }
+  return [...stretches, { from: 0, to: 0 }].sort((left, right) => left.from - right.from);
 }
 
 function addStretch(stretches: Stretch[], next: Stretch): void {

@@ -220,6 +220,32 @@ describe('the wild bootstrap', () => {
     expect(told).toEqual([...told].sort((left, right) => left - right));
     expect(told.at(-1)).toBe(1);
   });
+
+  it('keeps the estimate where nothing around it is accepted', () => {
+    // Two companies and their doubles: draws that flip a company and not its double are never further out.
+    const half = randomPanel(2, 10, 4);
+    const doubled = Float64Array.from([...half.outcome.values, ...half.outcome.values]);
+    const data: PanelColumns = {
+      companies: ['C0', 'C1', 'E0', 'E1'],
+      company: Int32Array.from(doubled, (_, row) => Math.floor(row / 10)),
+      year: Int32Array.from([...half.year, ...half.year]),
+      outcome: { name: 'y', values: doubled },
+      regressors: half.regressors.map(({ name, values }) => ({
+        name,
+        values: Float64Array.from([...values, ...values]),
+      })),
+      fileRow: Int32Array.from(doubled, (_, row) => row + 2),
+    };
+    for (const confidence of [0.05, 0.1, 0.2, 0.3, 0.5]) {
+      for (const { low, high, estimate } of wildOf(data, { confidence })) {
+        expect(low).toBeLessThanOrEqual(estimate);
+        expect(high).toBeGreaterThanOrEqual(estimate);
+      }
+    }
+    const lone = Float64Array.of(0, 0, 1, 0, 0);
+    const never = { pValue: (count: number): number => count };
+    expect(acceptedStretches(lone, never, { level: 0.5 })).toEqual([{ from: 0, to: 0 }]);
+  });
 });
 
 /**
