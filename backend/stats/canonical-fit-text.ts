@@ -1,26 +1,48 @@
 import { engineVersion } from './engine-version';
+import type { FitRequest } from './fit-parts';
 import type { Specification } from './fit-result';
+import { heldValues } from './held-values';
 import type { PanelSample } from './panel/panel-sample';
+import { mostEnumerated } from './slopes/bootstrap/sign-draws';
 
 /**
  * The text whose digest identifies a fit: canonical JSON (sorted keys, shortest round-trip numbers) of the rows used,
  * members, own company, specification and engine version. The order of rows in the file, its name, rows of other
- * companies and the numbers of its lines are no part of it.
+ * companies and the numbers of its lines are no part of it. With a lag the own company's last values, which no row of
+ * the fit has read yet but every plan starts from, are `held`. The seed is null where nothing is drawn by it: a bootstrap
+ * of so few companies looks at every sign vector.
  */
 export function canonicalFitText(
   sample: PanelSample,
-  specification: Specification,
-  own: string | null,
+  request: Pick<FitRequest, 'data' | 'specification' | 'own'>,
 ): string {
+  const { own } = request;
   const head = canonicalJson({
     engine: engineVersion,
+    ...heldOf(sample, request),
     members: sample.members,
     outcome: sample.outcomeName,
     own,
     regressors: sample.regressorNames,
   });
-  const tail = canonicalJson({ specification: { ...specification } });
+  const tail = canonicalJson({
+    specification: { ...withSeedInUse(sample, request.specification) },
+  });
   return `${head.slice(0, -1)},"rows":[${rowsUsed(sample)}],${tail.slice(1)}`;
+}
+
+function heldOf(
+  { companies, starts, year }: PanelSample,
+  { data, specification, own }: Pick<FitRequest, 'data' | 'specification' | 'own'>,
+): { readonly held?: readonly number[] | null } {
+  const index = own === null ? -1 : companies.indexOf(own);
+  if (specification.lag === 0 || index === -1) return {};
+  const last = year[starts[index + 1] - 1];
+  return { held: heldValues({ data, form: specification.form }, companies[index], last) };
+}
+
+function withSeedInUse({ companies }: PanelSample, specification: Specification): Specification {
+  return companies.length <= mostEnumerated ? { ...specification, seed: null } : specification;
 }
 
 /** [company, year, outcome, regressors …] in the panel's measure, by company and year; the single rows last; numbers as JSON writes them. */

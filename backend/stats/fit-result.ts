@@ -184,7 +184,10 @@ export interface Sample {
  */
 export interface FitResult {
   readonly engine: string;
-  /** SHA-256, hex, of the canonical JSON of rows used, members, own company, specification and engine version. */
+  /**
+   * SHA-256, hex, of the canonical JSON of rows used, members, own company, specification and engine version; see
+   * `canonicalFitText`.
+   */
   readonly hash: string;
   readonly specification: Specification;
   readonly outcome: string;

@@ -31,7 +31,7 @@ export function openFit(
   const { data, specification, own, members } = request;
   checkSpecification(specification);
   const sample = selectSample(data, own, members, specification);
-  const hash = sha256(canonicalFitText(sample, specification, own));
+  const hash = sha256(canonicalFitText(sample, request));
   onProgress(0.2);
   const fit = withinFit(sample, specification.effects);
   const pooled = pooledFit(fit);
