@@ -60,6 +60,7 @@ test('answers what a board and an auditor ask of the newest fit', async ({ page 
 
   await test.step('the row of the panel that the model misses most', async () => {
     await evidence.goTo('What does the model not explain?');
+    await evidence.holdDrawn();
     await evidence.largest.getByRole('link').first().click();
     await expect(page).toHaveURL(/\/panel\/[0-9a-f-]+\?row=\d+$/);
     await expect((await new PanelPage(page).read()).focusedRow).toBeVisible();
