@@ -188,6 +188,7 @@ export interface ResidualGroup {
   readonly label: string;
   readonly count: number;
   readonly standardDeviation: number;
+  /** The residual that lies farthest from zero, with its sign. */
   readonly largest: number;
 }
 

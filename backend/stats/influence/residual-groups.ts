@@ -28,7 +28,7 @@ export function residualsByYear({ sample, residuals }: WithinFit): ResidualSumma
 
 /**
  * Count, standard deviation (root of the mean squared distance from the group's mean, so that one row has 0) and the
- * largest distance from zero.
+ * residual that lies farthest from zero, with its sign.
  */
 function groupOf(label: string, values: Float64Array): ResidualSummary['byYear'][number] {
   const count = values.length;
@@ -36,7 +36,7 @@ function groupOf(label: string, values: Float64Array): ResidualSummary['byYear']
   let largest = 0;
   for (const value of values) {
     sum += value;
-    largest = Math.max(largest, Math.abs(value));
+    if (Math.abs(value) > Math.abs(largest)) largest = value;
   }
   const mean = sum / count;
   let squares = 0;

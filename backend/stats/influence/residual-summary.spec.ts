@@ -54,6 +54,16 @@ describe('the summary of residuals', () => {
     expect(Math.abs(total)).toBeLessThan(1e-8);
   });
 
+  it('gives the largest of each company and year with its sign', () => {
+    const { largest: rows } = summary;
+    const [first] = rows;
+    const group = summary.byCompany.find(({ label }) => label === first.company);
+    const year = summary.byYear.find(({ label }) => label === String(first.year));
+    for (const found of [group, year]) expect(found?.largest).toBe(first.residual);
+    expect(summary.byCompany.some(({ largest }) => largest < 0)).toBeTrue();
+    expect(summary.byCompany.some(({ largest }) => largest > 0)).toBeTrue();
+  });
+
   it('names the largest with their cells of the panel, largest first', () => {
     expect(summary.of).toBe(168);
     expect(summary.points.length).toBe(168);
