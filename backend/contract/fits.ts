@@ -260,7 +260,8 @@ export const FitResult = z.object({
   drift: z.object({ ...interval, pValue: nullable }).nullable(),
   driftReason: z.string().optional(),
   goodness: z.object({
-    withinRSquared: z.number(),
+    withinRSquared: nullable,
+    withinRSquaredReason: z.string().optional(),
     rSquared: z.number(),
     adjustedRSquared: z.number(),
     residualStandardError: z.number(),

@@ -159,11 +159,13 @@ const writers: Readonly<Record<string, FigureWriter>> = {
       'Each slope times the plan’s regressor minus the base’s, and nothing else: intercept and noise are the same on both sides. The base holds the last actual values.',
     ),
   'within-r-squared': ({ goodness }) =>
-    share(
-      'Within R²',
-      goodness.withinRSquared,
-      'The share of the movement within companies that the slopes account for.',
-    ),
+    goodness.withinRSquared === null
+      ? undefined
+      : share(
+          'Within R²',
+          goodness.withinRSquared,
+          'The share of the movement within companies that the slopes account for.',
+        ),
   'r-squared': ({ goodness }) =>
     share(
       'R²',

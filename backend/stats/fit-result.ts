@@ -212,7 +212,9 @@ export interface FitResult {
   readonly drift: Drift | null;
   readonly driftReason?: string;
   readonly goodness: {
-    readonly withinRSquared: number;
+    /** Null where the effects leave nothing to explain. */
+    readonly withinRSquared: number | null;
+    readonly withinRSquaredReason?: string;
     readonly rSquared: number;
     readonly adjustedRSquared: number;
     readonly residualStandardError: number;

@@ -13,6 +13,9 @@ const perfectFitTolerance = 1e-20;
 
 export const perfectFitReason = 'The fit is perfect: no residual is left to judge an estimate by.';
 
+const effectsAloneReason =
+  'The effects alone explain every row: they leave nothing for the slopes to explain.';
+
 /** Σ(y − ȳ)² over all rows: within companies and between their means. */
 export function totalSquares(fit: WithinFit): number {
   const { outcome, sample } = fit;
@@ -67,8 +70,11 @@ export function goodnessOf(fit: WithinFit): FitResult['goodness'] {
   const slopes = fit.slopes.length;
   const dummies = fit.sample.companies.length - 1 + fit.yearColumns;
   const df2 = fit.residualDegreesOfFreedom;
+  // Where the effects explain every row, both are rounding.
+  const isEffectsAlone = within <= perfectFitTolerance * total;
   return {
-    withinRSquared: 1 - rest / within,
+    withinRSquared: isEffectsAlone ? null : 1 - rest / within,
+    ...(isEffectsAlone && { withinRSquaredReason: effectsAloneReason }),
     rSquared: 1 - rest / total,
     adjustedRSquared: 1 - rest / df2 / (total / (fit.sample.year.length - 1)),
     residualStandardError: Math.sqrt(rest / df2),

@@ -58,8 +58,11 @@ export class CompareFigures {
       a: of(a),
       b: of(b),
     });
-    const share = (label: string, figure: string, of: (fit: FinishedFit) => number): Line =>
-      both(label, (fit) => ({ kind: 'plain', estimate: of(fit), figure }));
+    const share = (label: string, figure: string, of: (fit: FinishedFit) => number | null): Line =>
+      both(label, (fit) => {
+        const estimate = of(fit);
+        return estimate === null ? null : { kind: 'plain', estimate, figure };
+      });
     const measure = this.#beside(({ reply }) =>
       reply.fit.form === 'log' ? 'of logs' : 'of amounts',
     );

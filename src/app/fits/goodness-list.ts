@@ -86,10 +86,11 @@ export class GoodnessList {
         figure: 'adjusted-r-squared',
       },
       {
-        ...plain,
+        kind: 'plain',
         label: withinName(specification.effects),
         value: goodness.withinRSquared,
         figure: 'within-r-squared',
+        detail: goodness.withinRSquaredReason ?? '',
       },
       {
         label: `Residual standard error, ${levelUnit(specification.form, this.#numbers)}`,
