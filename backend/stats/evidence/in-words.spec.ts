@@ -7,6 +7,7 @@ describe('figures in words', () => {
 
   it('gives four digits and a true minus sign', () => {
     expect([-1234.56, 0.000123456, 5].map(shortNumber)).toEqual(['−1235', '0.0001235', '5']);
+    expect(shortNumber(-1.23456e-9)).toBe('−1.235e−9');
   });
 
   it('gives p values two digits, and none below a thousandth', () => {

@@ -19,9 +19,9 @@ export function countInWords(count: number): string {
   return words[count] ?? String(count);
 }
 
-/** Four significant digits, with a true minus sign. */
+/** Four significant digits, with true minus signs. */
 export function shortNumber(value: number): string {
-  return String(Number(value.toPrecision(4))).replace('-', '−');
+  return String(Number(value.toPrecision(4))).replace(/-/gu, '−');
 }
 
 /** 'p = 0.012', 'p < 0.001'. */

@@ -1,3 +1,4 @@
+import { shortNumber } from '../evidence/in-words';
 import type { FitResult, FitWarning, SlopeEstimate } from '../fit-result';
 
 const manyStandardErrors = 2;
@@ -15,7 +16,7 @@ export function dominatedWarnings(
     if (moved.length === 0) return [];
     const changes = moved.map((slope) => {
       const value = without[slopes.indexOf(slope)];
-      return `${slope.name} goes from ${short(slope.estimate)} to ${short(value)}`;
+      return `${slope.name} goes from ${shortNumber(slope.estimate)} to ${shortNumber(value)}`;
     });
     const detail = `Without ${company}, ${changes.join(' and ')}: this one company decides the result.`;
     return [{ code: 'dominated', detail, subjects: [company, ...moved.map(({ name }) => name)] }];
@@ -28,8 +29,4 @@ function isMoved(slope: SlopeEstimate, without: number): boolean {
     slope.standardError !== null &&
     Math.abs(without - slope.estimate) > manyStandardErrors * slope.standardError
   );
-}
-
-function short(value: number): string {
-  return String(Number(value.toPrecision(4))).replace('-', '−');
 }

@@ -1,5 +1,6 @@
 import { fitOf, goldenPanel, panelOf, type PanelRow } from '../testing/golden-panels';
 import type { FitResult, Specification } from '../fit-result';
+import { randomNumbers, randomPanelNames } from '../testing/random-panels';
 
 const names = { outcome: 'y', regressors: ['x'] };
 
@@ -114,6 +115,26 @@ describe('warningsOf', () => {
     expect(fit.standing?.intervalReason).toContain('perfect');
     expect(fit.standing?.rankSet).toBeNull();
     expect(fit.prediction?.slopeIntervalReason).toContain('perfect');
+  });
+
+  it('blames no company for what rounding does to a slope of zero in a perfect fit', () => {
+    let turned = 0;
+    for (let seed = 1; seed <= 12; seed += 1) {
+      const random = randomNumbers(seed);
+      const rows = Array.from({ length: 90 }, (_, index): PanelRow => {
+        const regressors = [10 + 3 * random(), 5 + random()];
+        const company = Math.floor(index / 10);
+        const outcome = 2 * regressors[0] + 3 * company;
+        return { company: `K${company}`, year: 2000 + (index % 10), outcome, regressors };
+      });
+      const fit = fitOf(panelOf(rows, randomPanelNames), 'K0');
+      const sign = Math.sign(fit.slopes[1].estimate);
+      if (fit.withoutCompany.some(({ slopes }) => slopes !== null && slopes[1] * sign < 0)) {
+        turned += 1;
+      }
+      expect(codes(fit)).toEqual(['perfect-fit']);
+    }
+    expect(turned).toBeGreaterThan(0);
   });
 
   it('speaks of regressors that can hardly be told apart', () => {

@@ -36,7 +36,10 @@ export function warningsOf(input: WarningInput): FitWarning[] {
     ...sizeWarnings(input),
     ...(input.covariance === 'cr2' ? degreesWarnings(input.inference.slopes) : []),
     ...persistenceWarnings(input.context, input.own),
-    ...dominatedWarnings(input.inference.slopes, input.withoutCompany),
+    // What moves in a perfect fit without one company is rounding.
+    ...(isPerfectFit(input.context.fit)
+      ? []
+      : dominatedWarnings(input.inference.slopes, input.withoutCompany)),
     ...fitWarnings(input.context),
     ...input.inference.notes,
     ...smearingWarnings(input),
@@ -88,7 +91,7 @@ function fitWarnings({ fit }: IntervalContext): FitWarning[] {
 }
 
 function smearingWarnings({ smearing, own, context }: WarningInput): FitWarning[] {
-  if (smearing === null || smearing.own === null) return [];
+  if (typeof smearing?.own !== 'number') return [];
   const distance = smearing.own / smearing.factor - 1;
   if (Math.abs(distance) <= noticeableSmear) return [];
   const company = context.fit.sample.companies[own];
