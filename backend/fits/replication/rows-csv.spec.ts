@@ -42,6 +42,30 @@ describe('the rows of a replication pack', () => {
     expect(ofB.some(([, , outcome]) => outcome.startsWith("'"))).toBeFalse();
   });
 
+  it('keep a name with a line end in one cell, whichever line end it is', () => {
+    const broken = panelOf(
+      values.map((value, index) => ({
+        company: index < 3 ? 'C\n03' : 'D\r04',
+        year: 2000 + (index % 3),
+        outcome: value,
+        regressors: [index + 0.25],
+      })),
+      { outcome: 'value', regressors: ['inv\nest'] },
+    );
+    const result = fitPanel(broken, plainSpecification, null, undefined, { sha256 });
+    const names = { company: 'company', year: 'year', outcome: 'value', regressors: ['inv\nest'] };
+    const text = rowsCsv({ ...names, lag: 0 }, rowsUsed(broken, result));
+    const [header, ...rows] = parse(text, { record_delimiter: '\r\n' });
+    expect(text).toContain('"inv\nest"');
+    expect(text).toContain('"C\n03"');
+    expect(text).toContain('"D\r04"');
+    expect(header[3]).toBe('inv\nest');
+    expect(rows.map(([company]) => company)).toEqual([
+      ...Array<string>(3).fill('C\n03'),
+      ...Array<string>(3).fill('D\r04'),
+    ]);
+  });
+
   it('come by company and year, with the company of one row marked as unused', () => {
     const rows = cells({}).slice(1);
     expect(rows.map(([company]) => company)).toEqual([

@@ -31,5 +31,6 @@ export function rowsCsv(header: RowsHeader, rows: readonly RowUsed[]): string {
     String(row.fileRow),
     row.isUsed ? 'yes' : 'no',
   ]);
-  return stringify([titles, ...lines], { record_delimiter: '\r\n' });
+  // The package quotes the line end of its own records alone.
+  return stringify([titles, ...lines], { record_delimiter: '\r\n', quoted_match: /[\r\n]/u });
 }
