@@ -2,7 +2,10 @@
 export type Json =
   string | number | boolean | null | readonly Json[] | { readonly [key: string]: Json };
 
-/** Gives every null its own `…Reason`, taken from the reason that its object states. */
+/**
+ * Gives every null its own `…Reason`, taken from the reason that its object states. The one exception of a reply is
+ * `specification.seed`, printed as it was asked for: null where the specification draws nothing.
+ */
 export function withReasons(value: Json): Json {
   if (Array.isArray(value)) return value.map(withReasons);
   if (value === null || typeof value !== 'object') return value;
