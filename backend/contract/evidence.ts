@@ -108,6 +108,7 @@ export const Alternative = z.object({
   standingUnit: z.enum(['level', 'percent']),
   standingReason: z.string().optional(),
   rankSet: places,
+  rankReason: z.string().optional(),
   reason: z.string().optional(),
 });
 export type Alternative = z.infer<typeof Alternative>;

@@ -1,4 +1,4 @@
-import type { Alternative, Evidence } from '../../backend/stats';
+import type { Alternative, EstimatorSummary, Evidence } from '../../backend/stats';
 import { slopeReasons } from './slope-reasons';
 import { reasonsOf } from './with-reasons';
 
@@ -16,14 +16,7 @@ export function evidenceReply(evidence: Evidence): object {
     ...evidence,
     estimators: evidence.estimators.map((estimator) => ({
       ...estimator,
-      ...reasonsOf(estimator, {
-        constant: estimator.reason ?? 'The estimator has no constant.',
-        degreesOfFreedom:
-          estimator.reason ??
-          (estimator.code === 'random-effects'
-            ? 'The normal distribution is used.'
-            : 'Each slope has its own, if any.'),
-      }),
+      ...reasonsOf(estimator, estimatorReasons(estimator)),
     })),
     covariances: evidence.covariances.map((row) => ({
       ...row,
@@ -45,9 +38,25 @@ export function evidenceReply(evidence: Evidence): object {
   };
 }
 
-function alternativeReply(model: Alternative): object {
-  const { standing, reason } = model;
-  const none = reason ?? model.standingReason ?? 'No own company was named.';
+/** What is said beside slopes that exist is no reason for what the estimator lacks. */
+function estimatorReasons({
+  code,
+  slopes,
+  reason,
+}: EstimatorSummary): Readonly<Partial<Record<'constant' | 'degreesOfFreedom', string>>> {
+  if (slopes === null) return { constant: reason, degreesOfFreedom: reason };
+  return {
+    constant: 'The estimator has no constant.',
+    degreesOfFreedom:
+      code === 'random-effects'
+        ? 'The normal distribution is used.'
+        : 'Each slope has its own, if any.',
+  };
+}
+
+function alternativeReply({ rankReason, ...model }: Alternative): object {
+  const { standing } = model;
+  const none = model.standingReason ?? model.reason ?? 'No own company was named.';
   return {
     ...model,
     standing:
@@ -55,7 +64,7 @@ function alternativeReply(model: Alternative): object {
         ? null
         : {
             ...standing,
-            ...(standing.intervalReason === undefined &&
+            ...((standing.low !== null || standing.high !== null) &&
               reasonsOf(standing, {
                 standardError: 'The interval is that of the logarithms, put into percent.',
               })),
@@ -63,7 +72,7 @@ function alternativeReply(model: Alternative): object {
     ...reasonsOf(model, {
       effects: 'The model takes no effects out of the variables.',
       standing: none,
-      rankSet: standing === null ? none : 'The model gives no rank set.',
+      rankSet: rankReason ?? (standing === null ? none : 'The model gives no rank set.'),
     }),
   };
 }

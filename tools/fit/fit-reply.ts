@@ -1,4 +1,4 @@
-import type { DroppedRow, Evidence, FitResult } from '../../backend/stats';
+import type { DroppedRow, Evidence, FitResult, Standing } from '../../backend/stats';
 import { evidenceReply } from './evidence-reply';
 import { slopeReasons } from './slope-reasons';
 import { type Json, withReasons } from './with-reasons';
@@ -39,7 +39,7 @@ export function fitReply(
       standing === null
         ? null
         : {
-            ...standing,
+            ...withoutRankReason(standing),
             ...(standing.rankSet === null && { rankSetReason: standing.rankReason }),
             ...(standing.ownPersistence === null && {
               ownPersistenceReason:
@@ -61,4 +61,9 @@ export function fitReply(
     specification: { ...result.specification },
     ...(figures as Readonly<Record<string, Json>>),
   };
+}
+
+/** A rank that is known has no reason to be missing; why its set is stands beside the set. */
+function withoutRankReason({ rankReason, ...standing }: Standing): object {
+  return standing.rank === null ? { ...standing, rankReason } : standing;
 }
