@@ -1,5 +1,5 @@
 import type { IntervalContext } from './intervals/interval-context';
-import { correlationForm, yearDecays } from './intervals/correlation-product';
+import { correlatedSquare } from './intervals/correlation-product';
 import type { OwnErrors } from './prediction';
 
 /**
@@ -16,8 +16,7 @@ export function ownErrorsOf({ fit, persistence }: IntervalContext, own: number):
   const rows = to - from;
   const used = persistence.pooled === null ? null : persistence.used[own];
   const ones = new Float64Array(rows).fill(1);
-  const decays = yearDecays(years, used ?? 0);
-  const taken = correlationForm(ones, decays) / rows;
+  const taken = correlatedSquare(ones, years, used ?? 0) / rows;
   let squares = 0;
   for (let row = from; row < to; row += 1) squares += residuals[row] * residuals[row];
   return {

@@ -1,4 +1,4 @@
-import { correlationForm, correlationProduct, fillYearDecays } from './correlation-product';
+import { correlatedSquare, correlationProduct, fillYearDecays } from './correlation-product';
 
 describe('correlationProduct', () => {
   it('equals the product with the matrix written out, also over gaps', () => {
@@ -10,7 +10,7 @@ describe('correlationProduct', () => {
       fillYearDecays(year, { from: 0, to: 5, persistence }, decays, 0);
       correlationProduct(values, { count: 5, decays }, product);
       const form = values.reduce((sum, value, row) => sum + value * product[row], 0);
-      expect(correlationForm(values, decays)).toBeCloseTo(form, 11);
+      expect(correlatedSquare(values, year, persistence)).toBeCloseTo(form, 11);
       year.forEach((left, row) => {
         const expected = year.reduce(
           (sum, right, column) => sum + persistence ** Math.abs(left - right) * values[column],

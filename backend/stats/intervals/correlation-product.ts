@@ -23,13 +23,6 @@ export interface CompanySpan {
   readonly persistence: number;
 }
 
-/** The decays of one company's years. */
-export function yearDecays(year: Int32Array, persistence: number): Float64Array {
-  const decays = new Float64Array(year.length);
-  fillYearDecays(year, { from: 0, to: year.length, persistence }, decays, 0);
-  return decays;
-}
-
 /**
  * Multiplies by R = [ρ^|year − year'|] without forming it: one sweep forward, one back.
  *
@@ -54,15 +47,23 @@ export function correlationProduct(
   }
 }
 
-/** v'Rv over all companies in one sweep: a company's first decay is 0, so nothing is carried over from the last one. */
-export function correlationForm(values: Float64Array, decays: Float64Array): number {
+/**
+ * v'Rv with R = [ρ^|year − year'|], in one sweep.
+ *
+ * @param values  one a row; the first `years.length` are used.
+ * @param years  one company's, strictly ascending.
+ */
+export function correlatedSquare(
+  values: Float64Array,
+  years: Int32Array,
+  persistence: number,
+): number {
   let carried = 0;
-  let sum = 0;
-  for (let row = 0; row < values.length; row += 1) {
-    const value = values[row];
-    carried *= decays[row];
-    sum += value * (value + 2 * carried);
-    carried += value;
+  let sum = values[0] * values[0];
+  for (let row = 1; row < years.length; row += 1) {
+    const gap = years[row] - years[row - 1];
+    carried = (carried + values[row - 1]) * (gap === 1 ? persistence : persistence ** gap);
+    sum += values[row] * (values[row] + 2 * carried);
   }
   return sum;
 }

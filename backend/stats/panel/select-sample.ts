@@ -146,9 +146,12 @@ function gather(
       `expected at most ${mostYears} different fiscal years; found ${years.length}: is this the year's column?`,
     );
   }
+  const taken = areAll(rows, data.company.length)
+    ? (values: Float64Array): Float64Array => values
+    : (values: Float64Array): Float64Array => pick(values, rows);
   const levels = {
-    outcome: pick(columns.outcome, rows),
-    regressors: columns.regressors.map((values) => pick(values, rows)),
+    outcome: taken(columns.outcome),
+    regressors: columns.regressors.map(taken),
   };
   return {
     companies: Array.from({ length: starts.length - 1 }, (_, company) =>
@@ -171,6 +174,13 @@ interface SampleRows {
   readonly rows: Int32Array;
   readonly starts: Int32Array;
   readonly form: ColumnForm['form'];
+}
+
+/** Whether the rows are all rows in their order: then a column is taken as it is, for nobody writes to one. */
+function areAll(rows: Int32Array, count: number): boolean {
+  if (rows.length !== count) return false;
+  for (let index = 0; index < count; index += 1) if (rows[index] !== index) return false;
+  return true;
 }
 
 function pickWhole(values: Int32Array, rows: Int32Array): Int32Array {

@@ -44,25 +44,46 @@ function companyProduct(fit: WithinFit, company: number): CompanyProduct {
       cross[l * size + k] = sum;
     }
   }
-  const rest = (): SquareMatrix =>
-    cross.map((value, index) => (index % (size + 1) === 0 ? 1 : 0) - value);
-  let power: SymmetricPower | undefined;
-  const adjusted = (): SymmetricPower =>
-    (power ??= symmetricPower(rest(), size, -0.5, eigenvalueFloor));
-  return {
-    cross,
-    score,
-    get adjustment() {
-      return adjusted().matrix;
-    },
-    get determined() {
-      const { matrix, dropped } = adjusted();
-      return dropped === 0 ? null : times(times(matrix, matrix, size), rest(), size);
-    },
-    get isDispensable() {
-      return adjusted().dropped === 0 || areSlopesDetermined(rest(), size, fit.yearColumns);
-    },
-  };
+  return new LazyProduct(cross, score, fit.yearColumns);
+}
+
+/** Eigenvalues are computed when first asked for, and once. */
+class LazyProduct implements CompanyProduct {
+  #power: SymmetricPower | undefined;
+
+  constructor(
+    readonly cross: SquareMatrix,
+    readonly score: Float64Array,
+    private readonly yearColumns: number,
+  ) {}
+
+  get adjustment(): SquareMatrix {
+    return this.#adjusted().matrix;
+  }
+
+  get determined(): SquareMatrix | null {
+    const { matrix, dropped } = this.#adjusted();
+    const size = this.score.length;
+    return dropped === 0 ? null : times(times(matrix, matrix, size), this.#rest(), size);
+  }
+
+  get isDispensable(): boolean {
+    return (
+      this.#adjusted().dropped === 0 ||
+      areSlopesDetermined(this.#rest(), this.score.length, this.yearColumns)
+    );
+  }
+
+  #adjusted(): SymmetricPower {
+    this.#power ??= symmetricPower(this.#rest(), this.score.length, -0.5, eigenvalueFloor);
+    return this.#power;
+  }
+
+  /** I − S_i. */
+  #rest(): SquareMatrix {
+    const size = this.score.length;
+    return this.cross.map((value, index) => (index % (size + 1) === 0 ? 1 : 0) - value);
+  }
 }
 
 /**
