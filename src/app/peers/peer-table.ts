@@ -1,6 +1,7 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  type ElementRef,
   computed,
   inject,
   input,
@@ -44,6 +45,7 @@ export class PeerTable {
   readonly written = output<{ readonly company: string; readonly reason: string }>();
 
   private readonly fields = viewChildren(ReasonField);
+  private readonly lines = viewChildren<ElementRef<HTMLTableRowElement>>('line');
 
   protected readonly digits = computed(() => {
     const companies = this.rows().map(({ company }) => company);
@@ -80,9 +82,11 @@ export class PeerTable {
     return yearsText(firstYear, lastYear);
   }
 
-  /** The reason that counts on the side a company moves to is written next. */
+  /** Goes to where a company's reason is written; its row where it can only be read. */
   focusReason(company: string): void {
     const index = this.rows().findIndex((row) => row.company.name === company);
-    this.fields().at(index)?.focus();
+    if (index === -1) return;
+    if (this.isReadOnly()) this.lines().at(index)?.nativeElement.focus();
+    else this.fields().at(index)?.focus();
   }
 }

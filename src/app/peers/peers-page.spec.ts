@@ -104,11 +104,14 @@ describe('the Peers page', () => {
   async function load(
     group: PeerGroupReply | null,
     newer: PanelVersionSummary[] = [],
+    listed: readonly PanelCompany[] = companies,
   ): Promise<void> {
     http.expectOne('/api/panel-versions').flush({ versions: [...newer, panelVersion] });
     await answer('/api/peer-groups', { versions: group === null ? [] : [group] });
     if (group !== null) await answer(`/api/peer-groups/${group.id}`, group);
-    await answer(`/api/panel-versions/${(newer[0] ?? panelVersion).id}/companies`, { companies });
+    await answer(`/api/panel-versions/${(newer[0] ?? panelVersion).id}/companies`, {
+      companies: listed,
+    });
     if (group !== null)
       await answer('/api/desk', { panelVersion, peerGroup: group, fit: null, editionsWaiting: 0 });
   }
@@ -299,6 +302,49 @@ describe('the Peers page', () => {
     expect(page().querySelector('select')).toBeNull();
     expect(words()).not.toContain('Take out');
     expect(words()).toContain('No reason written');
+  });
+
+  it('goes to the reason of the company that the address names', async () => {
+    start(['analyst']);
+    fixture.componentRef.setInput('company', 'Sarvane');
+    document.body.append(page());
+    await load(saved);
+    expect(document.activeElement?.getAttribute('aria-label')).toBe('Why Sarvane is in');
+    fixture.componentRef.setInput('company', 'Kesdrin');
+    await settled();
+    expect(document.activeElement?.getAttribute('aria-label')).toBe('Why Kesdrin is in');
+  });
+
+  it('goes to the row of that company where reasons can only be read', async () => {
+    start(['cfo']);
+    fixture.componentRef.setInput('company', 'Kesdrin');
+    document.body.append(page());
+    await load(saved);
+    expect(document.activeElement?.textContent).toMatch(/Kesdrin\s*Same customers/);
+  });
+
+  it('stays where it is for a company that is no peer', async () => {
+    start(['cfo']);
+    fixture.componentRef.setInput('company', 'Velmara');
+    document.body.append(page());
+    await load(saved);
+    expect(page().contains(document.activeElement)).toBeFalse();
+  });
+
+  it('finds the company where the list stops short of it', async () => {
+    start(['cfo']);
+    fixture.componentRef.setInput('company', 'Zorvane');
+    document.body.append(page());
+    const many = Array.from({ length: 240 }, (_, place) => `Peer ${place}`);
+    const names = [...many, 'Velmara', 'Zorvane'];
+    const listed = names.map((name) => ({ ...companies[0], name }));
+    const peers = [...many, 'Zorvane'].map((company) => ({
+      company,
+      isIncluded: true,
+      reason: company,
+    }));
+    await load({ ...saved, peers, peerCount: peers.length }, [], listed);
+    expect(document.activeElement?.textContent).toMatch(/^\s*Zorvane/);
   });
 
   it('offers to bring in a panel where there is none', async () => {

@@ -62,6 +62,8 @@ export class PeersPage {
 
   /** The version to show; the newest where the address names none. */
   readonly peerGroupId = input<string>();
+  /** The company whose reason is asked for, from the address. */
+  readonly company = input<string>();
 
   private readonly tables = viewChildren(PeerTable);
 
@@ -75,7 +77,14 @@ export class PeersPage {
     return view.kind === 'ready' ? peersShown(view.ground, view.draft, this.search()) : null;
   });
 
+  readonly #isReady = computed(() => this.store.view().kind === 'ready');
+
   constructor() {
+    effect(() => {
+      const company = this.company();
+      if (company === undefined || !this.#isReady()) return;
+      untracked(() => this.#lookAt(company));
+    });
     effect(() => {
       const id = this.peerGroupId();
       untracked(() => {
@@ -114,6 +123,15 @@ export class PeersPage {
 
   protected focusReason(company: string): void {
     for (const table of this.tables()) table.focusReason(company);
+  }
+
+  /** Brings a company's reason into view; where the lists stop short of it, the search finds it. */
+  #lookAt(company: string): void {
+    const page = this.shown();
+    if (page === null) return;
+    const isListed = [...page.inside, ...page.outside].some((row) => row.company.name === company);
+    if (!isListed && page.notShown > 0) this.search.set(company);
+    afterNextRender(() => this.focusReason(company), { injector: this.#injector });
   }
 
   protected async save(): Promise<void> {
