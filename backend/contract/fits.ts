@@ -114,6 +114,7 @@ export const PredictionBasis = z.object({
     ])
     .nullable(),
   slopeIntervalReason: z.string().optional(),
+  slopeNoVarianceReason: z.string().optional(),
   last: ownYear,
   held: z.array(z.number()).nullable().optional(),
   ownErrors: z

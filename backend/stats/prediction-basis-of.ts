@@ -47,6 +47,9 @@ export function predictionBasisOf(input: PredictionInput): PredictionBasis {
     slopeDegreesOfFreedom: inference.degrees,
     slopeIntervalReason:
       context.reason === perfectFitReason ? perfectFitReason : inference.covarianceReason,
+    ...(inference.noVarianceReason !== undefined && {
+      slopeNoVarianceReason: inference.noVarianceReason,
+    }),
     last,
     held:
       specification.lag === 0

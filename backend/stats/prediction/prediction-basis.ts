@@ -98,6 +98,8 @@ export interface PredictionBasis {
   readonly slopeDegreesOfFreedom: SlopeDegreesOfFreedom | null;
   /** Why contrasts of slopes have no interval, where they have none. */
   readonly slopeIntervalReason?: string;
+  /** Why one of them has none where the covariance gives it no variance. */
+  readonly slopeNoVarianceReason?: string;
   /** The own company's last observed year and its values. */
   readonly last: OwnYear;
   /**

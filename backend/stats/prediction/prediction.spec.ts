@@ -102,17 +102,35 @@ describe('differenceToBase', () => {
       const alone = fitOf(panelOf(rows, { outcome: 'y', regressors: ['a', 'b'] }), 'C3', {
         slopes,
       });
-      const reason = 'No variance is left to judge it by: one company alone determines this';
+      const reason = 'No variance is left to judge it by: one company alone determines it.';
       expect(alone.slopes[0].standardError).toBeGreaterThan(0);
       expect(alone.slopes[1].standardError).toBeNull();
-      expect(alone.slopes[1].intervalReason).toBe(`${reason} slope.`);
+      expect(alone.slopes[1].intervalReason).toBe(reason);
       const difference = differenceToBase(alone.prediction!, [0, 3], tQuantile);
       expect(difference.standardError).toBeNull();
-      expect(difference.intervalReason).toBe(`${reason} difference.`);
+      expect(difference.intervalReason).toBe(reason);
       expectDigits(difference.estimate, 3 * alone.slopes[1].estimate, 12);
       const other = differenceToBase(alone.prediction!, [1, 0], tQuantile);
       expectDigits(other.high, alone.slopes[0].high ?? NaN, 12);
     });
+
+  it('says in the covariance’s own words why there is no variance, and in its own of an earlier engine’s basis', () => {
+    const still = {
+      ...basis,
+      slopeCovariance: [
+        [0, 0],
+        [0, 0],
+      ],
+    };
+    const reasons = [
+      { ...still, slopeNoVarianceReason: 'Nothing is left.' },
+      { ...still, slopeNoVarianceReason: undefined },
+    ].map((one) => differenceToBase(one, [1, 0], tQuantile).intervalReason);
+    expect(reasons).toEqual([
+      'Nothing is left.',
+      'No variance is left to judge it by: one company alone determines this difference.',
+    ]);
+  });
 
   it('has no interval where the slopes have none', () => {
     const difference = differenceToBase(

@@ -9,6 +9,9 @@ const workingTolerance = 1e-10;
 /** A variance below this share of the classical one is rounding: residuals that sum to zero are all it rests on. */
 export const varianceTolerance = 1e-20;
 
+const noVarianceReason =
+  'No variance is left to judge it by: one company alone determines this difference.';
+
 /** Degrees of freedom of the contrast of slopes with the given weights, not all zero. */
 export function contrastDegreesOfFreedom(
   degrees: SlopeDegreesOfFreedom,
@@ -57,10 +60,7 @@ export function differenceToBase(
   const weights = deltaRegressors.map((delta) => delta / largest);
   const variance = quadraticForm(slopeCovariance, weights);
   if (!isJudged(basis, weights, variance)) {
-    return withoutInterval(
-      estimate,
-      'No variance is left to judge it by: one company alone determines this difference.',
-    );
+    return withoutInterval(estimate, basis.slopeNoVarianceReason ?? noVarianceReason);
   }
   const standardError = largest * Math.sqrt(variance);
   const degrees = contrastDegreesOfFreedom(slopeDegreesOfFreedom, weights);

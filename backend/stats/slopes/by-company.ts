@@ -1,5 +1,9 @@
 import { companyScores } from './company-scores';
-import { oneCompanyReason, type MatrixMethod, type SlopeCovariance } from './covariance-method';
+import {
+  noCompanyVarianceReason,
+  type MatrixMethod,
+  type SlopeCovariance,
+} from './covariance-method';
 import { scoreProducts } from './score-products';
 import { slopeSandwich } from './slope-block';
 import type { SlopeGround } from './slope-ground';
@@ -8,7 +12,7 @@ import type { SlopeGround } from './slope-ground';
 export const byCompany = {
   kind: 'matrix',
   degreesOfFreedom: ({ fit }: SlopeGround): number => fit.sample.companies.length - 1,
-  noVarianceReason: oneCompanyReason,
+  noVarianceReason: noCompanyVarianceReason,
 } satisfies Partial<MatrixMethod>;
 
 /** factor · R₂₂⁻¹·Σ_i g_ig_i'·R₂₂⁻ᵀ with g_i the company's score. */

@@ -24,7 +24,7 @@ export interface MatrixMethod extends MethodWords {
   /** Of t: one figure for all, or Satterthwaite's of each contrast. */
   readonly degreesOfFreedom: 'satterthwaite' | ((ground: SlopeGround) => number);
   /** Why a slope has no interval where the matrix gives it no variance. */
-  readonly noVarianceReason: string;
+  noVarianceReason(ground: SlopeGround): string;
 }
 
 /** A method that gives intervals without a matrix, by draws. */
@@ -60,6 +60,8 @@ export interface SlopeInference {
   readonly covarianceReason?: string;
   /** Degrees of freedom of every contrast of slopes, for prediction; null without a covariance. */
   readonly degrees: SlopeDegreesOfFreedom | null;
+  /** Why a contrast of slopes has no interval where it has no variance; undefined without a covariance. */
+  readonly noVarianceReason?: string;
   /** What has to be said beside the figures. */
   readonly notes: readonly SlopeNote[];
 }
@@ -72,8 +74,22 @@ export interface InferenceOptions {
   readonly onProgress?: (share: number) => void;
 }
 
-export const oneCompanyReason =
-  'No variance is left to judge it by: one company alone determines this slope.';
+const oneCompanyReason = 'No variance is left to judge it by: one company alone determines it.';
 
-export const exactRowsReason =
-  'No variance is left to judge it by: the rows that determine this slope are fitted exactly.';
+const twoCompaniesReason =
+  'No variance is left to judge it by: with two companies and year effects the residuals of one mirror those of the other, so what companies add to the variance is zero by construction.';
+
+/**
+ * Why clustering by company gives a slope no variance. With two companies and year effects regressors and residuals of
+ * one are those of the other turned round, so both companies' scores are equal, and they sum to zero.
+ */
+export function noCompanyVarianceReason({ fit }: SlopeGround): string {
+  return fit.sample.companies.length === 2 && fit.yearColumns > 0
+    ? twoCompaniesReason
+    : oneCompanyReason;
+}
+
+/** Why clustering by row, or none, gives a slope no variance. */
+export function exactRowsReason(): string {
+  return 'No variance is left to judge it by: the rows that determine it are fitted exactly.';
+}

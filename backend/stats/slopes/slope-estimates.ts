@@ -28,7 +28,7 @@ export function slopeEstimates(
     const estimate = fit.slopes[k];
     const degreesOfFreedom = slopeDegreesOfFreedom(ground, method, k);
     if (isPerfect || degreesOfFreedom === null || !judged[k]) {
-      const reason = isPerfect ? perfectFitReason : method.noVarianceReason;
+      const reason = isPerfect ? perfectFitReason : method.noVarianceReason(ground);
       return {
         name,
         ...withoutInterval(estimate, reason),

@@ -26,6 +26,7 @@ export function slopeInference(
     slopes: slopeEstimates(ground, method, covariance, options.confidence),
     covariance: covariance.matrix,
     degrees: contrastDegrees(ground, method),
+    noVarianceReason: method.noVarianceReason(ground),
     notes: covariance.notes,
   };
 }

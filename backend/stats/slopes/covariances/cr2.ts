@@ -1,5 +1,5 @@
 import { timesVector } from '../../linear-algebra/square-matrix';
-import { type MatrixMethod, oneCompanyReason } from '../covariance-method';
+import { type MatrixMethod, noCompanyVarianceReason } from '../covariance-method';
 import { scoreProducts } from '../score-products';
 import { slopeSandwich } from '../slope-block';
 
@@ -14,7 +14,7 @@ export const cr2: MatrixMethod = {
     'Bell & McCaffrey (2002), Survey Methodology 28, 169–181; Pustejovsky & Tipton (2018), Journal of Business & Economic Statistics 36, 672–683',
   reference: ['within_se.CR2_satterthwaite', 'twoway.CR2_satterthwaite'],
   degreesOfFreedom: 'satterthwaite',
-  noVarianceReason: oneCompanyReason,
+  noVarianceReason: noCompanyVarianceReason,
   covariance: ({ fit, products }) => {
     const size = fit.slopes.length;
     const scores = new Float64Array(products.length * size);

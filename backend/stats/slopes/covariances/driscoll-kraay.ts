@@ -4,6 +4,10 @@ import { groupScores, scoreProducts } from '../score-products';
 import { slopeBlock, slopeSandwich } from '../slope-block';
 import type { SlopeGround } from '../slope-ground';
 
+/** Companies' two rows mirror each other, so the two years' scores are equal, and they sum to zero. */
+const twoYearsReason =
+  'No variance is left to judge it by: with two fiscal years the residuals of one mirror those of the other, so what years add to the variance is zero by construction.';
+
 /** Shocks that hit all companies together and last for some years. */
 export const driscollKraay: MatrixMethod = {
   kind: 'matrix',
@@ -18,7 +22,8 @@ export const driscollKraay: MatrixMethod = {
     'within_se.driscoll_kraay_L3',
   ],
   degreesOfFreedom: ({ fit }) => fit.sample.years.length - 1,
-  noVarianceReason: exactRowsReason,
+  noVarianceReason: ({ fit }) =>
+    fit.sample.years.length === 2 ? twoYearsReason : exactRowsReason(),
   covariance: (ground) => ({
     matrix: driscollKraayCovariance(ground, bartlettLag(ground.fit.sample.years.length)),
     notes: [],

@@ -27,7 +27,7 @@ export const twoWay: MatrixMethod = {
     'Cameron, Gelbach & Miller (2011), Journal of Business & Economic Statistics 29, 238–249; Thompson (2011), Journal of Financial Economics 99, 1–10',
   reference: ['within_se.twoway_cluster_plm', 'petersen cluster_both'],
   degreesOfFreedom: ({ fit }) => Math.min(fit.sample.companies.length, fit.sample.years.length) - 1,
-  noVarianceReason:
+  noVarianceReason: () =>
     'No variance is left to judge it by: what companies and years add is no more than what the rows take off.',
   covariance: (ground) => {
     const { fit } = ground;

@@ -11,7 +11,11 @@ import {
 import { blockedStatistics } from '../bootstrap/blocked-statistics';
 import { drawStatistics, slopeScores } from '../bootstrap/draw-statistics';
 import { mostEnumerated, type SignDraws, signDraws } from '../bootstrap/sign-draws';
-import { type BootstrapMethod, oneCompanyReason, type SlopeNote } from '../covariance-method';
+import {
+  type BootstrapMethod,
+  noCompanyVarianceReason,
+  type SlopeNote,
+} from '../covariance-method';
 import { judgedSlopes } from '../slope-estimates';
 import { cr0 } from './cr0';
 
@@ -35,7 +39,7 @@ export const wild: BootstrapMethod = {
     const results = fit.sample.regressorNames.map((name, k): BootstrapSlope => {
       const estimate = fit.slopes[k];
       if (isPerfectFit(fit)) return withoutDraws(name, estimate, perfectFitReason);
-      if (!judged[k]) return withoutDraws(name, estimate, oneCompanyReason);
+      if (!judged[k]) return withoutDraws(name, estimate, noCompanyVarianceReason(ground));
       const standardError = Math.sqrt(matrix[k * size + k]);
       const draws = signDraws(products.length, options.seed);
       const statisticsOf = products.length > mostEnumerated ? blockedStatistics : drawStatistics;
