@@ -17,6 +17,7 @@ import { FitPool } from './compute/fit-pool';
 import { ParseProcess } from './compute/parse-process';
 import { BootstrapJob } from './fits/bootstrap-job';
 import { BootstrapService } from './fits/bootstrap-service';
+import { EvidenceJob } from './fits/evidence-job';
 import { EvidenceService } from './fits/evidence-service';
 import { FitJob } from './fits/fit-job';
 import { FitService } from './fits/fit-service';
@@ -140,13 +141,19 @@ export function compose(options: ComposeOptions): Composition {
       await repositories.assertUnprivilegedRole();
       await throttle.prune();
       await queue.start();
-      const fitJob = new FitJob(workRepositories, fitPool, now);
+      const fitJob = new FitJob(workRepositories, queue, fitPool, now);
       for (let worker = 0; worker < options.fitThreads; worker++)
         await queue.work(
           'fit',
           (ticket) => fitJob.run(ticket),
           (ticket) => fitJob.giveUp(ticket),
         );
+      const evidenceJob = new EvidenceJob(workRepositories, fitPool);
+      await queue.work(
+        'evidence',
+        (ticket) => evidenceJob.run(ticket),
+        (ticket) => evidenceJob.giveUp(ticket),
+      );
       const bootstrapJob = new BootstrapJob(workRepositories, fitPool, now);
       await queue.work(
         'bootstrap',

@@ -1,8 +1,8 @@
-import { MessageChannel, type MessagePort, receiveMessageOnPort } from 'node:worker_threads';
 import { Piscina } from 'piscina';
 import type {
+  BackgroundAnswer,
+  BackgroundTask,
   BootstrapAnswer,
-  BootstrapTask,
   EvidenceAnswer,
   FitAnswer,
   FitSubject,
@@ -16,16 +16,11 @@ export interface Run<Answer> {
   progress(): number;
 }
 
-/** Its answer comes before its evidence. */
-export interface FitRun extends Run<FitAnswer> {
-  readonly evidence: Promise<EvidenceAnswer>;
-}
-
 /** Worker threads for fits: the thread that answers requests never estimates anything. */
 export class FitPool {
-  readonly #fits: Piscina<FitTask, EvidenceAnswer>;
-  /** Apart, so that a long bootstrap keeps no fit waiting. */
-  readonly #bootstraps: Piscina<BootstrapTask, BootstrapAnswer>;
+  readonly #fits: Piscina<FitTask, FitAnswer>;
+  /** Apart, so that neither evidence nor a long bootstrap keeps a fit waiting. */
+  readonly #background: Piscina<BackgroundTask, BackgroundAnswer>;
 
   /** @param workerFile  path of the worker's entry, TypeScript under tsx or the built file. */
   constructor(workerFile: string, maxThreads: number) {
@@ -35,51 +30,41 @@ export class FitPool {
       ...(workerFile.endsWith('.ts') ? { execArgv: ['--import', 'tsx'] } : {}),
     };
     this.#fits = new Piscina({ ...worker, name: 'runFit', minThreads: 1, maxThreads });
-    this.#bootstraps = new Piscina({
+    this.#background = new Piscina({
       ...worker,
-      name: 'runBootstrap',
+      name: 'runInBackground',
       minThreads: 0,
       maxThreads: 1,
     });
   }
 
   /** Starts a fit; aborting ends its thread. The columns' buffers move to the worker and are empty here afterwards. */
-  run(subject: FitSubject, signal: AbortSignal): FitRun {
-    const progress = sharedProgress();
-    const { port1, port2 } = new MessageChannel();
-    const transferList = [...buffersOf(subject), port2];
-    const task = { ...subject, progress, answerTo: port2 };
-    const evidence = this.#fits.run(task, { transferList, signal });
-    return { answer: answerBefore(evidence, port1), evidence, progress: shareOf(progress) };
-  }
-
-  /** Starts a bootstrap, likewise. */
-  bootstrap(subject: FitSubject, seed: number, signal: AbortSignal): Run<BootstrapAnswer> {
+  run(subject: FitSubject, signal: AbortSignal): Run<FitAnswer> {
     const progress = sharedProgress();
     const transferList = buffersOf(subject);
-    const answer = this.#bootstraps.run({ ...subject, seed, progress }, { transferList, signal });
+    const answer = this.#fits.run({ ...subject, progress }, { transferList, signal });
+    return { answer, progress: shareOf(progress) };
+  }
+
+  /** Computes the evidence of a fit in the background; the buffers move likewise. */
+  async evidence(subject: FitSubject): Promise<EvidenceAnswer> {
+    const task = { ...subject, wanted: 'evidence' } as const;
+    const answer = await this.#background.run(task, { transferList: buffersOf(subject) });
+    return answer as EvidenceAnswer;
+  }
+
+  /** Starts a bootstrap in the background, likewise; aborting ends its thread. */
+  bootstrap(subject: FitSubject, seed: number, signal: AbortSignal): Run<BootstrapAnswer> {
+    const progress = sharedProgress();
+    const task = { ...subject, wanted: 'bootstrap', seed, progress } as const;
+    const options = { transferList: buffersOf(subject), signal };
+    const answer = this.#background.run(task, options) as Promise<BootstrapAnswer>;
     return { answer, progress: shareOf(progress) };
   }
 
   async close(): Promise<void> {
-    await Promise.all([this.#fits.destroy(), this.#bootstraps.destroy()]);
+    await Promise.all([this.#fits.destroy(), this.#background.destroy()]);
   }
-}
-
-/** The message that comes before the run's end; a run that ends without one rejects both. */
-function answerBefore(evidence: Promise<EvidenceAnswer>, port: MessagePort): Promise<FitAnswer> {
-  return new Promise<FitAnswer>((resolve, reject) => {
-    port.once('message', resolve);
-    const ended = (): void => {
-      // What the worker sent before its end lies on this side already, told or not.
-      const waiting: { readonly message: FitAnswer } | undefined = receiveMessageOnPort(port);
-      if (waiting === undefined) reject(new Error('a worker ended without its answer'));
-      else resolve(waiting.message);
-    };
-    void evidence.then(ended, reject).finally(() => {
-      port.close();
-    });
-  });
 }
 
 function buffersOf({ columns }: FitSubject): ArrayBuffer[] {

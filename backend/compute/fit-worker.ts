@@ -1,32 +1,23 @@
 import { bootstrapSummary, evidenceOf } from '../stats';
-import type { BootstrapAnswer, BootstrapTask, EvidenceAnswer, FitTask } from './messages';
+import type { BackgroundAnswer, BackgroundTask, FitAnswer, FitTask } from './messages';
 import { openSubject, refusalOf, storeShare } from './open-subject';
 
-/** Runs one fit in a worker thread: tells its result, then computes its evidence. */
-export function runFit(task: FitTask): EvidenceAnswer {
-  const { answerTo, progress } = task;
-  let open;
+/** Runs one fit in a worker thread. */
+export function runFit(task: FitTask): FitAnswer {
   try {
-    open = openSubject(task, storeShare(progress));
-  } catch (error) {
-    const refusal = refusalOf(error);
-    answerTo.postMessage(refusal);
-    return refusal;
-  }
-  answerTo.postMessage({ kind: 'done', result: open.result });
-  try {
-    return { kind: 'done', evidence: evidenceOf(open) };
+    return { kind: 'done', result: openSubject(task, storeShare(task.progress)).result };
   } catch (error) {
     return refusalOf(error);
   }
 }
 
-/** Bootstraps the slopes of one fit in a worker thread. */
-export function runBootstrap(task: BootstrapTask): BootstrapAnswer {
+/** Computes what may take its time after a fit: its evidence, or a bootstrap of its slopes. */
+export function runInBackground(task: BackgroundTask): BackgroundAnswer {
   try {
-    const { ground, specification } = openSubject(task);
-    const summary = bootstrapSummary(ground, {
-      confidence: specification.confidence,
+    const open = openSubject(task);
+    if (task.wanted === 'evidence') return { kind: 'done', evidence: evidenceOf(open) };
+    const summary = bootstrapSummary(open.ground, {
+      confidence: open.specification.confidence,
       seed: task.seed,
       onProgress: storeShare(task.progress),
     });

@@ -1,4 +1,3 @@
-import type { MessagePort } from 'node:worker_threads';
 import type {
   CovarianceSummary,
   Evidence,
@@ -20,15 +19,21 @@ export interface FitSubject {
 export interface FitTask extends FitSubject {
   /** Shared with the caller: thousandths done, read while the worker runs. */
   readonly progress: Int32Array;
-  /** Takes the `FitAnswer` as soon as there is one, before the evidence is computed. */
-  readonly answerTo: MessagePort;
 }
 
-/** What the worker of a bootstrap is given. */
+/** Has the evidence of a fit computed. */
+export interface EvidenceTask extends FitSubject {
+  readonly wanted: 'evidence';
+}
+
+/** Has the slopes of a fit bootstrapped. */
 export interface BootstrapTask extends FitSubject {
+  readonly wanted: 'bootstrap';
   readonly seed: number;
   readonly progress: Int32Array;
 }
+
+export type BackgroundTask = EvidenceTask | BootstrapTask;
 
 /** Classes do not survive a message port: a refusal crosses as its code, sentence and data. */
 export interface Refusal {
@@ -40,8 +45,9 @@ export interface Refusal {
 
 export type FitAnswer = { readonly kind: 'done'; readonly result: FitResult } | Refusal;
 
-/** What a fit's worker ends with; of a refused fit there is no evidence either. */
 export type EvidenceAnswer = { readonly kind: 'done'; readonly evidence: Evidence } | Refusal;
 
 export type BootstrapAnswer =
   { readonly kind: 'done'; readonly summary: CovarianceSummary } | Refusal;
+
+export type BackgroundAnswer = EvidenceAnswer | BootstrapAnswer;

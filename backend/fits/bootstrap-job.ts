@@ -1,13 +1,12 @@
 import type { JobTicketRow } from '../../db/repositories/jobs-repository';
 import type { Repositories } from '../../db/repositories/repositories';
-import type { FitPool, Run } from '../compute/fit-pool';
-import type { BootstrapAnswer } from '../compute/messages';
+import type { FitPool } from '../compute/fit-pool';
 import { randomDraws } from '../stats/slopes/bootstrap/sign-draws';
 import { findFit } from './fit-service';
 import { readSubject } from './fit-subject';
 import { watchedRun } from './watched-run';
 
-/** Works one queued bootstrap in a worker thread of its own and keeps its intervals with the fit. */
+/** Works one queued bootstrap in the background thread and keeps its intervals with the fit. */
 export class BootstrapJob {
   constructor(
     private readonly repositories: Repositories,
@@ -23,7 +22,7 @@ export class BootstrapJob {
     const subject = await this.repositories.inWorkspace(workspaceId, async (tx) =>
       readSubject(tx, await findFit(tx, bootstrap.fitId)),
     );
-    const ended = await watchedRun<BootstrapAnswer, Run<BootstrapAnswer>>(
+    const answer = await watchedRun(
       (signal) => this.pool.bootstrap(subject, bootstrap.seed, signal),
       (share) => {
         const drawn = { done: Math.round(share * randomDraws), total: randomDraws };
@@ -32,8 +31,7 @@ export class BootstrapJob {
         );
       },
     );
-    if (ended === undefined) return;
-    const { answer } = ended;
+    if (answer === undefined) return;
     await this.repositories.inWorkspace(workspaceId, (tx) =>
       answer.kind === 'done'
         ? tx.bootstraps.finish(id, answer.summary, this.now())

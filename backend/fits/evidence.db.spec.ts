@@ -60,6 +60,16 @@ describe('the evidence of a fit', () => {
     throw new Error('the evidence was not as wanted within 60 seconds');
   }
 
+  /** Looks until a fit is in its end's state, at most 60 seconds. */
+  async function fitEnds(client: TestClient, fitId: string, state: string): Promise<void> {
+    let found = '';
+    for (let look = 0; look < 300 && found !== state; look++) {
+      await new Promise((resolve) => setTimeout(resolve, 200));
+      found = ((await client.get(`/api/fits/${fitId}`)).body as FitReply).fit.state;
+    }
+    expect(found).toBe(state);
+  }
+
   const isReady = ({ state }: EvidenceReply): boolean => state === 'ready';
   const hasEnded = (reply: EvidenceReply): boolean =>
     reply.state === 'ready' && !['queued', 'running'].includes(reply.bootstrap?.state ?? '');
@@ -93,7 +103,7 @@ describe('the evidence of a fit', () => {
     expect((await client.delete(path)).status).toBe(409);
   });
 
-  it('is computed by the next try where a server died between result and evidence', async () => {
+  it('is computed by the next try where a server died while it computed it', async () => {
     const { client, reply } = await fitted('Interrupted');
     await readWhen(client, reply.fit.id, isReady);
     const { rows } = await admin.query<{ workspace_id: string }>(
@@ -103,12 +113,47 @@ describe('the evidence of a fit', () => {
     expect((await read(client, reply.fit.id)).state).toBe('computing');
     const ticketId = randomUUID();
     await admin.query(
-      `insert into job_ticket (id, workspace_id, kind, subject_id) values ($1, $2, 'fit', $3)`,
+      `insert into job_ticket (id, workspace_id, kind, subject_id) values ($1, $2, 'evidence', $3)`,
       [ticketId, rows[0].workspace_id, reply.fit.id],
     );
-    await admin.query(`insert into pgboss.job (name, data) values ('fit', $1)`, [{ ticketId }]);
+    await admin.query(`insert into pgboss.job (name, data) values ('evidence', $1)`, [
+      { ticketId },
+    ]);
     const found = (await readWhen(client, reply.fit.id, isReady)) as Ready;
     expect(found.evidence.hash).toBe(reply.fit.hash ?? '');
+  });
+
+  it('keeps no fit waiting', async () => {
+    const client = await signUp(server, 'Held up');
+    const group = await savePeers(client, await importPanel(client), 'C06');
+    // What computes evidence looks first whether there is some: it waits here.
+    await admin.query('begin');
+    await admin.query('lock table fit_evidence in access exclusive mode');
+    for (const slopes of ['cr2', 'cr1', 'hc3']) {
+      const started = (await client.post('/api/fits', { peerGroupId: group, slopes }))
+        .body as FitReply;
+      await fitEnds(client, started.fit.id, 'done');
+    }
+    await admin.query('commit');
+  });
+
+  it('is not queued for a fit that was cancelled', async () => {
+    const client = await signUp(server, 'Cancelled fit');
+    const group = await savePeers(client, await importPanel(client), 'C06');
+    await admin.query('begin');
+    await admin.query('lock table panel_row in access exclusive mode');
+    const started = (await client.post('/api/fits', { peerGroupId: group })).body as FitReply;
+    expect((await client.delete(`/api/fits/${started.fit.id}`)).status).toBe(204);
+    await admin.query('commit');
+    await fitEnds(client, started.fit.id, 'cancelled');
+    const { fit } = await runFit(client, group);
+    expect((await readWhen(client, fit.id, isReady)).state).toBe('ready');
+    const tickets = await admin.query(
+      `select from job_ticket where kind = 'evidence' and subject_id = $1`,
+      [started.fit.id],
+    );
+    expect(tickets.rowCount).toBe(0);
+    expect((await read(client, started.fit.id)).state).toBe('unavailable');
   });
 
   it('is not there for a fit of an earlier engine, which is still read', async () => {

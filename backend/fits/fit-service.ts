@@ -3,7 +3,7 @@ import { UniqueViolation } from '../../db/errors';
 import type { PanelVersionRow } from '../../db/repositories/panels-repository';
 import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import { record } from '../activity/activity';
-import { Conflict, Invalid, NotFound } from '../errors/app-error';
+import { Conflict, Invalid, NotFound, TooManyRequests } from '../errors/app-error';
 import type { JobQueue } from '../jobs/job-queue';
 import { findPeerGroup, type PeerGroup } from '../peers/peer-service';
 import { engineVersion, type FitResult, type Specification } from '../stats';
@@ -31,6 +31,9 @@ export interface FinishedFit extends FitOnGround {
 }
 
 const mostListed = 200;
+/** Of a workspace, queued or running; requests of the same moment may pass it by a few. */
+const mostUnfinished = 20;
+const retryAfterSeconds = 30;
 
 export class FitService {
   constructor(
@@ -41,7 +44,8 @@ export class FitService {
   /**
    * Queues a fit; the same peer group and specification by the same engine answer with the fit that exists.
    *
-   * @throws {NotFound} for an unknown peer group; {Invalid} for a column the panel does not have.
+   * @throws {NotFound} for an unknown peer group; {Invalid} for a column the panel does not have; {TooManyRequests} while
+   *   the workspace has many fits under way.
    */
   async start(
     actor: { readonly personId: string; readonly workspaceId: string },
@@ -67,6 +71,11 @@ export class FitService {
     const specificationKey = JSON.stringify([engineVersion, specification]);
     const same = await tx.fits.findSame(group.id, specificationKey);
     if (same !== undefined) return same.id;
+    if ((await tx.fits.unfinished()) >= mostUnfinished)
+      throw new TooManyRequests(
+        `${mostUnfinished} fits of this workspace are queued or running. Wait for one to end, or cancel one.`,
+        retryAfterSeconds,
+      );
     const id = randomUUID();
     await tx.fits.insert({
       id,

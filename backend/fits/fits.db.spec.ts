@@ -72,6 +72,40 @@ describe('fits', () => {
     expect(listed.fits.length).toBe(1);
   });
 
+  it('are no more than twenty at a time in a workspace', async () => {
+    const analyst = await signUp(server, 'Many');
+    const group = await savePeers(analyst, await importPanel(analyst), 'C06');
+    const { fit } = await runFit(analyst, group);
+    const admin = new pg.Client({ connectionString: database.adminUrl });
+    await admin.connect();
+    try {
+      await admin.query(
+        `insert into fit (workspace_id, id, panel_version_id, peer_group_id, specification,
+            specification_key, state, created_by)
+          select workspace_id, gen_random_uuid(), panel_version_id, peer_group_id, specification,
+            'waiting ' || number, 'queued', created_by
+          from fit, generate_series(1, 20) as number where id = $1`,
+        [fit.id],
+      );
+      const refused = await analyst.post('/api/fits', { peerGroupId: group, slopes: 'cr1' });
+      expect(refused.status).toBe(429);
+      expect(refused.body).toEqual(
+        jasmine.objectContaining({
+          detail:
+            '20 fits of this workspace are queued or running. Wait for one to end, or cancel one.',
+        }),
+      );
+      expect((await start(analyst, group)).fit.id)
+        .withContext('one that exists is answered all the same')
+        .toBe(fit.id);
+      const other = await signUp(server, 'Few');
+      const otherGroup = await savePeers(other, await importPanel(other), 'C06');
+      expect((await runFit(other, otherGroup)).fit.state).toBe('done');
+    } finally {
+      await admin.end();
+    }
+  });
+
   it('started on one server process are worked, read and cancelled on another', async () => {
     const second = await startTestServer(database);
     try {

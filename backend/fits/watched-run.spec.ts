@@ -25,7 +25,7 @@ describe('a watched run', () => {
         return Promise.resolve(true);
       },
     );
-    expect(ended?.answer).toBe('answer');
+    expect(ended).toBe('answer');
     jasmine.clock().tick(5000);
     expect(told).toEqual([]);
   });
@@ -51,7 +51,7 @@ describe('a watched run', () => {
     );
     jasmine.clock().tick(500);
     finish('answer');
-    expect((await ended)?.answer).toBe('answer');
+    expect(await ended).toBe('answer');
   });
 
   it('fails as the run fails', async () => {

@@ -8,13 +8,10 @@ const watchEveryMs = 500;
  * @param tell  keeps the share done, 0 to 1; false once the run was cancelled.
  * @returns undefined when it was cancelled.
  */
-export async function watchedRun<
-  Answer,
-  Started extends { readonly answer: Promise<Answer>; progress(): number },
->(
-  start: (signal: AbortSignal) => Started,
+export async function watchedRun<Answer>(
+  start: (signal: AbortSignal) => { readonly answer: Promise<Answer>; progress(): number },
   tell: (share: number) => Promise<boolean>,
-): Promise<{ readonly run: Started; readonly answer: Answer } | undefined> {
+): Promise<Answer | undefined> {
   const abort = new AbortController();
   const run = start(abort.signal);
   const look = async (): Promise<void> => {
@@ -24,7 +21,7 @@ export async function watchedRun<
   };
   const watch = setInterval(() => void look(), watchEveryMs);
   try {
-    return { run, answer: await run.answer };
+    return await run.answer;
   } catch (error) {
     if (abort.signal.aborted) return undefined;
     throw error;

@@ -78,6 +78,17 @@ export class FitsRepository {
     return this.fits().orderBy('fit.createdAt', 'desc').limit(limit).execute();
   }
 
+  /** How many are queued or running. */
+  async unfinished(): Promise<number> {
+    const { count } = await this.db
+      .selectFrom('fit')
+      .select(({ fn }) => fn.countAll<number>().as('count'))
+      .where('workspaceId', '=', this.workspaceId)
+      .where('state', 'in', ['queued', 'running'])
+      .executeTakeFirstOrThrow();
+    return count;
+  }
+
   latestDone(): Promise<FitRow | undefined> {
     return this.fits()
       .where('fit.state', '=', 'done')
