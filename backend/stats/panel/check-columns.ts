@@ -28,11 +28,19 @@ export function checkColumns(data: PanelColumns): void {
       columns: twice,
     });
   }
-  if (data.company.some((code) => code < 0 || code >= data.companies.length)) {
+  if (!areCodes(data.company, data.companies.length)) {
     throw new StatsError('shape', 'expected company codes to point into the list of companies');
   }
-  refuseTooLarge(data);
-  refuseTooSmall(columns);
+  const largest = columns.map(({ values }) => largestOf(values));
+  if (largest.some((size) => size > largestMagnitude)) refuseTooLarge(data);
+  refuseTooSmall(columns.filter((_, k) => largest[k] > 0 && largest[k] < smallestMagnitude));
+}
+
+function areCodes(codes: Int32Array, count: number): boolean {
+  for (let row = 0; row < codes.length; row += 1) {
+    if (codes[row] < 0 || codes[row] >= count) return false;
+  }
+  return true;
 }
 
 function refuseLength(name: string, found: number, expected: number): void {
@@ -46,7 +54,7 @@ function refuseLength(name: string, found: number, expected: number): void {
   );
 }
 
-function refuseTooLarge(data: PanelColumns): void {
+function refuseTooLarge(data: PanelColumns): never {
   const rows: RowPlace[] = [];
   for (const { name, values } of [data.outcome, ...data.regressors]) {
     for (let index = 0; index < values.length; index += 1) {
@@ -55,7 +63,6 @@ function refuseTooLarge(data: PanelColumns): void {
       }
     }
   }
-  if (rows.length === 0) return;
   throw new StatsError(
     'non-finite',
     `expected numbers up to ${largestMagnitude}; found larger ones`,
@@ -66,18 +73,21 @@ function refuseTooLarge(data: PanelColumns): void {
 }
 
 function refuseTooSmall(columns: readonly NamedColumn[]): void {
-  const tooSmall = columns.flatMap(({ name, values }) => {
-    let largest = 0;
-    for (let row = 0; row < values.length; row += 1) {
-      const size = Math.abs(values[row]);
-      if (size > largest) largest = size;
-    }
-    return largest > 0 && largest < smallestMagnitude ? [name] : [];
-  });
-  if (tooSmall.length === 0) return;
+  if (columns.length === 0) return;
+  const names = columns.map(({ name }) => name);
   throw new StatsError(
     'non-finite',
-    `expected a number of ${smallestMagnitude} or more in each column; found only smaller ones in ${tooSmall.join(', ')}`,
-    { columns: tooSmall },
+    `expected a number of ${smallestMagnitude} or more in each column; found only smaller ones in ${names.join(', ')}`,
+    { columns: names },
   );
+}
+
+/** The largest magnitude; missing cells are none. */
+function largestOf(values: Float64Array): number {
+  let largest = 0;
+  for (let row = 0; row < values.length; row += 1) {
+    const size = Math.abs(values[row]);
+    if (size > largest) largest = size;
+  }
+  return largest;
 }

@@ -56,13 +56,15 @@ export function sortedRows(data: PanelColumns, members: readonly string[]): Int3
 
 /** Place of each company code in the order of names; codes of the same name share theirs. */
 function companyPlaces(data: PanelColumns): Int32Array {
-  const order = data.companies
-    .map((name, code) => ({ name, code }))
-    .sort((left, right) => byCodeUnit(left.name, right.name) || left.code - right.code);
-  const place = new Int32Array(data.companies.length);
-  order.forEach(({ name, code }, index) => {
-    const before = order[index - 1];
-    place[code] = before?.name === name ? place[before.code] : index;
+  const { companies } = data;
+  const order = Int32Array.from(companies, (_, code) => code);
+  if (companies.some((name, code) => code > 0 && companies[code - 1] > name)) {
+    order.sort((left, right) => byCodeUnit(companies[left], companies[right]) || left - right);
+  }
+  const place = new Int32Array(companies.length);
+  order.forEach((code, index) => {
+    const isSame = index > 0 && companies[order[index - 1]] === companies[code];
+    place[code] = isSame ? place[order[index - 1]] : index;
   });
   return place;
 }
