@@ -15,13 +15,19 @@ export const sampleRules: readonly VerdictRule[] = [
   { code: 'missing-rows', weight: 'notable', when: missingRows },
 ];
 
-/** A lag takes the first row of every company by construction, which is not counted as missing. */
-function missingRows({ result: { sample, specification } }: VerdictInput): string | null {
+/**
+ * A lag takes the first row of every member by construction, which is not counted as missing; of the others the result
+ * does not tell whether a regressor of their own is missing or that of the year before.
+ */
+function missingRows({ result: { members, sample, specification } }: VerdictInput): string | null {
   const left = new Set(sample.dropped.map(({ row }) => row)).size;
   const used = sample.observations + sample.singleRow.length;
-  const byLag = specification.lag * (sample.companies + sample.singleRow.length);
+  const byLag = specification.lag * members.length;
   const missing = Math.max(0, left - byLag);
   const share = missing / (missing + used);
   if (share <= muchMissing) return null;
-  return `${missing} of ${missing + used} rows (${(100 * share).toFixed(0)} %) lack a value and are left out.`;
+  const rows = `${missing} of ${missing + used} rows (${(100 * share).toFixed(0)} %)`;
+  return specification.lag === 0
+    ? `${rows} lack a value and are left out.`
+    : `${rows} lack a value of their own or of the year before and are left out, beside each company’s first row.`;
 }

@@ -304,6 +304,10 @@ describe('verdictRules', () => {
   it('counts no row as missing that a lag takes by construction', () => {
     expect(codesOf(withDropped(38, 1))).not.toContain('missing-rows');
     expect(codesOf(withDropped(39, 1))).toContain('missing-rows');
+    const { against } = verdictOf(withDropped(39, 1));
+    expect(against.find(({ code }) => code === 'missing-rows')?.detail).toBe(
+      '27 of 267 rows (10 %) lack a value of their own or of the year before and are left out, beside each company’s first row.',
+    );
   });
 
   it('says once that first differences have the opposite sign', () => {
