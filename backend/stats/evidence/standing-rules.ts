@@ -42,6 +42,7 @@ export const standingRules: readonly VerdictRule[] = [
   { code: 'peer-persistence-capped', weight: 'notable', when: peersCapped },
   warningRule('own-persistence', 'notable'),
   warningRule('persistent-errors', 'notable'),
+  { code: 'few-own-years', weight: 'notable', when: fewOwnYears },
   { code: 'year-effects', weight: 'notable', when: yearEffects },
   { code: 'other-model', weight: 'notable', when: otherModel },
   warningRule('smear-differs', 'notable'),
@@ -105,6 +106,21 @@ function peersCapped(input: VerdictInput): string | null {
 function concernsStanding({ result }: VerdictInput, capped: readonly string[] = []): boolean {
   const own = result.standing?.company;
   return (own !== undefined && capped.includes(own)) || 2 * capped.length > result.sample.companies;
+}
+
+/**
+ * The share of intervals that held the truth where the own company had the last 5 of 20 years alone: settings
+ * n12-t20-rho…-own-last-5 of backend/stats/COVERAGE.md, standing, at a nominal .95.
+ */
+const ownLastFive = { from: '.88', to: '.94' };
+
+/** Fewer of the sample's years than this and the own company counts as one of few rows. */
+const enoughYears = 0.5;
+
+function fewOwnYears({ result: { standing, ownYears, sample } }: VerdictInput): string | null {
+  if (typeof standing?.low !== 'number' || ownYears === null) return null;
+  if (ownYears.length >= enoughYears * sample.years) return null;
+  return `${standing.company} has rows in ${ownYears.length} of ${sample.years} years: in simulations the standing’s 95 % interval then holds the truth in about ${ownLastFive.from} to ${ownLastFive.to} of samples.`;
 }
 
 function yearEffects({ result, alternatives }: VerdictInput): string | null {

@@ -85,6 +85,11 @@ export function withDropped(rows: number, lag: 0 | 1): VerdictInput {
   });
 }
 
+/** With the own company's last years alone. */
+export function withOwnYears(count: number): VerdictInput {
+  return withResult({ ownYears: sound.result.ownYears?.slice(-count) ?? null });
+}
+
 export function withDefault({ isChosen, low }: { isChosen: boolean; low: number }): VerdictInput {
   return {
     ...sound,
