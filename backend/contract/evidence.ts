@@ -83,6 +83,9 @@ export const CovarianceSummary = z.object({
     )
     .nullable(),
   reason: z.string().optional(),
+  /** Of the bootstrap by random draws, once it has been run. */
+  seed: count.optional(),
+  draws: count.optional(),
   notes: z.array(z.string()),
 });
 export type CovarianceSummary = z.infer<typeof CovarianceSummary>;

@@ -5,9 +5,17 @@ import { toEvidence } from './evidence-reply';
 
 type Plain<Value> = { -readonly [Key in keyof Value]: Plain<Value[Key]> };
 
+type Complete<Value> = { -readonly [Key in keyof Value]-?: Complete<Value[Key]> };
+
 /** Compiles only while the contract's members and the engine's are the same. */
 const asContract = (evidence: Plain<Evidence>): EvidenceOfContract => evidence;
 const asEngine = (evidence: EvidenceOfContract): Evidence => evidence;
+
+/** An optional member that one of them lacks is assignable all the same: these take every member as there. */
+export const completeInContract = (evidence: Complete<Evidence>): Complete<EvidenceOfContract> =>
+  evidence;
+export const completeInEngine = (evidence: Complete<EvidenceOfContract>): Complete<Evidence> =>
+  evidence;
 
 const specifications: readonly Partial<Specification>[] = [
   {},

@@ -3,6 +3,7 @@ import type { FitRow } from '../../db/repositories/fits-repository';
 import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import { NotFound } from '../errors/app-error';
 import { type CovarianceSummary, engineVersion, type Evidence } from '../stats';
+import { randomDraws } from '../stats/slopes/bootstrap/sign-draws';
 
 /** The evidence of a fit, or why there is none. */
 export type EvidenceView =
@@ -57,10 +58,11 @@ function withBootstrap(evidence: Evidence, bootstraps: readonly BootstrapRow[]):
   const done = bootstraps.find(({ result }) => result !== null);
   if (done === undefined) return evidence;
   const { slopes, reason, notes } = done.result as CovarianceSummary;
+  const drawn = { slopes, reason, notes, seed: done.seed, draws: randomDraws };
   return {
     ...evidence,
     covariances: evidence.covariances.map((row) =>
-      row.code === 'wild' ? { ...row, slopes, reason, notes } : row,
+      row.code === 'wild' ? { ...row, ...drawn } : row,
     ),
   };
 }

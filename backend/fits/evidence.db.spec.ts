@@ -203,6 +203,7 @@ describe('the evidence of a fit', () => {
     expect(row?.slopes?.length).toBe(2);
     expect(row?.slopes?.[0].pValue).toBeGreaterThan(0);
     expect(row?.isChosen).toBeFalse();
+    expect([row?.seed, row?.draws]).toEqual([5, 9999]);
 
     const again = await client.post(path, { seed: 5 });
     expect(again.body).toEqual(jasmine.objectContaining({ seed: 5, state: 'done' }));
@@ -210,6 +211,7 @@ describe('the evidence of a fit', () => {
     const other = (await readWhen(client, reply.fit.id, hasEnded)) as Ready;
     expect(other.bootstrap).toEqual(jasmine.objectContaining({ seed: 6, state: 'done' }));
     expect(wildOf(other)?.slopes).not.toEqual(row?.slopes);
+    expect(wildOf(other)?.seed).toBe(6);
     const kept = await admin.query('select from fit_bootstrap where fit_id = $1', [reply.fit.id]);
     expect(kept.rowCount).toBe(2);
     await expectAsync(

@@ -115,6 +115,9 @@ export interface CovarianceSummary {
   /** Null where it has not been run (the bootstrap by draws) or cannot serve, with the reason. */
   readonly slopes: readonly CovarianceSlope[] | null;
   readonly reason?: string;
+  /** Of the bootstrap by random draws, once it has been run: its seed and how many sign vectors it drew. */
+  readonly seed?: number;
+  readonly draws?: number;
   /** What has to be said beside the figures. */
   readonly notes: readonly string[];
 }
