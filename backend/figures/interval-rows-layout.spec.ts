@@ -1,5 +1,6 @@
 import type { FigureFormats } from './figure-types';
 import { type IntervalRow, intervalRowsLayout } from './interval-rows-layout';
+import { wordsWidth } from './text-width';
 
 const formats: FigureFormats = {
   value: (value) => value.toFixed(2),
@@ -65,9 +66,36 @@ describe('interval rows layout', () => {
   it('folds figures under the names where one line has no room for both', () => {
     const wide = intervalRowsLayout([{ name: 'fixed effects', figure }], 760, formats);
     const narrow = intervalRowsLayout([{ name: 'fixed effects', figure }], 360, formats);
-    expect(wide.rows[0].figuresY).toBe(wide.rows[0].textY);
-    expect(narrow.rows[0].figuresY).toBeGreaterThan(narrow.rows[0].textY);
-    expect(narrow.rows[0].y).toBeGreaterThan(narrow.rows[0].figuresY);
+    expect(wide.rows[0].figureLines[0].y).toBe(wide.rows[0].textY);
+    expect(narrow.rows[0].figureLines[0].y).toBeGreaterThan(narrow.rows[0].textY);
+    expect(narrow.rows[0].y).toBeGreaterThan(narrow.rows[0].figureLines[0].y);
+  });
+
+  it('cuts no word of a note or a reason: what has no room in a line goes on in the next', () => {
+    const reason =
+      'Effects drawn from one distribution are no figure of any company, so they place none.';
+    const note = 'default, of this fit, negative variance set to 0';
+    const given: IntervalRow[] = [
+      { name: 'by company and by year', note, figure },
+      { name: 'random effects', figure: null, reason },
+      { name: 'fixed effects', figure },
+    ];
+    for (const width of [312, 360, 760, 1000]) {
+      const { rows, plot } = intervalRowsLayout(given, width, formats);
+      const said = (lines: readonly { readonly text: string }[]) =>
+        lines.map(({ text }) => text).join(' ');
+      expect(said(rows[1].figureLines)).toBe(reason);
+      expect(rows[1].figures).toBe(reason);
+      if (rows[0].noteLines.length > 0) expect(said(rows[0].noteLines)).toBe(note);
+      for (const { text } of [...rows[0].noteLines, ...rows[1].figureLines])
+        expect(wordsWidth(text)).toBeLessThanOrEqual(width);
+      for (const [place, row] of rows.entries()) {
+        const ys = [row.textY, ...[...row.noteLines, ...row.figureLines].map(({ y }) => y)];
+        expect(Math.max(...ys)).toBeLessThan(row.top + row.height);
+        expect(row.top + row.height).toBe(rows.at(place + 1)?.top ?? plot.bottom);
+      }
+    }
+    expect(intervalRowsLayout(given, 312, formats).rows[0].noteLines.length).toBeGreaterThan(0);
   });
 
   it('makes room for the note behind a name', () => {

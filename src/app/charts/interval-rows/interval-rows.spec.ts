@@ -20,8 +20,9 @@ const rows: readonly IntervalRow[] = [
 ];
 
 describe('interval rows', () => {
-  async function shown(inputs: Record<string, unknown> = {}) {
+  async function shown(inputs: Record<string, unknown> = {}, width = 640) {
     const fixture = TestBed.createComponent(IntervalRows);
+    (fixture.nativeElement as HTMLElement).style.width = `${width}px`;
     const text = { title: 'Capex differs from 0 in 2 of 4 ways', caption: '', source: '' };
     for (const [name, value] of Object.entries({ text, rows, ...inputs }))
       fixture.componentRef.setInput(name, value);
@@ -57,6 +58,24 @@ describe('interval rows', () => {
     expect(page.querySelectorAll('circle.ink-mark.other').length).toBe(2);
     expect(page.querySelectorAll('line.ink-interval').length).toBe(2);
     expect(page.querySelectorAll('path.arrow').length).toBe(1);
+  });
+
+  it('writes a long note and a long reason in lines, and says them whole', async () => {
+    const reason =
+      'Effects drawn from one distribution are no figure of any company, so they place none.';
+    const note = 'of this fit, negative variance set to 0, with a remark below';
+    const given = [
+      { ...rows[0], note },
+      { name: 'random effects', figure: null, reason },
+    ];
+    const { chart, page } = await shown({ rows: given }, 312);
+    const written = [...page.querySelectorAll('svg text')]
+      .map((each) => each.textContent?.trim())
+      .join(' ');
+    expect(written).toContain(note);
+    expect(written).toContain(reason);
+    expect(page.querySelectorAll('svg text.soft.rim').length).toBeGreaterThan(1);
+    expect((await chart.points())[1]).toBe(`random effects: ${reason}`);
   });
 
   it('draws the own company by diamonds', async () => {
