@@ -1,5 +1,5 @@
 import type { FigureFormats } from './figure-types';
-import { leaveOneOutLayout } from './leave-one-out-layout';
+import { changeText, leaveOneOutLayout } from './leave-one-out-layout';
 
 const formats: FigureFormats = {
   value: (value) => value.toFixed(0),
@@ -27,6 +27,11 @@ describe('leave-one-out layout', () => {
     expect(line.x).toBeCloseTo(rows[0].x! + 600 * perUnit, 6);
     expect(line.band!.from).toBeCloseTo(line.x - 1400 * perUnit, 6);
     expect(line.band!.to).toBeCloseTo(line.x + 1300 * perUnit, 6);
+  });
+
+  it('gives a change that rounds to zero no sign', () => {
+    expect([0.4, -0.4, 0].map((change) => changeText(change, formats))).toEqual(['0', '0', '0']);
+    expect([0.6, -0.6].map((change) => changeText(change, formats))).toEqual(['+1', '-1']);
   });
 
   it('writes the figure without each and how far that is from the full one', () => {

@@ -72,9 +72,10 @@ export interface LeaveOneOutLayout {
 
 const top = 28;
 
-/** `+120`, `−80`, and the same digits as the figures it is the difference of. */
+/** `+120`, `−80`, and the same digits as the figures it is the difference of; what rounds to zero has no sign. */
 export function changeText(change: number, formats: FigureFormats): string {
   const text = formats.value(change);
+  if (!/[1-9]/.test(text)) return formats.value(0);
   return change > 0 ? `+${text}` : text;
 }
 

@@ -40,6 +40,11 @@ describe('leave one out', () => {
     expect(summary).toContain('it lies between 1,500 and 2,350.');
   });
 
+  it('writes a change that rounds to zero as zero is written', async () => {
+    const { chart } = await shown({ leftOut: [{ name: '2014', estimate: 2100.0004 }] });
+    expect(await chart.points()).toEqual(['without 2014: 2,100, –']);
+  });
+
   it('shows the same values as a table, with all in the last row', async () => {
     const { chart } = await shown();
     await chart.toggle();
