@@ -97,13 +97,18 @@ describe('the job queue', () => {
   });
 
   /** As a server leaves a job behind that dies while it works it. */
-  async function leaveBehind(subject: string, retryCount: number): Promise<void> {
-    await repositories.inWorkspace(workspaceId, (tx) => queue.enqueue(tx, 'bootstrap', subject));
+  async function leaveBehind(
+    subject: string,
+    retryCount: number,
+    kind: 'bootstrap' | 'evidence' = 'bootstrap',
+  ): Promise<void> {
+    await repositories.inWorkspace(workspaceId, (tx) => queue.enqueue(tx, kind, subject));
     const { rows } = await pool.query<{ id: string }>(
-      `update pgboss.job set state = 'active', started_on = now(), retry_count = $1
-        where name = 'bootstrap' and data ->> 'ticketId' =
+      `update pgboss.job set state = 'active', started_on = now() - interval '1 minute',
+        retry_count = $1
+        where name = $3 and data ->> 'ticketId' =
           (select id::text from job_ticket where subject_id = $2) returning id`,
-      [retryCount, subject],
+      [retryCount, subject, kind],
     );
     await pool.query(
       `update job_ticket set job_id = $1, heartbeat_at = now() - interval '6 seconds'
@@ -134,8 +139,15 @@ describe('the job queue', () => {
     for (let look = 0; look < 100 && tried.length === 0; look++)
       await new Promise((resolve) => setTimeout(resolve, 100));
     expect(tried).toEqual([worked]);
-    const spoken = await pool.query('select from job_ticket where heartbeat_at is not null');
-    expect(spoken.rowCount).toBe(0);
+    let spoken: number | null = null;
+    for (let look = 0; look < 50 && spoken !== 0; look++) {
+      await new Promise((resolve) => setTimeout(resolve, 100));
+      const found = await pool.query(
+        `select from job_ticket where heartbeat_at is not null and kind = 'bootstrap'`,
+      );
+      spoken = found.rowCount;
+    }
+    expect(spoken).withContext('tickets that are spoken of').toBe(0);
   });
 
   it('leaves a job alone whose server says that it works it', async () => {
@@ -148,5 +160,95 @@ describe('the job queue', () => {
     await repositories.jobTickets.beat(rows[0].id, rows[0].job_id);
     expect(await repositories.jobTickets.takeSilent(['bootstrap'], 5)).toEqual([]);
     await repositories.jobTickets.rest(rows[0].id);
+  });
+
+  describe('of a server that looks more often than it speaks', () => {
+    /** What is done with each subject, and what when its last try failed. */
+    const handlers = new Map<string, () => Promise<void>>();
+    const givenUp = new Map<string, () => Promise<void>>();
+    let quick: JobQueue;
+
+    beforeAll(async () => {
+      quick = new JobQueue({
+        repositories,
+        executeSql: (text, values) => pool.query(text, values),
+        onError: (error) => errors.push(error),
+        heartbeat: { everySeconds: 0.2, silentSeconds: 0.05 },
+      });
+      await quick.start();
+    });
+
+    afterAll(() => quick.stop());
+
+    async function worked(): Promise<void> {
+      await quick.work(
+        'evidence',
+        ({ subjectId }) => handlers.get(subjectId)?.() ?? Promise.resolve(),
+        ({ subjectId }) => givenUp.get(subjectId)?.() ?? Promise.resolve(),
+      );
+    }
+
+    it('takes back no job that it works itself', async () => {
+      const subject = randomUUID();
+      const before = errors.length;
+      let tries = 0;
+      const ended = new Promise<void>((resolve) => {
+        handlers.set(subject, async () => {
+          tries++;
+          await new Promise((end) => setTimeout(end, 2500));
+          resolve();
+        });
+      });
+      await worked();
+      await repositories.inWorkspace(workspaceId, (tx) => quick.enqueue(tx, 'evidence', subject));
+      await ended;
+      await new Promise((resolve) => setTimeout(resolve, 500));
+      expect(tries).toBe(1);
+      const { rows } = await pool.query<{ state: string }>(
+        `select state from pgboss.job where data ->> 'ticketId' =
+          (select id::text from job_ticket where subject_id = $1)`,
+        [subject],
+      );
+      expect(rows).toEqual([{ state: 'completed' }]);
+      expect(errors.slice(before).map(({ message }) => message)).toEqual([]);
+    });
+
+    it('takes the others back where one cannot be, and that one later', async () => {
+      const [stubborn, other] = [randomUUID(), randomUUID()];
+      await leaveBehind(stubborn, 4, 'evidence');
+      await leaveBehind(other, 4, 'evidence');
+      let asked = 0;
+      const told = [stubborn, other].map(
+        (subject) =>
+          new Promise<string>((resolve) => {
+            givenUp.set(subject, () => {
+              if (subject === stubborn && asked++ === 0)
+                return Promise.reject(new Error('the database is away'));
+              resolve(subject);
+              return Promise.resolve();
+            });
+          }),
+      );
+      await worked();
+      expect(await Promise.all(told)).toEqual([stubborn, other]);
+      expect(asked).toBe(2);
+    });
+
+    it('tries a job again whose server died before it could speak of it', async () => {
+      const subject = randomUUID();
+      await leaveBehind(subject, 0, 'evidence');
+      await pool.query(
+        'update job_ticket set job_id = null, heartbeat_at = null where subject_id = $1',
+        [subject],
+      );
+      const tried = new Promise<void>((resolve) => {
+        handlers.set(subject, () => {
+          resolve();
+          return Promise.resolve();
+        });
+      });
+      await worked();
+      await expectAsync(tried).toBeResolved();
+    });
   });
 });

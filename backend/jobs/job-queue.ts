@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import PgBoss from 'pg-boss';
-import type { JobTicketRow } from '../../db/repositories/jobs-repository';
+import type { JobTicketRow, SilentTicketRow } from '../../db/repositories/jobs-repository';
 import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import { queueSchema, type QueueName } from './install-queue';
 
@@ -32,6 +32,8 @@ export class JobQueue {
   #busy = 0;
   /** The queues that are worked here, and what to do when the last try of a job ended without a word. */
   readonly #giveUp = new Map<string, TicketHandler | undefined>();
+  /** What is worked here, by ticket, with the promise of its end, which never rejects. */
+  readonly #worked = new Map<string, { readonly jobId: string; readonly ended: Promise<void> }>();
   #rounds: NodeJS.Timeout | undefined;
 
   constructor(private readonly options: JobQueueOptions) {
@@ -145,11 +147,24 @@ export class JobQueue {
     let ticket: JobTicketRow | undefined;
     try {
       ticket = await this.#ticket(kind, job.data);
-      await this.#whileBeating(ticket, job.id, handler);
+      await this.#alone(ticket.id, job.id, this.#whileBeating.bind(this, ticket, job.id, handler));
     } catch (error) {
       this.options.onError(new Error(`a job of queue ${kind} failed`, { cause: error }));
       if (ticket !== undefined) await giveUp?.(ticket);
       throw error;
+    }
+  }
+
+  /** Works a ticket once at a time here: where another server took it back too early, the next try waits. */
+  async #alone(ticketId: string, jobId: string, work: () => Promise<void>): Promise<void> {
+    for (let other; (other = this.#worked.get(ticketId)) !== undefined;) await other.ended;
+    const working = work();
+    const ended = working.catch(() => undefined);
+    this.#worked.set(ticketId, { jobId, ended });
+    try {
+      await working;
+    } finally {
+      this.#worked.delete(ticketId);
     }
   }
 
@@ -170,20 +185,43 @@ export class JobQueue {
     }
   }
 
-  /** Jobs of servers that died are tried again at once; after the last try whoever waits is told. */
+  /**
+   * Jobs of servers that died are tried again at once; after the last try whoever waits is told. What is worked here is
+   * not among them, even where this server could not say so for a while.
+   */
   async #takeBackSilent(): Promise<void> {
+    const { jobTickets } = this.options.repositories;
+    const kinds = [...this.#giveUp.keys()];
+    const { silentSeconds } = this.#heartbeat;
     try {
-      const { jobTickets } = this.options.repositories;
-      const kinds = [...this.#giveUp.keys()];
-      for (const ticket of await jobTickets.takeSilent(kinds, this.#heartbeat.silentSeconds)) {
-        const { kind, jobId } = ticket;
-        this.options.onError(new Error(`a job of queue ${kind} fell silent and is taken back`));
-        await this.#boss.fail(kind, jobId, { message: 'the server that worked it fell silent' });
-        const job = await this.#boss.getJobById(kind, jobId);
-        if (job?.state === 'failed') await this.#giveUp.get(kind)?.(ticket);
-      }
+      const own = [...this.#worked];
+      await Promise.all(own.map(([ticketId, { jobId }]) => jobTickets.beat(ticketId, jobId)));
+      await jobTickets.beatForUnspoken(queueSchema, kinds, silentSeconds);
+      const except = [...this.#worked.keys()];
+      for (const ticket of await jobTickets.takeSilent(kinds, silentSeconds, except))
+        await this.#takeBack(ticket);
     } catch (error) {
       this.options.onError(new Error('silent jobs could not be taken back', { cause: error }));
+    }
+  }
+
+  /** A ticket that cannot be taken back now falls silent again, and is taken back later. */
+  async #takeBack(ticket: SilentTicketRow): Promise<void> {
+    const { kind, jobId } = ticket;
+    try {
+      if ((await this.#boss.getJobById(kind, jobId))?.state === 'active') {
+        this.options.onError(new Error(`a job of queue ${kind} fell silent and is taken back`));
+        await this.#boss.fail(kind, jobId, { message: 'the server that worked it fell silent' });
+      }
+      if ((await this.#boss.getJobById(kind, jobId))?.state === 'failed') {
+        await this.#worked.get(ticket.id)?.ended;
+        await this.#giveUp.get(kind)?.(ticket);
+      }
+      await this.options.repositories.jobTickets.rest(ticket.id);
+    } catch (error) {
+      this.options.onError(
+        new Error(`a silent job of queue ${kind} could not be taken back`, { cause: error }),
+      );
     }
   }
 

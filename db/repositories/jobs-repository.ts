@@ -51,16 +51,54 @@ export class JobTicketsRepository {
       .execute();
   }
 
-  /** Takes the tickets of these kinds that nobody has spoken of for a while; each is given to one caller alone. */
-  async takeSilent(kinds: readonly string[], seconds: number): Promise<SilentTicketRow[]> {
+  /**
+   * Takes the tickets of these kinds that nobody has spoken of for a while; each is given to one caller alone, who lets it
+   * `rest` when done with it. Where the caller fails, the ticket falls silent again.
+   *
+   * @param except  tickets that the caller works itself.
+   */
+  async takeSilent(
+    kinds: readonly string[],
+    seconds: number,
+    except: readonly string[] = [],
+  ): Promise<SilentTicketRow[]> {
     if (kinds.length === 0) return [];
     const taken = await this.db
       .updateTable('jobTicket')
-      .set({ heartbeatAt: null })
+      .set({ heartbeatAt: sql`now()` })
       .where('kind', 'in', kinds)
-      .where('heartbeatAt', '<', sql<Date>`now() - make_interval(secs => ${seconds})`)
+      .where('heartbeatAt', '<', secondsAgo(seconds))
+      .$if(except.length > 0, (query) => query.where('id', 'not in', except))
       .returning(['id', 'workspaceId', 'kind', 'subjectId', 'jobId'])
       .execute();
     return taken.flatMap((row) => (row.jobId === null ? [] : [{ ...row, jobId: row.jobId }]));
   }
+
+  /**
+   * Beats once for each job that the queue package gave out a while ago and nobody spoke of, as when its server died at
+   * once: if it stays silent, it is taken back like any other.
+   *
+   * @param queueSchema  where the queue package keeps its jobs.
+   */
+  async beatForUnspoken(
+    queueSchema: string,
+    kinds: readonly string[],
+    seconds: number,
+  ): Promise<void> {
+    const { rows } = await sql<{ jobId: string; ticketId: string }>`
+      select id as job_id, data ->> 'ticketId' as ticket_id from ${sql.table(`${queueSchema}.job`)}
+      where name = any(${kinds}) and state = 'active' and started_on < ${secondsAgo(seconds)}
+        and data ->> 'ticketId' ~ '^[0-9a-f-]{36}$'`.execute(this.db);
+    for (const { jobId, ticketId } of rows)
+      await this.db
+        .updateTable('jobTicket')
+        .set({ jobId, heartbeatAt: sql`now()` })
+        .where('id', '=', ticketId)
+        .where('heartbeatAt', 'is', null)
+        .execute();
+  }
+}
+
+function secondsAgo(seconds: number) {
+  return sql<Date>`now() - make_interval(secs => ${seconds})`;
 }
