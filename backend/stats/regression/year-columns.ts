@@ -2,15 +2,15 @@ import type { PanelSample } from '../panel/panel-sample';
 import { StatsError } from '../stats-error';
 
 /** With as many years 6 companies take about 10 seconds on one core, 50 take about a minute and a half. */
-const mostYears = 150;
+const mostYears = 100;
 
 /**
  * Columns of the year effects: T − 1, one a year but the last, 1 in its own year, −1 in the last one and 0 elsewhere.
  * With them the effects sum to zero over the sample's years, unweighted, and the last one is minus the sum of the others.
- * What follows costs rows times cosines times the square of the years, and companies times their cube: hence at most 150
+ * What follows costs rows times cosines times the square of the years, and companies times their cube: hence at most 100
  * years.
  *
- * @throws {StatsError} 'too-many-years' for more than 150; 'disconnected-years' where companies and years fall into parts
+ * @throws {StatsError} 'too-many-years' for more than 100; 'disconnected-years' where companies and years fall into parts
  *   that share neither: between them no effect can be compared.
  */
 export function yearColumns(sample: PanelSample): Float64Array[] {
