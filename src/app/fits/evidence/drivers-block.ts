@@ -39,7 +39,7 @@ import { questions } from './questions';
         (chosenChange)="chosen.set($event)"
       />
       @if (picture(); as drawn) {
-        @defer (on viewport) {
+        @defer (on viewport; on timer(3s)) {
           <kv-leave-one-out
             [text]="drawn.text"
             [leftOut]="drawn.left"

@@ -22,9 +22,13 @@ describe('the evidence on the Fit page', () => {
   let http: HttpTestingController;
   const address = `/api/fits/${exampleFit.fit.id}/evidence`;
 
-  async function open(reply: EvidenceReply, roles: Role[] = ['analyst']): Promise<void> {
+  async function open(
+    reply: EvidenceReply,
+    roles: Role[] = ['analyst'],
+    deferBlockBehavior = DeferBlockBehavior.Manual,
+  ): Promise<void> {
     TestBed.configureTestingModule({
-      deferBlockBehavior: DeferBlockBehavior.Manual,
+      deferBlockBehavior,
       providers: [
         EvidenceStore,
         provideHttpClient(),
@@ -136,6 +140,18 @@ describe('the evidence on the Fit page', () => {
       'Residuals scatter most in 2014, by 310',
     ]);
     expect(texts('h4')).toEqual(titles.map((title) => title ?? ''));
+  });
+
+  it('draws in time the charts that nobody scrolled to, so that a printout has them', async () => {
+    const [wait, now] = [window.setTimeout.bind(window), Date.now];
+    const quick = (run: () => void, timeMs = 0) => wait(run, timeMs >= 1000 ? 0 : timeMs);
+    spyOn(window, 'setTimeout').and.callFake(quick as typeof setTimeout);
+    await open(ready, ['analyst'], DeferBlockBehavior.Playthrough);
+    spyOn(Date, 'now').and.callFake(() => now() + 10_000);
+    for (let looks = 0; looks < 100 && page().querySelector('.waiting') !== null; looks++)
+      await settled();
+    expect(page().querySelectorAll('.waiting').length).toBe(0);
+    expect(page().querySelectorAll('kv-chart-frame').length).toBe(9);
   });
 
   it('leads from a company to its reasons among the peers', async () => {

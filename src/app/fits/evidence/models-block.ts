@@ -30,7 +30,7 @@ import { questions } from './questions';
         [chosen]="chosen()"
         (chosenChange)="chosen.set($event)"
       />
-      @defer (on viewport) {
+      @defer (on viewport; on timer(3s)) {
         <kv-interval-rows
           [text]="drawn.text"
           [rows]="drawn.rows"

@@ -40,7 +40,7 @@ import { driftMeaning } from './steady-words';
         (chosenChange)="chosen.set($event)"
       />
       @if (picture(); as drawn) {
-        @defer (on viewport) {
+        @defer (on viewport; on timer(3s)) {
           <kv-leave-one-out
             [text]="drawn.text"
             [leftOut]="drawn.left"

@@ -24,7 +24,7 @@ import { trendMeaning, trendRows, trendTitle } from './trend-words';
         (chosenChange)="chosen.set($event)"
       />
       @let drawn = picture();
-      @defer (on viewport) {
+      @defer (on viewport; on timer(3s)) {
         <kv-interval-rows
           [text]="drawn.text"
           [rows]="drawn.rows"
