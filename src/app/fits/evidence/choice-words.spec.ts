@@ -73,7 +73,7 @@ describe('the choices behind a fit in words', () => {
         ['CR2', 'default, of this fit'],
         ['wild bootstrap', ''],
         ['classical', ''],
-        ['two-way', ''],
+        ['two-way', 'negative variance set to 0'],
       ]);
       expect(rows[1].reason).toMatch(/^Not run yet/);
     });

@@ -9,9 +9,17 @@ import { degreesText, pCell } from './statistic-words';
 type Covariances = Pick<Evidence, 'covariances'>;
 type Slope = NonNullable<CovarianceSummary['slopes']>[number];
 
-/** `default here, chosen`: what stands behind a name. */
-export function covarianceNote({ isDefault, isChosen }: CovarianceSummary): string {
-  return [...(isDefault ? ['default'] : []), ...(isChosen ? ['of this fit'] : [])].join(', ');
+/** What the notes of a covariance say, in few words; the bootstrap's are of single slopes and stand in the table. */
+const noteWords: Partial<Readonly<Record<CovarianceSummary['code'], string>>> = {
+  'two-way': 'negative variance set to 0',
+};
+
+/** `default, of this fit`: what stands behind a name. */
+export function covarianceNote({ code, isDefault, isChosen, notes }: CovarianceSummary): string {
+  const noted = notes.length === 0 ? '' : (noteWords[code] ?? 'with a remark below');
+  return [isDefault ? 'default' : '', isChosen ? 'of this fit' : '', noted]
+    .filter((part) => part !== '')
+    .join(', ');
 }
 
 /** The same slope with each way's interval. */
