@@ -45,7 +45,7 @@ describe('the choices behind a fit in words', () => {
     it('names the slope that changes do not confirm, and what to do', () => {
       const slopes = [{ ...judgedResult.slopes[0], low: 1.8 }, judgedResult.slopes[1]];
       expect(trendMeaning(exampleEvidence, { ...judgedResult, slopes })).toBe(
-        'In changes from year to year the slope on capex lies outside its interval, so common trends may make part of it. State both figures, and compare year effects below.',
+        'In changes from year to year the slope on capex lies outside this fit’s interval, so common trends may make part of it. State both figures, and compare year effects below.',
       );
     });
 
@@ -80,18 +80,34 @@ describe('the choices behind a fit in words', () => {
 
     it('counts in how many ways zero lies outside', () => {
       expect(intervalsTitle(exampleEvidence, judgedResult, { index: 0, numbers })).toBe(
-        'Slope on capex 2.01: the interval excludes zero in 2 of 3 ways',
+        'Slope on capex 2.01 (1.20 to 2.82): the interval excludes zero in 2 of 3 ways',
       );
     });
 
     it('says why the default is the default here, and whether the choice matters', () => {
       expect(intervalsMeaning(exampleEvidence, judgedResult, { index: 0, numbers })).toBe(
-        'CR2 is the default here: errors persist by 0.400 from year to year, which row-by-row intervals overlook, and it corrects for having 3 companies. The choice matters: zero lies inside under two-way, not under the others.',
+        'CR2 is the default here: errors of one company persist over the years (estimated persistence 0.400, where 0 is none and 1 never fades), which row-by-row intervals overlook, and CR2 corrects for having 3 companies. The choice matters: zero lies inside the interval under two-way, not under the others.',
       );
       const covariances = exampleEvidence.covariances.filter(({ code }) => code !== 'two-way');
       expect(intervalsMeaning({ covariances }, judgedResult, { index: 0, numbers })).toMatch(
-        /Every way says the same of zero: it lies outside\.$/,
+        /Every way says the same of zero: it lies outside the interval\.$/,
       );
+    });
+
+    it('says that errors may persist where these are not seen to, or nothing is known', () => {
+      const meaning = (persistence: number | null) =>
+        intervalsMeaning(
+          exampleEvidence,
+          {
+            ...judgedResult,
+            standing: judgedResult.standing && { ...judgedResult.standing, persistence },
+          },
+          { index: 0, numbers },
+        );
+      expect(meaning(-0.12)).toContain(
+        'may persist over the years, though these are not seen to (estimated persistence \u22120.120, where',
+      );
+      expect(meaning(null)).toContain('may persist over the years, which row-by-row');
     });
 
     it('tells what stands behind each', () => {
@@ -145,7 +161,7 @@ describe('the choices behind a fit in words', () => {
           : one,
       );
       expect(modelsMeaning(judgedResult, turned, 'standing')).toMatch(
-        /^The choice of model matters: the standing changes its side under “with year effects”\./,
+        /^The choice of model matters: the standing lies on the other side of zero under “with year effects”\./,
       );
     });
   });
@@ -169,10 +185,10 @@ describe('the choices behind a fit in words', () => {
 
     it('says how many were looked at, and that persistence makes some reject too often', () => {
       expect(testsMeaning(exampleEvidence.tests, judgedResult)).toBe(
-        '3 tests looked at, 1 of them judged together by Holm’s correction at 5 %: 1 rejects.',
+        '3 tests looked at, 1 of them judged together by Holm’s correction at 5 %: 1 rejects what it assumes.',
       );
       expect(testsMeaning(exampleEvidence.tests, persistent)).toMatch(
-        /Errors persist here, so tests that assume they do not reject too often\.$/,
+        /Errors persist here, so tests that assume independent errors reject too often\.$/,
       );
     });
   });
@@ -180,11 +196,11 @@ describe('the choices behind a fit in words', () => {
   describe('of residuals', () => {
     const { residuals } = exampleEvidence;
 
-    it('names the row that is missed most, and counts those far away', () => {
+    it('names the row that stands out most, and counts those far away', () => {
       expect(residualMeaning(residuals, judgedResult, numbers)).toBe(
-        'Velmara 2014 is missed most: 600 EUR m above what is expected. 1 of 32 rows lies more than 3 times the usual spread away: check their cells.',
+        'Velmara 2014 stands out most: 600 EUR m above what is expected. 1 of 32 rows lies more than 3 times the usual spread away: check its cells.',
       );
-      expect(scatterTitle(residuals)).toBe('1 of 32 rows has a studentised residual beyond 3');
+      expect(scatterTitle(residuals)).toBe('1 of 32 rows has a studentised residual beyond ±3');
     });
 
     it('gives a residual of logs as a share', () => {
@@ -192,13 +208,13 @@ describe('the choices behind a fit in words', () => {
       const [most] = residuals.largest;
       const inLogs = { ...residuals, largest: [{ ...most, residual: Math.log(1.25) }] };
       expect(residualMeaning(inLogs, { specification }, numbers)).toMatch(
-        /^Velmara 2014 is missed most: 25\.0 % above what is expected\./,
+        /^Velmara 2014 stands out most: 25\.0 % above what is expected\./,
       );
     });
 
     it('says that none is far away', () => {
       const near = { ...residuals, points: [] };
-      expect(scatterTitle(near)).toBe('None of 32 rows has a studentised residual beyond 3');
+      expect(scatterTitle(near)).toBe('None of 32 rows has a studentised residual beyond ±3');
       expect(residualMeaning({ ...near, largest: [] }, judgedResult, numbers)).toBe(
         'Every row lies where the model expects it.',
       );
@@ -206,7 +222,7 @@ describe('the choices behind a fit in words', () => {
 
     it('names where they scatter most', () => {
       expect(widestTitle(residuals.byYear, judgedResult, numbers)).toBe(
-        'Residuals scatter most in 2014, by 310',
+        'Residuals scatter most in 2014, standard deviation 310',
       );
     });
   });

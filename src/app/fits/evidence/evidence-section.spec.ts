@@ -129,15 +129,15 @@ describe('the evidence on the Fit page', () => {
     await open(ready);
     const titles = await Promise.all((await charts()).map((chart) => chart.title()));
     expect(titles).toEqual([
-      'Against capex companies share a slope of 2.01 (1.20 to 2.82), one line for all has 2.00',
+      'Against capex companies share a slope of 2.01 (1.20 to 2.82), one line for all has 2.00 (1.00 to 3.00)',
       'Standing 1,810 (1,170 to 2,450), place 1 to 2 of 3; without any one company from 1,500 to 2,120',
       'Standing 1,810 (1,170 to 2,450), place 1 to 2 of 3; without any one year from 1,700 to 1,950',
       'Slope on capex 2.01 (1.20 to 2.82), in changes from year to year 1.60 (1.00 to 2.20)',
-      'Slope on capex 2.01: the interval excludes zero in 2 of 3 ways',
+      'Slope on capex 2.01 (1.20 to 2.82): the interval excludes zero in 2 of 3 ways',
       'Standing above zero in 3 of 3 models that give one, from 1,500 to 1,810',
-      '1 of 32 rows has a studentised residual beyond 3',
-      'Residuals scatter most in Velmara, by 300',
-      'Residuals scatter most in 2014, by 310',
+      '1 of 32 rows has a studentised residual beyond ±3',
+      'Residuals scatter most in Velmara, standard deviation 300',
+      'Residuals scatter most in 2014, standard deviation 310',
     ]);
     expect(texts('h4')).toEqual(titles.map((title) => title ?? ''));
   });

@@ -31,7 +31,7 @@ describe('the evidence in words', () => {
   describe('of one line', () => {
     it('keeps company levels where one line is ruled out, and says what each explains', () => {
       expect(oneLineMeaning(judgedResult, numbers)).toBe(
-        'No: company levels differ, so each company keeps its own. One pooled line explains 75.3 %, company levels with common slopes 96.3 %.',
+        'No: company levels differ, so each company keeps its own. One pooled line explains 75.3 % of the variation in market value, company levels with common slopes 96.3 %.',
       );
     });
 
@@ -61,8 +61,8 @@ describe('the evidence in words', () => {
     });
 
     it('puts the slope of the pooled line beside that of the companies', () => {
-      expect(linesTitle(judgedResult, 0, numbers)).toBe(
-        'Against capex companies share a slope of 2.01 (1.20 to 2.82), one line for all has 2.00',
+      expect(linesTitle(exampleEvidence, judgedResult, { index: 0, numbers })).toBe(
+        'Against capex companies share a slope of 2.01 (1.20 to 2.82), one line for all has 2.00 (1.00 to 3.00)',
       );
       expect(comparedSlopes(exampleEvidence, judgedResult, numbers)).toEqual([
         { name: 'capex', pooled: '2.000 (1.000 to 3.000)', within: '2.005 (1.195 to 2.815)' },
@@ -99,7 +99,7 @@ describe('the evidence in words', () => {
       const left = withoutEachCompany(judgedResult, 'standing', standing);
       const picture = { choice: 'standing', left, many: 'companies' } as const;
       expect(leftOutMeaning(judgedResult, picture, numbers)).toBe(
-        'The standing moves most without Kesdrin: to 1,500 from 1,810. Whichever of the companies is left out, the standing stays inside its interval.',
+        'The standing moves most without Kesdrin: to 1,500 from 1,810 EUR m. Whichever of the companies is left out, the standing stays inside its interval.',
       );
     });
 
@@ -120,7 +120,7 @@ describe('the evidence in words', () => {
     it('counts those that turn it round where they are many', () => {
       const left = Array.from({ length: 7 }, (_, place) => ({ name: `C${place}`, estimate: -1 }));
       expect(leftOutConsequence(judgedResult, { choice: 'standing', left, many: 'years' })).toBe(
-        'Without any of 7 years the standing lies on the other side of zero.',
+        'Without any one of 7 years the standing lies on the other side of zero.',
       );
     });
 
@@ -135,14 +135,14 @@ describe('the evidence in words', () => {
     it('says that there is nothing to leave out', () => {
       const picture = { choice: 'standing', left: [], many: 'years' } as const;
       expect(leftOutMeaning(judgedResult, picture, numbers)).toBe(
-        'There is no standing without one of the years.',
+        'With one of the years left out there is no standing to compare.',
       );
     });
   });
 
   it('tells a drift from none by its test', () => {
     expect(driftMeaning(judgedResult, numbers)).toBe(
-      'The gap moves by 0.49 (\u221262.40 to 63.40) a year, p 0.980: no drift is shown, so one standing serves all years.',
+      'The gap moves by 0.49 (\u221262.40 to 63.40) EUR m a year, p 0.980: no drift is shown, so one standing is kept for all years.',
     );
     const drift = { estimate: 84, standardError: 30, low: 12, high: 156, pValue: 0.03 };
     expect(driftMeaning({ ...judgedResult, drift }, numbers)).toMatch(

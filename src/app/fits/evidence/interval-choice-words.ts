@@ -1,7 +1,7 @@
 import type { CovarianceSummary, Evidence, FitResult } from '@contract';
 import type { IntervalRow } from '@figures';
 import { covarianceShort } from '../../ui/covariance-words';
-import type { NumberFormat } from '../../ui/number-format';
+import { type NumberFormat, headlineDigits } from '../../ui/number-format';
 import { counted, listed } from '../../ui/phrases';
 import { regressorWord } from '../fit-words';
 import { degreesText, pCell } from './statistic-words';
@@ -71,9 +71,9 @@ export function intervalsTitle(
   { slopes }: Pick<FitResult, 'slopes'>,
   { index, numbers }: { readonly index: number; readonly numbers: NumberFormat },
 ): string {
-  const { name, estimate } = slopes[index];
+  const slope = slopes[index];
   const { outside, inside } = waysOf(evidence, index);
-  const head = `Slope on ${regressorWord(name, index)} ${numbers.headline(estimate, 'plain')}`;
+  const head = `Slope on ${regressorWord(slope.name, index)} ${numbers.interval(slope, 'plain', headlineDigits)}`;
   const all = outside.length + inside.length;
   if (all === 0) return `${head}: no way gives an interval`;
   return `${head}: the interval excludes zero in ${outside.length} of ${counted(all, 'way')}`;
@@ -85,21 +85,25 @@ export function intervalsMeaning(
   { sample, standing }: Pick<FitResult, 'sample' | 'standing'>,
   { index, numbers }: { readonly index: number; readonly numbers: NumberFormat },
 ): string {
-  const persistence = standing?.persistence ?? null;
-  const errors =
-    persistence === null
-      ? 'errors of one company may persist over the years'
-      : `errors persist by ${numbers.headline(persistence, 'plain')} from year to year`;
+  const errors = errorsText(standing?.persistence ?? null, numbers);
   const companies = counted(sample.companies, 'company', 'companies');
-  const why = `CR2 is the default here: ${errors}, which row-by-row intervals overlook, and it corrects for having ${companies}.`;
+  const why = `CR2 is the default here: ${errors}, which row-by-row intervals overlook, and CR2 corrects for having ${companies}.`;
   const { outside, inside } = waysOf(evidence, index);
   if (outside.length === 0 || inside.length === 0)
     return outside.length + inside.length < 2
       ? why
-      : `${why} Every way says the same of zero: it lies ${inside.length === 0 ? 'outside' : 'inside'}.`;
+      : `${why} Every way says the same of zero: it lies ${inside.length === 0 ? 'outside' : 'inside'} the interval.`;
   const fewer = outside.length <= inside.length ? outside : inside;
   const side = fewer === outside ? 'outside' : 'inside';
-  return `${why} The choice matters: zero lies ${side} under ${listed(fewer)}, not under the others.`;
+  return `${why} The choice matters: zero lies ${side} the interval under ${listed(fewer)}, not under the others.`;
+}
+
+function errorsText(persistence: number | null, numbers: NumberFormat): string {
+  if (persistence === null) return 'errors of one company may persist over the years';
+  const estimate = `estimated persistence ${numbers.headline(persistence, 'plain')}, where 0 is none and 1 never fades`;
+  return persistence > 0
+    ? `errors of one company persist over the years (${estimate})`
+    : `errors of one company may persist over the years, though these are not seen to (${estimate})`;
 }
 
 export interface CovarianceLine {

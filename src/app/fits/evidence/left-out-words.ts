@@ -12,7 +12,7 @@ const mostNamed = 4;
 /** `A, B and C`, or how many where they are many. */
 function named(left: readonly LeftOut[], many: string): string {
   return left.length > mostNamed
-    ? `any of ${left.length} ${many}`
+    ? `any one of ${left.length} ${many}`
     : listed(left.map(({ name }) => name)).replace(/ and (?=[^ ]+$)/, ' or ');
 }
 
@@ -52,11 +52,15 @@ export function leftOutMeaning(
   const full = chosenFigure(result, choice);
   const word = choiceWord(result, choice);
   const most = full === null ? null : mostMoving(left, full);
-  if (full === null || most === null) return `There is no ${word} without one of the ${many}.`;
-  const [to, from] = [most.estimate, full.estimate].map((value) =>
-    numbers.headline(value, kindOf(result, choice)),
-  );
-  return `The ${word} moves most without ${most.name}: to ${to} from ${from}. ${leftOutConsequence(result, picture)}`;
+  if (full === null || most === null) return noneText(word, many);
+  const kind = kindOf(result, choice);
+  const [to, from] = [most.estimate, full.estimate].map((value) => numbers.headline(value, kind));
+  const unit = kind === 'money' ? ` ${numbers.unitLabel()}` : '';
+  return `The ${word} moves most without ${most.name}: to ${to} from ${from}${unit}. ${leftOutConsequence(result, picture)}`;
+}
+
+function noneText(word: string, many: string): string {
+  return `With one of the ${many} left out there is no ${word} to compare.`;
 }
 
 /** Whether a figure changes its side or leaves its interval when one is left out, in a sentence. */
@@ -66,8 +70,7 @@ export function leftOutConsequence(
 ): string {
   const full = chosenFigure(result, choice);
   const word = choiceWord(result, choice);
-  if (full === null || rangeOf(left) === null)
-    return `There is no ${word} without one of the ${many}.`;
+  if (full === null || rangeOf(left) === null) return noneText(word, many);
   const turned = turning(left, full);
   if (turned.length > 0)
     return `Without ${named(turned, many)} the ${word} lies on the other side of zero.`;

@@ -147,5 +147,5 @@ export function modelsMeaning(
   const counts = `In ${sure.length === 0 ? 'none' : sure.length} of ${counted(figures.length, 'model')} the interval excludes zero.`;
   return turned.length === 0
     ? `The ${word} lies on the same side of zero in every model that gives one. ${counts}`
-    : `The choice of model matters: the ${word} changes its side under ${listed(turned.map(({ code }) => `“${names[code].toLowerCase()}”`))}. ${counts}`;
+    : `The choice of model matters: the ${word} lies on the other side of zero under ${listed(turned.map(({ code }) => `“${names[code].toLowerCase()}”`))}. ${counts}`;
 }

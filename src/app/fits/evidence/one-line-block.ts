@@ -70,7 +70,7 @@ export class OneLineBlock {
     if (evidence === null || lines === undefined || place === 'standing') return null;
     const result = this.result();
     const panel = this.reply().panelVersion;
-    const title = linesTitle(result, place, this.#numbers);
+    const title = linesTitle(evidence, result, { index: place, numbers: this.#numbers });
     return {
       ...lines,
       text: chartText(

@@ -1,4 +1,5 @@
 import type { Evidence, FitResult } from '@contract';
+import type { IntervalFigure } from '@figures';
 import { type NumberFormat, headlineDigits } from '../../ui/number-format';
 import { regressorWord } from '../fit-words';
 
@@ -15,7 +16,8 @@ export function oneLineMeaning(
   const share = (value: number): string => numbers.headline(value, 'percent');
   const levels =
     specification.effects === 'company' ? 'company levels' : 'company levels and year effects';
-  const shares = `One pooled line explains ${share(pooled.rSquared)}, ${levels} with common slopes ${share(goodness.rSquared)}.`;
+  const outcome = specification.form === 'log' ? 'the log of market value' : 'market value';
+  const shares = `One pooled line explains ${share(pooled.rSquared)} of the variation in ${outcome}, ${levels} with common slopes ${share(goodness.rSquared)}.`;
   const { pValue, pValueReason } = poolability;
   if (pValue === null)
     return `Not decided: ${pValueReason ?? 'the test has no p value here'}. ${shares}`;
@@ -24,17 +26,23 @@ export function oneLineMeaning(
     : `The data do not rule it out: company levels are not shown to differ. ${shares}`;
 }
 
-/** Title of the lines against one regressor. */
+/** Title of the lines against one regressor: the slope within companies, then that of the pooled line. */
 export function linesTitle(
-  { slopes, pooled }: Pick<FitResult, 'slopes' | 'pooled'>,
-  index: number,
-  numbers: NumberFormat,
+  { estimators }: Pick<Evidence, 'estimators'>,
+  { slopes }: Pick<FitResult, 'slopes'>,
+  { index, numbers }: { readonly index: number; readonly numbers: NumberFormat },
 ): string {
   const slope = slopes[index];
-  const within = numbers.interval(slope, 'plain', headlineDigits);
-  const head = `Against ${regressorWord(slope.name, index)} companies share a slope of ${within}`;
-  if (!(slope.name in pooled.slopes)) return head;
-  return `${head}, one line for all has ${numbers.headline(pooled.slopes[slope.name], 'plain')}`;
+  const text = (figure: IntervalFigure): string =>
+    numbers.interval(figure, 'plain', headlineDigits);
+  const head = `Against ${regressorWord(slope.name, index)} companies share a slope of ${text(slope)}`;
+  const pooled = pooledSlope({ estimators }, slope.name);
+  return pooled === undefined ? head : `${head}, one line for all has ${text(pooled)}`;
+}
+
+function pooledSlope({ estimators }: Pick<Evidence, 'estimators'>, name: string) {
+  const pooled = estimators.find(({ code }) => code === 'pooled');
+  return pooled?.slopes?.find((slope) => slope.name === name);
 }
 
 export interface ComparedSlope {
@@ -51,7 +59,7 @@ export function comparedSlopes(
 ): readonly ComparedSlope[] {
   const pooled = estimators.find(({ code }) => code === 'pooled');
   return slopes.map((slope, index) => {
-    const other = pooled?.slopes?.find(({ name }) => name === slope.name);
+    const other = pooledSlope({ estimators }, slope.name);
     return {
       name: regressorWord(slope.name, index),
       pooled: other === undefined ? (pooled?.reason ?? 'n/a') : numbers.interval(other, 'plain'),

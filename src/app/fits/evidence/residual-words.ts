@@ -24,7 +24,7 @@ function missOf(
   return `${numbers.headline(Math.abs(residual))} ${numbers.unitLabel()} ${side}`;
 }
 
-/** Which row the model misses most, and how many lie far off. */
+/** Which row stands out most by its studentised residual, and how many lie far off. */
 export function residualMeaning(
   residuals: Residuals,
   result: Pick<FitResult, 'specification'>,
@@ -32,21 +32,21 @@ export function residualMeaning(
 ): string {
   const most = residuals.largest.at(0);
   if (most === undefined) return 'Every row lies where the model expects it.';
-  const head = `${most.company} ${most.year} is missed most: ${missOf(most, result, numbers)} what is expected.`;
+  const head = `${most.company} ${most.year} stands out most: ${missOf(most, result, numbers)} what is expected.`;
   const beyond = rowsBeyond(residuals);
   const rows = counted(residuals.of, 'row');
   return beyond === 0
-    ? `${head} No row of ${rows} lies more than ${far} times its usual spread away.`
-    : `${head} ${beyond} of ${rows} ${beyond === 1 ? 'lies' : 'lie'} more than ${far} times the usual spread away: check their cells.`;
+    ? `${head} None of ${rows} lies more than ${far} times the usual spread away.`
+    : `${head} ${beyond} of ${rows} ${beyond === 1 ? 'lies' : 'lie'} more than ${far} times the usual spread away: check ${beyond === 1 ? 'its' : 'their'} cells.`;
 }
 
 export function scatterTitle(residuals: Residuals): string {
   const beyond = rowsBeyond(residuals);
   const rows = counted(residuals.of, 'row');
-  return `${beyond === 0 ? 'None' : beyond} of ${rows} ${beyond > 1 ? 'have' : 'has'} a studentised residual beyond ${far}`;
+  return `${beyond === 0 ? 'None' : beyond} of ${rows} ${beyond > 1 ? 'have' : 'has'} a studentised residual beyond ±${far}`;
 }
 
-/** Where residuals scatter most: `Tolvane scatters most, by 420`. */
+/** Where residuals scatter most: `Residuals scatter most in Tolvane, standard deviation 420`. */
 export function widestTitle(
   groups: readonly { readonly label: string; readonly standardDeviation: number }[],
   { specification }: Pick<FitResult, 'specification'>,
@@ -57,5 +57,5 @@ export function widestTitle(
   for (const group of groups)
     if (group.standardDeviation > widest.standardDeviation) widest = group;
   const kind = levelKind(specification.form);
-  return `Residuals scatter most in ${widest.label}, by ${numbers.headline(widest.standardDeviation, kind)}`;
+  return `Residuals scatter most in ${widest.label}, standard deviation ${numbers.headline(widest.standardDeviation, kind)}`;
 }

@@ -11,10 +11,11 @@ export function driftMeaning(
   if (drift === null) return driftReason ?? 'There is no gap path, so no drift to test.';
   const kind = differenceKind(specification.form);
   const figure = numbers.interval(asDifference(drift, specification.form), kind, headlineDigits);
-  const head = `The gap moves by ${figure} a year, ${pText(drift.pValue)}`;
+  const unit = kind === 'money' ? ` ${numbers.unitLabel()}` : '';
+  const head = `The gap moves by ${figure}${unit} a year, ${pText(drift.pValue)}`;
   if (drift.pValue === null)
     return `${head}: ${drift.intervalReason ?? 'its test has no p value'}.`;
   return drift.pValue < 1 - specification.confidence
     ? `${head}: it drifts, so one standing for all years hides where it is now.`
-    : `${head}: no drift is shown, so one standing serves all years.`;
+    : `${head}: no drift is shown, so one standing is kept for all years.`;
 }

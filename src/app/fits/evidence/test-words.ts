@@ -53,8 +53,13 @@ export function testsMeaning(
   { warnings }: Pick<FitResult, 'warnings'>,
 ): string {
   const rejecting = list.filter(({ holm }) => holm === 'rejects').length;
-  const head = `${counted(lookedAt, 'test')} looked at, ${inHolm} of them judged together by Holm’s correction at ${confidenceText(level)}: ${rejecting === 0 ? 'none rejects' : `${rejecting} ${rejecting === 1 ? 'rejects' : 'reject'}`}.`;
+  const head = `${counted(lookedAt, 'test')} looked at, ${inHolm} of them judged together by Holm’s correction at ${confidenceText(level)}: ${rejectingText(rejecting)}.`;
   return warnings.some(({ code }) => code === 'persistent-errors')
-    ? `${head} Errors persist here, so tests that assume they do not reject too often.`
+    ? `${head} Errors persist here, so tests that assume independent errors reject too often.`
     : head;
+}
+
+function rejectingText(rejecting: number): string {
+  if (rejecting === 0) return 'none rejects what it assumes';
+  return rejecting === 1 ? '1 rejects what it assumes' : `${rejecting} reject what they assume`;
 }

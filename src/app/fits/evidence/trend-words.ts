@@ -68,8 +68,8 @@ export function trendMeaning(evidence: Trends, { slopes, warnings }: Fitted): st
   }
   const what =
     doubtful.length === 1
-      ? `the slope on ${doubtful[0]} lies outside its interval`
-      : `the slopes on ${listed(doubtful)} lie outside their intervals`;
+      ? `the slope on ${doubtful[0]} lies outside this fit’s interval`
+      : `the slopes on ${listed(doubtful)} lie outside this fit’s intervals`;
   return `In changes from year to year ${what}, so common trends may make part of it. State both figures, and compare year effects below.`;
 }
 
