@@ -29,6 +29,14 @@ describe('leave-one-out layout', () => {
     expect(line.band!.to).toBeCloseTo(line.x + 1300 * perUnit, 6);
   });
 
+  it('clips a reason in the place of its mark, and keeps it whole for who asks', () => {
+    const reason = 'One company would be left, and nobody to compare it with.';
+    const leftOut = [{ name: '2014', estimate: null, reason }, ...data.leftOut];
+    const [row] = leaveOneOutLayout({ ...data, leftOut }, 320, formats).rows;
+    expect(row.reason).toBe(reason);
+    expect(row.reasonLabel).toMatch(/^One company .*…$/);
+  });
+
   it('gives a change that rounds to zero no sign', () => {
     expect([0.4, -0.4, 0].map((change) => changeText(change, formats))).toEqual(['0', '0', '0']);
     expect([0.6, -0.6].map((change) => changeText(change, formats))).toEqual(['+1', '-1']);

@@ -46,8 +46,10 @@ export interface LeaveOneOutRow {
   readonly value: string;
   /** How far it is from the full figure, with its sign. */
   readonly change: string;
-  /** What stands in the mark's place where there is none. */
+  /** Why there is none, in full; empty where there is one. */
   readonly reason: string;
+  /** As much of it as fits in the mark's place. */
+  readonly reasonLabel: string;
 }
 
 export interface LeaveOneOutLayout {
@@ -140,7 +142,8 @@ export function leaveOneOutLayout(
       y: top + rowHeight * (place + 0.5),
       x: estimate === null ? null : scale(estimate),
       ...texts[place],
-      reason:
+      reason: estimate === null ? (reason ?? 'no figure') : '',
+      reasonLabel:
         estimate === null
           ? clippedWords(reason ?? 'no figure', Math.max(40, width - plot.left - 8))
           : '',
