@@ -3,7 +3,8 @@ import type { RowUsed } from './rows-used';
 
 /** All that a replication pack is made of, as plain data. */
 export interface ReplicationPack {
-  readonly rows: readonly RowUsed[];
+  /** Read once, while the pack is written. */
+  readonly rows: Iterable<RowUsed>;
   /** Names of the panel's columns. */
   readonly names: {
     readonly company: string;
@@ -15,8 +16,9 @@ export interface ReplicationPack {
   readonly currency: string | null;
   readonly unit: 'units' | 'thousands' | 'millions' | 'billions' | null;
   readonly result: FitResult;
-  /** Null where the engine that made the fit wrote none. */
   readonly evidence: Evidence | null;
+  /** Why there is no evidence, where somebody could look for it. */
+  readonly evidenceReason?: string;
   /** Null for a fit that no workspace keeps. */
   readonly lineage: PackLineage | null;
   /** Text of `replication.R`. */
@@ -51,5 +53,6 @@ export interface PackLineage {
 
 export interface PackFile {
   readonly name: string;
-  readonly text: string;
+  /** Whole, or in parts that are made when they are asked for. */
+  readonly text: string | Iterable<string>;
 }

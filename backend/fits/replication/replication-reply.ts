@@ -20,7 +20,7 @@ export function replicationFiles(pack: ReplicationPack): readonly PackFile[] {
     { name: 'CAUTIONS.txt', text: `${cautions.join('\n\n')}\n` },
     { name: 'rows.csv', text: rowsCsv(header, pack.rows) },
     { name: 'results.json', text: json(results(pack)) },
-    { name: 'schema.json', text: json(replicationSchema()) },
+    { name: 'schema.json', text: schemaText() },
     ...(evidence === null ? [] : [{ name: 'evidence.json', text: json(toEvidence(evidence)) }]),
     ...(lineage === null ? [] : [{ name: 'lineage.json', text: json(chain(pack, lineage)) }]),
     { name: 'replication.R', text: pack.script },
@@ -58,6 +58,17 @@ function chain(
   };
 }
 
+let schema: string | undefined;
+
+/** Made once: it is the same for every fit. */
+function schemaText(): string {
+  return (schema ??= json(replicationSchema()));
+}
+
+/** Characters up to which a file is laid out for reading; above, that would make it larger still and cost time. */
+const mostLaidOut = 1_000_000;
+
 function json(value: object): string {
-  return `${JSON.stringify(value, null, 2)}\n`;
+  const plain = JSON.stringify(value);
+  return `${plain.length > mostLaidOut ? plain : JSON.stringify(value, null, 2)}\n`;
 }

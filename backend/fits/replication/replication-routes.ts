@@ -11,11 +11,30 @@ export function replicationRoutes(replication: ReplicationService): Router {
   const router = express.Router();
 
   register(router, apiRoutes.downloadReplication, async (req, res) => {
-    const pack = await replication.export(signedInMember(req), idParameter(req, 'fitId'));
-    const zip = zipFiles(replicationFiles(pack));
+    const member = signedInMember(req);
+    const fitId = idParameter(req, 'fitId');
+    // Express answers HEAD here, too: nobody takes anything with it.
+    const isTaken = req.method === 'GET';
+    const pack = isTaken
+      ? await replication.export(member, fitId)
+      : await replication.read(member.workspaceId, fitId);
     res.attachment(`kinvale-fit-${pack.result.hash.slice(0, 8)}.zip`).type('application/zip');
-    await pipeline(zip, res);
+    if (!isTaken) {
+      res.end();
+      return;
+    }
+    try {
+      await pipeline(zipFiles(replicationFiles(pack)), res);
+    } catch (error) {
+      if (!isPrematureClose(error)) throw error;
+      req.log.info({ fitId }, 'a download was broken off');
+    }
   });
 
   return router;
+}
+
+/** The reader went away before the last byte. */
+function isPrematureClose(error: unknown): boolean {
+  return error instanceof Error && 'code' in error && error.code === 'ERR_STREAM_PREMATURE_CLOSE';
 }

@@ -184,4 +184,61 @@ describe('the replication pack', () => {
     );
     expect((await analyst.get(`/api/fits/${rows[0].id}/replication`)).status).toBe(409);
   });
+
+  it('waits for the evidence, and says why where there is none', async () => {
+    const { rows } = await admin.query<{ id: string }>(
+      `insert into fit (workspace_id, id, panel_version_id, peer_group_id, specification,
+          specification_key, state, hash, result, created_by)
+        select workspace_id, gen_random_uuid(), panel_version_id, peer_group_id, specification,
+          'waits', state, hash, result, created_by
+        from fit where id = $1 returning id`,
+      [reply.fit.id],
+    );
+    const [{ id }] = rows;
+    const refused = await analyst.get(`/api/fits/${id}/replication`);
+    expect(refused.status).toBe(409);
+    expect(refused.body).toEqual(
+      jasmine.objectContaining({
+        detail:
+          'The evidence of this fit is still being computed: export the pack when it is there.',
+      }),
+    );
+    await admin.query(
+      `insert into fit_evidence (workspace_id, fit_id, failure)
+        select workspace_id, id, 'It does not fit into memory.' from fit where id = $1`,
+      [id],
+    );
+    const files = await unzip((await download(analyst, id)).body as Buffer);
+    expect([...files.keys()]).not.toContain('evidence.json');
+    expect(files.get('README.txt')).toContain(
+      'evidence.json is not in this pack. It does not fit into memory.',
+    );
+  });
+
+  it('is not recorded as taken where only its head was asked for', async () => {
+    const taken = async (): Promise<number> =>
+      (await admin.query(`select from activity where action = 'fit-exported'`)).rowCount ?? 0;
+    const before = await taken();
+    const head = await analyst.agent.head(`/api/fits/${reply.fit.id}/replication`);
+    expect(head.status).toBe(200);
+    expect(head.type).toBe('application/zip');
+    expect(await taken()).toBe(before);
+  });
+
+  it('ends quietly where its reader goes away', async () => {
+    const before = server.log.length;
+    const said = (): string => server.log.slice(before).join('');
+    // The pack waits for its rows while the reader leaves.
+    await admin.query('begin');
+    await admin.query('lock table panel_row in access exclusive mode');
+    const request = analyst.agent.get(`/api/fits/${reply.fit.id}/replication`);
+    request.end(() => undefined);
+    await new Promise((resolve) => setTimeout(resolve, 500));
+    request.abort();
+    await admin.query('commit');
+    for (let look = 0; look < 50 && !said().includes('a download was broken off'); look++)
+      await new Promise((resolve) => setTimeout(resolve, 100));
+    expect(said()).toContain('a download was broken off');
+    expect(said()).not.toContain('unexpected error');
+  });
 });

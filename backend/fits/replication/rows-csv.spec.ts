@@ -29,7 +29,7 @@ function cells(change: Partial<Specification>): string[][] {
   const result = fitted(change);
   const names = { company: 'company', year: '@year', outcome: 'value', regressors: ['capex'] };
   const header = { ...names, lag: result.specification.lag };
-  return parse(rowsCsv(header, rowsUsed(panel, result)));
+  return parse([...rowsCsv(header, rowsUsed(panel, result))].join(''));
 }
 
 describe('the rows of a replication pack', () => {
@@ -54,7 +54,7 @@ describe('the rows of a replication pack', () => {
     );
     const result = fitPanel(broken, plainSpecification, null, undefined, { sha256 });
     const names = { company: 'company', year: 'year', outcome: 'value', regressors: ['inv\nest'] };
-    const text = rowsCsv({ ...names, lag: 0 }, rowsUsed(broken, result));
+    const text = [...rowsCsv({ ...names, lag: 0 }, rowsUsed(broken, result))].join('');
     const [header, ...rows] = parse(text, { record_delimiter: '\r\n' });
     expect(text).toContain('"inv\nest"');
     expect(text).toContain('"C\n03"');
@@ -64,6 +64,13 @@ describe('the rows of a replication pack', () => {
       ...Array<string>(3).fill('C\n03'),
       ...Array<string>(3).fill('D\r04'),
     ]);
+  });
+
+  it('are written in parts of some thousand rows', () => {
+    const names = { company: 'company', year: 'year', outcome: 'value', regressors: [] };
+    const row = { company: 'A', year: 2000, outcome: 1, regressors: [], fileRow: 2, isUsed: true };
+    const parts = [...rowsCsv({ ...names, lag: 0 }, Array<typeof row>(12_000).fill(row))];
+    expect(parts.map((part) => part.split('\r\n').length - 1)).toEqual([1, 5000, 5000, 2000]);
   });
 
   it('come by company and year, with the company of one row marked as unused', () => {

@@ -12,28 +12,31 @@ export interface RowUsed {
   readonly isUsed: boolean;
 }
 
-/** The rows of the members with every value, by company and year, as the engine orders them. */
-export function rowsUsed(
+/**
+ * The rows of the members with every value, by company and year, as the engine orders them. In time of the rows: names
+ * are compared once a company.
+ */
+export function* rowsUsed(
   columns: PanelColumns,
   result: Pick<FitResult, 'members' | 'sample' | 'specification'>,
-): RowUsed[] {
-  const members = new Set(result.members);
+): Generator<RowUsed> {
   const dropped = new Set(result.sample.dropped.map(({ row }) => row));
   const singles = new Set(result.sample.singleRow);
   const { lag } = result.specification;
-  const places = new Map<string, number>();
-  const nameOf = (row: number): string => columns.companies[columns.company[row]];
-  const key = (company: string, year: number): string => JSON.stringify([company, year]);
-  columns.company.forEach((_, row) => places.set(key(nameOf(row), columns.year[row]), row));
-  const rows = Array.from(columns.company, (_, row) => row).filter(
-    (row) => members.has(nameOf(row)) && !dropped.has(columns.fileRow[row]),
-  );
-  return rows
-    .map((row): RowUsed => {
-      const company = nameOf(row);
+  const rowsOf = columns.companies.map((): number[] => []);
+  columns.company.forEach((code, row) => rowsOf[code].push(row));
+  const codes = new Map(columns.companies.map((name, code) => [name, code]));
+  const names = [...new Set(result.members)].sort(byCodeUnit);
+  for (const company of names) {
+    const rows = (rowsOf[codes.get(company) ?? -1] ?? []).sort(
+      (left, right) => columns.year[left] - columns.year[right],
+    );
+    const ofYear = new Map(rows.map((row) => [columns.year[row], row]));
+    for (const row of rows) {
+      if (dropped.has(columns.fileRow[row])) continue;
       const year = columns.year[row];
-      const source = lag === 0 ? row : places.get(key(company, year - lag));
-      return {
+      const source = lag === 0 ? row : ofYear.get(year - lag);
+      yield {
         company,
         year,
         outcome: columns.outcome.values[row],
@@ -41,8 +44,8 @@ export function rowsUsed(
         fileRow: columns.fileRow[row],
         isUsed: !singles.has(company),
       };
-    })
-    .sort((left, right) => byCodeUnit(left.company, right.company) || left.year - right.year);
+    }
+  }
 }
 
 function byCodeUnit(left: string, right: string): number {
