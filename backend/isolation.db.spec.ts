@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import pg from 'pg';
 import type { TestDatabase } from '../db/testing/test-database';
 import { type ApiRoute, apiRoutes } from './contract';
@@ -24,6 +25,15 @@ async function fill(server: TestServer, canary: string): Promise<Filled> {
   const panelVersionId = await importPanel(client, panel);
   const peerGroupId = await savePeers(client, panelVersionId, `${canary}-own`);
   const { fit, panelVersion, result } = await runFit(client, peerGroupId);
+  const bootstrapId = randomUUID();
+  const createdBy = session.person.id;
+  await server.composition.services.repositories.inWorkspace(
+    await workspaceOf(client),
+    async (tx) => {
+      await tx.bootstraps.insert({ id: bootstrapId, fitId: fit.id, seed: 7, createdBy });
+      await tx.bootstraps.fail(bootstrapId, canary, new Date());
+    },
+  );
   const last = result?.prediction?.last;
   const text = { name: `${canary} plan`, note: canary };
   const plan = [{ year: (last?.year ?? 0) + 1, values: last?.regressors }];
@@ -183,6 +193,7 @@ describe('two workspaces', () => {
         expect(own.rows.every((row) => row.workspace_id === id))
           .withContext(relname)
           .toBeTrue();
+        if (relname === 'fit_bootstrap') expect(own.rowCount).toBe(1);
         await app.query('commit');
       }
     } finally {

@@ -61,6 +61,7 @@ export const apiRoutes = {
   readFit: { method: 'GET', path: '/api/fits/:fitId', allow: model },
   cancelFit: { method: 'DELETE', path: '/api/fits/:fitId', allow: ['analyst'] },
   readEvidence: { method: 'GET', path: '/api/fits/:fitId/evidence', allow: model },
+  readEvidenceState: { method: 'GET', path: '/api/fits/:fitId/evidence/state', allow: model },
   startBootstrap: { method: 'POST', path: '/api/fits/:fitId/bootstrap', allow: ['analyst'] },
   cancelBootstrap: { method: 'DELETE', path: '/api/fits/:fitId/bootstrap', allow: ['analyst'] },
   downloadReplication: { method: 'GET', path: '/api/fits/:fitId/replication', allow: model },

@@ -213,3 +213,10 @@ export const EvidenceReply = z.discriminatedUnion('state', [
   z.object({ state: z.literal('unavailable'), reason: z.string() }),
 ]);
 export type EvidenceReply = z.infer<typeof EvidenceReply>;
+
+/** How far the evidence and its newest bootstrap are: small, to be asked for again and again. */
+export const EvidenceStateReply = z.object({
+  state: z.enum(['ready', 'computing', 'unavailable']),
+  bootstrap: Bootstrap.nullable(),
+});
+export type EvidenceStateReply = z.infer<typeof EvidenceStateReply>;

@@ -5,6 +5,7 @@ import type { Repositories, WorkspaceRepositories } from '../../db/repositories/
 import { record } from '../activity/activity';
 import { Conflict, NotFound } from '../errors/app-error';
 import type { JobQueue } from '../jobs/job-queue';
+import { engineVersion } from '../stats';
 import { findEvidence } from './evidence-service';
 
 interface Actor {
@@ -46,8 +47,17 @@ export class BootstrapService {
     { actor, fitId, seed }: { actor: Actor; fitId: string; seed: number },
   ): Promise<string> {
     const view = await findEvidence(tx, fitId);
+    if (view.state === 'computing')
+      throw new Conflict(
+        'The evidence of this fit is still being computed. Start the bootstrap when it is there.',
+      );
     if (view.state !== 'ready')
       throw new Conflict('This fit has no evidence that a bootstrap could be added to.');
+    const { engine } = view.evidence;
+    if (engine !== engineVersion)
+      throw new Conflict(
+        `This fit was made by engine ${engine}, and a bootstrap would be by ${engineVersion}: fit again.`,
+      );
     const known = await tx.bootstraps.ofFit(fitId);
     const same = known.find((row) => row.seed === seed && isKept(row));
     if (same !== undefined) return same.id;

@@ -4,7 +4,7 @@ import { signedInMember } from '../http/member';
 import { parse } from '../http/parse';
 import { idParameter, register } from '../http/register';
 import type { BootstrapService } from './bootstrap-service';
-import { toBootstrap, toEvidenceReply } from './evidence-reply';
+import { toBootstrap, toEvidenceReply, toEvidenceStateReply } from './evidence-reply';
 import type { EvidenceService } from './evidence-service';
 
 /** The evidence of a fit and the bootstraps asked for after it. */
@@ -18,6 +18,12 @@ export function evidenceRoutes(
   register(router, apiRoutes.readEvidence, async (req, res) => {
     const { workspaceId } = signedInMember(req);
     res.json(toEvidenceReply(await evidence.find(workspaceId, idParameter(req, 'fitId'))));
+  });
+
+  register(router, apiRoutes.readEvidenceState, async (req, res) => {
+    const { workspaceId } = signedInMember(req);
+    const found = await evidence.state(workspaceId, idParameter(req, 'fitId'));
+    res.json(toEvidenceStateReply(found));
   });
 
   register(router, apiRoutes.startBootstrap, async (req, res) => {

@@ -1,5 +1,5 @@
 import type { BootstrapRow } from '../../db/repositories/bootstraps-repository';
-import type { FitRow } from '../../db/repositories/fits-repository';
+import type { SingleFitRow } from '../../db/repositories/fits-repository';
 import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import { NotFound } from '../errors/app-error';
 import { type CovarianceSummary, engineVersion, type Evidence } from '../stats';
@@ -16,6 +16,12 @@ export type EvidenceView =
   | { readonly state: 'computing' }
   | { readonly state: 'unavailable'; readonly reason: string };
 
+export interface EvidenceState {
+  readonly state: EvidenceView['state'];
+  /** The newest that was asked for. */
+  readonly bootstrap: BootstrapRow | null;
+}
+
 export class EvidenceService {
   constructor(private readonly repositories: Repositories) {}
 
@@ -23,6 +29,23 @@ export class EvidenceService {
   async find(workspaceId: string, fitId: string): Promise<EvidenceView> {
     return this.repositories.inWorkspace(workspaceId, (tx) => findEvidence(tx, fitId));
   }
+
+  /** How far it is, without reading it. @throws {NotFound} */
+  async state(workspaceId: string, fitId: string): Promise<EvidenceState> {
+    return this.repositories.inWorkspace(workspaceId, async (tx) => {
+      const fit = await findRow(tx, fitId);
+      const isThere = await tx.evidence.isThere(fitId);
+      if (isThere === undefined) return { state: withoutEvidence(fit).state, bootstrap: null };
+      if (!isThere) return { state: 'unavailable', bootstrap: null };
+      return { state: 'ready', bootstrap: (await tx.bootstraps.ofFit(fitId))[0] ?? null };
+    });
+  }
+}
+
+async function findRow(tx: WorkspaceRepositories, fitId: string): Promise<SingleFitRow> {
+  const fit = await tx.fits.find(fitId);
+  if (fit === undefined) throw new NotFound('There is no such fit.');
+  return fit;
 }
 
 /** @throws {NotFound} */
@@ -30,8 +53,7 @@ export async function findEvidence(
   tx: WorkspaceRepositories,
   fitId: string,
 ): Promise<EvidenceView> {
-  const fit = await tx.fits.find(fitId);
-  if (fit === undefined) throw new NotFound('There is no such fit.');
+  const fit = await findRow(tx, fitId);
   const stored = await tx.evidence.find(fitId);
   if (stored === undefined) return withoutEvidence(fit);
   if (stored.evidence === null)
@@ -44,7 +66,7 @@ export async function findEvidence(
   };
 }
 
-function withoutEvidence({ state, engine }: FitRow): EvidenceView {
+function withoutEvidence({ state, engine }: SingleFitRow): EvidenceView {
   if (state === 'queued' || state === 'running') return { state: 'computing' };
   if (state !== 'done')
     return { state: 'unavailable', reason: 'This fit has no result, so there is no evidence.' };

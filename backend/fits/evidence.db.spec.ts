@@ -111,6 +111,16 @@ describe('the evidence of a fit', () => {
       [reply.fit.id],
     );
     expect((await read(client, reply.fit.id)).state).toBe('computing');
+    const state = (await client.get(`/api/fits/${reply.fit.id}/evidence/state`)).body;
+    expect(state).toEqual({ state: 'computing', bootstrap: null });
+    const early = await client.post(`/api/fits/${reply.fit.id}/bootstrap`, {});
+    expect(early.status).toBe(409);
+    expect(early.body).toEqual(
+      jasmine.objectContaining({
+        detail:
+          'The evidence of this fit is still being computed. Start the bootstrap when it is there.',
+      }),
+    );
     const ticketId = randomUUID();
     await admin.query(
       `insert into job_ticket (id, workspace_id, kind, subject_id) values ($1, $2, 'evidence', $3)`,
@@ -205,6 +215,9 @@ describe('the evidence of a fit', () => {
     expect(row?.isChosen).toBeFalse();
     expect([row?.seed, row?.draws]).toEqual([5, 9999]);
 
+    const state = (await client.get(`/api/fits/${reply.fit.id}/evidence/state`)).body;
+    expect(state).toEqual({ state: 'ready', bootstrap: done.bootstrap });
+
     const again = await client.post(path, { seed: 5 });
     expect(again.body).toEqual(jasmine.objectContaining({ seed: 5, state: 'done' }));
     expect((await client.post(path, { seed: 6 })).status).toBe(202);
@@ -217,6 +230,18 @@ describe('the evidence of a fit', () => {
     await expectAsync(
       admin.query('update fit_bootstrap set failure = null where fit_id = $1', [reply.fit.id]),
     ).toBeRejectedWithError(/never changes/);
+  });
+
+  it('takes no bootstrap by another engine than its own', async () => {
+    const { client, reply } = await fitted('Other engine');
+    await readWhen(client, reply.fit.id, isReady);
+    await admin.query(
+      `update fit_evidence set evidence = evidence || '{"engine": "1.9.0"}' where fit_id = $1`,
+      [reply.fit.id],
+    );
+    const refused = await client.post(`/api/fits/${reply.fit.id}/bootstrap`, {});
+    expect(refused.status).toBe(409);
+    expect((refused.body as { detail: string }).detail).toContain('made by engine 1.9.0');
   });
 
   it('lets a bootstrap be cancelled, and asked for again', async () => {

@@ -22,6 +22,17 @@ export class EvidenceRepository {
       .executeTakeFirst();
   }
 
+  /** Whether there is evidence, without reading it; undefined where neither it nor its failure is there. */
+  async isThere(fitId: string): Promise<boolean | undefined> {
+    const found = await this.db
+      .selectFrom('fitEvidence')
+      .select(({ eb }) => eb('evidence', 'is not', null).as('isThere'))
+      .where('workspaceId', '=', this.workspaceId)
+      .where('fitId', '=', fitId)
+      .executeTakeFirst();
+    return found === undefined ? undefined : Boolean(found.isThere);
+  }
+
   /** Keeps what came first: two servers that worked the same fit found the same. */
   async insert(fitId: string, evidence: object): Promise<void> {
     await this.#insert(fitId, { evidence: JSON.stringify(evidence), failure: null });

@@ -13,14 +13,18 @@ export interface FitRow {
   readonly state: FitState;
   readonly progress: object | null;
   readonly hash: string | null;
-  /** Version of the engine that computed the result. */
-  readonly engine: string | null;
   /** The standing and the number of companies of the result: a whole result can be megabytes. */
   readonly standing: object | null;
   readonly companies: number | null;
   readonly failure: object | null;
   readonly createdAt: Date;
   readonly createdByName: string;
+}
+
+/** One fit alone: its engine is read out of its whole result, which a list is spared. */
+export interface SingleFitRow extends FitRow {
+  /** Version of the engine that computed the result. */
+  readonly engine: string | null;
 }
 
 export class FitsRepository {
@@ -59,8 +63,11 @@ export class FitsRepository {
       .executeTakeFirst();
   }
 
-  find(id: string): Promise<FitRow | undefined> {
-    return this.fits().where('fit.id', '=', id).executeTakeFirst();
+  find(id: string): Promise<SingleFitRow | undefined> {
+    return this.fits()
+      .select(sql<string | null>`fit.result ->> 'engine'`.as('engine'))
+      .where('fit.id', '=', id)
+      .executeTakeFirst();
   }
 
   /** The whole result; undefined for a fit that is not done. */
@@ -168,7 +175,6 @@ export class FitsRepository {
         'fit.state',
         'fit.progress',
         'fit.hash',
-        sql<string | null>`fit.result ->> 'engine'`.as('engine'),
         sql<object | null>`fit.result -> 'standing'`.as('standing'),
         sql<number | null>`(fit.result #>> '{sample,companies}')::integer`.as('companies'),
         'fit.failure',

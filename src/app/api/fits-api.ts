@@ -2,20 +2,18 @@ import { Injectable, inject } from '@angular/core';
 import {
   Bootstrap,
   EvidenceReply,
+  EvidenceStateReply,
   FitReply,
   FitsReply,
   type StartBootstrap,
   type StartFit,
   apiRoutes,
 } from '@contract';
-import { type Observable, exhaustMap, takeWhile, timer } from 'rxjs';
+import { type Observable, concat, exhaustMap, of, switchMap, takeWhile, timer } from 'rxjs';
 import type * as z from 'zod';
 import { ApiClient, addressOf } from './api-client';
 
 const lookEveryMs = 400;
-
-/** Evidence of a large panel is a megabyte: it is asked for less often. */
-const lookForEvidenceEveryMs = 1000;
 
 /** Fits: start one, follow it, read it. */
 @Injectable({ providedIn: 'root' })
@@ -50,11 +48,30 @@ export class FitsApi {
     return this.#client.call(apiRoutes.readEvidence, EvidenceReply, { path: { fitId } });
   }
 
-  /** The evidence as it is now, and again while it or a bootstrap beside it is under way; completes with its end. */
+  /**
+   * The evidence as it is now. While it or a bootstrap beside it is under way its small state is asked for again and
+   * again, and the evidence once more at the end; completes then.
+   */
   followEvidence(fitId: string): Observable<EvidenceReply> {
-    return timer(0, lookForEvidenceEveryMs).pipe(
-      exhaustMap(() => this.readEvidence(fitId)),
-      takeWhile(isUnderWay, true),
+    return this.readEvidence(fitId).pipe(
+      switchMap((reply) =>
+        isUnderWay(reply) ? concat(of(reply), this.#followState(fitId, reply)) : of(reply),
+      ),
+    );
+  }
+
+  #followState(fitId: string, reply: EvidenceReply): Observable<EvidenceReply> {
+    const isStill = (now: EvidenceStateReply): boolean =>
+      now.state === reply.state && isUnderWay(now);
+    return timer(lookEveryMs, lookEveryMs).pipe(
+      exhaustMap(() =>
+        this.#client.call(apiRoutes.readEvidenceState, EvidenceStateReply, { path: { fitId } }),
+      ),
+      takeWhile(isStill, true),
+      switchMap((now) => {
+        if (!isStill(now)) return this.followEvidence(fitId);
+        return of(reply.state === 'ready' ? { ...reply, bootstrap: now.bootstrap } : reply);
+      }),
     );
   }
 
@@ -72,7 +89,7 @@ export class FitsApi {
   }
 }
 
-function isUnderWay(reply: EvidenceReply): boolean {
+function isUnderWay(reply: EvidenceReply | EvidenceStateReply): boolean {
   if (reply.state !== 'ready') return reply.state === 'computing';
   return reply.bootstrap?.state === 'queued' || reply.bootstrap?.state === 'running';
 }

@@ -2,7 +2,7 @@ import { provideHttpClient } from '@angular/common/http';
 import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
 import { TestBed } from '@angular/core/testing';
 import { provideRouter } from '@angular/router';
-import type { Bootstrap, EvidenceReply } from '@contract';
+import type { Bootstrap, EvidenceReply, EvidenceStateReply } from '@contract';
 import { EvidenceStore } from './evidence-store';
 import { exampleEvidence } from './testing/example-evidence';
 
@@ -41,9 +41,14 @@ describe('the store of a fit’s evidence', () => {
     for (let turn = 0; turn < 5; turn += 1) await Promise.resolve();
   }
 
-  async function answer(fitId: string, reply: EvidenceReply, afterMs = 0): Promise<void> {
-    await pass(afterMs);
+  async function answer(fitId: string, reply: EvidenceReply): Promise<void> {
+    await pass(0);
     http.expectOne(`/api/fits/${fitId}/evidence`).flush(reply);
+  }
+
+  async function answerState(fitId: string, reply: EvidenceStateReply): Promise<void> {
+    await pass(400);
+    http.expectOne(`/api/fits/${fitId}/evidence/state`).flush(reply);
   }
 
   it('is idle, then loading, then ready, and asks no more', async () => {
@@ -55,12 +60,16 @@ describe('the store of a fit’s evidence', () => {
     await pass(5000);
   });
 
-  it('asks again while the evidence is being computed', async () => {
+  it('asks for the state alone while the evidence is being computed', async () => {
     store.show('a');
     await answer('a', { state: 'computing' });
     expect(store.view().kind).toBe('computing');
-    await answer('a', ready(), 1000);
+    await answerState('a', { state: 'computing', bootstrap: null });
+    expect(store.view().kind).toBe('computing');
+    await answerState('a', { state: 'ready', bootstrap: null });
+    await answer('a', ready());
     expect(store.view().kind).toBe('ready');
+    await pass(5000);
   });
 
   it('says why there is none', async () => {
@@ -107,7 +116,13 @@ describe('the store of a fit’s evidence', () => {
     };
     await answer('a', ready(running));
     expect(store.view()).toEqual({ kind: 'ready', evidence: exampleEvidence, bootstrap: running });
-    await answer('a', ready({ ...started, state: 'done' }), 1000);
+    const further: Bootstrap = { ...running, progress: { done: 8000, total: 9999 } };
+    await answerState('a', { state: 'ready', bootstrap: further });
+    expect(store.view()).toEqual({ kind: 'ready', evidence: exampleEvidence, bootstrap: further });
+    const ended: Bootstrap = { ...started, state: 'done' };
+    await answerState('a', { state: 'ready', bootstrap: ended });
+    await answer('a', ready(ended));
+    expect(store.view()).toEqual({ kind: 'ready', evidence: exampleEvidence, bootstrap: ended });
     await pass(5000);
     expect(store.problem()).toBeNull();
   });
