@@ -76,7 +76,7 @@ const top = 28;
 
 /** `+120`, `−80`, and the same digits as the figures it is the difference of; what rounds to zero has no sign. */
 export function changeText(change: number, formats: FigureFormats): string {
-  const text = formats.value(change);
+  const text = formats.value(change).replace('%', 'pp');
   if (!/[1-9]/.test(text)) return formats.value(0);
   return change > 0 ? `+${text}` : text;
 }

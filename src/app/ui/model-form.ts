@@ -13,6 +13,15 @@ export const logUnit = 'natural logs';
 /** What a difference of logs is shown in. */
 const shareUnit = 'percent';
 
+/** Beyond this difference of logs, a factor of a thousand million million, a percentage says nothing. */
+const largestLog = Math.log(1e15);
+const beyondReason = 'Out of logs this interval leaves what a percentage can say.';
+
+/** exp(d) − 1; null where that says nothing. */
+function shareOf(difference: number | null): number | null {
+  return difference === null || difference > largestLog ? null : Math.expm1(difference);
+}
+
 /** How a level is written: money, or a log that no unit switch changes. Fits of engines before 2 have no form: levels. */
 export function levelKind(form: ModelForm | undefined): FigureKind {
   return form === 'log' ? 'plain' : 'money';
@@ -27,11 +36,13 @@ export function differenceKind(form: ModelForm | undefined): FigureKind {
 export function asDifference(value: Bounded, form: ModelForm | undefined): Bounded {
   if (form !== 'log') return value;
   const { estimate, low, high, intervalReason } = value;
+  const ends = { low: shareOf(low), high: shareOf(high) };
+  const isBeyond = (low !== null && ends.low === null) || (high !== null && ends.high === null);
+  const reason = intervalReason ?? (isBeyond ? beyondReason : undefined);
   return {
-    estimate: Math.expm1(estimate),
-    low: low === null ? null : Math.expm1(low),
-    high: high === null ? null : Math.expm1(high),
-    ...(intervalReason === undefined ? {} : { intervalReason }),
+    estimate: Math.expm1(Math.min(estimate, largestLog)),
+    ...(isBeyond ? { low: null, high: null } : ends),
+    ...(reason === undefined ? {} : { intervalReason: reason }),
   };
 }
 
@@ -43,7 +54,7 @@ export function asShownGaps<T extends { readonly gap: number | null }>(
   if (years === null || form !== 'log') return years;
   return years.map((year) => ({
     ...year,
-    gap: year.gap === null ? null : Math.expm1(year.gap),
+    gap: shareOf(year.gap),
   }));
 }
 

@@ -14,10 +14,15 @@ export function shortHash(hash: string | null): string {
 }
 
 /** `capex, book equity and staff`. */
-export function listed(words: readonly string[]): string {
+export function listed(words: readonly string[], conjunction: 'and' | 'or' = 'and'): string {
   return words.length < 2
     ? words.join('')
-    : `${words.slice(0, -1).join(', ')} and ${words[words.length - 1]}`;
+    : `${words.slice(0, -1).join(', ')} ${conjunction} ${words[words.length - 1]}`;
+}
+
+/** With its full stop, once. */
+export function sentence(text: string): string {
+  return text.endsWith('.') ? text : `${text}.`;
 }
 
 /** What is said of regressors that the model reads a year late. */

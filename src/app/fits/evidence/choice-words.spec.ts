@@ -49,6 +49,15 @@ describe('the choices behind a fit in words', () => {
       );
     });
 
+    it('claims nothing of slopes without any interval, and sees what lies beyond an open one', () => {
+      const without = judgedResult.slopes.map((slope) => ({ ...slope, low: null, high: null }));
+      expect(trendMeaning(exampleEvidence, { ...judgedResult, slopes: without })).toMatch(
+        /^The slopes of this fit have no interval/,
+      );
+      const open = judgedResult.slopes.map((slope) => ({ ...slope, low: 1e6, high: null }));
+      expect(trendMeaning(exampleEvidence, { ...judgedResult, slopes: open })).toContain('outside');
+    });
+
     it('says why there are no first differences', () => {
       const estimators = exampleEvidence.estimators.map((one) =>
         one.code === 'first-differences'

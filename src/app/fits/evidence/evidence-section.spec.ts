@@ -131,7 +131,7 @@ describe('the evidence on the Fit page', () => {
     expect(titles).toEqual([
       'Against capex companies share a slope of 2.01 (1.20 to 2.82), one line for all has 2.00 (1.00 to 3.00)',
       'Standing 1,810 (1,170 to 2,450), place 1 to 2 of 3; without any one company from 1,500 to 2,120',
-      'Standing 1,810 (1,170 to 2,450), place 1 to 2 of 3; without any one year from 1,700 to 1,950',
+      'Standing 1,810 (1,170 to 2,450), place 1 to 2 of 3; without any one year from 1,700 to 1,950 (2 of 3 known)',
       'Slope on capex 2.01 (1.20 to 2.82), in changes from year to year 1.60 (1.00 to 2.20)',
       'Slope on capex 2.01 (1.20 to 2.82): the interval excludes zero in 2 of 3 ways',
       'Standing above zero in 3 of 3 models that give one, from 1,500 to 1,810',

@@ -117,6 +117,27 @@ describe('the evidence in words', () => {
       ).toBe('Without Kesdrin or Sarvane the standing lies on the other side of zero.');
     });
 
+    it('names companies with blanks and “and” in their names one by one, and counts what is known', () => {
+      const left = ['Nord Valve', 'Pump and Seal'].map((name) => ({ name, estimate: -1 }));
+      const words = leftOutConsequence(judgedResult, {
+        choice: 'standing',
+        left,
+        many: 'companies',
+      });
+      expect(words).toContain('Without Nord Valve or Pump and Seal the standing');
+      const gap = { name: 'Ambrevik', estimate: null, reason: 'none' };
+      const known = { name: 'Kesdrin', estimate: judgedResult.standing?.estimate ?? NaN };
+      expect(
+        leftOutConsequence(judgedResult, {
+          choice: 'standing',
+          left: [known, gap],
+          many: 'companies',
+        }),
+      ).toBe(
+        'For 1 of the 2 companies a figure without it is known: there the standing stays inside its interval.',
+      );
+    });
+
     it('counts those that turn it round where they are many', () => {
       const left = Array.from({ length: 7 }, (_, place) => ({ name: `C${place}`, estimate: -1 }));
       expect(leftOutConsequence(judgedResult, { choice: 'standing', left, many: 'years' })).toBe(

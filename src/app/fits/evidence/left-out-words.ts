@@ -9,11 +9,14 @@ import { leaving, mostMoving, rangeOf, turning } from './left-out';
 
 const mostNamed = 4;
 
-/** `A, B and C`, or how many where they are many. */
+/** `A, B or C`, or how many where they are many. */
 function named(left: readonly LeftOut[], many: string): string {
   return left.length > mostNamed
     ? `any one of ${left.length} ${many}`
-    : listed(left.map(({ name }) => name)).replace(/ and (?=[^ ]+$)/, ' or ');
+    : listed(
+        left.map(({ name }) => name),
+        'or',
+      );
 }
 
 /** Title of a picture of what is left out: the figure with all, then how far it goes without one. */
@@ -32,7 +35,9 @@ export function leftOutTitle(
   const range = rangeOf(left);
   if (range === null) return head;
   const [low, high] = range.map((value) => numbers.headline(value, kind));
-  return `${head}; without any one ${one} from ${low} to ${high}`;
+  const known = left.filter(({ estimate }) => estimate !== null).length;
+  const share = known === left.length ? '' : ` (${known} of ${left.length} known)`;
+  return `${head}; without any one ${one} from ${low} to ${high}${share}`;
 }
 
 interface LeftOutFigure {
@@ -77,6 +82,10 @@ export function leftOutConsequence(
   const gone = leaving(left, full);
   if (gone.length > 0)
     return `Without ${named(gone, many)} the ${word} leaves the interval that it has with all.`;
-  const stay = full.low === null ? 'on its side of zero' : 'inside its interval';
-  return `Whichever of the ${many} is left out, the ${word} stays ${stay}.`;
+  const hasInterval = full.low !== null || full.high !== null;
+  const stay = hasInterval ? 'inside its interval' : 'on its side of zero';
+  const known = left.filter(({ estimate }) => estimate !== null).length;
+  return known === left.length
+    ? `Whichever of the ${many} is left out, the ${word} stays ${stay}.`
+    : `For ${known} of the ${left.length} ${many} a figure without it is known: there the ${word} stays ${stay}.`;
 }

@@ -69,11 +69,13 @@ export function turning(left: readonly LeftOut[], full: IntervalFigure): readonl
   );
 }
 
-/** Those without which the figure leaves the interval that it has with all. */
+/** Those without which the figure leaves the interval that it has with all; of an open one, its end. */
 export function leaving(left: readonly LeftOut[], full: IntervalFigure): readonly LeftOut[] {
   const { low, high } = full;
-  if (low === null || high === null) return [];
-  return left.filter(({ estimate }) => estimate !== null && (estimate < low || estimate > high));
+  return left.filter(
+    ({ estimate }) =>
+      estimate !== null && ((low !== null && estimate < low) || (high !== null && estimate > high)),
+  );
 }
 
 /** The least and the greatest of what comes out; null where nothing does. */

@@ -31,7 +31,10 @@ function found(
   const isComparable = alternative.form === specification.form;
   const { standing, standingUnit, standingReason, reason = '' } = alternative;
   if (choice !== 'standing') {
-    const slope = alternative.slopes?.find(({ name }) => name === slopes[choice].name) ?? null;
+    // This fit's own slope knows which ends a bootstrap interval does not have.
+    const slope = alternative.isThisFit
+      ? slopes[choice]
+      : (alternative.slopes?.find(({ name }) => name === slopes[choice].name) ?? null);
     return { figure: slope, kind: 'plain', isComparable, reason };
   }
   const kind = standingUnit === 'percent' ? 'percent' : 'money';
@@ -143,8 +146,12 @@ export function modelsMeaning(
   const turned = figures.filter(
     ({ figure }) => Math.sign(figure.estimate) * Math.sign(own.estimate) < 0,
   );
-  const sure = figures.filter(({ figure: { low, high } }) => (low ?? -1) > 0 || (high ?? 1) < 0);
-  const counts = `In ${sure.length === 0 ? 'none' : sure.length} of ${counted(figures.length, 'model')} the interval excludes zero.`;
+  const judged = figures.filter(({ figure: { low, high } }) => low !== null || high !== null);
+  const sure = judged.filter(({ figure: { low, high } }) => (low ?? -1) > 0 || (high ?? 1) < 0);
+  const counts =
+    judged.length === 0
+      ? 'None of them has an interval.'
+      : `In ${sure.length === 0 ? 'none' : sure.length} of ${counted(judged.length, 'model')} the interval excludes zero.`;
   return turned.length === 0
     ? `The ${word} lies on the same side of zero in every model that gives one. ${counts}`
     : `The choice of model matters: the ${word} lies on the other side of zero under ${listed(turned.map(({ code }) => `“${names[code].toLowerCase()}”`))}. ${counts}`;

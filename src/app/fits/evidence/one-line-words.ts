@@ -1,6 +1,7 @@
 import type { Evidence, FitResult } from '@contract';
 import type { IntervalFigure } from '@figures';
 import { type NumberFormat, headlineDigits } from '../../ui/number-format';
+import { sentence } from '../../ui/phrases';
 import { regressorWord } from '../fit-words';
 
 /** Whether one line could serve all companies, and what each way explains. */
@@ -20,7 +21,7 @@ export function oneLineMeaning(
   const shares = `One pooled line explains ${share(pooled.rSquared)} of the variation in ${outcome}, ${levels} with common slopes ${share(goodness.rSquared)}.`;
   const { pValue, pValueReason } = poolability;
   if (pValue === null)
-    return `Not decided: ${pValueReason ?? 'the test has no p value here'}. ${shares}`;
+    return `Not decided: ${sentence(pValueReason ?? 'the test has no p value here')} ${shares}`;
   return pValue < 1 - specification.confidence
     ? `No: company levels differ, so each company keeps its own. ${shares}`
     : `The data do not rule it out: company levels are not shown to differ. ${shares}`;

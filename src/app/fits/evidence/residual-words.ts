@@ -1,6 +1,6 @@
 import type { FitResult, ResidualPoint, ResidualSummary } from '@contract';
 import { type NumberFormat } from '../../ui/number-format';
-import { levelKind } from '../../ui/model-form';
+import { asDifference, levelKind } from '../../ui/model-form';
 import { counted } from '../../ui/phrases';
 
 /** Externally studentised; a row beyond it is far outside what its company's other rows lead to expect. */
@@ -20,7 +20,7 @@ function missOf(
 ): string {
   const side = residual < 0 ? 'below' : 'above';
   if (specification.form === 'log')
-    return `${numbers.headline(Math.abs(Math.expm1(residual)), 'percent')} ${side}`;
+    return `${numbers.headline(Math.abs(asDifference({ estimate: residual, low: null, high: null }, 'log').estimate), 'percent')} ${side}`;
   return `${numbers.headline(Math.abs(residual))} ${numbers.unitLabel()} ${side}`;
 }
 

@@ -58,6 +58,8 @@ export function trendMeaning(evidence: Trends, { slopes, warnings }: Fitted): st
       ? []
       : [regressorWord(slope.name, index)];
   });
+  if (slopes.every(({ low, high }) => low === null && high === null))
+    return 'The slopes of this fit have no interval to hold changes from year to year against: compare both figures.';
   const persist = warnings.some(({ code }) => code === 'persistent-errors');
   if (doubtful.length === 0) {
     const head =
@@ -74,5 +76,5 @@ export function trendMeaning(evidence: Trends, { slopes, warnings }: Fitted): st
 }
 
 function isInside(value: number, { low, high }: FitResult['slopes'][number]): boolean {
-  return low === null || high === null || (value >= low && value <= high);
+  return (low === null || value >= low) && (high === null || value <= high);
 }
