@@ -14,10 +14,17 @@ const noteWords: Partial<Readonly<Record<CovarianceSummary['code'], string>>> = 
   'two-way': 'negative variance set to 0',
 };
 
-/** `default, of this fit`: what stands behind a name. */
-export function covarianceNote({ code, isDefault, isChosen, notes }: CovarianceSummary): string {
+/** `default, of this fit`, or `seed 1`: what stands behind a name. */
+export function covarianceNote({
+  code,
+  isDefault,
+  isChosen,
+  notes,
+  seed,
+}: CovarianceSummary): string {
   const noted = notes.length === 0 ? '' : (noteWords[code] ?? 'with a remark below');
-  return [isDefault ? 'default' : '', isChosen ? 'of this fit' : '', noted]
+  const drawn = seed === undefined ? '' : `seed ${seed}`;
+  return [isDefault ? 'default' : '', isChosen ? 'of this fit' : '', drawn, noted]
     .filter((part) => part !== '')
     .join(', ');
 }
