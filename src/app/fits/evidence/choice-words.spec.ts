@@ -76,14 +76,6 @@ describe('the choices behind a fit in words', () => {
   });
 
   describe('of intervals', () => {
-    it('names the seed of draws that were run', () => {
-      const covariances = exampleEvidence.covariances.map((one) =>
-        one.code === 'wild' ? { ...one, seed: 7, draws: 9999 } : one,
-      );
-      const rows = covarianceRows({ covariances }, judgedResult, 0);
-      expect(rows.map(({ note }) => note)).toContain('seed 7');
-    });
-
     it('marks the default and says what has not been run', () => {
       const rows = covarianceRows(exampleEvidence, judgedResult, 0);
       expect(rows.map(({ name, note }) => [name, note])).toEqual([

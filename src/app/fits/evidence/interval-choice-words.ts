@@ -14,17 +14,10 @@ const noteWords: Partial<Readonly<Record<CovarianceSummary['code'], string>>> = 
   'two-way': 'negative variance set to 0',
 };
 
-/** `default, of this fit`, or `seed 1`: what stands behind a name. */
-export function covarianceNote({
-  code,
-  isDefault,
-  isChosen,
-  notes,
-  seed,
-}: CovarianceSummary): string {
+/** `default, of this fit`: what stands behind a name. */
+export function covarianceNote({ code, isDefault, isChosen, notes }: CovarianceSummary): string {
   const noted = notes.length === 0 ? '' : (noteWords[code] ?? 'with a remark below');
-  const drawn = seed === undefined ? '' : `seed ${seed}`;
-  return [isDefault ? 'default' : '', isChosen ? 'of this fit' : '', drawn, noted]
+  return [isDefault ? 'default' : '', isChosen ? 'of this fit' : '', noted]
     .filter((part) => part !== '')
     .join(', ');
 }
