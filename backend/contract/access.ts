@@ -42,6 +42,7 @@ export const apiRoutes = {
   readImport: { method: 'GET', path: '/api/imports/:importId', allow: ['analyst'] },
   checkImport: { method: 'PUT', path: '/api/imports/:importId/mapping', allow: ['analyst'] },
   commitImport: { method: 'POST', path: '/api/imports/:importId/commit', allow: ['analyst'] },
+  cancelCommit: { method: 'DELETE', path: '/api/imports/:importId/commit', allow: ['analyst'] },
   discardImport: { method: 'DELETE', path: '/api/imports/:importId', allow: ['analyst'] },
   listPanelVersions: { method: 'GET', path: '/api/panel-versions', allow: model },
   readPanelVersion: { method: 'GET', path: '/api/panel-versions/:panelVersionId', allow: model },
@@ -49,6 +50,47 @@ export const apiRoutes = {
     method: 'GET',
     path: '/api/panel-versions/:panelVersionId/companies',
     allow: model,
+  },
+  readPanelDifferences: {
+    method: 'GET',
+    path: '/api/panel-versions/:panelVersionId/differences/:otherId',
+    allow: model,
+  },
+  readCellHistory: {
+    method: 'GET',
+    path: '/api/panel-versions/:panelVersionId/cell-history',
+    allow: model,
+  },
+  saveCorrections: {
+    method: 'POST',
+    path: '/api/panel-versions/:panelVersionId/corrections',
+    allow: ['analyst'],
+  },
+  restorePanelVersion: {
+    method: 'POST',
+    path: '/api/panel-versions/:panelVersionId/restore',
+    allow: ['analyst'],
+  },
+  exportPanelVersion: {
+    method: 'GET',
+    path: '/api/panel-versions/:panelVersionId/export/:format',
+    allow: model,
+  },
+  downloadTemplate: { method: 'GET', path: '/api/panel-template/:format', allow: ['analyst'] },
+  listFlagDismissals: {
+    method: 'GET',
+    path: '/api/panels/:panelId/flag-dismissals',
+    allow: model,
+  },
+  dismissFlag: {
+    method: 'POST',
+    path: '/api/panels/:panelId/flag-dismissals',
+    allow: ['analyst'],
+  },
+  takeBackDismissal: {
+    method: 'DELETE',
+    path: '/api/panels/:panelId/flag-dismissals/:dismissalId',
+    allow: ['analyst'],
   },
   downloadFile: { method: 'GET', path: '/api/files/:fileId', allow: model },
 

@@ -7,63 +7,27 @@ export type ColumnRole = z.infer<typeof ColumnRole>;
 export const Unit = z.enum(['units', 'thousands', 'millions', 'billions']);
 export type Unit = z.infer<typeof Unit>;
 
-/** Which column of the file is what. Header texts, exactly as they stand in the file. */
-export const ImportMapping = z.strictObject({
-  panelName: z.string().trim().min(1, 'expected a name for the panel').max(120),
-  company: z.string().min(1),
-  year: z.string().min(1),
-  marketValue: z.string().min(1),
-  capex: z.string().min(1),
-  bookEquity: z.string().min(1),
-  /** Further numeric columns to bring in. */
-  others: z.array(z.string().min(1)).max(50),
-  /** ISO 4217. */
-  currency: z.string().regex(/^[A-Z]{3}$/, 'expected a currency code of three letters, as EUR'),
-  unit: Unit,
+/** One cell, or one row where `column` is null, that differs between two versions of a panel. */
+export const CellDifference = z.object({
+  company: z.string(),
+  year: z.number().int(),
+  kind: z.enum(['added-row', 'removed-row', 'changed-cell']),
+  /** Header of the column; null for a row. */
+  column: z.string().nullable(),
+  before: z.number().nullable(),
+  after: z.number().nullable(),
 });
-export type ImportMapping = z.infer<typeof ImportMapping>;
+export type CellDifference = z.infer<typeof CellDifference>;
 
-/** One thing the check found, at one place of the file. */
-export const ImportFinding = z.object({
-  /** Line of the file, the header being line 1. */
-  row: z.number().int(),
-  column: z.string(),
-  found: z.string(),
-  code: z.enum(['missing', 'duplicate', 'not-a-number', 'year', 'no-company', 'spelling']),
-  detail: z.string(),
-  /** Whether the panel cannot be brought in while this stands. */
-  isBlocking: z.boolean(),
+/** What changed from one panel version to another. */
+export const PanelDifferencesReply = z.object({
+  addedRows: z.number().int(),
+  removedRows: z.number().int(),
+  changedCells: z.number().int(),
+  /** At most 5,000 are listed; the counts are over all. */
+  listed: z.array(CellDifference),
 });
-export type ImportFinding = z.infer<typeof ImportFinding>;
-
-export const ImportReply = z.object({
-  id: z.uuid(),
-  fileName: z.string(),
-  byteSize: z.number().int(),
-  state: z.enum(['mapped', 'checked', 'committed']),
-  /** The file's header and its first rows, as text. */
-  headers: z.array(z.string()),
-  firstRows: z.array(z.object({ row: z.number().int(), cells: z.array(z.string()) })),
-  rowCount: z.number().int(),
-  /** The likely mapping before a check; the analyst's own after it. */
-  mapping: ImportMapping.partial(),
-  check: z
-    .object({
-      companies: z.number().int(),
-      years: z.number().int(),
-      firstYear: z.number().int().nullable(),
-      lastYear: z.number().int().nullable(),
-      rows: z.number().int(),
-      completeRows: z.number().int(),
-      /** At most 500 are listed; the counts are over all. */
-      findings: z.array(ImportFinding),
-      findingCount: z.number().int(),
-      blockingCount: z.number().int(),
-    })
-    .nullable(),
-  panelVersionId: z.uuid().nullable(),
-});
-export type ImportReply = z.infer<typeof ImportReply>;
+export type PanelDifferencesReply = z.infer<typeof PanelDifferencesReply>;
 
 export const PanelColumn = z.object({
   /** The header in the file. */
@@ -75,6 +39,9 @@ export type PanelColumn = z.infer<typeof PanelColumn>;
 export const PanelVersionSummary = z.object({
   id: z.uuid(),
   panelId: z.uuid(),
+  parentId: z.uuid().nullable(),
+  /** What made it: a file, a set of corrections, or an older version put back. */
+  origin: z.enum(['import', 'correction', 'restore']),
   panelName: z.string(),
   number: z.number().int(),
   currency: z.string(),
@@ -127,11 +94,9 @@ export const PanelCompaniesReply = z.object({
       marketValue: z.number().nullable(),
       capex: z.number().nullable(),
       bookEquity: z.number().nullable(),
+      /** The text columns that describe it, by header. */
+      attributes: z.record(z.string(), z.string()),
     }),
   ),
 });
 export type PanelCompaniesReply = z.infer<typeof PanelCompaniesReply>;
-
-/** Makes a checked import a panel version. */
-export const CommitImport = z.strictObject({ note: z.string().trim().max(2000) });
-export type CommitImport = z.infer<typeof CommitImport>;

@@ -1,0 +1,85 @@
+import * as z from 'zod';
+
+const company = z.string().trim().min(1).max(200);
+const year = z.number().int().min(1000).max(9999);
+
+/** One cell of the panel as it should be. A filled-in or changed value carries why and from where. */
+export const CellCorrection = z.strictObject({
+  company,
+  year,
+  /** Position among the version's columns. */
+  column: z.number().int().min(0).max(199),
+  value: z.number().nullable(),
+  reason: z.string().trim().min(1, 'expected why the value changes').max(500),
+  /** Where the value was found, as a report and its page. */
+  source: z.string().trim().max(500),
+});
+export type CellCorrection = z.infer<typeof CellCorrection>;
+
+const RowKey = z.strictObject({ company, year });
+
+/** A set of corrections of one panel version; it becomes the next version, all of it or none. */
+export const SaveCorrections = z.strictObject({
+  note: z.string().trim().min(1, 'expected a note').max(2000),
+  cells: z.array(CellCorrection).max(50_000),
+  addedRows: z.array(RowKey).max(5000),
+  removedRows: z.array(RowKey).max(5000),
+});
+export type SaveCorrections = z.infer<typeof SaveCorrections>;
+
+/** Makes the next version hold what this older one holds. */
+export const RestoreVersion = z.strictObject({ note: z.string().trim().min(1).max(2000) });
+export type RestoreVersion = z.infer<typeof RestoreVersion>;
+
+/** One cell through all versions of its panel, oldest first; only versions in which it differs from the one before. */
+export const CellHistoryReply = z.object({
+  entries: z.array(
+    z.object({
+      panelVersionId: z.uuid(),
+      number: z.number().int(),
+      value: z.number().nullable(),
+      /** Whether the version has the row at all. */
+      hasRow: z.boolean(),
+      at: z.iso.datetime(),
+      by: z.string(),
+      note: z.string(),
+      /** Of a correction; null of an import. */
+      reason: z.string().nullable(),
+      source: z.string().nullable(),
+    }),
+  ),
+});
+export type CellHistoryReply = z.infer<typeof CellHistoryReply>;
+
+export const FlagCode = z.enum([
+  'missing',
+  'jump',
+  'unit-slip',
+  'sign',
+  'stale-copy',
+  'peer-outlier',
+  'year-gap',
+]);
+export type FlagCode = z.infer<typeof FlagCode>;
+
+/** A flag that somebody looked at and found to be right as it is; it holds while the cell keeps its value. */
+export const DismissFlag = z.strictObject({
+  company,
+  year,
+  column: z.number().int().min(0).max(199),
+  code: FlagCode,
+  /** The cell's value when it was looked at. */
+  value: z.number().nullable(),
+  reason: z.string().trim().min(1, 'expected why the value is right').max(500),
+});
+export type DismissFlag = z.infer<typeof DismissFlag>;
+
+export const FlagDismissal = DismissFlag.extend({
+  id: z.uuid(),
+  at: z.iso.datetime(),
+  by: z.string(),
+});
+export type FlagDismissal = z.infer<typeof FlagDismissal>;
+
+export const FlagDismissalsReply = z.object({ dismissals: z.array(FlagDismissal) });
+export type FlagDismissalsReply = z.infer<typeof FlagDismissalsReply>;
