@@ -1,84 +1,17 @@
-import { CsvError, type Info, parse } from 'csv-parse';
-import { Readable } from 'node:stream';
-import { pipeline } from 'node:stream/promises';
-import { decodeText } from './decode-text';
-import { sniffDelimiter } from './sniff-delimiter';
-import { type Table, type TableLimits, tableLimits } from './table';
-import { TableBuilder } from './table-builder';
-import { TableError } from './table-error';
-
-/** Characters of the file's beginning that the delimiter is read from. */
-const sniffedLength = 65_536;
-
-/** A record longer than this is a quote that was never closed. */
-const longestRecord = 4_194_304;
+import { readCsv } from './read-csv';
+import type { Table, TableLimits } from './table';
+import { tableOfGrid } from './table-of-grid';
 
 /**
- * Reads a CSV file: comma, semicolon or tab, quoted fields, UTF-8 or UTF-16, as a stream.
+ * Reads a CSV file whose first line that is not blank holds the headers.
  *
  * @param source  the file's bytes, or a stream of them.
  * @throws {TableError} 'csv-invalid' with the line, or 'table-too-large' as soon as a limit is passed.
  */
 export async function readTable(
   source: Uint8Array | AsyncIterable<Uint8Array>,
-  limits: TableLimits = tableLimits,
+  limits?: TableLimits,
 ): Promise<Table> {
-  const text = decodeText(source instanceof Uint8Array ? [source] : source);
-  const { head, isWhole } = await readHead(text);
-  const delimiter = sniffDelimiter(head);
-  const parser = parse({
-    delimiter,
-    info: true,
-    relax_column_count: true,
-    record_delimiter: '\n',
-    max_record_size: longestRecord,
-  });
-  const builder = new TableBuilder(limits);
-  const chunks = Readable.from(isWhole ? [head] : beginningWith(head, text));
-  // A failure of the source destroys the parser, and so reaches the loop below.
-  const finished = pipeline(chunks, parser).catch(() => undefined);
-  try {
-    for await (const { record, info } of parser as AsyncIterable<ParsedRecord>) {
-      builder.add(record, info.lines);
-    }
-  } catch (error) {
-    throw asTableError(error);
-  } finally {
-    await finished;
-  }
-  return builder.finish(delimiter);
+  const { grid, delimiter } = await readCsv(source, limits);
+  return { ...tableOfGrid(grid, 0), delimiter };
 }
-
-interface ParsedRecord {
-  readonly record: string[];
-  readonly info: Info;
-}
-
-async function readHead(text: AsyncGenerator<string>): Promise<{ head: string; isWhole: boolean }> {
-  let head = '';
-  while (head.length < sniffedLength) {
-    const next = await text.next();
-    if (next.done === true) return { head, isWhole: true };
-    head += next.value;
-  }
-  return { head, isWhole: false };
-}
-
-async function* beginningWith(head: string, rest: AsyncGenerator<string>): AsyncGenerator<string> {
-  yield head;
-  yield* rest;
-}
-
-function asTableError(error: unknown): unknown {
-  if (!(error instanceof CsvError)) return error;
-  const fault = csvFaults.get(error.code) ?? 'text that is none at line';
-  const line = Number(error['lines']);
-  return new TableError('csv-invalid', `expected a table; found ${fault} ${line}`, { row: line });
-}
-
-const csvFaults = new Map<string, string>([
-  ['CSV_QUOTE_NOT_CLOSED', 'a quote that opens a field and is never closed, up to line'],
-  ['CSV_MAX_RECORD_SIZE', 'a row too long to be one, or a quote never closed, before line'],
-  ['INVALID_OPENING_QUOTE', 'a quote in the middle of a field on line'],
-  ['CSV_INVALID_CLOSING_QUOTE', 'text behind the closing quote of a field on line'],
-]);
