@@ -180,7 +180,7 @@ describe('two workspaces', () => {
     try {
       const tables = await app.query<{ relname: string }>(`select relname from pg_class
         where relrowsecurity and relkind = 'r' and relnamespace = 'public'::regnamespace`);
-      expect(tables.rows.length).toBeGreaterThan(15);
+      expect(tables.rows.length).toBeGreaterThan(18);
       for (const { relname } of tables.rows) {
         const none = await app.query(`select workspace_id from ${relname}`);
         expect(none.rowCount).withContext(`${relname} without a workspace`).toBe(0);

@@ -3,6 +3,7 @@ import { peopleAndWorkspaces } from './0001-people-and-workspaces';
 import { panelsAndPeers } from './0002-panels-and-peers';
 import { fitsScenariosEditions } from './0003-fits-scenarios-editions';
 import { evidenceAndBootstraps } from './0004-evidence-and-bootstraps';
+import { panelDesk } from './0005-panel-desk';
 
 /** In order, append-only: a merged migration is never edited. */
 const steps: Readonly<Record<string, (db: Kysely<unknown>, appRole: string) => Promise<void>>> = {
@@ -10,6 +11,7 @@ const steps: Readonly<Record<string, (db: Kysely<unknown>, appRole: string) => P
   '0002-panels-and-peers': panelsAndPeers,
   '0003-fits-scenarios-editions': fitsScenariosEditions,
   '0004-evidence-and-bootstraps': evidenceAndBootstraps,
+  '0005-panel-desk': panelDesk,
 };
 
 export const latestMigration = Object.keys(steps).at(-1) ?? '';

@@ -1,6 +1,6 @@
 import { type Kysely, sql } from 'kysely';
 import type { Database } from '../schema/database';
-import type { StoredColumn } from '../schema/panel-tables';
+import type { PanelOrigin, StoredColumn } from '../schema/panel-tables';
 
 export interface PanelVersionRow {
   readonly id: string;
@@ -8,6 +8,7 @@ export interface PanelVersionRow {
   readonly panelName: string;
   readonly number: number;
   readonly parentId: string | null;
+  readonly origin: PanelOrigin;
   readonly currency: string;
   readonly unit: 'units' | 'thousands' | 'millions' | 'billions';
   readonly companyHeader: string;
@@ -32,6 +33,14 @@ export interface PanelRows {
   readonly year: readonly number[];
   readonly fileRow: readonly number[];
   readonly cells: readonly (readonly (number | null)[])[];
+  /** Currency of each row in the file; null where the file names none by row. */
+  readonly currency: readonly (string | null)[];
+}
+
+/** The texts that describe a company, by header of the file. */
+export interface CompanyAttributes {
+  readonly company: string;
+  readonly attributes: Readonly<Record<string, string>>;
 }
 
 /** Rows a statement: large enough to be quick, small enough to keep the statement's text in bounds. */
@@ -62,6 +71,9 @@ export class PanelsRepository {
     readonly number: number;
     readonly parentId: string | null;
     readonly fileId: string;
+    readonly origin: PanelOrigin;
+    /** How the file became the panel; null where no file was read for this version. */
+    readonly recipe: object | null;
     readonly currency: string;
     readonly unit: 'units' | 'thousands' | 'millions' | 'billions';
     readonly companyHeader: string;
@@ -79,6 +91,7 @@ export class PanelsRepository {
       .values({
         ...version,
         columns: JSON.stringify(version.columns),
+        recipe: version.recipe === null ? null : JSON.stringify(version.recipe),
         workspaceId: this.workspaceId,
       })
       .execute();
@@ -91,15 +104,17 @@ export class PanelsRepository {
       const cells = rows.cells
         .slice(start, end)
         .map((row) => `{${row.map((cell) => (cell === null ? 'NULL' : String(cell))).join(',')}}`);
-      await sql`insert into panel_row (workspace_id, panel_version_id, company, year, file_row, cells)
+      await sql`insert into panel_row (workspace_id, panel_version_id, company, year, file_row, cells,
+          currency)
         select ${this.workspaceId}::uuid, ${panelVersionId}::uuid, company, year, file_row,
-          cells::double precision[]
+          cells::double precision[], currency
         from unnest(
           ${rows.company.slice(start, end)}::text[],
           ${rows.year.slice(start, end)}::integer[],
           ${rows.fileRow.slice(start, end)}::integer[],
-          ${cells}::text[]
-        ) as line(company, year, file_row, cells)`.execute(this.db);
+          ${cells}::text[],
+          ${rows.currency.slice(start, end)}::text[]
+        ) as line(company, year, file_row, cells, currency)`.execute(this.db);
     }
   }
 
@@ -109,6 +124,41 @@ export class PanelsRepository {
 
   listVersions(): Promise<PanelVersionRow[]> {
     return this.versions().orderBy('panelVersion.createdAt', 'desc').execute();
+  }
+
+  /** Companies without any describing text need no row. */
+  async insertCompanies(
+    panelVersionId: string,
+    companies: readonly CompanyAttributes[],
+  ): Promise<void> {
+    await sql`insert into panel_company (workspace_id, panel_version_id, company, attributes)
+      select ${this.workspaceId}::uuid, ${panelVersionId}::uuid, company, attributes::jsonb
+      from unnest(
+        ${companies.map(({ company }) => company)}::text[],
+        ${companies.map(({ attributes }) => JSON.stringify(attributes))}::text[]
+      ) as line(company, attributes)`.execute(this.db);
+  }
+
+  /** In order of name; companies that nothing describes are not among them. */
+  companyAttributes(panelVersionId: string): Promise<CompanyAttributes[]> {
+    return this.db
+      .selectFrom('panelCompany')
+      .select(['company', 'attributes'])
+      .where('workspaceId', '=', this.workspaceId)
+      .where('panelVersionId', '=', panelVersionId)
+      .orderBy('company')
+      .execute();
+  }
+
+  /** How the version's file became the panel; undefined for an unknown version, null where no recipe was kept. */
+  async recipe(panelVersionId: string): Promise<object | null | undefined> {
+    const found = await this.db
+      .selectFrom('panelVersion')
+      .select('recipe')
+      .where('workspaceId', '=', this.workspaceId)
+      .where('id', '=', panelVersionId)
+      .executeTakeFirst();
+    return found?.recipe;
   }
 
   /** The companies of a version, in order of name. */
@@ -128,7 +178,7 @@ export class PanelsRepository {
   async rows(panelVersionId: string, companies?: readonly string[]): Promise<PanelRows> {
     let query = this.db
       .selectFrom('panelRow')
-      .select(['company', 'year', 'fileRow', 'cells'])
+      .select(['company', 'year', 'fileRow', 'cells', 'currency'])
       .where('workspaceId', '=', this.workspaceId)
       .where('panelVersionId', '=', panelVersionId);
     if (companies !== undefined)
@@ -139,6 +189,7 @@ export class PanelsRepository {
       year: found.map((row) => row.year),
       fileRow: found.map((row) => row.fileRow),
       cells: found.map((row) => row.cells),
+      currency: found.map((row) => row.currency),
     };
   }
 
@@ -162,6 +213,7 @@ export class PanelsRepository {
         'panel.name as panelName',
         'panelVersion.number',
         'panelVersion.parentId',
+        'panelVersion.origin',
         'panelVersion.currency',
         'panelVersion.unit',
         'panelVersion.companyHeader',

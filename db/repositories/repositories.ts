@@ -8,9 +8,11 @@ import { EditionsRepository } from './editions-repository';
 import { EvidenceRepository } from './evidence-repository';
 import { FilesRepository } from './files-repository';
 import { FitsRepository } from './fits-repository';
+import { FlagDismissalsRepository } from './flag-dismissals-repository';
 import { ImportsRepository } from './imports-repository';
 import { JobTicketsRepository } from './jobs-repository';
 import { MembersRepository } from './members-repository';
+import { PanelCorrectionsRepository } from './panel-corrections-repository';
 import { PanelsRepository } from './panels-repository';
 import { PeersRepository } from './peers-repository';
 import { PeopleRepository, SignInThrottleRepository } from './people-repository';
@@ -25,6 +27,8 @@ export interface WorkspaceRepositories {
   readonly files: FilesRepository;
   readonly imports: ImportsRepository;
   readonly panels: PanelsRepository;
+  readonly panelCorrections: PanelCorrectionsRepository;
+  readonly flagDismissals: FlagDismissalsRepository;
   readonly peers: PeersRepository;
   readonly fits: FitsRepository;
   readonly evidence: EvidenceRepository;
@@ -67,6 +71,8 @@ export class Repositories {
         files: new FilesRepository(trx, workspaceId),
         imports: new ImportsRepository(trx, workspaceId),
         panels: new PanelsRepository(trx, workspaceId),
+        panelCorrections: new PanelCorrectionsRepository(trx, workspaceId),
+        flagDismissals: new FlagDismissalsRepository(trx, workspaceId),
         peers: new PeersRepository(trx, workspaceId),
         fits: new FitsRepository(trx, workspaceId),
         evidence: new EvidenceRepository(trx, workspaceId),

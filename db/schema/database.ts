@@ -10,7 +10,10 @@ import type {
 import type { EditionTable } from './edition-table';
 import type { FitBootstrapTable, FitEvidenceTable, FitTable, JobTicketTable } from './fit-tables';
 import type {
+  FlagDismissalTable,
   ImportDraftTable,
+  PanelCompanyTable,
+  PanelCorrectionTable,
   PanelRowTable,
   PanelTable,
   PanelVersionTable,
@@ -27,11 +30,14 @@ export interface Database {
   fit: FitTable;
   fitBootstrap: FitBootstrapTable;
   fitEvidence: FitEvidenceTable;
+  flagDismissal: FlagDismissalTable;
   importDraft: ImportDraftTable;
   invitation: InvitationTable;
   jobTicket: JobTicketTable;
   membership: MembershipTable;
   panel: PanelTable;
+  panelCompany: PanelCompanyTable;
+  panelCorrection: PanelCorrectionTable;
   panelRow: PanelRowTable;
   panelVersion: PanelVersionTable;
   peerChoice: PeerChoiceTable;

@@ -42,7 +42,13 @@ export interface PanelVersionTable {
   lastYear: number;
   createdBy: string;
   createdAt: Generated<Date>;
+  origin: Generated<PanelOrigin>;
+  /** How the file became the panel; null of a version that no file was read for, and of early ones. */
+  recipe: JSONColumnType<object> | null;
 }
+
+/** What made a version: a file, a set of corrections, or an older version put back. */
+export type PanelOrigin = 'import' | 'correction' | 'restore';
 
 export interface PanelRowTable {
   workspaceId: string;
@@ -51,17 +57,66 @@ export interface PanelRowTable {
   year: number;
   fileRow: number;
   cells: (number | null)[];
+  /** Currency of the row in the file; null where the file names none by row. */
+  currency: string | null;
 }
+
+/** The texts that describe a company, by header of the file. */
+export interface PanelCompanyTable {
+  workspaceId: string;
+  panelVersionId: string;
+  company: string;
+  attributes: JSONColumnType<Record<string, string>>;
+}
+
+/** Why a cell differs from the version before, and where its value was found. */
+export interface PanelCorrectionTable {
+  workspaceId: string;
+  panelVersionId: string;
+  company: string;
+  year: number;
+  columnIndex: number;
+  reason: string;
+  source: string;
+}
+
+export interface FlagDismissalTable {
+  workspaceId: string;
+  id: string;
+  panelId: string;
+  company: string;
+  year: number;
+  columnIndex: number;
+  code: string;
+  value: number | null;
+  reason: string;
+  createdBy: string;
+  createdAt: Generated<Date>;
+}
+
+export type ImportState = 'mapped' | 'checked' | 'committing' | 'failed' | 'committed';
 
 export interface ImportDraftTable {
   workspaceId: string;
   id: string;
   fileId: string;
-  state: 'mapped' | 'checked' | 'committed';
+  state: ImportState;
   preview: JSONColumnType<object>;
   mapping: JSONColumnType<object>;
   findings: JSONColumnType<object> | null;
   panelVersionId: string | null;
   createdBy: string;
   createdAt: Generated<Date>;
+  note: string | null;
+  progress: JSONColumnType<ImportProgress> | null;
+  failure: string | null;
+  /** Of the commit under way, or of the last one. */
+  commitId: string | null;
+  committedBy: string | null;
+}
+
+/** Rows written, of all. */
+export interface ImportProgress {
+  readonly done: number;
+  readonly of: number;
 }
