@@ -1,0 +1,2 @@
+/** What a column is to the model. */
+export type ModelRole = 'marketValue' | 'capex' | 'bookEquity';
