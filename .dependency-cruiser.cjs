@@ -69,7 +69,7 @@ const ofFolder = [
   ]),
   only('backend/compute', [
     within('backend/(compute|stats|panel-data|errors)'),
-    ...packages('piscina', 'csv-parse', 'exceljs', 'yauzl', 'fastest-levenshtein'),
+    ...packages('piscina', 'csv-parse', 'exceljs', 'saxes', 'yauzl', 'fastest-levenshtein'),
   ]),
   ...ground.map((name) =>
     only(`backend/${name}`, [

@@ -5,7 +5,7 @@ import { cruise } from 'dependency-cruiser';
 
 const settings = createRequire(import.meta.url)('../.dependency-cruiser.cjs');
 const folders = ['backend', 'db', 'src', 'stubs', 'e2e', 'tools'];
-const doors = ['contract', 'stats', 'stats/prediction', 'figures'].map(
+const doors = ['contract', 'stats', 'stats/prediction', 'figures', 'panel-data'].map(
   (it) => `backend/${it}/index.ts`,
 );
 
