@@ -66,7 +66,8 @@ export type FlagCode = z.infer<typeof FlagCode>;
 export const DismissFlag = z.strictObject({
   company,
   year,
-  column: z.number().int().min(0).max(199),
+  /** Position among the columns; null where the whole row is meant. */
+  column: z.number().int().min(0).max(199).nullable(),
   code: FlagCode,
   /** The cell's value when it was looked at. */
   value: z.number().nullable(),

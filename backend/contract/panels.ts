@@ -96,6 +96,16 @@ export const PanelCompaniesReply = z.object({
       bookEquity: z.number().nullable(),
       /** The text columns that describe it, by header. */
       attributes: z.record(z.string(), z.string()),
+      /** What it can be compared by, as the panel-data module defines it; null where its cells do not say. */
+      measures: z.object({
+        logMarketValue: z.number().nullable(),
+        logBookEquity: z.number().nullable(),
+        capexToBookEquity: z.number().nullable(),
+        growth: z.number().nullable(),
+        volatility: z.number().nullable(),
+        /** Last value of each further column, by header. */
+        others: z.record(z.string(), z.number().nullable()),
+      }),
     }),
   ),
 });
