@@ -1,16 +1,20 @@
-import { type DecimalSign, withoutSign } from './parse-number';
+import { bareNumber } from './bare-number';
+import type { DecimalSign } from './parse-number';
 
 /** How a column writes decimals, and whether its own numbers say so. */
 export interface ColumnDecimals {
   readonly decimalSign: DecimalSign;
-  /** True where no number of the column tells, some could be read both ways, and the other columns decided. */
-  readonly isAmbiguous: boolean;
+  /**
+   * Position of the first cell that could be read both ways, where no number of the column tells and the other columns
+   * decided; null where the column itself tells.
+   */
+  readonly ambiguousAt: number | null;
 }
 
 interface Evidence {
   readonly dots: number;
   readonly commas: number;
-  readonly ambiguous: number;
+  readonly ambiguousAt: number | null;
 }
 
 /**
@@ -26,29 +30,31 @@ export function decimalSigns(columns: readonly (readonly string[])[]): ColumnDec
   const commas = evidence.filter((column) => column.commas > column.dots).length;
   const common: DecimalSign = commas > dots ? ',' : '.';
   return evidence.map((column): ColumnDecimals => {
-    if (column.commas > column.dots) return { decimalSign: ',', isAmbiguous: false };
-    if (column.dots > 0) return { decimalSign: '.', isAmbiguous: false };
-    return { decimalSign: common, isAmbiguous: column.ambiguous > 0 };
+    if (column.commas > column.dots) return { decimalSign: ',', ambiguousAt: null };
+    if (column.dots > 0) return { decimalSign: '.', ambiguousAt: null };
+    return { decimalSign: common, ambiguousAt: column.ambiguousAt };
   });
 }
 
 function evidenceOf(cells: readonly string[]): Evidence {
   let dots = 0;
   let commas = 0;
-  let ambiguous = 0;
-  for (const cell of cells) {
+  let ambiguousAt: number | null = null;
+  cells.forEach((cell, position) => {
     const sign = decimalSignIn(cell);
     if (sign === '.') dots += 1;
     else if (sign === ',') commas += 1;
-    else if (sign === 'either') ambiguous += 1;
-  }
-  return { dots, commas, ambiguous };
+    else if (sign === 'either') ambiguousAt ??= position;
+  });
+  return { dots, commas, ambiguousAt };
 }
 
 /** The decimal sign that one cell proves; undefined where it has neither sign or is no number. */
 function decimalSignIn(cell: string): DecimalSign | 'either' | undefined {
-  const digits = withoutSign(cell.trim()).digits.replace(/[eE][+-]?\d+$/u, '');
-  if (!/^[\d.,’' \u00a0\u202f]+$/u.test(digits)) return undefined;
+  if (!cell.includes('.') && !cell.includes(',')) return undefined;
+  if (/^\d+\.\d+$/u.test(cell) && !/^[1-9]\d{0,2}\.\d{3}$/u.test(cell)) return '.';
+  const digits = bareNumber(cell.trim()).digits.replace(/[eE][+-]?\d+$/u, '');
+  if (!/^[\d.,’' \u00a0\u2007\u2009\u202f]+$/u.test(digits)) return undefined;
   const lastDot = digits.lastIndexOf('.');
   const lastComma = digits.lastIndexOf(',');
   if (lastDot === -1 && lastComma === -1) return undefined;

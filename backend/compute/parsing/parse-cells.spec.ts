@@ -1,93 +1,155 @@
 import { decimalSigns } from './decimal-signs';
-import { parseNumber } from './parse-number';
-import { parseYear } from './parse-year';
+import { type DecimalSign, parseNumber } from './parse-number';
 
 describe('parseNumber', () => {
-  it('reads numbers with a decimal point', () => {
-    for (const [text, value] of [
-      ['1234.5', 1234.5],
-      [' 1,234.5 ', 1234.5],
-      ['1 234 567', 1234567],
-      ['1’234.50', 1234.5],
-      ['1\u202f234', 1234],
-      ['.5', 0.5],
-      ['-3', -3],
-      ['−3', -3],
-      ['+3', 3],
-      ['(1,234)', -1234],
-      ['1,234-', -1234],
-      ['1e3', 1000],
-    ] as const) {
-      expect(parseNumber(text)).withContext(text).toBe(value);
-    }
-  });
+  const withPoint: readonly (readonly [string, number])[] = [
+    ['1234.5', 1234.5],
+    [' 1,234.5 ', 1234.5],
+    ['1 234 567', 1234567],
+    ['1’234.50', 1234.5],
+    ["1'234'567.5", 1234567.5],
+    ['1\u00a0234', 1234],
+    ['1\u202f234', 1234],
+    ['1\u2009234\u2009567', 1234567],
+    ['1\u2007234', 1234],
+    ['.5', 0.5],
+    ['5.', 5],
+    ['007', 7],
+    ['-3', -3],
+    ['−3', -3],
+    ['–3', -3],
+    ['- 3', -3],
+    ['+3', 3],
+    ['(1,234)', -1234],
+    ['( 1,234.5 )', -1234.5],
+    ['1,234-', -1234],
+    ['1e3', 1000],
+    ['1.5E-3', 0.0015],
+    ['12%', 0.12],
+    ['12 %', 0.12],
+    ['12.3%', 0.123],
+    ['(12%)', -0.12],
+    ['-0.7%', -0.007],
+    ['1e2%', 1],
+    ['€1,234', 1234],
+    ['€ 1,234.5', 1234.5],
+    ['-€5', -5],
+    ['€-5', -5],
+    ['(€1,234)', -1234],
+    ['€(1,234)', -1234],
+    ['$5', 5],
+    ['US$ 5', 5],
+    ['£5', 5],
+    ['5 €', 5],
+    ['5 EUR', 5],
+    ['1 234 EUR', 1234],
+    ['1 234EUR', 1234],
+    ['EUR 1,234', 1234],
+    ['CHF 1’234.50', 1234.5],
+    ['-5 EUR', -5],
+    ['EUR 5-', -5],
+  ];
+  const withComma: readonly (readonly [string, number])[] = [
+    ['1234,5', 1234.5],
+    ['1.234.567,89', 1234567.89],
+    ['1.234', 1234],
+    ['1.234,5', 1234.5],
+    ['1 234,5', 1234.5],
+    ['1’234,5', 1234.5],
+    [',5', 0.5],
+    ['(1.234,5)', -1234.5],
+    ['12,5 %', 0.125],
+    ['1.234,50 €', 1234.5],
+    ['EUR 1.234,50', 1234.5],
+    ['1,5e3', 1500],
+  ];
+  const cases: readonly (readonly [DecimalSign, readonly (readonly [string, number])[]])[] = [
+    ['.', withPoint],
+    [',', withComma],
+  ];
 
-  it('reads numbers with a decimal comma', () => {
-    for (const [text, value] of [
-      ['1234,5', 1234.5],
-      ['1.234.567,89', 1234567.89],
-      ['1.234', 1234],
-      ['(1.234,5)', -1234.5],
-    ] as const) {
-      expect(parseNumber(text, ',')).withContext(text).toBe(value);
+  for (const [decimalSign, forms] of cases) {
+    for (const [text, value] of forms) {
+      it(`reads “${text}” with a decimal ${decimalSign} as ${value}`, () => {
+        expect(parseNumber(text, decimalSign)).toBe(value);
+      });
     }
-  });
+  }
 
-  it('takes every token of a missing value as missing', () => {
-    for (const text of ['', ' ', 'NA', 'N/A', 'n/a', '#N/A', '-', '–', '.', '..']) {
-      expect(parseNumber(text)).withContext(text).toBeNaN();
-    }
-  });
+  for (const text of ['', ' ', 'NA', 'N/A', 'n/a', '#N/A', '-', '–', '—', '.', '..', '\u00a0']) {
+    it(`takes “${text}” as missing`, () => {
+      expect(parseNumber(text)).toBeNaN();
+      expect(parseNumber(text, ',')).toBeNaN();
+    });
+  }
 
   it('takes no text for a number', () => {
     for (const text of [
       'x',
-      '12 %',
+      'NaN',
+      'Infinity',
+      'null',
       '1,23',
       '12,34,567',
+      '1,23,456.7',
+      '1,2345',
       '1.2.3',
+      '1 2345',
+      '1,234 567',
       '1e999',
       '--1',
+      '-(1)',
+      '(-1)',
+      '+-1',
       '()',
+      '%',
+      '%%',
+      '5%%',
+      '€',
+      '€€5',
+      '€5 EUR',
+      'EUR',
+      '5 ABC',
+      '5 eur',
+      '5EURO',
       '0x10',
-      '5 EUR',
+      '1'.repeat(400),
     ]) {
       expect(parseNumber(text)).withContext(text).toBeUndefined();
     }
+  });
+
+  it('refuses a long text in no more time than it takes to look at it', () => {
+    const text = `1${' '.repeat(65_000)}x`;
+    const start = performance.now();
+    expect(parseNumber(text)).toBeUndefined();
+    expect(performance.now() - start).toBeLessThan(200);
   });
 });
 
 describe('decimalSigns', () => {
   it('goes by the numbers that can be read one way only', () => {
-    expect(decimalSigns([['1,5', '1,234']])).toEqual([{ decimalSign: ',', isAmbiguous: false }]);
-    expect(decimalSigns([['1.234.567']])).toEqual([{ decimalSign: ',', isAmbiguous: false }]);
-    expect(decimalSigns([['0,123']])).toEqual([{ decimalSign: ',', isAmbiguous: false }]);
-    expect(decimalSigns([['1.5', '1,234']])).toEqual([{ decimalSign: '.', isAmbiguous: false }]);
+    expect(decimalSigns([['1,5', '1,234']])).toEqual([{ decimalSign: ',', ambiguousAt: null }]);
+    expect(decimalSigns([['1.234.567']])).toEqual([{ decimalSign: ',', ambiguousAt: null }]);
+    expect(decimalSigns([['0,123']])).toEqual([{ decimalSign: ',', ambiguousAt: null }]);
+    expect(decimalSigns([['1.5', '1,234']])).toEqual([{ decimalSign: '.', ambiguousAt: null }]);
   });
 
-  it('lets the other columns decide for one that could be read both ways', () => {
-    const [first] = decimalSigns([['1.234', '5.678'], ['1,5'], ['2,25']]);
-    expect(first).toEqual({ decimalSign: ',', isAmbiguous: true });
+  it('sees past what stands around a number', () => {
+    for (const text of ['1,5 €', '(1,5)', 'EUR 1,5', '1,5%', '1.234,5 EUR', '1,5e3']) {
+      expect(decimalSigns([[text]])[0].decimalSign)
+        .withContext(text)
+        .toBe(',');
+    }
+  });
+
+  it('lets the other columns decide for one that could be read both ways, and says where', () => {
+    const [first] = decimalSigns([['7', '1.234', '5.678'], ['1,5'], ['2,25']]);
+    expect(first).toEqual({ decimalSign: ',', ambiguousAt: 1 });
   });
 
   it('takes the point where nothing speaks', () => {
-    expect(decimalSigns([['1,234']])).toEqual([{ decimalSign: '.', isAmbiguous: true }]);
-    expect(decimalSigns([['7', 'x']])).toEqual([{ decimalSign: '.', isAmbiguous: false }]);
-  });
-});
-
-describe('parseYear', () => {
-  it('reads years and fiscal year labels', () => {
-    for (const text of ['2023', 'FY2023', 'FY 2023', 'fy-2023', 'GJ 2023', '2023.0', ' 2023 ']) {
-      expect(parseYear(text)).withContext(text).toBe(2023);
-    }
-    expect(parseYear('7')).toBe(7);
-  });
-
-  it('takes nothing else for a year', () => {
-    for (const text of ['2023.5', '2022/23', '31.12.2023', 'Q1 2023', 'x', '20230']) {
-      expect(parseYear(text)).withContext(text).toBeUndefined();
-    }
-    expect(parseYear('n/a')).toBeNaN();
+    expect(decimalSigns([['1,234']])).toEqual([{ decimalSign: '.', ambiguousAt: 0 }]);
+    expect(decimalSigns([['7', 'x']])).toEqual([{ decimalSign: '.', ambiguousAt: null }]);
   });
 });
