@@ -1,17 +1,10 @@
-import { checkTable } from './parsing/check-table';
-import type { TableMapping } from './parsing/column-indices';
+import { checkFile } from './check-file';
+import { filePanel } from './file-panel';
+import type { FilePreview, ParseAnswer, ParseRequest } from './parse-messages';
+import { FileRefusal } from './parsing/file-refusal';
 import { guessMapping } from './parsing/guess-mapping';
-import { readPanel } from './parsing/read-panel';
-import { readTable } from './parsing/read-table';
-import type { Table } from './parsing/table';
+import { type FileTable, readFile } from './parsing/read-file';
 import { TableError } from './parsing/table-error';
-import type {
-  ColumnChoice,
-  FilePreview,
-  FileRows,
-  ParseAnswer,
-  ParseRequest,
-} from './parse-messages';
 
 const previewRows = 12;
 /** Rows that the guess of the mapping looks at. */
@@ -32,49 +25,33 @@ process.once('message', (request: ParseRequest) => {
 
 async function answer(request: ParseRequest): Promise<ParseAnswer> {
   try {
-    const table = await readTable(request.bytes);
+    const reading = request.kind === 'preview' ? request.reading : request.recipe.reading;
+    const file = await readFile(request.bytes, request.name, reading);
     switch (request.kind) {
       case 'preview':
-        return { kind: 'preview', preview: previewOf(table) };
+        return { kind: 'preview', preview: previewOf(file) };
       case 'check':
-        return { kind: 'check', check: checkTable(table, mappingOf(request.choice)) };
+        return { kind: 'check', check: checkFile(file, request.recipe, request.current) };
       case 'read':
-        return { kind: 'read', rows: rowsOf(table, request.choice) };
+        return { kind: 'read', panel: filePanel(file.table, request.recipe) };
     }
   } catch (error) {
-    if (error instanceof TableError)
+    if (error instanceof TableError || error instanceof FileRefusal)
       return { kind: 'refused', code: error.code, detail: error.message };
     throw error;
   }
 }
 
-function previewOf(table: Table): FilePreview {
+function previewOf({ table, reading, sheets, topLines }: FileTable): FilePreview {
   return {
+    sheets,
+    reading,
     headers: table.header,
     firstRows: table.rows
       .slice(0, previewRows)
       .map((cells, index) => ({ row: table.lines[index], cells })),
     rowCount: table.rows.length,
+    topLines,
     guess: guessMapping(table.header, table.rows.slice(0, guessRows)),
-  };
-}
-
-function mappingOf(choice: ColumnChoice): TableMapping {
-  return {
-    company: choice.company,
-    year: choice.year,
-    numbers: [choice.marketValue, choice.capex, choice.bookEquity, ...choice.others],
-  };
-}
-
-function rowsOf(table: Table, choice: ColumnChoice): FileRows {
-  const reading = readPanel(table, mappingOf(choice));
-  return {
-    company: Array.from(reading.company, (code) => reading.companies[code]),
-    year: Array.from(reading.year),
-    fileRow: Array.from(reading.fileRow),
-    cells: Array.from(reading.year, (_, row) =>
-      reading.numbers.map(({ values }) => (Number.isNaN(values[row]) ? null : values[row])),
-    ),
   };
 }

@@ -75,7 +75,9 @@ export type FindingCode =
   | 'no-rate'
   | 'currency'
   | 'no-price-index'
-  | 'formula';
+  | 'formula'
+  /** A mended cell or a left-out line that the file, as it is read, does not have. */
+  | 'mending';
 
 export interface FileFinding {
   readonly row: number;

@@ -151,6 +151,8 @@ export const ImportFinding = z.object({
     'currency',
     'no-price-index',
     'formula',
+    /** A mended cell or a left-out line that the file, as it is read, does not have. */
+    'mending',
   ]),
   detail: z.string(),
   /** Whether the panel cannot be brought in while this stands. */

@@ -1,60 +1,78 @@
-import type { TableMapping } from './column-indices';
-import type { TableFinding } from './table-finding';
+import { findingAt, type FindingList } from './finding-list';
+import type { PanelKeys } from './read-keys';
+import type { Table } from './table';
 
-interface Keys {
-  readonly companies: readonly string[];
-  readonly company: Int32Array;
-  readonly year: Int32Array;
-  readonly fileRow: Int32Array;
-}
+/** So many other lines are named; a key that stands in every row would else name each row in each. */
+const mostLinesNamed = 20;
 
-/** Every row whose company and year another row has too. */
-export function duplicateFindings(keys: Keys, mapping: TableMapping): TableFinding[] {
-  const rowsOf = new Map<string, number[]>();
-  keys.year.forEach((year, index) => {
-    const key = `${keys.company[index]}:${year}`;
-    const rows = rowsOf.get(key);
-    if (rows === undefined) rowsOf.set(key, [index]);
-    else rows.push(index);
-  });
-  return [...rowsOf.values()]
-    .filter((rows) => rows.length > 1)
-    .flatMap((rows) =>
-      rows.map((index): TableFinding => {
-        const others = rows.filter((other) => other !== index).map((other) => keys.fileRow[other]);
-        const company = keys.companies[keys.company[index]];
-        return {
-          row: keys.fileRow[index],
-          column: mapping.year,
-          found: String(keys.year[index]),
-          code: 'duplicate',
-          detail: `${company} ${keys.year[index]} also stands on line ${others.join(', ')}.`,
-          isBlocking: true,
-        };
-      }),
-    );
-}
-
-/** The first row of each further spelling of a name that differs only by case or blanks. */
-export function spellingFindings(keys: Keys, mapping: TableMapping): TableFinding[] {
-  const first = new Map<string, number>();
-  return keys.companies.flatMap((name, code): TableFinding[] => {
-    const key = name.toLowerCase().replace(/\s+/gu, '');
-    const other = first.get(key);
-    if (other === undefined) {
-      first.set(key, code);
-      return [];
+/** Finds every row whose company and year another row has too. */
+export function findDuplicates(
+  table: Table,
+  keys: PanelKeys,
+  yearIndex: number,
+  findings: FindingList,
+): void {
+  for (const rows of rowsOfSameKey(keys)) {
+    const isOneFiscalYear = rows.every((row) => keys.fiscalEnd[row] === keys.fiscalEnd[rows[0]]);
+    for (const row of rows) {
+      const others = rows.filter((other) => other !== row).slice(0, mostLinesNamed);
+      const remark = isOneFiscalYear ? sameYear : otherFiscalYear;
+      const finding = findingAt(table, keys.tableRow[row], yearIndex, {
+        code: 'duplicate',
+        detail: remark({
+          company: keys.companies[keys.company[row]],
+          year: keys.year[row],
+          text: textOf(table, keys, yearIndex, row),
+          others: others.map((other) => ({
+            line: table.lines[keys.tableRow[other]],
+            text: textOf(table, keys, yearIndex, other),
+          })),
+          isMore: rows.length - 1 > mostLinesNamed,
+        }),
+        isBlocking: true,
+      });
+      findings.add(isOneFiscalYear ? { ...finding, found: String(keys.year[row]) } : finding);
     }
-    const detail = `Differs from “${keys.companies[other]}” only by case or blanks; both count as companies of their own.`;
-    return [
-      {
-        row: keys.fileRow[keys.company.indexOf(code)],
-        column: mapping.company,
-        found: name,
-        code: 'spelling',
-        detail,
-        isBlocking: false,
-      },
-    ];
-  });
+  }
+}
+
+interface SharedYear {
+  readonly company: string;
+  readonly year: number;
+  readonly text: string;
+  readonly others: readonly { readonly line: number; readonly text: string }[];
+  readonly isMore: boolean;
+}
+
+function sameYear({ company, year, others, isMore }: SharedYear): string {
+  const lines = others.map(({ line }) => line).join(', ');
+  return `${company} ${year} also stands on line ${lines}${isMore ? ' and more' : ''}.`;
+}
+
+/** Two fiscal years of a company in one calendar year, as after a change of its year-end. */
+function otherFiscalYear({ company, year, text, others, isMore }: SharedYear): string {
+  const lines = others.map((other) => `line ${other.line} (${other.text})`).join(', ');
+  return `${company} has more than one fiscal year that counts as ${year}: ${text} here, and ${lines}${isMore ? ' and more' : ''}. Keep one of them.`;
+}
+
+function textOf(table: Table, keys: PanelKeys, yearIndex: number, row: number): string {
+  return table.rows[keys.tableRow[row]][yearIndex].trim();
+}
+
+/** Rows that share company and year with another, in the order of the first of them. */
+function rowsOfSameKey({ company, year }: PanelKeys): Iterable<readonly number[]> {
+  const first = new Map<number, number>();
+  const shared = new Map<number, number[]>();
+  for (let row = 0; row < company.length; row++) {
+    const key = company[row] * 65_536 + year[row];
+    const before = first.get(key);
+    if (before === undefined) {
+      first.set(key, row);
+      continue;
+    }
+    const rows = shared.get(before) ?? [before];
+    rows.push(row);
+    shared.set(before, rows);
+  }
+  return shared.values();
 }

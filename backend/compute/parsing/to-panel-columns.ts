@@ -1,5 +1,7 @@
 import type { PanelColumns } from '../../stats';
+import { FindingList } from './finding-list';
 import { readPanel } from './read-panel';
+import { plainTerms } from './reading-terms';
 import type { Table } from './table';
 import type { TableFinding } from './table-finding';
 
@@ -22,11 +24,10 @@ export interface PanelColumnsReading {
 
 /** @throws {TableError} 'missing-column' or 'ambiguous-column' with the headers concerned. */
 export function toPanelColumns(table: Table, mapping: FitMapping): PanelColumnsReading {
-  const reading = readPanel(table, {
-    company: mapping.company,
-    year: mapping.year,
-    numbers: [mapping.outcome, ...mapping.regressors],
-  });
+  const numbers = [mapping.outcome, ...mapping.regressors];
+  const list = new FindingList();
+  const reading = readPanel(table, { ...mapping, numbers }, plainTerms, list);
+  const findings = list.first();
   const [outcome, ...regressors] = reading.numbers;
   const keys = new Set([mapping.company, mapping.year]);
   return {
@@ -38,8 +39,8 @@ export function toPanelColumns(table: Table, mapping: FitMapping): PanelColumnsR
       outcome,
       regressors,
     },
-    problems: reading.findings.filter(({ isBlocking }) => isBlocking),
-    leftOut: reading.findings.filter(
+    problems: findings.filter(({ isBlocking }) => isBlocking),
+    leftOut: findings.filter(
       ({ code, column }) => code === 'no-company' || (code === 'missing' && keys.has(column)),
     ),
   };

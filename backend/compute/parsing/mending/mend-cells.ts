@@ -1,0 +1,53 @@
+import type { FileMending } from '../../file-recipe';
+import { placeOfCell, type Table } from '../table';
+
+export type MendedCell = FileMending['cells'][number];
+
+/** A table with cells as they should read, and the mends that found no cell of the file. */
+export interface MendedTable {
+  readonly table: Table;
+  readonly lost: readonly MendedCell[];
+}
+
+/**
+ * Puts the mended texts in place of the file's. Where several rows of a long table show one cell of a wide sheet, all of
+ * them get the text. Of two mends of one cell the later counts; a mended cell no longer counts as a formula's.
+ */
+export function mendCells(table: Table, cells: readonly MendedCell[]): MendedTable {
+  if (cells.length === 0) return { table, lost: [] };
+  const mends = new Map(cells.map((cell) => [keyOf(cell.row, cell.column), cell]));
+  const found = new Set<string>();
+  const width = table.header.length;
+  const mendedAt = new Set<number>();
+  const rows = table.rows.map((cellsOfRow, row) => {
+    let copy: string[] | undefined;
+    for (let column = 0; column < width; column++) {
+      const { line, header } = placeOfCell(table, row, column);
+      const key = keyOf(line, header);
+      const mend = mends.get(key);
+      if (mend === undefined) continue;
+      copy ??= [...cellsOfRow];
+      copy[column] = mend.text;
+      found.add(key);
+      mendedAt.add(row * width + column);
+    }
+    return copy ?? cellsOfRow;
+  });
+  const { isFormula } = table;
+  return {
+    table: {
+      ...table,
+      rows,
+      ...(isFormula && {
+        isFormula: (row: number, column: number) =>
+          !mendedAt.has(row * width + column) && isFormula(row, column),
+      }),
+    },
+    lost: [...mends].filter(([key]) => !found.has(key)).map(([, cell]) => cell),
+  };
+}
+
+/** A line holds no line end, so that two places never share a key. */
+function keyOf(line: number, header: string): string {
+  return `${line}\n${header}`;
+}
