@@ -1,9 +1,10 @@
 import { TextDecoder } from 'node:util';
 import { TableError } from './table-error';
+import { utf16Of } from './utf16';
 
 /**
- * Decodes a byte stream as UTF-8, or as UTF-16 where its byte order mark says so; the mark is taken off, and every
- * line end becomes a line feed.
+ * Decodes a byte stream as UTF-8, or as UTF-16 where its byte order mark or its zeros say so; the mark is taken off,
+ * and every line end becomes a line feed.
  * @throws {TableError} 'csv-invalid' for bytes that are no text, or a NUL character, with its line.
  */
 export async function* decodeText(
@@ -39,9 +40,7 @@ export async function* decodeText(
 }
 
 function decoderFor(head: Uint8Array): TextDecoder {
-  if (head[0] === 0xff && head[1] === 0xfe) return new TextDecoder('utf-16le', { fatal: true });
-  if (head[0] === 0xfe && head[1] === 0xff) return new TextDecoder('utf-16be', { fatal: true });
-  return new TextDecoder('utf-8', { fatal: true });
+  return new TextDecoder(utf16Of(head) ?? 'utf-8', { fatal: true });
 }
 
 function decodeStrictly(decoder: TextDecoder, bytes: Uint8Array | undefined, line: number): string {
@@ -49,7 +48,7 @@ function decodeStrictly(decoder: TextDecoder, bytes: Uint8Array | undefined, lin
     return bytes === undefined ? decoder.decode() : decoder.decode(bytes, { stream: true });
   } catch (error) {
     if (!(error instanceof TypeError)) throw error;
-    const message = `expected text in UTF-8, or UTF-16 with a byte order mark; found other bytes after line ${line}. Save the file as “CSV UTF-8” and try again`;
+    const message = `expected text in UTF-8, or UTF-16; found other bytes after line ${line}. Save the file as “CSV UTF-8” and try again`;
     throw new TableError('csv-invalid', message, { row: line });
   }
 }

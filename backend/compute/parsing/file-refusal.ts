@@ -4,7 +4,6 @@ export type FileRefusalCode =
   | 'zip_limit'
   | 'sheet_limit'
   | 'xlsx_active_content'
-  | 'xlsx_invalid'
   | 'csv_invalid'
   | 'reading_invalid';
 
