@@ -1,12 +1,12 @@
 import type { TableReading } from '../file-recipe';
 import type { FilePreview, NumberedLine } from '../parse-messages';
+import { fileKind } from './file-kind';
 import { FileRefusal } from './file-refusal';
-import type { Grid } from './grid';
-import { findHeaderRow } from './header-row';
 import { readCsv } from './read-csv';
-import type { Table } from './table';
+import { readSheets, type SheetsTable } from './read-sheets';
+import type { Delimiter, Table } from './table';
 import { TableError } from './table-error';
-import { tableOfGrid } from './table-of-grid';
+import { readWorkbook, type Sheet } from './workbook/read-workbook';
 
 /** A file as a long table, and how it was read. */
 export interface FileTable {
@@ -21,8 +21,6 @@ export interface FileTable {
   readonly formulaCells: number;
 }
 
-const topLineCount = 15;
-
 /**
  * Reads an uploaded file as a long table.
  *
@@ -36,44 +34,55 @@ export async function readFile(
   reading: TableReading | null,
 ): Promise<FileTable> {
   try {
-    return await readCsvFile(bytes, reading);
+    return fileKind(bytes, name) === 'xlsx'
+      ? await readXlsx(bytes, reading)
+      : await readText(bytes, reading);
   } catch (error) {
     throw error instanceof TableError ? asRefusal(error) : error;
   }
 }
 
-async function readCsvFile(bytes: Uint8Array, reading: TableReading | null): Promise<FileTable> {
+async function readText(bytes: Uint8Array, reading: TableReading | null): Promise<FileTable> {
   const { grid, delimiter } = await readCsv(bytes);
-  const headerIndex = reading === null ? findHeaderRow(grid) : rowFromLine(grid, reading.headerRow);
+  const sheet = { name: null, isHidden: false, grid };
+  return fileTable(readSheets([sheet], reading), delimiter, []);
+}
+
+async function readXlsx(bytes: Uint8Array, reading: TableReading | null): Promise<FileTable> {
+  const sheets = await readWorkbook(bytes);
+  return fileTable(readSheets(sheets, reading), null, sheets.map(sizeOf));
+}
+
+const topLineCount = 15;
+
+function fileTable(
+  { table, reading, grid }: SheetsTable,
+  delimiter: Delimiter | null,
+  sheets: FilePreview['sheets'],
+): FileTable {
   return {
-    table: { ...tableOfGrid(grid, headerIndex), delimiter },
-    reading: reading ?? {
-      sheet: null,
-      headerRow: grid.lines[headerIndex],
-      layout: { kind: 'long' },
-      decimalSign: 'as-found',
-    },
-    sheets: [],
-    topLines: topLinesOf(grid),
-    formulaCells: 0,
+    table: { ...table, delimiter },
+    reading,
+    sheets,
+    topLines: grid.rows
+      .slice(0, topLineCount)
+      .map((cells, row) => ({ row: grid.lines[row], cells: [...cells] })),
+    formulaCells: formulaCellsOf(table),
   };
 }
 
-function topLinesOf(grid: Grid): NumberedLine[] {
-  return grid.rows
-    .slice(0, topLineCount)
-    .map((cells, row) => ({ row: grid.lines[row], cells: [...cells] }));
+function sizeOf({ name, grid }: Sheet): FilePreview['sheets'][number] {
+  const columns = grid.rows.reduce((widest, cells) => Math.max(widest, cells.length), 0);
+  return { name, rows: grid.rows.length, columns };
 }
 
-/** The first filled row from the line on. */
-function rowFromLine(grid: Grid, line: number): number {
-  const row = grid.lines.findIndex((filled) => filled >= line);
-  if (row !== -1) return row;
-  const last = grid.lines[grid.lines.length - 1];
-  throw new FileRefusal(
-    'reading_invalid',
-    `expected the headers on line ${line} or below; the last filled line is ${last}`,
-  );
+function formulaCellsOf({ rows, isFormula }: Omit<Table, 'delimiter'>): number {
+  if (isFormula === undefined) return 0;
+  let count = 0;
+  rows.forEach((cells, row) => {
+    for (let column = 0; column < cells.length; column += 1) if (isFormula(row, column)) count += 1;
+  });
+  return count;
 }
 
 /** The upload rules' own codes; the tables of the command line keep theirs. */

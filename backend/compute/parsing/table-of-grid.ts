@@ -7,11 +7,18 @@ import { uniqueHeader } from './unique-header';
  * The long table that begins with a header row: a row a line, lines above the header left out.
  *
  * @param headerIndex  row of the grid that holds the column headers.
+ * @param width  columns of the table; as many as there are headers where it is left out.
  * @throws {TableError} 'csv-invalid' for a line with more filled cells than there are headers, with its place.
  */
-export function tableOfGrid(grid: Grid, headerIndex: number): Omit<Table, 'delimiter'> {
-  const headers = grid.rows[headerIndex];
-  const width = headers.length;
+export function tableOfGrid(
+  grid: Grid,
+  headerIndex: number,
+  width = grid.rows[headerIndex].length,
+): Omit<Table, 'delimiter'> {
+  const headers = Array.from(
+    { length: width },
+    (_, column) => grid.rows[headerIndex][column] ?? '',
+  );
   const lines = grid.lines.slice(headerIndex + 1);
   const rows = grid.rows.slice(headerIndex + 1).map((cells, row) => {
     if (cells.slice(width).some((cell) => cell.trim() !== '')) {
