@@ -1,15 +1,17 @@
-import { fork } from 'node:child_process';
+import { type ChildProcess, fork } from 'node:child_process';
+import type { FileRecipe, TableReading } from './file-recipe';
 import type {
-  ColumnChoice,
   FileCheck,
+  FilePanel,
   FilePreview,
-  FileRows,
+  PanelBlock,
   ParseAnswer,
   ParseRequest,
 } from './parse-messages';
+import { Turns } from './turns';
 
 const memoryLimitMb = 256;
-const timeLimitMs = 30_000;
+const usualTimeLimitMs = 30_000;
 const mostAtOnce = 2;
 
 /** A file that cannot be read, with the reader's code and its sentence for a person. */
@@ -23,88 +25,124 @@ export class ParseRefused extends Error {
   }
 }
 
-/** Reads uploads in a process of its own, with a limit on memory and time: a hostile file ends that process alone. */
+/**
+ * Reads uploads in a process of its own, with a limit on memory and time: a hostile file ends that process alone. Every
+ * call rejects with {ParseRefused}, or with the reason of a signal that is aborted, which ends the process too.
+ */
 export class ParseProcess {
-  #running = 0;
-  readonly #waiting: (() => void)[] = [];
+  readonly #turns = new Turns(mostAtOnce);
 
   /** @param childFile  path of the child's entry, TypeScript under tsx or the built file. */
-  constructor(private readonly childFile: string) {}
+  constructor(
+    private readonly childFile: string,
+    private readonly timeLimitMs = usualTimeLimitMs,
+  ) {}
 
-  /** @throws {ParseRefused} */
-  async preview(bytes: Uint8Array): Promise<FilePreview> {
-    const answer = await this.#ask({ kind: 'preview', bytes });
+  /** @param reading  null to have it recognised. */
+  async preview(
+    bytes: Uint8Array,
+    name: string,
+    reading: TableReading | null,
+    signal?: AbortSignal,
+  ): Promise<FilePreview> {
+    const answer = await this.#ask({ kind: 'preview', bytes, name, reading }, signal);
     return expectKind(answer, 'preview').preview;
   }
 
-  /** @throws {ParseRefused} */
-  async check(bytes: Uint8Array, choice: ColumnChoice): Promise<FileCheck> {
-    const answer = await this.#ask({ kind: 'check', bytes, choice });
+  /** @param current  the newest version of the panel that the file would become the next of. */
+  async check(
+    bytes: Uint8Array,
+    name: string,
+    recipe: FileRecipe,
+    current: PanelBlock | null,
+    signal?: AbortSignal,
+  ): Promise<FileCheck> {
+    const answer = await this.#ask({ kind: 'check', bytes, name, recipe, current }, signal);
     return expectKind(answer, 'check').check;
   }
 
-  /** @throws {ParseRefused} */
-  async read(bytes: Uint8Array, choice: ColumnChoice): Promise<FileRows> {
-    const answer = await this.#ask({ kind: 'read', bytes, choice });
-    return expectKind(answer, 'read').rows;
+  async read(
+    bytes: Uint8Array,
+    name: string,
+    recipe: FileRecipe,
+    signal?: AbortSignal,
+  ): Promise<FilePanel> {
+    const answer = await this.#ask({ kind: 'read', bytes, name, recipe }, signal);
+    return expectKind(answer, 'read').panel;
   }
 
-  async #ask(request: ParseRequest): Promise<ParseAnswer> {
-    if (this.#running >= mostAtOnce)
-      await new Promise<void>((resolve) => this.#waiting.push(resolve));
-    this.#running++;
-    try {
-      return await this.#run(request);
-    } finally {
-      this.#running--;
-      this.#waiting.shift()?.();
-    }
+  #ask(request: ParseRequest, signal?: AbortSignal): Promise<ParseAnswer> {
+    return this.#turns.take(() => this.#run(request, signal), signal);
   }
 
-  #run(request: ParseRequest): Promise<ParseAnswer> {
+  #run(request: ParseRequest, signal?: AbortSignal): Promise<ParseAnswer> {
     return new Promise((resolve, reject) => {
-      const child = fork(this.childFile, [], {
-        serialization: 'advanced',
-        stdio: ['ignore', 'ignore', 'inherit', 'ipc'],
-        env: { PATH: process.env['PATH'] },
-        execArgv: [
-          `--max-old-space-size=${memoryLimitMb}`,
-          ...(this.childFile.endsWith('.ts') ? ['--import', 'tsx'] : []),
-        ],
-      });
-      const timer = setTimeout(() => {
+      const child = this.#start();
+      const end = (reason: Error): void => {
         child.kill('SIGKILL');
-        reject(
-          new ParseRefused(
-            'parse_timeout',
-            `The file could not be read within ${timeLimitMs / 1000} seconds.`,
-          ),
-        );
-      }, timeLimitMs);
-      child.once('error', (error) => {
+        settle();
+        reject(reason);
+      };
+      const timer = setTimeout(() => {
+        end(tooSlow(this.timeLimitMs));
+      }, this.timeLimitMs);
+      const cancel = (): void => {
+        end(reasonOf(signal));
+      };
+      const settle = (): void => {
         clearTimeout(timer);
+        signal?.removeEventListener('abort', cancel);
+      };
+      signal?.addEventListener('abort', cancel);
+      child.once('error', (error) => {
+        settle();
         reject(error);
       });
       child.once('message', (answer: ParseAnswer) => {
-        clearTimeout(timer);
-        child.disconnect();
+        settle();
+        if (child.connected) child.disconnect();
         resolve(answer);
       });
-      child.once('exit', (code, signal) => {
-        clearTimeout(timer);
-        // Out of memory, the process aborts; any other end without an answer is a fault of ours.
-        if (signal === 'SIGABRT' || code === 134)
-          reject(
-            new ParseRefused(
-              'parse_memory',
-              `The file takes more than the ${memoryLimitMb} MB of memory allowed to read it.`,
-            ),
-          );
-        else reject(new Error(`the reader ended with status ${String(code)} and no answer`));
+      child.once('exit', (code, ending) => {
+        settle();
+        reject(endedWithoutAnswer(code, ending));
       });
-      child.send(request);
+      // A child that is gone before it has the whole file tells so by its exit.
+      child.send(request, () => undefined);
     });
   }
+
+  #start(): ChildProcess {
+    return fork(this.childFile, [], {
+      serialization: 'advanced',
+      stdio: ['ignore', 'ignore', 'inherit', 'ipc'],
+      env: { PATH: process.env['PATH'] },
+      execArgv: [
+        `--max-old-space-size=${memoryLimitMb}`,
+        ...(this.childFile.endsWith('.ts') ? ['--import', 'tsx'] : []),
+      ],
+    });
+  }
+}
+
+function tooSlow(limitMs: number): ParseRefused {
+  const detail = `The file could not be read within ${limitMs / 1000} seconds.`;
+  return new ParseRefused('parse_timeout', detail);
+}
+
+/** Out of memory, a process aborts or is killed by the system; any other end without an answer is a fault of ours. */
+function endedWithoutAnswer(code: number | null, ending: NodeJS.Signals | null): Error {
+  if (ending === 'SIGABRT' || ending === 'SIGKILL' || code === 134)
+    return new ParseRefused(
+      'parse_memory',
+      `The file takes more than the ${memoryLimitMb} MB of memory allowed to read it.`,
+    );
+  return new Error(`the reader ended with status ${String(code ?? ending)} and no answer`);
+}
+
+function reasonOf(signal: AbortSignal | undefined): Error {
+  const reason: unknown = signal?.reason;
+  return reason instanceof Error ? reason : new Error('reading the file was cancelled');
 }
 
 function expectKind<K extends ParseAnswer['kind']>(
