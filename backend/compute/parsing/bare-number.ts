@@ -10,6 +10,9 @@ export interface BareNumber {
 /** No number is longer; a text that is would take long to look through. */
 const longestNumber = 100;
 
+/** Most numbers begin and end with a digit. */
+const nothingAround = /^\d(?:.*\d)?$/su;
+
 /**
  * Takes off what stands around a number: one sign in front, behind or as brackets, one currency sign or code, one per
  * cent sign, in any order. What is left need not be a number.
@@ -17,7 +20,9 @@ const longestNumber = 100;
  * @param text  without blanks around it.
  */
 export function bareNumber(text: string): BareNumber {
-  if (text.length > longestNumber) return { digits: text, isNegative: false, isPercent: false };
+  if (text.length > longestNumber || nothingAround.test(text)) {
+    return { digits: text, isNegative: false, isPercent: false };
+  }
   let digits = text;
   let isNegative = false;
   let isPercent = false;

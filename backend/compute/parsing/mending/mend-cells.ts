@@ -16,13 +16,16 @@ export interface MendedTable {
 export function mendCells(table: Table, cells: readonly MendedCell[]): MendedTable {
   if (cells.length === 0) return { table, lost: [] };
   const mends = new Map(cells.map((cell) => [keyOf(cell.row, cell.column), cell]));
+  const lines = new Set(cells.map(({ row }) => row));
   const found = new Set<string>();
   const width = table.header.length;
   const mendedAt = new Set<number>();
   const rows = table.rows.map((cellsOfRow, row) => {
+    if (table.placeOf === undefined && !lines.has(table.lines[row])) return cellsOfRow;
     let copy: string[] | undefined;
     for (let column = 0; column < width; column++) {
       const { line, header } = placeOfCell(table, row, column);
+      if (!lines.has(line)) continue;
       const key = keyOf(line, header);
       const mend = mends.get(key);
       if (mend === undefined) continue;
