@@ -5,8 +5,9 @@ import { parseYear } from './parse-year';
 
 const rowsLookedAt = 30;
 const rowsBelow = 20;
-/** Of the cells of the widest row below, so many have a header. */
+/** Of the cells of the widest row below, so many have a header: at least, and where titles are in doubt. */
 const leastShareFilled = 0.6;
+const sureShareFilled = 0.9;
 const leastShareLabels = 0.7;
 
 /**
@@ -17,24 +18,39 @@ const leastShareLabels = 0.7;
  */
 export function findHeaderRow(grid: Grid): number | undefined {
   const last = Math.min(rowsLookedAt, grid.rows.length - 1);
-  for (let row = 0; row < last; row += 1) if (isHeader(grid, row)) return row;
-  return undefined;
+  let likely: number | undefined;
+  for (let row = 0; row < last; row += 1) {
+    const share = shareFilled(grid, row);
+    if (share < leastShareFilled || !hasLabelsAboveNumbers(grid, row)) continue;
+    if (share >= sureShareFilled) return row;
+    likely ??= row;
+  }
+  return likely;
 }
 
-function isHeader(grid: Grid, row: number): boolean {
+/** Filled cells of a row for each one of the widest row below; 0 for a single cell. */
+function shareFilled(grid: Grid, row: number): number {
+  const filled = filledCells(grid.rows[row]).length;
+  const widest = Math.max(...rowsUnder(grid, row).map((cells) => filledCells(cells).length));
+  return filled < 2 ? 0 : filled / widest;
+}
+
+function hasLabelsAboveNumbers(grid: Grid, row: number): boolean {
   const filled = filledCells(grid.rows[row]);
-  const below = grid.rows.slice(row + 1, row + 1 + rowsBelow);
-  const widest = Math.max(...below.map((cells) => filledCells(cells).length));
-  if (filled.length < Math.max(2, leastShareFilled * widest)) return false;
   const years = new Set(
     filled.map(({ text }) => yearIn(text)).filter((year) => year !== undefined),
   );
-  const labels = filled.filter(
-    ({ text }) => !isNumber(text) || (years.size > 1 && yearIn(text) !== undefined),
+  const labels = filled.filter(({ text }) =>
+    isNumber(text) ? years.size > 1 && yearIn(text) !== undefined : !isMissing(text),
   );
   if (labels.length < leastShareLabels * filled.length) return false;
-  const columns = labels.map(({ column }) => column);
-  return below.some((cells) => columns.some((column) => isNumber(cells[column] ?? '')));
+  return rowsUnder(grid, row).some((cells) =>
+    labels.some(({ column }) => isNumber(cells[column] ?? '')),
+  );
+}
+
+function rowsUnder(grid: Grid, row: number): Grid['rows'] {
+  return grid.rows.slice(row + 1, row + 1 + rowsBelow);
 }
 
 function filledCells(

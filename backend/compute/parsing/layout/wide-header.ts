@@ -28,7 +28,7 @@ export function wideHeader(grid: Grid, headerIndex: number): WideHeader {
   const above = headerIndex === 0 ? [] : grid.rows[headerIndex - 1];
   const below = grid.rows.slice(headerIndex + 1);
   const width = below.reduce((widest, cells) => Math.max(widest, cells.length), own.length);
-  const blocks = filledForward(above, width);
+  const blocks = blocksOver(own, above, width);
   const labels = Array.from({ length: width }, (_, column) =>
     labelOf((own[column] ?? '').trim(), blocks[column]),
   );
@@ -86,10 +86,18 @@ function yearsAboveThatRepeat(labels: readonly (FoundLabel | undefined)[]): Read
   return repeated;
 }
 
-function filledForward(cells: readonly string[], width: number): string[] {
-  let last = '';
+/** Names of blocks, filled forward. A title above a column without a year names none. */
+function blocksOver(
+  own: readonly string[],
+  above: readonly string[],
+  width: number,
+): readonly string[] {
+  let block = '';
   return Array.from({ length: width }, (_, column) => {
-    last = (cells[column] ?? '').trim() || last;
-    return last;
+    const text = (above[column] ?? '').trim();
+    if (text === '') return block;
+    const hasYear = [own[column] ?? '', text].some((it) => yearLabel(it)?.variable === '');
+    block = hasYear ? text : '';
+    return block;
   });
 }
