@@ -1,4 +1,4 @@
-import type { Kysely } from 'kysely';
+import { type Kysely, sql } from 'kysely';
 import type { Database } from '../schema/database';
 
 export interface StoredFileRow {
@@ -8,6 +8,9 @@ export interface StoredFileRow {
   readonly sha256: string;
   readonly content: Buffer;
 }
+
+/** Bytes a statement reads: a file in one piece keeps this process from answering others while it is decoded. */
+const sliceBytes = 1 << 20;
 
 /** Uploaded files, exactly as they came. */
 export class FilesRepository {
@@ -23,13 +26,26 @@ export class FilesRepository {
       .execute();
   }
 
-  find(id: string): Promise<StoredFileRow | undefined> {
-    return this.db
+  async find(id: string): Promise<StoredFileRow | undefined> {
+    const found = await this.db
       .selectFrom('storedFile')
-      .select(['id', 'name', 'byteSize', 'sha256', 'content'])
+      .select(['id', 'name', 'byteSize', 'sha256'])
       .where('workspaceId', '=', this.workspaceId)
       .where('id', '=', id)
       .executeTakeFirst();
+    return found === undefined ? undefined : { ...found, content: await this.#content(found) };
+  }
+
+  /** What the workspace's files take together. */
+  usage(): Promise<{ readonly files: number; readonly bytes: number }> {
+    return this.db
+      .selectFrom('storedFile')
+      .select(({ fn }) => [
+        fn.countAll<number>().as('files'),
+        sql<number>`coalesce(sum(byte_size), 0)::bigint`.as('bytes'),
+      ])
+      .where('workspaceId', '=', this.workspaceId)
+      .executeTakeFirstOrThrow();
   }
 
   async remove(id: string): Promise<void> {
@@ -38,5 +54,20 @@ export class FilesRepository {
       .where('workspaceId', '=', this.workspaceId)
       .where('id', '=', id)
       .execute();
+  }
+
+  /** The content is stored uncompressed, so that PostgreSQL reads a slice without the rest. */
+  async #content({ id, byteSize }: { id: string; byteSize: number }): Promise<Buffer> {
+    const content = Buffer.alloc(byteSize);
+    for (let start = 0; start < byteSize; start += sliceBytes) {
+      const slice = await this.db
+        .selectFrom('storedFile')
+        .select(sql<Buffer>`substring(content from ${start + 1} for ${sliceBytes})`.as('bytes'))
+        .where('workspaceId', '=', this.workspaceId)
+        .where('id', '=', id)
+        .executeTakeFirstOrThrow();
+      slice.bytes.copy(content, start);
+    }
+    return content;
   }
 }

@@ -6,8 +6,8 @@ export interface FlagDismissalRow {
   readonly id: string;
   readonly company: string;
   readonly year: number;
-  /** Position among the panel's columns. */
-  readonly columnIndex: number;
+  /** Position among the panel's columns; null where the whole row is meant. */
+  readonly columnIndex: number | null;
   readonly code: string;
   /** The cell's value when it was looked at. */
   readonly value: number | null;
@@ -23,7 +23,7 @@ export class FlagDismissalsRepository {
     private readonly workspaceId: string,
   ) {}
 
-  /** @throws {UniqueViolation} when the same flag of the cell is dismissed already. */
+  /** @throws {UniqueViolation} when the same flag of the cell, with the same value, is dismissed already. */
   async insert(
     dismissal: Omit<FlagDismissalRow, 'createdAt' | 'createdByName'> & {
       readonly panelId: string;
@@ -40,6 +40,28 @@ export class FlagDismissalsRepository {
 
   /** Of a panel, the newest first. */
   ofPanel(panelId: string): Promise<FlagDismissalRow[]> {
+    return this.#ofPanel(panelId)
+      .orderBy('flagDismissal.createdAt', 'desc')
+      .orderBy('flagDismissal.id')
+      .execute();
+  }
+
+  find(panelId: string, id: string): Promise<FlagDismissalRow | undefined> {
+    return this.#ofPanel(panelId).where('flagDismissal.id', '=', id).executeTakeFirst();
+  }
+
+  /** @returns false when the panel has no such dismissal. */
+  async remove(panelId: string, id: string): Promise<boolean> {
+    const result = await this.db
+      .deleteFrom('flagDismissal')
+      .where('workspaceId', '=', this.workspaceId)
+      .where('panelId', '=', panelId)
+      .where('id', '=', id)
+      .executeTakeFirst();
+    return result.numDeletedRows > 0n;
+  }
+
+  #ofPanel(panelId: string) {
     return this.db
       .selectFrom('flagDismissal')
       .innerJoin('person', 'person.id', 'flagDismissal.createdBy')
@@ -55,20 +77,6 @@ export class FlagDismissalsRepository {
         'person.name as createdByName',
       ])
       .where('flagDismissal.workspaceId', '=', this.workspaceId)
-      .where('flagDismissal.panelId', '=', panelId)
-      .orderBy('flagDismissal.createdAt', 'desc')
-      .orderBy('flagDismissal.id')
-      .execute();
-  }
-
-  /** @returns false when the panel has no such dismissal. */
-  async remove(panelId: string, id: string): Promise<boolean> {
-    const result = await this.db
-      .deleteFrom('flagDismissal')
-      .where('workspaceId', '=', this.workspaceId)
-      .where('panelId', '=', panelId)
-      .where('id', '=', id)
-      .executeTakeFirst();
-    return result.numDeletedRows > 0n;
+      .where('flagDismissal.panelId', '=', panelId);
   }
 }

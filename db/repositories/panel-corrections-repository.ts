@@ -11,6 +11,13 @@ export interface CorrectionRow {
   readonly source: string;
 }
 
+/** A row as one version holds it. */
+export interface RowInVersion {
+  readonly panelVersionId: string;
+  readonly cells: readonly (number | null)[];
+  readonly corrections: readonly Omit<CorrectionRow, 'company' | 'year'>[];
+}
+
 /** Why the cells of a corrected panel version differ from the version before. */
 export class PanelCorrectionsRepository {
   constructor(
@@ -43,5 +50,28 @@ export class PanelCorrectionsRepository {
       .orderBy('year')
       .orderBy('columnIndex')
       .execute();
+  }
+
+  /** A row in every version of the panel that has it, with the corrections that each of them made in it. */
+  async rowInVersions(
+    panelId: string,
+    { company, year }: { readonly company: string; readonly year: number },
+  ): Promise<RowInVersion[]> {
+    const { rows } = await sql<RowInVersion>`
+      select version.id as panel_version_id, held.cells,
+        coalesce((
+          select jsonb_agg(jsonb_build_object(
+            'columnIndex', made.column_index, 'reason', made.reason, 'source', made.source))
+          from panel_correction as made
+          where made.workspace_id = version.workspace_id and made.panel_version_id = version.id
+            and made.company = held.company and made.year = held.year
+        ), '[]') as corrections
+      from panel_version as version
+      join panel_row as held
+        on held.workspace_id = version.workspace_id and held.panel_version_id = version.id
+      where version.workspace_id = ${this.workspaceId} and version.panel_id = ${panelId}
+        and held.company = ${company} and held.year = ${year}
+      order by version.number`.execute(this.db);
+    return rows;
   }
 }

@@ -33,8 +33,6 @@ export interface PanelRows {
   readonly year: readonly number[];
   readonly fileRow: readonly number[];
   readonly cells: readonly (readonly (number | null)[])[];
-  /** Currency of each row in the file; null where the file names none by row. */
-  readonly currency: readonly (string | null)[];
 }
 
 /** The texts that describe a company, by header of the file. */
@@ -43,17 +41,38 @@ export interface CompanyAttributes {
   readonly attributes: Readonly<Record<string, string>>;
 }
 
-/** Rows a statement: large enough to be quick, small enough to keep the statement's text in bounds. */
-const insertBatch = 5000;
-
+/** Panels, their versions, and what describes their companies. */
 export class PanelsRepository {
   constructor(
     private readonly db: Kysely<Database>,
     private readonly workspaceId: string,
   ) {}
 
+  /** Makes whoever else adds a version to a panel of this name wait until the transaction ends. */
+  async lockName(name: string): Promise<void> {
+    const key = `${this.workspaceId} ${name}`;
+    await sql`select pg_advisory_xact_lock(hashtextextended(${key}, 0))`.execute(this.db);
+  }
+
   async insertPanel(id: string, name: string): Promise<void> {
     await this.db.insertInto('panel').values({ workspaceId: this.workspaceId, id, name }).execute();
+  }
+
+  /** The newest version of a panel. */
+  findLatest(panelId: string): Promise<PanelVersionRow | undefined> {
+    return this.versions()
+      .where('panelVersion.panelId', '=', panelId)
+      .orderBy('panelVersion.number', 'desc')
+      .limit(1)
+      .executeTakeFirst();
+  }
+
+  /** All versions of a panel, the first one first. */
+  versionsOfPanel(panelId: string): Promise<PanelVersionRow[]> {
+    return this.versions()
+      .where('panelVersion.panelId', '=', panelId)
+      .orderBy('panelVersion.number')
+      .execute();
   }
 
   /** The newest version of the panel with this name. */
@@ -95,27 +114,6 @@ export class PanelsRepository {
         workspaceId: this.workspaceId,
       })
       .execute();
-  }
-
-  /** Arrays in, one statement a batch: 200,000 rows as single inserts would take minutes. */
-  async insertRows(panelVersionId: string, rows: PanelRows): Promise<void> {
-    for (let start = 0; start < rows.company.length; start += insertBatch) {
-      const end = start + insertBatch;
-      const cells = rows.cells
-        .slice(start, end)
-        .map((row) => `{${row.map((cell) => (cell === null ? 'NULL' : String(cell))).join(',')}}`);
-      await sql`insert into panel_row (workspace_id, panel_version_id, company, year, file_row, cells,
-          currency)
-        select ${this.workspaceId}::uuid, ${panelVersionId}::uuid, company, year, file_row,
-          cells::double precision[], currency
-        from unnest(
-          ${rows.company.slice(start, end)}::text[],
-          ${rows.year.slice(start, end)}::integer[],
-          ${rows.fileRow.slice(start, end)}::integer[],
-          ${cells}::text[],
-          ${rows.currency.slice(start, end)}::text[]
-        ) as line(company, year, file_row, cells, currency)`.execute(this.db);
-    }
   }
 
   findVersion(id: string): Promise<PanelVersionRow | undefined> {
@@ -178,7 +176,7 @@ export class PanelsRepository {
   async rows(panelVersionId: string, companies?: readonly string[]): Promise<PanelRows> {
     let query = this.db
       .selectFrom('panelRow')
-      .select(['company', 'year', 'fileRow', 'cells', 'currency'])
+      .select(['company', 'year', 'fileRow', 'cells'])
       .where('workspaceId', '=', this.workspaceId)
       .where('panelVersionId', '=', panelVersionId);
     if (companies !== undefined)
@@ -189,7 +187,6 @@ export class PanelsRepository {
       year: found.map((row) => row.year),
       fileRow: found.map((row) => row.fileRow),
       cells: found.map((row) => row.cells),
-      currency: found.map((row) => row.currency),
     };
   }
 

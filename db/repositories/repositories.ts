@@ -12,7 +12,9 @@ import { FlagDismissalsRepository } from './flag-dismissals-repository';
 import { ImportsRepository } from './imports-repository';
 import { JobTicketsRepository } from './jobs-repository';
 import { MembersRepository } from './members-repository';
+import { PanelCopiesRepository } from './panel-copies-repository';
 import { PanelCorrectionsRepository } from './panel-corrections-repository';
+import { PanelRowsRepository } from './panel-rows-repository';
 import { PanelsRepository } from './panels-repository';
 import { PeersRepository } from './peers-repository';
 import { PeopleRepository, SignInThrottleRepository } from './people-repository';
@@ -27,6 +29,8 @@ export interface WorkspaceRepositories {
   readonly files: FilesRepository;
   readonly imports: ImportsRepository;
   readonly panels: PanelsRepository;
+  readonly panelRows: PanelRowsRepository;
+  readonly panelCopies: PanelCopiesRepository;
   readonly panelCorrections: PanelCorrectionsRepository;
   readonly flagDismissals: FlagDismissalsRepository;
   readonly peers: PeersRepository;
@@ -71,6 +75,8 @@ export class Repositories {
         files: new FilesRepository(trx, workspaceId),
         imports: new ImportsRepository(trx, workspaceId),
         panels: new PanelsRepository(trx, workspaceId),
+        panelRows: new PanelRowsRepository(trx, workspaceId),
+        panelCopies: new PanelCopiesRepository(trx, workspaceId),
         panelCorrections: new PanelCorrectionsRepository(trx, workspaceId),
         flagDismissals: new FlagDismissalsRepository(trx, workspaceId),
         peers: new PeersRepository(trx, workspaceId),

@@ -45,6 +45,8 @@ export interface PanelVersionTable {
   origin: Generated<PanelOrigin>;
   /** How the file became the panel; null of a version that no file was read for, and of early ones. */
   recipe: JSONColumnType<object> | null;
+  /** The older version that this one put back; null unless it is a restore. */
+  restoredId: string | null;
 }
 
 /** What made a version: a file, a set of corrections, or an older version put back. */
@@ -86,7 +88,8 @@ export interface FlagDismissalTable {
   panelId: string;
   company: string;
   year: number;
-  columnIndex: number;
+  /** Null where the whole row is meant. */
+  columnIndex: number | null;
   code: string;
   value: number | null;
   reason: string;
