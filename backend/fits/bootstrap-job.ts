@@ -4,7 +4,7 @@ import type { FitPool } from '../compute/fit-pool';
 import { randomDraws } from '../stats/slopes/bootstrap/sign-draws';
 import { findFit } from './fit-service';
 import { readSubject } from './fit-subject';
-import { watchedRun } from './watched-run';
+import { watchedRun } from '../jobs/watched-run';
 
 /** Works one queued bootstrap in the background thread and keeps its intervals with the fit. */
 export class BootstrapJob {

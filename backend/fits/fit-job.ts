@@ -6,7 +6,7 @@ import type { JobQueue } from '../jobs/job-queue';
 import { findFit } from './fit-service';
 import { readSubject } from './fit-subject';
 import type { FitFailure, FitProgress } from './fit-view';
-import { watchedRun } from './watched-run';
+import { watchedRun } from '../jobs/watched-run';
 
 /** Works one queued fit: has a worker thread estimate, keeps the result and queues the evidence with it. */
 export class FitJob {
