@@ -16,6 +16,7 @@ import { seatRoutes } from './billing/seat-routes';
 import { deskRoutes } from './board/desk-routes';
 import { editionRoutes } from './board/edition-routes';
 import type { Services } from './compose';
+import { apiRoutes } from './contract';
 import { AppError, Conflict, Invalid, NotFound, Unavailable } from './errors/app-error';
 import { evidenceRoutes } from './fits/evidence-routes';
 import { fitRoutes } from './fits/fit-routes';
@@ -23,10 +24,14 @@ import { replicationRoutes } from './fits/replication/replication-routes';
 import { applicationPage } from './http/application-page';
 import { CrossSiteGuard } from './http/cross-site';
 import { health } from './http/health';
+import { largeBody } from './http/large-body';
 import { problemHandler } from './http/problem-handler';
 import { requestLog } from './http/request-id';
 import { securityHeaders } from './http/security-headers';
 import { sessions, type SessionPool } from './http/session';
+import { correctionRoutes } from './panels/correction-routes';
+import { exportRoutes } from './panels/export-routes';
+import { importRoutes } from './panels/import-routes';
 import { panelRoutes } from './panels/panel-routes';
 import { peerRoutes } from './peers/peer-routes';
 import { scenarioRoutes } from './scenarios/scenario-routes';
@@ -83,6 +88,7 @@ export function createApp(options: AppOptions): Express {
   );
   app.use('/api', authenticator.session() as RequestHandler, loadMember(services.repositories));
   app.use('/api', crossSite.check);
+  app.use(largeBody(apiRoutes.saveCorrections, '16mb'));
   app.use(express.json({ limit: '2mb' }));
   app.use(
     accountRoutes({
@@ -94,7 +100,10 @@ export function createApp(options: AppOptions): Express {
     }),
   );
   app.use(memberRoutes(services.members, now));
-  app.use(panelRoutes(services.imports, services.panels, services.samplePanel));
+  app.use(importRoutes(services.imports, services.commits, services.samplePanel));
+  app.use(panelRoutes(services.panels));
+  app.use(correctionRoutes(services));
+  app.use(exportRoutes(services.exports));
   app.use(peerRoutes(services.peers));
   app.use(fitRoutes(services.fits, services.lineage, now));
   app.use(evidenceRoutes(services.evidence, services.bootstraps, now));

@@ -25,7 +25,13 @@ import { LineageService } from './fits/lineage-service';
 import { ReplicationService } from './fits/replication/replication-service';
 import type { SessionPool } from './http/session';
 import { JobQueue } from './jobs/job-queue';
+import { CorrectionService } from './panels/correction-service';
+import { FlagDismissalService } from './panels/flag-dismissal-service';
+import { ImportCommitService } from './panels/import-commit-service';
+import { ImportJob } from './panels/import-job';
 import { ImportService } from './panels/import-service';
+import { PanelExportService } from './panels/panel-export-service';
+import { PanelHistoryService } from './panels/panel-history-service';
 import { PanelService } from './panels/panel-service';
 import { readSamplePanel, type SamplePanel } from './panels/sample-panel';
 import { PeerService } from './peers/peer-service';
@@ -47,7 +53,12 @@ export interface Services {
   readonly accounts: AccountService;
   readonly members: MemberService;
   readonly imports: ImportService;
+  readonly commits: ImportCommitService;
   readonly panels: PanelService;
+  readonly corrections: CorrectionService;
+  readonly history: PanelHistoryService;
+  readonly dismissals: FlagDismissalService;
+  readonly exports: PanelExportService;
   readonly samplePanel: SamplePanel;
   readonly peers: PeerService;
   readonly fits: FitService;
@@ -91,7 +102,7 @@ export function compose(options: ComposeOptions): Composition {
   const webPool = pool('kinvale-web', 10, 15_000);
   const sessionPool = pool('kinvale-session', 4, 15_000);
   const queuePool = pool('kinvale-queue', 3, 120_000);
-  const workPool = pool('kinvale-work', 3, 120_000);
+  const workPool = pool('kinvale-work', 5, 120_000);
 
   const repositories = new Repositories(createDatabase(webPool));
   const workRepositories = new Repositories(createDatabase(workPool));
@@ -121,7 +132,12 @@ export function compose(options: ComposeOptions): Composition {
       accounts,
       members: new MemberService({ repositories, passwords, accounts, now }),
       imports: new ImportService(repositories, parser),
+      commits: new ImportCommitService(repositories, queue),
       panels: new PanelService(repositories),
+      corrections: new CorrectionService(repositories),
+      history: new PanelHistoryService(repositories),
+      dismissals: new FlagDismissalService(repositories),
+      exports: new PanelExportService(repositories),
       samplePanel: readSamplePanel(options.backendFolder),
       peers: new PeerService(repositories),
       fits: new FitService(repositories, queue),
@@ -159,6 +175,12 @@ export function compose(options: ComposeOptions): Composition {
         'bootstrap',
         (ticket) => bootstrapJob.run(ticket),
         (ticket) => bootstrapJob.giveUp(ticket),
+      );
+      const importJob = new ImportJob(workRepositories, parser);
+      await queue.work(
+        'import',
+        (ticket) => importJob.run(ticket),
+        (ticket) => importJob.giveUp(ticket),
       );
       await queue.work('open-billing-account', workOpenBillingAccount(billing));
     },

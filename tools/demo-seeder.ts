@@ -1,5 +1,5 @@
 import type { Services } from '../backend/compose';
-import type { Role } from '../backend/contract';
+import { ImportMapping, type Role } from '../backend/contract';
 import {
   demoCurrency,
   demoOwnCompany,
@@ -80,12 +80,12 @@ export class DemoSeeder {
   }
 
   async #panel(analyst: Actor): Promise<string> {
-    const { imports, panels } = this.services;
+    const { imports, commits, panels } = this.services;
     const existing = (await panels.list(analyst.workspaceId))[0];
     if (existing !== undefined) return existing.id;
     const csv = Buffer.from(demoPanelCsv());
     const draft = await imports.upload(analyst, 'flow-control-peers-FY2025.csv', csv);
-    await imports.check(analyst.workspaceId, draft.id, {
+    const mapping = ImportMapping.parse({
       panelName: 'Flow control peers',
       company: 'company',
       year: 'fiscal_year',
@@ -96,7 +96,8 @@ export class DemoSeeder {
       currency: demoCurrency,
       unit: demoUnit,
     });
-    return imports.commit(
+    await imports.check(analyst.workspaceId, draft.id, mapping);
+    return commits.finish(
       analyst,
       draft.id,
       'Annual reports up to FY2025; market value at each fiscal year end.',

@@ -14,6 +14,7 @@ export const problemSlugs = [
   'type-not-allowed',
   'unreadable-file',
   'too-many-requests',
+  'quota',
   'unavailable',
   'internal',
   'four-eyes',

@@ -76,8 +76,9 @@ export class TooManyRequests extends AppError {
   constructor(
     detail: string,
     readonly retryAfterSeconds: number,
+    slug: ProblemSlug = 'too-many-requests',
   ) {
-    super('too-many-requests', 429, detail);
+    super(slug, 429, detail);
   }
 }
 

@@ -16,6 +16,7 @@ const titles: Readonly<Record<ProblemSlug, string>> = {
   'type-not-allowed': 'This kind of file is not taken',
   'unreadable-file': 'The file cannot be read',
   'too-many-requests': 'Too many requests',
+  quota: 'As much as the workspace may have',
   unavailable: 'Not available just now',
   internal: 'Something went wrong on our side',
   'four-eyes': 'Four eyes: another person has to sign',

@@ -1,7 +1,14 @@
 import type { TestDatabase } from '../../db/testing/test-database';
 import type { ImportReply, PanelVersionReply, PanelVersionsReply } from '../contract';
 import { signUp, type TestClient } from '../testing/test-client';
-import { idOf, importPanel, referenceMapping, referencePanel } from '../testing/test-model';
+import {
+  commitImport,
+  idOf,
+  importPanel,
+  importThatEnded,
+  referenceMapping,
+  referencePanel,
+} from '../testing/test-model';
 import { createMigratedDatabase, startTestServer, type TestServer } from '../testing/test-server';
 
 describe('imports', () => {
@@ -40,15 +47,18 @@ describe('imports', () => {
       row: 2,
       cells: ['C01', '1935', '2.938', '30.284', '52.011'],
     });
-    expect(reply.mapping).toEqual({
-      panelName: 'my panel',
-      company: 'company',
-      year: 'year',
-      marketValue: 'value',
-      capex: 'inv',
-      bookEquity: 'capital',
-      others: [],
-    });
+    expect(reply.mapping).toEqual(
+      jasmine.objectContaining({
+        panelName: 'my panel',
+        company: 'company',
+        year: 'year',
+        marketValue: 'value',
+        capex: 'inv',
+        bookEquity: 'capital',
+        reading: reply.reading,
+      }),
+    );
+    expect([reply.sheets, reply.reading.headerRow, reply.state]).toEqual([[], 1, 'mapped']);
   });
 
   it('say row by row what was found, and do not commit while something blocks', async () => {
@@ -77,10 +87,24 @@ describe('imports', () => {
         analyst.post(`/api/imports/${reply.id}/commit`, { note: 'first' }),
       ),
     );
-    expect(new Set(commits.map((commit) => idOf(commit, 201))).size).toBe(1);
-    await importPanel(analyst);
+    for (const commit of commits) expect(idOf(commit, 202)).toBe(reply.id);
+    const ended = await importThatEnded(analyst, reply.id);
+    const again = await analyst.post(`/api/imports/${reply.id}/commit`, { note: 'again' });
+    expect((again.body as ImportReply).panelVersionId).toBe(ended.panelVersionId);
+    const next = await importPanel(analyst);
     const { versions } = (await analyst.get('/api/panel-versions')).body as PanelVersionsReply;
-    expect(versions.map(({ number }) => number)).toEqual([2, 1]);
+    expect(
+      versions.map(({ id, number, parentId, origin, note }) => [
+        id,
+        number,
+        parentId,
+        origin,
+        note,
+      ]),
+    ).toEqual([
+      [next, 2, ended.panelVersionId, 'import', 'first'],
+      [ended.panelVersionId ?? '', 1, null, 'import', 'first'],
+    ]);
     expect((await analyst.delete(`/api/imports/${reply.id}`)).status).toBe(409);
   });
 
@@ -100,16 +124,22 @@ describe('imports', () => {
     const sample = (await analyst.post('/api/imports/sample')).body as ImportReply;
     expect(sample.check?.blockingCount).toBe(0);
     expect(sample.check?.companies).toBe(14);
-    expect((await analyst.post(`/api/imports/${sample.id}/commit`, { note: '' })).status).toBe(201);
+    expect(await commitImport(analyst, sample.id)).toMatch(/^[0-9a-f-]{36}$/);
   });
 
   it('refuse what is no CSV, what is too large, and what is no table, each in its own words', async () => {
     expect((await analyst.upload('/api/imports', 'panel.exe', 'x')).status).toBe(415);
     const large = Buffer.alloc(40 * 1024 * 1024 + 1, 'x');
     expect((await analyst.upload('/api/imports', 'panel.csv', large)).status).toBe(413);
-    for (const content of ['', 'a,b\n\0,1\n', `company,year\n${'x'.repeat(70_000)},1\n`]) {
+    const refusals: readonly (readonly [string, number, string])[] = [
+      ['', 422, 'csv_invalid'],
+      ['a,b\n\0,1\n', 415, 'type_not_allowed'],
+      [`company,year\n${'x'.repeat(70_000)},1\n`, 422, 'csv_invalid'],
+    ];
+    for (const [content, status, code] of refusals) {
       const reply = await analyst.upload('/api/imports', 'panel.csv', content);
-      expect(reply.status).withContext(content.slice(0, 20)).toBe(422);
+      expect(reply.status).withContext(content.slice(0, 20)).toBe(status);
+      expect((reply.body as { code: string }).code).toBe(code);
       expect((reply.body as { detail: string }).detail.length).toBeGreaterThan(20);
     }
     expect((await analyst.get('/api/session')).status).toBe(200);

@@ -1,11 +1,13 @@
 import type { PanelRows, PanelVersionRow } from '../../db/repositories/panels-repository';
-import type { ImportReply, PanelVersionReply, PanelVersionSummary } from '../contract';
-import type { ImportDraft } from './import-service';
+import type { PanelCompaniesReply, PanelVersionReply, PanelVersionSummary } from '../contract';
+import type { CompanySummary } from './company-summaries';
 
 export function toPanelVersionSummary(row: PanelVersionRow): PanelVersionSummary {
   return {
     id: row.id,
     panelId: row.panelId,
+    parentId: row.parentId,
+    origin: row.origin,
     panelName: row.panelName,
     number: row.number,
     currency: row.currency,
@@ -41,18 +43,12 @@ export function toPanelVersionReply(version: PanelVersionRow, rows: PanelRows): 
   };
 }
 
-export function toImportReply(draft: ImportDraft): ImportReply {
-  const { preview, mapping, check } = draft;
+export function toPanelCompaniesReply(companies: readonly CompanySummary[]): PanelCompaniesReply {
   return {
-    id: draft.id,
-    fileName: draft.fileName,
-    byteSize: draft.byteSize,
-    state: draft.state,
-    headers: [...preview.headers],
-    firstRows: preview.firstRows.map(({ row, cells }) => ({ row, cells: [...cells] })),
-    rowCount: preview.rowCount,
-    mapping: { ...mapping, others: [...(mapping.others ?? [])] },
-    check: check === null ? null : { ...check, findings: [...check.findings] },
-    panelVersionId: draft.panelVersionId,
+    companies: companies.map((company) => ({
+      ...company,
+      attributes: { ...company.attributes },
+      measures: { ...company.measures, others: { ...company.measures.others } },
+    })),
   };
 }

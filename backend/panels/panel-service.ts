@@ -2,18 +2,8 @@ import type { PanelRows, PanelVersionRow } from '../../db/repositories/panels-re
 import type { Repositories } from '../../db/repositories/repositories';
 import { record } from '../activity/activity';
 import { NotFound } from '../errors/app-error';
-import type { Actor } from './import-service';
-
-export interface CompanySummary {
-  readonly name: string;
-  readonly rows: number;
-  readonly completeRows: number;
-  readonly firstYear: number;
-  readonly lastYear: number;
-  readonly marketValue: number | null;
-  readonly capex: number | null;
-  readonly bookEquity: number | null;
-}
+import { type CompanySummary, companySummaries } from './company-summaries';
+import type { Actor } from './import-draft';
 
 /** Panel versions and what is in them. */
 export class PanelService {
@@ -47,14 +37,13 @@ export class PanelService {
 
   /** One summary a company, in order of name. @throws {NotFound} */
   async companies(workspaceId: string, id: string): Promise<readonly CompanySummary[]> {
-    const { rows } = await this.rows(workspaceId, id);
-    const byName = new Map<string, number[]>();
-    rows.company.forEach((name, row) => {
-      const known = byName.get(name);
-      if (known === undefined) byName.set(name, [row]);
-      else known.push(row);
+    const version = await this.version(workspaceId, id);
+    return this.repositories.inWorkspace(workspaceId, async (tx) => {
+      const rows = await tx.panelRows.block(id, version.columns.length);
+      const described = await tx.panels.companyAttributes(id);
+      const attributes = new Map(described.map((row) => [row.company, row.attributes]));
+      return companySummaries(version, rows, attributes);
     });
-    return [...byName].map(([name, indices]) => summarise(name, indices, rows));
   }
 
   /** The file as it was uploaded. @throws {NotFound} */
@@ -69,29 +58,4 @@ export class PanelService {
       return { name: file.name, content: file.content };
     });
   }
-}
-
-/** The model's three columns come first in a panel's cells. */
-const modelColumns = [0, 1, 2] as const;
-
-function summarise(name: string, indices: readonly number[], rows: PanelRows): CompanySummary {
-  const last = (column: number): number | null => {
-    for (const row of [...indices].reverse()) {
-      const value = rows.cells[row][column];
-      if (value !== null) return value;
-    }
-    return null;
-  };
-  return {
-    name,
-    rows: indices.length,
-    completeRows: indices.filter((row) =>
-      modelColumns.every((column) => rows.cells[row][column] !== null),
-    ).length,
-    firstYear: rows.year[indices[0]],
-    lastYear: rows.year[indices[indices.length - 1]],
-    marketValue: last(0),
-    capex: last(1),
-    bookEquity: last(2),
-  };
 }

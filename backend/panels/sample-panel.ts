@@ -1,11 +1,11 @@
 import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
-import type { PanelMapping } from './import-service';
 
 export interface SamplePanel {
   readonly name: string;
   readonly bytes: Buffer;
-  readonly mapping: PanelMapping;
+  /** An import's mapping as a request gives it. */
+  readonly mapping: object;
 }
 
 /** The invented panel that an empty workspace can open; written by `npm run write-sample`. */

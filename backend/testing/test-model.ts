@@ -1,5 +1,5 @@
 import { readFileSync } from 'node:fs';
-import type { FitReply, StartFit } from '../contract';
+import type { FitReply, ImportReply, StartFit } from '../contract';
 import type { TestClient } from './test-client';
 
 /** Market value on investment and capital stock of 11 companies, 1935 to 1954: open data, see stats/golden. */
@@ -32,7 +32,30 @@ export async function importPanel(
   const importId = idOf(uploaded, 201);
   const checked = await analyst.put(`/api/imports/${importId}/mapping`, mapping);
   idOf(checked, 200);
-  return idOf(await analyst.post(`/api/imports/${importId}/commit`, { note: 'first' }), 201);
+  return commitImport(analyst, importId, 'first');
+}
+
+/** Commits a checked import and waits for its panel version, at most 30 seconds. @returns the version's id. */
+export async function commitImport(
+  analyst: TestClient,
+  importId: string,
+  note = '',
+): Promise<string> {
+  idOf(await analyst.post(`/api/imports/${importId}/commit`, { note }), 202);
+  const ended = await importThatEnded(analyst, importId);
+  if (ended.panelVersionId === null)
+    throw new Error(`the import ended ${ended.state}: ${ended.failure ?? ''}`);
+  return ended.panelVersionId;
+}
+
+/** Waits for an import that is being committed, at most 30 seconds. */
+export async function importThatEnded(analyst: TestClient, importId: string): Promise<ImportReply> {
+  for (const until = Date.now() + 30_000; Date.now() < until;) {
+    const found = (await analyst.get(`/api/imports/${importId}`)).body as ImportReply;
+    if (found.state !== 'committing') return found;
+    await new Promise((resolve) => setTimeout(resolve, 50));
+  }
+  throw new Error('the import did not end within 30 seconds');
 }
 
 /** Saves a peer group of the own company and all others, each with a reason. */

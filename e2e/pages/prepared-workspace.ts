@@ -6,7 +6,6 @@ import {
   ImportReply,
   InvitationCreated,
   PanelCompaniesReply,
-  PanelVersionSummary,
   PeerGroupReply,
   type Role,
   apiRoutes,
@@ -14,6 +13,7 @@ import {
 import type { Account } from './demo-accounts';
 
 const ownCompany = 'Velmara';
+const longestImportMs = 30_000;
 const longestFitMs = 60_000;
 
 /**
@@ -47,12 +47,7 @@ export class PreparedWorkspace {
 
   /** The sample panel, everybody in as a peer, and a fit that is done. @returns the fit's id. */
   async fitSample(): Promise<string> {
-    const draft = ImportReply.parse(await this.#call(apiRoutes.useSample));
-    const committed = await this.#call(apiRoutes.commitImport, {
-      path: { importId: draft.id },
-      body: { note: '' },
-    });
-    const panelVersionId = PanelVersionSummary.parse(committed).id;
+    const panelVersionId = await this.#importSample();
     const { companies } = PanelCompaniesReply.parse(
       await this.#call(apiRoutes.readPanelCompanies, { path: { panelVersionId } }),
     );
@@ -63,6 +58,20 @@ export class PreparedWorkspace {
       body: { panelVersionId, ownCompany, note: '', parentId: null, peers },
     });
     return this.#fit(PeerGroupReply.parse(saved).id);
+  }
+
+  async #importSample(): Promise<string> {
+    const { id: importId } = ImportReply.parse(await this.#call(apiRoutes.useSample));
+    await this.#call(apiRoutes.commitImport, { path: { importId }, body: { note: '' } });
+    const until = Date.now() + longestImportMs;
+    while (Date.now() < until) {
+      const reply = await this.#call(apiRoutes.readImport, { path: { importId } });
+      const { state, failure, panelVersionId } = ImportReply.parse(reply);
+      if (panelVersionId !== null) return panelVersionId;
+      if (state !== 'committing') throw new Error(`the import ended ${state}: ${failure ?? ''}`);
+      await pause(100);
+    }
+    throw new Error('the import did not end in time');
   }
 
   async #fit(peerGroupId: string): Promise<string> {

@@ -1,0 +1,115 @@
+import { randomUUID } from 'node:crypto';
+import { UniqueViolation } from '../../db/errors';
+import type { FlagDismissalRow } from '../../db/repositories/flag-dismissals-repository';
+import type { PanelVersionRow } from '../../db/repositories/panels-repository';
+import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
+import { record } from '../activity/activity';
+import { Conflict, Invalid, NotFound } from '../errors/app-error';
+import type { FlagCode } from '../panel-data';
+import type { Actor } from './import-draft';
+
+export interface NewDismissal {
+  readonly company: string;
+  readonly year: number;
+  /** Position among the columns; null where the whole row is meant. */
+  readonly column: number | null;
+  readonly code: FlagCode;
+  /** The cell's value when it was looked at. */
+  readonly value: number | null;
+  readonly reason: string;
+}
+
+/** Flags that somebody looked at and found to be right as they are. */
+export class FlagDismissalService {
+  constructor(private readonly repositories: Repositories) {}
+
+  /** The newest first. @throws {NotFound} */
+  async list(workspaceId: string, panelId: string): Promise<readonly FlagDismissalRow[]> {
+    return this.repositories.inWorkspace(workspaceId, async (tx) => {
+      await findNewest(tx, panelId);
+      return tx.flagDismissals.ofPanel(panelId);
+    });
+  }
+
+  /**
+   * @throws {NotFound}; {Invalid} for a place that the newest version does not have; {Conflict} when the cell holds
+   *   another value by now, or the flag is dismissed already.
+   */
+  async dismiss(
+    actor: Actor,
+    panelId: string,
+    { column, ...dismissal }: NewDismissal,
+  ): Promise<FlagDismissalRow> {
+    const id = randomUUID();
+    return this.repositories
+      .inWorkspace(actor.workspaceId, async (tx) => {
+        const newest = await findNewest(tx, panelId);
+        await assertCurrent(tx, newest, { column, ...dismissal });
+        const createdBy = actor.personId;
+        const row = { id, panelId, createdBy, columnIndex: column, ...dismissal };
+        await tx.flagDismissals.insert(row);
+        const { reason: _, ...what } = dismissal;
+        await record(tx, actor.personId, 'flag-dismissed', id, { panelId, column, ...what });
+        return findDismissal(tx, panelId, id);
+      })
+      .catch((error: unknown) => {
+        if (error instanceof UniqueViolation)
+          throw new Conflict('This flag is dismissed already, with this value.');
+        throw error;
+      });
+  }
+
+  /** @throws {NotFound} */
+  async takeBack(actor: Actor, panelId: string, id: string): Promise<void> {
+    await this.repositories.inWorkspace(actor.workspaceId, async (tx) => {
+      const { company, year, columnIndex, code } = await findDismissal(tx, panelId, id);
+      await tx.flagDismissals.remove(panelId, id);
+      const what = { panelId, company, year, column: columnIndex, code };
+      await record(tx, actor.personId, 'flag-dismissal-taken-back', id, what);
+    });
+  }
+}
+
+async function findNewest(tx: WorkspaceRepositories, panelId: string): Promise<PanelVersionRow> {
+  const newest = await tx.panels.findLatest(panelId);
+  if (newest === undefined) throw new NotFound('There is no such panel.');
+  return newest;
+}
+
+async function findDismissal(
+  tx: WorkspaceRepositories,
+  panelId: string,
+  id: string,
+): Promise<FlagDismissalRow> {
+  const found = await tx.flagDismissals.find(panelId, id);
+  if (found === undefined) throw new NotFound('There is no such dismissal.');
+  return found;
+}
+
+async function assertCurrent(
+  tx: WorkspaceRepositories,
+  { id, number, columns }: PanelVersionRow,
+  { company, year, column, code, value }: NewDismissal,
+): Promise<void> {
+  const [row] = await tx.panelCopies.rowsAt(id, [{ company, year }]);
+  if ((code === 'year-gap') !== (column === null))
+    throw new Invalid('A gap between years is of a whole row; every other flag is of one cell.');
+  if (column === null) {
+    if (row !== undefined)
+      throw new Conflict(`The panel has a row ${company} ${year} by now: it is no gap.`);
+    if (value !== null) throw new Invalid(`Expected no value of a whole row; found ${value}.`);
+    if (!(await tx.panels.companyNames(id)).includes(company))
+      throw new Invalid(`Expected a company of the panel; found “${company}”.`);
+    return;
+  }
+  if (row === undefined) throw new Invalid(`The panel has no row ${company} ${year}.`);
+  if (column >= columns.length)
+    throw new Invalid(
+      `Expected one of ${columns.length} columns, counted from 0; found ${column}.`,
+    );
+  const held = row.cells[column];
+  if (held !== value)
+    throw new Conflict(
+      `“${columns[column].name}” of ${company} ${year} is ${held ?? 'missing'} in version ${number}; it was ${value ?? 'missing'} when you looked at it.`,
+    );
+}
