@@ -4,7 +4,13 @@ import PgBoss from 'pg-boss';
 export const queueSchema = 'pgboss';
 
 /** Queues that the application works; made at migration, since making one changes the schema. */
-export const queueNames = ['fit', 'evidence', 'bootstrap', 'import', 'open-billing-account'] as const;
+export const queueNames = [
+  'fit',
+  'evidence',
+  'bootstrap',
+  'import',
+  'open-billing-account',
+] as const;
 export type QueueName = (typeof queueNames)[number];
 
 interface OwnerSql {
