@@ -163,6 +163,41 @@ describe('checkFile', () => {
     expect(result.formulaCells).toBe(2);
   });
 
+  it('refuses a name too long for one, and years of fewer than four digits', () => {
+    const table = tableOf(
+      plainHeader,
+      ['N'.repeat(201), '2020', '1', '2', '3'],
+      ['N'.repeat(200), '2020', '1', '2', '3'],
+      ['A', '20', '1', '2', '3'],
+    );
+    const result = check(table);
+    expect(result.findings.map(({ row, code, isBlocking }) => [row, code, isBlocking])).toEqual([
+      [2, 'no-company', true],
+      [4, 'year', true],
+    ]);
+    expect(result.rows).toBe(1);
+  });
+
+  it('knows the year-end of a company by any of its names', () => {
+    const table = tableOf(
+      plainHeader,
+      ['A', '2020', '1', '2', '3'],
+      ['Alpha', '2022', '1', '2', '3'],
+    );
+    const result = check(table, {
+      mending: { ...mending, renames: [{ from: 'A', to: 'Alpha' }] },
+      conversion: {
+        ...plainRecipe.conversion,
+        fiscalYears: {
+          rule: 'year-of-most-months',
+          usualEndMonth: 12,
+          companies: [{ company: 'A', endMonth: 3 }],
+        },
+      },
+    });
+    expect(result.firstRows.map(({ year }) => year)).toEqual([2019, 2021]);
+  });
+
   it('says that there is nothing in a table without usable rows', () => {
     expect(check(tableOf(plainHeader))).toEqual(
       jasmine.objectContaining({ companies: 0, firstYear: null, lastYear: null, firstRows: [] }),

@@ -14,7 +14,10 @@ export class CompanyCodes {
   constructor(terms: ReadingTerms) {
     this.#terms = terms;
     this.#monthOf = new Map(
-      terms.fiscalYears.companies.map(({ company, endMonth }) => [company, endMonth]),
+      terms.fiscalYears.companies.map(({ company, endMonth }) => [
+        terms.companyOf(company),
+        endMonth,
+      ]),
     );
   }
 

@@ -14,6 +14,8 @@ export interface TablePanel extends Omit<PanelReading, 'numbers'>, ConvertedPane
 
 /** Fiscal years of a panel have four digits. */
 const earliestYear = 1000;
+/** As renames and corrections allow. */
+const longestName = 200;
 
 /**
  * Takes a table through a recipe: mended, read, converted.
@@ -30,6 +32,7 @@ export function panelOfTable(table: Table, recipe: FileRecipe, findings: Finding
     fiscalYears: conversion.fiscalYears,
     companyOf: companyNames(mending.renames),
     earliestYear,
+    longestName,
   };
   const { company, year } = recipe;
   const mapping = { company, year, numbers: numericColumns(recipe) };

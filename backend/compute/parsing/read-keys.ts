@@ -31,20 +31,21 @@ export function readKeys(
   const fiscalYearOf = readYears(table, yearIndex, terms, findings);
   const codes = new CompanyCodes(terms);
   const rows = table.rows.length;
-  const company = new Int32Array(rows);
+  const codeOfRow = new Int32Array(rows);
   const year = new Int32Array(rows);
   const fiscalEnd = new Int32Array(rows);
   const tableRow = new Int32Array(rows);
   let placed = 0;
   for (let row = 0; row < rows; row++) {
-    const hasCompany = !isMissing(table.rows[row][companyIndex]);
+    const company = table.rows[row][companyIndex];
+    const fault = companyFault(company, terms);
     const fiscalYear = fiscalYearOf(table.rows[row][yearIndex]);
-    if (!hasCompany) findings.add(findingAt(table, row, companyIndex, noCompany));
+    if (fault !== undefined) findings.add(findingAt(table, row, companyIndex, fault));
     if (fiscalYear === undefined) findings.add(findingAt(table, row, yearIndex, noYearAtAll));
     else if (fiscalYear === null) findings.add(findingAt(table, row, yearIndex, missingYear));
-    else if (hasCompany) {
-      const code = codes.codeOf(table.rows[row][companyIndex]);
-      company[placed] = code;
+    else if (fault === undefined) {
+      const code = codes.codeOf(company);
+      codeOfRow[placed] = code;
       year[placed] = calendarYear(fiscalYear, terms.fiscalYears.rule, codes.endMonths[code]);
       fiscalEnd[placed] = 16 * fiscalYear.endYear + (fiscalYear.endMonth ?? 0);
       tableRow[placed] = row;
@@ -53,11 +54,17 @@ export function readKeys(
   }
   return {
     companies: codes.companies,
-    company: company.slice(0, placed),
+    company: codeOfRow.slice(0, placed),
     year: year.slice(0, placed),
     fiscalEnd: fiscalEnd.slice(0, placed),
     tableRow: tableRow.slice(0, placed),
   };
+}
+
+/** Why a text names no company. */
+function companyFault(text: string, { longestName }: ReadingTerms): CellRemark | undefined {
+  if (isMissing(text)) return noCompany;
+  return text.trim().length > longestName ? longName(longestName) : undefined;
 }
 
 type YearReader = (text: string) => FiscalYear | null | undefined;
@@ -103,6 +110,11 @@ const noCompany: CellRemark = {
   detail: 'No company is named: the row is left out.',
   isBlocking: false,
 };
+function longName(most: number): CellRemark {
+  const detail = `Expected a company’s name of at most ${most} characters.`;
+  return { code: 'no-company', detail, isBlocking: true };
+}
+
 const noYearAtAll: CellRemark = {
   code: 'year',
   detail: 'Expected a fiscal year, as 2023, FY2023, 2022/23 or the date of its end.',

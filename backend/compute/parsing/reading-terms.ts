@@ -8,6 +8,8 @@ export interface ReadingTerms {
   readonly companyOf: (text: string) => string;
   /** Years before this are no fiscal years. */
   readonly earliestYear: number;
+  /** Characters of a company's name. */
+  readonly longestName: number;
 }
 
 /** Cells speak for themselves: names as they stand, a fiscal year by its end, small numbers as years too. */
@@ -16,4 +18,5 @@ export const plainTerms: ReadingTerms = {
   fiscalYears: { rule: 'year-of-end', usualEndMonth: 12, companies: [] },
   companyOf: (text) => text,
   earliestYear: 0,
+  longestName: Infinity,
 };

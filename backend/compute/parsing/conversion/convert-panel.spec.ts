@@ -64,6 +64,18 @@ describe('units', () => {
   });
 });
 
+describe('a figure that no number can hold once it is converted', () => {
+  it('is found where it stands', () => {
+    const own = [{ column: 'mv', unit: 'billions', measure: null }] as const;
+    const rows = [['A', '2020', '-1e300', '2', '3', 'EUR', '7', '40']];
+    const panel = convert(rows, { columns: own });
+    expect(columns(panel)[0]).toEqual([NaN]);
+    expect(
+      panel.findings.map(({ row, column, code, isBlocking }) => [row, column, code, isBlocking]),
+    ).toEqual([[2, 'mv', 'not-a-number', true]]);
+  });
+});
+
 describe('currencies by row', () => {
   const rates = [
     { currency: 'USD', year: 2020, average: 0.5, yearEnd: 0.25 },

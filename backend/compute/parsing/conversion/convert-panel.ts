@@ -1,6 +1,6 @@
 import type { FileRecipe } from '../../file-recipe';
 import type { FileCheck } from '../../parse-messages';
-import type { FindingList } from '../finding-list';
+import { type CellRemark, findingAt, type FindingList } from '../finding-list';
 import type { PanelReading } from '../read-panel';
 import type { Table } from '../table';
 import { applyRates } from './apply-rates';
@@ -50,12 +50,35 @@ export function convertPanel(
     const column = table.header.indexOf(recipe.conversion.currencies.column);
     findLackingRates(table, column, lackingRates, findings);
   }
+  findTooLarge(table, reading, findings);
   return {
     values,
     currency: currencies?.texts ?? null,
     missingRates: missingRates(lackingRates),
   };
 }
+
+/** A figure beyond the largest double becomes NaN and is found. */
+function findTooLarge(
+  table: Table,
+  { numbers, tableRow }: PanelReading,
+  findings: FindingList,
+): void {
+  for (const { name, values } of numbers) {
+    for (let row = 0; row < values.length; row++) {
+      if (Math.abs(values[row]) !== Infinity) continue;
+      const column = table.header.indexOf(name);
+      findings.add(findingAt(table, tableRow[row], column, tooLarge));
+      values[row] = NaN;
+    }
+  }
+}
+
+const tooLarge: CellRemark = {
+  code: 'not-a-number',
+  detail: 'Converted into the panel’s currency and unit this is too large for a number.',
+  isBlocking: true,
+};
 
 function currenciesOf(
   table: Table,
