@@ -16,6 +16,8 @@ export interface SheetsTable {
   readonly grid: Grid;
 }
 
+const longestHeader = 500;
+
 /**
  * Reads the sheets of a file as one long table.
  *
@@ -31,8 +33,10 @@ export function readSheets(
   const headerIndex =
     reading === null ? (findHeaderRow(grid) ?? 0) : rowFromLine(grid, reading.headerRow);
   const layout = reading?.layout ?? recogniseLayout(sheets, sheet, headerIndex);
+  const table = tableOf(sheets, sheet, headerIndex, layout);
+  refuseLongHeader(table.header);
   return {
-    table: tableOf(sheets, sheet, headerIndex, layout),
+    table,
     reading: {
       sheet: sheet.name,
       headerRow: grid.lines[headerIndex],
@@ -66,6 +70,16 @@ function tableOf(
         }),
       );
   }
+}
+
+/** A column is named by its header wherever it is spoken of. */
+function refuseLongHeader(header: readonly string[]): void {
+  const index = header.findIndex((text) => text.length > longestHeader);
+  if (index === -1) return;
+  throw new FileRefusal(
+    'sheet_limit',
+    `expected headers of at most ${longestHeader} characters; the one of column ${index + 1} is longer`,
+  );
 }
 
 /** Sheets of one workbook may begin on different lines: where the line has no years, the sheet's own header counts. */
