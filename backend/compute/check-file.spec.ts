@@ -101,6 +101,15 @@ describe('checkFile', () => {
     ]);
   });
 
+  it('lists no more than 500 groups of spellings and finds all', () => {
+    const rows = Array.from({ length: 600 }, (_, index) =>
+      ['firm', 'FIRM'].map((word) => [`${word} ${index}`, '2020', '1', '1', '1']),
+    ).flat();
+    const result = check(tableOf(plainHeader, ...rows));
+    expect(result.spellings.length).toBe(500);
+    expect(result.findingCount).toBe(600);
+  });
+
   it('shows the first twenty rows as the panel would hold them', () => {
     const rows = Array.from({ length: 30 }, (_, index) => [
       index % 2 === 0 ? 'A' : 'B',

@@ -11,6 +11,7 @@ import type { Table } from './parsing/table';
 
 const mostFindings = 500;
 const mostChanges = 500;
+const mostSpellings = 500;
 const firstRowCount = 20;
 
 /**
@@ -29,7 +30,7 @@ export function checkFile(
   const { table } = panel.mended;
   const similar = similarCompanies(panel);
   findSpellings(table, panel, table.header.indexOf(recipe.company), similar, findings);
-  findFormulas(table, mappedHeaders(recipe), findings);
+  if (file.formulaCells > 0) findFormulas(table, mappedHeaders(recipe), findings);
   const listed = findings.first();
   return {
     ...countsOf(panel),
@@ -38,9 +39,11 @@ export function checkFile(
     findingCount: findings.count,
     blockingCount: findings.blockingCount,
     reviewRows: reviewRows(panel, recipe.mending, listed),
-    spellings: similar.map(({ names }) =>
-      names.map(({ code, rows }) => ({ company: panel.companies[code], rows })),
-    ),
+    spellings: similar
+      .slice(0, mostSpellings)
+      .map(({ names }) =>
+        names.map(({ code, rows }) => ({ company: panel.companies[code], rows })),
+      ),
     missingRates: panel.missingRates,
     formulaCells: file.formulaCells,
     firstRows: firstRows(panel),

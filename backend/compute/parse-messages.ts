@@ -113,6 +113,7 @@ export interface FileCheck {
     readonly isTaken: boolean;
     readonly isExcluded: boolean;
   })[];
+  /** The first 500 groups. */
   readonly spellings: readonly (readonly { readonly company: string; readonly rows: number }[])[];
   readonly missingRates: readonly {
     readonly currency: string;

@@ -24,7 +24,9 @@ export function similarCompanies(panel: NamedRows): readonly SimilarCompanies[] 
   const codesOfKey = new Map<string, number[]>();
   panel.companies.forEach((name, code) => {
     const key = nameKey(name);
-    codesOfKey.set(key, [...(codesOfKey.get(key) ?? []), code]);
+    const codes = codesOfKey.get(key);
+    if (codes === undefined) codesOfKey.set(key, [code]);
+    else codes.push(code);
   });
   const keys = [...codesOfKey.keys()];
   const rows = new Int32Array(panel.companies.length);
