@@ -1,10 +1,14 @@
-import { mkdtemp, rm, writeFile } from 'node:fs/promises';
+import { mkdtemp, readFile, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { setTimeout as wait } from 'node:timers/promises';
 import { ParseProcess, ParseRefused } from './parse-process';
+
+const noBytes = new Uint8Array();
 
 describe('a reader in a process of its own', () => {
   let folder: string;
+  let count = 0;
 
   beforeAll(async () => {
     folder = await mkdtemp(join(tmpdir(), 'kinvale-reader-'));
@@ -14,33 +18,120 @@ describe('a reader in a process of its own', () => {
     await rm(folder, { recursive: true });
   });
 
-  async function readerThat(does: string): Promise<ParseProcess> {
-    const file = join(folder, `${String(does.length)}.mjs`);
-    await writeFile(file, `process.once('message', () => { ${does} });`);
-    return new ParseProcess(file);
+  async function readerThat(does: string, timeLimitMs?: number): Promise<ParseProcess> {
+    count += 1;
+    const file = join(folder, `${count}.mjs`);
+    await writeFile(
+      file,
+      `import { writeFileSync } from 'node:fs'; process.once('message', (request) => { ${does} });`,
+    );
+    return new ParseProcess(file, timeLimitMs);
+  }
+
+  const preview = (reader: ParseProcess, signal?: AbortSignal): Promise<unknown> =>
+    reader.preview(noBytes, 'peers.csv', null, signal);
+
+  const rejection = async (work: Promise<unknown>): Promise<unknown> =>
+    work.then(
+      () => undefined,
+      (error: unknown) => error,
+    );
+
+  /** The process writes its id and then never ends by itself. */
+  async function endlessReader(timeLimitMs?: number): Promise<{
+    readonly reader: ParseProcess;
+    readonly processId: () => Promise<number>;
+  }> {
+    const idFile = join(folder, `id-${count}`);
+    const does = `writeFileSync(${JSON.stringify(idFile)}, String(process.pid)); for (;;);`;
+    const processId = async (): Promise<number> => {
+      for (;;) {
+        const text = await readFile(idFile, 'utf8').catch(() => '');
+        if (text !== '') return Number(text);
+        await wait(20);
+      }
+    };
+    return { reader: await readerThat(does, timeLimitMs), processId };
+  }
+
+  async function isGone(id: number): Promise<boolean> {
+    for (let tries = 0; tries < 100; tries += 1) {
+      try {
+        process.kill(id, 0);
+      } catch {
+        return true;
+      }
+      await wait(20);
+    }
+    return false;
   }
 
   it('ends alone when a file takes too much memory, and says so', async () => {
     const reader = await readerThat(
       'const kept = []; for (;;) kept.push(Array.from({ length: 1e6 }, (_, i) => ({ i })));',
     );
-    const error: unknown = await reader
-      .preview(new Uint8Array())
-      .catch((caught: unknown) => caught);
+    const error = await rejection(preview(reader));
     expect(error).toBeInstanceOf(ParseRefused);
     expect((error as ParseRefused).code).toBe('parse_memory');
   });
 
+  it('is ended when a file takes too long', async () => {
+    const { reader, processId } = await endlessReader(2000);
+    const work = rejection(preview(reader));
+    const id = await processId();
+    const error = await work;
+    expect((error as ParseRefused).code).toBe('parse_timeout');
+    expect(await isGone(id)).toBeTrue();
+  });
+
+  it('is ended when its caller wants no answer any more', async () => {
+    const { reader, processId } = await endlessReader();
+    const controller = new AbortController();
+    const work = rejection(preview(reader, controller.signal));
+    const id = await processId();
+    controller.abort(new Error('changed my mind'));
+    expect(await work).toEqual(new Error('changed my mind'));
+    expect(await isGone(id)).toBeTrue();
+  });
+
   it('that ends without an answer is a fault of ours, not of the file', async () => {
     const reader = await readerThat('process.exit(3);');
-    await expectAsync(reader.preview(new Uint8Array())).toBeRejectedWithError(/status 3/);
+    await expectAsync(preview(reader)).toBeRejectedWithError(/status 3/);
+  });
+
+  it('passes on what is refused, with its code', async () => {
+    const reader = await readerThat(
+      "process.send({ kind: 'refused', code: 'zip_limit', detail: 'too many parts' });",
+    );
+    const error = await rejection(preview(reader));
+    expect(error).toBeInstanceOf(ParseRefused);
+    expect([(error as ParseRefused).code, (error as ParseRefused).message]).toEqual([
+      'zip_limit',
+      'too many parts',
+    ]);
   });
 
   it('answers two files at once and lets a third wait', async () => {
     const reader = await readerThat(
       "setTimeout(() => { process.send({ kind: 'preview', preview: { headers: [] } }); }, 50);",
     );
-    const all = await Promise.all([1, 2, 3].map(() => reader.preview(new Uint8Array())));
+    const all = await Promise.all([1, 2, 3].map(() => preview(reader)));
     expect(all.length).toBe(3);
+  });
+
+  it('begins nothing for a caller that gave up while it waited', async () => {
+    const { reader, processId } = await endlessReader();
+    const busy = new AbortController();
+    const running = [1, 2].map(() => rejection(preview(reader, busy.signal)));
+    await processId();
+    const waiting = new AbortController();
+    const third = rejection(preview(reader, waiting.signal));
+    waiting.abort(new Error('left'));
+    expect(await third).toEqual(new Error('left'));
+    busy.abort(new Error('over'));
+    expect(await Promise.all(running)).toEqual([new Error('over'), new Error('over')]);
+    expect(await rejection(preview(reader, AbortSignal.abort(new Error('late'))))).toEqual(
+      new Error('late'),
+    );
   });
 });
