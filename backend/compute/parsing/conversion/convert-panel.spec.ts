@@ -42,14 +42,14 @@ describe('units', () => {
     ]);
   });
 
-  it('turn 0.3 million into exactly 300 000 and 3 thousand into exactly 0.003 million', () => {
+  it('turn 0.3 million into exactly 300 000 and 9 into exactly 0.009 thousand', () => {
     const own = [
       { column: 'mv', unit: 'millions', measure: null },
       { column: 'capex', unit: 'units', measure: null },
     ] as const;
-    const small = [['A', '2020', '0.3', '3', '1', 'EUR', '7', '40']];
+    const small = [['A', '2020', '0.3', '9', '1', 'EUR', '7', '40']];
     expect(columns(convert(small, { columns: own }))[0]).toEqual([300_000]);
-    expect(columns(convert(small, { columns: own }, { unit: 'thousands' }))[1]).toEqual([0.003]);
+    expect(columns(convert(small, { columns: own }, { unit: 'thousands' }))[1]).toEqual([0.009]);
   });
 
   it('are for money only: a further column has one where it is said to be a flow or a stock', () => {
