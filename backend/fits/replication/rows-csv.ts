@@ -1,6 +1,6 @@
 import { stringify } from 'csv-stringify/sync';
 import type { RowUsed } from './rows-used';
-import { spreadsheetText } from './spreadsheet-text';
+import { spreadsheetText } from '../../files/spreadsheet-text';
 
 /** Names of the columns as the panel has them. */
 export interface RowsHeader {
