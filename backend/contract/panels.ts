@@ -62,6 +62,10 @@ export const PanelVersionSummary = z.object({
 });
 export type PanelVersionSummary = z.infer<typeof PanelVersionSummary>;
 
+/** Query of an export: the decimal sign of a CSV file; with a comma, a semicolon separates the columns. */
+export const PanelExportOptions = z.strictObject({ decimalSign: z.enum(['.', ',']).default('.') });
+export type PanelExportOptions = z.infer<typeof PanelExportOptions>;
+
 export const PanelVersionsReply = z.object({ versions: z.array(PanelVersionSummary) });
 export type PanelVersionsReply = z.infer<typeof PanelVersionsReply>;
 

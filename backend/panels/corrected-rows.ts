@@ -88,9 +88,11 @@ class CorrectionSheet {
   add({ company, year }: RowKey, pointer: string): void {
     const key = { company, year };
     const place = keyOf(key);
-    if (this.#added.has(place)) this.#refuse(pointer, `${nameOf(key)} is added twice`);
-    else if (this.#held.has(place))
+    if (this.#held.has(place)) {
       this.#refuse(pointer, `the panel has a row ${nameOf(key)} already`);
+      return;
+    }
+    if (this.#added.has(place)) this.#refuse(pointer, `${nameOf(key)} is added twice`);
     this.#added.set(place, { ...key, cells: this.columns.map(() => null) });
   }
 

@@ -29,20 +29,14 @@ export function correctionRoutes({ corrections, history, dismissals }: Correctio
   register(router, apiRoutes.saveCorrections, async (req, res) => {
     const id = idParameter(req, 'panelVersionId');
     const saved = await corrections.save(signedInMember(req), id, parse(SaveCorrections, req.body));
-    res
-      .status(201)
-      .location(`/api/panel-versions/${saved.id}`)
-      .json(toPanelVersionSummary(saved));
+    res.status(201).location(`/api/panel-versions/${saved.id}`).json(toPanelVersionSummary(saved));
   });
 
   register(router, apiRoutes.restorePanelVersion, async (req, res) => {
     const { note } = parse(RestoreVersion, req.body);
     const id = idParameter(req, 'panelVersionId');
     const saved = await corrections.restore(signedInMember(req), id, note);
-    res
-      .status(201)
-      .location(`/api/panel-versions/${saved.id}`)
-      .json(toPanelVersionSummary(saved));
+    res.status(201).location(`/api/panel-versions/${saved.id}`).json(toPanelVersionSummary(saved));
   });
 
   register(router, apiRoutes.readPanelDifferences, async (req, res) => {

@@ -15,9 +15,8 @@ export function exportFileName(
   { panelName, number }: Pick<PanelVersionRow, 'panelName' | 'number'>,
   format: ExportFormat,
 ): string {
-  const words = panelName.match(/[\p{L}\p{M}\p{N}]+/gu) ?? [];
-  const name = [...words.join('-')].slice(0, 80).join('');
-  return `${name === '' ? 'panel' : name}-version-${number}.${format}`;
+  const words = panelName.match(/[\p{L}\p{M}\p{N}]+/gu) ?? ['panel'];
+  return `${words.join('-')}-version-${number}.${format}`;
 }
 
 export function toNotedTable(panel: PanelExport): NotedTable {

@@ -43,7 +43,5 @@ export async function* tableCsv(
 
 function textOf(cell: TableCell, decimalSign: DecimalSign): string {
   if (cell === null) return '';
-  return typeof cell === 'number'
-    ? String(cell).replace('.', decimalSign)
-    : spreadsheetText(cell);
+  return typeof cell === 'number' ? String(cell).replace('.', decimalSign) : spreadsheetText(cell);
 }
