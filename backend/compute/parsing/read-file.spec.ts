@@ -173,6 +173,15 @@ describe('a workbook', () => {
     expect((await readFile(content, 'a.xlsx', null)).reading.decimalSign).toBe('as-found');
   });
 
+  it('is refused where its table begins too far down to be chosen', async () => {
+    const content = await written((workbook) => {
+      const sheet = workbook.addWorksheet('Data');
+      sheet.getRow(1001).values = ['Company', 'Year', 'Capex'];
+      sheet.getRow(1002).values = ['Alder', 2020, 1];
+    });
+    expect(await codeOf(content, 'peers.xlsx')).toBe('reading_invalid');
+  });
+
   it('is refused under another name, behind a password, or empty', async () => {
     expect(await codeOf(await twoSheets(), 'peers.xls')).toBe('type_not_allowed');
     expect(await codeOf(await twoSheets(), 'peers.xlsm')).toBe('type_not_allowed');

@@ -17,6 +17,7 @@ export interface SheetsTable {
 }
 
 const longestHeader = 500;
+const lastHeaderLine = 1000;
 
 /**
  * Reads the sheets of a file as one long table.
@@ -33,6 +34,7 @@ export function readSheets(
   const headerIndex =
     reading === null ? (findHeaderRow(grid) ?? 0) : rowFromLine(grid, reading.headerRow);
   const layout = reading?.layout ?? recogniseLayout(sheets, sheet, headerIndex);
+  refuseLowHeader(grid.lines[headerIndex]);
   const table = tableOf(sheets, sheet, headerIndex, layout);
   refuseLongHeader(table.header);
   return {
@@ -70,6 +72,14 @@ function tableOf(
         }),
       );
   }
+}
+
+function refuseLowHeader(line: number): void {
+  if (line > lastHeaderLine)
+    throw new FileRefusal(
+      'reading_invalid',
+      `expected the headers on one of the first ${lastHeaderLine} lines; the first filled ones begin on line ${line}`,
+    );
 }
 
 /** A column is named by its header wherever it is spoken of. */

@@ -49,4 +49,8 @@ describe('a header with a year', () => {
       expect(yearLabel(header)).toBeUndefined();
     });
   }
+
+  it('is none in a text too long to be a header', () => {
+    expect(yearLabel(`2019 ${'- '.repeat(30_000)}a`)).toBeUndefined();
+  });
 });

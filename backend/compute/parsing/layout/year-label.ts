@@ -12,6 +12,9 @@ export interface YearLabel {
   readonly variable: string;
 }
 
+/** A longer text names no column. */
+const longestHeader = 500;
+
 const span = '(?:\\s?[/–-]\\s?(?:\\d{4}|\\d{2}))?';
 const tokens = [
   '\\d{4}[-/.]\\d{1,2}[-/.]\\d{1,2}',
@@ -33,6 +36,7 @@ const partOfYear = /(?<![\p{L}\p{N}])([QH][1-4]|[1-4][QH])(?![\p{L}\p{N}])/iu;
  * @returns undefined for any other header: without a year, with two, of an estimate or of a part of a year.
  */
 export function yearLabel(header: string): YearLabel | undefined {
+  if (header.length > longestHeader) return undefined;
   const found = [...header.matchAll(apart)];
   const matches = found.length > 0 ? found : [...header.matchAll(behindLetters)];
   if (matches.length !== 1) return undefined;

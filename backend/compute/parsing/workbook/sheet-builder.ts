@@ -24,7 +24,7 @@ export class SheetBuilder {
   readonly #rows: string[][] = [];
   readonly #lines: number[] = [];
   /** Columns with a formula, by row that has one. */
-  readonly #formulas = new Map<number, Set<number>>();
+  readonly #formulas = new Map<number, readonly number[]>();
 
   constructor(
     private readonly name: string,
@@ -48,7 +48,7 @@ export class SheetBuilder {
         `cells of at most ${limits.fieldLength} characters; found a longer one on line ${line}`,
       );
     this.budget.spend(filled);
-    if (formulas.length > 0) this.#formulas.set(this.#rows.length, new Set(formulas));
+    if (formulas.length > 0) this.#formulas.set(this.#rows.length, formulas);
     this.#rows.push(cells);
     this.#lines.push(line);
   }
@@ -68,7 +68,7 @@ export class SheetBuilder {
       rows: this.#rows,
       lines: this.#lines,
       ...(formulas.size > 0 && {
-        isFormula: (row: number, column: number) => formulas.get(row)?.has(column) ?? false,
+        isFormula: (row: number, column: number) => formulas.get(row)?.includes(column) ?? false,
       }),
     };
   }
