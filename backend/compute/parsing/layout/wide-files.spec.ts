@@ -255,6 +255,14 @@ describe('a sheet a variable', () => {
     ]);
   });
 
+  it('is read the same again by the reading that was recognised', async () => {
+    const first = await ofSheets(sheets);
+    const again = await ofSheets(sheets, first.reading);
+    expect(again.reading).toEqual(first.reading);
+    expect(again.table.header).toEqual(first.table.header);
+    expect(again.table.rows).toEqual(first.table.rows);
+  });
+
   it('names a cell by its sheet, line and header', async () => {
     const { table } = await ofSheets(sheets);
     expect(placeOfCell(table, 4, 4)).toEqual({ line: 3, header: 'Capex 2020' });
