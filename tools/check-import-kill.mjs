@@ -1,0 +1,84 @@
+/**
+ * Ends the server at once (SIGKILL) at a random moment of each of 20 imports and shows that every one of them leaves
+ * all of its rows or none, and is one panel version in the end: `npm run check-import-kill`.
+ */
+import { fileURLToPath } from 'node:url';
+import { setTimeout as wait } from 'node:timers/promises';
+import pg from 'pg';
+import { ImportClient } from './bench/import-client.ts';
+import { inventedPanelCsv, inventedPanelMapping } from '../backend/testing/invented-panel.ts';
+import { openImportServer } from './bench/import-server.mjs';
+
+const root = fileURLToPath(new URL('..', import.meta.url));
+const imports = 20;
+const rows = 40_000;
+/** The last moment at which the server is killed: about as long as a commit of these rows takes. */
+const longestMs = 4000;
+
+const server = await openImportServer(root);
+const admin = new pg.Client({ connectionString: server.adminUrl });
+try {
+  await admin.connect();
+  const csv = inventedPanelCsv(rows);
+  const begun = [];
+  for (let number = 1; number <= imports; number++) {
+    const client = new ImportClient(server.url); // a workspace each: one may not have many under way
+    await client.signUp();
+    const id = await client.upload(csv);
+    await client.check(id, inventedPanelMapping('Panel'));
+    await client.commit(id);
+    const afterMs = Math.round(Math.random() * longestMs);
+    await wait(afterMs);
+    await server.kill();
+    await databaseNoticed();
+    begun.push({ client, id });
+    console.log(`import ${number}, killed after ${afterMs} ms: ${await stateOf(id)}`);
+    await server.start();
+  }
+  for (const { client, id } of begun) await client.committed(id);
+  for (const { id } of begun) await expectOneVersion(id);
+  console.log(`All ${imports} imports are one panel version each, with ${rows} rows.`);
+} finally {
+  await admin.end();
+  await server.stop();
+}
+
+/** A session whose client is gone ends with its statement. */
+async function databaseNoticed() {
+  for (;;) {
+    const { rows: found } = await admin.query(`select count(*)::integer as sessions
+      from pg_stat_activity where datname = current_database() and pid <> pg_backend_pid()`);
+    if (found[0].sessions === 0) return;
+    await wait(20);
+  }
+}
+
+/** @throws {Error} when the import left a part of its rows. */
+async function stateOf(id) {
+  const { state, versions, written } = await lookAt(id);
+  const isWhole = versions === 1 && written === rows && state === 'committed';
+  const isNothing = versions === 0 && written === 0 && state === 'committing';
+  if (!isWhole && !isNothing)
+    throw new Error(`${state} with ${versions} versions and ${written} rows of ${rows}`);
+  return isWhole ? 'all rows are there' : 'no row is there';
+}
+
+/** @throws {Error} when the import was not made a version, or more than once. */
+async function expectOneVersion(id) {
+  const { state, versions, written } = await lookAt(id);
+  if (state !== 'committed' || versions !== 1 || written !== rows)
+    throw new Error(`${state} with ${versions} versions and ${written} rows of ${rows}`);
+}
+
+async function lookAt(id) {
+  const { rows: found } = await admin.query(
+    `select state,
+      (select count(*)::integer from panel_version as version
+        where version.workspace_id = draft.workspace_id) as versions,
+      (select count(*)::integer from panel_row as line
+        where line.workspace_id = draft.workspace_id) as written
+    from import_draft as draft where id = $1`,
+    [id],
+  );
+  return found[0];
+}
