@@ -1,9 +1,10 @@
 import type { RowInVersion } from '../../db/repositories/panel-corrections-repository';
 import type { RowKey } from '../../db/repositories/panel-copies-repository';
+import type { DifferingRow } from '../../db/repositories/panel-differences-repository';
 import type { PanelVersionRow } from '../../db/repositories/panels-repository';
-import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
+import type { Repositories } from '../../db/repositories/repositories';
 import { Invalid, NotFound } from '../errors/app-error';
-import { type ComparedPanel, type PanelDifferences, panelDifferences } from '../panel-data';
+import type { PanelDifference, PanelDifferences } from '../panel-data';
 import { findPanelVersion } from './find-panel-version';
 
 /** A version in which a cell is other than in the version before. */
@@ -28,14 +29,20 @@ export class PanelHistoryService {
     versionId: string,
     otherId: string,
   ): Promise<PanelDifferences> {
-    const { before, after } = await this.repositories.inWorkspace(workspaceId, async (tx) => {
-      const first = await findPanelVersion(tx, versionId);
-      const second = await findPanelVersion(tx, otherId);
-      if (first.panelId !== second.panelId)
+    return this.repositories.inWorkspace(workspaceId, async (tx) => {
+      const before = await findPanelVersion(tx, versionId);
+      const after = await findPanelVersion(tx, otherId);
+      if (before.panelId !== after.panelId)
         throw new NotFound('These two versions are of different panels.');
-      return { before: await comparedPanel(tx, first), after: await comparedPanel(tx, second) };
+      const headers = headersOf(before, after);
+      const { first, ...counts } = await tx.panelDifferences.between(
+        { id: versionId, positions: positionsOf(before, headers) },
+        { id: otherId, positions: positionsOf(after, headers) },
+        mostListed,
+      );
+      const listed = first.flatMap((row) => differencesOf(row, headers));
+      return { ...counts, listed: listed.slice(0, mostListed) };
     });
-    return panelDifferences(before, after, mostListed);
   }
 
   /**
@@ -64,12 +71,28 @@ export class PanelHistoryService {
   }
 }
 
-async function comparedPanel(
-  tx: WorkspaceRepositories,
-  { id, columns }: PanelVersionRow,
-): Promise<ComparedPanel> {
-  const rows = await tx.panelRows.block(id, columns.length);
-  return { ...rows, columns: columns.map(({ name }) => name) };
+/** Columns are matched by header; one that a version does not have counts as missing in all of its rows. */
+function headersOf(before: PanelVersionRow, after: PanelVersionRow): readonly string[] {
+  return [...new Set([...after.columns, ...before.columns].map(({ name }) => name))];
+}
+
+function positionsOf(
+  { columns }: PanelVersionRow,
+  headers: readonly string[],
+): readonly (number | null)[] {
+  const names = columns.map(({ name }) => name);
+  return headers.map((header) => (names.includes(header) ? names.indexOf(header) : null));
+}
+
+function differencesOf(row: DifferingRow, headers: readonly string[]): readonly PanelDifference[] {
+  const { company, year, before, after } = row;
+  const whole = { company, year, column: null, before: null, after: null };
+  if (before === null) return [{ ...whole, kind: 'added-row' }];
+  if (after === null) return [{ ...whole, kind: 'removed-row' }];
+  return headers.flatMap((column, at) => {
+    const cell = { company, year, column, before: before[at], after: after[at] };
+    return cell.before === cell.after ? [] : [{ ...cell, kind: 'changed-cell' as const }];
+  });
 }
 
 function entryOf(

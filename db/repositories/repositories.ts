@@ -14,6 +14,7 @@ import { JobTicketsRepository } from './jobs-repository';
 import { MembersRepository } from './members-repository';
 import { PanelCopiesRepository } from './panel-copies-repository';
 import { PanelCorrectionsRepository } from './panel-corrections-repository';
+import { PanelDifferencesRepository } from './panel-differences-repository';
 import { PanelRowsRepository } from './panel-rows-repository';
 import { PanelsRepository } from './panels-repository';
 import { PeersRepository } from './peers-repository';
@@ -31,6 +32,7 @@ export interface WorkspaceRepositories {
   readonly panels: PanelsRepository;
   readonly panelRows: PanelRowsRepository;
   readonly panelCopies: PanelCopiesRepository;
+  readonly panelDifferences: PanelDifferencesRepository;
   readonly panelCorrections: PanelCorrectionsRepository;
   readonly flagDismissals: FlagDismissalsRepository;
   readonly peers: PeersRepository;
@@ -77,6 +79,7 @@ export class Repositories {
         panels: new PanelsRepository(trx, workspaceId),
         panelRows: new PanelRowsRepository(trx, workspaceId),
         panelCopies: new PanelCopiesRepository(trx, workspaceId),
+        panelDifferences: new PanelDifferencesRepository(trx, workspaceId),
         panelCorrections: new PanelCorrectionsRepository(trx, workspaceId),
         flagDismissals: new FlagDismissalsRepository(trx, workspaceId),
         peers: new PeersRepository(trx, workspaceId),
