@@ -16,7 +16,11 @@ export function exportFileName(
   format: ExportFormat,
 ): string {
   const words = panelName.match(/[\p{L}\p{M}\p{N}]+/gu) ?? ['panel'];
-  return `${words.join('-')}-version-${number}.${format}`;
+  const name = words
+    .join('-')
+    .slice(0, 60)
+    .replace(/\p{Cs}$/u, '');
+  return `${name}-version-${number}.${format}`;
 }
 
 export function toNotedTable(panel: PanelExport): NotedTable {

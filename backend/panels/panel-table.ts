@@ -1,10 +1,14 @@
-import type { PanelBlockRows } from '../../db/repositories/panel-rows-repository';
-import type { CompanyAttributes, PanelVersionRow } from '../../db/repositories/panels-repository';
+import type {
+  CompanyAttributes,
+  PanelLine,
+  PanelVersionRow,
+} from '../../db/repositories/panels-repository';
 
 /** A panel version as it leaves Kinvale. */
 export interface PanelExport {
   readonly version: PanelVersionRow;
-  readonly rows: PanelBlockRows;
+  /** In order of company and year, a part at a time, each read when it is asked for. */
+  readonly parts: AsyncIterable<readonly PanelLine[]>;
   readonly attributes: readonly CompanyAttributes[];
 }
 
@@ -13,8 +17,8 @@ export type TableCell = string | number | null;
 
 export interface PanelTable {
   readonly headers: readonly string[];
-  /** By company and year, each made when it is asked for. */
-  readonly rows: Iterable<readonly TableCell[]>;
+  /** The rows, a part of some milliseconds of work at a time. */
+  readonly parts: AsyncIterable<readonly (readonly TableCell[])[]>;
 }
 
 const measureHeader = 'amounts in';
@@ -23,7 +27,7 @@ const measureHeader = 'amounts in';
  * The long table of a version: company, year, its columns under their own headers, what describes the company, and the
  * measure of its amounts, as `EUR millions`. Read again, it is the same panel.
  */
-export function panelTable({ version, rows, attributes }: PanelExport): PanelTable {
+export function panelTable({ version, parts, attributes }: PanelExport): PanelTable {
   const described = [...new Set(attributes.flatMap((company) => Object.keys(company.attributes)))];
   const hasMeasure = described.includes(measureHeader);
   const measure = hasMeasure ? [] : [measureOf(version)];
@@ -41,7 +45,7 @@ export function panelTable({ version, rows, attributes }: PanelExport): PanelTab
       ...described,
       ...(hasMeasure ? [] : [measureHeader]),
     ],
-    rows: tableRows(rows, (company) => tails.get(company) ?? noTexts),
+    parts: tableParts(parts, (company) => tails.get(company) ?? noTexts),
   };
 }
 
@@ -50,13 +54,10 @@ export function measureOf({ currency, unit }: Pick<PanelVersionRow, 'currency' |
   return unit === 'units' ? currency : `${currency} ${unit}`;
 }
 
-function* tableRows(
-  { companies, company, year, values }: PanelBlockRows,
+async function* tableParts(
+  parts: AsyncIterable<readonly PanelLine[]>,
   tailOf: (company: string) => readonly TableCell[],
-): Generator<readonly TableCell[]> {
-  for (let row = 0; row < company.length; row++) {
-    const name = companies[company[row]];
-    const cells = values.map((column) => (Number.isNaN(column[row]) ? null : column[row]));
-    yield [name, year[row], ...cells, ...tailOf(name)];
-  }
+): AsyncGenerator<readonly (readonly TableCell[])[]> {
+  for await (const part of parts)
+    yield part.map(({ company, year, cells }) => [company, year, ...cells, ...tailOf(company)]);
 }

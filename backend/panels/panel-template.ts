@@ -1,3 +1,4 @@
+import type { PanelTable } from './panel-table';
 import type { NotedTable } from './table-workbook';
 
 /** Headers of an empty panel, each with what its column holds. */
@@ -20,10 +21,16 @@ const advice = [
   ],
 ] as const;
 
+const noRows: PanelTable['parts'] = {
+  async *[Symbol.asyncIterator]() {
+    // Nothing to give.
+  },
+};
+
 /** An empty panel to fill in. */
 export const panelTemplate: NotedTable = {
   name: 'Panel',
-  table: { headers: columns.map(([header]) => header), rows: [] },
+  table: { headers: columns.map(([header]) => header), parts: noRows },
   notes: { name: 'Columns', lines: [...columns, ...advice] },
   createdAt: new Date(Date.UTC(2026, 0, 1)),
 };

@@ -1,12 +1,8 @@
-import { setImmediate } from 'node:timers/promises';
 import { stringify } from 'csv-stringify/sync';
 import { spreadsheetText } from '../files/spreadsheet-text';
 import type { PanelTable, TableCell } from './panel-table';
 
 export type DecimalSign = '.' | ',';
-
-/** Rows that are written in one go: a few milliseconds of work. */
-const rowsInPart = 1000;
 
 const byteOrderMark = '\uFEFF';
 
@@ -14,10 +10,10 @@ const byteOrderMark = '\uFEFF';
  * A table as CSV (RFC 4180, UTF-8 with byte order mark): numbers in their shortest form that reads back the same, texts
  * that no spreadsheet computes. With a comma as the decimal sign, a semicolon separates the columns.
  *
- * @returns parts, each made when it is asked for; other work goes on between them.
+ * @returns parts, each made when it is asked for.
  */
 export async function* tableCsv(
-  { headers, rows }: PanelTable,
+  { headers, parts }: PanelTable,
   decimalSign: DecimalSign = '.',
 ): AsyncGenerator<Buffer> {
   const write = (lines: readonly (readonly string[])[]): Buffer =>
@@ -30,15 +26,8 @@ export async function* tableCsv(
       }),
     );
   yield Buffer.concat([Buffer.from(byteOrderMark), write([headers.map(spreadsheetText)])]);
-  let part: string[][] = [];
-  for (const row of rows) {
-    part.push(row.map((cell) => textOf(cell, decimalSign)));
-    if (part.length < rowsInPart) continue;
-    yield write(part);
-    part = [];
-    await setImmediate();
-  }
-  if (part.length > 0) yield write(part);
+  for await (const rows of parts)
+    yield write(rows.map((row) => row.map((cell) => textOf(cell, decimalSign))));
 }
 
 function textOf(cell: TableCell, decimalSign: DecimalSign): string {

@@ -1,6 +1,5 @@
 import { once } from 'node:events';
 import type { PassThrough } from 'node:stream';
-import { setImmediate } from 'node:timers/promises';
 import excel from 'exceljs';
 import type { PanelTable } from './panel-table';
 
@@ -14,9 +13,6 @@ export interface NotedTable {
   readonly notes: { readonly name: string; readonly lines: readonly NotedLine[] };
   readonly createdAt: Date;
 }
-
-/** Rows that are written in one go: a few milliseconds of work. */
-const rowsInPart = 250;
 
 /**
  * Writes a table as an XLSX workbook of two sheets. Numbers are numbers and texts are texts: nothing is computed when it
@@ -37,11 +33,9 @@ export async function writeWorkbook(
   const titles = sheet.addRow([...table.headers]);
   titles.font = { bold: true };
   titles.commit();
-  let written = 0;
-  for (const row of table.rows) {
-    sheet.addRow([...row]).commit();
-    written++;
-    if (written % rowsInPart === 0) await turn(target);
+  for await (const rows of table.parts) {
+    for (const row of rows) sheet.addRow([...row]).commit();
+    await readerOf(target);
   }
   sheet.commit();
   const about = workbook.addWorksheet(notes.name);
@@ -56,9 +50,8 @@ export async function writeWorkbook(
   await workbook.commit();
 }
 
-/** Lets other work go on, and the reader catch up. */
-async function turn(target: PassThrough): Promise<void> {
-  await setImmediate();
+/** Waits until the reader has caught up. */
+async function readerOf(target: PassThrough): Promise<void> {
   if (target.destroyed) throw target.errored ?? new Error('the workbook has no reader any more');
   if (target.writableNeedDrain) await once(target, 'drain');
 }

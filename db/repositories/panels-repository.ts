@@ -35,6 +35,13 @@ export interface PanelRows {
   readonly cells: readonly (readonly (number | null)[])[];
 }
 
+/** One row; `cells` hold a value a column, null where it is missing. */
+export interface PanelLine {
+  readonly company: string;
+  readonly year: number;
+  readonly cells: readonly (number | null)[];
+}
+
 /** The texts that describe a company, by header of the file. */
 export interface CompanyAttributes {
   readonly company: string;
@@ -188,6 +195,22 @@ export class PanelsRepository {
       fileRow: found.map((row) => row.fileRow),
       cells: found.map((row) => row.cells),
     };
+  }
+
+  /** The next rows of a version in order of company and year, from the row after the one that is named. */
+  async rowsAfter(
+    panelVersionId: string,
+    last: { readonly company: string; readonly year: number } | undefined,
+    most: number,
+  ): Promise<PanelLine[]> {
+    let query = this.db
+      .selectFrom('panelRow')
+      .select(['company', 'year', 'cells'])
+      .where('workspaceId', '=', this.workspaceId)
+      .where('panelVersionId', '=', panelVersionId);
+    if (last !== undefined)
+      query = query.where(sql<boolean>`(company, year) > (${last.company}, ${last.year}::integer)`);
+    return query.orderBy('company').orderBy('year').limit(most).execute();
   }
 
   private versions() {
