@@ -8,7 +8,10 @@ const anyId = '11111111-2222-4333-8444-555555555555';
 
 /** The route's path with ids that do not exist. */
 function addressOf(route: ApiRoute): string {
-  return route.path.replace(':figure', 'standing').replace(/:\w+/g, anyId);
+  return route.path
+    .replace(':figure', 'standing')
+    .replace(':format', 'csv')
+    .replace(/:\w+/g, anyId);
 }
 
 function call(client: TestClient, route: ApiRoute): Promise<{ readonly status: number }> {

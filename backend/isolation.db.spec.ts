@@ -25,6 +25,13 @@ async function fill(server: TestServer, canary: string): Promise<Filled> {
   const panelVersionId = await importPanel(client, panel);
   const peerGroupId = await savePeers(client, panelVersionId, `${canary}-own`);
   const { fit, panelVersion, result } = await runFit(client, peerGroupId);
+  const corrected = await client.post(`/api/panel-versions/${panelVersionId}/corrections`, {
+    ...correctionBody,
+    cells: [{ ...cell, reason: canary, source: canary }],
+  });
+  const { panelId } = panelVersion;
+  const flag = { ...cell, code: 'jump', reason: canary };
+  const dismissed = await client.post(`/api/panels/${panelId}/flag-dismissals`, flag);
   const bootstrapId = randomUUID();
   const createdBy = session.person.id;
   await server.composition.services.repositories.inWorkspace(
@@ -54,6 +61,10 @@ async function fill(server: TestServer, canary: string): Promise<Filled> {
     ids: {
       importId,
       panelVersionId,
+      otherId: idOf(corrected, 201),
+      panelId,
+      dismissalId: idOf(dismissed, 201),
+      format: 'csv',
       peerGroupId,
       fitId: fit.id,
       fileId: panelVersion.file.id,
@@ -65,6 +76,9 @@ async function fill(server: TestServer, canary: string): Promise<Filled> {
     },
   };
 }
+
+const cell = { company: 'C01', year: 1935, column: 0, value: 1.5 };
+const correctionBody = { note: 'x', addedRows: [], removedRows: [] };
 
 const bodies: Readonly<Record<string, (ids: Filled['ids']) => object>> = {
   savePeerGroup: ({ panelVersionId }) => ({
@@ -111,7 +125,25 @@ const bodies: Readonly<Record<string, (ids: Filled['ids']) => object>> = {
     currency: 'EUR',
     unit: 'millions',
   }),
+  readImportAs: () => ({
+    sheet: null,
+    headerRow: 1,
+    layout: { kind: 'long' },
+    decimalSign: 'as-found',
+  }),
+  readImportAs: () => ({
+    sheet: null,
+    headerRow: 1,
+    layout: { kind: 'long' },
+    decimalSign: 'as-found',
+  }),
   commitImport: () => ({ note: '' }),
+  saveCorrections: () => ({
+    ...correctionBody,
+    cells: [{ ...cell, reason: 'x', source: 'x' }],
+  }),
+  restorePanelVersion: () => ({ note: 'x' }),
+  dismissFlag: () => ({ ...cell, code: 'jump', reason: 'x' }),
   signEdition: () => ({ password: testPassword }),
   returnEdition: () => ({ comment: 'no' }),
   changeRoles: () => ({ roles: ['reader'] }),
@@ -122,9 +154,10 @@ async function tryEveryRoute(mine: Filled, other: Filled, canary: string): Promi
   let tried = 0;
   for (const [name, route] of Object.entries<ApiRoute>(apiRoutes)) {
     const body = bodies[name]?.(other.ids);
-    const isAimed = route.path.includes(':') || name in bodies;
+    const isAimed = /:\w+Id\b/.test(route.path) || name in bodies;
     if (!isAimed) continue;
-    const path = route.path.replace(/:(\w+)/g, (_, key: string) => other.ids[key]);
+    const query = name === 'readCellHistory' ? '?company=C01&year=1935&column=0' : '';
+    const path = route.path.replace(/:(\w+)/g, (_, key: string) => other.ids[key]) + query;
     const method = route.method.toLowerCase() as 'get' | 'post' | 'put' | 'delete';
     const reply = await mine.client[method](path, body);
     tried++;
