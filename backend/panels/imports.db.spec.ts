@@ -1,5 +1,12 @@
+import pg from 'pg';
 import type { TestDatabase } from '../../db/testing/test-database';
-import type { ImportReply, PanelVersionReply, PanelVersionsReply } from '../contract';
+import {
+  ImportMapping,
+  type ImportReply,
+  type PanelCompaniesReply,
+  type PanelVersionReply,
+  type PanelVersionsReply,
+} from '../contract';
 import { signUp, type TestClient } from '../testing/test-client';
 import {
   commitImport,
@@ -36,6 +43,13 @@ describe('imports', () => {
     const checked = await analyst.put(`/api/imports/${id}/mapping`, mapping);
     expect(checked.status).toBe(200);
     return checked.body as ImportReply;
+  }
+
+  async function workspaceId(): Promise<string> {
+    const { session } = (await analyst.get('/api/session')).body as {
+      session: { workspace: { id: string } };
+    };
+    return session.workspace.id;
   }
 
   it('show the first rows with their lines and guess which column is what', async () => {
@@ -152,6 +166,149 @@ describe('imports', () => {
     const reply = await analyst.upload('/api/imports', 'panel.csv', text);
     expect(reply.status).toBe(413);
     expect((await analyst.get('/api/session')).status).toBe(200);
+  });
+
+  it('are read another way on request, and the columns are chosen anew', async () => {
+    const text = 'Figures of the peers;;\nfirm;year;value\nA;2001;1,5\nA;2002;2,5\n';
+    const uploaded = (await analyst.upload('/api/imports', 'peers.csv', text)).body as ImportReply;
+    const path = `/api/imports/${uploaded.id}/reading`;
+    const first = (await analyst.put(path, { ...uploaded.reading, headerRow: 1 }))
+      .body as ImportReply;
+    expect(first.headers[0]).toBe('Figures of the peers');
+    expect(first.topLines[1].cells.slice(0, 3)).toEqual(['firm', 'year', 'value']);
+    const second = (await analyst.put(path, { ...uploaded.reading, headerRow: 2 }))
+      .body as ImportReply;
+    expect(second.headers).toEqual(['firm', 'year', 'value']);
+    expect(second.firstRows[0]).toEqual({ row: 3, cells: ['A', '2001', '1,5'] });
+    expect(second.mapping.panelName).toBe('peers');
+    expect([second.state, second.reading.headerRow, second.check]).toEqual(['mapped', 2, null]);
+    expect((await analyst.put(path, { ...uploaded.reading, headerRow: 900 })).status).toBe(400);
+    expect((await analyst.put(path, { ...uploaded.reading, headerRow: 0 })).status).toBe(400);
+  });
+
+  it('read the file as the mapping says where that is another way', async () => {
+    const text = `Title,,,,\n${referencePanel()}`;
+    const uploaded = (await analyst.upload('/api/imports', 'p.csv', text)).body as ImportReply;
+    const reading = { ...uploaded.reading, headerRow: 2 };
+    await analyst.put(`/api/imports/${uploaded.id}/reading`, { ...reading, headerRow: 1 });
+    const path = `/api/imports/${uploaded.id}/mapping`;
+    const checked = await analyst.put(path, { ...referenceMapping, reading });
+    expect(checked.status).withContext(checked.text).toBe(200);
+    const reply = checked.body as ImportReply;
+    expect([reply.headers[0], reply.reading.headerRow]).toEqual(['company', 2]);
+    expect([reply.check?.rows, reply.mapping.reading]).toEqual([220, reading]);
+  });
+
+  it('keep how the file became the panel, what describes companies and each row’s currency', async () => {
+    const text =
+      'company,year,value,inv,capital,sector,money\n' +
+      'A,2001,10,2,3,Pumps,USD\nA,2002,10,2,3,Valves,EUR\nB,2001,1,2,3,,EUR\n';
+    const mapping = {
+      ...referenceMapping,
+      currency: 'EUR',
+      attributes: ['sector'],
+      conversion: {
+        columns: [],
+        currencies: {
+          column: 'money',
+          rates: [{ currency: 'USD', year: 2001, average: 0.5, yearEnd: 0.9 }],
+        },
+        prices: null,
+        fiscalYears: { rule: 'year-of-end', usualEndMonth: 12, companies: [] },
+      },
+    };
+    const id = await importPanel(analyst, text, mapping);
+    const panel = (await analyst.get(`/api/panel-versions/${id}`)).body as PanelVersionReply;
+    expect(panel.rows.values.map(([first]) => first)).toEqual([9, 1, 2.7]);
+    const { companies } = (await analyst.get(`/api/panel-versions/${id}/companies`))
+      .body as PanelCompaniesReply;
+    expect(companies.map(({ name, attributes }) => [name, attributes])).toEqual([
+      ['A', { sector: 'Valves' }],
+      ['B', {}],
+    ]);
+    const stored = await server.composition.services.repositories.inWorkspace(
+      await workspaceId(),
+      async (tx) => ({
+        recipe: await tx.panels.recipe(id),
+        rows: await tx.panelRows.block(id, 3),
+      }),
+    );
+    const { panelName: _, ...recipe } = ImportMapping.parse(mapping);
+    expect(stored.recipe).toEqual(recipe);
+    expect(stored.rows.currency).toEqual(['USD', 'EUR', 'EUR']);
+  });
+
+  it('say what would change in the newest version of the panel', async () => {
+    const id = await importPanel(analyst);
+    const changed = referencePanel()
+      .replace('30.284', '31.5')
+      .replace(/\nC11,1954[^\n]*/, '')
+      .replace(/\n$/, '\nC12,1954,1,2,3\n');
+    const { changes } = (await check(changed)).check ?? {};
+    expect(changes).toEqual(
+      jasmine.objectContaining({
+        panelVersionId: id,
+        number: 1,
+        addedRows: 1,
+        removedRows: 1,
+        changedCells: 1,
+      }),
+    );
+    expect(changes?.listed).toContain({
+      company: 'C01',
+      year: 1935,
+      kind: 'changed-cell',
+      column: 'value',
+      before: 30.284,
+      after: 31.5,
+    });
+    const other = await check(changed, { ...referenceMapping, panelName: 'Another' });
+    expect(other.check?.changes).toBeNull();
+  });
+
+  it('refuse a workbook of more than 10 MB, and what says that it is larger before it is sent', async () => {
+    const workbook = Buffer.alloc(10 * 1024 * 1024 + 20_000, 'x');
+    const reply = await analyst.upload('/api/imports', 'panel.xlsx', workbook);
+    expect(reply.status).toBe(413);
+    expect((reply.body as { detail: string }).detail).toContain('10 MB');
+    const declared = analyst.agent
+      .post('/api/imports')
+      .set('Origin', server.url)
+      .set('X-XSRF-TOKEN', analyst.token)
+      .set('Content-Type', 'multipart/form-data; boundary=x')
+      .set('Content-Length', String(41 * 1024 * 1024));
+    expect((await declared.send('--x\r\n')).status).toBe(413);
+  });
+
+  it('keep at most 500 files and 2 GB a workspace, and take more once some are gone', async () => {
+    const reply = (await analyst.upload('/api/imports', 'a.csv', referencePanel()))
+      .body as ImportReply;
+    const admin = new pg.Client({ connectionString: database.adminUrl });
+    await admin.connect();
+    try {
+      const id = await workspaceId();
+      await admin.query(
+        `insert into stored_file (workspace_id, id, name, byte_size, sha256, content, created_by)
+          select workspace_id, gen_random_uuid(), name, 1, '', '', created_by
+          from stored_file, generate_series(1, 499) where workspace_id = $1`,
+        [id],
+      );
+      const more = await analyst.upload('/api/imports', 'b.csv', referencePanel());
+      expect(more.status).toBe(409);
+      expect((more.body as { type: string }).type).toMatch(/\/quota$/);
+      expect((await analyst.delete(`/api/imports/${reply.id}`)).status).toBe(204);
+      expect((await analyst.upload('/api/imports', 'b.csv', referencePanel())).status).toBe(201);
+
+      await admin.query(`delete from stored_file where workspace_id = $1 and sha256 = ''`, [id]);
+      await admin.query(`update stored_file set byte_size = 2147483647 where workspace_id = $1`, [
+        id,
+      ]);
+      const large = await analyst.upload('/api/imports', 'c.csv', referencePanel());
+      expect(large.status).toBe(409);
+      expect((large.body as { detail: string }).detail).toContain('2 GB');
+    } finally {
+      await admin.end();
+    }
   });
 
   it('name a column that is chosen twice or is not there', async () => {
