@@ -1,4 +1,3 @@
-import type { ImportProgress, ImportState } from '../../db/schema/panel-tables';
 import type { ImportRow } from '../../db/repositories/imports-repository';
 import type { WorkspaceRepositories } from '../../db/repositories/repositories';
 import type { FileRecipe } from '../compute/file-recipe';
@@ -24,11 +23,11 @@ export interface ImportDraft {
   readonly id: string;
   readonly fileName: string;
   readonly byteSize: number;
-  readonly state: ImportState;
+  readonly state: ImportRow['state'];
   readonly preview: FilePreview;
   readonly mapping: Partial<PanelMapping>;
   readonly check: ImportCheck | null;
-  readonly progress: ImportProgress | null;
+  readonly progress: ImportRow['progress'];
   readonly failure: string | null;
   readonly panelVersionId: string | null;
 }

@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import type { InsertOptions } from '../../db/repositories/panel-rows-repository';
 import type { WorkspaceRepositories } from '../../db/repositories/repositories';
-import type { StoredColumn } from '../../db/schema/panel-tables';
+import type { PanelVersionRow } from '../../db/repositories/panels-repository';
 import type { FileRecipe } from '../compute/file-recipe';
 import type { FilePanel } from '../compute/parse-messages';
 import type { PanelMapping } from './import-draft';
@@ -64,7 +64,7 @@ function recipeOf({ panelName: _, ...recipe }: PanelMapping): FileRecipe {
   return recipe;
 }
 
-function columnsOf(mapping: PanelMapping): readonly StoredColumn[] {
+function columnsOf(mapping: PanelMapping): PanelVersionRow['columns'] {
   return [
     { name: mapping.marketValue, role: 'marketValue' },
     { name: mapping.capex, role: 'capex' },
