@@ -38,7 +38,7 @@ export class LineageService {
  * which the regressors come from.
  */
 function cellsUsed(
-  { fit, panelVersion, result }: FinishedFit,
+  { fit, panelVersion }: FinishedFit,
   rows: PanelRows,
   year: number | undefined,
 ): Pick<Lineage, 'columns' | 'rows'> {
@@ -46,12 +46,20 @@ function cellsUsed(
   const indices = [outcome, ...regressors].map((name) =>
     panelVersion.columns.findIndex((column) => column.name === name),
   );
-  const dropped = new Set(result.sample.dropped.map(({ row }) => row));
-  const sample = rows.fileRow.flatMap((fileRow, row) =>
-    !dropped.has(fileRow) && (year === undefined || rows.year[row] === year) ? [row] : [],
-  );
   const { lag } = fit.specification;
-  // Rows come by company and year: a lagged row of the sample has its year before on the line above.
+  // Lines of the file do not tell rows apart: one line can hold several years, and typed rows have none. Rows come by
+  // company and year: a lagged row of the sample has its year before on the line above.
+  const isComplete = (row: number): boolean => {
+    const source = row - lag;
+    if (rows.company[source] !== rows.company[row] || rows.year[source] !== rows.year[row] - lag)
+      return false;
+    const [ofOutcome, ...ofRegressors] = indices;
+    const has = (at: number, index: number): boolean => rows.cells[at][index] !== null;
+    return has(row, ofOutcome) && ofRegressors.every((index) => has(source, index));
+  };
+  const sample = rows.year.flatMap((ofRow, row) =>
+    isComplete(row) && (year === undefined || ofRow === year) ? [row] : [],
+  );
   const kept = [...new Set(sample.flatMap((row) => (lag === 0 ? [row] : [row - 1, row])))];
   return {
     columns: indices.map((index) => panelVersion.columns[index]),

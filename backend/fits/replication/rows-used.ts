@@ -20,7 +20,6 @@ export function* rowsUsed(
   columns: PanelColumns,
   result: Pick<FitResult, 'members' | 'sample' | 'specification'>,
 ): Generator<RowUsed> {
-  const dropped = new Set(result.sample.dropped.map(({ row }) => row));
   const singles = new Set(result.sample.singleRow);
   const { lag } = result.specification;
   const rowsOf = columns.companies.map((): number[] => []);
@@ -33,14 +32,20 @@ export function* rowsUsed(
     );
     const ofYear = new Map(rows.map((row) => [columns.year[row], row]));
     for (const row of rows) {
-      if (dropped.has(columns.fileRow[row])) continue;
       const year = columns.year[row];
-      const source = lag === 0 ? row : ofYear.get(year - lag);
+      const source = ofYear.get(year - lag);
+      const values = [
+        columns.outcome.values[row],
+        ...columns.regressors.map((regressor) => regressor.values[source ?? -1] ?? NaN),
+      ];
+      // Lines of the file do not tell rows apart: one line can hold several years, and typed rows have none.
+      if (values.some(Number.isNaN)) continue;
+      const [outcome, ...regressors] = values;
       yield {
         company,
         year,
-        outcome: columns.outcome.values[row],
-        regressors: columns.regressors.map(({ values }) => values[source ?? -1]),
+        outcome,
+        regressors,
         fileRow: columns.fileRow[row],
         isUsed: !singles.has(company),
       };
