@@ -24,10 +24,12 @@ export function toEditionSummary(row: EditionRow): EditionSummary {
   };
 }
 
-export function toEditionReply({ row, content, whyNot, mayReturn }: Edition): EditionReply {
+export function toEditionReply(edition: Edition): EditionReply {
+  const { row, content, newerPanelVersion, whyNot, mayReturn } = edition;
   return {
     edition: toEditionSummary(row),
     content: content as EditionContent,
+    newerPanelVersion,
     maySign: whyNot === null,
     mayReturn,
     whyNot,

@@ -20,6 +20,8 @@ export interface Edition {
   readonly row: EditionRow;
   /** What was frozen, as it was hashed. */
   readonly content: unknown;
+  /** The newest version of its fit's panel, where that is another one. */
+  readonly newerPanelVersion: { readonly id: string; readonly number: number } | null;
   /** Why the reader may not sign it; null when they may. */
   readonly whyNot: string | null;
   readonly mayReturn: boolean;
@@ -62,6 +64,7 @@ export class EditionService {
       return {
         row,
         content: JSON.parse(text) as unknown,
+        newerPanelVersion: await newerPanelVersion(tx, row),
         whyNot: whyNotSign(reader, row, signed),
         mayReturn: whyNotSign(reader, row, undefined) === null,
       };
@@ -164,6 +167,15 @@ export class EditionService {
         throw error;
       });
   }
+}
+
+async function newerPanelVersion(
+  tx: WorkspaceRepositories,
+  { fitId }: EditionRow,
+): Promise<Edition['newerPanelVersion']> {
+  const fit = await tx.fits.find(fitId);
+  if (fit === undefined) throw new Error(`fit ${fitId} of an edition is not there`);
+  return (await tx.panels.newerThan(fit.panelVersionId)) ?? null;
 }
 
 function visibleStates(reader: Reader): readonly EditionState[] {

@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import { FitResult } from './fits';
-import { ColumnRole, PanelVersionSummary } from './panels';
+import { ColumnRole, NewerPanelVersion, PanelVersionSummary } from './panels';
 import { PeerGroupReply } from './peers';
 import { Plan, ScenarioYear } from './scenarios';
 
@@ -89,6 +89,8 @@ export type EditionsReply = z.infer<typeof EditionsReply>;
 export const EditionReply = z.object({
   edition: EditionSummary,
   content: EditionContent,
+  /** Never part of what was frozen. */
+  newerPanelVersion: NewerPanelVersion,
   /** Whether the person who asks may sign it, and if not, why. */
   maySign: z.boolean(),
   /** One that a later signed edition overtook can still be returned. */

@@ -1,6 +1,6 @@
 import * as z from 'zod';
 import { PeerGroupSummary } from './peers';
-import { PanelVersionSummary } from './panels';
+import { NewerPanelVersion, PanelVersionSummary } from './panels';
 
 export const SlopeCovariance = z.enum([
   'cr2',
@@ -329,6 +329,7 @@ export const FitReply = z.object({
     .nullable(),
   result: FitResult.nullable(),
   panelVersion: PanelVersionSummary,
+  newerPanelVersion: NewerPanelVersion,
   peerGroup: PeerGroupSummary,
 });
 export type FitReply = z.infer<typeof FitReply>;

@@ -66,6 +66,10 @@ export type PanelVersionSummary = z.infer<typeof PanelVersionSummary>;
 export const PanelExportOptions = z.strictObject({ decimalSign: z.enum(['.', ',']).default('.') });
 export type PanelExportOptions = z.infer<typeof PanelExportOptions>;
 
+/** The newest version of the same panel, where it is not the one that a thing stands on; null where it is. */
+export const NewerPanelVersion = z.object({ id: z.uuid(), number: z.number().int() }).nullable();
+export type NewerPanelVersion = z.infer<typeof NewerPanelVersion>;
+
 export const PanelVersionsReply = z.object({ versions: z.array(PanelVersionSummary) });
 export type PanelVersionsReply = z.infer<typeof PanelVersionsReply>;
 

@@ -37,13 +37,15 @@ export function toFitSummary(fit: StoredFit): FitSummary {
   };
 }
 
-export function toFitReply({ fit, result, panelVersion, peerGroup }: FitOnGround): FitReply {
+export function toFitReply(found: FitOnGround): FitReply {
+  const { fit, result, panelVersion, newerPanelVersion, peerGroup } = found;
   return {
     fit: toFitSummary(fit),
     progress: fit.progress,
     failure: fit.failure === null ? null : { ...fit.failure, subjects: [...fit.failure.subjects] },
     result: result === undefined ? null : toFitResultReply(result),
     panelVersion: toPanelVersionSummary(panelVersion),
+    newerPanelVersion,
     peerGroup: toPeerGroupSummary(peerGroup),
   };
 }

@@ -23,6 +23,8 @@ export interface FitOnGround {
   readonly result: FitResult | undefined;
   readonly peerGroup: PeerGroup;
   readonly panelVersion: PanelVersionRow;
+  /** The newest version of its panel, where that is another one. */
+  readonly newerPanelVersion: { readonly id: string; readonly number: number } | null;
 }
 
 /** A fit that is done. */
@@ -126,6 +128,7 @@ export async function findFit(tx: WorkspaceRepositories, id: string): Promise<Fi
     fit: toStoredFit(row),
     result: result === undefined ? undefined : toFitResult(result),
     panelVersion,
+    newerPanelVersion: (await tx.panels.newerThan(panelVersion.id)) ?? null,
     peerGroup: await findPeerGroup(tx, row.peerGroupId),
   };
 }

@@ -74,6 +74,26 @@ export class PanelsRepository {
       .executeTakeFirst();
   }
 
+  /** The newest version of the panel that a version is of; undefined where that one is the newest. */
+  newerThan(
+    panelVersionId: string,
+  ): Promise<{ readonly id: string; readonly number: number } | undefined> {
+    return this.db
+      .selectFrom('panelVersion as known')
+      .innerJoin('panelVersion as newer', (join) =>
+        join
+          .onRef('newer.workspaceId', '=', 'known.workspaceId')
+          .onRef('newer.panelId', '=', 'known.panelId')
+          .onRef('newer.number', '>', 'known.number'),
+      )
+      .select(['newer.id', 'newer.number'])
+      .where('known.workspaceId', '=', this.workspaceId)
+      .where('known.id', '=', panelVersionId)
+      .orderBy('newer.number', 'desc')
+      .limit(1)
+      .executeTakeFirst();
+  }
+
   /** All versions of a panel, the first one first. */
   versionsOfPanel(panelId: string): Promise<PanelVersionRow[]> {
     return this.versions()

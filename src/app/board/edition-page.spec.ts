@@ -14,6 +14,7 @@ const waiting: EditionReply = {
   content: editionContent,
   maySign: true,
   mayReturn: true,
+  newerPanelVersion: null,
   whyNot: null,
 };
 const signed: EditionReply = {
@@ -25,6 +26,7 @@ const signed: EditionReply = {
   },
   maySign: false,
   mayReturn: false,
+  newerPanelVersion: null,
   whyNot: 'T. Emmerquist has signed this edition already.',
 };
 

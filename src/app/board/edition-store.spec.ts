@@ -10,6 +10,7 @@ const seventh: EditionReply = {
   content: editionContent,
   maySign: true,
   mayReturn: true,
+  newerPanelVersion: null,
   whyNot: null,
 };
 const eighth: EditionReply = {

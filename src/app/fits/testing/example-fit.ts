@@ -234,6 +234,7 @@ export const exampleFit: FitReply = {
   failure: null,
   result: exampleResult,
   panelVersion: examplePanelVersion,
+  newerPanelVersion: null,
   peerGroup: {
     id: '0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a0013',
     number: 2,

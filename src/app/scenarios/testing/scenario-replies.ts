@@ -60,6 +60,7 @@ export const fitReply: FitReply = {
   progress: null,
   failure: null,
   panelVersion,
+  newerPanelVersion: null,
   peerGroup,
   result: {
     engine: '1.0.0',
