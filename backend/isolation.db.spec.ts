@@ -131,12 +131,6 @@ const bodies: Readonly<Record<string, (ids: Filled['ids']) => object>> = {
     layout: { kind: 'long' },
     decimalSign: 'as-found',
   }),
-  readImportAs: () => ({
-    sheet: null,
-    headerRow: 1,
-    layout: { kind: 'long' },
-    decimalSign: 'as-found',
-  }),
   commitImport: () => ({ note: '' }),
   saveCorrections: () => ({
     ...correctionBody,
