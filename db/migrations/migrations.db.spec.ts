@@ -1,6 +1,9 @@
+import { randomUUID } from 'node:crypto';
+import { Kysely, Migrator, PostgresDialect } from 'kysely';
 import pg from 'pg';
 import { migrate } from '../migrate';
 import { createEmptyDatabase, type TestDatabase } from '../testing/test-database';
+import { Migrations } from './migrations';
 
 /** Tables of the schema that hold no single workspace's data, each with its reason. */
 const exceptions: Readonly<Record<string, string>> = {
@@ -123,6 +126,46 @@ describe('migrations', () => {
         await expectAsync(app.query(statement)).withContext(statement).toBeRejectedWithError();
     } finally {
       await app.end();
+    }
+  });
+});
+
+describe('the migration of the panel desk', () => {
+  it('has open imports of before checked again, in every workspace', async () => {
+    const database = await createEmptyDatabase();
+    const pool = new pg.Pool({ connectionString: database.ownerUrl, max: 2 });
+    const admin = new pg.Client({ connectionString: database.adminUrl });
+    await admin.connect();
+    const db = new Kysely<unknown>({ dialect: new PostgresDialect({ pool }) });
+    try {
+      const migrator = new Migrator({ db, provider: new Migrations(database.appRole) });
+      await migrator.migrateTo('0004-evidence-and-bootstraps');
+      const [id, other] = [randomUUID(), randomUUID()];
+      await admin.query(`insert into person (id, email, name, password_hash, preferences)
+        values ('${id}', 'a@people.example', 'A', 'x', '{}')`);
+      for (const workspace of [id, other])
+        await admin.query(`insert into workspace (workspace_id, name) values ('${workspace}', 'W');
+          insert into stored_file (workspace_id, id, name, byte_size, sha256, content, created_by)
+            values ('${workspace}', '${id}', 'f.csv', 1, 'x', 'x', '${id}');
+          insert into import_draft
+              (workspace_id, id, file_id, state, preview, mapping, findings, created_by)
+            values ('${workspace}', '${id}', '${id}', 'checked',
+              '{"headers":["a"]}', '{}', '{"rows":1}', '${id}')`);
+      await migrate({ ownerUrl: database.ownerUrl, appRole: database.appRole });
+      const drafts = await admin.query<Record<string, unknown>>(
+        'select state, findings, preview from import_draft',
+      );
+      expect(drafts.rows.length).toBe(2);
+      for (const { state, findings, preview } of drafts.rows) {
+        expect([state, findings]).toEqual(['mapped', null]);
+        expect(preview).toEqual(
+          jasmine.objectContaining({ headers: ['a'], sheets: [], topLines: [] }),
+        );
+      }
+    } finally {
+      await db.destroy();
+      await admin.end();
+      await database.drop();
     }
   });
 });
