@@ -51,6 +51,7 @@ describe('the main job, from a file to a signed edition', () => {
       company: 'C01',
       year: 1935,
       values: [30.284, 2.938, 52.011],
+      origins: [null, null, null],
     });
     expect(reply.panelVersion.file.name).toBe('panel.csv');
     expect((await cfo.get(`/api/fits/${fit.fit.id}/lineage/slope.7`)).status).toBe(404);

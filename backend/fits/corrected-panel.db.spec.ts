@@ -55,6 +55,18 @@ describe('a fit on a corrected panel', () => {
     expect(typed.map(({ company, year, values }) => [company, year, ...values])).toEqual([
       ['C01', 1955, 30, 3, 52],
     ]);
+    const [{ origins }] = typed;
+    expect(origins).toEqual(
+      origins.map((origin) => ({
+        corrected: {
+          ...{ by: 'Founder', at: origin?.corrected?.at ?? '' },
+          ...{ reason: 'Filled in', source: 'Report', before: null },
+        },
+        conversion: null,
+      })),
+    );
+    const others = rows.filter(({ fileRow }) => fileRow !== 0);
+    expect(others.every((row) => row.origins.every((origin) => origin === null))).toBeTrue();
   });
 
   it('says when its panel has a newer version, and so does an edition of it', async () => {

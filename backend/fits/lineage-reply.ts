@@ -1,6 +1,7 @@
-import type { LineageReply } from '../contract';
+import type { CellOrigin as CellOriginReply, LineageReply } from '../contract';
 import { toPanelVersionSummary } from '../panels/panel-replies';
 import { toPeerGroupSummary } from '../peers/peer-replies';
+import type { CellOrigin } from './cell-origins';
 import type { Lineage } from './lineage-service';
 
 export function toLineageReply(lineage: Lineage): LineageReply {
@@ -41,7 +42,26 @@ export function toLineageReply(lineage: Lineage): LineageReply {
         company: rows.company[row],
         year: rows.year[row],
         values: [...rows.cells[row]],
+        origins: lineage.origins[row].map((origin) =>
+          origin === null ? null : toCellOrigin(origin),
+        ),
       })),
     },
+  };
+}
+
+function toCellOrigin({ corrected, conversion }: CellOrigin): CellOriginReply {
+  return {
+    corrected:
+      corrected === null
+        ? null
+        : {
+            by: corrected.createdByName,
+            at: corrected.createdAt.toISOString(),
+            reason: corrected.reason,
+            source: corrected.source,
+            before: corrected.before,
+          },
+    conversion,
   };
 }

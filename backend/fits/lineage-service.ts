@@ -1,6 +1,8 @@
 import type { PanelRows } from '../../db/repositories/panels-repository';
 import type { Repositories } from '../../db/repositories/repositories';
+import type { FileRecipe } from '../compute/file-recipe';
 import { NotFound } from '../errors/app-error';
+import { type CellOrigin, cellOrigins } from './cell-origins';
 import { accountFor } from './figure-accounts';
 import type { FigureAccount } from './figure-text';
 import { memberNames } from './fit-subject';
@@ -13,6 +15,8 @@ export interface Lineage extends FinishedFit {
   /** Columns of the panel that the fit uses, in the order of `cells`. */
   readonly columns: FinishedFit['panelVersion']['columns'];
   readonly rows: PanelRows;
+  /** origins[row][column]; null where a cell is as the file has it. */
+  readonly origins: readonly (readonly (CellOrigin | null)[])[];
 }
 
 /** How a figure came about, down to the cells of the imported file. */
@@ -27,47 +31,61 @@ export class LineageService {
       if (account === undefined) throw new NotFound('The fit has no such figure.');
       const company = account.cells?.company;
       const members = company === undefined ? memberNames(found) : [company];
-      const rows = await tx.panels.rows(found.panelVersion.id, members);
-      return { ...found, figure, account, ...cellsUsed(found, rows, account.cells?.year) };
+      const { id } = found.panelVersion;
+      const rows = await tx.panels.rows(id, members);
+      const currencies = await tx.panels.rowCurrencies(id, members);
+      const recipe = (await tx.panels.recipe(id)) as FileRecipe | null;
+      const originOf = cellOrigins(recipe, await tx.panelCorrections.standing(id, members));
+      const used = sampleRows(found, rows, account.cells?.year);
+      const columns = columnsUsed(found);
+      return {
+        ...{ ...found, figure, account },
+        columns: columns.map((column) => found.panelVersion.columns[column]),
+        rows: {
+          company: used.map((row) => rows.company[row]),
+          year: used.map((row) => rows.year[row]),
+          fileRow: used.map((row) => rows.fileRow[row]),
+          cells: used.map((row) => columns.map((column) => rows.cells[row][column])),
+        },
+        origins: used.map((row) => {
+          const [company, year, fileRow] = [rows.company[row], rows.year[row], rows.fileRow[row]];
+          const place = { company, year, fileRow, currency: currencies[row] };
+          return columns.map((column) =>
+            originOf({ ...place, column, value: rows.cells[row][column] }),
+          );
+        }),
+      };
     });
   }
 }
 
-/**
- * The rows of the sample and, of each, the columns of the specification; with a lag also the rows of the year before,
- * which the regressors come from.
- */
-function cellsUsed(
-  { fit, panelVersion }: FinishedFit,
-  rows: PanelRows,
-  year: number | undefined,
-): Pick<Lineage, 'columns' | 'rows'> {
+/** Positions of the fit's columns among the panel's: outcome, then regressors. */
+function columnsUsed({ fit, panelVersion }: FinishedFit): readonly number[] {
   const { outcome, regressors } = fit.specification;
-  const indices = [outcome, ...regressors].map((name) =>
+  return [outcome, ...regressors].map((name) =>
     panelVersion.columns.findIndex((column) => column.name === name),
   );
-  const { lag } = fit.specification;
+}
+
+/** The rows of the sample; with a lag also those of the year before, which the regressors come from. */
+function sampleRows(
+  found: FinishedFit,
+  rows: PanelRows,
+  year: number | undefined,
+): readonly number[] {
+  const { lag } = found.fit.specification;
+  const [ofOutcome, ...ofRegressors] = columnsUsed(found);
+  const has = (row: number, column: number): boolean => rows.cells[row][column] !== null;
   // Lines of the file do not tell rows apart: one line can hold several years, and typed rows have none. Rows come by
   // company and year: a lagged row of the sample has its year before on the line above.
   const isComplete = (row: number): boolean => {
     const source = row - lag;
     if (rows.company[source] !== rows.company[row] || rows.year[source] !== rows.year[row] - lag)
       return false;
-    const [ofOutcome, ...ofRegressors] = indices;
-    const has = (at: number, index: number): boolean => rows.cells[at][index] !== null;
-    return has(row, ofOutcome) && ofRegressors.every((index) => has(source, index));
+    return has(row, ofOutcome) && ofRegressors.every((column) => has(source, column));
   };
   const sample = rows.year.flatMap((ofRow, row) =>
     isComplete(row) && (year === undefined || ofRow === year) ? [row] : [],
   );
-  const kept = [...new Set(sample.flatMap((row) => (lag === 0 ? [row] : [row - 1, row])))];
-  return {
-    columns: indices.map((index) => panelVersion.columns[index]),
-    rows: {
-      company: kept.map((row) => rows.company[row]),
-      year: kept.map((row) => rows.year[row]),
-      fileRow: kept.map((row) => rows.fileRow[row]),
-      cells: kept.map((row) => indices.map((index) => rows.cells[row][index])),
-    },
-  };
+  return [...new Set(sample.flatMap((row) => (lag === 0 ? [row] : [row - 1, row])))];
 }

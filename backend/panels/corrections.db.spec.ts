@@ -280,6 +280,26 @@ describe('corrections', () => {
     ...{ number, value, note, by: 'Founder', reason: null, source: null },
   });
 
+  it('stand in a version as long as no import and no older version took their place', async () => {
+    const { session } = (await analyst.get('/api/session')).body as {
+      session: { workspace: { id: string } };
+    };
+    const standing = (id: string) =>
+      server.composition.services.repositories.inWorkspace(session.workspace.id, async (tx) =>
+        (await tx.panelCorrections.standing(id, ['Arvo'])).map(({ before, value }) => [
+          before,
+          value,
+        ]),
+      );
+    const second = await correct(first, { cells: [cell('Arvo', 2001, marketValue, 12)] });
+    const third = await correct(second, { cells: [cell('Arvo', 2001, marketValue, 13)] });
+    expect(await standing(first)).toEqual([]);
+    expect(await standing(third)).toEqual([[12, 13]]);
+    expect(await standing(await restore(second))).toEqual([[10, 12]]);
+    expect(await standing(await restore(first))).toEqual([]);
+    expect(await standing(await importPanel(analyst, text, mapping))).toEqual([]);
+  });
+
   it('are for analysts; the CFO reads what changed', async () => {
     const cfo = await join(server, analyst, ['cfo']);
     const body = { note: 'x', cells: [cell('Arvo', 2001, marketValue, 12)] };

@@ -11,6 +11,15 @@ export interface CorrectionRow {
   readonly source: string;
 }
 
+/** The last correction of a cell. */
+export interface StandingRow extends CorrectionRow {
+  readonly createdAt: Date;
+  readonly createdByName: string;
+  /** What it made of the cell, and what the cell was before; null where it was missing. */
+  readonly value: number | null;
+  readonly before: number | null;
+}
+
 /** A row as one version holds it. */
 export interface RowInVersion {
   readonly panelVersionId: string;
@@ -72,6 +81,45 @@ export class PanelCorrectionsRepository {
       where version.workspace_id = ${this.workspaceId} and version.panel_id = ${panelId}
         and held.company = ${company} and held.year = ${year}
       order by version.number`.execute(this.db);
+    return rows;
+  }
+
+  /**
+   * The corrections that still hold in a version, of the named companies: back through corrections to their parents and
+   * through restores to what they put back, as far as the import that all of it began with.
+   */
+  async standing(panelVersionId: string, companies: readonly string[]): Promise<StandingRow[]> {
+    const { rows } = await sql<StandingRow>`
+      with recursive chain as (
+        select id, parent_id, restored_id, origin, created_at, created_by, 0 as depth
+        from panel_version
+        where workspace_id = ${this.workspaceId} and id = ${panelVersionId}
+        union all
+        select older.id, older.parent_id, older.restored_id, older.origin, older.created_at,
+          older.created_by, depth + 1
+        from chain
+        join panel_version as older on older.workspace_id = ${this.workspaceId}
+          and older.id = case chain.origin
+            when 'correction' then chain.parent_id
+            when 'restore' then chain.restored_id
+          end
+      )
+      select distinct on (made.company, made.year, made.column_index)
+        made.company, made.year, made.column_index, made.reason, made.source,
+        chain.created_at, person.name as created_by_name,
+        became.cells[made.column_index + 1] as value, was.cells[made.column_index + 1] as before
+      from chain
+      join panel_correction as made
+        on made.workspace_id = ${this.workspaceId} and made.panel_version_id = chain.id
+      join person on person.id = chain.created_by
+      join panel_row as became on became.workspace_id = made.workspace_id
+        and became.panel_version_id = chain.id
+        and became.company = made.company and became.year = made.year
+      left join panel_row as was on was.workspace_id = made.workspace_id
+        and was.panel_version_id = chain.parent_id
+        and was.company = made.company and was.year = made.year
+      where made.company = any(${[...companies]}::text[])
+      order by made.company, made.year, made.column_index, chain.depth`.execute(this.db);
     return rows;
   }
 }

@@ -217,6 +217,23 @@ export class PanelsRepository {
     };
   }
 
+  /** Currency in the file of each row of the named companies, as `rows` orders them; null where it names none. */
+  async rowCurrencies(
+    panelVersionId: string,
+    companies: readonly string[],
+  ): Promise<(string | null)[]> {
+    const found = await this.db
+      .selectFrom('panelRow')
+      .select('currency')
+      .where('workspaceId', '=', this.workspaceId)
+      .where('panelVersionId', '=', panelVersionId)
+      .where('company', '=', sql<string>`any(${[...companies]}::text[])`)
+      .orderBy('company')
+      .orderBy('year')
+      .execute();
+    return found.map(({ currency }) => currency);
+  }
+
   /** The next rows of a version in order of company and year, from the row after the one that is named. */
   async rowsAfter(
     panelVersionId: string,

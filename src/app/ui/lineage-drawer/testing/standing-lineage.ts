@@ -60,8 +60,14 @@ export const standingLineage: LineageReply = {
       { name: 'capex', role: 'capex' },
     ],
     rows: [
-      { fileRow: 17, company: 'Velmara', year: 2024, values: [9120.5, 1180] },
-      { fileRow: 18, company: 'Velmara', year: 2025, values: [9410, null] },
+      {
+        fileRow: 17,
+        company: 'Velmara',
+        year: 2024,
+        values: [9120.5, 1180],
+        origins: [null, null],
+      },
+      { fileRow: 18, company: 'Velmara', year: 2025, values: [9410, null], origins: [null, null] },
     ],
   },
 };
