@@ -191,6 +191,8 @@ export const exampleLogResult: FitResult = {
 export const examplePanelVersion: PanelVersionSummary = {
   id: '0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a0011',
   panelId: '0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a0010',
+  parentId: null,
+  origin: 'import',
   panelName: 'Flow control',
   number: 1,
   currency: 'EUR',

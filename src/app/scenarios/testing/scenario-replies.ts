@@ -7,6 +7,8 @@ export const fitId = uuid(1);
 const panelVersion: FitReply['panelVersion'] = {
   id: uuid(2),
   panelId: uuid(3),
+  parentId: null,
+  origin: 'import',
   panelName: 'Pumps',
   number: 4,
   currency: 'EUR',

@@ -36,6 +36,8 @@ export const standingLineage: LineageReply = {
   panelVersion: {
     id: '0198a1f0-0000-7000-8000-000000000003',
     panelId: '0198a1f0-0000-7000-8000-000000000004',
+    parentId: null,
+    origin: 'import',
     panelName: 'Cold chain',
     number: 4,
     currency: 'EUR',
