@@ -28,8 +28,9 @@ export function readPanel(table: Table, mapping: TableMapping): PanelReading {
   const findings: TableFinding[] = [];
   const rows: number[] = [];
   const years: number[] = [];
-  table.rows.forEach((cells, row) => {
-    const year = readKey(table, row, { ...mapping, ...indices }, findings);
+  const keys = { ...mapping, ...indices };
+  table.rows.forEach((_, row) => {
+    const year = readKey(table, row, keys, findings);
     if (year === undefined) return;
     rows.push(row);
     years.push(year);
@@ -122,18 +123,18 @@ function readNumbers(
   return columns.map((cells, k): NamedColumn => {
     const column = names[k];
     const { decimalSign } = signs[k];
+    const place = (row: number) => ({ row: table.lines[row], column });
     const values = cells.map((found, row) => {
       const value = parseNumber(found, decimalSign);
-      const place = { row: table.lines[row], column, found };
       if (value === undefined) {
         const wording = decimalSign === ',' ? 'decimal comma' : 'decimal point';
         const detail = `Expected a number with a ${wording}, as the rest of the column has.`;
-        findings.push({ ...place, code: 'not-a-number', detail, isBlocking: true });
+        findings.push({ ...place(row), found, code: 'not-a-number', detail, isBlocking: true });
         return NaN;
       }
       if (Number.isNaN(value) && isPlaced.has(row)) {
         const detail = 'No value: the row counts in no fit that uses this column.';
-        findings.push({ ...place, code: 'missing', detail, isBlocking: false });
+        findings.push({ ...place(row), found, code: 'missing', detail, isBlocking: false });
       }
       return value;
     });

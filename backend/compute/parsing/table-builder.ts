@@ -23,7 +23,7 @@ export class TableBuilder {
       return;
     }
     const width = this.#header.length;
-    if (record.slice(width).some((cell) => cell.trim() !== '')) {
+    if (record.length > width && record.slice(width).some((cell) => cell.trim() !== '')) {
       const message = `expected at most ${width} cells on line ${row}, as many as the header has; found ${record.length}`;
       throw new TableError('csv-invalid', message, { row, column: width + 1 });
     }
@@ -35,7 +35,7 @@ export class TableBuilder {
         { row },
       );
     }
-    this.#rows.push(Array.from({ length: width }, (_, index) => record[index] ?? ''));
+    this.#rows.push(record.length === width ? record : ofWidth(record, width));
     this.#lines.push(row);
   }
 
@@ -70,6 +70,10 @@ export class TableBuilder {
   }
 }
 
+function ofWidth(record: readonly string[], width: number): string[] {
+  return Array.from({ length: width }, (_, index) => record[index] ?? '');
+}
+
 function lineEndsIn(cell: string): number {
-  return cell.split('\n').length - 1;
+  return cell.includes('\n') ? cell.split('\n').length - 1 : 0;
 }
