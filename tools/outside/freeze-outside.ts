@@ -9,6 +9,7 @@ const frozenCases: readonly string[] = [
   'grunfeld10_unbalanced: lag',
   'grunfeld10_short_own: company',
   'grunfeld10_short_own: company, year',
+  'grunfeld10_short_own, nine rows: company',
   'grunfeld11_value_on_inv_capital: log',
   'grunfeld11_value_on_inv_capital: log, year, lag',
   'usairlines: company, year',

@@ -76,7 +76,9 @@ drift_of <- function(panel, fit, case) {
   w <- numeric(length(wide$beta))
   w[wide$slope_places[ncol(panel$x) + seq_len(ncol(trends))]] <- c(1, -1)[seq_len(ncol(trends))]
   cosines <- rank_cosines(length(panel$years))
-  error <- calibrated_error(wide, w, cosines, fit$persistence$used)$standard_error
-  interval <- t_interval(sum(w * wide$beta), error, cosines, case$confidence)
-  c(unlist(interval), 2 * pt(-abs(interval$estimate / error), cosines))
+  # By the clock of the own company's level.
+  clocks <- contrast_clocks(fit, company_weights(fit, setNames(1, case$own)), cosines)
+  error <- calibrated_error(wide, w, cosines, fit$persistence$used, clocks)$standard_error
+  interval <- t_interval(sum(w * wide$beta), error, clocks$cosines, case$confidence)
+  c(unlist(interval), 2 * pt(-abs(interval$estimate / error), clocks$cosines))
 }

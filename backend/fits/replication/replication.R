@@ -140,7 +140,7 @@ persistence_of <- function(panel, e) {
 }
 
 # Where each year lies on the clock of a contrast, from 0 to 1 (T x columns of `w`), and how many cosines run over it.
-# By the calendar u_t = (t - 1/2)/T. A company with rows in fewer than half of the years is short; where short companies
+# By the calendar u_t = (t - 1/2)/T. A company with rows in fewer than two thirds of the years is short; where short companies
 # carry half or more of sum_i w_i^2/T_i, the contrast's own rows drive the clock (a change of time by the variance profile,
 # Cavaliere & Taylor 2007, 2008): u_t = (sum_{s<t} v_s + v_t/2)/sum v, v_t = sum_i (w_i/T_i)^2 over the companies with a row
 # in year t. With m rows of the short company that carries most, m - 1 cosines differ from 0; below 3 the calendar stays.
@@ -151,7 +151,7 @@ contrast_clocks <- function(fit, w, cosines) {
   rows <- rowSums(present)
   clocks <- apply(as.matrix(w)[seq_along(panel$companies), , drop = FALSE], 2, function(weights) {
     carried <- weights^2 / rows
-    of_short <- ifelse(rows < years / 2, carried, 0)
+    of_short <- ifelse(3 * rows < 2 * years, carried, 0)
     most <- if (any(of_short > 0)) rows[[which.max(of_short)]] - 1 else 0
     if (most < 3 || sum(of_short) < sum(carried) / 2) {
       return(list(places = (seq_len(years) - 0.5) / years, cosines = cosines))

@@ -2,8 +2,14 @@ import type { PanelSample } from '../panel/panel-sample';
 import type { Contrast } from './contrast';
 import { cosineWeights, fewestCosines } from './cosine-weights';
 
-/** A company with rows in fewer than this share of the sample's years is there for a short time only. */
-const shortShare = 0.5;
+/**
+ * A company with rows in fewer than two thirds of the sample's years is there for a short time only. In simulations of
+ * its last 9, 10 and 12 of 20 years the calendar's 95 % intervals held the truth in .89 to .94 of samples, those of its
+ * own rows in .94 to .96.
+ */
+function isShort(rows: number, years: number): boolean {
+  return 3 * rows < 2 * years;
+}
 
 /** A contrast rests on such companies where they carry this share of Σ w_i²/T_i. */
 const restingShare = 0.5;
@@ -57,7 +63,7 @@ export function ownClock(sample: PanelSample, contrast: Contrast): OwnClock | nu
     const count = rowsOf(company);
     const variance = contrast.weights[index] ** 2 / count;
     all += variance;
-    if (count >= shortShare * years.length) return;
+    if (!isShort(count, years.length)) return;
     ofShort += variance;
     if (variance <= largest) return;
     largest = variance;

@@ -8,13 +8,16 @@ import { fitOf, panelOf, type PanelRow } from '../testing/golden-panels';
 import { randomNumbers, randomPanelNames, randomPanels } from '../testing/random-panels';
 import { intervalContext } from './interval-context';
 
-/** Engine figures beside a function that computes the same standard error from its definition. */
-function both(rows: readonly PanelRow[]): {
-  fit: ReturnType<typeof fitOf>;
-  dense: (contrast: DenseContrast, cosines: number, hasOwnClock?: boolean) => number;
-  cosines: number;
-  rankCosines: number;
-} | null {
+interface Found {
+  readonly fit: ReturnType<typeof fitOf>;
+  readonly dense: (contrast: DenseContrast, cosines: number, hasOwnClock: boolean) => number;
+  readonly denseDrift: (cosines: number, clock: DenseContrast['intercepts'] | null) => number;
+  readonly cosines: number;
+  readonly rankCosines: number;
+}
+
+/** Engine figures beside functions that compute the same standard errors from their definition. */
+function both(rows: readonly PanelRow[]): Found | null {
   const data = panelOf(rows, randomPanelNames);
   const fit = fitOf(data, 'K1');
   const context = intervalContext(withinFit(selectSample(data, 'K1', undefined), 'company'), 0.95);
@@ -24,11 +27,44 @@ function both(rows: readonly PanelRow[]): {
     used[context.fit.sample.companies.indexOf(company)];
   return {
     fit,
-    dense: (contrast, cosines, hasOwnClock = false) =>
-      denseError(rows, contrast, { persistence, cosines, hasOwnClock }),
+    dense: (contrast, cosines, hasOwnClock) =>
+      denseError(rows, contrast, {
+        persistence,
+        cosines,
+        clock: hasOwnClock ? contrast.intercepts : null,
+      }),
+    denseDrift: (cosines, clock) => {
+      const trend = (row: PanelRow, isIncluded: boolean): number =>
+        isIncluded ? row.year - 2000 : 0;
+      const augmented = rows.map((row) => {
+        const isOwn = row.company === 'K1';
+        return { ...row, regressors: [...row.regressors, trend(row, isOwn), trend(row, !isOwn)] };
+      });
+      const contrast = { intercepts: {}, slopes: [...none, 1, -1] };
+      return denseError(augmented, contrast, { persistence, cosines, clock });
+    },
     cosines: context.cosines,
     rankCosines: context.rankCosines,
   };
+}
+
+/** The standard error by the clock and on the cosines that the methods give a contrast. */
+function byMethod(
+  rows: readonly PanelRow[],
+  contrast: DenseContrast,
+  { dense, cosines }: { readonly dense: Found['dense']; readonly cosines: number },
+): number {
+  const rowsOf = (name: string): number => rows.filter(({ company }) => company === name).length;
+  const years = new Set(rows.map(({ year }) => year)).size;
+  const parts = Object.entries(contrast.intercepts).map(([name, weight]) => {
+    const count = rowsOf(name);
+    return { count, variance: weight ** 2 / count, isShort: count / years < 2 / 3 };
+  });
+  const sum = (of: typeof parts): number => of.reduce((total, { variance }) => total + variance, 0);
+  const short = parts.filter(({ isShort }) => isShort);
+  const [first] = [...short].sort((left, right) => right.variance - left.variance);
+  const hasOwnClock = short.length > 0 && first.count > 3 && sum(short) >= sum(parts) / 2;
+  return dense(contrast, hasOwnClock ? Math.min(cosines, first.count - 1) : cosines, hasOwnClock);
 }
 
 const none = [0, 0];
@@ -43,17 +79,17 @@ describe('calibrated standard errors', () => {
         const { fit, dense, cosines, rankCosines } = found;
         const peers = fit.members.filter((name) => name !== 'K1');
         const intercepts = Object.fromEntries(peers.map((name) => [name, -1 / peers.length]));
-        const standing = dense({ intercepts: { ...intercepts, K1: 1 }, slopes: none }, cosines);
+        const weighed = { intercepts: { ...intercepts, K1: 1 }, slopes: none };
+        const standing = byMethod(rows, weighed, { dense, cosines });
         expectDigits(fit.standing?.standardError, standing, 8, 'standing');
         for (const { company, standardError } of fit.intercepts) {
-          const expected = dense({ intercepts: { [company]: 1 }, slopes: none }, cosines);
+          const level = { intercepts: { [company]: 1 }, slopes: none };
+          const expected = byMethod(rows, level, { dense, cosines });
           expectDigits(standardError, expected, 8, company);
         }
         for (const { company, standardError } of fit.pairs ?? []) {
-          const expected = dense(
-            { intercepts: { K1: 1, [company]: -1 }, slopes: none },
-            rankCosines,
-          );
+          const pair = { intercepts: { K1: 1, [company]: -1 }, slopes: none };
+          const expected = byMethod(rows, pair, { dense, cosines: rankCosines });
           expectDigits(standardError, expected, 8, `K1 against ${company}`);
         }
       }),
@@ -70,7 +106,7 @@ describe('calibrated standard errors', () => {
       fc.property(randomPanels, plans, (rows, plan) => {
         const found = both(rows);
         if (found?.fit.prediction == null) return;
-        const expected = found.dense({ intercepts: { K1: 1 }, slopes: plan }, found.cosines);
+        const expected = byMethod(rows, { intercepts: { K1: 1 }, slopes: plan }, found);
         expectDigits(expectedValue(found.fit.prediction, plan).standardError, expected, 8);
       }),
       runs,
@@ -81,7 +117,7 @@ describe('calibrated standard errors', () => {
 describe('standard errors of a company with few rows', () => {
   const plan = [120, 40];
 
-  /** Four companies over 16 years, all rows but for K1, which has its last `ownRows`; K3 lacks every third. */
+  /** Four companies over 16 years, all rows but for K1, which has its last `ownRows`; K3 lacks every fourth. */
   function panelWith(ownRows: number): readonly PanelRow[] {
     const random = randomNumbers(5);
     return [0, 1, 2, 3].flatMap((company) =>
@@ -90,7 +126,7 @@ describe('standard errors of a company with few rows', () => {
         const outcome = 1000 * company + 2 * regressors[0] - regressors[1] + 40 * random();
         return { company: `K${company}`, year: 2000 + year, outcome, regressors };
       }).filter(
-        (_, year) => (company !== 1 || year >= 16 - ownRows) && (company !== 3 || year % 3 !== 2),
+        (_, year) => (company !== 1 || year >= 16 - ownRows) && (company !== 3 || year % 4 !== 2),
       ),
     );
   }
@@ -130,12 +166,12 @@ describe('standard errors of a company with few rows', () => {
     );
   }
 
-  it('run by the calendar from half of the years on', () => {
-    expectErrors(8, { hasOwnClock: false, cosines: 3, forPairs: 6 });
+  it('run by the calendar from two thirds of the years on', () => {
+    expectErrors(11, { hasOwnClock: false, cosines: 3, forPairs: 6 });
   });
 
   it('run with its own rows below, on no more cosines than those can tell apart', () => {
-    expectErrors(7, { hasOwnClock: true, cosines: 3, forPairs: 6 });
+    expectErrors(10, { hasOwnClock: true, cosines: 3, forPairs: 6 });
     expectErrors(5, { hasOwnClock: true, cosines: 3, forPairs: 4 });
     expectErrors(4, { hasOwnClock: true, cosines: 3, forPairs: 3 });
   });
@@ -144,12 +180,19 @@ describe('standard errors of a company with few rows', () => {
     expectErrors(3, { hasOwnClock: false, cosines: 3, forPairs: 6 });
   });
 
+  it('take the drift along', () => {
+    const short = both(panelWith(8))!;
+    expectDigits(short.fit.drift?.standardError, short.denseDrift(6, { K1: 1 }), 8, 'short');
+    const long = both(panelWith(11))!;
+    expectDigits(long.fit.drift?.standardError, long.denseDrift(6, null), 8, 'long');
+  });
+
   it('leave those of other companies by the calendar', () => {
     const { fit, dense } = both(panelWith(5))!;
     for (const company of ['K0', 'K2', 'K3']) {
       const { standardError } = fit.intercepts.find((one) => one.company === company)!;
       const level = { intercepts: { [company]: 1 }, slopes: none };
-      expectDigits(standardError, dense(level, 3), 8, company);
+      expectDigits(standardError, dense(level, 3, false), 8, company);
     }
   });
 });

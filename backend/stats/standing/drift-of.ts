@@ -1,13 +1,12 @@
 import { tTwoSided } from '../distributions/t-distribution';
 import type { Drift } from '../fit-result';
 import { calibratedInterval } from '../intervals/calibrated-interval';
-import { slopeContrast } from '../intervals/contrast';
+import { levelContrast, slopeContrast } from '../intervals/contrast';
 import type { IntervalContext } from '../intervals/interval-context';
 import { rowsOf } from '../intervals/interval-reasons';
 import { dot } from '../linear-algebra/square-matrix';
 import type { PanelSample } from '../panel/panel-sample';
-import { calendar } from '../intervals/contrast-clock';
-import { cosineWeights } from '../intervals/cosine-weights';
+import { contrastCosines } from '../intervals/contrast-clock';
 import { singleContrastError } from '../intervals/single-contrast';
 import { withoutInterval } from '../prediction';
 import { isPerfectFit, perfectFitReason } from '../regression/goodness';
@@ -22,8 +21,8 @@ export type DriftOrReason =
 
 /**
  * How much the gap between the own company and its peers widens a year: δ_own − δ_peers of the fit augmented by the
- * year for the own company and the year for all peers (δ_own alone beside year effects), with the calibrated interval of that fit and the persistence
- * of the original one.
+ * year for the own company and the year for all peers (δ_own alone beside year effects), with the calibrated interval of
+ * that fit, the persistence of the original one and the clock of the own company's level.
  *
  * @param own  index of the own company.
  */
@@ -42,7 +41,7 @@ export function driftOf(context: IntervalContext, own: number): DriftOrReason {
   if (reason !== undefined)
     return { drift: { ...withoutInterval(estimate, reason), pValue: null } };
   const contrast = slopeContrast(augmented, slopeWeights);
-  const weights = cosineWeights(calendar(fit.sample.years.length), cosines);
+  const weights = contrastCosines(fit.sample, levelContrast(fit, own), cosines);
   const error = singleContrastError(augmented, contrast, context.persistence.used, weights);
   const interval = calibratedInterval(estimate, error, confidence);
   const pValue =

@@ -13,8 +13,8 @@ export interface DenseChoice {
   /** ρ by company. */
   readonly persistence: (company: string) => number;
   readonly cosines: number;
-  /** Whether the rows of the companies that the contrast weighs drive its cosines, rather than the calendar. */
-  readonly hasOwnClock: boolean;
+  /** Weights by company whose rows drive the cosines; null for the calendar. */
+  readonly clock: Readonly<Record<string, number>> | null;
 }
 
 /**
@@ -26,7 +26,7 @@ export interface DenseChoice {
 export function denseError(
   rows: readonly PanelRow[],
   contrast: DenseContrast,
-  { persistence, cosines, hasOwnClock }: DenseChoice,
+  { persistence, cosines, clock }: DenseChoice,
 ): number {
   const companies = [...new Set(rows.map(({ company }) => company))];
   const columns = [
@@ -42,9 +42,8 @@ export function denseError(
   );
   const years = [...new Set(rows.map(({ year }) => year))].sort((left, right) => left - right);
   const count = years.length;
-  const places = hasOwnClock
-    ? ownPlaces(rows, contrast.intercepts, years)
-    : years.map((_, place) => (place + 0.5) / count);
+  const places =
+    clock === null ? years.map((_, place) => (place + 0.5) / count) : ownPlaces(rows, clock, years);
   const weighted = Array.from({ length: cosines }, (_, index) =>
     direct.map((value, row) => {
       const place = places[years.indexOf(rows[row].year)];
@@ -72,14 +71,14 @@ export function denseError(
 /** The share of Σ_i (w_i/T_i)² over rows that lies before the middle of each year. */
 function ownPlaces(
   rows: readonly PanelRow[],
-  intercepts: DenseContrast['intercepts'],
+  weights: Readonly<Record<string, number>>,
   years: readonly number[],
 ): number[] {
   const rowsOf = (company: string): number => rows.filter((row) => row.company === company).length;
   const within = (isIncluded: (year: number) => boolean): number =>
     rows
       .filter(({ year }) => isIncluded(year))
-      .reduce((sum, { company }) => sum + ((intercepts[company] ?? 0) / rowsOf(company)) ** 2, 0);
+      .reduce((sum, { company }) => sum + ((weights[company] ?? 0) / rowsOf(company)) ** 2, 0);
   const all = within(() => true);
   return years.map(
     (middle) => (within((year) => year < middle) + within((year) => year === middle) / 2) / all,
