@@ -96,7 +96,7 @@ describe('a job that fell silent', () => {
   });
 
   it('is left alone by a server that took it up since it looked', async () => {
-    const pair = [randomUUID(), randomUUID()];
+    const pair: readonly string[] = [randomUUID(), randomUUID()];
     const held = new Map(pair.map((subject) => [subject, heldJob(subject)]));
     let goOn: () => void = () => undefined;
     const blocked = new Promise<void>((resolve) => (goOn = resolve));
