@@ -32,6 +32,7 @@ export function findings(results: readonly SettingResult[]): string[] {
   const varied = results.filter(({ setting }) => setting.persistence.kind === 'varied');
   const short = results.filter(({ setting }) => setting.rows === 'last 5 of the own');
   const ten = results.filter(({ setting }) => setting.rows === 'last 10 of the own');
+  const three = results.filter(({ setting }) => setting.rows === 'last 3 of the own');
   const fourteen = results.filter(({ setting }) => setting.rows === 'last 14 of the own');
   return [
     sentence(
@@ -96,7 +97,7 @@ export function findings(results: readonly SettingResult[]): string[] {
       ten,
       [standingMeasure],
       (range) =>
-        `With the last 10 of 20 own rows the standing covers ${range}; with the last 14, which go by the calendar, ${rangeOf(fourteen, [standingMeasure])}.`,
+        `With the last 10 of 20 own rows the standing covers ${range}. By the calendar go the last 14, with ${rangeOf(fourteen, [standingMeasure])}, and the last 3, too few for three cosines, with ${rangeOf(three, [standingMeasure])}.`,
     ),
     sentence(
       stated,

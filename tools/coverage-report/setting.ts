@@ -23,7 +23,8 @@ export interface Setting {
 }
 
 /** The own company has its last rows alone, its peers all. */
-export type LastOwnRows = 'last 5 of the own' | 'last 10 of the own' | 'last 14 of the own';
+export type LastOwnRows =
+  'last 3 of the own' | 'last 5 of the own' | 'last 10 of the own' | 'last 14 of the own';
 
 /** First-order autocorrelation of a company's errors and regressors. */
 export type Persistence =

@@ -67,6 +67,7 @@ export const settings: readonly Setting[] = [
   }),
   like(12, 20, 0, { rows: 'last 10 of the own', own: 'first', suffix: 'own-last-10' }),
   like(12, 20, 0, { rows: 'last 14 of the own', own: 'first', suffix: 'own-last-14' }),
+  like(12, 20, 0, { rows: 'last 3 of the own', own: 'first', suffix: 'own-last-3' }),
 ].map((setting, index) => ({ ...setting, seed: (index + 1) * mostReplications }));
 
 function like(

@@ -28,6 +28,7 @@ const firstYear = 2001;
 const furthest = horizons[horizons.length - 1];
 const missingShare = 0.2;
 const lastOwnRows: Readonly<Record<LastOwnRows, number>> = {
+  'last 3 of the own': 3,
   'last 5 of the own': 5,
   'last 10 of the own': 10,
   'last 14 of the own': 14,

@@ -121,7 +121,7 @@ const cases: readonly RuleCase[] = [
     weight: 'notable',
     raised: withOwnYears(9),
     notRaised: withOwnYears(10),
-    says: 'K00 has rows in 9 of 20 years: in simulations the standing’s 95 % interval then holds the truth in about .88 to .94 of samples.',
+    says: 'K00 has rows in 9 of 20 years, and its standing rests on those alone. With 5 of 20 the 95 % interval holds the truth in about .95 to .96 of simulated samples.',
   },
   {
     code: 'year-effects',
@@ -308,6 +308,14 @@ describe('verdictRules', () => {
       });
     }
   }
+
+  it('says what simulations found of own rows too few for a clock of their own', () => {
+    const detailOf = (rows: number): string | undefined =>
+      verdictOf(withOwnYears(rows)).against.find(({ code }) => code === 'few-own-years')?.detail;
+    expect(detailOf(4)).toContain('K00 has rows in 4 of 20 years');
+    expect(detailOf(4)).toContain('With 5 of 20');
+    expect(detailOf(3)).toContain('With 3 of 20 the 95 % interval holds the truth in about .92 of');
+  });
 
   it('counts no row as missing that a lag takes by construction', () => {
     expect(codesOf(withDropped(38, 1))).not.toContain('missing-rows');
