@@ -60,7 +60,10 @@ export async function startTestServer(
   });
   await composition.start();
   const server = createServer();
-  await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
+  await new Promise<void>((resolve) =>
+    // Exclusive: spec processes that run at once would share one port.
+    server.listen({ port: 0, host: '127.0.0.1', exclusive: true }, resolve),
+  );
   const url = `http://127.0.0.1:${(server.address() as AddressInfo).port}`;
   const app = createApp({
     services: composition.services,
