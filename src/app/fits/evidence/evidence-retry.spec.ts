@@ -1,12 +1,14 @@
 import { provideHttpClient } from '@angular/common/http';
 import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
-import { type ComponentFixture, DeferBlockBehavior, TestBed } from '@angular/core/testing';
+import { type ComponentFixture, TestBed } from '@angular/core/testing';
 import { provideRouter } from '@angular/router';
 import type { Bootstrap, EvidenceReply } from '@contract';
 import { exampleFit } from '../testing/example-fit';
 import { exampleNumbers } from '../testing/example-numbers';
 import { EvidenceSection } from './evidence-section';
 import { EvidenceStore } from './evidence-store';
+import { OpenQuestions } from './open-questions';
+import { questions } from './questions';
 import { exampleEvidence, judgedResult } from './testing/example-evidence';
 
 describe('the evidence whose bootstrap can no longer be followed', () => {
@@ -22,7 +24,6 @@ describe('the evidence whose bootstrap can no longer be followed', () => {
 
   beforeEach(() => {
     TestBed.configureTestingModule({
-      deferBlockBehavior: DeferBlockBehavior.Manual,
       providers: [
         EvidenceStore,
         provideHttpClient(),
@@ -31,6 +32,7 @@ describe('the evidence whose bootstrap can no longer be followed', () => {
       ],
     });
     exampleNumbers();
+    TestBed.inject(OpenQuestions).open(questions.intervals.id);
     jasmine.clock().install();
     http = TestBed.inject(HttpTestingController);
     fixture = TestBed.createComponent(EvidenceSection);
@@ -42,6 +44,7 @@ describe('the evidence whose bootstrap can no longer be followed', () => {
   afterEach(() => {
     fixture.destroy();
     jasmine.clock().uninstall();
+    sessionStorage.clear();
     http.verify();
   });
 

@@ -141,8 +141,8 @@ export function modelsTitle(
   return `${head}, from ${low} to ${high}`;
 }
 
-/** Whether the choice of model decides what can be stated. */
-export function modelsMeaning(
+/** Whether the choice of model decides on which side of zero a figure lies. */
+export function modelsAnswer(
   result: FitResult,
   alternatives: readonly Alternative[],
   choice: FigureChoice,
@@ -154,13 +154,25 @@ export function modelsMeaning(
   const turned = figures.filter(
     ({ figure }) => Math.sign(figure.estimate) * Math.sign(own.estimate) < 0,
   );
+  return turned.length === 0
+    ? `The ${word} lies on the same side of zero in every model that gives one.`
+    : `The choice of model matters: the ${word} lies on the other side of zero under ${listed(turned.map(({ code }) => `“${names[code].toLowerCase()}”`))}.`;
+}
+
+/** Whether the choice of model decides what can be stated. */
+export function modelsMeaning(
+  result: FitResult,
+  alternatives: readonly Alternative[],
+  choice: FigureChoice,
+): string {
+  const answer = modelsAnswer(result, alternatives, choice);
+  const figures = figuresOf(result, alternatives, choice);
+  if (chosenFigure(result, choice) === null || figures.length === 0) return answer;
   const judged = figures.filter(({ figure: { low, high } }) => low !== null || high !== null);
   const sure = judged.filter(({ figure: { low, high } }) => (low ?? -1) > 0 || (high ?? 1) < 0);
   const counts =
     judged.length === 0
       ? 'None of them has an interval.'
       : `In ${sure.length === 0 ? 'none' : sure.length} of ${counted(judged.length, 'model')} the interval excludes zero.`;
-  return turned.length === 0
-    ? `The ${word} lies on the same side of zero in every model that gives one. ${counts}`
-    : `The choice of model matters: the ${word} lies on the other side of zero under ${listed(turned.map(({ code }) => `“${names[code].toLowerCase()}”`))}. ${counts}`;
+  return `${answer} ${counts}`;
 }
