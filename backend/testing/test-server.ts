@@ -11,7 +11,13 @@ import { builtProcesses } from './built-processes';
 /** A clock that a spec moves. */
 export class TestClock {
   #offsetMs = 0;
-  readonly now = (): Date => new Date(Date.now() + this.#offsetMs);
+  #stoppedAtMs: number | undefined;
+  readonly now = (): Date => new Date((this.#stoppedAtMs ?? Date.now()) + this.#offsetMs);
+
+  /** From now on only `advance` moves it, however long the machine takes. */
+  stop(): void {
+    this.#stoppedAtMs ??= Date.now();
+  }
 
   advance(ms: number): void {
     this.#offsetMs += ms;
