@@ -20,7 +20,7 @@ export class JobBench {
 
   private constructor(
     readonly database: TestDatabase,
-    readonly pool: pg.Pool,
+    readonly pool: ReturnType<typeof createPool>,
   ) {
     this.repositories = new Repositories(createDatabase(pool));
     this.queue = new JobQueue({
