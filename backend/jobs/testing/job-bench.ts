@@ -1,5 +1,4 @@
 import { randomUUID } from 'node:crypto';
-import type pg from 'pg';
 import { createDatabase, createPool } from '../../../db/connect';
 import { Repositories } from '../../../db/repositories/repositories';
 import type { TestDatabase } from '../../../db/testing/test-database';
