@@ -31,7 +31,7 @@ export function fitResultOf(parts: FitParts): FitResult {
     slopeCovariance:
       inference.covariance === null ? null : toRows(inference.covariance, fit.slopes.length),
     slopeCovarianceReason: inference.covarianceReason,
-    intercepts: interceptEstimates(context),
+    intercepts: interceptEstimates(context, ownIndex),
     yearEffects: yearEffects(parts),
     smearing,
     ...ofOwn,

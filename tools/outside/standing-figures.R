@@ -8,7 +8,7 @@ standing_figures <- function(panel, fit, case) {
   own_code <- "row weights, cosines and calibration from the full dummy regression, own code"
   cosines <- interval_cosines(length(panel$years))
   each <- diag(length(fit$beta))[, seq_along(companies), drop = FALSE]
-  levels <- calibrated_error(fit, each, cosines, rho)$standard_error
+  levels <- calibrated_error(fit, each, cosines, rho, intercept_clocks(fit, own, cosines))$standard_error
   levels[table(panel$company)[companies] < 3] <- NA
   w <- standing_weights(fit, own)
   error <- calibrated_error(fit, w, cosines, rho)

@@ -154,15 +154,43 @@ contrast_clocks <- function(fit, w, cosines) {
     of_short <- ifelse(3 * rows < 2 * years, carried, 0)
     most <- if (any(of_short > 0)) rows[[which.max(of_short)]] - 1 else 0
     if (most < 3 || sum(of_short) < sum(carried) / 2) {
-      return(list(places = (seq_len(years) - 0.5) / years, cosines = cosines))
+      return(list(places = (seq_len(years) - 0.5) / years, cosines = cosines, is_own = FALSE))
     }
     profile <- colSums((weights / rows)^2 * present)
-    list(places = (cumsum(profile) - profile / 2) / sum(profile), cosines = min(cosines, most))
+    list(places = (cumsum(profile) - profile / 2) / sum(profile), cosines = min(cosines, most), is_own = TRUE)
   }, simplify = FALSE)
   list(
     places = vapply(clocks, function(clock) unname(clock$places), numeric(years)),
-    cosines = vapply(clocks, function(clock) clock$cosines, 0)
+    cosines = vapply(clocks, function(clock) clock$cosines, 0),
+    is_own = vapply(clocks, function(clock) clock$is_own, TRUE)
   )
+}
+
+# The same clock for each of `count` contrasts.
+repeated_clock <- function(clocks, count) {
+  list(places = matrix(clocks$places, nrow(clocks$places), count), cosines = rep(clocks$cosines, count))
+}
+
+# The clocks of intercepts: the own company's goes by its rows where it is short, the others by the calendar.
+intercept_clocks <- function(fit, own, cosines) {
+  calendar <- repeated_clock(contrast_clocks(fit, numeric(length(fit$beta)), cosines), length(fit$panel$companies))
+  if (is.null(own)) return(calendar)
+  place <- match(own, fit$panel$companies)
+  clock <- contrast_clocks(fit, company_weights(fit, setNames(1, own)), cosines)
+  calendar$places[, place] <- clock$places
+  calendar$cosines[place] <- clock$cosines
+  calendar
+}
+
+# The clock of the own company's pairs with each peer: where its level has one of its own, that of the average pair.
+pair_clocks <- function(fit, own, cosines) {
+  companies <- fit$panel$companies
+  level <- contrast_clocks(fit, company_weights(fit, setNames(1, own)), cosines)
+  if (level$is_own) {
+    average <- company_weights(fit, setNames(ifelse(companies == own, 1, sqrt(1 / (length(companies) - 1))), companies))
+    level <- contrast_clocks(fit, average, level$cosines)
+  }
+  repeated_clock(level, length(companies) - 1)
 }
 
 # Standard errors of contrasts (columns of `w`) with B equal-weighted cosines over the years (Lazarus, Lewis, Stock &
@@ -218,7 +246,7 @@ rank_set_of <- function(fit, own, rho, confidence) {
   peers <- setdiff(companies, own)
   w <- vapply(peers, function(peer) company_weights(fit, setNames(c(1, -1), c(own, peer))), numeric(length(fit$beta)))
   estimate <- fit$intercepts[[own]] - fit$intercepts[peers]
-  calibrated <- calibrated_error(fit, w, cosines, rho)
+  calibrated <- calibrated_error(fit, w, cosines, rho, pair_clocks(fit, own, cosines))
   error <- calibrated$standard_error
   rows <- table(fit$panel$company)
   has_interval <- rows[peers] >= 3 & rows[[own]] >= 3
@@ -479,7 +507,9 @@ compare_intercepts <- function(fit, results, code_of) {
   cosines <- interval_cosines(length(fit$panel$years))
   error <- rep(NA_real_, length(companies))
   if (any(has_interval)) {
-    calibrated <- calibrated_error(fit, weights, cosines, fit$persistence$used)
+    own <- if (!is.null(results$standing)) code_of(results$standing$company)
+    clocks <- intercept_clocks(fit, own, cosines)
+    calibrated <- calibrated_error(fit, weights, cosines, fit$persistence$used, clocks)
     error <- calibrated$standard_error
     cosines <- calibrated$cosines
   }

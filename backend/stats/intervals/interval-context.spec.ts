@@ -8,10 +8,13 @@ import { fitOf, panelOf, type PanelRow } from '../testing/golden-panels';
 import { randomNumbers, randomPanelNames, randomPanels } from '../testing/random-panels';
 import { intervalContext } from './interval-context';
 
+/** Weights by company whose rows drive the cosines; null for the calendar. */
+type Clock = DenseContrast['intercepts'] | null;
+
 interface Found {
   readonly fit: ReturnType<typeof fitOf>;
-  readonly dense: (contrast: DenseContrast, cosines: number, hasOwnClock: boolean) => number;
-  readonly denseDrift: (cosines: number, clock: DenseContrast['intercepts'] | null) => number;
+  readonly dense: (contrast: DenseContrast, cosines: number, clock: Clock) => number;
+  readonly denseDrift: (cosines: number, clock: Clock) => number;
   readonly cosines: number;
   readonly rankCosines: number;
 }
@@ -27,12 +30,8 @@ function both(rows: readonly PanelRow[]): Found | null {
     used[context.fit.sample.companies.indexOf(company)];
   return {
     fit,
-    dense: (contrast, cosines, hasOwnClock) =>
-      denseError(rows, contrast, {
-        persistence,
-        cosines,
-        clock: hasOwnClock ? contrast.intercepts : null,
-      }),
+    dense: (contrast, cosines, clock) =>
+      denseError(rows, contrast, { persistence, cosines, clock }),
     denseDrift: (cosines, clock) => {
       const trend = (row: PanelRow, isIncluded: boolean): number =>
         isIncluded ? row.year - 2000 : 0;
@@ -48,15 +47,15 @@ function both(rows: readonly PanelRow[]): Found | null {
   };
 }
 
-/** The standard error by the clock and on the cosines that the methods give a contrast. */
+/** The clock of a contrast and how many of these cosines run over it, by the methods. */
 function byMethod(
   rows: readonly PanelRow[],
-  contrast: DenseContrast,
-  { dense, cosines }: { readonly dense: Found['dense']; readonly cosines: number },
-): number {
+  intercepts: DenseContrast['intercepts'],
+  cosines: number,
+): [number, Clock] {
   const rowsOf = (name: string): number => rows.filter(({ company }) => company === name).length;
   const years = new Set(rows.map(({ year }) => year)).size;
-  const parts = Object.entries(contrast.intercepts).map(([name, weight]) => {
+  const parts = Object.entries(intercepts).map(([name, weight]) => {
     const count = rowsOf(name);
     return { count, variance: weight ** 2 / count, isShort: count / years < 2 / 3 };
   });
@@ -64,7 +63,13 @@ function byMethod(
   const short = parts.filter(({ isShort }) => isShort);
   const [first] = [...short].sort((left, right) => right.variance - left.variance);
   const hasOwnClock = short.length > 0 && first.count > 3 && sum(short) >= sum(parts) / 2;
-  return dense(contrast, hasOwnClock ? Math.min(cosines, first.count - 1) : cosines, hasOwnClock);
+  return hasOwnClock ? [Math.min(cosines, first.count - 1), intercepts] : [cosines, null];
+}
+
+/** K1 against the average of these peers. */
+function averagePair(peers: readonly string[]): DenseContrast['intercepts'] {
+  const share = Math.sqrt(1 / peers.length);
+  return { ...Object.fromEntries(peers.map((name) => [name, share])), K1: 1 };
 }
 
 const none = [0, 0];
@@ -79,17 +84,24 @@ describe('calibrated standard errors', () => {
         const { fit, dense, cosines, rankCosines } = found;
         const peers = fit.members.filter((name) => name !== 'K1');
         const intercepts = Object.fromEntries(peers.map((name) => [name, -1 / peers.length]));
-        const weighed = { intercepts: { ...intercepts, K1: 1 }, slopes: none };
-        const standing = byMethod(rows, weighed, { dense, cosines });
+        const weights = { ...intercepts, K1: 1 };
+        const standing = dense(
+          { intercepts: weights, slopes: none },
+          ...byMethod(rows, weights, cosines),
+        );
         expectDigits(fit.standing?.standardError, standing, 8, 'standing');
         for (const { company, standardError } of fit.intercepts) {
           const level = { intercepts: { [company]: 1 }, slopes: none };
-          const expected = byMethod(rows, level, { dense, cosines });
+          const clock: [number, Clock] =
+            company === 'K1' ? byMethod(rows, { K1: 1 }, cosines) : [cosines, null];
+          const expected = dense(level, ...clock);
           expectDigits(standardError, expected, 8, company);
         }
+        const [forPairs, level] = byMethod(rows, { K1: 1 }, rankCosines);
+        const shared = level && averagePair(peers);
         for (const { company, standardError } of fit.pairs ?? []) {
           const pair = { intercepts: { K1: 1, [company]: -1 }, slopes: none };
-          const expected = byMethod(rows, pair, { dense, cosines: rankCosines });
+          const expected = dense(pair, forPairs, shared);
           expectDigits(standardError, expected, 8, `K1 against ${company}`);
         }
       }),
@@ -106,7 +118,10 @@ describe('calibrated standard errors', () => {
       fc.property(randomPanels, plans, (rows, plan) => {
         const found = both(rows);
         if (found?.fit.prediction == null) return;
-        const expected = byMethod(rows, { intercepts: { K1: 1 }, slopes: plan }, found);
+        const expected = found.dense(
+          { intercepts: { K1: 1 }, slopes: plan },
+          ...byMethod(rows, { K1: 1 }, found.cosines),
+        );
         expectDigits(expectedValue(found.fit.prediction, plan).standardError, expected, 8);
       }),
       runs,
@@ -145,22 +160,28 @@ describe('standard errors of a company with few rows', () => {
     expect(fit.standing?.cosines).toBe(cosines);
     expectDigits(
       fit.standing?.standardError,
-      dense({ intercepts: standing, slopes: none }, cosines, hasOwnClock),
+      dense({ intercepts: standing, slopes: none }, cosines, hasOwnClock ? standing : null),
       8,
       'standing',
     );
     for (const { company, standardError } of fit.pairs ?? []) {
       const pair = { intercepts: { K1: 1, [company]: -1 }, slopes: none };
-      expectDigits(standardError, dense(pair, forPairs, hasOwnClock), 8, company);
+      const clock = hasOwnClock ? averagePair(['K0', 'K2', 'K3']) : null;
+      expectDigits(standardError, dense(pair, forPairs, clock), 8, company);
     }
     const intercept = fit.intercepts.find(({ company }) => company === 'K1');
     const level = { intercepts: { K1: 1 }, slopes: none };
-    expectDigits(intercept?.standardError, dense(level, cosines, hasOwnClock), 8, 'intercept');
+    expectDigits(
+      intercept?.standardError,
+      dense(level, cosines, hasOwnClock ? { K1: 1 } : null),
+      8,
+      'intercept',
+    );
     const expected = { intercepts: { K1: 1 }, slopes: plan };
     expect(fit.prediction?.lambdas.length).toBe(cosines);
     expectDigits(
       expectedValue(fit.prediction!, plan).standardError,
-      dense(expected, cosines, hasOwnClock),
+      dense(expected, cosines, hasOwnClock ? { K1: 1 } : null),
       8,
       'expected value',
     );
@@ -192,7 +213,7 @@ describe('standard errors of a company with few rows', () => {
     for (const company of ['K0', 'K2', 'K3']) {
       const { standardError } = fit.intercepts.find((one) => one.company === company)!;
       const level = { intercepts: { [company]: 1 }, slopes: none };
-      expectDigits(standardError, dense(level, 3, false), 8, company);
+      expectDigits(standardError, dense(level, 3, null), 8, company);
     }
   });
 });

@@ -1,13 +1,7 @@
-import type { IntervalEstimate } from '../prediction';
 import type { WithinFit } from '../regression/within-fit';
-import {
-  type CalibratedError,
-  calibratedError,
-  calibratedInterval,
-  noCalibrationReason,
-} from './calibrated-interval';
+import { type CalibratedError, calibratedError, noCalibrationReason } from './calibrated-interval';
 import { type CompanyForms, companyForms } from './company-forms';
-import type { Contrast } from './contrast';
+import { type Contrast, levelContrast } from './contrast';
 import { calendar, contrastCosines, ownClock } from './contrast-clock';
 import { cosineWeights, intervalCosines, rankCosines } from './cosine-weights';
 import { contrastIntervalReason, fitIntervalReason } from './interval-reasons';
@@ -52,15 +46,39 @@ export function intervalContext(fit: WithinFit, confidence: number): IntervalCon
   };
 }
 
+/** Forms on some clock, null where no contrast of the fit has an interval; B with them. */
+export interface ClockedForms {
+  readonly forms: CompanyForms | null;
+  readonly cosines: number;
+}
+
+/** Forms of all contrasts that weigh no company but this one, by the clock of its level. */
+export function formsOfOwn(context: IntervalContext, own: number): ClockedForms {
+  const { fit, cosines } = context;
+  return formsByClock(context, levelContrast(fit, own), cosines);
+}
+
 /**
- * Forms of all contrasts that weigh the same companies in the same proportions as this one, and whatever else by its
- * clock; B with them.
+ * Forms of the own company's pairs with each peer. Where its level has a clock of its own they share one, that of the
+ * average pair: v_t = [own row]/T_own² + mean_j [row of peer j]/T_j². A clock a pair would cost the square of the
+ * companies, and between peers that are all there the two are the same.
  */
-export function formsFor(
-  context: IntervalContext,
-  contrast: Contrast,
-): { readonly forms: CompanyForms | null; readonly cosines: number } {
-  const { fit, persistence, cosines } = context;
+export function formsOfPairs(context: IntervalContext, own: number): ClockedForms {
+  const { fit, rankCosines: cosines } = context;
+  const { companies } = fit.sample;
+  const level = ownClock(fit.sample, levelContrast(fit, own));
+  if (level === null) return { forms: context.forms, cosines };
+  const share = Math.sqrt(1 / (companies.length - 1));
+  const average: Contrast = {
+    companies: companies.map((_, company) => company),
+    weights: companies.map((_, company) => (company === own ? 1 : share)),
+    slopePart: new Float64Array(fit.columns.length),
+  };
+  return formsByClock(context, average, Math.min(cosines, level.mostCosines));
+}
+
+function formsByClock(context: IntervalContext, contrast: Contrast, cosines: number): ClockedForms {
+  const { fit, persistence } = context;
   if (context.reason !== undefined || ownClock(fit.sample, contrast) === null) {
     return { forms: context.forms, cosines };
   }
@@ -68,45 +86,26 @@ export function formsFor(
   return { forms: companyForms(fit, persistence.used, weights), cosines: weights.length };
 }
 
-/** Standard error of one contrast among many with B cosines, or why it has none. */
+/** Standard error of one contrast among many, or why it has none. */
 export function contrastError(
   context: IntervalContext,
   contrast: Contrast,
-  cosines: number,
+  { forms, cosines }: ClockedForms,
 ): CalibratedError {
   const reason = context.reason ?? contrastIntervalReason(context.fit, contrast);
-  if (context.forms === null || reason !== undefined) {
+  if (forms === null || reason !== undefined) {
     return { standardError: null, calibration: null, reason: reason ?? noCalibrationReason };
   }
-  return ownClock(context.fit.sample, contrast) === null
-    ? calibratedError(context.forms, contrast, cosines)
-    : errorThroughRows(context, contrast, cosines);
+  return calibratedError(forms, contrast, cosines);
 }
 
-/** Standard error of a contrast that stands alone, straight through the rows, or why it has none. */
-export function aloneError(context: IntervalContext, contrast: Contrast): CalibratedError {
-  const reason = context.reason ?? contrastIntervalReason(context.fit, contrast);
-  return reason === undefined
-    ? errorThroughRows(context, contrast, context.cosines)
-    : { standardError: null, calibration: null, reason };
-}
-
-function errorThroughRows(
-  { fit, persistence }: IntervalContext,
+/** Standard error of a contrast that stands alone, by its own clock and straight through the rows, or why it has none. */
+export function aloneError(
+  { fit, persistence, cosines, reason: ofFit }: IntervalContext,
   contrast: Contrast,
-  cosines: number,
 ): CalibratedError {
+  const reason = ofFit ?? contrastIntervalReason(fit, contrast);
+  if (reason !== undefined) return { standardError: null, calibration: null, reason };
   const weights = contrastCosines(fit.sample, contrast, cosines);
   return singleContrastError(fit, contrast, persistence.used, weights);
-}
-
-/** Interval of a contrast with B cosines, or why it has none. */
-export function contrastInterval(
-  context: IntervalContext,
-  estimate: number,
-  contrast: Contrast,
-  cosines: number,
-): IntervalEstimate {
-  const error = contrastError(context, contrast, cosines);
-  return calibratedInterval(estimate, error, context.confidence);
 }

@@ -2,12 +2,13 @@ import { tUpperTail } from '../distributions/t-distribution';
 import type { PairComparison } from '../fit-result';
 import { pairContrast } from '../intervals/contrast';
 import { type CalibratedError, calibratedInterval } from '../intervals/calibrated-interval';
-import { contrastError, type IntervalContext } from '../intervals/interval-context';
+import { contrastError, formsOfPairs, type IntervalContext } from '../intervals/interval-context';
 import { fewestRowsForRank, rowsOf } from '../intervals/interval-reasons';
 import { holmRejections } from './holm';
 
 /**
- * a_own − a_peer for every peer, each with the standard error at the ranks' number of cosines, and what Holm's
+ * a_own − a_peer for every peer, each with the standard error at the ranks' number of cosines (fewer where a short own
+ * company's rows drive them), and what Holm's
  * correction over all one-sided hypotheses shows. A pair without an interval is told apart by nothing. Holm's m is
  * twice the number of peers with 3 rows or more: a shorter one has no place in the rank set, so no hypothesis about it
  * is tested, and counting it would only make the others harder to tell apart.
@@ -15,11 +16,12 @@ import { holmRejections } from './holm';
  * @param own  index of the own company.
  */
 export function pairComparisons(context: IntervalContext, own: number): PairComparison[] {
-  const { fit, rankCosines } = context;
+  const { fit } = context;
+  const forms = formsOfPairs(context, own);
   const peers = fit.sample.companies.map((_, index) => index).filter((index) => index !== own);
   const pairs = peers.map((peer) => ({
     estimate: fit.relativeIntercepts[own] - fit.relativeIntercepts[peer],
-    error: contrastError(context, pairContrast(fit, own, peer), rankCosines),
+    error: contrastError(context, pairContrast(fit, own, peer), forms),
   }));
   const ranked = peers.map((peer) => rowsOf(fit, peer) >= fewestRowsForRank);
   const oneSided = pairs
