@@ -50,7 +50,7 @@ import { leftOutMeaning, leftOutTitle } from './left-out-words';
         >
           <kv-finding chartHeading [text]="drawn.text" />
         </kv-leave-one-out>
-        <p class="kv-caption kv-no-print">Select a company to see why it is a peer.</p>
+        <p class="kv-caption kv-no-print">Select a peer to see why it is one.</p>
       }
     </kv-evidence-block>
   `,

@@ -30,6 +30,7 @@ import { filter } from 'rxjs';
 import { SessionStore } from '../../api/session-store';
 import { NumberFormat } from '../../ui/number-format';
 import { answersOf } from './answers';
+import { companyAddress } from './company-address';
 import { DriversBlock } from './drivers-block';
 import { EvidenceStore } from './evidence-store';
 import { IntervalsBlock } from './intervals-block';
@@ -147,9 +148,9 @@ export class QuestionPanels {
     this.#application.tick();
   }
 
-  /** Leads to the reasons for a peer, in the peer group that this fit was made with. */
-  protected openPeer(company: string): void {
-    void this.#router.navigate(['/peers', this.reply().peerGroup.id], { queryParams: { company } });
+  /** Leads to the reasons for a peer, in the peer group that this fit was made with; to the own company's panel row. */
+  protected openCompany(company: string): void {
+    void this.#router.navigate(...companyAddress(this.reply(), this.result(), company));
   }
 
   #leadTo(id: string): void {
