@@ -8,7 +8,7 @@ import {
   valueMeasures,
   wildMeasure,
 } from './measures';
-import { statedCompanies } from './promises';
+import { lowestShare, statedCompanies } from './promises';
 import type { Setting } from './setting';
 import { sharePoints } from './share-text';
 import type { SettingResult } from './shortfalls';
@@ -74,7 +74,7 @@ export function findings(results: readonly SettingResult[]): string[] {
       fewer,
       [standingMeasure],
       (range) =>
-        `With fewer companies, 8 here, nothing is promised of the standing and the rank set: the standing covers ${range}, the expected value ${rangeOf(fewer, expectedMeasures)}, the rank set ${rangeOf(fewer, [rankSetMeasure])}. The warning \`few-companies\` starts below 8, so that 8 to 11 companies get these figures without a word; they come short by a point or two with few years, strong persistence and unequal sizes together.`,
+        `With fewer companies, 8 here, nothing is promised of the standing and the rank set: the standing covers ${range}, the expected value ${rangeOf(fewer, expectedMeasures)}, the rank set ${rangeOf(fewer, [rankSetMeasure])}. The warning \`few-companies\` starts below 8, so that 8 to 11 companies get these figures without a word; the list below names where they fall under ${sharePoints(lowestShare)}.`,
     ),
     sentence(
       weak,
