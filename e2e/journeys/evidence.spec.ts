@@ -58,15 +58,20 @@ test('answers what a board and an auditor ask of the newest fit', async ({ page 
     expect(await pack.failure()).toBeNull();
   });
 
-  await test.step('all answers at once, in three sizes, light and dark', async () => {
-    await evidence.holdOpened();
-  });
-
   await test.step('the row of the panel that the model misses most', async () => {
+    await evidence.open('What does the model not explain?');
     await evidence.largest.getByRole('link').first().click();
     await expect(page).toHaveURL(/\/panel\/[0-9a-f-]+\?row=\d+$/);
     await expect((await new PanelPage(page).read()).focusedRow).toBeVisible();
   });
+});
+
+test('shows all answers at once, accessible and fitting, in three sizes, light and dark', async ({
+  page,
+}) => {
+  await new EntryPage(page).signIn(demoAccount('analyst'));
+  const evidence = await new EvidencePart(page).openNewest();
+  await evidence.holdOpened();
 });
 
 test('runs the draws of the bootstrap beside the fit, and keeps its intervals', async ({
