@@ -2,6 +2,7 @@ import pg from 'pg';
 import { sql } from 'kysely';
 import { createDatabase, createPool } from './connect';
 import { isDatabaseUnavailable } from './errors';
+import { eventually } from './testing/eventually';
 import { Repositories } from './repositories/repositories';
 import { createTestDatabase, type TestDatabase } from './testing/test-database';
 
@@ -11,17 +12,22 @@ describe('a connection pool', () => {
   const lost: Error[] = [];
   const warnings: string[] = [];
 
-  beforeEach(async () => {
-    database = await createTestDatabase();
-    pool = createPool({
+  function openPool(limits: { statementTimeoutMs: number; connectionTimeoutMs: number }): pg.Pool {
+    return createPool({
+      ...limits,
       connectionString: database.appUrl,
       max: 1,
       applicationName: 'spec',
-      statementTimeoutMs: 400,
-      connectionTimeoutMs: 300,
       onConnectionError: (error) => lost.push(error),
       onWarning: (message) => warnings.push(message),
     });
+  }
+
+  beforeEach(async () => {
+    lost.length = 0;
+    warnings.length = 0;
+    database = await createTestDatabase();
+    pool = openPool({ statementTimeoutMs: 60_000, connectionTimeoutMs: 60_000 });
   });
 
   afterEach(async () => {
@@ -42,7 +48,7 @@ describe('a connection pool', () => {
     const broken = db.transaction().execute(async (trx) => {
       await sql`select 1`.execute(trx);
       await terminateOthers();
-      await new Promise((resolve) => setTimeout(resolve, 100));
+      await eventually('a lost connection', () => lost.length > 0);
       await sql`select 1`.execute(trx);
     });
     const error: unknown = await broken.catch((caught: unknown) => caught);
@@ -51,11 +57,20 @@ describe('a connection pool', () => {
     expect((await sql<{ one: number }>`select 1 as one`.execute(db)).rows).toEqual([{ one: 1 }]);
   });
 
-  it('cuts a statement that runs too long, and a wait for a connection', async () => {
-    const slow = pool.query('select pg_sleep(5)');
-    await expectAsync(pool.query('select 1')).toBeRejectedWithError(/timeout exceeded/);
+  it('cuts a statement that runs too long', async () => {
+    const quick = openPool({ statementTimeoutMs: 400, connectionTimeoutMs: 60_000 });
+    const slow = quick.query('select pg_sleep(600)');
     const error: unknown = await slow.catch((caught: unknown) => caught);
     expect((error as pg.DatabaseError).code).toBe('57014');
+    await quick.end();
+  });
+
+  it('cuts a wait for a connection', async () => {
+    const impatient = openPool({ statementTimeoutMs: 60_000, connectionTimeoutMs: 2000 });
+    const taken = await impatient.connect();
+    await expectAsync(impatient.query('select 1')).toBeRejectedWithError(/timeout exceeded/);
+    taken.release();
+    await impatient.end();
   });
 
   it('tells of a setting that was made outside a transaction and does nothing', async () => {

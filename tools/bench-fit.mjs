@@ -11,18 +11,24 @@ import { run } from './child-process.mjs';
 
 const root = fileURLToPath(new URL('..', import.meta.url));
 const folder = await mkdtemp(join(tmpdir(), 'kinvale-bench-'));
-const bundle = join(root, '.kinvale', 'bench', 'measure-fit.mjs');
+const bundles = join(root, '.kinvale', 'bench');
 try {
   await build({
-    entryPoints: [join(root, 'tools', 'bench', 'measure-fit.ts')],
-    outfile: bundle,
+    entryPoints: ['measure-fit', 'measure-memory'].map((name) =>
+      join(root, 'tools', 'bench', `${name}.ts`),
+    ),
+    outdir: bundles,
+    outExtension: { '.js': '.mjs' },
     bundle: true,
     platform: 'node',
     format: 'esm',
     packages: 'external',
     logLevel: 'warning',
   });
-  await run(process.execPath, ['--expose-gc', bundle, folder, join(root, 'tools', 'bench')], {
+  const [fit, memory] = ['measure-fit', 'measure-memory'].map((name) =>
+    join(bundles, `${name}.mjs`),
+  );
+  await run(process.execPath, [fit, folder, join(root, 'tools', 'bench'), memory], {
     cwd: root,
     onText: (text) => process.stdout.write(text),
   });

@@ -72,7 +72,7 @@ export const suites = [
     countsSpecs: true,
     needs: ['postgres'],
     alone: true,
-    limitMs: 8 * minutes,
+    limitMs: 6 * minutes,
   },
   {
     name: 'browser',
@@ -84,7 +84,7 @@ export const suites = [
     countsSpecs: true,
     needs: ['postgres', 'chromium'],
     alone: true,
-    limitMs: 10 * minutes,
+    limitMs: 8 * minutes,
   },
 ];
 

@@ -1,4 +1,4 @@
-import { setTimeout as wait } from 'node:timers/promises';
+import { eventually } from '../../db/testing/eventually';
 import { SeatsReply } from '../contract';
 import { Unavailable } from '../errors/app-error';
 import { trialDays, trialSeats } from './billing-service';
@@ -137,19 +137,10 @@ describe('billing', () => {
       'Billing is being set up. Try again in a moment.',
     );
     await bench.queue.work('open-billing-account', workOpenBillingAccount(bench.service()));
-    const account = await eventually(() =>
+    const account = await eventually('a billing account', () =>
       bench.repositories.inWorkspace(workspaceId, (tx) => tx.billing.find()),
     );
     expect(account.customerId).toMatch(/^cus_/);
     expect((await bench.service().seats(workspaceId)).plan.status).toBe('trialing');
   });
 });
-
-async function eventually<T>(look: () => Promise<T | undefined>): Promise<T> {
-  for (let tries = 0; tries < 100; tries += 1) {
-    const found = await look();
-    if (found !== undefined) return found;
-    await wait(100);
-  }
-  throw new Error('expected the job to be worked within 10 seconds; it was not');
-}

@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import pg from 'pg';
+import { eventually } from '../../db/testing/eventually';
 import type { TestDatabase } from '../../db/testing/test-database';
 import { type CovarianceSummary, EvidenceReply, FitReply, LineageReply } from '../contract';
 import { signUp, type TestClient } from '../testing/test-client';
@@ -46,27 +47,22 @@ describe('the evidence of a fit', () => {
     return EvidenceReply.parse(reply.body);
   }
 
-  /** Looks until the evidence is as wanted, at most 60 seconds. */
-  async function readWhen(
+  function readWhen(
     client: TestClient,
     fitId: string,
     isWanted: (reply: EvidenceReply) => boolean,
   ): Promise<EvidenceReply> {
-    for (let look = 0; look < 300; look++) {
+    return eventually('evidence as wanted', async () => {
       const found = await read(client, fitId);
-      if (isWanted(found)) return found;
-      await new Promise((resolve) => setTimeout(resolve, 200));
-    }
-    throw new Error('the evidence was not as wanted within 60 seconds');
+      return isWanted(found) ? found : undefined;
+    });
   }
 
-  /** Looks until a fit is in its end's state, at most 60 seconds. */
   async function fitEnds(client: TestClient, fitId: string, state: string): Promise<void> {
-    let found = '';
-    for (let look = 0; look < 300 && found !== state; look++) {
-      await new Promise((resolve) => setTimeout(resolve, 200));
-      found = ((await client.get(`/api/fits/${fitId}`)).body as FitReply).fit.state;
-    }
+    const found = await eventually('the end of a fit', async () => {
+      const { fit } = (await client.get(`/api/fits/${fitId}`)).body as FitReply;
+      return ['queued', 'running'].includes(fit.state) ? undefined : fit.state;
+    });
     expect(found).toBe(state);
   }
 

@@ -18,12 +18,14 @@ export class FitJob {
   ) {}
 
   async run({ workspaceId, subjectId: fitId }: JobTicketRow): Promise<void> {
-    const subject = await this.#inWorkspace(workspaceId, async (tx) =>
-      (await tx.fits.markRunning(fitId, progress('Reading rows', 0, 0)))
-        ? readSubject(tx, await findFit(tx, fitId))
-        : undefined,
+    const isWanted = await this.#inWorkspace(workspaceId, (tx) =>
+      tx.fits.markRunning(fitId, progress('Reading rows', 0, 0)),
     );
-    if (subject === undefined) return;
+    if (!isWanted) return;
+    // A transaction of its own: whoever cancels the fit need not wait for its rows.
+    const subject = await this.#inWorkspace(workspaceId, async (tx) =>
+      readSubject(tx, await findFit(tx, fitId)),
+    );
     const rows = subject.columns.year.length;
     const answer = await watchedRun(
       (signal) => this.pool.run(subject, signal),

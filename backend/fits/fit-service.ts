@@ -33,7 +33,7 @@ export interface FinishedFit extends FitOnGround {
 }
 
 const mostListed = 200;
-/** Of a workspace, queued or running; requests of the same moment may pass it by a few. */
+/** Of a workspace, queued or running. */
 const mostUnfinished = 20;
 const retryAfterSeconds = 30;
 
@@ -71,6 +71,7 @@ export class FitService {
     if (version === undefined) throw new NotFound('There is no such panel version.');
     const specification = specificationOf(request, version);
     const specificationKey = JSON.stringify([engineVersion, specification]);
+    await tx.fits.lockCount();
     const same = await tx.fits.findSame(group.id, specificationKey);
     if (same !== undefined) return same.id;
     if ((await tx.fits.unfinished()) >= mostUnfinished)

@@ -1,4 +1,5 @@
 import pg from 'pg';
+import { eventually } from '../../db/testing/eventually';
 import type { TestDatabase } from '../../db/testing/test-database';
 import type { FitReply, FitsReply } from '../contract';
 import { signUp, type TestClient } from '../testing/test-client';
@@ -72,6 +73,18 @@ describe('fits', () => {
     expect(listed.fits.length).toBe(1);
   });
 
+  /** Fits like this one that are queued, and that no worker takes up. */
+  async function queueMore(admin: pg.Client, fitId: string, count: number): Promise<void> {
+    await admin.query(
+      `insert into fit (workspace_id, id, panel_version_id, peer_group_id, specification,
+          specification_key, state, created_by)
+        select workspace_id, gen_random_uuid(), panel_version_id, peer_group_id, specification,
+          'waiting ' || number, 'queued', created_by
+        from fit, generate_series(1, $2) as number where id = $1`,
+      [fitId, count],
+    );
+  }
+
   it('are no more than twenty at a time in a workspace', async () => {
     const analyst = await signUp(server, 'Many');
     const group = await savePeers(analyst, await importPanel(analyst), 'C06');
@@ -79,14 +92,7 @@ describe('fits', () => {
     const admin = new pg.Client({ connectionString: database.adminUrl });
     await admin.connect();
     try {
-      await admin.query(
-        `insert into fit (workspace_id, id, panel_version_id, peer_group_id, specification,
-            specification_key, state, created_by)
-          select workspace_id, gen_random_uuid(), panel_version_id, peer_group_id, specification,
-            'waiting ' || number, 'queued', created_by
-          from fit, generate_series(1, 20) as number where id = $1`,
-        [fit.id],
-      );
+      await queueMore(admin, fit.id, 20);
       const refused = await analyst.post('/api/fits', { peerGroupId: group, slopes: 'cr1' });
       expect(refused.status).toBe(429);
       expect(refused.body).toEqual(
@@ -101,6 +107,35 @@ describe('fits', () => {
       const other = await signUp(server, 'Few');
       const otherGroup = await savePeers(other, await importPanel(other), 'C06');
       expect((await runFit(other, otherGroup)).fit.state).toBe('done');
+    } finally {
+      await admin.end();
+    }
+  });
+
+  it('are no more than twenty where two are asked for at once', async () => {
+    const analyst = await signUp(server, 'At once');
+    const group = await savePeers(analyst, await importPanel(analyst), 'C06');
+    const { fit } = await runFit(analyst, group);
+    const admin = new pg.Client({ connectionString: database.adminUrl });
+    await admin.connect();
+    try {
+      await queueMore(admin, fit.id, 19);
+      // Both may count what there is; neither can write until both have got as far as they can.
+      await admin.query('begin');
+      await admin.query('lock table fit in share mode');
+      const both = ['cr1', 'hc3'].map((slopes) =>
+        analyst.post('/api/fits', { peerGroupId: group, slopes }),
+      );
+      await eventually('two that wait', async () => {
+        const waiting = await admin.query(
+          `select from pg_stat_activity where datname = current_database()
+            and application_name = 'kinvale-web' and wait_event_type = 'Lock'`,
+        );
+        return waiting.rowCount === 2;
+      });
+      await admin.query('commit');
+      const replies = await Promise.all(both);
+      expect(replies.map(({ status }) => status).sort()).toEqual([202, 429]);
     } finally {
       await admin.end();
     }
@@ -149,16 +184,34 @@ describe('fits', () => {
       await admin.query(
         `insert into pgboss.job (name, data, retry_limit) values ('fit', '{"ticketId":"11111111-2222-4333-8444-555555555555","workspaceId":"x"}', 0)`,
       );
-      let state: unknown;
-      for (let look = 0; look < 50 && state !== 'failed'; look++) {
-        await new Promise((resolve) => setTimeout(resolve, 100));
-        const found = await admin.query<{ state: string }>(
+      const state = await eventually('the end of the job', async () => {
+        const { rows } = await admin.query<{ state: string }>(
           `select state from pgboss.job where data ->> 'workspaceId' = 'x'`,
         );
-        state = found.rows[0]?.state;
-      }
+        return ['created', 'active'].includes(rows[0].state) ? undefined : rows[0].state;
+      });
       expect(state).toBe('failed');
       expect(server.log.slice(before).join('')).not.toContain('unexpected error');
+    } finally {
+      await admin.end();
+    }
+  });
+
+  it('are cancelled while their rows are read', async () => {
+    const analyst = await signUp(server, 'Reading');
+    const group = await savePeers(analyst, await importPanel(analyst), 'C04');
+    const admin = new pg.Client({ connectionString: database.adminUrl });
+    await admin.connect();
+    try {
+      await admin.query('begin');
+      await admin.query('lock table panel_row in access exclusive mode');
+      const { fit } = await start(analyst, group);
+      const stateOf = async (): Promise<string> =>
+        ((await analyst.get(`/api/fits/${fit.id}`)).body as FitReply).fit.state;
+      await eventually('a running fit', async () => (await stateOf()) === 'running');
+      expect((await analyst.delete(`/api/fits/${fit.id}`)).status).toBe(204);
+      await admin.query('commit');
+      expect(await stateOf()).toBe('cancelled');
     } finally {
       await admin.end();
     }

@@ -1,5 +1,5 @@
 import type { IntervalContext } from './intervals/interval-context';
-import { correlatedSquare } from './intervals/correlation-product';
+import { correlatedSquare, fillYearDecays } from './intervals/correlation-product';
 import type { OwnErrors } from './prediction';
 
 /**
@@ -16,7 +16,9 @@ export function ownErrorsOf({ fit, persistence }: IntervalContext, own: number):
   const rows = to - from;
   const used = persistence.pooled === null ? null : persistence.used[own];
   const ones = new Float64Array(rows).fill(1);
-  const taken = correlatedSquare(ones, years, used ?? 0) / rows;
+  const decays = new Float64Array(rows);
+  fillYearDecays(sample.year, { from, to, persistence: used ?? 0 }, decays, 0);
+  const taken = correlatedSquare(ones, { from: 0, to: rows, decays, centre: 0 }) / rows;
   let squares = 0;
   for (let row = from; row < to; row += 1) squares += residuals[row] * residuals[row];
   return {

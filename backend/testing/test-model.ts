@@ -1,4 +1,5 @@
 import { readFileSync } from 'node:fs';
+import { eventually } from '../../db/testing/eventually';
 import type { FitReply, ImportReply, StartFit } from '../contract';
 import type { TestClient } from './test-client';
 
@@ -80,7 +81,7 @@ export async function savePeers(
   return idOf(saved, 201);
 }
 
-/** Starts a fit, the plain one unless a specification is given, and waits for it, at most 20 seconds. */
+/** Starts a fit, the plain one unless a specification is given, and waits for it. */
 export async function runFit(
   analyst: TestClient,
   peerGroupId: string,
@@ -89,12 +90,10 @@ export async function runFit(
   const started = await analyst.post('/api/fits', { ...specification, peerGroupId });
   if (started.status !== 202) throw new Error(`starting a fit answered ${started.text}`);
   const { fit } = started.body as FitReply;
-  for (let look = 0; look < 200; look++) {
+  return eventually('the end of a fit', async () => {
     const found = (await analyst.get(`/api/fits/${fit.id}`)).body as FitReply;
-    if (!['queued', 'running'].includes(found.fit.state)) return found;
-    await new Promise((resolve) => setTimeout(resolve, 100));
-  }
-  throw new Error('the fit did not end within 20 seconds');
+    return ['queued', 'running'].includes(found.fit.state) ? undefined : found;
+  });
 }
 
 export function idOf(

@@ -1,18 +1,23 @@
 import { createServer, type Server } from 'node:http';
 import type { AddressInfo } from 'node:net';
-import { dirname } from 'node:path';
-import { fileURLToPath } from 'node:url';
 import type { Express } from 'express';
 import { pino } from 'pino';
 import { createTestDatabase, type TestDatabase } from '../../db/testing/test-database';
 import { createApp } from '../app';
 import { compose, type Composition } from '../compose';
 import { installQueue, queueSchema } from '../jobs/install-queue';
+import { builtProcesses } from './built-processes';
 
 /** A clock that a spec moves. */
 export class TestClock {
   #offsetMs = 0;
-  readonly now = (): Date => new Date(Date.now() + this.#offsetMs);
+  #stoppedAtMs: number | undefined;
+  readonly now = (): Date => new Date((this.#stoppedAtMs ?? Date.now()) + this.#offsetMs);
+
+  /** From now on only `advance` moves it, however long the machine takes. */
+  stop(): void {
+    this.#stoppedAtMs ??= Date.now();
+  }
 
   advance(ms: number): void {
     this.#offsetMs += ms;
@@ -57,11 +62,14 @@ export async function startTestServer(
     fitThreads: 1,
     now: clock.now,
     logger,
-    backendFolder: dirname(dirname(fileURLToPath(import.meta.url))),
+    backendFolder: await builtProcesses(),
   });
   await composition.start();
   const server = createServer();
-  await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
+  await new Promise<void>((resolve) =>
+    // Exclusive: spec processes that run at once would share one port.
+    server.listen({ port: 0, host: '127.0.0.1', exclusive: true }, resolve),
+  );
   const url = `http://127.0.0.1:${(server.address() as AddressInfo).port}`;
   const app = createApp({
     services: composition.services,

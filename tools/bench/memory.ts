@@ -7,20 +7,22 @@ export function bytesOf({ outcome, regressors, company, year, fileRow }: PanelCo
 }
 
 /**
- * Bytes that are held at the end of a run beyond those before it, typed arrays and objects, garbage left out: what the
- * result and everything it keeps take. Needs node --expose-gc.
+ * The most bytes beyond those before a run that are taken at the end of one of its stages: typed arrays and objects, what
+ * is garbage by then counted too unless it was collected on the way. Needs node --expose-gc.
+ *
+ * @param run  calls what it is given at the end of each stage.
  */
-export function peakGrowth(run: () => unknown): number {
+export function peakGrowth(run: (atStage: () => void) => unknown): number {
   const collect = globalThis.gc;
   if (collect === undefined) throw new Error('expected node --expose-gc');
   collect();
-  const before = heldBytes();
-  const result = run();
-  const grown = heldBytes() - before;
-  return result === undefined ? 0 : grown;
+  const before = takenBytes();
+  let most = before;
+  const result = run(() => (most = Math.max(most, takenBytes())));
+  return result === undefined ? 0 : most - before;
 }
 
-function heldBytes(): number {
+function takenBytes(): number {
   const { heapUsed, arrayBuffers } = process.memoryUsage();
   return heapUsed + arrayBuffers;
 }

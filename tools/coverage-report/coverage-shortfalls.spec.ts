@@ -31,6 +31,19 @@ describe('Shortfalls of the coverage report', () => {
     expect(breaksPromise([result])).toBeFalse();
   });
 
+  it('promises nothing of standings with fewer companies than the methods state, and names them', () => {
+    const few = withStandings(settingNamed('n8-t10-rho0.8-skewed'), 1.6);
+    expect(shortfallsOf([few]).map(({ measure }) => measure)).toEqual([standingMeasure]);
+    expect(breaksPromise([few])).toBeFalse();
+    expect(breaksPromise([withStandings(settingNamed('n20-t10-rho0.8-skewed'), 1.6)])).toBeTrue();
+  });
+
+  it('holds standing and expected value of an own company with few rows', () => {
+    const result = withStandings(settingNamed('n12-t20-rho0-own-last-5'), 1.6);
+    expect(breaksPromise([result])).toBeTrue();
+    expect(shortfallsOf([result])[0].broken.map(({ name }) => name)).toEqual(['short own company']);
+  });
+
   it('fails where a promised interval is never given', () => {
     const result = withStandings(promised, 1.96);
     result.tallies.delete(slopeMeasure('cr2'));

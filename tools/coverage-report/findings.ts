@@ -8,6 +8,7 @@ import {
   valueMeasures,
   wildMeasure,
 } from './measures';
+import { lowestShare, statedCompanies } from './promises';
 import type { Setting } from './setting';
 import { sharePoints } from './share-text';
 import type { SettingResult } from './shortfalls';
@@ -24,10 +25,15 @@ export function findings(results: readonly SettingResult[]): string[] {
   );
   const independent = results.filter((result) => !shared.includes(result));
   const whole = independent.filter(({ setting }) => isUsual(setting));
+  const stated = whole.filter(({ setting }) => setting.companies >= statedCompanies);
+  const fewer = whole.filter(({ setting }) => setting.companies < statedCompanies);
   const skewed = whole.filter(({ setting }) => setting.sizes === 'skewed');
   const weak = results.filter(({ setting }) => setting.persistence.kind === 'own apart');
   const varied = results.filter(({ setting }) => setting.persistence.kind === 'varied');
-  const short = results.filter(({ setting }) => setting.rows === 'last five of the own');
+  const short = results.filter(({ setting }) => setting.rows === 'last 5 of the own');
+  const ten = results.filter(({ setting }) => setting.rows === 'last 10 of the own');
+  const three = results.filter(({ setting }) => setting.rows === 'last 3 of the own');
+  const fourteen = results.filter(({ setting }) => setting.rows === 'last 14 of the own');
   return [
     sentence(
       independent,
@@ -59,10 +65,16 @@ export function findings(results: readonly SettingResult[]): string[] {
       (range) => `The wild bootstrap keeps the true slope in ${range}.`,
     ),
     sentence(
-      whole,
+      stated,
       [standingMeasure],
       (range) =>
-        `With like persistence and all rows the standing's interval covers ${range}, the expected value's ${rangeOf(whole, expectedMeasures)}.`,
+        `With like persistence, all rows and ${statedCompanies} companies or more the standing's interval covers ${range}, the expected value's ${rangeOf(stated, expectedMeasures)}.`,
+    ),
+    sentence(
+      fewer,
+      [standingMeasure],
+      (range) =>
+        `With fewer companies, 8 here, nothing is promised of the standing and the rank set: the standing covers ${range}, the expected value ${rangeOf(fewer, expectedMeasures)}, the rank set ${rangeOf(fewer, [rankSetMeasure])}. The warning \`few-companies\` starts below 8, so that 8 to 11 companies get these figures without a word; the list below names where they fall under ${sharePoints(lowestShare)}.`,
     ),
     sentence(
       weak,
@@ -79,10 +91,16 @@ export function findings(results: readonly SettingResult[]): string[] {
       short,
       [standingMeasure],
       (range) =>
-        `Where only the last 5 of the own company's 20 years are there, the standing covers ${range}, the expected value ${rangeOf(short, expectedMeasures)}.`,
+        `Where only the last 5 of the own company's 20 years are there, the standing covers ${range}, the expected value ${rangeOf(short, expectedMeasures)} and the rank set ${rangeOf(short, [rankSetMeasure])}: the cosines of a company with rows in fewer than two thirds of the years run over its own rows (Cavaliere & Taylor 2007, 2008). By the calendar, as the methods have it, the same intervals cover .88 to .94, .89 to .92 and .92 to .94.`,
     ),
     sentence(
-      whole,
+      ten,
+      [standingMeasure],
+      (range) =>
+        `With the last 10 of 20 own rows the standing covers ${range}. By the calendar go the last 14, with ${rangeOf(fourteen, [standingMeasure])}, and the last 3, too few for three cosines, with ${rangeOf(three, [standingMeasure])}.`,
+    ),
+    sentence(
+      stated,
       [rankSetMeasure],
       (range) =>
         `With all companies level, rank sets show nobody wrongly in ${range} with like persistence, in ${rangeOf(weak, [rankSetMeasure])} at the weak point.`,

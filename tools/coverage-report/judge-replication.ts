@@ -88,6 +88,8 @@ function judgeStanding(tallies: Tallies, context: FitParts['context'], own: numb
 
 function judgeAhead(tallies: Tallies, { ahead }: SimulatedPanel, opened: Opened): void {
   const ownYears = ownYearsOf(opened.context.fit, opened.ownIndex, null);
+  // Null in log form alone.
+  if (ownYears === null) return;
   const basis = predictionBasisOf({ ...opened, ownYears, smearing: null });
   for (const { year, steps, regressors, expected, value } of ahead) {
     const interval = expectedValue(basis, regressors, { year });

@@ -9,7 +9,7 @@ export interface ReportOptions {
   readonly isWhole: boolean;
 }
 
-export const usualReplications = 4000;
+export const usualReplications = 2500;
 
 /**
  * `--settings NAME,…` and `--replications N`, for a quick look.

@@ -15,12 +15,16 @@ export interface Setting {
   readonly own: 'each' | 'first' | 'largest' | 'smallest';
   /** Half the variance of errors, or of errors and regressors, is the same for all companies in a year. */
   readonly commonShock: 'none' | 'errors' | 'errors and regressors';
-  readonly rows: 'all' | 'last five of the own' | 'one in five missing';
+  readonly rows: 'all' | 'one in five missing' | LastOwnRows;
   /** Of the fit; with year effects nothing is planned, for the effects of years to come are not known. */
   readonly effects: Specification['effects'];
   /** Whether the wild bootstrap is tried too. */
   readonly hasWild: boolean;
 }
+
+/** The own company has its last rows alone, its peers all. */
+export type LastOwnRows =
+  'last 3 of the own' | 'last 5 of the own' | 'last 10 of the own' | 'last 14 of the own';
 
 /** First-order autocorrelation of a company's errors and regressors. */
 export type Persistence =

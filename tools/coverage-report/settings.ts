@@ -19,7 +19,7 @@ const usual: Usual = {
 
 const skewed = { sizes: 'skewed' } as const;
 const single = { regressors: 1 } as const;
-const short = { rows: 'last five of the own', own: 'first' } as const;
+const short = { rows: 'last 5 of the own', own: 'first' } as const;
 const wild = { hasWild: true } as const;
 
 /** Every setting of the report; seeds go with the place in this list, so new ones are added at its end. */
@@ -65,6 +65,9 @@ export const settings: readonly Setting[] = [
     effects: 'company,year',
     suffix: 'shock-in-both-year-effects',
   }),
+  like(12, 20, 0, { rows: 'last 10 of the own', own: 'first', suffix: 'own-last-10' }),
+  like(12, 20, 0, { rows: 'last 14 of the own', own: 'first', suffix: 'own-last-14' }),
+  like(12, 20, 0, { rows: 'last 3 of the own', own: 'first', suffix: 'own-last-3' }),
 ].map((setting, index) => ({ ...setting, seed: (index + 1) * mostReplications }));
 
 function like(

@@ -32,7 +32,7 @@ describe('Simulation of the coverage report', () => {
       );
       expect(years.at(-1)).toBe(2000 + rest.years);
       expect(ahead[0].year).toBe(2001 + rest.years);
-      if (rows === 'last five of the own') expect(years.length).toBe(5);
+      if (rows === 'last 5 of the own') expect(years.length).toBe(5);
     }
   });
 

@@ -1,7 +1,7 @@
 import type { PanelColumns } from '../../backend/stats';
 import { type CompanyPath, companyPaths, expectedAt } from './company-paths';
 import { type Draws, drawsFrom } from './normal-draws';
-import type { Setting } from './setting';
+import type { LastOwnRows, Setting } from './setting';
 
 /** Years after the last one at which the plan is looked at. */
 export const horizons = [1, 3, 5] as const;
@@ -27,7 +27,12 @@ export interface YearAhead {
 const firstYear = 2001;
 const furthest = horizons[horizons.length - 1];
 const missingShare = 0.2;
-const fewOwnRows = 5;
+const lastOwnRows: Readonly<Record<LastOwnRows, number>> = {
+  'last 3 of the own': 3,
+  'last 5 of the own': 5,
+  'last 10 of the own': 10,
+  'last 14 of the own': 14,
+};
 
 /**
  * y = Σ_k x_k + s_i·e, as `companyPaths` draws them, in the rows that the setting leaves.
@@ -59,8 +64,10 @@ function isKept(
   { uniform }: Draws,
 ): boolean {
   if (rows === 'all') return true;
-  if (rows === 'last five of the own') return !isOwn || year >= years - fewOwnRows;
-  return uniform() >= missingShare || (isOwn && year === years - 1);
+  if (rows === 'one in five missing') {
+    return uniform() >= missingShare || (isOwn && year === years - 1);
+  }
+  return !isOwn || year >= years - lastOwnRows[rows];
 }
 
 function columnsOf(

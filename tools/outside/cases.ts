@@ -45,6 +45,11 @@ const dataSets: readonly DataSet[] = [
   golden('grunfeld10', 'inv', { regressors: ['value', 'capital'], own: 'F02', hasLogForm: true }),
   golden('grunfeld11', 'inv', { regressors: ['value', 'capital'], own: 'C03', hasLogForm: true }),
   golden('grunfeld10_unbalanced', 'inv', { regressors: ['value', 'capital'], own: 'F05' }),
+  golden('grunfeld10_short_own', 'inv', { regressors: ['value', 'capital'], own: 'F05' }),
+  {
+    ...golden('grunfeld10_short_own', 'inv', { regressors: ['value', 'capital'], own: 'F08' }),
+    name: 'grunfeld10_short_own, nine rows',
+  },
   golden('grunfeld10_loglog', 'log_inv', { regressors: ['log_value', 'log_capital'], own: 'F01' }),
   golden('grunfeld11_value_on_inv_capital', 'value', {
     regressors: ['inv', 'capital'],

@@ -8,11 +8,11 @@ standing_figures <- function(panel, fit, case) {
   own_code <- "row weights, cosines and calibration from the full dummy regression, own code"
   cosines <- interval_cosines(length(panel$years))
   each <- diag(length(fit$beta))[, seq_along(companies), drop = FALSE]
-  levels <- calibrated_error(fit, each, cosines, rho)$standard_error
+  levels <- calibrated_error(fit, each, cosines, rho, intercept_clocks(fit, own, cosines))$standard_error
   levels[table(panel$company)[companies] < 3] <- NA
   w <- standing_weights(fit, own)
   error <- calibrated_error(fit, w, cosines, rho)
-  interval <- t_interval(sum(w * fit$beta), error$standard_error, cosines, confidence)
+  interval <- t_interval(sum(w * fit$beta), error$standard_error, error$cosines, confidence)
   set <- rank_set_of(fit, own, rho, confidence)
   drift <- drift_of(panel, fit, case)
   without_companies <- lapply(companies, function(name) without(panel, panel$company != name, case))
@@ -76,7 +76,9 @@ drift_of <- function(panel, fit, case) {
   w <- numeric(length(wide$beta))
   w[wide$slope_places[ncol(panel$x) + seq_len(ncol(trends))]] <- c(1, -1)[seq_len(ncol(trends))]
   cosines <- rank_cosines(length(panel$years))
-  error <- calibrated_error(wide, w, cosines, fit$persistence$used)$standard_error
-  interval <- t_interval(sum(w * wide$beta), error, cosines, case$confidence)
-  c(unlist(interval), 2 * pt(-abs(interval$estimate / error), cosines))
+  # By the clock of the own company's level.
+  clocks <- contrast_clocks(fit, company_weights(fit, setNames(1, case$own)), cosines)
+  error <- calibrated_error(wide, w, cosines, fit$persistence$used, clocks)$standard_error
+  interval <- t_interval(sum(w * wide$beta), error, clocks$cosines, case$confidence)
+  c(unlist(interval), 2 * pt(-abs(interval$estimate / error), clocks$cosines))
 }

@@ -2,6 +2,7 @@ import { parse } from 'csv-parse/sync';
 import pg from 'pg';
 import type { Response } from 'supertest';
 import yauzl from 'yauzl';
+import { eventually } from '../../../db/testing/eventually';
 import type { TestDatabase } from '../../../db/testing/test-database';
 import { cautions, Evidence, type FitReply } from '../../contract';
 import { ReplicationLineage, ReplicationResults } from '../../contract/replication';
@@ -76,11 +77,10 @@ describe('the replication pack', () => {
     const panel = `${referencePanel().replaceAll('C03', '=C03').trim()}\nS,1940,2,1,4\nS,1941,2,,4\n`;
     const version = await importPanel(analyst, panel);
     reply = await runFit(analyst, await savePeers(analyst, version, 'C06'));
-    for (let look = 0; look < 200; look++) {
+    await eventually('evidence', async () => {
       const { body } = await analyst.get(`/api/fits/${reply.fit.id}/evidence`);
-      if ((body as { state: string }).state === 'ready') break;
-      await new Promise((resolve) => setTimeout(resolve, 200));
-    }
+      return (body as { state: string }).state === 'ready';
+    });
   });
 
   afterAll(async () => {
@@ -233,12 +233,18 @@ describe('the replication pack', () => {
     await admin.query('lock table panel_row in access exclusive mode');
     const request = analyst.agent.get(`/api/fits/${reply.fit.id}/replication`);
     request.end(() => undefined);
-    await new Promise((resolve) => setTimeout(resolve, 500));
+    await eventually('a pack that waits', async () => {
+      const waiting = await admin.query(
+        `select from pg_locks where not granted and relation = 'panel_row'::regclass`,
+      );
+      return waiting.rowCount !== 0;
+    });
     request.abort();
     await admin.query('commit');
-    for (let look = 0; look < 50 && !said().includes('a download was broken off'); look++)
-      await new Promise((resolve) => setTimeout(resolve, 100));
-    expect(said()).toContain('a download was broken off');
+    const isSaid = await eventually('a word of it', () =>
+      said().includes('a download was broken off'),
+    );
+    expect(isSaid).toBeTrue();
     expect(said()).not.toContain('unexpected error');
   });
 });

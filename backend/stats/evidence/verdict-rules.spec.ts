@@ -121,7 +121,7 @@ const cases: readonly RuleCase[] = [
     weight: 'notable',
     raised: withOwnYears(9),
     notRaised: withOwnYears(10),
-    says: 'K00 has rows in 9 of 20 years: in simulations the standing’s 95 % interval then holds the truth in about .88 to .94 of samples.',
+    says: 'K00 has rows in 9 of 20 years, and its standing rests on those alone. With 5 of 20 the 95 % interval holds the truth in about .95 to .96 of simulated samples.',
   },
   {
     code: 'year-effects',
@@ -309,6 +309,14 @@ describe('verdictRules', () => {
     }
   }
 
+  it('says what simulations found of own rows too few for a clock of their own', () => {
+    const detailOf = (rows: number): string | undefined =>
+      verdictOf(withOwnYears(rows)).against.find(({ code }) => code === 'few-own-years')?.detail;
+    expect(detailOf(4)).toContain('K00 has rows in 4 of 20 years');
+    expect(detailOf(4)).toContain('With 5 of 20');
+    expect(detailOf(3)).toContain('With 3 of 20 the 95 % interval holds the truth in about .92 of');
+  });
+
   it('counts no row as missing that a lag takes by construction', () => {
     expect(codesOf(withDropped(38, 1))).not.toContain('missing-rows');
     expect(codesOf(withDropped(39, 1))).toContain('missing-rows');
@@ -342,5 +350,19 @@ describe('verdictRules', () => {
     const drift = { estimate: Math.log(1.02), standardError: 0.1, low: 0, high: 1, pValue: 0.01 };
     const input = withResult({ specification: { ...specification, form: 'log' }, drift });
     expect(verdictOf(input).against[0].detail).toContain('moves by 2 % a year (p = 0.010)');
+  });
+
+  it('gives a drift in logs that no percentage can hold as it is', () => {
+    const { specification } = sound.result;
+    const drift = { estimate: 705.25, standardError: 1, low: 700, high: 710, pValue: 0.01 };
+    const input = withResult({ specification: { ...specification, form: 'log' }, drift });
+    expect(verdictOf(input).against[0].detail).toContain(
+      'moves by 705.3 in natural logs, beyond what a number can hold as a percentage, a year (p = 0.010)',
+    );
+    const down = withResult({
+      specification: { ...specification, form: 'log' },
+      drift: { ...drift, estimate: -705.25, low: -710, high: -700 },
+    });
+    expect(verdictOf(down).against[0].detail).toContain('moves by −100 % a year');
   });
 });

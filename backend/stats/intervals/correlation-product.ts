@@ -1,3 +1,5 @@
+import type { RowRange } from '../linear-algebra/row-range';
+
 /**
  * ρ^(year − year before), one a row; the first is 0. Years strictly ascending, gaps allowed.
  *
@@ -11,15 +13,17 @@ export function fillYearDecays(
   at: number,
 ): void {
   target[at] = 0;
+  if (year[to - 1] - year[from] === to - 1 - from) {
+    target.fill(persistence, at + 1, at + to - from);
+    return;
+  }
   for (let row = from + 1; row < to; row += 1) {
     const gap = year[row] - year[row - 1];
     target[at + row - from] = gap === 1 ? persistence : persistence ** gap;
   }
 }
 
-export interface CompanySpan {
-  readonly from: number;
-  readonly to: number;
+export interface CompanySpan extends RowRange {
   readonly persistence: number;
 }
 
@@ -48,22 +52,29 @@ export function correlationProduct(
 }
 
 /**
- * v'Rv with R = [ρ^|year − year'|], in one sweep.
+ * v'Rv with R = [ρ^|year − year'|], in one sweep; v are the values less `centre`. Rows of several companies give the sum
+ * of their forms, for the decay of a first row is 0.
  *
- * @param values  one a row; the first `years.length` are used.
- * @param years  one company's, strictly ascending.
+ * @param values  one a row, in ascending order of a company's years; those from `from` to before `to` are used.
+ * @param rows  their decays as `fillYearDecays` writes them, at the same places.
  */
 export function correlatedSquare(
   values: Float64Array,
-  years: Int32Array,
-  persistence: number,
+  { from, to, decays, centre }: CorrelatedRows,
 ): number {
+  let before = 0;
   let carried = 0;
-  let sum = values[0] * values[0];
-  for (let row = 1; row < years.length; row += 1) {
-    const gap = years[row] - years[row - 1];
-    carried = (carried + values[row - 1]) * (gap === 1 ? persistence : persistence ** gap);
-    sum += values[row] * (values[row] + 2 * carried);
+  let sum = 0;
+  for (let row = from; row < to; row += 1) {
+    const value = values[row] - centre;
+    carried = (carried + before) * decays[row];
+    sum += value * (value + 2 * carried);
+    before = value;
   }
   return sum;
+}
+
+export interface CorrelatedRows extends RowRange {
+  readonly decays: Float64Array;
+  readonly centre: number;
 }

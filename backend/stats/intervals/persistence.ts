@@ -26,15 +26,23 @@ const fewestMeanRows = 5;
 export function persistenceOf(sample: PanelSample, residuals: Float64Array): Persistence {
   const companies = sample.companies.length;
   const own = new Float64Array(companies).fill(NaN);
+  const { starts, year } = sample;
   let products = 0;
   let squares = 0;
   for (let company = 0; company < companies; company += 1) {
-    const sums = laggedSums(sample, residuals, company);
-    products += sums.products;
-    squares += sums.squares;
-    const rows = sample.starts[company + 1] - sample.starts[company];
-    if (rows >= fewestRowsForOwn && sums.squares > 0) {
-      own[company] = corrected(sums.products / sums.squares, rows);
+    const from = starts[company];
+    const to = starts[company + 1];
+    let ownProducts = 0;
+    let ownSquares = 0;
+    for (let row = from + 1; row < to; row += 1) {
+      if (year[row] - year[row - 1] !== 1) continue;
+      ownProducts += residuals[row] * residuals[row - 1];
+      ownSquares += residuals[row - 1] * residuals[row - 1];
+    }
+    products += ownProducts;
+    squares += ownSquares;
+    if (to - from >= fewestRowsForOwn && ownSquares > 0) {
+      own[company] = corrected(ownProducts / ownSquares, to - from);
     }
   }
   const meanRows = sample.year.length / companies;
@@ -53,21 +61,6 @@ function whyNone(meanRows: number, squares: number): string | undefined {
     return `Companies have ${meanRows.toFixed(1)} rows on average; at least ${fewestMeanRows} are needed to tell how errors persist.`;
   }
   return undefined;
-}
-
-function laggedSums(
-  sample: PanelSample,
-  residuals: Float64Array,
-  company: number,
-): { products: number; squares: number } {
-  let products = 0;
-  let squares = 0;
-  for (let row = sample.starts[company] + 1; row < sample.starts[company + 1]; row += 1) {
-    if (sample.year[row] - sample.year[row - 1] !== 1) continue;
-    products += residuals[row] * residuals[row - 1];
-    squares += residuals[row - 1] * residuals[row - 1];
-  }
-  return { products, squares };
 }
 
 function corrected(raw: number, rows: number): number {

@@ -1,11 +1,12 @@
 import { tTwoSided } from '../distributions/t-distribution';
 import type { Drift } from '../fit-result';
 import { calibratedInterval } from '../intervals/calibrated-interval';
-import { slopeContrast } from '../intervals/contrast';
+import { levelContrast, slopeContrast } from '../intervals/contrast';
 import type { IntervalContext } from '../intervals/interval-context';
 import { rowsOf } from '../intervals/interval-reasons';
 import { dot } from '../linear-algebra/square-matrix';
 import type { PanelSample } from '../panel/panel-sample';
+import { contrastCosines } from '../intervals/contrast-clock';
 import { singleContrastError } from '../intervals/single-contrast';
 import { withoutInterval } from '../prediction';
 import { isPerfectFit, perfectFitReason } from '../regression/goodness';
@@ -20,8 +21,8 @@ export type DriftOrReason =
 
 /**
  * How much the gap between the own company and its peers widens a year: δ_own − δ_peers of the fit augmented by the
- * year for the own company and the year for all peers (δ_own alone beside year effects), with the calibrated interval of that fit and the persistence
- * of the original one.
+ * year for the own company and the year for all peers (δ_own alone beside year effects), with the calibrated interval of
+ * that fit, the persistence of the original one and the clock of the own company's level.
  *
  * @param own  index of the own company.
  */
@@ -34,16 +35,17 @@ export function driftOf(context: IntervalContext, own: number): DriftOrReason {
   }
   const augmented = augmentedFit(fit, own);
   if (typeof augmented === 'string') return { drift: null, reason: augmented };
-  const weights = Float64Array.from(augmented.slopes, (_, k) => driftWeight(fit, k));
-  const estimate = dot(weights, augmented.slopes);
+  const slopeWeights = Float64Array.from(augmented.slopes, (_, k) => driftWeight(fit, k));
+  const estimate = dot(slopeWeights, augmented.slopes);
   const reason = context.reason ?? (isPerfectFit(augmented) ? perfectFitReason : undefined);
   if (reason !== undefined)
     return { drift: { ...withoutInterval(estimate, reason), pValue: null } };
-  const contrast = slopeContrast(augmented, weights);
-  const error = singleContrastError(augmented, contrast, context.persistence.used, cosines);
-  const interval = calibratedInterval(estimate, error, { cosines, confidence });
+  const contrast = slopeContrast(augmented, slopeWeights);
+  const weights = contrastCosines(fit.sample, levelContrast(fit, own), cosines);
+  const error = singleContrastError(augmented, contrast, context.persistence.used, weights);
+  const interval = calibratedInterval(estimate, error, confidence);
   const pValue =
-    error.standardError === null ? null : tTwoSided(estimate / error.standardError, cosines);
+    error.standardError === null ? null : tTwoSided(estimate / error.standardError, error.cosines);
   return { drift: { ...interval, pValue } };
 }
 

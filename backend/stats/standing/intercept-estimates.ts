@@ -1,6 +1,7 @@
 import type { InterceptEstimate } from '../fit-result';
+import { type CalibratedError, calibratedInterval } from '../intervals/calibrated-interval';
 import { interceptContrast } from '../intervals/contrast';
-import { contrastInterval, type IntervalContext } from '../intervals/interval-context';
+import { aloneError, contrastError, type IntervalContext } from '../intervals/interval-context';
 import { rowsOf } from '../intervals/interval-reasons';
 import { withoutInterval } from '../prediction';
 import type { SingleRow } from '../panel/panel-sample';
@@ -9,19 +10,29 @@ import { yearWeights } from '../regression/year-columns';
 
 const singleRowReason = 'One row fixes the intercept exactly and leaves nothing to judge it by.';
 
-/** Every company's intercept, by name; companies with a single row get y − x'b, no deviation and no interval. */
-export function interceptEstimates(context: IntervalContext): InterceptEstimate[] {
+/**
+ * Every company's intercept, by name; companies with a single row get y − x'b, no deviation and no interval. The own
+ * company's goes by its own clock, as all that is said of it; the others by the calendar.
+ *
+ * @param own  index of the own company; −1 without one.
+ */
+export function interceptEstimates(context: IntervalContext, own: number): InterceptEstimate[] {
   const { fit } = context;
+  const errorOf = (company: number): CalibratedError => {
+    const contrast = interceptContrast(fit, company);
+    return company === own
+      ? aloneError(context, contrast)
+      : contrastError(context, contrast, context);
+  };
   const { companies, singles } = fit.sample;
   const relative = fit.relativeIntercepts;
   const mean = relative.reduce((sum, value) => sum + value, 0) / relative.length;
   const estimated = companies.map((company, index): InterceptEstimate => ({
     company,
-    ...contrastInterval(
-      context,
+    ...calibratedInterval(
       relative[index] + fit.interceptOrigin,
-      interceptContrast(fit, index),
-      context.cosines,
+      errorOf(index),
+      context.confidence,
     ),
     deviation: relative[index] - mean,
     rows: rowsOf(fit, index),

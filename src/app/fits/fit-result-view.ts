@@ -31,7 +31,7 @@ import { covarianceName } from '../ui/covariance-words';
 import { driftFinding, warningRemarks } from './evidence-words';
 import { EvidenceSection } from './evidence/evidence-section';
 import { EvidenceStore } from './evidence/evidence-store';
-import { QuestionList } from './evidence/question-list';
+import { HeadingLink } from './evidence/heading-link';
 import { ReplicationLink } from './evidence/replication-link';
 import { placesText, regressorsText } from './fit-words';
 import { GoodnessList } from './goodness-list';
@@ -53,7 +53,7 @@ import { confidenceText, shortHash, yearsText } from '../ui/phrases';
     Figure,
     GapPath,
     GoodnessList,
-    QuestionList,
+    HeadingLink,
     RemarkList,
     ReplicationLink,
     SampleNotes,
@@ -115,9 +115,6 @@ export class FitResultView {
     const view = this.#evidence.view();
     return view.kind === 'ready' ? view.evidence.verdict : null;
   });
-  protected readonly evidenceHeading = [
-    { id: 'evidence', words: 'What speaks for and against it' },
-  ];
   protected readonly remarks = computed(() => warningRemarks(this.result()));
   protected readonly covariance = computed(() => covarianceName(this.reply().fit.slopes));
   protected readonly hash = computed(() => shortHash(this.reply().fit.hash));

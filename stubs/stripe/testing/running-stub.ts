@@ -13,7 +13,8 @@ export interface RunningStub {
 
 export async function startStub(options: StripeStubOptions = {}): Promise<RunningStub> {
   const server = createServer(createStripeStub(options));
-  server.listen(0, '127.0.0.1');
+  // Exclusive: spec processes that run at once would share one port.
+  server.listen({ port: 0, host: '127.0.0.1', exclusive: true });
   await once(server, 'listening');
   const { port } = server.address() as AddressInfo;
   return {

@@ -24,14 +24,13 @@ import { FigureSwitch } from './figure-switch';
 import { Finding } from './finding';
 import { withoutEachCompany } from './left-out';
 import { leftOutMeaning, leftOutTitle } from './left-out-words';
-import { questions } from './questions';
 
 /** "Who drives it?": standing and slopes without each company. */
 @Component({
   selector: 'kv-drivers-block',
   imports: [EvidenceBlock, FigureSwitch, Finding, LeaveOneOut],
   template: `
-    <kv-evidence-block [question]="question" [meaning]="meaning()">
+    <kv-evidence-block [meaning]="meaning()">
       <kv-figure-switch
         legend="Shown without each company"
         [choices]="choices()"
@@ -39,23 +38,19 @@ import { questions } from './questions';
         (chosenChange)="chosen.set($event)"
       />
       @if (picture(); as drawn) {
-        @defer (on viewport; on timer(3s)) {
-          <kv-leave-one-out
-            [text]="drawn.text"
-            [leftOut]="drawn.left"
-            [full]="drawn.full"
-            [fullName]="drawn.fullName"
-            [marks]="chosen() === 'standing' ? 'own' : 'model'"
-            [kind]="drawn.kind"
-            [figureName]="drawn.word"
-            (companySelected)="companySelected.emit($event)"
-          >
-            <kv-finding chartHeading [text]="drawn.text" />
-          </kv-leave-one-out>
-        } @placeholder {
-          <div class="waiting"></div>
-        }
-        <p class="kv-caption kv-no-print">Select a company to see why it is a peer.</p>
+        <kv-leave-one-out
+          [text]="drawn.text"
+          [leftOut]="drawn.left"
+          [full]="drawn.full"
+          [fullName]="drawn.fullName"
+          [marks]="chosen() === 'standing' ? 'own' : 'model'"
+          [kind]="drawn.kind"
+          [figureName]="drawn.word"
+          (companySelected)="companySelected.emit($event)"
+        >
+          <kv-finding chartHeading [text]="drawn.text" />
+        </kv-leave-one-out>
+        <p class="kv-caption kv-no-print">Select a peer to see why it is one.</p>
       }
     </kv-evidence-block>
   `,
@@ -70,7 +65,6 @@ export class DriversBlock {
 
   readonly companySelected = output<string>();
 
-  protected readonly question = questions.drivers;
   protected readonly choices = computed(() => figureChoices(this.result()));
   protected readonly chosen = linkedSignal((): FigureChoice => this.choices()[0].choice);
   readonly #left = computed(() => {

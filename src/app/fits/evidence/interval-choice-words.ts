@@ -89,13 +89,18 @@ export function intervalsMeaning(
   const companies = counted(sample.companies, 'company', 'companies');
   const why = `CR2 is the default here: ${errors}, which row-by-row intervals overlook, and CR2 corrects for having ${companies}.`;
   const { outside, inside } = waysOf(evidence, index);
+  return outside.length + inside.length < 2 ? why : `${why} ${intervalsAnswer(evidence, index)}`;
+}
+
+/** Whether the choice of intervals decides anything about one slope. */
+export function intervalsAnswer(evidence: Covariances, index: number): string {
+  const { outside, inside } = waysOf(evidence, index);
+  if (outside.length + inside.length < 2) return 'Fewer than two ways give an interval here.';
   if (outside.length === 0 || inside.length === 0)
-    return outside.length + inside.length < 2
-      ? why
-      : `${why} Every way says the same of zero: it lies ${inside.length === 0 ? 'outside' : 'inside'} the interval.`;
+    return `Every way says the same of zero: it lies ${inside.length === 0 ? 'outside' : 'inside'} the interval.`;
   const fewer = outside.length <= inside.length ? outside : inside;
   const side = fewer === outside ? 'outside' : 'inside';
-  return `${why} The choice matters: zero lies ${side} the interval under ${listed(fewer)}, not under the others.`;
+  return `The choice matters: zero lies ${side} the interval under ${listed(fewer)}, not under the others.`;
 }
 
 function errorsText(persistence: number | null, numbers: NumberFormat): string {

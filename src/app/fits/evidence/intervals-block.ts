@@ -22,7 +22,6 @@ import {
   intervalsMeaning,
   intervalsTitle,
 } from './interval-choice-words';
-import { questions } from './questions';
 
 /** "Which intervals?": every covariance side by side. */
 @Component({
@@ -45,7 +44,6 @@ export class IntervalsBlock {
   readonly bootstrapStarted = output<number>();
   readonly bootstrapCancelled = output();
 
-  protected readonly question = questions.intervals;
   protected readonly chosen = signal<FigureChoice>(0);
   protected readonly choices = computed(() => slopeChoices(this.result()));
   readonly #index = computed(() => {

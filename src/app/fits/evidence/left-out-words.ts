@@ -47,13 +47,12 @@ interface LeftOutFigure {
   readonly many: string;
 }
 
-/** Without which one a figure moves most, and whether any changes what can be stated. */
-export function leftOutMeaning(
+/** Without which one a figure moves most. */
+export function leftOutAnswer(
   result: FitResult,
-  picture: LeftOutFigure,
+  { choice, left, many }: LeftOutFigure,
   numbers: NumberFormat,
 ): string {
-  const { choice, left, many } = picture;
   const full = chosenFigure(result, choice);
   const word = choiceWord(result, choice);
   const most = full === null ? null : mostMoving(left, full);
@@ -61,7 +60,18 @@ export function leftOutMeaning(
   const kind = kindOf(result, choice);
   const [to, from] = [most.estimate, full.estimate].map((value) => numbers.headline(value, kind));
   const unit = kind === 'money' ? ` ${numbers.unitLabel()}` : '';
-  return `The ${word} moves most without ${most.name}: to ${to} from ${from}${unit}. ${leftOutConsequence(result, picture)}`;
+  return `The ${word} moves most without ${most.name}: to ${to} from ${from}${unit}.`;
+}
+
+/** Without which one a figure moves most, and whether any changes what can be stated. */
+export function leftOutMeaning(
+  result: FitResult,
+  picture: LeftOutFigure,
+  numbers: NumberFormat,
+): string {
+  const answer = leftOutAnswer(result, picture, numbers);
+  const consequence = leftOutConsequence(result, picture);
+  return answer === consequence ? answer : `${answer} ${consequence}`;
 }
 
 function noneText(word: string, many: string): string {

@@ -59,7 +59,7 @@ export function modelRows(
     const { figure, kind, isComparable, reason } = found(alternative, result, choice);
     const head = {
       name: names[alternative.code],
-      note: noteOf(alternative, result, choice),
+      note: noteOf(alternative, result, { choice, hasFigure: figure !== null }),
       isMarked: alternative.isThisFit,
     };
     if (figure !== null && isComparable) return { ...head, figure };
@@ -82,19 +82,27 @@ function onAnotherScale(
   return kind === 'money' ? `${text} ${numbers.unitLabel()}` : text;
 }
 
+/** What stands behind a model's name; its reason too, where the figure is there and the reason only says more of it. */
 function noteOf(
-  { isThisFit, rankSet, observations, slopesNote }: Alternative,
+  { isThisFit, rankSet, observations, slopesNote, reason }: Alternative,
   { sample }: FitResult,
-  choice: FigureChoice,
+  { choice, hasFigure }: { readonly choice: FigureChoice; readonly hasFigure: boolean },
 ): string {
-  const places = choice === 'standing' && rankSet !== null ? [placesText(rankSet, null)] : [];
+  const isStanding = choice === 'standing';
+  const places = isStanding && rankSet !== null ? [placesText(rankSet, null)] : [];
   const rows =
     observations === null || observations === sample.observations
       ? []
       : [counted(observations, 'row')];
-  const note =
-    choice !== 'standing' && slopesNote !== undefined ? [slopesNote.replace(/\.$/, '')] : [];
-  return [...(isThisFit ? ['this fit'] : []), ...places, ...rows, ...note].join(', ');
+  const remarks = isStanding ? [] : [slopesNote, hasFigure ? reason : undefined];
+  const notes = remarks.flatMap((remark) => (remark === undefined ? [] : [asNote(remark)]));
+  return [...(isThisFit ? ['this fit'] : []), ...places, ...rows, ...notes].join(', ');
+}
+
+/** A sentence as part of a list: no full stop, no capital but that of an abbreviation. */
+function asNote(sentence: string): string {
+  const words = sentence.replace(/\.$/, '');
+  return /^[A-Z][a-z]/.test(words) ? words[0].toLowerCase() + words.slice(1) : words;
 }
 
 function figuresOf(
@@ -133,8 +141,8 @@ export function modelsTitle(
   return `${head}, from ${low} to ${high}`;
 }
 
-/** Whether the choice of model decides what can be stated. */
-export function modelsMeaning(
+/** Whether the choice of model decides on which side of zero a figure lies. */
+export function modelsAnswer(
   result: FitResult,
   alternatives: readonly Alternative[],
   choice: FigureChoice,
@@ -146,13 +154,25 @@ export function modelsMeaning(
   const turned = figures.filter(
     ({ figure }) => Math.sign(figure.estimate) * Math.sign(own.estimate) < 0,
   );
+  return turned.length === 0
+    ? `The ${word} lies on the same side of zero in every model that gives one.`
+    : `The choice of model matters: the ${word} lies on the other side of zero under ${listed(turned.map(({ code }) => `“${names[code].toLowerCase()}”`))}.`;
+}
+
+/** Whether the choice of model decides what can be stated. */
+export function modelsMeaning(
+  result: FitResult,
+  alternatives: readonly Alternative[],
+  choice: FigureChoice,
+): string {
+  const answer = modelsAnswer(result, alternatives, choice);
+  const figures = figuresOf(result, alternatives, choice);
+  if (chosenFigure(result, choice) === null || figures.length === 0) return answer;
   const judged = figures.filter(({ figure: { low, high } }) => low !== null || high !== null);
   const sure = judged.filter(({ figure: { low, high } }) => (low ?? -1) > 0 || (high ?? 1) < 0);
   const counts =
     judged.length === 0
       ? 'None of them has an interval.'
       : `In ${sure.length === 0 ? 'none' : sure.length} of ${counted(judged.length, 'model')} the interval excludes zero.`;
-  return turned.length === 0
-    ? `The ${word} lies on the same side of zero in every model that gives one. ${counts}`
-    : `The choice of model matters: the ${word} lies on the other side of zero under ${listed(turned.map(({ code }) => `“${names[code].toLowerCase()}”`))}. ${counts}`;
+  return `${answer} ${counts}`;
 }

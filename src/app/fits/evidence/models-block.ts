@@ -15,7 +15,6 @@ import { type FigureChoice, choiceUnit, choiceWord, figureChoices, kindOf } from
 import { FigureSwitch } from './figure-switch';
 import { Finding } from './finding';
 import { modelRows, modelsMeaning, modelsTitle } from './model-words';
-import { questions } from './questions';
 
 /** "What if the model were another?": standing and slopes under each specification. */
 @Component({
@@ -23,27 +22,23 @@ import { questions } from './questions';
   imports: [EvidenceBlock, FigureSwitch, Finding, IntervalRows],
   template: `
     @let drawn = picture();
-    <kv-evidence-block [question]="question" [meaning]="drawn.meaning">
+    <kv-evidence-block [meaning]="drawn.meaning">
       <kv-figure-switch
         legend="Shown in each model"
         [choices]="choices()"
         [chosen]="chosen()"
         (chosenChange)="chosen.set($event)"
       />
-      @defer (on viewport; on timer(3s)) {
-        <kv-interval-rows
-          [text]="drawn.text"
-          [rows]="drawn.rows"
-          [marks]="chosen() === 'standing' ? 'own' : 'model'"
-          [kind]="drawn.kind"
-          [figureName]="drawn.word"
-          rowName="model"
-        >
-          <kv-finding chartHeading [text]="drawn.text" />
-        </kv-interval-rows>
-      } @placeholder {
-        <div class="waiting"></div>
-      }
+      <kv-interval-rows
+        [text]="drawn.text"
+        [rows]="drawn.rows"
+        [marks]="chosen() === 'standing' ? 'own' : 'model'"
+        [kind]="drawn.kind"
+        [figureName]="drawn.word"
+        rowName="model"
+      >
+        <kv-finding chartHeading [text]="drawn.text" />
+      </kv-interval-rows>
     </kv-evidence-block>
   `,
   styleUrl: './block.css',
@@ -56,7 +51,6 @@ export class ModelsBlock {
   readonly result = input.required<FitResult>();
   readonly evidence = input.required<Evidence>();
 
-  protected readonly question = questions.models;
   protected readonly choices = computed(() => figureChoices(this.result()));
   protected readonly chosen = linkedSignal((): FigureChoice => this.choices()[0].choice);
   protected readonly picture = computed(() => {

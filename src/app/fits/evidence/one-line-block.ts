@@ -20,7 +20,6 @@ import { type FigureChoice, choiceUnit, slopeChoices } from './figure-choice';
 import { FigureSwitch } from './figure-switch';
 import { Finding } from './finding';
 import { comparedSlopes, linesTitle, oneLineMeaning } from './one-line-words';
-import { questions } from './questions';
 
 /** "Does one line for all do?" */
 @Component({
@@ -42,7 +41,6 @@ export class OneLineBlock {
   readonly opened = output<string>();
   readonly companySelected = output<string>();
 
-  protected readonly question = questions.oneLine;
   protected readonly chosen = signal<FigureChoice>(0);
   protected readonly choices = computed(() =>
     slopeChoices(this.result()).map(({ choice, label }) => ({

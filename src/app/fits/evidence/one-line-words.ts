@@ -4,27 +4,31 @@ import { type NumberFormat, headlineDigits } from '../../ui/number-format';
 import { sentence } from '../../ui/phrases';
 import { regressorWord } from '../fit-words';
 
+/** Whether one line could serve all companies. */
+export function oneLineAnswer({
+  poolability,
+  specification,
+}: Pick<FitResult, 'poolability' | 'specification'>): string {
+  const { pValue, pValueReason } = poolability;
+  if (pValue === null)
+    return `Not decided: ${sentence(pValueReason ?? 'the test has no p value here')}`;
+  return pValue < 1 - specification.confidence
+    ? 'No: company levels differ, so each company keeps its own.'
+    : 'The data do not rule it out: company levels are not shown to differ.';
+}
+
 /** Whether one line could serve all companies, and what each way explains. */
 export function oneLineMeaning(
-  {
-    poolability,
-    pooled,
-    goodness,
-    specification,
-  }: Pick<FitResult, 'poolability' | 'pooled' | 'goodness' | 'specification'>,
+  result: Pick<FitResult, 'poolability' | 'pooled' | 'goodness' | 'specification'>,
   numbers: NumberFormat,
 ): string {
+  const { pooled, goodness, specification } = result;
   const share = (value: number): string => numbers.headline(value, 'percent');
   const levels =
     specification.effects === 'company' ? 'company levels' : 'company levels and year effects';
   const outcome = specification.form === 'log' ? 'the log of market value' : 'market value';
   const shares = `One pooled line explains ${share(pooled.rSquared)} of the variation in ${outcome}, ${levels} with common slopes ${share(goodness.rSquared)}.`;
-  const { pValue, pValueReason } = poolability;
-  if (pValue === null)
-    return `Not decided: ${sentence(pValueReason ?? 'the test has no p value here')} ${shares}`;
-  return pValue < 1 - specification.confidence
-    ? `No: company levels differ, so each company keeps its own. ${shares}`
-    : `The data do not rule it out: company levels are not shown to differ. ${shares}`;
+  return `${oneLineAnswer(result)} ${shares}`;
 }
 
 /** Title of the lines against one regressor: the slope within companies, then that of the pooled line. */

@@ -1,5 +1,5 @@
 export interface EvidenceQuestion {
-  /** Of its heading, for links. */
+  /** Of its heading: a link that ends with it opens the question. */
   readonly id: string;
   readonly words: string;
 }

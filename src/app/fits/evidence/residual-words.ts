@@ -24,15 +24,26 @@ function missOf(
   return `${numbers.headline(Math.abs(residual))} ${numbers.unitLabel()} ${side}`;
 }
 
+/** Which row stands out most by its studentised residual. */
+export function residualAnswer(
+  { largest }: Pick<Residuals, 'largest'>,
+  result: Pick<FitResult, 'specification'>,
+  numbers: NumberFormat,
+): string {
+  const most = largest.at(0);
+  return most === undefined
+    ? 'Every row lies where the model expects it.'
+    : `${most.company} ${most.year} stands out most: ${missOf(most, result, numbers)} what is expected.`;
+}
+
 /** Which row stands out most by its studentised residual, and how many lie far off. */
 export function residualMeaning(
   residuals: Residuals,
   result: Pick<FitResult, 'specification'>,
   numbers: NumberFormat,
 ): string {
-  const most = residuals.largest.at(0);
-  if (most === undefined) return 'Every row lies where the model expects it.';
-  const head = `${most.company} ${most.year} stands out most: ${missOf(most, result, numbers)} what is expected.`;
+  const head = residualAnswer(residuals, result, numbers);
+  if (residuals.largest.length === 0) return head;
   const beyond = rowsBeyond(residuals);
   const rows = counted(residuals.of, 'row');
   return beyond === 0

@@ -9,7 +9,6 @@ import { EvidenceBlock } from './evidence-block';
 import { plainChartText } from './chart-words';
 import { Finding } from './finding';
 import { LargestResiduals } from './largest-residuals';
-import { questions } from './questions';
 import { residualMeaning, scatterTitle, widestTitle } from './residual-words';
 
 /** What the model leaves of each row: against what it expects, by company, by year, and the largest with their rows. */
@@ -28,7 +27,6 @@ export class ResidualsBlock {
   readonly result = input.required<FitResult>();
   readonly evidence = input.required<Evidence>();
 
-  protected readonly question = questions.residuals;
   protected readonly residuals = computed(() => this.evidence().residuals);
   protected readonly ownCompany = computed(() => this.reply().fit.ownCompany);
   protected readonly kind = computed(() => levelKind(this.result().specification.form));

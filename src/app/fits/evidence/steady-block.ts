@@ -23,7 +23,6 @@ import { FigureSwitch } from './figure-switch';
 import { Finding } from './finding';
 import { withoutEachYear } from './left-out';
 import { leftOutConsequence, leftOutTitle } from './left-out-words';
-import { questions } from './questions';
 import { driftMeaning } from './steady-words';
 
 /** "Is the standing steady?": the drift of the gap, and the figures without each year. */
@@ -31,7 +30,7 @@ import { driftMeaning } from './steady-words';
   selector: 'kv-steady-block',
   imports: [EvidenceBlock, FigureSwitch, Finding, LeaveOneOut],
   template: `
-    <kv-evidence-block [question]="question" [meaning]="meaning()">
+    <kv-evidence-block [meaning]="meaning()">
       <p class="kv-caption">The path of the gap, year by year, is drawn above.</p>
       <kv-figure-switch
         legend="Shown without each year"
@@ -40,24 +39,20 @@ import { driftMeaning } from './steady-words';
         (chosenChange)="chosen.set($event)"
       />
       @if (picture(); as drawn) {
-        @defer (on viewport; on timer(3s)) {
-          <kv-leave-one-out
-            [text]="drawn.text"
-            [leftOut]="drawn.left"
-            [full]="drawn.full"
-            [fullName]="drawn.fullName"
-            [marks]="chosen() === 'standing' ? 'own' : 'model'"
-            [kind]="drawn.kind"
-            [figureName]="drawn.word"
-            [most]="40"
-            [isChoice]="false"
-            rowName="year"
-          >
-            <kv-finding chartHeading [text]="drawn.text" />
-          </kv-leave-one-out>
-        } @placeholder {
-          <div class="waiting"></div>
-        }
+        <kv-leave-one-out
+          [text]="drawn.text"
+          [leftOut]="drawn.left"
+          [full]="drawn.full"
+          [fullName]="drawn.fullName"
+          [marks]="chosen() === 'standing' ? 'own' : 'model'"
+          [kind]="drawn.kind"
+          [figureName]="drawn.word"
+          [most]="40"
+          [isChoice]="false"
+          rowName="year"
+        >
+          <kv-finding chartHeading [text]="drawn.text" />
+        </kv-leave-one-out>
       } @else {
         <p>{{ evidence().withoutYearReason ?? 'No year can be left out.' }}</p>
       }
@@ -76,7 +71,6 @@ export class SteadyBlock {
   readonly result = input.required<FitResult>();
   readonly evidence = input.required<Evidence>();
 
-  protected readonly question = questions.steady;
   protected readonly choices = computed(() => figureChoices(this.result()));
   protected readonly chosen = linkedSignal((): FigureChoice => this.choices()[0].choice);
   protected readonly picture = computed(() => {

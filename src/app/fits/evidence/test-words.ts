@@ -48,12 +48,17 @@ export function testLines(
 }
 
 /** How many tests were looked at, and how many of those that count reject when all are allowed for. */
+export function testsAnswer({ lookedAt, inHolm, level, list }: TestSummary): string {
+  const rejecting = list.filter(({ holm }) => holm === 'rejects').length;
+  return `${counted(lookedAt, 'test')} looked at, ${inHolm} of them judged together by Holm’s correction at ${confidenceText(level)}: ${rejectingText(rejecting)}.`;
+}
+
+/** What the tests come to, and whether those that reject may do so too often. */
 export function testsMeaning(
-  { lookedAt, inHolm, level, list }: TestSummary,
+  tests: TestSummary,
   { warnings }: Pick<FitResult, 'warnings'>,
 ): string {
-  const rejecting = list.filter(({ holm }) => holm === 'rejects').length;
-  const head = `${counted(lookedAt, 'test')} looked at, ${inHolm} of them judged together by Holm’s correction at ${confidenceText(level)}: ${rejectingText(rejecting)}.`;
+  const head = testsAnswer(tests);
   return warnings.some(({ code }) => code === 'persistent-errors')
     ? `${head} Errors persist here, so tests that assume independent errors reject too often.`
     : head;

@@ -2,7 +2,6 @@ import { ChangeDetectionStrategy, Component, computed, inject, input } from '@an
 import type { Evidence, FitResult } from '@contract';
 import { NumberFormat } from '../../ui/number-format';
 import { EvidenceBlock } from './evidence-block';
-import { questions } from './questions';
 import { testLines, testsMeaning } from './test-words';
 
 /** Every test that was looked at, with its reading. */
@@ -19,7 +18,6 @@ export class TestsBlock {
   readonly result = input.required<FitResult>();
   readonly evidence = input.required<Evidence>();
 
-  protected readonly question = questions.tests;
   protected readonly meaning = computed(() => testsMeaning(this.evidence().tests, this.result()));
   protected readonly lines = computed(() => testLines(this.evidence().tests, this.#numbers));
 }

@@ -47,11 +47,19 @@ export function trendTitle(
   return other === undefined ? head : `${head}, in changes from year to year ${text(other)}`;
 }
 
-/** Whether companies that merely grow together could have made the slopes, and what to do about it. */
-export function trendMeaning(evidence: Trends, { slopes, warnings }: Fitted): string {
+interface TrendWords {
+  /** Whether companies that merely grow together could have made the slopes. */
+  readonly answer: string;
+  /** What to do about it. */
+  readonly advice: string;
+}
+
+function trendWords(evidence: Trends, { slopes, warnings }: Fitted): TrendWords {
   const estimator = differences(evidence);
   if (!estimator?.slopes)
-    return `First differences cannot be taken: ${estimator?.reason ?? 'they were not looked at'}`;
+    return only(
+      `First differences cannot be taken: ${estimator?.reason ?? 'they were not looked at'}`,
+    );
   const doubtful = slopes.flatMap((slope, index) => {
     const other = sameSlope(estimator, slope.name);
     return other === undefined || isInside(other.estimate, slope)
@@ -59,20 +67,41 @@ export function trendMeaning(evidence: Trends, { slopes, warnings }: Fitted): st
       : [regressorWord(slope.name, index)];
   });
   if (slopes.every(({ low, high }) => low === null && high === null))
-    return 'The slopes of this fit have no interval to hold changes from year to year against: compare both figures.';
+    return only(
+      'The slopes of this fit have no interval to hold changes from year to year against: compare both figures.',
+    );
   const persist = warnings.some(({ code }) => code === 'persistent-errors');
-  if (doubtful.length === 0) {
-    const head =
-      'Changes from year to year give slopes inside the intervals of this fit, so trends alone do not make them.';
-    return persist
-      ? `${head} Errors still persist from year to year: keep intervals that allow for it.`
-      : head;
-  }
+  if (doubtful.length === 0)
+    return {
+      answer:
+        'Changes from year to year give slopes inside the intervals of this fit, so trends alone do not make them.',
+      advice: persist
+        ? 'Errors still persist from year to year: keep intervals that allow for it.'
+        : '',
+    };
   const what =
     doubtful.length === 1
       ? `the slope on ${doubtful[0]} lies outside this fit’s interval`
       : `the slopes on ${listed(doubtful)} lie outside this fit’s intervals`;
-  return `In changes from year to year ${what}, so common trends may make part of it. State both figures, and compare year effects below.`;
+  return {
+    answer: `In changes from year to year ${what}, so common trends may make part of it.`,
+    advice: 'State both figures, and compare year effects below.',
+  };
+}
+
+function only(answer: string): TrendWords {
+  return { answer, advice: '' };
+}
+
+/** Whether companies that merely grow together could have made the slopes. */
+export function trendAnswer(evidence: Trends, result: Fitted): string {
+  return trendWords(evidence, result).answer;
+}
+
+/** Whether companies that merely grow together could have made the slopes, and what to do about it. */
+export function trendMeaning(evidence: Trends, result: Fitted): string {
+  const { answer, advice } = trendWords(evidence, result);
+  return advice === '' ? answer : `${answer} ${advice}`;
 }
 
 function isInside(value: number, { low, high }: FitResult['slopes'][number]): boolean {

@@ -8,7 +8,6 @@ import { chartText } from './chart-words';
 import { type FigureChoice, choiceUnit, choiceWord, slopeChoices } from './figure-choice';
 import { FigureSwitch } from './figure-switch';
 import { Finding } from './finding';
-import { questions } from './questions';
 import { trendMeaning, trendRows, trendTitle } from './trend-words';
 
 /** "Could it be only trends?": first differences beside the fit, and how far errors persist. */
@@ -16,7 +15,7 @@ import { trendMeaning, trendRows, trendTitle } from './trend-words';
   selector: 'kv-trends-block',
   imports: [EvidenceBlock, Figure, FigureSwitch, Finding, IntervalRows],
   template: `
-    <kv-evidence-block [question]="question" [meaning]="meaning()">
+    <kv-evidence-block [meaning]="meaning()">
       <kv-figure-switch
         legend="Slope shown"
         [choices]="choices()"
@@ -24,18 +23,14 @@ import { trendMeaning, trendRows, trendTitle } from './trend-words';
         (chosenChange)="chosen.set($event)"
       />
       @let drawn = picture();
-      @defer (on viewport; on timer(3s)) {
-        <kv-interval-rows
-          [text]="drawn.text"
-          [rows]="drawn.rows"
-          [figureName]="drawn.word"
-          rowName="estimator"
-        >
-          <kv-finding chartHeading [text]="drawn.text" />
-        </kv-interval-rows>
-      } @placeholder {
-        <div class="waiting"></div>
-      }
+      <kv-interval-rows
+        [text]="drawn.text"
+        [rows]="drawn.rows"
+        [figureName]="drawn.word"
+        rowName="estimator"
+      >
+        <kv-finding chartHeading [text]="drawn.text" />
+      </kv-interval-rows>
       @if (result().standing; as standing) {
         <dl>
           <div>
@@ -61,7 +56,6 @@ export class TrendsBlock {
   readonly result = input.required<FitResult>();
   readonly evidence = input.required<Evidence>();
 
-  protected readonly question = questions.trends;
   protected readonly chosen = signal<FigureChoice>(0);
   protected readonly choices = computed(() => slopeChoices(this.result()));
   protected readonly meaning = computed(() => trendMeaning(this.evidence(), this.result()));
