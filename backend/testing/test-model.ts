@@ -36,7 +36,7 @@ export async function importPanel(
   return commitImport(analyst, importId, 'first');
 }
 
-/** Commits a checked import and waits for its panel version, at most 30 seconds. @returns the version's id. */
+/** Commits a checked import and waits for its panel version. @returns the version's id. */
 export async function commitImport(
   analyst: TestClient,
   importId: string,
@@ -49,14 +49,12 @@ export async function commitImport(
   return ended.panelVersionId;
 }
 
-/** Waits for an import that is being committed, at most 30 seconds. */
-export async function importThatEnded(analyst: TestClient, importId: string): Promise<ImportReply> {
-  for (const until = Date.now() + 30_000; Date.now() < until;) {
+/** Waits for an import that is being committed. */
+export function importThatEnded(analyst: TestClient, importId: string): Promise<ImportReply> {
+  return eventually('the end of an import', async () => {
     const found = (await analyst.get(`/api/imports/${importId}`)).body as ImportReply;
-    if (found.state !== 'committing') return found;
-    await new Promise((resolve) => setTimeout(resolve, 50));
-  }
-  throw new Error('the import did not end within 30 seconds');
+    return found.state === 'committing' ? undefined : found;
+  });
 }
 
 /** Saves a peer group of the own company and all others, each with a reason. */
