@@ -17,14 +17,18 @@ interface Evidence {
   readonly ambiguousAt: number | null;
 }
 
+/** The texts of a column by position; undefined where the cell is no text but a number that is stored as one. */
+export interface ColumnTexts {
+  readonly length: number;
+  readonly textAt: (position: number) => string | undefined;
+}
+
 /**
  * Decides the decimal sign of each column by its own numbers: `1.5` and `1,234.5` speak for the dot, `1,5` and
  * `1.234,5` for the comma; `1,234` and `1.234` for neither. A column that says nothing follows the others, and the
  * dot where they say nothing either.
- *
- * @param columns  cells, one array a column.
  */
-export function decimalSigns(columns: readonly (readonly string[])[]): ColumnDecimals[] {
+export function decimalSigns(columns: readonly ColumnTexts[]): ColumnDecimals[] {
   const evidence = columns.map(evidenceOf);
   const dots = evidence.filter((column) => column.dots > column.commas).length;
   const commas = evidence.filter((column) => column.commas > column.dots).length;
@@ -36,16 +40,17 @@ export function decimalSigns(columns: readonly (readonly string[])[]): ColumnDec
   });
 }
 
-function evidenceOf(cells: readonly string[]): Evidence {
+function evidenceOf({ length, textAt }: ColumnTexts): Evidence {
   let dots = 0;
   let commas = 0;
   let ambiguousAt: number | null = null;
-  cells.forEach((cell, position) => {
-    const sign = decimalSignIn(cell);
+  for (let position = 0; position < length; position++) {
+    const text = textAt(position);
+    const sign = text === undefined ? undefined : decimalSignIn(text);
     if (sign === '.') dots += 1;
     else if (sign === ',') commas += 1;
     else if (sign === 'either') ambiguousAt ??= position;
-  });
+  }
   return { dots, commas, ambiguousAt };
 }
 

@@ -4,6 +4,11 @@ export interface Grid {
   readonly rows: readonly (readonly string[])[];
   /** Line of the file or sheet that each row begins on, ascending, the first being 1. */
   readonly lines: readonly number[];
-  /** Whether a formula wrote the cell; absent where none did. `row` and `column` count from 0. */
-  readonly isFormula?: (row: number, column: number) => boolean;
+  /** Whether a formula wrote the cell; absent where none did. */
+  readonly isFormula?: IsCell;
+  /** Whether the cell holds a number as a workbook stores one, not a text; absent where none does. */
+  readonly isNumber?: IsCell;
 }
+
+/** A question about one cell; `row` and `column` count from 0. */
+export type IsCell = (row: number, column: number) => boolean;

@@ -1,6 +1,7 @@
 import { isMissing } from './missing-cell';
 import { type ColumnRole, headerWords as words } from './header-words';
 import { decimalSigns } from './decimal-signs';
+import type { IsCell } from './grid';
 import { parseNumber } from './parse-number';
 import { parseYear } from './parse-year';
 
@@ -22,12 +23,14 @@ const numericRoles = new Set<ColumnRole>(['marketValue', 'capex', 'bookEquity'])
  *
  * @param headers  as the table has them.
  * @param sampleRows  some rows, one cell a header.
+ * @param isNumber  whether a cell of theirs holds a number that is stored as one.
  */
 export function guessMapping(
   headers: readonly string[],
   sampleRows: readonly (readonly string[])[],
+  isNumber: IsCell = () => false,
 ): MappingGuess {
-  const columns = headers.map((header, index) => describe(header, index, sampleRows));
+  const columns = headers.map((header, index) => describe(header, index, sampleRows, isNumber));
   const guess: Partial<Record<ColumnRole, string>> = {};
   const isFree = ({ header }: Column): boolean => !Object.values(guess).includes(header);
   for (const role of Object.keys(words) as ColumnRole[]) {
@@ -53,23 +56,40 @@ interface Column {
   readonly isYear: boolean;
 }
 
-function describe(header: string, index: number, rows: readonly (readonly string[])[]): Column {
-  const cells = rows.map((row) => row[index] ?? '').filter((cell) => !isMissing(cell));
-  const [{ decimalSign }] = decimalSigns([cells]);
-  const isYear = isMostly(cells, (cell) => {
-    const year = parseYear(cell);
+interface SampledCell {
+  readonly text: string;
+  readonly isStored: boolean;
+}
+
+function describe(
+  header: string,
+  index: number,
+  rows: readonly (readonly string[])[],
+  isNumber: IsCell,
+): Column {
+  const cells = rows
+    .map((row, at): SampledCell => ({ text: row[index] ?? '', isStored: isNumber(at, index) }))
+    .filter(({ text }) => !isMissing(text));
+  const textAt = (at: number): string | undefined =>
+    cells[at].isStored ? undefined : cells[at].text;
+  const [{ decimalSign }] = decimalSigns([{ length: cells.length, textAt }]);
+  const isYear = isMostly(cells, ({ text }) => {
+    const year = parseYear(text);
     return year !== undefined && year >= 1800 && year <= 2200;
   });
   return {
     header,
     words: wordsOf(header),
-    isNumeric: isMostly(cells, (cell) => parseNumber(cell, decimalSign) !== undefined),
+    isNumeric: isMostly(
+      cells,
+      ({ text, isStored }) => isStored || parseNumber(text, decimalSign) !== undefined,
+    ),
     isYear,
   };
 }
 
 /** A few slips, which the check names one by one, do not hide what a column is. */
-function isMostly(cells: readonly string[], isFine: (cell: string) => boolean): boolean {
+function isMostly(cells: readonly SampledCell[], isFine: (cell: SampledCell) => boolean): boolean {
   return cells.length > 0 && cells.filter(isFine).length >= 0.8 * cells.length;
 }
 

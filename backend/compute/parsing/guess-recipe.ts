@@ -20,7 +20,7 @@ export function guessRecipe(
   table: Omit<Table, 'delimiter'>,
   titles: readonly string[],
 ): FilePreview['guess'] {
-  const roles = guessMapping(table.header, table.rows.slice(0, guessRows));
+  const roles = guessMapping(table.header, table.rows.slice(0, guessRows), table.isNumber);
   const codes = currencyColumn(table, roles);
   const attributes = attributeColumns(table, roles, codes?.column);
   const money = moneyOf(table.header, roles, titles);

@@ -1,4 +1,4 @@
-import { decimalSigns } from './decimal-signs';
+import { type ColumnDecimals, decimalSigns as decimalSignsOf } from './decimal-signs';
 import { type DecimalSign, parseNumber } from './parse-number';
 
 describe('parseNumber', () => {
@@ -128,6 +128,11 @@ describe('parseNumber', () => {
 });
 
 describe('decimalSigns', () => {
+  const decimalSigns = (columns: readonly (readonly string[])[]): ColumnDecimals[] =>
+    decimalSignsOf(
+      columns.map((cells) => ({ length: cells.length, textAt: (position) => cells[position] })),
+    );
+
   it('goes by the numbers that can be read one way only', () => {
     expect(decimalSigns([['1,5', '1,234']])).toEqual([{ decimalSign: ',', ambiguousAt: null }]);
     expect(decimalSigns([['1.234.567']])).toEqual([{ decimalSign: ',', ambiguousAt: null }]);

@@ -8,7 +8,7 @@ import type { Table } from './table';
 /**
  * The numbers of the placed rows; NaN stands for a missing cell or a text. A text where a number belongs is found in
  * every row, also in one that names no company or year: it may be the sign of a shifted line. A gap is found in placed
- * rows only.
+ * rows only. A number that is stored as one is taken as it is; the decimal sign is for texts.
  *
  * @param placed  rows of the table that stand in the panel, ascending.
  * @param indices  columns of the table.
@@ -21,12 +21,15 @@ export function readNumbers(
   findings: FindingList,
 ): NamedColumn[] {
   const signs = columnSigns(table, indices, terms, findings);
+  const { rows, isNumber } = table;
   return indices.map((index, k): NamedColumn => {
     const decimalSign = signs[k];
     const values = new Float64Array(placed.length);
     let next = 0;
-    for (let row = 0; row < table.rows.length; row++) {
-      const value = parseNumber(table.rows[row][index], decimalSign);
+    for (let row = 0; row < rows.length; row++) {
+      const text = rows[row][index];
+      const isStored = isNumber?.(row, index) === true;
+      const value = isStored ? Number(text) : parseNumber(text, decimalSign);
       const isPlaced = placed[next] === row;
       if (value === undefined)
         findings.add(findingAt(table, row, index, noNumber[terms.decimalSign][decimalSign]));
@@ -47,10 +50,14 @@ function columnSigns(
   findings: FindingList,
 ): DecimalSign[] {
   if (decimalSign !== 'as-found') return indices.map(() => decimalSign);
-  const columns = indices.map((index) => table.rows.map((cells) => cells[index]));
+  const { rows, isNumber } = table;
+  const columns = indices.map((index) => ({
+    length: rows.length,
+    textAt: (row: number) => (isNumber?.(row, index) === true ? undefined : rows[row][index]),
+  }));
   return decimalSigns(columns).map((column, k) => {
     if (column.ambiguousAt !== null) {
-      const text = columns[k][column.ambiguousAt];
+      const text = rows[column.ambiguousAt][indices[k]];
       const remark = ambiguousNumber(text, column.decimalSign);
       findings.add(findingAt(table, column.ambiguousAt, indices[k], remark));
     }

@@ -148,11 +148,16 @@ function widthOf(grid: Grid, headerIndex: number): number {
   return grid.rows.slice(headerIndex).reduce((widest, cells) => Math.max(widest, cells.length), 0);
 }
 
-/** Numbers of a workbook are written with a point; only numbers typed as text may have commas. */
+/** Numbers that a workbook stores need no sign; texts among them may be written either way. */
 function decimalSignOf({ name, grid }: SheetOfFile): TableReading['decimalSign'] {
   if (name === null) return 'as-found';
-  const hasCommas = grid.rows.some((cells) =>
-    cells.some((cell) => cell.includes(',') && isNumber(cell)),
+  const hasSignedTexts = grid.rows.some((cells, row) =>
+    cells.some(
+      (cell, column) =>
+        (cell.includes(',') || cell.includes('.')) &&
+        grid.isNumber?.(row, column) !== true &&
+        isNumber(cell),
+    ),
   );
-  return hasCommas ? 'as-found' : '.';
+  return hasSignedTexts ? 'as-found' : '.';
 }

@@ -28,13 +28,17 @@ export function tableOfGrid(
     if (cells.length === width) return cells;
     return Array.from({ length: width }, (_, column) => cells[column] ?? '');
   });
-  const { isFormula } = grid;
+  const { isFormula, isNumber } = grid;
+  const first = headerIndex + 1;
   return {
     ...uniqueHeader(headers),
     rows,
     lines,
     ...(isFormula && {
-      isFormula: (row: number, column: number) => isFormula(row + headerIndex + 1, column),
+      isFormula: (row: number, column: number) => isFormula(row + first, column),
+    }),
+    ...(isNumber && {
+      isNumber: (row: number, column: number) => isNumber(row + first, column),
     }),
   };
 }

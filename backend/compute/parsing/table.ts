@@ -1,3 +1,5 @@
+import type { IsCell } from './grid';
+
 /** A long text table: nothing is interpreted yet. Of a wide sheet, the long table that it is read as. */
 export interface Table {
   /** Trimmed and made different from each other: a blank header becomes `column 3`, a second `x` becomes `x (2)`. */
@@ -16,7 +18,12 @@ export interface Table {
    */
   readonly placeOf?: (row: number, column: number) => CellPlace;
   /** Whether a formula wrote the cell; absent where none did. */
-  readonly isFormula?: (row: number, column: number) => boolean;
+  readonly isFormula?: IsCell;
+  /**
+   * Whether the cell holds a number as a workbook stores one; absent where none does. Its text is the number as the
+   * language prints it, with a decimal point, however the texts of its column are written.
+   */
+  readonly isNumber?: IsCell;
 }
 
 export interface CellPlace {

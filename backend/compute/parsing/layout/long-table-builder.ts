@@ -1,38 +1,38 @@
-import { isMissing } from '../missing-cell';
+import type { IsCell } from '../grid';
 import { type Table, type TableLimits, tableLimits } from '../table';
 import { TableError } from '../table-error';
 import { uniqueHeader } from '../unique-header';
+import {
+  type ByYear,
+  type CellQuestion,
+  type CompanyBlock,
+  describingCell,
+  type DescribingColumns,
+  filledRange,
+  isCell,
+  lineOf,
+  type SheetRow,
+  textOf,
+  valueCell,
+} from './company-block';
 import type { YearColumn } from './wide-header';
 import { companyOf, type WideSheet } from './wide-sheet';
 import type { YearLabel } from './year-label';
 
-/** Year columns of one variable, by year. */
-type ByYear = ReadonlyMap<string, YearColumn>;
-
-/** The rows of one company: of one sheet row, or of all that name a variable of it. */
-interface Block extends SheetRow {
-  readonly company: string;
-  readonly describing: readonly string[];
-  /** Where the values of each variable stand. */
-  readonly parts: Map<number, SheetRow & { readonly columns: ByYear }>;
-}
-
-interface SheetRow {
-  readonly sheet: WideSheet;
-  readonly row: number;
-}
+/** Columns of the long table before those that describe a row: company and year. */
+const firstDescribing = 2;
 
 /** Turns rows with years in columns into a row a company and year. */
 export class LongTableBuilder {
-  readonly #blocks: Block[] = [];
-  readonly #blocksOf = new Map<string, Block[]>();
+  readonly #blocks: CompanyBlock[] = [];
+  readonly #blocksOf = new Map<string, CompanyBlock[]>();
   readonly #variables = new Map<string, { readonly index: number; readonly name: string }>();
   readonly #years = new Map<string, YearLabel>();
   readonly #repeated = new Set<string>();
 
   /**
    * @param companyHeader  header of the companies in the long table.
-   * @param describing  headers of the columns that describe a row, in the order of the rows' texts.
+   * @param describing  headers of the columns that describe a row, in the order of the rows' own columns.
    */
   constructor(
     private readonly companyHeader: string,
@@ -76,7 +76,7 @@ export class LongTableBuilder {
   /** Adds a sheet row that holds all variables of a company. */
   addRow(
     place: SheetRow,
-    describing: readonly string[],
+    describing: DescribingColumns,
     byVariable: ReadonlyMap<number, ByYear>,
   ): void {
     const block = this.#begin(place, companyOf(place.sheet, place.row), describing);
@@ -87,7 +87,7 @@ export class LongTableBuilder {
   addVariable(
     place: SheetRow,
     named: { readonly company: string; readonly variable: string },
-    describing: readonly string[],
+    describing: DescribingColumns,
     columns: ByYear,
   ): void {
     const index = this.#variableIndex(named.variable);
@@ -110,46 +110,56 @@ export class LongTableBuilder {
       ...this.describing,
       ...names,
     ]);
-    const origins: { readonly block: Block; readonly key: string }[] = [];
+    const origins: { readonly block: CompanyBlock; readonly year: string }[] = [];
     const rows: string[][] = [];
     for (const block of this.#blocks) {
       const [first, last] = filledRange(block, keys);
-      for (const [key, label] of years.slice(first, last + 1)) {
-        origins.push({ block, key });
-        const values = names.map((_, variable) => textAt(block, variable, key));
-        rows.push([block.company, label.text, ...block.describing, ...values]);
+      const describing = block.describing.map((_, place) => textOf(describingCell(block, place)));
+      for (const [year, label] of years.slice(first, last + 1)) {
+        origins.push({ block, year });
+        const values = names.map((_, variable) => textOf(valueCell(block, variable, year)));
+        rows.push([block.company, label.text, ...describing, ...values]);
       }
       this.#refuseTooMany(rows.length, header.length);
     }
-    const firstVariable = 2 + this.describing.length;
+    const firstVariable = firstDescribing + this.describing.length;
+    const asking = (question: CellQuestion): IsCell => {
+      return (row, column) => {
+        const { block, year } = origins[row];
+        return column < firstVariable
+          ? isCell(describingCell(block, column - firstDescribing), question)
+          : isCell(valueCell(block, column - firstVariable, year), question);
+      };
+    };
     return {
       header,
       repeatedHeaders: [...new Set([...repeatedHeaders, ...this.#repeated])],
       rows,
       lines: origins.map(({ block }) => lineOf(block)),
       placeOf: (row, column) => {
-        const { block, key } = origins[row];
+        const { block, year } = origins[row];
         if (column < firstVariable) return { line: lineOf(block), header: header[column] };
         const part = block.parts.get(column - firstVariable);
-        const found = part?.columns.get(key)?.header;
+        const found = part?.columns.get(year)?.header;
         const prefix = (part ?? block).sheet.placePrefix;
         return {
           line: lineOf(part ?? block),
-          header: prefix + (found ?? `${header[column]} ${this.#years.get(key)?.text ?? key}`),
+          header: prefix + (found ?? `${header[column]} ${this.#years.get(year)?.text ?? year}`),
         };
       },
-      isFormula: (row, column) => {
-        const { block, key } = origins[row];
-        const part = block.parts.get(column - firstVariable);
-        const found = part?.columns.get(key);
-        if (part === undefined || found === undefined) return false;
-        return part.sheet.grid.isFormula?.(part.row, found.column) ?? false;
-      },
+      ...(this.#knows('isFormula') && { isFormula: asking('isFormula') }),
+      ...(this.#knows('isNumber') && { isNumber: asking('isNumber') }),
     };
   }
 
-  #begin(place: SheetRow, company: string, describing: readonly string[]): Block {
-    const block: Block = { ...place, company, describing, parts: new Map() };
+  #knows(question: CellQuestion): boolean {
+    return this.#blocks.some(({ parts, sheet }) =>
+      [{ sheet }, ...parts.values()].some((part) => part.sheet.grid[question] !== undefined),
+    );
+  }
+
+  #begin(place: SheetRow, company: string, describing: DescribingColumns): CompanyBlock {
+    const block: CompanyBlock = { ...place, company, describing, parts: new Map() };
     this.#blocks.push(block);
     const known = this.#blocksOf.get(company);
     if (known === undefined) this.#blocksOf.set(company, [block]);
@@ -190,29 +200,4 @@ function variableKey(name: string): string {
     .toLowerCase()
     .replace(/[\s_-]+/gu, ' ')
     .trim();
-}
-
-function lineOf({ sheet, row }: SheetRow): number {
-  return sheet.grid.lines[row];
-}
-
-function textAt(block: Block, variable: number, key: string): string {
-  const part = block.parts.get(variable);
-  const column = part?.columns.get(key)?.column;
-  if (part === undefined || column === undefined) return '';
-  return part.sheet.grid.rows[part.row][column] ?? '';
-}
-
-/**
- * First and last position of a year with a figure: before and after there are no rows, a gap between them stays one.
- * Last is before first where there is no figure at all.
- */
-function filledRange(block: Block, keys: readonly string[]): readonly [number, number] {
-  const isFilled = (key: string): boolean => {
-    for (const variable of block.parts.keys())
-      if (!isMissing(textAt(block, variable, key))) return true;
-    return false;
-  };
-  const first = keys.findIndex(isFilled);
-  return first === -1 ? [0, -1] : [first, keys.findLastIndex(isFilled)];
 }

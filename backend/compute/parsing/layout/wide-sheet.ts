@@ -1,5 +1,5 @@
 import { guessMapping } from '../guess-mapping';
-import type { Grid } from '../grid';
+import type { Grid, IsCell } from '../grid';
 import { type WideHeader, wideHeader } from './wide-header';
 
 /** One sheet with years in columns. */
@@ -26,7 +26,9 @@ export function wideSheet(
     .slice(headerIndex + 1, headerIndex + 1 + sampledRows)
     .map((cells) => header.plain.map(({ column }) => cells[column] ?? ''));
   const names = header.plain.map((plain) => plain.header);
-  const company = guessMapping(names, sample).company;
+  const isNumber: IsCell = (row, index) =>
+    grid.isNumber?.(headerIndex + 1 + row, header.plain[index].column) ?? false;
+  const company = guessMapping(names, sample, isNumber).company;
   const found = header.plain.find((plain) => plain.header === company) ?? header.plain[0];
   return { grid, headerIndex, header, companyColumn: found.column, placePrefix };
 }

@@ -13,8 +13,9 @@ export function yearsInColumns(sheet: WideSheet, unnamed: string): Omit<Table, '
   const describing = describingColumns(sheet);
   const builder = new LongTableBuilder(companyHeader(sheet), headersOf(describing));
   const columns = builder.columnsByVariable(sheet, unnamed);
+  const places = describing.map(({ column }) => column);
   for (let row = sheet.headerIndex + 1; row < sheet.grid.rows.length; row += 1)
-    builder.addRow({ sheet, row }, textsOf(sheet, row, describing), columns);
+    builder.addRow({ sheet, row }, places, columns);
   return builder.finish();
 }
 
@@ -35,13 +36,13 @@ export function variablesInRows(sheet: WideSheet, item: string): Omit<Table, 'de
   const describing = describingColumns(sheet).filter(({ column }) => column !== itemColumn);
   const builder = new LongTableBuilder(companyHeader(sheet), headersOf(describing));
   const columns = builder.columnsByYear(sheet);
+  const places = describing.map(({ column }) => column);
   let company = '';
   for (let row = sheet.headerIndex + 1; row < sheet.grid.rows.length; row += 1) {
     company = companyOf(sheet, row) || company;
     const variable = (sheet.grid.rows[row][itemColumn] ?? '').trim();
     if (variable === '') continue;
-    const describingTexts = textsOf(sheet, row, describing);
-    builder.addVariable({ sheet, row }, { company, variable }, describingTexts, columns);
+    builder.addVariable({ sheet, row }, { company, variable }, places, columns);
   }
   return builder.finish();
 }
@@ -56,14 +57,13 @@ export function sheetAVariable(
   for (const sheet of sheets) {
     const columns = builder.columnsByYear(sheet);
     const describing = describingColumns(sheet);
+    const places = described.map(
+      (name) => describing.find(({ header }) => header === name)?.column,
+    );
     for (let row = sheet.headerIndex + 1; row < sheet.grid.rows.length; row += 1) {
       const company = companyOf(sheet, row);
       if (company === '') continue;
-      const texts = described.map((name) => {
-        const column = describing.find(({ header }) => header === name)?.column;
-        return column === undefined ? '' : (sheet.grid.rows[row][column] ?? '');
-      });
-      builder.addVariable({ sheet, row }, { company, variable: sheet.variable }, texts, columns);
+      builder.addVariable({ sheet, row }, { company, variable: sheet.variable }, places, columns);
     }
   }
   return builder.finish();
@@ -79,12 +79,4 @@ function companyHeader({ header, companyColumn }: WideSheet): string {
 
 function headersOf(columns: readonly PlainColumn[]): readonly string[] {
   return columns.map(({ header }) => header);
-}
-
-function textsOf(
-  { grid }: WideSheet,
-  row: number,
-  columns: readonly PlainColumn[],
-): readonly string[] {
-  return columns.map(({ column }) => grid.rows[row][column] ?? '');
 }

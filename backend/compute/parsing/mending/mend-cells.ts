@@ -1,4 +1,5 @@
 import type { FileMending } from '../../file-recipe';
+import type { IsCell } from '../grid';
 import { placeOfCell, type Table } from '../table';
 
 export type MendedCell = FileMending['cells'][number];
@@ -11,7 +12,8 @@ export interface MendedTable {
 
 /**
  * Puts the mended texts in place of the file's. Where several rows of a long table show one cell of a wide sheet, all of
- * them get the text. Of two mends of one cell the later counts; a mended cell no longer counts as a formula's.
+ * them get the text. Of two mends of one cell the later counts; a mended cell no longer counts as a formula's or as
+ * a number stored as one: what a person writes is a text.
  */
 export function mendCells(table: Table, cells: readonly MendedCell[]): MendedTable {
   if (cells.length === 0) return { table, lost: [] };
@@ -36,15 +38,16 @@ export function mendCells(table: Table, cells: readonly MendedCell[]): MendedTab
     }
     return copy ?? cellsOfRow;
   });
-  const { isFormula } = table;
+  const { isFormula, isNumber } = table;
+  const unmended = (isCell: IsCell): IsCell => {
+    return (row, column) => !mendedAt.has(row * width + column) && isCell(row, column);
+  };
   return {
     table: {
       ...table,
       rows,
-      ...(isFormula && {
-        isFormula: (row: number, column: number) =>
-          !mendedAt.has(row * width + column) && isFormula(row, column),
-      }),
+      ...(isFormula && { isFormula: unmended(isFormula) }),
+      ...(isNumber && { isNumber: unmended(isNumber) }),
     },
     lost: [...mends].filter(([key]) => !found.has(key)).map(([, cell]) => cell),
   };

@@ -16,7 +16,7 @@ export function withoutRows(table: Table, lines: readonly number[]): ShortenedTa
   table.lines.forEach((line, row) => {
     if (!excluded.has(line)) kept.push(row);
   });
-  const { placeOf, isFormula } = table;
+  const { placeOf, isFormula, isNumber } = table;
   return {
     table: {
       ...table,
@@ -27,6 +27,9 @@ export function withoutRows(table: Table, lines: readonly number[]): ShortenedTa
       }),
       ...(isFormula && {
         isFormula: (row: number, column: number) => isFormula(kept[row], column),
+      }),
+      ...(isNumber && {
+        isNumber: (row: number, column: number) => isNumber(kept[row], column),
       }),
     },
     lost,

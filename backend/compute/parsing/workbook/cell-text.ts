@@ -12,30 +12,46 @@ export interface CellContext {
   readonly isFrom1904: boolean;
 }
 
+/** What a cell says. */
+export interface CellContent {
+  readonly text: string;
+  /** Whether the text is a number that is stored as one and shows no date. */
+  readonly isNumber: boolean;
+}
+
 /**
  * The text of a cell, never a formatted one: numbers with all their digits and a decimal point, dates as yyyy-mm-dd,
  * errors as they show.
  */
-export function cellText({ type, value, isDate }: CellSource, context: CellContext): string {
+export function cellContent(
+  { type, value, isDate }: CellSource,
+  context: CellContext,
+): CellContent {
   switch (type) {
     case 's':
-      return context.sharedTexts[Number(value)] ?? '';
+      return plainText(context.sharedTexts[Number(value)] ?? '');
     case 'b':
-      return value.trim() === '1' ? 'TRUE' : 'FALSE';
+      return plainText(value.trim() === '1' ? 'TRUE' : 'FALSE');
     case 'd':
-      return value.slice(0, 10);
+      return plainText(value.slice(0, 10));
     case undefined:
     case 'n':
-      return numberText(value, isDate, context.isFrom1904);
+      return numberContent(value, isDate, context.isFrom1904);
     default:
-      return value;
+      return plainText(value);
   }
 }
 
-function numberText(value: string, isDate: boolean, isFrom1904: boolean): string {
+function plainText(text: string): CellContent {
+  return { text, isNumber: false };
+}
+
+function numberContent(value: string, isDate: boolean, isFrom1904: boolean): CellContent {
   const number = Number(value);
-  if (value.trim() === '' || !Number.isFinite(number)) return value.trim();
-  return (isDate ? dateText(number, isFrom1904) : undefined) ?? String(number);
+  if (value.trim() === '' || !Number.isFinite(number)) return plainText(value.trim());
+  const date = isDate ? dateText(number, isFrom1904) : undefined;
+  if (date !== undefined) return plainText(date);
+  return { text: Object.is(number, -0) ? '-0' : String(number), isNumber: true };
 }
 
 const msPerDay = 86_400_000;

@@ -1,4 +1,5 @@
 import { FileRefusal } from '../file-refusal';
+import { CellMarks } from '../cell-marks';
 import type { Grid } from '../grid';
 import type { TableLimits } from '../table';
 
@@ -23,21 +24,28 @@ export class CellBudget {
 export class SheetBuilder {
   readonly #rows: string[][] = [];
   readonly #lines: number[] = [];
-  /** Columns with a formula, by row that has one. */
-  readonly #formulas = new Map<number, readonly number[]>();
+  readonly #formulas: CellMarks;
+  readonly #numbers: CellMarks;
 
   constructor(
     private readonly name: string,
     private readonly budget: CellBudget,
-  ) {}
+  ) {
+    this.#formulas = new CellMarks(budget.limits.columns);
+    this.#numbers = new CellMarks(budget.limits.columns);
+  }
 
   /**
    * @param line  of the sheet, the first being 1; later than that of the row before.
    * @param cells  up to the last filled one.
-   * @param formulas  columns, counted from 0, that a formula wrote.
+   * @param columns  counted from 0: those that a formula wrote, and those with a number that is stored as one.
    * @throws {FileRefusal} 'sheet_limit'
    */
-  add(line: number, cells: string[], formulas: readonly number[]): void {
+  add(
+    line: number,
+    cells: string[],
+    columns: { readonly formulas: readonly number[]; readonly numbers: readonly number[] },
+  ): void {
     const filled = cells.reduce((count, cell) => count + (cell.trim() === '' ? 0 : 1), 0);
     if (filled === 0) return;
     const { limits } = this.budget;
@@ -48,7 +56,9 @@ export class SheetBuilder {
         `cells of at most ${limits.fieldLength} characters; found a longer one on line ${line}`,
       );
     this.budget.spend(filled);
-    if (formulas.length > 0) this.#formulas.set(this.#rows.length, formulas);
+    const row = this.#rows.length;
+    for (const column of columns.formulas) this.#formulas.add(row, column);
+    for (const column of columns.numbers) this.#numbers.add(row, column);
     this.#rows.push(cells);
     this.#lines.push(line);
   }
@@ -63,13 +73,11 @@ export class SheetBuilder {
   }
 
   finish(): Grid {
-    const formulas = this.#formulas;
     return {
       rows: this.#rows,
       lines: this.#lines,
-      ...(formulas.size > 0 && {
-        isFormula: (row: number, column: number) => formulas.get(row)?.includes(column) ?? false,
-      }),
+      ...(!this.#formulas.isEmpty && { isFormula: this.#formulas.has }),
+      ...(!this.#numbers.isEmpty && { isNumber: this.#numbers.has }),
     };
   }
 

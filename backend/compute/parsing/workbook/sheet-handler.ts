@@ -1,5 +1,5 @@
 import { FileRefusal } from '../file-refusal';
-import { type CellContext, cellText } from './cell-text';
+import { type CellContext, cellContent } from './cell-text';
 import type { XmlHandler } from './read-xml';
 import type { SheetBuilder } from './sheet-builder';
 import { unescapeText } from './unescape-text';
@@ -9,6 +9,7 @@ export class SheetHandler implements XmlHandler {
   #line = 0;
   #cells: string[] = [];
   #formulas: number[] = [];
+  #numbers: number[] = [];
   #column = -1;
   #type: string | undefined;
   #isDate = false;
@@ -68,7 +69,10 @@ export class SheetHandler implements XmlHandler {
         this.#endCell();
         break;
       case 'row':
-        this.builder.add(this.#line, this.#cells, this.#formulas);
+        this.builder.add(this.#line, this.#cells, {
+          formulas: this.#formulas,
+          numbers: this.#numbers,
+        });
         break;
     }
   };
@@ -83,21 +87,24 @@ export class SheetHandler implements XmlHandler {
     this.#line = line;
     this.#cells = [];
     this.#formulas = [];
+    this.#numbers = [];
     this.#column = -1;
   }
 
   #endCell(): void {
     this.#isInCell = false;
-    const found = cellText(
+    const found = cellContent(
       { type: this.#type, value: this.#value, isDate: this.#isDate },
       this.context,
     );
-    const text = this.#type === 'str' || this.#type === 'inlineStr' ? unescapeText(found) : found;
+    const text =
+      this.#type === 'str' || this.#type === 'inlineStr' ? unescapeText(found.text) : found.text;
     if (text === '' && !this.#hasFormula) return;
     this.builder.checkColumn(this.#column, this.#line);
     while (this.#cells.length < this.#column) this.#cells.push('');
     this.#cells[this.#column] = text;
     if (this.#hasFormula) this.#formulas.push(this.#column);
+    if (found.isNumber) this.#numbers.push(this.#column);
   }
 }
 
