@@ -230,7 +230,10 @@ export const FitResult = z.object({
     }),
   ),
   yearEffects: z.array(z.object({ year: z.number().int(), estimate: z.number() })).nullable(),
-  smearing: z.object({ factor: z.number(), own: nullable }).nullable().default(null),
+  smearing: z
+    .object({ factor: nullable, own: nullable, reason: z.string().optional() })
+    .nullable()
+    .default(null),
   standing: z
     .object({
       company: z.string(),

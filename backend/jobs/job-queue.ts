@@ -208,6 +208,8 @@ export class JobQueue {
   /** A ticket that cannot be taken back now falls silent again, and is taken back later. */
   async #takeBack(ticket: SilentTicketRow): Promise<void> {
     const { kind, jobId } = ticket;
+    // Taken up here since the silent ones were listed.
+    if (this.#worked.has(ticket.id)) return;
     try {
       if ((await this.#boss.getJobById(kind, jobId))?.state === 'active') {
         this.options.onError(new Error(`a job of queue ${kind} fell silent and is taken back`));

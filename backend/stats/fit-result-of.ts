@@ -61,6 +61,8 @@ function yearEffects({ fit, sample }: FitParts): FitResult['yearEffects'] {
   return sample.years.map((year, position) => ({ year, estimate: effects[position] }));
 }
 
+const beyondFittedReason = 'A fitted value out of logs is beyond what a number can hold.';
+
 type OwnFigures = Pick<
   FitResult,
   | 'standing'
@@ -87,13 +89,15 @@ function ownFigures(
   }
   const pairs = pairComparisons(context, ownIndex);
   const drift = driftOf(context, ownIndex);
+  const ownYears = ownYearsOf(fit, ownIndex, smearing);
   return {
     standing: standingOf(context, { own: ownIndex, pairs, form: specification.form }),
     pairs,
     gapPath: gapPath(fit, ownIndex),
     drift: drift.drift,
     driftReason: drift.drift === null ? drift.reason : undefined,
-    ownYears: ownYearsOf(fit, ownIndex, smearing?.factor ?? null),
+    ownYears,
+    predictionReason: ownYears === null ? (smearing?.reason ?? beyondFittedReason) : undefined,
   };
 }
 

@@ -115,8 +115,11 @@ export interface YearEffect {
 
 /** Duan's smearing factor of a log form: mean of exp(e), over all rows and over the own company's. */
 export interface Smearing {
-  readonly factor: number;
+  /** Null where a double cannot hold it, with `reason`. */
+  readonly factor: number | null;
+  /** Null without an own company, and where a double cannot hold it. */
   readonly own: number | null;
+  readonly reason?: string;
 }
 
 /** The difference a_own − a_peer with the standard error of the rank set's steps (its own number of cosines). */
@@ -235,7 +238,7 @@ export interface FitResult {
     readonly standing: number | null;
     readonly reason?: string;
   }[];
-  /** The own company's years, oldest first; null where there is no standing, for the same reason. */
+  /** The own company's years, oldest first; null where there is no standing, for the same reason, or as `predictionReason` says. */
   readonly ownYears: readonly OwnYear[] | null;
   readonly prediction: PredictionBasis | null;
   readonly predictionReason?: string;

@@ -4,7 +4,7 @@ import type { OwnYear, PredictionBasis, Smearing } from './fit-result';
 import { heldValues } from './held-values';
 import { type Contrast, levelContrast, slopeContrast } from './intervals/contrast';
 import { lambdasOf, residualForm, varianceForm } from './intervals/contrast-forms';
-import type { IntervalContext } from './intervals/interval-context';
+import { formsFor, type IntervalContext } from './intervals/interval-context';
 import { contrastIntervalReason } from './intervals/interval-reasons';
 import { toRows } from './linear-algebra/square-matrix';
 import type { FitParts } from './fit-parts';
@@ -67,15 +67,16 @@ type CalibratedForms = Pick<
   'yearEffects' | 'lambdas' | 'a' | 'd' | 'quantile' | 'intervalReason'
 >;
 
-/** λ, A and D over [own level, slopes, year effects in `yearEffectOrder`]. */
+/** λ, A and D over [own level, slopes, year effects in `yearEffectOrder`], by the clock of the own company's level. */
 function calibratedForms(context: IntervalContext, own: number): CalibratedForms {
-  const { fit, forms, cosines } = context;
-  const quantile = twoSidedQuantile(tQuantile, context.confidence, cosines);
+  const { fit } = context;
   const years = yearEffectChoices(fit, own);
   const yearEffects = years?.estimates ?? null;
   const level = levelContrast(fit, own);
   // A company of fewer than 3 rows has no interval at all here, though a carried gap can weigh it by less than one half.
   const intervalReason = context.reason ?? contrastIntervalReason(fit, level);
+  const { forms, cosines } = formsFor(context, level);
+  const quantile = twoSidedQuantile(tQuantile, context.confidence, cosines);
   if (forms === null || intervalReason !== undefined) {
     return { yearEffects, lambdas: [], a: [], d: [], quantile, intervalReason };
   }

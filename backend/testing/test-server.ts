@@ -1,13 +1,12 @@
 import { createServer, type Server } from 'node:http';
 import type { AddressInfo } from 'node:net';
-import { dirname } from 'node:path';
-import { fileURLToPath } from 'node:url';
 import type { Express } from 'express';
 import { pino } from 'pino';
 import { createTestDatabase, type TestDatabase } from '../../db/testing/test-database';
 import { createApp } from '../app';
 import { compose, type Composition } from '../compose';
 import { installQueue, queueSchema } from '../jobs/install-queue';
+import { builtProcesses } from './built-processes';
 
 /** A clock that a spec moves. */
 export class TestClock {
@@ -57,7 +56,7 @@ export async function startTestServer(
     fitThreads: 1,
     now: clock.now,
     logger,
-    backendFolder: dirname(dirname(fileURLToPath(import.meta.url))),
+    backendFolder: await builtProcesses(),
   });
   await composition.start();
   const server = createServer();

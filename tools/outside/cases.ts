@@ -45,6 +45,7 @@ const dataSets: readonly DataSet[] = [
   golden('grunfeld10', 'inv', { regressors: ['value', 'capital'], own: 'F02', hasLogForm: true }),
   golden('grunfeld11', 'inv', { regressors: ['value', 'capital'], own: 'C03', hasLogForm: true }),
   golden('grunfeld10_unbalanced', 'inv', { regressors: ['value', 'capital'], own: 'F05' }),
+  golden('grunfeld10_short_own', 'inv', { regressors: ['value', 'capital'], own: 'F05' }),
   golden('grunfeld10_loglog', 'log_inv', { regressors: ['log_value', 'log_capital'], own: 'F01' }),
   golden('grunfeld11_value_on_inv_capital', 'value', {
     regressors: ['inv', 'capital'],

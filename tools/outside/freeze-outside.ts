@@ -7,6 +7,8 @@ const frozenCases: readonly string[] = [
   'grunfeld10_unbalanced: company',
   'grunfeld10_unbalanced: company, year',
   'grunfeld10_unbalanced: lag',
+  'grunfeld10_short_own: company',
+  'grunfeld10_short_own: company, year',
   'grunfeld11_value_on_inv_capital: log',
   'grunfeld11_value_on_inv_capital: log, year, lag',
   'usairlines: company, year',

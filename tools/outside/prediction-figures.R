@@ -16,6 +16,7 @@ prediction_figures <- function(panel, fit, case) {
   own <- case$own
   at <- which(panel$company == own)
   last <- at[length(at)]
+  has_band <- length(at) >= 5
   scale_of <- if (case$form == "log") log else identity
   plans <- plans_of(panel, own)
   cosines <- interval_cosines(length(panel$years))
@@ -46,22 +47,24 @@ prediction_figures <- function(panel, fit, case) {
       x <- scale_of(plan)
       w <- w_of(x, year)
       point <- sum(w * fit$beta)
-      error <- error_of(w)$standard_error
-      expected <- rbind(expected, unlist(t_interval(point, error, cosines, case$confidence)))
+      calibrated <- error_of(w)
+      error <- calibrated$standard_error
+      expected <- rbind(expected, unlist(t_interval(point, error, calibrated$cosines, case$confidence)))
       for (h in horizons) {
         spread <- spread_of(panel, fit, own, h)
         level <- max(spread$s2 * (1 - spread$overlap) + error^2, spread$s2 * (1 - spread$rho^(2 * h)))
         reach <- qt(1 - (1 - band_confidence) / 2, spread$df) * sqrt(level)
-        bands <- rbind(bands, in_measure(point + c(-1, 1) * reach))
+        bands <- rbind(bands, if (has_band) in_measure(point + c(-1, 1) * reach) else c(NA, NA))
         fade <- spread$rho^h
         year_last <- if (length(fit$year_places) > 0) contr.sum(length(panel$years))[panel$position[last], ]
         carry <- w_of(x - fade * panel$x[last, ], year - fade * year_last, 1 - fade)
         carry_error <- error_of(carry)$standard_error
         carry_point <- point + fade * fit$residuals[last]
         reach <- qt(1 - (1 - band_confidence) / 2, spread$df) * sqrt(spread$s2 * (1 - fade^2) + carry_error^2)
-        interval <- t_interval(carry_point, carry_error, cosines, case$confidence)
+        interval <- t_interval(carry_point, carry_error, calibrated$cosines, case$confidence)
         from_last <- c(from_last, point + if (is.null(smear)) 0 else log(smear), carry_point)
-        carried <- rbind(carried, c(unlist(interval), in_measure(carry_point + c(-1, 1) * reach)))
+        carried_band <- if (has_band) in_measure(carry_point + c(-1, 1) * reach) else c(NA, NA)
+        carried <- rbind(carried, c(unlist(interval), carried_band))
       }
     }
     result[[paste0("expected", suffix)]] <- figure("a_own + x'b with the calibrated interval, own code", t(expected), expected[1, 2])
@@ -118,14 +121,16 @@ reached_figure <- function(panel, fit, case, w, cosines, smear) {
   w0 <- replace(w, fit$slope_places[1], 0)
   a0 <- sum(w0 * fit$beta)
   a1 <- sum(w1 * fit$beta)
+  # Of whatever weighs the own company alone.
+  clock <- contrast_clocks(fit, w0, cosines)
   reached <- NULL
   for (factor in c(1.05, 2)) {
     target <- if (case$form == "log") sum(w * fit$beta) + log(factor) else sum(w * fit$beta) * factor
     xi <- (target - a0) / a1
     solution <- calibrated_error(fit, w0 + xi * w1, cosines, rho)
-    l0 <- calibrated_error(fit, w0, cosines, rho)$lambdas
-    l1 <- calibrated_error(fit, w1, cosines, rho)$lambdas
-    size <- qt(1 - (1 - case$confidence) / 2, cosines)^2 * solution$calibration * length(panel$years)
+    l0 <- calibrated_error(fit, w0, cosines, rho, clock)$lambdas
+    l1 <- calibrated_error(fit, w1, cosines, rho, clock)$lambdas
+    size <- qt(1 - (1 - case$confidence) / 2, clock$cosines)^2 * solution$calibration * length(panel$years)
     leading <- a1^2 - size * mean(l1^2)
     middle <- a1 * (a0 - target) - size * mean(l0 * l1)
     constant <- (a0 - target)^2 - size * mean(l0^2)

@@ -12,7 +12,7 @@ standing_figures <- function(panel, fit, case) {
   levels[table(panel$company)[companies] < 3] <- NA
   w <- standing_weights(fit, own)
   error <- calibrated_error(fit, w, cosines, rho)
-  interval <- t_interval(sum(w * fit$beta), error$standard_error, cosines, confidence)
+  interval <- t_interval(sum(w * fit$beta), error$standard_error, error$cosines, confidence)
   set <- rank_set_of(fit, own, rho, confidence)
   drift <- drift_of(panel, fit, case)
   without_companies <- lapply(companies, function(name) without(panel, panel$company != name, case))

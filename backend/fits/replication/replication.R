@@ -139,10 +139,36 @@ persistence_of <- function(panel, e) {
   list(pooled = pooled, own = own, used = setNames(pmax(own, pooled, na.rm = TRUE), panel$companies))
 }
 
+# Where each year lies on the clock of a contrast, from 0 to 1 (T x columns of `w`), and how many cosines run over it.
+# By the calendar u_t = (t - 1/2)/T. A company with rows in fewer than half of the years is short; where short companies
+# carry half or more of sum_i w_i^2/T_i, the contrast's own rows drive the clock (a change of time by the variance profile,
+# Cavaliere & Taylor 2007, 2008): u_t = (sum_{s<t} v_s + v_t/2)/sum v, v_t = sum_i (w_i/T_i)^2 over the companies with a row
+# in year t. With m rows of the short company that carries most, m - 1 cosines differ from 0; below 3 the calendar stays.
+contrast_clocks <- function(fit, w, cosines) {
+  panel <- fit$panel
+  years <- length(panel$years)
+  present <- table(factor(panel$company, panel$companies), factor(panel$year, panel$years)) > 0
+  rows <- rowSums(present)
+  clocks <- apply(as.matrix(w)[seq_along(panel$companies), , drop = FALSE], 2, function(weights) {
+    carried <- weights^2 / rows
+    of_short <- ifelse(rows < years / 2, carried, 0)
+    most <- if (any(of_short > 0)) rows[[which.max(of_short)]] - 1 else 0
+    if (most < 3 || sum(of_short) < sum(carried) / 2) {
+      return(list(places = (seq_len(years) - 0.5) / years, cosines = cosines))
+    }
+    profile <- colSums((weights / rows)^2 * present)
+    list(places = (cumsum(profile) - profile / 2) / sum(profile), cosines = min(cosines, most))
+  }, simplify = FALSE)
+  list(
+    places = vapply(clocks, function(clock) unname(clock$places), numeric(years)),
+    cosines = vapply(clocks, function(clock) clock$cosines, 0)
+  )
+}
+
 # Standard errors of contrasts (columns of `w`) with B equal-weighted cosines over the years (Lazarus, Lewis, Stock &
-# Watson 2018): g = Z(Z'Z)^-1 w, h_j = sqrt(2/T) cos(pi j (p - 1/2)/T) g, se^2 = T mean_j (h_j'e)^2 c with
+# Watson 2018): g = Z(Z'Z)^-1 w, h_j = sqrt(2/T) cos(pi j u) g, se^2 = T mean_j (h_j'e)^2 c with
 # c = max(1, sum_i g_i'R_i g_i / (T mean_j sum_i (M h_j)_i'R_i (M h_j)_i)), R_i = rho_i^|year - year'|.
-calibrated_error <- function(fit, w, cosines, rho) {
+calibrated_error <- function(fit, w, cosines, rho, clocks = contrast_clocks(fit, w, cosines)) {
   w <- as.matrix(w)
   panel <- fit$panel
   years <- length(panel$years)
@@ -160,18 +186,21 @@ calibrated_error <- function(fit, w, cosines, rho) {
   denominator <- 0
   squares <- 0
   lambdas <- NULL
-  for (j in seq_len(cosines)) {
-    h <- sqrt(2 / years) * cos(pi * j * (panel$position - 0.5) / years) * g
+  for (j in seq_len(max(clocks$cosines))) {
+    share <- (j <= clocks$cosines) / clocks$cosines
+    h <- sqrt(2 / years) * cos(pi * j * clocks$places[panel$position, , drop = FALSE]) * g
     lambda <- drop(crossprod(h, fit$residuals))
     lambdas <- rbind(lambdas, lambda)
-    squares <- squares + lambda^2 / cosines
-    denominator <- denominator + form(h - fit$q %*% crossprod(fit$q, h)) / cosines
+    squares <- squares + lambda^2 * share
+    denominator <- denominator + form(h - fit$q %*% crossprod(fit$q, h)) * share
   }
   numerator <- form(g)
   calibration <- pmax(1, numerator / (years * denominator))
   calibration[denominator * years <= 1e-12 * numerator] <- NA
   list(
     standard_error = sqrt(years * squares * calibration), calibration = calibration,
+    # B, which is the degrees of freedom too.
+    cosines = clocks$cosines,
     # Of one contrast: its lambda_j, a number a cosine.
     lambdas = unname(lambdas)
   )
@@ -189,13 +218,15 @@ rank_set_of <- function(fit, own, rho, confidence) {
   peers <- setdiff(companies, own)
   w <- vapply(peers, function(peer) company_weights(fit, setNames(c(1, -1), c(own, peer))), numeric(length(fit$beta)))
   estimate <- fit$intercepts[[own]] - fit$intercepts[peers]
-  error <- calibrated_error(fit, w, cosines, rho)$standard_error
+  calibrated <- calibrated_error(fit, w, cosines, rho)
+  error <- calibrated$standard_error
   rows <- table(fit$panel$company)
   has_interval <- rows[peers] >= 3 & rows[[own]] >= 3
   error[!has_interval] <- NA
   ranked <- peers[rows[peers] >= 3]
   statistic <- (estimate / error)[ranked]
-  p <- c(pt(-statistic, cosines), pt(statistic, cosines))
+  df <- setNames(calibrated$cosines, peers)[ranked]
+  p <- c(pt(-statistic, df), pt(statistic, df))
   p[is.na(p)] <- 1
   sorted <- order(p)
   alpha <- 1 - confidence
@@ -205,7 +236,7 @@ rank_set_of <- function(fit, own, rho, confidence) {
   lower <- sum(rejected[seq_along(ranked)])
   higher <- sum(rejected[length(ranked) + seq_along(ranked)])
   list(
-    pairs = list(company = peers, estimate = unname(estimate), standard_error = unname(error), cosines = cosines),
+    pairs = list(company = peers, estimate = unname(estimate), standard_error = unname(error), cosines = calibrated$cosines),
     rank = 1 + sum(fit$intercepts[ranked] > fit$intercepts[[own]]),
     rank_set = if (rows[[own]] >= 3) c(1 + higher, length(ranked) + 1 - lower)
   )
@@ -336,7 +367,7 @@ wild_interval <- function(p_of, estimate, standard_error, confidence) {
     inside <- outside
     while (inside > 1e-6 && !accepts(side * inside)) {
       outside <- inside
-      inside <- inside * if (inside > 50) 0.5 else 0.98
+      inside <- inside * if (inside > 50) 0.5 else 0.995
     }
     while (outside - inside > 1e-13 * outside) {
       middle <- (inside + outside) / 2
@@ -447,7 +478,11 @@ compare_intercepts <- function(fit, results, code_of) {
   has_interval <- !vapply(field(theirs, "standardError"), is.null, TRUE)
   cosines <- interval_cosines(length(fit$panel$years))
   error <- rep(NA_real_, length(companies))
-  if (any(has_interval)) error <- calibrated_error(fit, weights, cosines, fit$persistence$used)$standard_error
+  if (any(has_interval)) {
+    calibrated <- calibrated_error(fit, weights, cosines, fit$persistence$used)
+    error <- calibrated$standard_error
+    cosines <- calibrated$cosines
+  }
   error[!has_interval] <- NA
   interval <- t_interval(unname(fit$intercepts), error, cosines, confidence)
   scale <- ifelse(is.na(error), max(abs(fit$intercepts)), error)
@@ -485,9 +520,9 @@ compare_standing <- function(fit, results, code_of) {
   has_interval <- !is.null(theirs$standardError)
   weights <- standing_weights(fit, own)
   estimate <- sum(weights * fit$beta)
-  error <- list(standard_error = NA, calibration = NA)
+  error <- list(standard_error = NA, calibration = NA, cosines = cosines)
   if (has_interval) error <- calibrated_error(fit, weights, cosines, fit$persistence$used)
-  interval <- t_interval(estimate, error$standard_error, cosines, results$specification$confidence)
+  interval <- t_interval(estimate, error$standard_error, error$cosines, results$specification$confidence)
   scale <- if (has_interval) error$standard_error else max(abs(fit$intercepts))
   rbind(
     difference_of("standing", estimate, theirs["estimate"], scale),

@@ -65,7 +65,7 @@ export function companyMeansFit(
     kept,
     coefficients: solution.coefficients,
     residuals: solution.residuals,
-    residualSquares: sumOfSquares(solution.residuals),
+    residualSquares: solution.residualSquares,
     basis: solution.basis,
     inverseR: invertUpper(solution.r, kept.length),
     leverages: weights.map((weight, company) =>
@@ -77,7 +77,13 @@ export function companyMeansFit(
 /** The regression where no column tells the companies apart. */
 function constantOnly(outcome: Float64Array): LeastSquares {
   const none = new Float64Array(0);
-  return { coefficients: none, residuals: outcome, basis: [], r: none };
+  return {
+    coefficients: none,
+    residuals: outcome,
+    residualSquares: sumOfSquares(outcome),
+    basis: [],
+    r: none,
+  };
 }
 
 /** Company means less their weighted mean, and that mean. */

@@ -1,10 +1,8 @@
-import type { EstimatorCode, EstimatorSlope, EstimatorSummary } from '../evidence/evidence';
 import type { Specification } from '../fit-result';
-import { openFit } from '../index';
+import { componentsOf, slopesOf, summariesOfPanel } from '../testing/estimator-figures';
 import { expectDigits } from '../testing/expect-digits';
-import { type PanelRow, panelOf, plainSpecification, sha256 } from '../testing/golden-panels';
+import { type PanelRow, panelOf } from '../testing/golden-panels';
 import { randomNumbers } from '../testing/random-panels';
-import { estimatorSummaries } from './estimator-summaries';
 import { normalTwoSidedQuantile } from './normal-quantile';
 
 interface Shape {
@@ -35,36 +33,9 @@ function rowsOf(
 function summariesOf(
   rows: readonly PanelRow[],
   specification: Partial<Specification> = {},
-): (code: EstimatorCode) => EstimatorSummary {
+): ReturnType<typeof summariesOfPanel> {
   const regressors = rows[0].regressors.map((_, k) => `x${k}`);
-  const open = openFit(
-    {
-      data: panelOf(rows, { outcome: 'y', regressors }),
-      specification: { ...plainSpecification, ...specification },
-      own: null,
-      members: undefined,
-    },
-    { sha256 },
-  );
-  const summaries = estimatorSummaries(open);
-  return (code) => {
-    const found = summaries.find((summary) => summary.code === code);
-    if (found === undefined) throw new Error(`no estimator ${code}`);
-    return found;
-  };
-}
-
-function slopesOf({ slopes, reason }: EstimatorSummary): readonly EstimatorSlope[] {
-  if (slopes === null) throw new Error(reason);
-  return slopes;
-}
-
-function componentsOf({
-  components,
-  reason,
-}: EstimatorSummary): NonNullable<EstimatorSummary['components']> {
-  if (components === undefined) throw new Error(reason);
-  return components;
+  return summariesOfPanel(panelOf(rows, { outcome: 'y', regressors }), specification);
 }
 
 describe('estimators at the edges', () => {

@@ -1,10 +1,10 @@
-import type { EstimatorCode, EstimatorSlope, EstimatorSummary } from '../evidence/evidence';
+import type { EstimatorSummary } from '../evidence/evidence';
 import type { Specification } from '../fit-result';
 import { openFit } from '../index';
+import { componentsOf, slopesOf, summariesOfPanel } from '../testing/estimator-figures';
 import { expectDigits } from '../testing/expect-digits';
 import { goldenJson, goldenPanel, plainSpecification, sha256 } from '../testing/golden-panels';
 import { estimatorTable } from './estimator-table';
-import { estimatorSummaries } from './estimator-summaries';
 
 type ByName = Readonly<Record<string, number>>;
 
@@ -58,36 +58,10 @@ const digits = 9;
 function summariesOf(
   file: string,
   specification: Partial<Specification> = {},
-): (code: EstimatorCode) => EstimatorSummary {
+): ReturnType<typeof summariesOfPanel> {
   const { meta } = goldenJson<Golden>(`${file}.json`);
-  const open = openFit(
-    {
-      data: goldenPanel(`${file}.csv`, meta.dependent, meta.regressors),
-      specification: { ...plainSpecification, ...specification },
-      own: null,
-      members: undefined,
-    },
-    { sha256 },
-  );
-  const summaries = estimatorSummaries(open);
-  return (code) => {
-    const found = summaries.find((summary) => summary.code === code);
-    if (found === undefined) throw new Error(`no estimator ${code}`);
-    return found;
-  };
-}
-
-function slopesOf({ slopes, reason }: EstimatorSummary): readonly EstimatorSlope[] {
-  if (slopes === null) throw new Error(reason);
-  return slopes;
-}
-
-function componentsOf({
-  components,
-  reason,
-}: EstimatorSummary): NonNullable<EstimatorSummary['components']> {
-  if (components === undefined) throw new Error(reason);
-  return components;
+  const data = goldenPanel(`${file}.csv`, meta.dependent, meta.regressors);
+  return summariesOfPanel(data, specification);
 }
 
 function expectBlock(summary: EstimatorSummary, block: Block): void {

@@ -1,5 +1,6 @@
 import type { Standing } from '../fit-result';
 import type { AlternativeCode } from './evidence';
+import { heldNumber } from '../prediction';
 import { pInWords, listInWords, shortNumber } from './in-words';
 import {
   areOpposite,
@@ -82,12 +83,19 @@ function drift({ result }: VerdictInput): string | null {
   const pValue = result.drift?.pValue ?? null;
   if (result.drift === null || pValue === null) return null;
   if (pValue >= 1 - result.specification.confidence) return null;
-  const { estimate } = result.drift;
   const by =
     result.specification.form === 'log'
-      ? `${shortNumber(100 * Math.expm1(estimate))} %`
-      : `${shortNumber(estimate)} in the unit of ${result.outcome}`;
+      ? byOfLogs(result.drift.estimate)
+      : `${shortNumber(result.drift.estimate)} in the unit of ${result.outcome}`;
   return `The gap to the peers moves by ${by} a year (${pInWords(pValue)}): one figure for all years hides where it stands now.`;
+}
+
+/** A change of logs as percent; as it is where a double cannot hold that. */
+function byOfLogs(change: number): string {
+  const percent = heldNumber(100 * Math.expm1(change));
+  return percent === null
+    ? `${shortNumber(change)} in natural logs, beyond what a number can hold as a percentage,`
+    : `${shortNumber(percent)} %`;
 }
 
 /** Own errors at the bound, or those of most companies, make the interval of the standing itself too narrow. */

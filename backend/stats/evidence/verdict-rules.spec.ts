@@ -343,4 +343,18 @@ describe('verdictRules', () => {
     const input = withResult({ specification: { ...specification, form: 'log' }, drift });
     expect(verdictOf(input).against[0].detail).toContain('moves by 2 % a year (p = 0.010)');
   });
+
+  it('gives a drift in logs that no percentage can hold as it is', () => {
+    const { specification } = sound.result;
+    const drift = { estimate: 705.25, standardError: 1, low: 700, high: 710, pValue: 0.01 };
+    const input = withResult({ specification: { ...specification, form: 'log' }, drift });
+    expect(verdictOf(input).against[0].detail).toContain(
+      'moves by 705.3 in natural logs, beyond what a number can hold as a percentage, a year (p = 0.010)',
+    );
+    const down = withResult({
+      specification: { ...specification, form: 'log' },
+      drift: { ...drift, estimate: -705.25, low: -710, high: -700 },
+    });
+    expect(verdictOf(down).against[0].detail).toContain('moves by −100 % a year');
+  });
 });

@@ -15,9 +15,9 @@ const calibrationTolerance = 1e-12;
 export const noCalibrationReason =
   'The variation over time that an interval is calibrated on is practically zero for this figure.';
 
-/** Standard error of one contrast, with what made it. */
+/** Standard error of one contrast, with what made it; `cosines` are the degrees of freedom of its t. */
 export type CalibratedError =
-  | { readonly standardError: number; readonly calibration: number }
+  | { readonly standardError: number; readonly calibration: number; readonly cosines: number }
   | { readonly standardError: null; readonly calibration: null; readonly reason: string };
 
 /**
@@ -36,6 +36,7 @@ export function calibratedError(
     numerator: varianceForm(forms, contrast, contrast),
     residualForm: residualForm(forms, contrast, contrast, cosines),
     meanSquare: squares / cosines,
+    cosines,
   });
 }
 
@@ -49,6 +50,8 @@ export interface ErrorParts {
   readonly residualForm: number;
   /** mean_j (h_j'e)². */
   readonly meanSquare: number;
+  /** B. */
+  readonly cosines: number;
 }
 
 /** se = √(T·mean_j (h_j'e)²·c) with c = max(1, numerator / (T·residualForm)). */
@@ -59,16 +62,17 @@ export function errorFrom(parts: ErrorParts): CalibratedError {
     return { standardError: null, calibration: null, reason: noCalibrationReason };
   }
   const calibration = Math.max(1, numerator / denominator);
-  return { standardError: Math.sqrt(years * meanSquare * calibration), calibration };
+  const standardError = Math.sqrt(years * meanSquare * calibration);
+  return { standardError, calibration, cosines: parts.cosines };
 }
 
-/** estimate ± t_B(1 − α/2)·se. */
+/** estimate ± t_B(1 − α/2)·se, or why there is none. */
 export function calibratedInterval(
   estimate: number,
   error: CalibratedError,
-  options: { readonly cosines: number; readonly confidence: number },
+  confidence: number,
 ): IntervalEstimate {
   if (error.standardError === null) return withoutInterval(estimate, error.reason);
-  const quantile = twoSidedQuantile(tQuantile, options.confidence, options.cosines);
+  const quantile = twoSidedQuantile(tQuantile, confidence, error.cosines);
   return symmetricInterval(estimate, error.standardError, quantile);
 }

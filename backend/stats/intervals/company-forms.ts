@@ -1,6 +1,5 @@
 import type { WithinFit } from '../regression/within-fit';
 import { correlationProduct, fillYearDecays } from './correlation-product';
-import { cosineWeights } from './cosine-weights';
 
 /**
  * What the calibrated interval of any contrast is made of, computed once a fit. With P coefficients beside the company
@@ -37,12 +36,14 @@ export interface CompanyForms {
  * Cost n·B·P² operations and N·B·(2 + 3P) numbers: no n × N matrix.
  *
  * @param persistence  ρ_i, one a company.
+ * @param weights  B cosines over the sample's years.
  */
 export function companyForms(
   fit: WithinFit,
   persistence: Float64Array,
-  cosines: number,
+  weights: readonly Float64Array[],
 ): CompanyForms {
+  const cosines = weights.length;
   const companies = fit.sample.companies.length;
   const slopes = fit.basis.length;
   const years = fit.sample.years.length;
@@ -61,7 +62,6 @@ export function companyForms(
     residualCross: new Float64Array(companies * cosines * 2 * slopes),
     residualBasis: new Float64Array(cosines * 4 * slopes * slopes),
   };
-  const weights = cosineWeights(years, cosines);
   const scratch = scratchOf(fit);
   for (let company = 0; company < companies; company += 1) {
     const rows = rowsOf(fit, { company, persistence: persistence[company], scratch });

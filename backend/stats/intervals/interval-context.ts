@@ -1,4 +1,4 @@
-import { type IntervalEstimate, withoutInterval } from '../prediction';
+import type { IntervalEstimate } from '../prediction';
 import type { WithinFit } from '../regression/within-fit';
 import {
   type CalibratedError,
@@ -8,7 +8,8 @@ import {
 } from './calibrated-interval';
 import { type CompanyForms, companyForms } from './company-forms';
 import type { Contrast } from './contrast';
-import { intervalCosines, rankCosines } from './cosine-weights';
+import { calendar, contrastCosines, ownClock } from './contrast-clock';
+import { cosineWeights, intervalCosines, rankCosines } from './cosine-weights';
 import { contrastIntervalReason, fitIntervalReason } from './interval-reasons';
 import { type Persistence, persistenceOf } from './persistence';
 import { singleContrastError } from './single-contrast';
@@ -22,7 +23,7 @@ export interface IntervalContext {
   readonly cosines: number;
   /** B of rank sets, pairs and the drift. */
   readonly rankCosines: number;
-  /** Computed when first asked for; null where no contrast of this fit has an interval, for `reason`. */
+  /** By the calendar. Computed when first asked for; null where no contrast of this fit has an interval, for `reason`. */
   readonly forms: CompanyForms | null;
   readonly reason?: string;
 }
@@ -43,11 +44,28 @@ export function intervalContext(fit: WithinFit, confidence: number): IntervalCon
     reason,
     get forms() {
       if (reason === undefined) {
-        forms ??= companyForms(fit, persistence.used, Math.max(cosines, forRanks));
+        const weights = cosineWeights(calendar(years), Math.max(cosines, forRanks));
+        forms ??= companyForms(fit, persistence.used, weights);
       }
       return forms;
     },
   };
+}
+
+/**
+ * Forms of all contrasts that weigh the same companies in the same proportions as this one, and whatever else by its
+ * clock; B with them.
+ */
+export function formsFor(
+  context: IntervalContext,
+  contrast: Contrast,
+): { readonly forms: CompanyForms | null; readonly cosines: number } {
+  const { fit, persistence, cosines } = context;
+  if (context.reason !== undefined || ownClock(fit.sample, contrast) === null) {
+    return { forms: context.forms, cosines };
+  }
+  const weights = contrastCosines(fit.sample, contrast, cosines);
+  return { forms: companyForms(fit, persistence.used, weights), cosines: weights.length };
 }
 
 /** Standard error of one contrast among many with B cosines, or why it has none. */
@@ -60,16 +78,26 @@ export function contrastError(
   if (context.forms === null || reason !== undefined) {
     return { standardError: null, calibration: null, reason: reason ?? noCalibrationReason };
   }
-  return calibratedError(context.forms, contrast, cosines);
+  return ownClock(context.fit.sample, contrast) === null
+    ? calibratedError(context.forms, contrast, cosines)
+    : errorThroughRows(context, contrast, cosines);
 }
 
 /** Standard error of a contrast that stands alone, straight through the rows, or why it has none. */
 export function aloneError(context: IntervalContext, contrast: Contrast): CalibratedError {
-  const { fit, persistence, cosines } = context;
-  const reason = context.reason ?? contrastIntervalReason(fit, contrast);
+  const reason = context.reason ?? contrastIntervalReason(context.fit, contrast);
   return reason === undefined
-    ? singleContrastError(fit, contrast, persistence.used, cosines)
+    ? errorThroughRows(context, contrast, context.cosines)
     : { standardError: null, calibration: null, reason };
+}
+
+function errorThroughRows(
+  { fit, persistence }: IntervalContext,
+  contrast: Contrast,
+  cosines: number,
+): CalibratedError {
+  const weights = contrastCosines(fit.sample, contrast, cosines);
+  return singleContrastError(fit, contrast, persistence.used, weights);
 }
 
 /** Interval of a contrast with B cosines, or why it has none. */
@@ -80,7 +108,5 @@ export function contrastInterval(
   cosines: number,
 ): IntervalEstimate {
   const error = contrastError(context, contrast, cosines);
-  return error.standardError === null
-    ? withoutInterval(estimate, error.reason)
-    : calibratedInterval(estimate, error, { cosines, confidence: context.confidence });
+  return calibratedInterval(estimate, error, context.confidence);
 }

@@ -2,23 +2,22 @@ import type { WithinFit } from '../regression/within-fit';
 import { type CalibratedError, errorFrom } from './calibrated-interval';
 import type { Contrast } from './contrast';
 import { correlatedSquare } from './correlation-product';
-import { cosineWeights } from './cosine-weights';
 
 /**
  * The calibrated standard error of one contrast straight through the rows: for a fit of which nothing else is asked
  * it costs n·B·P operations and n numbers, where the forms of every contrast (`companyForms`) cost n·B·P².
  *
  * @param persistence  ρ_i, one a company.
- * @param cosines  B.
+ * @param weights  B cosines over the sample's years.
  */
 export function singleContrastError(
   fit: WithinFit,
   contrast: Contrast,
   persistence: Float64Array,
-  cosines: number,
+  weights: readonly Float64Array[],
 ): CalibratedError {
   const years = fit.sample.years.length;
-  const weights = cosineWeights(years, cosines);
+  const cosines = weights.length;
   const direct = rowWeights(fit, contrast);
   const { squares, projections } = sumOverRows(fit, direct, weights);
   const { numerator, residualForms } = formsOverCompanies(fit, {
@@ -32,6 +31,7 @@ export function singleContrastError(
     numerator,
     residualForm: residualForms / cosines,
     meanSquare: squares / cosines,
+    cosines,
   });
 }
 

@@ -58,7 +58,7 @@ function unitDecomposition(r: Float64Array, norms: readonly number[]): SingularV
 }
 
 /** Lengths of R's columns, which are those of the columns it was made from; no square leaves a double's range. */
-function columnNorms(r: Float64Array, size: number): number[] {
+export function columnNorms(r: Float64Array, size: number): number[] {
   return Array.from({ length: size }, (_, column) =>
     Math.hypot(...Array.from({ length: column + 1 }, (__, row) => r[row * size + column])),
   );

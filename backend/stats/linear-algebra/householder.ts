@@ -15,20 +15,11 @@ export interface HouseholderFactors {
  * Factors a tall matrix.
  *
  * @param columns  K columns of n rows, n ≥ K; left unchanged.
- * @param divisors  K powers of two that the columns are divided by.
  * @returns reflections and R; cost 2nK² operations, n·K numbers of memory.
  */
-export function householderQr(
-  columns: readonly Float64Array[],
-  divisors: readonly number[],
-): HouseholderFactors {
+export function householderQr(columns: readonly Float64Array[]): HouseholderFactors {
   const size = columns.length;
-  const work = columns.map((column, k) => {
-    const factor = 1 / divisors[k];
-    const scaled = new Float64Array(column.length);
-    for (let row = 0; row < column.length; row += 1) scaled[row] = column[row] * factor;
-    return scaled;
-  });
+  const work = columns.map((column) => column.slice());
   const scales = new Float64Array(size);
   const r = new Float64Array(size * size);
   for (let k = 0; k < size; k += 1) {

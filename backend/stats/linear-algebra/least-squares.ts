@@ -1,4 +1,5 @@
-import { conditionNumber } from './column-rank';
+import { blockedQr } from './blocked-qr';
+import { columnNorms, conditionNumber } from './column-rank';
 import { DoubleDouble } from './double-double';
 import {
   applyQ,
@@ -7,27 +8,32 @@ import {
   householderQr,
   orthonormalColumns,
 } from './householder';
+import { addOverRows, productOverRows } from './row-range';
+import { dot, transpose } from './square-matrix';
 import { invertUpper, solveUpper, solveUpperTransposed } from './triangular';
 
 /** The least squares solution of n equations in K unknowns, with the factors that everything else is built from. */
 export interface LeastSquares {
   readonly coefficients: Float64Array;
   readonly residuals: Float64Array;
+  /** Σ residuals². */
+  readonly residualSquares: number;
   /** Orthonormal basis of the columns' span, K columns of n rows: columns = basis · R. */
   readonly basis: readonly Float64Array[];
   /** R of the columns as given, K × K, row-major. */
   readonly r: Float64Array;
 }
 
-/** Columns factored once: their rank is read off R, any number of outcomes is solved for. */
+/** Columns and an outcome, factored once: the columns' rank is read off R before the solution is asked for. */
 export interface FactoredColumns {
   readonly columns: readonly Float64Array[];
-  /** Powers of two that the columns are divided by: that changes no digit. */
-  readonly scales: readonly number[];
-  /** Of the scaled columns. */
-  readonly factors: HouseholderFactors;
-  /** R of the columns as given, K × K, row-major. */
+  readonly outcome: Float64Array;
+  /** R of the columns, K × K, row-major. */
   readonly r: Float64Array;
+  /** The first K numbers of Q'y. */
+  readonly head: Float64Array;
+  /** Σ residuals², up to the rounding of y. */
+  readonly restSquares: number;
 }
 
 const refinementSteps = 3;
@@ -38,17 +44,22 @@ const easyConditionNumber = 1e3;
 /** A residual below this share of the outcome's squares is mostly rounding unless it is refined. */
 const easyResidualShare = 1e-12;
 
-/** @param columns  K columns of n rows, n ≥ K; left unchanged, and kept. */
-export function factorColumns(columns: readonly Float64Array[]): FactoredColumns {
+/** So many rows of every column are worked on at a time, while they are near. */
+const blockRows = 512;
+
+/**
+ * @param columns  K columns of n rows, n ≥ K; left unchanged, and kept.
+ * @param outcome  length n; left unchanged, and kept.
+ */
+export function factorColumns(
+  columns: readonly Float64Array[],
+  outcome: Float64Array,
+): FactoredColumns {
+  const plain = blockedQr(columns, outcome);
+  if (areInRange(plain.r, columns.length)) return { columns, outcome, ...plain };
   const scales = columns.map(powerOfTwoNearNorm);
-  const factors = householderQr(columns, scales);
-  const size = columns.length;
-  return {
-    columns,
-    scales,
-    factors,
-    r: factors.r.map((value, index) => value * scales[index % size]),
-  };
+  const scaled = blockedQr(divided(columns, scales), outcome);
+  return { columns, outcome, ...scaled, r: timesScales(scaled.r, scales) };
 }
 
 /**
@@ -56,18 +67,10 @@ export function factorColumns(columns: readonly Float64Array[]): FactoredColumns
  * to nothing refines coefficients and residuals on the augmented system with residuals in twice the precision.
  *
  * @param factored  linearly independent columns: their rank is the caller's to check.
- * @param outcome  length n; left unchanged.
  * @see Golub & Van Loan (2013), Matrix Computations, 4th ed., §5.3; Björck (1967), BIT 7, 257–278.
  */
-export function solveLeastSquares(factored: FactoredColumns, outcome: Float64Array): LeastSquares {
-  const { columns, factors, r } = factored;
-  const easy = isEasy(factored) ? solveOnce(factored, outcome) : null;
-  const solution = easy ?? refine(factored, outcome);
-  return {
-    ...solution,
-    basis: easy === null ? orthonormalColumns(factors, outcome.length) : easyBasis(columns, r),
-    r,
-  };
+export function solveLeastSquares(factored: FactoredColumns): LeastSquares {
+  return isEasy(factored) ? solveOnce(factored) : solveRefined(factored);
 }
 
 /** Factors and solves at once; arguments as for the two steps. */
@@ -75,64 +78,59 @@ export function leastSquares(
   columns: readonly Float64Array[],
   outcome: Float64Array,
 ): LeastSquares {
-  return solveLeastSquares(factorColumns(columns), outcome);
+  return solveLeastSquares(factorColumns(columns, outcome));
 }
 
-interface Solution {
-  readonly coefficients: Float64Array;
-  readonly residuals: Float64Array;
+function isEasy({ r, head, restSquares }: FactoredColumns): boolean {
+  const totalSquares = restSquares + dot(head, head);
+  return (
+    restSquares > easyResidualShare * totalSquares && conditionNumber(r) <= easyConditionNumber
+  );
 }
 
-function isEasy({ factors }: FactoredColumns): boolean {
-  return conditionNumber(factors.r) <= easyConditionNumber;
-}
-
-/** Null where the residuals are too small to be had without refinement. */
-function solveOnce(
-  { columns, scales, factors }: FactoredColumns,
-  outcome: Float64Array,
-): Solution | null {
-  const turned = Float64Array.from(outcome);
-  applyTransposedQ(factors, turned);
-  const solution = solveUpper(factors.r, turned.subarray(0, columns.length));
-  const coefficients = solution.map((value, k) => value / scales[k]);
-  const residuals = turned;
-  residuals.set(outcome);
-  columns.forEach((column, k) => {
-    const coefficient = coefficients[k];
-    for (let row = 0; row < column.length; row += 1) residuals[row] -= coefficient * column[row];
-  });
-  let rest = 0;
-  let total = 0;
-  for (let row = 0; row < outcome.length; row += 1) {
-    rest += residuals[row] * residuals[row];
-    total += outcome[row] * outcome[row];
-  }
-  return rest > easyResidualShare * total ? { coefficients, residuals } : null;
-}
-
-/** X·R⁻¹: orthonormal to about the condition number times the rounding of a double. */
-function easyBasis(columns: readonly Float64Array[], r: Float64Array): Float64Array[] {
+/** Residuals y − X·b, and the basis X·R⁻¹: orthonormal to about the condition number times the rounding of a double. */
+function solveOnce({ columns, outcome, r, head }: FactoredColumns): LeastSquares {
   const size = columns.length;
-  const inverse = invertUpper(r, size);
-  return columns.map((own, k) => {
-    const factor = inverse[k * size + k];
-    const result = new Float64Array(own.length);
-    for (let row = 0; row < own.length; row += 1) result[row] = factor * own[row];
-    for (let l = 0; l < k; l += 1) {
-      const share = inverse[l * size + k];
-      const column = columns[l];
-      for (let row = 0; row < column.length; row += 1) result[row] += share * column[row];
+  const coefficients = solveUpper(r, head);
+  const inverse = transpose(invertUpper(r, size), size);
+  const residuals = outcome.slice();
+  const basis = columns.map((column) => new Float64Array(column.length));
+  const taken = coefficients.map((value) => -value);
+  const spans = basis.map((_, k) => ({
+    columns: columns.slice(0, k + 1),
+    weights: inverse.subarray(k * size, k * size + k + 1),
+  }));
+  let residualSquares = 0;
+  for (let from = 0; from < outcome.length; from += blockRows) {
+    const rows = { from, to: Math.min(outcome.length, from + blockRows) };
+    addOverRows(residuals, columns, taken, rows);
+    residualSquares += productOverRows(residuals, residuals, rows);
+    for (let k = 0; k < size; k += 1) {
+      addOverRows(basis[k], spans[k].columns, spans[k].weights, rows);
     }
-    return result;
-  });
+  }
+  return { coefficients, residuals, residualSquares, basis, r };
+}
+
+function solveRefined({ columns, outcome }: FactoredColumns): LeastSquares {
+  const scales = columns.map(powerOfTwoNearNorm);
+  const scaled = divided(columns, scales);
+  const factors = householderQr(scaled);
+  const { coefficients, residuals } = refine(scaled, factors, outcome);
+  return {
+    coefficients: coefficients.map((value, k) => value / scales[k]),
+    residuals,
+    residualSquares: productOverRows(residuals, residuals, { from: 0, to: residuals.length }),
+    basis: orthonormalColumns(factors, outcome.length),
+    r: timesScales(factors.r, scales),
+  };
 }
 
 function refine(
-  { columns: raw, scales, factors }: FactoredColumns,
+  columns: readonly Float64Array[],
+  factors: HouseholderFactors,
   outcome: Float64Array,
-): Solution {
-  const columns = raw.map((column, k) => column.map((value) => value / scales[k]));
+): Pick<LeastSquares, 'coefficients' | 'residuals'> {
   const size = columns.length;
   const coefficients = new Float64Array(size);
   const residuals = new Float64Array(outcome.length);
@@ -153,7 +151,7 @@ function refine(
     rowGap = rowResidual(columns, outcome, coefficients, residuals);
     columnGap = columnResidual(columns, residuals);
   }
-  return { coefficients: coefficients.map((value, k) => value / scales[k]), residuals };
+  return { coefficients, residuals };
 }
 
 /** y − r − X·b, in twice the precision before its last rounding. */
@@ -185,6 +183,11 @@ function columnResidual(
   });
 }
 
+/** Whether squares of the columns, whose lengths are those of R's, are far from the ends of a double's range. */
+function areInRange(r: Float64Array, size: number): boolean {
+  return columnNorms(r, size).every((norm) => norm > 1e-100 && norm < 1e100);
+}
+
 /** Scaling by a power of two changes no digit. */
 function powerOfTwoNearNorm(column: Float64Array): number {
   let largest = 0;
@@ -193,4 +196,13 @@ function powerOfTwoNearNorm(column: Float64Array): number {
     if (size > largest) largest = size;
   }
   return largest > 0 ? 2 ** Math.round(Math.log2(largest * Math.sqrt(column.length))) : 1;
+}
+
+function divided(columns: readonly Float64Array[], scales: readonly number[]): Float64Array[] {
+  return columns.map((column, k) => column.map((value) => value / scales[k]));
+}
+
+/** R of the columns as given from that of the scaled ones. */
+function timesScales(r: Float64Array, scales: readonly number[]): Float64Array {
+  return r.map((value, index) => value * scales[index % scales.length]);
 }

@@ -10,9 +10,11 @@ const smallestMagnitude = 1e-60;
 /**
  * Refuses columns that do not fit together, numbers that are infinite or too large, and columns of numbers that are all
  * too small. A column of zeros is not refused here: it never varies, which the design says.
+ *
+ * @returns whether a cell of outcome or regressors is missing.
  * @throws {StatsError} 'shape', or 'non-finite' with every place or column.
  */
-export function checkColumns(data: PanelColumns): void {
+export function checkColumns(data: PanelColumns): { readonly hasMissing: boolean } {
   const rows = data.company.length;
   const columns = [data.outcome, ...data.regressors];
   if (data.regressors.length === 0) {
@@ -31,9 +33,11 @@ export function checkColumns(data: PanelColumns): void {
   if (!areCodes(data.company, data.companies.length)) {
     throw new StatsError('shape', 'expected company codes to point into the list of companies');
   }
-  const largest = columns.map(({ values }) => largestOf(values));
-  if (largest.some((size) => size > largestMagnitude)) refuseTooLarge(data);
-  refuseTooSmall(columns.filter((_, k) => largest[k] > 0 && largest[k] < smallestMagnitude));
+  const extents = columns.map(({ values }) => extentOf(values));
+  if (extents.some(({ largest }) => largest > largestMagnitude)) refuseTooLarge(data);
+  const isTooSmall = ({ largest }: Extent): boolean => largest > 0 && largest < smallestMagnitude;
+  refuseTooSmall(columns.filter((_, k) => isTooSmall(extents[k])));
+  return { hasMissing: extents.some(({ hasMissing }) => hasMissing) };
 }
 
 function areCodes(codes: Int32Array, count: number): boolean {
@@ -82,12 +86,19 @@ function refuseTooSmall(columns: readonly NamedColumn[]): void {
   );
 }
 
-/** The largest magnitude; missing cells are none. */
-function largestOf(values: Float64Array): number {
+interface Extent {
+  /** The largest magnitude; missing cells are none. */
+  readonly largest: number;
+  readonly hasMissing: boolean;
+}
+
+function extentOf(values: Float64Array): Extent {
   let largest = 0;
+  let hasMissing = false;
   for (let row = 0; row < values.length; row += 1) {
     const size = Math.abs(values[row]);
     if (size > largest) largest = size;
+    else if (Number.isNaN(size)) hasMissing = true;
   }
-  return largest;
+  return { largest, hasMissing };
 }

@@ -5,31 +5,32 @@ import { type RowPlace, StatsError } from '../stats-error';
 export interface ModelColumns {
   readonly outcome: Float64Array;
   readonly regressors: readonly Float64Array[];
-  /** Row of the panel that each row's regressors come from; −1 where there is none. */
-  readonly source: Int32Array;
+  /** Row of the panel that each row's regressors come from, −1 where there is none; null where it is the row itself. */
+  readonly source: Int32Array | null;
 }
 
 /**
  * Replaces every regressor by its value one calendar year earlier of the same company; a gap gives missing.
  *
  * @param rows  rows of the members, sorted by company and year.
+ * @param place  of each company code, the same for codes of one company.
  */
 export function modelColumns(
   data: PanelColumns,
-  rows: Int32Array,
+  { rows, place }: { readonly rows: Int32Array; readonly place: Int32Array },
   lag: Specification['lag'],
 ): ModelColumns {
   const outcome = data.outcome.values;
-  const source = new Int32Array(outcome.length).fill(-1);
   if (lag === 0) {
-    for (let row = 0; row < source.length; row += 1) source[row] = row;
-    return { outcome, regressors: data.regressors.map(({ values }) => values), source };
+    return { outcome, regressors: data.regressors.map(({ values }) => values), source: null };
   }
+  const { company, year } = data;
+  const source = new Int32Array(outcome.length).fill(-1);
   for (let index = 1; index < rows.length; index += 1) {
     const before = rows[index - 1];
     const row = rows[index];
-    const isSame = data.companies[data.company[before]] === data.companies[data.company[row]];
-    if (isSame && data.year[row] - data.year[before] === 1) source[row] = before;
+    const isSame = place[company[before]] === place[company[row]];
+    if (isSame && year[row] - year[before] === 1) source[row] = before;
   }
   const regressors = data.regressors.map(({ values }) =>
     Float64Array.from(source, (from) => (from === -1 ? NaN : values[from])),
@@ -55,7 +56,7 @@ export function refuseNotPositive(
   for (const row of rows) {
     if (!(columns.outcome[row] > 0)) note(row, data.outcome.name);
     columns.regressors.forEach((values, k) => {
-      if (!(values[row] > 0)) note(columns.source[row], data.regressors[k].name);
+      if (!(values[row] > 0)) note(columns.source?.[row] ?? row, data.regressors[k].name);
     });
   }
   if (places.size === 0) return;

@@ -1,10 +1,11 @@
 import type { DroppedRow, PanelColumns, Specification } from '../fit-result';
-import { type RowPlace, StatsError } from '../stats-error';
+import { StatsError } from '../stats-error';
+import { type AskedCompanies, askedCompanies } from './asked-companies';
 import { checkColumns } from './check-columns';
 import { type ModelColumns, modelColumns, refuseNotPositive } from './model-columns';
 import type { PanelSample, SingleRow } from './panel-sample';
-import { memberNames, sortedRows } from './sorted-rows';
-import { positionsOf, yearsOf } from './year-positions';
+import { sortedRows } from './sorted-rows';
+import { yearPositions } from './year-positions';
 
 /** How a specification changes the columns before anything is estimated. */
 export type ColumnForm = Pick<Specification, 'form' | 'lag'>;
@@ -27,14 +28,14 @@ export function selectSample(
   members: readonly string[] | undefined,
   { form, lag }: ColumnForm = { form: 'levels', lag: 0 },
 ): PanelSample {
-  checkColumns(data);
-  const asked = memberNames(data, own, members);
+  const { hasMissing } = checkColumns(data);
+  const asked = askedCompanies(data, own, members);
   const rows = sortedRows(data, asked);
-  refuseDuplicates(data, rows);
-  const columns = modelColumns(data, rows, lag);
-  const { complete, dropped } = splitComplete(data, columns, rows);
+  const columns = modelColumns(data, { rows, place: asked.place }, lag);
+  const { complete, dropped } =
+    hasMissing || lag > 0 ? splitComplete(data, columns, rows) : { complete: rows, dropped: [] };
   if (form === 'log') refuseNotPositive(data, columns, complete);
-  const { kept, starts, singles } = groupByCompany(data, complete);
+  const { kept, starts, singles } = groupByCompany(data, asked, complete);
   if (starts.length < 3) {
     const found = starts.length - 1;
     throw new StatsError(
@@ -47,34 +48,12 @@ export function selectSample(
     ...gather(data, columns, { rows: kept, starts, form }),
     singles: singles.map((row) => singleRow(data, columns, { row, form })),
     dropped,
-    members: asked,
+    members: asked.names,
   };
 }
 
 function nameOf(data: PanelColumns, row: number): string {
   return data.companies[data.company[row]];
-}
-
-function refuseDuplicates(data: PanelColumns, rows: Int32Array): void {
-  const places = new Set<number>();
-  for (let index = 1; index < rows.length; index += 1) {
-    const before = rows[index - 1];
-    const row = rows[index];
-    if (data.year[before] === data.year[row] && nameOf(data, before) === nameOf(data, row)) {
-      places.add(before).add(row);
-    }
-  }
-  if (places.size === 0) return;
-  const list = [...places].map((row): RowPlace => ({
-    row: data.fileRow[row],
-    company: nameOf(data, row),
-    year: data.year[row],
-  }));
-  throw new StatsError(
-    'duplicate-rows',
-    `expected one row a company and year; found ${list.length} rows that share theirs with another`,
-    { rows: list, companies: [...new Set(list.flatMap(({ company }) => company ?? []))] },
-  );
 }
 
 /** Rows with every value, and what the others lack. */
@@ -110,27 +89,30 @@ interface Groups {
   readonly singles: readonly number[];
 }
 
-function groupByCompany(data: PanelColumns, rows: Int32Array): Groups {
-  const kept = new Int32Array(rows.length);
+function groupByCompany(
+  { company }: PanelColumns,
+  { place }: AskedCompanies,
+  rows: Int32Array,
+): Groups {
   const starts = [0];
   const singles: number[] = [];
+  let kept = rows;
   let count = 0;
   for (let from = 0; from < rows.length;) {
-    const code = data.company[rows[from]];
-    const name = data.companies[code];
-    const isSame = (row: number): boolean =>
-      data.company[row] === code || nameOf(data, row) === name;
+    const own = place[company[rows[from]]];
     let to = from + 1;
-    while (to < rows.length && isSame(rows[to])) to += 1;
-    if (to - from === 1) singles.push(rows[from]);
-    else {
-      kept.set(rows.subarray(from, to), count);
+    while (to < rows.length && place[company[rows[to]]] === own) to += 1;
+    if (to - from === 1) {
+      if (singles.length === 0) kept = rows.slice();
+      singles.push(rows[from]);
+    } else {
+      if (singles.length > 0) kept.copyWithin(count, from, to);
       count += to - from;
       starts.push(count);
     }
     from = to;
   }
-  return { kept: kept.slice(0, count), starts: Int32Array.from(starts), singles };
+  return { kept: kept.subarray(0, count), starts: Int32Array.from(starts), singles };
 }
 
 function gather(
@@ -138,15 +120,16 @@ function gather(
   columns: ModelColumns,
   { rows, starts, form }: SampleRows,
 ): Omit<PanelSample, 'singles' | 'dropped' | 'members'> {
-  const year = pickWhole(data.year, rows);
-  const years = yearsOf(year);
+  const areAllRows = areAll(rows, data.company.length);
+  const year = areAllRows ? data.year : pickWhole(data.year, rows);
+  const { years, position } = yearPositions(year, starts);
   if (years.length > mostYears) {
     throw new StatsError(
       'too-many-years',
       `expected at most ${mostYears} different fiscal years; found ${years.length}: is this the year's column?`,
     );
   }
-  const taken = areAll(rows, data.company.length)
+  const taken = areAllRows
     ? (values: Float64Array): Float64Array => values
     : (values: Float64Array): Float64Array => pick(values, rows);
   const levels = {
@@ -154,20 +137,26 @@ function gather(
     regressors: columns.regressors.map(taken),
   };
   return {
-    companies: Array.from({ length: starts.length - 1 }, (_, company) =>
-      nameOf(data, rows[starts[company]]),
-    ),
+    companies: companiesOf(data, rows, starts),
     starts,
     year,
-    position: positionsOf(year, years),
+    position,
     years,
     outcome: inForm(levels.outcome, form),
     regressors: levels.regressors.map((values) => inForm(values, form)),
     levels,
-    fileRow: pickWhole(data.fileRow, rows),
+    fileRow: areAllRows ? data.fileRow : pickWhole(data.fileRow, rows),
     outcomeName: data.outcome.name,
     regressorNames: data.regressors.map(({ name }) => name),
   };
+}
+
+function companiesOf(data: PanelColumns, rows: Int32Array, starts: Int32Array): string[] {
+  const names: string[] = [];
+  for (let index = 0; index < starts.length - 1; index += 1) {
+    names.push(nameOf(data, rows[starts[index]]));
+  }
+  return names;
 }
 
 interface SampleRows {

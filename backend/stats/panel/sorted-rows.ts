@@ -1,76 +1,61 @@
 import type { PanelColumns } from '../fit-result';
-import { StatsError } from '../stats-error';
+import { type RowPlace, StatsError } from '../stats-error';
+import type { AskedCompanies } from './asked-companies';
 
 /**
- * Everyone who is asked for, sorted by name.
+ * Rows of the companies that are asked for, by name, year and line of the file; those of a sorted panel are only picked.
  *
- * @throws {StatsError} 'unknown-company' for a name without a row.
+ * @throws {StatsError} 'duplicate-rows' with every row that shares company and year with another.
  */
-export function memberNames(
-  data: PanelColumns,
-  own: string | null,
-  members: readonly string[] | undefined,
-): string[] {
-  const isPresent = new Uint8Array(data.companies.length);
-  for (let row = 0; row < data.company.length; row += 1) isPresent[data.company[row]] = 1;
-  const present = new Set(data.companies.filter((_, code) => isPresent[code] === 1));
-  const names = new Set(members ?? present);
-  if (own !== null) names.add(own);
-  const unknown = [...names].filter((name) => !present.has(name));
-  if (unknown.length > 0) {
-    throw new StatsError(
-      'unknown-company',
-      `expected rows with a year in the panel for every company; found none for ${unknown.join(', ')}`,
-      { companies: unknown },
-    );
-  }
-  return [...names].sort(byCodeUnit);
-}
-
-/** Rows of the members by company name, year and line of the file; those of a sorted panel are only picked. */
-export function sortedRows(data: PanelColumns, members: readonly string[]): Int32Array {
-  const place = companyPlaces(data);
-  const wanted = new Set(members);
-  const isMember = data.companies.map((name) => wanted.has(name));
-  const rows = new Int32Array(data.company.length);
+export function sortedRows(data: PanelColumns, { isAsked, place }: AskedCompanies): Int32Array {
+  const { company, year, fileRow } = data;
+  const picked = new Int32Array(company.length);
   let count = 0;
-  for (let row = 0; row < rows.length; row += 1) {
-    if (isMember[data.company[row]]) rows[count++] = row;
+  let isAscending = true;
+  let placeBefore = -1;
+  let yearBefore = 0;
+  for (let row = 0; row < company.length; row += 1) {
+    const code = company[row];
+    if (isAsked[code] === 0) continue;
+    const own = place[code];
+    if (own < placeBefore || (own === placeBefore && year[row] <= yearBefore)) isAscending = false;
+    placeBefore = own;
+    yearBefore = year[row];
+    picked[count++] = row;
   }
-  const picked = rows.slice(0, count);
-  const order = (left: number, right: number): number =>
-    place[data.company[left]] - place[data.company[right]] ||
-    data.year[left] - data.year[right] ||
-    data.fileRow[left] - data.fileRow[right];
-  let isSorted = true;
-  for (let index = 1; isSorted && index < count; index += 1) {
-    const before = picked[index - 1];
-    const row = picked[index];
-    isSorted =
-      data.company[before] === data.company[row]
-        ? data.year[before] < data.year[row]
-        : order(before, row) < 0;
-  }
-  return isSorted ? picked : picked.sort(order);
+  const rows = count === picked.length ? picked : picked.slice(0, count);
+  // Ascending without a tie: sorted, and no row shares company and year with another.
+  if (isAscending) return rows;
+  rows.sort(
+    (left, right) =>
+      place[company[left]] - place[company[right]] ||
+      year[left] - year[right] ||
+      fileRow[left] - fileRow[right],
+  );
+  refuseDuplicates(data, place, rows);
+  return rows;
 }
 
-/** Place of each company code in the order of names; codes of the same name share theirs. */
-function companyPlaces(data: PanelColumns): Int32Array {
-  const { companies } = data;
-  const order = Int32Array.from(companies, (_, code) => code);
-  if (companies.some((name, code) => code > 0 && companies[code - 1] > name)) {
-    order.sort((left, right) => byCodeUnit(companies[left], companies[right]) || left - right);
+/** @param rows  sorted by company and year. */
+function refuseDuplicates(data: PanelColumns, place: Int32Array, rows: Int32Array): void {
+  const { company, year } = data;
+  const shared = new Set<number>();
+  for (let index = 1; index < rows.length; index += 1) {
+    const before = rows[index - 1];
+    const row = rows[index];
+    if (year[before] === year[row] && place[company[before]] === place[company[row]]) {
+      shared.add(before).add(row);
+    }
   }
-  const place = new Int32Array(companies.length);
-  order.forEach((code, index) => {
-    const isSame = index > 0 && companies[order[index - 1]] === companies[code];
-    place[code] = isSame ? place[order[index - 1]] : index;
-  });
-  return place;
-}
-
-/** The same order on every machine, whatever its language. */
-function byCodeUnit(left: string, right: string): number {
-  if (left === right) return 0;
-  return left < right ? -1 : 1;
+  if (shared.size === 0) return;
+  const list = [...shared].map((row): RowPlace => ({
+    row: data.fileRow[row],
+    company: data.companies[company[row]],
+    year: year[row],
+  }));
+  throw new StatsError(
+    'duplicate-rows',
+    `expected one row a company and year; found ${list.length} rows that share theirs with another`,
+    { rows: list, companies: [...new Set(list.flatMap(({ company: name }) => name ?? []))] },
+  );
 }

@@ -8,6 +8,10 @@ export interface WithinColumn {
   readonly meansTotal: number;
   /** Mean over all rows minus `origin`. */
   readonly grandMean: number;
+  /** Σ of the squares of `values`. */
+  readonly squares: number;
+  /** Σ of the squares of the column as it was. */
+  readonly rawSquares: number;
 }
 
 /**
@@ -25,24 +29,33 @@ export function withinTransform(column: Float64Array, starts: Int32Array): Withi
   const origin = column[0];
   let meansTotal = 0;
   let total = 0;
+  let squares = 0;
+  let rawSquares = 0;
   for (let company = 0; company < companies; company += 1) {
     const from = starts[company];
     const to = starts[company + 1];
     const first = column[from];
-    for (let row = from; row < to; row += 1) values[row] = column[row] - first;
-    const offset = removeMean(values, from, to) + removeMean(values, from, to);
-    means[company] = first - origin + offset;
+    let sum = 0;
+    for (let row = from; row < to; row += 1) {
+      const raw = column[row];
+      values[row] = raw - first;
+      sum += raw - first;
+      rawSquares += raw * raw;
+    }
+    const mean = sum / (to - from);
+    let rest = 0;
+    for (let row = from; row < to; row += 1) rest += values[row] - mean;
+    // The mean of what is left: the rounding of the first one.
+    const correction = rest / (to - from);
+    for (let row = from; row < to; row += 1) {
+      const value = values[row] - mean - correction;
+      values[row] = value;
+      squares += value * value;
+    }
+    means[company] = first - origin + (mean + correction);
     meansTotal += means[company];
     total += (to - from) * means[company];
   }
-  return { values, origin, means, meansTotal, grandMean: total / column.length };
-}
-
-/** Subtracts the mean of a stretch of rows and returns it; a second call mends the first one's rounding. */
-function removeMean(values: Float64Array, from: number, to: number): number {
-  let sum = 0;
-  for (let row = from; row < to; row += 1) sum += values[row];
-  const mean = sum / (to - from);
-  for (let row = from; row < to; row += 1) values[row] -= mean;
-  return mean;
+  const grandMean = total / column.length;
+  return { values, origin, means, meansTotal, grandMean, squares, rawSquares };
 }

@@ -1,32 +1,41 @@
 /** Years within this span of each other are marked in a table, which is quicker than a set. */
 const widestTable = 10_000;
 
-/** The different years, ascending. */
-export function yearsOf(year: Int32Array): number[] {
-  let first = Infinity;
-  let last = -Infinity;
-  for (let row = 0; row < year.length; row += 1) {
-    if (year[row] < first) first = year[row];
-    if (year[row] > last) last = year[row];
-  }
-  if (last - first > widestTable) return [...new Set(year)].sort((left, right) => left - right);
-  const isPresent = new Uint8Array(Math.max(0, last - first + 1));
-  for (let row = 0; row < year.length; row += 1) isPresent[year[row] - first] = 1;
-  const years: number[] = [];
-  isPresent.forEach((value, index) => {
-    if (value === 1) years.push(first + index);
-  });
-  return years;
+/** The different years of a sample, and where each row's stands among them. */
+export interface YearPositions {
+  /** Ascending. */
+  readonly years: readonly number[];
+  /** One a row, 0 … years − 1. */
+  readonly position: Int32Array;
 }
 
-/** Position of each row's year among the different years; mostly it is the one after that of the row before. */
-export function positionsOf(year: Int32Array, years: readonly number[]): Int32Array {
-  const places = new Map(years.map((value, position) => [value, position]));
-  const positions = new Int32Array(year.length);
-  let position = 0;
-  for (let row = 0; row < year.length; row += 1) {
-    position = years[position + 1] === year[row] ? position + 1 : (places.get(year[row]) ?? 0);
-    positions[row] = position;
+/** @param starts  company i holds rows starts[i] … starts[i + 1] − 1, years ascending. */
+export function yearPositions(year: Int32Array, starts: Int32Array): YearPositions {
+  let first = Infinity;
+  let last = -Infinity;
+  for (let company = 1; company < starts.length; company += 1) {
+    first = Math.min(first, year[starts[company - 1]]);
+    last = Math.max(last, year[starts[company] - 1]);
   }
-  return positions;
+  return last - first > widestTable ? sortedPositions(year) : tabledPositions(year, first, last);
+}
+
+function tabledPositions(year: Int32Array, first: number, last: number): YearPositions {
+  const table = new Int32Array(last - first + 1);
+  for (let row = 0; row < year.length; row += 1) table[year[row] - first] = 1;
+  const years: number[] = [];
+  table.forEach((isPresent, index) => {
+    if (isPresent === 0) return;
+    table[index] = years.length;
+    years.push(first + index);
+  });
+  const position = new Int32Array(year.length);
+  for (let row = 0; row < year.length; row += 1) position[row] = table[year[row] - first];
+  return { years, position };
+}
+
+function sortedPositions(year: Int32Array): YearPositions {
+  const years = [...new Set(year)].sort((left, right) => left - right);
+  const places = new Map(years.map((value, position) => [value, position]));
+  return { years, position: year.map((value) => places.get(value) ?? 0) };
 }

@@ -18,7 +18,7 @@ export type { FiellerRange } from './fieller';
 export { type IntervalEstimate, symmetricInterval, withoutInterval } from './interval-estimate';
 export { type BandOutlook, type MarketValueBand, marketValueBand } from './market-value-band';
 export { inModelScale, unreadableReason } from './model-scale';
-export { asFactor, type OutOfLogs, outOfLogs } from './out-of-logs';
+export { asFactor, heldNumber, type OutOfLogs, outOfLogs } from './out-of-logs';
 export {
   carryingReason,
   type Outlook,

@@ -9,6 +9,7 @@ import {
   sha256,
 } from '../testing/golden-panels';
 import { randomNumbers, randomPanelNames } from '../testing/random-panels';
+import { unspeakable } from '../testing/unspeakable';
 import {
   asFactor,
   expectedValue,
@@ -38,13 +39,6 @@ function steepRows(): PanelRow[] {
 
 const data = panelOf(steepRows(), randomPanelNames);
 const steep = fitOf(data, 'C9', { form: 'log' });
-
-/** Every number of a value that JSON would print as null. */
-function unspeakable(value: unknown, path = ''): string[] {
-  if (typeof value === 'number') return Number.isFinite(value) ? [] : [path];
-  if (value === null || typeof value !== 'object') return [];
-  return Object.entries(value).flatMap(([key, entry]) => unspeakable(entry, `${path}.${key}`));
-}
 
 describe('out of logs', () => {
   it('is null with a reason where a double cannot hold it', () => {

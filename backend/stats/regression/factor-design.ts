@@ -3,7 +3,6 @@ import { type FactoredColumns, factorColumns } from '../linear-algebra/least-squ
 import type { PanelSample } from '../panel/panel-sample';
 import type { WithinColumn } from '../panel/within-transform';
 import { StatsError } from '../stats-error';
-import { sumOfSquares } from './sum-of-squares';
 
 /** Variation within companies below this share of a column's size is rounding of its numbers. */
 const variationTolerance = 1e-14;
@@ -17,7 +16,7 @@ export interface DemeanedDesign {
 
 /** The design's one factorisation. */
 export interface FactoredDesign {
-  /** Of the year columns, then the regressors. */
+  /** The year columns, then the regressors, with the outcome. */
   readonly factored: FactoredColumns;
   /** Of the scaled regressors without the effects. */
   readonly conditionNumber: number;
@@ -31,7 +30,7 @@ export interface FactoredDesign {
  */
 export function factorDesign(sample: PanelSample, design: DemeanedDesign): FactoredDesign {
   const { outcome, years, regressors } = design;
-  if (isConstantWithin(sample.outcome, outcome)) {
+  if (isConstantWithin(outcome)) {
     throw new StatsError(
       'outcome-constant',
       `${sample.outcomeName} never varies within a company, so nothing is left to explain`,
@@ -39,7 +38,7 @@ export function factorDesign(sample: PanelSample, design: DemeanedDesign): Facto
     );
   }
   const names = sample.regressorNames;
-  const constant = names.filter((_, k) => isConstantWithin(sample.regressors[k], regressors[k]));
+  const constant = names.filter((_, k) => isConstantWithin(regressors[k]));
   if (constant.length > 0) {
     throw new StatsError(
       'constant-within-companies',
@@ -48,7 +47,8 @@ export function factorDesign(sample: PanelSample, design: DemeanedDesign): Facto
     );
   }
   refuseDegreesOfFreedom(sample, years.length);
-  const factored = factorColumns([...years, ...regressors].map(({ values }) => values));
+  const columns = [...years, ...regressors].map(({ values }) => values);
+  const factored = factorColumns(columns, outcome.values);
   const rank = columnRank(withoutYears(names, factored.r, years.length));
   if (rank.combination === null) return { factored, conditionNumber: rank.conditionNumber };
   const combination = rank.combination.map(({ column, weight }) => ({
@@ -102,8 +102,8 @@ function refuseDegreesOfFreedom(sample: PanelSample, years: number): void {
   );
 }
 
-function isConstantWithin(raw: Float64Array, within: WithinColumn): boolean {
-  return sumOfSquares(within.values) <= variationTolerance ** 2 * sumOfSquares(raw);
+function isConstantWithin({ squares, rawSquares }: WithinColumn): boolean {
+  return squares <= variationTolerance ** 2 * rawSquares;
 }
 
 function inWords(combination: readonly { column: string; weight: number }[]): string {

@@ -24,7 +24,7 @@ export function totalSquares(fit: WithinFit): number {
     const rows = sample.starts[company + 1] - sample.starts[company];
     between += rows * (mean - outcome.grandMean) ** 2;
   });
-  return sumOfSquares(outcome.values) + between;
+  return outcome.squares + between;
 }
 
 export function isPerfectFit(fit: WithinFit): boolean {

@@ -4,7 +4,6 @@ import { invertUpper } from '../linear-algebra/triangular';
 import type { PanelSample } from '../panel/panel-sample';
 import { type WithinColumn, withinTransform } from '../panel/within-transform';
 import { fTest, isPerfectFit } from './goodness';
-import { sumOfSquares } from './sum-of-squares';
 import type { WithinFit } from './within-fit';
 import { yearColumns } from './year-columns';
 
@@ -34,9 +33,9 @@ export function pooledFit(fit: WithinFit): PooledFit {
     regressors.map(({ values }) => values),
     outcome.values,
   );
-  const rest = sumOfSquares(solution.residuals);
+  const rest = solution.residualSquares;
   const restWithYears = fit.yearColumns === 0 ? rest : withYears(sample, outcome, regressors);
-  const total = sumOfSquares(outcome.values);
+  const total = outcome.squares;
   const meanAt = (column: { origin: number; means: Float64Array }): number =>
     column.origin + column.means[0];
   const isPerfect = isPerfectFit(fit);
@@ -72,5 +71,5 @@ function withYears(
   const everyRow = Int32Array.of(0, sample.year.length);
   const years = yearColumns(sample).map((column) => withinTransform(column, everyRow).values);
   const columns = [...years, ...regressors.map(({ values }) => values)];
-  return sumOfSquares(leastSquares(columns, outcome.values).residuals);
+  return leastSquares(columns, outcome.values).residualSquares;
 }

@@ -4,7 +4,6 @@ import { invertUpper } from '../linear-algebra/triangular';
 import type { PanelSample } from '../panel/panel-sample';
 import { type WithinColumn, withinTransform } from '../panel/within-transform';
 import { factorDesign } from './factor-design';
-import { sumOfSquares } from './sum-of-squares';
 import { yearColumns } from './year-columns';
 
 /**
@@ -58,7 +57,7 @@ export function withinFit(sample: PanelSample, effects: Effects): WithinFit {
   const regressors = sample.regressors.map(demeaned);
   const { factored, conditionNumber } = factorDesign(sample, { outcome, years, regressors });
   const columns = [...years, ...regressors];
-  const solution = solveLeastSquares(factored, outcome.values);
+  const solution = solveLeastSquares(factored);
   const { coefficients } = solution;
   return {
     sample,
@@ -73,7 +72,7 @@ export function withinFit(sample: PanelSample, effects: Effects): WithinFit {
     basis: solution.basis,
     r: solution.r,
     inverseR: invertUpper(solution.r, columns.length),
-    residualSquares: sumOfSquares(solution.residuals),
+    residualSquares: solution.residualSquares,
     residualDegreesOfFreedom: sample.year.length - sample.companies.length - columns.length,
     relativeIntercepts: outcome.means.map((mean, company) =>
       columns.reduce((rest, column, k) => rest - column.means[company] * coefficients[k], mean),

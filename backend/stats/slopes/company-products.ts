@@ -1,3 +1,4 @@
+import { productOverRows } from '../linear-algebra/row-range';
 import { dot, type SquareMatrix, times, timesVector } from '../linear-algebra/square-matrix';
 import { type SymmetricPower, symmetricPower } from '../linear-algebra/symmetric-power';
 import type { WithinFit } from '../regression/within-fit';
@@ -14,6 +15,8 @@ export interface CompanyProduct {
   readonly cross: SquareMatrix;
   /** g_i = U_i'e_i. */
   readonly score: Float64Array;
+  /** One number of g_i: on column k of U. */
+  scoreOn(k: number): number;
   /** W_i = (I − S_i)^(−½), pseudo-inverse: A_i·U_i = U_i·W_i with A_i = (I − H_ii)^(−½). */
   readonly adjustment: SquareMatrix;
   /** W_i·W_i·(I − S_i): the projector onto what the other companies determine; null where that is everything. */
@@ -22,40 +25,66 @@ export interface CompanyProduct {
   readonly isDispensable: boolean;
 }
 
-/** Cross-products of every company, cost n·P²; what needs eigenvalues, N·P³, is computed when first asked for. */
+/** Every company's products; those that cost n·P² or, for eigenvalues, N·P³ are computed when first asked for, and once. */
 export function companyProducts(fit: WithinFit): CompanyProduct[] {
-  return fit.sample.companies.map((_, company) => companyProduct(fit, company));
+  const scores = scoresOf(fit);
+  return fit.sample.companies.map((_, company) => new LazyProduct(fit, company, scores));
 }
 
-function companyProduct(fit: WithinFit, company: number): CompanyProduct {
-  const size = fit.basis.length;
-  const from = fit.sample.starts[company];
-  const to = fit.sample.starts[company + 1];
-  const cross = new Float64Array(size * size);
-  const score = new Float64Array(size);
+/** g_i of every company, N × P row-major. */
+function scoresOf({ sample, basis, residuals }: WithinFit): Float64Array {
+  const { starts } = sample;
+  const companies = starts.length - 1;
+  const size = basis.length;
+  const scores = new Float64Array(companies * size);
   for (let k = 0; k < size; k += 1) {
-    const left = fit.basis[k];
-    for (let row = from; row < to; row += 1) score[k] += left[row] * fit.residuals[row];
-    for (let l = 0; l <= k; l += 1) {
-      const right = fit.basis[l];
-      let sum = 0;
-      for (let row = from; row < to; row += 1) sum += left[row] * right[row];
-      cross[k * size + l] = sum;
-      cross[l * size + k] = sum;
+    for (let company = 0; company < companies; company += 1) {
+      const rows = { from: starts[company], to: starts[company + 1] };
+      scores[company * size + k] = productOverRows(basis[k], residuals, rows);
     }
   }
-  return new LazyProduct(cross, score, fit.yearColumns);
+  return scores;
 }
 
-/** Eigenvalues are computed when first asked for, and once. */
+function crossProducts({ sample, basis }: WithinFit, company: number): SquareMatrix {
+  const size = basis.length;
+  const cross = new Float64Array(size * size);
+  const rows = { from: sample.starts[company], to: sample.starts[company + 1] };
+  for (let k = 0; k < size; k += 1) {
+    for (let l = 0; l <= k; l += 1) {
+      const product = productOverRows(basis[k], basis[l], rows);
+      cross[k * size + l] = product;
+      cross[l * size + k] = product;
+    }
+  }
+  return cross;
+}
+
 class LazyProduct implements CompanyProduct {
+  #score: Float64Array | undefined;
+  #cross: SquareMatrix | undefined;
   #power: SymmetricPower | undefined;
 
   constructor(
-    readonly cross: SquareMatrix,
-    readonly score: Float64Array,
-    private readonly yearColumns: number,
+    private readonly fit: WithinFit,
+    private readonly company: number,
+    private readonly scores: Float64Array,
   ) {}
+
+  scoreOn(k: number): number {
+    return this.scores[this.company * this.fit.basis.length + k];
+  }
+
+  get score(): Float64Array {
+    const size = this.#size;
+    this.#score ??= this.scores.subarray(this.company * size, (this.company + 1) * size);
+    return this.#score;
+  }
+
+  get cross(): SquareMatrix {
+    this.#cross ??= crossProducts(this.fit, this.company);
+    return this.#cross;
+  }
 
   get adjustment(): SquareMatrix {
     return this.#adjusted().matrix;
@@ -63,25 +92,29 @@ class LazyProduct implements CompanyProduct {
 
   get determined(): SquareMatrix | null {
     const { matrix, dropped } = this.#adjusted();
-    const size = this.score.length;
+    const size = this.#size;
     return dropped === 0 ? null : times(times(matrix, matrix, size), this.#rest(), size);
   }
 
   get isDispensable(): boolean {
     return (
       this.#adjusted().dropped === 0 ||
-      areSlopesDetermined(this.#rest(), this.score.length, this.yearColumns)
+      areSlopesDetermined(this.#rest(), this.#size, this.fit.yearColumns)
     );
   }
 
+  get #size(): number {
+    return this.fit.basis.length;
+  }
+
   #adjusted(): SymmetricPower {
-    this.#power ??= symmetricPower(this.#rest(), this.score.length, -0.5, eigenvalueFloor);
+    this.#power ??= symmetricPower(this.#rest(), this.#size, -0.5, eigenvalueFloor);
     return this.#power;
   }
 
   /** I − S_i. */
   #rest(): SquareMatrix {
-    const size = this.score.length;
+    const size = this.#size;
     return this.cross.map((value, index) => (index % (size + 1) === 0 ? 1 : 0) - value);
   }
 }

@@ -4,8 +4,10 @@ import type { SlopeGround } from './slope-ground';
 export function companyScores({ fit, products }: SlopeGround): Float64Array {
   const size = fit.slopes.length;
   const scores = new Float64Array(products.length * size);
-  products.forEach(({ score }, company) => {
-    scores.set(score.subarray(fit.yearColumns), company * size);
+  products.forEach((product, company) => {
+    for (let k = 0; k < size; k += 1) {
+      scores[company * size + k] = product.scoreOn(fit.yearColumns + k);
+    }
   });
   return scores;
 }

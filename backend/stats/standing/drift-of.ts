@@ -6,6 +6,8 @@ import type { IntervalContext } from '../intervals/interval-context';
 import { rowsOf } from '../intervals/interval-reasons';
 import { dot } from '../linear-algebra/square-matrix';
 import type { PanelSample } from '../panel/panel-sample';
+import { calendar } from '../intervals/contrast-clock';
+import { cosineWeights } from '../intervals/cosine-weights';
 import { singleContrastError } from '../intervals/single-contrast';
 import { withoutInterval } from '../prediction';
 import { isPerfectFit, perfectFitReason } from '../regression/goodness';
@@ -34,16 +36,17 @@ export function driftOf(context: IntervalContext, own: number): DriftOrReason {
   }
   const augmented = augmentedFit(fit, own);
   if (typeof augmented === 'string') return { drift: null, reason: augmented };
-  const weights = Float64Array.from(augmented.slopes, (_, k) => driftWeight(fit, k));
-  const estimate = dot(weights, augmented.slopes);
+  const slopeWeights = Float64Array.from(augmented.slopes, (_, k) => driftWeight(fit, k));
+  const estimate = dot(slopeWeights, augmented.slopes);
   const reason = context.reason ?? (isPerfectFit(augmented) ? perfectFitReason : undefined);
   if (reason !== undefined)
     return { drift: { ...withoutInterval(estimate, reason), pValue: null } };
-  const contrast = slopeContrast(augmented, weights);
-  const error = singleContrastError(augmented, contrast, context.persistence.used, cosines);
-  const interval = calibratedInterval(estimate, error, { cosines, confidence });
+  const contrast = slopeContrast(augmented, slopeWeights);
+  const weights = cosineWeights(calendar(fit.sample.years.length), cosines);
+  const error = singleContrastError(augmented, contrast, context.persistence.used, weights);
+  const interval = calibratedInterval(estimate, error, confidence);
   const pValue =
-    error.standardError === null ? null : tTwoSided(estimate / error.standardError, cosines);
+    error.standardError === null ? null : tTwoSided(estimate / error.standardError, error.cosines);
   return { drift: { ...interval, pValue } };
 }
 

@@ -1,9 +1,9 @@
 import { tUpperTail } from '../distributions/t-distribution';
 import type { PairComparison } from '../fit-result';
 import { pairContrast } from '../intervals/contrast';
-import { contrastInterval, type IntervalContext } from '../intervals/interval-context';
+import { type CalibratedError, calibratedInterval } from '../intervals/calibrated-interval';
+import { contrastError, type IntervalContext } from '../intervals/interval-context';
 import { fewestRowsForRank, rowsOf } from '../intervals/interval-reasons';
-import type { IntervalEstimate } from '../prediction';
 import { holmRejections } from './holm';
 
 /**
@@ -17,18 +17,19 @@ import { holmRejections } from './holm';
 export function pairComparisons(context: IntervalContext, own: number): PairComparison[] {
   const { fit, rankCosines } = context;
   const peers = fit.sample.companies.map((_, index) => index).filter((index) => index !== own);
-  const pairs = peers.map((peer) => {
-    const estimate = fit.relativeIntercepts[own] - fit.relativeIntercepts[peer];
-    return contrastInterval(context, estimate, pairContrast(fit, own, peer), rankCosines);
-  });
+  const pairs = peers.map((peer) => ({
+    estimate: fit.relativeIntercepts[own] - fit.relativeIntercepts[peer],
+    error: contrastError(context, pairContrast(fit, own, peer), rankCosines),
+  }));
   const ranked = peers.map((peer) => rowsOf(fit, peer) >= fewestRowsForRank);
   const oneSided = pairs
     .filter((_, index) => ranked[index])
-    .flatMap((pair) => oneSidedPValues(pair, rankCosines));
+    .flatMap(({ estimate, error }) => oneSidedPValues(estimate, error));
   const isRejected = holmRejections(oneSided, 1 - context.confidence);
   let place = 0;
-  return pairs.map((pair, index): PairComparison => {
+  return pairs.map(({ estimate, error }, index): PairComparison => {
     const company = fit.sample.companies[peers[index]];
+    const pair = calibratedInterval(estimate, error, context.confidence);
     if (!ranked[index]) return { company, ...pair, shown: 0 };
     const isOwnHigher = isRejected[place];
     const isPeerHigher = isRejected[place + 1];
@@ -38,10 +39,10 @@ export function pairComparisons(context: IntervalContext, own: number): PairComp
 }
 
 /** [own ≤ peer, own ≥ peer] as null hypotheses; rejecting the first shows that the own company is higher. */
-function oneSidedPValues(pair: IntervalEstimate, degreesOfFreedom: number): [number, number] {
-  if (pair.standardError === null || pair.standardError === 0) return [1, 1];
-  const statistic = pair.estimate / pair.standardError;
-  return [tUpperTail(statistic, degreesOfFreedom), tUpperTail(-statistic, degreesOfFreedom)];
+function oneSidedPValues(estimate: number, error: CalibratedError): [number, number] {
+  if (error.standardError === null || error.standardError === 0) return [1, 1];
+  const statistic = estimate / error.standardError;
+  return [tUpperTail(statistic, error.cosines), tUpperTail(-statistic, error.cosines)];
 }
 
 /** −1: the peer is shown to be lower; +1: shown to be higher than the own company. */

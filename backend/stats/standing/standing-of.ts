@@ -3,7 +3,7 @@ import { calibratedInterval } from '../intervals/calibrated-interval';
 import { standingContrast } from '../intervals/contrast';
 import { aloneError, type IntervalContext } from '../intervals/interval-context';
 import { fewestRowsForRank, rowsOf } from '../intervals/interval-reasons';
-import { type IntervalEstimate, outOfLogs, withoutInterval } from '../prediction';
+import { type IntervalEstimate, outOfLogs } from '../prediction';
 
 export interface StandingInput {
   /** Index of the own company. */
@@ -23,21 +23,18 @@ export function standingOf(
   context: IntervalContext,
   { own, pairs, form }: StandingInput,
 ): Standing {
-  const { fit, cosines, persistence } = context;
+  const { fit, persistence } = context;
   const relative = fit.relativeIntercepts;
   const others = relative.reduce((sum, value, index) => (index === own ? sum : sum + value), 0);
   const estimate = relative[own] - others / (relative.length - 1);
   const error = aloneError(context, standingContrast(fit, own));
-  const interval =
-    error.standardError === null
-      ? withoutInterval(estimate, error.reason)
-      : calibratedInterval(estimate, error, { cosines, confidence: context.confidence });
+  const interval = calibratedInterval(estimate, error, context.confidence);
   const ownPersistence = persistence.own[own];
   return {
     company: fit.sample.companies[own],
     ...interval,
     calibration: error.calibration,
-    cosines,
+    cosines: error.standardError === null ? context.cosines : error.cosines,
     persistence: persistence.pooled,
     ownPersistence: Number.isNaN(ownPersistence) ? null : ownPersistence,
     ...rankOf(context, own, pairs),

@@ -8,18 +8,25 @@ export interface DenseContrast {
   readonly slopes: readonly number[];
 }
 
+/** What makes the error of a contrast, beside its weights. */
+export interface DenseChoice {
+  /** ρ by company. */
+  readonly persistence: (company: string) => number;
+  readonly cosines: number;
+  /** Whether the rows of the companies that the contrast weighs drive its cosines, rather than the calendar. */
+  readonly hasOwnClock: boolean;
+}
+
 /**
  * The calibrated standard error of a contrast, row by row from the full dummy regression and matrices written out:
  * the definition itself, slow and without any of the engine's shortcuts.
  *
  * @param rows  sorted by company and year, every company with two rows or more.
- * @param persistence  ρ by company.
  */
 export function denseError(
   rows: readonly PanelRow[],
   contrast: DenseContrast,
-  persistence: (company: string) => number,
-  cosines: number,
+  { persistence, cosines, hasOwnClock }: DenseChoice,
 ): number {
   const companies = [...new Set(rows.map(({ company }) => company))];
   const columns = [
@@ -35,10 +42,13 @@ export function denseError(
   );
   const years = [...new Set(rows.map(({ year }) => year))].sort((left, right) => left - right);
   const count = years.length;
+  const places = hasOwnClock
+    ? ownPlaces(rows, contrast.intercepts, years)
+    : years.map((_, place) => (place + 0.5) / count);
   const weighted = Array.from({ length: cosines }, (_, index) =>
     direct.map((value, row) => {
-      const place = years.indexOf(rows[row].year) + 0.5;
-      return Math.sqrt(2 / count) * Math.cos((Math.PI * (index + 1) * place) / count) * value;
+      const place = places[years.indexOf(rows[row].year)];
+      return Math.sqrt(2 / count) * Math.cos(Math.PI * (index + 1) * place) * value;
     }),
   );
   const left = weighted.map((values) => {
@@ -57,6 +67,23 @@ export function denseError(
     (values) => values.reduce((sum, value, row) => sum + value * residuals[row], 0) ** 2,
   );
   return Math.sqrt(count * mean(squares) * calibration);
+}
+
+/** The share of Σ_i (w_i/T_i)² over rows that lies before the middle of each year. */
+function ownPlaces(
+  rows: readonly PanelRow[],
+  intercepts: DenseContrast['intercepts'],
+  years: readonly number[],
+): number[] {
+  const rowsOf = (company: string): number => rows.filter((row) => row.company === company).length;
+  const within = (isIncluded: (year: number) => boolean): number =>
+    rows
+      .filter(({ year }) => isIncluded(year))
+      .reduce((sum, { company }) => sum + ((intercepts[company] ?? 0) / rowsOf(company)) ** 2, 0);
+  const all = within(() => true);
+  return years.map(
+    (middle) => (within((year) => year < middle) + within((year) => year === middle) / 2) / all,
+  );
 }
 
 /** Σ_i v_i'R_iv_i. */

@@ -102,13 +102,13 @@ function ownRegression(sample: PanelSample, fit: WithinFit, company: number): Sq
     return largestOf(column) > variationTolerance * size;
   });
   if (!isVarying) return null;
-  const factored = factorColumns(block);
-  if (columnRank(factored.r).combination !== null) return null;
   const residuals = fit.residuals.slice(from, to);
-  const own = solveLeastSquares(factored, residuals);
+  const factored = factorColumns(block, residuals);
+  if (columnRank(factored.r).combination !== null) return null;
+  const own = solveLeastSquares(factored);
   return {
     gain: sumOfSquares(own.basis.map((column) => dot(column, residuals))),
-    rest: sumOfSquares(own.residuals),
+    rest: own.residualSquares,
   };
 }
 

@@ -76,9 +76,9 @@ function differenceResiduals(sample: PanelSample): Float64Array | null {
     columns.push(values);
   }
   if (outcome.length <= columns.length + 1) return null;
-  const factored = factorColumns(columns);
+  const factored = factorColumns(columns, withinTransform(outcome, everyRow).values);
   if (columnRank(factored.r).combination !== null) return null;
-  return solveLeastSquares(factored, withinTransform(outcome, everyRow).values).residuals;
+  return solveLeastSquares(factored).residuals;
 }
 
 /** Each row minus the row before of the same company. */

@@ -91,7 +91,7 @@ function fitWarnings({ fit }: IntervalContext): FitWarning[] {
 }
 
 function smearingWarnings({ smearing, own, context }: WarningInput): FitWarning[] {
-  if (typeof smearing?.own !== 'number') return [];
+  if (typeof smearing?.own !== 'number' || smearing.factor === null) return [];
   const distance = smearing.own / smearing.factor - 1;
   if (Math.abs(distance) <= noticeableSmear) return [];
   const company = context.fit.sample.companies[own];

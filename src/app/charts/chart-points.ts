@@ -30,6 +30,7 @@ const keySteps: Readonly<Record<string, number>> = {
   selector: 'svg[kvPoints]',
   exportAs: 'kvPoints',
   host: {
+    role: 'group',
     '(keydown)': 'move($event)',
     '(document:keydown.escape)': 'putAway()',
     '(pointerleave)': 'hovered.set(null)',

@@ -27,6 +27,37 @@ describe('what the form of a model makes of its figures', () => {
     expect(asDifference(open, 'log')).toEqual(open);
   });
 
+  it('gives no share that is beyond what a percentage can say, and says why', () => {
+    const [inside, beyond] = [34.5, 34.6];
+    const reason = 'Out of logs this interval leaves what a percentage can say.';
+    const open = { low: null, high: null, intervalReason: reason };
+    expect(asDifference({ estimate: 0, low: -1, high: beyond }, 'log')).toEqual({
+      estimate: 0,
+      ...open,
+    });
+    expect(asDifference({ estimate: inside, low: beyond, high: 36 }, 'log')).toEqual({
+      estimate: Math.expm1(inside),
+      ...open,
+    });
+    expect(asDifference({ estimate: 0, low: -1, high: inside }, 'log').high).toBe(
+      Math.expm1(inside),
+    );
+    expect(Number.isFinite(asDifference({ estimate: 800, low: 1, high: 2 }, 'log').estimate))
+      .withContext('an estimate that a number cannot hold')
+      .toBeTrue();
+  });
+
+  it('keeps the reason that an interval had before it went beyond', () => {
+    const half = { estimate: 0, low: null, high: 40, intervalReason: 'one end alone' };
+    expect(asDifference(half, 'log')).toEqual({ ...half, high: null });
+  });
+
+  it('leaves a year out of a gap path whose gap is beyond', () => {
+    const years: { year: number; gap: number | null }[] = [{ year: 2020, gap: 40 }];
+    expect(asShownGaps(years, 'log')).toEqual([{ year: 2020, gap: null }]);
+    expect(asShownGaps(years, 'levels')).toBe(years);
+  });
+
   it('leaves years without a gap without one', () => {
     const years = [
       { year: 2020, gap: null, peers: 0 },

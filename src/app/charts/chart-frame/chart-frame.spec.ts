@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, signal } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
-import { ChartFrame } from './chart-frame';
+import { ChartFrame, ChartPicture } from './chart-frame';
 import { fileNameOf, pngFile, svgFile } from './picture-files';
 import { standalonePicture } from './standalone-picture';
 
@@ -12,10 +12,10 @@ const text = {
 
 @Component({
   selector: 'kv-framed',
-  imports: [ChartFrame],
+  imports: [ChartFrame, ChartPicture],
   template: `
     <kv-chart-frame [text]="text" summary="Two marks." [columns]="[]" [rows]="[]" [(width)]="width">
-      <svg #picture [attr.width]="width()" height="40">
+      <svg [kvPicture]="{ width: width(), height: 40 }">
         <rect class="own" width="10" height="10" role="img" aria-label="own" />
         <circle class="ring" data-screen-only r="4" />
         <g data-follows-scroll transform="translate(0,300)"><text>2025</text></g>
@@ -55,6 +55,14 @@ describe('chart frame', () => {
     const { page } = await shown();
     expect(page.querySelector('figure')?.getAttribute('aria-label')).toBe(text.title);
     expect(page.querySelector('p.kv-visually-hidden')?.textContent).toBe('Two marks.');
+  });
+
+  it('calls its picture by the title, and makes it as large as the layout', async () => {
+    const { svg } = await shown(432);
+    const named = ['aria-label', 'width', 'height', 'viewBox'].map((name) =>
+      svg.getAttribute(name),
+    );
+    expect(named).toEqual([text.title, '432', '40', '0 0 432 40']);
   });
 
   it('writes title, unit and source into a picture that needs no style sheet', async () => {

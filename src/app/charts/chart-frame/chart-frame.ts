@@ -2,9 +2,12 @@ import {
   ChangeDetectionStrategy,
   Component,
   DestroyRef,
+  Directive,
   ElementRef,
   afterNextRender,
+  computed,
   contentChild,
+  forwardRef,
   inject,
   input,
   model,
@@ -16,7 +19,7 @@ import { standalonePicture } from './standalone-picture';
 
 /**
  * What every chart has around it: the same values as a table, export as SVG and PNG, a summary for screen readers,
- * and its width as the container gives it. The chart is the projected `<svg #picture>`; a heading, where the page
+ * and its width as the container gives it. The chart is the projected `<svg [kvPicture]>`; a heading, where the page
  * shows none, goes into `[chartHeading]`.
  */
 @Component({
@@ -38,9 +41,10 @@ export class ChartFrame {
   /** Width of the container in CSS pixels, for the layout. */
   readonly width = model(640);
 
-  readonly picture = contentChild.required<unknown, ElementRef<SVGSVGElement>>('picture', {
-    read: ElementRef,
-  });
+  readonly picture = contentChild.required<ChartPicture, ElementRef<SVGSVGElement>>(
+    forwardRef(() => ChartPicture),
+    { read: ElementRef },
+  );
 
   protected readonly isTable = signal(false);
   protected readonly trouble = signal('');
@@ -85,4 +89,25 @@ export class ChartFrame {
       this.trouble.set(`The ${ending.toUpperCase()} file could not be made: ${found}. Try again.`);
     }
   }
+}
+
+/** The drawing inside a chart's frame: as large as its layout, and called by the chart's title. */
+@Directive({
+  selector: 'svg[kvPicture]',
+  host: {
+    '[attr.aria-label]': 'frame.text().title',
+    '[attr.width]': 'size().width',
+    '[attr.height]': 'size().height',
+    '[attr.viewBox]': 'viewBox()',
+  },
+})
+export class ChartPicture {
+  protected readonly frame = inject(ChartFrame);
+
+  /** In CSS pixels. */
+  readonly size = input.required<{ readonly width: number; readonly height: number }>({
+    alias: 'kvPicture',
+  });
+
+  protected readonly viewBox = computed(() => `0 0 ${this.size().width} ${this.size().height}`);
 }

@@ -9,7 +9,7 @@ import {
 } from '@angular/core';
 import { type CompanyLinesData, companyLinesLayout, diamondPath } from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
-import { ChartFrame } from '../chart-frame/chart-frame';
+import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats } from '../figure-formats';
@@ -18,7 +18,7 @@ import { ValueAxes } from '../value-axes';
 /** The outcome against one regressor: each company its own line, the one line for all across. */
 @Component({
   selector: 'kv-company-lines',
-  imports: [ChartFrame, ChartPoint, ChartPoints, ValueAxes],
+  imports: [ChartFrame, ChartPicture, ChartPoint, ChartPoints, ValueAxes],
   templateUrl: './company-lines.html',
   styleUrls: ['../chart-marks.css', './company-lines.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,

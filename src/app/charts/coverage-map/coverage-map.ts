@@ -15,7 +15,7 @@ import {
   coverageMapLayout,
   diamondPath,
 } from '@figures';
-import { ChartFrame } from '../chart-frame/chart-frame';
+import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { coverageCells } from './coverage-cells';
 import { type GridPlace, gridMove } from './grid-move';
@@ -31,7 +31,7 @@ let maps = 0;
 /** Which company has values in which year: a grid that arrow keys walk, one tab stop. */
 @Component({
   selector: 'kv-coverage-map',
-  imports: [ChartFrame],
+  imports: [ChartFrame, ChartPicture],
   templateUrl: './coverage-map.html',
   styleUrls: ['../chart-marks.css', './coverage-map.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,

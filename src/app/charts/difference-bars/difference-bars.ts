@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
 import { type DifferenceData, type IntervalFigure, differenceBarsLayout } from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
-import { ChartFrame } from '../chart-frame/chart-frame';
+import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats, withUnit } from '../figure-formats';
@@ -9,7 +9,7 @@ import { figureFormats, withUnit } from '../figure-formats';
 /** A plan's difference to the base, regressor by regressor: bars that add up to the total. */
 @Component({
   selector: 'kv-difference-bars',
-  imports: [ChartFrame, ChartPoint, ChartPoints],
+  imports: [ChartFrame, ChartPicture, ChartPoint, ChartPoints],
   templateUrl: './difference-bars.html',
   styleUrls: ['../chart-marks.css', './difference-bars.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -15,7 +15,7 @@ import {
   expectedPathLayout,
 } from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
-import { ChartFrame } from '../chart-frame/chart-frame';
+import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats, withUnit } from '../figure-formats';
@@ -24,7 +24,7 @@ import { expectedPathRows, hasBand } from './expected-path-rows';
 /** Actual and expected value until now, and what the plans and the base would make of it. */
 @Component({
   selector: 'kv-expected-path',
-  imports: [ChartFrame, ChartPoint, ChartPoints],
+  imports: [ChartFrame, ChartPicture, ChartPoint, ChartPoints],
   templateUrl: './expected-path.html',
   styleUrls: ['../chart-marks.css', './expected-path.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -9,7 +9,7 @@ import {
 } from '@angular/core';
 import { type GapYear, type IntervalFigure, diamondPath, gapPathLayout } from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
-import { ChartFrame } from '../chart-frame/chart-frame';
+import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats, inWords, withUnit } from '../figure-formats';
@@ -17,7 +17,7 @@ import { figureFormats, inWords, withUnit } from '../figure-formats';
 /** The own company's gap to its peers, year by year, beside its standing. */
 @Component({
   selector: 'kv-gap-path',
-  imports: [ChartFrame, ChartPoint, ChartPoints],
+  imports: [ChartFrame, ChartPicture, ChartPoint, ChartPoints],
   templateUrl: './gap-path.html',
   styleUrls: ['../chart-marks.css', './gap-path.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
 import { type IntervalRow, diamondPath, intervalRowsLayout } from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
-import { ChartFrame } from '../chart-frame/chart-frame';
+import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats, withUnit } from '../figure-formats';
@@ -10,7 +10,7 @@ import { digitsBy, openBounds } from './open-bounds';
 /** One figure found in several ways, a row each: its estimate and interval on one scale with zero. */
 @Component({
   selector: 'kv-interval-rows',
-  imports: [ChartFrame, ChartPoint, ChartPoints],
+  imports: [ChartFrame, ChartPicture, ChartPoint, ChartPoints],
   templateUrl: './interval-rows.html',
   styleUrls: ['../chart-marks.css', './interval-rows.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -45,6 +45,30 @@ describe('leave one out', () => {
     expect(await chart.points()).toEqual(['without 2014: 2,100, –']);
   });
 
+  it('gives the change of a share in percentage points, drawn and in the table', async () => {
+    const { chart } = await shown({
+      kind: 'percent',
+      full: { estimate: 0.34, low: 0.1, high: 0.6 },
+      leftOut: [
+        { name: 'Tolvane', estimate: 0.281 },
+        { name: 'Ostrell', estimate: 0.36 },
+        { name: 'Kestrane', estimate: 0.34 },
+      ],
+    });
+    expect(await chart.points()).toEqual([
+      'without Tolvane: 28.1 %, \u22125.9 pp',
+      'without Ostrell: 36.0 %, +2.0 pp',
+      'without Kestrane: 34.0 %, –',
+    ]);
+    await chart.toggle();
+    expect((await chart.table()).map(([, , change]) => change)).toEqual([
+      '\u22125.9 pp',
+      '+2.0 pp',
+      '–',
+      '',
+    ]);
+  });
+
   it('shows the same values as a table, with all in the last row', async () => {
     const { chart } = await shown();
     await chart.toggle();

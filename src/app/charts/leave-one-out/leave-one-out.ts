@@ -16,15 +16,16 @@ import {
   leaveOneOutLayout,
 } from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
-import { ChartFrame } from '../chart-frame/chart-frame';
+import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats, inWords, withUnit } from '../figure-formats';
+import { TopAxis } from '../top-axis';
 
 /** What a figure would be without each company, or each year, before the figure with all and its interval. */
 @Component({
   selector: 'kv-leave-one-out',
-  imports: [ChartFrame, ChartPoint, ChartPoints],
+  imports: [ChartFrame, ChartPicture, ChartPoint, ChartPoints, TopAxis],
   templateUrl: './leave-one-out.html',
   styleUrls: ['../chart-marks.css', './leave-one-out.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -15,15 +15,16 @@ import {
   residualGroupsLayout,
 } from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
-import { ChartFrame } from '../chart-frame/chart-frame';
+import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats, withUnit } from '../figure-formats';
+import { TopAxis } from '../top-axis';
 
 /** How far the residuals of each company, or of each year, lie from 0. */
 @Component({
   selector: 'kv-residual-groups',
-  imports: [ChartFrame, ChartPoint, ChartPoints],
+  imports: [ChartFrame, ChartPicture, ChartPoint, ChartPoints, TopAxis],
   templateUrl: './residual-groups.html',
   styleUrls: ['../chart-marks.css', './residual-groups.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -15,7 +15,7 @@ import {
   residualScatterLayout,
 } from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
-import { ChartFrame } from '../chart-frame/chart-frame';
+import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats, withUnit } from '../figure-formats';
 import { ValueAxes } from '../value-axes';
@@ -31,7 +31,7 @@ const reach = 24;
  */
 @Component({
   selector: 'kv-residual-scatter',
-  imports: [ChartFrame, ValueAxes],
+  imports: [ChartFrame, ChartPicture, ValueAxes],
   templateUrl: './residual-scatter.html',
   styleUrls: ['../chart-marks.css', './residual-scatter.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
 import { intervalDigits, slopeIntervalsLayout } from '@figures';
 import { type FigureKind, type IntervalValue, NumberFormat } from '../../ui/number-format';
-import { ChartFrame } from '../chart-frame/chart-frame';
+import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 
@@ -10,7 +10,7 @@ type Slope = IntervalValue & { readonly name: string; readonly intervalReason?: 
 /** What one more of each regressor goes with, each with its interval and a mark at zero. */
 @Component({
   selector: 'kv-slope-intervals',
-  imports: [ChartFrame, ChartPoint, ChartPoints],
+  imports: [ChartFrame, ChartPicture, ChartPoint, ChartPoints],
   templateUrl: './slope-intervals.html',
   styleUrl: '../chart-marks.css',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -9,17 +9,18 @@ import {
 } from '@angular/core';
 import { type IntervalFigure, type StandingRow, diamondPath, standingChartLayout } from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
-import { ChartFrame } from '../chart-frame/chart-frame';
+import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats, inWords, withUnit } from '../figure-formats';
+import { TopAxis } from '../top-axis';
 
 type Intercept = IntervalFigure & { readonly company: string };
 
 /** Company intercepts with their intervals, highest first, the own company among its peers. */
 @Component({
   selector: 'kv-standing-chart',
-  imports: [ChartFrame, ChartPoint, ChartPoints],
+  imports: [ChartFrame, ChartPicture, ChartPoint, ChartPoints, TopAxis],
   templateUrl: './standing-chart.html',
   styleUrl: '../chart-marks.css',
   changeDetection: ChangeDetectionStrategy.OnPush,

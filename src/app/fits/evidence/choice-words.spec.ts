@@ -1,3 +1,4 @@
+import type { Alternative } from '@contract';
 import type { NumberFormat } from '../../ui/number-format';
 import { exampleNumbers } from '../testing/example-numbers';
 import {
@@ -152,6 +153,33 @@ describe('the choices behind a fit in words', () => {
     it('says of slopes of another form what they are of', () => {
       const rows = modelRows(judgedResult, alternatives, { choice: 0, numbers });
       expect(rows[3].reason).toBe('0.400 (0.200 to 0.600), of logs');
+    });
+
+    it('says beside slopes what they are without, and once where there are none', () => {
+      const pooled = {
+        ...alternatives[0],
+        observations: 29,
+        slopesNote: 'Classical intervals.',
+        reason: 'Without the year effects of this fit.',
+      };
+      const noteAndReason = (of: Alternative, choice: 'standing' | 0) =>
+        modelRows(judgedResult, [of], { choice, numbers }).map(({ note, reason }) => [
+          note,
+          reason,
+        ]);
+      expect(noteAndReason(pooled, 0)).toEqual([
+        ['29 rows, classical intervals, without the year effects of this fit', undefined],
+      ]);
+      expect(noteAndReason(pooled, 'standing')).toEqual([['29 rows', 'One constant places none.']]);
+      const refused = { ...pooled, slopes: null, slopesNote: undefined, reason: 'Too large.' };
+      expect(noteAndReason(refused, 0)).toEqual([['29 rows', 'Too large.']]);
+    });
+
+    it('keeps the capitals of an abbreviation in a note', () => {
+      const noted = { ...alternatives[0], slopesNote: 'CR2 here: it is run alone.' };
+      expect(modelRows(judgedResult, [noted], { choice: 0, numbers })[0].note).toBe(
+        'CR2 here: it is run alone',
+      );
     });
 
     it('counts models on one side, and how far apart those in the same unit are', () => {

@@ -139,6 +139,24 @@ describe('the store of a fit’s evidence', () => {
     expect(store.problem()).not.toBeNull();
   });
 
+  it('keeps the evidence when the draws can no longer be followed, and follows again when asked', async () => {
+    const running: Bootstrap = { seed: 1, state: 'running', progress: null, failure: null };
+    store.show('a');
+    await answer('a', ready(running));
+    await pass(400);
+    http
+      .expectOne('/api/fits/a/evidence/state')
+      .flush({ title: 'Broken' }, { status: 500, statusText: 'Broken' });
+    expect(store.view()).toEqual({ kind: 'ready', evidence: exampleEvidence, bootstrap: running });
+    expect(store.problem()).not.toBeNull();
+    await pass(5000);
+    store.show('a');
+    expect(store.problem()).toBeNull();
+    const ended: Bootstrap = { ...running, state: 'done' };
+    await answer('a', ready(ended));
+    expect(store.view()).toEqual({ kind: 'ready', evidence: exampleEvidence, bootstrap: ended });
+  });
+
   it('cancels the bootstrap and looks again', async () => {
     store.show('a');
     await answer('a', ready());

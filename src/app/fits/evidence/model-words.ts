@@ -59,7 +59,7 @@ export function modelRows(
     const { figure, kind, isComparable, reason } = found(alternative, result, choice);
     const head = {
       name: names[alternative.code],
-      note: noteOf(alternative, result, choice),
+      note: noteOf(alternative, result, { choice, hasFigure: figure !== null }),
       isMarked: alternative.isThisFit,
     };
     if (figure !== null && isComparable) return { ...head, figure };
@@ -82,19 +82,27 @@ function onAnotherScale(
   return kind === 'money' ? `${text} ${numbers.unitLabel()}` : text;
 }
 
+/** What stands behind a model's name; its reason too, where the figure is there and the reason only says more of it. */
 function noteOf(
-  { isThisFit, rankSet, observations, slopesNote }: Alternative,
+  { isThisFit, rankSet, observations, slopesNote, reason }: Alternative,
   { sample }: FitResult,
-  choice: FigureChoice,
+  { choice, hasFigure }: { readonly choice: FigureChoice; readonly hasFigure: boolean },
 ): string {
-  const places = choice === 'standing' && rankSet !== null ? [placesText(rankSet, null)] : [];
+  const isStanding = choice === 'standing';
+  const places = isStanding && rankSet !== null ? [placesText(rankSet, null)] : [];
   const rows =
     observations === null || observations === sample.observations
       ? []
       : [counted(observations, 'row')];
-  const note =
-    choice !== 'standing' && slopesNote !== undefined ? [slopesNote.replace(/\.$/, '')] : [];
-  return [...(isThisFit ? ['this fit'] : []), ...places, ...rows, ...note].join(', ');
+  const remarks = isStanding ? [] : [slopesNote, hasFigure ? reason : undefined];
+  const notes = remarks.flatMap((remark) => (remark === undefined ? [] : [asNote(remark)]));
+  return [...(isThisFit ? ['this fit'] : []), ...places, ...rows, ...notes].join(', ');
+}
+
+/** A sentence as part of a list: no full stop, no capital but that of an abbreviation. */
+function asNote(sentence: string): string {
+  const words = sentence.replace(/\.$/, '');
+  return /^[A-Z][a-z]/.test(words) ? words[0].toLowerCase() + words.slice(1) : words;
 }
 
 function figuresOf(
