@@ -205,7 +205,7 @@ export const ImportCheck = z.object({
   blockingCount: z.number().int(),
   /** The rows that the listed findings stand in. */
   reviewRows: z.array(ReviewRow),
-  /** Names that may be one company, with how many rows each has; the first is the likeliest spelling. */
+  /** Names that may be one company, with how many rows each has, the likeliest first; at most 500 groups. */
   spellings: z.array(z.array(z.object({ company: z.string(), rows: z.number().int() }))),
   /** Currencies and years that the rates must cover and do not. */
   missingRates: z.array(z.object({ currency: z.string(), years: z.array(z.number().int()) })),
