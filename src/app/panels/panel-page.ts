@@ -21,7 +21,7 @@ import { PageHeader } from '../ui/page-header';
 import { ProblemNotice } from '../ui/problem-notice';
 import type { ChartText } from '../charts/chart-text';
 import { CoverageMap } from '../charts/coverage-map/coverage-map';
-import { BringInPanel } from './bring-in-panel';
+import { BringInPanel } from './importing/bring-in-panel';
 import { GapList } from './gap-list';
 import { panelCompleteness, panelFinding, yearSpan } from './panel-finding';
 import { PanelGrid, type RowFocus } from './panel-grid';

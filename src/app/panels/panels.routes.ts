@@ -8,7 +8,7 @@ export const routes: Routes = [
   {
     path: 'import/:importId',
     title: 'Bring in a panel',
-    loadComponent: async () => (await import('./import-page')).ImportPage,
+    loadComponent: async () => (await import('./importing/import-page')).ImportPage,
   },
   { path: ':panelVersionId', loadComponent: loadPanelPage },
 ];
