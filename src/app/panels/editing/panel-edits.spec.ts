@@ -22,7 +22,7 @@ const cell = (company: string, year: number, column: number) => ({ company, year
 describe('edits of a panel', () => {
   it('change cells and leave the rest the very same', () => {
     const edits = setCells(noEdits, saved, [{ place: cell('Kesdrin', 2020, 2), value: 4 }]);
-    const now = editedRows(rows, 3, edits);
+    const now = editedRows(rows, saved, 3, edits);
     expect(now[0].values).toEqual([10, 1, 4]);
     expect(now[1]).toBe(rows[1]);
     expect(countEdits(edits)).toBe(1);
@@ -32,7 +32,7 @@ describe('edits of a panel', () => {
     const there = setCells(noEdits, saved, [{ place: cell('Kesdrin', 2021, 0), value: null }]);
     const back = setCells(there, saved, [{ place: cell('Kesdrin', 2021, 0), value: 11 }]);
     expect(countEdits(back)).toBe(0);
-    expect(editedRows(rows, 3, back)).toBe(rows);
+    expect(editedRows(rows, saved, 3, back)).toBe(rows);
   });
 
   it('set no cell of a row that is not there or was taken out', () => {
@@ -46,7 +46,7 @@ describe('edits of a panel', () => {
   it('put a new row in its place with what is typed into it', () => {
     const added = addRow(noEdits, saved, { company: 'Kesdrin', year: 2022 });
     const filled = setCells(added, saved, [{ place: cell('Kesdrin', 2022, 1), value: 7 }]);
-    const now = editedRows(rows, 3, filled);
+    const now = editedRows(rows, saved, 3, filled);
     expect(now.map(({ company, year }) => `${company} ${year}`)).toEqual([
       'Kesdrin 2020',
       'Kesdrin 2021',
@@ -60,9 +60,9 @@ describe('edits of a panel', () => {
   it('take a row out with what was typed into it, and put it back as it was', () => {
     const typed = setCells(noEdits, saved, [{ place: cell('Kesdrin', 2021, 0), value: 12 }]);
     const removed = removeRows(typed, saved, [{ company: 'Kesdrin', year: 2021 }]);
-    expect(editedRows(rows, 3, removed).length).toBe(2);
+    expect(editedRows(rows, saved, 3, removed).length).toBe(2);
     const back = addRow(removed, saved, { company: 'Kesdrin', year: 2021 });
-    expect(editedRows(rows, 3, back)).toEqual(rows);
+    expect(editedRows(rows, saved, 3, back)).toEqual(rows);
     const added = addRow(noEdits, saved, { company: 'New', year: 2020 });
     expect(countEdits(removeRows(added, saved, [{ company: 'New', year: 2020 }]))).toBe(0);
   });

@@ -8,6 +8,12 @@ export interface CellPlace {
   readonly column: number;
 }
 
+/** A cell with the value that it gets; null makes it missing. */
+export interface CellChange {
+  readonly place: CellPlace;
+  readonly value: number | null;
+}
+
 export interface RowPlace {
   readonly company: string;
   readonly year: number;
@@ -15,8 +21,8 @@ export interface RowPlace {
 
 /** What differs from the panel version that is being mended; nothing of it is saved. */
 export interface PanelEdits {
-  /** New values by cell key; null makes a cell missing. */
-  readonly cells: ReadonlyMap<string, { readonly place: CellPlace; readonly value: number | null }>;
+  /** By cell key. */
+  readonly cells: ReadonlyMap<string, CellChange>;
   /** Rows that the version does not have, by row key. */
   readonly added: ReadonlyMap<string, RowPlace>;
   readonly removed: ReadonlyMap<string, RowPlace>;
@@ -46,7 +52,7 @@ export function savedRows(rows: readonly PanelRow[]): SavedRows {
 export function setCells(
   edits: PanelEdits,
   saved: SavedRows,
-  changes: readonly { readonly place: CellPlace; readonly value: number | null }[],
+  changes: readonly CellChange[],
 ): PanelEdits {
   const cells = new Map(edits.cells);
   for (const { place, value } of changes) {
@@ -96,33 +102,53 @@ export function removeRows(
 /** The version's rows as they would be saved, by company and year; a row without edits is the very same object. */
 export function editedRows(
   rows: readonly PanelRow[],
+  saved: SavedRows,
   columns: number,
   edits: PanelEdits,
 ): readonly PanelRow[] {
   if (countEdits(edits) === 0) return rows;
-  const changes = new Map<string, { column: number; value: number | null }[]>();
-  for (const { place, value } of edits.cells.values()) {
-    const key = rowKey(place);
-    const list = changes.get(key) ?? [];
-    list.push({ column: place.column, value });
-    changes.set(key, list);
-  }
-  const changed = (row: PanelRow): PanelRow => {
-    const list = changes.get(rowKey(row));
-    if (list === undefined) return row;
-    const values = [...row.values];
-    for (const { column, value } of list) values[column] = value;
-    return { ...row, values };
-  };
-  const kept = rows.filter((row) => !edits.removed.has(rowKey(row))).map(changed);
-  if (edits.added.size === 0) return kept;
   const empty = Array.from({ length: columns }, () => null);
-  const added = [...edits.added.values()].map((row) =>
-    changed({ ...row, fileRow: 0, values: empty }),
-  );
+  const values = valuesByRow(edits, saved, empty);
+  const added = [...edits.added].map(([key, row]) => ({
+    ...row,
+    fileRow: 0,
+    values: values.get(key) ?? empty,
+  }));
+  // By object, not by key: a key for each of 200,000 rows is what takes long.
+  const changed = new Map<PanelRow, PanelRow | null>();
+  for (const key of edits.removed.keys()) {
+    const row = saved.get(key);
+    if (row !== undefined) changed.set(row, null);
+  }
+  for (const [key, now] of values) {
+    const row = saved.get(key);
+    if (row !== undefined) changed.set(row, { ...row, values: now });
+  }
+  const kept: PanelRow[] = [];
+  for (const row of rows) {
+    const now = changed.get(row);
+    if (now !== null) kept.push(now ?? row);
+  }
+  if (added.length === 0) return kept;
   return [...kept, ...added].sort((a, b) =>
     a.company < b.company ? -1 : a.company > b.company ? 1 : a.year - b.year,
   );
+}
+
+/** All values of each row that has a changed cell, by row key. */
+function valuesByRow(
+  edits: PanelEdits,
+  saved: SavedRows,
+  empty: readonly (number | null)[],
+): ReadonlyMap<string, readonly (number | null)[]> {
+  const values = new Map<string, (number | null)[]>();
+  for (const { place, value } of edits.cells.values()) {
+    const key = rowKey(place);
+    const row = values.get(key) ?? [...(saved.get(key)?.values ?? empty)];
+    row[place.column] = value;
+    values.set(key, row);
+  }
+  return values;
 }
 
 export function countEdits({ cells, added, removed }: PanelEdits): number {
