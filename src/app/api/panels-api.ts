@@ -12,20 +12,24 @@ import {
   PanelVersionSummary,
   PanelVersionsReply,
   type SaveCorrections,
+  type TableReading,
   apiRoutes,
 } from '@contract';
-import type { Observable } from 'rxjs';
-import { ApiClient, addressOf } from './api-client';
+import { type Observable, exhaustMap, takeWhile, timer } from 'rxjs';
+import { ApiClient, type Sending, addressOf } from './api-client';
+
+const lookEveryMs = 700;
 
 /** Imports and panel versions. */
 @Injectable({ providedIn: 'root' })
 export class PanelsApi {
   readonly #client = inject(ApiClient);
 
-  upload(file: File): Observable<ImportReply> {
+  /** How far the file is sent, then the import that it became. */
+  upload(file: File): Observable<Sending<ImportReply>> {
     const body = new FormData();
     body.append('file', file, file.name);
-    return this.#client.call(apiRoutes.uploadFile, ImportReply, { body });
+    return this.#client.sendFile(apiRoutes.uploadFile, ImportReply, body);
   }
 
   openSample(): Observable<ImportReply> {
@@ -36,6 +40,14 @@ export class PanelsApi {
     return this.#client.call(apiRoutes.readImport, ImportReply, { path: { importId } });
   }
 
+  /** Reads the file another way; the columns are recognised anew. */
+  readAs(importId: string, reading: TableReading): Observable<ImportReply> {
+    return this.#client.call(apiRoutes.readImportAs, ImportReply, {
+      path: { importId },
+      body: reading,
+    });
+  }
+
   check(importId: string, mapping: ImportMapping): Observable<ImportReply> {
     return this.#client.call(apiRoutes.checkImport, ImportReply, {
       path: { importId },
@@ -43,11 +55,20 @@ export class PanelsApi {
     });
   }
 
-  commit(importId: string, note: string): Observable<PanelVersionSummary> {
-    return this.#client.call(apiRoutes.commitImport, PanelVersionSummary, {
+  /** Begins to make the import a panel version; `follow` tells how far that is. */
+  commit(importId: string, note: string): Observable<ImportReply> {
+    return this.#client.call(apiRoutes.commitImport, ImportReply, {
       path: { importId },
       body: { note },
     });
+  }
+
+  /** The import as it is now, and again while its rows are written; completes with the end of that. */
+  follow(importId: string): Observable<ImportReply> {
+    return timer(0, lookEveryMs).pipe(
+      exhaustMap(() => this.readImport(importId)),
+      takeWhile(({ state }) => state === 'committing', true),
+    );
   }
 
   /** Ends the writing of an import's rows; what was written goes. */
