@@ -12,7 +12,7 @@ import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { FormControl, ReactiveFormsModule } from '@angular/forms';
 import { MatMenuModule } from '@angular/material/menu';
 
-const longestReason = 2000;
+export const longestReason = 2000;
 
 /** One company's reason, written in place; while it is empty, reasons written elsewhere can be taken over. */
 @Component({
