@@ -1,20 +1,29 @@
 import { ChangeDetectionStrategy, Component, inject, input } from '@angular/core';
 import { ProblemNotice } from '../../ui/problem-notice';
+import { ProgressLine } from '../../ui/progress-line';
 import { BringInStore } from './bring-in-store';
 import { FileDrop } from './file-drop';
 
 /** The one step that a panel begins with: a file, or the sample. */
 @Component({
   selector: 'kv-bring-in-panel',
-  imports: [FileDrop, ProblemNotice],
+  imports: [FileDrop, ProblemNotice, ProgressLine],
   template: `
     @let view = store.view();
     <kv-file-drop [isBusy]="view.kind === 'sending'" (fileTaken)="store.upload($event)" />
     @if (view.kind === 'failed') {
-      <kv-problem-notice [problem]="view.problem.shown" />
+      <kv-problem-notice [problem]="view.problem" />
     }
     @if (view.kind === 'sending') {
-      <p class="late" role="status">Reading {{ view.what }}…</p>
+      @if (view.share !== null && view.share < 1) {
+        <kv-progress-line
+          [phase]="'Sending ' + view.what"
+          [done]="percent(view.share)"
+          [total]="100"
+        />
+      } @else {
+        <p class="late" role="status">Reading {{ view.what }}…</p>
+      }
     }
     @if (hasSample()) {
       <p>
@@ -57,4 +66,8 @@ export class BringInPanel {
   protected readonly store = inject(BringInStore);
 
   readonly hasSample = input(true);
+
+  protected percent(share: number): number {
+    return Math.round(100 * share);
+  }
 }

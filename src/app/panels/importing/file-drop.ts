@@ -1,14 +1,15 @@
 import { ChangeDetectionStrategy, Component, input, output, signal } from '@angular/core';
 import { MatButtonModule } from '@angular/material/button';
+import { mostMegabytes } from './refusal-words';
 
-/** Where a CSV file is dropped, or chosen: both do the same. */
+/** Where a file is dropped, or chosen: both do the same. */
 @Component({
   selector: 'kv-file-drop',
   imports: [MatButtonModule],
   template: `
     <p class="words">
-      <strong>Drag a CSV file here</strong>, or choose one. Market value, capex and book equity
-      stand in columns; what is missing or wrong is shown before anything is kept.
+      <strong>Drag a CSV file or a workbook here</strong>, or choose one. What is missing or wrong
+      in it is shown before anything is kept.
     </p>
     <button mat-flat-button type="button" [disabled]="isBusy()" (click)="picker.click()">
       {{ action() }}
@@ -17,12 +18,13 @@ import { MatButtonModule } from '@angular/material/button';
       #picker
       hidden
       type="file"
-      accept=".csv,.tsv,.txt,text/csv"
-      aria-label="CSV file"
+      accept=".csv,.tsv,.txt,.xlsx,text/csv,application/vnd.openxmlformats-officedocument.spreadsheetml.sheet"
+      aria-label="CSV file or workbook"
       (change)="take(picker.files); picker.value = ''"
     />
     <p class="kv-caption">
-      Comma, semicolon or tab; up to 40 MB. The file is kept as it is and can be downloaded again.
+      CSV up to {{ most.csv }} MB, Excel workbook (.xlsx) up to {{ most.xlsx }} MB. The file is kept
+      as it is and can be downloaded again.
     </p>
   `,
   styles: `
@@ -57,6 +59,7 @@ export class FileDrop {
   readonly isBusy = input(false);
   readonly fileTaken = output<File>();
 
+  protected readonly most = mostMegabytes;
   protected readonly isOver = signal(false);
 
   protected hover(event: DragEvent): void {

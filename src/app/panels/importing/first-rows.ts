@@ -9,7 +9,7 @@ const shownRows = 6;
 @Component({
   selector: 'kv-first-rows',
   template: `
-    <div class="kv-table-scroll" tabindex="0" role="region" aria-label="First rows of the file">
+    <div class="kv-table-scroll" tabindex="0" role="region" aria-label="First rows of the table">
       <table class="kv-table">
         <thead>
           <tr>
@@ -79,7 +79,13 @@ export class FirstRows {
     return this.draft().headers.map((header) => {
       const uses = columnChoices.filter(({ key }) => entry[key] === header);
       const taken = uses.map(({ label }) => label.toLowerCase()).join(', ');
-      return { header, taken: taken || (entry.others.includes(header) ? 'further column' : '') };
+      return { header, taken: taken || furtherUse(header, entry) };
     });
   });
+}
+
+function furtherUse(header: string, entry: MappingEntry): string {
+  if (entry.others.includes(header)) return 'further figure';
+  if (entry.attributes.includes(header)) return 'text about the company';
+  return entry.currencyColumn === header ? 'currency of the row' : '';
 }

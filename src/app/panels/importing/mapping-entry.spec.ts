@@ -1,24 +1,15 @@
-import type { ImportReply, PanelVersionSummary } from '@contract';
+import { ImportMapping, type ImportReply, type PanelVersionSummary } from '@contract';
 import {
   doubleChoices,
-  furtherColumns,
-  isSameEntry,
+  freeColumns,
   nextVersion,
   startingEntry,
   versionWords,
 } from './mapping-entry';
+import { flowDraft } from './testing/import-replies';
 
 const draft: ImportReply = {
-  id: '6f0a1d1e-52a1-4f0e-9a3c-0d3f0b9f3c11',
-  fileName: 'panel.csv',
-  byteSize: 120,
-  state: 'mapped',
-  headers: ['firm', 'fy', 'mv', 'capex', 'equity', 'staff', 'remark'],
-  firstRows: [
-    { row: 2, cells: ['A', '2008', '1.5', '2', '3', '(1,200)', 'late'] },
-    { row: 3, cells: ['A', '2009', '', '2', '3', '', ''] },
-  ],
-  rowCount: 2,
+  ...flowDraft,
   mapping: {
     panelName: 'panel',
     company: 'firm',
@@ -26,8 +17,6 @@ const draft: ImportReply = {
     marketValue: 'mv',
     others: ['staff'],
   },
-  check: null,
-  panelVersionId: null,
 };
 
 const version = {
@@ -39,34 +28,68 @@ const version = {
 
 const entry = startingEntry(draft, undefined, version);
 
+const said = ImportMapping.parse({
+  ...draft.mapping,
+  company: 'cur',
+  capex: 'capex',
+  bookEquity: 'equity',
+  currency: 'CHF',
+  unit: 'thousands',
+  conversion: {
+    columns: [],
+    currencies: {
+      column: 'cur',
+      rates: [{ currency: 'USD', year: 2020, average: 0.9, yearEnd: null }],
+    },
+    prices: { baseYear: 2020, index: [{ year: 2020, value: 100 }] },
+    fiscalYears: { rule: 'year-of-most-months', usualEndMonth: 3, companies: [] },
+  },
+  mending: { cells: [], excludedRows: [7], renames: [] },
+});
+
 describe('mapping entry', () => {
   it('starts from the guess, and takes currency and unit from the newest panel version', () => {
-    expect(entry).toEqual({
-      panelName: 'panel',
-      company: 'firm',
-      year: 'fy',
-      marketValue: 'mv',
-      capex: '',
-      bookEquity: '',
-      others: ['staff'],
-      currency: 'EUR',
-      unit: 'millions',
-    });
+    expect(entry).toEqual(
+      jasmine.objectContaining({
+        panelName: 'panel',
+        company: 'firm',
+        marketValue: 'mv',
+        capex: '',
+        others: ['staff'],
+        attributes: [],
+        currency: 'EUR',
+        unit: 'millions',
+        currencyColumn: '',
+        isReal: false,
+      }),
+    );
   });
 
-  it('prefers what was said of the same header before, until the import has its own', () => {
-    const said = { ...entry, company: 'remark', capex: 'capex', bookEquity: 'equity' } as const;
-    const remembered = { ...said, unit: 'thousands' as const };
-    expect(startingEntry(draft, remembered, version).company).toBe('remark');
-    expect(startingEntry(draft, remembered, version).unit).toBe('thousands');
-    expect(startingEntry({ ...draft, state: 'checked' }, remembered, version).company).toBe('firm');
+  it('prefers what was said of the same header before, without its mends', () => {
+    const known = startingEntry(draft, said, version);
+    expect(known.company).toBe('cur');
+    expect(known.unit).toBe('thousands');
+    expect(known.rates).toEqual([{ currency: 'USD', year: '2020', average: '0.9', yearEnd: '' }]);
+    expect(known.index).toEqual([{ year: '2020', value: '100' }]);
+    expect(known.fiscalYears.usualEndMonth).toBe(3);
+    expect(known.mending.excludedRows).toEqual([]);
   });
 
-  it('offers the numeric columns that no choice took', () => {
-    expect(furtherColumns(draft, entry)).toEqual(['capex', 'equity', 'staff']);
-    expect(furtherColumns(draft, { ...entry, capex: 'capex', bookEquity: 'equity' })).toEqual([
-      'staff',
-    ]);
+  it('keeps what a checked import has of its own', () => {
+    const checked = { ...draft, check: {} as ImportReply['check'], mapping: said };
+    const known = startingEntry(checked, undefined, version);
+    expect(known.company).toBe('cur');
+    expect(known.mending.excludedRows).toEqual([7]);
+  });
+
+  it('keeps name, currency and unit when the file is read another way', () => {
+    const before = { panelName: 'Mine', currency: 'SEK', unit: '' } as const;
+    const known = startingEntry(draft, undefined, version, before);
+    expect([known.panelName, known.currency, known.unit]).toEqual(['Mine', 'SEK', 'millions']);
+  });
+
+  it('offers the columns that no choice took', () => {
+    expect(freeColumns(draft.headers, entry)).toEqual(['capex', 'equity', 'staff', 'cur']);
   });
 
   it('finds a column that two choices name, and says so of the later one', () => {
@@ -78,12 +101,5 @@ describe('mapping entry', () => {
     expect(nextVersion(' Peers ', [version])).toBe(4);
     expect(versionWords('Peers', [version])).toContain('version 4');
     expect(versionWords('Others', [version])).toBe('Becomes a new panel, version 1');
-  });
-
-  it('tells a changed entry from an unchanged one, whatever the order of further columns', () => {
-    const checked = { ...entry, unit: 'millions' as const, others: ['b', 'a'] };
-    expect(isSameEntry({ ...entry, others: ['a', 'b'] }, checked)).toBeTrue();
-    expect(isSameEntry({ ...entry, others: ['a'] }, checked)).toBeFalse();
-    expect(isSameEntry({ ...entry, others: ['a', 'b'], unit: 'units' }, checked)).toBeFalse();
   });
 });

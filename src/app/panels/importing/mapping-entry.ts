@@ -1,13 +1,39 @@
-import type { ImportMapping, ImportReply, PanelVersionSummary } from '@contract';
+import {
+  type Conversion,
+  type CurrencyRate,
+  type ImportMapping,
+  type ImportReply,
+  type PanelVersionSummary,
+  type Unit,
+  noConversion,
+  noMending,
+} from '@contract';
 
-/** The form's entries before they are a mapping: a choice not made yet is ''. */
-export type MappingEntry = Omit<ImportMapping, 'unit'> & {
-  readonly unit: ImportMapping['unit'] | '';
-};
+/** A rate as it is being typed. */
+export type RateEntry = Readonly<Record<keyof CurrencyRate, string>>;
+
+/** A year's price index as it is being typed. */
+export interface IndexEntry {
+  readonly year: string;
+  readonly value: string;
+}
+
+/** The entries of the page before they are a mapping: a choice not made yet is '', and numbers are as typed. */
+export interface MappingEntry extends Omit<ImportMapping, 'unit' | 'reading' | 'conversion'> {
+  readonly unit: Unit | '';
+  readonly columns: Conversion['columns'];
+  /** '' where all figures are in the panel's currency. */
+  readonly currencyColumn: string;
+  readonly rates: readonly RateEntry[];
+  readonly isReal: boolean;
+  readonly baseYear: string;
+  readonly index: readonly IndexEntry[];
+  readonly fiscalYears: Conversion['fiscalYears'];
+}
 
 export const columnChoices = [
   { key: 'company', label: 'Company', hint: 'One spelling for each' },
-  { key: 'year', label: 'Fiscal year', hint: 'As 2023 or FY2023' },
+  { key: 'year', label: 'Fiscal year', hint: 'As 2023, FY2023, 2022/23 or a date' },
   { key: 'marketValue', label: 'Market value', hint: 'At the end of the year' },
   { key: 'capex', label: 'Capex', hint: 'Spent over the year' },
   { key: 'bookEquity', label: 'Book equity', hint: 'At the end of the year' },
@@ -16,38 +42,55 @@ export const columnChoices = [
 export type ColumnChoiceKey = (typeof columnChoices)[number]['key'];
 
 /**
- * What the form starts from: what was said of the same header before, else the guess made from the file; and
- * currency and unit of the newest panel version, since a workspace rarely changes them.
+ * What the page starts from: what was said of the same header before, else the guess made from the file; and currency
+ * and unit of the newest panel version, since a workspace rarely changes them.
+ *
+ * @param before  entries of the same import while it was read another way: its name, currency and unit stay.
  */
 export function startingEntry(
   draft: ImportReply,
   remembered: ImportMapping | undefined,
   newest: PanelVersionSummary | undefined,
+  before?: Pick<MappingEntry, 'panelName' | 'currency' | 'unit'>,
 ): MappingEntry {
-  const known = draft.state === 'mapped' ? (remembered ?? draft.mapping) : draft.mapping;
+  const isOpen = draft.check === null;
+  const known: Partial<ImportMapping> = isOpen
+    ? { ...(remembered ?? draft.mapping), mending: noMending }
+    : draft.mapping;
+  const conversion = known.conversion ?? noConversion;
+  const { prices } = conversion;
   return {
-    panelName: known.panelName ?? '',
+    panelName: firstGiven(before?.panelName, known.panelName),
     company: known.company ?? '',
     year: known.year ?? '',
     marketValue: known.marketValue ?? '',
     capex: known.capex ?? '',
     bookEquity: known.bookEquity ?? '',
     others: known.others ?? [],
-    currency: known.currency ?? newest?.currency ?? '',
-    unit: known.unit ?? newest?.unit ?? '',
+    attributes: known.attributes ?? [],
+    currency: firstGiven(before?.currency, known.currency, newest?.currency),
+    unit: firstGiven(before?.unit, known.unit, newest?.unit),
+    columns: conversion.columns,
+    currencyColumn: conversion.currencies?.column ?? '',
+    rates: (conversion.currencies?.rates ?? []).map(toRateEntry),
+    isReal: prices !== null,
+    baseYear: prices === null ? '' : String(prices.baseYear),
+    index: (prices?.index ?? []).map(({ year, value }) => ({
+      year: String(year),
+      value: String(value),
+    })),
+    fiscalYears: conversion.fiscalYears,
+    mending: known.mending ?? noMending,
   };
 }
 
-/** Headers that no choice took and whose first cells are numbers: they can come along. */
-export function furtherColumns(
-  { headers, firstRows }: Pick<ImportReply, 'headers' | 'firstRows'>,
+/** Headers that none of the five choices took. */
+export function freeColumns(
+  headers: readonly string[],
   entry: Pick<MappingEntry, ColumnChoiceKey>,
 ): readonly string[] {
-  const taken = new Set(columnChoices.map(({ key }) => entry[key]));
-  return headers.filter((header, column) => {
-    const cells = firstRows.map((row) => row.cells[column] ?? '').filter((cell) => cell !== '');
-    return !taken.has(header) && cells.some(looksNumeric);
-  });
+  const taken = new Set<string>(columnChoices.map(({ key }) => entry[key]));
+  return headers.filter((header) => !taken.has(header));
 }
 
 /** The choices that name a column which an earlier one names too. */
@@ -78,17 +121,15 @@ export function nextVersion(panelName: string, versions: readonly PanelVersionSu
   return Math.max(0, ...numbers) + 1;
 }
 
-/** Whether two sets of entries ask for the same panel. */
-export function isSameEntry(left: MappingEntry, right: Partial<ImportMapping>): boolean {
-  return (
-    columnChoices.every(({ key }) => left[key] === right[key]) &&
-    left.panelName.trim() === right.panelName &&
-    left.currency === right.currency &&
-    left.unit === right.unit &&
-    [...left.others].sort().join('\n') === [...(right.others ?? [])].sort().join('\n')
-  );
+function firstGiven<T extends string>(...texts: readonly (T | '' | undefined)[]): T | '' {
+  return texts.find((text) => text !== undefined && text !== '') ?? '';
 }
 
-function looksNumeric(cell: string): boolean {
-  return /^[(+\u2212-]?\s*[\d][\d\s.,'’]*\s*[%)]?$/u.test(cell.trim());
+function toRateEntry({ currency, year, average, yearEnd }: CurrencyRate): RateEntry {
+  return {
+    currency,
+    year: String(year),
+    average: average === null ? '' : String(average),
+    yearEnd: yearEnd === null ? '' : String(yearEnd),
+  };
 }

@@ -12,8 +12,6 @@ import {
 import { toSignal } from '@angular/core/rxjs-interop';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatAutocompleteModule } from '@angular/material/autocomplete';
-import { MatButtonModule } from '@angular/material/button';
-import { MatCheckboxModule } from '@angular/material/checkbox';
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInputModule } from '@angular/material/input';
 import { MatSelectModule } from '@angular/material/select';
@@ -26,19 +24,19 @@ import {
   type MappingEntry,
   columnChoices,
   doubleChoices,
-  furtherColumns,
   versionWords,
 } from './mapping-entry';
 
 const { panelName, currency, unit } = ImportMapping.shape;
+
+/** The entries that the form is about. */
+export type FormEntry = Pick<MappingEntry, ColumnChoiceKey | 'panelName' | 'currency' | 'unit'>;
 
 /** Which column of the file is what, in which currency and unit, and what the panel is called. */
 @Component({
   selector: 'kv-mapping-form',
   imports: [
     MatAutocompleteModule,
-    MatButtonModule,
-    MatCheckboxModule,
     MatFormFieldModule,
     MatInputModule,
     MatSelectModule,
@@ -54,14 +52,10 @@ export class MappingForm {
 
   readonly draft = input.required<ImportReply>();
   readonly versions = input.required<readonly PanelVersionSummary[]>();
-  /** What the form starts from; read anew for another import only. */
+  /** What the form starts from; another one fills the form anew. */
   readonly start = input.required<MappingEntry>();
-  readonly isChecking = input(false);
-  /** Whether what is entered is what was checked: then there is nothing to check. */
-  readonly isChecked = input(false);
 
-  readonly entryChanged = output<MappingEntry>();
-  readonly checkWanted = output<ImportMapping>();
+  readonly entryChanged = output<FormEntry>();
 
   protected readonly choices = columnChoices;
   protected readonly units = unit.options;
@@ -72,14 +66,12 @@ export class MappingForm {
     marketValue: ['', [this.#choice()]],
     capex: ['', [this.#choice()]],
     bookEquity: ['', [this.#choice()]],
-    others: [[] as string[]],
     currency: ['', [byContract(currency, 'expected a currency code of three letters, as EUR')]],
     unit: ['' as MappingEntry['unit'], [byContract(unit, 'expected a unit')]],
     panelName: ['', [byContract(panelName, 'expected a name for the panel')]],
   });
   readonly #changes = this.form.valueChanges.pipe(map(() => this.form.getRawValue()));
   protected readonly entry = toSignal(this.#changes, { initialValue: this.form.getRawValue() });
-  protected readonly further = computed(() => furtherColumns(this.draft(), this.entry()));
   protected readonly panelWords = computed(() =>
     versionWords(this.entry().panelName, this.versions()),
   );
@@ -90,23 +82,12 @@ export class MappingForm {
   protected readonly currencies = computed(() =>
     matchingCurrencies(this.entry().currency, this.#allCurrencies),
   );
-  /** A ticked column that was chosen for something else since comes along only once. */
-  readonly #wantedOthers = computed(() => {
-    const further = this.further();
-    return this.entry().others.filter((name) => further.includes(name));
-  });
-  readonly #importId = computed(() => this.draft().id);
-
   constructor() {
     effect(() => {
-      this.#importId();
-      untracked(() => {
-        this.form.reset({ ...this.start(), others: [...this.start().others] });
-      });
+      const start = this.start();
+      untracked(() => this.form.reset(start));
     });
-    effect(() => {
-      this.entryChanged.emit({ ...this.entry(), others: this.#wantedOthers() });
-    });
+    effect(() => this.entryChanged.emit(this.entry()));
   }
 
   protected sampleOf(header: string): string {
@@ -118,30 +99,22 @@ export class MappingForm {
       .join(', ');
   }
 
-  protected setFurther(header: string, isWanted: boolean): void {
-    const rest = this.form.controls.others.value.filter((name) => name !== header);
-    this.form.controls.others.setValue(isWanted ? [...rest, header] : rest);
-  }
-
   /** Codes are written in capitals, however they were typed. */
   protected capitalise(): void {
     const control = this.form.controls.currency;
     control.setValue(control.value.trim().toUpperCase());
   }
 
-  protected check(): void {
+  /** Shows what is missing and goes to the first of it. @returns whether nothing is. */
+  validate(): boolean {
     this.capitalise();
     for (const { key } of columnChoices) this.form.controls[key].updateValueAndValidity();
     this.form.markAllAsTouched();
-    if (this.form.invalid) {
+    if (this.form.invalid)
       this.#host.nativeElement
         .querySelector<HTMLElement>('mat-select.ng-invalid, input.ng-invalid')
         ?.focus();
-      return;
-    }
-    this.checkWanted.emit(
-      ImportMapping.parse({ ...this.form.getRawValue(), others: this.#wantedOthers() }),
-    );
+    return this.form.valid;
   }
 
   /** One column for one thing: every choice looks at the others. */
