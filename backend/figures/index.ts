@@ -1,4 +1,5 @@
 export * from './company-lines-layout';
+export * from './company-multiples-layout';
 export * from './company-plane-layout';
 export * from './coverage-map-layout';
 export * from './difference-bars-layout';
