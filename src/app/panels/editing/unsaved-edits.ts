@@ -23,7 +23,7 @@ export class UnsavedEdits {
   }
 
   /** Has the browser ask before the tab is closed. */
-  holdBack(event: BeforeUnloadEvent): void {
+  holdBack(event: Event): void {
     if (this.#words() !== '') event.preventDefault();
   }
 }
