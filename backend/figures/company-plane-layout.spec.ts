@@ -1,5 +1,6 @@
 import { type PlaneCompany, companyPlaneLayout, placesWithin } from './company-plane-layout';
 import { boxOf } from './room-for-names';
+import { figuresWidth } from './text-width';
 
 const plain = { title: 'growth', isLog: false, tick: (value: number) => value.toFixed(2) };
 const log = { title: 'market value, EUR m', isLog: true, tick: (value: number) => String(value) };
@@ -34,6 +35,7 @@ describe('company plane layout', () => {
       [410, 470],
       [90, 130],
       [1, 3],
+      [900, 8900],
       [1, 1e5],
       [1e-3, 1e12],
       [50, 50],
@@ -57,6 +59,12 @@ describe('company plane layout', () => {
             .withContext(words)
             .toBeLessThanOrEqual(plot.right + 1e-6);
         }
+        xTicks.slice(1).forEach(({ position, label }, place) => {
+          const room = (figuresWidth(label) + figuresWidth(xTicks[place].label)) / 2;
+          expect(position - xTicks[place].position)
+            .withContext(words)
+            .toBeGreaterThan(room);
+        });
       }
     }
   });

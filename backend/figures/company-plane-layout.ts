@@ -93,7 +93,7 @@ export function companyPlaneLayout(
       .map((point) => circleAt(point, isMany ? 3 : 4.5))
       .join(''),
     candidateMarks: on('out')
-      .map((point) => crossAt(point, isMany ? 1.5 : 2.5))
+      .map((point) => crossAt(point, isMany ? 2 : 2.5))
       .join(''),
     own: on('own').at(0) ?? null,
     names: namesOf(points, plot, width),

@@ -1,5 +1,6 @@
 import { type ScaleLinear, ticks } from 'd3';
 import type { PlacedTick } from './figure-types';
+import { figuresWidth } from './text-width';
 import { placedTicks, snugScale } from './value-axis';
 
 /** A scale of values on one axis, with its marks. */
@@ -33,14 +34,29 @@ export function planeAxis(
   }
   const exponents = snugScale(values.map(Math.log10), range, margin);
   const place = (value: number): number => exponents(Math.log10(value));
-  return {
-    place,
-    ticks: roundValues(exponents, count).map((value) => ({
-      value,
-      position: place(value),
-      label: words.tick(value, value),
-    })),
-  };
+  const marks = roundValues(exponents, count).map((value) => ({
+    value,
+    position: place(value),
+    label: words.tick(value, value),
+  }));
+  return { place, ticks: apart(marks, range[0] < range[1]) };
+}
+
+const figureHeight = 16;
+
+/** The marks whose figures do not run into those before them: linear values crowd towards a logarithmic axis' end. */
+function apart(marks: readonly PlacedTick[], isLevel: boolean): PlacedTick[] {
+  const kept: PlacedTick[] = [];
+  for (const mark of marks) {
+    const before = kept.at(-1);
+    const room = (tick: PlacedTick) => (isLevel ? figuresWidth(tick.label) + 8 : figureHeight) / 2;
+    if (
+      before === undefined ||
+      Math.abs(mark.position - before.position) >= room(mark) + room(before)
+    )
+      kept.push(mark);
+  }
+  return kept;
 }
 
 /** Powers of ten, with 2 and 5 times them where there is room; linear marks where the span is less than a power. */
