@@ -444,7 +444,7 @@ describe('the Peers page', () => {
       reason: 'Pumps alike',
       replaces: false,
     });
-    await press('Take all shown in with one reason…');
+    await press(`Take all ${shown.length} in with one reason…`);
     expect(ask.calls.mostRecent().args[0].companies).toEqual(shown);
     expect(ask.calls.mostRecent().args[0].reasons).toContain('Same customers');
     expect(words()).toContain(`${10 + shown.length} in, ${9 - shown.length} out`);
@@ -454,11 +454,31 @@ describe('the Peers page', () => {
       expect(peer).toEqual({ company: peer.company, isIncluded: true, reason: 'Pumps alike' });
   });
 
+  it('lists the nearest candidates, and more on request or where one of them is asked for', async () => {
+    start(['analyst']);
+    await loadMany(60);
+    const nearest = listedIn('out');
+    expect(nearest.length).toBe(20);
+    await press('List 9 more');
+    const all = listedIn('out');
+    expect(all.slice(0, 20)).toEqual(nearest);
+    expect(all.length).toBe(29);
+    fixture.destroy();
+    fixture = TestBed.createComponent(PeersPage);
+    fixture.componentRef.setInput('company', all[25].company);
+    document.body.append(page());
+    fixture.detectChanges();
+    await loadMany(60);
+    expect(document.activeElement?.getAttribute('aria-label')).toBe(
+      `Why ${all[25].company} is out`,
+    );
+  });
+
   it('changes nothing where no reason is given for several', async () => {
     start(['analyst']);
     await loadMany();
     spyOn(TestBed.inject(AskReason), 'ask').and.resolveTo(null);
-    await press('Leave all shown out with one reason…');
+    await press('Leave all 9 out with one reason…');
     expect(words()).toContain('10 in, 9 out, 18 reasons missing.');
   });
 

@@ -84,6 +84,7 @@ export class PeersPage {
 
   protected readonly note = signal('');
   protected readonly hasAllParts = signal(false);
+  protected readonly hasAllCandidates = signal(false);
   protected readonly isReadOnly = computed(
     () => !mayCall(apiRoutes.savePeerGroup, this.#session.roles()),
   );
@@ -93,6 +94,7 @@ export class PeersPage {
     const listed = {
       members: this.candidates.members(),
       candidates: this.candidates.candidates(),
+      hasAllCandidates: this.hasAllCandidates(),
     };
     return peersShown(view.ground, view.draft, listed, this.nearness.nearness());
   });
@@ -173,13 +175,16 @@ export class PeersPage {
 
   /** Brings a company's reason into view; where it is filtered away or the lists stop short of it, its name is asked for. */
   protected lookAt(company: string): void {
-    const page = this.shown();
-    if (page === null) return;
-    const isListed = [...page.inside, ...page.outside].some((row) => row.company.name === company);
+    if (!this.#isListed(company)) this.hasAllCandidates.set(true);
     const isKnown = this.store.companies().some(({ name }) => name === company);
-    if (!isListed && isKnown && company !== page.own?.name)
+    if (!this.#isListed(company) && isKnown && company !== this.store.ownCompany())
       this.candidates.filter({ ...noFilters, name: company });
     afterNextRender(() => this.focusReason(company), { injector: this.#injector });
+  }
+
+  #isListed(company: string): boolean {
+    const { inside, outside } = this.shown() ?? { inside: [], outside: [] };
+    return [...inside, ...outside].some((row) => row.company.name === company);
   }
 
   protected orderMembers(by: string): void {

@@ -6,11 +6,15 @@ import type { PeersGround } from './peers-ground';
 import type { PeerRow } from './table/peer-table';
 
 const mostShown = 200;
+/** So many candidates stand beside the members until more are asked for. */
+const nearestShown = 20;
 
 /** Members and candidates in the order in which they are to be listed. */
 export interface ListedPeers {
   readonly members: readonly PanelCompany[];
   readonly candidates: readonly PanelCompany[];
+  /** Lists more than the nearest candidates. */
+  readonly hasAllCandidates: boolean;
 }
 
 export interface PeersShown {
@@ -18,11 +22,14 @@ export interface PeersShown {
   readonly source: string;
   /** The members listed, at most 200. */
   readonly inside: readonly PeerRow[];
-  /** The candidates listed, at most 200. */
+  /** The nearest candidates listed: 20, or at most 200. */
   readonly outside: readonly PeerRow[];
   readonly inCount: number;
   readonly outCount: number;
+  /** How many members and candidates are beyond what can be listed. */
   readonly notShown: number;
+  /** How many candidates are listed on request. */
+  readonly onRequest: number;
   /** Companies without a written reason. */
   readonly missing: readonly string[];
   readonly own: PanelCompany | undefined;
@@ -51,6 +58,7 @@ export function peersShown(
     whyNone: nearness.without.get(company.name) ?? '',
     ...(without === null ? {} : { standingWithout: without.byCompany.get(company.name) ?? null }),
   });
+  const candidatesShown = listed.hasAllCandidates ? mostShown : nearestShown;
   const inCount = others.filter(isInside).length;
   const outCount = others.length - inCount;
   const panel = panelVersions.find(({ id }) => id === draft.panelVersionId);
@@ -61,12 +69,13 @@ export function peersShown(
         ? ''
         : `${panel.panelName} v${panel.number} · ${counted(panel.companies, 'company', 'companies')}, ${yearsText(panel.firstYear, panel.lastYear)}`,
     inside: listed.members.slice(0, mostShown).map(toRow),
-    outside: listed.candidates.slice(0, mostShown).map(toRow),
+    outside: listed.candidates.slice(0, candidatesShown).map(toRow),
     inCount,
     outCount,
     notShown:
       Math.max(0, listed.members.length - mostShown) +
       Math.max(0, listed.candidates.length - mostShown),
+    onRequest: Math.max(0, Math.min(listed.candidates.length, mostShown) - candidatesShown),
     missing: [...others.filter(isInside), ...others.filter((company) => !isInside(company))]
       .filter((company) => reason(company).trim() === '')
       .map(({ name }) => name),

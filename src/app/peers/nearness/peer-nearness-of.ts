@@ -121,8 +121,13 @@ function whyWithout(
     companies
       .filter((company) => company !== own)
       .flatMap((company) => {
-        const unknown = measures.filter((measure) => measure.valueOf(company) === null);
-        const words = unknown.map((measure) => `no ${measure.label}: ${measure.whyNone(company)}`);
+        const byReason = new Map<string, string[]>();
+        for (const measure of measures) {
+          if (measure.valueOf(company) !== null) continue;
+          const why = measure.whyNone(company);
+          byReason.set(why, [...(byReason.get(why) ?? []), measure.label]);
+        }
+        const words = [...byReason].map(([why, labels]) => `no ${listed(labels, 'or')}: ${why}`);
         return words.length === 0 ? [] : [[company.name, words.join('; ')] as const];
       }),
   );

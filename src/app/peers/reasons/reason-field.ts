@@ -52,7 +52,7 @@ export const longestReason = 2000;
   styles: `
     :host {
       display: block;
-      min-inline-size: 220px;
+      min-inline-size: 180px;
     }
     textarea {
       display: block;

@@ -91,10 +91,13 @@ export class PeerTable {
     return this.#numbers.figure(value, kind, this.#standingDigits());
   }
 
-  /** `FY2010–FY2020, 10 of 11 rows complete`. */
-  protected facts({ firstYear, lastYear, rows, completeRows }: PanelCompany): string {
-    const complete = completeRows === rows ? '' : `, ${completeRows} of ${rows} rows complete`;
-    return yearsText(firstYear, lastYear) + complete;
+  protected years({ firstYear, lastYear }: PanelCompany): string {
+    return yearsText(firstYear, lastYear);
+  }
+
+  /** `, 10 of 11 rows complete`; nothing where all are. */
+  protected rowsWords({ rows, completeRows }: PanelCompany): string {
+    return completeRows === rows ? '' : `, ${completeRows} of ${rows} rows complete`;
   }
 
   protected distance({ nearness }: PeerRow): string {
