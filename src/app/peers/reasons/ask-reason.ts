@@ -19,7 +19,7 @@ export class AskReason {
     });
     const opened = this.#injector
       .get(MatDialog)
-      .open<unknown, ReasonQuestion, ReasonAnswer>(ReasonDialog, config);
-    return (await firstValueFrom(opened.afterClosed(), { defaultValue: undefined })) ?? null;
+      .open<unknown, ReasonQuestion, ReasonAnswer | null>(ReasonDialog, config);
+    return (await firstValueFrom(opened.afterClosed(), { defaultValue: null })) ?? null;
   }
 }

@@ -83,7 +83,7 @@ const mostNamed = 8;
         }
       </mat-dialog-content>
       <mat-dialog-actions align="end">
-        <button matButton type="button" mat-dialog-close>Keep it as it is</button>
+        <button matButton type="button" [mat-dialog-close]="null">Keep it as it is</button>
         <button matButton="filled" type="submit" [disabled]="!isWritten()">
           {{ question.action }}
         </button>
