@@ -6,8 +6,9 @@ import { FiscalYearPart } from './fiscal-year-part';
 import { type MappingEntry, startingEntry } from './mapping-entry';
 import { OtherColumns } from './other-columns';
 import { PricePart } from './price-part';
+import { ReviewTable } from './review-table';
 import { SpellingList } from './spelling-list';
-import { flowDraft, flowVersion, uuid } from './testing/import-replies';
+import { flowCheck, flowDraft, flowVersion, uuid } from './testing/import-replies';
 
 const entry = startingEntry(flowDraft, undefined, flowVersion);
 
@@ -120,6 +121,43 @@ describe('fiscal years', () => {
     await fixture.whenStable();
     host.querySelector<HTMLButtonElement>('[aria-label="Remove Aldren SE"]')?.click();
     expect(changes[2].companies).toEqual([]);
+  });
+});
+
+describe('the rows to look at', () => {
+  it('mark the cell, say why, and can be shown by kind', async () => {
+    const fixture = TestBed.createComponent(ReviewTable);
+    const host = fixture.nativeElement as HTMLElement;
+    const cells = ['A', '2011', 'abc', '2', '3', '7', 'EUR'];
+    fixture.componentRef.setInput('check', {
+      ...flowCheck,
+      findings: [
+        {
+          row: 3,
+          column: 'mv',
+          found: 'abc',
+          code: 'not-a-number',
+          detail: 'Expected a number.',
+          isBlocking: true,
+        },
+        ...flowCheck.findings,
+      ],
+      findingCount: 2,
+      reviewRows: [...flowCheck.reviewRows, { row: 3, cells, isTaken: false, isExcluded: false }],
+    });
+    fixture.componentRef.setInput('headers', flowDraft.headers);
+    fixture.componentRef.setInput('usedHeaders', ['firm', 'fy', 'mv', 'capex', 'equity']);
+    fixture.componentRef.setInput('yearHeader', 'fy');
+    fixture.componentRef.setInput('mending', noMending);
+    await fixture.whenStable();
+    expect(host.querySelector('td.error')?.textContent.trim()).toBe('abc');
+    expect(host.querySelector('td.caution')?.textContent.trim()).toBe('empty');
+    const titles = [...host.querySelectorAll('thead th')].map((each) => each.textContent);
+    expect(titles).toEqual(['Line', 'firm', 'fy', 'mv', 'capex', 'equity', 'Row']);
+    pressIn(host, 'Not a number 1');
+    await fixture.whenStable();
+    const lines = [...host.querySelectorAll('tbody th')].map((each) => each.textContent);
+    expect(lines).toEqual(['3']);
   });
 });
 

@@ -70,8 +70,11 @@ export class ReviewTable {
     this.limit.update((limit) => limit + shownAtOnce);
   }
 
-  protected isMarked({ findings }: ReviewedRow, column: number): boolean {
-    return findings.some((placed) => placed.column === column);
+  /** How the cell is marked: by the gravest of what was found in it. */
+  protected markOf({ findings }: ReviewedRow, column: number): 'error' | 'caution' | null {
+    const own = findings.filter((placed) => placed.column === column);
+    if (own.length === 0) return null;
+    return own.some(({ finding }) => finding.isBlocking) ? 'error' : 'caution';
   }
 
   protected textOf(finding: ImportFinding): string {
