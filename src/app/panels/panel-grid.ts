@@ -12,6 +12,7 @@ import {
   linkedSignal,
   output,
   signal,
+  untracked,
 } from '@angular/core';
 import type { PanelColumn } from '@contract';
 import { AgGridAngular } from 'ag-grid-angular';
@@ -29,43 +30,24 @@ import { blockCommand } from './editing/block-keys';
 import { followPointer } from './editing/block-pointer';
 import { type GridPlace, rangeOf } from './editing/cell-block';
 import { type ShownGrid, copiedText } from './editing/copy-cells';
+import { changedRows } from './editing/changed-rows';
 import { GridBlock } from './editing/grid-block';
-import { type CellChange, type PanelEdits, cellKey, noEdits, rowKey } from './editing/panel-edits';
-import { panelValue, pastedCells, placeWords } from './editing/paste-cells';
-import { readFigures } from './editing/read-figure';
+import {
+  type GivenCells,
+  type GridSelection,
+  emptiedCells,
+  rowsIn,
+  selectionOf,
+  sizeWords,
+} from './editing/grid-selection';
+import { type PanelEdits, cellKey, noEdits, rowKey } from './editing/panel-edits';
+import { pastedCells, typedFigure } from './editing/paste-cells';
 import { figureText, shiftOf } from './editing/shown-figure';
 import { gridColumns } from './grid-columns';
 import { figureAt, gridColumnIds, leadingColumns } from './grid-places';
 import { gridHeadHeight, gridModules, gridRowHeight, gridTheme } from './grid-settings';
 import type { PanelRow } from './panel-rows';
-
-/** Which row is asked for: by the line of the imported file, or by what it is. */
-export type RowFocus =
-  | { readonly line: number }
-  | {
-      readonly company: string;
-      readonly year: number;
-      /** Position among the panel's columns; the row as a whole without it. */
-      readonly column?: number;
-    };
-
-/** The cells that are selected. */
-export interface GridSelection {
-  readonly rows: number;
-  readonly columns: number;
-  /** The row of the cell that has the focus. */
-  readonly company: string;
-  readonly year: number;
-  /** Its position among the panel's columns; undefined at company, year and line. */
-  readonly column: number | undefined;
-}
-
-/** Figures that a person gave the cells. */
-export interface GivenCells {
-  readonly changes: readonly CellChange[];
-  /** What was done, as `pasted`. */
-  readonly done: 'typed' | 'pasted' | 'emptied' | 'cut';
-}
+import { type RowFocus, isAsked } from './row-focus';
 
 /** The panel's rows: sorted, filtered, selected and copied by block; typed and pasted into where they may be changed. */
 @Component({
@@ -147,7 +129,21 @@ export class PanelGrid {
   protected readonly isRendered = signal(false);
   /** New each time that the grid has taken over rows. */
   protected readonly tick = signal(0);
-  protected readonly shownRows = computed(() => [...this.rows()]);
+  /**
+   * What the grid was given, and the rows whose figures changed since: comparing 200,000 rows by their ids at each
+   * change of a cell would be felt. A row that changes keeps its place, also where the grid is sorted by it.
+   */
+  readonly #given = linkedSignal<readonly PanelRow[], GivenRows>({
+    source: this.rows,
+    computation: (rows, previous) => {
+      const isFirst = previous === undefined || untracked(this.#api) === null;
+      const changed = isFirst ? null : changedRows(previous.source, rows);
+      return changed === null
+        ? { rowData: [...rows], changed: [] }
+        : { rowData: previous?.value.rowData ?? [], changed };
+    },
+  });
+  protected readonly shownRows = computed(() => this.#given().rowData);
   /** As high as its rows, up to what leaves the page readable. */
   protected readonly height = computed(() => {
     const rows = Math.max(3, this.rows().length) * gridRowHeight;
@@ -204,6 +200,12 @@ export class PanelGrid {
       stopFollowing();
       this.#host.removeEventListener('keydown', readKey, { capture: true });
     });
+    effect(() => {
+      const { changed } = this.#given();
+      const api = untracked(this.#api);
+      for (const row of changed) api?.getRowNode(rowKey(row))?.updateData(row);
+      if (changed.length > 0) this.shownChanged.emit();
+    });
     // Cells whose value stays the same get or lose their marks with the edits and flags.
     effect(() => {
       this.edits();
@@ -214,7 +216,7 @@ export class PanelGrid {
     afterRenderEffect({
       write: () => {
         this.rows();
-        this.selected.emit(this.#selection());
+        this.selected.emit(selectionOf(this.block()?.block() ?? null, this.shown()));
       },
     });
     afterRenderEffect({
@@ -246,12 +248,7 @@ export class PanelGrid {
   /** The rows that the selected block touches. */
   selectedRows(): readonly PanelRow[] {
     const block = this.block()?.block() ?? null;
-    if (block === null) return [];
-    const { firstRow, lastRow } = rangeOf(block);
-    const { rowAt } = this.shown();
-    return Array.from({ length: lastRow - firstRow + 1 }, (_, at) => rowAt(firstRow + at)).filter(
-      (row) => row !== undefined,
-    );
+    return block === null ? [] : rowsIn(rangeOf(block), this.shown());
   }
 
   /** Goes to a cell once its row is in the grid. */
@@ -282,18 +279,13 @@ export class PanelGrid {
   protected take({ data, column, newValue }: CellEditRequestEvent<PanelRow, unknown>): void {
     const figure = figureAt(this.#columnIds().indexOf(column.getColId()), this.columns());
     if (figure === undefined || typeof newValue !== 'string') return;
-    const [[value]] = readFigures([[newValue]]);
-    const grid = this.shown();
-    if (value === undefined) {
-      this.refused.emit({
-        title: 'Not taken: a cell holds a number, or nothing',
-        places: [`${placeWords(data, figure, grid)}: found “${newValue.trim()}”`],
+    const outcome = typedFigure(newValue, data, figure, this.shown());
+    if ('problem' in outcome) this.refused.emit(outcome.problem);
+    else
+      this.cellsGiven.emit({
+        changes: [outcome],
+        done: outcome.value === null ? 'emptied' : 'typed',
       });
-      return;
-    }
-    const place = { company: data.company, year: data.year, column: figure };
-    const change = { place, value: panelValue(value, data, figure, grid) };
-    this.cellsGiven.emit({ changes: [change], done: value === null ? 'emptied' : 'typed' });
   }
 
   protected copy(event: ClipboardEvent): void {
@@ -302,11 +294,7 @@ export class PanelGrid {
     const range = rangeOf(block);
     event.clipboardData.setData('text/plain', copiedText(range, this.shown()));
     event.preventDefault();
-    const [rows, columns] = [
-      range.lastRow - range.firstRow + 1,
-      range.lastColumn - range.firstColumn + 1,
-    ];
-    const size = rows * columns === 1 ? '1 cell' : `${rows} × ${columns} cells`;
+    const size = sizeWords(range);
     this.copied.emit(`${size} copied at full precision, money in ${this.#numbers.unitLabel()}`);
   }
 
@@ -332,14 +320,7 @@ export class PanelGrid {
   #empty(done: 'emptied' | 'cut'): void {
     const block = this.block()?.block();
     if (block == null || !this.mayChange()) return;
-    const { firstColumn, lastColumn } = rangeOf(block);
-    const changes: CellChange[] = [];
-    for (const { company, year } of this.selectedRows())
-      for (let position = firstColumn; position <= lastColumn; position++) {
-        const column = figureAt(position, this.columns());
-        if (column !== undefined) changes.push({ place: { company, year, column }, value: null });
-      }
-    this.cellsGiven.emit({ changes, done });
+    this.cellsGiven.emit({ changes: emptiedCells(rangeOf(block), this.shown()), done });
   }
 
   #readKey(event: KeyboardEvent): void {
@@ -367,21 +348,6 @@ export class PanelGrid {
     return target instanceof Element && target.matches('.ag-cell');
   }
 
-  #selection(): GridSelection | null {
-    const block = this.block()?.block() ?? null;
-    if (block === null) return null;
-    const row = this.shown().rowAt(block.head.row);
-    if (row === undefined) return null;
-    const { firstRow, lastRow, firstColumn, lastColumn } = rangeOf(block);
-    return {
-      rows: lastRow - firstRow + 1,
-      columns: lastColumn - firstColumn + 1,
-      company: row.company,
-      year: row.year,
-      column: figureAt(block.head.column, this.columns()),
-    };
-  }
-
   /** @returns whether the row is there. */
   #follow(focus: RowFocus): boolean {
     const api = this.#api();
@@ -399,11 +365,9 @@ export class PanelGrid {
   }
 }
 
-function isAsked(row: PanelRow, focus: RowFocus | null): boolean {
-  if (focus === null) return false;
-  return 'line' in focus
-    ? row.fileRow === focus.line
-    : row.company === focus.company && row.year === focus.year;
+interface GivenRows {
+  readonly rowData: PanelRow[];
+  readonly changed: readonly PanelRow[];
 }
 
 /** Left free under the rows where the columns do not fit and scroll. */

@@ -21,13 +21,15 @@ import { NumberFormat } from '../../ui/number-format';
 import { counted } from '../../ui/phrases';
 import type { ShownProblem } from '../../ui/problem';
 import { ProblemNotice } from '../../ui/problem-notice';
-import { type GivenCells, type GridSelection, PanelGrid, type RowFocus } from '../panel-grid';
+import { PanelGrid } from '../panel-grid';
 import { type PanelRow, kindOf } from '../panel-rows';
+import type { RowFocus } from '../row-focus';
 import { CellLine, type LookedAtCell } from './cell-line';
 import { editsWords } from './edit-words';
 import { EditsStore, mostCells, mostRows } from './edits-store';
 import { findCells } from './find-cells';
 import { FindField } from './find-field';
+import type { GivenCells, GridSelection } from './grid-selection';
 import { PanelDialogs } from './panel-dialogs';
 import { cellKey, rowKey } from './panel-edits';
 import {

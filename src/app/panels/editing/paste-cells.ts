@@ -70,7 +70,7 @@ export function pastedCells(text: string, range: CellRange, grid: ShownGrid): Pa
  * A figure in the unit that is shown, in the panel's. Where the cell shows this very figure already it keeps its value
  * to the last bit.
  */
-export function panelValue(
+function panelValue(
   figure: number | null,
   row: PanelRow,
   column: number,
@@ -82,8 +82,27 @@ export function panelValue(
   return before !== null && shifted(before, shift) === figure ? before : shifted(figure, -shift);
 }
 
+/** The change that a text typed into a cell makes, or why it makes none. */
+export function typedFigure(
+  text: string,
+  row: PanelRow,
+  column: number,
+  grid: ShownGrid,
+): CellChange | { readonly problem: ShownProblem } {
+  const [[figure]] = readFigures([[text]]);
+  if (figure === undefined)
+    return {
+      problem: {
+        title: 'Not taken: a cell holds a number, or nothing',
+        places: [`${placeWords(row, column, grid)}: found “${text.trim()}”`],
+      },
+    };
+  const place = { company: row.company, year: row.year, column };
+  return { place, value: panelValue(figure, row, column, grid) };
+}
+
 /** `Kesdrin 2021, Capex`. */
-export function placeWords(row: PanelRow, column: number, grid: ShownGrid): string {
+function placeWords(row: PanelRow, column: number, grid: ShownGrid): string {
   return `${row.company} ${row.year}, ${columnTitle(grid.columns[column])}`;
 }
 
