@@ -5,7 +5,7 @@ const cells: CoverageCell[] = [
   { company: 'Ardwyne', year: 2020, missing: [] },
   { company: 'Ardwyne', year: 2022, missing: ['capex'] },
   { company: 'Velmara', year: 2020, missing: variables },
-  { company: 'Velmara', year: 2021, missing: [], isFlagged: true },
+  { company: 'Velmara', year: 2021, missing: [], flagged: ['capex'] },
 ];
 const data = { cells, variables, variable: null, ownCompany: 'Velmara' };
 
@@ -15,12 +15,15 @@ describe('coverage map layout', () => {
     expect(rows.map((row) => row.company)).toEqual(['Velmara', 'Ardwyne']);
     expect(rows[0].cells.map((cell) => cell.state)).toEqual(['none', 'complete', 'none']);
     expect(rows[1].cells.map((cell) => cell.state)).toEqual(['complete', 'none', 'some']);
-    expect(rows[0].cells[1].isFlagged).toBeTrue();
+    expect(rows[0].cells[1].flagged).toEqual(['capex']);
   });
 
   it('judges by one variable where one is chosen', () => {
     const [, ardwyne] = coverageMapLayout({ ...data, variable: 'capex' }, 600).rows;
     expect(ardwyne.cells.map((cell) => cell.state)).toEqual(['complete', 'none', 'none']);
+    const [ofCapex] = coverageMapLayout({ ...data, variable: 'capex' }, 600).rows;
+    const [ofEquity] = coverageMapLayout({ ...data, variable: 'book equity' }, 600).rows;
+    expect([ofCapex.cells[1].flagged, ofEquity.cells[1].flagged]).toEqual([['capex'], []]);
     const byEquity = coverageMapLayout({ ...data, variable: 'book equity' }, 600).rows[1];
     expect(byEquity.cells.map((cell) => cell.state)).toEqual(['complete', 'none', 'complete']);
   });
@@ -36,6 +39,25 @@ describe('coverage map layout', () => {
     expect(layout.cellWidth).toBeGreaterThanOrEqual(18);
     expect(layout.width).toBeGreaterThan(360);
     expect(layout.years.at(-1)?.label).toBe('2025');
+  });
+
+  it('draws one outline around each run of companies that stand together in the frame', () => {
+    const many = ['Brovik', 'Dunmar', 'Eskel', 'Ardwyne'].flatMap((company) =>
+      [2020, 2021, 2022].map((year) => ({ company, year, missing: [] })),
+    );
+    const frame = { firstYear: 2021, lastYear: 2022, companies: ['Ardwyne', 'Eskel', 'Dunmar'] };
+    const layout = coverageMapLayout({ ...data, cells: many, ownCompany: null, frame }, 600);
+    const { left, top, cellWidth, cellHeight } = layout;
+    expect(layout.frame).toEqual([
+      { x: left + cellWidth, y: top, width: 2 * cellWidth, height: cellHeight },
+      {
+        x: left + cellWidth,
+        y: top + 2 * cellHeight,
+        width: 2 * cellWidth,
+        height: 2 * cellHeight,
+      },
+    ]);
+    expect(coverageMapLayout(data, 600).frame).toEqual([]);
   });
 
   it('stands without cells', () => {

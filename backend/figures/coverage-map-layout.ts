@@ -8,8 +8,15 @@ export interface CoverageCell {
   readonly year: number;
   /** Names of the variables without a value. */
   readonly missing: readonly string[];
-  /** A value that someone should look at. */
-  readonly isFlagged?: boolean;
+  /** Names of the variables with a value that someone should look at. */
+  readonly flagged?: readonly string[];
+}
+
+/** Consecutive years in which all of some companies have every figure. */
+export interface CoverageFrame {
+  readonly firstYear: number;
+  readonly lastYear: number;
+  readonly companies: readonly string[];
 }
 
 export interface CoverageData {
@@ -19,6 +26,8 @@ export interface CoverageData {
   /** Only this variable counts; null counts all. */
   readonly variable: string | null;
   readonly ownCompany: string | null;
+  /** Drawn as an outline. */
+  readonly frame?: CoverageFrame | null;
 }
 
 export type CoverageState = 'complete' | 'some' | 'none';
@@ -28,7 +37,7 @@ export interface PlacedCoverageCell {
   readonly x: number;
   readonly state: CoverageState;
   readonly missing: readonly string[];
-  readonly isFlagged: boolean;
+  readonly flagged: readonly string[];
 }
 
 export interface CoverageRow {
@@ -51,6 +60,15 @@ export interface CoverageMapLayout {
   readonly years: readonly PlacedTick[];
   /** Own company first, the others in the order of the alphabet. */
   readonly rows: readonly CoverageRow[];
+  /** Around the frame: one outline for each run of its companies that stand together. */
+  readonly frame: readonly FrameBox[];
+}
+
+export interface FrameBox {
+  readonly x: number;
+  readonly y: number;
+  readonly width: number;
+  readonly height: number;
 }
 
 const leastCell = 18;
@@ -116,10 +134,47 @@ export function coverageMapLayout(data: CoverageData, width: number): CoverageMa
             x: placeOf(year),
             state: stateOf({ missing }, wanted.length),
             missing,
-            isFlagged: cell?.isFlagged ?? false,
+            flagged: wanted.filter((name) => cell?.flagged?.includes(name) ?? false),
           };
         }),
       };
     }),
+    frame: frameBoxes(data.frame ?? null, companies, { first, left, cellWidth, rowHeight }),
   };
+}
+
+/** The companies stand by name, those of the frame wherever that puts them. */
+function frameBoxes(
+  frame: CoverageFrame | null,
+  companies: readonly string[],
+  {
+    first,
+    left,
+    cellWidth,
+    rowHeight,
+  }: {
+    readonly first: number;
+    readonly left: number;
+    readonly cellWidth: number;
+    readonly rowHeight: number;
+  },
+): readonly FrameBox[] {
+  if (frame === null) return [];
+  const within = new Set(frame.companies);
+  const boxes: FrameBox[] = [];
+  companies.forEach((company, place) => {
+    if (!within.has(company)) return;
+    const last = boxes.at(-1);
+    const y = headHeight + place * rowHeight;
+    if (last !== undefined && last.y + last.height === y)
+      boxes[boxes.length - 1] = { ...last, height: last.height + rowHeight };
+    else
+      boxes.push({
+        x: left + (frame.firstYear - first) * cellWidth,
+        y,
+        width: (frame.lastYear - frame.firstYear + 1) * cellWidth,
+        height: rowHeight,
+      });
+  });
+  return boxes;
 }

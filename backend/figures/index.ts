@@ -1,4 +1,6 @@
 export * from './company-lines-layout';
+export * from './company-multiples-layout';
+export * from './company-plane-layout';
 export * from './coverage-map-layout';
 export * from './difference-bars-layout';
 export * from './expected-path-layout';
@@ -9,6 +11,7 @@ export * from './interval-rows-layout';
 export * from './leave-one-out-layout';
 export { diamondPath, planMarkPath } from './mark-paths';
 export * from './number-text';
+export type { PlaneAxisWords } from './plane-axis';
 export * from './residual-groups-layout';
 export * from './residual-scatter-layout';
 export * from './slope-intervals-layout';

@@ -29,6 +29,12 @@ export function circleAt({ x, y }: Point, radius: number): string {
   return `M${rounded(x - radius)},${rounded(y)}${arc} ${2 * radius},0${arc} ${-2 * radius},0Z`;
 }
 
+/** The mark of what stands outside, around a place, for many in one path. */
+export function crossAt({ x, y }: Point, radius: number): string {
+  const across = 2 * radius;
+  return `M${rounded(x - radius)},${rounded(y - radius)}l${across},${across}M${rounded(x + radius)},${rounded(y - radius)}l${-across},${across}`;
+}
+
 /** A tenth of a pixel is finer than anyone sees, and keeps a path of thousands of marks short. */
 function rounded(pixels: number): number {
   return Math.round(pixels * 10) / 10;

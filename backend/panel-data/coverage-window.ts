@@ -70,9 +70,13 @@ function largest(
   for (let end = 0; end <= lastYear - firstYear; end++) {
     const longest = runs.map((run) => run[end]).sort((left, right) => right - left);
     const most = own === -1 ? Infinity : runs[own][end];
+    let tried = 0;
     for (let count = fewestCompanies; count <= longest.length; count++) {
       const years = Math.min(longest[count - 1], most);
       if (years < fewestYears) break;
+      // As many years as before are the same window: of thousands of companies it is looked at once.
+      if (years === tried) continue;
+      tried = years;
       // Where the own company's run is the shorter one, more companies fit into the same years.
       const fitting = longest.filter((run) => run >= years).length;
       const size = years * fitting;

@@ -1,8 +1,10 @@
 import {
   CellStyleModule,
   ClientSideRowModelModule,
+  CustomEditorModule,
   type Module,
   NumberFilterModule,
+  RenderApiModule,
   RowApiModule,
   RowStyleModule,
   ScrollApiModule,
@@ -14,7 +16,9 @@ import {
 export const gridModules: readonly Module[] = [
   CellStyleModule,
   ClientSideRowModelModule,
+  CustomEditorModule,
   NumberFilterModule,
+  RenderApiModule,
   RowApiModule,
   RowStyleModule,
   ScrollApiModule,

@@ -35,16 +35,21 @@ export function panelCompleteness(
   };
 }
 
-/** `14 companies, FY2008–FY2025: 5 cells missing`. */
-export function panelFinding(found: PanelCompleteness): string {
+/**
+ * `14 companies, FY2008–FY2025: 5 cells missing, 3 figures to look at`.
+ *
+ * @param toLookAt  figures that stand out and nobody found to be right.
+ */
+export function panelFinding(found: PanelCompleteness, toLookAt: number): string {
   const gaps = [
     ...(found.missingCells === 0 ? [] : [`${counted(found.missingCells, 'cell')} missing`]),
     ...(found.yearsWithoutRow === 0
       ? []
       : [`${counted(found.yearsWithoutRow, 'company year')} without a row`]),
   ];
-  const state = gaps.length === 0 ? 'no cell missing' : gaps.join(', ');
-  return `${companiesAndYears(found)}: ${state}`;
+  const state = gaps.length === 0 ? ['no cell missing'] : gaps;
+  const standing = toLookAt === 0 ? [] : [`${counted(toLookAt, 'figure')} to look at`];
+  return `${companiesAndYears(found)}: ${[...state, ...standing].join(', ')}`;
 }
 
 /** `14 companies, FY2008–FY2025`. */

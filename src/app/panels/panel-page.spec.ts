@@ -17,6 +17,8 @@ const id = (last: number): string => `0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a00${10 + l
 const version: PanelVersionSummary = {
   id: id(1),
   panelId: id(2),
+  parentId: null,
+  origin: 'import',
   panelName: 'Flow control',
   number: 1,
   currency: 'EUR',
@@ -109,8 +111,19 @@ describe('the Panel page', () => {
       fit: null,
       editionsWaiting: 0,
     });
-    if (versions.length > 0) http.expectOne(`/api/panel-versions/${version.id}`).flush(panel);
+    if (versions.length === 0) {
+      await settled();
+      return;
+    }
+    http.expectOne(`/api/panel-versions/${version.id}`).flush(panel);
     await settled();
+    http.expectOne(`/api/panels/${version.panelId}/flag-dismissals`).flush({ dismissals: [] });
+    await until(() => page().querySelector('kv-flag-list .groups') !== null);
+    await until(() => page().querySelector('kv-panel-versions') !== null);
+  }
+
+  async function until(isSo: () => boolean): Promise<void> {
+    while (!isSo()) await settled();
   }
 
   function page(): HTMLElement {
@@ -134,8 +147,8 @@ describe('the Panel page', () => {
       '2 companies, FY2010–FY2011: 1 cell missing',
     );
     expect(words()).toContain('Flow control, version 1 · EUR m · 3 rows, 2 of them complete');
-    expect(page().querySelector('kv-gap-list')?.textContent).toContain('Sarvane FY2010');
-    expect(page().querySelector('kv-gap-list')?.textContent).toContain('Velmara FY2011');
+    expect(page().querySelector('kv-flag-list')?.textContent).toContain('Sarvane FY2010');
+    expect(page().querySelector('kv-flag-list')?.textContent).toContain('Velmara FY2011');
     expect(words()).toContain('capex “capex”, book equity “equity”');
   });
 
@@ -176,9 +189,44 @@ describe('the Panel page', () => {
   it('leads from a missing cell to its row, by the line of the file', async () => {
     open(['analyst']);
     await answer([version]);
-    named('Sarvane FY2010')?.click();
-    await settled();
-    expect(TestBed.inject(Router).url).toContain('row=2');
+    named('Sarvane FY2010 capex')?.click();
+    await until(() => TestBed.inject(Router).url.includes('row='));
+    expect(TestBed.inject(Router).url).toContain('row=2&column=1');
+  });
+
+  it('offers to say that a figure is right, to analysts and on the newest version only', async () => {
+    open(['analyst']);
+    await answer([version]);
+    expect(
+      page().querySelector('[aria-label="Right as it is: Sarvane FY2010 capex"]'),
+    ).not.toBeNull();
+  });
+
+  it('lets an older version’s flags be', async () => {
+    open(['analyst'], { panelVersionId: version.id });
+    await answer([{ ...version, id: id(5), number: 2 }, version]);
+    expect(page().querySelector('[aria-label^="Right as it is"]')).toBeNull();
+  });
+
+  it('looks through what is typed and not saved', async () => {
+    open(['analyst']);
+    await answer([version]);
+    await until(() => page().querySelector('kv-panel-rows') !== null);
+    const rows = panel.rows.company.map((company, row) => ({
+      fileRow: panel.rows.fileRow[row],
+      company,
+      year: panel.rows.year[row],
+      values: [panel.rows.values[0][row], -5, panel.rows.values[2][row]],
+    }));
+    fixture.debugElement
+      .query(({ name }) => name === 'kv-panel-rows')
+      .triggerEventHandler('editedChanged', rows);
+    await until(() => words().includes('3 figures are zero or negative'));
+    expect(page().querySelector('h1')?.textContent).toContain('3 figures to look at');
+    const dismiss = page().querySelector<HTMLButtonElement>(
+      '[aria-label="Right as it is: Sarvane FY2010 capex"]',
+    );
+    expect(dismiss?.disabled).toBeTrue();
   });
 
   it('says that a line asked for has no row here', async () => {

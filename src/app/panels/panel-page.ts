@@ -12,22 +12,28 @@ import {
 } from '@angular/core';
 import { MatButtonModule } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
-import type { PanelVersionSummary } from '@contract';
-import type { CoverageCell } from '@figures';
+import type { Flag } from '@panel-data';
+import { PanelsApi } from '../api/panels-api';
 import { SessionStore } from '../api/session-store';
 import { NumberFormat } from '../ui/number-format';
-import { PageContext, type StaleNotice } from '../ui/page-context';
+import { PageContext } from '../ui/page-context';
 import { PageHeader } from '../ui/page-header';
 import { ProblemNotice } from '../ui/problem-notice';
 import type { ChartText } from '../charts/chart-text';
-import { CoverageMap } from '../charts/coverage-map/coverage-map';
-import { BringInPanel } from './bring-in-panel';
-import { GapList } from './gap-list';
-import { panelCompleteness, panelFinding, yearSpan } from './panel-finding';
-import { PanelGrid, type RowFocus } from './panel-grid';
-import { columnSources, columnTitle, missingIn, panelRows } from './panel-rows';
+import { BringInPanel } from './importing/bring-in-panel';
+import { PanelDeskGrid } from './editing/panel-desk-grid';
+import { DismissalsStore } from './flags/dismissals-store';
+import { flagReason } from './flags/flag-words';
+import { FlagsStore } from './flags/flags-store';
+import { PanelCheck, type WantedPlace } from './flags/panel-check';
+import { MultiplesSection } from './multiples/multiples-section';
+import { panelContext, versionSource } from './panel-context';
+import { panelCompleteness, panelFinding } from './panel-finding';
+import { type PanelRow, columnSources, columnTitle, panelRows } from './panel-rows';
 import { PanelStore } from './panel-store';
-import { PanelVersions } from './panel-versions';
+import type { RowFocus } from './row-focus';
+import { PanelVersions } from './versions/panel-versions';
+import { newestOf } from './versions/version-words';
 import { counted } from '../ui/phrases';
 
 /** Is my data complete and right? The coverage of a panel version, its rows, and where it came from. */
@@ -35,18 +41,18 @@ import { counted } from '../ui/phrases';
   selector: 'kv-panel-page',
   imports: [
     BringInPanel,
-    CoverageMap,
-    GapList,
     MatButtonModule,
+    MultiplesSection,
     PageHeader,
-    PanelGrid,
+    PanelCheck,
+    PanelDeskGrid,
     PanelVersions,
     ProblemNotice,
     RouterLink,
   ],
   templateUrl: './panel-page.html',
   styleUrl: './panel-page.css',
-  providers: [PanelStore],
+  providers: [DismissalsStore, FlagsStore, PanelStore],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class PanelPage {
@@ -54,28 +60,48 @@ export class PanelPage {
   readonly #context = inject(PageContext);
   readonly #numbers = inject(NumberFormat);
   readonly #roles = inject(SessionStore).roles;
+  readonly #panels = inject(PanelsApi);
+  readonly #dismissals = inject(DismissalsStore);
+  protected readonly flags = inject(FlagsStore);
   protected readonly store = inject(PanelStore);
 
   /** From the address; without it the newest version is shown. */
   readonly panelVersionId = input<string>();
   /** Line of the file to look at, from the address. */
-  readonly row = input(null, { transform: lineOf });
+  readonly row = input(null, { transform: wholeNumber(1) });
+  /** Position of the column to look at in that row, from the address. */
+  readonly column = input(null, { transform: wholeNumber(0) });
 
   protected readonly mayChange = computed(() => this.#roles().includes('analyst'));
+  readonly #isNewest = computed(() => {
+    const view = this.store.view();
+    if (view.kind !== 'ready') return false;
+    const { version } = view.panel;
+    return newestOf(version, view.versions).id === version.id;
+  });
+  protected readonly mayDismiss = computed(() => this.mayChange() && this.#isNewest());
+  protected readonly templates = {
+    csv: this.#panels.templateAddress('csv'),
+    xlsx: this.#panels.templateAddress('xlsx'),
+  };
   protected readonly isBringingIn = signal(false);
-  protected readonly hasOnlyGaps = signal(false);
 
   readonly #panel = computed(() => {
     const view = this.store.view();
     return view.kind === 'ready' ? view.panel : null;
   });
-  protected readonly rows = computed(() => {
+  /** As the version has them. */
+  protected readonly savedRows = computed(() => {
     const panel = this.#panel();
     return panel === null ? [] : panelRows(panel);
   });
+  /** As they stand, with what is not saved. */
+  protected readonly rows = linkedSignal<readonly PanelRow[]>(() => this.savedRows());
   protected readonly titles = computed(() => this.#panel()?.columns.map(columnTitle) ?? []);
   protected readonly found = computed(() => panelCompleteness(this.rows(), this.titles()));
-  protected readonly finding = computed(() => panelFinding(this.found()));
+  protected readonly finding = computed(() =>
+    panelFinding(this.found(), this.flags.figuresToLookAt()),
+  );
   protected readonly sources = computed(() => {
     const panel = this.#panel();
     return panel === null ? '' : columnSources(panel);
@@ -87,31 +113,30 @@ export class PanelPage {
     const complete = `${counted(rows, 'row')}, ${completeRows.toLocaleString('en')} of them complete`;
     return `${version.panelName}, version ${version.number} · ${this.#numbers.unitLabel()} · ${complete}`;
   });
-  protected readonly cells = computed((): readonly CoverageCell[] =>
-    this.rows().map((row) => ({
-      company: row.company,
-      year: row.year,
-      missing: missingIn(row, this.titles()),
-    })),
-  );
-  /** The column that the map looks at; null for all. */
-  protected readonly variable = linkedSignal<readonly string[], string | null>({
-    source: this.titles,
-    computation: () => null,
-  });
   protected readonly mapText = computed((): ChartText => ({
     title: this.finding(),
     caption: this.source(),
-    source: `File ${this.#panel()?.version.file.name ?? ''}, SHA-256 ${this.#panel()?.version.file.sha256 ?? ''}`,
+    source: versionSource(this.#panel()?.version),
   }));
   /** The row that the address names, where this version has it; new each time it is asked for. */
   protected readonly focusedRow = linkedSignal((): RowFocus | null => {
-    const line = this.row();
-    return line !== null && this.rows().some(({ fileRow }) => fileRow === line) ? { line } : null;
+    const [line, column] = [this.row(), this.column()];
+    const found = this.savedRows().find(({ fileRow }) => fileRow === line);
+    if (line === null || found === undefined) return null;
+    const { company, year } = found;
+    return column === null ? { line } : { company, year, column };
   });
-  protected readonly missedLine = computed(() =>
-    this.#panel() !== null && this.focusedRow() === null ? this.row() : null,
-  );
+  protected readonly missedLine = computed(() => {
+    const line = this.row();
+    const isHere = this.savedRows().some(({ fileRow }) => fileRow === line);
+    return this.#panel() === null || isHere ? null : line;
+  });
+  /** A flag at the cell where it is shown. */
+  protected readonly flagWords = computed(() => {
+    const numbers = this.#numbers;
+    numbers.factor();
+    return (flag: Flag): string => flagReason(flag, numbers);
+  });
   /** The cell of the map that has no row behind it. */
   protected readonly emptyPlace = signal('');
 
@@ -125,66 +150,43 @@ export class PanelPage {
     effect(() => {
       const view = this.store.view();
       if (view.kind !== 'ready') return;
-      const { version } = view.panel;
-      this.#context.show({
-        currency: version.currency,
-        unit: version.unit,
-        lineage: [
-          {
-            label: 'Panel',
-            version: `v${version.number}`,
-            detail: yearSpan(version.firstYear, version.lastYear),
-            link: `/panel/${version.id}`,
-          },
-        ],
-        stale: staleNotice(version, view.versions),
-        ...(view.ownCompany === null ? {} : { ownCompany: view.ownCompany }),
+      const { panel, versions, ownCompany } = view;
+      this.#context.show(panelContext(panel.version, versions, ownCompany));
+      untracked(() => {
+        this.flags.forget();
+        void this.#dismissals.open(panel.version.panelId);
       });
     });
-    // A row that is asked for must be in the grid, whatever was left out before.
     effect(() => {
-      if (this.focusedRow() !== null) untracked(() => this.hasOnlyGaps.set(false));
+      const view = this.store.view();
+      if (view.kind === 'ready')
+        this.flags.lookThrough(this.rows(), view.panel.columns, view.ownCompany);
     });
   }
 
-  protected lookAt(title: string): void {
-    this.variable.set(title === '' ? null : title);
+  /** Goes on to the version that was saved. */
+  protected openVersion(panelVersionId: string): void {
+    void this.#router.navigate(['/panel', panelVersionId]);
   }
 
-  /** Leads to the row of the file behind a cell of the map; the address says which. */
-  protected openRow(place: { readonly company: string; readonly year: number }): void {
-    const found = this.rows().find(
-      (row) => row.company === place.company && row.year === place.year,
-    );
-    this.emptyPlace.set(found === undefined ? `${place.company} ${place.year}` : '');
-    const line = found?.fileRow ?? null;
-    if (line !== null && line === this.row()) {
-      this.focusedRow.set({ line });
+  /** Leads to a cell's row; the address says which line of the file that is. */
+  protected openPlace({ company, year, column = null }: WantedPlace): void {
+    const found = this.rows().find((row) => row.company === company && row.year === year);
+    this.emptyPlace.set(found === undefined ? `${company} ${year}` : '');
+    if (found === undefined) return;
+    const line = found.fileRow === 0 ? null : found.fileRow;
+    if (line === null || (line === this.row() && column === this.column())) {
+      this.focusedRow.set({ company, year, ...(column === null ? {} : { column }) });
       return;
     }
-    void this.#router.navigate([], {
-      queryParams: { row: line },
-      replaceUrl: true,
-    });
+    void this.#router.navigate([], { queryParams: { row: line, column }, replaceUrl: true });
   }
 }
 
-function lineOf(text: string | undefined): number | null {
-  const line = numberAttribute(text, 0);
-  return Number.isInteger(line) && line > 0 ? line : null;
-}
-
-/** Said where the panel that is shown has a newer version. */
-function staleNotice(
-  shown: PanelVersionSummary,
-  versions: readonly PanelVersionSummary[],
-): StaleNotice | null {
-  const newest = versions
-    .filter((version) => version.panelId === shown.panelId)
-    .reduce((latest, version) => (version.number > latest.number ? version : latest), shown);
-  if (newest.id === shown.id) return null;
-  return {
-    text: `This panel has a newer version, v${newest.number}.`,
-    action: { label: 'Open it', link: `/panel/${newest.id}` },
+/** A whole number above or at `least` in the address; null for anything else. */
+function wholeNumber(least: number): (text: string | undefined) => number | null {
+  return (text) => {
+    const number = numberAttribute(text, -1);
+    return Number.isInteger(number) && number >= least ? number : null;
   };
 }

@@ -1,8 +1,9 @@
-import type { ColumnRole, PanelVersionReply } from '@contract';
+import type { ColumnRole, PanelColumn, PanelVersionReply } from '@contract';
+import type { FigureKind } from '../ui/number-format';
 
 /** One row of the panel as the grid shows it. */
 export interface PanelRow {
-  /** Line of the imported file. */
+  /** Line of the imported file; 0 for a row that was added by hand. */
   readonly fileRow: number;
   readonly company: string;
   readonly year: number;
@@ -19,6 +20,11 @@ const roleNames: Readonly<Record<Exclude<ColumnRole, 'other'>, string>> = {
 /** What a column is called on screen: what it is to the model, or its header in the file. */
 export function columnTitle(column: PanelVersionReply['columns'][number]): string {
   return column.role === 'other' ? column.name : roleNames[column.role];
+}
+
+/** Figures of the model are money; a further column may be anything, so no unit is put on it. */
+export function kindOf(column: PanelColumn): FigureKind {
+  return column.role === 'other' ? 'plain' : 'money';
 }
 
 export function panelRows({ rows }: PanelVersionReply): readonly PanelRow[] {

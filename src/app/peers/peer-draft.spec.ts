@@ -1,8 +1,7 @@
 import type { PeerGroupReply } from '@contract';
-import { nearestFirst, sizeDistance } from './nearness';
 import {
-  type PanelCompany,
   changeChoice,
+  changeChoices,
   chosenPeers,
   isChanged,
   isSameDraft,
@@ -11,22 +10,11 @@ import {
   reasonsWritten,
   startDraft,
   toSavePeerGroup,
+  writtenCount,
 } from './peer-draft';
+import { panelCompany } from './testing/panel-company';
 
-function company(name: string, marketValue: number | null = 100): PanelCompany {
-  return {
-    name,
-    rows: 10,
-    completeRows: 10,
-    firstYear: 2010,
-    lastYear: 2019,
-    marketValue,
-    capex: null,
-    bookEquity: null,
-  };
-}
-
-const companies = ['Kesdrin', 'Sarvane', 'Velmara'].map((name) => company(name));
+const companies = ['Kesdrin', 'Sarvane', 'Velmara'].map((name) => panelCompany(name));
 const saved: PeerGroupReply = {
   id: 'group-2',
   number: 2,
@@ -62,7 +50,7 @@ describe('a choice of peers before it is saved', () => {
   });
 
   it('leaves a company that is new in the panel outside and without a reason', () => {
-    const draft = startDraft('panel-2', [...companies, company('Zethorin')], saved);
+    const draft = startDraft('panel-2', [...companies, panelCompany('Zethorin')], saved);
     expect(chosenPeers(draft)).toContain({ company: 'Zethorin', isIncluded: false, reason: '' });
     expect(isChanged(draft, saved)).toBeTrue();
   });
@@ -83,35 +71,28 @@ describe('a choice of peers before it is saved', () => {
     expect(reasonsWritten(draft)).toEqual(['Same customers', 'Another business']);
   });
 
+  it('puts several on one side with one reason, and keeps those written before unless asked', () => {
+    const start = startDraft('panel-1', companies, saved);
+    const both = ['Kesdrin', 'Sarvane'];
+    expect(writtenCount(start, both, false)).toBe(1);
+    const to = { isIncluded: false, reason: 'Other cycle', replaces: false };
+    expect(chosenPeers(changeChoices(start, both, to))).toEqual([
+      { company: 'Kesdrin', isIncluded: false, reason: 'Other cycle' },
+      { company: 'Sarvane', isIncluded: false, reason: 'Another business' },
+    ]);
+    const replaced = changeChoices(start, both, { ...to, replaces: true });
+    expect(chosenPeers(replaced).map(({ reason }) => reason)).toEqual([
+      'Other cycle',
+      'Other cycle',
+    ]);
+    expect(replaced.choices.get('Kesdrin')?.reasonIn).toBe('Same customers');
+  });
+
   it('moves to another panel version and says whom it loses', () => {
-    const other = [company('Kesdrin'), company('Zethorin')];
+    const other = [panelCompany('Kesdrin'), panelCompany('Zethorin')];
     const draft = moveDraft(startDraft('panel-1', companies, saved), 'panel-2', other);
     expect(draft.ownCompany).toBe('');
     expect([...draft.choices.keys()]).toEqual(['Kesdrin', 'Zethorin']);
     expect(lostCompanies(saved, other)).toEqual(['Sarvane']);
-  });
-});
-
-describe('nearness in size', () => {
-  it('is the mean logarithmic ratio of what both report', () => {
-    expect(sizeDistance(company('a', 200), company('b', 100))).toBeCloseTo(Math.log(2), 12);
-    expect(sizeDistance(company('a', null), company('b', 100))).toBe(Infinity);
-    expect(sizeDistance(company('a', -5), company('b', 100))).toBe(Infinity);
-  });
-
-  it('puts the nearest first, whether larger or smaller, and names in order where nothing is known', () => {
-    const list = [
-      company('Far', 1000),
-      company('Nobody', null),
-      company('Half', 50),
-      company('Any', null),
-    ];
-    expect(nearestFirst(list, company('Velmara', 90)).map(({ name }) => name)).toEqual([
-      'Half',
-      'Far',
-      'Any',
-      'Nobody',
-    ]);
-    expect(nearestFirst(list, undefined)[0].name).toBe('Any');
   });
 });

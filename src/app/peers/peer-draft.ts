@@ -68,6 +68,39 @@ export function changeChoice(
   return { ...draft, choices };
 }
 
+/**
+ * Puts several companies on one side with one reason; `replaces` writes it also where another reason of that side
+ * stands.
+ */
+export function changeChoices(
+  draft: PeerDraft,
+  companies: readonly string[],
+  to: { readonly isIncluded: boolean; readonly reason: string; readonly replaces: boolean },
+): PeerDraft {
+  const { isIncluded, reason } = to;
+  return companies.reduce((changed, company) => {
+    const before = changed.choices.get(company) ?? notYetIn;
+    const written = isIncluded ? before.reasonIn : before.reasonOut;
+    const kept = written.trim() === '' || to.replaces ? reason : written;
+    return changeChoice(changed, company, {
+      isIncluded,
+      ...(isIncluded ? { reasonIn: kept } : { reasonOut: kept }),
+    });
+  }, draft);
+}
+
+/** How many of the companies have a reason for standing on that side. */
+export function writtenCount(
+  draft: PeerDraft,
+  companies: readonly string[],
+  isIncluded: boolean,
+): number {
+  return companies.filter((company) => {
+    const choice = draft.choices.get(company) ?? notYetIn;
+    return (isIncluded ? choice.reasonIn : choice.reasonOut).trim() !== '';
+  }).length;
+}
+
 /** The reason that counts: of the side the company is on. */
 export function reasonOf(choice: DraftChoice): string {
   return choice.isIncluded ? choice.reasonIn : choice.reasonOut;

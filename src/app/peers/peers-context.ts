@@ -1,7 +1,7 @@
 import type { ShownContext, StaleNotice } from '../ui/page-context';
 import type { PeerDraft } from './peer-draft';
 
-import type { PeersGround } from './peers-store';
+import type { PeersGround } from './peers-ground';
 import { counted, yearsText } from '../ui/phrases';
 
 /** What the frame shows around the choice of peers. */

@@ -5,7 +5,7 @@ import {
   provideHttpClientTesting,
 } from '@angular/common/http/testing';
 import { type ComponentFixture, TestBed } from '@angular/core/testing';
-import { provideRouter } from '@angular/router';
+import { Router, provideRouter } from '@angular/router';
 import {
   type PanelVersionSummary,
   type PeerGroupReply,
@@ -17,12 +17,16 @@ import { SessionStore } from '../api/session-store';
 import { Confirm } from '../ui/confirm';
 import type { PanelCompany } from './peer-draft';
 import { PeersPage } from './peers-page';
+import { AskReason } from './reasons/ask-reason';
+import { panelCompany, scatteredCompanies } from './testing/panel-company';
 
 const id = (last: number): string => `0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a00${10 + last}`;
 
 const panelVersion: PanelVersionSummary = {
   id: id(1),
   panelId: id(0),
+  parentId: null,
+  origin: 'import',
   panelName: 'Flow control',
   number: 1,
   currency: 'EUR',
@@ -36,16 +40,9 @@ const panelVersion: PanelVersionSummary = {
   createdBy: 'Ilvo Brenn',
   file: { id: id(2), name: 'flow.csv', byteSize: 900, sha256: 'ab'.repeat(32) },
 };
-const companies: PanelCompany[] = ['Kesdrin', 'Sarvane', 'Velmara'].map((name) => ({
-  name,
-  rows: 11,
-  completeRows: name === 'Kesdrin' ? 10 : 11,
-  firstYear: 2010,
-  lastYear: 2020,
-  marketValue: 1234.5,
-  capex: 88,
-  bookEquity: null,
-}));
+const companies: PanelCompany[] = ['Kesdrin', 'Sarvane', 'Velmara'].map((name) =>
+  panelCompany(name, { completeRows: name === 'Kesdrin' ? 10 : 11, marketValue: 1234.5 }),
+);
 const saved: PeerGroupReply = {
   id: id(3),
   number: 1,
@@ -136,6 +133,39 @@ describe('the Peers page', () => {
     const select = page().querySelector('select')!;
     select.value = panelVersionId;
     select.dispatchEvent(new Event('change'));
+    await settled();
+  }
+
+  /** The five-measure panel: `Company 1` is the own one, the first half of the others are in. */
+  async function loadMany(count = 20): Promise<void> {
+    const listed = scatteredCompanies(count).map((company, place) => ({
+      ...company,
+      attributes: { Industry: place % 3 === 0 ? 'Pumps' : 'Valves' },
+    }));
+    const peers = listed.slice(1).map(({ name }, place) => ({
+      company: name,
+      isIncluded: place < count / 2,
+      reason: place === 0 ? 'Same customers' : '',
+    }));
+    await load({ ...saved, ownCompany: 'Company 1', peers }, [], listed);
+  }
+
+  /** Companies of a table with their distances, in their order. */
+  function listedIn(side: 'in' | 'out'): { readonly company: string; readonly distance: number }[] {
+    return [...page().querySelectorAll(`[aria-labelledby="peers-${side}"] td.distance button`)].map(
+      (button) => ({
+        company: /^Distance of (.*?):/.exec(button.getAttribute('aria-label') ?? '')?.[1] ?? '',
+        distance: Number(button.textContent),
+      }),
+    );
+  }
+
+  async function check(label: string): Promise<void> {
+    const box = [...page().querySelectorAll('label')].find(
+      (each) => each.textContent.trim() === label,
+    );
+    if (box === undefined) throw new Error(`expected a box “${label}”; found none`);
+    box.querySelector('input')!.click();
     await settled();
   }
 
@@ -299,7 +329,7 @@ describe('the Peers page', () => {
     start(['cfo']);
     await load(saved);
     expect(page().querySelector('textarea')).toBeNull();
-    expect(page().querySelector('select')).toBeNull();
+    expect(page().querySelector('kv-peer-ground')).toBeNull();
     expect(words()).not.toContain('Take out');
     expect(words()).toContain('No reason written');
   });
@@ -320,7 +350,7 @@ describe('the Peers page', () => {
     fixture.componentRef.setInput('company', 'Kesdrin');
     document.body.append(page());
     await load(saved);
-    expect(document.activeElement?.textContent).toMatch(/Kesdrin\s*Same customers/);
+    expect(document.activeElement?.textContent).toMatch(/^\s*Kesdrin.*Same customers/s);
   });
 
   it('stays where it is for a company that is no peer', async () => {
@@ -345,6 +375,142 @@ describe('the Peers page', () => {
     }));
     await load({ ...saved, peers, peerCount: peers.length }, [], listed);
     expect(document.activeElement?.textContent).toMatch(/^\s*Zorvane/);
+  });
+
+  it('lists members and candidates nearest first, and members by name on request', async () => {
+    start(['analyst']);
+    await loadMany();
+    for (const side of ['in', 'out'] as const) {
+      const distances = listedIn(side).map(({ distance }) => distance);
+      expect(distances.length).toBeGreaterThan(8);
+      expect(distances).toEqual([...distances].sort((a, b) => a - b));
+    }
+    const order = page().querySelector<HTMLSelectElement>('.order select')!;
+    order.value = 'name';
+    order.dispatchEvent(new Event('change'));
+    await settled();
+    expect(listedIn('in')[0].company).toBe('Company 10');
+  });
+
+  it('shows what a distance is made of: parts that add up to its square', async () => {
+    start(['cfo']);
+    await loadMany();
+    const [first] = listedIn('out');
+    const button = page().querySelector<HTMLElement>(
+      '[aria-labelledby="peers-out"] td.distance button',
+    );
+    button?.click();
+    await settled();
+    expect(button?.getAttribute('aria-expanded')).toBe('true');
+    const lines = [...page().querySelectorAll('kv-distance-parts tbody tr')];
+    const parts = lines.map((line) =>
+      Number(line.lastElementChild?.textContent.trim().replace('\u2212', '-')),
+    );
+    expect(lines.length).toBe(6);
+    expect(lines.map((line) => line.textContent).join(' ')).toMatch(/growth\s*[\d.]+ % a year/);
+    const sum = parts.slice(0, 5).reduce((total, part) => total + part, 0);
+    expect(sum).toBeCloseTo(parts[5], 10);
+    expect(Math.abs(parts[5] - first.distance ** 2)).toBeLessThan(0.01 * (2 * first.distance + 1));
+    await check('Show the parts of every distance');
+    expect(page().querySelectorAll('kv-distance-parts').length).toBe(19 - 1);
+  });
+
+  it('counts the measures that the analyst chooses, and says why one does not count', async () => {
+    start(['analyst']);
+    await loadMany();
+    const before = listedIn('out');
+    await check('volatility');
+    expect(listedIn('out')).not.toEqual(before);
+    await check('Robust to outliers');
+    await check('volatility');
+    await check('Usual');
+    expect(listedIn('out')).toEqual(before);
+    fixture.destroy();
+    fixture = TestBed.createComponent(PeersPage);
+    fixture.detectChanges();
+    await loadMany(8);
+    expect(words()).toContain('does not count: 5 measures need 11 companies');
+  });
+
+  it('takes in all candidates that the filters show with one reason, and keeps reasons written', async () => {
+    start(['analyst']);
+    await loadMany();
+    await TestBed.inject(Router).navigate([], { queryParams: { 'with.Industry': 'Pumps' } });
+    await settled();
+    const shown = listedIn('out').map(({ company }) => company);
+    expect(words()).toContain(`${shown.length} of 9 candidates`);
+    expect(shown.length).toBeLessThan(9);
+    const ask = spyOn(TestBed.inject(AskReason), 'ask').and.resolveTo({
+      reason: 'Pumps alike',
+      replaces: false,
+    });
+    await press(`Take all ${shown.length} in with one reason…`);
+    expect(ask.calls.mostRecent().args[0].companies).toEqual(shown);
+    expect(ask.calls.mostRecent().args[0].reasons).toContain('Same customers');
+    expect(words()).toContain(`${10 + shown.length} in, ${9 - shown.length} out`);
+    await press('Save peer group');
+    const { body } = sent();
+    for (const peer of body.peers.filter(({ company }) => shown.includes(company)))
+      expect(peer).toEqual({ company: peer.company, isIncluded: true, reason: 'Pumps alike' });
+  });
+
+  it('lists the nearest candidates, and more on request or where one of them is asked for', async () => {
+    start(['analyst']);
+    await loadMany(60);
+    const nearest = listedIn('out');
+    expect(nearest.length).toBe(20);
+    await press('List 9 more');
+    const all = listedIn('out');
+    expect(all.slice(0, 20)).toEqual(nearest);
+    expect(all.length).toBe(29);
+    fixture.destroy();
+    fixture = TestBed.createComponent(PeersPage);
+    fixture.componentRef.setInput('company', all[25].company);
+    document.body.append(page());
+    fixture.detectChanges();
+    await loadMany(60);
+    expect(document.activeElement?.getAttribute('aria-label')).toBe(
+      `Why ${all[25].company} is out`,
+    );
+  });
+
+  it('changes nothing where no reason is given for several', async () => {
+    start(['analyst']);
+    await loadMany();
+    spyOn(TestBed.inject(AskReason), 'ask').and.resolveTo(null);
+    await press('Leave all 9 out with one reason…');
+    expect(words()).toContain('10 in, 9 out, 18 reasons missing.');
+  });
+
+  it('says what a newer panel changed of the saved peers, when it is asked', async () => {
+    start(['analyst']);
+    await load(saved, [{ ...panelVersion, id: id(6), number: 2 }]);
+    expect(words()).toContain(
+      'The saved peers stand on Flow control v1; Flow control v2 is newer.',
+    );
+    await press('See what it changed for these companies');
+    await answer(`/api/panel-versions/${panelVersion.id}/differences/${id(6)}`, {
+      addedRows: 0,
+      removedRows: 0,
+      changedCells: 1,
+      listed: [
+        {
+          company: 'Kesdrin',
+          year: 2019,
+          kind: 'changed-cell',
+          column: 'capex',
+          before: 1,
+          after: 2,
+        },
+      ],
+    });
+    expect(words()).toContain('Kesdrin: 1 cell changed');
+  });
+
+  it('compares no versions of different panels', async () => {
+    start(['analyst']);
+    await load(saved, [{ ...panelVersion, id: id(6), panelId: id(7), number: 1 }]);
+    expect(page().querySelector('kv-panel-changes')).toBeNull();
   });
 
   it('offers to bring in a panel where there is none', async () => {

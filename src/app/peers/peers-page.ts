@@ -12,8 +12,6 @@ import {
   viewChildren,
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
-import { MatFormFieldModule } from '@angular/material/form-field';
-import { MatInput } from '@angular/material/input';
 import { Router, RouterLink } from '@angular/router';
 import { apiRoutes, mayCall } from '@contract';
 import { SessionStore } from '../api/session-store';
@@ -22,33 +20,47 @@ import { EmptyState } from '../ui/empty-state';
 import { Mark } from '../ui/mark';
 import { PageContext } from '../ui/page-context';
 import { PageHeader } from '../ui/page-header';
-import { ProblemNotice } from '../ui/problem-notice';
-import { PeerTable } from './peer-table';
-import { PeerVersions } from './peer-versions';
-
-import { PeersStore } from './peers-store';
-import { type PeersShown, peersShown } from './peers-shown';
-import { peersContext } from './peers-context';
 import { counted } from '../ui/phrases';
+import { ProblemNotice } from '../ui/problem-notice';
+import { noFilters } from './candidates/candidate-filters';
+import { CandidatesStore } from './candidates/candidates-store';
+import { FilterBar } from './candidates/filter-bar';
+import { NearnessBar } from './nearness/nearness-bar';
+import { NearnessStore } from './nearness/nearness-store';
+import { writtenCount } from './peer-draft';
+import { PeerGround } from './peer-ground';
+import { peersContext } from './peers-context';
+import { type PeersShown, peersShown } from './peers-shown';
+import { PeersStore } from './peers-store';
+import { PlaneSection } from './plane/plane-section';
+import { AskReason } from './reasons/ask-reason';
+import { MissingReasons } from './reasons/missing-reasons';
+import { PeerTable } from './table/peer-table';
+import { PanelChanges } from './versions/panel-changes';
+import { PeerVersions } from './versions/peer-versions';
 
 /** Who do we compare ourselves with, and why? */
 @Component({
   selector: 'kv-peers-page',
   imports: [
     EmptyState,
+    FilterBar,
     Mark,
     MatButton,
-    MatFormFieldModule,
-    MatInput,
+    MissingReasons,
+    NearnessBar,
     PageHeader,
+    PanelChanges,
+    PeerGround,
     PeerTable,
     PeerVersions,
+    PlaneSection,
     ProblemNotice,
     RouterLink,
   ],
   templateUrl: './peers-page.html',
   styleUrl: './peers-page.css',
-  providers: [PeersStore],
+  providers: [PeersStore, NearnessStore, CandidatesStore],
   host: { '(window:beforeunload)': 'holdBack($event)' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
@@ -58,7 +70,10 @@ export class PeersPage {
   readonly #router = inject(Router);
   readonly #confirm = inject(Confirm);
   readonly #injector = inject(Injector);
+  readonly #askReason = inject(AskReason);
   protected readonly store = inject(PeersStore);
+  protected readonly nearness = inject(NearnessStore);
+  protected readonly candidates = inject(CandidatesStore);
 
   /** The version to show; the newest where the address names none. */
   readonly peerGroupId = input<string>();
@@ -68,13 +83,46 @@ export class PeersPage {
   private readonly tables = viewChildren(PeerTable);
 
   protected readonly note = signal('');
-  protected readonly search = signal('');
+  protected readonly hasAllParts = signal(false);
+  protected readonly hasAllCandidates = signal(false);
   protected readonly isReadOnly = computed(
     () => !mayCall(apiRoutes.savePeerGroup, this.#session.roles()),
   );
   protected readonly shown = computed<PeersShown | null>(() => {
     const view = this.store.view();
-    return view.kind === 'ready' ? peersShown(view.ground, view.draft, this.search()) : null;
+    if (view.kind !== 'ready') return null;
+    const listed = {
+      members: this.candidates.members(),
+      candidates: this.candidates.candidates(),
+      hasAllCandidates: this.hasAllCandidates(),
+    };
+    return peersShown(view.ground, view.draft, listed, this.nearness.nearness());
+  });
+  /** Measures of the model whose values are worth seeing although they do not count. */
+  protected readonly otherMeasures = computed(() => {
+    const counting = this.nearness.nearness().measures;
+    return this.nearness
+      .measures()
+      .filter((measure) => measure.isOfModel && !counting.includes(measure));
+  });
+  protected readonly shownCandidates = computed(() =>
+    this.candidates.candidates().map(({ name }) => name),
+  );
+  protected readonly silentMembers = computed(() =>
+    (this.shown()?.inside ?? [])
+      .filter(({ reason }) => reason.trim() === '')
+      .map(({ company }) => company.name),
+  );
+  /** The panel version that the saved peers stand on, and the newest of the same panel, where they differ. */
+  protected readonly panelsApart = computed(() => {
+    const view = this.store.view();
+    if (view.kind !== 'ready' || view.ground.saved === null) return null;
+    const { panelVersions, saved } = view.ground;
+    const older = panelVersions.find(({ id }) => id === saved.panelVersionId);
+    const newer = panelVersions.find(({ panelId }) => panelId === older?.panelId);
+    if (newer === undefined || older === undefined || newer === older) return null;
+    const peers = saved.peers.filter(({ isIncluded }) => isIncluded);
+    return { older, newer, companies: [saved.ownCompany, ...peers.map(({ company }) => company)] };
   });
 
   readonly #isReady = computed(() => this.store.view().kind === 'ready');
@@ -83,7 +131,7 @@ export class PeersPage {
     effect(() => {
       const company = this.company();
       if (company === undefined || !this.#isReady()) return;
-      untracked(() => this.#lookAt(company));
+      untracked(() => this.lookAt(company));
     });
     effect(() => {
       const id = this.peerGroupId();
@@ -125,13 +173,37 @@ export class PeersPage {
     for (const table of this.tables()) table.focusReason(company);
   }
 
-  /** Brings a company's reason into view; where the lists stop short of it, the search finds it. */
-  #lookAt(company: string): void {
-    const page = this.shown();
-    if (page === null) return;
-    const isListed = [...page.inside, ...page.outside].some((row) => row.company.name === company);
-    if (!isListed && page.notShown > 0) this.search.set(company);
+  /** Brings a company's reason into view; where it is filtered away or the lists stop short of it, its name is asked for. */
+  protected lookAt(company: string): void {
+    if (!this.#isListed(company)) this.hasAllCandidates.set(true);
+    const isKnown = this.store.companies().some(({ name }) => name === company);
+    if (!this.#isListed(company) && isKnown && company !== this.store.ownCompany())
+      this.candidates.filter({ ...noFilters, name: company });
     afterNextRender(() => this.focusReason(company), { injector: this.#injector });
+  }
+
+  #isListed(company: string): boolean {
+    const { inside, outside } = this.shown() ?? { inside: [], outside: [] };
+    return [...inside, ...outside].some((row) => row.company.name === company);
+  }
+
+  protected orderMembers(by: string): void {
+    this.candidates.orderMembers(by === 'name' ? 'name' : 'nearness');
+  }
+
+  /** Puts several companies on one side once a reason for all of them is written. */
+  protected async moveAll(companies: readonly string[], isIncluded: boolean): Promise<void> {
+    const view = this.store.view();
+    if (view.kind !== 'ready' || companies.length === 0) return;
+    const who = counted(companies.length, 'company', 'companies');
+    const answer = await this.#askReason.ask({
+      title: isIncluded ? `Why ${who} in?` : `Why ${who} out?`,
+      companies,
+      action: isIncluded ? `Take ${companies.length} in` : `Leave ${companies.length} out`,
+      reasons: this.store.reasons(),
+      written: writtenCount(view.draft, companies, isIncluded),
+    });
+    if (answer !== null) this.store.changeAll(companies, { isIncluded, ...answer });
   }
 
   protected async save(): Promise<void> {

@@ -1,75 +1,84 @@
-import { nearestFirst } from './nearness';
-import { type PanelCompany, type PeerDraft, reasonOf } from './peer-draft';
-import type { PeerRow } from './peer-table';
-import { peersFinding } from './peer-words';
-import type { PeersGround } from './peers-store';
 import { counted, yearsText } from '../ui/phrases';
+import type { PeerNearness } from './nearness/peer-nearness-of';
+import { type PanelCompany, type PeerDraft, reasonOf } from './peer-draft';
+import { peersFinding } from './peer-words';
+import type { PeersGround } from './peers-ground';
+import type { PeerRow } from './table/peer-table';
 
 const mostShown = 200;
+/** So many candidates stand beside the members until more are asked for. */
+const nearestShown = 20;
+
+/** Members and candidates in the order in which they are to be listed. */
+export interface ListedPeers {
+  readonly members: readonly PanelCompany[];
+  readonly candidates: readonly PanelCompany[];
+  /** Lists more than the nearest candidates. */
+  readonly hasAllCandidates: boolean;
+}
 
 export interface PeersShown {
   readonly finding: string;
   readonly source: string;
-  /** Every peer by name; at most 200 of those that the search finds. */
+  /** The members listed, at most 200. */
   readonly inside: readonly PeerRow[];
-  /** Nearest to the own company in size first; at most 200 of those that the search finds. */
+  /** The nearest candidates listed: 20, or at most 200. */
   readonly outside: readonly PeerRow[];
   readonly inCount: number;
   readonly outCount: number;
+  /** How many members and candidates are beyond what can be listed. */
   readonly notShown: number;
+  /** How many candidates are listed on request. */
+  readonly onRequest: number;
   /** Companies without a written reason. */
   readonly missing: readonly string[];
   readonly own: PanelCompany | undefined;
-  readonly needsSearch: boolean;
 }
 
-const manyCompanies = 30;
-
 /** What the page shows of a choice of peers. */
-export function peersShown(ground: PeersGround, draft: PeerDraft, search: string): PeersShown {
-  const { companies, panelVersions } = ground;
+export function peersShown(
+  ground: PeersGround,
+  draft: PeerDraft,
+  listed: ListedPeers,
+  nearness: PeerNearness,
+): PeersShown {
+  const { companies, panelVersions, without } = ground;
   const own = companies.find(({ name }) => name === draft.ownCompany);
   const others = companies.filter((company) => company !== own);
+  const reason = ({ name }: PanelCompany): string => {
+    const choice = draft.choices.get(name);
+    return choice === undefined ? '' : reasonOf(choice);
+  };
   const isInside = ({ name }: PanelCompany): boolean =>
     draft.choices.get(name)?.isIncluded ?? false;
-  const inside = others.filter(isInside);
-  const outside = nearestFirst(
-    others.filter((company) => !isInside(company)),
-    own,
-  );
-  const toRow = (company: PanelCompany): PeerRow => {
-    const choice = draft.choices.get(company.name);
-    return {
-      company,
-      reason: choice === undefined ? '' : reasonOf(choice),
-      ...(ground.without === null
-        ? {}
-        : { standingWithout: ground.without.byCompany.get(company.name) ?? null }),
-    };
-  };
-  const missing = [...inside, ...outside]
-    .map(toRow)
-    .filter(({ reason }) => reason.trim() === '')
-    .map(({ company }) => company.name);
-  const wanted = search.trim().toLowerCase();
-  const found = (list: readonly PanelCompany[]): readonly PanelCompany[] =>
-    list.filter(({ name }) => name.toLowerCase().includes(wanted));
-  const [shownInside, shownOutside] = [found(inside), found(outside)];
+  const toRow = (company: PanelCompany): PeerRow => ({
+    company,
+    reason: reason(company),
+    nearness: nearness.byCompany.get(company.name) ?? null,
+    whyNone: nearness.without.get(company.name) ?? '',
+    ...(without === null ? {} : { standingWithout: without.byCompany.get(company.name) ?? null }),
+  });
+  const candidatesShown = listed.hasAllCandidates ? mostShown : nearestShown;
+  const inCount = others.filter(isInside).length;
+  const outCount = others.length - inCount;
   const panel = panelVersions.find(({ id }) => id === draft.panelVersionId);
   return {
-    finding: peersFinding(draft.ownCompany, inside.length, outside.length),
+    finding: peersFinding(draft.ownCompany, inCount, outCount),
     source:
       panel === undefined
         ? ''
         : `${panel.panelName} v${panel.number} · ${counted(panel.companies, 'company', 'companies')}, ${yearsText(panel.firstYear, panel.lastYear)}`,
-    inside: shownInside.slice(0, mostShown).map(toRow),
-    outside: shownOutside.slice(0, mostShown).map(toRow),
-    inCount: inside.length,
-    outCount: outside.length,
+    inside: listed.members.slice(0, mostShown).map(toRow),
+    outside: listed.candidates.slice(0, candidatesShown).map(toRow),
+    inCount,
+    outCount,
     notShown:
-      Math.max(0, shownInside.length - mostShown) + Math.max(0, shownOutside.length - mostShown),
-    missing,
+      Math.max(0, listed.members.length - mostShown) +
+      Math.max(0, listed.candidates.length - mostShown),
+    onRequest: Math.max(0, Math.min(listed.candidates.length, mostShown) - candidatesShown),
+    missing: [...others.filter(isInside), ...others.filter((company) => !isInside(company))]
+      .filter((company) => reason(company).trim() === '')
+      .map(({ name }) => name),
     own,
-    needsSearch: companies.length > manyCompanies,
   };
 }

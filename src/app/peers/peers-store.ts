@@ -1,18 +1,17 @@
 import { Injectable, computed, inject, signal } from '@angular/core';
-import type { PanelVersionSummary, PeerGroupReply, PeerGroupSummary } from '@contract';
+import type { PeerGroupReply, PeerGroupSummary } from '@contract';
 import { firstValueFrom } from 'rxjs';
 import { ApiProblem, toApiProblem } from '../api/api-problem';
 import { DeskApi } from '../api/desk-api';
 import { FitsApi } from '../api/fits-api';
 import { PanelsApi } from '../api/panels-api';
 import { PeersApi } from '../api/peers-api';
-import { type Bounded, asDifference, differenceKind } from '../ui/model-form';
-import type { FigureKind } from '../ui/number-format';
 import {
   type DraftChoice,
   type PanelCompany,
   type PeerDraft,
   changeChoice,
+  changeChoices,
   isChanged,
   isSameDraft,
   lostCompanies,
@@ -21,31 +20,7 @@ import {
   startDraft,
   toSavePeerGroup,
 } from './peer-draft';
-
-/** What the page stands on, as the server has it. */
-export interface PeersGround {
-  /** Newest first. */
-  readonly panelVersions: readonly PanelVersionSummary[];
-  /** Newest first. */
-  readonly versions: readonly PeerGroupSummary[];
-  /** The version shown; null before the first one is saved. */
-  readonly saved: PeerGroupReply | null;
-  /** Companies of the draft's panel version. */
-  readonly companies: readonly PanelCompany[];
-  /** What leaving each peer out changes, by the newest fit of the version shown; null where there is none. */
-  readonly without: StandingsWithout | null;
-}
-
-export interface StandingsWithout {
-  /** First characters of the fit's hash. */
-  readonly fitName: string;
-  /** How it writes its standings: money, or of a fit in logs a percentage. */
-  readonly kind: FigureKind;
-  /** With every peer. */
-  readonly standing: Bounded;
-  /** The own company's standing without each peer; null where none can be estimated. */
-  readonly byCompany: ReadonlyMap<string, number | null>;
-}
+import { type PeersGround, standingsWithout } from './peers-ground';
 
 export type PeersView =
   | { readonly kind: 'idle' }
@@ -93,6 +68,15 @@ export class PeersStore {
     const { companies, saved } = view.ground;
     const untouched = startDraft(view.draft.panelVersionId, companies, saved);
     return !isSameDraft(view.draft, untouched);
+  });
+  /** Of the draft's panel version. */
+  readonly companies = computed((): readonly PanelCompany[] => {
+    const view = this.#view();
+    return view.kind === 'ready' ? view.ground.companies : [];
+  });
+  readonly ownCompany = computed(() => {
+    const view = this.#view();
+    return view.kind === 'ready' ? view.draft.ownCompany : '';
   });
   readonly reasons = computed(() => {
     const view = this.#view();
@@ -148,6 +132,11 @@ export class PeersStore {
   /** Moves a company in or out, or writes its reason. */
   change(company: string, change: Partial<DraftChoice>): void {
     this.#change((draft) => changeChoice(draft, company, change));
+  }
+
+  /** Puts several companies on one side with one reason. */
+  changeAll(companies: readonly string[], to: Parameters<typeof changeChoices>[2]): void {
+    this.#change((draft) => changeChoices(draft, companies, to));
   }
 
   /** Puts the choices back to the version shown. */
@@ -241,20 +230,7 @@ export class PeersStore {
     const { fit } = await firstValueFrom(this.#desk.read());
     if (fit?.peerGroupId !== peerGroupId) return null;
     const { result } = await firstValueFrom(this.#fits.read(fit.id));
-    if (result?.standing == null) return null;
-    const { form } = result.specification;
-    const shown = (estimate: number) => asDifference({ estimate, low: null, high: null }, form);
-    return {
-      fitName: result.hash.slice(0, 6),
-      kind: differenceKind(form),
-      standing: asDifference(result.standing, form),
-      byCompany: new Map(
-        result.withoutCompany.map(({ company, standing }) => [
-          company,
-          standing === null ? null : shown(standing).estimate,
-        ]),
-      ),
-    };
+    return result === null ? null : standingsWithout(result);
   }
 
   #change(change: (draft: PeerDraft) => PeerDraft): void {

@@ -3,13 +3,13 @@ import { TestbedHarnessEnvironment } from '@angular/cdk/testing/testbed';
 import { TestBed } from '@angular/core/testing';
 import { ChartHarness } from '../chart-harness';
 import { CoverageMap, type SelectedCell } from './coverage-map';
-import { gridMove } from './grid-move';
+import { gridMove } from '../grid-move';
 
 const variables = ['market value', 'capex', 'book equity'];
 const cells = [
   { company: 'Ardwyne', year: 2024, missing: [] },
   { company: 'Ardwyne', year: 2025, missing: ['capex'] },
-  { company: 'Velmara', year: 2024, missing: [], isFlagged: true },
+  { company: 'Velmara', year: 2024, missing: [], flagged: ['capex'] },
 ];
 
 describe('coverage map', () => {
@@ -30,9 +30,22 @@ describe('coverage map', () => {
     await chart.toggle();
     expect(await chart.headers()).toEqual(['company', '2024', '2025']);
     expect(await chart.table()).toEqual([
-      ['Velmara', 'complete', 'none'],
+      ['Velmara', 'complete, flagged: capex', 'none'],
       ['Ardwyne', 'complete', 'no capex'],
     ]);
+  });
+
+  it('draws an outline around what is fully covered, and says so in the export', async () => {
+    const { fixture, page } = await shown();
+    expect(page.querySelector('rect.frame')).toBeNull();
+    fixture.componentRef.setInput('frame', {
+      firstYear: 2024,
+      lastYear: 2024,
+      companies: ['Ardwyne', 'Velmara'],
+    });
+    await fixture.whenStable();
+    expect(page.querySelectorAll('rect.frame').length).toBe(1);
+    expect(page.querySelector('.words')?.textContent).toContain('fully covered');
   });
 
   it('marks the own company with a diamond at the head of its row', async () => {
@@ -49,7 +62,7 @@ describe('coverage map', () => {
       return page.querySelector(`#${id}`)?.getAttribute('aria-label');
     };
     expect(page.querySelectorAll('svg [tabindex], svg[tabindex]').length).toBe(1);
-    expect(current()).toBe('Velmara 2024: complete, flagged');
+    expect(current()).toBe('Velmara 2024: complete, flagged: capex');
     await grid.sendKeys(TestKey.RIGHT_ARROW, TestKey.DOWN_ARROW);
     expect(current()).toBe('Ardwyne 2025: no capex');
     await grid.sendKeys(TestKey.RIGHT_ARROW, TestKey.DOWN_ARROW);

@@ -10,6 +10,7 @@ import {
 } from '@angular/core';
 import {
   type CoverageCell,
+  type CoverageFrame,
   type CoverageRow,
   type PlacedCoverageCell,
   coverageMapLayout,
@@ -18,7 +19,7 @@ import {
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { coverageCells } from './coverage-cells';
-import { type GridPlace, gridMove } from './grid-move';
+import { type GridPlace, gridMove } from '../grid-move';
 
 export interface SelectedCell {
   readonly company: string;
@@ -44,6 +45,8 @@ export class CoverageMap {
   /** Only this one counts; null counts all. */
   readonly variable = input<string | null>(null);
   readonly ownCompany = input<string | null>(null);
+  /** Fully covered companies and years, drawn as an outline. */
+  readonly frame = input<CoverageFrame | null>(null);
 
   readonly cellSelected = output<SelectedCell>();
 
@@ -64,6 +67,7 @@ export class CoverageMap {
         variables: this.variables(),
         variable: this.variable(),
         ownCompany: this.ownCompany(),
+        frame: this.frame(),
       },
       this.width(),
     ),
@@ -78,19 +82,29 @@ export class CoverageMap {
   });
 
   readonly #counts = computed(() => {
-    const counts = { complete: 0, some: 0, none: 0 };
-    for (const row of this.layout().rows) for (const cell of row.cells) counts[cell.state] += 1;
+    const counts = { complete: 0, some: 0, none: 0, flagged: 0 };
+    for (const row of this.layout().rows)
+      for (const cell of row.cells) {
+        counts[cell.state] += 1;
+        if (cell.flagged.length > 0) counts.flagged += 1;
+      }
     return counts;
   });
   protected readonly summary = computed(() => {
-    const { complete, some, none } = this.#counts();
+    const { complete, some, none, flagged } = this.#counts();
     const years = this.layout().rows.at(0)?.cells.length ?? 0;
     const what = this.variable() ?? 'all values';
-    return `${this.layout().rows.length} companies in ${years} years. ${what}: complete in ${complete} company years, partly missing in ${some}, none in ${none}.`;
+    return [
+      `${this.layout().rows.length} companies in ${years} years.`,
+      `${what}: complete in ${complete} company years, partly missing in ${some}, none in ${none}.`,
+      ...(flagged === 0 ? [] : [`Flagged in ${flagged}.`]),
+    ].join(' ');
   });
   /** The signs in words, for a picture that leaves the page without the line above the map. */
-  protected readonly note =
-    'Full square: complete. Half: some missing. Dash: none. Small triangle: flagged.';
+  protected readonly note = computed(() => {
+    const signs = 'Full square: complete. Half: some missing. Dash: none. Small triangle: flagged.';
+    return this.layout().frame.length === 0 ? signs : `${signs} Outline: fully covered.`;
+  });
   protected readonly columns = computed((): ChartColumn[] => [
     { label: 'company', isNumber: false },
     ...(this.layout().rows.at(0)?.cells ?? []).map(({ year }) => ({
@@ -140,13 +154,12 @@ export class CoverageMap {
   }
 
   protected describe({ row, cell }: { row: CoverageRow; cell: PlacedCoverageCell }): string {
-    const flag = cell.isFlagged ? ', flagged' : '';
-    return `${row.company} ${cell.year}: ${this.#words(cell)}${flag}`;
+    return `${row.company} ${cell.year}: ${this.#words(cell)}`;
   }
 
-  #words({ state, missing }: PlacedCoverageCell): string {
-    if (state === 'complete') return 'complete';
-    return state === 'none' ? 'none' : `no ${missing.join(', no ')}`;
+  #words({ state, missing, flagged }: PlacedCoverageCell): string {
+    const words = state === 'some' ? `no ${missing.join(', no ')}` : state;
+    return flagged.length === 0 ? words : `${words}, flagged: ${flagged.join(', ')}`;
   }
 
   #at({ row: rowPlace, column }: GridPlace) {

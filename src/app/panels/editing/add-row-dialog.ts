@@ -1,0 +1,116 @@
+import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import {
+  MAT_DIALOG_DATA,
+  MatDialogActions,
+  MatDialogClose,
+  MatDialogContent,
+  MatDialogRef,
+  MatDialogTitle,
+} from '@angular/material/dialog';
+import { MatFormField, MatLabel } from '@angular/material/form-field';
+import { MatInput } from '@angular/material/input';
+import type { RowPlace } from './panel-edits';
+
+export interface AddRowQuestion {
+  /** Of the panel. */
+  readonly companies: readonly string[];
+  readonly company: string;
+  readonly hasRow: (row: RowPlace) => boolean;
+}
+
+/** Asks which company and year a new row is for; closes with them. */
+@Component({
+  selector: 'kv-add-row-dialog',
+  imports: [
+    MatButton,
+    MatDialogActions,
+    MatDialogClose,
+    MatDialogContent,
+    MatDialogTitle,
+    MatFormField,
+    MatInput,
+    MatLabel,
+  ],
+  template: `
+    <form (submit)="$event.preventDefault(); add()">
+      <h2 mat-dialog-title>Add a row</h2>
+      <mat-dialog-content>
+        <mat-form-field appearance="outline">
+          <mat-label>Company of the panel, or a new one</mat-label>
+          <input
+            #companyBox
+            matInput
+            name="company"
+            list="kv-row-companies"
+            maxlength="200"
+            autocomplete="off"
+            cdkFocusInitial
+            [value]="company()"
+            (input)="company.set(companyBox.value)"
+          />
+        </mat-form-field>
+        <datalist id="kv-row-companies">
+          @for (name of question.companies; track name) {
+            <option [value]="name"></option>
+          }
+        </datalist>
+        <mat-form-field appearance="outline">
+          <mat-label>Fiscal year</mat-label>
+          <input
+            #yearBox
+            matInput
+            name="year"
+            inputmode="numeric"
+            maxlength="4"
+            autocomplete="off"
+            [value]="year()"
+            (input)="year.set(yearBox.value)"
+          />
+        </mat-form-field>
+        <p role="status">{{ isAsked() ? complaint() : '' }}</p>
+      </mat-dialog-content>
+      <mat-dialog-actions align="end">
+        <button matButton type="button" [mat-dialog-close]="undefined">Cancel</button>
+        <button matButton="filled" type="submit">Add row</button>
+      </mat-dialog-actions>
+    </form>
+  `,
+  styles: `
+    mat-dialog-content {
+      display: grid;
+    }
+    mat-form-field {
+      margin-block-start: 8px;
+    }
+    p {
+      min-block-size: 20px;
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class AddRowDialog {
+  readonly #dialog = inject<MatDialogRef<AddRowDialog, RowPlace>>(MatDialogRef);
+  protected readonly question = inject<AddRowQuestion>(MAT_DIALOG_DATA);
+
+  protected readonly company = signal(this.question.company);
+  protected readonly year = signal('');
+  protected readonly isAsked = signal(false);
+  readonly #row = computed((): RowPlace => ({
+    company: this.company().trim(),
+    year: Number(this.year().trim()),
+  }));
+  protected readonly complaint = computed(() => {
+    const { company, year } = this.#row();
+    if (company === '') return 'A row needs a company.';
+    if (!/^[1-9]\d{3}$/.test(this.year().trim())) return 'A row needs a year of four digits.';
+    return this.question.hasRow({ company, year })
+      ? `${company} has a row for ${year} already.`
+      : '';
+  });
+
+  protected add(): void {
+    this.isAsked.set(true);
+    if (this.complaint() === '') this.#dialog.close(this.#row());
+  }
+}

@@ -1,0 +1,104 @@
+import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
+import type { PanelColumn } from '@contract';
+import { NumberFormat } from '../../ui/number-format';
+import { columnTitle, kindOf } from '../panel-rows';
+import { figureWords, shiftOf } from './shown-figure';
+
+/** A cell that is looked at. */
+export interface LookedAtCell {
+  readonly company: string;
+  readonly year: number;
+  /** Line of the file; 0 for a row that was added by hand. */
+  readonly fileRow: number;
+  /** Null at company, year and line. */
+  readonly figure: {
+    readonly column: PanelColumn;
+    readonly value: number | null;
+    /** What the version holds, where that is something else; undefined where nothing is changed. */
+    readonly before: number | null | undefined;
+  } | null;
+  readonly flags: readonly string[];
+  /** `3 × 4 cells`; empty for one cell. */
+  readonly size: string;
+}
+
+/** The cell that has the focus, in words: its value with every digit, and where it stands. */
+@Component({
+  selector: 'kv-cell-line',
+  template: `
+    @if (cell(); as cell) {
+      <p>
+        @if (value(); as value) {
+          <b>{{ value.title }}</b> <span class="kv-number">{{ value.words }}</span> {{ value.unit }}
+          @if (value.before; as before) {
+            <span>(saved: {{ before }})</span>
+          }
+          ·
+        }
+        {{ place() }}
+        @if (cell.size) {
+          · {{ cell.size }}
+        }
+      </p>
+      @for (flag of cell.flags; track $index) {
+        <p>{{ flag }}</p>
+      }
+      @if (cell.figure && hasHistory()) {
+        <button type="button" class="kv-link" (click)="historyWanted.emit()">
+          History of this cell
+        </button>
+      }
+    } @else {
+      <p>Select a cell to read its full value and where it stands in the file.</p>
+    }
+  `,
+  styles: `
+    :host {
+      display: flex;
+      flex-wrap: wrap;
+      gap: 0 16px;
+      min-block-size: 24px;
+      color: var(--kv-soft-ink);
+      font-size: 12px;
+      overflow-wrap: anywhere;
+    }
+    b {
+      font-weight: 500;
+    }
+    b,
+    .kv-number {
+      color: var(--kv-ink);
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class CellLine {
+  readonly #numbers = inject(NumberFormat);
+
+  readonly cell = input.required<LookedAtCell | null>();
+  /** Whether the cell's row is in a saved version. */
+  readonly hasHistory = input(true);
+  readonly historyWanted = output();
+
+  protected readonly value = computed(() => {
+    const figure = this.cell()?.figure ?? null;
+    if (figure === null) return null;
+    const { column, value, before } = figure;
+    const shift = shiftOf(column, this.#numbers.factor());
+    const locale = this.#numbers.locale();
+    return {
+      title: columnTitle(column),
+      words: figureWords(value, shift, locale),
+      unit: kindOf(column) === 'money' && value !== null ? this.#numbers.unitLabel() : '',
+      before: before === undefined ? null : figureWords(before, shift, locale),
+    };
+  });
+  protected readonly place = computed(() => {
+    const cell = this.cell();
+    if (cell === null) return '';
+    const { company, year, fileRow, figure } = cell;
+    const line = fileRow === 0 ? 'row added by hand' : `line ${fileRow} of the file`;
+    const column = figure === null ? '' : `, column “${figure.column.name}”`;
+    return `${company} ${year}, ${line}${column}`;
+  });
+}

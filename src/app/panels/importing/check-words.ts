@@ -1,0 +1,54 @@
+import type { ImportChanges, ImportCheck, ImportReply } from '@contract';
+import { counted, listed } from '../../ui/phrases';
+import { companiesAndYears } from '../panel-finding';
+
+/** `7 findings, 2 keep the file from becoming a panel`. */
+export function findingWords({ findingCount, blockingCount }: ImportCheck): string {
+  if (findingCount === 0) return 'The check found nothing to mend';
+  const all = counted(findingCount, 'finding');
+  if (blockingCount === 0) return `${all}, none keeps the file out`;
+  return `${all}, ${blockingCount.toLocaleString('en')} ${blockingCount === 1 ? 'keeps' : 'keep'} the file out`;
+}
+
+/** `14 companies, FY2008–FY2025: 246 rows, 241 of them complete`. */
+export function countWords(check: ImportCheck): string {
+  const rows = `${counted(check.rows, 'row')}, ${check.completeRows.toLocaleString('en')} of them complete`;
+  if (check.firstYear === null || check.lastYear === null) return rows;
+  const { companies, firstYear, lastYear } = check;
+  return `${companiesAndYears({ companies, firstYear, lastYear })}: ${rows}`;
+}
+
+/** What of the file stays outside, and what of its formulas is not read. */
+export function leftOutWords({ leftOutRows, formulaCells }: ImportCheck): string {
+  const left =
+    leftOutRows === 0
+      ? 'No row of the file is left out.'
+      : `${counted(leftOutRows, 'row')} of the file ${leftOutRows === 1 ? 'is' : 'are'} left out: excluded, or without company or year.`;
+  if (formulaCells === 0) return left;
+  return `${left} ${counted(formulaCells, 'cell')} ${formulaCells === 1 ? 'holds a formula' : 'hold formulas'}: the value stored for ${formulaCells === 1 ? 'it' : 'them'} is taken.`;
+}
+
+/** `Against version 3: 14 rows come, none goes, 2 cells change.` */
+export function changeWords({
+  number,
+  addedRows,
+  removedRows,
+  changedCells,
+}: ImportChanges): string {
+  if (addedRows + removedRows + changedCells === 0)
+    return `Nothing changes against version ${number}: it holds the same figures.`;
+  return `Against version ${number}: ${listed([
+    `${counted(addedRows, 'row')} ${addedRows === 1 ? 'comes' : 'come'}`,
+    `${counted(removedRows, 'row')} ${removedRows === 1 ? 'goes' : 'go'}`,
+    `${counted(changedCells, 'cell')} ${changedCells === 1 ? 'changes' : 'change'}`,
+  ])}.`;
+}
+
+/** The finding of the page about an import, by what is done with it. */
+export function importFinding({ fileName, rowCount, state, check }: ImportReply): string {
+  if (state === 'committing') return `${fileName}: its rows are being written`;
+  if (state === 'failed') return `${fileName}: bringing it in did not work`;
+  return check === null
+    ? `${fileName}: ${counted(rowCount, 'row')}, not checked yet`
+    : `${fileName}: ${findingWords(check)}`;
+}
