@@ -27,6 +27,9 @@ export const SignEdition = z.strictObject({ password: z.string().min(1).max(128)
 export type SignEdition = z.infer<typeof SignEdition>;
 
 /** What an edition froze. Its SHA-256 is taken over the canonical JSON of this. */
+/** As it was when it was frozen: editions published before versions said what made them do not say it. */
+const FrozenPanelVersion = PanelVersionSummary.partial({ parentId: true, origin: true });
+
 export const EditionContent = z.object({
   schema: z.literal(1),
   number: z.number().int(),
@@ -39,7 +42,7 @@ export const EditionContent = z.object({
   fitId: z.uuid(),
   fitCreatedAt: z.iso.datetime(),
   fitCreatedBy: z.string(),
-  panelVersion: PanelVersionSummary,
+  panelVersion: FrozenPanelVersion,
   /** What each regressor of the fit is, in its order. */
   regressorRoles: z.array(ColumnRole),
   peerGroup: PeerGroupReply,
