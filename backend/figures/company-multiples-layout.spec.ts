@@ -63,6 +63,8 @@ describe('company multiples layout', () => {
     const layout = companyMultiplesLayout(data, { ...look, width: 328 });
     const [velmara] = layout.rows;
     expect(layout.heads).toEqual([]);
+    expect(velmara.lines.map(({ name }) => name?.text)).toEqual(data.variables);
+    expect(companyMultiplesLayout(data, look).rows[0].lines[0].name).toBeNull();
     expect(velmara.lines[1].points[0].at.x).toBe(velmara.lines[0].points[0].at.x);
     expect(velmara.lines[1].points[0].at.y).toBeGreaterThan(velmara.lines[0].points[0].at.y);
     for (const { lines } of layout.rows)

@@ -1,5 +1,6 @@
 export * from './company-lines-layout';
 export * from './company-multiples-layout';
+export type { CompanySeries, MultiplesLine, MultiplesPoint } from './company-multiples-lines';
 export * from './company-plane-layout';
 export * from './coverage-map-layout';
 export * from './difference-bars-layout';

@@ -30,13 +30,13 @@ describe('flags in words', () => {
   });
 
   it('tells each kind by what it found', () => {
-    expect(line(missing)).toBe('Sarvane FY2010 capex: is missing');
-    expect(line(yearGap)).toBe('Sarvane FY2012: has no row, between years that have one');
+    expect(line(missing)).toBe('Sarvane FY2010 capex is missing');
+    expect(line(yearGap)).toBe('Sarvane FY2012 has no row, between years that have one');
     expect(line(slip(2019))).toBe(
       'Velmara FY2019 book equity 450,000: about 1,000 times its usual 450.0',
     );
     expect(line({ ...missing, value: 0, facts: { code: 'sign' } })).toBe(
-      'Sarvane FY2010 capex: is zero',
+      'Sarvane FY2010 capex is zero',
     );
     expect(line({ ...missing, value: -12, facts: { code: 'sign' } })).toContain('is negative');
     expect(line({ ...jump, facts: { code: 'stale-copy', columns: 1 } })).toContain(

@@ -46,7 +46,8 @@ export function flagFigure({ value, facts }: Flag, numbers: NumberFormat): strin
 export function flagLine(flag: Flag, titles: readonly string[], numbers: NumberFormat): string {
   const figure = flagFigure(flag, numbers);
   const cell = `${flagPlace(flag, titles)}${figure === '' ? '' : ` ${figure}`}`;
-  return `${cell}: ${flagReason(flag, numbers)}`;
+  const reason = flagReason(flag, numbers);
+  return /^(is|has) /.test(reason) ? `${cell} ${reason}` : `${cell}: ${reason}`;
 }
 
 /** `book equity` within a sentence; the header of a further column stays as it is written. */
