@@ -130,6 +130,18 @@ describe('exports of a panel version', () => {
     }
   });
 
+  it('say the measure of their own amounts, though an older export said another', async () => {
+    const version = await importPanel(analyst, 'company,year,value,inv,capital\nA,2001,1,2,3\n');
+    const older = await download(`/api/panel-versions/${version}/export/csv`);
+    const again = await importPanel(analyst, older.toString(), {
+      ...referenceMapping,
+      attributes: ['amounts in'],
+      unit: 'thousands',
+    });
+    const bytes = await download(`/api/panel-versions/${again}/export/csv`);
+    expect(bytes.toString().trim().split('\r\n').slice(1)).toEqual(['A,2001,1,2,3,USD thousands']);
+  });
+
   it('have a name that any file system takes', async () => {
     const reply = await analyst.get(`/api/panel-versions/${id}/export/csv`);
     const disposition = reply.headers['content-disposition'];

@@ -1,4 +1,5 @@
-import type { PanelRows, PanelVersionRow } from '../../db/repositories/panels-repository';
+import type { PanelBlockRows } from '../../db/repositories/panel-rows-repository';
+import type { PanelVersionRow } from '../../db/repositories/panels-repository';
 import type { PanelCompaniesReply, PanelVersionReply, PanelVersionSummary } from '../contract';
 import type { CompanySummary } from './company-summaries';
 
@@ -28,7 +29,10 @@ export function toPanelVersionSummary(row: PanelVersionRow): PanelVersionSummary
   };
 }
 
-export function toPanelVersionReply(version: PanelVersionRow, rows: PanelRows): PanelVersionReply {
+export function toPanelVersionReply(
+  version: PanelVersionRow,
+  rows: PanelBlockRows,
+): PanelVersionReply {
   return {
     version: toPanelVersionSummary(version),
     companyHeader: version.companyHeader,
@@ -36,9 +40,11 @@ export function toPanelVersionReply(version: PanelVersionRow, rows: PanelRows): 
     columns: [...version.columns],
     rows: {
       fileRow: [...rows.fileRow],
-      company: [...rows.company],
+      company: Array.from(rows.company, (code) => rows.companies[code]),
       year: [...rows.year],
-      values: version.columns.map((_, column) => rows.cells.map((row) => row[column])),
+      values: rows.values.map((cells) =>
+        Array.from(cells, (cell) => (Number.isNaN(cell) ? null : cell)),
+      ),
     },
   };
 }

@@ -1,4 +1,5 @@
-import type { PanelRows, PanelVersionRow } from '../../db/repositories/panels-repository';
+import type { PanelBlockRows } from '../../db/repositories/panel-rows-repository';
+import type { PanelVersionRow } from '../../db/repositories/panels-repository';
 import type { Repositories } from '../../db/repositories/repositories';
 import { record } from '../activity/activity';
 import { NotFound } from '../errors/app-error';
@@ -22,15 +23,14 @@ export class PanelService {
     return found;
   }
 
-  /** @throws {NotFound} */
+  /** In order of company and year. @throws {NotFound} */
   async rows(
     workspaceId: string,
     id: string,
-    companies?: readonly string[],
-  ): Promise<{ readonly version: PanelVersionRow; readonly rows: PanelRows }> {
+  ): Promise<{ readonly version: PanelVersionRow; readonly rows: PanelBlockRows }> {
     const version = await this.version(workspaceId, id);
     const rows = await this.repositories.inWorkspace(workspaceId, (tx) =>
-      tx.panels.rows(id, companies),
+      tx.panelRows.block(id, version.columns.length),
     );
     return { version, rows };
   }

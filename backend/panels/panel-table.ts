@@ -25,25 +25,27 @@ const measureHeader = 'amounts in';
 
 /**
  * The long table of a version: company, year, its columns under their own headers, what describes the company, and the
- * measure of its amounts, as `EUR millions`. Read again, it is the same panel.
+ * measure of its amounts, as `EUR millions`. Read again, it is the same panel. A measure that came in with an older export
+ * is no description: this version's own stands in its place.
  */
 export function panelTable({ version, parts, attributes }: PanelExport): PanelTable {
-  const described = [...new Set(attributes.flatMap((company) => Object.keys(company.attributes)))];
-  const hasMeasure = described.includes(measureHeader);
-  const measure = hasMeasure ? [] : [measureOf(version)];
+  const headers = new Set(attributes.flatMap((company) => Object.keys(company.attributes)));
+  headers.delete(measureHeader);
+  const described = [...headers];
+  const measure = measureOf(version);
   const tails = new Map(
     attributes.map((company) => [
       company.company,
-      [...described.map((header) => company.attributes[header] ?? null), ...measure],
+      [...described.map((header) => company.attributes[header] ?? null), measure],
     ]),
   );
-  const noTexts = [...described.map(() => null), ...measure];
+  const noTexts = [...described.map(() => null), measure];
   return {
     headers: [
       ...[version.companyHeader, version.yearHeader],
       ...version.columns.map(({ name }) => name),
       ...described,
-      ...(hasMeasure ? [] : [measureHeader]),
+      measureHeader,
     ],
     parts: tableParts(parts, (company) => tails.get(company) ?? noTexts),
   };

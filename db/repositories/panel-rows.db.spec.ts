@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto';
+import { setTimeout as pause } from 'node:timers/promises';
 import type pg from 'pg';
 import { createDatabase, createPool } from '../connect';
 import { createTestDatabase, type TestDatabase } from '../testing/test-database';
@@ -111,6 +112,36 @@ describe('rows of a panel version as columns', () => {
     expect(none.year.length).toBe(0);
     expect(none.values.map(({ length }) => length)).toEqual([0, 0, 0]);
     expect(plain.currency).toBeNull();
+  });
+
+  it('are read without keeping others of this process waiting', async () => {
+    const [rows, columns] = [40_000, 12];
+    const wide: PanelBlockRows = {
+      companies: ['A'],
+      company: new Int32Array(rows),
+      year: Int32Array.from({ length: rows }, (_, row) => 1000 + row),
+      fileRow: new Int32Array(rows).fill(2),
+      values: Array.from({ length: columns }, () => new Float64Array(rows).fill(1 / 3)),
+      currency: null,
+    };
+    const id = await within(async (tx) => {
+      const made = await insertVersion(tx);
+      await tx.panelRows.insert(made, wide);
+      return made;
+    });
+    const started = performance.now();
+    let [lastLook, longestWaitMs] = [started, 0];
+    const looks = setInterval(() => {
+      longestWaitMs = Math.max(longestWaitMs, performance.now() - lastLook);
+      lastLook = performance.now();
+    }, 1);
+    const read = await within((tx) => tx.panelRows.block(id, columns));
+    const tookMs = performance.now() - started;
+    await pause(5);
+    clearInterval(looks);
+    expect(read.values.map(({ length }) => length)).toEqual(Array<number>(columns).fill(rows));
+    // In time of the reading, since machines differ: most of it is PostgreSQL's.
+    expect(longestWaitMs).toBeLessThan(tookMs / 2);
   });
 
   it('are told of as they are written, and end with the signal, leaving nothing', async () => {

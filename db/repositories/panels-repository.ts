@@ -199,16 +199,17 @@ export class PanelsRepository {
     return found.map(({ company }) => company);
   }
 
-  /** Rows in order of company and year; of the named companies only, where names are given. */
-  async rows(panelVersionId: string, companies?: readonly string[]): Promise<PanelRows> {
-    let query = this.db
+  /** Rows of the named companies, in order of company and year. */
+  async rows(panelVersionId: string, companies: readonly string[]): Promise<PanelRows> {
+    const found = await this.db
       .selectFrom('panelRow')
       .select(['company', 'year', 'fileRow', 'cells'])
       .where('workspaceId', '=', this.workspaceId)
-      .where('panelVersionId', '=', panelVersionId);
-    if (companies !== undefined)
-      query = query.where('company', '=', sql<string>`any(${[...companies]}::text[])`);
-    const found = await query.orderBy('company').orderBy('year').execute();
+      .where('panelVersionId', '=', panelVersionId)
+      .where('company', '=', sql<string>`any(${[...companies]}::text[])`)
+      .orderBy('company')
+      .orderBy('year')
+      .execute();
     return {
       company: found.map((row) => row.company),
       year: found.map((row) => row.year),

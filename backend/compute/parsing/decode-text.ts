@@ -18,7 +18,8 @@ export async function* decodeText(
     const text = heldBack + decodeStrictly(by, bytes, line);
     // A carriage return at the end of a chunk may be half of a line end.
     heldBack = bytes !== undefined && text.endsWith('\r') ? '\r' : '';
-    const whole = text.slice(0, text.length - heldBack.length).replace(/\r\n?/gu, '\n');
+    const part = text.slice(0, text.length - heldBack.length);
+    const whole = part.includes('\r') ? part.replace(/\r\n?/gu, '\n') : part;
     line = refuseNul(whole, line);
     return whole;
   };

@@ -8,17 +8,29 @@ export class GridBuilder {
   readonly #rows: string[][] = [];
   readonly #lines: number[] = [];
   #width = 1;
+  #lineCount = 0;
 
   constructor(limits: TableLimits) {
     this.#limits = limits;
   }
 
-  /** @param lastLine  the line of the file that the record ends on. */
-  add(record: string[], lastLine: number): void {
-    if (record.every((cell) => cell.trim() === '')) return;
-    const line = lastLine - record.reduce((sum, cell) => sum + lineEndsIn(cell), 0);
+  /** Lines of the file that the records so far take up. */
+  get lineCount(): number {
+    return this.#lineCount;
+  }
+
+  /**
+   * @param record  the next one of the file, blank ones too: lines are counted by them, each one long and longer by the
+   * line ends inside its cells.
+   */
+  add(record: string[]): void {
+    const line = this.#lineCount + 1;
+    this.#lineCount = line;
+    for (const cell of record) this.#lineCount += lineEndsIn(cell);
+    const filled = record.findLastIndex((cell) => cell.trim() !== '') + 1;
+    if (filled === 0) return;
     this.#refuseLongField(record, line);
-    this.#width = Math.max(this.#width, this.#checkedWidth(record, line));
+    this.#width = Math.max(this.#width, this.#checkedWidth(filled, line));
     const width = this.#width;
     const mostRows = Math.min(this.#limits.rows, Math.floor(this.#limits.cells / width));
     // One line more than rows: the header.
@@ -41,9 +53,8 @@ export class GridBuilder {
     return { rows: this.#rows, lines: this.#lines };
   }
 
-  /** Columns of the record up to its last filled cell. */
-  #checkedWidth(record: readonly string[], line: number): number {
-    const width = record.findLastIndex((cell) => cell.trim() !== '') + 1;
+  /** @param width  columns of the record up to its last filled cell. */
+  #checkedWidth(width: number, line: number): number {
     if (width <= this.#limits.columns) return width;
     throw new TableError(
       'table-too-large',

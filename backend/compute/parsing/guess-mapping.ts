@@ -70,9 +70,11 @@ function describe(
   const cells = rows
     .map((row, at): SampledCell => ({ text: row[index] ?? '', isStored: isNumber(at, index) }))
     .filter(({ text }) => !isMissing(text));
-  const textAt = (at: number): string | undefined =>
-    cells[at].isStored ? undefined : cells[at].text;
-  const [{ decimalSign }] = decimalSigns([{ length: cells.length, textAt }]);
+  const column = {
+    rows: cells.map(({ text }) => [text]),
+    isNumber: (at: number) => cells[at].isStored,
+  };
+  const [{ decimalSign }] = decimalSigns(column, [0]);
   const isYear = isMostly(cells, ({ text }) => {
     const year = parseYear(text);
     return year !== undefined && year >= 1800 && year <= 2200;

@@ -60,19 +60,33 @@ function textOf(table: Table, keys: PanelKeys, yearIndex: number, row: number): 
 }
 
 /** Rows that share company and year with another, in the order of the first of them. */
-function rowsOfSameKey({ company, year }: PanelKeys): Iterable<readonly number[]> {
-  const first = new Map<number, number>();
+function rowsOfSameKey({ companies, company, year }: PanelKeys): readonly (readonly number[])[] {
+  const ofCompany = rowsByCompany(companies.length, company);
+  const firstRow = new Map<number, number>();
   const shared = new Map<number, number[]>();
-  for (let row = 0; row < company.length; row++) {
-    const key = company[row] * 65_536 + year[row];
-    const before = first.get(key);
-    if (before === undefined) {
-      first.set(key, row);
+  for (const row of ofCompany) {
+    const first = firstRow.get(year[row]);
+    // Rows of one company follow each other, so that a row of another is over.
+    if (first === undefined || company[first] !== company[row]) {
+      firstRow.set(year[row], row);
       continue;
     }
-    const rows = shared.get(before) ?? [before];
+    const rows = shared.get(first) ?? [first];
     rows.push(row);
-    shared.set(before, rows);
+    shared.set(first, rows);
   }
-  return shared.values();
+  return [...shared.values()].sort(([left], [right]) => left - right);
+}
+
+/** Rows in the order of their companies, those of one company in their own order. */
+function rowsByCompany(companies: number, company: Int32Array): Int32Array {
+  const next = new Int32Array(companies + 1);
+  for (const code of company) next[code + 1] += 1;
+  for (let code = 0; code < companies; code++) next[code + 1] += next[code];
+  const rows = new Int32Array(company.length);
+  for (let row = 0; row < company.length; row++) {
+    rows[next[company[row]]] = row;
+    next[company[row]] += 1;
+  }
+  return rows;
 }

@@ -129,9 +129,9 @@ describe('parseNumber', () => {
 
 describe('decimalSigns', () => {
   const decimalSigns = (columns: readonly (readonly string[])[]): ColumnDecimals[] =>
-    decimalSignsOf(
-      columns.map((cells) => ({ length: cells.length, textAt: (position) => cells[position] })),
-    );
+    decimalSignsOf({ rows: columns[0].map((_, row) => columns.map((cells) => cells[row] ?? '')) }, [
+      ...columns.keys(),
+    ]);
 
   it('goes by the numbers that can be read one way only', () => {
     expect(decimalSigns([['1,5', '1,234']])).toEqual([{ decimalSign: ',', ambiguousAt: null }]);

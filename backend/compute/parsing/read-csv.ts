@@ -1,6 +1,7 @@
-import { CsvError, type Info, parse } from 'csv-parse';
+import { CsvError, parse } from 'csv-parse';
 import { Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
+import { addUnquotedLines } from './add-unquoted-lines';
 import { decodeText } from './decode-text';
 import { sniffDelimiter } from './sniff-delimiter';
 import type { Grid } from './grid';
@@ -27,40 +28,51 @@ export async function readCsv(
   limits: TableLimits = tableLimits,
 ): Promise<{ readonly grid: Grid; readonly delimiter: Delimiter }> {
   const text = decodeText(source instanceof Uint8Array ? piecesOf(source) : source);
-  const { head, isWhole } = await readHead(text);
-  const delimiter = sniffDelimiter(head);
+  try {
+    const { head, isWhole } = await readHead(text);
+    const delimiter = sniffDelimiter(head);
+    const builder = new GridBuilder(limits);
+    const whole = isWhole ? beginningWith(head) : beginningWith(head, text);
+    const rest = await addUnquotedLines(whole, delimiter, longestRecord, builder);
+    if (rest !== undefined) await addRecords(beginningWith(rest, whole), delimiter, builder);
+    return { grid: builder.finish(), delimiter };
+  } finally {
+    // A refusal leaves the source half read.
+    await text.return(undefined);
+  }
+}
+
+/** Adds text of which any field may be quoted. */
+async function addRecords(
+  text: AsyncIterable<string>,
+  delimiter: Delimiter,
+  builder: GridBuilder,
+): Promise<void> {
+  const linesBefore = builder.lineCount;
   const parser = parse({
     delimiter,
-    info: true,
     relax_column_count: true,
     record_delimiter: '\n',
     max_record_size: longestRecord,
   });
-  const builder = new GridBuilder(limits);
-  const chunks = Readable.from(isWhole ? [head] : beginningWith(head, text));
-  // A failure of the source destroys the parser, and so reaches the loop below.
-  const finished = pipeline(chunks, parser).catch(() => undefined);
-  try {
-    for await (const { record, info } of parser as AsyncIterable<ParsedRecord>) {
-      builder.add(record, info.lines);
+  parser.on('data', (record: string[]) => {
+    try {
+      builder.add(record);
+    } catch (error) {
+      parser.destroy(error as Error);
     }
+  });
+  try {
+    await pipeline(Readable.from(text), parser);
   } catch (error) {
-    throw asTableError(error);
-  } finally {
-    await finished;
+    throw asTableError(error, linesBefore);
   }
-  return { grid: builder.finish(), delimiter };
 }
 
 /** Pieces, so that a file is never one more long string in memory. */
 function* piecesOf(bytes: Uint8Array): Generator<Uint8Array> {
   for (let start = 0; start < bytes.length; start += pieceLength)
     yield bytes.subarray(start, start + pieceLength);
-}
-
-interface ParsedRecord {
-  readonly record: string[];
-  readonly info: Info;
 }
 
 async function readHead(text: AsyncGenerator<string>): Promise<{ head: string; isWhole: boolean }> {
@@ -73,15 +85,15 @@ async function readHead(text: AsyncGenerator<string>): Promise<{ head: string; i
   return { head, isWhole: false };
 }
 
-async function* beginningWith(head: string, rest: AsyncGenerator<string>): AsyncGenerator<string> {
+async function* beginningWith(head: string, rest?: AsyncGenerator<string>): AsyncGenerator<string> {
   yield head;
-  yield* rest;
+  if (rest !== undefined) yield* rest;
 }
 
-function asTableError(error: unknown): unknown {
+function asTableError(error: unknown, linesBefore: number): unknown {
   if (!(error instanceof CsvError)) return error;
   const fault = csvFaults.get(error.code) ?? 'text that is none at line';
-  const line = Number(error['lines']);
+  const line = linesBefore + Number(error['lines']);
   return new TableError('csv-invalid', `expected a table; found ${fault} ${line}`, { row: line });
 }
 

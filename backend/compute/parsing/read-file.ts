@@ -6,7 +6,7 @@ import { readCsv } from './read-csv';
 import { readSheets, type SheetsTable } from './read-sheets';
 import type { Delimiter, Table } from './table';
 import { TableError } from './table-error';
-import { readWorkbook, type Sheet } from './workbook/read-workbook';
+import type { Sheet } from './workbook/read-workbook';
 
 /** A file as a long table, and how it was read. */
 export interface FileTable {
@@ -49,6 +49,8 @@ async function readText(bytes: Uint8Array, reading: TableReading | null): Promis
 }
 
 async function readXlsx(bytes: Uint8Array, reading: TableReading | null): Promise<FileTable> {
+  // Text files, which are the most, do not wait for what unpacks a workbook.
+  const { readWorkbook } = await import('./workbook/read-workbook');
   const sheets = await readWorkbook(bytes);
   return fileTable(readSheets(sheets, reading), null, sheets.map(sizeOf));
 }

@@ -22,25 +22,24 @@ export function readNumbers(
 ): NamedColumn[] {
   const signs = columnSigns(table, indices, terms, findings);
   const { rows, isNumber } = table;
-  return indices.map((index, k): NamedColumn => {
-    const decimalSign = signs[k];
-    const values = new Float64Array(placed.length);
-    let next = 0;
-    for (let row = 0; row < rows.length; row++) {
-      const text = rows[row][index];
-      const isStored = isNumber?.(row, index) === true;
-      const value = isStored ? Number(text) : parseNumber(text, decimalSign);
-      const isPlaced = placed[next] === row;
+  const values = indices.map(() => new Float64Array(placed.length));
+  let next = 0;
+  // Row by row, as the cells lie in memory.
+  for (let row = 0; row < rows.length; row++) {
+    const isPlaced = placed[next] === row;
+    for (let k = 0; k < indices.length; k++) {
+      const text = rows[row][indices[k]];
+      const isStored = isNumber?.(row, indices[k]) === true;
+      const value = isStored ? Number(text) : parseNumber(text, signs[k]);
       if (value === undefined)
-        findings.add(findingAt(table, row, index, noNumber[terms.decimalSign][decimalSign]));
-      else if (isPlaced && Number.isNaN(value)) findings.add(findingAt(table, row, index, noValue));
-      if (isPlaced) {
-        values[next] = value ?? NaN;
-        next += 1;
-      }
+        findings.add(findingAt(table, row, indices[k], noNumber[terms.decimalSign][signs[k]]));
+      else if (isPlaced && Number.isNaN(value))
+        findings.add(findingAt(table, row, indices[k], noValue));
+      if (isPlaced) values[k][next] = value ?? NaN;
     }
-    return { name: table.header[index], values };
-  });
+    if (isPlaced) next += 1;
+  }
+  return indices.map((index, k): NamedColumn => ({ name: table.header[index], values: values[k] }));
 }
 
 function columnSigns(
@@ -50,14 +49,9 @@ function columnSigns(
   findings: FindingList,
 ): DecimalSign[] {
   if (decimalSign !== 'as-found') return indices.map(() => decimalSign);
-  const { rows, isNumber } = table;
-  const columns = indices.map((index) => ({
-    length: rows.length,
-    textAt: (row: number) => (isNumber?.(row, index) === true ? undefined : rows[row][index]),
-  }));
-  return decimalSigns(columns).map((column, k) => {
+  return decimalSigns(table, indices).map((column, k) => {
     if (column.ambiguousAt !== null) {
-      const text = rows[column.ambiguousAt][indices[k]];
+      const text = table.rows[column.ambiguousAt][indices[k]];
       const remark = ambiguousNumber(text, column.decimalSign);
       findings.add(findingAt(table, column.ambiguousAt, indices[k], remark));
     }

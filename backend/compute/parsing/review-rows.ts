@@ -21,19 +21,20 @@ export function reviewRows(
     ...findings.map(({ row }) => row),
     ...[...new Set(touched)].slice(0, mostMendedRows),
   ]);
-  const taken = new Set<readonly string[]>();
-  for (const row of panel.tableRow) taken.add(panel.mended.table.rows[row]);
-  const { whole } = panel.mended;
-  return whole.rows.flatMap((cells, row) => {
-    const line = whole.lines[row];
-    if (!linesOf(whole, row).some((lineOfCell) => wanted.has(lineOfCell))) return [];
-    return [{ row: line, cells, isTaken: taken.has(cells), isExcluded: excluded.has(line) }];
+  if (wanted.size === 0) return [];
+  const { whole, table } = panel.mended;
+  const shown = [...whole.rows.keys()].filter((row) => standsOn(wanted, whole, row));
+  const untaken = new Set(shown.map((row) => whole.rows[row]));
+  for (const row of panel.tableRow) untaken.delete(table.rows[row]);
+  return shown.map((row) => {
+    const [cells, line] = [whole.rows[row], whole.lines[row]];
+    return { row: line, cells, isTaken: !untaken.has(cells), isExcluded: excluded.has(line) };
   });
 }
 
-/** Lines of the file that a row's cells stand on. */
-function linesOf(table: Table, row: number): readonly number[] {
-  const { placeOf } = table;
-  if (placeOf === undefined) return [table.lines[row]];
-  return [table.lines[row], ...table.header.map((_, column) => placeOf(row, column).line)];
+/** Whether any cell of a row stands on one of the lines of the file. */
+function standsOn(lines: ReadonlySet<number>, table: Table, row: number): boolean {
+  if (lines.has(table.lines[row])) return true;
+  const { placeOf, header } = table;
+  return placeOf !== undefined && header.some((_, column) => lines.has(placeOf(row, column).line));
 }

@@ -21,11 +21,11 @@ export function tableOfGrid(
   );
   const lines = grid.lines.slice(headerIndex + 1);
   const rows = grid.rows.slice(headerIndex + 1).map((cells, row) => {
+    if (cells.length === width) return cells;
     if (cells.slice(width).some((cell) => cell.trim() !== '')) {
       const message = `expected at most ${width} cells on line ${lines[row]}, as many as the header has; found ${cells.length}`;
       throw new TableError('csv-invalid', message, { row: lines[row], column: width + 1 });
     }
-    if (cells.length === width) return cells;
     return Array.from({ length: width }, (_, column) => cells[column] ?? '');
   });
   const { isFormula, isNumber } = grid;

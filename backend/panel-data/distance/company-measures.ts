@@ -80,15 +80,17 @@ function growthAndVolatility(
   year: ArrayLike<number>,
   cells: ArrayLike<number> | undefined,
 ): { readonly growth: number | null; readonly volatility: number | null } {
-  const shown = cells === undefined ? [] : [...rows].filter((row) => cells[row] > 0);
-  if (cells === undefined || shown.length < 2) return { growth: null, volatility: null };
-  const [first, final] = [shown[0], shown[shown.length - 1]];
+  if (cells === undefined) return { growth: null, volatility: null };
+  let [first, final] = [-1, -1];
+  const changes: number[] = [];
+  for (const row of rows) {
+    if (!(cells[row] > 0)) continue;
+    if (final === -1) first = row;
+    else if (year[row] - year[final] === 1) changes.push(Math.log(cells[row] / cells[final]));
+    final = row;
+  }
+  if (first === final) return { growth: null, volatility: null };
   const growth = Math.log(cells[final] / cells[first]) / (year[final] - year[first]);
-  const changes = shown
-    .slice(1)
-    .flatMap((row, place) =>
-      year[row] - year[shown[place]] === 1 ? [Math.log(cells[row] / cells[shown[place]])] : [],
-    );
   return { growth, volatility: changes.length < fewestChanges ? null : deviation(changes) };
 }
 
