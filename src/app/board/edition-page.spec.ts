@@ -72,6 +72,11 @@ describe('the page of an edition', () => {
   const button = (name: string, within: ParentNode = fixture.nativeElement as HTMLElement) =>
     [...within.querySelectorAll('button')].find((each) => each.textContent.trim() === name);
 
+  it('says that its panel has a newer version', async () => {
+    await open('cfo', { ...waiting, newerPanelVersion: { id: editionSummary.id, number: 5 } });
+    expect(text()).toContain('Its panel has a newer version, v5: these figures stand on v4.');
+  });
+
   it('reads on one page, from the frozen content alone', async () => {
     await open('cfo', waiting);
     for (const words of [

@@ -1,8 +1,9 @@
 import { fitContext, staleNotice } from '../ui/fit-context';
-import { exampleDesk, exampleFit, examplePanelVersion } from './testing/example-fit';
+import { exampleDesk, exampleFit } from './testing/example-fit';
 
 describe('what the frame shows around a fit', () => {
-  const newerPanel = { ...examplePanelVersion, id: 'newer-panel', number: 2 };
+  const newerPanelVersion = { id: 'newer-panel', number: 2 };
+  const overtaken = { ...exampleFit, newerPanelVersion };
   const newerGroup = { ...exampleFit.peerGroup, id: 'newer-group', number: 3 };
 
   it('leads from the panel over the peers to the fit', () => {
@@ -18,6 +19,11 @@ describe('what the frame shows around a fit', () => {
     expect(staleNotice(exampleFit, exampleDesk)).toBeNull();
   });
 
+  it('does not take another panel for a newer version', () => {
+    const other = { ...exampleDesk.panelVersion!, id: 'other-panel', panelId: 'other', number: 9 };
+    expect(staleNotice(exampleFit, { ...exampleDesk, panelVersion: other })).toBeNull();
+  });
+
   it('offers a refit with a newer peer group', () => {
     expect(staleNotice(exampleFit, { ...exampleDesk, peerGroup: newerGroup })).toEqual({
       text: 'Peer group has a newer version, v3.',
@@ -26,14 +32,14 @@ describe('what the frame shows around a fit', () => {
   });
 
   it('leads to the peers first when a newer panel has no peer group yet', () => {
-    const stale = staleNotice(exampleFit, { ...exampleDesk, panelVersion: newerPanel });
+    const stale = staleNotice(overtaken, exampleDesk);
     expect(stale?.text).toBe('Panel has a newer version, v2.');
     expect(stale?.action?.link).toBe('/peers');
   });
 
   it('leads straight to a refit when the newest peer group is on the newer panel', () => {
-    const peerGroup = { ...newerGroup, panelVersionId: newerPanel.id };
-    const stale = staleNotice(exampleFit, { ...exampleDesk, panelVersion: newerPanel, peerGroup });
+    const peerGroup = { ...newerGroup, panelVersionId: newerPanelVersion.id };
+    const stale = staleNotice(overtaken, { ...exampleDesk, peerGroup });
     expect(stale?.action?.link).toBe('/fit/from/newer-group');
   });
 });

@@ -36,14 +36,14 @@ export function fitContext(reply: FitReply, desk: DeskReply, locale: string): Sh
 
 /** What has a newer version than the fit stands on, and where to go on from there. */
 export function staleNotice(
-  { panelVersion, peerGroup }: Pick<FitReply, 'panelVersion' | 'peerGroup'>,
+  { newerPanelVersion, peerGroup }: Pick<FitReply, 'newerPanelVersion' | 'peerGroup'>,
   desk: DeskReply,
 ): StaleNotice | null {
   const newest = desk.peerGroup;
-  if (desk.panelVersion !== null && desk.panelVersion.id !== panelVersion.id) {
-    const text = `Panel has a newer version, v${desk.panelVersion.number}.`;
+  if (newerPanelVersion !== null) {
+    const text = `Panel has a newer version, v${newerPanelVersion.number}.`;
     // Peers are chosen on a panel version: a refit on newer data starts with them.
-    return newest?.panelVersionId === desk.panelVersion.id
+    return newest?.panelVersionId === newerPanelVersion.id
       ? { text, action: { label: 'Refit', link: `/fit/from/${newest.id}` } }
       : { text, action: { label: 'Take the peers to it and refit', link: '/peers' } };
   }
