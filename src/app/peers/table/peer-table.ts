@@ -11,6 +11,7 @@ import {
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { fixedText } from '@figures';
+import { CautionLine } from '../../ui/caution-line';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { yearsText } from '../../ui/phrases';
 import type { PeerMeasure } from '../nearness/peer-measures';
@@ -35,7 +36,7 @@ export interface PeerRow {
 /** The companies of one side, in or out: each with its reason and the facts to defend it by. */
 @Component({
   selector: 'kv-peer-table',
-  imports: [DistanceParts, MatButton, ReasonField],
+  imports: [CautionLine, DistanceParts, MatButton, ReasonField],
   templateUrl: './peer-table.html',
   styleUrl: './peer-table.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
