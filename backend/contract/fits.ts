@@ -77,6 +77,15 @@ const ownYear = z.object({
   regressors: z.array(z.number()),
 });
 
+/** A cell that a row lacks. Company and year are missing in results stored before rows were told apart by them. */
+const DroppedRow = z.object({
+  company: z.string().optional(),
+  year: z.number().int().optional(),
+  row: z.number().int(),
+  column: z.string(),
+  reason: z.literal('missing'),
+});
+
 const observedRange = z.object({ low: z.number(), high: z.number() });
 
 /** What is optional is missing in fits of engines before 2; see `PredictionBasis` of the engine for the measures. */
@@ -204,9 +213,7 @@ export const FitResult = z.object({
     balanced: z.boolean(),
     firstYear: z.number().int(),
     lastYear: z.number().int(),
-    dropped: z.array(
-      z.object({ row: z.number().int(), column: z.string(), reason: z.literal('missing') }),
-    ),
+    dropped: z.array(DroppedRow),
     singleRow: z.array(z.string()),
   }),
   slopes: z.array(

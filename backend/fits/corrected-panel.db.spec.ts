@@ -69,6 +69,13 @@ describe('a fit on a corrected panel', () => {
     expect(others.every((row) => row.origins.every((origin) => origin === null))).toBeTrue();
   });
 
+  it('tells typed rows that lack a value by company and year', async () => {
+    const { result } = (await analyst.get(`/api/fits/${fitId}`)).body as FitReply;
+    expect(result?.sample.dropped).toEqual([
+      { company: 'C01', year: 1956, row: 0, column: 'capital', reason: 'missing' },
+    ]);
+  });
+
   it('says when its panel has a newer version, and so does an edition of it', async () => {
     const published = await analyst.post('/api/editions', {
       ...{ fitId, scenarios: [], confidentiality: 'confidential', comment: '' },

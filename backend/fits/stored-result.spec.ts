@@ -1,5 +1,5 @@
 import { FitResult as FitResultReply } from '../contract';
-import { fitPanel } from '../stats';
+import { type FitResult, fitPanel } from '../stats';
 import { goldenPanel, plainSpecification, sha256 } from '../stats/testing/golden-panels';
 import { toFitResult } from './stored-result';
 
@@ -22,5 +22,12 @@ describe('a result of an earlier engine', () => {
     const stored = storedByFirstEngine();
     expect(stored).not.toEqual(jasmine.objectContaining({ smearing: null }));
     expect(FitResultReply.parse(stored).smearing).toBeNull();
+  });
+
+  it('passes the contract with dropped rows that name no company and year', () => {
+    const stored = storedByFirstEngine() as FitResult;
+    const dropped = [{ row: 94, column: 'capital', reason: 'missing' as const }];
+    const { sample } = FitResultReply.parse({ ...stored, sample: { ...stored.sample, dropped } });
+    expect(sample.dropped).toEqual(dropped);
   });
 });

@@ -164,7 +164,11 @@ export type WarningCode =
   | 'negative-eigenvalues'
   | 'smear-differs';
 
+/** A cell that a row lacks, which keeps the row out of a fit. Company and year tell rows apart; lines need not. */
 export interface DroppedRow {
+  readonly company: string;
+  readonly year: number;
+  /** Line of the imported file, the header being line 1; 0 for a row that came by a correction. */
   readonly row: number;
   readonly column: string;
   readonly reason: 'missing';

@@ -3,6 +3,9 @@ import { evidenceReply } from './evidence-reply';
 import { slopeReasons } from './slope-reasons';
 import { type Json, withReasons } from './with-reasons';
 
+/** A missing cell by its line of the file, which holds one row of the panel. */
+export type DroppedCell = Pick<DroppedRow, 'row' | 'column' | 'reason'>;
+
 /**
  * What the command prints of a fit: the documented keys, and beside every null a `…Reason`.
  *
@@ -11,11 +14,13 @@ import { type Json, withReasons } from './with-reasons';
  */
 export function fitReply(
   result: FitResult,
-  leftOut: readonly DroppedRow[],
+  leftOut: readonly DroppedCell[],
   evidence?: Evidence,
 ): Json {
   const { sample, standing } = result;
-  const dropped = [...sample.dropped, ...leftOut].sort((left, right) => left.row - right.row);
+  const dropped = [...sample.dropped, ...leftOut]
+    .map(({ row, column, reason }): DroppedCell => ({ row, column, reason }))
+    .sort((left, right) => left.row - right.row);
   const figures = withReasons({
     sample: {
       companies: sample.companies,

@@ -4,10 +4,10 @@ import { resolve } from 'node:path';
 import { readTable } from '../../backend/compute/parsing/read-table';
 import type { Table } from '../../backend/compute/parsing/table';
 import { toPanelColumns } from '../../backend/compute/parsing/to-panel-columns';
-import { type DroppedRow, evidenceOf, openFit } from '../../backend/stats';
+import { evidenceOf, openFit } from '../../backend/stats';
 import { type FitArguments, readArguments } from './fit-arguments';
 import { cellsProblem, FitProblem } from './fit-problem';
-import { fitReply } from './fit-reply';
+import { type DroppedCell, fitReply } from './fit-reply';
 
 /**
  * Fits a panel file as the server would, without a database.
@@ -30,7 +30,7 @@ export async function runFit(
   const dropped = leftOut.filter(({ row }) => isInSample(table, row, request));
   return fitReply(
     open.result,
-    dropped.map(({ row, column }): DroppedRow => ({ row, column, reason: 'missing' })),
+    dropped.map(({ row, column }): DroppedCell => ({ row, column, reason: 'missing' })),
     request.isEvidenceAsked ? evidenceOf(open) : undefined,
   );
 }

@@ -7,11 +7,7 @@ const specification = {
   confidence: 0.95,
   seed: null,
 } as const;
-const sample = {
-  ...{ companies: 1, years: 3, observations: 3, balanced: true, firstYear: 2001, lastYear: 2004 },
-  dropped: [{ row: 7, column: 'capex', reason: 'missing' as const }],
-  singleRow: [],
-};
+const sample = { singleRow: [] };
 
 /** One line of the file with four years, one of them without capex. */
 const columns = {

@@ -18,14 +18,20 @@ export interface RowUsed {
  */
 export function* rowsUsed(
   columns: PanelColumns,
-  result: Pick<FitResult, 'members' | 'sample' | 'specification'>,
+  {
+    members,
+    sample,
+    specification,
+  }: Pick<FitResult, 'members' | 'specification'> & {
+    readonly sample: Pick<FitResult['sample'], 'singleRow'>;
+  },
 ): Generator<RowUsed> {
-  const singles = new Set(result.sample.singleRow);
-  const { lag } = result.specification;
+  const singles = new Set(sample.singleRow);
+  const { lag } = specification;
   const rowsOf = columns.companies.map((): number[] => []);
   columns.company.forEach((code, row) => rowsOf[code].push(row));
   const codes = new Map(columns.companies.map((name, code) => [name, code]));
-  const names = [...new Set(result.members)].sort(byCodeUnit);
+  const names = [...new Set(members)].sort(byCodeUnit);
   for (const company of names) {
     const rows = (rowsOf[codes.get(company) ?? -1] ?? []).sort(
       (left, right) => columns.year[left] - columns.year[right],

@@ -20,7 +20,7 @@ export const sampleRules: readonly VerdictRule[] = [
  * does not tell whether a regressor of their own is missing or that of the year before.
  */
 function missingRows({ result: { members, sample, specification } }: VerdictInput): string | null {
-  const left = new Set(sample.dropped.map(({ row }) => row)).size;
+  const left = new Set(sample.dropped.map(({ company, year }) => `${year} ${company}`)).size;
   const used = sample.observations + sample.singleRow.length;
   const byLag = specification.lag * members.length;
   const missing = Math.max(0, left - byLag);

@@ -35,14 +35,44 @@ function refusal(
 }
 
 describe('the sample of a fit', () => {
-  it('drops rows with a missing value and lists each missing cell with its line', () => {
+  it('drops rows with a missing value and lists each missing cell with its company, year and line', () => {
     const rows = change(plainRows(), 4, { outcome: NaN, regressors: [NaN, 1] });
     const { sample } = fitOf(panelOf(rows, names));
     expect(sample.observations).toBe(17);
     expect(sample.balanced).toBeFalse();
     expect(sample.dropped).toEqual([
-      { row: 6, column: 'value', reason: 'missing' },
-      { row: 6, column: 'capex', reason: 'missing' },
+      { company: 'A', year: 2004, row: 6, column: 'value', reason: 'missing' },
+      { company: 'A', year: 2004, row: 6, column: 'capex', reason: 'missing' },
+    ]);
+  });
+
+  it('names the company and year of each dropped row where they share a line or have none', () => {
+    const rows = change(change(plainRows(), 1, { outcome: NaN }), 8, { outcome: NaN });
+    const data = panelOf(rows, names);
+    const places = [4, 0].map((line) => {
+      const { sample } = fitOf({ ...data, fileRow: data.fileRow.map(() => line) });
+      return sample.dropped.map(({ company, year, row }) => [company, year, row]);
+    });
+    expect(places).toEqual([
+      [
+        ['A', 2001, 4],
+        ['B', 2002, 4],
+      ],
+      [
+        ['A', 2001, 0],
+        ['B', 2002, 0],
+      ],
+    ]);
+  });
+
+  it('names the row itself where a regressor of the year before is missing', () => {
+    const rows = change(plainRows(), 3, { regressors: [NaN, 1] });
+    const { sample } = fitOf(panelOf(rows, names), null, { lag: 1 });
+    const ofA = sample.dropped.filter(({ company }) => company === 'A');
+    expect(ofA.map(({ year, column }) => [year, column])).toEqual([
+      [2000, 'capex'],
+      [2000, 'equity'],
+      [2004, 'capex'],
     ]);
   });
 

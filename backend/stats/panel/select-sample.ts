@@ -71,7 +71,13 @@ function splitComplete(
       const row = rows[place];
       if (!Number.isNaN(column[row])) continue;
       isMissing[row] = 1;
-      dropped.push({ row: data.fileRow[row], column: names[index], reason: 'missing' });
+      dropped.push({
+        company: nameOf(data, row),
+        year: data.year[row],
+        row: data.fileRow[row],
+        column: names[index],
+        reason: 'missing',
+      });
     }
   });
   if (dropped.length === 0) return { complete: rows, dropped };

@@ -73,12 +73,16 @@ export function withTest(code: string): VerdictInput {
   return { ...sound, tests: { ...sound.tests, list } };
 }
 
+/** With rows that lack two cells each, all from one line of a file with a column a year. */
 export function withDropped(rows: number, lag: 0 | 1): VerdictInput {
   const { sample, specification } = sound.result;
-  const dropped = Array.from({ length: rows }, (_, row) => [
-    { row, column: 'value', reason: 'missing' as const },
-    { row, column: 'capex', reason: 'missing' as const },
-  ]).flat();
+  const dropped = Array.from({ length: rows }, (_, row) => {
+    const place = { company: 'K03', year: 1900 + row, row: 4, reason: 'missing' as const };
+    return [
+      { ...place, column: 'value' },
+      { ...place, column: 'capex' },
+    ];
+  }).flat();
   return withResult({
     sample: { ...sample, dropped },
     specification: { ...specification, lag },
