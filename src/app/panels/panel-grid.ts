@@ -359,8 +359,8 @@ export class PanelGrid {
     if (node.rowIndex === null) return false;
     api.redrawRows();
     api.ensureNodeVisible(node, 'middle');
-    const column = 'column' in focus && focus.column !== undefined ? focus.column : null;
-    this.goTo({ row: node.rowIndex, column: column === null ? 0 : leadingColumns + column });
+    const { column } = focus;
+    this.goTo({ row: node.rowIndex, column: column === undefined ? 0 : leadingColumns + column });
     return true;
   }
 }

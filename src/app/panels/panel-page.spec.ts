@@ -10,6 +10,7 @@ import {
 } from '@contract';
 import { SessionStore } from '../api/session-store';
 import { PageContext } from '../ui/page-context';
+import type { PanelDeskGrid } from './editing/panel-desk-grid';
 import { PanelPage } from './panel-page';
 
 const id = (last: number): string => `0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a00${10 + last}`;
@@ -103,6 +104,7 @@ describe('the Panel page', () => {
   async function answer(
     versions: readonly PanelVersionSummary[],
     group: typeof peerGroup | null = peerGroup,
+    shown: PanelVersionReply = panel,
   ): Promise<void> {
     http.expectOne('/api/panel-versions').flush({ versions });
     http.expectOne('/api/desk').flush({
@@ -115,7 +117,7 @@ describe('the Panel page', () => {
       await settled();
       return;
     }
-    http.expectOne(`/api/panel-versions/${version.id}`).flush(panel);
+    http.expectOne(`/api/panel-versions/${version.id}`).flush(shown);
     await settled();
     http.expectOne(`/api/panels/${version.panelId}/flag-dismissals`).flush({ dismissals: [] });
     await until(() => page().querySelector('kv-flag-list .groups') !== null);
@@ -186,12 +188,58 @@ describe('the Panel page', () => {
     expect(TestBed.inject(PageContext).ownCompany()).toBe('');
   });
 
-  it('leads from a missing cell to its row, by the line of the file', async () => {
+  it('leads from a missing cell to its row, by company and year', async () => {
     open(['analyst']);
     await answer([version]);
     named('Sarvane FY2010 capex')?.click();
-    await until(() => TestBed.inject(Router).url.includes('row='));
-    expect(TestBed.inject(Router).url).toContain('row=2&column=1');
+    await until(() => TestBed.inject(Router).url.includes('column='));
+    expect(TestBed.inject(Router).url).toBe('/?company=Sarvane&year=2010&column=1');
+  });
+
+  describe('the row that the address names', () => {
+    const wide: PanelVersionReply = {
+      ...panel,
+      rows: { ...panel.rows, fileRow: [2, 2, 0] },
+    };
+
+    function focused(): unknown {
+      const rows = fixture.debugElement.query(({ name }) => name === 'kv-panel-rows');
+      return (rows.componentInstance as PanelDeskGrid).focusedRow();
+    }
+
+    async function openAt(inputs: Record<string, string>): Promise<void> {
+      open(['cfo'], inputs);
+      await answer([version], peerGroup, wide);
+      await until(() => page().querySelector('kv-panel-rows') !== null);
+    }
+
+    it('is told from another of the same line by its company and year', async () => {
+      await openAt({ company: 'Sarvane', year: '2011' });
+      expect(focused()).toEqual({ company: 'Sarvane', year: 2011 });
+      expect(words()).not.toContain('no row');
+    });
+
+    it('may have come by a correction, and may be looked at in one column', async () => {
+      await openAt({ company: 'Velmara', year: '2011', column: '2' });
+      expect(focused()).toEqual({ company: 'Velmara', year: 2011, column: 2 });
+    });
+
+    it('is the first of its line where the address names a line', async () => {
+      await openAt({ row: '2' });
+      expect(focused()).toEqual({ company: 'Sarvane', year: 2010 });
+    });
+
+    it('is said to be missing where this version has none', async () => {
+      await openAt({ company: 'Kesdrin', year: '2016', row: '2' });
+      expect(focused()).toBeNull();
+      expect(words()).toContain('This version has no row for Kesdrin FY2016.');
+    });
+
+    it('is none where the address is cut short', async () => {
+      await openAt({ company: 'Velmara' });
+      expect(focused()).toBeNull();
+      expect(words()).not.toContain('no row');
+    });
   });
 
   it('offers to say that a figure is right, to analysts and on the newest version only', async () => {

@@ -31,7 +31,7 @@ import { panelContext, versionSource } from './panel-context';
 import { panelCompleteness, panelFinding } from './panel-finding';
 import { type PanelRow, columnSources, columnTitle, panelRows } from './panel-rows';
 import { PanelStore } from './panel-store';
-import type { RowFocus } from './row-focus';
+import { type RowFocus, addressWords, isAsked, rowAt } from './row-focus';
 import { PanelVersions } from './versions/panel-versions';
 import { newestOf } from './versions/version-words';
 import { counted } from '../ui/phrases';
@@ -67,7 +67,10 @@ export class PanelPage {
 
   /** From the address; without it the newest version is shown. */
   readonly panelVersionId = input<string>();
-  /** Line of the file to look at, from the address. */
+  /** Company and fiscal year of the row to look at, from the address. */
+  readonly company = input<string>();
+  readonly year = input(null, { transform: wholeNumber(1) });
+  /** Line of the file to look at, from an address that names no company and year. */
   readonly row = input(null, { transform: wholeNumber(1) });
   /** Position of the column to look at in that row, from the address. */
   readonly column = input(null, { transform: wholeNumber(0) });
@@ -118,18 +121,21 @@ export class PanelPage {
     caption: this.source(),
     source: versionSource(this.#panel()?.version),
   }));
+  readonly #address = computed(() => ({
+    company: this.company(),
+    year: this.year(),
+    line: this.row(),
+  }));
+  readonly #addressed = computed(() => rowAt(this.savedRows(), this.#address()));
   /** The row that the address names, where this version has it; new each time it is asked for. */
   protected readonly focusedRow = linkedSignal((): RowFocus | null => {
-    const [line, column] = [this.row(), this.column()];
-    const found = this.savedRows().find(({ fileRow }) => fileRow === line);
-    if (line === null || found === undefined) return null;
-    const { company, year } = found;
-    return column === null ? { line } : { company, year, column };
+    const [found, column] = [this.#addressed(), this.column()];
+    return found === undefined ? null : focusOn(found, column);
   });
-  protected readonly missedLine = computed(() => {
-    const line = this.row();
-    const isHere = this.savedRows().some(({ fileRow }) => fileRow === line);
-    return this.#panel() === null || isHere ? null : line;
+  /** What the address names and this version has not. */
+  protected readonly missedRow = computed(() => {
+    const isHere = this.#panel() === null || this.#addressed() !== undefined;
+    return isHere ? '' : addressWords(this.#address());
   });
   /** A flag at the cell where it is shown. */
   protected readonly flagWords = computed(() => {
@@ -169,18 +175,24 @@ export class PanelPage {
     void this.#router.navigate(['/panel', panelVersionId]);
   }
 
-  /** Leads to a cell's row; the address says which line of the file that is. */
+  /** Leads to a cell's row; the address says which that is, unless it is not saved yet. */
   protected openPlace({ company, year, column = null }: WantedPlace): void {
-    const found = this.rows().find((row) => row.company === company && row.year === year);
-    this.emptyPlace.set(found === undefined ? `${company} ${year}` : '');
-    if (found === undefined) return;
-    const line = found.fileRow === 0 ? null : found.fileRow;
-    if (line === null || (line === this.row() && column === this.column())) {
-      this.focusedRow.set({ company, year, ...(column === null ? {} : { column }) });
+    const place = { company, year };
+    const isHere = this.rows().some((row) => isAsked(row, place));
+    this.emptyPlace.set(isHere ? '' : `${company} ${year}`);
+    if (!isHere) return;
+    const isAddressed =
+      company === this.company() && year === this.year() && column === this.column();
+    if (isAddressed || !this.savedRows().some((row) => isAsked(row, place))) {
+      this.focusedRow.set(focusOn(place, column));
       return;
     }
-    void this.#router.navigate([], { queryParams: { row: line, column }, replaceUrl: true });
+    void this.#router.navigate([], { queryParams: { ...place, column }, replaceUrl: true });
   }
+}
+
+function focusOn({ company, year }: RowFocus, column: number | null): RowFocus {
+  return { company, year, ...(column === null ? {} : { column }) };
 }
 
 /** A whole number above or at `least` in the address; null for anything else. */
