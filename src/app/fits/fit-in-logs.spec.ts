@@ -86,7 +86,7 @@ describe('a fit in logs with year effects, the year before and the bootstrap', (
 
   it('says of which year a missing cell is', () => {
     expect(words(page.querySelector('kv-sample-notes'))).toContain(
-      'Row 17: capex of the year before missing',
+      'Kesdrin FY2016: capex of the year before missing',
     );
   });
 });

@@ -90,11 +90,25 @@ describe('the Fit page', () => {
     expect(words()).toContain('0.9626');
     expect(words()).toContain('2.07');
     expect(words()).toContain('on 2 and 28, p < 0.001');
-    expect(page().querySelector('a[href$="?row=17"]')?.textContent).toContain(
-      'Row 17: capex missing',
+    expect(page().querySelector('a[href$="?company=Kesdrin&year=2016"]')?.textContent).toContain(
+      'Kesdrin FY2016: capex missing',
     );
     const scenarios = page().querySelector(`a[href="/scenarios?fit=${exampleFit.fit.id}"]`);
     expect(scenarios?.textContent).toContain('Run scenarios');
+  });
+
+  it('counts the company-years that dropped out, not the lines of the file', async () => {
+    start(['cfo']);
+    const dropped = [2016, 2017, 2018].flatMap((year) =>
+      ['market_value', 'capex'].map((column) => ({
+        ...{ company: 'Kesdrin', year, row: 17, column, reason: 'missing' as const },
+      })),
+    );
+    const sample = { ...exampleResult.sample, dropped };
+    await answer({ ...exampleFit, result: { ...exampleResult, sample } });
+    await answerList();
+    expect(words()).toContain('3 rows of these companies dropped out for a missing cell:');
+    expect(words()).toContain('Kesdrin FY2018: market_value and capex missing');
   });
 
   it('says what the company levels are net of, further regressors included', async () => {

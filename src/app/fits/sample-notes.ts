@@ -1,7 +1,8 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import type { FitResult, Lag } from '@contract';
-import { counted, lagText, yearsText } from '../ui/phrases';
+import { counted, yearsText } from '../ui/phrases';
+import { droppedRows } from './dropped-rows';
 
 const mostListed = 50;
 
@@ -14,10 +15,10 @@ const mostListed = 50;
     @if (dropped().length > 0) {
       <p>{{ droppedWords() }}</p>
       <ul>
-        @for (row of listed(); track $index) {
+        @for (row of listed(); track row.name) {
           <li>
-            <a [routerLink]="['/panel', panelVersionId()]" [queryParams]="{ row: row.row }"
-              >Row {{ row.row }}: {{ row.column }}{{ row.of }} missing</a
+            <a [routerLink]="['/panel', panelVersionId()]" [queryParams]="row.address"
+              >{{ row.name }}: {{ row.missing }} missing</a
             >
           </li>
         }
@@ -52,19 +53,17 @@ export class SampleNotes {
   readonly lag = input.required<Lag>();
   readonly panelVersionId = input.required<string>();
 
-  protected readonly dropped = computed(() => this.sample().dropped);
-  protected readonly listed = computed(() =>
-    this.dropped()
-      .slice(0, mostListed)
-      .map((row) => ({ ...row, of: row.column === this.outcome() ? '' : lagText(this.lag()) })),
+  protected readonly dropped = computed(() =>
+    droppedRows(this.sample().dropped, this.outcome(), this.lag()),
   );
+  protected readonly listed = computed(() => this.dropped().slice(0, mostListed));
   protected readonly used = computed(() => {
     const { observations, companies, firstYear, lastYear, balanced } = this.sample();
     const evenness = balanced ? 'each company has every year' : 'not every company has every year';
     return `${counted(observations, 'row')} of ${counted(companies, 'company', 'companies')}, ${yearsText(firstYear, lastYear)}; ${evenness}.`;
   });
   protected readonly droppedWords = computed(() => {
-    const rows = new Set(this.dropped().map(({ row }) => row)).size;
+    const rows = this.dropped().length;
     const cell = this.lag() === 0 ? 'a missing cell' : 'a missing cell, or one of the year before';
     return `${counted(rows, 'row')} of these companies dropped out for ${cell}:`;
   });

@@ -8,6 +8,21 @@ export function yearsText(firstYear: number, lastYear: number): string {
   return firstYear === lastYear ? `FY${firstYear}` : `FY${firstYear}–FY${lastYear}`;
 }
 
+/** Where a row of the panel comes from: the line of the imported file; `added` for 0, a row that a correction added. */
+export function lineText(fileRow: number): string {
+  return fileRow === 0 ? 'added' : String(fileRow);
+}
+
+/** What a link to a row of the panel says: `Velmara FY2024, row 17 in the panel`. */
+export function rowLinkText(row: {
+  readonly company: string;
+  readonly year: number;
+  readonly fileRow: number;
+}): string {
+  const line = row.fileRow === 0 ? 'added row' : `row ${row.fileRow}`;
+  return `${row.company} ${yearsText(row.year, row.year)}, ${line} in the panel`;
+}
+
 /** The first characters of a hash, for the eye. */
 export function shortHash(hash: string | null): string {
   return hash === null ? 'n/a' : hash.slice(0, 6);

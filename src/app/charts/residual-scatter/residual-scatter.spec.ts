@@ -10,7 +10,7 @@ import { scatterMove } from './scatter-move';
 const rows: readonly ResidualRow[] = [
   { company: 'Ostrell', year: 2012, fileRow: 7, fitted: 100, residual: 5, studentised: 0.4 },
   { company: 'Velmara', year: 2013, fileRow: 21, fitted: 300, residual: -40, studentised: -3.1 },
-  { company: 'Tolvane', year: 2014, fileRow: 40, fitted: 200, residual: 30, studentised: null },
+  { company: 'Tolvane', year: 2014, fileRow: 0, fitted: 200, residual: 30, studentised: null },
 ];
 
 describe('residual scatter', () => {
@@ -26,8 +26,10 @@ describe('residual scatter', () => {
     const chart = await TestbedHarnessEnvironment.loader(fixture).getHarness(ChartHarness);
     const page = fixture.nativeElement as HTMLElement;
     document.body.append(page);
-    const chosen: number[] = [];
-    fixture.componentInstance.rowSelected.subscribe((fileRow) => chosen.push(fileRow));
+    const chosen: string[] = [];
+    fixture.componentInstance.rowSelected.subscribe(({ company, year }) =>
+      chosen.push(`${company} ${year}`),
+    );
     return { fixture, chart, page, chosen };
   }
 
@@ -54,7 +56,7 @@ describe('residual scatter', () => {
     expect(page.querySelector('.readout')?.textContent).toContain('Velmara 2013');
   });
 
-  it('tells the row of the file that was chosen by Enter and by click, and none beside the points', async () => {
+  it('tells the row that was chosen by Enter and by click, and none beside the points', async () => {
     const { chart, page, chosen } = await shown();
     await (await chart.cloud()).sendKeys(TestKey.HOME, TestKey.ENTER);
     const svg = page.querySelector('svg')!;
@@ -68,7 +70,7 @@ describe('residual scatter', () => {
       );
     click(4);
     click(80);
-    expect(chosen).toEqual([7, 7]);
+    expect(chosen).toEqual(['Ostrell 2012', 'Ostrell 2012']);
   });
 
   it('shows the same values as a table, the largest first', async () => {
@@ -85,7 +87,7 @@ describe('residual scatter', () => {
     expect(await chart.table()).toEqual([
       ['Velmara', '2013', '300.0', '\u221240.0', '\u22123.10', '21'],
       ['Ostrell', '2012', '100.0', '5.0', '0.40', '7'],
-      ['Tolvane', '2014', '200.0', '30.0', 'n/a', '40'],
+      ['Tolvane', '2014', '200.0', '30.0', 'n/a', 'added'],
     ]);
   });
 

@@ -15,6 +15,7 @@ import {
   residualScatterLayout,
 } from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
+import { lineText } from '../../ui/phrases';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats, withUnit } from '../figure-formats';
@@ -46,8 +47,7 @@ export class ResidualScatter {
   readonly ownCompany = input.required<string>();
   readonly kind = input<FigureKind>('money');
 
-  /** The row's number in the imported file. */
-  readonly rowSelected = output<number>();
+  readonly rowSelected = output<ResidualRow>();
 
   protected readonly pointId = `kv-residual-${charts++}`;
   protected readonly diamond = diamondPath(6);
@@ -111,7 +111,7 @@ export class ResidualScatter {
         value(row.fitted),
         value(row.residual),
         this.#studentised(row),
-        String(row.fileRow),
+        lineText(row.fileRow),
       ],
     }));
   });
@@ -167,7 +167,7 @@ export class ResidualScatter {
 
   #select(place: number): void {
     const at = this.#at(place);
-    if (at !== null) this.rowSelected.emit(at.row.fileRow);
+    if (at !== null) this.rowSelected.emit(at.row);
   }
 
   #placeOf(event: MouseEvent): number | null {

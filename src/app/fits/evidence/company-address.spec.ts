@@ -14,11 +14,11 @@ describe('where a selected company leads', () => {
   it('leads from the own company to its newest row of the panel', () => {
     const ownYears = [
       { year: 2013, fileRow: 4 },
-      { year: 2014, fileRow: 12 },
+      { year: 2014, fileRow: 4 },
     ].map((place) => ({ ...place, actual: 1, fitted: 1, residual: 0, regressors: [1, 1] }));
     expect(companyAddress(exampleFit, { ...exampleResult, ownYears }, fit.ownCompany)).toEqual([
       ['/panel', panelVersion.id],
-      { queryParams: { row: 12 } },
+      { queryParams: { company: fit.ownCompany, year: 2014 } },
     ]);
   });
 

@@ -13,5 +13,5 @@ export function companyAddress(
   const newest = company === fit.ownCompany ? ownYears?.at(-1) : undefined;
   return newest === undefined
     ? [['/peers', peerGroup.id], { queryParams: { company } }]
-    : [['/panel', panelVersion.id], { queryParams: { row: newest.fileRow } }];
+    : [['/panel', panelVersion.id], { queryParams: { company, year: newest.year } }];
 }

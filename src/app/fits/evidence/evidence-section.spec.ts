@@ -154,9 +154,24 @@ describe('the evidence on the Fit page', () => {
     await open(ready);
     const links = [...page().querySelectorAll('kv-largest-residuals a')];
     expect(links.map((link) => link.getAttribute('href'))).toEqual([
-      `/panel/${exampleFit.panelVersion.id}?row=5`,
-      `/panel/${exampleFit.panelVersion.id}?row=20`,
+      `/panel/${exampleFit.panelVersion.id}?company=Velmara&year=2014`,
+      `/panel/${exampleFit.panelVersion.id}?company=Sarvane&year=2012`,
     ]);
+    expect(links.map((link) => link.textContent?.trim())).toEqual(['5', 'added']);
+    expect(links.map((link) => link.getAttribute('aria-label'))).toEqual([
+      'Velmara FY2014, row 5 in the panel',
+      'Sarvane FY2012, added row in the panel',
+    ]);
+  });
+
+  it('leads from a point of the residuals to its row of the panel', async () => {
+    await open(ready);
+    const scatter = page().querySelector('kv-residual-scatter svg[tabindex]');
+    scatter?.dispatchEvent(new KeyboardEvent('keydown', { key: 'Enter' }));
+    await settled();
+    expect(TestBed.inject(Router).url).toBe(
+      `/panel/${exampleFit.panelVersion.id}?company=Velmara&year=2014`,
+    );
   });
 
   it('reads out every test with its definition and source', async () => {

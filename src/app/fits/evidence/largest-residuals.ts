@@ -3,6 +3,7 @@ import { RouterLink } from '@angular/router';
 import type { FitReply, FitResult, ResidualSummary } from '@contract';
 import { levelKind } from '../../ui/model-form';
 import { NumberFormat } from '../../ui/number-format';
+import { lineText, rowLinkText } from '../../ui/phrases';
 import { regressorWord } from '../fit-words';
 import { outcomeAxis, regressorAxis } from './axis-words';
 
@@ -42,7 +43,8 @@ export class LargestResiduals {
     return largest.map((row) => ({
       company: row.company,
       year: row.year,
-      fileRow: row.fileRow,
+      line: lineText(row.fileRow),
+      linkText: rowLinkText(row),
       isOwn: row.company === this.reply().fit.ownCompany,
       cells: row.regressors.map((value, index) =>
         this.#numbers.figure(value, this.regressors()[index].kind),

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
 import { Router } from '@angular/router';
 import type { Evidence, FitReply, FitResult } from '@contract';
+import type { ResidualRow } from '@figures';
 import { ResidualGroups } from '../../charts/residual-groups/residual-groups';
 import { ResidualScatter } from '../../charts/residual-scatter/residual-scatter';
 import { levelKind, levelUnit } from '../../ui/model-form';
@@ -46,9 +47,9 @@ export class ResidualsBlock {
   });
 
   /** Leads to the row of the panel that a residual is of. */
-  protected openRow(fileRow: number): void {
+  protected openRow({ company, year }: ResidualRow): void {
     void this.#router.navigate(['/panel', this.reply().panelVersion.id], {
-      queryParams: { row: fileRow },
+      queryParams: { company, year },
     });
   }
 }

@@ -23,7 +23,7 @@ export const exampleResult: FitResult = {
     balanced: false,
     firstYear: 2010,
     lastYear: 2020,
-    dropped: [{ row: 17, column: 'capex', reason: 'missing' }],
+    dropped: [{ company: 'Kesdrin', year: 2016, row: 17, column: 'capex', reason: 'missing' }],
     singleRow: [],
   },
   slopes: [

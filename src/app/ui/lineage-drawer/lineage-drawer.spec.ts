@@ -33,11 +33,18 @@ describe('LineageDrawer', () => {
     expect(host.textContent).toContain('1,275.2 to 3,538.98');
   });
 
-  it('leads from each row of the file to its place in the panel', async () => {
+  it('leads from each row, also one that a correction added, to its place in the panel', async () => {
     const host = await show(standingLineage);
-    const link = host.querySelector<HTMLAnchorElement>('tbody a');
-    expect(link?.textContent.trim()).toBe('17');
-    expect(link?.getAttribute('href')).toBe(`/panel/${standingLineage.panelVersion.id}?row=17`);
+    const links = [...host.querySelectorAll<HTMLAnchorElement>('tbody a')];
+    expect(links.map((link) => link.textContent.trim())).toEqual(['17', 'added']);
+    expect(links.map((link) => link.getAttribute('href'))).toEqual([
+      `/panel/${standingLineage.panelVersion.id}?company=Velmara&year=2024`,
+      `/panel/${standingLineage.panelVersion.id}?company=Velmara&year=2025`,
+    ]);
+    expect(links.map((link) => link.getAttribute('aria-label'))).toEqual([
+      'Velmara FY2024, row 17 in the panel',
+      'Velmara FY2025, added row in the panel',
+    ]);
   });
 
   it('gives no link to a panel that the person may not open', async () => {

@@ -17,6 +17,7 @@ import { RouterLink } from '@angular/router';
 import type { LineageReply } from '@contract';
 import { fullText, unitText } from '@figures';
 import { covarianceName } from '../covariance-words';
+import { lineText, rowLinkText } from '../phrases';
 import type { ShownProblem } from '../problem';
 import { ProblemNotice } from '../problem-notice';
 
@@ -42,7 +43,7 @@ export class LineageDrawer {
   /** Null while it is being read, or could not be. */
   readonly lineage = input.required<LineageReply | null>();
   readonly problem = input<ShownProblem | null>(null);
-  /** Whether the person may open the panel: then each row of the file is a link to its place there. */
+  /** Whether the person may open the panel: then each row is a link to its place there. */
   readonly mayOpenPanel = input(true);
 
   readonly closed = output();
@@ -56,6 +57,8 @@ export class LineageDrawer {
     source: () => this.lineage()?.figure,
     computation: () => rowsAtFirst,
   });
+  protected readonly lineText = lineText;
+  protected readonly rowLinkText = rowLinkText;
   protected readonly unit = computed(() => {
     const version = this.lineage()?.panelVersion;
     return version === undefined ? '' : unitText(version.currency, version.unit);

@@ -69,7 +69,7 @@ export const standingLineage: LineageReply = {
         values: [9120.5, 1180],
         origins: [null, null],
       },
-      { fileRow: 18, company: 'Velmara', year: 2025, values: [9410, null], origins: [null, null] },
+      { fileRow: 0, company: 'Velmara', year: 2025, values: [9410, null], origins: [null, null] },
     ],
   },
 };
