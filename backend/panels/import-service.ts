@@ -6,6 +6,7 @@ import type { TableReading } from '../compute/file-recipe';
 import type { FileCheck, FilePreview } from '../compute/parse-messages';
 import type { ParseProcess } from '../compute/parse-process';
 import { Conflict, NotFound } from '../errors/app-error';
+import { beginningOf } from '../files/beginning-of';
 import { checkColumns } from './check-columns';
 import { type CurrentPanel, currentPanel } from './current-panel';
 import {
@@ -153,5 +154,5 @@ function panelNameOf(fileName: string): string {
     .replace(/\.\w+$/, '')
     .replaceAll(/[_-]+/g, ' ')
     .trim();
-  return stem === '' ? 'Panel' : stem.slice(0, 120);
+  return stem === '' ? 'Panel' : beginningOf(stem, 120);
 }
