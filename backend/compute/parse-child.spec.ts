@@ -12,10 +12,11 @@ const text = [
   'Birch,2020,20,3,7',
 ].join('\n');
 const bytes = new TextEncoder().encode(text);
+const peers = { owner: 'one', bytes, name: 'peers.csv' };
 
 async function codeOf(content: Uint8Array, name: string): Promise<string> {
   try {
-    await reader().preview(content, name, null);
+    await reader().preview({ owner: 'one', bytes: content, name }, null);
   } catch (error) {
     if (error instanceof ParseRefused) return error.code;
     throw error;
@@ -25,7 +26,7 @@ async function codeOf(content: Uint8Array, name: string): Promise<string> {
 
 describe('a file read in its process', () => {
   it('is previewed, checked and read by the same reading', async () => {
-    const preview = await reader().preview(bytes, 'peers.csv', null);
+    const preview = await reader().preview(peers, null);
     expect(preview.headers).toEqual(['Company', 'Year', 'Market value', 'Capex', 'Book equity']);
     expect(preview.firstRows[0]).toEqual({ row: 2, cells: ['Alder', '2019', '10', '1', '5'] });
     expect([preview.rowCount, preview.topLines.length]).toEqual([3, 4]);
@@ -48,9 +49,9 @@ describe('a file read in its process', () => {
       },
       mending: { cells: [], excludedRows: [], renames: [] },
     };
-    const check = await reader().check(bytes, 'peers.csv', recipe, null);
+    const check = await reader().check(peers, recipe, null);
     expect([check.rows, check.companies, check.blockingCount]).toEqual([3, 2, 0]);
-    const panel = await reader().read(bytes, 'peers.csv', recipe);
+    const panel = await reader().read(peers, recipe);
     expect(panel.values.map((values) => [...values])).toEqual([
       [10, 11, 20],
       [1, 2, 3],
@@ -60,7 +61,10 @@ describe('a file read in its process', () => {
 
   it('shows a long text by its beginning', async () => {
     const long = `${text}\n${'x'.repeat(60_000)},2020,1,1,1`;
-    const { firstRows } = await reader().preview(new TextEncoder().encode(long), 'a.csv', null);
+    const { firstRows } = await reader().preview(
+      { ...peers, bytes: new TextEncoder().encode(long) },
+      null,
+    );
     expect(firstRows[3].cells[0].length).toBe(202);
   });
 
@@ -79,7 +83,7 @@ describe('a file read in its process', () => {
       codeOf(hostile.long, 'a.xlsx'),
       codeOf(hostile.line, 'a.csv'),
     ]);
-    expect((await shared.preview(bytes, 'peers.csv', null)).rowCount).toBe(3);
+    expect((await shared.preview(peers, null)).rowCount).toBe(3);
     expect(await codes).toEqual(['zip_limit', 'xlsx_active_content', 'sheet_limit', 'csv_invalid']);
   });
 });

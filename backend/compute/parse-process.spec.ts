@@ -2,9 +2,9 @@ import { mkdtemp, readFile, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { setTimeout as wait } from 'node:timers/promises';
-import { ParseProcess, ParseRefused } from './parse-process';
+import { type ParseOptions, ParseProcess, ParseRefused } from './parse-process';
 
-const noBytes = new Uint8Array();
+const file = { owner: 'one', bytes: new Uint8Array(), name: 'peers.csv' };
 
 describe('a reader in a process of its own', () => {
   let folder: string;
@@ -18,18 +18,20 @@ describe('a reader in a process of its own', () => {
     await rm(folder, { recursive: true });
   });
 
-  async function readerThat(does: string, timeLimitMs?: number): Promise<ParseProcess> {
+  async function readerThat(does: string, options?: ParseOptions): Promise<ParseProcess> {
     count += 1;
-    const file = join(folder, `${count}.mjs`);
+    const childFile = join(folder, `${count}.mjs`);
     await writeFile(
-      file,
+      childFile,
       `import { writeFileSync } from 'node:fs'; process.once('message', (request) => { ${does} });`,
     );
-    return new ParseProcess(file, timeLimitMs);
+    return new ParseProcess(childFile, options);
   }
 
   const preview = (reader: ParseProcess, signal?: AbortSignal): Promise<unknown> =>
-    reader.preview(noBytes, 'peers.csv', null, signal);
+    reader.preview(file, null, signal);
+  const previewFor = (owner: string, reader: ParseProcess): Promise<unknown> =>
+    reader.preview({ ...file, owner }, null);
 
   const rejection = async (work: Promise<unknown>): Promise<unknown> =>
     work.then(
@@ -51,7 +53,7 @@ describe('a reader in a process of its own', () => {
         await wait(20);
       }
     };
-    return { reader: await readerThat(does, timeLimitMs), processId };
+    return { reader: await readerThat(does, { timeLimitMs }), processId };
   }
 
   async function isGone(id: number): Promise<boolean> {
@@ -67,12 +69,27 @@ describe('a reader in a process of its own', () => {
   }
 
   it('ends alone when a file takes too much memory, and says so', async () => {
+    const lines: string[] = [];
     const reader = await readerThat(
       'const kept = []; for (;;) kept.push(Array.from({ length: 1e6 }, (_, i) => ({ i })));',
+      { onStderr: (line) => lines.push(line) },
     );
     const error = await rejection(preview(reader));
     expect(error).toBeInstanceOf(ParseRefused);
     expect((error as ParseRefused).code).toBe('parse_memory');
+    while (lines.length === 0) await wait(20);
+    expect(lines).toEqual([jasmine.stringMatching(/^FATAL ERROR: .*out of memory$/u)]);
+  });
+
+  it('passes on the first line of what it writes to its standard error, and no more', async () => {
+    const lines: string[] = [];
+    const reader = await readerThat(
+      "process.stderr.write('first\\nsecond\\n' + 'x'.repeat(1e6), () => process.exit(3));",
+      { onStderr: (line) => lines.push(line) },
+    );
+    await expectAsync(preview(reader)).toBeRejectedWithError(/status 3/);
+    while (lines.length === 0) await wait(20);
+    expect(lines).toEqual(['first']);
   });
 
   it('is ended when a file takes too long', async () => {
@@ -111,18 +128,32 @@ describe('a reader in a process of its own', () => {
     ]);
   });
 
+  it('reads a file of another owner while one has files that take their time', async () => {
+    const reader = await readerThat(
+      "setTimeout(() => { process.send({ kind: 'preview', preview: request.name }); }, 400);",
+    );
+    const order: string[] = [];
+    const work = ['one', 'one', 'one', 'other'].map((owner) =>
+      previewFor(owner, reader).then(() => order.push(owner)),
+    );
+    await Promise.all(work);
+    expect(order.slice(0, 2).sort()).toEqual(['one', 'other']);
+  });
+
   it('answers two files at once and lets a third wait', async () => {
     const reader = await readerThat(
       "setTimeout(() => { process.send({ kind: 'preview', preview: { headers: [] } }); }, 50);",
     );
-    const all = await Promise.all([1, 2, 3].map(() => preview(reader)));
+    const all = await Promise.all(['a', 'b', 'c'].map((owner) => previewFor(owner, reader)));
     expect(all.length).toBe(3);
   });
 
   it('begins nothing for a caller that gave up while it waited', async () => {
     const { reader, processId } = await endlessReader();
     const busy = new AbortController();
-    const running = [1, 2].map(() => rejection(preview(reader, busy.signal)));
+    const running = ['a', 'b'].map((owner) =>
+      rejection(reader.preview({ ...file, owner }, null, busy.signal)),
+    );
     await processId();
     const waiting = new AbortController();
     const third = rejection(preview(reader, waiting.signal));

@@ -8,11 +8,28 @@ import type {
   ParseAnswer,
   ParseRequest,
 } from './parse-messages';
+import { tellingLine } from './telling-line';
 import { Turns } from './turns';
 
 const memoryLimitMb = 256;
 const usualTimeLimitMs = 30_000;
 const mostAtOnce = 2;
+/** Of what a reader writes to its standard error, so many characters are looked at. */
+const keptOfStderr = 65_536;
+
+/** An upload as it is read. */
+export interface OwnedFile {
+  /** Whose file it is: readers take up the files of one owner one after another. */
+  readonly owner: string;
+  readonly bytes: Uint8Array;
+  readonly name: string;
+}
+
+export interface ParseOptions {
+  readonly timeLimitMs?: number;
+  /** Is told one line of what a reader wrote to its standard error; by default this process writes it to its own. */
+  readonly onStderr?: (line: string) => void;
+}
 
 /** A file that cannot be read, with the reader's code and its sentence for a person. */
 export class ParseRefused extends Error {
@@ -31,48 +48,51 @@ export class ParseRefused extends Error {
  */
 export class ParseProcess {
   readonly #turns = new Turns(mostAtOnce);
+  readonly #timeLimitMs: number;
+  readonly #onStderr: (line: string) => void;
 
   /** @param childFile  path of the child's entry, TypeScript under tsx or the built file. */
   constructor(
     private readonly childFile: string,
-    private readonly timeLimitMs = usualTimeLimitMs,
-  ) {}
+    { timeLimitMs = usualTimeLimitMs, onStderr = writeLine }: ParseOptions = {},
+  ) {
+    this.#timeLimitMs = timeLimitMs;
+    this.#onStderr = onStderr;
+  }
 
   /** @param reading  null to have it recognised. */
   async preview(
-    bytes: Uint8Array,
-    name: string,
+    { owner, bytes, name }: OwnedFile,
     reading: TableReading | null,
     signal?: AbortSignal,
   ): Promise<FilePreview> {
-    const answer = await this.#ask({ kind: 'preview', bytes, name, reading }, signal);
+    const answer = await this.#ask(owner, { kind: 'preview', bytes, name, reading }, signal);
     return expectKind(answer, 'preview').preview;
   }
 
   /** @param current  the newest version of the panel that the file would become the next of. */
   async check(
-    bytes: Uint8Array,
-    name: string,
+    { owner, bytes, name }: OwnedFile,
     recipe: FileRecipe,
     current: PanelBlock | null,
     signal?: AbortSignal,
   ): Promise<FileCheck> {
-    const answer = await this.#ask({ kind: 'check', bytes, name, recipe, current }, signal);
+    const request: ParseRequest = { kind: 'check', bytes, name, recipe, current };
+    const answer = await this.#ask(owner, request, signal);
     return expectKind(answer, 'check').check;
   }
 
   async read(
-    bytes: Uint8Array,
-    name: string,
+    { owner, bytes, name }: OwnedFile,
     recipe: FileRecipe,
     signal?: AbortSignal,
   ): Promise<FilePanel> {
-    const answer = await this.#ask({ kind: 'read', bytes, name, recipe }, signal);
+    const answer = await this.#ask(owner, { kind: 'read', bytes, name, recipe }, signal);
     return expectKind(answer, 'read').panel;
   }
 
-  #ask(request: ParseRequest, signal?: AbortSignal): Promise<ParseAnswer> {
-    return this.#turns.take(() => this.#run(request, signal), signal);
+  #ask(owner: string, request: ParseRequest, signal?: AbortSignal): Promise<ParseAnswer> {
+    return this.#turns.take(owner, () => this.#run(request, signal), signal);
   }
 
   #run(request: ParseRequest, signal?: AbortSignal): Promise<ParseAnswer> {
@@ -84,8 +104,8 @@ export class ParseProcess {
         reject(reason);
       };
       const timer = setTimeout(() => {
-        end(tooSlow(this.timeLimitMs));
-      }, this.timeLimitMs);
+        end(tooSlow(this.#timeLimitMs));
+      }, this.#timeLimitMs);
       const cancel = (): void => {
         end(reasonOf(signal));
       };
@@ -113,16 +133,29 @@ export class ParseProcess {
   }
 
   #start(): ChildProcess {
-    return fork(this.childFile, [], {
+    const child = fork(this.childFile, [], {
       serialization: 'advanced',
-      stdio: ['ignore', 'ignore', 'inherit', 'ipc'],
+      stdio: ['ignore', 'ignore', 'pipe', 'ipc'],
       env: { PATH: process.env['PATH'] },
       execArgv: [
         `--max-old-space-size=${memoryLimitMb}`,
         ...(this.childFile.endsWith('.ts') ? ['--import', 'tsx'] : []),
       ],
     });
+    let written = '';
+    child.stderr?.setEncoding('utf8').on('data', (text: string) => {
+      written += text.slice(0, keptOfStderr - written.length);
+    });
+    child.once('close', () => {
+      const line = tellingLine(written);
+      if (line !== undefined) this.#onStderr(line);
+    });
+    return child;
   }
+}
+
+function writeLine(line: string): void {
+  process.stderr.write(`file reader: ${line}\n`);
 }
 
 function tooSlow(limitMs: number): ParseRefused {

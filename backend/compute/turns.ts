@@ -1,37 +1,64 @@
-/** Lets so many pieces of work run at once and the others wait, first come first served. */
+interface Waiting {
+  readonly begin: () => void;
+}
+
+/**
+ * Lets so many pieces of work run at once, one an owner, and the others wait. Owners who wait take turns, whoever ended
+ * a piece last behind the others; the pieces of one owner are first come first served.
+ */
 export class Turns {
-  #running = 0;
-  readonly #waiting: (() => void)[] = [];
+  readonly #running = new Set<string>();
+  /** By owner, in the order in which the owners come next; none is empty. */
+  readonly #waiting = new Map<string, Waiting[]>();
 
   constructor(private readonly most: number) {}
 
   /**
    * Runs the work when its turn comes.
    *
+   * @param owner  whose pieces of work run one after another.
    * @throws the signal's reason where it is aborted before; work that has begun minds the signal itself.
    */
-  async take<T>(work: () => Promise<T>, signal?: AbortSignal): Promise<T> {
-    if (this.#running >= this.most) await this.#wait(signal);
-    else this.#running += 1;
+  async take<T>(owner: string, work: () => Promise<T>, signal?: AbortSignal): Promise<T> {
+    if (this.#running.size >= this.most || this.#running.has(owner))
+      await this.#wait(owner, signal);
+    else this.#running.add(owner);
     try {
       signal?.throwIfAborted();
       return await work();
     } finally {
-      const next = this.#waiting.shift();
-      // The turn goes to the next one; nobody who comes in between takes it.
-      if (next === undefined) this.#running -= 1;
-      else next();
+      this.#pass(owner);
     }
   }
 
-  #wait(signal: AbortSignal | undefined): Promise<void> {
+  /** The turn goes to the next one; nobody who comes in between takes it. */
+  #pass(owner: string): void {
+    this.#running.delete(owner);
+    const own = this.#waiting.get(owner);
+    if (own !== undefined) {
+      this.#waiting.delete(owner);
+      this.#waiting.set(owner, own);
+    }
+    for (const [next, list] of this.#waiting) {
+      if (this.#running.has(next)) continue;
+      this.#running.add(next);
+      const [first] = list;
+      this.#leave(next, first);
+      first.begin();
+      return;
+    }
+  }
+
+  #wait(owner: string, signal: AbortSignal | undefined): Promise<void> {
     return new Promise((resolve, reject) => {
-      const begin = (): void => {
-        signal?.removeEventListener('abort', leave);
-        resolve();
+      const waiting: Waiting = {
+        begin: () => {
+          signal?.removeEventListener('abort', giveUp);
+          resolve();
+        },
       };
-      const leave = (): void => {
-        this.#waiting.splice(this.#waiting.indexOf(begin), 1);
+      const giveUp = (): void => {
+        this.#leave(owner, waiting);
         const reason: unknown = signal?.reason;
         reject(reason instanceof Error ? reason : new Error('cancelled while waiting'));
       };
@@ -39,8 +66,16 @@ export class Turns {
         reject(signal.reason as Error);
         return;
       }
-      signal?.addEventListener('abort', leave, { once: true });
-      this.#waiting.push(begin);
+      signal?.addEventListener('abort', giveUp, { once: true });
+      const list = this.#waiting.get(owner);
+      if (list === undefined) this.#waiting.set(owner, [waiting]);
+      else list.push(waiting);
     });
+  }
+
+  #leave(owner: string, waiting: Waiting): void {
+    const rest = this.#waiting.get(owner)?.filter((other) => other !== waiting) ?? [];
+    if (rest.length === 0) this.#waiting.delete(owner);
+    else this.#waiting.set(owner, rest);
   }
 }

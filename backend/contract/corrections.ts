@@ -104,5 +104,6 @@ export const FlagDismissal = DismissFlag.extend({
 });
 export type FlagDismissal = z.infer<typeof FlagDismissal>;
 
+/** Columns are those of the newest version; dismissals of a column that it does not have are not among them. */
 export const FlagDismissalsReply = z.object({ dismissals: z.array(FlagDismissal) });
 export type FlagDismissalsReply = z.infer<typeof FlagDismissalsReply>;

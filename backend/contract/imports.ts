@@ -251,6 +251,9 @@ export const ImportReply = z.object({
 });
 export type ImportReply = z.infer<typeof ImportReply>;
 
-/** Makes a checked import a panel version, in the background. */
+/**
+ * Makes a checked import a panel version, in the background; answered with 409 `stale-version` and `latestId` when the
+ * panel has another version since the check.
+ */
 export const CommitImport = z.strictObject({ note: z.string().trim().max(2000) });
 export type CommitImport = z.infer<typeof CommitImport>;

@@ -1,6 +1,6 @@
-import type { FlagDismissalRow } from '../../db/repositories/flag-dismissals-repository';
 import type { CellHistoryReply, FlagCode, FlagDismissal, PanelDifferencesReply } from '../contract';
 import type { PanelDifferences } from '../panel-data';
+import type { PlacedDismissal } from './flag-dismissal-service';
 import type { CellEntry } from './panel-history-service';
 
 export function toPanelDifferencesReply({
@@ -23,12 +23,12 @@ export function toCellHistoryReply(entries: readonly CellEntry[]): CellHistoryRe
   };
 }
 
-export function toFlagDismissal(row: FlagDismissalRow): FlagDismissal {
+export function toFlagDismissal(row: PlacedDismissal): FlagDismissal {
   return {
     id: row.id,
     company: row.company,
     year: row.year,
-    column: row.columnIndex,
+    column: row.column,
     code: row.code as FlagCode,
     value: row.value,
     reason: row.reason,

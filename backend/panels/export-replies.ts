@@ -1,5 +1,6 @@
 import type { PanelVersionRow } from '../../db/repositories/panels-repository';
 import { insideInformationCaution } from '../contract';
+import { beginningOf } from '../files/beginning-of';
 import type { ExportFormat } from './panel-export-service';
 import { type PanelExport, panelTable } from './panel-table';
 import type { NotedLine, NotedTable } from './table-workbook';
@@ -16,10 +17,7 @@ export function exportFileName(
   format: ExportFormat,
 ): string {
   const words = panelName.match(/[\p{L}\p{M}\p{N}]+/gu) ?? ['panel'];
-  const name = words
-    .join('-')
-    .slice(0, 60)
-    .replace(/\p{Cs}$/u, '');
+  const name = beginningOf(words.join('-'), 60);
   return `${name}-version-${number}.${format}`;
 }
 

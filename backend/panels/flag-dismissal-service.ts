@@ -19,15 +19,26 @@ export interface NewDismissal {
   readonly reason: string;
 }
 
+export interface PlacedDismissal extends FlagDismissalRow {
+  /** Where its column stands in the newest version; null where the whole row is meant. */
+  readonly column: number | null;
+}
+
 /** Flags that somebody looked at and found to be right as they are. */
 export class FlagDismissalService {
   constructor(private readonly repositories: Repositories) {}
 
-  /** The newest first. @throws {NotFound} */
-  async list(workspaceId: string, panelId: string): Promise<readonly FlagDismissalRow[]> {
+  /** The newest first; none of a column that the newest version does not have. @throws {NotFound} */
+  async list(workspaceId: string, panelId: string): Promise<readonly PlacedDismissal[]> {
     return this.repositories.inWorkspace(workspaceId, async (tx) => {
-      await findNewest(tx, panelId);
-      return tx.flagDismissals.ofPanel(panelId);
+      const { columns } = await findNewest(tx, panelId);
+      const places = new Map<string | null, number | null>([[null, null]]);
+      columns.forEach(({ name }, column) => places.set(name, column));
+      const found = await tx.flagDismissals.ofPanel(panelId);
+      return found.flatMap((dismissal) => {
+        const column = places.get(dismissal.columnName);
+        return column === undefined ? [] : [{ ...dismissal, column }];
+      });
     });
   }
 
@@ -39,18 +50,18 @@ export class FlagDismissalService {
     actor: Actor,
     panelId: string,
     { column, ...dismissal }: NewDismissal,
-  ): Promise<FlagDismissalRow> {
+  ): Promise<PlacedDismissal> {
     const id = randomUUID();
     return this.repositories
       .inWorkspace(actor.workspaceId, async (tx) => {
         const newest = await findNewest(tx, panelId);
         await assertCurrent(tx, newest, { column, ...dismissal });
         const createdBy = actor.personId;
-        const row = { id, panelId, createdBy, columnIndex: column, ...dismissal };
-        await tx.flagDismissals.insert(row);
+        const columnName = column === null ? null : newest.columns[column].name;
+        await tx.flagDismissals.insert({ id, panelId, createdBy, columnName, ...dismissal });
         const { reason: _, ...what } = dismissal;
-        await record(tx, actor.personId, 'flag-dismissed', id, { panelId, column, ...what });
-        return findDismissal(tx, panelId, id);
+        await record(tx, actor.personId, 'flag-dismissed', id, { panelId, columnName, ...what });
+        return { ...(await findDismissal(tx, panelId, id)), column };
       })
       .catch((error: unknown) => {
         if (error instanceof UniqueViolation)
@@ -62,9 +73,9 @@ export class FlagDismissalService {
   /** @throws {NotFound} */
   async takeBack(actor: Actor, panelId: string, id: string): Promise<void> {
     await this.repositories.inWorkspace(actor.workspaceId, async (tx) => {
-      const { company, year, columnIndex, code } = await findDismissal(tx, panelId, id);
+      const { company, year, columnName, code } = await findDismissal(tx, panelId, id);
       await tx.flagDismissals.remove(panelId, id);
-      const what = { panelId, company, year, column: columnIndex, code };
+      const what = { panelId, company, year, columnName, code };
       await record(tx, actor.personId, 'flag-dismissal-taken-back', id, what);
     });
   }
@@ -98,8 +109,13 @@ async function assertCurrent(
     if (row !== undefined)
       throw new Conflict(`The panel has a row ${company} ${year} by now: it is no gap.`);
     if (value !== null) throw new Invalid(`Expected no value of a whole row; found ${value}.`);
-    if (!(await tx.panels.companyNames(id)).includes(company))
+    const years = await tx.panels.yearsOf(id, company);
+    if (years === undefined)
       throw new Invalid(`Expected a company of the panel; found “${company}”.`);
+    if (year < years.first || year > years.last)
+      throw new Invalid(
+        `A gap lies between the years of ${company}, ${years.first} to ${years.last}; found ${year}.`,
+      );
     return;
   }
   if (row === undefined) throw new Invalid(`The panel has no row ${company} ${year}.`);

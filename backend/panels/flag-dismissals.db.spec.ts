@@ -91,6 +91,8 @@ describe('dismissed flags', () => {
       [{ ...gap, code: 'sign' }, 400],
       [{ ...gap, company: 'Nobody' }, 400],
       [{ ...gap, value: 1 }, 400],
+      [{ ...gap, year: 2000 }, 400],
+      [{ ...gap, year: 2004 }, 400],
       [{ ...gap, year: 2003 }, 409],
       [{ ...sign, reason: ' ' }, 400],
     ] as const)
@@ -98,6 +100,21 @@ describe('dismissed flags', () => {
         .withContext(JSON.stringify(wrong))
         .toBe(status);
     expect(await listed()).toEqual([]);
+  });
+
+  it('stay with their column, wherever a later version has it', async () => {
+    const wide = 'company,year,value,inv,capital,staff,debt\nArvo,2001,10,1,5,,\n';
+    const of = (others: readonly string[]) =>
+      importPanel(analyst, wide, { ...referenceMapping, others });
+    await of(['staff']);
+    const missing = { ...sign, company: 'Arvo', column: 3, code: 'missing', value: null };
+    expect((await analyst.post(path, missing)).status).toBe(201);
+    await of(['debt', 'staff']);
+    expect((await listed()).map(({ column }) => column)).toEqual([4]);
+    await of(['debt']);
+    expect(await listed()).toEqual([]);
+    expect((await analyst.post(path, missing)).status).toBe(201);
+    expect((await listed()).map(({ column }) => column)).toEqual([3]);
   });
 
   it('are of one panel: another panel of the workspace shows none and takes none back', async () => {

@@ -4,7 +4,14 @@ import type { Repositories, WorkspaceRepositories } from '../../db/repositories/
 import { record } from '../activity/activity';
 import { Conflict, NotFound, Unprocessable } from '../errors/app-error';
 import type { JobQueue } from '../jobs/job-queue';
-import { type Actor, findImport, type ImportDraft, toDraft } from './import-draft';
+import { assertCheckedOn } from './assert-checked-on';
+import {
+  type Actor,
+  findImport,
+  type ImportCheck,
+  type ImportDraft,
+  toDraft,
+} from './import-draft';
 import { assertFewCommitting } from './storage-quota';
 
 const lookEveryMs = 100;
@@ -19,8 +26,9 @@ export class ImportCommitService {
   /**
    * Queues the commit; asked again while it runs or after it, the answer is the import as it stands.
    *
-   * @throws {NotFound}; {Unprocessable} `import-not-ready` while the check has findings that block; {TooManyRequests}
-   *   `quota` while the workspace has several under way.
+   * @throws {NotFound}; {Unprocessable} `import-not-ready` while the check has findings that block; {Conflict}
+   *   `stale-version` when the panel has another version since the check; {TooManyRequests} `quota` while the workspace
+   *   has several under way.
    */
   async start(actor: Actor, importId: string, note: string): Promise<ImportDraft> {
     const draft = await this.repositories.inWorkspace(actor.workspaceId, (tx) =>
@@ -39,11 +47,12 @@ export class ImportCommitService {
     if (found === undefined) throw new NotFound('There is no such import.');
     const draft = toDraft(found);
     if (draft.state === 'committing' || draft.state === 'committed') return draft;
-    const of = readyRows(draft);
+    const { check, panelName } = ready(draft);
+    assertCheckedOn(await tx.panels.findLatestByName(panelName), check);
     await assertFewCommitting(tx);
     const commitId = randomUUID();
     const commit = { commitId, note, committedBy: actor.personId };
-    await tx.imports.startCommit(importId, commit, { done: 0, of });
+    await tx.imports.startCommit(importId, commit, { done: 0, of: check.rows });
     await this.queue.enqueue(tx, 'import', commitId);
     return toDraft(await findImport(tx, importId));
   }
@@ -81,9 +90,14 @@ export class ImportCommitService {
   }
 }
 
-/** How many rows the panel will have. */
-function readyRows({ check }: ImportDraft): number {
-  if (check === null)
+interface ReadyImport {
+  readonly check: ImportCheck;
+  readonly panelName: string;
+}
+
+/** @throws {Unprocessable} when something keeps the import from becoming a panel. */
+function ready({ check, mapping: { panelName } }: ImportDraft): ReadyImport {
+  if (check === null || panelName === undefined)
     throw new Unprocessable('Check the columns before committing.', 'import-not-ready');
   if (check.blockingCount > 0)
     throw new Unprocessable(
@@ -92,5 +106,5 @@ function readyRows({ check }: ImportDraft): number {
     );
   if (check.rows === 0)
     throw new Unprocessable('The file has a header and no rows.', 'import-not-ready');
-  return check.rows;
+  return { check, panelName };
 }

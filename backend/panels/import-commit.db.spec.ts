@@ -41,6 +41,9 @@ describe('a commit of an import', () => {
     return id;
   }
 
+  const here = async (id: string): Promise<string> =>
+    server.composition.services.commits.finish(await me(), id, '');
+
   const commit = (id: string) => analyst.post(`/api/imports/${id}/commit`, { note: '' });
 
   async function me(): Promise<Actor> {
@@ -121,7 +124,7 @@ describe('a commit of an import', () => {
   );
 
   it(
-    'takes its place after one of the same panel that another server makes at the same time',
+    'gives way to one of the same panel at the same time, and follows it once it is checked again',
     async () => {
       const mapping = inventedPanelMapping('Panel');
       const ids = [
@@ -129,13 +132,17 @@ describe('a commit of an import', () => {
         await checked(inventedPanelCsv(6000), mapping),
       ];
       const actor = await me();
-      const [here, there] = [server, other].map(({ composition }) => composition.services.commits);
-      const made = await Promise.all([
-        here.finish(actor, ids[0], 'here'),
-        there.finish(actor, ids[1], 'there'),
+      const [one, another] = [server, other].map(({ composition }) => composition.services.commits);
+      const made = await Promise.allSettled([
+        one.finish(actor, ids[0], 'here'),
+        another.finish(actor, ids[1], 'there'),
       ]);
+      expect(made.map(({ status }) => status).sort()).toEqual(['fulfilled', 'rejected']);
+      const late = ids[made.findIndex(({ status }) => status === 'rejected')];
+      expect((await versions()).map(({ number }) => number)).toEqual([1]);
+      idOf(await analyst.put(`/api/imports/${late}/mapping`, mapping), 200);
+      await one.finish(actor, late, 'again');
       const found = await versions();
-      expect(new Set(found.map(({ id }) => id))).toEqual(new Set(made));
       expect(found.map(({ number }) => number).sort()).toEqual([1, 2]);
       const [first, second] = [1, 2].map((number) => found.find((row) => row.number === number));
       expect([first?.parentId, second?.parentId]).toEqual([null, first?.id]);
@@ -143,6 +150,55 @@ describe('a commit of an import', () => {
     },
     longestMs,
   );
+
+  it('is refused when the panel was corrected since the check, and changes nothing', async () => {
+    const first = await here(await checked(referencePanel(), referenceMapping));
+    const id = await checked(referencePanel(), referenceMapping);
+    const correction = {
+      ...{ company: 'C01', year: 1935, column: 0, value: 99 },
+      ...{ reason: 'Misread', source: 'Annual report' },
+    };
+    const edit = { note: 'mended', cells: [correction], addedRows: [], removedRows: [] };
+    const corrected = await analyst.post(`/api/panel-versions/${first}/corrections`, edit);
+    const latestId = idOf(corrected, 201);
+    const refused = await commit(id);
+    expect(refused.status).toBe(409);
+    const problem = refused.body as { type: string; detail: string; latestId: string };
+    expect(problem.type).toMatch(/\/stale-version$/);
+    expect(problem.latestId).toBe(latestId);
+    expect(problem.detail).toContain('Founder made version 2 of “Reference” after this file was');
+    expect(((await analyst.get(`/api/imports/${id}`)).body as ImportReply).state).toBe('checked');
+    const again = await analyst.put(`/api/imports/${id}/mapping`, referenceMapping);
+    expect((again.body as ImportReply).check?.changes?.changedCells).toBe(1);
+    expect(await here(id)).not.toBe(latestId);
+    expect((await versions()).map(({ number }) => number).sort()).toEqual([1, 2, 3]);
+  });
+
+  it('fails in words when the panel gets another version before its rows are written', async () => {
+    const first = await here(await checked(referencePanel(), referenceMapping));
+    const id = await checked(referencePanel(), referenceMapping);
+    const { workspaceId } = await me();
+    await admin.query('begin');
+    await admin.query('select pg_advisory_xact_lock(hashtextextended($1, 0))', [
+      `${workspaceId} ${referenceMapping.panelName}`,
+    ]);
+    expect((await commit(id)).status).toBe(202);
+    await admin.query(
+      `insert into panel_version (workspace_id, id, panel_id, number, parent_id, file_id, currency,
+          unit, company_header, year_header, columns, note, companies, row_count, first_year,
+          last_year, created_by)
+        select workspace_id, gen_random_uuid(), panel_id, 2, id, file_id, currency, unit,
+          company_header, year_header, columns, note, companies, row_count, first_year, last_year,
+          created_by
+        from panel_version where id = $1`,
+      [first],
+    );
+    await admin.query('commit');
+    const { state, failure } = await importThatEnded(analyst, id);
+    expect(state).toBe('failed');
+    expect(failure).toContain('Founder made version 2 of “Reference” after this file was checked');
+    expect(await rowsWritten()).toBe(220);
+  });
 
   it('holds the import: nobody maps, reads or discards it meanwhile', async () => {
     const id = await checked(referencePanel(), referenceMapping);

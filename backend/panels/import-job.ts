@@ -3,8 +3,9 @@ import type { Repositories } from '../../db/repositories/repositories';
 import { record } from '../activity/activity';
 import type { FilePanel } from '../compute/parse-messages';
 import { type ParseProcess, ParseRefused } from '../compute/parse-process';
+import { Conflict } from '../errors/app-error';
 import { watchedRun } from '../jobs/watched-run';
-import type { PanelMapping } from './import-draft';
+import type { ImportCheck, PanelMapping } from './import-draft';
 import { storeVersion } from './store-version';
 
 /** What a commit works from, as it stood when the job took it up. */
@@ -15,10 +16,9 @@ interface Commit {
   readonly fileName: string;
   readonly bytes: Buffer;
   readonly mapping: PanelMapping;
+  readonly check: ImportCheck;
   readonly note: string;
   readonly personId: string;
-  /** How many rows the check counted. */
-  readonly rows: number;
 }
 
 /** Somebody cancelled in the moment before the transaction would have ended. */
@@ -40,8 +40,8 @@ export class ImportJob {
       await this.#work(commit);
     } catch (error) {
       if (error instanceof CommitCancelled) return;
-      // The same file and mapping would be refused again: no second try.
-      if (!(error instanceof ParseRefused)) throw error;
+      // The same file and mapping would be refused again, and a newer version stays: no second try.
+      if (!(error instanceof ParseRefused || error instanceof Conflict)) throw error;
       await this.#fail(workspaceId, commitId, error.message);
     }
   }
@@ -61,18 +61,19 @@ export class ImportJob {
       if (file === undefined) throw new Error(`file ${found.fileId} of an import is not there`);
       const { fileId, fileName, note, committedBy: personId } = found;
       const mapping = found.mapping as PanelMapping;
-      const rows = found.progress?.of ?? 0;
+      const check = found.findings as ImportCheck;
       const bytes = file.content;
-      return { workspaceId, commitId, fileId, fileName, bytes, mapping, note, personId, rows };
+      return { workspaceId, commitId, fileId, fileName, bytes, mapping, check, note, personId };
     });
   }
 
   async #work(commit: Commit): Promise<void> {
-    const { workspaceId, commitId, rows: of } = commit;
+    const { workspaceId, commitId, check } = commit;
+    const of = check.rows;
     let written = 0;
     const write = async (signal: AbortSignal): Promise<void> => {
-      const { bytes, fileName, mapping } = commit;
-      const panel = await this.parser.read(bytes, fileName, mapping, signal);
+      const file = { owner: workspaceId, bytes: commit.bytes, name: commit.fileName };
+      const panel = await this.parser.read(file, commit.mapping, signal);
       await this.#store(commit, panel, { signal, onWritten: (done) => (written = done) });
     };
     await watchedRun(
@@ -87,12 +88,12 @@ export class ImportJob {
   }
 
   async #store(
-    { workspaceId, commitId, fileId, mapping, note, personId }: Commit,
+    { workspaceId, commitId, fileId, mapping, check, note, personId }: Commit,
     panel: FilePanel,
     writing: { readonly signal: AbortSignal; readonly onWritten: (rows: number) => void },
   ): Promise<void> {
     await this.repositories.inWorkspace(workspaceId, async (tx) => {
-      const version = { fileId, mapping, note, personId, panel };
+      const version = { fileId, mapping, check, note, personId, panel };
       const versionId = await storeVersion(tx, version, writing);
       if ((await tx.imports.findCommittingForUpdate(commitId)) === undefined)
         throw new CommitCancelled();

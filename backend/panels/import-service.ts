@@ -6,6 +6,7 @@ import type { TableReading } from '../compute/file-recipe';
 import type { FileCheck, FilePreview } from '../compute/parse-messages';
 import type { ParseProcess } from '../compute/parse-process';
 import { Conflict, NotFound } from '../errors/app-error';
+import { beginningOf } from '../files/beginning-of';
 import { checkColumns } from './check-columns';
 import { type CurrentPanel, currentPanel } from './current-panel';
 import {
@@ -39,7 +40,9 @@ export class ImportService {
    * @throws {AppError} with the reader's reason; {Conflict} `quota` when the workspace keeps too much.
    */
   async upload(actor: Actor, name: string, bytes: Buffer): Promise<ImportDraft> {
-    const preview = await refuseUnreadable(() => this.parser.preview(bytes, name, null));
+    const preview = await refuseUnreadable(() =>
+      this.parser.preview({ owner: actor.workspaceId, bytes, name }, null),
+    );
     const id = randomUUID();
     const fileId = randomUUID();
     const sha256 = createHash('sha256').update(bytes).digest('hex');
@@ -70,7 +73,9 @@ export class ImportService {
    */
   async readAs(workspaceId: string, importId: string, reading: TableReading): Promise<ImportDraft> {
     const { draft, name, bytes } = await this.#loadOpen(workspaceId, importId);
-    const preview = await refuseUnreadable(() => this.parser.preview(bytes, name, reading));
+    const preview = await refuseUnreadable(() =>
+      this.parser.preview({ owner: workspaceId, bytes, name }, reading),
+    );
     const mapping = guessedMapping(draft.mapping.panelName ?? panelNameOf(name), preview);
     return this.#keep(workspaceId, importId, (tx) =>
       tx.imports.saveReading(importId, preview, mapping),
@@ -85,15 +90,16 @@ export class ImportService {
   async check(workspaceId: string, importId: string, mapping: PanelMapping): Promise<ImportDraft> {
     const { draft, name, bytes } = await this.#loadOpen(workspaceId, importId);
     const { reading } = mapping;
+    const file = { owner: workspaceId, bytes, name };
     const preview = isDeepStrictEqual(reading, draft.preview.reading)
       ? draft.preview
-      : await refuseUnreadable(() => this.parser.preview(bytes, name, reading));
+      : await refuseUnreadable(() => this.parser.preview(file, reading));
     checkColumns(mapping, preview.headers);
     const current = await this.repositories.inWorkspace(workspaceId, (tx) =>
       currentPanel(tx, mapping.panelName),
     );
     const check = await refuseUnreadable(() =>
-      this.parser.check(bytes, name, mapping, current?.block ?? null),
+      this.parser.check(file, mapping, current?.block ?? null),
     );
     const found = { preview, mapping, check: withVersion(check, current) };
     return this.#keep(workspaceId, importId, (tx) => tx.imports.saveCheck(importId, found));
@@ -153,5 +159,5 @@ function panelNameOf(fileName: string): string {
     .replace(/\.\w+$/, '')
     .replaceAll(/[_-]+/g, ' ')
     .trim();
-  return stem === '' ? 'Panel' : stem.slice(0, 120);
+  return stem === '' ? 'Panel' : beginningOf(stem, 120);
 }

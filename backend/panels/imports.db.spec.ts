@@ -75,6 +75,15 @@ describe('imports', () => {
     expect([reply.sheets, reply.reading.headerRow, reply.state]).toEqual([[], 1, 'mapped']);
   });
 
+  it('take a file whose long name would be cut within a character', async () => {
+    const name = `${'n'.repeat(119)}😀 figures.csv`;
+    const reply = await analyst.upload('/api/imports', name, referencePanel());
+    expect(reply.status).toBe(201);
+    const { fileName, mapping } = reply.body as ImportReply;
+    expect(fileName).toBe(name);
+    expect(mapping.panelName).toBe('n'.repeat(119));
+  });
+
   it('say row by row what was found, and do not commit while something blocks', async () => {
     const text =
       'company,year,value,inv,capital\nA,2001,1,2,3\nA,2001,1,2,3\nA,2002,x,2,3\nB,2001,,2,3\n,2003,1,1,1\nB,20x2,1,1,1\n';

@@ -4,11 +4,13 @@ import type { WorkspaceRepositories } from '../../db/repositories/repositories';
 import type { PanelVersionRow } from '../../db/repositories/panels-repository';
 import type { FileRecipe } from '../compute/file-recipe';
 import type { FilePanel } from '../compute/parse-messages';
-import type { PanelMapping } from './import-draft';
+import { assertCheckedOn } from './assert-checked-on';
+import type { ImportCheck, PanelMapping } from './import-draft';
 
 export interface ImportedVersion {
   readonly fileId: string;
   readonly mapping: PanelMapping;
+  readonly check: ImportCheck;
   readonly note: string;
   readonly personId: string;
   readonly panel: FilePanel;
@@ -18,14 +20,16 @@ export interface ImportedVersion {
  * Writes a panel version read from a file: the next one of the newest panel of the same name, or the first of a new one.
  *
  * @returns the version's id.
+ * @throws {Conflict} `stale-version` when the panel has another version since the check.
  */
 export async function storeVersion(
   tx: WorkspaceRepositories,
-  { fileId, mapping, note, personId, panel }: ImportedVersion,
+  { fileId, mapping, check, note, personId, panel }: ImportedVersion,
   writing: InsertOptions,
 ): Promise<string> {
   await tx.panels.lockName(mapping.panelName);
   const parent = await tx.panels.findLatestByName(mapping.panelName);
+  assertCheckedOn(parent, check);
   const panelId = parent?.panelId ?? randomUUID();
   if (parent === undefined) await tx.panels.insertPanel(panelId, mapping.panelName);
   const id = randomUUID();

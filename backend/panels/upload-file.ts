@@ -1,6 +1,7 @@
 import type { Request, RequestHandler } from 'express';
 import multer, { MulterError } from 'multer';
 import { AppError, Invalid } from '../errors/app-error';
+import { beginningOf } from '../files/beginning-of';
 
 const megabyte = 1024 * 1024;
 
@@ -62,7 +63,7 @@ function refusalOf(originalName: string, bytes: number): AppError | undefined {
 
 /** The name as data: a line break in it would reach headers and logs. */
 function storedName(name: string): string {
-  return name.replace(/[\r\n\0]/g, ' ').slice(0, 255);
+  return beginningOf(name.replace(/[\r\n\0]/g, ' '), 255);
 }
 
 function declaredBytes(req: { headers: Request['headers'] }): number {

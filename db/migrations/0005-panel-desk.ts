@@ -70,14 +70,14 @@ export async function panelDesk(db: Kysely<unknown>, appRole: string): Promise<v
     panel_id uuid not null,
     company text not null,
     year integer not null,
-    column_index integer check (column_index >= 0),
+    column_name text,
     code text not null,
     value double precision,
     reason text not null,
     created_by uuid not null references person,
     created_at timestamptz not null default now(),
     primary key (workspace_id, id),
-    unique nulls not distinct (workspace_id, panel_id, company, year, column_index, code, value),
+    unique nulls not distinct (workspace_id, panel_id, company, year, column_name, code, value),
     foreign key (workspace_id, panel_id) references panel (workspace_id, id)
   )`.execute(db);
   await protect(db, 'flag_dismissal', appRole, ['select', 'insert', 'delete']);

@@ -6,8 +6,8 @@ export interface FlagDismissalRow {
   readonly id: string;
   readonly company: string;
   readonly year: number;
-  /** Position among the panel's columns; null where the whole row is meant. */
-  readonly columnIndex: number | null;
+  /** Header of the column; null where the whole row is meant. */
+  readonly columnName: string | null;
   readonly code: string;
   /** The cell's value when it was looked at. */
   readonly value: number | null;
@@ -69,7 +69,7 @@ export class FlagDismissalsRepository {
         'flagDismissal.id',
         'flagDismissal.company',
         'flagDismissal.year',
-        'flagDismissal.columnIndex',
+        'flagDismissal.columnName',
         'flagDismissal.code',
         'flagDismissal.value',
         'flagDismissal.reason',

@@ -199,6 +199,24 @@ export class PanelsRepository {
     return found.map(({ company }) => company);
   }
 
+  /** The first and the last year of a company; undefined of one that the version does not have. */
+  async yearsOf(
+    panelVersionId: string,
+    company: string,
+  ): Promise<{ readonly first: number; readonly last: number } | undefined> {
+    const { first, last } = await this.db
+      .selectFrom('panelRow')
+      .select(({ fn }) => [
+        fn.min<number | null>('year').as('first'),
+        fn.max<number | null>('year').as('last'),
+      ])
+      .where('workspaceId', '=', this.workspaceId)
+      .where('panelVersionId', '=', panelVersionId)
+      .where('company', '=', company)
+      .executeTakeFirstOrThrow();
+    return first === null || last === null ? undefined : { first, last };
+  }
+
   /** Rows of the named companies, in order of company and year. */
   async rows(panelVersionId: string, companies: readonly string[]): Promise<PanelRows> {
     const found = await this.db

@@ -88,8 +88,8 @@ export interface FlagDismissalTable {
   panelId: string;
   company: string;
   year: number;
-  /** Null where the whole row is meant. */
-  columnIndex: number | null;
+  /** Header, since versions have their columns in other places; null where the whole row is meant. */
+  columnName: string | null;
   code: string;
   value: number | null;
   reason: string;
