@@ -118,7 +118,11 @@ export function compose(options: ComposeOptions): Composition {
     return existsSync(sourceFile) ? sourceFile : join(options.backendFolder, built);
   };
   const fitPool = new FitPool(entry('compute/fit-worker.ts', 'fit-worker.js'), options.fitThreads);
-  const parser = new ParseProcess(entry('compute/parse-child.ts', 'parse-child.js'));
+  const parser = new ParseProcess(entry('compute/parse-child.ts', 'parse-child.js'), {
+    onStderr: (line) => {
+      logger.warn({ line }, 'file reader');
+    },
+  });
   const passwords = new Passwords();
   const throttle = new SignInThrottle(repositories, now);
   const accounts = new AccountService({ repositories, passwords, throttle, queue });
