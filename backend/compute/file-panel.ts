@@ -2,7 +2,7 @@ import { type FileRecipe, numericColumns } from './file-recipe';
 import type { FilePanel } from './parse-messages';
 import { textIndices } from './parsing/column-indices';
 import { FindingList } from './parsing/finding-list';
-import { isMissing } from './parsing/missing-cell';
+import { isMissing } from '../panel-data/numbers/missing-cell';
 import { panelOfTable, type TablePanel } from './parsing/panel-of-table';
 import type { Table } from './parsing/table';
 

@@ -4,7 +4,7 @@ import { filePanel } from './file-panel';
 import type { FileRecipe } from './file-recipe';
 import { FindingList } from './parsing/finding-list';
 import { mendTable } from './parsing/mending/mend-table';
-import { type DecimalSign, parseNumber } from './parsing/parse-number';
+import { type DecimalSign, parseNumber } from '../panel-data/numbers/parse-number';
 import type { Table } from './parsing/table';
 import { plainHeader, plainRecipe, tableOf } from './testing/tables';
 

@@ -6,3 +6,5 @@ export type { Flag, FlagCode, FlagFacts } from './flags/flag';
 export { flagCodes, flagsOf } from './flags/flags-of';
 export * from './panel-cells';
 export * from './panel-differences';
+export { decimalSignIn } from './numbers/decimal-sign-in';
+export { type DecimalSign, parseNumber } from './numbers/parse-number';

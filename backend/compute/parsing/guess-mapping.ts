@@ -1,8 +1,8 @@
-import { isMissing } from './missing-cell';
+import { isMissing } from '../../panel-data/numbers/missing-cell';
 import { type ColumnRole, headerWords as words } from './header-words';
 import { decimalSigns } from './decimal-signs';
 import type { IsCell } from './grid';
-import { parseNumber } from './parse-number';
+import { parseNumber } from '../../panel-data/numbers/parse-number';
 import { parseYear } from './parse-year';
 
 /** The likely meaning of a file's columns; a role that none fits is absent. */

@@ -1,9 +1,9 @@
 import type { Conversion } from '../file-recipe';
 import type { FilePreview } from '../parse-messages';
-import { isCurrencyCode } from './currency-code';
+import { isCurrencyCode } from '../../panel-data/numbers/currency-code';
 import { guessMapping, type MappingGuess } from './guess-mapping';
 import { isNumber } from './header-row';
-import { isMissing } from './missing-cell';
+import { isMissing } from '../../panel-data/numbers/missing-cell';
 import { type MoneyHint, moneyHint } from './money-hint';
 import type { Table } from './table';
 

@@ -1,6 +1,6 @@
 import type { Grid } from './grid';
-import { isMissing } from './missing-cell';
-import { parseNumber } from './parse-number';
+import { isMissing } from '../../panel-data/numbers/missing-cell';
+import { parseNumber } from '../../panel-data/numbers/parse-number';
 import { parseYear } from './parse-year';
 
 const rowsLookedAt = 30;

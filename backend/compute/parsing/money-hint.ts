@@ -1,5 +1,5 @@
 import type { Unit } from '../file-recipe';
-import { isCurrencyCode } from './currency-code';
+import { isCurrencyCode } from '../../panel-data/numbers/currency-code';
 
 /** What a header or title says of its money. */
 export interface MoneyHint {

@@ -1,5 +1,5 @@
 import { type ColumnDecimals, decimalSigns as decimalSignsOf } from './decimal-signs';
-import { type DecimalSign, parseNumber } from './parse-number';
+import { type DecimalSign, parseNumber } from '../../panel-data/numbers/parse-number';
 
 describe('parseNumber', () => {
   const withPoint: readonly (readonly [string, number])[] = [

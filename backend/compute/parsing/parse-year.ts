@@ -1,4 +1,4 @@
-import { isMissing } from './missing-cell';
+import { isMissing } from '../../panel-data/numbers/missing-cell';
 import { type DateOrder, fullYear, parseDate } from './parse-date';
 
 /** A company's fiscal year by when it ends. */

@@ -2,7 +2,7 @@ import { calendarYear } from './conversion/calendar-year';
 import { CompanyCodes } from './company-codes';
 import { dateOrder } from './date-order';
 import { type CellRemark, findingAt, type FindingList } from './finding-list';
-import { isMissing } from './missing-cell';
+import { isMissing } from '../../panel-data/numbers/missing-cell';
 import { type FiscalYear, parseFiscalYear } from './parse-year';
 import type { ReadingTerms } from './reading-terms';
 import type { Table } from './table';

@@ -1,7 +1,7 @@
 import type { NamedColumn } from '../../stats';
 import { decimalSigns } from './decimal-signs';
 import { type CellRemark, findingAt, type FindingList } from './finding-list';
-import { type DecimalSign, parseNumber } from './parse-number';
+import { type DecimalSign, parseNumber } from '../../panel-data/numbers/parse-number';
 import type { ReadingTerms } from './reading-terms';
 import type { Table } from './table';
 

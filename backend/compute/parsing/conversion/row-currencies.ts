@@ -1,5 +1,5 @@
 import type { CurrencyRate } from '../../file-recipe';
-import { isCurrencyCode } from '../currency-code';
+import { isCurrencyCode } from '../../../panel-data/numbers/currency-code';
 import { findingAt, type FindingList } from '../finding-list';
 import type { Table } from '../table';
 

@@ -1,5 +1,5 @@
 import type { Grid } from '../grid';
-import { isMissing } from '../missing-cell';
+import { isMissing } from '../../../panel-data/numbers/missing-cell';
 import type { YearColumn } from './wide-header';
 import type { WideSheet } from './wide-sheet';
 

@@ -1,6 +1,6 @@
 import type { TableLayout } from '../../file-recipe';
 import { findHeaderRow } from '../header-row';
-import { isMissing } from '../missing-cell';
+import { isMissing } from '../../../panel-data/numbers/missing-cell';
 import { parseYear } from '../parse-year';
 import type { SheetOfFile } from '../sheet-of-file';
 import type { PlainColumn } from './wide-header';

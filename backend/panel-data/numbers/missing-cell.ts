@@ -1,4 +1,4 @@
-const tokens = new Set(['', 'NA', 'N/A', 'n/a', '#N/A', '-', '–', '—', '.', '..']);
+const tokens = new Set(['', 'NA', 'N/A', 'n/a', '#N/A', '-', '–', '—', '−', '.', '..']);
 
 /** Whether a cell stands for a missing value. */
 export function isMissing(text: string): boolean {
