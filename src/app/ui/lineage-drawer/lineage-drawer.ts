@@ -20,6 +20,7 @@ import { covarianceName } from '../covariance-words';
 import { lineText, rowLinkText } from '../phrases';
 import type { ShownProblem } from '../problem';
 import { ProblemNotice } from '../problem-notice';
+import { CellOrigins } from './cell-origins';
 
 const rowsAtFirst = 60;
 
@@ -30,7 +31,7 @@ const rowsAtFirst = 60;
  */
 @Component({
   selector: 'kv-lineage-drawer',
-  imports: [DatePipe, ProblemNotice, RouterLink],
+  imports: [CellOrigins, DatePipe, ProblemNotice, RouterLink],
   templateUrl: './lineage-drawer.html',
   styleUrl: './lineage-drawer.css',
   host: { '(keydown.escape)': 'closed.emit()' },
