@@ -44,7 +44,8 @@ test('from a file to a signed edition, with the figures that R gives', async ({
     await file.giveMoney('USD', 'millions');
     await file.check();
     await expect(file.heading).toContainText('The check found nothing to mend');
-    const panel = await file.commit();
+    await file.commit();
+    const panel = await new PanelPage(page).read();
     await expect(panel.heading).toHaveText(/11 companies, FY1935–FY1954: no cell missing/);
     await panel.choosePeers();
   });

@@ -9,9 +9,11 @@ export class LineageDrawer extends CheckedPage {
     return this.arrive(this.drawer.getByRole('heading', { name: 'Formula' }));
   }
 
-  /** The file's row in the panel's grid. */
-  rowLink(fileRow: number): Locator {
-    return this.drawer.getByRole('link', { name: `row ${fileRow} in the panel`, exact: true });
+  /** A row of the panel that was used. */
+  rowLink(company: string, year: number): Locator {
+    return this.drawer.getByRole('link', {
+      name: new RegExp(`^${company} FY${year}, .*in the panel$`),
+    });
   }
 
   /** The cells of a row of the file: its number, the year, then the columns. */

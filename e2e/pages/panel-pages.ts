@@ -1,6 +1,7 @@
 import { fileURLToPath } from 'node:url';
 import type { Locator } from '@playwright/test';
 import { CheckedPage, expect } from './checked-page';
+import { type GivenFile, ImportPage } from './import-page';
 
 /** Open data: market value, investment and capital stock of 11 companies over 20 years (Grunfeld 1958), in the order of our golden values. */
 export const openDataFile = fileURLToPath(
@@ -23,9 +24,15 @@ export class PanelPage extends CheckedPage {
     return this.arrive(this.coverage);
   }
 
-  async chooseFile(path: string): Promise<ImportPage> {
-    await this.page.getByLabel('CSV file').setInputFiles(path);
+  async chooseFile(file: GivenFile): Promise<ImportPage> {
+    await this.page.getByLabel('CSV file or workbook').setInputFiles(file);
     return new ImportPage(this.page).read();
+  }
+
+  /** Brings a further file in, where there is a panel already. */
+  async chooseFurtherFile(file: GivenFile): Promise<ImportPage> {
+    await this.page.getByRole('button', { name: 'Bring in a file' }).click();
+    return this.chooseFile(file);
   }
 
   async openSample(): Promise<ImportPage> {
@@ -46,41 +53,32 @@ export class PanelPage extends CheckedPage {
     return this.grid.getByRole('row').filter({ has: this.page.locator(':focus') });
   }
 
+  /** The id in the address of a panel version. */
+  get versionId(): string {
+    return /[0-9a-f-]{36}/.exec(this.page.url())?.[0] ?? '';
+  }
+
+  /** Looks for a text in the grid and moves to it. */
+  async find(text: string): Promise<void> {
+    const field = this.page.getByRole('searchbox', { name: 'Find' });
+    await field.fill(text);
+    await field.press('Enter');
+  }
+
+  /** The cell of a figure, by company, year and the column's title. */
+  async cell(company: string, year: number, title: string): Promise<Locator> {
+    const columns = await this.grid.getByRole('columnheader').allInnerTexts();
+    return this.row(company, year).getByRole('gridcell').nth(columns.indexOf(title));
+  }
+
+  row(company: string, year: number): Locator {
+    return this.grid
+      .getByRole('row')
+      .filter({ has: this.page.getByRole('gridcell', { name: company, exact: true }) })
+      .filter({ has: this.page.getByRole('gridcell', { name: String(year), exact: true }) });
+  }
+
   async choosePeers(): Promise<void> {
     await this.page.getByRole('link', { name: 'Choose peers' }).click();
-  }
-}
-
-/** From a file to a panel version. */
-export class ImportPage extends CheckedPage {
-  async read(): Promise<this> {
-    return this.arrive(this.page.getByRole('heading', { name: 'Which column is what' }));
-  }
-
-  /** The column of the file that was taken for this. */
-  column(label: string): Locator {
-    return this.page.getByRole('combobox', { name: label, exact: true });
-  }
-
-  async giveMoney(currency: string, unit: string): Promise<void> {
-    await this.column('Currency').fill(currency);
-    await this.column('Currency').press('Tab');
-    await this.column('Unit of the money columns').press('Enter');
-    await this.page.getByRole('option', { name: unit, exact: true }).click();
-  }
-
-  async namePanel(name: string): Promise<void> {
-    await this.column('Panel name').fill(name);
-    await this.column('Panel name').press('Escape');
-  }
-
-  async check(): Promise<void> {
-    await this.page.getByRole('button', { name: 'Check the file' }).click();
-    await this.arrive(this.page.getByRole('heading', { name: 'What the check found' }));
-  }
-
-  async commit(): Promise<PanelPage> {
-    await this.page.getByRole('button', { name: /^Bring in as version/ }).click();
-    return new PanelPage(this.page).read();
   }
 }

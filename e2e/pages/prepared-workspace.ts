@@ -12,7 +12,7 @@ import {
 } from '@contract';
 import type { Account } from './demo-accounts';
 
-const ownCompany = 'Velmara';
+const sampleOwnCompany = 'Velmara';
 const longestImportMs = 30_000;
 const longestFitMs = 60_000;
 
@@ -48,6 +48,11 @@ export class PreparedWorkspace {
   /** The sample panel, everybody in as a peer, and a fit that is done. @returns the fit's id. */
   async fitSample(): Promise<string> {
     const panelVersionId = await this.#importSample();
+    return this.fitAll(panelVersionId, sampleOwnCompany);
+  }
+
+  /** Everybody in as a peer, and a fit that is done. @returns the fit's id. */
+  async fitAll(panelVersionId: string, ownCompany: string): Promise<string> {
     const { companies } = PanelCompaniesReply.parse(
       await this.#call(apiRoutes.readPanelCompanies, { path: { panelVersionId } }),
     );
