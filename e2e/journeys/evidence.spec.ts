@@ -61,7 +61,7 @@ test('answers what a board and an auditor ask of the newest fit', async ({ page 
   await test.step('the row of the panel that the model misses most', async () => {
     await evidence.open('What does the model not explain?');
     await evidence.largest.getByRole('link').first().click();
-    await expect(page).toHaveURL(/\/panel\/[0-9a-f-]+\?row=\d+$/);
+    await expect(page).toHaveURL(/\/panel\/[0-9a-f-]+\?company=[^&]+&year=\d+$/);
     await expect((await new PanelPage(page).read()).focusedRow).toBeVisible();
   });
 });
