@@ -68,7 +68,6 @@ class CorrectionSheet {
   readonly #removed = new Map<string, RowKey>();
   readonly #added = new Map<string, DraftRow>();
   readonly #changed = new Map<string, DraftRow>();
-  readonly #corrected = new Set<string>();
   readonly #errors: FieldError[] = [];
 
   constructor(
@@ -93,7 +92,7 @@ class CorrectionSheet {
       return;
     }
     if (this.#added.has(place)) this.#refuse(pointer, `${nameOf(key)} is added twice`);
-    this.#added.set(place, { ...key, cells: this.columns.map(() => null) });
+    this.#added.set(place, draftOf({ ...key, cells: this.columns.map(() => null) }));
   }
 
   correct({ company, year, column, value }: CellCorrection, pointer: string): void {
@@ -103,20 +102,18 @@ class CorrectionSheet {
       this.#refuse(`${pointer}/column`, found);
       return;
     }
-    const cell = `“${this.columns[column]}” of ${nameOf(key)}`;
-    const row = this.#rowToWrite(key);
+    const cell = (): string => `“${this.columns[column]}” of ${nameOf(key)}`;
+    const place = keyOf(key);
+    const row = this.#rowToWrite(place);
     if (row === undefined) {
-      const why = this.#removed.has(keyOf(key))
-        ? 'its row is removed'
-        : 'the panel has no such row';
-      this.#refuse(pointer, `${cell}: ${why}`);
+      const why = this.#removed.has(place) ? 'its row is removed' : 'the panel has no such row';
+      this.#refuse(pointer, `${cell()}: ${why}`);
       return;
     }
-    const place = `${column} ${keyOf(key)}`;
-    if (this.#corrected.has(place)) this.#refuse(pointer, `${cell} is named twice`);
+    if (row.corrected.has(column)) this.#refuse(pointer, `${cell()} is named twice`);
     else if (row.cells[column] === value)
-      this.#refuse(`${pointer}/value`, `${cell} is ${value ?? 'missing'} already`);
-    this.#corrected.add(place);
+      this.#refuse(`${pointer}/value`, `${cell()} is ${value ?? 'missing'} already`);
+    row.corrected.add(column);
     row.cells[column] = value;
   }
 
@@ -131,13 +128,12 @@ class CorrectionSheet {
     };
   }
 
-  #rowToWrite(key: RowKey): DraftRow | undefined {
-    const place = keyOf(key);
+  #rowToWrite(place: string): DraftRow | undefined {
     if (this.#removed.has(place)) return undefined;
     const begun = this.#added.get(place) ?? this.#changed.get(place);
     const held = this.#held.get(place);
     if (begun !== undefined || held === undefined) return begun;
-    const row = { ...key, cells: [...held.cells] };
+    const row = draftOf(held);
     this.#changed.set(place, row);
     return row;
   }
@@ -149,6 +145,12 @@ class CorrectionSheet {
 
 interface DraftRow extends RowKey {
   readonly cells: (number | null)[];
+  /** Positions of the columns that are corrected. */
+  readonly corrected: Set<number>;
+}
+
+function draftOf({ company, year, cells }: PanelRow): DraftRow {
+  return { company, year, cells: [...cells], corrected: new Set() };
 }
 
 function keyOf({ company, year }: RowKey): string {

@@ -295,7 +295,12 @@ describe('corrections', () => {
     const third = await correct(second, { cells: [cell('Arvo', 2001, marketValue, 13)] });
     expect(await standing(first)).toEqual([]);
     expect(await standing(third)).toEqual([[12, 13]]);
-    expect(await standing(await restore(second))).toEqual([[10, 12]]);
+    const restored = await restore(second);
+    expect(await standing(restored)).toEqual([[10, 12]]);
+    const row = { company: 'Arvo', year: 2001 };
+    const emptied = await correct(restored, { cells: [cell('Arvo', 2001, marketValue, null)] });
+    const removed = await correct(emptied, { removedRows: [row] });
+    expect(await standing(await correct(removed, { addedRows: [row] }))).toEqual([]);
     expect(await standing(await restore(first))).toEqual([]);
     expect(await standing(await importPanel(analyst, text, mapping))).toEqual([]);
   });

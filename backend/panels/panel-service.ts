@@ -4,6 +4,7 @@ import type { Repositories } from '../../db/repositories/repositories';
 import { record } from '../activity/activity';
 import { NotFound } from '../errors/app-error';
 import { type CompanySummary, companySummaries } from './company-summaries';
+import { findPanelVersion } from './find-panel-version';
 import type { Actor } from './import-draft';
 
 /** Panel versions and what is in them. */
@@ -16,11 +17,7 @@ export class PanelService {
 
   /** @throws {NotFound} */
   async version(workspaceId: string, id: string): Promise<PanelVersionRow> {
-    const found = await this.repositories.inWorkspace(workspaceId, (tx) =>
-      tx.panels.findVersion(id),
-    );
-    if (found === undefined) throw new NotFound('There is no such panel version.');
-    return found;
+    return this.repositories.inWorkspace(workspaceId, (tx) => findPanelVersion(tx, id));
   }
 
   /** In order of company and year. @throws {NotFound} */

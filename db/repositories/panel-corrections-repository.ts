@@ -86,7 +86,8 @@ export class PanelCorrectionsRepository {
 
   /**
    * The corrections that still hold in a version, of the named companies: back through corrections to their parents and
-   * through restores to what they put back, as far as the import that all of it began with.
+   * through restores to what they put back, as far as the import that all of it began with. Of a row that was removed
+   * since and added anew, none holds.
    */
   async standing(panelVersionId: string, companies: readonly string[]): Promise<StandingRow[]> {
     const { rows } = await sql<StandingRow>`
@@ -119,6 +120,14 @@ export class PanelCorrectionsRepository {
         and was.panel_version_id = chain.parent_id
         and was.company = made.company and was.year = made.year
       where made.company = any(${[...companies]}::text[])
+        and not exists (
+          select from chain as later
+          where later.depth < chain.depth and not exists (
+            select from panel_row as kept
+            where kept.workspace_id = ${this.workspaceId} and kept.panel_version_id = later.id
+              and kept.company = made.company and kept.year = made.year
+          )
+        )
       order by made.company, made.year, made.column_index, chain.depth`.execute(this.db);
     return rows;
   }
