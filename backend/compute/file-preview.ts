@@ -28,8 +28,12 @@ export function previewOf({ table, reading, sheets, topLines }: FileTable): File
 function shown({ row, cells }: NumberedLine): NumberedLine {
   return {
     row,
-    cells: cells.map((text) =>
-      text.length > shownLength ? `${text.slice(0, shownLength)} …` : text,
-    ),
+    cells: cells.map((text) => (text.length > shownLength ? `${beginningOf(text)} …` : text)),
   };
+}
+
+/** Never half a character: what is no text would be refused as a whole. */
+function beginningOf(text: string): string {
+  const cut = text.slice(0, shownLength);
+  return /[\uD800-\uDBFF]$/.test(cut) ? cut.slice(0, -1) : cut;
 }

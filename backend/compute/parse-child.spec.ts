@@ -25,6 +25,13 @@ async function codeOf(content: Uint8Array, name: string): Promise<string> {
 }
 
 describe('a file read in its process', () => {
+  it('is shown in part without half a character', async () => {
+    const long = `${'x'.repeat(199)}😀 and more`;
+    const bytes = Buffer.from(`company,year,note\nAlder,2019,${long}\n`);
+    const preview = await reader().preview({ owner: 'one', bytes, name: 'long.csv' }, null);
+    expect(preview.firstRows[0].cells[2]).toBe(`${'x'.repeat(199)} …`);
+  });
+
   it('is previewed, checked and read by the same reading', async () => {
     const preview = await reader().preview(peers, null);
     expect(preview.headers).toEqual(['Company', 'Year', 'Market value', 'Capex', 'Book equity']);

@@ -50,6 +50,23 @@ export type CurrencyRate = z.infer<typeof CurrencyRate>;
 export const Measure = z.enum(['flow', 'stock', 'no-money']);
 export type Measure = z.infer<typeof Measure>;
 
+/** One rate, or one index, for each key: of two, none is the right one. */
+function once<T>(keyOf: (each: T) => string, what: string) {
+  return (list: readonly T[], context: z.core.$RefinementCtx): void => {
+    const seen = new Set<string>();
+    list.forEach((each, place) => {
+      const key = keyOf(each);
+      if (seen.has(key))
+        context.addIssue({
+          code: 'custom',
+          path: [place],
+          message: `expected one ${what}; found a second for ${key}`,
+        });
+      seen.add(key);
+    });
+  };
+}
+
 /** How figures in the file's own terms become the panel's. */
 export const Conversion = z.strictObject({
   /** Columns whose unit is not the panel's; and what a further column measures (`no-money` unless said). */
@@ -58,13 +75,24 @@ export const Conversion = z.strictObject({
     .max(200),
   /** A column of currency codes by row, with the rates into the panel's currency. */
   currencies: z
-    .strictObject({ column: header, rates: z.array(CurrencyRate).max(10_000) })
+    .strictObject({
+      column: header,
+      rates: z
+        .array(CurrencyRate)
+        .max(10_000)
+        .superRefine(
+          once(({ currency, year }) => `${currency} ${year}`, 'rate a currency and year'),
+        ),
+    })
     .nullable(),
   /** Real terms: money of year t is multiplied by index(base) / index(t). */
   prices: z
     .strictObject({
       baseYear: year,
-      index: z.array(z.strictObject({ year, value: z.number().positive() })).max(1000),
+      index: z
+        .array(z.strictObject({ year, value: z.number().positive() }))
+        .max(1000)
+        .superRefine(once((each) => String(each.year), 'price index a year')),
     })
     .nullable(),
   /**
