@@ -37,6 +37,16 @@ describe('a choice of peers before it is saved', () => {
     expect(chosenPeers(draft).every(({ isIncluded }) => isIncluded)).toBeTrue();
   });
 
+  it('starts with nobody in where the panel is a pool of more than 30 companies', () => {
+    const pool = Array.from({ length: 31 }, (_, place) => panelCompany(`Company ${place}`));
+    const inOf = (count: number): number =>
+      chosenPeers(startDraft('panel-1', pool.slice(0, count), null)).filter(
+        ({ isIncluded }) => isIncluded,
+      ).length;
+    expect(inOf(30)).toBe(30);
+    expect(inOf(31)).toBe(0);
+  });
+
   it('starts from the saved version without being changed', () => {
     const draft = startDraft('panel-1', companies, saved);
     expect(isChanged(draft, saved)).toBeFalse();

@@ -20,10 +20,12 @@ export interface PeerDraft {
 
 const allIn: DraftChoice = { isIncluded: true, reasonIn: '', reasonOut: '' };
 const notYetIn: DraftChoice = { isIncluded: false, reasonIn: '', reasonOut: '' };
+/** A panel of more companies is a pool to choose from: the first choice starts with nobody in. */
+const mostStartingIn = 30;
 
 /**
- * The choice to start from: the saved version's on the panel version given, or everybody in where none is saved yet.
- * A company that the saved version does not know starts outside, without a reason.
+ * The choice to start from: the saved version's on the panel version given. Where none is saved yet, everybody is in, or
+ * nobody in a panel of more than 30 companies. A company that the saved version does not know starts outside, without a reason.
  */
 export function startDraft(
   panelVersionId: string,
@@ -31,6 +33,7 @@ export function startDraft(
   saved: PeerGroupReply | null,
 ): PeerDraft {
   const known = new Map(saved?.peers.map((peer) => [peer.company, peer]));
+  const atFirst = saved === null && companies.length <= mostStartingIn ? allIn : notYetIn;
   const isThere = companies.some(({ name }) => name === saved?.ownCompany);
   return {
     panelVersionId,
@@ -38,8 +41,7 @@ export function startDraft(
     choices: new Map(
       companies.map(({ name }) => {
         const peer = known.get(name);
-        if (peer === undefined) return [name, saved === null ? allIn : notYetIn];
-        return [name, toDraftChoice(peer)];
+        return [name, peer === undefined ? atFirst : toDraftChoice(peer)];
       }),
     ),
   };
