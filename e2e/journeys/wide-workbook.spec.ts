@@ -36,7 +36,7 @@ test('a wide workbook in two currencies comes in, from file to fit', async ({ pa
   const file = await (await new PanelPage(page).openEmpty()).chooseFile(workbook);
 
   await test.step('the sheet is read with its years in columns', async () => {
-    await expect(file.reading).toContainText('its columns named in line 3, years in columns');
+    await expect(file.reading).toContainText('with the columns named in line 3, years in columns');
     await expect(file.column('Company')).toContainText('Company');
     await expect(file.column('Fiscal year')).toContainText('Year');
     await expect(file.column('Market value')).toContainText('Market value');
@@ -58,7 +58,7 @@ test('a wide workbook in two currencies comes in, from file to fit', async ({ pa
   const panel = await new PanelPage(page).read();
   await test.step('the cells are converted as by hand', async () => {
     await expect(panel.heading).toContainText('8 companies, FY2015–FY2023: no cell missing');
-    await panel.find('Garrowdale 2022');
+    await panel.bringUp('Garrowdale', 2022);
     const cells = await panel.row('Garrowdale', 2022).getByRole('gridcell').allInnerTexts();
     expect(cells.map((text) => Number(text.replaceAll(',', '')))).toEqual(
       expect.arrayContaining([handWorked.marketValue, handWorked.capex]),

@@ -45,7 +45,7 @@ export class ImportPage extends CheckedPage {
 
   /** How the file is read, in one sentence. */
   get reading(): Locator {
-    return this.page.getByText(/^Read from /);
+    return this.page.getByText(/^Read from .* with the columns named in line/);
   }
 
   async giveCurrencyColumn(column: string): Promise<void> {
@@ -54,7 +54,7 @@ export class ImportPage extends CheckedPage {
 
   /** @param rates  lines of currency, year, average and year-end rate, as a spreadsheet gives them. */
   async giveRates(rates: string): Promise<void> {
-    const field = this.page.getByLabel(/^Paste rates from a spreadsheet/).first();
+    const field = this.page.getByRole('textbox', { name: /^Paste rates from a spreadsheet/ });
     await field.fill(rates);
     await field.press('Tab');
   }

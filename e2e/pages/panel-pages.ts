@@ -8,6 +8,9 @@ export const openDataFile = fileURLToPath(
   new URL('../../backend/stats/golden/grunfeld11_value_on_inv_capital.csv', import.meta.url),
 );
 
+/** As many companies as an invented panel has at most. */
+const mostFinds = 70;
+
 /** The panel: its coverage, its rows, its versions; or, where there is none, the ways to bring one in. */
 export class PanelPage extends CheckedPage {
   readonly coverage: Locator = this.page.getByRole('heading', {
@@ -58,15 +61,20 @@ export class PanelPage extends CheckedPage {
     return /[0-9a-f-]{36}/.exec(this.page.url())?.[0] ?? '';
   }
 
-  /** Looks for a text in the grid and moves to it. */
-  async find(text: string): Promise<void> {
+  /** Has the grid show a row: it draws only those that are in view. */
+  async bringUp(company: string, year: number): Promise<void> {
     const field = this.page.getByRole('searchbox', { name: 'Find' });
-    await field.fill(text);
-    await field.press('Enter');
+    await field.fill(String(year));
+    const row = this.row(company, year);
+    for (let steps = 0; steps < mostFinds && (await row.count()) === 0; steps += 1)
+      await field.press('Enter');
+    await field.fill('');
+    await expect(row).toBeVisible();
   }
 
   /** The cell of a figure, by company, year and the column's title. */
   async cell(company: string, year: number, title: string): Promise<Locator> {
+    await this.bringUp(company, year);
     const columns = await this.grid.getByRole('columnheader').allInnerTexts();
     return this.row(company, year).getByRole('gridcell').nth(columns.indexOf(title));
   }
