@@ -87,6 +87,8 @@ describe('the rows of a panel on the desk', () => {
   let http: HttpTestingController;
   let edited: readonly PanelRow[];
   let savedId: string | undefined;
+  /** Whether the page could be left the moment that the saved version was told. */
+  let mayLeaveOnceSaved: boolean | undefined;
 
   async function open(
     panel: PanelVersionReply = small,
@@ -111,7 +113,12 @@ describe('the rows of a panel on the desk', () => {
     const given = { panel, versions: [panel.version], mayChange: true, ...inputs };
     for (const [name, value] of Object.entries(given)) fixture.componentRef.setInput(name, value);
     fixture.componentInstance.editedChanged.subscribe((rows) => (edited = rows));
-    fixture.componentInstance.saved.subscribe((saved) => (savedId = saved));
+    fixture.componentInstance.saved.subscribe((saved) => {
+      savedId = saved;
+      const leaving = new Event('beforeunload', { cancelable: true });
+      TestBed.inject(UnsavedEdits).holdBack(leaving);
+      mayLeaveOnceSaved = !leaving.defaultPrevented;
+    });
     document.body.append(page());
     fixture.detectChanges();
     await settled();
@@ -657,6 +664,7 @@ describe('the rows of a panel on the desk', () => {
       http.expectOne(url).flush({ ...version, id: id(7), number: 5, origin: 'correction' });
       await until(() => savedId !== undefined);
       expect(savedId).toBe(id(7));
+      expect(mayLeaveOnceSaved).toBeTrue();
       expect(page().querySelector('kv-save-bar')).toBeNull();
     });
   });

@@ -249,7 +249,9 @@ export class PanelDeskGrid {
 
   protected async save(): Promise<void> {
     const id = await this.#dialogs.save(this.panel(), this.#draft);
-    if (id !== undefined) this.saved.emit(id);
+    if (id === undefined) return;
+    this.unsaved.show(''); // who hears of it leads on to the version at once
+    this.saved.emit(id);
   }
 
   protected openHistory(): void {
