@@ -12,6 +12,8 @@ test('an empty workspace opens the sample panel in one step and takes it in', as
   await expect(sample.heading).toContainText('none keeps the file out');
   await sample.commit();
   const panel = await new PanelPage(page).read();
-  await expect(panel.heading).toContainText(/^14 companies, FY2008–FY2025: \d+ cells missing, \d+ figures to look at$/);
+  await expect(panel.heading).toContainText(
+    /^14 companies, FY2008–FY2025: \d+ cells missing, \d+ figures to look at$/,
+  );
   await expect(page).toHaveURL(/\/panel\/[0-9a-f-]{36}$/);
 });
