@@ -166,6 +166,27 @@ describe('the import page', () => {
     expect(TestBed.inject(Router).url).toBe(`/panel/${flowVersion.id}`);
   });
 
+  it('offers another check where somebody made a newer version meanwhile', async () => {
+    await open(checked);
+    await press('Bring in as version 2');
+    http.expectOne({ method: 'POST', url: `/api/imports/${flowDraft.id}/commit` }).flush(
+      {
+        type: problemType('stale-version'),
+        title: 'The panel has a newer version',
+        status: 409,
+        detail: 'Version 2 was saved after this check. Check again.',
+        latestId: flowVersion.id,
+      },
+      { status: 409, statusText: 'Conflict' },
+    );
+    await settled();
+    expect(words()).toContain('Version 2 was saved after this check.');
+    await press('Check again');
+    http.expectOne({ method: 'PUT', url: `/api/imports/${flowDraft.id}/mapping` }).flush(checked);
+    await settled();
+    expect(words()).not.toContain('Version 2 was saved after this check.');
+  });
+
   it('shows how far an import is that somebody comes back to, and cancels it', async () => {
     await open({ ...checked, state: 'committing', progress: { done: 20_000, of: 200_000 } });
     expect(words()).toContain('Writing rows: 20,000 of 200,000');
