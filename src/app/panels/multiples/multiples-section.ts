@@ -47,7 +47,7 @@ export class MultiplesSection {
   protected readonly scale = signal<'common' | 'own'>('own');
   protected readonly search = signal('');
   /** Empty for all of the model's variables. */
-  protected readonly only = signal('');
+  protected readonly chosen = signal('');
 
   readonly #model = computed(() => modelColumns(this.columns()));
   protected readonly titles = computed(() =>
@@ -55,7 +55,7 @@ export class MultiplesSection {
   );
   /** Positions of the columns that are shown. */
   readonly #shownColumns = computed(() => {
-    const place = this.titles().indexOf(this.only());
+    const place = this.titles().indexOf(this.chosen());
     return place === -1 ? this.#model() : [this.#model()[place]];
   });
   protected readonly variables = computed((): readonly MultiplesVariable[] =>
@@ -119,7 +119,7 @@ export class MultiplesSection {
   }));
 
   protected choose(title: string): void {
-    this.only.set(title);
+    this.chosen.set(title);
   }
 
   protected open({ company, year, variable }: ChosenFigure): void {
