@@ -69,7 +69,7 @@ const ofFolder = [
   ]),
   only('backend/compute', [
     within('backend/(compute|stats|panel-data|errors)'),
-    ...packages('piscina', 'csv-parse', 'exceljs', 'saxes', 'yauzl', 'fastest-levenshtein'),
+    ...packages('piscina', 'csv-parse', 'saxes', 'yauzl', 'fastest-levenshtein'),
   ]),
   ...ground.map((name) =>
     only(`backend/${name}`, [
@@ -101,7 +101,7 @@ const ofFolder = [
       ),
     ]),
   ),
-  only('db', [within('db'), ...packages('kysely', 'pg', 'pg-copy-streams')]),
+  only('db', [within('db'), ...packages('kysely', 'pg')]),
   only('stubs', [within('stubs'), '(^|/)node_modules/']),
   only('e2e', [within('e2e'), '^backend/contract/index\\.ts$', '(^|/)node_modules/']),
 ];
