@@ -1,6 +1,9 @@
 /** How one invented company of the demo panel behaves. Money in EUR m. */
 export interface DemoCompany {
   readonly name: string;
+  /** What it makes, and where it has its seat. */
+  readonly industry: string;
+  readonly country: string;
   /** Book equity of 2008, or of the first year for a late entrant. */
   readonly equity: number;
   /** Yearly growth of book equity at the start and at the end of the panel. */
@@ -26,6 +29,8 @@ export interface DemoCompany {
 export const demoCompanies: readonly DemoCompany[] = [
   {
     name: 'Velmara',
+    industry: 'Pumps and valves',
+    country: 'Netherlands',
     equity: 1_180,
     growth: [0.085, 0.018],
     capexShare: 0.15,
@@ -37,6 +42,8 @@ export const demoCompanies: readonly DemoCompany[] = [
   },
   {
     name: 'Hostavrel',
+    industry: 'Pumps and valves',
+    country: 'Germany',
     equity: 2_950,
     growth: [0.05, 0.03],
     capexShare: 0.12,
@@ -48,6 +55,8 @@ export const demoCompanies: readonly DemoCompany[] = [
   },
   {
     name: 'Ambrevik',
+    industry: 'Pumps and valves',
+    country: 'Sweden',
     equity: 2_420,
     growth: [0.045, 0.025],
     capexShare: 0.13,
@@ -59,6 +68,8 @@ export const demoCompanies: readonly DemoCompany[] = [
   },
   {
     name: 'Quorlest',
+    industry: 'Pumps and valves',
+    country: 'Belgium',
     equity: 1_640,
     growth: [0.06, 0.035],
     capexShare: 0.14,
@@ -70,6 +81,8 @@ export const demoCompanies: readonly DemoCompany[] = [
   },
   {
     name: 'Sarvane',
+    industry: 'Metering',
+    country: 'France',
     equity: 1_020,
     growth: [0.07, 0.045],
     capexShare: 0.16,
@@ -81,6 +94,8 @@ export const demoCompanies: readonly DemoCompany[] = [
   },
   {
     name: 'Kesdrin',
+    industry: 'Pumps',
+    country: 'Netherlands',
     equity: 860,
     growth: [0.055, 0.04],
     capexShare: 0.15,
@@ -92,6 +107,8 @@ export const demoCompanies: readonly DemoCompany[] = [
   },
   {
     name: 'Jostrane',
+    industry: 'Valves',
+    country: 'Germany',
     equity: 780,
     growth: [0.04, 0.03],
     capexShare: 0.13,
@@ -104,6 +121,8 @@ export const demoCompanies: readonly DemoCompany[] = [
   },
   {
     name: 'Lindrask',
+    industry: 'Pumps',
+    country: 'Poland',
     equity: 640,
     growth: [0.06, 0.05],
     capexShare: 0.17,
@@ -115,6 +134,8 @@ export const demoCompanies: readonly DemoCompany[] = [
   },
   {
     name: 'Bruxolan',
+    industry: 'Valves',
+    country: 'Italy',
     equity: 1_310,
     growth: [0.02, 0.015],
     capexShare: 0.11,
@@ -126,6 +147,8 @@ export const demoCompanies: readonly DemoCompany[] = [
   },
   {
     name: 'Dorvaleck',
+    industry: 'Pumps',
+    country: 'Switzerland',
     equity: 410,
     growth: [0.075, 0.05],
     capexShare: 0.18,
@@ -137,6 +160,8 @@ export const demoCompanies: readonly DemoCompany[] = [
   },
   {
     name: 'Imbresk',
+    industry: 'Pumps',
+    country: 'Austria',
     equity: 320,
     growth: [0.05, 0.06],
     capexShare: 0.15,
@@ -148,6 +173,8 @@ export const demoCompanies: readonly DemoCompany[] = [
   },
   {
     name: 'Fenquora',
+    industry: 'Metering',
+    country: 'Denmark',
     equity: 175,
     growth: [0.06, 0.05],
     capexShare: 0.16,
@@ -159,6 +186,8 @@ export const demoCompanies: readonly DemoCompany[] = [
   },
   {
     name: 'Yelvarno',
+    industry: 'Metering',
+    country: 'Germany',
     equity: 520,
     growth: [0.1, 0.06],
     capexShare: 0.2,
@@ -171,6 +200,8 @@ export const demoCompanies: readonly DemoCompany[] = [
   },
   {
     name: 'Zethorin',
+    industry: 'Water concessions',
+    country: 'Spain',
     equity: 3_900,
     growth: [0.01, 0.0],
     capexShare: 0.06,

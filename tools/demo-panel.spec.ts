@@ -12,7 +12,9 @@ describe('the demo panel', () => {
   };
 
   it('holds 14 companies over 18 fiscal years, one of them only from 2014', () => {
-    expect(lines[0]).toBe('company,fiscal_year,market_value,capex,book_equity,employees');
+    expect(lines[0]).toBe(
+      'company,fiscal_year,market_value,capex,book_equity,employees,industry,country',
+    );
     expect(companies.length).toBe(14);
     expect(demoYears.length).toBe(18);
     for (const company of companies) {
@@ -36,6 +38,18 @@ describe('the demo panel', () => {
     expect(gaps.flat().filter((text) => text === '' || text === 'n/a').length).toBe(5);
   });
 
+  it('says one industry and one country of each company, and shares some among several', () => {
+    for (const name of ['industry', 'country']) {
+      const ofCompany = new Map(rows.map((row) => [row[0], row[column(name)]]));
+      for (const row of rows) {
+        expect(row[column(name)]).toMatch(/^[A-Z][a-z]+( [a-z]+)*$/);
+        expect(row[column(name)]).withContext(row[0]).toBe(ofCompany.get(row[0]));
+      }
+      expect(new Set(ofCompany.values()).size).toBeLessThan(14);
+      expect(new Set(ofCompany.values()).size).toBeGreaterThan(3);
+    }
+  });
+
   it('gives positive money with one decimal and whole employees everywhere else', () => {
     for (const row of rows) {
       for (const text of row.slice(2, 5)) {
@@ -47,7 +61,7 @@ describe('the demo panel', () => {
 
   it('is the same file at every run, pinned by its digest, and another for another seed', () => {
     const digest = createHash('sha256').update(demoPanelCsv()).digest('hex');
-    expect(digest).toBe('73c20c1ba7b424f268bfcb8aaff131bd42d65551a9a16b86ffdbf2c819be871b');
+    expect(digest).toBe('4d4ac6a236913a263d07f1e3f9da22a2a36cba16d8b9cdc6f0e3937d25cf95ee');
     expect(demoPanelCsv(1)).not.toBe(demoPanelCsv(2));
   });
 

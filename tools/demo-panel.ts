@@ -45,6 +45,19 @@ const missing: Readonly<Record<string, string>> = {
   'Dorvaleck 2013 employees': '',
 };
 
+const header = 'company,fiscal_year,market_value,capex,book_equity,employees,industry,country';
+
+/** Which column of the demo panel is what, as an import's mapping says it. */
+export const demoColumns = {
+  company: 'company',
+  year: 'fiscal_year',
+  marketValue: 'market_value',
+  capex: 'capex',
+  bookEquity: 'book_equity',
+  others: ['employees'],
+  attributes: ['industry', 'country'],
+} as const;
+
 interface DemoRow {
   readonly company: string;
   readonly fiscal_year: number;
@@ -52,6 +65,8 @@ interface DemoRow {
   readonly capex: number;
   readonly book_equity: number;
   readonly employees: number;
+  readonly industry: string;
+  readonly country: string;
 }
 
 /**
@@ -61,7 +76,6 @@ interface DemoRow {
 export function demoPanelCsv(seed = 40_170): string {
   const draw = randomNormal.source(randomLcg(seed))(0, 1);
   const rows = demoCompanies.flatMap((company) => companyRows(company, draw));
-  const header = 'company,fiscal_year,market_value,capex,book_equity,employees';
   return [header, ...rows.map(csvLine)].join('\n') + '\n';
 }
 
@@ -89,6 +103,8 @@ function companyRows(company: DemoCompany, draw: () => number): readonly DemoRow
       capex,
       book_equity: equity,
       employees: Math.round(heads / 10) * 10,
+      industry: company.industry,
+      country: company.country,
     };
   });
 }
@@ -104,5 +120,7 @@ function csvLine(row: DemoRow): string {
     money('capex'),
     money('book_equity'),
     employees,
+    row.industry,
+    row.country,
   ].join(',');
 }

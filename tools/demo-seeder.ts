@@ -1,6 +1,7 @@
 import type { Services } from '../backend/compose';
 import { ImportMapping, type Role } from '../backend/contract';
 import {
+  demoColumns,
   demoCurrency,
   demoOwnCompany,
   demoPanelCsv,
@@ -87,12 +88,7 @@ export class DemoSeeder {
     const draft = await imports.upload(analyst, 'flow-control-peers-FY2025.csv', csv);
     const mapping = ImportMapping.parse({
       panelName: 'Flow control peers',
-      company: 'company',
-      year: 'fiscal_year',
-      marketValue: 'market_value',
-      capex: 'capex',
-      bookEquity: 'book_equity',
-      others: ['employees'],
+      ...demoColumns,
       currency: demoCurrency,
       unit: demoUnit,
     });

@@ -176,8 +176,10 @@ describe('exports of a panel version', () => {
 
   it('start from a template that is understood when it is filled in', async () => {
     const template = (await download('/api/panel-template/csv')).toString();
-    expect(template).toBe('\uFEFFcompany,fiscal_year,market_value,capex,book_equity\r\n');
-    const filled = `${template}Arvo,2001,10,1,5\r\nArvo,2002,11,2,6\r\n`;
+    expect(template).toBe(
+      '\uFEFFcompany,fiscal_year,market_value,capex,book_equity,industry,country\r\n',
+    );
+    const filled = `${template}Arvo,2001,10,1,5,Pumps,Norway\r\nArvo,2002,11,2,6,Pumps,Norway\r\n`;
     const { mapping: guess } = (await analyst.upload('/api/imports', 'filled.csv', filled))
       .body as ImportReply;
     expect(guess).toEqual(
@@ -193,6 +195,6 @@ describe('exports of a panel version', () => {
     const headers = template.trim().replace('\uFEFF', '').split(',');
     expect(cellsOf(book.getWorksheet('Panel'))).toEqual([headers]);
     const explained = cellsOf(book.getWorksheet('Columns')).map(([header]) => header);
-    expect(explained.slice(0, 5)).toEqual(headers);
+    expect(explained.slice(0, 7)).toEqual(headers);
   });
 });

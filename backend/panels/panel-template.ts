@@ -8,6 +8,11 @@ const columns = [
   ['market_value', 'Value of all shares on the market at the end of the fiscal year.'],
   ['capex', 'Capital expenditure of the fiscal year, as a positive number.'],
   ['book_equity', 'Book value of equity at the end of the fiscal year; may be negative.'],
+  [
+    'industry',
+    'What the company makes, to choose peers by; the same in each of its rows, or empty.',
+  ],
+  ['country', 'Where the company has its seat, likewise.'],
 ] as const;
 
 const advice = [
@@ -17,7 +22,7 @@ const advice = [
   ],
   [
     'Further columns',
-    'Add columns to the right as you need them: numbers for further figures, or text that describes the company, as its industry.',
+    'Add columns to the right as you need them: numbers for further figures, or text that describes the company.',
   ],
 ] as const;
 

@@ -21,6 +21,7 @@ export function readSamplePanel(backendFolder: string): SamplePanel {
       capex: 'capex',
       bookEquity: 'book_equity',
       others: ['employees'],
+      attributes: ['industry', 'country'],
       currency: 'EUR',
       unit: 'millions',
     },
