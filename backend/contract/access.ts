@@ -99,6 +99,10 @@ export const apiRoutes = {
   savePeerGroup: { method: 'POST', path: '/api/peer-groups', allow: ['analyst'] },
   readPeerGroup: { method: 'GET', path: '/api/peer-groups/:peerGroupId', allow: model },
 
+  startPeerTrial: { method: 'POST', path: '/api/peer-trials', allow: ['analyst'] },
+  readPeerTrial: { method: 'GET', path: '/api/peer-trials/:peerTrialId', allow: ['analyst'] },
+  cancelPeerTrial: { method: 'DELETE', path: '/api/peer-trials/:peerTrialId', allow: ['analyst'] },
+
   listFits: { method: 'GET', path: '/api/fits', allow: model },
   startFit: { method: 'POST', path: '/api/fits', allow: ['analyst'] },
   readFit: { method: 'GET', path: '/api/fits/:fitId', allow: model },

@@ -29,23 +29,33 @@ export type Lag = z.infer<typeof Lag>;
 /** Of random draws: a whole number that a double holds exactly. */
 export const Seed = z.int().min(0);
 
-/** Starts a fit; regressors beside capex and book equity are named columns of the panel. */
+/** What a fit is asked for; regressors beside capex and book equity are named columns of the panel. */
+const specification = {
+  effects: Effects.default('company'),
+  form: ModelForm.default('levels'),
+  lag: Lag.default(0),
+  slopes: SlopeCovariance.default('cr2'),
+  confidence: z.number().gt(0.5).lt(1).default(0.95),
+  /** Of the wild bootstrap, 1 unless named; the other covariances draw nothing. */
+  seed: Seed.optional(),
+  furtherRegressors: z.array(z.string().min(1)).max(10).default([]),
+};
+
+function drawsWhereSeeded(asked: { slopes: SlopeCovariance; seed?: number | undefined }): boolean {
+  return asked.slopes === 'wild' || asked.seed === undefined;
+}
+const seedAlone = {
+  path: ['seed'],
+  error: 'expected a seed with the wild bootstrap alone',
+};
+
+export const FitSpecification = z.strictObject(specification).refine(drawsWhereSeeded, seedAlone);
+export type FitSpecification = z.infer<typeof FitSpecification>;
+
+/** Starts a fit of a saved peer group. */
 export const StartFit = z
-  .strictObject({
-    peerGroupId: z.uuid(),
-    effects: Effects.default('company'),
-    form: ModelForm.default('levels'),
-    lag: Lag.default(0),
-    slopes: SlopeCovariance.default('cr2'),
-    confidence: z.number().gt(0.5).lt(1).default(0.95),
-    /** Of the wild bootstrap, 1 unless named; the other covariances draw nothing. */
-    seed: Seed.optional(),
-    furtherRegressors: z.array(z.string().min(1)).max(10).default([]),
-  })
-  .refine(({ slopes, seed }) => slopes === 'wild' || seed === undefined, {
-    path: ['seed'],
-    error: 'expected a seed with the wild bootstrap alone',
-  });
+  .strictObject({ peerGroupId: z.uuid(), ...specification })
+  .refine(drawsWhereSeeded, seedAlone);
 export type StartFit = z.infer<typeof StartFit>;
 
 const nullable = z.number().nullable();

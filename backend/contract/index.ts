@@ -9,6 +9,7 @@ export * from './imports';
 export * from './lineage';
 export * from './members';
 export * from './panels';
+export * from './peer-trials';
 export * from './peers';
 export * from './problems';
 export * from './roles';

@@ -1,9 +1,9 @@
 import * as z from 'zod';
 
-const company = z.string().min(1).max(200);
+export const CompanyName = z.string().min(1).max(200);
 
 export const PeerChoice = z.strictObject({
-  company,
+  company: CompanyName,
   isIncluded: z.boolean(),
   /** Why it is in, or out. An empty reason is kept and keeps an edition from being published. */
   reason: z.string().trim().max(2000),
@@ -12,7 +12,7 @@ export type PeerChoice = z.infer<typeof PeerChoice>;
 
 export const SavePeerGroup = z.strictObject({
   panelVersionId: z.uuid(),
-  ownCompany: company,
+  ownCompany: CompanyName,
   note: z.string().trim().max(2000),
   /** The version these choices started from; a newer one by somebody else is a conflict. */
   parentId: z.uuid().nullable(),
