@@ -164,6 +164,7 @@ async function tryEveryRoute(mine: Filled, other: Filled, canary: string): Promi
       .not.toContain(canary);
   }
   for (const list of [
+    'listImports',
     'listPanelVersions',
     'listPeerGroups',
     'listFits',

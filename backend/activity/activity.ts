@@ -14,6 +14,7 @@ export type ActivityAction =
   | 'file-downloaded'
   | 'panel-committed'
   | 'import-cancelled'
+  | 'import-discarded'
   | 'panel-corrected'
   | 'panel-restored'
   | 'panel-exported'

@@ -39,6 +39,7 @@ export const apiRoutes = {
 
   uploadFile: { method: 'POST', path: '/api/imports', allow: ['analyst'] },
   useSample: { method: 'POST', path: '/api/imports/sample', allow: ['analyst'] },
+  listImports: { method: 'GET', path: '/api/imports', allow: ['analyst'] },
   readImport: { method: 'GET', path: '/api/imports/:importId', allow: ['analyst'] },
   readImportAs: { method: 'PUT', path: '/api/imports/:importId/reading', allow: ['analyst'] },
   checkImport: { method: 'PUT', path: '/api/imports/:importId/mapping', allow: ['analyst'] },

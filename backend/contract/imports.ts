@@ -233,7 +233,10 @@ export const ImportCheck = z.object({
   blockingCount: z.number().int(),
   /** The rows that the listed findings stand in. */
   reviewRows: z.array(ReviewRow),
-  /** Names that may be one company, with how many rows each has, the likeliest first; at most 500 groups. */
+  /**
+   * Names that may be one company, with how many rows of the file each has, the likeliest first; at most 500 groups. A
+   * name without a row is a company of the panel's newest version.
+   */
   spellings: z.array(z.array(z.object({ company: z.string(), rows: z.number().int() }))),
   /** Currencies and years that the rates must cover and do not. */
   missingRates: z.array(z.object({ currency: z.string(), years: z.array(z.number().int()) })),
@@ -278,6 +281,18 @@ export const ImportReply = z.object({
   panelVersionId: z.uuid().nullable(),
 });
 export type ImportReply = z.infer<typeof ImportReply>;
+
+/** An import on its way to a panel version: not committed, not discarded. */
+export const OpenImport = ImportReply.pick({ id: true, fileName: true, state: true }).extend({
+  /** When the file was brought in. */
+  at: z.iso.datetime(),
+  by: z.string(),
+});
+export type OpenImport = z.infer<typeof OpenImport>;
+
+/** The newest first. */
+export const OpenImportsReply = z.object({ imports: z.array(OpenImport) });
+export type OpenImportsReply = z.infer<typeof OpenImportsReply>;
 
 /**
  * Makes a checked import a panel version, in the background; answered with 409 `stale-version` and `latestId` when the

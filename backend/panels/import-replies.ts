@@ -1,4 +1,5 @@
-import type { ImportReply } from '../contract';
+import type { OpenImportRow } from '../../db/repositories/imports-repository';
+import type { ImportReply, OpenImportsReply } from '../contract';
 import type { ImportDraft } from './import-draft';
 
 export function toImportReply(draft: ImportDraft): ImportReply {
@@ -20,6 +21,18 @@ export function toImportReply(draft: ImportDraft): ImportReply {
     failure: draft.failure,
     panelVersionId: draft.panelVersionId,
   });
+}
+
+export function toOpenImportsReply(imports: readonly OpenImportRow[]): OpenImportsReply {
+  return {
+    imports: imports.map(({ id, fileName, state, createdAt, createdBy }) => ({
+      id,
+      fileName,
+      state,
+      at: createdAt.toISOString(),
+      by: createdBy,
+    })),
+  };
 }
 
 type Mutable<T> = T extends object ? { -readonly [Key in keyof T]: Mutable<T[Key]> } : T;

@@ -4,7 +4,7 @@ import { signedInMember } from '../http/member';
 import { parse } from '../http/parse';
 import { idParameter, register } from '../http/register';
 import type { ImportCommitService } from './import-commit-service';
-import { toImportReply } from './import-replies';
+import { toImportReply, toOpenImportsReply } from './import-replies';
 import type { ImportService } from './import-service';
 import type { SamplePanel } from './sample-panel';
 import { uploadedFile, uploadFile } from './upload-file';
@@ -34,6 +34,11 @@ export function importRoutes(
     const mapping = parse(ImportMapping, sample.mapping);
     const checked = await imports.check(member.workspaceId, draft.id, mapping);
     res.status(201).json(toImportReply(checked));
+  });
+
+  register(router, apiRoutes.listImports, async (req, res) => {
+    const open = await imports.listOpen(signedInMember(req).workspaceId);
+    res.json(toOpenImportsReply(open));
   });
 
   register(router, apiRoutes.readImport, async (req, res) => {
@@ -68,7 +73,7 @@ export function importRoutes(
   });
 
   register(router, apiRoutes.discardImport, async (req, res) => {
-    await imports.discard(signedInMember(req).workspaceId, idParameter(req, 'importId'));
+    await imports.discard(signedInMember(req), idParameter(req, 'importId'));
     res.status(204).end();
   });
 

@@ -1,5 +1,6 @@
 import { createHash, randomUUID } from 'node:crypto';
 import { isDeepStrictEqual } from 'node:util';
+import type { OpenImportRow } from '../../db/repositories/imports-repository';
 import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import { record } from '../activity/activity';
 import type { TableReading } from '../compute/file-recipe';
@@ -105,14 +106,21 @@ export class ImportService {
     return this.#keep(workspaceId, importId, (tx) => tx.imports.saveCheck(importId, found));
   }
 
+  /** The imports that are not a panel version yet, newest first. */
+  async listOpen(workspaceId: string): Promise<OpenImportRow[]> {
+    return this.repositories.inWorkspace(workspaceId, (tx) => tx.imports.listOpen());
+  }
+
   /** Takes back an import that is open, its file with it. @throws {NotFound}; {Conflict} for one that is not. */
-  async discard(workspaceId: string, importId: string): Promise<void> {
-    await this.repositories.inWorkspace(workspaceId, async (tx) => {
+  async discard(actor: Actor, importId: string): Promise<void> {
+    await this.repositories.inWorkspace(actor.workspaceId, async (tx) => {
       const found = await tx.imports.findForUpdate(importId);
       if (found === undefined) throw new NotFound('There is no such import.');
       assertOpen(found);
       await tx.imports.remove(importId);
       await tx.files.remove(found.fileId);
+      const { fileId, fileName } = found;
+      await record(tx, actor.personId, 'import-discarded', fileId, { fileName });
     });
   }
 

@@ -3,11 +3,12 @@ import type { TestDatabase } from '../../db/testing/test-database';
 import {
   ImportMapping,
   type ImportReply,
+  type OpenImportsReply,
   type PanelCompaniesReply,
   type PanelVersionReply,
   type PanelVersionsReply,
 } from '../contract';
-import { signUp, type TestClient } from '../testing/test-client';
+import { join, signUp, type TestClient } from '../testing/test-client';
 import {
   commitImport,
   idOf,
@@ -175,6 +176,52 @@ describe('imports', () => {
     const reply = await analyst.upload('/api/imports', 'panel.csv', text);
     expect(reply.status).toBe(413);
     expect((await analyst.get('/api/session')).status).toBe(200);
+  });
+
+  it('are listed until they are a panel version or discarded, to analysts of the workspace alone', async () => {
+    const list = async (client: TestClient) =>
+      ((await client.get('/api/imports')).body as OpenImportsReply).imports;
+    expect(await list(analyst)).toEqual([]);
+    const first = await check(referencePanel());
+    const second = (await analyst.upload('/api/imports', 'b.csv', referencePanel()))
+      .body as ImportReply;
+    const third = (await analyst.upload('/api/imports', 'c.csv', referencePanel()))
+      .body as ImportReply;
+    const open = await list(analyst);
+    expect(open.map(({ id, fileName, state, by }) => [id, fileName, state, by])).toEqual([
+      [third.id, 'c.csv', 'mapped', 'Founder'],
+      [second.id, 'b.csv', 'mapped', 'Founder'],
+      [first.id, 'panel.csv', 'checked', 'Founder'],
+    ]);
+    expect(Math.abs(Date.parse(open[0].at) - Date.now())).toBeLessThan(60_000);
+
+    expect(await list(await join(server, analyst, ['analyst']))).toEqual(open);
+    const cfo = await join(server, analyst, ['cfo', 'reader', 'billing_admin']);
+    expect((await cfo.get('/api/imports')).status).toBe(403);
+    expect(await list(await signUp(server))).toEqual([]);
+
+    await commitImport(analyst, first.id);
+    expect((await analyst.delete(`/api/imports/${second.id}`)).status).toBe(204);
+    expect((await list(analyst)).map(({ id }) => id)).toEqual([third.id]);
+  });
+
+  it('leave a line in the record when they are discarded', async () => {
+    const { id } = (await analyst.upload('/api/imports', 'gone.csv', referencePanel()))
+      .body as ImportReply;
+    await analyst.delete(`/api/imports/${id}`);
+    await analyst.delete(`/api/imports/${id}`);
+    const admin = new pg.Client({ connectionString: database.adminUrl });
+    await admin.connect();
+    try {
+      const { rows } = await admin.query(
+        `select detail, (select name from person where id = person_id) as name
+          from activity where workspace_id = $1 and action = 'import-discarded'`,
+        [await workspaceId()],
+      );
+      expect(rows).toEqual([{ detail: { fileName: 'gone.csv' }, name: 'Founder' }]);
+    } finally {
+      await admin.end();
+    }
   });
 
   it('are read another way on request, and the columns are chosen anew', async () => {

@@ -16,6 +16,16 @@ export interface ImportRow {
   readonly panelVersionId: string | null;
 }
 
+/** An import that is not a panel version yet; without its file's content and its check. */
+export interface OpenImportRow {
+  readonly id: string;
+  readonly fileName: string;
+  readonly state: Exclude<ImportState, 'committed'>;
+  readonly createdAt: Date;
+  /** Name of the person. */
+  readonly createdBy: string;
+}
+
 /** An import that is being committed. */
 export interface CommittingRow extends ImportRow {
   readonly note: string;
@@ -47,6 +57,30 @@ export class ImportsRepository {
         preview: JSON.stringify(draft.preview),
         mapping: JSON.stringify(draft.mapping),
       })
+      .execute();
+  }
+
+  /** The newest first. */
+  listOpen(): Promise<OpenImportRow[]> {
+    return this.db
+      .selectFrom('importDraft')
+      .innerJoin('storedFile', (join) =>
+        join
+          .onRef('storedFile.workspaceId', '=', 'importDraft.workspaceId')
+          .onRef('storedFile.id', '=', 'importDraft.fileId'),
+      )
+      .innerJoin('person', 'person.id', 'importDraft.createdBy')
+      .select([
+        'importDraft.id',
+        'storedFile.name as fileName',
+        'importDraft.state',
+        'importDraft.createdAt',
+        'person.name as createdBy',
+      ])
+      .where('importDraft.workspaceId', '=', this.workspaceId)
+      .where('importDraft.state', '!=', 'committed')
+      .$narrowType<{ state: OpenImportRow['state'] }>()
+      .orderBy('importDraft.createdAt', 'desc')
       .execute();
   }
 
