@@ -16,6 +16,55 @@ describe('the guess of a mapping', () => {
   });
 });
 
+describe('a header that says what its column is', () => {
+  const headers = ['company', 'year', 'Market value (EUR m)', 'Capex', 'Equity', 'Market cap'];
+  const rowsOf = (value: (row: number) => string) =>
+    Array.from({ length: 10 }, (_, row) => [
+      'A',
+      String(2000 + row),
+      value(row),
+      '1',
+      row < 4 ? 'n.b.' : '5',
+      '9',
+    ]);
+
+  it('wins though many cells are no numbers', () => {
+    const guess = guessMapping(
+      headers.slice(0, 5),
+      rowsOf((row) => (row < 3 ? 'pending' : '10')),
+    );
+    expect(guess.marketValue).toBe('Market value (EUR m)');
+    expect(guess.bookEquity).toBe('Equity');
+  });
+
+  it('wins before a part of a header whose cells are all numbers', () => {
+    const guess = guessMapping(
+      headers,
+      rowsOf((row) => (row < 3 ? 'pending' : '10')),
+    );
+    expect(guess.marketValue).toBe('Market value (EUR m)');
+    expect(guess.others).toEqual(['Market cap']);
+  });
+
+  it('does not make figures of a column in which hardly a cell is a number', () => {
+    const guess = guessMapping(
+      headers,
+      rowsOf((row) => (row < 9 ? 'pending' : '10')),
+    );
+    expect(guess.marketValue).toBe('Market cap');
+  });
+
+  it('has to be all of it: a column that names a value in passing is judged by its cells', () => {
+    const remarks = ['company', 'year', 'Remarks on market value', 'Capex', 'Note on equity'];
+    const guess = guessMapping(
+      remarks,
+      rowsOf((row) => (row < 4 ? 'pending' : '10')),
+    );
+    expect(guess.marketValue).toBeUndefined();
+    expect(guess.bookEquity).toBeUndefined();
+  });
+});
+
 describe('guessMapping', () => {
   it('knows the usual English headers', () => {
     const headers = [

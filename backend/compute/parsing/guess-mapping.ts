@@ -2,6 +2,7 @@ import { isMissing } from '../../panel-data/numbers/missing-cell';
 import { type ColumnRole, headerWords as words } from './header-words';
 import { decimalSigns } from './decimal-signs';
 import type { IsCell } from './grid';
+import { withoutMoney } from './money-hint';
 import { parseNumber } from '../../panel-data/numbers/parse-number';
 import { parseYear } from './parse-year';
 
@@ -15,6 +16,9 @@ export interface MappingGuess {
   /** Further numeric columns. */
   readonly others: readonly string[];
 }
+
+/** Below so many numbers a column holds texts, whatever its header says. */
+const leastNumbers = 0.2;
 
 const numericRoles = new Set<ColumnRole>(['marketValue', 'capex', 'bookEquity']);
 
@@ -36,7 +40,7 @@ export function guessMapping(
   for (const role of Object.keys(words) as ColumnRole[]) {
     const best = columns
       .filter((column) => isFree(column) && suits(role, column))
-      .map((column) => ({ column, score: scoreOf(role, column.words) }))
+      .map((column) => ({ column, score: scoreOf(role, column) }))
       .filter(({ score }) => score > 0)
       .sort((left, right) => right.score - left.score)[0];
     const fallback = columns.find((column) => isFree(column) && isLikely(role, column));
@@ -52,7 +56,11 @@ export function guessMapping(
 interface Column {
   readonly header: string;
   readonly words: string;
+  /** The header's words without those of its money. */
+  readonly subject: string;
   readonly isNumeric: boolean;
+  /** Whether enough cells are numbers for a header to be believed that says so. */
+  readonly hasNumbers: boolean;
   readonly isYear: boolean;
 }
 
@@ -79,20 +87,25 @@ function describe(
     const year = parseYear(text);
     return year !== undefined && year >= 1800 && year <= 2200;
   });
+  const isFigure = ({ text, isStored }: SampledCell): boolean =>
+    isStored || parseNumber(text, decimalSign) !== undefined;
   return {
     header,
     words: wordsOf(header),
-    isNumeric: isMostly(
-      cells,
-      ({ text, isStored }) => isStored || parseNumber(text, decimalSign) !== undefined,
-    ),
+    subject: wordsOf(withoutMoney(header)),
+    isNumeric: isMostly(cells, isFigure),
+    hasNumbers: cells.some(isFigure) && shareOf(cells, isFigure) >= leastNumbers,
     isYear,
   };
 }
 
 /** A few slips, which the check names one by one, do not hide what a column is. */
 function isMostly(cells: readonly SampledCell[], isFine: (cell: SampledCell) => boolean): boolean {
-  return cells.length > 0 && cells.filter(isFine).length >= 0.8 * cells.length;
+  return cells.length > 0 && shareOf(cells, isFine) >= 0.8;
+}
+
+function shareOf(cells: readonly SampledCell[], isFine: (cell: SampledCell) => boolean): number {
+  return cells.filter(isFine).length / cells.length;
 }
 
 /** Lower case, words apart: `bookEquity_EUR` becomes `book equity eur`. */
@@ -105,18 +118,26 @@ function wordsOf(header: string): string {
     .trim();
 }
 
+/** A header that says nothing else is believed before its cells: those that are no numbers are for the check to name. */
 function suits(role: ColumnRole, column: Column): boolean {
-  if (numericRoles.has(role)) return column.isNumeric;
+  if (numericRoles.has(role))
+    return column.isNumeric || (column.hasNumbers && wholeWord(role, column) !== -1);
   return role === 'company' || column.isYear || !column.isNumeric;
 }
 
 /** A whole header is surer than a part of one, an earlier word than a later. */
-function scoreOf(role: ColumnRole, header: string): number {
+function scoreOf(role: ColumnRole, column: Column): number {
   const list = words[role];
-  const exact = list.findIndex((word) => compact(word) === compact(header));
-  if (exact !== -1) return 2 * list.length - exact;
-  const part = list.findIndex((word) => ` ${header} `.includes(` ${word} `));
+  const whole = wholeWord(role, column);
+  if (whole !== -1) return 2 * list.length - whole;
+  const part = list.findIndex((word) => ` ${column.words} `.includes(` ${word} `));
   return part === -1 ? 0 : list.length - part;
+}
+
+/** Which word of the role the header is, as a whole but for its money; −1 for none. */
+function wholeWord(role: ColumnRole, { words: header, subject }: Column): number {
+  const whole = new Set([compact(header), compact(subject)]);
+  return words[role].findIndex((word) => whole.has(compact(word)));
 }
 
 /** `CapEx` and `cap ex` are the same word. */

@@ -39,6 +39,19 @@ export function moneyHint(text: string): MoneyHint {
   return found;
 }
 
+/** The text without what it says of its money: `Capex (USD m)` and `Capex in Mio. €` are `Capex`. */
+export function withoutMoney(text: string): string {
+  return wordsOf(text)
+    .filter(({ word, isInBrackets }) => !isInBrackets && !isOfMoney(word))
+    .map(({ word }) => word)
+    .join(' ');
+}
+
+function isOfMoney(word: string): boolean {
+  const isScale = scaleOf(word) !== undefined || joinedHint(word).unit !== undefined;
+  return word.toLowerCase() === 'in' || currencyOf(word) !== undefined || isScale;
+}
+
 interface Word {
   readonly word: string;
   readonly isInBrackets: boolean;
