@@ -57,9 +57,11 @@ const ofFolder = [
   only('backend/figures', [within('backend/figures'), ...packages('d3[a-z-]*')], {
     builtIns: false,
   }),
-  only('backend/panel-data', [within('backend/panel-data'), ...packages('ml-matrix')], {
-    builtIns: false,
-  }),
+  only(
+    'backend/panel-data',
+    [within('backend/panel-data'), ...packages('ml-matrix', 'fastest-levenshtein')],
+    { builtIns: false },
+  ),
   only('backend/errors', [within('backend/errors'), within('backend/contract')]),
   only('backend/http', [
     within('backend/(http|errors|contract)'),
@@ -69,7 +71,7 @@ const ofFolder = [
   ]),
   only('backend/compute', [
     within('backend/(compute|stats|panel-data|errors)'),
-    ...packages('piscina', 'csv-parse', 'saxes', 'yauzl', 'fastest-levenshtein'),
+    ...packages('piscina', 'csv-parse', 'saxes', 'yauzl'),
   ]),
   ...ground.map((name) =>
     only(`backend/${name}`, [

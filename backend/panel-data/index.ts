@@ -4,6 +4,8 @@ export * from './distance/peer-distances';
 export type { Scatter } from './distance/scatter';
 export type { Flag, FlagCode, FlagFacts } from './flags/flag';
 export { flagCodes, flagsOf } from './flags/flags-of';
+export { nameKey } from './names/name-key';
+export { nearNames } from './names/near-names';
 export * from './panel-cells';
 export * from './panel-differences';
 export { decimalSignIn } from './numbers/decimal-sign-in';

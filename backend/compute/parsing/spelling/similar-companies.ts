@@ -1,5 +1,4 @@
-import { nameKey } from './name-key';
-import { nearNames } from './near-names';
+import { nameKey, nearNames } from '../../../panel-data';
 
 interface NamedRows {
   readonly companies: readonly string[];
