@@ -25,7 +25,7 @@ export class ApiProblem extends Error {
       ...(detail === undefined ? {} : { detail }),
       // Whoever looks into a fault of ours needs the id; for the person's own slip it is noise.
       ...(instance === undefined || status < 500 ? {} : { requestId: instance }),
-      ...(errors === undefined ? {} : { places: errors.map((error) => error.detail) }),
+      ...(errors === undefined ? {} : { places: errors.map(placed) }),
     };
   }
 
@@ -48,6 +48,19 @@ export function toApiProblem(error: unknown): ApiProblem {
     title: 'The server does not answer',
     detail: 'Nothing you entered is lost. Check the connection and try again.',
   });
+}
+
+/** `cells 3, value: expected a number; found nothing` of `/cells/2/value`. */
+function placed({ pointer, detail }: { pointer: string; detail: string }): string {
+  const place = pointer
+    .slice(1)
+    .replace(/\/(\d+)(?=\/|$)/g, (_, index: string) => ` ${Number(index) + 1}`)
+    .replaceAll('/', ', ')
+    .replace(
+      /(\p{Ll})(\p{Lu})/gu,
+      (_, end: string, start: string) => `${end} ${start.toLowerCase()}`,
+    );
+  return place === '' ? detail : `${place}: ${detail}`;
 }
 
 function readJson(text: string): unknown {
