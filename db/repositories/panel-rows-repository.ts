@@ -1,5 +1,7 @@
-import { type Kysely, sql } from 'kysely';
+import { setImmediate } from 'node:timers/promises';
+import { type Kysely, type RawBuilder, sql } from 'kysely';
 import type { Database } from '../schema/database';
+import { float8Array, int4Array, textArray } from './array-parameters';
 
 /** Rows of a panel version by column, all of the same length. */
 export interface PanelBlockRows {
@@ -34,46 +36,55 @@ export class PanelRowsRepository {
 
   /**
    * Writes all rows of a version. PostgreSQL refuses COPY into a table with row level security; arrays in statements took
-   * as long as a COPY to a table on the side and a statement from there.
+   * as long as a COPY to a table on the side and a statement from there. The next statement is put into words while
+   * PostgreSQL works on the one before: in turn, that was a quarter of the time.
    */
   async insert(
     panelVersionId: string,
     rows: PanelBlockRows,
     { onWritten, signal }: InsertOptions = {},
   ): Promise<void> {
-    const names = rows.companies.map(textElement);
+    const names = rows.companies.map((name) => Buffer.from(name));
     const count = rows.year.length;
-    for (let start = 0; start < count; start += batchRows) {
+    const statement = (start: number) =>
+      this.#insertOf(panelVersionId, rows, { start, end: start + batchRows, names });
+    let next = statement(0);
+    for (let written = 0; written < count; written += batchRows) {
       signal?.throwIfAborted();
-      const end = Math.min(start + batchRows, count);
-      await this.#insertBatch(panelVersionId, rows, { start, end, names });
-      onWritten?.(end);
+      const end = written + batchRows;
+      const [, following] = await Promise.all([
+        next.execute(this.db),
+        // Only then, so that the one before is on its way.
+        end < count ? setImmediate().then(() => statement(end)) : next,
+      ]);
+      next = following;
+      onWritten?.(Math.min(end, count));
     }
   }
 
-  async #insertBatch(
+  #insertOf(
     panelVersionId: string,
     rows: PanelBlockRows,
-    { start, end, names }: { start: number; end: number; names: readonly string[] },
-  ): Promise<void> {
-    const company = literal(Array.from(rows.company.subarray(start, end), (code) => names[code]));
+    { start, end, names }: { start: number; end: number; names: readonly Buffer[] },
+  ): RawBuilder<unknown> {
+    const company = Array.from(rows.company.subarray(start, end), (code) => names[code]);
     const currency = rows.currency?.slice(start, end) ?? null;
-    const columns = rows.values.map((values) => ({
-      name: sql.ref(`v${rows.values.indexOf(values)}`),
-      literal: literal(Array.from(values.subarray(start, end), numberElement)),
+    const columns = rows.values.map((values, column) => ({
+      name: sql.ref(`v${column}`),
+      cells: float8Array(values.subarray(start, end)),
     }));
     const cells = sql.join(columns.map(({ name }) => name));
-    await sql`insert into panel_row
+    return sql`insert into panel_row
         (workspace_id, panel_version_id, company, year, file_row, cells, currency)
       select ${this.workspaceId}::uuid, ${panelVersionId}::uuid, company, year, file_row,
         array[${cells}]::double precision[], currency
       from unnest(
-        ${company}::text[],
-        ${literal(rows.year.subarray(start, end))}::integer[],
-        ${literal(rows.fileRow.subarray(start, end))}::integer[],
+        ${textArray(company)}::text[],
+        ${int4Array(rows.year.subarray(start, end))}::integer[],
+        ${int4Array(rows.fileRow.subarray(start, end))}::integer[],
         ${currency}::text[],
-        ${sql.join(columns.map((column) => sql`${column.literal}::double precision[]`))}
-      ) as line(company, year, file_row, currency, ${cells})`.execute(this.db);
+        ${sql.join(columns.map((column) => sql`${column.cells}::double precision[]`))}
+      ) as line(company, year, file_row, currency, ${cells})`;
   }
 
   /**
@@ -150,19 +161,6 @@ interface ColumnBytes extends Readonly<Record<`v${number}`, Buffer | null>> {
   readonly year: Buffer | null;
   readonly fileRow: Buffer | null;
   readonly currency: Buffer | null;
-}
-
-/** An array literal of PostgreSQL; its elements are literals already. */
-function literal(elements: readonly string[] | Int32Array): string {
-  return `{${elements.join(',')}}`;
-}
-
-function textElement(text: string): string {
-  return `"${text.replace(/["\\]/g, '\\$&')}"`;
-}
-
-function numberElement(value: number): string {
-  return Number.isNaN(value) ? 'NULL' : String(value);
 }
 
 /** The bytes in an order and place that a typed array of this machine reads. */
