@@ -101,6 +101,37 @@ describe('checkFile', () => {
     ]);
   });
 
+  it('offers a new name beside one that the panel has, and the panel’s as the one to read it as', () => {
+    const current: PanelBlock = {
+      companies: ['Arvo', 'Brimholt', 'BRIMHOLT', 'Corvane'],
+      company: Int32Array.of(0, 1, 2, 3),
+      year: Int32Array.of(2019, 2019, 2019, 2019),
+      columns: ['mv', 'capex', 'be'],
+      values: [1, 2, 3].map((value) => Float64Array.of(value, value, value, value)),
+    };
+    const table = tableOf(
+      plainHeader,
+      ['arvo', '2019', '1', '2', '3'],
+      ['arvo', '2020', '1', '2', '3'],
+      ['Brimholt', '2020', '1', '2', '3'],
+    );
+    const { spellings, findings } = check(table, {}, current);
+    expect(spellings).toEqual([
+      [
+        { company: 'Arvo', rows: 0 },
+        { company: 'arvo', rows: 2 },
+      ],
+    ]);
+    expect(findings.map(({ row, found, code }) => [row, found, code])).toEqual([
+      [2, 'arvo', 'spelling'],
+    ]);
+    expect(findings[0].detail).toContain('“Arvo” of the panel’s newest version');
+    const renames = [{ from: 'arvo', to: 'Arvo' }];
+    const renamed = check(table, { mending: { ...mending, renames } }, current);
+    expect([renamed.spellings, renamed.findings]).toEqual([[], []]);
+    expect(renamed.changes?.addedRows).toBe(2);
+  });
+
   it('lists no more than 500 groups of spellings and finds all', () => {
     const rows = Array.from({ length: 600 }, (_, index) =>
       ['firm', 'FIRM'].map((word) => [`${word} ${index}`, '2020', '1', '1', '1']),

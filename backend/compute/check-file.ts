@@ -28,7 +28,7 @@ export function checkFile(
   const findings = new FindingList(mostFindings);
   const panel = panelOfTable(file.table, recipe, findings);
   const { table } = panel.mended;
-  const similar = similarCompanies(panel);
+  const similar = similarCompanies(panel, current?.companies);
   findSpellings(table, panel, table.header.indexOf(recipe.company), similar, findings);
   if (file.formulaCells > 0) findFormulas(table, mappedHeaders(recipe), findings);
   const listed = findings.first();
@@ -41,9 +41,7 @@ export function checkFile(
     reviewRows: reviewRows(panel, recipe.mending, listed),
     spellings: similar
       .slice(0, mostSpellings)
-      .map(({ names }) =>
-        names.map(({ code, rows }) => ({ company: panel.companies[code], rows })),
-      ),
+      .map(({ names }) => names.map(({ company, rows }) => ({ company, rows }))),
     missingRates: panel.missingRates,
     formulaCells: file.formulaCells,
     firstRows: firstRows(panel),

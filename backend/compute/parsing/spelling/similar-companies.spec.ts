@@ -6,7 +6,7 @@ function groupsOf(rows: readonly (readonly [string, number])[]): unknown[] {
     companies,
     company: Int32Array.from(rows, ([name]) => companies.indexOf(name)),
     year: Int32Array.from(rows, ([, year]) => year),
-  }).map(({ names }) => names.map(({ code, rows: count }) => [companies[code], count]));
+  }).map(({ names }) => names.map(({ company, rows: count }) => [company, count]));
 }
 
 describe('similarCompanies', () => {

@@ -46,5 +46,9 @@ describe('what is mended in a file', () => {
     expect(openSpellings([group], noMending)).toEqual([group]);
     const mended = readAsOne(noMending, ['Aldren SE', 'Aldren S.E.'], 'Aldren SE');
     expect(openSpellings([group], mended)).toEqual([]);
+    const known = [{ company: 'ALDREN', rows: 0 }, ...group.map((each) => ({ ...each, rows: 0 }))];
+    expect(openSpellings([[...known, { company: 'aldren', rows: 2 }]], noMending).length).toBe(1);
+    const decided = readAsOne(noMending, ['aldren'], 'ALDREN');
+    expect(openSpellings([[...known, { company: 'aldren', rows: 2 }]], decided)).toEqual([]);
   });
 });

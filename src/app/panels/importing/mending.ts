@@ -66,7 +66,7 @@ export function openSpellings(
   const decided = new Set(renames.map(({ from }) => from));
   return spellings
     .map((group) => group.filter(({ company }) => !decided.has(company)))
-    .filter((group) => group.length > 1);
+    .filter((group) => group.length > 1 && group.some(({ rows }) => rows > 0));
 }
 
 function isAt(cell: FileCell, place: FileCell): boolean {

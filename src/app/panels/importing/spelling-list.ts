@@ -21,17 +21,23 @@ const shownAtOnce = 10;
         <legend class="kv-visually-hidden">Spellings of {{ group[0].company }}</legend>
         <div class="actions">
           @for (each of group; track each.company) {
-            <label class="choice">
-              <input
-                type="radio"
-                [name]="'spelling-' + group[0].company"
-                [checked]="nameOf(group) === each.company"
-                (change)="choose(group[0].company, each.company)"
-              />
-              <span
+            @if (isChoice(group, each)) {
+              <label class="choice">
+                <input
+                  type="radio"
+                  [name]="'spelling-' + group[0].company"
+                  [checked]="nameOf(group) === each.company"
+                  (change)="choose(group[0].company, each.company)"
+                />
+                <span
+                  >{{ each.company }} <span class="rows">{{ rowWords(each.rows) }}</span></span
+                >
+              </label>
+            } @else {
+              <span class="choice"
                 >{{ each.company }} <span class="rows">{{ rowWords(each.rows) }}</span></span
               >
-            </label>
+            }
           }
           <button type="button" class="kv-link" (click)="accept(group)">
             Read as one: {{ nameOf(group) }}
@@ -96,12 +102,21 @@ export class SpellingList {
     return this.#chosen()[first.company] ?? first.company;
   }
 
+  /** A name of the panel that the file does not have cannot be read as another: its rows are no rows of the file. */
+  protected isChoice(
+    group: ImportCheck['spellings'][number],
+    { rows }: ImportCheck['spellings'][number][number],
+  ): boolean {
+    const known = group.filter((each) => each.rows === 0);
+    return known.length === 0 || (known.length > 1 && rows === 0);
+  }
+
   protected choose(group: string, name: string): void {
     this.#chosen.update((chosen) => ({ ...chosen, [group]: name }));
   }
 
   protected accept(group: ImportCheck['spellings'][number]): void {
-    const names = group.map(({ company }) => company);
+    const names = group.filter(({ rows }) => rows > 0).map(({ company }) => company);
     this.mendingChanged.emit(readAsOne(this.mending(), names, this.nameOf(group)));
   }
 
@@ -110,7 +125,7 @@ export class SpellingList {
   }
 
   protected rowWords(rows: number): string {
-    return counted(rows, 'row');
+    return rows === 0 ? 'in the panel' : counted(rows, 'row');
   }
 
   protected fromWords(names: readonly string[]): string {
