@@ -72,6 +72,7 @@ export type CellHistoryReply = z.infer<typeof CellHistoryReply>;
 
 export const FlagCode = z.enum([
   'missing',
+  'duplicate',
   'jump',
   'unit-slip',
   'sign',

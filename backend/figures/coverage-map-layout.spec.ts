@@ -28,6 +28,14 @@ describe('coverage map layout', () => {
     expect(byEquity.cells.map((cell) => cell.state)).toEqual(['complete', 'none', 'complete']);
   });
 
+  it('flags what else is to be looked at in a row where no one variable is', () => {
+    const named = { company: 'Ardwyne', year: 2020, missing: [], flagged: ['company name'] };
+    const flagged = (variable: string | null) =>
+      coverageMapLayout({ ...data, cells: [named], variable }, 600).rows[0].cells[0].flagged;
+    expect(flagged(null)).toEqual(['company name']);
+    expect(flagged('capex')).toEqual([]);
+  });
+
   it('keeps cells usable for 120 companies and 30 years, wider than the container if need be', () => {
     const many = Array.from({ length: 120 * 30 }, (_, k) => ({
       company: `Company ${Math.floor(k / 30)}`,

@@ -8,7 +8,7 @@ export interface CoverageCell {
   readonly year: number;
   /** Names of the variables without a value. */
   readonly missing: readonly string[];
-  /** Names of the variables with a value that someone should look at. */
+  /** Names of the variables with a value that someone should look at, and of what else is so in the row. */
   readonly flagged?: readonly string[];
 }
 
@@ -81,6 +81,12 @@ function stateOf({ missing }: Pick<CoverageCell, 'missing'>, wanted: number): Co
   return missing.length >= wanted ? 'none' : 'some';
 }
 
+/** What is flagged that counts: of one variable alone where one is looked at. */
+function flaggedOf(cell: CoverageCell | undefined, variable: string | null): readonly string[] {
+  const flagged = cell?.flagged ?? [];
+  return variable === null ? flagged : flagged.filter((name) => name === variable);
+}
+
 /** One row a company, one column a year of the whole span, and whether the values are there. */
 export function coverageMapLayout(data: CoverageData, width: number): CoverageMapLayout {
   const wanted =
@@ -134,7 +140,7 @@ export function coverageMapLayout(data: CoverageData, width: number): CoverageMa
             x: placeOf(year),
             state: stateOf({ missing }, wanted.length),
             missing,
-            flagged: wanted.filter((name) => cell?.flagged?.includes(name) ?? false),
+            flagged: flaggedOf(cell, data.variable),
           };
         }),
       };

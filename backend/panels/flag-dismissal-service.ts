@@ -28,15 +28,17 @@ export interface PlacedDismissal extends FlagDismissalRow {
 export class FlagDismissalService {
   constructor(private readonly repositories: Repositories) {}
 
-  /** The newest first; none of a column that the newest version does not have. @throws {NotFound} */
+  /**
+   * The newest first; none of a column that the newest version does not have. A column of the model stays the same
+   * under another header. @throws {NotFound}
+   */
   async list(workspaceId: string, panelId: string): Promise<readonly PlacedDismissal[]> {
     return this.repositories.inWorkspace(workspaceId, async (tx) => {
-      const { columns } = await findNewest(tx, panelId);
-      const places = new Map<string | null, number | null>([[null, null]]);
-      columns.forEach(({ name }, column) => places.set(name, column));
+      const places = columnPlaces(await tx.panels.versionsOfPanel(panelId));
       const found = await tx.flagDismissals.ofPanel(panelId);
       return found.flatMap((dismissal) => {
-        const column = places.get(dismissal.columnName);
+        const { columnName } = dismissal;
+        const column = columnName === null ? null : places.get(columnName);
         return column === undefined ? [] : [{ ...dismissal, column }];
       });
     });
@@ -83,8 +85,30 @@ export class FlagDismissalService {
 
 async function findNewest(tx: WorkspaceRepositories, panelId: string): Promise<PanelVersionRow> {
   const newest = await tx.panels.findLatest(panelId);
-  if (newest === undefined) throw new NotFound('There is no such panel.');
+  if (newest === undefined) throw noPanel();
   return newest;
+}
+
+function noPanel(): NotFound {
+  return new NotFound('There is no such panel.');
+}
+
+/**
+ * Where columns of any version stand in the newest one: by header, and those of the model by what they are to it.
+ *
+ * @param versions  the first one first. @throws {NotFound} for none.
+ */
+function columnPlaces(versions: readonly PanelVersionRow[]): ReadonlyMap<string, number> {
+  const newest = versions.at(-1);
+  if (newest === undefined) throw noPanel();
+  const places = new Map<string, number>();
+  for (const { columns } of versions)
+    for (const { name, role } of columns) {
+      const place = newest.columns.findIndex((column) => column.role === role);
+      if (role !== 'other' && place !== -1) places.set(name, place);
+    }
+  newest.columns.forEach(({ name }, column) => places.set(name, column));
+  return places;
 }
 
 async function findDismissal(
@@ -103,12 +127,19 @@ async function assertCurrent(
   { company, year, column, code, value }: NewDismissal,
 ): Promise<void> {
   const [row] = await tx.panelCopies.rowsAt(id, [{ company, year }]);
+  if (column === null && value !== null)
+    throw new Invalid(`Expected no value of a whole row; found ${value}.`);
+  if (column === null && code === 'duplicate') {
+    if (row === undefined) throw new Invalid(`The panel has no row ${company} ${year}.`);
+    return;
+  }
   if ((code === 'year-gap') !== (column === null))
-    throw new Invalid('A gap between years is of a whole row; every other flag is of one cell.');
+    throw new Invalid(
+      'A year without a row and a company that stands in twice are of a whole row; every other flag is of one cell.',
+    );
   if (column === null) {
     if (row !== undefined)
       throw new Conflict(`The panel has a row ${company} ${year} by now: it is no gap.`);
-    if (value !== null) throw new Invalid(`Expected no value of a whole row; found ${value}.`);
     const years = await tx.panels.yearsOf(id, company);
     if (years === undefined)
       throw new Invalid(`Expected a company of the panel; found “${company}”.`);

@@ -89,6 +89,8 @@ describe('dismissed flags', () => {
       [{ ...sign, column: 3 }, 400],
       [{ ...sign, code: 'year-gap' }, 400],
       [{ ...gap, code: 'sign' }, 400],
+      [{ ...gap, code: 'duplicate' }, 400],
+      [{ ...gap, year: 2001, code: 'duplicate', value: 1 }, 400],
       [{ ...gap, company: 'Nobody' }, 400],
       [{ ...gap, value: 1 }, 400],
       [{ ...gap, year: 2000 }, 400],
@@ -100,6 +102,23 @@ describe('dismissed flags', () => {
         .withContext(JSON.stringify(wrong))
         .toBe(status);
     expect(await listed()).toEqual([]);
+  });
+
+  it('are of a whole row where a company may stand in twice, of a cell where its figures do', async () => {
+    const twice = { ...gap, year: 2001, code: 'duplicate' };
+    expect((await analyst.post(path, twice)).status).toBe(201);
+    expect((await analyst.post(path, { ...sign, code: 'duplicate' })).status).toBe(201);
+    expect((await listed()).map(({ code, column }) => [code, column])).toEqual([
+      ['duplicate', 0],
+      ['duplicate', null],
+    ]);
+  });
+
+  it('stay with a column of the model that a later file calls otherwise', async () => {
+    expect((await analyst.post(path, sign)).status).toBe(201);
+    const mapping = { ...referenceMapping, marketValue: 'worth' };
+    await importPanel(analyst, text.replace('value', 'worth'), mapping);
+    expect((await listed()).map(({ column }) => column)).toEqual([0]);
   });
 
   it('stay with their column, wherever a later version has it', async () => {

@@ -2,6 +2,24 @@
 export type FlagFacts =
   /** The cell is empty. */
   | { readonly code: 'missing' }
+  /**
+   * The figures of `company` in the same year, as `columns` of the model's three are in this row; `more` companies have
+   * them too.
+   */
+  | {
+      readonly code: 'duplicate';
+      readonly of: 'figures';
+      readonly company: string;
+      readonly columns: number;
+      readonly more: number;
+    }
+  /** The company, of which this is the first year, may be `company` under another name, or one of `more`. */
+  | {
+      readonly code: 'duplicate';
+      readonly of: 'name';
+      readonly company: string;
+      readonly more: number;
+    }
   /** `ratio` to the year before; `score` its distance from the company's usual change, in robust deviations. */
   | {
       readonly code: 'jump';

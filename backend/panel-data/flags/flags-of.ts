@@ -1,4 +1,6 @@
 import type { PanelCells } from '../panel-cells';
+import { duplicateFlags } from './duplicate-flags';
+import { duplicateNameFlags } from './duplicate-name-flags';
 import type { Flag, FlagCode, FlaggedCell } from './flag';
 import { type FlagGround, flagGround } from './flag-ground';
 import { jumpFlags } from './jump-flags';
@@ -12,6 +14,7 @@ import { yearGaps } from './year-gaps';
 /** The rules of single cells, in the order in which a cell's flags are told. */
 const cellRules: readonly ((ground: FlagGround) => FlaggedCell[])[] = [
   missingFlags,
+  duplicateFlags,
   signFlags,
   unitSlipFlags,
   staleCopyFlags,
@@ -21,6 +24,7 @@ const cellRules: readonly ((ground: FlagGround) => FlaggedCell[])[] = [
 
 export const flagCodes: readonly FlagCode[] = [
   'missing',
+  'duplicate',
   'sign',
   'unit-slip',
   'stale-copy',
@@ -47,7 +51,7 @@ export function flagsOf(panel: PanelCells): readonly Flag[] {
       (slips.has(key(row, column)) || slips.has(key(before[row], column)))) ||
     (facts.code === 'peer-outlier' && slips.has(key(row, column)));
   const flags = found.filter((cell) => !isExplained(cell)).map((cell) => toFlag(panel, cell));
-  return [...flags, ...yearGaps(ground)].sort(byPlace);
+  return [...flags, ...duplicateNameFlags(ground), ...yearGaps(ground)].sort(byPlace);
 }
 
 function key(row: number, column: number): string {

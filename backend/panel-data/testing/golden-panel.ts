@@ -42,6 +42,8 @@ export function panelOf(
   };
 }
 
+type GoldenColumn = 'marketValue' | 'capex' | 'bookEquity';
+
 interface GoldenOutlier {
   readonly company: string;
   readonly year: number;
@@ -68,6 +70,35 @@ export interface GoldenPanelData {
     >
   >;
   readonly peerOutliers: Readonly<Record<'grunfeld10' | 'grunfeld11', readonly GoldenOutlier[]>>;
+  readonly duplicates: {
+    /** Figures of one company that stand in another's row of the year as well. */
+    readonly copies: readonly {
+      readonly year: number;
+      readonly from: string;
+      readonly to: string;
+      readonly columns: readonly GoldenColumn[];
+    }[];
+    readonly emptied: readonly {
+      readonly company: string;
+      readonly year: number;
+      readonly column: GoldenColumn;
+    }[];
+    readonly found: readonly {
+      readonly company: string;
+      readonly year: number;
+      readonly other: string;
+      readonly more: number;
+      readonly columns: readonly GoldenColumn[];
+    }[];
+  };
+  readonly nearNames: {
+    readonly spans: readonly {
+      readonly company: string;
+      readonly first: number;
+      readonly last: number;
+    }[];
+    readonly pairs: readonly (readonly [string, string])[];
+  };
   readonly windows: Readonly<
     Record<'balanced' | 'unbalanced' | 'unbalancedWithF07' | 'unbalancedWithF02', GoldenWindow>
   >;

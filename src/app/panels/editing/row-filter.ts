@@ -10,6 +10,7 @@ export type CellFlags = ReadonlyMap<string, readonly Flag[]>;
 
 export const flagNames: Readonly<Record<FlagCode, string>> = {
   missing: 'missing',
+  duplicate: 'same as another company',
   sign: 'sign',
   'unit-slip': 'unit slip',
   'stale-copy': 'same as the year before',

@@ -17,7 +17,7 @@ import { ProblemNotice } from '../../ui/problem-notice';
 
 export interface DismissQuestion {
   readonly flag: Flag;
-  /** Of the same kind and company. */
+  /** Of the same kind, and of the company or its double. */
   readonly alike: readonly Flag[];
   /** A flag with its cell and figures, in one line. */
   readonly line: (flag: Flag) => string;
@@ -25,7 +25,7 @@ export interface DismissQuestion {
   readonly dismiss: (flags: readonly Flag[], reason: string) => Promise<ApiProblem | null>;
 }
 
-/** Asks why a flagged figure is right, and of which others of the company the same can be said. */
+/** Asks why a flagged figure is right, and of which others of its kind the same can be said. */
 @Component({
   selector: 'kv-dismiss-dialog',
   imports: [

@@ -22,17 +22,33 @@ export function flagGroups(flags: readonly Flag[]): readonly FlagGroup[] {
     .sort((left, right) => rank(left) - rank(right) || left.key.localeCompare(right.key, 'en'));
 }
 
-/** Flags of the same kind and company: what was said of one may hold for them. */
+/** Flags of the same kind and company, or of its double: what was said of one may hold for them. */
 export function alike(flag: Flag, flags: readonly Flag[]): readonly Flag[] {
   return flags.filter(
-    (other) => other !== flag && other.company === flag.company && kindOf(other) === kindOf(flag),
+    (other) =>
+      other !== flag &&
+      kindOf(other) === kindOf(flag) &&
+      (other.company === flag.company || isDouble(flag, other)),
   );
 }
 
+/** Whether each of the two repeats the other: of figures in the same year. */
+function isDouble(flag: Flag, other: Flag): boolean {
+  const [facts, otherFacts] = [flag.facts, other.facts];
+  if (facts.code !== 'duplicate' || otherFacts.code !== 'duplicate') return false;
+  const areOfEachOther = facts.company === other.company && otherFacts.company === flag.company;
+  return areOfEachOther && (facts.of === 'name' || flag.year === other.year);
+}
+
 function kindOf({ facts }: Flag): string {
-  return facts.code === 'unit-slip'
-    ? `unit-slip ${facts.factor} ${facts.isTooLarge ? 'large' : 'small'}`
-    : facts.code;
+  switch (facts.code) {
+    case 'unit-slip':
+      return `unit-slip ${facts.factor} ${facts.isTooLarge ? 'large' : 'small'}`;
+    case 'duplicate':
+      return `duplicate ${facts.of}`;
+    default:
+      return facts.code;
+  }
 }
 
 function rank({ flags: [{ facts }] }: FlagGroup): number {
@@ -46,6 +62,10 @@ function titleOf({ facts }: Flag, count: number): string {
   switch (facts.code) {
     case 'missing':
       return `${n} ${isOne ? 'cell is' : 'cells are'} missing`;
+    case 'duplicate':
+      return facts.of === 'name'
+        ? `${n} ${isOne ? 'company' : 'companies'} may stand in twice`
+        : `${figures} ${isOne ? 'repeats' : 'repeat'} another company’s`;
     case 'sign':
       return `${figures} ${isOne ? 'is' : 'are'} zero or negative`;
     case 'unit-slip': {

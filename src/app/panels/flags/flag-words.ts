@@ -15,6 +15,13 @@ export function flagReason(flag: Flag, numbers: NumberFormat): string {
   switch (facts.code) {
     case 'missing':
       return 'is missing';
+    case 'duplicate': {
+      const others = facts.more === 0 ? '' : ` and ${counted(facts.more, 'more', 'more')}`;
+      if (facts.of === 'name')
+        return `may be the same company as “${facts.company}”${others}: nearly the same name, and years that overlap or follow on`;
+      const row = facts.columns > 1 ? `, as are ${facts.columns} of this row` : '';
+      return `the figure of ${facts.company}${others} in the same year${row}`;
+    }
     case 'sign':
       return value === 0 ? 'is zero' : 'is negative';
     case 'unit-slip': {
@@ -47,7 +54,7 @@ export function flagLine(flag: Flag, titles: readonly string[], numbers: NumberF
   const figure = flagFigure(flag, numbers);
   const cell = `${flagPlace(flag, titles)}${figure === '' ? '' : ` ${figure}`}`;
   const reason = flagReason(flag, numbers);
-  return /^(is|has) /.test(reason) ? `${cell} ${reason}` : `${cell}: ${reason}`;
+  return /^(is|has|may) /.test(reason) ? `${cell} ${reason}` : `${cell}: ${reason}`;
 }
 
 /** `book equity` within a sentence; the header of a further column stays as it is written. */

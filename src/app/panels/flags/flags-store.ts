@@ -2,7 +2,7 @@ import { DestroyRef, Injectable, computed, inject, signal } from '@angular/core'
 import type { PanelColumn } from '@contract';
 import type { Flag } from '@panel-data';
 import { type Subscription, switchMap, timer } from 'rxjs';
-import { cellKey } from '../editing/panel-edits';
+import { cellKey, rowKey } from '../editing/panel-edits';
 import type { CellFlags } from '../editing/row-filter';
 import type { PanelRow } from '../panel-rows';
 import { DismissalsStore } from './dismissals-store';
@@ -29,16 +29,17 @@ export class FlagsStore {
   readonly figuresToLookAt = computed(() => {
     let count = 0;
     for (const list of this.byCell().values())
-      if (list.some(({ facts }) => facts.code !== 'missing')) count += 1;
+      if (list.some(({ column, facts }) => column !== null && facts.code !== 'missing')) count += 1;
     return count;
   });
   readonly window = computed(() => this.#found()?.window ?? null);
-  /** The flags to look at, by the cell that has them. */
+  /** The flags to look at, by the cell that has them; those of a whole row that is there by its row. */
   readonly byCell = computed((): CellFlags => {
     const cells = new Map<string, Flag[]>();
     for (const flag of this.flags()?.open ?? []) {
-      if (flag.column === null) continue;
-      const key = cellKey({ company: flag.company, year: flag.year, column: flag.column });
+      const { company, year, column, facts } = flag;
+      if (facts.code === 'year-gap') continue;
+      const key = column === null ? rowKey(flag) : cellKey({ company, year, column });
       const list = cells.get(key);
       if (list === undefined) cells.set(key, [flag]);
       else list.push(flag);

@@ -66,9 +66,10 @@ export class PanelCheck {
     const titles = new Map<string, string[]>();
     for (const list of this.store.byCell().values()) {
       const [flag] = list.filter(({ facts }) => facts.code !== 'missing');
-      if (flag === undefined || flag.column === null) continue;
+      if (flag === undefined) continue;
       const key = rowKey(flag);
-      titles.set(key, [...(titles.get(key) ?? []), this.titles()[flag.column]]);
+      const title = flag.column === null ? 'company name' : this.titles()[flag.column];
+      titles.set(key, [...(titles.get(key) ?? []), title]);
     }
     return titles;
   });
@@ -93,7 +94,7 @@ export class PanelCheck {
     const saved = new Map(this.savedRows().map((row) => [rowKey(row), row]));
     return (flag) =>
       flag.column === null
-        ? !saved.has(rowKey(flag))
+        ? saved.has(rowKey(flag)) === (flag.facts.code !== 'year-gap')
         : saved.get(rowKey(flag))?.values[flag.column] === flag.value;
   });
 

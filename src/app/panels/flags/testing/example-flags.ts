@@ -27,6 +27,24 @@ export const yearGap: Flag = {
   facts: { code: 'year-gap' },
 };
 
+export function repeated(company: string, other: string, column = 0): Flag {
+  return {
+    company,
+    year: 2016,
+    column,
+    value: 812,
+    facts: { code: 'duplicate', of: 'figures', company: other, columns: 2, more: 0 },
+  };
+}
+
+export const sameName: Flag = {
+  company: 'NORDWERK',
+  year: 2009,
+  column: null,
+  value: null,
+  facts: { code: 'duplicate', of: 'name', company: 'Nordwerk AG', more: 0 },
+};
+
 export function slip(year: number, company = 'Velmara'): Flag {
   return {
     company,
