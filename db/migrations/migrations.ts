@@ -4,6 +4,7 @@ import { panelsAndPeers } from './0002-panels-and-peers';
 import { fitsScenariosEditions } from './0003-fits-scenarios-editions';
 import { evidenceAndBootstraps } from './0004-evidence-and-bootstraps';
 import { panelDesk } from './0005-panel-desk';
+import { peerTrials } from './0006-peer-trials';
 
 /** In order, append-only: a merged migration is never edited. */
 const steps: Readonly<Record<string, (db: Kysely<unknown>, appRole: string) => Promise<void>>> = {
@@ -12,6 +13,7 @@ const steps: Readonly<Record<string, (db: Kysely<unknown>, appRole: string) => P
   '0003-fits-scenarios-editions': fitsScenariosEditions,
   '0004-evidence-and-bootstraps': evidenceAndBootstraps,
   '0005-panel-desk': panelDesk,
+  '0006-peer-trials': peerTrials,
 };
 
 export const latestMigration = Object.keys(steps).at(-1) ?? '';

@@ -17,6 +17,7 @@ import { PanelCorrectionsRepository } from './panel-corrections-repository';
 import { PanelDifferencesRepository } from './panel-differences-repository';
 import { PanelRowsRepository } from './panel-rows-repository';
 import { PanelsRepository } from './panels-repository';
+import { PeerTrialsRepository } from './peer-trials-repository';
 import { PeersRepository } from './peers-repository';
 import { PeopleRepository, SignInThrottleRepository } from './people-repository';
 import { ScenariosRepository } from './scenarios-repository';
@@ -36,6 +37,7 @@ export interface WorkspaceRepositories {
   readonly panelCorrections: PanelCorrectionsRepository;
   readonly flagDismissals: FlagDismissalsRepository;
   readonly peers: PeersRepository;
+  readonly peerTrials: PeerTrialsRepository;
   readonly fits: FitsRepository;
   readonly evidence: EvidenceRepository;
   readonly bootstraps: BootstrapsRepository;
@@ -83,6 +85,7 @@ export class Repositories {
         panelCorrections: new PanelCorrectionsRepository(trx, workspaceId),
         flagDismissals: new FlagDismissalsRepository(trx, workspaceId),
         peers: new PeersRepository(trx, workspaceId),
+        peerTrials: new PeerTrialsRepository(trx, workspaceId),
         fits: new FitsRepository(trx, workspaceId),
         evidence: new EvidenceRepository(trx, workspaceId),
         bootstraps: new BootstrapsRepository(trx, workspaceId),

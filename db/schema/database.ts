@@ -21,6 +21,7 @@ import type {
 } from './panel-tables';
 import type { PeerChoiceTable, PeerGroupVersionTable } from './peer-tables';
 import type { ScenarioDraftTable, ScenarioTable, ScenarioVersionTable } from './scenario-tables';
+import type { PeerTrialTable, TrialFitTable } from './trial-tables';
 
 /** Tables by name; the session and queue tables belong to their packages. */
 export interface Database {
@@ -42,11 +43,13 @@ export interface Database {
   panelVersion: PanelVersionTable;
   peerChoice: PeerChoiceTable;
   peerGroupVersion: PeerGroupVersionTable;
+  peerTrial: PeerTrialTable;
   person: PersonTable;
   scenario: ScenarioTable;
   scenarioDraft: ScenarioDraftTable;
   scenarioVersion: ScenarioVersionTable;
   signInThrottle: SignInThrottleTable;
   storedFile: StoredFileTable;
+  trialFit: TrialFitTable;
   workspace: WorkspaceTable;
 }
