@@ -7,6 +7,7 @@ import type {
   FitAnswer,
   FitSubject,
   FitTask,
+  HashAnswer,
 } from './messages';
 
 /** A run in a worker thread. */
@@ -19,7 +20,7 @@ export interface Run<Answer> {
 /** Worker threads for fits: the thread that answers requests never estimates anything. */
 export class FitPool {
   readonly #fits: Piscina<FitTask, FitAnswer>;
-  /** Apart, so that neither evidence nor a long bootstrap keeps a fit waiting. */
+  /** Apart, so that neither evidence nor a long bootstrap nor a trial keeps a fit waiting. */
   readonly #background: Piscina<BackgroundTask, BackgroundAnswer>;
 
   /** @param workerFile  path of the worker's entry, TypeScript under tsx or the built file. */
@@ -60,6 +61,19 @@ export class FitPool {
     const options = { transferList: buffersOf(subject), signal };
     const answer = this.#background.run(task, options) as Promise<BootstrapAnswer>;
     return { answer, progress: shareOf(progress) };
+  }
+
+  /** The digest of the fit, in the background and without fitting; the columns stay. */
+  async hash(subject: FitSubject, signal: AbortSignal): Promise<HashAnswer> {
+    const answer = await this.#background.run({ ...subject, wanted: 'hash' }, { signal });
+    return answer as HashAnswer;
+  }
+
+  /** Fits in the background, so that nobody's fit waits behind it; aborting ends its thread, the buffers move. */
+  async trial(subject: FitSubject, signal: AbortSignal): Promise<FitAnswer> {
+    const options = { transferList: buffersOf(subject), signal };
+    const answer = await this.#background.run({ ...subject, wanted: 'trial' }, options);
+    return answer as FitAnswer;
   }
 
   async close(): Promise<void> {

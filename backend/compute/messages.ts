@@ -33,7 +33,17 @@ export interface BootstrapTask extends FitSubject {
   readonly progress: Int32Array;
 }
 
-export type BackgroundTask = EvidenceTask | BootstrapTask;
+/** Has the digest computed that a fit would have. */
+export interface HashTask extends FitSubject {
+  readonly wanted: 'hash';
+}
+
+/** Has a group fitted that nobody saved. */
+export interface TrialTask extends FitSubject {
+  readonly wanted: 'trial';
+}
+
+export type BackgroundTask = EvidenceTask | BootstrapTask | HashTask | TrialTask;
 
 /** Classes do not survive a message port: a refusal crosses as its code, sentence and data. */
 export interface Refusal {
@@ -50,4 +60,6 @@ export type EvidenceAnswer = { readonly kind: 'done'; readonly evidence: Evidenc
 export type BootstrapAnswer =
   { readonly kind: 'done'; readonly summary: CovarianceSummary } | Refusal;
 
-export type BackgroundAnswer = EvidenceAnswer | BootstrapAnswer;
+export type HashAnswer = { readonly kind: 'done'; readonly hash: string } | Refusal;
+
+export type BackgroundAnswer = EvidenceAnswer | BootstrapAnswer | HashAnswer | FitAnswer;

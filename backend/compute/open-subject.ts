@@ -1,15 +1,24 @@
 import { createHash } from 'node:crypto';
-import { type FitOptions, openFit, StatsError } from '../stats';
+import { type FitOptions, type FitRequest, fitHash, openFit, StatsError } from '../stats';
 import type { OpenFit } from '../stats/fit-parts';
 import type { FitSubject, Refusal } from './messages';
 
 /** @throws {StatsError} for input the engine refuses. */
-export function openSubject(
-  { columns, specification, own, members }: FitSubject,
-  onProgress?: FitOptions['onProgress'],
-): OpenFit {
-  const sha256 = (text: string): string => createHash('sha256').update(text).digest('hex');
-  return openFit({ data: columns, specification, own, members }, { sha256, onProgress });
+export function openSubject(subject: FitSubject, onProgress?: FitOptions['onProgress']): OpenFit {
+  return openFit(requestOf(subject), { sha256, onProgress });
+}
+
+/** The digest of the fit, without fitting. @throws {StatsError} where there is nothing to fit. */
+export function hashOfSubject(subject: FitSubject): string {
+  return fitHash(requestOf(subject), { sha256 });
+}
+
+function requestOf({ columns, specification, own, members }: FitSubject): FitRequest {
+  return { data: columns, specification, own, members };
+}
+
+function sha256(text: string): string {
+  return createHash('sha256').update(text).digest('hex');
 }
 
 /** Shares how far a worker is with the thread that waits for it. */

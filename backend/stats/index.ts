@@ -3,6 +3,7 @@ export { tQuantile } from './distributions/t-distribution';
 export { engineVersion } from './engine-version';
 export type * from './evidence/evidence';
 export { evidenceOf } from './evidence/evidence-of';
+export { fitHash } from './fit-hash';
 export { fitPanel } from './fit-panel';
 export type { FitRequest, OpenFit } from './fit-parts';
 export { type FitOptions, openFit } from './open-fit';
