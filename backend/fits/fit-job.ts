@@ -1,8 +1,9 @@
 import type { JobTicketRow } from '../../db/repositories/jobs-repository';
 import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import type { FitPool } from '../compute/fit-pool';
-import type { FitAnswer, Refusal } from '../compute/messages';
+import type { FitAnswer } from '../compute/messages';
 import type { JobQueue } from '../jobs/job-queue';
+import { failureOf } from './fit-failure';
 import { findFit } from './fit-service';
 import { readSubject } from './fit-subject';
 import type { FitFailure, FitProgress } from './fit-view';
@@ -67,13 +68,4 @@ export class FitJob {
 
 function progress(phase: string, done: number, total: number): FitProgress {
   return { phase, done, total };
-}
-
-function failureOf({ code, detail, data }: Refusal): FitFailure {
-  const { rows = [], columns = [], companies = [] } = data;
-  return {
-    code,
-    detail,
-    subjects: [...columns, ...companies, ...rows.slice(0, 50).map(({ row }) => `row ${row}`)],
-  };
 }

@@ -3,18 +3,16 @@ import { UniqueViolation } from '../../db/errors';
 import type { PanelVersionRow } from '../../db/repositories/panels-repository';
 import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import { record } from '../activity/activity';
-import { Conflict, Invalid, NotFound, TooManyRequests } from '../errors/app-error';
+import { Conflict, NotFound, TooManyRequests } from '../errors/app-error';
 import type { JobQueue } from '../jobs/job-queue';
 import { findPeerGroup, type PeerGroup } from '../peers/peer-service';
-import { engineVersion, type FitResult, type Specification } from '../stats';
-import { type StoredFit, type StoredSpecification, toStoredFit } from './fit-view';
+import { engineVersion, type FitResult } from '../stats';
+import { type StoredFit, toStoredFit } from './fit-view';
+import { type AskedSpecification, specificationOf } from './specification-of';
 import { toFitResult } from './stored-result';
 
-export interface FitRequest extends Omit<Specification, 'seed'> {
+export interface FitRequest extends AskedSpecification {
   readonly peerGroupId: string;
-  /** Of the wild bootstrap, 1 where it is not named; the other covariances draw nothing. */
-  readonly seed?: number | undefined;
-  readonly furtherRegressors: readonly string[];
 }
 
 /** A fit with what it stands on; without a result until it is done. */
@@ -146,31 +144,4 @@ export async function findFinishedFit(tx: WorkspaceRepositories, id: string): Pr
   if (found.result === undefined)
     throw new Conflict('This fit has no result. Wait for it, or start another.');
   return { ...found, result: found.result };
-}
-
-function specificationOf(request: FitRequest, version: PanelVersionRow): StoredSpecification {
-  const named = (role: string): string =>
-    version.columns.find((column) => column.role === role)?.name ?? '';
-  const others = version.columns.filter((column) => column.role === 'other');
-  const errors = request.furtherRegressors.flatMap((name, index) =>
-    others.some((column) => column.name === name)
-      ? []
-      : [
-          {
-            pointer: `/furtherRegressors/${index}`,
-            detail: `expected a further column of the panel; found “${name}”`,
-          },
-        ],
-  );
-  if (errors.length > 0) throw new Invalid('The specification does not fit the panel.', errors);
-  return {
-    effects: request.effects,
-    form: request.form,
-    lag: request.lag,
-    slopes: request.slopes,
-    confidence: request.confidence,
-    seed: request.slopes === 'wild' ? (request.seed ?? 1) : null,
-    outcome: named('marketValue'),
-    regressors: [named('capex'), named('bookEquity'), ...new Set(request.furtherRegressors)],
-  };
 }
