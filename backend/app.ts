@@ -21,6 +21,7 @@ import { AppError, Conflict, Invalid, NotFound, Unavailable } from './errors/app
 import { evidenceRoutes } from './fits/evidence-routes';
 import { fitRoutes } from './fits/fit-routes';
 import { replicationRoutes } from './fits/replication/replication-routes';
+import { trialRoutes } from './fits/trials/trial-routes';
 import { applicationPage } from './http/application-page';
 import { CrossSiteGuard } from './http/cross-site';
 import { health } from './http/health';
@@ -108,6 +109,7 @@ export function createApp(options: AppOptions): Express {
   app.use(fitRoutes(services.fits, services.lineage, now));
   app.use(evidenceRoutes(services.evidence, services.bootstraps, now));
   app.use(replicationRoutes(services.replication));
+  app.use(trialRoutes(services.trials, now));
   app.use(scenarioRoutes(services.scenarios));
   app.use(deskRoutes(services.desk));
   app.use(editionRoutes(services.editions, services.lineage));

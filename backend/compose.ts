@@ -23,6 +23,8 @@ import { FitJob } from './fits/fit-job';
 import { FitService } from './fits/fit-service';
 import { LineageService } from './fits/lineage-service';
 import { ReplicationService } from './fits/replication/replication-service';
+import { TrialJob } from './fits/trials/trial-job';
+import { TrialService } from './fits/trials/trial-service';
 import type { SessionPool } from './http/session';
 import { JobQueue } from './jobs/job-queue';
 import { CorrectionService } from './panels/correction-service';
@@ -66,6 +68,7 @@ export interface Services {
   readonly evidence: EvidenceService;
   readonly bootstraps: BootstrapService;
   readonly replication: ReplicationService;
+  readonly trials: TrialService;
   readonly scenarios: ScenarioService;
   readonly desk: DeskService;
   readonly editions: EditionService;
@@ -152,6 +155,7 @@ export function compose(options: ComposeOptions): Composition {
         repositories,
         join(options.backendFolder, 'fits', 'replication', 'replication.R'),
       ),
+      trials: new TrialService(repositories, queue),
       scenarios: new ScenarioService(repositories, now),
       desk: new DeskService(repositories),
       editions: new EditionService(repositories, accounts, now, editionContent),
@@ -179,6 +183,12 @@ export function compose(options: ComposeOptions): Composition {
         'bootstrap',
         (ticket) => bootstrapJob.run(ticket),
         (ticket) => bootstrapJob.giveUp(ticket),
+      );
+      const trialJob = new TrialJob(workRepositories, fitPool, now);
+      await queue.work(
+        'peer-trial',
+        (ticket) => trialJob.run(ticket),
+        (ticket) => trialJob.giveUp(ticket),
       );
       const importJob = new ImportJob(workRepositories, parser);
       await queue.work(

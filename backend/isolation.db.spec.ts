@@ -33,12 +33,26 @@ async function fill(server: TestServer, canary: string): Promise<Filled> {
   const flag = { ...cell, code: 'jump', reason: canary };
   const dismissed = await client.post(`/api/panels/${panelId}/flag-dismissals`, flag);
   const bootstrapId = randomUUID();
+  const peerTrialId = randomUUID();
   const createdBy = session.person.id;
   await server.composition.services.repositories.inWorkspace(
     await workspaceOf(client),
     async (tx) => {
       await tx.bootstraps.insert({ id: bootstrapId, fitId: fit.id, seed: 7, createdBy });
       await tx.bootstraps.fail(bootstrapId, canary, new Date());
+      const request = {
+        ...trialOf(panelVersionId, `${canary}-own`),
+        specification: { regressors: [] },
+      };
+      await tx.peerTrials.insert({
+        id: peerTrialId,
+        panelVersionId,
+        request,
+        requestKey: canary,
+        createdBy,
+      });
+      await tx.peerTrials.fail(peerTrialId, canary, new Date());
+      await tx.peerTrials.keepFitted(canary, { canary });
     },
   );
   const last = result?.prediction?.last;
@@ -66,6 +80,7 @@ async function fill(server: TestServer, canary: string): Promise<Filled> {
       dismissalId: idOf(dismissed, 201),
       format: 'csv',
       peerGroupId,
+      peerTrialId,
       fitId: fit.id,
       fileId: panelVersion.file.id,
       scenarioId: idOf(saved, 201),
@@ -78,6 +93,12 @@ async function fill(server: TestServer, canary: string): Promise<Filled> {
 }
 
 const cell = { company: 'C01', year: 1935, column: 0, value: 1.5 };
+const trialOf = (panelVersionId: string, ownCompany: string) => ({
+  panelVersionId,
+  ownCompany,
+  peers: ['C02'],
+  candidates: [],
+});
 const correctionBody = { note: 'x', addedRows: [], removedRows: [] };
 
 const bodies: Readonly<Record<string, (ids: Filled['ids']) => object>> = {
@@ -87,6 +108,10 @@ const bodies: Readonly<Record<string, (ids: Filled['ids']) => object>> = {
     note: '',
     parentId: null,
     peers: [{ company: 'C02', isIncluded: true, reason: 'x' }],
+  }),
+  startPeerTrial: ({ panelVersionId }) => ({
+    ...trialOf(panelVersionId, 'C01'),
+    specification: {},
   }),
   startFit: ({ peerGroupId }) => ({ peerGroupId }),
   startBootstrap: () => ({ seed: 1 }),
@@ -221,7 +246,8 @@ describe('two workspaces', () => {
         expect(own.rows.every((row) => row.workspace_id === id))
           .withContext(relname)
           .toBeTrue();
-        if (relname === 'fit_bootstrap') expect(own.rowCount).toBe(1);
+        if (['fit_bootstrap', 'peer_trial', 'trial_fit'].includes(relname))
+          expect(own.rowCount).withContext(relname).toBe(1);
         await app.query('commit');
       }
     } finally {

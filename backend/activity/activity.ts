@@ -21,6 +21,8 @@ export type ActivityAction =
   | 'flag-dismissed'
   | 'flag-dismissal-taken-back'
   | 'peer-group-saved'
+  | 'peer-trial-started'
+  | 'peer-trial-cancelled'
   | 'fit-started'
   | 'fit-cancelled'
   | 'fit-exported'

@@ -8,6 +8,7 @@ export const queueNames = [
   'fit',
   'evidence',
   'bootstrap',
+  'peer-trial',
   'import',
   'open-billing-account',
 ] as const;
