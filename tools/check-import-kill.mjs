@@ -14,6 +14,8 @@ const imports = 20;
 const rows = 40_000;
 /** The last moment at which the server is killed: about as long as a commit of these rows takes. */
 const longestMs = 4000;
+/** Longest that the database may take to notice that a server is gone: a statement's own limit and more. */
+const longestNoticeMs = 150_000;
 
 const server = await openImportServer(root);
 const admin = new pg.Client({ connectionString: server.adminUrl });
@@ -43,12 +45,22 @@ try {
   await server.stop();
 }
 
-/** A session whose client is gone ends with its statement. */
+/**
+ * A session whose client is gone ends with its statement.
+ *
+ * @throws {Error} naming what a session still does when it does not.
+ */
 async function databaseNoticed() {
-  for (;;) {
-    const { rows: found } = await admin.query(`select count(*)::integer as sessions
+  for (const until = Date.now() + longestNoticeMs; ;) {
+    const { rows: sessions } = await admin.query(`select application_name, state, query
       from pg_stat_activity where datname = current_database() and pid <> pg_backend_pid()`);
-    if (found[0].sessions === 0) return;
+    if (sessions.length === 0) return;
+    if (Date.now() > until) {
+      const [{ application_name: name, state, query }] = sessions;
+      throw new Error(
+        `${sessions.length} sessions of the killed server are still there after ${longestNoticeMs / 1000} s; ${name} is ${state}: ${query.slice(0, 200)}`,
+      );
+    }
     await wait(20);
   }
 }

@@ -10,6 +10,8 @@ import { createMigratedDatabase, startTestServer, type TestServer } from '../tes
 import type { Actor } from './import-draft';
 
 const longestMs = 120_000;
+/** Of a wait within a spec: it says what was waited for before the runner ends the spec without a word. */
+const longestWaitMs = 60_000;
 
 describe('a commit of an import', () => {
   let database: TestDatabase;
@@ -66,15 +68,22 @@ describe('a commit of an import', () => {
     return found.rows[0].count;
   }
 
-  /** Until the rows are being written, at most a while. */
+  /** Until rows are being written. @returns the process of the database that writes them. */
   async function untilWriting(): Promise<number> {
-    for (;;) {
+    for (const until = Date.now() + longestWaitMs; Date.now() < until;) {
       const found = await admin.query<{ pid: number }>(`select pid from pg_stat_activity
         where datname = current_database() and query like 'insert into panel_row%'
           and application_name = 'kinvale-work' and xact_start is not null`);
       if (found.rows.length > 0) return found.rows[0].pid;
       await pause(1);
     }
+    const found = await admin.query<{ state: string; failure: string | null }>(
+      'select state, failure from import_draft order by created_at desc limit 1',
+    );
+    const { state, failure } = found.rows[0];
+    throw new Error(
+      `expected rows being written within ${longestWaitMs / 1000} s; the import is ${state}: ${failure ?? 'no reason'}`,
+    );
   }
 
   it(
