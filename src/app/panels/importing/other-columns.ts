@@ -39,6 +39,7 @@ export class OtherColumns {
     return [...model, ...free].map(({ header, role }) => ({
       header,
       role,
+      isCurrency: header === entry.currencyColumn,
       use: useOf(header, role, entry),
       sample: this.#sampleOf(header),
       terms: this.#termsOf(header),

@@ -55,6 +55,26 @@ describe('the other columns of a file', () => {
   });
 });
 
+describe('the column that names each row’s currency', () => {
+  it('is said to be used so among the other columns, not left out', async () => {
+    const fixture = TestBed.createComponent(OtherColumns);
+    const host = fixture.nativeElement as HTMLElement;
+    fixture.componentRef.setInput('draft', flowDraft);
+    fixture.componentRef.setInput('entry', { ...entry, currencyColumn: 'cur' });
+    await fixture.whenStable();
+    const chosen = (header: string): string | undefined =>
+      host
+        .querySelector<HTMLSelectElement>(`[aria-label="${header}: brought in as"]`)
+        ?.selectedOptions[0].textContent.trim();
+    expect(chosen('cur')).toBe('each row’s currency');
+    expect(chosen('staff')).toBe('a figure');
+    fixture.componentRef.setInput('entry', { ...entry, others: [] });
+    await fixture.whenStable();
+    expect(chosen('cur')).toBe('left out');
+    expect(chosen('staff')).toBe('left out');
+  });
+});
+
 describe('currencies and prices', () => {
   it('ask for rates only where a column names the currency', async () => {
     const fixture = TestBed.createComponent(CurrencyPart);
@@ -189,6 +209,26 @@ describe('spellings and changes', () => {
     expect(host.textContent).toContain('Aldren S.E. is read as Aldren SE.');
     pressIn(host, 'Read apart again');
     expect(mendings[2]).toEqual(noMending);
+  });
+
+  it('reads a new name as the one that the panel has', async () => {
+    const fixture = TestBed.createComponent(SpellingList);
+    const host = fixture.nativeElement as HTMLElement;
+    const mendings: FileMending[] = [];
+    fixture.componentInstance.mendingChanged.subscribe((mending) => mendings.push(mending));
+    fixture.componentRef.setInput('spellings', [
+      [
+        { company: 'Arvo', rows: 0 },
+        { company: 'arvo', rows: 2 },
+      ],
+    ]);
+    fixture.componentRef.setInput('mending', noMending);
+    await fixture.whenStable();
+    const names = [...host.querySelectorAll('.choice')].map((each) => each.textContent.trim());
+    expect(names).toEqual(['Arvo in the panel', 'arvo 2 rows']);
+    expect(host.querySelector('[type=radio]')).toBeNull();
+    pressIn(host, 'Read as one: Arvo');
+    expect(mendings[0].renames).toEqual([{ from: 'arvo', to: 'Arvo' }]);
   });
 
   it('lists each cell that would change, before and after', async () => {
