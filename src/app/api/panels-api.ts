@@ -6,6 +6,7 @@ import {
   FlagDismissalsReply,
   type ImportMapping,
   ImportReply,
+  OpenImportsReply,
   PanelCompaniesReply,
   PanelDifferencesReply,
   PanelVersionReply,
@@ -34,6 +35,11 @@ export class PanelsApi {
 
   openSample(): Observable<ImportReply> {
     return this.#client.call(apiRoutes.useSample, ImportReply);
+  }
+
+  /** The imports that are not a panel version yet, newest first. */
+  openImports(): Observable<OpenImportsReply> {
+    return this.#client.call(apiRoutes.listImports, OpenImportsReply);
   }
 
   readImport(importId: string): Observable<ImportReply> {

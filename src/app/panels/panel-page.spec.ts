@@ -115,13 +115,22 @@ describe('the Panel page', () => {
     });
     if (versions.length === 0) {
       await settled();
+      noImportWaits();
       return;
     }
     http.expectOne(`/api/panel-versions/${version.id}`).flush(shown);
     await settled();
+    noImportWaits();
     http.expectOne(`/api/panels/${version.panelId}/flag-dismissals`).flush({ dismissals: [] });
     await until(() => page().querySelector('kv-flag-list .groups') !== null);
     await until(() => page().querySelector('kv-panel-versions') !== null);
+  }
+
+  /** Analysts are told of them; nobody else may ask. */
+  function noImportWaits(): void {
+    const asked = http.match('/api/imports');
+    expect(asked.length).toBe(page().querySelector('kv-waiting-imports') === null ? 0 : 1);
+    for (const each of asked) each.flush({ imports: [] });
   }
 
   async function until(isSo: () => boolean): Promise<void> {
@@ -159,6 +168,7 @@ describe('the Panel page', () => {
     await answer([version]);
     expect(named('Choose peers')?.getAttribute('href')).toBe('/peers');
     expect(named('Bring in a file')).toBeDefined();
+    expect(page().querySelector('kv-waiting-imports')).not.toBeNull();
     expect(named('flow.csv')?.getAttribute('href')).toBe(`/api/files/${version.file.id}`);
   });
 
@@ -168,6 +178,7 @@ describe('the Panel page', () => {
     expect(page().querySelector('h1')?.textContent).toContain('1 cell missing');
     expect(named('Choose peers')).toBeUndefined();
     expect(named('Bring in a file')).toBeUndefined();
+    expect(page().querySelector('kv-waiting-imports')).toBeNull();
     expect(named('flow.csv')).toBeDefined();
   });
 
@@ -298,6 +309,7 @@ describe('the Panel page', () => {
     await settled();
     expect(page().querySelector('[role=alert]')?.textContent).toContain('Something went wrong');
     expect(named('Open the sample panel')).toBeDefined();
+    expect(page().querySelector('kv-waiting-imports')).not.toBeNull();
   });
 
   it('tells the CFO of an empty workspace whom to wait for', async () => {

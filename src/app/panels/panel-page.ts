@@ -21,6 +21,7 @@ import { PageHeader } from '../ui/page-header';
 import { ProblemNotice } from '../ui/problem-notice';
 import type { ChartText } from '../charts/chart-text';
 import { BringInPanel } from './importing/bring-in-panel';
+import { WaitingImports } from './importing/waiting-imports';
 import { PanelDeskGrid } from './editing/panel-desk-grid';
 import { DismissalsStore } from './flags/dismissals-store';
 import { flagReason } from './flags/flag-words';
@@ -49,6 +50,7 @@ import { counted } from '../ui/phrases';
     PanelVersions,
     ProblemNotice,
     RouterLink,
+    WaitingImports,
   ],
   templateUrl: './panel-page.html',
   styleUrl: './panel-page.css',
