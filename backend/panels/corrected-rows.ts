@@ -1,5 +1,6 @@
 import type { PanelRow, RowKey } from '../../db/repositories/panel-copies-repository';
 import { type FieldError, Invalid } from '../errors/app-error';
+import { inSlices } from './in-slices';
 
 /** One cell as it should be. */
 export interface CellCorrection extends RowKey {
@@ -36,45 +37,48 @@ export function rowsNamed({ cells, addedRows, removedRows }: Corrections): reado
 }
 
 /**
- * Applies corrections to the rows that they name.
+ * Applies corrections to the rows that they name, in slices: 50,000 at once kept others waiting for 300 ms.
  *
  * @param columns  headers of the version.
  * @param held  the named rows that the version has.
  * @throws {Invalid} naming each row that is not as said, and each cell that is named twice, changes nothing, or stands
  *   outside the panel.
  */
-export function correctedRows(
+export async function correctedRows(
   columns: readonly string[],
   held: readonly PanelRow[],
-  corrections: Corrections,
-): CorrectedRows {
-  const sheet = new CorrectionSheet(columns, held);
-  corrections.removedRows.forEach((key, index) => {
+  { cells, addedRows, removedRows }: Corrections,
+): Promise<CorrectedRows> {
+  const sheet = new CorrectionSheet(columns);
+  await inSlices(held, (row) => {
+    sheet.hold(row);
+  });
+  await inSlices(removedRows, (key, index) => {
     sheet.remove(key, `/removedRows/${index}`);
   });
-  corrections.addedRows.forEach((key, index) => {
+  await inSlices(addedRows, (key, index) => {
     sheet.add(key, `/addedRows/${index}`);
   });
-  corrections.cells.forEach((cell, index) => {
+  await inSlices(cells, (cell, index) => {
     sheet.correct(cell, `/cells/${index}`);
   });
-  if (rowsNamed(corrections).length === 0)
+  if (cells.length + addedRows.length + removedRows.length === 0)
     throw new Invalid('Expected at least one cell, one added row or one removed row; found none.');
   return sheet.rows();
 }
 
 class CorrectionSheet {
-  readonly #held: ReadonlyMap<string, PanelRow>;
+  readonly #held = new Map<string, PanelRow>();
   readonly #removed = new Map<string, RowKey>();
   readonly #added = new Map<string, DraftRow>();
   readonly #changed = new Map<string, DraftRow>();
   readonly #errors: FieldError[] = [];
 
-  constructor(
-    private readonly columns: readonly string[],
-    held: readonly PanelRow[],
-  ) {
-    this.#held = new Map(held.map((row) => [keyOf(row), row]));
+  constructor(private readonly columns: readonly string[]) {}
+
+  /** A row that the version has; all of them before anything is corrected. */
+  hold(row: PanelRow): void {
+    this.#held.set(keyOf(row), row);
   }
 
   remove(key: RowKey, pointer: string): void {

@@ -23,7 +23,7 @@ export class CorrectionService {
       if (newest.id !== versionId) throw overtaken(newest);
       const columns = version.columns.map(({ name }) => name);
       const held = await tx.panelCopies.rowsAt(versionId, rowsNamed(corrections));
-      const rows = correctedRows(columns, held, corrections);
+      const rows = await correctedRows(columns, held, corrections);
       const extent = await tx.panelCopies.extentAfter(versionId, rows);
       if (extent === undefined)
         throw new Invalid('A panel needs at least one row; none would stay.');

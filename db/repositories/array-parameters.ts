@@ -36,16 +36,17 @@ export function float8Array(values: Float64Array): Buffer {
   return bytes.subarray(0, at);
 }
 
-/** Texts in UTF-8. */
-export function textArray(values: readonly (Buffer | null)[]): Buffer {
-  const size = values.reduce((sum, value) => sum + lengthBytes + (value?.length ?? 0), 0);
-  const bytes = begin(text, values.length, size);
+/** Texts, or their bytes in UTF-8. */
+export function textArray(values: readonly (string | Buffer)[]): Buffer {
+  const texts = values.map((value) => (typeof value === 'string' ? Buffer.from(value) : value));
+  const size = texts.reduce((sum, bytes) => sum + lengthBytes + bytes.length, 0);
+  const array = begin(text, texts.length, size);
   let at = headBytes;
-  for (const value of values) {
-    at = bytes.writeInt32BE(value?.length ?? isNull, at);
-    if (value !== null) at += value.copy(bytes, at);
+  for (const bytes of texts) {
+    at = array.writeInt32BE(bytes.length, at);
+    at += bytes.copy(array, at);
   }
-  return bytes;
+  return array;
 }
 
 /** PostgreSQL counts the elements itself and looks at no more than the type; it lets an array say that it has nulls. */

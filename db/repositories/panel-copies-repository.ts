@@ -1,6 +1,8 @@
 import { type Kysely, sql } from 'kysely';
 import type { Database } from '../schema/database';
 import type { PanelOrigin } from '../schema/panel-tables';
+import { int4Array, textArray } from './array-parameters';
+import { batchesOf } from './batches';
 
 export interface RowKey {
   readonly company: string;
@@ -103,6 +105,10 @@ export class PanelCopiesRepository {
 
   /** Copies the named rows with other cells; the line of the file and its currency stay theirs. */
   async copyChanged(sourceId: string, id: string, rows: readonly PanelRow[]): Promise<void> {
+    for (const batch of batchesOf(rows)) await this.#copyBatch(sourceId, id, batch);
+  }
+
+  async #copyBatch(sourceId: string, id: string, rows: readonly PanelRow[]): Promise<void> {
     await sql`insert into panel_row
         (workspace_id, panel_version_id, company, year, file_row, cells, currency)
       select held.workspace_id, ${id}::uuid, company, year, held.file_row,
@@ -138,16 +144,16 @@ export class PanelCopiesRepository {
 
 function keyTable(keys: readonly RowKey[]) {
   return sql`unnest(
-    ${keys.map(({ company }) => company)}::text[],
-    ${keys.map(({ year }) => year)}::integer[]
+    ${textArray(keys.map(({ company }) => company))}::text[],
+    ${int4Array(Int32Array.from(keys, ({ year }) => year))}::integer[]
   )`;
 }
 
 function rowTable(rows: readonly PanelRow[]) {
   return sql`unnest(
-    ${rows.map(({ company }) => company)}::text[],
-    ${rows.map(({ year }) => year)}::integer[],
-    ${rows.map(({ cells }) => `{${cells.map((cell) => cell ?? 'NULL').join(',')}}`)}::text[]
+    ${textArray(rows.map(({ company }) => company))}::text[],
+    ${int4Array(Int32Array.from(rows, ({ year }) => year))}::integer[],
+    ${textArray(rows.map(({ cells }) => `{${cells.map((cell) => cell ?? 'NULL').join(',')}}`))}::text[]
   )`;
 }
 

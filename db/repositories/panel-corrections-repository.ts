@@ -1,5 +1,7 @@
 import { type Kysely, sql } from 'kysely';
 import type { Database } from '../schema/database';
+import { int4Array, textArray } from './array-parameters';
+import { batchesOf } from './batches';
 
 export interface CorrectionRow {
   readonly company: string;
@@ -35,16 +37,20 @@ export class PanelCorrectionsRepository {
   ) {}
 
   async insert(panelVersionId: string, corrections: readonly CorrectionRow[]): Promise<void> {
+    for (const batch of batchesOf(corrections)) await this.#insertBatch(panelVersionId, batch);
+  }
+
+  async #insertBatch(panelVersionId: string, corrections: readonly CorrectionRow[]): Promise<void> {
     await sql`insert into panel_correction
         (workspace_id, panel_version_id, company, year, column_index, reason, source)
       select ${this.workspaceId}::uuid, ${panelVersionId}::uuid, company, year, column_index,
         reason, source
       from unnest(
-        ${corrections.map(({ company }) => company)}::text[],
-        ${corrections.map(({ year }) => year)}::integer[],
-        ${corrections.map(({ columnIndex }) => columnIndex)}::integer[],
-        ${corrections.map(({ reason }) => reason)}::text[],
-        ${corrections.map(({ source }) => source)}::text[]
+        ${textArray(corrections.map(({ company }) => company))}::text[],
+        ${int4Array(Int32Array.from(corrections, ({ year }) => year))}::integer[],
+        ${int4Array(Int32Array.from(corrections, ({ columnIndex }) => columnIndex))}::integer[],
+        ${textArray(corrections.map(({ reason }) => reason))}::text[],
+        ${textArray(corrections.map(({ source }) => source))}::text[]
       ) as line(company, year, column_index, reason, source)`.execute(this.db);
   }
 

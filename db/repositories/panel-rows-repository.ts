@@ -2,6 +2,7 @@ import { setImmediate } from 'node:timers/promises';
 import { type Kysely, type RawBuilder, sql } from 'kysely';
 import type { Database } from '../schema/database';
 import { float8Array, int4Array, textArray } from './array-parameters';
+import { batchRows } from './batches';
 
 /** Rows of a panel version by column, all of the same length. */
 export interface PanelBlockRows {
@@ -23,9 +24,6 @@ export interface InsertOptions {
   /** Rejects with its reason before the next batch. */
   readonly signal?: AbortSignal;
 }
-
-/** Rows a statement: large enough to be quick, small enough that other requests are answered between two of them. */
-const batchRows = 5000;
 
 /** Rows of panel versions as whole columns: 200,000 rows as objects take seconds, in which nobody else is answered. */
 export class PanelRowsRepository {
