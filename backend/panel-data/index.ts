@@ -6,6 +6,7 @@ export type { Flag, FlagCode, FlagFacts } from './flags/flag';
 export { flagCodes, flagsOf } from './flags/flags-of';
 export { nameKey } from './names/name-key';
 export { nearNames } from './names/near-names';
+export { similarNames } from './names/similar-names';
 export * from './panel-cells';
 export * from './panel-differences';
 export { decimalSignIn } from './numbers/decimal-sign-in';
