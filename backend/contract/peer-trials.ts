@@ -25,6 +25,8 @@ export type StartPeerTrial = z.infer<typeof StartPeerTrial>;
 export const TrialFigures = z.object({
   hash: z.string(),
   companies: z.number().int(),
+  /** How many companies have a place. */
+  ranked: z.number().int(),
   slopes: z.array(z.object({ name: z.string(), ...IntervalEstimate.shape })),
   /** In the panel's currency unit, or in log form a difference of logs; null with a reason. */
   standing: IntervalEstimate.nullable(),

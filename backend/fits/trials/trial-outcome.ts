@@ -16,6 +16,8 @@ export interface TrialFigure {
 export interface TrialFigures {
   readonly hash: string;
   readonly companies: number;
+  /** How many companies have a place. */
+  readonly ranked: number;
   readonly slopes: readonly (TrialFigure & { readonly name: string })[];
   /** In the panel's currency unit, or in log form a difference of logs. */
   readonly standing: TrialFigure | null;
@@ -39,10 +41,11 @@ export function toRefusedOutcome(refusal: Refusal): TrialOutcome {
 }
 
 function toTrialFigures(result: FitResult): TrialFigures {
-  const { hash, sample, slopes, standing, standingReason } = result;
+  const { hash, sample, slopes, intercepts, standing, standingReason } = result;
   return {
     hash,
     companies: sample.companies,
+    ranked: intercepts.filter(({ deviation }) => deviation !== null).length,
     slopes: slopes.map((slope) => ({ name: slope.name, ...toFigure(slope) })),
     standing: standing === null ? null : toFigure(standing),
     standingReason,

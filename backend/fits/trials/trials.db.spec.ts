@@ -45,6 +45,7 @@ function figuresOfFit({ result }: FitReply) {
   return {
     hash: result.hash,
     companies: result.sample.companies,
+    ranked: result.intercepts.length,
     slopes: result.slopes.map(({ name, estimate, standardError, low, high }) => ({
       name,
       estimate,
