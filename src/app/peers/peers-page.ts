@@ -36,6 +36,7 @@ import { PlaneSection } from './plane/plane-section';
 import { AskReason } from './reasons/ask-reason';
 import { MissingReasons } from './reasons/missing-reasons';
 import { PeerTable } from './table/peer-table';
+import { TrialSection } from './trials/trial-section';
 import { PanelChanges } from './versions/panel-changes';
 import { PeerVersions } from './versions/peer-versions';
 
@@ -57,6 +58,7 @@ import { PeerVersions } from './versions/peer-versions';
     PlaneSection,
     ProblemNotice,
     RouterLink,
+    TrialSection,
   ],
   templateUrl: './peers-page.html',
   styleUrl: './peers-page.css',
