@@ -70,13 +70,7 @@ export default defineConfig(
     ],
     languageOptions: {
       parserOptions: {
-        project: [
-          'tsconfig.spec.json',
-          'backend/tsconfig.json',
-          'stubs/tsconfig.json',
-          'tools/tsconfig.json',
-          'e2e/tsconfig.json',
-        ],
+        project: ['tsconfig.spec.json', 'tsconfig.node.json', 'e2e/tsconfig.json'],
         tsconfigRootDir: import.meta.dirname,
       },
     },

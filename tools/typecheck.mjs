@@ -10,10 +10,8 @@ const tsc = 'node_modules/typescript/bin/tsc';
 const projects = [
   ['tsconfig.app.json', ngc],
   ['tsconfig.spec.json', ngc],
-  ['backend/tsconfig.json', tsc],
+  ['tsconfig.node.json', tsc],
   ['backend/stats/tsconfig.json', tsc],
-  ['stubs/tsconfig.json', tsc],
-  ['tools/tsconfig.json', tsc],
   ['e2e/tsconfig.json', tsc],
 ];
 
