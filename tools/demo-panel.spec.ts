@@ -43,7 +43,7 @@ describe('the demo panel', () => {
       const ofCompany = new Map(rows.map((row) => [row[0], row[column(name)]]));
       for (const row of rows) {
         expect(row[column(name)]).toMatch(/^[A-Z][a-z]+( [a-z]+)*$/);
-        expect(row[column(name)]).withContext(row[0]).toBe(ofCompany.get(row[0]));
+        expect(row[column(name)]).withContext(row[0]).toBe(ofCompany.get(row[0])!);
       }
       expect(new Set(ofCompany.values()).size).toBeLessThan(14);
       expect(new Set(ofCompany.values()).size).toBeGreaterThan(3);
