@@ -3,11 +3,11 @@ import { availableParallelism, tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { run } from './child-process.mjs';
 import { CommandFailed, Interrupted } from './plain-failure.mjs';
-import { countOf } from './suites.mjs';
+import { countOf, inStartOrder } from './suites.mjs';
 
 /**
- * Runs suites, two at a time unless one wants the machine to itself, and prints their output in their order: that of
- * the first unfinished suite as it comes, that of the others when their turn is there.
+ * Runs suites, two at a time unless one wants the machine to itself, the longest first, and prints their output in
+ * their order: that of the first unfinished suite as it comes, that of the others when their turn is there.
  *
  * @param options.envOf  the environment of a suite.
  * @returns the sums of what passed and failed.
@@ -17,13 +17,14 @@ export async function runSuites(root, suites, { envOf, signal }) {
   const stage = new Stage();
   const results = new Map();
   const places = availableParallelism() > 1 ? 2 : 1;
-  const runs = suites.map((suite) => ({ suite, voice: stage.voiceFor(suite.title) }));
+  const voices = new Map(suites.map((suite) => [suite, stage.voiceFor(suite.title)]));
   const running = new Set();
   try {
-    for (const { suite, voice } of runs) {
+    for (const suite of inStartOrder(suites)) {
       while (running.size >= (suite.alone ? 1 : places)) await Promise.race(running);
       if (signal?.aborted) break;
       const file = join(counts, `${suite.name}.json`);
+      const voice = voices.get(suite);
       voice.begin();
       const work = runSuite(root, suite, {
         env: { ...(await envOf(suite)), KINVALE_COUNTS: file },

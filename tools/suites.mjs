@@ -9,8 +9,10 @@ const minutes = 60_000;
  * The suites in the order of their output.
  *
  * - `command`: what to run; several commands run one after the other and stop at the first that fails.
+ * - `withoutBuild`: what to run where the build is not among the chosen suites, for what it checks too.
  * - `countsSpecs`: the runner writes its counts to KINVALE_COUNTS; otherwise the suite as a whole counts as one.
  * - `alone`: suites that measure time or use much of the machine have it to themselves.
+ * - `seconds`: about how long it takes on two processors, for the order in which suites start.
  */
 export const suites = [
   {
@@ -20,24 +22,29 @@ export const suites = [
       [node, 'node_modules/prettier/bin/prettier.cjs', '--check', '--log-level', 'warn', '.'],
     ],
     limitMs: 3 * minutes,
+    seconds: 35,
   },
   {
     name: 'lint',
     title: 'Lint (eslint)',
     commands: [[node, 'node_modules/eslint/bin/eslint.js', '.', '--max-warnings', '0']],
     limitMs: 4 * minutes,
+    seconds: 95,
   },
   {
     name: 'types',
     title: 'Types of all projects (tsc, ngc)',
-    commands: [[node, 'tools/typecheck.mjs']],
+    commands: [[node, 'tools/typecheck.mjs', '--build-follows']],
+    withoutBuild: [[node, 'tools/typecheck.mjs']],
     limitMs: 4 * minutes,
+    seconds: 60,
   },
   {
     name: 'imports',
     title: 'Import rules',
     commands: [[node, 'tools/check-imports.mjs']],
     limitMs: 2 * minutes,
+    seconds: 5,
   },
   {
     name: 'unit',
@@ -45,6 +52,7 @@ export const suites = [
     commands: [specs('unit')],
     countsSpecs: true,
     limitMs: 5 * minutes,
+    seconds: 50,
   },
   {
     name: 'build',
@@ -54,6 +62,7 @@ export const suites = [
       [node, 'tools/check-bundle.mjs'],
     ],
     limitMs: 5 * minutes,
+    seconds: 55,
   },
   {
     name: 'angular',
@@ -64,6 +73,7 @@ export const suites = [
     countsSpecs: true,
     needs: ['chromium'],
     limitMs: 5 * minutes,
+    seconds: 56,
   },
   {
     name: 'db',
@@ -73,6 +83,7 @@ export const suites = [
     needs: ['postgres'],
     alone: true,
     limitMs: 6 * minutes,
+    seconds: 115,
   },
   {
     name: 'browser',
@@ -85,8 +96,29 @@ export const suites = [
     needs: ['postgres', 'chromium'],
     alone: true,
     limitMs: 8 * minutes,
+    seconds: 250,
   },
 ];
+
+/** The suites of these names, or all; each with the commands that this choice asks for. */
+export function chosenSuites(names = suites.map(({ name }) => name)) {
+  return suites
+    .filter(({ name }) => names.includes(name))
+    .map(({ withoutBuild, ...suite }) =>
+      withoutBuild === undefined || names.includes('build')
+        ? suite
+        : { ...suite, commands: withoutBuild },
+    );
+}
+
+/** The longest start first, so that no long one is left to run by itself; those that want the machine come last. */
+export function inStartOrder(chosen) {
+  const together = chosen.filter(({ alone = false }) => !alone);
+  return [
+    ...together.sort((one, other) => other.seconds - one.seconds),
+    ...chosen.filter(({ alone = false }) => alone),
+  ];
+}
 
 /**
  * How many passed and failed, by what the runner wrote and how it ended. A runner that failed without a failed

@@ -1,7 +1,7 @@
 import { mkdtemp, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { countOf } from './suites.mjs';
+import { chosenSuites, countOf, inStartOrder, suites } from './suites.mjs';
 
 describe('the count of a suite', () => {
   let folder;
@@ -44,5 +44,47 @@ describe('the count of a suite', () => {
   it('takes a journey that was skipped or passed on a second try as failed', async () => {
     const stats = { expected: 3, unexpected: 1, flaky: 1, skipped: 2 };
     expect(await countsOf({ stats, errors: [] }, false)).toEqual([3, 4]);
+  });
+});
+
+describe('the choice of suites', () => {
+  const typesOf = (chosen) =>
+    chosen
+      .find(({ name }) => name === 'types')
+      .commands.flat()
+      .slice(1);
+
+  it('is all of them in their order unless some are named', () => {
+    expect(chosenSuites().map(({ name }) => name)).toEqual(suites.map(({ name }) => name));
+    expect(chosenSuites(['db', 'lint']).map(({ name }) => name)).toEqual(['lint', 'db']);
+  });
+
+  it('leaves the types of the application to the build only where the build runs', () => {
+    expect(typesOf(chosenSuites())).toEqual(['tools/typecheck.mjs', '--build-follows']);
+    expect(typesOf(chosenSuites(['types', 'build'])).at(-1)).toBe('--build-follows');
+    expect(typesOf(chosenSuites(['types', 'browser']))).toEqual(['tools/typecheck.mjs']);
+    expect(typesOf(chosenSuites(['types']))).toEqual(['tools/typecheck.mjs']);
+  });
+});
+
+describe('the start of suites', () => {
+  it('begins with the longest, and ends with those that want the machine to themselves', () => {
+    const chosen = [
+      { name: 'short', seconds: 5 },
+      { name: 'alone', seconds: 90, alone: true },
+      { name: 'long', seconds: 60 },
+      { name: 'last', seconds: 200, alone: true },
+    ];
+    expect(inStartOrder(chosen).map(({ name }) => name)).toEqual([
+      'long',
+      'short',
+      'alone',
+      'last',
+    ]);
+  });
+
+  it('leaves none out and knows how long each takes', () => {
+    expect(new Set(inStartOrder(suites))).toEqual(new Set(suites));
+    for (const { name, seconds } of suites) expect(seconds).withContext(name).toBeGreaterThan(0);
   });
 });

@@ -8,7 +8,7 @@ import { ensureNodePackages } from './node-packages.mjs';
 import { ensurePostgres, openTemporaryCluster } from './pg.mjs';
 import { Interrupted, inOneSentence } from './plain-failure.mjs';
 import { runSuites } from './run-suites.mjs';
-import { suites } from './suites.mjs';
+import { chosenSuites, suites } from './suites.mjs';
 import { installPackages } from './system-packages.mjs';
 
 const root = fileURLToPath(new URL('..', import.meta.url));
@@ -47,7 +47,7 @@ function choose(names) {
     );
     process.exit(2);
   }
-  return names.length === 0 ? suites : suites.filter(({ name }) => names.includes(name));
+  return names.length === 0 ? chosenSuites() : chosenSuites(names);
 }
 
 /** Specs see nothing of the developer's own settings, and those of the database a cluster that may be broken. */
