@@ -1,5 +1,5 @@
 import { checkFile } from './check-file';
-import type { FileRecipe } from './file-recipe';
+import { type FileRecipe, panelColumns } from './file-recipe';
 import type { FileCheck, PanelBlock } from './parse-messages';
 import type { Table } from './parsing/table';
 import { plainHeader, plainRecipe, tableOf } from './testing/tables';
@@ -106,7 +106,7 @@ describe('checkFile', () => {
       companies: ['Arvo', 'Brimholt', 'BRIMHOLT', 'Corvane'],
       company: Int32Array.of(0, 1, 2, 3),
       year: Int32Array.of(2019, 2019, 2019, 2019),
-      columns: ['mv', 'capex', 'be'],
+      columns: panelColumns(plainRecipe),
       values: [1, 2, 3].map((value) => Float64Array.of(value, value, value, value)),
     };
     const table = tableOf(
@@ -170,7 +170,7 @@ describe('checkFile', () => {
       companies: ['B', 'A'],
       company: Int32Array.of(0, 1, 1),
       year: Int32Array.of(2020, 2020, 2021),
-      columns: ['mv', 'capex', 'be'],
+      columns: panelColumns(plainRecipe),
       values: [Float64Array.of(1, 2, 3), Float64Array.of(1, NaN, 3), Float64Array.of(1, 2, 3)],
     };
     const table = tableOf(

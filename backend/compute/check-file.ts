@@ -1,5 +1,5 @@
 import { panelDifferences } from '../panel-data';
-import { type FileRecipe, numericColumns } from './file-recipe';
+import { type FileRecipe, numericColumns, panelColumns } from './file-recipe';
 import type { FileCheck, PanelBlock } from './parse-messages';
 import { FindingList } from './parsing/finding-list';
 import { findFormulas } from './parsing/formula-findings';
@@ -47,7 +47,7 @@ export function checkFile(
     firstRows: firstRows(panel),
     changes:
       current &&
-      panelDifferences(current, { ...panel, columns: numericColumns(recipe) }, mostChanges),
+      panelDifferences(current, { ...panel, columns: panelColumns(recipe) }, mostChanges),
   };
 }
 

@@ -20,7 +20,11 @@ describe('filePanel', () => {
       companies: ['B', 'A'],
       company: Int32Array.of(0, 1, 0),
       year: Int32Array.of(2021, 2020, 2020),
-      columns: ['mv', 'capex', 'be'],
+      columns: [
+        { name: 'mv', role: 'marketValue' },
+        { name: 'capex', role: 'capex' },
+        { name: 'be', role: 'bookEquity' },
+      ],
       values: [Float64Array.of(1, 4, 21), Float64Array.of(2, NaN, 16), Float64Array.of(3, 6, 27)],
       fileRow: Int32Array.of(2, 3, 5),
       currency: ['EUR', 'EUR', 'USD'],

@@ -1,4 +1,4 @@
-import { type FileRecipe, numericColumns } from './file-recipe';
+import { type FileRecipe, panelColumns } from './file-recipe';
 import type { FilePanel } from './parse-messages';
 import { textIndices } from './parsing/column-indices';
 import { FindingList } from './parsing/finding-list';
@@ -19,7 +19,7 @@ export function filePanel(table: Table, recipe: FileRecipe): FilePanel {
     companies,
     company,
     year,
-    columns: numericColumns(recipe),
+    columns: panelColumns(recipe),
     values,
     fileRow,
     currency,

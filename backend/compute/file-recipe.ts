@@ -1,3 +1,5 @@
+import type { PanelColumn } from '../panel-data';
+
 export type Unit = 'units' | 'thousands' | 'millions' | 'billions';
 
 export type TableLayout =
@@ -77,4 +79,10 @@ export interface FileRecipe {
 /** The headers of the recipe's numeric columns in the order of a panel's cells. */
 export function numericColumns(recipe: FileRecipe): readonly string[] {
   return [recipe.marketValue, recipe.capex, recipe.bookEquity, ...recipe.others];
+}
+
+/** The same with what each is to the model. */
+export function panelColumns(recipe: FileRecipe): readonly PanelColumn[] {
+  const roles = ['marketValue', 'capex', 'bookEquity'] as const;
+  return numericColumns(recipe).map((name, place) => ({ name, role: roles[place] ?? 'other' }));
 }

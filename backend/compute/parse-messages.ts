@@ -1,3 +1,4 @@
+import type { PanelColumn } from '../panel-data';
 import type { FileRecipe, TableReading } from './file-recipe';
 
 export type ParseRequest =
@@ -28,8 +29,8 @@ export interface PanelBlock {
   readonly companies: readonly string[];
   readonly company: Int32Array;
   readonly year: Int32Array;
-  /** Headers, in the order of `values`. */
-  readonly columns: readonly string[];
+  /** In the order of `values`. */
+  readonly columns: readonly PanelColumn[];
   /** values[column][row] */
   readonly values: readonly Float64Array[];
 }

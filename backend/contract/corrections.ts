@@ -1,4 +1,5 @@
 import * as z from 'zod';
+import { Unit } from './panels';
 
 const company = z.string().trim().min(1).max(200);
 const year = z.number().int().min(1000).max(9999);
@@ -50,7 +51,10 @@ const wholeNumber = z
 export const CellPlace = z.strictObject({ company, year: wholeNumber, column: wholeNumber });
 export type CellPlace = z.infer<typeof CellPlace>;
 
-/** One cell through all versions of its panel, oldest first; only versions in which it differs from the one before. */
+/**
+ * One cell through all versions of its panel, oldest first; only versions in which it differs from the one before, in
+ * the value, in the header of its column or in the unit.
+ */
 export const CellHistoryReply = z.object({
   entries: z.array(
     z.object({
@@ -59,6 +63,11 @@ export const CellHistoryReply = z.object({
       value: z.number().nullable(),
       /** Whether the version has the row at all. */
       hasRow: z.boolean(),
+      /** Of the cell's column in this version; null where it does not have the column. */
+      header: z.string().nullable(),
+      /** Of the version: what a figure of the model is in. */
+      currency: z.string(),
+      unit: Unit,
       at: z.iso.datetime(),
       by: z.string(),
       note: z.string(),

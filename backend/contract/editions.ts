@@ -28,7 +28,11 @@ export type SignEdition = z.infer<typeof SignEdition>;
 
 /** What an edition froze. Its SHA-256 is taken over the canonical JSON of this. */
 /** As it was when it was frozen: editions published before versions said what made them do not say it. */
-const FrozenPanelVersion = PanelVersionSummary.partial({ parentId: true, origin: true });
+const FrozenPanelVersion = PanelVersionSummary.partial({
+  parentId: true,
+  origin: true,
+  restoredNumber: true,
+});
 
 export const EditionContent = z.object({
   schema: z.literal(1),

@@ -12,22 +12,14 @@ export const CellDifference = z.object({
   company: z.string(),
   year: z.number().int(),
   kind: z.enum(['added-row', 'removed-row', 'changed-cell']),
-  /** Header of the column; null for a row. */
+  /** Header of the column, the later version's; null for a row. */
   column: z.string().nullable(),
   before: z.number().nullable(),
   after: z.number().nullable(),
 });
 export type CellDifference = z.infer<typeof CellDifference>;
 
-/** What changed from one panel version to another. */
-export const PanelDifferencesReply = z.object({
-  addedRows: z.number().int(),
-  removedRows: z.number().int(),
-  changedCells: z.number().int(),
-  /** At most 5,000 are listed; the counts are over all. */
-  listed: z.array(CellDifference),
-});
-export type PanelDifferencesReply = z.infer<typeof PanelDifferencesReply>;
+const Money = z.object({ currency: z.string(), unit: Unit });
 
 export const PanelColumn = z.object({
   /** The header in the file. */
@@ -36,12 +28,30 @@ export const PanelColumn = z.object({
 });
 export type PanelColumn = z.infer<typeof PanelColumn>;
 
+/** What changed from one panel version to another: columns of the model are one whatever their headers. */
+export const PanelDifferencesReply = z.object({
+  /** What is compared, as the later version calls it. */
+  columns: z.array(PanelColumn),
+  /** Columns of the model that the two versions call otherwise. */
+  renamed: z.array(z.object({ role: ColumnRole, before: z.string(), after: z.string() })),
+  /** What money of both versions is given in, the later one's; null where their currencies differ: each its own. */
+  money: Money.nullable(),
+  addedRows: z.number().int(),
+  removedRows: z.number().int(),
+  changedCells: z.number().int(),
+  /** At most 5,000 are listed; the counts are over all. */
+  listed: z.array(CellDifference),
+});
+export type PanelDifferencesReply = z.infer<typeof PanelDifferencesReply>;
+
 export const PanelVersionSummary = z.object({
   id: z.uuid(),
   panelId: z.uuid(),
   parentId: z.uuid().nullable(),
   /** What made it: a file, a set of corrections, or an older version put back. */
   origin: z.enum(['import', 'correction', 'restore']),
+  /** Of the version that was put back; null of another origin. */
+  restoredNumber: z.number().int().nullable(),
   panelName: z.string(),
   number: z.number().int(),
   currency: z.string(),

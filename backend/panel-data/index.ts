@@ -7,6 +7,7 @@ export { flagCodes, flagsOf } from './flags/flags-of';
 export { nameKey } from './names/name-key';
 export { nearNames } from './names/near-names';
 export { similarNames } from './names/similar-names';
+export * from './matched-columns';
 export * from './panel-cells';
 export * from './panel-differences';
 export { decimalSignIn } from './numbers/decimal-sign-in';

@@ -8,7 +8,7 @@ function panelOf(columns: readonly string[], ...rows: readonly Row[]): ComparedP
     companies,
     company: rows.map(([company]) => companies.indexOf(company)),
     year: rows.map(([, year]) => year),
-    columns,
+    columns: columns.map((name) => ({ name, role: 'other' })),
     values: columns.map((_, column) => rows.map((row) => row[column + 2] as number)),
   };
 }
@@ -55,6 +55,34 @@ describe('panelDifferences', () => {
     ]);
     expect(panelDifferences(after, before, 10).listed).toEqual([
       { company: 'A', year: 2020, kind: 'changed-cell', column: 'z', before: 9, after: null },
+    ]);
+  });
+
+  it('knows a column of the model by what it is, under whatever header', () => {
+    const named = (capex: string, others: readonly string[], ...rows: readonly Row[]) => ({
+      ...panelOf([capex, ...others], ...rows),
+      columns: [
+        { name: capex, role: 'capex' as const },
+        ...others.map((name) => ({ name, role: 'other' as const })),
+      ],
+    });
+    const before = named('capex_eur', ['staff'], ['A', 2020, 1, 7]);
+    expect(
+      panelDifferences(before, named('Capex', ['staff'], ['A', 2020, 1, 7]), 9).listed,
+    ).toEqual([]);
+    // The header of one column may well be that of another later.
+    const swapped = named('staff', ['capex_eur'], ['A', 2020, 2, 1]);
+    expect(panelDifferences(before, swapped, 9).listed).toEqual([
+      { company: 'A', year: 2020, kind: 'changed-cell', column: 'staff', before: 1, after: 2 },
+      {
+        company: 'A',
+        year: 2020,
+        kind: 'changed-cell',
+        column: 'capex_eur',
+        before: null,
+        after: 1,
+      },
+      { company: 'A', year: 2020, kind: 'changed-cell', column: 'staff', before: 7, after: null },
     ]);
   });
 

@@ -1,11 +1,14 @@
+import { matchedColumns } from './matched-columns';
+import type { PanelColumn } from './panel-cells';
+
 /** Rows of a panel by column, as they are compared. */
 export interface ComparedPanel {
   readonly companies: readonly string[];
   /** Position in `companies`, by row. */
   readonly company: ArrayLike<number>;
   readonly year: ArrayLike<number>;
-  /** Headers, in the order of `values`. */
-  readonly columns: readonly string[];
+  /** In the order of `values`. */
+  readonly columns: readonly PanelColumn[];
   /** values[column][row]; NaN where a cell is missing. */
   readonly values: readonly ArrayLike<number>[];
 }
@@ -14,7 +17,7 @@ export interface PanelDifference {
   readonly company: string;
   readonly year: number;
   readonly kind: 'added-row' | 'removed-row' | 'changed-cell';
-  /** Header of the column; null for a row. */
+  /** Header of the column, the later panel's where the two differ; null for a row. */
   readonly column: string | null;
   /** Null where there is no value. */
   readonly before: number | null;
@@ -30,8 +33,8 @@ export interface PanelDifferences {
 }
 
 /**
- * What changes from one panel to another: rows by company and year, cells by equality of doubles, columns by header. A
- * column that one of the two does not have counts as missing in all of its rows. Where a panel has a company and year
+ * What changes from one panel to another: rows by company and year, cells by equality of doubles, columns of the model by
+ * what they are to it and further ones by header. A column that one of the two does not have counts as missing in all of its rows. Where a panel has a company and year
  * twice, its first row counts.
  *
  * @param mostListed  how many differences to list.
@@ -41,7 +44,11 @@ export function panelDifferences(
   after: ComparedPanel,
   mostListed: number,
 ): PanelDifferences {
-  const columns = matchedColumns(before, after);
+  const columns = matchedColumns(before.columns, after.columns).map((matched) => ({
+    column: matched.column.name,
+    ofBefore: matched.before === null ? undefined : before.values[matched.before],
+    ofAfter: matched.after === null ? undefined : after.values[matched.after],
+  }));
   const rowsBefore = rowsByKey(before, before.companies);
   const rowsAfter = rowsByKey(after, before.companies);
   const changed = new BoundedList(mostListed);
@@ -78,21 +85,6 @@ export function panelDifferences(
     changedCells: changed.count,
     listed: [...changed.first, ...removed.first, ...added.first].slice(0, mostListed),
   };
-}
-
-interface MatchedColumn {
-  readonly column: string;
-  readonly ofBefore: ArrayLike<number> | undefined;
-  readonly ofAfter: ArrayLike<number> | undefined;
-}
-
-function matchedColumns(before: ComparedPanel, after: ComparedPanel): readonly MatchedColumn[] {
-  const headers = new Set([...after.columns, ...before.columns]);
-  return [...headers].map((column) => ({
-    column,
-    ofBefore: before.values[before.columns.indexOf(column)],
-    ofAfter: after.values[after.columns.indexOf(column)],
-  }));
 }
 
 /** More than the widest year. */

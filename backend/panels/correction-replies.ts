@@ -1,13 +1,14 @@
 import type { CellHistoryReply, FlagCode, FlagDismissal, PanelDifferencesReply } from '../contract';
-import type { PanelDifferences } from '../panel-data';
 import type { PlacedDismissal } from './flag-dismissal-service';
-import type { CellEntry } from './panel-history-service';
+import type { CellEntry, VersionDifferences } from './panel-history-service';
 
 export function toPanelDifferencesReply({
   listed,
-  ...counts
-}: PanelDifferences): PanelDifferencesReply {
-  return { ...counts, listed: listed.map((difference) => ({ ...difference })) };
+  columns,
+  renamed,
+  ...rest
+}: VersionDifferences): PanelDifferencesReply {
+  return { ...rest, listed: [...listed], columns: [...columns], renamed: [...renamed] };
 }
 
 export function toCellHistoryReply(entries: readonly CellEntry[]): CellHistoryReply {
@@ -18,6 +19,8 @@ export function toCellHistoryReply(entries: readonly CellEntry[]): CellHistoryRe
       at: version.createdAt.toISOString(),
       by: version.createdByName,
       note: version.note,
+      currency: version.currency,
+      unit: version.unit,
       ...entry,
     })),
   };

@@ -212,11 +212,13 @@ describe('corrections', () => {
       id: third,
       parentId: second,
       origin: 'restore',
+      restoredNumber: 1,
       number: 3,
       note: 'as it was',
       createdAt: after.version.createdAt,
     });
     expect(await differences(first, third)).toEqual({
+      ...comparison,
       addedRows: 0,
       removedRows: 0,
       changedCells: 0,
@@ -235,6 +237,7 @@ describe('corrections', () => {
     });
     const place = { before: null, after: null, column: null };
     expect(await differences(first, second)).toEqual({
+      ...comparison,
       addedRows: 1,
       removedRows: 1,
       changedCells: 1,
@@ -278,7 +281,17 @@ describe('corrections', () => {
 
   const entry = (number: number, value: number | null, note: string) => ({
     ...{ number, value, note, by: 'Founder', reason: null, source: null },
+    ...{ header: 'value', currency: 'USD', unit: 'millions' as const },
   });
+  const comparison = {
+    columns: [
+      { name: 'value', role: 'marketValue' as const },
+      { name: 'inv', role: 'capex' as const },
+      { name: 'capital', role: 'bookEquity' as const },
+    ],
+    renamed: [],
+    money: { currency: 'USD', unit: 'millions' as const },
+  };
 
   it('stand in a version as long as no import and no older version took their place', async () => {
     const { session } = (await analyst.get('/api/session')).body as {

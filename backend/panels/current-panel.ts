@@ -17,6 +17,5 @@ export async function currentPanel(
   if (version === undefined) return undefined;
   const rows = await tx.panelRows.block(version.id, version.columns.length);
   const { companies, company, year, values } = rows;
-  const columns = version.columns.map(({ name }) => name);
-  return { version, block: { companies, company, year, columns, values } };
+  return { version, block: { companies, company, year, columns: version.columns, values } };
 }

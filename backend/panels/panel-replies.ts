@@ -9,6 +9,7 @@ export function toPanelVersionSummary(row: PanelVersionRow): PanelVersionSummary
     panelId: row.panelId,
     parentId: row.parentId,
     origin: row.origin,
+    restoredNumber: row.restoredNumber,
     panelName: row.panelName,
     number: row.number,
     currency: row.currency,

@@ -1,6 +1,7 @@
 import { type Kysely, sql } from 'kysely';
 import type { Database } from '../schema/database';
 import type { PanelOrigin, StoredColumn } from '../schema/panel-tables';
+import { panelVersionQuery } from './panel-version-query';
 
 export interface PanelVersionRow {
   readonly id: string;
@@ -9,6 +10,8 @@ export interface PanelVersionRow {
   readonly number: number;
   readonly parentId: string | null;
   readonly origin: PanelOrigin;
+  /** Of the version that was put back; null of another origin. */
+  readonly restoredNumber: number | null;
   readonly currency: string;
   readonly unit: 'units' | 'thousands' | 'millions' | 'billions';
   readonly companyHeader: string;
@@ -270,43 +273,6 @@ export class PanelsRepository {
   }
 
   private versions() {
-    return this.db
-      .selectFrom('panelVersion')
-      .innerJoin('panel', (join) =>
-        join
-          .onRef('panel.workspaceId', '=', 'panelVersion.workspaceId')
-          .onRef('panel.id', '=', 'panelVersion.panelId'),
-      )
-      .innerJoin('storedFile', (join) =>
-        join
-          .onRef('storedFile.workspaceId', '=', 'panelVersion.workspaceId')
-          .onRef('storedFile.id', '=', 'panelVersion.fileId'),
-      )
-      .innerJoin('person', 'person.id', 'panelVersion.createdBy')
-      .select([
-        'panelVersion.id',
-        'panelVersion.panelId',
-        'panel.name as panelName',
-        'panelVersion.number',
-        'panelVersion.parentId',
-        'panelVersion.origin',
-        'panelVersion.currency',
-        'panelVersion.unit',
-        'panelVersion.companyHeader',
-        'panelVersion.yearHeader',
-        'panelVersion.columns',
-        'panelVersion.note',
-        'panelVersion.companies',
-        'panelVersion.rowCount',
-        'panelVersion.firstYear',
-        'panelVersion.lastYear',
-        'panelVersion.createdAt',
-        'person.name as createdByName',
-        'storedFile.id as fileId',
-        'storedFile.name as fileName',
-        'storedFile.byteSize as fileByteSize',
-        'storedFile.sha256 as fileSha256',
-      ])
-      .where('panelVersion.workspaceId', '=', this.workspaceId);
+    return panelVersionQuery(this.db, this.workspaceId);
   }
 }

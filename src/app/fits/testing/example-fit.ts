@@ -1,4 +1,5 @@
-import type { DeskReply, FitReply, FitResult, PanelVersionSummary } from '@contract';
+import type { DeskReply, FitReply, FitResult } from '@contract';
+import { exampleId, panelVersion } from '../../api/testing/panel-version';
 
 const test = { value: 115.9, df1: 2, df2: 28, pValue: 0.0000002 };
 
@@ -188,29 +189,7 @@ export const exampleLogResult: FitResult = {
   withoutCompany: [{ company: 'Kesdrin', slopes: [0.4, 0.3], standing: 0.1 }],
 };
 
-export const examplePanelVersion: PanelVersionSummary = {
-  id: '0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a0011',
-  panelId: '0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a0010',
-  parentId: null,
-  origin: 'import',
-  panelName: 'Flow control',
-  number: 1,
-  currency: 'EUR',
-  unit: 'millions',
-  note: '',
-  companies: 3,
-  rows: 33,
-  firstYear: 2010,
-  lastYear: 2020,
-  createdAt: '2026-03-04T12:00:00.000Z',
-  createdBy: 'Ilvo Brenn',
-  file: {
-    id: '0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a0012',
-    name: 'flow.csv',
-    byteSize: 900,
-    sha256: 'ab'.repeat(32),
-  },
-};
+export const examplePanelVersion = panelVersion({ panelId: exampleId(0) });
 
 export const exampleFit: FitReply = {
   fit: {

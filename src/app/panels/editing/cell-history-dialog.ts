@@ -1,5 +1,5 @@
 import { DatePipe } from '@angular/common';
-import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { MatButton } from '@angular/material/button';
 import {
@@ -17,6 +17,7 @@ import { PanelsApi } from '../../api/panels-api';
 import { NumberFormat } from '../../ui/number-format';
 import { ProblemNotice } from '../../ui/problem-notice';
 import { columnTitle, kindOf } from '../panel-rows';
+import { historyLines, unitOf } from '../versions/history-lines';
 import type { CellPlace } from './panel-edits';
 import { figureWords, shiftOf } from './shown-figure';
 
@@ -59,6 +60,9 @@ type HistoryView =
           <p class="kv-caption">
             Versions in which the cell differs from the one before. {{ unit }}
           </p>
+          @for (line of lines(); track line) {
+            <p>{{ line }}</p>
+          }
           <div class="kv-table-scroll" tabindex="0" role="region" [attr.aria-label]="title">
             <table class="kv-table">
               <thead>
@@ -80,7 +84,7 @@ type HistoryView =
                       >
                     </th>
                     <td class="kv-number">
-                      {{ entry.hasRow ? words(entry.value) : 'no row' }}
+                      {{ entry.hasRow ? words(entry) : 'no row' }}
                     </td>
                     <td>{{ entry.by }}, {{ entry.at | date: 'd MMM y, HH:mm' }}</td>
                     <td>{{ entry.reason || '–' }}</td>
@@ -112,9 +116,13 @@ export class CellHistoryDialog {
   readonly #wanted = new Subject<void>();
 
   protected readonly title = `${columnTitle(this.#question.column)}, ${this.#question.place.company} ${this.#question.place.year}`;
-  protected readonly unit =
-    kindOf(this.#question.column) === 'money' ? `In ${this.#numbers.unitLabel()}.` : '';
+  readonly #isMoney = kindOf(this.#question.column) === 'money';
+  protected readonly unit = this.#isMoney ? `In ${this.#numbers.unitLabel()}.` : '';
   protected readonly view = signal<HistoryView>({ kind: 'loading' });
+  protected readonly lines = computed(() => {
+    const view = this.view();
+    return view.kind === 'ready' ? historyLines(view.entries, this.#isMoney) : [];
+  });
 
   constructor() {
     const { panelVersionId, place } = this.#question;
@@ -141,8 +149,16 @@ export class CellHistoryDialog {
     this.#wanted.next();
   }
 
-  protected words(value: number | null): string {
-    const shift = shiftOf(this.#question.column, this.#numbers.factor());
-    return figureWords(value, shift, this.#numbers.locale());
+  /** In the unit that is shown; of a version in another unit or currency as it is saved, with that named. */
+  protected words(entry: CellHistoryReply['entries'][number]): string {
+    const { column } = this.#question;
+    const locale = this.#numbers.locale();
+    const isOfPage =
+      entry.unit === this.#numbers.panelUnit() && entry.currency === this.#numbers.currency();
+    if (isOfPage || !this.#isMoney)
+      return figureWords(entry.value, shiftOf(column, this.#numbers.factor()), locale);
+    return entry.value === null
+      ? figureWords(null, 0, locale)
+      : `${figureWords(entry.value, 0, locale)} ${unitOf(entry)}`;
   }
 }

@@ -7,45 +7,33 @@ import { MatCheckboxHarness } from '@angular/material/checkbox/testing';
 import { MatInputHarness } from '@angular/material/input/testing';
 import { provideRouter } from '@angular/router';
 import { type PanelVersionSummary, problemType } from '@contract';
+import { exampleId, panelVersion } from '../../api/testing/panel-version';
 import { NumberFormat } from '../../ui/number-format';
 import { PanelVersions } from './panel-versions';
 import { originWords } from './version-words';
 
-const id = (last: number): string => `0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a00${10 + last}`;
-
-const first: PanelVersionSummary = {
-  id: id(1),
-  panelId: id(9),
-  parentId: null,
-  origin: 'import',
-  panelName: 'Flow control',
-  number: 1,
-  currency: 'EUR',
-  unit: 'millions',
-  note: 'From the filings',
-  companies: 2,
-  rows: 3,
-  firstYear: 2010,
-  lastYear: 2011,
-  createdAt: '2026-03-04T12:00:00.000Z',
-  createdBy: 'Ilvo Brenn',
-  file: { id: id(3), name: 'flow.csv', byteSize: 900, sha256: 'ab'.repeat(32) },
-};
+const first = panelVersion({ note: 'From the filings', companies: 2, rows: 3, lastYear: 2011 });
 const second: PanelVersionSummary = {
   ...first,
-  id: id(2),
+  id: exampleId(10),
   number: 2,
   parentId: first.id,
   origin: 'correction',
 };
 const third: PanelVersionSummary = {
   ...first,
-  id: id(4),
+  id: exampleId(4),
   number: 3,
   parentId: second.id,
   origin: 'restore',
+  restoredNumber: 1,
 };
-const elsewhere: PanelVersionSummary = { ...first, id: id(5), panelId: id(8), panelName: 'Pumps' };
+const elsewhere: PanelVersionSummary = {
+  ...first,
+  id: exampleId(5),
+  panelId: exampleId(8),
+  panelName: 'Pumps',
+};
 
 describe('panel versions', () => {
   let fixture: ComponentFixture<PanelVersions>;
@@ -63,7 +51,6 @@ describe('panel versions', () => {
     const inputs = {
       versions: [elsewhere, third, second, first],
       shownId: third.id,
-      columns: [{ name: 'capex_eur', role: 'capex' }],
       mayChange,
     };
     for (const [name, value] of Object.entries(inputs)) fixture.componentRef.setInput(name, value);
@@ -91,9 +78,9 @@ describe('panel versions', () => {
 
   it('says of each what made it, and hands it out', async () => {
     const page = await show();
-    expect(originWords(first, [first])).toBe('from a file');
-    expect(words(page)).toContain('corrections of v1');
-    expect(words(page)).toContain('an older version put back, after v2');
+    expect(originWords(first, [first])).toBe('from a file by Ilvo Brenn');
+    expect(words(page)).toContain('corrections of v1 by Ilvo Brenn');
+    expect(words(page)).toContain('version 1 put back by Ilvo Brenn, after v2');
     const link = (name: string) =>
       page.querySelector(`a[aria-label="${name}"]`)?.getAttribute('href');
     expect(link('CSV of Flow control v2')).toBe(`/api/panel-versions/${second.id}/export/csv`);
@@ -111,6 +98,12 @@ describe('panel versions', () => {
     expect(await other.isDisabled()).toBeTrue();
     await (await loader.getHarness(MatButtonHarness.with({ text: 'Compare v1 with v3' }))).click();
     http.expectOne(`/api/panel-versions/${first.id}/differences/${third.id}`).flush({
+      columns: [
+        { name: 'capex_eur', role: 'capex' },
+        { name: 'staff', role: 'other' },
+      ],
+      renamed: [{ role: 'capex', before: 'inv', after: 'capex_eur' }],
+      money: { currency: 'EUR', unit: 'millions' },
       addedRows: 1,
       removedRows: 0,
       changedCells: 2,
@@ -143,6 +136,7 @@ describe('panel versions', () => {
     });
     await fixture.whenStable();
     expect(words(page)).toContain('2 cells changed and 1 row added.');
+    expect(words(page)).toContain('Capex: the column “inv” is called “capex_eur” in v3.');
     const cells = () =>
       [...page.querySelectorAll('kv-version-differences tbody tr')].map((row) =>
         [...row.querySelectorAll('th, td')].map((cell) => cell.textContent.trim()),
@@ -191,11 +185,11 @@ describe('panel versions', () => {
     await go.click();
     const request = http.expectOne(url);
     expect(request.request.body).toEqual({ note: 'v2 was wrong' });
-    request.flush({ ...first, id: id(6), number: 4, origin: 'restore' });
+    request.flush({ ...first, id: exampleId(6), number: 4, origin: 'restore' });
     await fixture.whenStable();
     while (document.querySelector('kv-restore-dialog') !== null)
       await new Promise((resolve) => setTimeout(resolve, 5));
-    expect(made).toEqual([id(6)]);
+    expect(made).toEqual([exampleId(6)]);
   });
 
   it('lets nobody but an analyst put a version back', async () => {

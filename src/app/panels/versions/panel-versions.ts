@@ -11,7 +11,7 @@ import {
 import { MatButton } from '@angular/material/button';
 import { MatCheckbox } from '@angular/material/checkbox';
 import { RouterLink } from '@angular/router';
-import type { PanelColumn, PanelVersionSummary } from '@contract';
+import type { PanelVersionSummary } from '@contract';
 import { PanelsApi } from '../../api/panels-api';
 import { NumberFormat } from '../../ui/number-format';
 import { yearSpan } from '../panel-finding';
@@ -61,8 +61,6 @@ export class PanelVersions {
   readonly versions = input.required<readonly PanelVersionSummary[]>();
   /** The version that the page shows. */
   readonly shownId = input.required<string>();
-  /** Its columns. */
-  readonly columns = input.required<readonly PanelColumn[]>();
   readonly mayChange = input(false);
 
   /** Id of the version that holds what an older one held. */

@@ -13,12 +13,12 @@ import {
   viewChild,
 } from '@angular/core';
 import type { CellDifference, PanelColumn, PanelVersionSummary } from '@contract';
-import { unitText } from '@figures';
 import { NumberFormat } from '../../ui/number-format';
 import { counted, listed } from '../../ui/phrases';
 import { ProblemNotice } from '../../ui/problem-notice';
 import { columnTitle, kindOf } from '../panel-rows';
 import { DifferencesStore } from './differences-store';
+import { moneyWords, versionChanges } from './change-lines';
 
 const moreRoom = 200;
 
@@ -73,8 +73,6 @@ export class VersionDifferences {
 
   readonly older = input.required<PanelVersionSummary>();
   readonly newer = input.required<PanelVersionSummary>();
-  /** Of the version that the page shows: what its columns are to the model. */
-  readonly columns = input.required<readonly PanelColumn[]>();
 
   readonly closed = output();
 
@@ -96,7 +94,8 @@ export class VersionDifferences {
       ...(found.addedRows === 0 ? [] : [`${counted(found.addedRows, 'row')} added`]),
       ...(found.removedRows === 0 ? [] : [`${counted(found.removedRows, 'row')} removed`]),
     ];
-    return words.length === 0 ? 'The two hold the same.' : `${listed(words)}.`;
+    if (words.length > 0) return `${listed(words)}.`;
+    return this.changes().length === 0 ? 'The two hold the same.' : 'No figure changed.';
   });
   protected readonly companies = computed(() => {
     const names = new Set(this.#found()?.listed.map(({ company }) => company));
@@ -115,19 +114,21 @@ export class VersionDifferences {
     if (found === null) return 0;
     return found.changedCells + found.addedRows + found.removedRows - found.listed.length;
   });
-  /** Versions in one unit follow the unit switch; of others each figure stays as it is saved. */
-  readonly #isOneUnit = computed(() =>
-    [this.older(), this.newer()].every(
-      ({ unit, currency }) =>
-        unit === this.#numbers.panelUnit() && currency === this.#numbers.currency(),
-    ),
-  );
+  /** What changed that is no figure, a line each. */
+  protected readonly changes = computed(() => {
+    const found = this.#found();
+    return found === null ? [] : versionChanges(this.older(), this.newer(), found);
+  });
+  /** Money in the unit of the page follows the unit switch; any other stays as it is saved. */
+  readonly #isOfPage = computed(() => {
+    const money = this.#found()?.money;
+    return money?.unit === this.#numbers.panelUnit() && money.currency === this.#numbers.currency();
+  });
   protected readonly unitWords = computed(() => {
-    const [older, newer] = [this.older(), this.newer()];
-    if (this.#isOneUnit()) return `Money in ${this.#numbers.unitLabel()}, every digit`;
-    const unitOf = ({ number, currency, unit }: PanelVersionSummary): string =>
-      `v${number} in ${unitText(currency, unit)}`;
-    return `As saved: ${unitOf(older)}, ${unitOf(newer)}`;
+    const money = this.#found()?.money ?? null;
+    return this.#isOfPage()
+      ? `Money in ${this.#numbers.unitLabel()}, every digit`
+      : moneyWords(this.older(), this.newer(), money);
   });
 
   constructor() {
@@ -160,11 +161,11 @@ export class VersionDifferences {
 
   protected figure(value: number | null, column: string | null): string {
     const known = this.#columnOf(column);
-    const kind = known === undefined || !this.#isOneUnit() ? 'plain' : kindOf(known);
+    const kind = known === undefined || !this.#isOfPage() ? 'plain' : kindOf(known);
     return this.#numbers.full(value, kind);
   }
 
   #columnOf(name: string | null): PanelColumn | undefined {
-    return this.columns().find((column) => column.name === name);
+    return this.#found()?.columns.find((column) => column.name === name);
   }
 }

@@ -1,21 +1,20 @@
 import type { PanelVersionSummary } from '@contract';
 
-/** What made a version: `from a file`, `corrections of v2`, `an older version put back`. */
+/** What made a version, and who: `from a file by Ilvo Brenn`, `version 1 put back by Mira Oduya, after v2`. */
 export function originWords(
   version: PanelVersionSummary,
   versions: readonly PanelVersionSummary[],
 ): string {
   const parent = versions.find(({ id }) => id === version.parentId);
-  const before = parent === undefined ? '' : ` v${parent.number}`;
+  const by = `by ${version.createdBy}`;
+  const after = parent === undefined ? '' : `, after v${parent.number}`;
   switch (version.origin) {
     case 'import':
-      return parent === undefined ? 'from a file' : `from a file, after${before}`;
+      return `from a file ${by}${after}`;
     case 'correction':
-      return parent === undefined ? 'corrections' : `corrections of${before}`;
+      return parent === undefined ? `corrections ${by}` : `corrections of v${parent.number} ${by}`;
     case 'restore':
-      return parent === undefined
-        ? 'an older version put back'
-        : `an older version put back, after${before}`;
+      return `version ${version.restoredNumber} put back ${by}${after}`;
   }
 }
 

@@ -2,33 +2,14 @@ import { provideHttpClient } from '@angular/common/http';
 import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
 import { TestBed } from '@angular/core/testing';
 import { provideRouter } from '@angular/router';
-import type { PanelVersionSummary } from '@contract';
+import { panelVersion } from '../../api/testing/panel-version';
 import { NumberFormat } from '../../ui/number-format';
 import { CandidatesStore } from '../candidates/candidates-store';
 import { NearnessStore } from '../nearness/nearness-store';
 import type { PanelCompany } from '../peer-draft';
 import { PeersStore } from '../peers-store';
 
-const id = (last: number): string => `0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a00${10 + last}`;
-
-export const flowControl: PanelVersionSummary = {
-  id: id(1),
-  panelId: id(0),
-  parentId: null,
-  origin: 'import',
-  panelName: 'Flow control',
-  number: 1,
-  currency: 'EUR',
-  unit: 'millions',
-  note: '',
-  companies: 3,
-  rows: 33,
-  firstYear: 2010,
-  lastYear: 2020,
-  createdAt: '2026-03-04T12:00:00.000Z',
-  createdBy: 'Ilvo Brenn',
-  file: { id: id(2), name: 'flow.csv', byteSize: 900, sha256: 'ab'.repeat(32) },
-};
+export const flowControl = panelVersion();
 
 /** The stores of the page as they stand once a first choice has loaded: everybody but `outside` is in. */
 export async function loadedPeers(

@@ -13,6 +13,9 @@ function difference(company: string, kind: CellDifference['kind'], year = 2019):
 }
 
 const reply: PanelDifferencesReply = {
+  columns: [{ name: 'capex', role: 'capex' }],
+  renamed: [],
+  money: { currency: 'EUR', unit: 'millions' },
   addedRows: 1,
   removedRows: 1,
   changedCells: 3,

@@ -1,27 +1,18 @@
 import type { DeskReply, FitReply, FitSummary, Role, SessionReply } from '@contract';
+import { panelVersion } from '../../api/testing/panel-version';
 import { planBasis } from '../../ui/plan/testing/plan-basis';
 
 const uuid = (last: number) => `00000000-0000-4000-8000-00000000000${last}`;
 export const fitId = uuid(1);
 
-const panelVersion: FitReply['panelVersion'] = {
+const pumps = panelVersion({
   id: uuid(2),
-  panelId: uuid(3),
-  parentId: null,
-  origin: 'import',
   panelName: 'Pumps',
   number: 4,
-  currency: 'EUR',
-  unit: 'millions',
-  note: '',
-  companies: 3,
   rows: 36,
   firstYear: 2014,
   lastYear: 2025,
-  createdAt: '2026-11-10T09:00:00.000Z',
-  createdBy: 'M. Oduya',
-  file: { id: uuid(4), name: 'pumps.csv', byteSize: 1200, sha256: 'f'.repeat(64) },
-};
+});
 
 const peerGroup: FitReply['peerGroup'] = {
   id: uuid(5),
@@ -61,7 +52,7 @@ export const fitReply: FitReply = {
   fit,
   progress: null,
   failure: null,
-  panelVersion,
+  panelVersion: pumps,
   newerPanelVersion: null,
   peerGroup,
   result: {
@@ -113,7 +104,7 @@ export const fitReply: FitReply = {
   },
 };
 
-export const deskReply: DeskReply = { panelVersion, peerGroup, fit, editionsWaiting: 0 };
+export const deskReply: DeskReply = { panelVersion: pumps, peerGroup, fit, editionsWaiting: 0 };
 
 export function sessionOf(role: Role): SessionReply {
   return {

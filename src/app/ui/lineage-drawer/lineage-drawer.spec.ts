@@ -47,6 +47,19 @@ describe('LineageDrawer', () => {
     ]);
   });
 
+  it('says which version was put back where that made the panel’s', async () => {
+    const words = (host: HTMLElement) => host.textContent.replace(/\s+/g, ' ');
+    expect(words(await show(standingLineage))).toContain('Cold chain v4, EUR m, M. Oduya');
+    const panelVersion = {
+      ...standingLineage.panelVersion,
+      origin: 'restore' as const,
+      restoredNumber: 3,
+    };
+    expect(words(await show({ ...standingLineage, panelVersion }))).toContain(
+      'Cold chain v4, EUR m, version 3 put back by M. Oduya on 12 Nov 2026',
+    );
+  });
+
   it('gives no link to a panel that the person may not open', async () => {
     fixture.componentRef.setInput('mayOpenPanel', false);
     const host = await show(standingLineage);

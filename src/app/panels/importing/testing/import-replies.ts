@@ -1,33 +1,10 @@
-import {
-  type ImportCheck,
-  type ImportReply,
-  type PanelVersionSummary,
-  plainReading,
-} from '@contract';
+import { type ImportCheck, type ImportReply, plainReading } from '@contract';
+import { exampleId, panelVersion } from '../../../api/testing/panel-version';
 
 /** The replies of an import that the specs of these screens begin with. */
-export function uuid(last: number): string {
-  return `0b8b8f4e-0d43-4f2c-9a43-1d3b0f5a00${10 + last}`;
-}
+export const uuid = exampleId;
 
-export const flowVersion: PanelVersionSummary = {
-  id: uuid(1),
-  panelId: uuid(2),
-  parentId: null,
-  origin: 'import',
-  panelName: 'Flow control',
-  number: 1,
-  currency: 'EUR',
-  unit: 'millions',
-  note: '',
-  companies: 3,
-  rows: 33,
-  firstYear: 2010,
-  lastYear: 2020,
-  createdAt: '2026-03-04T12:00:00.000Z',
-  createdBy: 'Ilvo Brenn',
-  file: { id: uuid(3), name: 'flow.csv', byteSize: 900, sha256: 'ab'.repeat(32) },
-};
+export const flowVersion = panelVersion();
 
 export const flowDraft: ImportReply = {
   id: uuid(4),

@@ -1,4 +1,5 @@
 import type { LineageReply } from '@contract';
+import { panelVersion } from '../../../api/testing/panel-version';
 
 const at = '2026-11-12T09:30:00.000Z';
 
@@ -33,16 +34,10 @@ export const standingLineage: LineageReply = {
     createdAt: at,
     createdBy: 'M. Oduya',
   },
-  panelVersion: {
+  panelVersion: panelVersion({
     id: '0198a1f0-0000-7000-8000-000000000003',
-    panelId: '0198a1f0-0000-7000-8000-000000000004',
-    parentId: null,
-    origin: 'import',
     panelName: 'Cold chain',
     number: 4,
-    currency: 'EUR',
-    unit: 'millions',
-    note: '',
     companies: 14,
     rows: 243,
     firstYear: 2008,
@@ -55,7 +50,7 @@ export const standingLineage: LineageReply = {
       byteSize: 9120,
       sha256: 'b81d20c04e5f60718293a4b5c6d7e8f90a1b2c3d4e5f60718293a4b5c6d7e8f9',
     },
-  },
+  }),
   cells: {
     columns: [
       { name: 'mkt_value', role: 'marketValue' },
