@@ -4,8 +4,9 @@ import type { ShownGrid } from './copy-cells';
 import { shiftOf, shifted } from './shown-figure';
 
 /**
- * The cells whose company, year or value holds the text, row by row. A value is looked at in the unit that is shown,
- * with every digit and as its column rounds it; what stands between thousands is passed over.
+ * The cells whose company, year or value holds the text, row by row; where it holds a company and a year, as
+ * `arvo 2021` does, the companies of the rows with both. A value is looked at in the unit that is shown, with every
+ * digit and as its column rounds it; what stands between thousands is passed over.
  *
  * @param digits  digits after the point by column of the panel.
  */
@@ -17,12 +18,16 @@ export function findCells(
   const wanted = text.trim().toLowerCase();
   if (wanted === '') return [];
   const number = numberIn(wanted);
+  const pair = companyAndYear(wanted);
   const shifts = grid.columns.map((column) => shiftOf(column, grid.factor));
   const found: GridPlace[] = [];
   for (let at = 0; at < grid.rowCount; at++) {
     const row = grid.rowAt(at);
     if (row === undefined) continue;
-    if (row.company.toLowerCase().includes(wanted)) found.push({ row: at, column: 0 });
+    const company = row.company.toLowerCase();
+    const hasBoth =
+      pair !== undefined && company.includes(pair.company) && String(row.year).includes(pair.year);
+    if (hasBoth || company.includes(wanted)) found.push({ row: at, column: 0 });
     if (String(row.year).includes(wanted)) found.push({ row: at, column: 1 });
     if (number === undefined) continue;
     row.values.forEach((value, column) => {
@@ -33,6 +38,21 @@ export function findCells(
     });
   }
   return found;
+}
+
+/** `arvo 2021`, `2021 arvo` or `arvo FY2021`: a part of a company's name and one of a year. */
+function companyAndYear(
+  text: string,
+): { readonly company: string; readonly year: string } | undefined {
+  const words = text.split(/\s+/);
+  for (const [word, others] of [
+    [words[words.length - 1], words.slice(0, -1)],
+    [words[0], words.slice(1)],
+  ] as const) {
+    const year = /^(?:fy)?(\d{1,4})$/.exec(word)?.[1];
+    if (year !== undefined && others.length > 0) return { company: others.join(' '), year };
+  }
+  return undefined;
 }
 
 /** The text as a part of a number, where it is one. */
