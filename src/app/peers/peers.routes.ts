@@ -14,6 +14,11 @@ const mayLeave: CanDeactivateFn<PeersPage> = (page) => page.mayLeave();
 /** Pages under /peers. */
 export const routes: Routes = [
   {
+    path: 'compare',
+    title: 'Two versions of the peers',
+    loadComponent: async () => (await import('./compare/compare-page')).PeerComparePage,
+  },
+  {
     matcher: versionOrNewest,
     title: 'Peers',
     canDeactivate: [mayLeave],

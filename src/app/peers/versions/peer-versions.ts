@@ -19,6 +19,9 @@ import type { PanelVersionSummary, PeerGroupSummary } from '@contract';
             <th scope="col">Note</th>
             <th scope="col">Saved by</th>
             <th scope="col">Saved on</th>
+            @if (rows().length > 1) {
+              <th scope="col"><span class="kv-visually-hidden">Compare</span></th>
+            }
           </tr>
         </thead>
         <tbody>
@@ -39,7 +42,21 @@ import type { PanelVersionSummary, PeerGroupSummary } from '@contract';
               <td>{{ version.panel }}</td>
               <td class="note">{{ version.note || '–' }}</td>
               <td>{{ version.createdBy }}</td>
-              <td>{{ version.createdAt | date: 'd MMM y, HH:mm' }}</td>
+              <td class="whole">{{ version.createdAt | date: 'd MMM y, HH:mm' }}</td>
+              @if (rows().length > 1) {
+                <td class="whole">
+                  @if (version.beside; as beside) {
+                    <a
+                      routerLink="/peers/compare"
+                      [queryParams]="{ a: beside.a.id, b: beside.b.id }"
+                      [attr.aria-label]="
+                        'Version ' + beside.a.number + ' beside version ' + beside.b.number
+                      "
+                      >Beside version {{ beside.other.number }}</a
+                    >
+                  }
+                </td>
+              }
             </tr>
           }
         </tbody>
@@ -49,6 +66,9 @@ import type { PanelVersionSummary, PeerGroupSummary } from '@contract';
   styles: `
     .note {
       min-inline-size: 160px;
+    }
+    .whole {
+      white-space: nowrap;
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -60,12 +80,21 @@ export class PeerVersions {
 
   protected readonly rows = computed(() => {
     const panels = new Map(this.panelVersions().map((panel) => [panel.id, panel]));
-    return this.versions().map((version) => {
+    const shown = this.versions().find(({ id }) => id === this.shownId()) ?? this.versions()[0];
+    return this.versions().map((version, place, all) => {
       const panel = panels.get(version.panelVersionId);
       return {
         ...version,
+        beside: pairOf(version, version === shown ? all[place + 1] : shown),
         panel: panel === undefined ? 'n/a' : `${panel.panelName} v${panel.number}`,
       };
     });
   });
+}
+
+/** The older one of the two first; null where there is no other. */
+function pairOf(version: PeerGroupSummary, other: PeerGroupSummary | undefined) {
+  if (other === undefined) return null;
+  const [a, b] = version.number < other.number ? [version, other] : [other, version];
+  return { a, b, other };
 }
