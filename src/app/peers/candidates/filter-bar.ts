@@ -2,15 +2,15 @@ import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/c
 import { MatFormFieldModule } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { MatSelectModule } from '@angular/material/select';
-import { readNumber } from '../../ui/number-entry';
 import { NumberFormat } from '../../ui/number-format';
 import { isNarrowed, unknownValue } from './candidate-filters';
 import { CandidatesStore } from './candidates-store';
+import { FigureFilter } from './figure-filter';
 
 /** Narrows the candidates by name, imported attributes, size and years covered. */
 @Component({
   selector: 'kv-filter-bar',
-  imports: [MatFormFieldModule, MatInput, MatSelectModule],
+  imports: [FigureFilter, MatFormFieldModule, MatInput, MatSelectModule],
   templateUrl: './filter-bar.html',
   styleUrl: './filter-bar.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -22,6 +22,7 @@ export class FilterBar {
   protected readonly unit = this.#numbers.unitLabel;
   protected readonly sizeFrom = computed(() => this.#shown(this.store.filters().sizeFrom));
   protected readonly sizeTo = computed(() => this.#shown(this.store.filters().sizeTo));
+  protected readonly years = computed(() => String(this.store.filters().years ?? ''));
   protected readonly isNarrowed = computed(
     () => isNarrowed(this.store.filters()) || this.store.filters().name !== '',
   );
@@ -44,18 +45,12 @@ export class FilterBar {
     return value === unknownValue ? 'not known' : value;
   }
 
-  protected setSize(bound: 'sizeFrom' | 'sizeTo', box: HTMLInputElement): void {
-    const shown = readNumber(box.value);
-    if (shown === undefined && box.value.trim() !== '') {
-      box.value = this.#shown(this.store.filters()[bound]);
-      return;
-    }
-    this.store.filter({ [bound]: shown === undefined ? null : this.#numbers.toPanelUnit(shown) });
+  protected setSize(bound: 'sizeFrom' | 'sizeTo', shown: number | null): void {
+    this.store.filter({ [bound]: shown === null ? null : this.#numbers.toPanelUnit(shown) });
   }
 
-  protected setYears(text: string): void {
-    const years = readNumber(text);
-    this.store.filter({ years: years === undefined || years < 1 ? null : Math.ceil(years) });
+  protected setYears(years: number | null): void {
+    this.store.filter({ years: years === null || years < 1 ? null : Math.ceil(years) });
   }
 
   /** Without thousands separators and to twelve digits, so that the unit's factor leaves no trace. */
