@@ -9,7 +9,7 @@ import {
   input,
   signal,
   untracked,
-  viewChildren,
+  viewChild,
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { Router, RouterLink } from '@angular/router';
@@ -25,6 +25,7 @@ import { ProblemNotice } from '../ui/problem-notice';
 import { noFilters } from './candidates/candidate-filters';
 import { CandidatesStore } from './candidates/candidates-store';
 import { FilterBar } from './candidates/filter-bar';
+import { GroupRemarks } from './guidance/group-remarks';
 import { NearnessBar } from './nearness/nearness-bar';
 import { NearnessStore } from './nearness/nearness-store';
 import { writtenCount } from './peer-draft';
@@ -35,7 +36,7 @@ import { PeersStore } from './peers-store';
 import { PlaneSection } from './plane/plane-section';
 import { AskReason } from './reasons/ask-reason';
 import { MissingReasons } from './reasons/missing-reasons';
-import { PeerTable } from './table/peer-table';
+import { PeerSides } from './sides/peer-sides';
 import { TrialSection } from './trials/trial-section';
 import { PanelChanges } from './versions/panel-changes';
 import { PeerVersions } from './versions/peer-versions';
@@ -46,6 +47,7 @@ import { PeerVersions } from './versions/peer-versions';
   imports: [
     EmptyState,
     FilterBar,
+    GroupRemarks,
     Mark,
     MatButton,
     MissingReasons,
@@ -53,7 +55,7 @@ import { PeerVersions } from './versions/peer-versions';
     PageHeader,
     PanelChanges,
     PeerGround,
-    PeerTable,
+    PeerSides,
     PeerVersions,
     PlaneSection,
     ProblemNotice,
@@ -82,11 +84,10 @@ export class PeersPage {
   /** The company whose reason is asked for, from the address. */
   readonly company = input<string>();
 
-  private readonly tables = viewChildren(PeerTable);
+  private readonly sides = viewChild(PeerSides);
 
   protected readonly note = signal('');
   protected readonly hasAllParts = signal(false);
-  protected readonly hasAllCandidates = signal(false);
   protected readonly isReadOnly = computed(
     () => !mayCall(apiRoutes.savePeerGroup, this.#session.roles()),
   );
@@ -96,25 +97,10 @@ export class PeersPage {
     const listed = {
       members: this.candidates.members(),
       candidates: this.candidates.candidates(),
-      hasAllCandidates: this.hasAllCandidates(),
+      hasAllCandidates: this.candidates.hasAll(),
     };
     return peersShown(view.ground, view.draft, listed, this.nearness.nearness());
   });
-  /** Measures of the model whose values are worth seeing although they do not count. */
-  protected readonly otherMeasures = computed(() => {
-    const counting = this.nearness.nearness().measures;
-    return this.nearness
-      .measures()
-      .filter((measure) => measure.isOfModel && !counting.includes(measure));
-  });
-  protected readonly shownCandidates = computed(() =>
-    this.candidates.candidates().map(({ name }) => name),
-  );
-  protected readonly silentMembers = computed(() =>
-    (this.shown()?.inside ?? [])
-      .filter(({ reason }) => reason.trim() === '')
-      .map(({ company }) => company.name),
-  );
   /** The panel version that the saved peers stand on, and the newest of the same panel, where they differ. */
   protected readonly panelsApart = computed(() => {
     const view = this.store.view();
@@ -172,12 +158,12 @@ export class PeersPage {
   }
 
   protected focusReason(company: string): void {
-    for (const table of this.tables()) table.focusReason(company);
+    this.sides()?.focusReason(company);
   }
 
   /** Brings a company's reason into view; where it is filtered away or the lists stop short of it, its name is asked for. */
   protected lookAt(company: string): void {
-    if (!this.#isListed(company)) this.hasAllCandidates.set(true);
+    if (!this.#isListed(company)) this.candidates.listAll();
     const isKnown = this.store.companies().some(({ name }) => name === company);
     if (!this.#isListed(company) && isKnown && company !== this.store.ownCompany())
       this.candidates.filter({ ...noFilters, name: company });
@@ -187,10 +173,6 @@ export class PeersPage {
   #isListed(company: string): boolean {
     const { inside, outside } = this.shown() ?? { inside: [], outside: [] };
     return [...inside, ...outside].some((row) => row.company.name === company);
-  }
-
-  protected orderMembers(by: string): void {
-    this.candidates.orderMembers(by === 'name' ? 'name' : 'nearness');
   }
 
   /** Puts several companies on one side once a reason for all of them is written. */

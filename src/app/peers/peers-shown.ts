@@ -33,6 +33,8 @@ export interface PeersShown {
   /** Companies without a written reason. */
   readonly missing: readonly string[];
   readonly own: PanelCompany | undefined;
+  /** Everybody who is in, listed or not. */
+  readonly members: readonly PanelCompany[];
 }
 
 /** What the page shows of a choice of peers. */
@@ -59,7 +61,8 @@ export function peersShown(
     ...(without === null ? {} : { standingWithout: without.byCompany.get(company.name) ?? null }),
   });
   const candidatesShown = listed.hasAllCandidates ? mostShown : nearestShown;
-  const inCount = others.filter(isInside).length;
+  const members = others.filter(isInside);
+  const inCount = members.length;
   const outCount = others.length - inCount;
   const panel = panelVersions.find(({ id }) => id === draft.panelVersionId);
   return {
@@ -76,9 +79,10 @@ export function peersShown(
       Math.max(0, listed.members.length - mostShown) +
       Math.max(0, listed.candidates.length - mostShown),
     onRequest: Math.max(0, Math.min(listed.candidates.length, mostShown) - candidatesShown),
-    missing: [...others.filter(isInside), ...others.filter((company) => !isInside(company))]
+    missing: [...members, ...others.filter((company) => !isInside(company))]
       .filter((company) => reason(company).trim() === '')
       .map(({ name }) => name),
     own,
+    members,
   };
 }

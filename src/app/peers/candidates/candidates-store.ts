@@ -25,6 +25,7 @@ export class CandidatesStore {
   readonly #route = inject(ActivatedRoute);
   readonly #filters = signal<CandidateFilters>(noFilters);
   readonly #memberOrder = signal<MemberOrder>('nearness');
+  readonly #hasAll = signal(false);
 
   readonly #sides = computed(() => {
     const view = this.#peers.view();
@@ -40,6 +41,8 @@ export class CandidatesStore {
 
   readonly filters = this.#filters.asReadonly();
   readonly memberOrder = this.#memberOrder.asReadonly();
+  /** Whether more than the nearest candidates are listed. */
+  readonly hasAll = this.#hasAll.asReadonly();
   /** The attributes of the candidates, with counts. */
   readonly facets = computed(() => attributeFacets(this.#sides().outside));
   /** Members whose name is asked for, in the order chosen. */
@@ -63,6 +66,10 @@ export class CandidatesStore {
     this.#route.queryParamMap.pipe(takeUntilDestroyed()).subscribe((address) => {
       this.#filters.set(filtersFrom(address));
     });
+  }
+
+  listAll(): void {
+    this.#hasAll.set(true);
   }
 
   orderMembers(by: MemberOrder): void {
