@@ -92,7 +92,7 @@ async function lockPanel(
 
 function overtaken(newest: PanelVersionRow): Conflict {
   return new Conflict(
-    `${newest.createdByName} made version ${newest.number} of this panel meanwhile. Open it and make the corrections there.`,
+    `${newest.createdByName} made version ${newest.number} of this panel meanwhile.`,
     'stale-version',
     { latestId: newest.id },
   );
