@@ -1,4 +1,12 @@
-import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  type ElementRef,
+  computed,
+  inject,
+  signal,
+  viewChild,
+} from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import {
   MAT_DIALOG_DATA,
@@ -10,6 +18,8 @@ import {
 } from '@angular/material/dialog';
 import { MatFormField, MatLabel } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
+import { similarNames } from '@panel-data';
+import { listed } from '../../ui/phrases';
 import type { RowPlace } from './panel-edits';
 
 export interface AddRowQuestion {
@@ -19,7 +29,9 @@ export interface AddRowQuestion {
   readonly hasRow: (row: RowPlace) => boolean;
 }
 
-/** Asks which company and year a new row is for; closes with them. */
+const mostNames = 3;
+
+/** Asks which company and year a new row is for, and whether a new name is one of the panel's; closes with them. */
 @Component({
   selector: 'kv-add-row-dialog',
   imports: [
@@ -68,11 +80,20 @@ export interface AddRowQuestion {
             (input)="year.set(yearBox.value)"
           />
         </mat-form-field>
-        <p role="status">{{ isAsked() ? complaint() : '' }}</p>
+        <p role="status">{{ isAsked() ? complaint() || warning() : '' }}</p>
+        @if (isAsked() && complaint() === '') {
+          @for (name of similar(); track name) {
+            <button matButton type="button" class="use" (click)="use(name)">
+              Use “{{ name }}”
+            </button>
+          }
+        }
       </mat-dialog-content>
       <mat-dialog-actions align="end">
         <button matButton type="button" [mat-dialog-close]="undefined">Cancel</button>
-        <button matButton="filled" type="submit">Add row</button>
+        <button matButton="filled" type="submit">
+          {{ isWarned() ? 'Add as a company of its own' : 'Add row' }}
+        </button>
       </mat-dialog-actions>
     </form>
   `,
@@ -85,6 +106,10 @@ export interface AddRowQuestion {
     }
     p {
       min-block-size: 20px;
+      overflow-wrap: anywhere;
+    }
+    .use {
+      justify-self: start;
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -93,9 +118,13 @@ export class AddRowDialog {
   readonly #dialog = inject<MatDialogRef<AddRowDialog, RowPlace>>(MatDialogRef);
   protected readonly question = inject<AddRowQuestion>(MAT_DIALOG_DATA);
 
+  private readonly yearBox = viewChild.required<ElementRef<HTMLInputElement>>('yearBox');
+
   protected readonly company = signal(this.question.company);
   protected readonly year = signal('');
   protected readonly isAsked = signal(false);
+  /** The name of which the person was told that it is like another one. */
+  readonly #warnedOf = signal('');
   readonly #row = computed((): RowPlace => ({
     company: this.company().trim(),
     year: Number(this.year().trim()),
@@ -109,8 +138,36 @@ export class AddRowDialog {
       : '';
   });
 
+  /** Companies of the panel that a name which it does not have may mean, a few at most. */
+  protected readonly similar = computed(() => {
+    const { companies } = this.question;
+    const { company } = this.#row();
+    if (!this.isAsked() || company === '' || companies.includes(company)) return [];
+    return similarNames(company, companies).slice(0, mostNames);
+  });
+  protected readonly isWarned = computed(
+    () => this.similar().length > 0 && this.#warnedOf() === this.#row().company,
+  );
+  protected readonly warning = computed(() => {
+    if (this.similar().length === 0) return '';
+    const names = listed(
+      this.similar().map((name) => `“${name}”`),
+      'or',
+    );
+    return `The panel has no company “${this.#row().company}”. Is it ${names}?`;
+  });
+
   protected add(): void {
     this.isAsked.set(true);
-    if (this.complaint() === '') this.#dialog.close(this.#row());
+    if (this.complaint() !== '') return;
+    if (this.similar().length === 0 || this.isWarned()) this.#dialog.close(this.#row());
+    else this.#warnedOf.set(this.#row().company);
+  }
+
+  /** The row is for a company that the panel has. */
+  protected use(company: string): void {
+    this.company.set(company);
+    this.add();
+    if (this.complaint() !== '') this.yearBox().nativeElement.focus();
   }
 }
