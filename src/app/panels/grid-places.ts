@@ -17,3 +17,14 @@ export function figureAt(position: number, columns: readonly PanelColumn[]): num
   const figure = position - leadingColumns;
   return figure >= 0 && figure < columns.length ? figure : undefined;
 }
+
+/** Of the same names and roles in the same order. */
+export function areSameColumns(
+  left: readonly PanelColumn[],
+  right: readonly PanelColumn[],
+): boolean {
+  return (
+    left.length === right.length &&
+    left.every(({ name, role }, at) => name === right[at].name && role === right[at].role)
+  );
+}

@@ -1,6 +1,8 @@
 import {
+  type CellPosition,
   CellStyleModule,
   ClientSideRowModelModule,
+  type ColDef,
   CustomEditorModule,
   type Module,
   NumberFilterModule,
@@ -8,9 +10,11 @@ import {
   RowApiModule,
   RowStyleModule,
   ScrollApiModule,
+  type TabToNextCellParams,
   TextFilterModule,
   themeQuartz,
 } from 'ag-grid-community';
+import type { PanelRow } from './panel-rows';
 
 /** What the panel's grid uses, and no more: the rest of the grid's code is not loaded. */
 export const gridModules: readonly Module[] = [
@@ -27,6 +31,27 @@ export const gridModules: readonly Module[] = [
 
 export const gridRowHeight = 32;
 export const gridHeadHeight = 40;
+
+export const gridOverlays = {
+  noRows: { overlayText: 'No row fits what is chosen above' },
+  noMatchingRows: { overlayText: 'No row fits the filters' },
+};
+
+/** What all columns share. */
+export const gridColumn: ColDef<PanelRow> = {
+  sortable: true,
+  resizable: true,
+  flex: 1,
+  minWidth: 128,
+};
+
+/** Tab leaves the grid, as in any grid of the page; while a cell is edited it goes on to the next one. */
+export function tabToNextCell({
+  editing,
+  nextCellPosition,
+}: TabToNextCellParams<PanelRow>): CellPosition | boolean {
+  return editing ? (nextCellPosition ?? true) : false;
+}
 
 /** The grid on our paper: every colour is a token, so that light and dark follow by themselves. */
 export const gridTheme = themeQuartz.withParams({

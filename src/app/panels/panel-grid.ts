@@ -16,36 +16,31 @@ import {
 } from '@angular/core';
 import type { PanelColumn } from '@contract';
 import { AgGridAngular } from 'ag-grid-angular';
-import type {
-  CellEditRequestEvent,
-  CellPosition,
-  ColDef,
-  GridApi,
-  RowClassRules,
-  TabToNextCellParams,
-} from 'ag-grid-community';
+import type { GridApi, RowClassRules } from 'ag-grid-community';
 import { NumberFormat } from '../ui/number-format';
 import type { ShownProblem } from '../ui/problem';
-import { blockCommand } from './editing/block-keys';
 import { followPointer } from './editing/block-pointer';
 import { type GridPlace, rangeOf } from './editing/cell-block';
-import { type ShownGrid, copiedText } from './editing/copy-cells';
-import { changedRows } from './editing/changed-rows';
+import { CellInput } from './editing/cell-input';
+import type { ShownGrid } from './editing/copy-cells';
+import { type GivenRows, givenRows } from './editing/given-rows';
 import { GridBlock } from './editing/grid-block';
-import {
-  type GivenCells,
-  type GridSelection,
-  emptiedCells,
-  rowsIn,
-  selectionOf,
-  sizeWords,
-} from './editing/grid-selection';
+import { broughtUp, sparingFocus } from './editing/grid-focus';
+import { type GivenCells, type GridSelection, rowsIn, selectionOf } from './editing/grid-selection';
 import { type PanelEdits, cellKey, noEdits, rowKey } from './editing/panel-edits';
-import { pastedCells, typedFigure } from './editing/paste-cells';
 import { figureText, shiftOf } from './editing/shown-figure';
+import { tellSelection } from './editing/told-selection';
 import { gridColumns } from './grid-columns';
-import { figureAt, gridColumnIds, leadingColumns } from './grid-places';
-import { gridHeadHeight, gridModules, gridRowHeight, gridTheme } from './grid-settings';
+import { areSameColumns, gridColumnIds } from './grid-places';
+import {
+  gridColumn,
+  gridHeadHeight,
+  gridModules,
+  gridOverlays,
+  gridRowHeight,
+  gridTheme,
+  tabToNextCell,
+} from './grid-settings';
 import type { PanelRow } from './panel-rows';
 import { type RowFocus, isAsked } from './row-focus';
 
@@ -76,20 +71,21 @@ import { type RowFocus, isAsked } from './row-focus';
       (sortChanged)="block()?.collapse(); shownChanged.emit()"
       (rowDataUpdated)="tick.set(tick() + 1); shownChanged.emit()"
       (filterChanged)="block()?.collapse(); shownChanged.emit()"
-      (cellEditRequest)="take($event)"
+      (cellEditRequest)="input.take($event)"
     />
   `,
   styleUrl: './panel-grid.css',
   host: {
-    '(copy)': 'copy($event)',
-    '(cut)': 'cut($event)',
-    '(paste)': 'paste($event)',
+    '[class.touch-selects]': 'touchSelects()',
+    '(copy)': 'input.copy($event)',
+    '(cut)': 'input.cut($event)',
+    '(paste)': 'input.paste($event)',
   },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class PanelGrid {
   readonly #numbers = inject(NumberFormat);
-  readonly #host = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
+  readonly host = inject<ElementRef<HTMLElement>>(ElementRef).nativeElement;
 
   readonly rows = input.required<readonly PanelRow[]>();
   readonly columns = input.required<readonly PanelColumn[]>();
@@ -102,6 +98,8 @@ export class PanelGrid {
   readonly edits = input<PanelEdits>(noEdits);
   /** By cell key. */
   readonly flags = input<ReadonlyMap<string, unknown>>(new Map());
+  /** Whether a finger selects cells; else it scrolls. */
+  readonly touchSelects = input(false);
 
   readonly cellsGiven = output<GivenCells>();
   /** Something that was typed or pasted is not taken. */
@@ -114,34 +112,17 @@ export class PanelGrid {
   protected readonly modules = [...gridModules];
   protected readonly theme = gridTheme;
   protected readonly nonce = inject(CSP_NONCE, { optional: true }) ?? undefined;
-  protected readonly overlays = {
-    noRows: { overlayText: 'No row fits what is chosen above' },
-    noMatchingRows: { overlayText: 'No row fits the filters' },
-  };
-  protected readonly defaultColDef: ColDef<PanelRow> = {
-    sortable: true,
-    resizable: true,
-    flex: 1,
-    minWidth: 128,
-  };
+  protected readonly overlays = gridOverlays;
+  protected readonly defaultColDef = gridColumn;
   readonly #api = signal<GridApi<PanelRow> | null>(null);
   protected readonly block = signal<GridBlock | null>(null);
   protected readonly isRendered = signal(false);
   /** New each time that the grid has taken over rows. */
   protected readonly tick = signal(0);
-  /**
-   * What the grid was given, and the rows whose figures changed since: comparing 200,000 rows by their ids at each
-   * change of a cell would be felt. A row that changes keeps its place, also where the grid is sorted by it.
-   */
   readonly #given = linkedSignal<readonly PanelRow[], GivenRows>({
     source: this.rows,
-    computation: (rows, previous) => {
-      const isFirst = previous === undefined || untracked(this.#api) === null;
-      const changed = isFirst ? null : changedRows(previous.source, rows);
-      return changed === null
-        ? { rowData: [...rows], changed: [] }
-        : { rowData: previous?.value.rowData ?? [], changed };
-    },
+    computation: (rows, previous) =>
+      givenRows(rows, untracked(this.#api) === null ? undefined : previous),
   });
   protected readonly shownRows = computed(() => this.#given().rowData);
   /** As high as its rows, up to what leaves the page readable. */
@@ -158,12 +139,14 @@ export class PanelGrid {
       'kv-added-row': ({ data }) => data !== undefined && this.edits().added.has(rowKey(data)),
     };
   });
-  readonly #columnIds = computed(() => gridColumnIds(this.columns()));
+  /** The same object as long as the columns are the same: the grid keeps its own with their widths and sorting. */
+  readonly #columns = computed(() => this.columns(), { equal: areSameColumns });
+  readonly #columnIds = computed(() => gridColumnIds(this.#columns()));
   protected readonly columnDefs = computed(() => {
     // Cells are written after this has run: a change of the person's sign has to make new columns, as one of the unit does.
     this.#numbers.negatives();
     const factor = this.#numbers.factor();
-    const columns = this.columns();
+    const columns = this.#columns();
     return gridColumns({
       columns,
       digits: this.digits(),
@@ -184,21 +167,41 @@ export class PanelGrid {
   readonly #wanted = linkedSignal(() => this.focusedRow());
   /** The focus that was followed: a change of filters does not lead there again. */
   #followed: RowFocus | null = null;
+  /** The row of the block's head, and the rows among which it was seen there. */
+  #held: { readonly key: string; readonly rows: readonly PanelRow[] } | null = null;
+  protected readonly input = new CellInput({
+    block: () => this.block(),
+    columnIds: () => this.#columnIds(),
+    shown: () => this.shown(),
+    mayChange: () => this.mayChange(),
+    moneyUnit: () => this.#numbers.unitLabel(),
+    given: (cells) => {
+      this.cellsGiven.emit(cells);
+    },
+    refused: (problem) => {
+      this.refused.emit(problem);
+    },
+    copied: (words) => {
+      this.copied.emit(words);
+    },
+  });
 
   constructor() {
-    const stopFollowing = followPointer(
-      this.#host,
-      () => this.block(),
-      () => this.#columnIds(),
-    );
+    const stopFollowing = followPointer(this.host, {
+      block: () => this.block(),
+      columnIds: () => this.#columnIds(),
+      touchSelects: () => this.touchSelects(),
+    });
+    const stopTelling = tellSelection(this.host);
     // Before the grid, which has plans of its own for some of the keys.
     const readKey = (event: KeyboardEvent): void => {
-      this.#readKey(event);
+      this.input.readKey(event);
     };
-    this.#host.addEventListener('keydown', readKey, { capture: true });
+    this.host.addEventListener('keydown', readKey, { capture: true });
     inject(DestroyRef).onDestroy(() => {
       stopFollowing();
-      this.#host.removeEventListener('keydown', readKey, { capture: true });
+      stopTelling();
+      this.host.removeEventListener('keydown', readKey, { capture: true });
     });
     effect(() => {
       const { changed } = this.#given();
@@ -216,7 +219,10 @@ export class PanelGrid {
     afterRenderEffect({
       write: () => {
         this.rows();
-        this.selected.emit(selectionOf(this.block()?.block() ?? null, this.shown()));
+        this.#keepPlace();
+        const selection = selectionOf(this.block()?.block() ?? null, this.shown());
+        this.#held = selection && { key: rowKey(selection), rows: this.shownRows() };
+        this.selected.emit(selection);
       },
     });
     afterRenderEffect({
@@ -225,7 +231,11 @@ export class PanelGrid {
         this.rows();
         this.tick();
         if (focus === null || focus === this.#followed || !this.isRendered()) return;
-        if (this.#follow(focus)) this.#followed = focus;
+        const api = this.#api();
+        const place = api === null ? null : broughtUp(api, this.rows(), focus);
+        if (place === null) return;
+        this.goTo(place);
+        this.#followed = focus;
       },
     });
   }
@@ -256,118 +266,31 @@ export class PanelGrid {
     this.#wanted.set(focus);
   }
 
-  /** Puts the focus back to the cell that had it. */
+  /** Puts the focus back to the cell that had it, or to the first one. */
   focus(): void {
-    const head = this.block()?.block()?.head;
-    if (head !== undefined) this.goTo(head);
+    if (this.shown().rowCount > 0) this.goTo(this.block()?.block()?.head ?? { row: 0, column: 0 });
   }
 
+  protected readonly tabToNextCell = tabToNextCell;
   protected readonly rowId = ({ data }: { readonly data: PanelRow }): string => rowKey(data);
-
-  /** Tab leaves the grid, as in any grid of the page; while a cell is edited it goes on to the next one. */
-  protected readonly tabToNextCell = ({
-    editing,
-    nextCellPosition,
-  }: TabToNextCellParams<PanelRow>): CellPosition | boolean =>
-    editing ? (nextCellPosition ?? true) : false;
 
   protected begin(api: GridApi<PanelRow>): void {
     this.#api.set(api);
     this.block.set(new GridBlock(api, () => this.#columnIds()));
   }
 
-  protected take({ data, column, newValue }: CellEditRequestEvent<PanelRow, unknown>): void {
-    const figure = figureAt(this.#columnIds().indexOf(column.getColId()), this.columns());
-    if (figure === undefined || typeof newValue !== 'string') return;
-    const outcome = typedFigure(newValue, data, figure, this.shown());
-    if ('problem' in outcome) this.refused.emit(outcome.problem);
-    else
-      this.cellsGiven.emit({
-        changes: [outcome],
-        done: outcome.value === null ? 'emptied' : 'typed',
-      });
-  }
-
-  protected copy(event: ClipboardEvent): void {
-    const block = this.#isAtCell(event) ? this.block()?.block() : null;
-    if (block == null || event.clipboardData === null) return;
-    const range = rangeOf(block);
-    event.clipboardData.setData('text/plain', copiedText(range, this.shown()));
-    event.preventDefault();
-    const size = sizeWords(range);
-    this.copied.emit(`${size} copied at full precision, money in ${this.#numbers.unitLabel()}`);
-  }
-
-  protected cut(event: ClipboardEvent): void {
-    this.copy(event);
-    if (event.defaultPrevented) this.#empty('cut');
-  }
-
-  protected paste(event: ClipboardEvent): void {
-    const block = this.#isAtCell(event) ? this.block()?.block() : null;
-    const text = event.clipboardData?.getData('text/plain') ?? '';
-    if (block == null || text === '' || !this.mayChange()) return;
-    event.preventDefault();
-    const outcome = pastedCells(text, rangeOf(block), this.shown());
-    if (outcome.kind === 'refused') {
-      this.refused.emit(outcome.problem);
+  /** Other rows stand in the grid: the block stays with the row that it was in, where that is shown. */
+  #keepPlace(): void {
+    const [held, block] = [this.#held, this.block()];
+    const head = block?.block()?.head;
+    if (held === null || held.rows === this.shownRows() || block == null || head === undefined)
       return;
-    }
-    this.cellsGiven.emit({ changes: outcome.changes, done: 'pasted' });
-    this.block()?.select(outcome.range);
-  }
-
-  #empty(done: 'emptied' | 'cut'): void {
-    const block = this.block()?.block();
-    if (block == null || !this.mayChange()) return;
-    this.cellsGiven.emit({ changes: emptiedCells(rangeOf(block), this.shown()), done });
-  }
-
-  #readKey(event: KeyboardEvent): void {
-    const command = this.#isAtCell(event) ? blockCommand(event) : undefined;
-    const block = this.block();
-    if (command === undefined || block === null) return;
-    if (command.kind === 'collapse' && block.drawnRange === null) return;
-    event.preventDefault();
-    event.stopPropagation();
-    block.followFocus();
-    if (command.kind === 'draw') block.draw(command.direction, command.far);
-    else if (command.kind === 'collapse') block.collapse();
-    else if (command.kind === 'empty') this.#empty('emptied');
-    else if (this.columns().length > 0 && block.extent.rows > 0)
-      block.select({
-        firstRow: 0,
-        lastRow: block.extent.rows - 1,
-        firstColumn: leadingColumns,
-        lastColumn: leadingColumns + this.columns().length - 1,
+    const row = this.#api()?.getRowNode(held.key)?.rowIndex ?? null;
+    if (row !== null && row !== head.row)
+      sparingFocus(this.host, () => {
+        block.goTo({ row, column: head.column });
       });
   }
-
-  /** Not in the field of a cell that is being edited, nor in the header. */
-  #isAtCell({ target }: Event): boolean {
-    return target instanceof Element && target.matches('.ag-cell');
-  }
-
-  /** @returns whether the row is there. */
-  #follow(focus: RowFocus): boolean {
-    const api = this.#api();
-    const asked = this.rows().find((row) => isAsked(row, focus));
-    const node = asked === undefined ? undefined : api?.getRowNode(rowKey(asked));
-    if (api === null || node === undefined) return false;
-    // A filter of the grid may hide the row that is asked for: then the filters give way.
-    if (node.rowIndex === null) api.setFilterModel(null);
-    if (node.rowIndex === null) return false;
-    api.redrawRows();
-    api.ensureNodeVisible(node, 'middle');
-    const { column } = focus;
-    this.goTo({ row: node.rowIndex, column: column === undefined ? 0 : leadingColumns + column });
-    return true;
-  }
-}
-
-interface GivenRows {
-  readonly rowData: PanelRow[];
-  readonly changed: readonly PanelRow[];
 }
 
 /** Left free under the rows where the columns do not fit and scroll. */

@@ -1,26 +1,8 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
-import type { PanelColumn } from '@contract';
 import { NumberFormat } from '../../ui/number-format';
 import { columnTitle, kindOf } from '../panel-rows';
+import type { LookedAtCell } from './looked-at-cell';
 import { figureWords, shiftOf } from './shown-figure';
-
-/** A cell that is looked at. */
-export interface LookedAtCell {
-  readonly company: string;
-  readonly year: number;
-  /** Line of the file; 0 for a row that was added by hand. */
-  readonly fileRow: number;
-  /** Null at company, year and line. */
-  readonly figure: {
-    readonly column: PanelColumn;
-    readonly value: number | null;
-    /** What the version holds, where that is something else; undefined where nothing is changed. */
-    readonly before: number | null | undefined;
-  } | null;
-  readonly flags: readonly string[];
-  /** `3 × 4 cells`; empty for one cell. */
-  readonly size: string;
-}
 
 /** The cell that has the focus, in words: its value with every digit, and where it stands. */
 @Component({

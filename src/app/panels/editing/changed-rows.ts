@@ -1,6 +1,6 @@
 import type { PanelRow } from '../panel-rows';
 
-/** The rows with other figures than before; null where it is not the same companies and years in the same order. */
+/** The rows with other figures than before; null where not the same lines, companies and years stand in the same order. */
 export function changedRows(
   before: readonly PanelRow[],
   now: readonly PanelRow[],
@@ -10,8 +10,13 @@ export function changedRows(
   for (let at = 0; at < now.length; at++) {
     const [was, is] = [before[at], now[at]];
     if (was === is) continue;
-    if (was.company !== is.company || was.year !== is.year) return null;
-    changed.push(is);
+    if (was.company !== is.company || was.year !== is.year || was.fileRow !== is.fileRow)
+      return null;
+    if (!areSame(was.values, is.values)) changed.push(is);
   }
   return changed;
+}
+
+function areSame(before: readonly unknown[], now: readonly unknown[]): boolean {
+  return before.length === now.length && before.every((value, at) => Object.is(value, now[at]));
 }

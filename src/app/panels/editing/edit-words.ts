@@ -3,9 +3,13 @@ import type { PanelEdits } from './panel-edits';
 
 /** `12 cells and 1 row`. */
 export function editsWords({ cells, added, removed }: PanelEdits): string {
-  const rows = added.size + removed.size;
+  return partsWords(cells.size, added.size + removed.size);
+}
+
+/** `12 cells and 1 row`; empty for none of either. */
+export function partsWords(cells: number, rows: number): string {
   return listed([
-    ...(cells.size === 0 ? [] : [counted(cells.size, 'cell')]),
+    ...(cells === 0 ? [] : [counted(cells, 'cell')]),
     ...(rows === 0 ? [] : [counted(rows, 'row')]),
   ]);
 }

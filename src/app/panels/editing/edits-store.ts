@@ -1,10 +1,11 @@
-import { Injectable, computed, inject, signal } from '@angular/core';
+import { Injectable, computed, inject, linkedSignal, signal } from '@angular/core';
 import type { PanelVersionReply, SaveCorrections } from '@contract';
 import { firstValueFrom } from 'rxjs';
 import { type ApiProblem, toApiProblem } from '../../api/api-problem';
 import { PanelsApi } from '../../api/panels-api';
 import { counted } from '../../ui/phrases';
 import { panelRows } from '../panel-rows';
+import { type Carrying, type EditedVersion, carriedDraft, carriedEdits } from './carry-over';
 import { type EditHistory, noHistory, redo, step, undo } from './edit-history';
 import { editsWords } from './edit-words';
 import { KeptEdits } from './kept-edits';
@@ -12,6 +13,7 @@ import {
   type CellChange,
   type PanelEdits,
   type RowPlace,
+  type SavedRows,
   addRow,
   countEdits,
   editedRows,
@@ -20,15 +22,12 @@ import {
   savedRows,
   setCells,
 } from './panel-edits';
-
-/** As many corrections as one version takes. */
-export const mostCells = 50_000;
-export const mostRows = 5_000;
+import { type SaveDraft, emptyDraft } from './save-lines';
 
 export type SaveOutcome =
   | { readonly kind: 'saved'; readonly panelVersionId: string }
   /** Somebody saved a newer version meanwhile. */
-  | { readonly kind: 'stale'; readonly latestId: string; readonly detail: string }
+  | { readonly kind: 'stale'; readonly detail: string }
   | { readonly kind: 'failed'; readonly problem: ApiProblem };
 
 /** The edits of one panel version that are not saved, with the way back and forth. */
@@ -40,11 +39,16 @@ export class EditsStore {
   readonly #history = signal<EditHistory>(noHistory);
   readonly #isKept = signal(true);
   readonly #restored = signal('');
+  readonly #draft = signal(emptyDraft);
+  readonly #isSaved = signal(false);
+  readonly #newerId = signal<string | null>(null);
 
-  readonly savedRows = computed(() => {
+  /** What the version holds; once the edits are saved, what the next one does. */
+  readonly #savedRows = linkedSignal(() => {
     const panel = this.#panel();
     return panel === null ? [] : panelRows(panel);
   });
+  readonly savedRows = this.#savedRows.asReadonly();
   readonly #saved = computed(() => savedRows(this.savedRows()));
   /** What the version holds, by row key. */
   readonly saved = this.#saved;
@@ -61,14 +65,30 @@ export class EditsStore {
   readonly isKept = this.#isKept.asReadonly();
   /** What came back from before the page was loaded again, as `12 cells and 1 row`; empty where nothing did. */
   readonly restored = this.#restored.asReadonly();
+  /** What is said of the edits so far. */
+  readonly draft = this.#draft.asReadonly();
+  /** Whether the edits are a version by now, which is on its way to the page: nothing is changed until it is there. */
+  readonly isSaved = this.#isSaved.asReadonly();
+  /** Of the version that somebody saved meanwhile, known from a save that was refused. */
+  readonly newerId = this.#newerId.asReadonly();
 
   /** Begins with a version, and with what was not saved of it before. */
   open(panel: PanelVersionReply): void {
     this.#panel.set(panel);
+    this.#isSaved.set(false);
+    this.#newerId.set(null);
     const kept = this.#kept.recall(panel.version.id);
-    const edits = kept === null ? noEdits : this.#stillFitting(kept);
+    const edits = kept === null ? noEdits : fitting(kept, this.#saved(), panel.columns.length);
     this.#history.set({ ...noHistory, now: edits });
+    this.#draft.set(this.#kept.recallDraft(panel.version.id) ?? emptyDraft);
     this.#restored.set(editsWords(edits));
+  }
+
+  /** What is written stays, whatever becomes of the dialog, and comes back with the edits. */
+  write(draft: SaveDraft): void {
+    this.#draft.set(draft);
+    const panel = this.#panel();
+    if (panel !== null) this.#keepDraft(panel.version.id);
   }
 
   dismissRestored(): void {
@@ -116,15 +136,51 @@ export class EditsStore {
     if (panel === null) throw new Error('expected a panel version to be open');
     try {
       const saved = await firstValueFrom(this.#panels.saveCorrections(panel.version.id, body));
+      this.#isSaved.set(true);
+      this.#savedRows.set(this.rows());
+      this.#draft.set(emptyDraft);
       this.#show(noHistory);
       return { kind: 'saved', panelVersionId: saved.id };
     } catch (error) {
       const problem = toApiProblem(error);
       const { latestId } = problem.problem;
-      return problem.slug === 'stale-version' && typeof latestId === 'string'
-        ? { kind: 'stale', latestId, detail: problem.message }
-        : { kind: 'failed', problem };
+      if (problem.slug !== 'stale-version' || typeof latestId !== 'string')
+        return { kind: 'failed', problem };
+      this.#newerId.set(latestId);
+      return { kind: 'stale', detail: problem.message };
     }
+  }
+
+  /** The version with the edits that are not saved, those of the panel that is open. */
+  edited(): EditedVersion {
+    return {
+      columns: this.#panel()?.columns ?? [],
+      saved: this.#saved(),
+      edits: this.edits(),
+    };
+  }
+
+  /** Another version of the panel, with what was not saved of it. */
+  editedAt(panel: PanelVersionReply): EditedVersion {
+    const { columns } = panel;
+    const saved = savedRows(panelRows(panel));
+    const kept = this.#kept.recall(panel.version.id);
+    const edits = kept === null ? noEdits : fitting(kept, saved, columns.length);
+    return { columns, saved, edits };
+  }
+
+  /**
+   * Puts the edits down for the newer version, where they are once it is opened; what has no column there stays here.
+   *
+   * @param mine  keys of the conflicts that go the person's way.
+   */
+  carry(newerId: string, onto: EditedVersion, carrying: Carrying, mine: ReadonlySet<string>): void {
+    const there = this.#kept.recallDraft(newerId) ?? emptyDraft;
+    const from = this.edited().columns;
+    const draft = carriedDraft(this.#draft(), carrying, from, onto.columns, there);
+    this.#kept.keep(newerId, carriedEdits(carrying, mine, onto));
+    this.#kept.keepDraft(newerId, draft);
+    this.#show({ ...noHistory, now: carrying.left });
   }
 
   #step(edits: PanelEdits, words: string): void {
@@ -135,17 +191,23 @@ export class EditsStore {
     this.#history.set(history);
     this.#restored.set('');
     const panel = this.#panel();
-    if (panel !== null) this.#isKept.set(this.#kept.keep(panel.version.id, history.now));
+    if (panel === null) return;
+    const areKept = this.#kept.keep(panel.version.id, history.now);
+    this.#isKept.set(this.#keepDraft(panel.version.id) && areKept);
   }
 
-  /** What was kept, as far as the version has the rows and columns for it. */
-  #stillFitting(kept: PanelEdits): PanelEdits {
-    const columns = this.#panel()?.columns.length ?? 0;
-    let edits = removeRows(noEdits, this.#saved(), [...kept.removed.values()]);
-    for (const row of kept.added.values()) edits = addRow(edits, this.#saved(), row);
-    const cells = [...kept.cells.values()].filter(({ place }) => place.column < columns);
-    return setCells(edits, this.#saved(), cells);
+  /** With nothing changed there is nothing to say of it; the words stay on the page, for Undo. */
+  #keepDraft(panelVersionId: string): boolean {
+    return this.#kept.keepDraft(panelVersionId, this.count() === 0 ? emptyDraft : this.#draft());
   }
+}
+
+/** What was kept, as far as the version has the rows and columns for it. */
+function fitting(kept: PanelEdits, saved: SavedRows, columns: number): PanelEdits {
+  let edits = removeRows(noEdits, saved, [...kept.removed.values()]);
+  for (const row of kept.added.values()) edits = addRow(edits, saved, row);
+  const cells = [...kept.cells.values()].filter(({ place }) => place.column < columns);
+  return setCells(edits, saved, cells);
 }
 
 /** Cells whose new value is another one than before. */

@@ -37,8 +37,15 @@ export function selectionOf(block: CellBlock | null, grid: ShownGrid): GridSelec
 
 /** `1 cell`, `50 × 20 cells`. */
 export function sizeWords(range: CellRange): string {
-  const rows = range.lastRow - range.firstRow + 1;
-  const columns = range.lastColumn - range.firstColumn + 1;
+  return cellsWords(range.lastRow - range.firstRow + 1, range.lastColumn - range.firstColumn + 1);
+}
+
+/** `50 × 20 cells selected`; empty for one cell. */
+export function sizeOf({ rows, columns }: GridSelection): string {
+  return rows * columns === 1 ? '' : `${cellsWords(rows, columns)} selected`;
+}
+
+function cellsWords(rows: number, columns: number): string {
   return rows * columns === 1 ? '1 cell' : `${rows.toLocaleString('en')} × ${columns} cells`;
 }
 

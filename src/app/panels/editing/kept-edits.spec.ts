@@ -3,7 +3,8 @@ import { TestBed } from '@angular/core/testing';
 import type { SessionReply } from '@contract';
 import { SessionStore } from '../../api/session-store';
 import { KeptEdits } from './kept-edits';
-import { noEdits, savedRows, setCells } from './panel-edits';
+import { cellKey, noEdits, savedRows, setCells } from './panel-edits';
+import { emptyDraft } from './save-lines';
 
 const saved = savedRows([{ fileRow: 2, company: 'Kesdrin', year: 2020, values: [1, null] }]);
 const edits = setCells(noEdits, saved, [
@@ -63,6 +64,24 @@ describe('edits that are kept', () => {
     expect(kept.recall('v1')).toBeNull();
     sessions.accept(anIlvo);
     expect(kept.recall('v1')).toEqual(edits);
+  });
+
+  it('bring note, reasons and sources along, each with its version', () => {
+    const draft = {
+      note: 'Second look',
+      common: { reason: 'Was missing', source: '' },
+      own: new Map([[cellKey({ company: 'Kesdrin', year: 2020, column: 1 }), { source: 'p. 81' }]]),
+    };
+    expect(open().keepDraft('v1', draft)).toBeTrue();
+    expect(open().recallDraft('v1')).toEqual(draft);
+    expect(open().recallDraft('v2')).toBeNull();
+    const kept = open();
+    TestBed.inject(SessionStore).accept(someoneElse);
+    expect(kept.recallDraft('v1')).toBeNull();
+    TestBed.inject(SessionStore).accept(anIlvo);
+    kept.keepDraft('v1', emptyDraft);
+    expect(kept.recallDraft('v1')).toBeNull();
+    expect(sessionStorage.length).toBe(0);
   });
 
   it('pass over what the storage holds in another form', () => {

@@ -1,11 +1,12 @@
-import { DOCUMENT, Injectable, inject } from '@angular/core';
-import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
+import { Injectable, inject } from '@angular/core';
 import * as z from 'zod';
 import { SessionStore } from '../../api/session-store';
+import { KeptTexts } from './kept-texts';
 import { type PanelEdits, cellKey, countEdits, rowKey } from './panel-edits';
+import { type SaveDraft, isEmptyDraft } from './save-lines';
 
 const rowPlace = z.object({ company: z.string(), year: z.number().int() });
-const KeptText = z.object({
+const KeptCells = z.object({
   personId: z.string(),
   cells: z.array(
     z.object({
@@ -16,55 +17,41 @@ const KeptText = z.object({
   added: z.array(rowPlace),
   removed: z.array(rowPlace),
 });
+const KeptDraft = z.object({
+  personId: z.string(),
+  note: z.string(),
+  common: z.object({ reason: z.string(), source: z.string() }),
+  /** By cell key. */
+  own: z.array(
+    z.tuple([
+      z.string(),
+      z.object({ reason: z.string().optional(), source: z.string().optional() }),
+    ]),
+  ),
+});
 
-const prefix = 'kv-panel-edits:';
-
-/**
- * Edits that are not saved, by panel version: they outlive a reload of the tab, and a session that ends for as long as
- * the page stays open. Nothing is left in the browser's storage after signing out, and nobody else is shown them.
- */
+/** Edits that are not saved and what is said of them, by panel version; nobody else is shown them. */
 @Injectable({ providedIn: 'root' })
 export class KeptEdits {
   readonly #sessions = inject(SessionStore);
-  readonly #storage = inject(DOCUMENT).defaultView?.sessionStorage;
-  readonly #texts = new Map<string, string>();
+  readonly #texts = inject(KeptTexts);
 
-  constructor() {
-    this.#sessions.ended.pipe(takeUntilDestroyed()).subscribe(() => {
-      const keys = Object.keys(this.#storage ?? {}).filter((key) => key.startsWith(prefix));
-      for (const key of keys) this.#storage?.removeItem(key);
-    });
-  }
-
-  /** @returns whether the edits would outlive a reload: the browser may have no room for very many. */
+  /** @returns whether the edits would outlive a reload. */
   keep(panelVersionId: string, edits: PanelEdits): boolean {
-    const key = prefix + panelVersionId;
     if (countEdits(edits) === 0) {
-      this.#texts.delete(key);
-      this.#storage?.removeItem(key);
+      this.#texts.remove(`edits:${panelVersionId}`);
       return true;
     }
-    const text = JSON.stringify({
+    return this.#texts.put(`edits:${panelVersionId}`, {
       personId: this.#personId,
       cells: [...edits.cells.values()],
       added: [...edits.added.values()],
       removed: [...edits.removed.values()],
     });
-    this.#texts.set(key, text);
-    try {
-      this.#storage?.setItem(key, text);
-      return true;
-    } catch (error) {
-      if (!(error instanceof DOMException) || error.name !== 'QuotaExceededError') throw error;
-      this.#storage?.removeItem(key);
-      return false;
-    }
   }
 
   recall(panelVersionId: string): PanelEdits | null {
-    const key = prefix + panelVersionId;
-    const text = this.#texts.get(key) ?? this.#storage?.getItem(key);
-    const kept = KeptText.safeParse(text == null ? null : readJson(text));
+    const kept = KeptCells.safeParse(this.#texts.read(`edits:${panelVersionId}`));
     if (!kept.success || kept.data.personId !== this.#personId) return null;
     const { cells, added, removed } = kept.data;
     return {
@@ -74,16 +61,25 @@ export class KeptEdits {
     };
   }
 
+  /** Apart from the edits: it changes with every letter, and they may be many. @returns as `keep` does. */
+  keepDraft(panelVersionId: string, draft: SaveDraft): boolean {
+    if (isEmptyDraft(draft)) {
+      this.#texts.remove(`draft:${panelVersionId}`);
+      return true;
+    }
+    const { note, common, own } = draft;
+    const kept = { personId: this.#personId, note, common, own: [...own] };
+    return this.#texts.put(`draft:${panelVersionId}`, kept);
+  }
+
+  recallDraft(panelVersionId: string): SaveDraft | null {
+    const kept = KeptDraft.safeParse(this.#texts.read(`draft:${panelVersionId}`));
+    if (!kept.success || kept.data.personId !== this.#personId) return null;
+    const { note, common, own } = kept.data;
+    return { note, common, own: new Map(own) };
+  }
+
   get #personId(): string {
     return this.#sessions.person()?.id ?? '';
-  }
-}
-
-function readJson(text: string): unknown {
-  try {
-    return JSON.parse(text);
-  } catch (error) {
-    if (error instanceof SyntaxError) return null;
-    throw error;
   }
 }

@@ -6,7 +6,6 @@ import {
   effect,
   inject,
   input,
-  linkedSignal,
   output,
   signal,
   untracked,
@@ -14,8 +13,7 @@ import {
 } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import type { PanelVersionReply, PanelVersionSummary } from '@contract';
-import { type Flag, flagCodes } from '@panel-data';
-import { Confirm } from '../../ui/confirm';
+import type { CoverageWindow, Flag } from '@panel-data';
 import { Mark } from '../../ui/mark';
 import { NumberFormat } from '../../ui/number-format';
 import { counted } from '../../ui/phrases';
@@ -24,33 +22,45 @@ import { ProblemNotice } from '../../ui/problem-notice';
 import { PanelGrid } from '../panel-grid';
 import { type PanelRow, kindOf } from '../panel-rows';
 import type { RowFocus } from '../row-focus';
-import { CellLine, type LookedAtCell } from './cell-line';
+import { rowsWithin } from '../rows-within';
+import { newestOf } from '../versions/version-words';
+import { BlockSaid } from './block-said';
+import { CellLine } from './cell-line';
+import { EditTools } from './edit-tools';
 import { editsWords } from './edit-words';
-import { EditsStore, mostCells, mostRows } from './edits-store';
-import { findCells } from './find-cells';
+import { obstacleTo } from './edit-limits';
+import { EditsStore } from './edits-store';
 import { FindField } from './find-field';
+import { GridFinds } from './grid-finds';
+import { sparingFocus } from './grid-focus';
 import type { GivenCells, GridSelection } from './grid-selection';
+import { lookedAtCell } from './looked-at-cell';
 import { PanelDialogs } from './panel-dialogs';
-import { cellKey, rowKey } from './panel-edits';
-import {
-  type CellFlags,
-  type RowFilter,
-  filteredRows,
-  flagCounts,
-  flagNames,
-  flagsAt,
-} from './row-filter';
+import { rowKey } from './panel-edits';
+import { RowChanges } from './row-changes';
+import { RowChoice } from './row-choice';
+import { type CellFlags, type RowFilter, filteredRows, flagNames, flagsAt } from './row-filter';
 import { SaveBar } from './save-bar';
-import { emptyDraft } from './save-lines';
 import { UnsavedEdits } from './unsaved-edits';
 
 /** The rows of a panel version: looked through, copied, mended and saved as the next version. */
 @Component({
   selector: 'kv-panel-rows',
-  imports: [CellLine, FindField, Mark, MatButton, PanelGrid, ProblemNotice, SaveBar],
+  imports: [
+    BlockSaid,
+    CellLine,
+    EditTools,
+    FindField,
+    Mark,
+    MatButton,
+    PanelGrid,
+    ProblemNotice,
+    RowChoice,
+    SaveBar,
+  ],
   templateUrl: './panel-desk-grid.html',
   styleUrl: './panel-desk-grid.css',
-  providers: [EditsStore, PanelDialogs],
+  providers: [EditsStore, PanelDialogs, RowChanges],
   host: {
     '(window:beforeunload)': 'unsaved.holdBack($event)',
     '(keydown)': 'readKey($event)',
@@ -59,8 +69,8 @@ import { UnsavedEdits } from './unsaved-edits';
 })
 export class PanelDeskGrid {
   readonly #numbers = inject(NumberFormat);
-  readonly #confirm = inject(Confirm);
   readonly #dialogs = inject(PanelDialogs);
+  readonly #rowChanges = inject(RowChanges);
   protected readonly unsaved = inject(UnsavedEdits);
   protected readonly store = inject(EditsStore);
 
@@ -72,12 +82,14 @@ export class PanelDeskGrid {
   readonly focusedRow = input<RowFocus | null>(null);
   /** By cell key; they may follow the edits. */
   readonly flags = input<CellFlags>(new Map());
+  /** Only its companies and years are shown; all where it is null. */
+  readonly only = input<CoverageWindow | null>(null);
   /** A flag in words. */
   readonly flagWords = input<(flag: Flag) => string>(({ facts }) => flagNames[facts.code]);
   readonly mayChange = input(false);
   /** The rows as they would be saved, each time they change. */
   readonly editedChanged = output<readonly PanelRow[]>();
-  /** Id of the version that was made. */
+  /** Id of the version to go on with: one that was made, or that took the edits over. */
   readonly saved = output<string>();
 
   protected readonly grid = viewChild.required(PanelGrid);
@@ -90,51 +102,58 @@ export class PanelDeskGrid {
   protected readonly said = signal('');
   /** New each time that the grid shows other rows. */
   protected readonly shownTick = signal(0);
-  readonly #draft = signal(emptyDraft);
+  /** Whether a finger selects cells; else it scrolls. */
+  protected readonly touchSelects = signal(false);
 
-  readonly #isNewest = computed(() => {
-    const { panelId, number } = this.panel().version;
-    return !this.versions().some((other) => other.panelId === panelId && other.number > number);
+  /** Id of a version newer than this one; null for the newest. */
+  protected readonly newerId = computed(() => {
+    const { version } = this.panel();
+    const newest = newestOf(version, this.versions()).id;
+    return newest === version.id ? this.store.newerId() : newest;
   });
   /** What was changed in a version that is no longer the newest stays in hand. */
   protected readonly mayEdit = computed(
-    () => this.mayChange() && (this.#isNewest() || this.store.count() > 0),
+    () =>
+      this.mayChange() &&
+      !this.store.isSaved() &&
+      (this.newerId() === null || this.store.count() > 0),
+  );
+  readonly #within = computed(() =>
+    rowsWithin(this.store.rows(), this.only(), {
+      edits: this.store.edits(),
+      asked: this.focusedRow(),
+    }),
   );
   protected readonly rows = computed(() =>
-    filteredRows(this.store.rows(), this.filter(), {
+    filteredRows(this.#within(), this.filter(), {
       edits: this.store.edits(),
       flags: this.flags(),
     }),
   );
-  protected readonly digits = computed(() =>
-    this.panel().columns.map((column, index) =>
-      this.#numbers.columnDigits(
-        this.store.savedRows().map(({ values }) => values[index]),
-        kindOf(column),
+  protected readonly digits = computed(
+    () =>
+      this.panel().columns.map((column, index) =>
+        this.#numbers.columnDigits(
+          this.store.savedRows().map(({ values }) => values[index]),
+          kindOf(column),
+        ),
       ),
-    ),
+    { equal: (left, right) => left.join() === right.join() },
   );
-  protected readonly flagChoices = computed(() => {
-    const counts = flagCounts(this.flags());
-    const codes = flagCodes.filter((code) => counts.has(code) || code === this.filter());
-    return codes.map((code) => ({
-      code,
-      words: `${flagNames[code]} (${(counts.get(code) ?? 0).toLocaleString('en')})`,
-    }));
-  });
   protected readonly words = computed(() => editsWords(this.store.edits()));
-  protected readonly obstacle = computed(() => {
-    const { cells, added, removed } = this.store.edits();
-    if (cells.size > mostCells) return `One version takes at most ${counted(mostCells, 'cell')}.`;
-    if (Math.max(added.size, removed.size) > mostRows)
-      return `One version takes at most ${counted(mostRows, 'row')} added and as many removed.`;
-    return this.store.rows().length === 0 ? 'A panel needs at least one row.' : '';
-  });
+  protected readonly obstacle = computed(() =>
+    obstacleTo(this.store.edits(), this.store.rows().length),
+  );
   protected readonly isSavedRow = computed(() => {
     const at = this.selection();
     return at !== null && this.store.saved().has(rowKey(at));
   });
-  protected readonly cell = computed(() => this.#lookedAt(this.selection()));
+  protected readonly cell = computed(() => {
+    const at = this.selection();
+    if (at === null) return null;
+    const flags = flagsAt(this.flags(), at, at.column).map(this.flagWords());
+    return lookedAtCell(at, this.store.edits(), this.store.saved(), this.panel().columns, flags);
+  });
   protected readonly help = computed(() => {
     const copying =
       'Shift and arrows, or drag: select a block · Ctrl A: all figures · Ctrl C: copy · Ctrl F: find';
@@ -143,21 +162,20 @@ export class PanelDeskGrid {
     return this.mayChange() ? `${copying} · Corrections are made in the newest version` : copying;
   });
 
-  protected readonly findText = signal('');
-  protected readonly finds = computed(() => {
-    this.shownTick();
-    const text = this.findText();
-    return text === '' ? [] : findCells(text, untracked(this.grid).shown(), this.digits());
-  });
-  protected readonly findAt = linkedSignal({ source: this.finds, computation: () => 0 });
+  protected readonly finds = new GridFinds(
+    () => {
+      this.shownTick();
+      return untracked(this.grid).shown();
+    },
+    () => this.digits(),
+  );
 
   constructor() {
     effect(() => {
       const panel = this.panel();
       untracked(() => {
         this.store.open(panel);
-        this.#draft.set(emptyDraft);
-        this.filter.set('all');
+        if (this.filter() === 'edited') this.filter.set('all');
         this.closeRefusal();
       });
     });
@@ -176,21 +194,12 @@ export class PanelDeskGrid {
     });
   }
 
-  protected choose(value: string): void {
-    const codes: readonly RowFilter[] = ['all', 'gaps', 'edited', ...flagCodes];
-    this.filter.set(codes.find((code) => code === value) ?? 'all');
-  }
-
   protected give({ changes, done }: GivenCells): void {
     this.closeRefusal();
     const count = this.store.change(changes, done);
     this.said.set(
       count === 0 ? 'Nothing differs from before' : `${counted(count, 'cell')} ${done}`,
     );
-  }
-
-  protected refuse(problem: ShownProblem): void {
-    this.refusal.set(problem);
   }
 
   protected closeRefusal(): void {
@@ -218,40 +227,29 @@ export class PanelDeskGrid {
   }
 
   protected async addRow(): Promise<void> {
-    const row = await this.#dialogs.askForRow({
-      companies: [...new Set(this.store.rows().map(({ company }) => company))],
-      company: this.selection()?.company ?? '',
-      hasRow: (asked) => this.store.hasRow(asked),
-    });
+    const row = await this.#rowChanges.add(this.selection()?.company ?? '');
     if (row === undefined) return;
     this.filter.set('all');
-    this.store.addRow(row);
     this.said.set(`Row ${row.company} ${row.year} added`);
     this.grid().look({ company: row.company, year: row.year, column: 0 });
   }
 
   protected async removeRows(): Promise<void> {
     const rows = this.grid().selectedRows();
-    if (rows.length === 0) return;
-    const full = rows.filter(({ values }) => values.some((value) => value !== null)).length;
-    const isSure =
-      full === 0 ||
-      (await this.#confirm.ask({
-        title: `Remove ${counted(rows.length, 'row')}?`,
-        detail: `${counted(full, 'row')} of the panel ${full === 1 ? 'has' : 'have'} figures. Undo brings them back; saved versions keep them.`,
-        action: rows.length === 1 ? 'Remove row' : 'Remove rows',
-      }));
-    if (!isSure) return;
-    this.store.removeRows(rows);
+    if (!(await this.#rowChanges.remove(rows))) return;
     this.said.set(`${counted(rows.length, 'row')} removed`);
     this.grid().focus();
   }
 
   protected async save(): Promise<void> {
-    const id = await this.#dialogs.save(this.panel(), this.#draft);
-    if (id === undefined) return;
-    this.unsaved.show(''); // who hears of it leads on to the version at once
-    this.saved.emit(id);
+    const result = await this.#dialogs.save(this.panel());
+    if (result?.kind === 'saved') this.#goOn(result.panelVersionId);
+    else if (result?.kind === 'carry') await this.carry();
+  }
+
+  protected async carry(): Promise<void> {
+    const newerId = this.newerId();
+    if (newerId !== null && (await this.#dialogs.carry(this.panel(), newerId))) this.#goOn(newerId);
   }
 
   protected openHistory(): void {
@@ -261,20 +259,14 @@ export class PanelDeskGrid {
     this.#dialogs.showHistory(this.panel(), place);
   }
 
-  protected find(text: string): void {
-    this.findText.set(text);
-  }
-
   /** The focus stays where it is, so that the next one is a key away. */
   protected goToFind(way: 'next' | 'previous'): void {
-    const count = this.finds().length;
-    if (count === 0) return;
-    const at = this.findAt();
-    const next = way === 'next' ? (at % count) + 1 : at <= 1 ? count : at - 1;
-    this.findAt.set(next);
-    const before = document.activeElement;
-    this.grid().goTo(this.finds()[next - 1]);
-    if (before instanceof HTMLElement) before.focus();
+    const place = this.finds.step(way);
+    if (place === undefined) return;
+    const grid = this.grid();
+    sparingFocus(grid.host, () => {
+      grid.goTo(place);
+    });
   }
 
   protected readKey(event: KeyboardEvent): void {
@@ -288,26 +280,10 @@ export class PanelDeskGrid {
     event.preventDefault();
   }
 
-  #lookedAt(at: GridSelection | null): LookedAtCell | null {
-    if (at === null) return null;
-    const { company, year, column, rows, columns } = at;
-    const { cells, added } = this.store.edits();
-    const key = rowKey(at);
-    const row = this.store.saved().get(key);
-    if (row === undefined && !added.has(key)) return null;
-    const size = rows * columns === 1 ? '' : `${rows} × ${columns} cells selected`;
-    const base = { company, year, fileRow: row?.fileRow ?? 0, size };
-    if (column === undefined) return { ...base, figure: null, flags: [] };
-    const before = row?.values[column] ?? null;
-    const edit = cells.get(cellKey({ company, year, column }));
-    return {
-      ...base,
-      figure: {
-        column: this.panel().columns[column],
-        value: edit === undefined ? before : edit.value,
-        before: edit === undefined ? undefined : before,
-      },
-      flags: flagsAt(this.flags(), at, column).map(this.flagWords()),
-    };
+  /** Leads on to the version that has what was changed in this one. */
+  #goOn(panelVersionId: string): void {
+    this.grid().focus();
+    this.unsaved.show(''); // who hears of it leaves this version at once
+    this.saved.emit(panelVersionId);
   }
 }

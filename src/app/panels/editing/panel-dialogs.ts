@@ -1,14 +1,16 @@
-import { Injectable, type WritableSignal, inject } from '@angular/core';
+import { Injectable, inject } from '@angular/core';
 import { MatDialog, MatDialogConfig } from '@angular/material/dialog';
 import type { PanelVersionReply } from '@contract';
 import { firstValueFrom } from 'rxjs';
 import { NumberFormat } from '../../ui/number-format';
 import { AddRowDialog, type AddRowQuestion } from './add-row-dialog';
+import { CarryDialog, type CarryQuestion } from './carry-dialog';
 import { CellHistoryDialog, type CellHistoryQuestion } from './cell-history-dialog';
+import { editsWords } from './edit-words';
 import { EditsStore } from './edits-store';
 import type { CellPlace, RowPlace } from './panel-edits';
-import { SaveDialog, type SaveQuestion } from './save-dialog';
-import { type SaveDraft, draftCorrections, saveLines } from './save-lines';
+import { SaveDialog, type SaveQuestion, type SaveResult } from './save-dialog';
+import { draftCorrections, saveLines } from './save-lines';
 import { figureWords, shiftOf } from './shown-figure';
 
 /** What is asked and shown beside the grid. */
@@ -24,11 +26,8 @@ export class PanelDialogs {
     return firstValueFrom(opened.afterClosed());
   }
 
-  /** @returns the id of the version that was saved; undefined where it was not. */
-  async save(
-    { version, columns }: PanelVersionReply,
-    draft: WritableSignal<SaveDraft>,
-  ): Promise<string | undefined> {
+  /** @returns undefined where the person goes on changing. */
+  async save({ version, columns }: PanelVersionReply): Promise<SaveResult | undefined> {
     const edits = this.#store.edits();
     const places = new Map([...edits.cells.keys()].map((key, place) => [key, place]));
     const data: SaveQuestion = {
@@ -47,9 +46,10 @@ export class PanelDialogs {
           shiftOf(columns[column], this.#numbers.factor()),
           this.#numbers.locale(),
         ),
-      draft: draft(),
+      changes: editsWords(edits),
+      draft: this.#store.draft(),
       keep: (written) => {
-        draft.set(written);
+        this.#store.write(written);
       },
       save: (written) => this.#store.save(draftCorrections(edits, written)),
       sentAt: (key) => places.get(key) ?? -1,
@@ -59,8 +59,27 @@ export class PanelDialogs {
       width: '960px',
       maxWidth: '96vw',
     });
-    const opened = this.#dialog.open<SaveDialog, SaveQuestion, string>(SaveDialog, config);
+    const opened = this.#dialog.open<SaveDialog, SaveQuestion, SaveResult>(SaveDialog, config);
     return firstValueFrom(opened.afterClosed());
+  }
+
+  /** @returns whether the edits are with the newer version now. */
+  async carry({ version }: PanelVersionReply, newerId: string): Promise<boolean> {
+    const data: CarryQuestion = {
+      ...{ version, newerId },
+      from: this.#store.edited(),
+      editedAt: (newer) => this.#store.editedAt(newer),
+      carry: (onto, carrying, mine) => {
+        this.#store.carry(newerId, onto, carrying, mine);
+      },
+    };
+    const config = Object.assign(new MatDialogConfig<CarryQuestion>(), {
+      data,
+      width: '800px',
+      maxWidth: '96vw',
+    });
+    const opened = this.#dialog.open<CarryDialog, CarryQuestion, boolean>(CarryDialog, config);
+    return (await firstValueFrom(opened.afterClosed())) ?? false;
   }
 
   showHistory({ version, columns }: PanelVersionReply, place: CellPlace): void {

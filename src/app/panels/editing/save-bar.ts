@@ -10,17 +10,24 @@ import { Mark } from '../../ui/mark';
     <p role="status">
       <kv-mark kind="caution" /> {{ words() }} changed in version {{ number() }}, not saved
     </p>
-    @if (obstacle()) {
-      <p>{{ obstacle() }}</p>
+    @if (isOvertaken()) {
+      <p>A newer version was saved meanwhile.</p>
+      <button matButton="filled" type="button" (click)="carryWanted.emit()">
+        Carry onto the newer version…
+      </button>
+    } @else {
+      @if (obstacle()) {
+        <p>{{ obstacle() }}</p>
+      }
+      <button
+        matButton="filled"
+        type="button"
+        [disabled]="obstacle() !== ''"
+        (click)="saveWanted.emit()"
+      >
+        Save as version {{ number() + 1 }}…
+      </button>
     }
-    <button
-      matButton="filled"
-      type="button"
-      [disabled]="obstacle() !== ''"
-      (click)="saveWanted.emit()"
-    >
-      Save as version {{ number() + 1 }}…
-    </button>
     <button matButton type="button" (click)="discardWanted.emit()">Discard</button>
     @if (!isKept()) {
       <p class="kv-caption">These are too many to come back after the page is loaded again.</p>
@@ -55,6 +62,9 @@ export class SaveBar {
   readonly isKept = input(true);
   /** Why they cannot be saved as they are; empty where they can. */
   readonly obstacle = input('');
+  /** Whether there is a newer version; what is changed in this one cannot be saved as the next. */
+  readonly isOvertaken = input(false);
   readonly saveWanted = output();
+  readonly carryWanted = output();
   readonly discardWanted = output();
 }

@@ -10,7 +10,6 @@ import {
 } from '@angular/material/dialog';
 import { MatFormField, MatLabel } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
-import { RouterLink } from '@angular/router';
 import type { ApiProblem } from '../../api/api-problem';
 import { counted, listed } from '../../ui/phrases';
 import { ProblemNotice } from '../../ui/problem-notice';
@@ -18,9 +17,15 @@ import type { SaveOutcome } from './edits-store';
 import type { EditGround } from './panel-edits';
 import { type SaveDraft, type SaveLine, groundOf, isComplete, missingGround } from './save-lines';
 
+/** The version that was saved, or the wish to carry the edits onto the one that somebody else saved. */
+export type SaveResult =
+  { readonly kind: 'saved'; readonly panelVersionId: string } | { readonly kind: 'carry' };
+
 export interface SaveQuestion {
   /** Of the version to come. */
   readonly number: number;
+  /** `12 cells and 1 row`. */
+  readonly changes: string;
   readonly lines: readonly SaveLine[];
   /** Rows added and removed, in words. */
   readonly rowLines: readonly string[];
@@ -37,7 +42,7 @@ export interface SaveQuestion {
 
 const linesAtOnce = 200;
 
-/** Asks for the note, and each change's reason and source; closes with the id of the version that was saved. */
+/** Asks for the note, and each change's reason and source. */
 @Component({
   selector: 'kv-save-dialog',
   imports: [
@@ -50,14 +55,13 @@ const linesAtOnce = 200;
     MatInput,
     MatLabel,
     ProblemNotice,
-    RouterLink,
   ],
   templateUrl: './save-dialog.html',
   styleUrl: './save-dialog.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class SaveDialog {
-  readonly #dialog = inject<MatDialogRef<SaveDialog, string>>(MatDialogRef);
+  readonly #dialog = inject<MatDialogRef<SaveDialog, SaveResult>>(MatDialogRef);
   protected readonly question = inject<SaveQuestion>(MAT_DIALOG_DATA);
 
   protected readonly draft = signal(this.question.draft);
@@ -65,9 +69,8 @@ export class SaveDialog {
   protected readonly isAsked = signal(false);
   protected readonly isRunning = signal(false);
   protected readonly problem = signal<ApiProblem | null>(null);
-  protected readonly stale = signal<{ readonly latestId: string; readonly detail: string } | null>(
-    null,
-  );
+  /** Who was faster, in words; empty where nobody was. */
+  protected readonly stale = signal('');
   readonly #missing = computed(() => missingGround(this.draft(), this.question.lines));
   protected readonly needed = computed(() => {
     const { note, reasons, sources } = this.#missing();
@@ -120,7 +123,11 @@ export class SaveDialog {
     const outcome = await this.question.save(this.draft());
     this.isRunning.set(false);
     this.problem.set(outcome.kind === 'failed' ? outcome.problem : null);
-    this.stale.set(outcome.kind === 'stale' ? outcome : null);
-    if (outcome.kind === 'saved') this.#dialog.close(outcome.panelVersionId);
+    this.stale.set(outcome.kind === 'stale' ? outcome.detail : '');
+    if (outcome.kind === 'saved') this.#dialog.close(outcome);
+  }
+
+  protected carry(): void {
+    this.#dialog.close({ kind: 'carry' });
   }
 }

@@ -34,6 +34,10 @@ export const emptyDraft: SaveDraft = {
   own: new Map(),
 };
 
+export function isEmptyDraft({ note, common, own }: SaveDraft): boolean {
+  return note === '' && common.reason === '' && common.source === '' && own.size === 0;
+}
+
 /** Every changed cell, by company, year and column. */
 export function saveLines(
   edits: PanelEdits,
