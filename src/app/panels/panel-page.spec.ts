@@ -249,6 +249,43 @@ describe('the Panel page', () => {
     expect(page().querySelector('[aria-label^="Right as it is"]')).toBeNull();
   });
 
+  it('stays in its place while it goes on to the version that was saved', async () => {
+    open(['analyst']);
+    await answer([version]);
+    await until(() => page().querySelector('kv-panel-rows .ag-cell') !== null);
+    const made = { ...version, id: exampleId(5), number: 2, origin: 'correction' as const };
+    const cell = page().querySelector<HTMLElement>('.ag-cell[col-id=figure-0]');
+    cell?.focus();
+    fixture.debugElement
+      .query(({ name }) => name === 'kv-panel-rows')
+      .triggerEventHandler('saved', made.id);
+    await until(() => TestBed.inject(Router).url.includes(made.id));
+    expect(TestBed.inject(Router).url).toBe(`/panel/${made.id}`);
+    fixture.componentRef.setInput('panelVersionId', made.id);
+    await settled();
+    expect(words()).toContain('Flow control, version 1');
+    http.expectOne('/api/panel-versions').flush({ versions: [made, version] });
+    http.expectOne('/api/desk').flush({
+      ...{ panelVersion: made, peerGroup, fit: null, editionsWaiting: 0 },
+    });
+    http.expectOne(`/api/panel-versions/${made.id}`).flush({ ...panel, version: made });
+    await settled();
+    expect(words()).toContain('Flow control, version 2');
+    expect(page().querySelector('.ag-cell[col-id=figure-0]')).toBe(cell);
+    // The flags of the panel stay until it is looked through again; nothing of it is asked for anew.
+    expect(page().querySelector('kv-flag-list .groups')).not.toBeNull();
+  });
+
+  it('leaves its place for a version that is asked for otherwise', async () => {
+    open(['analyst'], { panelVersionId: version.id });
+    await answer([version]);
+    fixture.componentRef.setInput('panelVersionId', exampleId(5));
+    await settled();
+    expect(words()).toContain('Reading the panel');
+    http.expectOne('/api/panel-versions');
+    http.expectOne('/api/desk');
+  });
+
   it('looks through what is typed and not saved', async () => {
     open(['analyst']);
     await answer([version]);

@@ -1,6 +1,7 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  DOCUMENT,
   computed,
   effect,
   inject,
@@ -58,6 +59,7 @@ import { counted } from '../ui/phrases';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class PanelPage {
+  readonly #document = inject(DOCUMENT);
   readonly #router = inject(Router);
   readonly #context = inject(PageContext);
   readonly #numbers = inject(NumberFormat);
@@ -95,6 +97,7 @@ export class PanelPage {
     const view = this.store.view();
     return view.kind === 'ready' ? view.panel : null;
   });
+  readonly #panelId = computed(() => this.#panel()?.version.panelId);
   /** As the version has them. */
   protected readonly savedRows = computed(() => {
     const panel = this.#panel();
@@ -147,12 +150,16 @@ export class PanelPage {
   });
   /** The cell of the map that has no row behind it. */
   protected readonly emptyPlace = signal('');
+  /** Id of the version that follows from the one that is shown, while it is gone on to. */
+  #onward: string | undefined;
 
   constructor() {
     effect(() => {
       const id = this.panelVersionId();
       untracked(() => {
-        this.store.open(id);
+        if (id !== undefined && id === this.#onward) this.store.goOnTo(id);
+        else this.store.open(id);
+        this.#onward = undefined;
       });
     });
     effect(() => {
@@ -160,9 +167,14 @@ export class PanelPage {
       if (view.kind !== 'ready') return;
       const { panel, versions, ownCompany } = view;
       this.#context.show(panelContext(panel.version, versions, ownCompany));
+    });
+    // From one version of a panel to the next, what is known of it stays until it is looked through again.
+    effect(() => {
+      const panelId = this.#panelId();
+      if (panelId === undefined) return;
       untracked(() => {
         this.flags.forget();
-        void this.#dismissals.open(panel.version.panelId);
+        void this.#dismissals.open(panelId);
       });
     });
     effect(() => {
@@ -172,9 +184,13 @@ export class PanelPage {
     });
   }
 
-  /** Goes on to the version that was saved. */
-  protected openVersion(panelVersionId: string): void {
-    void this.#router.navigate(['/panel', panelVersionId]);
+  /** Goes on to the version that was made of this one: the page and the focus stay where they are. */
+  protected async goOnTo(panelVersionId: string): Promise<void> {
+    const focused = this.#document.activeElement;
+    this.#onward = panelVersionId;
+    const isThere = await this.#router.navigate(['/panel', panelVersionId], { scroll: 'manual' });
+    if (isThere && focused instanceof HTMLElement) focused.focus({ preventScroll: true });
+    else this.#onward = undefined;
   }
 
   /** Leads to a cell's row; the address says which that is, unless it is not saved yet. */

@@ -34,7 +34,7 @@ export type PanelView =
 export class PanelStore {
   readonly #panels = inject(PanelsApi);
   readonly #desk = inject(DeskApi);
-  readonly #wanted = new Subject<string | undefined>();
+  readonly #wanted = new Subject<Observable<PanelView>>();
   readonly #view = signal<PanelView>({ kind: 'loading' });
 
   readonly view = this.#view.asReadonly();
@@ -42,7 +42,7 @@ export class PanelStore {
   constructor() {
     this.#wanted
       .pipe(
-        switchMap((id) => this.#read(id)),
+        switchMap((reading) => reading),
         takeUntilDestroyed(),
       )
       .subscribe((view) => {
@@ -52,7 +52,12 @@ export class PanelStore {
 
   /** Opens a panel version, or the newest there is. */
   open(panelVersionId: string | undefined): void {
-    this.#wanted.next(panelVersionId);
+    this.#wanted.next(this.#read(panelVersionId).pipe(startWith<PanelView>({ kind: 'loading' })));
+  }
+
+  /** Goes on to a version that follows from the one that is shown, which stays until the other is there. */
+  goOnTo(panelVersionId: string): void {
+    this.#wanted.next(this.#read(panelVersionId));
   }
 
   #read(panelVersionId: string | undefined): Observable<PanelView> {
@@ -71,7 +76,6 @@ export class PanelStore {
       catchError((error: unknown) =>
         of<PanelView>({ kind: 'failed', problem: toApiProblem(error) }),
       ),
-      startWith<PanelView>({ kind: 'loading' }),
     );
   }
 }
