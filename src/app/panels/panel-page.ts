@@ -28,6 +28,7 @@ import { DismissalsStore } from './flags/dismissals-store';
 import { flagReason } from './flags/flag-words';
 import { FlagsStore } from './flags/flags-store';
 import { PanelCheck, type WantedPlace } from './flags/panel-check';
+import { ShownWindow } from './flags/shown-window';
 import { MultiplesSection } from './multiples/multiples-section';
 import { panelContext, versionSource } from './panel-context';
 import { panelCompleteness, panelFinding } from './panel-finding';
@@ -51,6 +52,7 @@ import { counted } from '../ui/phrases';
     PanelVersions,
     ProblemNotice,
     RouterLink,
+    ShownWindow,
     WaitingImports,
   ],
   templateUrl: './panel-page.html',

@@ -1,6 +1,6 @@
 import { DestroyRef, Injectable, computed, inject, signal } from '@angular/core';
 import type { PanelColumn } from '@contract';
-import type { Flag } from '@panel-data';
+import type { CoverageWindow, Flag } from '@panel-data';
 import { type Subscription, switchMap, timer } from 'rxjs';
 import { cellKey, rowKey } from '../editing/panel-edits';
 import type { CellFlags } from '../editing/row-filter';
@@ -33,6 +33,9 @@ export class FlagsStore {
     return count;
   });
   readonly window = computed(() => this.#found()?.window ?? null);
+  readonly #only = signal<CoverageWindow | null>(null);
+  /** The window whose companies and years alone are shown; null where all are. */
+  readonly only = this.#only.asReadonly();
   /** The flags to look at, by the cell that has them; those of a whole row that is there by its row. */
   readonly byCell = computed((): CellFlags => {
     const cells = new Map<string, Flag[]>();
@@ -55,6 +58,16 @@ export class FlagsStore {
   forget(): void {
     this.#running?.unsubscribe();
     this.#found.set(null);
+    this.#only.set(null);
+  }
+
+  /** Leaves out all but the largest fully covered window, as it is now. */
+  showOnlyWindow(): void {
+    this.#only.set(this.window());
+  }
+
+  showAll(): void {
+    this.#only.set(null);
   }
 
   /** Begins after what is on the screen has been drawn, and when nothing more is typed. */

@@ -16,6 +16,7 @@ import { NumberFormat } from '../../ui/number-format';
 import { rowKey } from '../editing/panel-edits';
 import { shorterCompanies, span } from '../panel-gaps';
 import { type PanelRow, columnTitle, missingIn } from '../panel-rows';
+import { withinWindow } from '../rows-within';
 import { AskDismissal } from './ask-dismissal';
 import { DismissalsStore } from './dismissals-store';
 import { alike } from './flag-groups';
@@ -75,7 +76,9 @@ export class PanelCheck {
   });
   protected readonly cells = computed((): readonly CoverageCell[] => {
     const flagged = this.#flaggedTitles();
-    return this.rows().map((row) => ({
+    const only = this.store.only();
+    const rows = only === null ? this.rows() : this.rows().filter(withinWindow(only));
+    return rows.map((row) => ({
       company: row.company,
       year: row.year,
       missing: missingIn(row, this.titles()),

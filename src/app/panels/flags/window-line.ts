@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import type { PanelColumn } from '@contract';
 import type { CoverageWindow } from '@panel-data';
 import { counted, yearsText } from '../../ui/phrases';
@@ -12,7 +12,17 @@ const mostListed = 60;
 @Component({
   selector: 'kv-window-line',
   template: `
-    <p>{{ words() }}</p>
+    <p>
+      {{ words() }}
+      @if (isAlone()) {
+        <button type="button" class="kv-link" (click)="allWanted.emit()">
+          Show all companies and years
+        </button>
+      } @else if (others().length > 0 || hasFurtherYears()) {
+        <button type="button" class="kv-link" (click)="onlyWanted.emit()">Show only these</button>
+      }
+    </p>
+    <p class="kv-visually-hidden" role="status">{{ said() }}</p>
     @if (others().length > 0) {
       <details>
         <summary>{{ others().length === 1 ? '1 is' : others().length + ' are' }} not in it</summary>
@@ -48,6 +58,11 @@ export class WindowLine {
   readonly window = input.required<CoverageWindow>();
   readonly rows = input.required<readonly PanelRow[]>();
   readonly columns = input.required<readonly PanelColumn[]>();
+  /** Whether nothing but the window is shown. */
+  readonly isAlone = input(false);
+
+  readonly onlyWanted = output();
+  readonly allWanted = output();
 
   protected readonly mostListed = mostListed;
   protected readonly words = computed(() => {
@@ -55,6 +70,13 @@ export class WindowLine {
     const who = counted(companies.length, 'company', 'companies');
     return `Fully covered: ${who}, ${yearsText(firstYear, lastYear)}, ${counted(rows, 'row')}.`;
   });
+  protected readonly hasFurtherYears = computed(() => {
+    const { firstYear, lastYear } = this.window();
+    return this.rows().some(({ year }) => year < firstYear || year > lastYear);
+  });
+  protected readonly said = computed(() =>
+    this.isAlone() ? 'Map and rows show these companies and years only.' : '',
+  );
   protected readonly others = computed(() =>
     leftOut(this.window(), this.rows(), modelColumns(this.columns())),
   );
