@@ -202,6 +202,32 @@ describe('the import page', () => {
     expect(button('Bring in as version 2')).toBeDefined();
   });
 
+  it('keeps what was entered and checked when the writing of it is cancelled', async () => {
+    await open(flowDraft);
+    await typeName('Own name');
+    await press('Check the file');
+    const sent = http.expectOne({ method: 'PUT', url: `/api/imports/${flowDraft.id}/mapping` });
+    const mapping = ImportMapping.parse(sent.request.body);
+    sent.flush({ ...checked, mapping });
+    await settled();
+    await press('Bring in as version 1');
+    http
+      .expectOne({ method: 'POST', url: `/api/imports/${flowDraft.id}/commit` })
+      .flush({ ...checked, mapping, state: 'committing', progress: { done: 0, of: 33 } });
+    await nextLook();
+    await press('Cancel');
+    http
+      .expectOne({ method: 'DELETE', url: `/api/imports/${flowDraft.id}/commit` })
+      .flush(null, { status: 204, statusText: 'No Content' });
+    await settled();
+    http.expectOne(`/api/imports/${flowDraft.id}`).flush({ ...checked, mapping });
+    await settled();
+    const name = page().querySelector<HTMLInputElement>('input[formControlName=panelName]');
+    expect(name?.value).toBe('Own name');
+    expect(button('Bring in as version 1')).toBeDefined();
+    expect(button('Check again')).toBeUndefined();
+  });
+
   it('says why the last try did not work, and offers another', async () => {
     await open({ ...checked, state: 'failed', failure: 'The disk of the database is full.' });
     expect(page().querySelector('[role=alert]')?.textContent).toContain('The disk of the database');

@@ -95,8 +95,10 @@ export class ImportPage {
         ? null
         : untracked(() => this.#startOf(table, previous?.source, previous?.value)),
   });
+  /** What the form starts from; one that comes back after rows were being written, from what was entered before. */
   protected readonly start = computed(() => {
     this.#table();
+    this.isCommitting();
     return untracked(this.entry);
   });
   readonly #read = computed(() => {
