@@ -48,5 +48,11 @@ test('a peer group is chosen from 60 candidates by filters, nearness and picture
 
   await peers.leaveRestOut('Another end market');
   await expect(peers.counts).toContainText('every reason written');
+
+  await test.step('what each choice would change is computed before it is saved', async () => {
+    const members = await peers.computeChanges();
+    await expect(peers.counts).toContainText(`${members} in,`);
+  });
+
   await peers.save();
 });

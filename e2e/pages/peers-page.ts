@@ -72,6 +72,15 @@ export class PeersPage extends CheckedPage {
     await this.#giveReason(reason);
   }
 
+  /** Has the changes computed for the choice as it stands. @returns how many members were left out in turn. */
+  async computeChanges(): Promise<number> {
+    await this.page.getByRole('button', { name: 'Compute the changes' }).click();
+    const without = this.page.getByRole('region', { name: 'Leaving each member out, table' });
+    await this.arrive(without);
+    await expect(this.page.getByText('not computed yet')).toHaveCount(0);
+    return without.locator('tbody').getByRole('row').count();
+  }
+
   async save(): Promise<void> {
     await expect(this.page.getByText('every reason written')).toBeVisible();
     await this.page.getByRole('button', { name: 'Save peer group' }).click();
