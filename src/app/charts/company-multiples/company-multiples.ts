@@ -16,6 +16,7 @@ import {
 } from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
+import { ChartReadout } from '../chart-frame/chart-readout';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { withUnit } from '../figure-formats';
 import { type GridPlace, gridMove } from '../grid-move';
@@ -37,7 +38,7 @@ let charts = 0;
 /** Every company's variables over time, a line each: a grid of figures that arrow keys walk, one tab stop. */
 @Component({
   selector: 'kv-company-multiples',
-  imports: [ChartFrame, ChartPicture],
+  imports: [ChartFrame, ChartPicture, ChartReadout],
   templateUrl: './company-multiples.html',
   styleUrls: ['../chart-marks.css', './company-multiples.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -91,6 +92,10 @@ export class CompanyMultiples {
   protected readonly asked = computed(() => {
     const place = this.#hovered() ?? (this.isFocused() ? this.#place() : null);
     return place === null ? null : this.#at(place);
+  });
+  protected readonly askedWords = computed(() => {
+    const at = this.asked();
+    return at === null ? '' : this.describe(at);
   });
 
   protected readonly summary = computed(() => {

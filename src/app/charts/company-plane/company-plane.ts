@@ -18,6 +18,7 @@ import {
 } from '@figures';
 import { NumberFormat } from '../../ui/number-format';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
+import { ChartReadout } from '../chart-frame/chart-readout';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { ValueAxes } from '../value-axes';
 import { planeMove } from './plane-move';
@@ -35,7 +36,7 @@ const leastDrag = 5;
  */
 @Component({
   selector: 'kv-company-plane',
-  imports: [ChartFrame, ChartPicture, ValueAxes],
+  imports: [ChartFrame, ChartPicture, ChartReadout, ValueAxes],
   templateUrl: './company-plane.html',
   styleUrls: ['../chart-marks.css', './company-plane.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -85,6 +86,10 @@ export class CompanyPlane {
     const hovered = this.#hovered();
     if (hovered !== null) return this.layout().points.at(hovered) ?? null;
     return this.isFocused() ? this.current() : null;
+  });
+  protected readonly askedWords = computed(() => {
+    const at = this.asked();
+    return at === null ? '' : this.label(at);
   });
   protected readonly marked = computed(() =>
     this.layout().points.filter(({ row }) => this.selected().has(row.company)),

@@ -65,6 +65,7 @@ describe('coverage map', () => {
     expect(current()).toBe('Velmara 2024: complete, flagged: capex');
     await grid.sendKeys(TestKey.RIGHT_ARROW, TestKey.DOWN_ARROW);
     expect(current()).toBe('Ardwyne 2025: no capex');
+    expect(page.querySelector('.readout')?.textContent).toBe('Ardwyne 2025: no capex');
     await grid.sendKeys(TestKey.RIGHT_ARROW, TestKey.DOWN_ARROW);
     expect(current()).toBe('Ardwyne 2025: no capex');
   });

@@ -17,6 +17,7 @@ import {
   diamondPath,
 } from '@figures';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
+import { ChartReadout } from '../chart-frame/chart-readout';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { coverageCells } from './coverage-cells';
 import { type GridPlace, gridMove } from '../grid-move';
@@ -32,7 +33,7 @@ let maps = 0;
 /** Which company has values in which year: a grid that arrow keys walk, one tab stop. */
 @Component({
   selector: 'kv-coverage-map',
-  imports: [ChartFrame, ChartPicture],
+  imports: [ChartFrame, ChartPicture, ChartReadout],
   templateUrl: './coverage-map.html',
   styleUrls: ['../chart-marks.css', './coverage-map.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -79,6 +80,10 @@ export class CoverageMap {
   protected readonly asked = computed(() => {
     const place = this.#hovered() ?? (this.isFocused() ? this.#place() : null);
     return place === null ? null : this.#at(place);
+  });
+  protected readonly askedWords = computed(() => {
+    const at = this.asked();
+    return at === null ? '' : this.describe(at);
   });
 
   readonly #counts = computed(() => {

@@ -16,6 +16,7 @@ import {
 } from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
+import { ChartReadout } from '../chart-frame/chart-readout';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats, withUnit } from '../figure-formats';
@@ -24,7 +25,7 @@ import { expectedPathRows, hasBand } from './expected-path-rows';
 /** Actual and expected value until now, and what the plans and the base would make of it. */
 @Component({
   selector: 'kv-expected-path',
-  imports: [ChartFrame, ChartPicture, ChartPoint, ChartPoints],
+  imports: [ChartFrame, ChartPicture, ChartReadout, ChartPoint, ChartPoints],
   templateUrl: './expected-path.html',
   styleUrls: ['../chart-marks.css', './expected-path.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,

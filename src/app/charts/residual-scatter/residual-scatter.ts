@@ -17,6 +17,7 @@ import {
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { lineText } from '../../ui/phrases';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
+import { ChartReadout } from '../chart-frame/chart-readout';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats, withUnit } from '../figure-formats';
 import { ValueAxes } from '../value-axes';
@@ -32,7 +33,7 @@ const reach = 24;
  */
 @Component({
   selector: 'kv-residual-scatter',
-  imports: [ChartFrame, ChartPicture, ValueAxes],
+  imports: [ChartFrame, ChartPicture, ChartReadout, ValueAxes],
   templateUrl: './residual-scatter.html',
   styleUrls: ['../chart-marks.css', './residual-scatter.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -77,6 +78,10 @@ export class ResidualScatter {
     const hovered = this.#hovered();
     if (hovered !== null) return this.#at(hovered);
     return this.isFocused() ? this.current() : null;
+  });
+  protected readonly askedWords = computed(() => {
+    const at = this.asked();
+    return at === null ? '' : this.describe(at.row);
   });
 
   protected readonly note = computed(() => {
