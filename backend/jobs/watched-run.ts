@@ -1,5 +1,5 @@
 /** How often a running job says how far it is, and looks whether somebody cancelled it. */
-const watchEveryMs = 500;
+const usualWatchMs = 500;
 
 /**
  * Waits for a run in a worker, and ends it when it was cancelled, on this server or another.
@@ -11,6 +11,7 @@ const watchEveryMs = 500;
 export async function watchedRun<Answer>(
   start: (signal: AbortSignal) => { readonly answer: Promise<Answer>; progress(): number },
   tell: (share: number) => Promise<boolean>,
+  watchEveryMs = usualWatchMs,
 ): Promise<Answer | undefined> {
   const abort = new AbortController();
   const run = start(abort.signal);

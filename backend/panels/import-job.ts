@@ -8,6 +8,9 @@ import { watchedRun } from '../jobs/watched-run';
 import type { ImportCheck, PanelMapping } from './import-draft';
 import { storeVersion } from './store-version';
 
+/** 200,000 rows are written in two or three seconds: their number is to be seen growing. */
+const watchEveryMs = 250;
+
 /** What a commit works from, as it stood when the job took it up. */
 interface Commit {
   readonly workspaceId: string;
@@ -84,6 +87,7 @@ export class ImportJob {
           tx.imports.saveProgress(commitId, progress),
         );
       },
+      watchEveryMs,
     );
   }
 

@@ -19,7 +19,7 @@ import {
 import { type Observable, exhaustMap, takeWhile, timer } from 'rxjs';
 import { ApiClient, type Sending, addressOf } from './api-client';
 
-const lookEveryMs = 700;
+const lookEveryMs = 300;
 
 /** Imports and panel versions. */
 @Injectable({ providedIn: 'root' })
