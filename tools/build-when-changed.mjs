@@ -20,6 +20,7 @@ const parts = [
       'backend/contract',
       'backend/stats/prediction',
       'backend/figures',
+      'backend/panel-data',
     ],
     command: ['tools/build-browser.mjs'],
   },
