@@ -101,8 +101,9 @@ const mostNames = 3;
     mat-dialog-content {
       display: grid;
     }
+    /* Room for the label that stands on the first box's edge. */
     mat-form-field {
-      margin-block-start: 8px;
+      margin-block-start: 12px;
     }
     p {
       min-block-size: 20px;

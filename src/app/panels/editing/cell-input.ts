@@ -3,7 +3,7 @@ import type { ShownProblem } from '../../ui/problem';
 import { figureAt, leadingColumns } from '../grid-places';
 import type { PanelRow } from '../panel-rows';
 import { blockCommand } from './block-keys';
-import { rangeOf } from './cell-block';
+import { type CellBlock, rangeOf } from './cell-block';
 import { type ShownGrid, copiedText } from './copy-cells';
 import type { GridBlock } from './grid-block';
 import { type GivenCells, emptiedCells, sizeWords } from './grid-selection';
@@ -96,8 +96,12 @@ export class CellInput {
     given({ changes: emptiedCells(rangeOf(block), shown()), done });
   }
 
-  #blockAt(event: Event) {
-    return isAtCell(event) ? (this.ground.block()?.block() ?? null) : null;
+  #blockAt(event: Event): CellBlock | null {
+    const block = this.ground.block();
+    if (block === null || !isAtCell(event)) return null;
+    // The grid tells of its focus a moment late: a quick hand is ahead of it.
+    block.followFocus();
+    return block.block();
   }
 }
 

@@ -11,7 +11,8 @@ import { figureWords, shiftOf } from './shown-figure';
     @if (cell(); as cell) {
       <p>
         @if (value(); as value) {
-          <b>{{ value.title }}</b> <span class="kv-number">{{ value.words }}</span> {{ value.unit }}
+          <b>{{ value.title }}</b>&ngsp;<span class="kv-number">{{ value.words }}</span>
+          {{ value.unit }}
           @if (value.before; as before) {
             <span>(saved: {{ before }})</span>
           }
@@ -38,6 +39,7 @@ import { figureWords, shiftOf } from './shown-figure';
     :host {
       display: flex;
       flex-wrap: wrap;
+      align-items: baseline;
       gap: 0 16px;
       min-block-size: 24px;
       color: var(--kv-soft-ink);

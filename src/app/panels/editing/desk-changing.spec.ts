@@ -84,7 +84,7 @@ describe('the figures of a panel on the desk', () => {
       desk.fixture.destroy();
       expect(await unsaved.mayLeave()).toBeTrue();
       desk = await DeskGridHarness.open();
-      expect(desk.words).toContain('1 cell that were changed before and not saved are back');
+      expect(desk.words).toContain('Changed before and not saved yet: 1 cell.');
       expect(desk.edited[0].values[1]).toBe(8);
     });
   });
