@@ -56,17 +56,24 @@ export class FilesRepository {
       .execute();
   }
 
-  /** The content is stored uncompressed, so that PostgreSQL reads a slice without the rest. */
+  /**
+   * The content is stored uncompressed, so that PostgreSQL reads a slice without the rest. Base64 takes half the time of
+   * the hexadecimal digits that bytes travel as.
+   */
   async #content({ id, byteSize }: { id: string; byteSize: number }): Promise<Buffer> {
     const content = Buffer.alloc(byteSize);
     for (let start = 0; start < byteSize; start += sliceBytes) {
       const slice = await this.db
         .selectFrom('storedFile')
-        .select(sql<Buffer>`substring(content from ${start + 1} for ${sliceBytes})`.as('bytes'))
+        .select(
+          sql<string>`encode(substring(content from ${start + 1} for ${sliceBytes}), 'base64')`.as(
+            'bytes',
+          ),
+        )
         .where('workspaceId', '=', this.workspaceId)
         .where('id', '=', id)
         .executeTakeFirstOrThrow();
-      slice.bytes.copy(content, start);
+      content.write(slice.bytes, start, 'base64');
     }
     return content;
   }
