@@ -15,7 +15,7 @@ const measures: readonly { readonly value: Measure; readonly words: string }[] =
 @Component({
   selector: 'kv-other-columns',
   templateUrl: './other-columns.html',
-  styleUrl: './entries.css',
+  styleUrls: ['./entries.css', './other-columns.css'],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class OtherColumns {
