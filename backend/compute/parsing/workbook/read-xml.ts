@@ -25,7 +25,7 @@ export async function readXml(
   parser.on('doctype', () => {
     throw new FileRefusal(
       'xlsx_active_content',
-      `expected a workbook without document type definitions; found one in ${path}`,
+      `expected a workbook without document type definitions; found one in ${path}. Save a copy that holds values only and choose that file`,
     );
   });
   parser.on('error', (error) => {

@@ -70,11 +70,13 @@ describe('bringing in a file', () => {
         type: problemType('unreadable-file'),
         title: 'The file cannot be read',
         status: 422,
-        code: 'xlsx_active_content',
+        code: 'zip_limit',
+        detail: 'expected at most 200 MB of unpacked sheets',
       },
       { status: 422, statusText: 'Unprocessable Content' },
     );
     await settled();
-    expect(words()).toContain('Save the workbook without macros');
+    expect(words()).toContain('Expected at most 200 MB of unpacked sheets.');
+    expect(words()).toContain('Save the one sheet that is needed');
   });
 });

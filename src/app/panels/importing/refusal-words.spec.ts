@@ -18,7 +18,6 @@ describe('words of a refused file', () => {
       'too_large',
       'zip_limit',
       'sheet_limit',
-      'xlsx_active_content',
       'csv_invalid',
       'parse_timeout',
       'parse_memory',
@@ -27,6 +26,15 @@ describe('words of a refused file', () => {
     const words = codes.map((code) => refusalWords(refusal({ code })).whatToDo ?? '');
     expect(words.every((text) => text.length > 20)).toBeTrue();
     expect(new Set(words).size).toBe(codes.length);
+  });
+
+  it('are sentences, and say nothing twice of a workbook whose answer says what to save', () => {
+    const detail = 'expected a workbook of plain cells; found macros. Save a copy and choose that';
+    const words = refusalWords(refusal({ code: 'xlsx_active_content', detail }));
+    expect(words.detail).toBe(
+      'Expected a workbook of plain cells; found macros. Save a copy and choose that.',
+    );
+    expect(words.whatToDo).toBeUndefined();
   });
 
   it('leave a problem of another kind as it is', () => {

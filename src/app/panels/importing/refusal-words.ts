@@ -1,10 +1,14 @@
 import type { ApiProblem } from '../../api/api-problem';
+import { sentence } from '../../ui/phrases';
 import type { ShownProblem } from '../../ui/problem';
 
 const megabyte = 1024 * 1024;
 export const mostMegabytes = { csv: 40, xlsx: 10 } as const;
 
-/** What to do about a file that the server does not take, by the code in its answer. */
+/**
+ * What to do about a file that the server does not take, by the code in its answer. Of a workbook with macros, links or
+ * a password the answer itself says what to save instead.
+ */
 const advice: Readonly<Record<string, string>> = {
   type_not_allowed:
     'Save the table as CSV or as an Excel workbook (.xlsx) and choose that file. Older workbooks (.xls) and those with macros (.xlsm) are not taken.',
@@ -13,21 +17,26 @@ const advice: Readonly<Record<string, string>> = {
     'The workbook unpacks to more than is read. Save the one sheet that is needed as a workbook of its own, or as CSV.',
   sheet_limit:
     'A table may have 200,000 rows and 200 columns. Bring it in in parts, or leave out columns that the panel does not need.',
-  xlsx_active_content:
-    'Save the workbook without macros, embedded objects and links to other files, and without a password, and choose it again.',
   csv_invalid:
     'Save the table as CSV in UTF-8, with one delimiter and quotes around texts that hold it, and choose it again.',
   parse_timeout: 'Reading took too long. Save the one sheet that is needed as CSV and choose that.',
   parse_memory:
     'Reading took too much memory. Save the one sheet that is needed as CSV and choose that.',
-  quota: 'Discard imports that are not needed, or wait for one that is under way.',
+  quota: 'Discard imports that wait on the Panel page, or wait for one that is under way.',
 };
 
 /** The problem in the reader's terms, with what to do. */
 export function refusalWords(problem: ApiProblem): ShownProblem {
   const code = codeOf(problem);
   const whatToDo = Object.hasOwn(advice, code) ? advice[code] : undefined;
-  return whatToDo === undefined ? problem.shown : { ...problem.shown, whatToDo };
+  const { detail, ...shown } = problem.shown;
+  return {
+    ...shown,
+    ...(detail === undefined
+      ? {}
+      : { detail: sentence(detail.charAt(0).toUpperCase() + detail.slice(1)) }),
+    ...(whatToDo === undefined ? {} : { whatToDo }),
+  };
 }
 
 /** Why a file is not sent at all; null for one that is. */
