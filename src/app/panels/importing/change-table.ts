@@ -6,9 +6,9 @@ import {
   input,
   linkedSignal,
 } from '@angular/core';
-import type { CellDifference, ImportChanges } from '@contract';
+import type { CellDifference, ImportChanges, ImportMapping } from '@contract';
 import { NumberFormat } from '../../ui/number-format';
-import { changeWords } from './check-words';
+import { changeWords, moneyWords } from './check-words';
 
 const shownAtOnce = 50;
 
@@ -26,6 +26,12 @@ const rowWords = {
     @if (changes().listed.length > 0) {
       <div class="kv-table-scroll" tabindex="0" role="region" aria-label="What would change">
         <table class="kv-table">
+          <caption>
+            Figures as the panel would hold them;
+            {{
+              money()
+            }}
+          </caption>
           <thead>
             <tr>
               <th scope="col">Company</th>
@@ -69,7 +75,10 @@ export class ChangeTable {
 
   readonly changes = input.required<ImportChanges>();
 
+  readonly mapping = input.required<Partial<ImportMapping>>();
+
   protected readonly rowWords = rowWords;
+  protected readonly money = computed(() => moneyWords(this.mapping()));
   protected readonly words = computed(() => changeWords(this.changes()));
   protected readonly limit = linkedSignal({
     source: this.changes,

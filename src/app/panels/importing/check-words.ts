@@ -1,4 +1,4 @@
-import type { ImportChanges, ImportCheck, ImportReply } from '@contract';
+import type { ImportChanges, ImportCheck, ImportMapping, ImportReply } from '@contract';
 import { counted, listed } from '../../ui/phrases';
 import { companiesAndYears } from '../panel-finding';
 
@@ -42,6 +42,13 @@ export function changeWords({
     `${counted(removedRows, 'row')} ${removedRows === 1 ? 'goes' : 'go'}`,
     `${counted(changedCells, 'cell')} ${changedCells === 1 ? 'changes' : 'change'}`,
   ])}.`;
+}
+
+/** `money in EUR millions`, and at which prices where that was asked for. */
+export function moneyWords({ currency, unit, conversion }: Partial<ImportMapping>): string {
+  const prices = conversion?.prices;
+  const real = prices ? ` at prices of ${prices.baseYear}` : '';
+  return `money in ${currency ?? ''} ${unit ?? ''}${real}`;
 }
 
 /** The finding of the page about an import, by what is done with it. */

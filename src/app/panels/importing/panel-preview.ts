@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
 import type { ImportCheck, ImportMapping } from '@contract';
 import { NumberFormat } from '../../ui/number-format';
+import { moneyWords } from './check-words';
 
 /** The first rows as the panel would hold them: converted, renamed, in calendar years. */
 @Component({
@@ -52,12 +53,9 @@ export class PanelPreview {
   readonly check = input.required<ImportCheck>();
   readonly mapping = input.required<Partial<ImportMapping>>();
 
-  protected readonly caption = computed(() => {
-    const { currency, unit, conversion } = this.mapping();
-    const prices = conversion?.prices;
-    const real = prices ? ` at prices of ${prices.baseYear}` : '';
-    return `First rows as the panel would hold them; money in ${currency ?? ''} ${unit ?? ''}${real}`;
-  });
+  protected readonly caption = computed(
+    () => `First rows as the panel would hold them; ${moneyWords(this.mapping())}`,
+  );
   protected readonly columns = computed(() => {
     const { marketValue, capex, bookEquity, others = [] } = this.mapping();
     return [marketValue ?? '', capex ?? '', bookEquity ?? '', ...others];

@@ -236,6 +236,7 @@ describe('spellings and changes', () => {
     const host = fixture.nativeElement as HTMLElement;
     const cell = { company: 'Aldren SE', year: 2020, column: 'mv' } as const;
     const none = { column: null, before: null, after: null };
+    fixture.componentRef.setInput('mapping', { currency: 'EUR', unit: 'millions' });
     fixture.componentRef.setInput('changes', {
       panelVersionId: uuid(1),
       number: 3,
@@ -255,6 +256,7 @@ describe('spellings and changes', () => {
       ['Aldren SE', '2020', 'mv', '12.00', 'n/a'],
       ['Aldren SE', '2021', 'row comes', '', ''],
     ]);
+    expect(host.querySelector('caption')?.textContent).toContain('money in EUR millions');
     expect(host.textContent).toContain('699 more are counted above');
   });
 });

@@ -8,11 +8,13 @@ import { sentence } from '../../ui/phrases';
   imports: [Mark],
   template: `
     @if (problems().length > 0) {
-      <ul class="problems" role="alert">
-        @for (words of problems(); track $index) {
-          <li><kv-mark kind="error" />{{ asSentence(words) }}</li>
-        }
-      </ul>
+      <div role="alert">
+        <ul class="problems">
+          @for (words of problems(); track $index) {
+            <li><kv-mark kind="error" />{{ asSentence(words) }}</li>
+          }
+        </ul>
+      </div>
     }
   `,
   styleUrl: './entries.css',
