@@ -122,7 +122,7 @@ export class CarryDialog {
       [...left.cells.values()].map(({ place }) => this.question.from.columns[place.column].name),
     );
     return [
-      ...(along === '' ? [] : [`Carried: ${along}, as version ${number} had them.`]),
+      ...(along === '' ? [] : [`Carried: ${along}, unchanged in version ${version.number}.`]),
       ...(settled === 0
         ? []
         : [`In version ${version.number} just so already: ${counted(settled, 'change')}.`]),

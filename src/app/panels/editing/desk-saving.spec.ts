@@ -107,6 +107,7 @@ describe('the changes of a panel on the desk', () => {
       );
       await desk.settled();
       expect(dialog.textContent).toContain('Mira Oduya made version 5');
+      expect(desk.named('Save version 5', dialog).disabled).toBeTrue();
       expect(desk.named('Carry my 1 cell onto the newer version', dialog)).toBeDefined();
       desk.named('Go on changing', dialog).click();
       await desk.until(() => document.querySelector('kv-save-dialog') === null);
@@ -192,7 +193,7 @@ describe('the changes of a panel on the desk', () => {
       for (const words of [
         'Carry 2 cells onto the newer version',
         'Version 5 by Mira Oduya: “Third look”',
-        'Carried: 1 cell, as version 4 had them.',
+        'Carried: 1 cell, unchanged in version 5.',
         'In conflict: 1 change; choose below.',
       ])
         expect(said).toContain(words);
