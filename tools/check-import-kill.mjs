@@ -13,7 +13,7 @@ const root = fileURLToPath(new URL('..', import.meta.url));
 const imports = 20;
 const rows = 40_000;
 /** The last moment at which the server is killed: about as long as a commit of these rows takes. */
-const longestMs = 4000;
+const longestMs = 1500;
 /** Longest that the database may take to notice that a server is gone: a statement's own limit and more. */
 const longestNoticeMs = 150_000;
 
