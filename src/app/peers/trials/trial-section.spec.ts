@@ -96,7 +96,7 @@ describe('what each choice would change, on the page', () => {
     expect(words()).toContain('interval of the standing starts to hold zero');
     expect(words()).toContain('slope of capex changes sign');
     expect(words()).toContain('A regressor never changes within a company. (outlay)');
-    expect(words()).toContain('These do not move places');
+    expect(words()).toContain('None of these moves places');
     expect(page.querySelector('kv-caution-line')).not.toBeNull();
     expect(button('Compute for this choice')).toBeUndefined();
   });

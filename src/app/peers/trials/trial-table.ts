@@ -22,7 +22,7 @@ interface Header {
   readonly text: string;
 }
 
-const nothingToSay = 'These do not move places, signs or whether zero is in the interval.';
+const nothingToSay = 'None of these moves places, a sign, or zero in or out of the interval.';
 
 /** What leaving each member out, or taking each candidate in, would change: one row each, in an order to choose. */
 @Component({
@@ -64,6 +64,20 @@ export class TrialTable {
       text: `Slope of ${word}, change`,
     })),
   );
+  /** Digits that align the changes of a column. */
+  protected readonly digits = computed(() => {
+    const changes = this.changes();
+    const moved = changes.map(({ change }) => this.changeValue(change));
+    return {
+      change: this.#numbers.columnDigits(moved, this.changeKind()),
+      slopes: this.regressors().map((_, index) =>
+        this.#numbers.columnDigits(
+          changes.map(({ slopes }) => slopes.at(index)?.change ?? null),
+          'plain',
+        ),
+      ),
+    };
+  });
   protected readonly rows = computed(() => ordered(this.changes(), this.#order()));
   protected readonly columnCount = computed(() => this.slopeHeaders().length + 5);
   /** Said once under a table of figures in which no row has a mark. */
