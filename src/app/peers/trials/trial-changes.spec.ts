@@ -15,10 +15,27 @@ describe('what each choice would change', () => {
     expect(first.marks).toEqual([]);
   });
 
+  it('is not marked where every place stays possible, or an end moves by the one company alone', () => {
+    const marks = (before: [number, number], after: [number, number], ranked: number) =>
+      trialChanges(
+        exampleTrial({
+          chosen: fitted([100, 20, 180], before, 0.4),
+          without: [
+            { company: 'Company 2', outcome: fitted([110, 30, 190], after, 0.4, { ranked }) },
+          ],
+        }),
+      ).without[0].marks;
+    expect(marks([1, 5], [1, 4], 4)).toEqual([]);
+    expect(marks([2, 5], [1, 4], 4)).toEqual([]);
+    expect(marks([1, 5], [1, 6], 6)).toEqual([]);
+    expect(marks([2, 5], [2, 3], 4)).toEqual(['places move']);
+    expect(marks([2, 4], [3, 4], 4)).toEqual(['places move']);
+  });
+
   it('is marked in words where a sign turns, zero comes into the interval or places move', () => {
     const [, third, fourth, fifth] = trialChanges(exampleTrial()).without;
     expect(third.marks).toEqual(['interval of the standing starts to hold zero', 'places move']);
-    expect(fourth.marks).toEqual(['slope of capex changes sign', 'places move']);
+    expect(fourth.marks).toEqual(['slope of capex changes sign']);
     expect(fifth.why).toBe('A regressor never changes within a company. (outlay)');
     const back = trialChanges(
       exampleTrial({

@@ -119,9 +119,14 @@ function zeroMarks(after: Bounded | null, before: Bounded | null): readonly stri
   ];
 }
 
+/** That there is one company fewer, or more, alone moves an end by one place: nobody has to notice that. */
 function placeMarks(after: Places | null, before: Places | null): readonly string[] {
   if (after === null || before === null) return [];
-  return after.first === before.first && after.last === before.last ? [] : ['places move'];
+  const oneCompany = after.of - before.of;
+  const isExplained = (moved: number): boolean => moved === 0 || moved === oneCompany;
+  return isExplained(after.first - before.first) && isExplained(after.last - before.last)
+    ? []
+    : ['places move'];
 }
 
 /** Null where there is no interval. */
