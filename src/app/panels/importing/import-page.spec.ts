@@ -202,6 +202,19 @@ describe('the import page', () => {
     expect(button('Bring in as version 2')).toBeDefined();
   });
 
+  it('leads the focus on to what the check found, since its button goes', async () => {
+    await open(flowDraft);
+    await press('Check the file');
+    http.expectOne({ method: 'PUT', url: `/api/imports/${flowDraft.id}/mapping` }).flush({
+      ...checked,
+      mapping: flowDraft.mapping,
+    });
+    await settled();
+    const outcome = page().querySelector('#check');
+    expect(outcome?.textContent).toBe('What will come in?');
+    expect(document.activeElement).toBe(outcome);
+  });
+
   it('keeps what was entered and checked when the writing of it is cancelled', async () => {
     await open(flowDraft);
     await typeName('Own name');

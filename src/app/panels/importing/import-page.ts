@@ -1,6 +1,9 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  type ElementRef,
+  Injector,
+  afterNextRender,
   computed,
   effect,
   inject,
@@ -69,6 +72,7 @@ const noProblems = { columns: [], currencies: [], prices: [], fiscalYears: [] };
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class ImportPage {
+  readonly #injector = inject(Injector);
   readonly #router = inject(Router);
   readonly #confirm = inject(Confirm);
   readonly #remembered = inject(RememberedMapping);
@@ -78,6 +82,7 @@ export class ImportPage {
   readonly importId = input.required<string>();
 
   private readonly form = viewChild(MappingForm);
+  private readonly outcome = viewChild<ElementRef<HTMLElement>>('outcome');
   readonly #draft = computed(() => {
     const view = this.store.view();
     return view.kind === 'ready' ? view.draft : null;
@@ -177,10 +182,12 @@ export class ImportPage {
     return `${counted(count, 'finding')} ${count === 1 ? 'keeps' : 'keep'} the file from becoming a panel.`;
   }
 
-  protected check(): void {
+  protected async check(): Promise<void> {
     if (this.form()?.validate() !== true) return;
     const { mapping } = this.#read();
-    if (mapping !== null) void this.store.check(this.importId(), mapping);
+    if (mapping === null || !(await this.store.check(this.importId(), mapping))) return;
+    // The button that was pressed is gone: the focus goes on to what it was pressed for.
+    afterNextRender(() => this.outcome()?.nativeElement.focus(), { injector: this.#injector });
   }
 
   protected async discard(): Promise<void> {

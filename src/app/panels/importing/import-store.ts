@@ -72,13 +72,15 @@ export class ImportStore {
     });
   }
 
-  /** Reads the whole file with these columns and shows what was found. */
-  async check(importId: string, mapping: ImportMapping): Promise<void> {
-    await this.#run('checking', async () => {
+  /** Reads the whole file with these columns and shows what was found. @returns whether it was done. */
+  async check(importId: string, mapping: ImportMapping): Promise<boolean> {
+    const done = await this.#run('checking', async () => {
       const draft = await firstValueFrom(this.#api.check(importId, mapping));
       this.#remembered.remember(draft.headers, mapping);
       this.#show(draft);
+      return true;
     });
+    return done ?? false;
   }
 
   /** Begins to write the panel version, and follows that to its end. */
