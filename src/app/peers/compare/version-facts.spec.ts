@@ -64,7 +64,12 @@ describe('two versions side by side', () => {
       standing: { estimate: Math.log(1.342), standardError: null, low: 0.1, high: 0.5 },
       rankSet: [1, 1],
     });
-    const lines = versionFits(plain, sideVersion(second.group, { fits: [logs] }), numbers);
+    const { unit, lines } = versionFits(
+      plain,
+      sideVersion(second.group, { fits: [logs] }),
+      numbers,
+    );
+    expect(unit).toBe('');
     expect(
       lines.map(({ name, version, standing, places }) => [name, version, standing, places]),
     ).toEqual([
@@ -73,6 +78,8 @@ describe('two versions side by side', () => {
     ]);
     expect(lines[0].model).toBe('capex and book equity, CR2 at 95 %');
     expect(lines[1].model).toBe('capex and book equity, with employees, in logs, CR2 at 95 %');
-    expect(versionFits(plain, plain, numbers).length).toBe(1);
+    const alone = versionFits(plain, plain, numbers);
+    expect(alone.unit).toBe('EUR m');
+    expect(alone.lines.map(({ standing }) => standing)).toEqual(['1,811 (1,172 to 2,450)']);
   });
 });

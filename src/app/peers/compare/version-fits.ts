@@ -11,19 +11,24 @@ export interface FitLine {
   readonly name: string;
   readonly version: number;
   readonly model: string;
-  /** With its interval; money with its unit, since panels may differ in theirs. */
+  /** With its interval; money with its unit where that does not stand in the header. */
   readonly standing: string;
   readonly places: string;
 }
 
-/** The fits of both versions, those of the first one first. Money is shown in the unit of the screen. */
-export function versionFits(
-  a: SideVersion,
-  b: SideVersion,
-  numbers: NumberFormat,
-): readonly FitLine[] {
+/** The fits of both versions with what all their standings are in; empty where they differ. */
+export interface VersionFits {
+  readonly unit: string;
+  readonly lines: readonly FitLine[];
+}
+
+/** Those of the first version first. Money is shown in the unit of the screen. */
+export function versionFits(a: SideVersion, b: SideVersion, numbers: NumberFormat): VersionFits {
   const sides = a.group.id === b.group.id ? [a] : [a, b];
-  return sides.flatMap((side) =>
+  const isOneUnit =
+    a.panel.currency === b.panel.currency &&
+    sides.every(({ fits }) => fits.every(({ form }) => form === 'levels'));
+  const lines = sides.flatMap((side) =>
     side.fits.map((fit) => ({
       id: fit.id,
       name: shortHash(fit.hash),
@@ -34,13 +39,14 @@ export function versionFits(
         ...modelNotes(fit),
         `${covarianceShort(fit.slopes)} at ${confidenceText(fit.confidence)}`,
       ].join(', '),
-      standing: standingText(side, fit, { firstUnit: a.panel.unit, numbers }),
+      standing: standingText(side, fit, { firstUnit: a.panel.unit, hasUnit: !isOneUnit, numbers }),
       places:
         fit.rankSet === null
           ? 'n/a'
           : `${fit.rankSet[0] === fit.rankSet[1] ? fit.rankSet[0] : fit.rankSet.join(' to ')} of ${fit.companies ?? 'n/a'}`,
     })),
   );
+  return { unit: isOneUnit ? numbers.unitLabel() : '', lines };
 }
 
 function standingText(
@@ -48,8 +54,13 @@ function standingText(
   { standing, form }: SideVersion['fits'][number],
   {
     firstUnit,
+    hasUnit,
     numbers,
-  }: { readonly firstUnit: SideVersion['panel']['unit']; readonly numbers: NumberFormat },
+  }: {
+    readonly firstUnit: SideVersion['panel']['unit'];
+    readonly hasUnit: boolean;
+    readonly numbers: NumberFormat;
+  },
 ): string {
   if (standing === null) return 'n/a';
   const shown = asDifference(standing, form);
@@ -60,5 +71,6 @@ function standingText(
     low: shown.low === null ? null : shown.low * ratio,
     high: shown.high === null ? null : shown.high * ratio,
   };
-  return `${numbers.interval(scaled, 'money')} ${unitText(panel.currency, numbers.unit())}`;
+  const text = numbers.interval(scaled, 'money');
+  return hasUnit ? `${text} ${unitText(panel.currency, numbers.unit())}` : text;
 }

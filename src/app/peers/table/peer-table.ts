@@ -71,6 +71,10 @@ export class PeerTable {
       this.without()?.kind,
     ),
   );
+  /** Money, or of a fit in logs a percentage. */
+  protected readonly standingUnit = computed(() =>
+    this.without()?.kind === 'money' ? this.#numbers.unitLabel() : '%',
+  );
   protected readonly columnCount = computed(
     () => 3 + (this.without() === null ? 0 : 1) + (this.isReadOnly() ? 0 : 1),
   );
@@ -81,7 +85,7 @@ export class PeerTable {
       ...(without === null
         ? []
         : [
-            `the standing with all peers is ${this.#numbers.interval(without.standing, without.kind)} by fit ${without.fitName}`,
+            `the standing with all peers is ${this.#numbers.interval(without.standing, without.kind)}${without.kind === 'money' ? ` ${this.#numbers.unitLabel()}` : ''} by fit ${without.fitName}`,
           ]),
     ]
       .map((part, place) => (place === 0 ? part.charAt(0).toUpperCase() + part.slice(1) : part))
