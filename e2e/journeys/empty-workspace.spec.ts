@@ -8,8 +8,14 @@ test('an empty workspace opens the sample panel in one step and takes it in', as
   await expect(page).toHaveURL(/\/panel$/);
   const empty = await new PanelPage(page).openEmpty();
   await expect(empty.fileChooser).toBeVisible();
-  const sample = await empty.openSample();
-  await expect(sample.heading).toContainText('none keeps the file out');
+  await empty.chooseRefusedFile({
+    name: 'figures.xlsm',
+    mimeType: 'application/vnd.ms-excel',
+    buffer: Buffer.from('x'),
+  });
+  await expect(empty.alerts).toContainText('Expected a .csv or an .xlsx file; found figures.xlsm.');
+  await expect((await empty.openSample()).heading).toContainText('none keeps the file out');
+  const sample = await (await empty.openEmpty()).continueWith('sample-panel.csv');
   await sample.commit();
   const panel = await new PanelPage(page).read();
   await expect(panel.heading).toContainText(

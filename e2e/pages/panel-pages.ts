@@ -38,6 +38,20 @@ export class PanelPage extends CheckedPage {
     return this.chooseFile(file);
   }
 
+  /** Chooses a file that is not read: the page says why. */
+  async chooseRefusedFile(file: GivenFile): Promise<void> {
+    await this.page.getByLabel('CSV file or workbook').setInputFiles(file);
+    await this.arrive(this.alerts);
+  }
+
+  /** Goes on with an import that was left half-way. */
+  async continueWith(fileName: string): Promise<ImportPage> {
+    const link = this.page.getByRole('link', { name: `Continue with ${fileName}`, exact: true });
+    await this.arrive(link);
+    await link.click();
+    return new ImportPage(this.page).read();
+  }
+
   async openSample(): Promise<ImportPage> {
     await this.page.getByRole('button', { name: 'Open the sample panel' }).click();
     return new ImportPage(this.page).read();
