@@ -101,9 +101,9 @@ const mostNames = 3;
     mat-dialog-content {
       display: grid;
     }
-    /* Room for the label that stands on the first box's edge. */
+    /* Room for the label on the box's edge; a margin of the first one would be taken away. */
     mat-form-field {
-      margin-block-start: 12px;
+      padding-block-start: 8px;
     }
     p {
       min-block-size: 20px;
