@@ -74,7 +74,9 @@ async function serve() {
   const server = await launchServer(root, { url, log, env, signal });
   undo.push(server.stop);
   const accounts = await seedDemo(root, { ...env, KINVALE_SEED_DEMO: '1' }, signal);
-  console.log(JSON.stringify({ url, stubUrl: stub.url, accounts }));
+  const adminUrl = new URL(cluster.adminUrl);
+  adminUrl.pathname = '/kinvale';
+  console.log(JSON.stringify({ url, stubUrl: stub.url, adminUrl: adminUrl.href, accounts }));
 
   const ended = await Promise.race([asked, server.exited, stub.exited]);
   if (ended === undefined || signal.aborted) return;

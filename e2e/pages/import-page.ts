@@ -105,4 +105,15 @@ export class ImportPage extends CheckedPage {
   async commit(): Promise<void> {
     await this.page.getByRole('button', { name: /^Bring in as version/ }).click();
   }
+
+  /** How many rows are written, while they are. */
+  get progress(): Locator {
+    return this.page.getByRole('status').filter({ hasText: 'Writing rows' });
+  }
+
+  /** Ends the writing; the import stands there as it was checked. */
+  async cancelCommit(): Promise<void> {
+    await this.page.getByRole('button', { name: 'Cancel', exact: true }).click();
+    await this.arrive(this.page.getByRole('heading', { name: 'Bring it in' }));
+  }
 }

@@ -4,6 +4,14 @@ import { expect } from './checked-page';
 
 /** The panel page where its cells are changed: grid, flags, saving, versions. */
 export class PanelDesk extends PanelPage {
+  /** The table of figures; the coverage map is a grid too. */
+  readonly rowsGrid: Locator = this.page.getByRole('region', { name: 'Rows' }).getByRole('grid');
+
+  /** The row at a place of the table, the first being 1, while it is drawn. */
+  rowAt(place: number): Locator {
+    return this.rowsGrid.locator(`[role=row][aria-rowindex="${place + 1}"]`).first();
+  }
+
   /** The flags of a kind, by the words of its head: `1 figure jumps …`. */
   flags(words: RegExp): Locator {
     return this.page.getByRole('heading', { level: 3, name: words });
