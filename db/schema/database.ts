@@ -7,8 +7,14 @@ import type {
   SignInThrottleTable,
   WorkspaceTable,
 } from './accounts-tables';
-import type { EditionTable } from './edition-table';
+import type {
+  EditionAccessTable,
+  EditionCommentTable,
+  EditionTable,
+  EditionWarningOpenedTable,
+} from './edition-table';
 import type { FitBootstrapTable, FitEvidenceTable, FitTable, JobTicketTable } from './fit-tables';
+import type { MailTable } from './mail-table';
 import type {
   FlagDismissalTable,
   ImportDraftTable,
@@ -27,6 +33,9 @@ export interface Database {
   activity: ActivityTable;
   billingAccount: BillingAccountTable;
   edition: EditionTable;
+  editionAccess: EditionAccessTable;
+  editionComment: EditionCommentTable;
+  editionWarningOpened: EditionWarningOpenedTable;
   fit: FitTable;
   fitBootstrap: FitBootstrapTable;
   fitEvidence: FitEvidenceTable;
@@ -34,6 +43,7 @@ export interface Database {
   importDraft: ImportDraftTable;
   invitation: InvitationTable;
   jobTicket: JobTicketTable;
+  mail: MailTable;
   membership: MembershipTable;
   panel: PanelTable;
   panelCompany: PanelCompanyTable;

@@ -1,0 +1,15 @@
+import type { Generated, JSONColumnType } from 'kysely';
+
+export interface MailTable {
+  workspaceId: string;
+  id: string;
+  eventKey: string;
+  recipient: string;
+  template: string;
+  detail: JSONColumnType<object>;
+  state: 'waiting' | 'sent' | 'refused';
+  attempts: Generated<number>;
+  lastError: string | null;
+  createdAt: Generated<Date>;
+  sentAt: Date | null;
+}
