@@ -15,6 +15,7 @@ export * from './number-text';
 export type { PlaneAxisWords } from './plane-axis';
 export * from './residual-groups-layout';
 export * from './residual-scatter-layout';
+export * from './sentence-text';
 export * from './slope-intervals-layout';
 export * from './standing-chart-layout';
 export { wrappedWords } from './text-width';
