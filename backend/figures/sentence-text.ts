@@ -11,10 +11,7 @@ export interface WrittenFigure {
 
 /** Words, the unit, the own company's name and figures, in the order they are read. */
 export type SentencePart =
-  | { readonly text: string }
-  | { readonly unit: true }
-  | { readonly own: string }
-  | WrittenFigure;
+  { readonly text: string } | { readonly unit: true } | { readonly own: string } | WrittenFigure;
 
 /** In which unit a sentence is written. */
 export interface SentenceSetting {
