@@ -1,3 +1,4 @@
+export { atConfidence } from './at-confidence';
 export {
   type Decomposition,
   type DecompositionFromLast,
