@@ -33,6 +33,7 @@ export {
   type PlanYear,
   type ReadableYear,
 } from './plan-regressors';
+export { percentile } from './percentile';
 export { type PredictedYear, type PredictRequest, predict } from './predict';
 export {
   type ObservedRange,
