@@ -7,6 +7,11 @@ export {
   decompositionToBase,
   differenceOfPlans,
 } from './decomposition';
+export {
+  differenceOfScenarios,
+  type ScenarioDifference,
+  type ScenarioSide,
+} from './difference-of-scenarios';
 export { differenceToPeer, type PeerDifference, peersMean } from './difference-to-peer';
 export { type ExpectedValue, expectedValue, type LogFigures } from './expected-value';
 export {
@@ -47,5 +52,12 @@ export {
 } from './prediction-basis';
 export { quadraticForm } from './quadratic-form';
 export { type Reach, type ReachRequest, reachValue } from './reach-value';
+export {
+  type RegressorSensitivity,
+  type Sensitivity,
+  sensitivity,
+  type SensitivityEnd,
+  type SensitivityRequest,
+} from './sensitivity';
 export { contrastDegreesOfFreedom, differenceToBase, varianceTolerance } from './slope-contrast';
 export { type TQuantile, twoSidedQuantile } from './two-sided-quantile';
