@@ -1,3 +1,4 @@
+export { applyRules, type RuledPlan, type RuleReason, type RuleRequest } from './apply-rules';
 export { atConfidence } from './at-confidence';
 export {
   type Decomposition,
@@ -39,6 +40,7 @@ export {
   type ReadableYear,
 } from './plan-regressors';
 export { percentile } from './percentile';
+export type { PlanMove, PlanRule, TotalSpread } from './plan-rule';
 export { type PredictedYear, type PredictRequest, predict } from './predict';
 export {
   type ObservedRange,
