@@ -53,6 +53,7 @@ export {
   yearEffectOrder,
 } from './prediction-basis';
 export { quadraticForm } from './quadratic-form';
+export { randomWords, seededWords } from './random-words';
 export { type Reach, type ReachRequest, reachValue } from './reach-value';
 export {
   type RegressorSensitivity,

@@ -1,6 +1,6 @@
 import { randomWords, seededWords, splitMix64 } from './random-words';
 
-describe('the random words of the bootstrap', () => {
+describe('random words', () => {
   it('are those of the authors’ xoshiro128** from the state 1, 2, 3, 4', () => {
     // Outputs of xoshiro128starstar.c (prng.di.unimi.it, version 1.1), as the tests of the Rust package rand_xoshiro have them.
     const next = randomWords(Uint32Array.of(1, 2, 3, 4));
