@@ -18,9 +18,9 @@ export async function mailOutbox(db: Kysely<unknown>, appRole: string): Promise<
     sent_at timestamptz,
     primary key (workspace_id, id),
     unique (workspace_id, event_key, recipient),
-    foreign key (workspace_id) references workspace (id),
+    foreign key (workspace_id) references workspace,
     check ((state = 'sent') = (sent_at is not null)),
-    check ((state = 'refused') <= (last_error is not null))
+    check (state <> 'refused' or last_error is not null)
   )`.execute(db);
   await protect(db, 'mail', appRole, ['select', 'insert']);
   await sql`grant update (state, attempts, last_error, sent_at) on mail to ${sql.id(appRole)}`.execute(
