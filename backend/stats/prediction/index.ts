@@ -14,6 +14,7 @@ export {
   type ScenarioSide,
 } from './difference-of-scenarios';
 export { differenceToPeer, type PeerDifference, peersMean } from './difference-to-peer';
+export type { MarketFan } from './draw-year';
 export { type ExpectedValue, expectedValue, type LogFigures } from './expected-value';
 export {
   type FamiliarRange,
@@ -21,6 +22,7 @@ export {
   type RangePlace,
   type RegressorPlace,
 } from './familiar-range';
+export { type Fan, fanPercents } from './fan';
 export type { FiellerRange } from './fieller';
 export { type IntervalEstimate, symmetricInterval, withoutInterval } from './interval-estimate';
 export { type BandOutlook, type MarketValueBand, marketValueBand } from './market-value-band';
@@ -63,4 +65,12 @@ export {
   type SensitivityRequest,
 } from './sensitivity';
 export { contrastDegreesOfFreedom, differenceToBase, varianceTolerance } from './slope-contrast';
+export { type Triangle, triangularQuantile } from './triangular';
 export { type TQuantile, twoSidedQuantile } from './two-sided-quantile';
+export {
+  type UncertainPlanRequest,
+  type UncertainPlanYear,
+  type UncertainYear,
+  uncertainPlan,
+} from './uncertain-plan';
+export { uniformDraws } from './uniform-draws';
