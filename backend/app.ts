@@ -110,7 +110,7 @@ export function createApp(options: AppOptions): Express {
   app.use(replicationRoutes(services.replication));
   app.use(scenarioRoutes(services.scenarios));
   app.use(deskRoutes(services.desk));
-  app.use(editionRoutes(services.editions, services.lineage));
+  app.use(editionRoutes(services.editions, services.editionDesk, services.lineage));
   app.use(seatRoutes(services.billing));
 
   if (options.browserFolder !== undefined) app.use(applicationPage(options.browserFolder, isLocal));

@@ -11,7 +11,8 @@ import { BillingService } from './billing/billing-service';
 import { workOpenBillingAccount } from './billing/open-account-job';
 import { StripeGateway } from './billing/stripe-gateway';
 import { DeskService } from './board/desk-service';
-import { editionContent } from './board/edition-content-reply';
+import { editionWriter } from './board/content/edition-content';
+import { EditionDeskService } from './board/edition-desk-service';
 import { EditionService } from './board/edition-service';
 import { FitPool } from './compute/fit-pool';
 import { ParseProcess } from './compute/parse-process';
@@ -69,6 +70,7 @@ export interface Services {
   readonly scenarios: ScenarioService;
   readonly desk: DeskService;
   readonly editions: EditionService;
+  readonly editionDesk: EditionDeskService;
   readonly billing: BillingService;
 }
 
@@ -154,7 +156,8 @@ export function compose(options: ComposeOptions): Composition {
       ),
       scenarios: new ScenarioService(repositories, now),
       desk: new DeskService(repositories),
-      editions: new EditionService(repositories, accounts, now, editionContent),
+      editions: new EditionService(repositories, accounts, now, editionWriter),
+      editionDesk: new EditionDeskService(repositories, now, editionWriter),
       billing,
     },
     start: async () => {

@@ -140,6 +140,7 @@ const bodies: Readonly<Record<string, (ids: Filled['ids']) => object>> = {
   dismissFlag: () => ({ ...cell, code: 'jump', reason: 'x' }),
   signEdition: () => ({ password: testPassword }),
   returnEdition: () => ({ comment: 'no' }),
+  commentEdition: () => ({ block: 'headline', text: 'no' }),
   changeRoles: () => ({ roles: ['reader'] }),
 };
 

@@ -2,7 +2,7 @@ import type { RowInVersion } from '../../db/repositories/panel-corrections-repos
 import type { RowKey } from '../../db/repositories/panel-copies-repository';
 import type { DifferingRow } from '../../db/repositories/panel-differences-repository';
 import type { PanelVersionRow } from '../../db/repositories/panels-repository';
-import type { Repositories } from '../../db/repositories/repositories';
+import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import { Invalid, NotFound } from '../errors/app-error';
 import type { PanelDifference, PanelDifferences } from '../panel-data';
 import { findPanelVersion } from './find-panel-version';
@@ -29,20 +29,9 @@ export class PanelHistoryService {
     versionId: string,
     otherId: string,
   ): Promise<PanelDifferences> {
-    return this.repositories.inWorkspace(workspaceId, async (tx) => {
-      const before = await findPanelVersion(tx, versionId);
-      const after = await findPanelVersion(tx, otherId);
-      if (before.panelId !== after.panelId)
-        throw new NotFound('These two versions are of different panels.');
-      const headers = headersOf(before, after);
-      const { first, ...counts } = await tx.panelDifferences.between(
-        { id: versionId, positions: positionsOf(before, headers) },
-        { id: otherId, positions: positionsOf(after, headers) },
-        mostListed,
-      );
-      const listed = first.flatMap((row) => differencesOf(row, headers));
-      return { ...counts, listed: listed.slice(0, mostListed) };
-    });
+    return this.repositories.inWorkspace(workspaceId, (tx) =>
+      differencesBetween(tx, versionId, otherId),
+    );
   }
 
   /**
@@ -69,6 +58,26 @@ export class PanelHistoryService {
       return changesOf(versions.map((version) => entryOf(version, rowOf.get(version.id), name)));
     });
   }
+}
+
+/** From the first version to the second. @throws {NotFound}, also for versions of different panels. */
+export async function differencesBetween(
+  tx: WorkspaceRepositories,
+  versionId: string,
+  otherId: string,
+): Promise<PanelDifferences> {
+  const before = await findPanelVersion(tx, versionId);
+  const after = await findPanelVersion(tx, otherId);
+  if (before.panelId !== after.panelId)
+    throw new NotFound('These two versions are of different panels.');
+  const headers = headersOf(before, after);
+  const { first, ...counts } = await tx.panelDifferences.between(
+    { id: versionId, positions: positionsOf(before, headers) },
+    { id: otherId, positions: positionsOf(after, headers) },
+    mostListed,
+  );
+  const listed = first.flatMap((row) => differencesOf(row, headers));
+  return { ...counts, listed: listed.slice(0, mostListed) };
 }
 
 /** Columns are matched by header; one that a version does not have counts as missing in all of its rows. */

@@ -47,4 +47,8 @@ export async function boardDesk(db: Kysely<unknown>, appRole: string): Promise<v
   await protect(db, 'edition_access', appRole, ['select', 'insert']);
   await sql`create index edition_access_by_edition on edition_access
     (workspace_id, edition_id, at desc)`.execute(db);
+
+  await sql`create index activity_by_subject on activity (workspace_id, subject_id, action)`.execute(
+    db,
+  );
 }

@@ -4,6 +4,7 @@ import { latestMigration } from '../migrations/migrations';
 import { ActivityRepository } from './activity-repository';
 import { BillingRepository } from './billing-repository';
 import { BootstrapsRepository } from './bootstraps-repository';
+import { EditionDeskRepository } from './edition-desk-repository';
 import { EditionsRepository } from './editions-repository';
 import { EvidenceRepository } from './evidence-repository';
 import { FilesRepository } from './files-repository';
@@ -41,6 +42,7 @@ export interface WorkspaceRepositories {
   readonly bootstraps: BootstrapsRepository;
   readonly scenarios: ScenariosRepository;
   readonly editions: EditionsRepository;
+  readonly editionDesk: EditionDeskRepository;
   readonly billing: BillingRepository;
   readonly jobTickets: JobTicketsRepository;
   /** Lets the queue package write within this transaction. */
@@ -88,6 +90,7 @@ export class Repositories {
         bootstraps: new BootstrapsRepository(trx, workspaceId),
         scenarios: new ScenariosRepository(trx, workspaceId),
         editions: new EditionsRepository(trx, workspaceId),
+        editionDesk: new EditionDeskRepository(trx, workspaceId),
         billing: new BillingRepository(trx, workspaceId),
         jobTickets: new JobTicketsRepository(trx),
         executeSql: async (text, values) => {
