@@ -12,6 +12,7 @@ export * from './interval-rows-layout';
 export * from './leave-one-out-layout';
 export { diamondPath, planMarkPath } from './mark-paths';
 export * from './number-text';
+export * from './number-writer';
 export type { PlaneAxisWords } from './plane-axis';
 export * from './residual-groups-layout';
 export * from './residual-scatter-layout';
