@@ -56,9 +56,9 @@ export class EditionDeskService {
     });
   }
 
-  /** Notes that the reader takes an edition out. @throws {NotFound} */
-  async noteExport(reader: Reader, editionId: string, format: 'pdf' | 'xlsx'): Promise<void> {
-    await this.repositories.inWorkspace(reader.workspaceId, async (tx) => {
+  /** Notes that the reader takes an edition out. @returns the reader's name. @throws {NotFound} */
+  async noteExport(reader: Reader, editionId: string, format: 'pdf' | 'xlsx'): Promise<string> {
+    return this.repositories.inWorkspace(reader.workspaceId, async (tx) => {
       await findEdition(tx, reader, editionId);
       const { personId } = reader;
       const at = this.now();
@@ -71,6 +71,7 @@ export class EditionDeskService {
         at,
       });
       await record(tx, personId, 'edition-exported', editionId, { format });
+      return (await tx.members.find(personId))?.name ?? '';
     });
   }
 

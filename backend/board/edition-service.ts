@@ -13,6 +13,7 @@ import { canonicalJson } from './canonical-json';
 import type { ComposedEdition, EditionWriter, HeadlineFault } from './edition-parts';
 import { findEdition, type Reader, seesDrafts, visibleStates } from './edition-reader';
 import { contentHash } from './content-hash';
+import type { EditionMails } from './edition-mails';
 import { type EditionRequest, gatherParts, hindrances } from './gather-parts';
 
 export interface Edition {
@@ -44,6 +45,7 @@ export class EditionService {
     private readonly accounts: AccountService,
     private readonly now: () => Date,
     private readonly writer: EditionWriter,
+    private readonly mails: EditionMails,
   ) {}
 
   async list(reader: Reader): Promise<readonly EditionRow[]> {
@@ -103,6 +105,7 @@ export class EditionService {
       const answers = parts.answers?.id ?? null;
       await tx.editions.insert({ ...edition, answers, publishedBy: reader.personId });
       await record(tx, reader.personId, 'edition-published', id, { number, sha256 });
+      await this.mails.published(tx, reader.personId, { id, number });
       return id;
     });
   }
@@ -171,6 +174,7 @@ export class EditionService {
         if (!(await tx.editions.decide(id, decision))) throw new Conflict(decidedAlready(row));
         const action = state === 'signed' ? 'edition-signed' : 'edition-returned';
         await record(tx, reader.personId, action, id, { number: row.number, sha256: row.sha256 });
+        await this.mails.decided(tx, row, decision);
       })
       .catch((error: unknown) => {
         if (error instanceof CheckViolation && error.constraint === 'edition_four_eyes')

@@ -10,6 +10,7 @@ export const queueNames = [
   'bootstrap',
   'import',
   'open-billing-account',
+  'mail',
 ] as const;
 export type QueueName = (typeof queueNames)[number];
 

@@ -40,9 +40,9 @@ function poolabilityLine(fit: FitResult): EditionLine {
     words('F '),
     numberPart('poolability', 'plain', value, 4),
     words(' on '),
-    numberPart(null, 'plain', df1, 4),
+    dfPart(df1),
     words(' and '),
-    numberPart(null, 'plain', df2, 4),
+    dfPart(df2),
   ];
   const isKept = pValue < 1 - fit.specification.confidence;
   return isKept
@@ -64,6 +64,11 @@ function poolabilityLine(fit: FitResult): EditionLine {
         ],
         'poolability',
       );
+}
+
+/** Degrees of freedom: whole, or as a statistic where they are not. */
+function dfPart(value: number): SentencePart {
+  return Number.isInteger(value) ? countPart(value) : numberPart(null, 'plain', value, 4);
 }
 
 function placeLine({ standing, pairs }: FitResult): EditionLine {
