@@ -178,6 +178,7 @@ export function drawGapPath(
   }
   paint.path(layout.path, { stroke: { colour: colour.copper, width: 2 } });
   for (const point of layout.points) paint.path(diamondPath(4), { fill: colour.copper, at: point });
+  if (layout.standing !== null) paint.rimmed(layout.standing.label.text, layout.standing.label);
 }
 
 const hair = { colour: colour.hairline, width: 1 };
