@@ -39,6 +39,9 @@ async function fill(server: TestServer, canary: string): Promise<Filled> {
     async (tx) => {
       await tx.bootstraps.insert({ id: bootstrapId, fitId: fit.id, seed: 7, createdBy });
       await tx.bootstraps.fail(bootstrapId, canary, new Date());
+      const recipient = `${canary}@people.example`;
+      const mail = { id: randomUUID(), eventKey: canary, recipient, template: 'edition-waiting' };
+      await tx.mail.insert({ ...mail, detail: {} }, 60);
     },
   );
   const last = result?.prediction?.last;
@@ -221,7 +224,7 @@ describe('two workspaces', () => {
         expect(own.rows.every((row) => row.workspace_id === id))
           .withContext(relname)
           .toBeTrue();
-        if (relname === 'fit_bootstrap') expect(own.rowCount).toBe(1);
+        if (['fit_bootstrap', 'mail'].includes(relname)) expect(own.rowCount).toBe(1);
         await app.query('commit');
       }
     } finally {

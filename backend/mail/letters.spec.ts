@@ -49,7 +49,7 @@ describe('letters about an edition', () => {
     });
 
     it(`keep a name on its line (${name})`, () => {
-      const by = 'Ana\r\n\r\nSigned: \u2028nobody\u0000';
+      const by = 'Ana\r\n\r\nSigned:\u2028nobody\u0000';
       const split = { workspaceName: 'A\r\nBcc: x@velmara.example', publicOrigin: 'https://k' };
       const letter = writeLetter(name, { ...news, by }, split);
       expect(letter.subject).toMatch(/^Edition 3 .*\(A Bcc: x@velmara\.example\)$/);

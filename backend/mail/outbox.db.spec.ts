@@ -50,7 +50,7 @@ describe('the outbox', () => {
     readonly id: string;
     readonly state: string;
     readonly attempts: number;
-    readonly last_error: string | null;
+    readonly lastError: string | null;
     readonly waits: boolean;
   }
 
@@ -75,7 +75,7 @@ describe('the outbox', () => {
   const delayed = (recipient: string): Promise<KeptMail> =>
     eventually('a mail that was put off', async () => {
       const [mail] = await kept(recipient);
-      return mail.last_error === null ? undefined : mail;
+      return mail.lastError === null ? undefined : mail;
     });
 
   it('sends a mail once, however often the same event is told', async () => {
@@ -124,8 +124,8 @@ describe('the outbox', () => {
     const to = someone();
     await stub.fail({ greylist: 2 });
     await post([to]);
-    const { state, attempts, last_error } = await settled(to);
-    expect([state, attempts, last_error]).toEqual(['sent', 3, null]);
+    const { state, attempts, lastError } = await settled(to);
+    expect([state, attempts, lastError]).toEqual(['sent', 3, null]);
     expect((await stub.mailsTo(to)).length).toBe(1);
   });
 
@@ -133,18 +133,18 @@ describe('the outbox', () => {
     const to = someone();
     await stub.fail({ refused: [to] });
     await post([to]);
-    const { id, state, attempts, last_error, waits } = await settled(to);
+    const { id, state, attempts, lastError, waits } = await settled(to);
     expect([state, attempts, waits]).toEqual(['refused', 1, false]);
-    expect(last_error).toBe('550 5.1.1 There is no such mailbox here.');
+    expect(lastError).toBe('550 5.1.1 There is no such mailbox here.');
     await eventually('word of it', () => server.refusals.has(id));
-    expect(server.refusals.get(id)).toBe(last_error ?? '');
+    expect(server.refusals.get(id)).toBe(lastError ?? '');
   });
 
   it('waits while nobody listens at the mail server', async () => {
     const to = someone();
     await stub.fail({ refusesConnections: true });
     await post([to]);
-    expect((await delayed(to)).last_error).toContain('ECONNREFUSED');
+    expect((await delayed(to)).lastError).toContain('ECONNREFUSED');
     await stub.fail({ refusesConnections: false });
     expect((await settled(to)).state).toBe('sent');
     expect((await stub.mailsTo(to)).length).toBe(1);

@@ -1,5 +1,5 @@
 import { type Kysely, sql } from 'kysely';
-import { protect } from './protect';
+import { grant, protect } from './protect';
 
 /** Mail that was decided on within a transaction and is sent after it, at least until a server took it. */
 export async function mailOutbox(db: Kysely<unknown>, appRole: string): Promise<void> {
@@ -13,6 +13,7 @@ export async function mailOutbox(db: Kysely<unknown>, appRole: string): Promise<
     detail jsonb not null,
     state text not null check (state in ('waiting', 'sent', 'refused')),
     attempts integer not null default 0,
+    /** What the mail server said, or how it could not be reached. */
     last_error text,
     created_at timestamptz not null default now(),
     sent_at timestamptz,
@@ -26,7 +27,24 @@ export async function mailOutbox(db: Kysely<unknown>, appRole: string): Promise<
   await sql`grant update (state, attempts, last_error, sent_at) on mail to ${sql.id(appRole)}`.execute(
     db,
   );
-  await sql`create index mail_waiting on mail (workspace_id, created_at) where state = 'waiting'`.execute(
-    db,
-  );
+  await mailDue(db, appRole);
+}
+
+/**
+ * Which mails wait, in which workspace, and no word of them: the round that looks for forgotten ones knows no workspace.
+ * Like the tickets of jobs, it stands outside the walls.
+ */
+async function mailDue(db: Kysely<unknown>, appRole: string): Promise<void> {
+  await sql`create table mail_due (
+    workspace_id uuid not null,
+    mail_id uuid not null,
+    /** From when on the round queues it again. */
+    due_at timestamptz not null,
+    /** Until when one server alone may send it. */
+    held_until timestamptz,
+    primary key (workspace_id, mail_id),
+    foreign key (workspace_id, mail_id) references mail
+  )`.execute(db);
+  await grant(db, 'mail_due', appRole, ['select', 'insert', 'update', 'delete']);
+  await sql`create index mail_due_at on mail_due (due_at)`.execute(db);
 }

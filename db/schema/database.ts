@@ -14,7 +14,7 @@ import type {
   EditionWarningOpenedTable,
 } from './edition-table';
 import type { FitBootstrapTable, FitEvidenceTable, FitTable, JobTicketTable } from './fit-tables';
-import type { MailTable } from './mail-table';
+import type { MailDueTable, MailTable } from './mail-table';
 import type {
   FlagDismissalTable,
   ImportDraftTable,
@@ -44,6 +44,7 @@ export interface Database {
   invitation: InvitationTable;
   jobTicket: JobTicketTable;
   mail: MailTable;
+  mailDue: MailDueTable;
   membership: MembershipTable;
   panel: PanelTable;
   panelCompany: PanelCompanyTable;

@@ -13,3 +13,11 @@ export interface MailTable {
   createdAt: Generated<Date>;
   sentAt: Date | null;
 }
+
+/** One row for each mail that waits; gone once it was sent or refused. */
+export interface MailDueTable {
+  workspaceId: string;
+  mailId: string;
+  dueAt: Date;
+  heldUntil: Date | null;
+}
