@@ -3,6 +3,7 @@ import type { EditionRow } from '../../db/repositories/editions-repository';
 import type { Repositories } from '../../db/repositories/repositories';
 import { record } from '../activity/activity';
 import { NotFound } from '../errors/app-error';
+import { findRowsUsed, type RowUsed } from '../fits/fit-rows-service';
 import { contentHash } from './content-hash';
 import type { EditionWriter } from './edition-parts';
 import { findEdition, type Reader } from './edition-reader';
@@ -72,6 +73,14 @@ export class EditionDeskService {
       });
       await record(tx, personId, 'edition-exported', editionId, { format });
       return (await tx.members.find(personId))?.name ?? '';
+    });
+  }
+
+  /** The rows of the panel that an edition's fit was computed from. @throws {NotFound} */
+  async rows(reader: Reader, editionId: string): Promise<readonly RowUsed[]> {
+    return this.repositories.inWorkspace(reader.workspaceId, async (tx) => {
+      const { fitId } = await findEdition(tx, reader, editionId);
+      return findRowsUsed(tx, fitId);
     });
   }
 

@@ -8,6 +8,7 @@ import type { EditionDeskService } from './edition-desk-service';
 import { toEditionReply } from './edition-replies';
 import type { EditionService } from './edition-service';
 import { editionPdf } from './pdf/edition-pdf';
+import { editionWorkbook } from './workbook/edition-workbook';
 
 type ExportFormat = 'pdf' | 'xlsx';
 
@@ -33,8 +34,15 @@ export function editionExportRoutes(
       return;
     }
     const printedBy = await desk.noteExport(member, id, format);
-    const setting = { paper, unit: unit ?? content.unit, printedBy, printedAt: now() };
-    res.send(await editionPdf({ edition, content, comments }, setting));
+    const shownUnit = unit ?? content.unit;
+    if (format === 'pdf') {
+      const setting = { paper, unit: shownUnit, printedBy, printedAt: now() };
+      res.send(await editionPdf({ edition, content, comments }, setting));
+      return;
+    }
+    const rows = await desk.rows(member, id);
+    const setting = { unit: shownUnit, createdAt: now() };
+    res.send(await editionWorkbook({ edition, content, rows }, setting));
   });
 
   return router;

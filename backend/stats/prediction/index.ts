@@ -25,11 +25,17 @@ export {
 export { type Fan, fanPercents } from './fan';
 export type { FiellerRange } from './fieller';
 export { type IntervalEstimate, symmetricInterval, withoutInterval } from './interval-estimate';
-export { type BandOutlook, type MarketValueBand, marketValueBand } from './market-value-band';
+export {
+  bandErrors,
+  type BandOutlook,
+  type MarketValueBand,
+  marketValueBand,
+} from './market-value-band';
 export { inModelScale, unreadableReason } from './model-scale';
 export { asFactor, heldNumber, type OutOfLogs, outOfLogs } from './out-of-logs';
 export {
   carryingReason,
+  chosenYearEffect,
   type Outlook,
   type StartingPoint,
   stepsAhead,
