@@ -96,6 +96,19 @@ export class EditionDeskService {
     });
   }
 
+  /** Ids of the warnings that whoever signs has to open. @throws {NotFound} */
+  async seriousWarnings(reader: Reader, editionId: string): Promise<readonly string[]> {
+    return this.repositories.inWorkspace(reader.workspaceId, async (tx) => {
+      await findEdition(tx, reader, editionId);
+      const text = await tx.editions.content(editionId);
+      if (text === undefined) throw new NotFound();
+      return this.writer
+        .read(text)
+        .warnings.filter(({ isSerious }) => isSerious)
+        .map(({ id }) => id);
+    });
+  }
+
   /** @throws {NotFound} */
   async comment(
     reader: Reader,

@@ -1,3 +1,4 @@
+import excel from 'exceljs';
 import type { TestDatabase } from '../../db/testing/test-database';
 import type { EditionReply, FitReply, ScenarioReply } from '../contract';
 import { join, signUp, type TestClient } from '../testing/test-client';
@@ -76,6 +77,30 @@ describe('an edition taken out', () => {
     expect(a4).toContain('/MediaBox [0 0 595.28 841.89]');
     expect(letter).toContain('/MediaBox [0 0 612 792]');
     expect((await analyst.get(path('doc'))).status).toBe(404);
+  });
+
+  it('as a workbook has the figures of the edition, and formulas for the scenarios', async () => {
+    const { bytes, type } = await analyst.download(path('xlsx'));
+    expect(type).toContain('spreadsheetml');
+    const workbook = new excel.Workbook();
+    await workbook.xlsx.load(bytes as unknown as ArrayBuffer);
+    expect(workbook.worksheets.map(({ name }) => name)).toEqual([
+      'Edition',
+      'Scenarios',
+      'Panel rows',
+      'Slopes',
+      'Intercepts',
+      'Model',
+    ]);
+    const { fit, scenarios } = edition.content;
+    expect(workbook.getWorksheet('Slopes')?.getCell('B2').value).toBe(fit.slopes[0].estimate);
+    expect(workbook.getWorksheet('Panel rows')?.rowCount).toBe(221);
+    const cell = workbook.getWorksheet('Scenarios')?.getCell('D5');
+    expect(cell?.formula).toBe('Q5');
+    expect(cell?.result).toBe(scenarios[0].years[0].expected.estimate);
+    expect(workbook.getWorksheet('Edition')?.getCell('B3').value).toContain(
+      '2,410 (1,270 to 3,540) USD m above',
+    );
   });
 
   it('is listed on the edition with who took it, and readers take no draft', async () => {

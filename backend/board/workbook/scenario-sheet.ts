@@ -205,9 +205,7 @@ function writeYear(block: Block, row: number, index: number, predicted: Readable
   const count = basis.regressors.length;
   const write = (column: number, formula: string, value: number | null) => {
     sheet.getCell(row, column).value =
-      block.values === 'with-values' && value !== null
-        ? { formula, result: value }
-        : ({ formula });
+      block.values === 'with-values' && value !== null ? { formula, result: value } : { formula };
   };
   const isLog = basis.form === 'log';
   const regressorsRead = isLog ? predicted.regressors.map(Math.log) : predicted.regressors;
@@ -326,7 +324,7 @@ function writeDifference(
   }
   // The quantile of t at any degrees of freedom, whole or not: t² = ν(1/x − 1), x the beta quantile at ν/2 and 1/2.
   const df = at(columns.deltaDegrees);
-  const t = `SQRT(${df}*(1/BETA.INV(${1 - outlook.confidence},${df}/2,0.5)-1))`;
+  const t = `SQRT(${df}*(1/BETAINV(${1 - outlook.confidence},${df}/2,0.5)-1))`;
   write(
     columns.differenceLow,
     shown(`${sum}-${t}*${at(columns.deltaError)}`),
