@@ -14,7 +14,7 @@ import { NumberFormat } from '../../ui/number-format';
 import { PageContext } from '../../ui/page-context';
 import { PanelGrid } from '../panel-grid';
 import type { PanelRow } from '../panel-rows';
-import { readBlockText } from './block-text';
+import { readBlockText } from '../../ui/block-text';
 import { PanelDeskGrid } from './panel-desk-grid';
 import { cellKey } from './panel-edits';
 import { UnsavedEdits } from './unsaved-edits';

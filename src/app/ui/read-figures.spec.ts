@@ -1,4 +1,4 @@
-import { readFigures } from './read-figure';
+import { readFigures } from './read-figures';
 
 const read = (text: string) => readFigures([[text]])[0][0];
 
