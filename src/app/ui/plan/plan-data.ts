@@ -6,7 +6,12 @@ import type { PlanReading, ReadYear } from './read-plan';
 
 export interface DrawnPlan {
   readonly name: string;
-  readonly years: readonly { readonly year: number; readonly expected: IntervalEstimate }[];
+  readonly years: readonly {
+    readonly year: number;
+    readonly expected: IntervalEstimate;
+    /** Of the market value itself; missing where it was not stored. */
+    readonly band?: { readonly low: number | null; readonly high: number | null };
+  }[];
 }
 
 /**
@@ -29,11 +34,12 @@ export function expectedPathData(
         : base.filter(({ year }) => planned.has(year)),
     plans: plans.map((plan) => ({
       name: plan.name,
-      years: plan.years.map(({ year, expected: { estimate, low, high } }) => ({
+      years: plan.years.map(({ year, expected: { estimate, low, high }, band }) => ({
         year,
         estimate,
         low,
         high,
+        ...(band === undefined ? {} : { bandLow: band.low, bandHigh: band.high }),
       })),
     })),
   };
