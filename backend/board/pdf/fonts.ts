@@ -1,6 +1,7 @@
 import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import { create } from 'fontkit';
+import { sfntOfWoff } from './sfnt-of-woff';
 
 export type Face = 'words' | 'strong' | 'figures' | 'figures-strong';
 
@@ -43,11 +44,6 @@ export class Fonts {
     return read;
   }
 
-  /** Where the usual file of a face lies. */
-  path(face: Face): string {
-    return pathOf(face, subsets[0]);
-  }
-
   /** The text in stretches, each with the font that has its letters; what no font has is written by the usual one. */
   runs(face: Face, text: string): readonly FontRun[] {
     const files = this.files(face);
@@ -70,7 +66,7 @@ function pathOf(face: Face, subset: string): string {
 
 function fontFile(face: Face, subset: string): FontFile {
   const path = pathOf(face, subset);
-  const bytes = readFileSync(path);
+  const bytes = sfntOfWoff(readFileSync(path));
   const font = create(bytes);
   if (!('hasGlyphForCodePoint' in font)) throw new Error(`${path} holds no single font`);
   return {

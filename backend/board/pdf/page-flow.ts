@@ -1,5 +1,5 @@
 import PDFDocument from 'pdfkit';
-import { type Face, Fonts } from './fonts';
+import { type Face, type FontRun, Fonts } from './fonts';
 import { ink } from './print-colours';
 
 export type Paper = 'a4' | 'letter';
@@ -16,6 +16,7 @@ const footSpace = 42;
 const usualSize = 9.5;
 const leading = 1.38;
 const mostKeptLines = 5;
+const measuredSize = 100;
 
 const fonts = new Fonts();
 
@@ -31,6 +32,7 @@ export class PageFlow {
   readonly bottom: number;
   y: number;
   readonly #registered = new Set<string>();
+  readonly #widths = new Map<string, number>();
 
   constructor(paper: Paper, info: PDFKit.DocumentInfo) {
     this.document = new PDFDocument({
@@ -43,7 +45,8 @@ export class PageFlow {
       tagged: true,
       pdfVersion: '1.7',
       displayTitle: true,
-      font: fonts.path('words'),
+      // None of the viewer's own fonts: every text names one of ours.
+      font: '',
     });
     this.right = this.document.page.width - margin;
     this.bottom = this.document.page.height - margin - footSpace;
@@ -70,9 +73,17 @@ export class PageFlow {
 
   /** Width of a text in points. */
   measure(text: string, { face = 'words', size = usualSize }: TextStyle = {}): number {
-    return fonts
-      .runs(face, text)
-      .reduce((sum, run) => sum + this.#with(run.font, size).widthOfString(run.text), 0);
+    return fonts.runs(face, text).reduce((sum, run) => sum + this.#width(run) * size, 0);
+  }
+
+  /** Width at a size of one point: laying text out is what a document costs, and its words come again and again. */
+  #width({ font, text }: FontRun): number {
+    const key = `${font} ${text}`;
+    const known = this.#widths.get(key);
+    if (known !== undefined) return known;
+    const width = this.#with(font, measuredSize).widthOfString(text) / measuredSize;
+    this.#widths.set(key, width);
+    return width;
   }
 
   /** One line of text; `anchor` says which of its ends stands at x, y is its baseline. */
@@ -89,12 +100,12 @@ export class PageFlow {
   ): void {
     const length = anchor === 'start' ? 0 : this.measure(text, { face, size });
     let at = x - (anchor === 'end' ? length : anchor === 'middle' ? length / 2 : 0);
-    for (const run of fonts.runs(face, text)) {
-      const document = this.#with(run.font, size);
-      document
+    const runs = fonts.runs(face, text);
+    for (const [index, run] of runs.entries()) {
+      this.#with(run.font, size)
         .fillColor(colour)
         .text(run.text, at, y, { lineBreak: false, baseline: 'alphabetic' });
-      at += document.widthOfString(run.text);
+      if (index < runs.length - 1) at += this.#width(run) * size;
     }
   }
 
@@ -124,21 +135,26 @@ export class PageFlow {
     return text.split('\n').flatMap((part) => this.#wrapOne(part, width, style));
   }
 
+  /** By the widths of words and spaces: kerning across a space is nothing that a line's end hangs on. */
   #wrapOne(text: string, width: number, style: TextStyle): readonly string[] {
     const lines: string[] = [];
+    const space = this.measure(' ', style);
     let line = '';
+    let taken = 0;
     for (const word of text.split(' ')) {
-      const longer = line === '' ? word : `${line} ${word}`;
-      if (this.measure(longer, style) <= width) {
-        line = longer;
+      const wide = this.measure(word, style);
+      if (line !== '' && taken + space + wide <= width) {
+        line += ` ${word}`;
+        taken += space + wide;
         continue;
       }
       if (line !== '') lines.push(line);
-      line = word;
-      while (this.measure(line, style) > width && line.length > 1) {
+      [line, taken] = [word, wide];
+      while (taken > width && line.length > 1) {
         const fits = this.#lettersThatFit(line, width, style);
         lines.push(line.slice(0, fits));
         line = line.slice(fits);
+        taken = this.measure(line, style);
       }
     }
     lines.push(line);
