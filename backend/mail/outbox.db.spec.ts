@@ -89,7 +89,7 @@ describe('the outbox', () => {
     expect(others).toEqual([]);
     expect(mail.messageId).toBe(`<${id}@velmara.example>`);
     expect(mail.subject).toBe('Edition 3 waits for your decision (W)');
-    expect(mail.from).toBe('Kinvale <kinvale@velmara.example>');
+    expect(mail.from).toBe('"Kinvale" <kinvale@velmara.example>');
     expect(mail.text).toContain(`https://kinvale.example/board/${editionId}`);
     expect(mail.html).toContain(`href="https://kinvale.example/board/${editionId}"`);
   });

@@ -92,12 +92,12 @@ export class SmtpListener {
   }
 
   async #take(stream: SMTPServerDataStream, { envelope }: SMTPServerSession): Promise<void> {
-    const source = (await buffer(stream)).toString('latin1');
+    const source = await buffer(stream);
     this.mailbox.add({
-      ...readMail(source),
+      ...(await readMail(source)),
       sender: envelope.mailFrom === false ? '' : envelope.mailFrom.address,
       recipients: envelope.rcptTo.map(({ address }) => address),
-      source,
+      source: source.toString('latin1'),
     });
   }
 }

@@ -6,7 +6,7 @@ import type { MoneyUnit } from '../edition-parts';
 import { confidentialityWords, lineageLine, specificationWords } from '../pdf/sheet-words';
 import { writeModelSheet } from './model-sheet';
 import { type FormulaValues, writeScenarioSheet } from './scenario-sheet';
-import { bold, widths } from './workbook-cells';
+import { amountFormat, bold, finishSheet, widths } from './workbook-cells';
 
 export interface WorkbookEdition {
   readonly edition: EditionSummary;
@@ -41,8 +41,13 @@ export async function editionWorkbook(
   writeSlopes(workbook, content);
   writeIntercepts(workbook, content);
   if (content.fit.prediction !== null) writeModelSheet(workbook, content.fit.prediction);
+  workbook.worksheets.forEach(finishSheet);
   return Buffer.from(await workbook.xlsx.writeBuffer());
 }
+
+/** Wrapped text gets the height of its lines: not every program finds it by itself. */
+const lettersInLine = 140;
+const lineHeight = 13.5;
 
 function writeEditionSheet(
   workbook: excel.Workbook,
@@ -83,6 +88,7 @@ function writeEditionSheet(
     row.getCell(1).font = bold;
     row.getCell(2).alignment = { wrapText: true, vertical: 'top' };
     row.getCell(1).alignment = { vertical: 'top' };
+    row.height = lineHeight * Math.ceil(line[1].length / lettersInLine);
   }
 }
 
@@ -98,7 +104,11 @@ function table(
     headers.map((header) => Math.max(14, header.length + 2)),
   );
   sheet.addRow([...headers]).font = bold;
-  for (const row of rows) sheet.addRow([...row]);
+  for (const row of rows)
+    sheet.addRow([...row]).eachCell((cell) => {
+      if (typeof cell.value === 'number' && !Number.isInteger(cell.value))
+        cell.numFmt = amountFormat;
+    });
 }
 
 function writeRows(

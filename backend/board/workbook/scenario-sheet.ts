@@ -12,7 +12,7 @@ import {
 } from '../../stats/prediction';
 import { labelsOf } from '../content/edition-terms';
 import { modelNames as name } from './model-sheet';
-import { address, bold, columnName, markInput, quiet } from './workbook-cells';
+import { address, amountFormat, bold, columnName, markInput, quiet } from './workbook-cells';
 
 export const scenarioSheetName = 'Scenarios';
 
@@ -75,7 +75,9 @@ export function writeScenarioSheet(
   for (let column = 2; column <= columns.bandHigh; column += 1) sheet.getColumn(column).width = 16;
   for (let column = columns.read; column < columns.end; column += 1) {
     sheet.getColumn(column).width = 13;
+    // How it is computed, folded away: open the group to see it.
     sheet.getColumn(column).outlineLevel = 1;
+    sheet.getColumn(column).hidden = true;
   }
   const { currency, unit } = content.panelVersion;
   sheet.getCell(1, 1).value =
@@ -146,6 +148,7 @@ function writeBlock(
         const cell = sheet.getCell(row, columns.inputs + k);
         cell.value = value;
         markInput(cell);
+        cell.numFmt = amountFormat;
       });
       if (predicted.expected !== null)
         writeYear({ ...block, basis: atLevel }, row, index, predicted);
@@ -203,11 +206,13 @@ function writeYear(block: Block, row: number, index: number, predicted: Readable
   const range = (column: number, width: number) =>
     `${at(column)}:${columnName(column + width - 1)}${row}`;
   const count = basis.regressors.length;
+  const isLog = basis.form === 'log';
   const write = (column: number, formula: string, value: number | null) => {
     sheet.getCell(row, column).value =
       block.values === 'with-values' && value !== null ? { formula, result: value } : { formula };
+    const isShare = isLog && column >= columns.difference && column <= columns.differenceHigh;
+    sheet.getCell(row, column).numFmt = isShare ? '0.0%' : amountFormat;
   };
-  const isLog = basis.form === 'log';
   const regressorsRead = isLog ? predicted.regressors.map(Math.log) : predicted.regressors;
   for (let k = 0; k < count; k += 1) {
     const source =
