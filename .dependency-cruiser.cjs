@@ -26,6 +26,8 @@ const edge = [
   '-repl(y|ies)\\.ts$',
   '-strategy\\.ts$',
   '/(load|upload)-[a-z-]+\\.ts$',
+  // What an edition freezes and how it leaves the product are written in the words of the contract.
+  '^backend/board/(content|pdf|workbook)/',
 ];
 const within = (folder) => `^${folder}/`;
 
@@ -98,6 +100,7 @@ const ofFolder = [
           accounts: ['@node-rs/argon2', 'passport', 'passport-local'],
           panels: ['multer', 'exceljs', 'csv-stringify'],
           fits: ['yazl', 'csv-stringify'],
+          board: ['pdfkit', 'exceljs', 'fontkit'],
           billing: ['stripe'],
         }[name] ?? []),
       ),

@@ -14,6 +14,7 @@ import { memberRoutes } from './accounts/member-routes';
 import { createAuthenticator } from './accounts/sign-in-strategy';
 import { seatRoutes } from './billing/seat-routes';
 import { deskRoutes } from './board/desk-routes';
+import { editionExportRoutes } from './board/edition-export-routes';
 import { editionRoutes } from './board/edition-routes';
 import type { Services } from './compose';
 import { apiRoutes } from './contract';
@@ -112,7 +113,8 @@ export function createApp(options: AppOptions): Express {
   app.use(trialRoutes(services.trials, now));
   app.use(scenarioRoutes(services.scenarios));
   app.use(deskRoutes(services.desk));
-  app.use(editionRoutes(services.editions, services.lineage));
+  app.use(editionRoutes(services.editions, services.editionDesk, services.lineage));
+  app.use(editionExportRoutes(services.editions, services.editionDesk, now));
   app.use(seatRoutes(services.billing));
 
   if (options.browserFolder !== undefined) app.use(applicationPage(options.browserFolder, isLocal));

@@ -11,7 +11,9 @@ import { BillingService } from './billing/billing-service';
 import { workOpenBillingAccount } from './billing/open-account-job';
 import { StripeGateway } from './billing/stripe-gateway';
 import { DeskService } from './board/desk-service';
-import { editionContent } from './board/edition-content-reply';
+import { editionWriter } from './board/content/edition-content';
+import { EditionDeskService } from './board/edition-desk-service';
+import { EditionMails } from './board/edition-mails';
 import { EditionService } from './board/edition-service';
 import { FitPool } from './compute/fit-pool';
 import { ParseProcess } from './compute/parse-process';
@@ -27,6 +29,10 @@ import { TrialJob } from './fits/trials/trial-job';
 import { TrialService } from './fits/trials/trial-service';
 import type { SessionPool } from './http/session';
 import { JobQueue } from './jobs/job-queue';
+import { MailJob } from './mail/mail-job';
+import { MailRound } from './mail/mail-round';
+import { Outbox } from './mail/outbox';
+import { SmtpSender, type SmtpSettings } from './mail/smtp-sender';
 import { CorrectionService } from './panels/correction-service';
 import { FlagDismissalService } from './panels/flag-dismissal-service';
 import { ImportCommitService } from './panels/import-commit-service';
@@ -43,6 +49,10 @@ import { ScenarioService } from './scenarios/scenario-service';
 export interface ComposeOptions {
   readonly databaseUrl: string;
   readonly stripe: { readonly secretKey: string; readonly apiUrl: string | undefined };
+  /** Undefined where no mail is sent: it waits in the outbox. */
+  readonly mail: SmtpSettings | undefined;
+  /** Scheme, host and port that browsers see, for links in mails. */
+  readonly publicOrigin: string;
   readonly fitThreads: number;
   readonly now: () => Date;
   readonly logger: Logger;
@@ -72,6 +82,7 @@ export interface Services {
   readonly scenarios: ScenarioService;
   readonly desk: DeskService;
   readonly editions: EditionService;
+  readonly editionDesk: EditionDeskService;
   readonly billing: BillingService;
 }
 
@@ -131,6 +142,26 @@ export function compose(options: ComposeOptions): Composition {
   const accounts = new AccountService({ repositories, passwords, throttle, queue });
   const gateway = new StripeGateway(options.stripe);
   const billing = new BillingService({ repositories, gateway, queue, now });
+  const sender = options.mail === undefined ? undefined : new SmtpSender(options.mail);
+  const mailRound = new MailRound(workRepositories, queue, (error) => {
+    logger.error({ err: error }, 'mail');
+  });
+  const startMail = async (): Promise<void> => {
+    if (sender === undefined) {
+      logger.info('mail is off: what is to be sent waits');
+      return;
+    }
+    const mailJob = new MailJob({
+      repositories: workRepositories,
+      sender,
+      publicOrigin: options.publicOrigin,
+      onRefused: (mailId, words) => {
+        logger.warn({ mailId, words }, 'mail refused');
+      },
+    });
+    await queue.work('mail', (ticket) => mailJob.run(ticket));
+    mailRound.start();
+  };
 
   return {
     sessionPool,
@@ -158,7 +189,14 @@ export function compose(options: ComposeOptions): Composition {
       trials: new TrialService(repositories, queue),
       scenarios: new ScenarioService(repositories, now),
       desk: new DeskService(repositories),
-      editions: new EditionService(repositories, accounts, now, editionContent),
+      editions: new EditionService(
+        repositories,
+        accounts,
+        now,
+        editionWriter,
+        new EditionMails(new Outbox(queue)),
+      ),
+      editionDesk: new EditionDeskService(repositories, now, editionWriter),
       billing,
     },
     start: async () => {
@@ -197,9 +235,14 @@ export function compose(options: ComposeOptions): Composition {
         (ticket) => importJob.giveUp(ticket),
       );
       await queue.work('open-billing-account', workOpenBillingAccount(billing));
+      await startMail();
     },
     stop: async () => {
-      await queue.stop(() => fitPool.close());
+      await mailRound.stop();
+      await queue.stop(() => {
+        sender?.close();
+        return fitPool.close();
+      });
       await Promise.all([webPool, sessionPool, queuePool, workPool].map((each) => each.end()));
     },
   };

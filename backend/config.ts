@@ -9,6 +9,10 @@ const databaseUrl = z
   .string('DATABASE_URL is not set: expected the PostgreSQL address of the application role')
   .regex(/^postgres(ql)?:\/\//, 'DATABASE_URL is no PostgreSQL address');
 
+function isSmtpUrl(text: string): boolean {
+  return /^smtps?:\/\//.test(text) && URL.canParse(text) && new URL(text).hostname !== '';
+}
+
 const environment = z.object({
   NODE_ENV: z.string().optional(),
   KINVALE_MODE: z.enum(['local', 'production']).default('production'),
@@ -23,6 +27,12 @@ const environment = z.object({
   ),
   STRIPE_SECRET_KEY: z.string('STRIPE_SECRET_KEY is not set').min(1),
   STRIPE_API_URL: z.url().optional(),
+  SMTP_URL: z
+    .string()
+    .refine(isSmtpUrl, 'SMTP_URL is no address: expected smtp://… or smtps://… with a host')
+    .optional(),
+  MAIL_FROM: z.email('MAIL_FROM is no address: expected one as kinvale@company.example').optional(),
+  KINVALE_MAIL: z.enum(['on', 'off'], 'KINVALE_MAIL is neither on nor off').default('on'),
   HTTPS_CERT: z.string().optional(),
   HTTPS_KEY: z.string().optional(),
   TRUST_PROXY_HOPS: z.coerce.number().int().min(0).max(5).default(0),
@@ -41,6 +51,8 @@ export interface Config {
   /** Scheme, host and port that browsers see. */
   readonly publicOrigin: string;
   readonly stripe: { readonly secretKey: string; readonly apiUrl: string | undefined };
+  /** Undefined where KINVALE_MAIL=off. */
+  readonly mail: { readonly url: string; readonly from: string } | undefined;
   /** Paths of certificate and key; undefined where something in front ends TLS. */
   readonly tls: { readonly certPath: string; readonly keyPath: string } | undefined;
   readonly trustProxyHops: number;
@@ -74,6 +86,7 @@ export function readConfig(variables: Readonly<Record<string, string | undefined
     throw new ConfigError('PUBLIC_URL must start with https:// unless KINVALE_MODE=local');
   if ((env.HTTPS_CERT === undefined) !== (env.HTTPS_KEY === undefined))
     throw new ConfigError('HTTPS_CERT and HTTPS_KEY go together: set both or neither');
+  const mail = mailSettings(env);
   return {
     isLocal,
     host: env.HOST,
@@ -84,6 +97,7 @@ export function readConfig(variables: Readonly<Record<string, string | undefined
     ),
     publicOrigin: new URL(env.PUBLIC_URL).origin,
     stripe: { secretKey: env.STRIPE_SECRET_KEY, apiUrl: env.STRIPE_API_URL },
+    mail,
     tls:
       env.HTTPS_CERT === undefined || env.HTTPS_KEY === undefined
         ? undefined
@@ -92,6 +106,20 @@ export function readConfig(variables: Readonly<Record<string, string | undefined
     logLevel: env.LOG_LEVEL,
     fitThreads: env.FIT_THREADS,
   };
+}
+
+/** @throws {ConfigError} for settings that are not there, unless mail is switched off in as many words. */
+function mailSettings(env: z.infer<typeof environment>): Config['mail'] {
+  if (env.KINVALE_MAIL === 'off') return undefined;
+  const { SMTP_URL: url, MAIL_FROM: from } = env;
+  if (url !== undefined && from !== undefined) return { url, from };
+  const missing = [
+    ...(url === undefined ? ['SMTP_URL is not set: expected the mail server’s address'] : []),
+    ...(from === undefined
+      ? ['MAIL_FROM is not set: expected the address that mail comes from']
+      : []),
+  ];
+  throw new ConfigError([...missing, 'KINVALE_MAIL=off starts without mail'].join('\n'));
 }
 
 function describe(issue: z.core.$ZodIssue): string {

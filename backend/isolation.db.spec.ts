@@ -53,6 +53,9 @@ async function fill(server: TestServer, canary: string): Promise<Filled> {
       });
       await tx.peerTrials.fail(peerTrialId, canary, new Date());
       await tx.peerTrials.keepFitted(canary, { canary });
+      const recipient = `${canary}@people.example`;
+      const mail = { id: randomUUID(), eventKey: canary, recipient, template: 'edition-waiting' };
+      await tx.mail.insert({ ...mail, detail: {} }, 60);
     },
   );
   const last = result?.prediction?.last;
@@ -165,6 +168,7 @@ const bodies: Readonly<Record<string, (ids: Filled['ids']) => object>> = {
   dismissFlag: () => ({ ...cell, code: 'jump', reason: 'x' }),
   signEdition: () => ({ password: testPassword }),
   returnEdition: () => ({ comment: 'no' }),
+  commentEdition: () => ({ block: 'headline', text: 'no' }),
   changeRoles: () => ({ roles: ['reader'] }),
 };
 
@@ -246,7 +250,7 @@ describe('two workspaces', () => {
         expect(own.rows.every((row) => row.workspace_id === id))
           .withContext(relname)
           .toBeTrue();
-        if (['fit_bootstrap', 'peer_trial', 'trial_fit'].includes(relname))
+        if (['fit_bootstrap', 'peer_trial', 'trial_fit', 'mail'].includes(relname))
           expect(own.rowCount).withContext(relname).toBe(1);
         await app.query('commit');
       }

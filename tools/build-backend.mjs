@@ -16,6 +16,7 @@ const entries = {
   'backend/migrate': 'backend/migrate-main.ts',
   'backend/fit-worker': 'backend/compute/fit-worker.ts',
   'backend/parse-child': 'backend/compute/parse-child.ts',
+  'stubs/smtp': 'stubs/smtp/main.ts',
   'stubs/stripe': 'stubs/stripe/main.ts',
   'tools/seed-demo': 'tools/seed-demo.ts',
 };

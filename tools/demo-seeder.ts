@@ -159,9 +159,18 @@ export class DemoSeeder {
         scenarios: [],
         confidentiality: 'confidential',
         comment: 'First reading for the audit committee, before the review of the peer group.',
+        ...asMade,
       }));
-    if (first === undefined || first.state === 'waiting')
-      await editions.sign(cfo, id, this.password);
+    if (first !== undefined && first.state !== 'waiting') return;
+    await this.#openWarnings(cfo, id);
+    await editions.sign(cfo, id, this.password);
+  }
+
+  /** As whoever signs has to. */
+  async #openWarnings(cfo: Actor, editionId: string): Promise<void> {
+    const { editionDesk } = this.services;
+    for (const warningId of await editionDesk.seriousWarnings(cfo, editionId))
+      await editionDesk.openWarning(cfo, editionId, warningId);
   }
 
   async #waitingEdition(analyst: Actor, fitId: string): Promise<void> {
@@ -183,9 +192,13 @@ export class DemoSeeder {
       confidentiality: 'inside-information',
       comment:
         'Peer group reviewed: Zethorin is out. Both capex plans of the November budget are read through the model.',
+      ...asMade,
     });
   }
 }
+
+/** The headline as it is made from the figures. */
+const asMade = { headline: null, unit: 'millions', answersEditionId: null } as const;
 
 function person(role: Role): { readonly name: string; readonly email: string } {
   const found = demoPeople.find((candidate) => candidate.role === role);

@@ -12,7 +12,14 @@ import { ensureRolesAndDatabase } from './database-roles.mjs';
 import { freePort } from './free-port.mjs';
 import { openTemporaryCluster } from './pg.mjs';
 import { Interrupted, inOneSentence } from './plain-failure.mjs';
-import { launchServer, launchStripeStub, lastWords, migrate, seedDemo } from './stack.mjs';
+import {
+  lastWords,
+  launchServer,
+  launchSmtpStub,
+  launchStripeStub,
+  migrate,
+  seedDemo,
+} from './stack.mjs';
 
 const root = fileURLToPath(new URL('..', import.meta.url));
 const interruption = new AbortController();
@@ -52,6 +59,8 @@ async function serve() {
     env: process.env,
   });
   undo.push(stub.stop);
+  const mail = await launchSmtpStub(root, { env: process.env });
+  undo.push(mail.stop);
 
   const port = await freePort();
   const url = `https://127.0.0.1:${port}`;
@@ -67,6 +76,8 @@ async function serve() {
     MIGRATION_DATABASE_URL: cluster.url(owner.name, owner.password, 'kinvale'),
     STRIPE_API_URL: stub.url,
     STRIPE_SECRET_KEY: 'sk_test_journeys_stub_only',
+    SMTP_URL: mail.url,
+    MAIL_FROM: 'kinvale@kinvale.example',
   };
   await migrate(root, env, signal);
   await mkdir(join(root, '.kinvale'), { recursive: true, mode: 0o711 });
@@ -76,11 +87,19 @@ async function serve() {
   const accounts = await seedDemo(root, { ...env, KINVALE_SEED_DEMO: '1' }, signal);
   const adminUrl = new URL(cluster.adminUrl);
   adminUrl.pathname = '/kinvale';
-  console.log(JSON.stringify({ url, stubUrl: stub.url, adminUrl: adminUrl.href, accounts }));
+  console.log(
+    JSON.stringify({
+      url,
+      stubUrl: stub.url,
+      mailUrl: mail.page,
+      adminUrl: adminUrl.href,
+      accounts,
+    }),
+  );
 
-  const ended = await Promise.race([asked, server.exited, stub.exited]);
+  const ended = await Promise.race([asked, server.exited, stub.exited, mail.exited]);
   if (ended === undefined || signal.aborted) return;
-  console.error(`Server or stub ended with ${ended.status}: ${await lastWords(log)}`);
+  console.error(`Server or a stub ended with ${ended.status}: ${await lastWords(log)}`);
   process.exitCode = 1;
 }
 

@@ -22,6 +22,8 @@ async function main(): Promise<void> {
   const composition = compose({
     databaseUrl: DATABASE_URL,
     stripe: { secretKey: STRIPE_SECRET_KEY ?? 'sk_test_local', apiUrl: STRIPE_API_URL },
+    mail: undefined, // waits for the server that is filled
+    publicOrigin: '',
     fitThreads: 1,
     now: () => new Date(),
     logger: pino({ level: 'warn' }, pino.destination(2)),

@@ -1,4 +1,4 @@
-/** The processes of a running Kinvale, from the built files: migration, payment stub, server, demo. */
+/** The processes of a running Kinvale, from the built files: migration, stubs of payment and mail, server, demo. */
 import { existsSync } from 'node:fs';
 import { readFile } from 'node:fs/promises';
 import { request as requestPlain } from 'node:http';
@@ -35,22 +35,38 @@ export async function seedDemo(root, env, signal) {
  * @returns the process and the URL the stub says it listens on.
  */
 export async function launchStripeStub(root, { stateFile, env }) {
-  const stub = launch(process.execPath, entry('stubs/stripe.js'), {
-    cwd: root,
+  const { said, ...stub } = await launchStub(root, {
+    name: 'The payment stub',
+    file: 'stubs/stripe.js',
     env: { ...env, STRIPE_STUB_PORT: '0', STRIPE_STUB_STATE: stateFile },
-    readsStdout: true,
   });
+  return { ...stub, url: said.listening };
+}
+
+/** @returns the process, the URL that takes mail and the page that shows it. */
+export async function launchSmtpStub(root, { env }) {
+  const { said, ...stub } = await launchStub(root, {
+    name: 'The mail stub',
+    file: 'stubs/smtp.js',
+    env: { ...env, SMTP_STUB_PORT: '0', SMTP_STUB_PAGE_PORT: '0' },
+  });
+  return { ...stub, url: said.listening, page: said.page };
+}
+
+/** Starts a stub and waits for the line of JSON that says where it listens. */
+async function launchStub(root, { name, file, env }) {
+  const stub = launch(process.execPath, entry(file), { cwd: root, env, readsStdout: true });
   const firstLine = new Promise((resolve) =>
     createInterface({ input: stub.child.stdout }).once('line', resolve),
   );
   const line = await Promise.race([
     firstLine,
     stub.exited.then(({ status }) => {
-      throw new PlainFailure(`The payment stub ended with ${status} before it listened.`);
+      throw new PlainFailure(`${name} ended with ${status} before it listened.`);
     }),
   ]);
   stub.child.stdout.resume();
-  return { ...stub, url: JSON.parse(line).listening };
+  return { ...stub, said: JSON.parse(line) };
 }
 
 /**

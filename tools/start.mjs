@@ -11,7 +11,14 @@ import { localSecrets } from './local-secrets.mjs';
 import { ensureNodePackages } from './node-packages.mjs';
 import { ensurePostgres, openCluster } from './pg.mjs';
 import { Interrupted, PlainFailure, inOneSentence } from './plain-failure.mjs';
-import { lastWords, launchServer, launchStripeStub, migrate, seedDemo } from './stack.mjs';
+import {
+  lastWords,
+  launchServer,
+  launchSmtpStub,
+  launchStripeStub,
+  migrate,
+  seedDemo,
+} from './stack.mjs';
 
 const root = fileURLToPath(new URL('..', import.meta.url));
 const home = join(root, '.kinvale');
@@ -65,6 +72,8 @@ async function startLocal() {
     env: process.env,
   });
   undo.push(stub.stop);
+  const mail = await launchSmtpStub(root, { env: process.env });
+  undo.push(mail.stop);
   const url = `http://127.0.0.1:${port}`;
   const env = {
     ...process.env,
@@ -76,6 +85,8 @@ async function startLocal() {
     SESSION_SECRET: process.env.SESSION_SECRET ?? secrets.sessionSecret,
     STRIPE_API_URL: stub.url,
     STRIPE_SECRET_KEY: 'sk_test_local_stub_only',
+    SMTP_URL: mail.url,
+    MAIL_FROM: 'kinvale@kinvale.example',
   };
   say('Bringing the database to its version');
   await migrate(root, env, signal);
@@ -89,10 +100,12 @@ async function startLocal() {
   for (const { role, email, password } of accounts) {
     console.log(`  ${role.padEnd(14)} ${email.padEnd(34)} ${password}`);
   }
-  console.log('\nCtrl-C stops it; the data stay.');
+  console.log(`\nMail that it sends goes no further than ${mail.page}`);
+  console.log('Ctrl-C stops it; the data stay.');
   await untilOneEnds([
     { name: 'The server', exited: server.exited, log },
     { name: 'The payment stub', exited: stub.exited },
+    { name: 'The mail stub', exited: mail.exited },
   ]);
 }
 

@@ -32,6 +32,9 @@ export type ActivityAction =
   | 'scenario-deleted'
   | 'scenario-restored'
   | 'edition-published'
+  | 'edition-viewed'
+  | 'edition-exported'
+  | 'edition-commented'
   | 'edition-signed'
   | 'edition-returned';
 

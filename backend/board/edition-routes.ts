@@ -1,21 +1,34 @@
 import express, { type Router } from 'express';
 import {
   apiRoutes,
+  ComposeEdition,
   type EditionsReply,
   FigureKey,
   PublishEdition,
   ReturnEdition,
   SignEdition,
+  WriteComment,
 } from '../contract';
 import { toLineageReply } from '../fits/lineage-reply';
 import type { LineageService } from '../fits/lineage-service';
 import { signedInMember } from '../http/member';
 import { parse } from '../http/parse';
 import { idParameter, register } from '../http/register';
-import { toEditionReply, toEditionSummary } from './edition-replies';
+import type { EditionDeskService } from './edition-desk-service';
+import {
+  toEditionHistoryReply,
+  toEditionPreviewReply,
+  toEditionReply,
+  toEditionSummary,
+  toEditionVerification,
+} from './edition-replies';
 import type { EditionService } from './edition-service';
 
-export function editionRoutes(editions: EditionService, lineage: LineageService): Router {
+export function editionRoutes(
+  editions: EditionService,
+  desk: EditionDeskService,
+  lineage: LineageService,
+): Router {
   const router = express.Router();
 
   register(router, apiRoutes.listEditions, async (req, res) => {
@@ -30,9 +43,40 @@ export function editionRoutes(editions: EditionService, lineage: LineageService)
     res.status(201).json(toEditionReply(await editions.find(member, id)));
   });
 
+  register(router, apiRoutes.previewEdition, async (req, res) => {
+    const request = parse(ComposeEdition, req.body);
+    res.json(toEditionPreviewReply(await editions.preview(signedInMember(req), request)));
+  });
+
+  register(router, apiRoutes.readEditionHistory, async (req, res) => {
+    res.json(toEditionHistoryReply(await desk.history(signedInMember(req))));
+  });
+
   register(router, apiRoutes.readEdition, async (req, res) => {
-    const found = await editions.find(signedInMember(req), idParameter(req, 'editionId'));
-    res.json(toEditionReply(found));
+    const member = signedInMember(req);
+    const id = idParameter(req, 'editionId');
+    // Express answers HEAD here, too: nobody sees anything with it.
+    if (req.method === 'GET') await desk.noteView(member, id);
+    res.json(toEditionReply(await editions.find(member, id)));
+  });
+
+  register(router, apiRoutes.verifyEdition, async (req, res) => {
+    const found = await desk.verify(signedInMember(req), idParameter(req, 'editionId'));
+    res.json(toEditionVerification(found));
+  });
+
+  register(router, apiRoutes.openWarning, async (req, res) => {
+    const { warningId } = req.params;
+    const id = idParameter(req, 'editionId');
+    await desk.openWarning(signedInMember(req), id, String(warningId));
+    res.status(204).end();
+  });
+
+  register(router, apiRoutes.commentEdition, async (req, res) => {
+    const member = signedInMember(req);
+    const id = idParameter(req, 'editionId');
+    await desk.comment(member, id, parse(WriteComment, req.body));
+    res.status(201).json(toEditionReply(await editions.find(member, id)));
   });
 
   register(router, apiRoutes.readEditionLineage, async (req, res) => {

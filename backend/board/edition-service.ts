@@ -1,42 +1,42 @@
-import { createHash, randomUUID } from 'node:crypto';
+import { randomUUID } from 'node:crypto';
 import { CheckViolation } from '../../db/errors';
-import type { EditionRow, EditionState } from '../../db/repositories/editions-repository';
+import type {
+  EditionAccessRow,
+  EditionCommentRow,
+} from '../../db/repositories/edition-desk-repository';
+import type { EditionRow } from '../../db/repositories/editions-repository';
 import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import type { AccountService } from '../accounts/account-service';
 import { record } from '../activity/activity';
 import { AppError, Conflict, Forbidden, Invalid, NotFound } from '../errors/app-error';
-import { findFinishedFit, type FinishedFit } from '../fits/fit-service';
-import { findScenario, type Scenario } from '../scenarios/scenario-service';
 import { canonicalJson } from './canonical-json';
-import type { EditionParts } from './edition-parts';
-
-export interface Reader {
-  readonly personId: string;
-  readonly workspaceId: string;
-  readonly roles: readonly string[];
-}
+import type { ComposedEdition, EditionWriter, HeadlineFault } from './edition-parts';
+import { findEdition, type Reader, seesDrafts, visibleStates } from './edition-reader';
+import { contentHash } from './content-hash';
+import type { EditionMails } from './edition-mails';
+import { type EditionRequest, gatherParts, hindrances } from './gather-parts';
 
 export interface Edition {
   readonly row: EditionRow;
-  /** What was frozen, as it was hashed. */
+  /** What was frozen, as it is shown. */
   readonly content: unknown;
   /** The newest version of its fit's panel, where that is another one. */
   readonly newerPanelVersion: { readonly id: string; readonly number: number } | null;
   /** Why the reader may not sign it; null when they may. */
   readonly whyNot: string | null;
   readonly mayReturn: boolean;
+  /** Warnings that the reader has opened, by id. */
+  readonly openedWarnings: readonly string[];
+  /** Of this edition and those it answers, oldest first. */
+  readonly comments: readonly EditionCommentRow[];
+  /** Newest first; null where the reader is not to see it. */
+  readonly access: readonly EditionAccessRow[] | null;
 }
 
-export interface EditionRequest {
-  readonly fitId: string;
-  readonly scenarios: readonly { readonly id: string; readonly version: number }[];
-  readonly confidentiality: 'confidential' | 'inside-information';
-  readonly comment: string;
+/** An edition as publishing would freeze it now, and what keeps it from being published. */
+export interface EditionPreview extends ComposedEdition {
+  readonly hindrances: readonly string[];
 }
-
-const everyState: readonly EditionState[] = ['waiting', 'signed', 'returned', 'superseded'];
-/** What somebody who only reads may see: what was signed, whether or not a later one superseded it. */
-const signedStates: readonly EditionState[] = ['signed', 'superseded'];
 
 /** Frozen summaries for the CFO: published, then signed or returned by somebody else. */
 export class EditionService {
@@ -44,8 +44,8 @@ export class EditionService {
     private readonly repositories: Repositories,
     private readonly accounts: AccountService,
     private readonly now: () => Date,
-    /** Makes the content that is frozen, in the words of the contract. */
-    private readonly freeze: (parts: EditionParts) => unknown,
+    private readonly writer: EditionWriter,
+    private readonly mails: EditionMails,
   ) {}
 
   async list(reader: Reader): Promise<readonly EditionRow[]> {
@@ -63,57 +63,49 @@ export class EditionService {
       const signed = await tx.editions.findSigned();
       return {
         row,
-        content: JSON.parse(text) as unknown,
+        content: this.writer.read(text).content,
         newerPanelVersion: await newerPanelVersion(tx, row),
         whyNot: whyNotSign(reader, row, signed),
         mayReturn: whyNotSign(reader, row, undefined) === null,
+        openedWarnings: await tx.editionDesk.openedWarnings(id, reader.personId),
+        comments: await tx.editionDesk.comments(id),
+        access: seesDrafts(reader) ? await tx.editionDesk.access(id) : null,
       };
     });
   }
 
+  /** What `publish` would freeze now. @throws {NotFound}; {Conflict} for another version than seen. */
+  async preview(reader: Reader, request: EditionRequest): Promise<EditionPreview> {
+    return this.repositories.inWorkspace(reader.workspaceId, async (tx) => {
+      const parts = await gatherParts(tx, reader, request, this.now());
+      return { ...this.writer.compose(parts), hindrances: hindrances(parts) };
+    });
+  }
+
   /**
-   * Freezes figures, plans, peers with reasons, lineage and cautions under the next number.
+   * Freezes figures, plans, sentences, peers with reasons, lineage and cautions under the next number.
    *
-   * @throws {Invalid} for a peer without a reason or a scenario of another fit; {Conflict} for another version than seen.
+   * @throws {Invalid} for a peer without a reason or a scenario of another fit; {AppError} `headline-mismatch` for a
+   *   headline that says what no figure says; {Conflict} for another version than seen.
    */
   async publish(reader: Reader, request: EditionRequest): Promise<string> {
     const id = randomUUID();
     return this.repositories.inWorkspace(reader.workspaceId, async (tx) => {
       await tx.members.lockWorkspace();
-      const ground = await findFinishedFit(tx, request.fitId);
-      const scenarios: Scenario[] = [];
-      for (const seen of request.scenarios) {
-        const scenario = await findScenario(tx, seen.id);
-        if (scenario.version !== seen.version)
-          throw new Conflict(
-            `${scenario.updatedByName} saved version ${scenario.version} of “${scenario.name}” meanwhile. Load the page again to see what the edition would freeze.`,
-            'stale-version',
-          );
-        scenarios.push(scenario);
-      }
-      assertPublishable(ground, scenarios);
-      const workspace = await tx.members.workspace();
-      const publisher = await tx.members.find(reader.personId);
-      const number = await tx.editions.nextNumber();
-      const publishedAt = this.now();
-      const content = canonicalJson(
-        this.freeze({
-          number,
-          workspaceName: workspace?.name ?? '',
-          publishedBy: publisher?.name ?? '',
-          publishedAt,
-          confidentiality: request.confidentiality,
-          comment: request.comment,
-          ground,
-          scenarios,
-          peerGroupsTried: (await tx.peers.list()).length,
-        }),
-      );
-      const sha256 = createHash('sha256').update(content).digest('hex');
+      const parts = await gatherParts(tx, reader, request, this.now());
+      const [hindrance] = hindrances(parts);
+      if (hindrance !== undefined) throw new Invalid(hindrance);
+      const composed = this.writer.compose(parts);
+      if (composed.headlineFaults.length > 0) throw headlineMismatch(composed.headlineFaults);
+      const content = canonicalJson(composed.content);
+      const sha256 = contentHash(content);
       const { fitId, confidentiality } = request;
+      const { number, publishedAt } = parts;
       const edition = { id, number, fitId, content, sha256, confidentiality, publishedAt };
-      await tx.editions.insert({ ...edition, publishedBy: reader.personId });
+      const answers = parts.answers?.id ?? null;
+      await tx.editions.insert({ ...edition, answers, publishedBy: reader.personId });
       await record(tx, reader.personId, 'edition-published', id, { number, sha256 });
+      await this.mails.published(tx, reader.personId, { id, number });
       return id;
     });
   }
@@ -121,8 +113,8 @@ export class EditionService {
   /**
    * Signs a waiting edition; the one signed before is superseded.
    *
-   * @throws {AppError} `wrong-credentials`; {Forbidden} `four-eyes` for the publisher; {Conflict} when it no longer
-   *   waits or a later one is signed.
+   * @throws {AppError} `wrong-credentials`; `warnings-unopened` while a serious warning was not opened; {Forbidden}
+   *   `four-eyes` for the publisher; {Conflict} when it no longer waits or a later one is signed.
    */
   async sign(reader: Reader, id: string, password: string): Promise<void> {
     if (!(await this.accounts.confirmPassword(reader.personId, password)))
@@ -131,6 +123,7 @@ export class EditionService {
       const signed = await tx.editions.findSigned();
       const overtaker = laterSigned(row, signed);
       if (overtaker !== undefined) throw new Conflict(overtakenBy(overtaker));
+      await this.#assertWarningsOpened(tx, reader, id);
       if (signed !== undefined) await tx.editions.supersede(signed.id, id);
       return { state: 'signed', comment: '' };
     });
@@ -139,6 +132,27 @@ export class EditionService {
   /** @throws {Conflict} when it no longer waits; {Forbidden} `four-eyes` for the publisher. */
   async sendBack(reader: Reader, id: string, comment: string): Promise<void> {
     await this.#decide(reader, id, () => Promise.resolve({ state: 'returned', comment }));
+  }
+
+  /** @throws {AppError} `warnings-unopened`, naming them. */
+  async #assertWarningsOpened(
+    tx: WorkspaceRepositories,
+    reader: Reader,
+    id: string,
+  ): Promise<void> {
+    const text = await tx.editions.content(id);
+    if (text === undefined) throw new NotFound();
+    const opened = await tx.editionDesk.openedWarnings(id, reader.personId);
+    const unopened = this.writer
+      .read(text)
+      .warnings.filter((warning) => warning.isSerious && !opened.includes(warning.id));
+    if (unopened.length > 0)
+      throw new AppError(
+        'warnings-unopened',
+        409,
+        `Open every serious warning before you sign. Not opened: ${unopened.map(({ title }) => title).join(', ')}.`,
+        { warnings: unopened.map((warning) => warning.id) },
+      );
   }
 
   async #decide(
@@ -160,6 +174,7 @@ export class EditionService {
         if (!(await tx.editions.decide(id, decision))) throw new Conflict(decidedAlready(row));
         const action = state === 'signed' ? 'edition-signed' : 'edition-returned';
         await record(tx, reader.personId, action, id, { number: row.number, sha256: row.sha256 });
+        await this.mails.decided(tx, row, decision);
       })
       .catch((error: unknown) => {
         if (error instanceof CheckViolation && error.constraint === 'edition_four_eyes')
@@ -176,22 +191,6 @@ async function newerPanelVersion(
   const fit = await tx.fits.find(fitId);
   if (fit === undefined) throw new Error(`fit ${fitId} of an edition is not there`);
   return (await tx.panels.newerThan(fit.panelVersionId)) ?? null;
-}
-
-function visibleStates(reader: Reader): readonly EditionState[] {
-  const seesAll = reader.roles.includes('analyst') || reader.roles.includes('cfo');
-  return seesAll ? everyState : signedStates;
-}
-
-async function findEdition(
-  tx: WorkspaceRepositories,
-  reader: Reader,
-  id: string,
-): Promise<EditionRow> {
-  const found = await tx.editions.find(id);
-  if (found === undefined || !visibleStates(reader).includes(found.state))
-    throw new NotFound('There is no such edition.');
-  return found;
 }
 
 function whyNotSign(
@@ -229,19 +228,11 @@ function fourEyes(): Forbidden {
   );
 }
 
-function assertPublishable(ground: FinishedFit, scenarios: readonly Scenario[]): void {
-  if (ground.result.standing === null)
-    throw new Invalid(
-      ground.result.standingReason ?? 'The fit has no standing of the own company to publish.',
-    );
-  const silent = ground.peerGroup.choices.filter(({ reason }) => reason === '');
-  if (silent.length > 0)
-    throw new Invalid(
-      `Every company that is in or out needs a written reason. Without one: ${silent.map(({ company }) => company).join(', ')}.`,
-    );
-  const foreign = scenarios.filter(({ fitId }) => fitId !== ground.fit.id);
-  if (foreign.length > 0)
-    throw new Invalid(
-      `An edition shows scenarios of its own fit alone. Of another fit: ${foreign.map(({ name }) => name).join(', ')}.`,
-    );
+function headlineMismatch(faults: readonly HeadlineFault[]): AppError {
+  return new AppError(
+    'headline-mismatch',
+    400,
+    'The headline says what no figure of this edition says.',
+    { errors: faults.map(({ detail }) => ({ pointer: '/headline', detail })) },
+  );
 }

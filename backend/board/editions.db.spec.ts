@@ -2,7 +2,7 @@ import pg from 'pg';
 import type { TestDatabase } from '../../db/testing/test-database';
 import type { EditionReply, EditionsReply, FitReply } from '../contract';
 import { join, signUp, type TestClient, testPassword } from '../testing/test-client';
-import { importPanel, runFit, savePeers } from '../testing/test-model';
+import { importPanel, openWarnings, runFit, savePeers } from '../testing/test-model';
 import { createMigratedDatabase, startTestServer, type TestServer } from '../testing/test-server';
 
 describe('editions', () => {
@@ -42,8 +42,10 @@ describe('editions', () => {
     return reply.body as EditionReply;
   }
 
-  const sign = (by: TestClient, id: string) =>
-    by.post(`/api/editions/${id}/sign`, { password: testPassword });
+  const sign = async (by: TestClient, id: string) => {
+    await openWarnings(by, id);
+    return by.post(`/api/editions/${id}/sign`, { password: testPassword });
+  };
   const sendBack = (by: TestClient, id: string, comment = 'Explain C05.') =>
     by.post(`/api/editions/${id}/return`, { comment });
 

@@ -1,7 +1,7 @@
 import type { TestDatabase } from '../../db/testing/test-database';
 import type { EditionReply, FitReply, LineageReply, ScenarioReply } from '../contract';
 import { join, signUp, type TestClient, testPassword } from '../testing/test-client';
-import { importPanel, runFit, savePeers } from '../testing/test-model';
+import { importPanel, openWarnings, runFit, savePeers } from '../testing/test-model';
 import { createMigratedDatabase, startTestServer, type TestServer } from '../testing/test-server';
 
 /** Figures: R 4.2.2 and numpy over the same file, see stats/golden. */
@@ -83,6 +83,7 @@ describe('the main job, from a file to a signed edition', () => {
     const path = `/api/editions/${edition.edition.id}`;
     expect((await analyst.post(`${path}/sign`, { password: testPassword })).status).toBe(403);
     expect((await cfo.post(`${path}/sign`, { password: 'not the password' })).status).toBe(403);
+    await openWarnings(cfo, edition.edition.id);
     const twice = await Promise.all([
       cfo.post(`${path}/sign`, { password: testPassword }),
       cfo.post(`${path}/sign`, { password: testPassword }),

@@ -128,15 +128,38 @@ export const apiRoutes = {
     path: '/api/scenarios/:scenarioId/restore',
     allow: ['analyst'],
   },
+  listScenarioVersions: {
+    method: 'GET',
+    path: '/api/scenarios/:scenarioId/versions',
+    allow: model,
+  },
   copyScenario: { method: 'POST', path: '/api/scenarios/:scenarioId/copy', allow: ['analyst'] },
 
   listEditions: { method: 'GET', path: '/api/editions', allow: editions },
+  readEditionHistory: { method: 'GET', path: '/api/editions/history', allow: editions },
+  previewEdition: { method: 'POST', path: '/api/editions/preview', allow: ['analyst'] },
   publishEdition: { method: 'POST', path: '/api/editions', allow: ['analyst'] },
   readEdition: { method: 'GET', path: '/api/editions/:editionId', allow: editions },
   readEditionLineage: {
     method: 'GET',
     path: '/api/editions/:editionId/lineage/:figure',
     allow: editions,
+  },
+  verifyEdition: { method: 'GET', path: '/api/editions/:editionId/verification', allow: editions },
+  exportEdition: {
+    method: 'GET',
+    path: '/api/editions/:editionId/export/:format',
+    allow: editions,
+  },
+  openWarning: {
+    method: 'PUT',
+    path: '/api/editions/:editionId/warnings/:warningId',
+    allow: ['cfo'],
+  },
+  commentEdition: {
+    method: 'POST',
+    path: '/api/editions/:editionId/comments',
+    allow: model,
   },
   signEdition: { method: 'POST', path: '/api/editions/:editionId/sign', allow: ['cfo'] },
   returnEdition: { method: 'POST', path: '/api/editions/:editionId/return', allow: ['cfo'] },

@@ -98,7 +98,7 @@ const DroppedRow = z.object({
 
 const observedRange = z.object({ low: z.number(), high: z.number() });
 
-/** What is optional is missing in fits of engines before 2; see `PredictionBasis` of the engine for the measures. */
+/** What is optional is missing in fits of earlier engines; see `PredictionBasis` of the engine for the measures. */
 export const PredictionBasis = z.object({
   company: z.string(),
   regressors: z.array(z.string()),
@@ -161,6 +161,7 @@ export const PredictionBasis = z.object({
   largestLeverage: z.number(),
   ownRange: z.array(observedRange),
   peerRange: z.array(observedRange),
+  peerSpread: z.array(observedRange).optional(),
 });
 export type PredictionBasis = z.infer<typeof PredictionBasis>;
 

@@ -18,6 +18,8 @@ export const problemSlugs = [
   'unavailable',
   'internal',
   'four-eyes',
+  'warnings-unopened',
+  'headline-mismatch',
   'import-not-ready',
   'stale-version',
   'billing-unavailable',

@@ -94,4 +94,32 @@ describe('expected path layout', () => {
         .points)
         expect([point.x, point.y].every(Number.isFinite)).toBeTrue();
   });
+
+  it('names the band beside its last year, inside the width and off the lines of history', () => {
+    const wide = plan('B', 9000);
+    const years = wide.years.map((year) => ({ ...year, bandLow: 7000, bandHigh: 11500 }));
+    const data = { ownYears, base, plans: [{ ...wide, years }], bandName: '80 % band' };
+    for (const width of [320, 640]) {
+      const layout = expectedPathLayout(data, width, formats);
+      const label = layout.bandLabel!;
+      expect(label.text).toBe('80 % band');
+      expect(label.x).toBeCloseTo(layout.plot.right, 6);
+      expect(label.y).toBeGreaterThan(14);
+      expect(label.y).toBeLessThan(layout.yearsY - 10);
+      expect(layout.points.at(-1)!.band).toBe('7000 to 11500');
+    }
+  });
+
+  it('names no band where there is none', () => {
+    const data = { ownYears, base, plans: [plan('B', 9000)], bandName: '80 % band' };
+    const layout = expectedPathLayout(data, 640, formats);
+    expect(layout.bandLabel).toBeNull();
+    expect(layout.points.at(-1)!.band).toBe('');
+  });
+
+  it('has four marks that no two plans share', () => {
+    const plans = ['A', 'B', 'C', 'D'].map((name) => plan(name, 9000));
+    const { plans: placed } = expectedPathLayout({ ownYears, base, plans }, 640, formats);
+    expect(new Set(placed.map(({ mark }) => mark)).size).toBe(4);
+  });
 });

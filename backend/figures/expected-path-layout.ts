@@ -1,4 +1,5 @@
 import { area, line, max } from 'd3';
+import { placedBandLabel } from './band-label';
 import {
   type EndLabel,
   type Fold,
@@ -40,6 +41,8 @@ export interface ExpectedPathData {
   readonly base: readonly { readonly year: number; readonly estimate: number }[];
   /** The first one is in question: its interval is an area. The others carry theirs at the last year. */
   readonly plans: readonly ExpectedPlan[];
+  /** What the band is called beside it: `80 % band of the market value`. */
+  readonly bandName?: string;
 }
 
 export interface ExpectedPathPoint extends Point {
@@ -50,6 +53,8 @@ export interface ExpectedPathPoint extends Point {
   readonly actual: string;
   readonly expected: string;
   readonly bounds: string;
+  /** Of the market value's band: `1,200 to 3,900`; empty where there is none. */
+  readonly band: string;
 }
 
 /** A year of one of the lines, as it is chosen: of what happened, of the base, or of the plan with this index. */
@@ -84,6 +89,7 @@ export interface ExpectedPathLayout {
   readonly basePath: string;
   /** Areas of the first plan: the band of the market value, within it the interval of the expected value. */
   readonly bandArea: string;
+  readonly bandLabel: PlacedText | null;
   readonly intervalArea: string;
   readonly plans: readonly PlacedPlan[];
   readonly seriesLabels: readonly (PlacedText & { readonly series: 'actual' | 'expected' })[];
@@ -155,6 +161,7 @@ export function expectedPathLayout(
         ? ''
         : (through([...start, ...base.map((at) => place(at.year, at.estimate))]) ?? ''),
     bandArea: areaOf(plans.at(0), x, y, (at) => [at.bandLow, at.bandHigh]),
+    bandLabel: placedBandLabel(data, plot, place, [...actual, ...fitted]),
     intervalArea: areaOf(plans.at(0), x, y, (at) => [at.low, at.high]),
     plans: plans.map((plan, index) => {
       const points = plan.years.map((at) => place(at.year, at.estimate));
@@ -215,6 +222,7 @@ function pointsOf(
       actual: formats.value(own.actual),
       expected: formats.value(own.fitted),
       bounds: '',
+      band: '',
     })),
     ...base.map((at) => ({
       kind: 'base' as const,
@@ -224,6 +232,7 @@ function pointsOf(
       actual: '',
       expected: formats.value(at.estimate),
       bounds: '',
+      band: '',
     })),
     ...plans.flatMap((plan, index) =>
       plan.years.map((at) => ({
@@ -234,7 +243,14 @@ function pointsOf(
         actual: '',
         expected: formats.value(at.estimate),
         bounds: formats.bounds(at),
+        band: bandOf(at, formats),
       })),
     ),
   ];
+}
+
+function bandOf({ estimate, bandLow, bandHigh }: ExpectedYear, formats: FigureFormats): string {
+  return bandLow == null || bandHigh == null
+    ? ''
+    : formats.bounds({ estimate, low: bandLow, high: bandHigh });
 }

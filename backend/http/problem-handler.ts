@@ -19,6 +19,8 @@ const titles: Readonly<Record<ProblemSlug, string>> = {
   quota: 'As much as the workspace may have',
   unavailable: 'Not available just now',
   internal: 'Something went wrong on our side',
+  'warnings-unopened': 'Warnings not opened',
+  'headline-mismatch': 'Headline and figures part',
   'four-eyes': 'Four eyes: another person has to sign',
   'import-not-ready': 'The import is not ready',
   'stale-version': 'A newer version exists',

@@ -11,6 +11,7 @@ export const queueNames = [
   'peer-trial',
   'import',
   'open-billing-account',
+  'mail',
 ] as const;
 export type QueueName = (typeof queueNames)[number];
 

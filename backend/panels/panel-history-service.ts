@@ -2,7 +2,7 @@ import type { RowInVersion } from '../../db/repositories/panel-corrections-repos
 import type { RowKey } from '../../db/repositories/panel-copies-repository';
 import type { DifferingRow } from '../../db/repositories/panel-differences-repository';
 import type { PanelVersionRow } from '../../db/repositories/panels-repository';
-import type { Repositories } from '../../db/repositories/repositories';
+import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import { Invalid, NotFound } from '../errors/app-error';
 import {
   isSameColumn,
@@ -56,32 +56,9 @@ export class PanelHistoryService {
     versionId: string,
     otherId: string,
   ): Promise<VersionDifferences> {
-    return this.repositories.inWorkspace(workspaceId, async (tx) => {
-      const before = await findPanelVersion(tx, versionId);
-      const after = await findPanelVersion(tx, otherId);
-      if (before.panelId !== after.panelId)
-        throw new NotFound('These two versions are of different panels.');
-      const matched = matchedColumns(before.columns, after.columns);
-      const shift = unitShift(before, after);
-      const { first, ...counts } = await tx.panelDifferences.between(
-        before.id,
-        after.id,
-        matched.map(({ column, ...places }) => ({
-          ...places,
-          shift: column.role === 'other' ? 0 : shift,
-        })),
-        mostListed,
-      );
-      const listed = first.flatMap((row) => differencesOf(row, matched));
-      const { currency, unit } = after;
-      return {
-        ...counts,
-        listed: listed.slice(0, mostListed),
-        columns: matched.map(({ column }) => column),
-        renamed: matched.flatMap((column) => renameOf(column, before)),
-        money: before.currency === currency ? { currency, unit } : null,
-      };
-    });
+    return this.repositories.inWorkspace(workspaceId, (tx) =>
+      differencesBetween(tx, versionId, otherId),
+    );
   }
 
   /**
@@ -110,6 +87,38 @@ export class PanelHistoryService {
       return changesOf(entries, asked.role !== 'other');
     });
   }
+}
+
+/** From the first version to the second. @throws {NotFound}, also for versions of different panels. */
+export async function differencesBetween(
+  tx: WorkspaceRepositories,
+  versionId: string,
+  otherId: string,
+): Promise<VersionDifferences> {
+  const before = await findPanelVersion(tx, versionId);
+  const after = await findPanelVersion(tx, otherId);
+  if (before.panelId !== after.panelId)
+    throw new NotFound('These two versions are of different panels.');
+  const matched = matchedColumns(before.columns, after.columns);
+  const shift = unitShift(before, after);
+  const { first, ...counts } = await tx.panelDifferences.between(
+    before.id,
+    after.id,
+    matched.map(({ column, ...places }) => ({
+      ...places,
+      shift: column.role === 'other' ? 0 : shift,
+    })),
+    mostListed,
+  );
+  const listed = first.flatMap((row) => differencesOf(row, matched));
+  const { currency, unit } = after;
+  return {
+    ...counts,
+    listed: listed.slice(0, mostListed),
+    columns: matched.map(({ column }) => column),
+    renamed: matched.flatMap((column) => renameOf(column, before)),
+    money: before.currency === currency ? { currency, unit } : null,
+  };
 }
 
 const unitPowers = { units: 0, thousands: 3, millions: 6, billions: 9 } as const;

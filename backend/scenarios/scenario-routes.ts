@@ -2,15 +2,22 @@ import express, { type Request, type Router } from 'express';
 import {
   apiRoutes,
   ChangeScenario,
+  CopyScenario,
   DraftOf,
   SaveDraft,
   SaveScenario,
   type ScenariosReply,
+  type ScenarioVersionsReply,
 } from '../contract';
 import { signedInMember } from '../http/member';
 import { parse } from '../http/parse';
 import { idParameter, register } from '../http/register';
-import { toDraftReply, toScenarioReply } from './scenario-replies';
+import {
+  toDraftReply,
+  toScenarioCopyReply,
+  toScenarioReply,
+  toScenarioVersionReply,
+} from './scenario-replies';
 import type { ScenarioService } from './scenario-service';
 
 export function scenarioRoutes(scenarios: ScenarioService): Router {
@@ -54,6 +61,12 @@ export function scenarioRoutes(scenarios: ScenarioService): Router {
     res.json(toScenarioReply(found));
   });
 
+  register(router, apiRoutes.listScenarioVersions, async (req, res) => {
+    const found = await scenarios.versions(signedInMember(req).workspaceId, scenarioId(req));
+    const reply: ScenarioVersionsReply = { versions: found.map(toScenarioVersionReply) };
+    res.json(reply);
+  });
+
   register(router, apiRoutes.changeScenario, async (req, res) => {
     const { version, ...text } = parse(ChangeScenario, req.body);
     const changed = await scenarios.change(signedInMember(req), scenarioId(req), version, text);
@@ -70,9 +83,14 @@ export function scenarioRoutes(scenarios: ScenarioService): Router {
   });
 
   register(router, apiRoutes.copyScenario, async (req, res) => {
-    res
-      .status(201)
-      .json(toScenarioReply(await scenarios.copy(signedInMember(req), scenarioId(req))));
+    const { fitId: onto } = parse(CopyScenario, req.body ?? {});
+    const member = signedInMember(req);
+    const id = scenarioId(req);
+    const copy =
+      onto === undefined
+        ? await scenarios.copy(member, id)
+        : await scenarios.copyOnto(member, id, onto);
+    res.status(201).json(toScenarioCopyReply(copy));
   });
 
   return router;

@@ -1,31 +1,53 @@
 import { randomUUID } from 'node:crypto';
-import type { DraftRow, ScenarioRow } from '../../db/repositories/scenarios-repository';
+import type {
+  DraftRow,
+  NewScenarioVersion,
+  ScenarioRow,
+  ScenarioVersionRow,
+} from '../../db/repositories/scenarios-repository';
 import type { Repositories, WorkspaceRepositories } from '../../db/repositories/repositories';
 import { record } from '../activity/activity';
 import { Conflict, Invalid, NotFound } from '../errors/app-error';
 import { findFinishedFit } from '../fits/fit-service';
-import type { PredictionBasis } from '../stats';
-import { evaluatePlan, type EvaluatedYear, type PlannedYear } from './evaluate-plan';
+import type { IntervalEstimate, PredictionBasis } from '../stats/prediction';
+import { assertPlan } from './assert-plan';
+import { copyOntoFit, type CopyChanges } from './copy-onto-fit';
+import { evaluatePlan, type EvaluatedYear } from './evaluate-plan';
+import { type AskedReading, type PlanReading, wholeReading } from './plan-reading';
 
 export interface Actor {
   readonly personId: string;
   readonly workspaceId: string;
 }
 
-export interface ScenarioText {
+export interface ScenarioText extends AskedReading {
   readonly name: string;
   readonly note: string;
-  readonly plan: readonly PlannedYear[];
 }
 
-/** A scenario's row with its JSON columns under their types. */
-export interface Scenario extends Omit<ScenarioRow, 'plan' | 'years'> {
-  readonly plan: readonly PlannedYear[];
+type Columns = 'plan' | 'years' | 'outlook' | 'rules' | 'uncertainty';
+
+/** A scenario's row with its JSON columns under their types, what earlier ones lack filled. */
+export interface Scenario extends Omit<ScenarioRow, Columns>, PlanReading {
   readonly years: readonly EvaluatedYear[];
 }
 
-export interface Draft extends Omit<DraftRow, 'plan'> {
-  readonly plan: readonly PlannedYear[];
+export interface ScenarioVersion extends Omit<ScenarioVersionRow, Columns>, PlanReading {
+  readonly years: readonly EvaluatedYear[];
+}
+
+export interface Draft extends Omit<DraftRow, Columns>, PlanReading {}
+
+/** A copy onto another fit, with what it could not take over and the figures on both. */
+export interface ScenarioCopy {
+  readonly scenario: Scenario;
+  readonly changes: CopyChanges;
+  /** Years that both have. */
+  readonly years: readonly {
+    readonly year: number;
+    readonly before: IntervalEstimate;
+    readonly after: IntervalEstimate;
+  }[];
 }
 
 export class ScenarioService {
@@ -37,8 +59,21 @@ export class ScenarioService {
   /** @throws {NotFound} */
   async list(workspaceId: string, fitId: string): Promise<readonly Scenario[]> {
     return this.repositories.inWorkspace(workspaceId, async (tx) => {
-      await findFinishedFit(tx, fitId);
-      return (await tx.scenarios.listByFit(fitId)).map(toScenario);
+      const basis = await findBasis(tx, fitId);
+      return (await tx.scenarios.listByFit(fitId)).map((row) => toScenario(row, basis));
+    });
+  }
+
+  /** Every stored version, newest first. @throws {NotFound} */
+  async versions(workspaceId: string, id: string): Promise<readonly ScenarioVersion[]> {
+    return this.repositories.inWorkspace(workspaceId, async (tx) => {
+      const { fitId } = await findScenario(tx, id);
+      const basis = await findBasis(tx, fitId);
+      return (await tx.scenarios.listVersions(id)).map((row) => ({
+        ...row,
+        ...storedReading(row, basis),
+        years: row.years as readonly EvaluatedYear[],
+      }));
     });
   }
 
@@ -50,8 +85,7 @@ export class ScenarioService {
   /**
    * Saves a new scenario with the figures that this server computes for its plan.
    *
-   * @throws {Invalid} for a plan that does not follow the last observed year, has the wrong number of values, or in log
-   *   form one that is not above zero.
+   * @throws {Invalid} as `assertPlan`.
    */
   async save(actor: Actor, fitId: string, text: ScenarioText): Promise<Scenario> {
     return this.repositories.inWorkspace(actor.workspaceId, (tx) =>
@@ -68,8 +102,7 @@ export class ScenarioService {
   ): Promise<Scenario> {
     return this.repositories.inWorkspace(actor.workspaceId, async (tx) => {
       const current = await findScenario(tx, id);
-      const years = await evaluateOn(tx, current.fitId, text.plan);
-      const next = { ...text, years, createdBy: actor.personId };
+      const next = await versionOn(tx, current.fitId, text, actor);
       if (!(await tx.scenarios.addVersion(id, parentVersion, next)))
         throw new Conflict(
           `${current.updatedByName} saved version ${current.version} of this scenario meanwhile. Save yours as a copy, or open theirs.`,
@@ -105,11 +138,31 @@ export class ScenarioService {
     });
   }
 
-  /** @throws {NotFound} */
-  async copy(actor: Actor, id: string): Promise<Scenario> {
+  /** A copy on the same fit. @throws {NotFound} */
+  async copy(actor: Actor, id: string): Promise<ScenarioCopy> {
     return this.repositories.inWorkspace(actor.workspaceId, async (tx) => {
-      const { fitId, name, note, plan } = await findScenario(tx, id);
-      return insertScenario(tx, actor, fitId, { name: `${name} (copy)`.slice(0, 120), note, plan });
+      const source = await findScenario(tx, id);
+      const text = { ...source, name: copyName(source.name) };
+      const scenario = await insertScenario(tx, actor, source.fitId, text, source);
+      return { scenario, changes: nothingChanged, years: [] };
+    });
+  }
+
+  /** A copy on another fit. @throws {NotFound}; {Invalid} as `copyOntoFit` and `assertPlan`. */
+  async copyOnto(actor: Actor, id: string, fitId: string): Promise<ScenarioCopy> {
+    return this.repositories.inWorkspace(actor.workspaceId, async (tx) => {
+      const source = await findScenario(tx, id);
+      const from = await findBasis(tx, source.fitId);
+      const onto = await findBasis(tx, fitId);
+      if (from === null || onto === null) throw new Invalid(await unreadable(tx, fitId));
+      const { reading, changes } = copyOntoFit(source, from, onto);
+      const text = { ...reading, name: source.name, note: source.note };
+      const scenario = await insertScenario(tx, actor, fitId, text, source);
+      const years = scenario.years.flatMap(({ year, expected }) => {
+        const before = source.years.find((each) => each.year === year);
+        return before === undefined ? [] : [{ year, before: before.expected, after: expected }];
+      });
+      return { scenario, changes, years };
     });
   }
 
@@ -119,10 +172,10 @@ export class ScenarioService {
     fitId: string,
     scenarioId: string | null,
   ): Promise<Draft | undefined> {
-    const found = await this.repositories.inWorkspace(actor.workspaceId, (tx) =>
-      tx.scenarios.findDraft({ fitId, personId: actor.personId, scenarioId }),
-    );
-    return found && { ...found, plan: found.plan as readonly PlannedYear[] };
+    return this.repositories.inWorkspace(actor.workspaceId, async (tx) => {
+      const found = await tx.scenarios.findDraft({ fitId, personId: actor.personId, scenarioId });
+      return found && { ...found, ...storedReading(found, await findBasis(tx, fitId)) };
+    });
   }
 
   /** @throws {NotFound} for an unknown fit or scenario; {Invalid} as `save`. */
@@ -132,14 +185,16 @@ export class ScenarioService {
     scenarioId: string | null,
     text: ScenarioText,
   ): Promise<Draft> {
-    await this.repositories.inWorkspace(actor.workspaceId, async (tx) => {
-      await evaluateOn(tx, fitId, text.plan);
+    return this.repositories.inWorkspace(actor.workspaceId, async (tx) => {
+      const { reading } = await evaluateOn(tx, fitId, text);
       if (scenarioId !== null && (await findScenario(tx, scenarioId)).fitId !== fitId)
         throw new NotFound('There is no such scenario of this fit.');
       const key = { fitId, personId: actor.personId, scenarioId };
-      await tx.scenarios.saveDraft(key, text, this.now());
+      const { name, note } = text;
+      const updatedAt = this.now();
+      await tx.scenarios.saveDraft(key, { name, note, ...reading }, updatedAt);
+      return { name, note, ...reading, scenarioId, updatedAt };
     });
-    return { ...text, scenarioId, updatedAt: this.now() };
   }
 
   async discardDraft(actor: Actor, fitId: string, scenarioId: string | null): Promise<void> {
@@ -153,7 +208,7 @@ export class ScenarioService {
 export async function findScenario(tx: WorkspaceRepositories, id: string): Promise<Scenario> {
   const found = await tx.scenarios.find(id);
   if (found?.deletedAt !== null) throw new NotFound('There is no such scenario.');
-  return toScenario(found);
+  return toScenario(found, await findBasis(tx, found.fitId));
 }
 
 async function insertScenario(
@@ -161,60 +216,80 @@ async function insertScenario(
   actor: Actor,
   fitId: string,
   text: ScenarioText,
+  source?: { readonly id: string; readonly version: number },
 ): Promise<Scenario> {
-  const years = await evaluateOn(tx, fitId, text.plan);
+  const first = await versionOn(tx, fitId, text, actor);
   const id = randomUUID();
-  await tx.scenarios.insert(id, fitId, { ...text, years, createdBy: actor.personId });
+  await tx.scenarios.insert(id, fitId, first, source ?? null);
   await record(tx, actor.personId, 'scenario-saved', id, { version: 1 });
   return findScenario(tx, id);
+}
+
+/** A version as it is stored, with the figures that this server computes for its plan. */
+async function versionOn(
+  tx: WorkspaceRepositories,
+  fitId: string,
+  text: ScenarioText,
+  actor: Actor,
+): Promise<NewScenarioVersion> {
+  const { reading, years } = await evaluateOn(tx, fitId, text);
+  const { name, note } = text;
+  return { name, note, ...reading, years, createdBy: actor.personId };
 }
 
 async function evaluateOn(
   tx: WorkspaceRepositories,
   fitId: string,
-  plan: readonly PlannedYear[],
-): Promise<readonly EvaluatedYear[]> {
+  asked: AskedReading,
+): Promise<{ readonly reading: PlanReading; readonly years: readonly EvaluatedYear[] }> {
+  const basis = await findBasis(tx, fitId);
+  if (basis === null) throw new Invalid(await unreadable(tx, fitId));
+  const reading = wholeReading(basis, asked);
+  assertPlan(reading, basis);
+  return { reading, years: evaluatePlan(basis, reading.plan, reading.outlook) };
+}
+
+/** What plans on a fit are read by; null where the fit reads none. @throws {NotFound} */
+async function findBasis(
+  tx: WorkspaceRepositories,
+  fitId: string,
+): Promise<PredictionBasis | null> {
+  return (await findFinishedFit(tx, fitId)).result.prediction;
+}
+
+async function unreadable(tx: WorkspaceRepositories, fitId: string): Promise<string> {
   const { result } = await findFinishedFit(tx, fitId);
-  if (result.prediction === null)
-    throw new Invalid(
-      result.predictionReason ?? 'The own company has no rows in this fit, so no plan can be read.',
-    );
-  assertPlan(plan, result.prediction);
-  return evaluatePlan(result.prediction, plan);
+  return (
+    result.predictionReason ?? 'The own company has no rows in this fit, so no plan can be read.'
+  );
 }
 
-function assertPlan(plan: readonly PlannedYear[], basis: PredictionBasis): void {
-  const errors = plan.flatMap(({ year, values }, index) => {
-    const expectedYear = basis.last.year + 1 + index;
-    const found = [];
-    if (year !== expectedYear)
-      found.push({
-        pointer: `/plan/${index}/year`,
-        detail: `expected ${expectedYear}, the years after ${basis.last.year} in a row; found ${year}`,
-      });
-    if (values.length !== basis.regressors.length)
-      found.push({
-        pointer: `/plan/${index}/values`,
-        detail: `expected ${basis.regressors.length} values, for ${basis.regressors.join(' and ')}; found ${values.length}`,
-      });
-    // Also of a last year that with a lag nothing reads yet.
-    if (basis.form === 'log')
-      values.forEach((value, regressor) => {
-        if (!(value > 0))
-          found.push({
-            pointer: `/plan/${index}/values/${regressor}`,
-            detail: `expected an amount above zero, for the fit reads logs; found ${value}`,
-          });
-      });
-    return found;
-  });
-  if (errors.length > 0) throw new Invalid('The plan does not fit the fit.', errors);
+const nothingChanged: CopyChanges = {
+  droppedYears: [],
+  addedYears: [],
+  heldRegressors: [],
+  droppedRegressors: [],
+  droppedRules: [],
+  outlook: [],
+};
+
+function copyName(name: string): string {
+  return `${name} (copy)`.slice(0, 120);
 }
 
-function toScenario(row: ScenarioRow): Scenario {
+function toScenario(row: ScenarioRow, basis: PredictionBasis | null): Scenario {
   return {
     ...row,
-    plan: row.plan as readonly PlannedYear[],
+    ...storedReading(row, basis),
     years: row.years as readonly EvaluatedYear[],
   };
+}
+
+function storedReading(
+  row: Pick<ScenarioRow, 'plan' | 'outlook' | 'rules' | 'uncertainty'>,
+  basis: PredictionBasis | null,
+): PlanReading {
+  // What a fit reads no plan for has no stored plan.
+  if (basis === null) throw new Error('a plan is stored on a fit that reads none');
+  return wholeReading(basis, row as AskedReading);
 }

@@ -2,7 +2,7 @@ import type { PredictionBasis } from './fit-result';
 import { leastSquares } from './linear-algebra/least-squares';
 import { congruence, type SquareMatrix, toRows } from './linear-algebra/square-matrix';
 import { invertUpper } from './linear-algebra/triangular';
-import { observedRanges, ownLeverages, peerLeverage } from './observed-range';
+import { observedRanges, ownLeverages, peerLeverage, peerSpread } from './observed-range';
 import type { WithinFit } from './regression/within-fit';
 
 /** What a plan's familiar range, and a contrast of slopes, are judged by. */
@@ -14,6 +14,7 @@ export type FamiliarGround = Pick<
   | 'largestLeverage'
   | 'ownRange'
   | 'peerRange'
+  | 'peerSpread'
 >;
 
 /** Familiar is what companies have shown around their own means: year effects, where there are any, are left in. */
@@ -35,6 +36,7 @@ export function familiarGroundOf(
     largestOwnLeverage,
     largestLeverage: Math.max(largestOwnLeverage, peerLeverage(fit, basis, own)),
     ...observedRanges(fit.sample, own),
+    peerSpread: peerSpread(fit.sample, own),
   };
 }
 

@@ -1,5 +1,5 @@
 import type { ObservedRange, PredictionBasis } from './fit-result';
-import { quadraticForm } from './prediction';
+import { percentile, quadraticForm } from './prediction';
 import type { PanelSample } from './panel/panel-sample';
 import type { WithinFit } from './regression/within-fit';
 
@@ -20,6 +20,22 @@ export function observedRanges(
       ]),
     ),
   };
+}
+
+/** The shares of the peers' rows below the ends of their usual spread. */
+const spreadShares = { low: 0.1, high: 0.9 };
+
+/** 10th and 90th percentile of each regressor over all peers' rows, in the panel's measure. */
+export function peerSpread(sample: PanelSample, own: number): ObservedRange[] {
+  const from = sample.starts[own];
+  const to = sample.starts[own + 1];
+  return sample.levels.regressors.map((column) => {
+    const sorted = column.filter((_, row) => row < from || row >= to).sort();
+    return {
+      low: percentile(sorted, spreadShares.low),
+      high: percentile(sorted, spreadShares.high),
+    };
+  });
 }
 
 /** Bounds over stretches of rows, each from its first row to before its last. */

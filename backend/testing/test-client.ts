@@ -24,6 +24,27 @@ export class TestClient {
     return this.#keepToken(this.agent.get(path));
   }
 
+  /** A file with its bytes. */
+  async download(path: string): Promise<{
+    readonly status: number;
+    readonly type: string;
+    readonly bytes: Buffer;
+  }> {
+    const response = await this.#keepToken(
+      this.agent
+        .get(path)
+        .buffer(true)
+        .parse((res, done) => {
+          const chunks: Buffer[] = [];
+          res.on('data', (chunk: Buffer) => chunks.push(chunk));
+          res.on('end', () => {
+            done(null, Buffer.concat(chunks));
+          });
+        }),
+    );
+    return { status: response.status, type: response.type, bytes: response.body as Buffer };
+  }
+
   post(path: string, body?: object): Promise<Response> {
     return this.#send(this.agent.post(path), body);
   }

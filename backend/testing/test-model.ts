@@ -1,6 +1,6 @@
 import { readFileSync } from 'node:fs';
 import { eventually } from '../../db/testing/eventually';
-import type { FitReply, ImportReply, StartFit } from '../contract';
+import type { EditionReply, FitReply, ImportReply, StartFit } from '../contract';
 import type { TestClient } from './test-client';
 
 /** Market value on investment and capital stock of 11 companies, 1935 to 1954: open data, see stats/golden. */
@@ -101,4 +101,14 @@ export function idOf(
   if (response.status !== status)
     throw new Error(`expected status ${status}; found ${response.status}: ${response.text}`);
   return (response.body as { id: string }).id;
+}
+
+/** Opens every serious warning of an edition, as whoever signs has to. */
+export async function openWarnings(cfo: TestClient, editionId: string): Promise<void> {
+  const path = `/api/editions/${editionId}`;
+  const { content } = (await cfo.get(path)).body as EditionReply;
+  for (const { id } of content.warnings.filter(({ isSerious }) => isSerious)) {
+    const opened = await cfo.put(`${path}/warnings/${id}`, {});
+    if (opened.status !== 204) throw new Error(`opening ${id} answered ${opened.text}`);
+  }
 }

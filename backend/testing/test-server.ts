@@ -6,6 +6,7 @@ import { createTestDatabase, type TestDatabase } from '../../db/testing/test-dat
 import { createApp } from '../app';
 import { compose, type Composition } from '../compose';
 import { installQueue, queueSchema } from '../jobs/install-queue';
+import type { SmtpSettings } from '../mail/smtp-sender';
 import { builtProcesses } from './built-processes';
 
 /** A clock that a spec moves. */
@@ -35,9 +36,14 @@ export interface TestServer {
   close(): Promise<void>;
 }
 
+/** What links in mails start with. */
+export const testOrigin = 'https://kinvale.example';
+
 export interface TestServerOptions {
   /** The payment provider's address; by default one where nobody answers. */
   readonly stripeUrl?: string;
+  /** Where mail is sent; without it mail waits in the outbox. */
+  readonly mail?: SmtpSettings;
   /** Plain http as `npm start` serves it; otherwise the cookies of production, for a spec that sends them itself. */
   readonly isLocal?: boolean;
   /** Proxies in front; with one, `X-Forwarded-Proto: https` stands for TLS. */
@@ -59,6 +65,8 @@ export async function startTestServer(
   const composition = compose({
     databaseUrl: database.appUrl,
     stripe: { secretKey: 'sk_test_spec', apiUrl: options.stripeUrl ?? 'http://127.0.0.1:9' },
+    mail: options.mail,
+    publicOrigin: testOrigin,
     fitThreads: 1,
     now: clock.now,
     logger,

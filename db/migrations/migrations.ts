@@ -5,6 +5,9 @@ import { fitsScenariosEditions } from './0003-fits-scenarios-editions';
 import { evidenceAndBootstraps } from './0004-evidence-and-bootstraps';
 import { panelDesk } from './0005-panel-desk';
 import { peerTrials } from './0006-peer-trials';
+import { scenarioWorkbench } from './0007-scenario-workbench';
+import { boardDesk } from './0008-board-desk';
+import { mailOutbox } from './0009-mail-outbox';
 
 /** In order, append-only: a merged migration is never edited. */
 const steps: Readonly<Record<string, (db: Kysely<unknown>, appRole: string) => Promise<void>>> = {
@@ -14,6 +17,9 @@ const steps: Readonly<Record<string, (db: Kysely<unknown>, appRole: string) => P
   '0004-evidence-and-bootstraps': evidenceAndBootstraps,
   '0005-panel-desk': panelDesk,
   '0006-peer-trials': peerTrials,
+  '0007-scenario-workbench': scenarioWorkbench,
+  '0008-board-desk': boardDesk,
+  '0009-mail-outbox': mailOutbox,
 };
 
 export const latestMigration = Object.keys(steps).at(-1) ?? '';

@@ -16,6 +16,18 @@ export class ActivityRepository {
     private readonly workspaceId: string,
   ) {}
 
+  /** Entries of one action about one thing, oldest first. */
+  ofSubject(subjectId: string, action: string): Promise<{ readonly detail: object }[]> {
+    return this.db
+      .selectFrom('activity')
+      .select('detail')
+      .where('workspaceId', '=', this.workspaceId)
+      .where('subjectId', '=', subjectId)
+      .where('action', '=', action)
+      .orderBy('at')
+      .execute();
+  }
+
   async append(entry: ActivityEntry): Promise<void> {
     await this.db
       .insertInto('activity')

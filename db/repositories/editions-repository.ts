@@ -51,6 +51,8 @@ export class EditionsRepository {
     readonly confidentiality: 'confidential' | 'inside-information';
     readonly publishedBy: string;
     readonly publishedAt: Date;
+    /** The returned edition that it answers. */
+    readonly answers: string | null;
   }): Promise<void> {
     await this.db
       .insertInto('edition')
@@ -77,6 +79,15 @@ export class EditionsRepository {
     return this.editions()
       .where('edition.state', 'in', [...states])
       .orderBy('edition.number', 'desc')
+      .execute();
+  }
+
+  /** Every edition that was ever signed with its content, oldest first. */
+  async signedContents(): Promise<(EditionRow & { readonly content: string })[]> {
+    return this.editions()
+      .select('edition.content')
+      .where('edition.state', 'in', ['signed', 'superseded'])
+      .orderBy('edition.number')
       .execute();
   }
 

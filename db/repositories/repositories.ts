@@ -4,6 +4,7 @@ import { latestMigration } from '../migrations/migrations';
 import { ActivityRepository } from './activity-repository';
 import { BillingRepository } from './billing-repository';
 import { BootstrapsRepository } from './bootstraps-repository';
+import { EditionDeskRepository } from './edition-desk-repository';
 import { EditionsRepository } from './editions-repository';
 import { EvidenceRepository } from './evidence-repository';
 import { FilesRepository } from './files-repository';
@@ -11,6 +12,7 @@ import { FitsRepository } from './fits-repository';
 import { FlagDismissalsRepository } from './flag-dismissals-repository';
 import { ImportsRepository } from './imports-repository';
 import { JobTicketsRepository } from './jobs-repository';
+import { MailDueRepository, MailRepository } from './mail-repository';
 import { MembersRepository } from './members-repository';
 import { PanelCopiesRepository } from './panel-copies-repository';
 import { PanelCorrectionsRepository } from './panel-corrections-repository';
@@ -43,7 +45,9 @@ export interface WorkspaceRepositories {
   readonly bootstraps: BootstrapsRepository;
   readonly scenarios: ScenariosRepository;
   readonly editions: EditionsRepository;
+  readonly editionDesk: EditionDeskRepository;
   readonly billing: BillingRepository;
+  readonly mail: MailRepository;
   readonly jobTickets: JobTicketsRepository;
   /** Lets the queue package write within this transaction. */
   executeSql(text: string, values: unknown[]): Promise<{ rows: unknown[] }>;
@@ -60,11 +64,13 @@ export class Repositories {
   readonly people: PeopleRepository;
   readonly signInThrottle: SignInThrottleRepository;
   readonly jobTickets: JobTicketsRepository;
+  readonly mailDue: MailDueRepository;
 
   constructor(private readonly db: Kysely<Database>) {
     this.people = new PeopleRepository(db);
     this.signInThrottle = new SignInThrottleRepository(db);
     this.jobTickets = new JobTicketsRepository(db);
+    this.mailDue = new MailDueRepository(db);
   }
 
   /** One transaction, with the workspace set for it alone; await nothing from outside the database in it. */
@@ -91,7 +97,9 @@ export class Repositories {
         bootstraps: new BootstrapsRepository(trx, workspaceId),
         scenarios: new ScenariosRepository(trx, workspaceId),
         editions: new EditionsRepository(trx, workspaceId),
+        editionDesk: new EditionDeskRepository(trx, workspaceId),
         billing: new BillingRepository(trx, workspaceId),
+        mail: new MailRepository(trx, workspaceId),
         jobTickets: new JobTicketsRepository(trx),
         executeSql: async (text, values) => {
           const result = await trx.executeQuery(CompiledQuery.raw(text, values));

@@ -1,33 +1,55 @@
 import type { Kysely } from 'kysely';
 import type { Database } from '../schema/database';
 
-export interface ScenarioRow {
+/** How a plan is read; null where it was stored before there was a choice. */
+interface StoredReading {
+  readonly plan: readonly object[];
+  readonly outlook: object | null;
+  readonly rules: readonly object[] | null;
+  readonly uncertainty: object | null;
+}
+
+export interface ScenarioRow extends StoredReading {
   readonly id: string;
   readonly fitId: string;
   readonly version: number;
   readonly name: string;
   readonly note: string;
-  readonly plan: readonly object[];
   readonly years: readonly object[];
   readonly createdByName: string;
   readonly updatedByName: string;
   readonly updatedAt: Date;
   readonly deletedAt: Date | null;
+  /** The scenario that this one was copied from, as the copy found it. */
+  readonly copiedFromId: string | null;
+  readonly copiedFromVersion: number | null;
+  readonly copiedFromName: string | null;
+  readonly copiedFromFitId: string | null;
 }
 
-export interface NewScenarioVersion {
+export interface ScenarioVersionRow extends StoredReading {
+  readonly version: number;
   readonly name: string;
   readonly note: string;
-  readonly plan: readonly object[];
+  readonly years: readonly object[];
+  readonly createdByName: string;
+  readonly createdAt: Date;
+}
+
+export interface NewScenarioVersion extends StoredReading {
+  readonly name: string;
+  readonly note: string;
   readonly years: readonly object[];
   readonly createdBy: string;
 }
 
-export interface DraftRow {
-  readonly scenarioId: string | null;
+interface NewDraft extends StoredReading {
   readonly name: string;
   readonly note: string;
-  readonly plan: readonly object[];
+}
+
+export interface DraftRow extends NewDraft {
+  readonly scenarioId: string | null;
   readonly updatedAt: Date;
 }
 
@@ -44,7 +66,12 @@ export class ScenariosRepository {
     private readonly workspaceId: string,
   ) {}
 
-  async insert(id: string, fitId: string, first: NewScenarioVersion): Promise<void> {
+  async insert(
+    id: string,
+    fitId: string,
+    first: NewScenarioVersion,
+    copiedFrom: { readonly id: string; readonly version: number } | null,
+  ): Promise<void> {
     await this.db
       .insertInto('scenario')
       .values({
@@ -54,6 +81,8 @@ export class ScenariosRepository {
         version: 1,
         createdBy: first.createdBy,
         deletedAt: null,
+        copiedFromId: copiedFrom?.id ?? null,
+        copiedFromVersion: copiedFrom?.version ?? null,
       })
       .execute();
     await this.insertVersion(id, 1, first);
@@ -86,6 +115,29 @@ export class ScenariosRepository {
       .execute();
   }
 
+  /** Every version of one, newest first. */
+  listVersions(id: string): Promise<ScenarioVersionRow[]> {
+    return this.db
+      .selectFrom('scenarioVersion')
+      .innerJoin('person', 'person.id', 'scenarioVersion.createdBy')
+      .select([
+        'scenarioVersion.version',
+        'scenarioVersion.name',
+        'scenarioVersion.note',
+        'scenarioVersion.plan',
+        'scenarioVersion.outlook',
+        'scenarioVersion.rules',
+        'scenarioVersion.uncertainty',
+        'scenarioVersion.years',
+        'person.name as createdByName',
+        'scenarioVersion.createdAt',
+      ])
+      .where('scenarioVersion.workspaceId', '=', this.workspaceId)
+      .where('scenarioVersion.scenarioId', '=', id)
+      .orderBy('scenarioVersion.version', 'desc')
+      .execute();
+  }
+
   async setDeleted(id: string, deletedAt: Date | null): Promise<boolean> {
     const result = await this.db
       .updateTable('scenario')
@@ -99,7 +151,16 @@ export class ScenariosRepository {
   findDraft(key: DraftKey): Promise<DraftRow | undefined> {
     return this.db
       .selectFrom('scenarioDraft')
-      .select(['scenarioId', 'name', 'note', 'plan', 'updatedAt'])
+      .select([
+        'scenarioId',
+        'name',
+        'note',
+        'plan',
+        'outlook',
+        'rules',
+        'uncertainty',
+        'updatedAt',
+      ])
       .where('workspaceId', '=', this.workspaceId)
       .where('fitId', '=', key.fitId)
       .where('personId', '=', key.personId)
@@ -107,19 +168,13 @@ export class ScenariosRepository {
       .executeTakeFirst();
   }
 
-  async saveDraft(
-    key: DraftKey,
-    draft: { readonly name: string; readonly note: string; readonly plan: readonly object[] },
-    at: Date,
-  ): Promise<void> {
-    const plan = JSON.stringify(draft.plan);
+  async saveDraft(key: DraftKey, draft: NewDraft, at: Date): Promise<void> {
+    const kept = { name: draft.name, note: draft.note, ...asJson(draft), updatedAt: at };
     await this.db
       .insertInto('scenarioDraft')
-      .values({ ...key, ...draft, plan, workspaceId: this.workspaceId, updatedAt: at })
+      .values({ ...key, ...kept, workspaceId: this.workspaceId })
       .onConflict((conflict) =>
-        conflict
-          .columns(['workspaceId', 'fitId', 'personId', 'scenarioId'])
-          .doUpdateSet({ name: draft.name, note: draft.note, plan, updatedAt: at }),
+        conflict.columns(['workspaceId', 'fitId', 'personId', 'scenarioId']).doUpdateSet(kept),
       )
       .execute();
   }
@@ -142,7 +197,7 @@ export class ScenariosRepository {
         workspaceId: this.workspaceId,
         scenarioId: id,
         version,
-        plan: JSON.stringify(row.plan),
+        ...asJson(row),
         years: JSON.stringify(row.years),
       })
       .execute();
@@ -159,6 +214,17 @@ export class ScenariosRepository {
       )
       .innerJoin('person as creator', 'creator.id', 'scenario.createdBy')
       .innerJoin('person as updater', 'updater.id', 'scenarioVersion.createdBy')
+      .leftJoin('scenario as origin', (join) =>
+        join
+          .onRef('origin.workspaceId', '=', 'scenario.workspaceId')
+          .onRef('origin.id', '=', 'scenario.copiedFromId'),
+      )
+      .leftJoin('scenarioVersion as originVersion', (join) =>
+        join
+          .onRef('originVersion.workspaceId', '=', 'scenario.workspaceId')
+          .onRef('originVersion.scenarioId', '=', 'scenario.copiedFromId')
+          .onRef('originVersion.version', '=', 'scenario.copiedFromVersion'),
+      )
       .select([
         'scenario.id',
         'scenario.fitId',
@@ -166,7 +232,14 @@ export class ScenariosRepository {
         'scenarioVersion.name',
         'scenarioVersion.note',
         'scenarioVersion.plan',
+        'scenarioVersion.outlook',
+        'scenarioVersion.rules',
+        'scenarioVersion.uncertainty',
         'scenarioVersion.years',
+        'scenario.copiedFromId',
+        'scenario.copiedFromVersion',
+        'originVersion.name as copiedFromName',
+        'origin.fitId as copiedFromFitId',
         'creator.name as createdByName',
         'updater.name as updatedByName',
         'scenarioVersion.createdAt as updatedAt',
@@ -174,4 +247,13 @@ export class ScenariosRepository {
       ])
       .where('scenario.workspaceId', '=', this.workspaceId);
   }
+}
+
+function asJson({ plan, outlook, rules, uncertainty }: StoredReading) {
+  return {
+    plan: JSON.stringify(plan),
+    outlook: outlook && JSON.stringify(outlook),
+    rules: rules && JSON.stringify(rules),
+    uncertainty: uncertainty && JSON.stringify(uncertainty),
+  };
 }

@@ -7,8 +7,14 @@ import type {
   SignInThrottleTable,
   WorkspaceTable,
 } from './accounts-tables';
-import type { EditionTable } from './edition-table';
+import type {
+  EditionAccessTable,
+  EditionCommentTable,
+  EditionTable,
+  EditionWarningOpenedTable,
+} from './edition-table';
 import type { FitBootstrapTable, FitEvidenceTable, FitTable, JobTicketTable } from './fit-tables';
+import type { MailDueTable, MailTable } from './mail-table';
 import type {
   FlagDismissalTable,
   ImportDraftTable,
@@ -28,6 +34,9 @@ export interface Database {
   activity: ActivityTable;
   billingAccount: BillingAccountTable;
   edition: EditionTable;
+  editionAccess: EditionAccessTable;
+  editionComment: EditionCommentTable;
+  editionWarningOpened: EditionWarningOpenedTable;
   fit: FitTable;
   fitBootstrap: FitBootstrapTable;
   fitEvidence: FitEvidenceTable;
@@ -35,6 +44,8 @@ export interface Database {
   importDraft: ImportDraftTable;
   invitation: InvitationTable;
   jobTicket: JobTicketTable;
+  mail: MailTable;
+  mailDue: MailDueTable;
   membership: MembershipTable;
   panel: PanelTable;
   panelCompany: PanelCompanyTable;

@@ -16,4 +16,34 @@ export interface EditionTable {
   decidedAt: Date | null;
   decisionComment: string | null;
   supersededBy: string | null;
+  /** The returned edition that this one answers. */
+  answers: string | null;
+}
+
+export interface EditionWarningOpenedTable {
+  workspaceId: string;
+  editionId: string;
+  warningId: string;
+  personId: string;
+  openedAt: Generated<Date>;
+}
+
+export interface EditionCommentTable {
+  workspaceId: string;
+  id: string;
+  editionId: string;
+  block: string;
+  body: string;
+  writtenBy: string;
+  writtenAt: Generated<Date>;
+}
+
+export interface EditionAccessTable {
+  workspaceId: string;
+  id: string;
+  editionId: string;
+  personId: string;
+  kind: 'viewed' | 'exported';
+  format: string | null;
+  at: Generated<Date>;
 }

@@ -8,9 +8,18 @@ export interface ScenarioTable {
   createdBy: string;
   createdAt: Generated<Date>;
   deletedAt: Date | null;
+  copiedFromId: string | null;
+  copiedFromVersion: number | null;
 }
 
-export interface ScenarioVersionTable {
+/** Null where a version was stored before there was a choice. */
+interface PlanReadingColumns {
+  outlook: JSONColumnType<object> | null;
+  rules: JSONColumnType<object[]> | null;
+  uncertainty: JSONColumnType<object> | null;
+}
+
+export interface ScenarioVersionTable extends PlanReadingColumns {
   workspaceId: string;
   scenarioId: string;
   version: number;
@@ -22,7 +31,7 @@ export interface ScenarioVersionTable {
   createdAt: Generated<Date>;
 }
 
-export interface ScenarioDraftTable {
+export interface ScenarioDraftTable extends PlanReadingColumns {
   workspaceId: string;
   fitId: string;
   personId: string;

@@ -85,7 +85,9 @@ export class ScenariosPage extends CheckedPage {
   }
 
   async setToNearestInside(year: number): Promise<void> {
-    await this.page.getByRole('button', { name: `Set FY${year} to nearest inside` }).click();
+    await this.page
+      .getByRole('button', { name: `Take the nearest plan inside for FY${year}` })
+      .click();
   }
 
   async copy(): Promise<void> {
@@ -97,7 +99,7 @@ export class ScenariosPage extends CheckedPage {
   }
 
   async undo(): Promise<void> {
-    await this.page.getByRole('button', { name: 'Undo' }).click();
+    await this.page.getByRole('button', { name: 'Undo', exact: true }).click();
   }
 
   other(name: string): Locator {

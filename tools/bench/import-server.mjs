@@ -37,6 +37,7 @@ export async function openImportServer(root) {
     MIGRATION_DATABASE_URL: cluster.url(owner.name, owner.password, database),
     STRIPE_API_URL: 'http://127.0.0.1:9', // nobody answers: no bill is part of an import
     STRIPE_SECRET_KEY: 'sk_test_imports_only',
+    KINVALE_MAIL: 'off',
   };
   await migrate(root, env);
   await mkdir(join(root, '.kinvale'), { recursive: true, mode: 0o711 });

@@ -1,4 +1,4 @@
-import { randomWords, seededWords } from '../../backend/stats/slopes/bootstrap/random-words';
+import { randomWords, seededWords } from '../../backend/stats/prediction';
 
 /** Random numbers of one replication, the same for the same seed. */
 export interface Draws {

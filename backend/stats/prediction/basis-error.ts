@@ -4,6 +4,9 @@ import { quadraticForm, weightedSum } from './quadratic-form';
 /** A calibration whose denominator is below this share of its numerator is no calibration. */
 const calibrationTolerance = 1e-12;
 
+export const uncalibratedReason =
+  'The variation over time that an interval is calibrated on is practically zero for this plan.';
+
 /** The calibrated standard error of a contrast, with what made it, in the model's scale. */
 export type BasisError =
   | {
@@ -27,14 +30,8 @@ export function basisError(basis: PredictionBasis, weights: readonly number[]): 
   }
   const numerator = quadraticForm(basis.a, weights);
   const denominator = basis.years * quadraticForm(basis.d, weights);
-  if (!(denominator >= calibrationTolerance * numerator) || denominator === 0) {
-    return {
-      standardError: null,
-      reason:
-        'The variation over time that an interval is calibrated on is practically zero for this plan.',
-    };
-  }
-  const calibration = Math.max(1, numerator / denominator);
+  const calibration = calibrationOf(numerator, denominator);
+  if (calibration === null) return { standardError: null, reason: uncalibratedReason };
   const lambdas = basis.lambdas.map((lambda) => weightedSum(lambda, weights));
   const meanSquare = weightedSum(lambdas, lambdas) / lambdas.length;
   return {
@@ -42,4 +39,11 @@ export function basisError(basis: PredictionBasis, weights: readonly number[]): 
     calibration,
     lambdas,
   };
+}
+
+/** c = max(1, w'Aw / (T·w'Dw)) from its numerator and denominator; null where there is none. */
+export function calibrationOf(numerator: number, denominator: number): number | null {
+  return !(denominator >= calibrationTolerance * numerator) || denominator === 0
+    ? null
+    : Math.max(1, numerator / denominator);
 }

@@ -39,12 +39,7 @@ export function familiarRange(
 ): FamiliarRange {
   const values = inModelScale(basis, regressors);
   const leverage = leverageOf(basis, values);
-  const kind =
-    leverage <= basis.largestOwnLeverage
-      ? 'inside'
-      : leverage <= basis.largestLeverage
-        ? 'edge'
-        : 'outside';
+  const kind = kindOf(basis, leverage);
   return {
     kind,
     leverage,
@@ -56,6 +51,23 @@ export function familiarRange(
     })),
     nearestInside: kind === 'inside' ? regressors : shrinkInside(basis, values),
   };
+}
+
+/**
+ * Where a plan lies, and nothing else of its familiar range.
+ *
+ * @throws {RangeError} for values the model cannot read.
+ */
+export function familiarKind(
+  basis: PredictionBasis,
+  regressors: readonly number[],
+): FamiliarRange['kind'] {
+  return kindOf(basis, leverageOf(basis, inModelScale(basis, regressors)));
+}
+
+function kindOf(basis: PredictionBasis, leverage: number): FamiliarRange['kind'] {
+  if (leverage <= basis.largestOwnLeverage) return 'inside';
+  return leverage <= basis.largestLeverage ? 'edge' : 'outside';
 }
 
 function leverageOf(basis: PredictionBasis, values: readonly number[]): number {

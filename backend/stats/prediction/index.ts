@@ -1,3 +1,5 @@
+export { applyRules, type RuledPlan, type RuleReason, type RuleRequest } from './apply-rules';
+export { atConfidence } from './at-confidence';
 export {
   type Decomposition,
   type DecompositionFromLast,
@@ -6,7 +8,13 @@ export {
   decompositionToBase,
   differenceOfPlans,
 } from './decomposition';
+export {
+  differenceOfScenarios,
+  type ScenarioDifference,
+  type ScenarioSide,
+} from './difference-of-scenarios';
 export { differenceToPeer, type PeerDifference, peersMean } from './difference-to-peer';
+export type { MarketFan } from './draw-year';
 export { type ExpectedValue, expectedValue, type LogFigures } from './expected-value';
 export {
   type FamiliarRange,
@@ -14,13 +22,20 @@ export {
   type RangePlace,
   type RegressorPlace,
 } from './familiar-range';
+export { type Fan, fanPercents } from './fan';
 export type { FiellerRange } from './fieller';
 export { type IntervalEstimate, symmetricInterval, withoutInterval } from './interval-estimate';
-export { type BandOutlook, type MarketValueBand, marketValueBand } from './market-value-band';
+export {
+  bandErrors,
+  type BandOutlook,
+  type MarketValueBand,
+  marketValueBand,
+} from './market-value-band';
 export { inModelScale, unreadableReason } from './model-scale';
 export { asFactor, heldNumber, type OutOfLogs, outOfLogs } from './out-of-logs';
 export {
   carryingReason,
+  chosenYearEffect,
   type Outlook,
   type StartingPoint,
   stepsAhead,
@@ -32,6 +47,8 @@ export {
   type PlanYear,
   type ReadableYear,
 } from './plan-regressors';
+export { percentile } from './percentile';
+export type { PlanMove, PlanRule, TotalSpread } from './plan-rule';
 export { type PredictedYear, type PredictRequest, predict } from './predict';
 export {
   type ObservedRange,
@@ -44,6 +61,22 @@ export {
   yearEffectOrder,
 } from './prediction-basis';
 export { quadraticForm } from './quadratic-form';
+export { randomWords, seededWords } from './random-words';
 export { type Reach, type ReachRequest, reachValue } from './reach-value';
+export {
+  type RegressorSensitivity,
+  type Sensitivity,
+  sensitivity,
+  type SensitivityEnd,
+  type SensitivityRequest,
+} from './sensitivity';
 export { contrastDegreesOfFreedom, differenceToBase, varianceTolerance } from './slope-contrast';
+export { type Triangle, triangularQuantile } from './triangular';
 export { type TQuantile, twoSidedQuantile } from './two-sided-quantile';
+export {
+  type UncertainPlanRequest,
+  type UncertainPlanYear,
+  type UncertainYear,
+  uncertainPlan,
+} from './uncertain-plan';
+export { uniformDraws } from './uniform-draws';

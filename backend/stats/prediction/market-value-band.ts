@@ -3,7 +3,7 @@ import { inModelScale } from './model-scale';
 import { heldNumber } from './out-of-logs';
 import { earlierEngineReason, type Outlook, stepsAhead } from './outlook';
 import { plannedContrast } from './planned-contrast';
-import type { OwnErrors, PredictionBasis } from './prediction-basis';
+import type { PredictionBasis } from './prediction-basis';
 import { type TQuantile, twoSidedQuantile } from './two-sided-quantile';
 
 /** Where the market value itself may lie; in log form around the median, without smearing. */
@@ -53,22 +53,13 @@ export function marketValueBand(
     high: null,
     bandReason,
   });
-  const { ownErrors } = basis;
-  if (ownErrors === undefined) return none(earlierEngineReason);
-  const rows = ownErrors.years.length;
-  if (rows < fewestOwnRows) {
-    return none(`${basis.company} has ${rows} rows; a band needs at least ${fewestOwnRows}.`);
-  }
+  const errors = bandErrors(basis, outlook);
+  if (errors.reason !== undefined) return none(errors.reason);
   const { estimate, weights } = plannedContrast(basis, inModelScale(basis, regressors), outlook);
   const error = basisError(basis, weights);
   if (error.standardError === null) return none(error.reason);
-  const variance = bandVariance(basis.last.year, ownErrors, outlook, {
-    ofMean: error.standardError ** 2,
-    steps: stepsAhead(basis, outlook),
-  });
-  const standardError = Math.sqrt(variance);
-  const squared = (ownErrors.persistence ?? 0) ** 2;
-  const degreesOfFreedom = Math.max(2, (rows * (1 - squared)) / (1 + squared) - 1);
+  const { degreesOfFreedom } = errors;
+  const standardError = Math.sqrt(bandVariance(errors, error.standardError ** 2));
   const reach = twoSidedQuantile(tQuantile, confidence, degreesOfFreedom) * standardError;
   const measure = basis.form === 'log' ? Math.exp : (value: number): number => value;
   const low = heldNumber(measure(estimate - reach));
@@ -79,19 +70,46 @@ export function marketValueBand(
   return { confidence, low, high, standardError, degreesOfFreedom };
 }
 
-function bandVariance(
-  lastYear: number,
-  errors: OwnErrors,
-  { start }: Outlook,
-  { ofMean, steps }: { readonly ofMean: number; readonly steps: number },
+/** The market value's own errors in one planned year, in the model's scale, or why there is no band. */
+export type BandErrors =
+  | {
+      /** s²(1 − (2/T_own)·Σ_s ρ^(planned year − s)) at the model's level; `ahead` where the gap is carried. */
+      readonly around: number;
+      /** s²(1 − ρ^2h). */
+      readonly ahead: number;
+      readonly degreesOfFreedom: number;
+      readonly reason?: undefined;
+    }
+  | { readonly reason: string };
+
+/** What of a band no planned value moves. */
+export function bandErrors(basis: PredictionBasis, outlook: Outlook): BandErrors {
+  const { ownErrors } = basis;
+  if (ownErrors === undefined) return { reason: earlierEngineReason };
+  const { years, variance } = ownErrors;
+  const rows = years.length;
+  if (rows < fewestOwnRows) {
+    return {
+      reason: `${basis.company} has ${rows} rows; a band needs at least ${fewestOwnRows}.`,
+    };
+  }
+  const persistence = ownErrors.persistence ?? 0;
+  const squared = persistence ** 2;
+  const steps = stepsAhead(basis, outlook);
+  const ahead = variance * (1 - persistence ** (2 * steps));
+  const planned = basis.last.year + steps;
+  const shared = years.reduce((sum, year) => sum + persistence ** (planned - year), 0);
+  return {
+    around: outlook.start === 'carry-the-gap' ? ahead : variance * (1 - (2 / rows) * shared),
+    ahead,
+    degreesOfFreedom: Math.max(2, (rows * (1 - squared)) / (1 + squared) - 1),
+  };
+}
+
+/** Of the market value around a plan's expected value, whose own variance is given. */
+export function bandVariance(
+  { around, ahead }: Pick<Extract<BandErrors, { ahead: number }>, 'around' | 'ahead'>,
+  ofMean: number,
 ): number {
-  const persistence = errors.persistence ?? 0;
-  const ahead = errors.variance * (1 - persistence ** (2 * steps));
-  if (start === 'carry-the-gap') return ahead + ofMean;
-  const shared = errors.years.reduce(
-    (sum, year) => sum + persistence ** (lastYear + steps - year),
-    0,
-  );
-  const around = errors.variance * (1 - (2 / errors.years.length) * shared) + ofMean;
-  return Math.max(around, ahead);
+  return Math.max(around + ofMean, ahead);
 }

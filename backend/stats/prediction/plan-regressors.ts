@@ -15,7 +15,7 @@ export type ReadableYear =
   | { readonly year: number; readonly regressors: null; readonly reason: string };
 
 /** The last observed regressors, which the base holds; what the model last read where it cannot read one of them. */
-export function heldRegressors(basis: PredictionBasis): readonly number[] {
+export function heldRegressors(basis: Pick<PredictionBasis, 'held' | 'last'>): readonly number[] {
   return basis.held ?? basis.last.regressors;
 }
 

@@ -5,6 +5,8 @@ import { weightedSum } from './quadratic-form';
 /** A planned year in the model's scale: its point, and the weights of what of it is estimated. */
 export interface PlannedContrast {
   readonly estimate: number;
+  /** What of it no planned value moves, the own level apart: the year effect and the carried gap. */
+  readonly besidePlan: number;
   /** Over the centred basis; see `PredictionBasis`. */
   readonly weights: readonly number[];
 }
@@ -28,8 +30,10 @@ export function plannedContrast(
     share === 0 ? [] : lastInModelScale(basis).map((x, k) => x - basis.ownMeans[k]);
   const ofSlopes = weightedSum(basis.coefficients.slice(1), distances);
   const years = yearPart(basis, share, outlook);
+  const besidePlan = years.effect + share * basis.last.residual;
   return {
-    estimate: basis.ownLevel + ofSlopes + years.estimate + share * basis.last.residual,
+    estimate: basis.ownLevel + ofSlopes + besidePlan,
+    besidePlan,
     weights: [
       1 - share,
       ...(share === 0 ? distances : distances.map((value, k) => value - share * lastDistances[k])),
@@ -48,13 +52,13 @@ function yearPart(
   { yearEffects }: PredictionBasis,
   share: number,
   { yearEffect }: Outlook,
-): PlannedContrast {
-  if (yearEffects === undefined || yearEffects === null) return { estimate: 0, weights: [] };
+): { readonly effect: number; readonly weights: readonly number[] } {
+  if (yearEffects === undefined || yearEffects === null) return { effect: 0, weights: [] };
   const { effect, estimated } = chosenYearEffect(yearEffects, yearEffect);
   const weights = yearEffectOrder.map((name) => {
     if (name === 'ownMean') return share - 1;
     if (name === 'ownLast') return -share;
     return name === estimated ? 1 : 0;
   });
-  return { estimate: effect - yearEffects.ownMean, weights };
+  return { effect: effect - yearEffects.ownMean, weights };
 }

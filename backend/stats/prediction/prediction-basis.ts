@@ -125,6 +125,11 @@ export interface PredictionBasis {
   /** In the panel's measure, as the peers'. */
   readonly ownRange: readonly ObservedRange[];
   readonly peerRange: readonly ObservedRange[];
+  /**
+   * From the 10th to the 90th percentile (Hyndman & Fan 1996, type 7) of what the model read over the peers' rows, in
+   * the panel's measure. Missing in fits of engines before 2.2.
+   */
+  readonly peerSpread?: readonly ObservedRange[];
 }
 
 /**

@@ -1,10 +1,13 @@
 import { Injectable, inject } from '@angular/core';
 import {
   type ChangeScenario,
+  type CopyScenario,
   DraftReply,
   type SaveDraft,
   type SaveScenario,
+  ScenarioCopyReply,
   ScenarioReply,
+  ScenarioVersionsReply,
   ScenariosReply,
   apiRoutes,
 } from '@contract';
@@ -29,7 +32,7 @@ export class ScenariosApi {
     return this.#client.call(apiRoutes.saveScenario, ScenarioReply, { body });
   }
 
-  change(scenarioId: string, body: ChangeScenario): Observable<ScenarioReply> {
+  change(scenarioId: string, body: z.input<typeof ChangeScenario>): Observable<ScenarioReply> {
     return this.#client.call(apiRoutes.changeScenario, ScenarioReply, {
       path: { scenarioId },
       body,
@@ -44,8 +47,19 @@ export class ScenariosApi {
     return this.#client.call(apiRoutes.restoreScenario, ScenarioReply, { path: { scenarioId } });
   }
 
-  copy(scenarioId: string): Observable<ScenarioReply> {
-    return this.#client.call(apiRoutes.copyScenario, ScenarioReply, { path: { scenarioId } });
+  /** Every stored version, newest first. */
+  versions(scenarioId: string): Observable<ScenarioVersionsReply> {
+    return this.#client.call(apiRoutes.listScenarioVersions, ScenarioVersionsReply, {
+      path: { scenarioId },
+    });
+  }
+
+  /** A copy onto the same fit, or onto the one that the body names. */
+  copy(scenarioId: string, body: CopyScenario = {}): Observable<ScenarioCopyReply> {
+    return this.#client.call(apiRoutes.copyScenario, ScenarioCopyReply, {
+      path: { scenarioId },
+      body,
+    });
   }
 
   readDraft(fitId: string, scenarioId: string | null): Observable<DraftReply> {
@@ -55,7 +69,7 @@ export class ScenariosApi {
     });
   }
 
-  saveDraft(fitId: string, body: SaveDraft): Observable<DraftReply> {
+  saveDraft(fitId: string, body: z.input<typeof SaveDraft>): Observable<DraftReply> {
     return this.#client.call(apiRoutes.saveDraft, DraftReply, { path: { fitId }, body });
   }
 

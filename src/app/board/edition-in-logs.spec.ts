@@ -29,7 +29,7 @@ describe('an edition on a fit in logs with year effects and the year before', ()
   it('reads slopes as percent for percent', () => {
     expect(words('.evidence')).toContain('What 1 % more goes with');
     expect(words('.evidence')).toContain(
-      '1 % more capex of the year before goes with+0.4200 (0.1000 to 0.7000) % of market value',
+      '1 % more capex of the year before goes with 0.4200 (0.1000 to 0.7000) % of market value',
     );
   });
 

@@ -7,16 +7,9 @@ import { SessionStore } from '../api/session-store';
 import { NumberFormat } from '../ui/number-format';
 import { PageContext } from '../ui/page-context';
 import { EditionPage } from './edition-page';
-import { editionContent, editionSummary } from './testing/edition-content';
+import { editionReply, editionSummary } from './testing/edition-content';
 
-const waiting: EditionReply = {
-  edition: editionSummary,
-  content: editionContent,
-  maySign: true,
-  mayReturn: true,
-  newerPanelVersion: null,
-  whyNot: null,
-};
+const waiting = editionReply;
 const signed: EditionReply = {
   ...waiting,
   edition: {
@@ -80,7 +73,8 @@ describe('the page of an edition', () => {
   it('reads on one page, from the frozen content alone', async () => {
     await open('cfo', waiting);
     for (const words of [
-      'The market values Velmara 1,800 (1,170 to 2,430) above',
+      'The market values Velmara 1,800 (1,170 to 2,430) EUR m above',
+      'Each extra 1 of capex goes with 2.00 (1.20 to 2.80) of market value.',
       'place 1 to 2 of 3',
       'Build-out lifts the expected value of Velmara by 160 (96 to 224) by FY2027',
       'For the November meeting.',

@@ -8,8 +8,6 @@ import { ExpectedPath } from '../charts/expected-path/expected-path';
 import { Figure } from '../ui/figure';
 import { asDifference, differenceKind } from '../ui/model-form';
 import { NumberFormat } from '../ui/number-format';
-import { namedParts } from '../ui/page-header';
-import { lagText } from '../ui/phrases';
 import { chosenFigure } from '../ui/plan/chosen-figure';
 import { PlanAssumptions } from '../ui/plan/plan-assumptions';
 import { expectedPathData } from '../ui/plan/plan-data';
@@ -17,18 +15,19 @@ import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
 import { decidingYear, expectedName, planFinding } from '../ui/plan/plan-words';
 import { planLineage } from '../ui/plan/planned-figure';
 import { type Remark, RemarkList } from '../ui/remark-list';
+import { Sentence, type SentenceFigureWanted } from '../ui/sentence';
 import { EditionLevels } from './edition-levels';
+import { EditionLines } from './edition-lines';
 import { EditionPeers } from './edition-peers';
 import {
   confidentialityWords,
-  editionHeadline,
   labelsOf,
   modelText,
   placesText,
   sampleText,
   shareText,
 } from './edition-words';
-import { type EvidenceLine, fiveLines } from './five-lines';
+import { plannedIn } from './planned-in';
 
 /** A figure of the edition whose lineage is wanted. */
 export interface EditionFigure {
@@ -45,12 +44,14 @@ export interface EditionFigure {
   imports: [
     DatePipe,
     EditionLevels,
+    EditionLines,
     EditionPeers,
     ExpectedPath,
     Figure,
     PlanAssumptions,
     PlanTable,
     RemarkList,
+    Sentence,
   ],
   templateUrl: './edition-sheet.html',
   styleUrl: './edition-sheet.css',
@@ -65,12 +66,11 @@ export class EditionSheet {
   readonly sha256 = input('');
   /** Under another page's heading, so that the sentence is no heading of the first level. */
   readonly isPreview = input(false);
+  /** Whether the headline is being edited in its place: what edits it goes into the slot `editionHeadline`. */
+  readonly isHeadlineOpen = input(false);
   readonly figureOpened = output<EditionFigure>();
 
   protected readonly confidentialityWords = confidentialityWords;
-  protected readonly headline = computed(() =>
-    namedParts(editionHeadline(this.content(), this.#numbers), this.content().ownCompany),
-  );
   readonly #form = computed(() => this.content().fit.specification.form);
   protected readonly isLog = computed(() => this.#form() === 'log');
   protected readonly differenceKind = computed(() => differenceKind(this.#form()));
@@ -88,20 +88,10 @@ export class EditionSheet {
   protected readonly unit = this.#numbers.unitLabel;
   protected readonly places = computed(() => placesText(this.content().fit));
   protected readonly sample = computed(() => sampleText(this.content().fit));
-  protected readonly lines = computed(() => fiveLines(this.content(), this.#numbers));
   protected readonly caption = computed(() => `${this.unit()} · ${this.level()} intervals`);
   protected readonly warnings = computed(() =>
     this.content().fit.warnings.map(({ detail }): Remark => ({ kind: 'caution', text: detail })),
   );
-  protected readonly slopes = computed(() => {
-    const labels = this.labels();
-    const { lag } = this.content().fit.specification;
-    return this.content().fit.slopes.map((slope, index) => ({
-      ...slope,
-      label: `${this.isLog() ? '1 % more' : 'Each extra 1 of'} ${labels[index]}${lagText(lag)}`,
-      key: `slope.${index}`,
-    }));
-  });
   protected readonly plans = computed(() =>
     this.content().scenarios.map(({ name, note, plan, years }) => ({
       name,
@@ -141,8 +131,11 @@ export class EditionSheet {
     if (planned !== undefined) this.openPlanned(planned);
   }
 
-  protected openLine(line: EvidenceLine): void {
-    if (line.figure !== undefined) this.figureOpened.emit({ key: line.figure });
+  /** A figure of a sentence; one of a plan with what only the edition knows of it. */
+  protected openWritten({ figure, value }: SentenceFigureWanted): void {
+    const planned = plannedIn(this.plans(), figure, value, this.#form());
+    if (planned === undefined) this.figureOpened.emit({ key: figure });
+    else this.openPlanned(planned);
   }
 
   protected openPlanned(wanted: PlannedFigureWanted): void {

@@ -3,16 +3,9 @@ import { HttpTestingController, provideHttpClientTesting } from '@angular/common
 import { TestBed } from '@angular/core/testing';
 import type { EditionReply } from '@contract';
 import { EditionStore } from './edition-store';
-import { editionContent, editionSummary } from './testing/edition-content';
+import { editionReply, editionSummary } from './testing/edition-content';
 
-const seventh: EditionReply = {
-  edition: editionSummary,
-  content: editionContent,
-  maySign: true,
-  mayReturn: true,
-  newerPanelVersion: null,
-  whyNot: null,
-};
+const seventh = editionReply;
 const eighth: EditionReply = {
   ...seventh,
   edition: {

@@ -1,6 +1,5 @@
 import type { EditionContent, EditionSummary, FitResult } from '@contract';
-import { type Bounded, asDifference, differenceKind, modelNotes } from '../ui/model-form';
-import type { NumberFormat } from '../ui/number-format';
+import { modelNotes } from '../ui/model-form';
 import { regressorLabels } from '../ui/plan/regressor-labels';
 import { lagText, listed } from '../ui/phrases';
 
@@ -25,28 +24,6 @@ export function modelText(
 ): string {
   const lag = specification.lag === 1 ? ['regressors of the year before'] : [];
   return [...modelNotes(specification), ...lag].join(', ');
-}
-
-/** The one sentence of an edition: where the market values the own company against its peers. */
-export function editionHeadline(content: EditionContent, numbers: NumberFormat): string {
-  const { standing, specification } = content.fit;
-  const regressors = listed(labelsOf(content)) + lagText(specification.lag);
-  const suggestion = `what ${regressors} alone would suggest against its peers`;
-  if (standing === null) return `${content.ownCompany} has no standing in this fit`;
-  const shown = asDifference(standing, specification.form);
-  const kind = differenceKind(specification.form);
-  const { estimate, low, high } = shown;
-  if (low !== null && high !== null && low <= 0 && high >= 0)
-    return `Nothing shows that the market values ${content.ownCompany} otherwise than ${suggestion}: ${numbers.interval(shown, kind, 3)}`;
-  const isAbove = estimate >= 0;
-  const size: Bounded = isAbove
-    ? shown
-    : { estimate: -estimate, low: negated(high), high: negated(low) };
-  return `The market values ${content.ownCompany} ${numbers.interval(size, kind, 3)} ${isAbove ? 'above' : 'below'} ${suggestion}`;
-}
-
-function negated(value: number | null): number | null {
-  return value === null ? null : -value;
 }
 
 /** `place 2 to 5 of 14`; with the reason where no place can be given. */
@@ -75,6 +52,20 @@ export function sampleText({ sample }: FitResult): string {
 export const confidentialityWords: Readonly<Record<EditionContent['confidentiality'], string>> = {
   confidential: 'confidential',
   'inside-information': 'inside information',
+};
+
+/** What the confidentiality asks of whoever holds the edition. */
+export const confidentialityMeaning: Readonly<Record<EditionContent['confidentiality'], string>> = {
+  confidential: 'Confidential: for those it was given to.',
+  'inside-information':
+    'May be inside information: share it only with those allowed to have it, and ask counsel before any outside use.',
+};
+
+/** What choosing it does, for whoever publishes. */
+export const confidentialityEffect: Readonly<Record<EditionContent['confidentiality'], string>> = {
+  confidential: 'Marked on the sheet and on what is exported; who reads it is listed on it.',
+  'inside-information':
+    'The same, and everybody is asked to mind what it is before they export it. Mail never holds a figure.',
 };
 
 export const stateWords: Readonly<Record<EditionSummary['state'], string>> = {

@@ -1,18 +1,18 @@
 import { Injectable, inject, signal } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import type {
+  ComposeEdition,
+  EditionPreviewReply,
   EditionReply,
-  FitReply,
-  FitResult,
+  EditionSummary,
   FitSummary,
-  PeerGroupReply,
-  PublishEdition,
   ScenarioReply,
 } from '@contract';
 import {
   type Observable,
   Subject,
   catchError,
+  debounceTime,
   firstValueFrom,
   forkJoin,
   map,
@@ -23,19 +23,16 @@ import {
 import { ApiProblem, toApiProblem } from '../api/api-problem';
 import { EditionsApi } from '../api/editions-api';
 import { FitsApi } from '../api/fits-api';
-import { PeersApi } from '../api/peers-api';
 import { ScenariosApi } from '../api/scenarios-api';
 
-/** All that an edition of one fit can be made of. */
+/** What an edition of one fit can be made of. */
 export interface PublishGround {
-  readonly fit: FitReply;
-  readonly result: FitResult;
-  readonly peerGroup: PeerGroupReply;
+  readonly fitId: string;
   readonly scenarios: readonly ScenarioReply[];
   /** Finished fits, newest first. */
   readonly fits: readonly FitSummary[];
-  readonly number: number;
-  readonly peerGroupsTried: number;
+  /** Editions that were returned, newest first. */
+  readonly returned: readonly EditionSummary[];
 }
 
 export type PublishView =
@@ -44,19 +41,31 @@ export type PublishView =
   | { readonly kind: 'ready'; readonly ground: PublishGround }
   | { readonly kind: 'failed'; readonly problem: ApiProblem };
 
-/** Gathers what an edition would freeze, and publishes it. */
+/** The edition as the server would freeze it; the last one stays while the next is made. */
+export interface PreviewView {
+  readonly reply: EditionPreviewReply | null;
+  readonly isMaking: boolean;
+  readonly problem: ApiProblem | null;
+}
+
+/** A person who types is not answered at every letter. */
+const restMs = 250;
+
+/** Gathers what an edition can be made of, has the server compose it, and publishes it. */
 @Injectable()
 export class PublishStore {
   readonly #editions = inject(EditionsApi);
   readonly #fits = inject(FitsApi);
-  readonly #peers = inject(PeersApi);
   readonly #scenarios = inject(ScenariosApi);
   readonly #fitIds = new Subject<string | undefined>();
+  readonly #requests = new Subject<ComposeEdition>();
   readonly #view = signal<PublishView>({ kind: 'loading' });
+  readonly #preview = signal<PreviewView>({ reply: null, isMaking: false, problem: null });
   readonly #problem = signal<ApiProblem | null>(null);
   readonly #isPublishing = signal(false);
 
   readonly view = this.#view.asReadonly();
+  readonly preview = this.#preview.asReadonly();
   readonly problem = this.#problem.asReadonly();
   readonly isPublishing = this.#isPublishing.asReadonly();
 
@@ -69,16 +78,32 @@ export class PublishStore {
       .subscribe((view) => {
         this.#view.set(view);
       });
+    this.#requests
+      .pipe(
+        debounceTime(restMs),
+        switchMap((request) => this.#compose(request)),
+        takeUntilDestroyed(),
+      )
+      .subscribe((change) => {
+        this.#preview.update((now) => ({ ...now, ...change }));
+      });
   }
 
   /** Without an id, the newest finished fit. */
   load(fitId: string | undefined): void {
     this.#problem.set(null);
+    this.#preview.set({ reply: null, isMaking: false, problem: null });
     this.#fitIds.next(fitId);
   }
 
+  /** Asks for the edition as these choices make it, once they rest for a moment. */
+  compose(request: ComposeEdition): void {
+    this.#preview.update((now) => ({ ...now, isMaking: true }));
+    this.#requests.next(request);
+  }
+
   /** @returns the edition, or null when it could not be published. */
-  async publish(body: PublishEdition): Promise<EditionReply | null> {
+  async publish(body: ComposeEdition): Promise<EditionReply | null> {
     this.#isPublishing.set(true);
     this.#problem.set(null);
     try {
@@ -90,6 +115,13 @@ export class PublishStore {
     } finally {
       this.#isPublishing.set(false);
     }
+  }
+
+  #compose(request: ComposeEdition): Observable<Partial<PreviewView>> {
+    return this.#editions.preview(request).pipe(
+      map((reply) => ({ reply, isMaking: false, problem: null })),
+      catchError((error: unknown) => of({ isMaking: false, problem: toApiProblem(error) })),
+    );
   }
 
   #read(fitId: string | undefined): Observable<PublishView> {
@@ -107,30 +139,21 @@ export class PublishStore {
   }
 
   #ground(fitId: string, fits: readonly FitSummary[]): Observable<PublishView> {
-    return this.#fits.read(fitId).pipe(
-      switchMap((fit): Observable<PublishView> => {
-        const { result } = fit;
-        if (result === null) return of({ kind: 'no-fit' });
-        return forkJoin({
-          peerGroup: this.#peers.read(fit.peerGroup.id),
-          peerGroups: this.#peers.list(),
-          scenarios: this.#scenarios.list(fitId),
-          editions: this.#editions.list(),
-        }).pipe(
-          map(({ peerGroup, peerGroups, scenarios, editions }) => ({
-            kind: 'ready',
-            ground: {
-              fit,
-              result,
-              peerGroup,
-              scenarios: scenarios.scenarios,
-              fits,
-              number: 1 + Math.max(0, ...editions.editions.map(({ number }) => number)),
-              peerGroupsTried: peerGroups.versions.length,
-            },
-          })),
-        );
-      }),
+    return forkJoin({
+      scenarios: this.#scenarios.list(fitId),
+      editions: this.#editions.list(),
+    }).pipe(
+      map(({ scenarios, editions }) => ({
+        kind: 'ready',
+        ground: {
+          fitId,
+          scenarios: scenarios.scenarios,
+          fits,
+          returned: editions.editions
+            .filter(({ state }) => state === 'returned')
+            .sort((left, right) => right.number - left.number),
+        },
+      })),
     );
   }
 }

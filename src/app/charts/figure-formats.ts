@@ -1,4 +1,4 @@
-import { type FigureFormats, type IntervalFigure, fixedText, tickDigits } from '@figures';
+import { type FigureFormats, type IntervalFigure, figureFormats as formatsOf } from '@figures';
 import type { FigureKind, NumberFormat } from '../ui/number-format';
 
 /**
@@ -10,17 +10,7 @@ export function figureFormats(
   kind: FigureKind,
   values: readonly (number | null)[],
 ): FigureFormats {
-  const digits = numbers.columnDigits(values, kind);
-  return {
-    value: (value) => numbers.figure(value, kind, digits),
-    bounds: (interval) => numbers.bounds(interval, kind, digits),
-    tick: (value, step) =>
-      fixedText(
-        numbers.shown(value, kind),
-        tickDigits(numbers.shown(step, kind)),
-        numbers.locale(),
-      ),
-  };
+  return formatsOf(numbers.writer(), kind, values);
 }
 
 /** `2,970 (1,570 to 4,270)`, and why there is no interval where there is none. */

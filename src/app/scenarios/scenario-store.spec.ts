@@ -6,12 +6,19 @@ import { type ScenarioReply, problemType } from '@contract';
 import { SessionStore } from '../api/session-store';
 import { withValue } from '../ui/plan/change-plan';
 import { ProblemBannerState } from '../ui/problem';
-import { readPlan } from '../ui/plan/read-plan';
-import { tQuantile } from '../ui/plan/t-quantile';
-import { planBasis } from '../ui/plan/testing/plan-basis';
 import { DraftKeeper } from './draft-keeper';
 import { ScenarioStore } from './scenario-store';
-import { deskReply, fitId, fitReply, sessionOf } from './testing/scenario-replies';
+import { ScenarioEdits } from './scenario-edits';
+import { ScenarioShelf } from './scenario-shelf';
+import { ScenarioState } from './scenario-state';
+import {
+  deskReply,
+  fitId,
+  fitReply,
+  heldReading,
+  sessionOf,
+  storedYears,
+} from './testing/scenario-replies';
 
 const scenarioId = '00000000-0000-4000-8000-000000000009';
 
@@ -24,15 +31,10 @@ function scenario(version: number, capex: number, name = 'Build-out'): ScenarioR
     name,
     note: '',
     version,
+    ...heldReading,
     plan,
-    years: readPlan(planBasis, plan, tQuantile).years.map(
-      ({ year, expected, difference, familiar }) => ({
-        year,
-        expected: { ...expected },
-        difference: { ...difference },
-        familiar: familiar.kind,
-      }),
-    ),
+    years: storedYears(plan),
+    copiedFrom: null,
     createdBy: 'M. Oduya',
     updatedBy: version === 1 ? 'M. Oduya' : 'I. Vandresson',
     updatedAt: '2026-11-14T09:00:00.000Z',
@@ -42,6 +44,8 @@ function scenario(version: number, capex: number, name = 'Build-out'): ScenarioR
 describe('a scenario on the page', () => {
   let http: HttpTestingController;
   let store: ScenarioStore;
+  let edits: ScenarioEdits;
+  let shelf: ScenarioShelf;
 
   beforeEach(() => {
     TestBed.configureTestingModule({
@@ -50,12 +54,18 @@ describe('a scenario on the page', () => {
         provideHttpClientTesting(),
         provideRouter([]),
         DraftKeeper,
+        ScenarioState,
+        ScenarioEdits,
+        ScenarioShelf,
         ScenarioStore,
       ],
     });
     http = TestBed.inject(HttpTestingController);
     TestBed.inject(SessionStore).accept(sessionOf('analyst'));
     store = TestBed.inject(ScenarioStore);
+    edits = TestBed.inject(ScenarioEdits);
+    shelf = TestBed.inject(ScenarioShelf);
+    localStorage.clear();
     jasmine.clock().install();
   });
   afterEach(async () => {
@@ -96,7 +106,8 @@ describe('a scenario on the page', () => {
   }
 
   const planCapex = (capex: number): void => {
-    store.change({ plan: withValue(store.text().plan, 2026, 0, capex) });
+    const plan = withValue(store.text().plan, 2026, 0, capex);
+    edits.change({ plan }, { words: 'Capex FY2026' });
   };
 
   it('starts a new plan from the last actual values of the newest fit', () => {
@@ -155,7 +166,7 @@ describe('a scenario on the page', () => {
 
   it('keeps what was changed while a new plan was being saved, as a draft of the saved one', async () => {
     openNew();
-    store.change({ name: 'Build-out' });
+    edits.rename({ name: 'Build-out' });
     planCapex(150);
     const saving = store.save();
     await settled();
@@ -208,7 +219,7 @@ describe('a scenario on the page', () => {
         { status: 409, statusText: 'Conflict' },
       );
     expect(await saving).toBeNull();
-    expect(store.conflict()).toBeNull();
+    expect(store.theirs()).toBeNull();
     expect(TestBed.inject(ProblemBannerState).problem()).not.toBeNull();
     await settled();
     const kept = http.expectOne(draftPath).request.body as { scenarioId: string };
@@ -228,47 +239,102 @@ describe('a scenario on the page', () => {
     expect(store.confirmation()).toEqual({ kind: 'differs', version: 2, years: [2026] });
   });
 
-  it('loses nothing when somebody else saved meanwhile: theirs opens, one’s own can be brought back', async () => {
+  /** One's own plan has 150, and the version that somebody else stored meanwhile 200. */
+  async function meet(): Promise<void> {
     openSaved();
     planCapex(150);
     const saving = store.save();
     await settled();
-    http.expectOne(`/api/scenarios/${scenarioId}`).flush(
-      {
-        type: problemType('stale-version'),
-        title: 'Conflict',
-        status: 409,
-        detail: 'I. Vandresson saved version 2 of this scenario meanwhile.',
-      },
-      { status: 409, statusText: 'Conflict' },
-    );
-    expect(await saving).toBeNull();
-    expect(store.conflict()?.slug).toBe('stale-version');
-    expect(store.text().plan[0].values[0]).toBe(150);
-
-    const opening = store.openTheirs();
-    await settled();
-    const kept = http.expectOne(draftPath);
-    const body = kept.request.body as { plan: { values: number[] }[] };
-    expect(body.plan[0].values[0]).toBe(150);
-    kept.flush({ draft: { ...body, updatedAt: '2026-11-14T09:00:00.000Z' } });
+    const stale = {
+      type: problemType('stale-version'),
+      title: 'Conflict',
+      status: 409,
+      detail: 'I. Vandresson saved version 2 of this scenario meanwhile.',
+    };
+    http
+      .expectOne(`/api/scenarios/${scenarioId}`)
+      .flush(stale, { status: 409, statusText: 'Conflict' });
     await settled();
     http.expectOne(`/api/scenarios/${scenarioId}`).flush(scenario(2, 200));
-    await opening;
-    expect(store.text().plan[0].values[0]).toBe(200);
-    expect(store.conflict()).toBeNull();
+    expect(await saving).toBeNull();
+  }
 
-    planCapex(210);
-    jasmine.clock().tick(2000);
-    await settled();
-    http.expectNone(draftPath);
-    store.bringBack();
+  it('puts the version that somebody else saved meanwhile beside one’s own, and saves neither', async () => {
+    await meet();
+    expect(store.theirs()?.plan[0].values[0]).toBe(200);
     expect(store.text().plan[0].values[0]).toBe(150);
-    expect(store.ground()?.saved?.version).toBe(2);
+    expect(store.problem()).toBeNull();
+    expect(await store.save()).toBeNull();
+  });
+
+  it('goes on from both versions with what was chosen, and can take the choice back', async () => {
+    await meet();
+    store.meetTheirs({ ...store.text(), plan: [{ year: 2026, values: [200, 1000] }] });
+    expect(store.theirs()).toBeNull();
+    expect(store.isChanged()).toBeFalse();
+    expect(edits.undo()).toBe('what was chosen of both versions');
+    expect(store.text().plan[0].values[0]).toBe(150);
+    const saving = store.save();
+    await settled();
+    const request = http.expectOne(`/api/scenarios/${scenarioId}`);
+    expect((request.request.body as { version: number }).version).toBe(2);
+    request.flush(scenario(3, 150));
+    expect((await saving)?.version).toBe(3);
+  });
+
+  it('still shows both versions after a reload, though the draft is the newer one', async () => {
+    await meet();
     jasmine.clock().tick(800);
     await settled();
-    const again = http.expectOne(draftPath).request.body as typeof body;
-    expect(again.plan[0].values[0]).toBe(150);
+    const { body } = http.expectOne(draftPath).request;
+    store.retry();
+    http.expectOne(`/api/scenarios/${scenarioId}`).flush(scenario(2, 200));
+    http.expectOne('/api/desk').flush(deskReply);
+    http.expectOne(`/api/fits/${fitId}`).flush(fitReply);
+    http.expectOne(`/api/fits/${fitId}/scenarios`).flush({ scenarios: [scenario(2, 200)] });
+    const draft = { ...(body as object), updatedAt: '2026-11-14T10:00:00.000Z' };
+    http.expectOne(`${draftPath}?scenario=${scenarioId}`).flush({ draft });
+    expect(store.theirs()?.version).toBe(2);
+    expect(store.text().plan[0].values[0]).toBe(150);
+  });
+
+  it('saves how a plan came about and is looked at, and keeps it in the draft', async () => {
+    openSaved();
+    const outlook = { ...heldReading.outlook, confidence: 0.9 };
+    const rules = [
+      { rule: { kind: 'grow', percent: 5 } as const, moves: [] },
+      ...heldReading.rules.slice(1),
+    ];
+    const uncertainty = { seed: 7, ranges: [[{ low: 100, high: 140 }, null]] };
+    edits.change({ outlook, rules, uncertainty }, { words: 'the outlook' });
+    jasmine.clock().tick(800);
+    await settled();
+    const draft = http.expectOne(draftPath);
+    expect(draft.request.body).toEqual(jasmine.objectContaining({ outlook, rules, uncertainty }));
+    draft.flush({
+      draft: { ...(draft.request.body as object), updatedAt: '2026-11-14T10:00:00.000Z' },
+    });
+    const saving = store.save();
+    await settled();
+    const request = http.expectOne(`/api/scenarios/${scenarioId}`);
+    expect(request.request.body).toEqual(jasmine.objectContaining({ outlook, rules, uncertainty }));
+    request.flush({ ...scenario(2, 120), outlook, rules, uncertainty });
+    await saving;
+    expect(store.isChanged()).toBeFalse();
+  });
+
+  it('goes back and forth over changes of the plan', () => {
+    openNew();
+    planCapex(130);
+    planCapex(140);
+    expect(edits.undo()).toBe('Capex FY2026');
+    expect(store.text().plan[0].values[0]).toBe(130);
+    edits.redo();
+    expect(store.text().plan[0].values[0]).toBe(140);
+    edits.undo();
+    edits.undo();
+    expect(edits.undo()).toBeNull();
+    expect(store.isChanged()).toBeFalse();
   });
 
   it('saves the plan as a copy beside the scenario that it came from', async () => {
@@ -290,6 +356,7 @@ describe('a scenario on the page', () => {
       scenarioId,
       name: 'Build-out',
       note: 'half done',
+      ...heldReading,
       plan: [{ year: 2026, values: [170, 1000] }],
       updatedAt: '2026-11-14T08:00:00.000Z',
     });
@@ -305,12 +372,12 @@ describe('a scenario on the page', () => {
 
   it('takes a scenario away and puts it back', async () => {
     openSaved();
-    const removing = store.remove(scenario(1, 120));
+    const removing = shelf.remove(scenario(1, 120));
     await settled();
     http.expectOne(`/api/scenarios/${scenarioId}`).flush(null);
     expect(await removing).toBeTrue();
     expect(store.ground()?.scenarios).toEqual([]);
-    const restoring = store.restore(scenario(1, 120));
+    const restoring = shelf.restore(scenario(1, 120));
     await settled();
     http.expectOne(`/api/scenarios/${scenarioId}/restore`).flush(scenario(1, 120));
     expect(await restoring).toBeTrue();
@@ -321,7 +388,7 @@ describe('a scenario on the page', () => {
     openSaved();
     const ofAnother = { ...scenario(1, 120), fitId: '00000000-0000-4000-8000-00000000000f' };
     const elsewhere = { ...ofAnother, id: '00000000-0000-4000-8000-00000000000b' };
-    const restoring = store.restore(elsewhere);
+    const restoring = shelf.restore(elsewhere);
     http.expectOne(`/api/scenarios/${elsewhere.id}/restore`).flush(elsewhere);
     expect(await restoring).toBeTrue();
     expect(store.ground()?.scenarios.map(({ id }) => id)).toEqual([scenarioId]);
@@ -330,7 +397,7 @@ describe('a scenario on the page', () => {
   it('keeps the draft again when the scenario could not be taken away', async () => {
     openSaved();
     planCapex(150);
-    const removing = store.remove(scenario(1, 120));
+    const removing = shelf.remove(scenario(1, 120));
     await settled();
     http
       .expectOne(`/api/scenarios/${scenarioId}`)

@@ -1,85 +1,56 @@
-import { DestroyRef, Injectable, computed, inject, signal } from '@angular/core';
+import { Injectable, inject, signal } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
-import { type ScenarioReply, apiRoutes, mayCall } from '@contract';
+import type { ScenarioReply } from '@contract';
 import { type Observable, Subject, firstValueFrom, startWith, switchMap } from 'rxjs';
 import { ApiProblem } from '../api/api-problem';
 import { ScenariosApi } from '../api/scenarios-api';
-import { SessionStore } from '../api/session-store';
-import { ProblemBannerState } from '../ui/problem';
-import { readPlan } from '../ui/plan/read-plan';
-import { tQuantile } from '../ui/plan/t-quantile';
 import { DraftKeeper } from './draft-keeper';
+import { DraftOrigins } from './draft-origins';
 import { yearsThatDiffer } from './figures-agree';
+import { noHistory } from './plan-history';
+import { ScenarioEdits } from './scenario-edits';
 import {
   type ScenarioAddress,
   type ScenarioGround,
   ScenarioGrounds,
   type ScenarioView,
-  isSameGround,
 } from './scenario-ground';
+import { ScenarioState } from './scenario-state';
 import {
   type ScenarioText,
   type StoredText,
   copyName,
-  draftOf,
   isSameText,
-  noText,
   storedText,
   toStoredText,
   toText,
-  withScenario,
 } from './scenario-text';
 
-/** What the server said of the figures when the plan was saved. */
-export type Confirmation =
-  | { readonly kind: 'agrees'; readonly version: number }
-  | { readonly kind: 'differs'; readonly version: number; readonly years: readonly number[] };
-
-/** One plan on one fit: what is stored, what is on the page, and the way between them. */
+/** One plan on one fit: opened, saved, and brought together with what somebody else saved. */
 @Injectable()
 export class ScenarioStore {
   readonly #api = inject(ScenariosApi);
-  readonly #banner = inject(ProblemBannerState);
-  readonly #page = inject(DestroyRef);
   readonly #drafts = inject(DraftKeeper);
+  readonly #edits = inject(ScenarioEdits);
   readonly #grounds = inject(ScenarioGrounds);
-  readonly #sessions = inject(SessionStore);
+  readonly #origins = inject(DraftOrigins);
+  readonly #state = inject(ScenarioState);
   readonly #addresses = new Subject<ScenarioAddress>();
   #address: ScenarioAddress = { scenarioId: null, fitId: null };
-  readonly #view = signal<ScenarioView>({ kind: 'loading' });
-  readonly #text = signal<ScenarioText>(noText);
-  readonly #restoredAt = signal<string | null>(null);
-  readonly #setAside = signal<ScenarioText | null>(null);
-  readonly #conflict = signal<ApiProblem | null>(null);
-  readonly #problem = signal<ApiProblem | null>(null);
-  readonly #confirmation = signal<Confirmation | null>(null);
   readonly #isSaving = signal(false);
 
-  readonly view = this.#view.asReadonly();
-  readonly text = this.#text.asReadonly();
-  /** When the draft that came back was kept; null when the page began with what is stored. */
-  readonly restoredAt = this.#restoredAt.asReadonly();
-  /** One's own plan while somebody else's version is looked at. */
-  readonly setAside = this.#setAside.asReadonly();
-  readonly conflict = this.#conflict.asReadonly();
-  readonly problem = this.#problem.asReadonly();
-  readonly confirmation = this.#confirmation.asReadonly();
+  readonly view = this.#state.view.asReadonly();
+  readonly text = this.#state.text.asReadonly();
+  readonly restoredAt = this.#state.restoredAt.asReadonly();
+  readonly problem = this.#state.problem.asReadonly();
+  readonly confirmation = this.#state.confirmation.asReadonly();
+  readonly maySave = this.#state.maySave;
+  readonly ground = this.#state.ground;
+  readonly reading = this.#state.reading;
+  readonly isChanged = this.#state.isChanged;
+  readonly theirs = this.#state.theirs;
   readonly isSaving = this.#isSaving.asReadonly();
   readonly draftState = this.#drafts.state;
-
-  readonly maySave = computed(() => mayCall(apiRoutes.saveScenario, this.#sessions.roles()));
-  readonly ground = computed(() => {
-    const view = this.#view();
-    return view.kind === 'ready' ? view.ground : null;
-  });
-  readonly reading = computed(() => {
-    const ground = this.ground();
-    return ground === null ? null : readPlan(ground.basis, this.#text().plan, tQuantile);
-  });
-  readonly isChanged = computed(() => {
-    const ground = this.ground();
-    return ground !== null && !isSameText(this.#text(), storedText(ground));
-  });
 
   constructor() {
     this.#addresses
@@ -110,14 +81,9 @@ export class ScenarioStore {
     this.#addresses.next(this.#address);
   }
 
-  change(change: Partial<ScenarioText>): void {
-    this.#text.update((text) => ({ ...text, ...change }));
-    this.#confirmation.set(null);
-    this.#keepDraft();
-  }
-
-  /** @returns the stored scenario, or null when it could not be stored. */
-  save(): Promise<ScenarioReply | null> {
+  /** @returns the stored scenario; null when it could not be stored, or when somebody else's version is to be met first. */
+  async save(): Promise<ScenarioReply | null> {
+    if (this.theirs() !== null) return null;
     return this.#store((ground, text) =>
       ground.saved === null
         ? this.#api.save({ fitId: ground.fit.fit.id, ...text })
@@ -136,84 +102,40 @@ export class ScenarioStore {
         keepsDraft: true,
       }),
     );
-    if (copy !== null && opened !== null)
-      await this.#guarded(() => this.#drafts.discard(copy.fitId, opened.id));
+    if (copy !== null && opened !== null) {
+      this.#origins.forget(opened.id);
+      await this.#state.guarded(() => this.#drafts.discard(copy.fitId, opened.id));
+    }
     return copy;
   }
 
-  /** Shows the version that somebody else stored meanwhile; one's own stays as a draft and can be brought back. */
-  async openTheirs(): Promise<void> {
-    const ground = this.ground();
-    const saved = ground?.saved;
-    if (!saved) return;
-    this.#keepDraft();
-    await this.#drafts.flush();
-    await this.#guarded(async () => {
-      const theirs = await firstValueFrom(this.#api.read(saved.id));
-      if (!this.#isShown(ground)) return;
-      this.#patchGround(theirs);
-      this.#setAside.set(this.#setAside() ?? this.#text());
-      this.#text.set(toText(theirs));
-      this.#conflict.set(null);
-    });
-  }
-
-  bringBack(): void {
-    const mine = this.#setAside();
-    if (mine === null) return;
-    this.#setAside.set(null);
-    this.change(mine);
+  /** Goes on from the version that somebody else stored, with what was chosen of both; it is not saved yet. */
+  meetTheirs(chosen: ScenarioText): void {
+    const theirs = this.theirs();
+    if (theirs === null) return;
+    this.#state.origin.set(theirs.version);
+    const { name, note, ...asked } = chosen;
+    this.#edits.change(asked, { words: 'what was chosen of both versions' });
+    this.#edits.rename({ name, note });
   }
 
   /** Goes back to what is stored, or for a new plan to the base. */
   async discard(): Promise<void> {
     const ground = this.ground();
     if (ground === null) return;
-    const given = this.#text();
-    await this.#guarded(async () => {
+    const given = this.text();
+    await this.#state.guarded(async () => {
       await this.#drafts.discard(ground.fit.fit.id, ground.saved?.id ?? null);
-      if (!this.#isShown(ground)) return;
-      if (this.#text() === given) this.#text.set(storedText(ground));
-      else this.#keepDraft();
-      this.#restoredAt.set(null);
-      this.#setAside.set(null);
-      this.#conflict.set(null);
-      this.#confirmation.set(null);
+      if (!this.#state.isShown(ground)) return;
+      if (this.text() === given) this.#begin(ground, storedText(ground));
+      else this.#edits.keepDraft();
+      this.#state.restoredAt.set(null);
+      this.#state.confirmation.set(null);
     });
-  }
-
-  /** @returns whether it is gone. */
-  async remove(scenario: ScenarioReply): Promise<boolean> {
-    const ground = this.ground();
-    const isGone = await this.#guarded(async () => {
-      if (scenario.id === ground?.saved?.id) await this.#drafts.drop();
-      await firstValueFrom(this.#api.delete(scenario.id), { defaultValue: undefined });
-    });
-    if (!isGone) this.#keepEdit(ground);
-    else this.#patchScenarios((scenarios) => scenarios.filter(({ id }) => id !== scenario.id));
-    return isGone;
-  }
-
-  /** @returns whether it is back. */
-  restore(scenario: ScenarioReply): Promise<boolean> {
-    return this.#guarded(async () => {
-      const back = await firstValueFrom(this.#api.restore(scenario.id));
-      if (this.ground()?.fit.fit.id !== back.fitId) return;
-      this.#patchScenarios((scenarios) => withScenario(scenarios, back));
-    });
-  }
-
-  /** @returns the copy, or null when there is none. */
-  async copy(scenario: ScenarioReply): Promise<ScenarioReply | null> {
-    let copy: ScenarioReply | null = null;
-    await this.#guarded(async () => {
-      copy = await firstValueFrom(this.#api.copy(scenario.id));
-    });
-    return copy;
   }
 
   dismissProblem(): void {
-    this.#problem.set(null);
+    this.#state.problem.set(null);
   }
 
   async #store(
@@ -221,106 +143,79 @@ export class ScenarioStore {
   ): Promise<ScenarioReply | null> {
     const [ground, reading] = [this.ground(), this.reading()];
     if (ground === null || reading === null || this.#isSaving()) return null;
-    const sent = this.#text();
+    const sent = this.text();
     this.#isSaving.set(true);
-    this.#conflict.set(null);
     let stored: ScenarioReply | null = null;
-    await this.#guarded(async () => {
+    await this.#state.guarded(async () => {
       await this.#drafts.drop();
-      const reply = await firstValueFrom(send(ground, toStoredText(sent)));
+      const reply = await this.#sent(send(ground, toStoredText(sent)), ground);
+      if (reply === null) return;
       stored = reply;
-      if (!this.#isShown(ground)) return;
-      this.#patchGround(reply);
-      this.#restoredAt.set(null);
-      this.#setAside.set(null);
+      this.#origins.forget(reply.id);
+      if (!this.#state.isShown(ground)) return;
+      this.#state.setSaved(reply);
+      this.#state.origin.set(reply.version);
+      this.#state.restoredAt.set(null);
       // What was changed while the reply was on its way is not saved: it stays, as a draft of what now is.
-      if (!isSameText(this.#text(), sent)) {
-        this.#keepDraft();
+      if (!isSameText(this.text(), sent)) {
+        this.#edits.keepDraft();
         if (ground.saved === null) await this.#drafts.discard(ground.fit.fit.id, null);
         return;
       }
-      this.#text.set(toText(reply));
+      this.#state.text.set(toText(reply));
       const years = yearsThatDiffer(reading.years, reply.years);
-      this.#confirmation.set(
+      this.#state.confirmation.set(
         years.length === 0
           ? { kind: 'agrees', version: reply.version }
           : { kind: 'differs', version: reply.version, years },
       );
     });
     this.#isSaving.set(false);
-    if (stored === null) this.#keepEdit(ground, sent);
+    if (stored === null) this.#edits.keepEdit(ground, sent);
     return stored;
   }
 
-  /** Runs a change; its problem stays beside what was entered, and goes to the banner when the page has gone on. */
-  async #guarded(work: () => Promise<void>): Promise<boolean> {
-    const ground = this.ground();
-    this.#problem.set(null);
+  /** Null where somebody else saved first and the plan is still on the page: then both versions stand on it. */
+  async #sent(
+    reply: Observable<ScenarioReply>,
+    ground: ScenarioGround,
+  ): Promise<ScenarioReply | null> {
     try {
-      await work();
-      return true;
+      return await firstValueFrom(reply);
     } catch (error) {
-      if (!(error instanceof ApiProblem)) throw error;
-      if (!this.#isShown(ground)) this.#banner.report(error.shown);
-      else if (error.slug === 'stale-version') this.#conflict.set(error);
-      else this.#problem.set(error);
-      return false;
+      const isStale = error instanceof ApiProblem && error.slug === 'stale-version';
+      if (!isStale || ground.saved === null || !this.#state.isShown(ground)) throw error;
+      const theirs = await firstValueFrom(this.#api.read(ground.saved.id));
+      if (this.#state.isShown(ground)) this.#state.setSaved(theirs);
+      return null;
     }
   }
 
   #show(view: ScenarioView): void {
-    this.#view.set(view);
-    this.#setAside.set(null);
-    this.#conflict.set(null);
-    this.#problem.set(null);
-    this.#confirmation.set(null);
+    this.#state.view.set(view);
+    this.#state.problem.set(null);
+    this.#state.confirmation.set(null);
+    this.#state.history.set(noHistory);
     if (view.kind !== 'ready') return;
     const stored = storedText(view.ground);
-    const { draft } = view.ground;
+    const { draft, saved } = view.ground;
     const isRestored = draft !== null && !isSameText(draft, stored);
-    this.#text.set(isRestored ? toText(draft) : stored);
-    this.#restoredAt.set(isRestored ? draft.updatedAt : null);
+    this.#state.text.set(isRestored ? toText(draft) : stored);
+    this.#state.restoredAt.set(isRestored ? draft.updatedAt : null);
+    this.#state.origin.set(isRestored ? this.#originOf(draft, saved) : (saved?.version ?? null));
   }
 
-  /** While somebody else's version is looked at the draft is one's own plan, and no edit of theirs takes its place. */
-  #keepDraft(): void {
-    const ground = this.ground();
-    if (ground === null || !this.maySave() || this.#setAside() !== null) return;
-    this.#drafts.keep(draftOf(ground, this.#text()));
+  /** The version that a draft began with; where this browser does not know, the times tell. */
+  #originOf(draft: { readonly updatedAt: string }, saved: ScenarioReply | null): number | null {
+    if (saved === null) return null;
+    const isOlder = draft.updatedAt < saved.updatedAt;
+    return this.#origins.read(saved.id) ?? (isOlder ? saved.version - 1 : saved.version);
   }
 
-  /** Keeps the draft again that a failed change had dropped; `sent` when the page has gone on to another plan. */
-  #keepEdit(ground: ScenarioGround | null, sent?: ScenarioText): void {
-    if (this.#isShown(ground)) {
-      if (this.isChanged()) this.#keepDraft();
-    } else if (ground !== null && sent !== undefined) {
-      void this.#drafts.flush();
-      this.#drafts.keep(draftOf(ground, sent));
-      void this.#drafts.flush();
-    }
-  }
-
-  /** Whether a reply for this ground still finds it on the page. */
-  #isShown(ground: ScenarioGround | null): boolean {
-    return !this.#page.destroyed && isSameGround(ground, this.ground());
-  }
-
-  #patchGround(saved: ScenarioReply): void {
-    this.#patch((ground) => ({
-      ...ground,
-      saved,
-      draft: null,
-      scenarios: withScenario(ground.scenarios, saved),
-    }));
-  }
-
-  #patchScenarios(change: (scenarios: readonly ScenarioReply[]) => readonly ScenarioReply[]): void {
-    this.#patch((ground) => ({ ...ground, scenarios: change(ground.scenarios) }));
-  }
-
-  #patch(change: (ground: ScenarioGround) => ScenarioGround): void {
-    this.#view.update((view) =>
-      view.kind === 'ready' ? { kind: 'ready', ground: change(view.ground) } : view,
-    );
+  #begin(ground: ScenarioGround, text: ScenarioText): void {
+    if (ground.saved !== null) this.#origins.forget(ground.saved.id);
+    this.#state.origin.set(ground.saved?.version ?? null);
+    this.#state.history.set(noHistory);
+    this.#state.text.set(text);
   }
 }

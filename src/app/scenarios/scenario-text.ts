@@ -1,35 +1,44 @@
 import type { PlanYear, SaveScenario, ScenarioReply } from '@contract';
-import { heldPlan, isSamePlan } from '../ui/plan/change-plan';
+import { type AskedPlan, heldAsked, isSameAsked, usualOutlook } from '../ui/plan/asked-plan';
 import type { PlanTablePlan } from '../ui/plan/plan-table';
 import type { PlannedYear } from '../ui/plan/read-plan';
 import type { Draft } from './draft-keeper';
 import type { ScenarioGround } from './scenario-ground';
 
 /** A plan as it stands on the page, saved or not. */
-export interface ScenarioText {
+export interface ScenarioText extends AskedPlan {
   readonly name: string;
   readonly note: string;
-  readonly plan: readonly PlannedYear[];
 }
 
 /** What the server is sent of it. */
 export type StoredText = Omit<SaveScenario, 'fitId' | 'keepsDraft'>;
 
-export const noText: ScenarioText = { name: '', note: '', plan: [] };
+/** Nothing on the page yet. */
+export const noText: ScenarioText = {
+  name: '',
+  note: '',
+  plan: [],
+  outlook: usualOutlook({ confidence: 0.95 }),
+  rules: [],
+  uncertainty: null,
+};
 const firstYears = 3;
 const longestName = 120;
 
 /** What the page begins with: the scenario as it is stored, or the base without a name. */
 export function storedText({ saved, basis }: ScenarioGround): ScenarioText {
-  return saved === null ? { ...noText, plan: heldPlan(basis, firstYears) } : toText(saved);
+  return saved === null ? { name: '', note: '', ...heldAsked(basis, firstYears) } : toText(saved);
 }
 
-export function toText({ name, note, plan }: ScenarioText): ScenarioText {
-  return { name, note, plan };
+export function toText(source: ScenarioText): ScenarioText {
+  const { name, note, plan, outlook, rules, uncertainty } = source;
+  return { name, note, plan, outlook, rules, uncertainty };
 }
 
-export function toStoredText({ name, note, plan }: ScenarioText): StoredText {
-  return { name, note, plan: toStoredPlan(plan) };
+export function toStoredText(text: ScenarioText): StoredText {
+  const { name, note, plan, outlook, rules, uncertainty } = text;
+  return { name, note, plan: toStoredPlan(plan), outlook, rules: [...rules], uncertainty };
 }
 
 /** A stored scenario as a plan with its figures. */
@@ -47,7 +56,7 @@ function toStoredPlan(plan: readonly PlannedYear[]): PlanYear[] {
 }
 
 export function isSameText(left: ScenarioText, right: ScenarioText): boolean {
-  return left.name === right.name && left.note === right.note && isSamePlan(left.plan, right.plan);
+  return left.name === right.name && left.note === right.note && isSameAsked(left, right);
 }
 
 export function copyName(name: string): string {

@@ -6,11 +6,15 @@ import { Router, provideRouter } from '@angular/router';
 import { RouterTestingHarness } from '@angular/router/testing';
 import type { ScenarioReply } from '@contract';
 import { SessionStore } from '../api/session-store';
-import { readPlan } from '../ui/plan/read-plan';
-import { tQuantile } from '../ui/plan/t-quantile';
-import { planBasis } from '../ui/plan/testing/plan-basis';
 import { routes } from './scenarios.routes';
-import { deskReply, fitId, fitReply, sessionOf } from './testing/scenario-replies';
+import {
+  deskReply,
+  fitId,
+  fitReply,
+  heldReading,
+  sessionOf,
+  storedYears,
+} from './testing/scenario-replies';
 
 @Component({
   selector: 'kv-elsewhere',
@@ -26,13 +30,10 @@ const stored: ScenarioReply = {
   name: 'Build-out',
   note: '',
   version: 1,
+  ...heldReading,
   plan,
-  years: readPlan(planBasis, plan, tQuantile).years.map((year) => ({
-    year: year.year,
-    expected: { ...year.expected },
-    difference: { ...year.difference },
-    familiar: year.familiar.kind,
-  })),
+  years: storedYears(plan),
+  copiedFrom: null,
   createdBy: 'M. Oduya',
   updatedBy: 'M. Oduya',
   updatedAt: '2026-11-14T09:00:00.000Z',

@@ -36,9 +36,12 @@ import type { PlannedYear } from '../ui/plan/read-plan';
 import { ProblemNotice } from '../ui/problem-notice';
 import { UndoNotice } from '../ui/undo-notice';
 import { DraftKeeper } from './draft-keeper';
+import { ScenarioEdits } from './scenario-edits';
 import { ScenarioList } from './scenario-list';
 import { ScenarioName, nameProblem } from './scenario-name';
 import { ScenarioNotices } from './scenario-notices';
+import { ScenarioShelf } from './scenario-shelf';
+import { ScenarioState } from './scenario-state';
 import { ScenarioStore } from './scenario-store';
 import { storedFigures } from './scenario-text';
 import { contextOf } from './scenario-words';
@@ -68,7 +71,7 @@ const unnamed = 'This plan';
   ],
   templateUrl: './scenarios-page.html',
   styleUrl: './scenarios-page.css',
-  providers: [DraftKeeper, ScenarioStore],
+  providers: [DraftKeeper, ScenarioState, ScenarioEdits, ScenarioShelf, ScenarioStore],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class ScenariosPage {
@@ -79,6 +82,8 @@ export class ScenariosPage {
   readonly #numbers = inject(NumberFormat);
   readonly #router = inject(Router);
   readonly #undo = inject(UndoNotice);
+  readonly #shelf = inject(ScenarioShelf);
+  protected readonly edits = inject(ScenarioEdits);
   protected readonly store = inject(ScenarioStore);
 
   /** A saved scenario, from the path. */
@@ -119,7 +124,6 @@ export class ScenariosPage {
   });
   protected readonly draftWords = computed(() => {
     if (!this.store.isChanged()) return this.store.ground()?.saved === null ? '' : 'Saved';
-    if (this.store.setAside() !== null) return 'Not saved';
     const state = this.store.draftState();
     if (state === 'keeping') return 'Keeping your draft…';
     return state === 'kept' ? 'Not saved; kept as your draft' : 'Not saved';
@@ -146,7 +150,7 @@ export class ScenariosPage {
     const [ground, reading] = [this.store.ground(), this.store.reading()];
     if (ground === null || reading === null) return null;
     const ownYears = ground.fit.result?.ownYears ?? [];
-    return expectedPathData(ownYears, reading.base, this.drawnPlans());
+    return expectedPathData(ownYears, reading.bases, this.drawnPlans());
   });
   protected readonly pathText = computed(() => ({
     title: this.finding(),
@@ -184,8 +188,12 @@ export class ScenariosPage {
     });
   }
 
+  protected changePlan(plan: readonly PlannedYear[]): void {
+    this.edits.change({ plan }, { words: 'the plan' });
+  }
+
   protected setInside({ year, values }: PlannedYear): void {
-    this.store.change({ plan: withYearSet(this.store.text().plan, year, values) });
+    this.changePlan(withYearSet(this.store.text().plan, year, values));
   }
 
   protected openFigure(wanted: PlannedFigureWanted): void {
@@ -199,7 +207,12 @@ export class ScenariosPage {
   protected openYear(choice: ExpectedPathChoice): void {
     const ground = this.store.ground();
     if (ground === null) return;
-    const planned = chosenFigure(ground.basis, this.drawnPlans(), choice);
+    const planned = chosenFigure(
+      this.store.reading()?.basis ?? ground.basis,
+      this.drawnPlans(),
+      choice,
+      this.store.text().outlook,
+    );
     if (planned !== undefined) this.openFigure(planned);
     if (choice.kind === 'actual')
       this.#lineage.open({ fitId: ground.fit.fit.id }, `fitted.${choice.year}`);
@@ -222,20 +235,20 @@ export class ScenariosPage {
   }
 
   protected async copy(scenario: ScenarioReply): Promise<void> {
-    await this.#follow(() => this.store.copy(scenario));
+    await this.#follow(() => this.#shelf.copy(scenario));
   }
 
   protected async remove(scenario: ScenarioReply): Promise<void> {
     const isOpen = scenario.id === this.store.ground()?.saved?.id;
     const { url } = this.#router;
-    if (!(await this.store.remove(scenario))) return;
+    if (!(await this.#shelf.remove(scenario))) return;
     if (isOpen && this.#isStillAt(url))
       await this.#router.navigate(['/scenarios'], { queryParams: { fit: scenario.fitId } });
     await this.#undo.show(`Deleted “${scenario.name}”`, () => void this.#restore(scenario, isOpen));
   }
 
   async #restore(scenario: ScenarioReply, opens: boolean): Promise<void> {
-    const restored = async () => ((await this.store.restore(scenario)) ? scenario : null);
+    const restored = async () => ((await this.#shelf.restore(scenario)) ? scenario : null);
     await (opens ? this.#follow(restored) : restored());
   }
 

@@ -1,38 +1,14 @@
 import { Injectable, computed, inject, signal } from '@angular/core';
 import {
+  type FigureKind,
+  type IntervalValue,
   type MoneyUnit,
   type NegativeStyle,
-  boundsText,
-  columnDigits,
-  columnText,
-  digitsFor,
-  fixedText,
-  fullText,
-  intervalDigits,
-  intervalText,
-  missingText,
-  unitRatio,
-  unitText,
+  NumberWriter,
 } from '@figures';
 import { PageContext } from './page-context';
 
-/**
- * `money` is in the panel's unit and follows the unit switch; `plain` is a ratio, a slope or a statistic and does
- * not; `percent` is a share, 0.62 for 62 %; `count` is a whole number.
- */
-export type FigureKind = 'money' | 'plain' | 'percent' | 'count';
-
-/** An estimate with its bounds; `unbounded` says which of them do not exist because nothing there is ruled out. */
-export interface IntervalValue {
-  readonly estimate: number;
-  readonly low: number | null;
-  readonly high: number | null;
-  readonly unbounded?: 'low' | 'high' | 'both';
-}
-
-/** Significant digits by place. */
-export const headlineDigits = 3;
-export const tableDigits = 4;
+export { type FigureKind, type IntervalValue, headlineDigits, tableDigits } from '@figures';
 
 /**
  * How numbers are written, in one place: unit, sign, digits. All methods read signals, so that templates and
@@ -51,99 +27,51 @@ export class NumberFormat {
   readonly negatives = signal<NegativeStyle>('minus');
   readonly locale = signal('en');
 
+  /** What writes with these settings. */
+  readonly writer = computed(
+    () =>
+      new NumberWriter({
+        currency: this.currency(),
+        panelUnit: this.panelUnit(),
+        unit: this.unit(),
+        negatives: this.negatives(),
+        locale: this.locale(),
+      }),
+  );
   /** What a number of the panel is multiplied by to be shown. */
-  readonly factor = computed(() => unitRatio(this.panelUnit(), this.unit()));
+  readonly factor = computed(() => this.writer().factor);
   /** Stands once in a header: `EUR m`. */
-  readonly unitLabel = computed(() => unitText(this.currency(), this.unit()));
+  readonly unitLabel = computed(() => this.writer().unitLabel);
 
-  /** The number as it is shown before rounding: money in the shown unit, a percentage times 100. */
-  shown(value: number, kind: FigureKind = 'money'): number {
-    if (kind === 'money') return value * this.factor();
-    return kind === 'percent' ? value * 100 : value;
+  shown(value: number, kind?: FigureKind): number {
+    return this.writer().shown(value, kind);
   }
 
-  /** Back from what a person typed in the shown unit to the panel's unit. */
   toPanelUnit(shown: number): number {
-    return shown / this.factor();
+    return this.writer().toPanelUnit(shown);
   }
 
-  /** Digits after the point that align a column of figures of one kind. */
-  columnDigits(values: readonly (number | null)[], kind: FigureKind = 'money'): number {
-    if (kind === 'count') return 0;
-    if (kind === 'percent') return 1;
-    return columnDigits(
-      values.map((value) => (value === null ? null : this.shown(value, kind))),
-      tableDigits,
-    );
+  columnDigits(values: readonly (number | null)[], kind?: FigureKind): number {
+    return this.writer().columnDigits(values, kind);
   }
 
-  /** A figure of a table: 4 significant digits, or `digits` after the point to align a column. */
-  figure(value: number | null | undefined, kind: FigureKind = 'money', digits?: number): string {
-    if (value === null || value === undefined || !Number.isFinite(value)) return missingText;
-    const shown = this.shown(value, kind);
-    const text = columnText(
-      shown,
-      digits ?? this.#digits(shown, kind, tableDigits),
-      this.negatives(),
-      this.locale(),
-    );
-    return kind === 'percent' && shown !== 0 ? `${text} %` : text;
+  figure(value: number | null | undefined, kind?: FigureKind, digits?: number): string {
+    return this.writer().figure(value, kind, digits);
   }
 
-  /** A figure of a sentence or a headline: 3 significant digits, minus sign, zero as 0. */
-  headline(value: number, kind: FigureKind = 'money', significant = headlineDigits): string {
-    const shown = this.shown(value, kind);
-    const text = fixedText(shown, this.#digits(shown, kind, significant), this.locale());
-    return kind === 'percent' ? `${text} %` : text;
+  headline(value: number, kind?: FigureKind, significant?: number): string {
+    return this.writer().headline(value, kind, significant);
   }
 
-  /**
-   * `2,410 (1,280 to 3,540)`: an estimate with its interval, 3 significant digits in headlines, 4 in tables; a share is
-   * `34.2 % (12.1 to 60.4 %)`.
-   */
-  interval(value: IntervalValue, kind: FigureKind = 'money', significant = tableDigits): string {
-    const [estimate, low, high] = this.#shownInterval(value, kind);
-    const digits = intervalDigits(estimate, low, high, significant);
-    if (kind !== 'percent' && value.unbounded === undefined)
-      return intervalText(estimate, low, high, digits, this.locale());
-    const shownDigits = kind === 'percent' ? Math.min(1, digits) : digits;
-    const text = fixedText(estimate, shownDigits, this.locale());
-    const bounds = this.bounds(value, kind, shownDigits);
-    return `${kind === 'percent' ? `${text} %` : text} (${bounds})`;
+  interval(value: IntervalValue, kind?: FigureKind, significant?: number): string {
+    return this.writer().interval(value, kind, significant);
   }
 
-  /** `1,275 to 3,539`, with the digits of its estimate; `no interval` where there is none, `1,275 and up` with no upper end. */
-  bounds(value: IntervalValue, kind: FigureKind = 'money', digits?: number): string {
-    const [estimate, low, high] = this.#shownInterval(value, kind);
-    const shownDigits =
-      digits ?? (kind === 'percent' ? 1 : intervalDigits(estimate, low, high, tableDigits));
-    const mark = kind === 'percent' ? ' %' : '';
-    const end = (bound: number) => fixedText(bound, shownDigits, this.locale()) + mark;
-    if (low !== null && value.unbounded === 'high') return `${end(low)} and up`;
-    if (high !== null && value.unbounded === 'low') return `${end(high)} and down`;
-    if (low === null || high === null) return 'no interval';
-    return boundsText(low, high, shownDigits, this.locale()) + mark;
+  bounds(value: IntervalValue, kind?: FigureKind, digits?: number): string {
+    return this.writer().bounds(value, kind, digits);
   }
 
-  /** Every digit, for the lineage drawer and copies. */
-  full(value: number | null, kind: FigureKind = 'money'): string {
-    return fullText(value === null ? null : this.shown(value, kind), this.locale());
-  }
-
-  #shownInterval(value: IntervalValue, kind: FigureKind): [number, number | null, number | null] {
-    const { estimate, low, high } = value;
-    return [
-      this.shown(estimate, kind),
-      low === null ? null : this.shown(low, kind),
-      high === null ? null : this.shown(high, kind),
-    ];
-  }
-
-  #digits(shown: number, kind: FigureKind, significant: number): number {
-    if (kind === 'count') return 0;
-    if (kind === 'percent') return 1;
-    const digits = digitsFor(shown, significant);
-    // In tables no whole number is rounded away: 12,345 stays 12,345.
-    return significant >= tableDigits ? Math.max(0, digits) : digits;
+  full(value: number | null, kind?: FigureKind): string {
+    return this.writer().full(value, kind);
   }
 }

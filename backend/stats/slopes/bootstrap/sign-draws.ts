@@ -1,5 +1,5 @@
 import { StatsError } from '../../stats-error';
-import { randomWords, seededWords } from './random-words';
+import { randomWords, seededWords } from '../../prediction';
 
 /** With so few companies every sign vector is looked at. */
 export const mostEnumerated = 12;

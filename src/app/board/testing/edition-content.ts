@@ -1,4 +1,4 @@
-import type { EditionContent, EditionSummary } from '@contract';
+import type { EditionContent, EditionReply, EditionSummary, Sentence } from '@contract';
 import { logBasis, planBasis } from '../../ui/plan/testing/plan-basis';
 
 const interval = (estimate: number, low: number, high: number) => ({
@@ -10,9 +10,31 @@ const interval = (estimate: number, low: number, high: number) => ({
 const test = (value: number, pValue: number) => ({ value, df1: 2, df2: 31, pValue });
 const uuid = (last: number) => `00000000-0000-4000-8000-00000000000${last}`;
 
+type Figure = Extract<Sentence[number], { kind: unknown }>;
+
+/** `1,800 (1,170 to 2,430)`, each number tied to the figure. */
+function estimate(
+  figure: string,
+  kind: Figure['kind'],
+  [value, low, high]: readonly [number, number, number],
+  digits: number,
+  isSize = false,
+): Sentence {
+  const part = (number: number): Figure => ({ figure, kind, value: number, digits, isSize });
+  return [part(value), { text: ' (' }, part(low), { text: ' to ' }, part(high), { text: ')' }];
+}
+
+const count = (value: number): Figure => ({
+  figure: null,
+  kind: 'count',
+  value,
+  digits: 0,
+  isSize: false,
+});
+
 /** An edition of three companies, all figures made up. */
 export const editionContent: EditionContent = {
-  schema: 1,
+  schema: 2,
   number: 7,
   workspaceName: 'Velmara Finance',
   ownCompany: 'Velmara',
@@ -179,6 +201,96 @@ export const editionContent: EditionContent = {
   ],
   peerGroupsTried: 3,
   cautions: ['Associations, not causes.'],
+  unit: 'millions',
+  headline: [
+    { text: 'The market values ' },
+    { own: 'Velmara' },
+    { text: ' ' },
+    ...estimate('standing', 'money', [1800, 1170, 2430], 0, true),
+    { text: ' ' },
+    { unit: true },
+    { text: ' above what capex and book equity alone would suggest against its peers' },
+  ],
+  isHeadlineEdited: false,
+  evidence: [
+    {
+      kind: 'fine',
+      sentence: [{ text: 'Company levels differ, so company effects are kept.' }],
+      figure: 'poolability',
+    },
+    {
+      kind: 'caution',
+      sentence: [count(3), { text: ' peer group versions were saved up to this edition.' }],
+      figure: null,
+    },
+  ],
+  slopesInWords: [
+    {
+      kind: 'fine',
+      sentence: [
+        { text: 'Each extra 1 of capex goes with ' },
+        ...estimate('slope.0', 'plain', [2, 1.2, 2.8], 2),
+        { text: ' of market value.' },
+      ],
+      figure: 'slope.0',
+    },
+  ],
+  warnings: [
+    {
+      id: 'few-companies',
+      code: 'few-companies',
+      isSerious: true,
+      title: 'Few companies',
+      sentence: [{ text: 'The peer group has ' }, count(3), { text: ' companies with figures.' }],
+    },
+    {
+      id: 'sign-change',
+      code: 'sign-change',
+      isSerious: true,
+      title: 'A sign that hangs on one company',
+      sentence: [{ text: 'The sign changes without Sarvane.' }],
+    },
+    {
+      id: 'fit.unbalanced.0',
+      code: 'fit',
+      isSerious: false,
+      title: 'From the fit',
+      sentence: [{ text: 'Two rows were dropped.' }],
+    },
+  ],
+  changes: {
+    since: { id: uuid(8), number: 6, signedAt: '2026-10-15T09:00:00.000Z' },
+    figures: [
+      {
+        label: 'standing',
+        figure: 'standing',
+        kind: 'money',
+        before: interval(1500, 900, 2100),
+        after: interval(1800, 1170, 2430),
+        beforeText: null,
+        afterText: null,
+      },
+      {
+        label: 'rank set',
+        figure: 'rank-set',
+        kind: 'text',
+        before: null,
+        after: null,
+        beforeText: 'place 1 to 3 of 3',
+        afterText: 'place 1 to 2 of 3',
+      },
+    ],
+    peersAdded: ['Kesdrin'],
+    peersRemoved: ['Zethorin'],
+    panelCells: {
+      addedRows: 0,
+      removedRows: 0,
+      changedCells: 1,
+      listed: [],
+    },
+    specification: [{ what: 'years', before: 'FY2014–FY2024', after: 'FY2014–FY2025' }],
+  },
+  answers: null,
 };
 
 export const editionSummary: EditionSummary = {
@@ -191,6 +303,19 @@ export const editionSummary: EditionSummary = {
   confidentiality: 'confidential',
   decision: null,
   supersededBy: null,
+};
+
+/** As the CFO reads it while it waits. */
+export const editionReply: EditionReply = {
+  edition: editionSummary,
+  content: editionContent,
+  maySign: true,
+  mayReturn: true,
+  newerPanelVersion: null,
+  whyNot: null,
+  openedWarnings: [],
+  comments: [],
+  access: [],
 };
 
 /** The same edition on a fit in logs with year effects and regressors of the year before. */
@@ -243,6 +368,24 @@ export const logEditionContent: EditionContent = {
       difference: interval(Math.log(1.1), Math.log(1.05), Math.log(1.15)),
     })),
   })),
+  headline: [
+    { text: 'The market values ' },
+    { own: 'Velmara' },
+    { text: ' ' },
+    ...estimate('standing', 'percent', [0.34, 0.12, 0.6], 1, true),
+    { text: ' above what capex and book equity of the year before alone would suggest' },
+  ],
+  slopesInWords: [
+    {
+      kind: 'fine',
+      sentence: [
+        { text: '1 % more capex of the year before goes with ' },
+        ...estimate('slope.0', 'plain', [0.42, 0.1, 0.7], 4),
+        { text: ' % of market value.' },
+      ],
+      figure: 'slope.0',
+    },
+  ],
 };
 
 /** A form of the basis with four year effects more, which weigh nothing but by themselves. */

@@ -1,7 +1,7 @@
 import type { PanelColumn } from '@contract';
 import { figureAt } from '../grid-places';
 import type { PanelRow } from '../panel-rows';
-import { blockText } from './block-text';
+import { blockText } from '../../ui/block-text';
 import type { CellRange } from './cell-block';
 import { figureText, shiftOf } from './shown-figure';
 

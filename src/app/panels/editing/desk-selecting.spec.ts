@@ -1,6 +1,6 @@
 import { TestBed } from '@angular/core/testing';
 import { NumberFormat } from '../../ui/number-format';
-import { readBlockText } from './block-text';
+import { readBlockText } from '../../ui/block-text';
 import { DeskGridHarness } from './testing/desk-grid-harness';
 import { small, wide } from './testing/desk-panels';
 

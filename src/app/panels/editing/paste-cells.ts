@@ -2,11 +2,11 @@ import { leadingColumns } from '../grid-places';
 import { type PanelRow, columnTitle } from '../panel-rows';
 import type { ShownProblem } from '../../ui/problem';
 import { counted } from '../../ui/phrases';
-import { readBlockText } from './block-text';
+import { readBlockText } from '../../ui/block-text';
 import type { CellRange } from './cell-block';
 import type { ShownGrid } from './copy-cells';
 import type { CellChange } from './panel-edits';
-import { readFigures } from './read-figure';
+import { readFigures } from '../../ui/read-figures';
 import { shiftOf, shifted } from './shown-figure';
 
 export type PasteOutcome =

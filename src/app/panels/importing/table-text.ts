@@ -1,4 +1,4 @@
-import { readBlockText } from '../editing/block-text';
+import { readBlockText } from '../../ui/block-text';
 
 type Rows = readonly (readonly string[])[];
 

@@ -1,5 +1,16 @@
-import type { DeskReply, FitReply, FitSummary, Role, SessionReply } from '@contract';
+import type {
+  DeskReply,
+  FitReply,
+  FitSummary,
+  Plan,
+  Role,
+  ScenarioReply,
+  SessionReply,
+} from '@contract';
 import { panelVersion } from '../../api/testing/panel-version';
+import { heldAsked } from '../../ui/plan/asked-plan';
+import { readPlan } from '../../ui/plan/read-plan';
+import { tQuantile } from '../../ui/plan/t-quantile';
 import { planBasis } from '../../ui/plan/testing/plan-basis';
 
 const uuid = (last: number) => `00000000-0000-4000-8000-00000000000${last}`;
@@ -115,4 +126,29 @@ export function sessionOf(role: Role): SessionReply {
       preferences: { theme: 'system', unit: 'millions', negatives: 'minus' },
     },
   };
+}
+
+const held = heldAsked(planBasis, 1);
+
+/** How a plan of one year is read for which nothing was chosen. */
+export const heldReading: Pick<ScenarioReply, 'outlook' | 'rules' | 'uncertainty'> = {
+  outlook: held.outlook,
+  rules: [...held.rules],
+  uncertainty: held.uncertainty,
+};
+
+/** The figures of a plan as the server stores them. */
+export function storedYears(
+  plan: Plan,
+  outlook: ScenarioReply['outlook'] = held.outlook,
+): ScenarioReply['years'] {
+  return readPlan(planBasis, plan, tQuantile, outlook).years.map(
+    ({ year, expected, difference, familiar, band }) => ({
+      year,
+      expected: { ...expected },
+      difference: { ...difference },
+      familiar: familiar.kind,
+      band: { ...band },
+    }),
+  );
 }

@@ -4,7 +4,10 @@ import type { PlannedYear } from './read-plan';
 export const mostYears = 5;
 
 /** The plan that changes nothing: the last actual values, for so many coming years. */
-export function heldPlan(basis: PredictionBasis, years: number): readonly PlannedYear[] {
+export function heldPlan(
+  basis: Pick<PredictionBasis, 'held' | 'last'>,
+  years: number,
+): readonly PlannedYear[] {
   const { year } = basis.last;
   const values = heldRegressors(basis);
   return Array.from({ length: years }, (_, index) => ({

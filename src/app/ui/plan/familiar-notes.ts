@@ -27,18 +27,21 @@ import { steppedInside } from './slider-range';
           <div>
             <p>
               <strong>{{ note.finding }}.</strong>
-              {{ note.reason }}
             </p>
+            <details>
+              <summary>Why</summary>
+              <p>{{ note.reason }}</p>
+            </details>
             <p class="inside">
               @if (note.inside; as inside) {
                 Nearest plan inside: {{ note.nearest }}.
                 <button
                   type="button"
                   class="kv-link kv-no-print"
-                  [attr.aria-label]="'Set FY' + inside.year + ' to nearest inside'"
+                  [attr.aria-label]="'Take the nearest plan inside for FY' + inside.year"
                   (click)="insideWanted.emit(inside)"
                 >
-                  Set to nearest inside
+                  Take the nearest plan inside
                 </button>
               } @else {
                 It reads FY{{ note.of }} as it was, which no plan changes.
@@ -48,6 +51,11 @@ import { steppedInside } from './slider-range';
         </li>
       }
     </ul>
+    @if (canTakeAll()) {
+      <button type="button" class="kv-link kv-no-print" (click)="allInsideWanted.emit()">
+        Take the nearest plan inside for all years
+      </button>
+    }
   `,
   styles: `
     ul {
@@ -71,6 +79,10 @@ import { steppedInside } from './slider-range';
     strong {
       font-weight: 500;
     }
+    summary {
+      inline-size: max-content;
+      cursor: pointer;
+    }
     .inside {
       color: var(--kv-soft-ink);
     }
@@ -85,6 +97,9 @@ export class FamiliarNotes {
   readonly years = input.required<readonly ReadYear[]>();
   /** The year with the values that bring it back inside. */
   readonly insideWanted = output<PlannedYear>();
+  /** Whether all years can be brought inside at once. */
+  readonly offersAll = input(false);
+  readonly allInsideWanted = output();
 
   protected readonly inside = computed(() => {
     const years = this.years().filter(({ familiar }) => familiar.kind === 'inside');
@@ -95,6 +110,9 @@ export class FamiliarNotes {
           'inside',
         );
   });
+  protected readonly canTakeAll = computed(
+    () => this.offersAll() && this.notes().filter(({ inside }) => inside !== null).length > 1,
+  );
   protected readonly notes = computed(() =>
     this.years()
       .filter(({ familiar }) => familiar.kind !== 'inside')

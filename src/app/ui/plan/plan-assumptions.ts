@@ -1,4 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import type { PlanOutlook } from '@contract';
 import type { PredictionBasis } from '@prediction';
 import { planAssumptions } from './plan-words';
 
@@ -28,8 +29,12 @@ export class PlanAssumptions {
   readonly basis = input.required<PredictionBasis>();
   /** How many years the longest plan has. */
   readonly years = input.required<number>();
+  /** How the plan is looked at; the model's level and the last year effect unless told otherwise. */
+  readonly outlook = input<Pick<PlanOutlook, 'start' | 'yearEffect'>>();
   /** Planned years that the model cannot read, and why. */
   readonly refused = input<readonly { readonly year: number; readonly reason: string }[]>([]);
 
-  protected readonly assumptions = computed(() => planAssumptions(this.basis(), this.years()));
+  protected readonly assumptions = computed(() =>
+    planAssumptions(this.basis(), this.years(), this.outlook()),
+  );
 }

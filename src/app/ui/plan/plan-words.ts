@@ -1,3 +1,4 @@
+import type { PlanOutlook } from '@contract';
 import type { FamiliarRange, IntervalEstimate, PredictionBasis } from '@prediction';
 import { type Bounded, asDifference, differenceKind } from '../model-form';
 import type { FigureKind, NumberFormat } from '../number-format';
@@ -45,7 +46,11 @@ export function expectedName(form: PredictionBasis['form']): string {
 }
 
 /** What the model assumes of a plan beyond its amounts, a sentence each. */
-export function planAssumptions(basis: PredictionBasis, years: number): readonly string[] {
+export function planAssumptions(
+  basis: PredictionBasis,
+  years: number,
+  outlook?: Pick<PlanOutlook, 'start' | 'yearEffect'>,
+): readonly string[] {
   const { last, yearEffects } = basis;
   const first = last.year + 1;
   const lastPlanned = last.year + years;
@@ -58,14 +63,21 @@ export function planAssumptions(basis: PredictionBasis, years: number): readonly
     ...(yearEffects === undefined || yearEffects === null
       ? []
       : [
-          `Year effect of every planned year: that of FY${yearEffects.lastYear}, the last observed.`,
+          `Year effect of every planned year: ${yearEffectSource(yearEffects.lastYear, outlook?.yearEffect)}.`,
         ]),
     ...(basis.form === 'log'
       ? [
-          'This fit reads logs: expected values are means, brought back to amounts; differences are percentages. Every amount has to be above zero.',
+          `This fit reads logs: expected values are ${outlook?.start === 'carry-the-gap' ? 'medians' : 'means'}, brought back to amounts; differences are percentages. Every amount has to be above zero.`,
         ]
       : []),
   ];
+}
+
+function yearEffectSource(lastYear: number, chosen: PlanOutlook['yearEffect'] = 'last'): string {
+  if (typeof chosen === 'object') return 'a given one, taken as known';
+  return chosen === 'last'
+    ? `that of FY${lastYear}, the last observed`
+    : 'the mean of the last three observed';
 }
 
 /** `FY2027 and FY2028 are at the edge of the familiar range`. */

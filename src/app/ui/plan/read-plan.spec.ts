@@ -1,11 +1,51 @@
+import type { PredictionBasis } from '@prediction';
+import { usualOutlook } from './asked-plan';
 import { readPlan } from './read-plan';
 import { tQuantile } from './t-quantile';
 import { lagBasis, logBasis, planBasis, quantileOfTen } from './testing/plan-basis';
 
 describe('readPlan', () => {
-  it('reads the base, which holds the last actual values', () => {
-    const { base } = readPlan(planBasis, [], quantileOfTen);
-    expect(base.estimate).toBe(2720);
+  it('reads the base, which holds the last actual values, in every year that a plan may have', () => {
+    const { bases } = readPlan(planBasis, [], quantileOfTen);
+    expect(bases.map(({ year }) => year)).toEqual([2026, 2027, 2028, 2029, 2030]);
+    expect(bases.map(({ estimate }) => estimate)).toEqual([2720, 2720, 2720, 2720, 2720]);
+  });
+
+  const carried: PredictionBasis = {
+    ...planBasis,
+    ownErrors: {
+      years: [2021, 2022, 2023, 2024, 2025],
+      persistence: 0.5,
+      variance: 400,
+    },
+  };
+
+  it('starts from the last gap, of which half is left a year, in plan and base alike', () => {
+    const plan = [
+      { year: 2026, values: [120, 1000] },
+      { year: 2027, values: [120, 1000] },
+    ];
+    const outlook = { ...usualOutlook(planBasis), start: 'carry-the-gap' as const };
+    const { years, bases } = readPlan(carried, plan, tQuantile, outlook);
+    // 2740 at the model's level and 2720 for the base; a gap of 30 halves every year.
+    expect(years.map(({ expected }) => expected.estimate)).toEqual([2755, 2747.5]);
+    expect(years.map(({ base }) => base.estimate)).toEqual([2735, 2727.5]);
+    expect(bases.slice(0, 2).map(({ estimate }) => estimate)).toEqual([2735, 2727.5]);
+    expect(years.map(({ fromLast }) => fromLast.fadingGap)).toEqual([-15, -22.5]);
+  });
+
+  it('widens intervals with the confidence, and the band with its own', () => {
+    const plan = [{ year: 2026, values: [120, 1000] }];
+    const usual = usualOutlook(planBasis);
+    const [narrow] = readPlan(carried, plan, tQuantile, { ...usual, confidence: 0.8 }).years;
+    const [wide] = readPlan(carried, plan, tQuantile, { ...usual, bandConfidence: 0.95 }).years;
+    // scipy 1.17.1: t.ppf(0.9, 3)/t.ppf(0.975, 3), for three cosines.
+    expect((narrow.expected.high! - 2740) / (wide.expected.high! - 2740)).toBeCloseTo(
+      1.6377443536962102 / 3.182446305284263,
+      8,
+    );
+    expect(wide.band.confidence).toBe(0.95);
+    expect(wide.band.high! - wide.band.low!).toBeGreaterThan(narrow.band.high! - narrow.band.low!);
   });
 
   it('gives each year its expected value, its difference to the base and the parts that add up to it', () => {
