@@ -166,6 +166,28 @@ describe('composing an edition', () => {
     expect(editions.at(-1)?.state).toBe('signed');
   });
 
+  it('says how many groups were looked at without saving them', async () => {
+    const line = async () =>
+      (await preview()).content.evidence
+        .at(-1)
+        ?.sentence.flatMap((part) =>
+          'text' in part ? [part.text] : ['value' in part ? part.value : ''],
+        )
+        .join('');
+    expect(await line()).toContain('No other peer group was saved before this one.');
+    const superuser = new pg.Client({ connectionString: database.adminUrl });
+    await superuser.connect();
+    await superuser.query(
+      `insert into trial_fit (workspace_id, hash, outcome) select workspace_id, 'abc', '{}' from workspace`,
+    );
+    await superuser.query(
+      `insert into trial_fit (workspace_id, hash, outcome) select workspace_id, 'abd', '{}' from workspace`,
+    );
+    expect(await line()).toContain('the figures of 2 groups were looked at without saving them.');
+    await superuser.query('delete from trial_fit');
+    await superuser.end();
+  });
+
   it('lists who looked at it, once an hour, for analysts and CFOs alone', async () => {
     const reader = await join(server, analyst, ['reader'], 'Reader');
     const { edition } = await publish();

@@ -16,6 +16,8 @@ export interface EditionParts {
   readonly ground: FinishedFit;
   readonly scenarios: readonly Scenario[];
   readonly peerGroupsTried: number;
+  /** Groups whose figures were looked at before or without saving them. */
+  readonly peerGroupsTriedOut: number;
   /** The headline as edited, its amounts in `unit`; null for the one made from the figures. */
   readonly headline: string | null;
   readonly unit: MoneyUnit;

@@ -42,6 +42,7 @@ export async function gatherParts(
     ground,
     scenarios: await scenariosSeen(tx, request),
     peerGroupsTried: (await tx.peers.list()).length,
+    peerGroupsTriedOut: await tx.peerTrials.countFitted(),
     headline: request.headline,
     unit: request.unit,
     answers: await answeredEdition(tx, reader, request.answersEditionId),

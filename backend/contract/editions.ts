@@ -165,6 +165,8 @@ const frozen = {
   scenarios: z.array(FrozenScenario),
   /** Peer group versions saved in the workspace up to the publication. */
   peerGroupsTried: z.number().int(),
+  /** Other groups whose figures were looked at before or without saving them; missing in editions of schema 1. */
+  peerGroupsTriedOut: z.number().int().optional(),
   cautions: z.array(z.string()),
 };
 

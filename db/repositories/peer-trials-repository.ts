@@ -113,6 +113,16 @@ export class PeerTrialsRepository {
       .execute();
   }
 
+  /** How many different groups were fitted before they were saved, or without being saved at all. */
+  async countFitted(): Promise<number> {
+    const { count } = await this.db
+      .selectFrom('trialFit')
+      .select(({ fn }) => fn.countAll<number>().as('count'))
+      .where('workspaceId', '=', this.workspaceId)
+      .executeTakeFirstOrThrow();
+    return count;
+  }
+
   async #changeUnfinished(
     id: string,
     change: {

@@ -113,6 +113,7 @@ function factsOf(parts: EditionParts): EditionFacts {
       years: toYears(scenario.years),
     })),
     peerGroupsTried: parts.peerGroupsTried,
+    peerGroupsTriedOut: parts.peerGroupsTriedOut,
     cautions: [...cautions],
   };
 }

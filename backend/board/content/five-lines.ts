@@ -158,11 +158,9 @@ function driftLine({ drift, driftReason, specification }: FitResult): EditionLin
   );
 }
 
-function familiarLine({ scenarios, peerGroupsTried }: EditionFacts): EditionLine {
-  const tried =
-    peerGroupsTried === 1
-      ? [words('No other peer group was saved before this one.')]
-      : [countPart(peerGroupsTried), words(' peer group versions were saved up to this edition.')];
+function familiarLine(facts: EditionFacts): EditionLine {
+  const { scenarios } = facts;
+  const tried = triedWords(facts);
   if (scenarios.length === 0) return line('fine', [words('The edition holds no plan. '), ...tried]);
   const odd = scenarios.flatMap(({ name, years }) =>
     (['edge', 'outside'] as const).flatMap((kind) => {
@@ -173,6 +171,25 @@ function familiarLine({ scenarios, peerGroupsTried }: EditionFacts): EditionLine
   return odd.length === 0
     ? line('fine', [words('All planned years are inside the familiar range. '), ...tried])
     : line('caution', [words(`${odd.join('; ')}. `), ...tried]);
+}
+
+/** How many groups were tried before this one: trying many is a choice that the reader should know. */
+function triedWords({
+  peerGroupsTried,
+  peerGroupsTriedOut = 0,
+}: EditionFacts): readonly SentencePart[] {
+  const saved =
+    peerGroupsTried === 1
+      ? [words('No other peer group was saved before this one')]
+      : [countPart(peerGroupsTried), words(' peer group versions were saved up to this edition')];
+  if (peerGroupsTriedOut === 0) return [...saved, words('.')];
+  const groups = peerGroupsTriedOut === 1 ? ' group was' : ' groups were';
+  return [
+    ...saved,
+    words('; the figures of '),
+    countPart(peerGroupsTriedOut),
+    words(`${groups} looked at without saving ${peerGroupsTriedOut === 1 ? 'it' : 'them'}.`),
+  ];
 }
 
 /** `FY2027 and FY2028 are outside the familiar range`. */
