@@ -3,7 +3,7 @@ import { type PredictionBasis, heldRegressors } from '@prediction';
 import { PlanSlider } from '../plan-slider/plan-slider';
 import { heldPlan, mostYears, withValue, withYearAdded, withYearRemoved } from './change-plan';
 import { capitalised } from './plan-words';
-import type { PlannedYear } from './read-plan';
+import type { PlannedYear } from './planned-year';
 import { regressorKind } from './regressor-labels';
 import { sliderRange } from './slider-range';
 
