@@ -39,6 +39,10 @@ export class ExpectedPath {
   /** The one in question first: its interval is drawn as an area, those of the others at their ends. */
   readonly plans = input<readonly ExpectedPlan[]>([]);
   readonly kind = input<FigureKind>('money');
+  /** What the band of the first plan is called beside it: `80 % band of the market value`. */
+  readonly bandName = input<string>();
+  /** What an export has to say itself: why there is no band. */
+  readonly note = input('');
 
   readonly yearSelected = output<ExpectedPathChoice>();
 
@@ -47,6 +51,7 @@ export class ExpectedPath {
     ownYears: this.ownYears(),
     base: this.base(),
     plans: this.plans(),
+    bandName: this.bandName(),
   }));
   readonly #formats = computed(() => {
     const { ownYears, plans } = this.#data();
@@ -102,7 +107,11 @@ export class ExpectedPath {
       case 'base':
         return `${point.year}, base: expected ${point.expected}`;
       case 'plan':
-        return `${point.year}, ${this.plans()[point.plan].name}: expected ${point.expected} (${point.bounds})`;
+        return `${point.year}, ${this.plans()[point.plan].name}: expected ${point.expected} (${point.bounds})${this.#bandOf(point)}`;
     }
+  }
+
+  #bandOf({ band }: ExpectedPathPoint): string {
+    return band === '' ? '' : `, ${this.bandName() ?? 'band of the market value'} ${band}`;
   }
 }
