@@ -40,7 +40,7 @@ export class ExpectedPath {
   readonly plans = input<readonly ExpectedPlan[]>([]);
   readonly kind = input<FigureKind>('money');
   /** What the band of the first plan is called beside it: `80 % band of the market value`. */
-  readonly bandName = input<string>();
+  readonly bandName = input('band of the market value');
   /** What an export has to say itself: why there is no band. */
   readonly note = input('');
 
@@ -112,6 +112,6 @@ export class ExpectedPath {
   }
 
   #bandOf({ band }: ExpectedPathPoint): string {
-    return band === '' ? '' : `, ${this.bandName() ?? 'band of the market value'} ${band}`;
+    return band === '' ? '' : `, ${this.bandName()} ${band}`;
   }
 }
