@@ -63,6 +63,8 @@ export class PlanEditor {
   readonly labels = input.required<readonly string[]>();
   readonly plan = input.required<readonly PlannedYear[]>();
   readonly planChanged = output<readonly PlannedYear[]>();
+  /** Before the plan changes to the base, for who keeps more than amounts: rules, ranges. */
+  readonly heldAgain = output();
 
   protected readonly mostYears = mostYears;
   protected readonly nextYear = computed(() => this.basis().last.year + 1 + this.plan().length);
@@ -97,6 +99,7 @@ export class PlanEditor {
   }
 
   protected holdLast(): void {
+    this.heldAgain.emit();
     this.planChanged.emit(heldPlan(this.basis(), this.plan().length));
   }
 }
