@@ -20,6 +20,25 @@ test('plans, keeps the unsaved plan, warns, saves, copies, deletes and takes it 
     await expect.poll(() => plan.year(2026)).toEqual(before);
   });
 
+  await test.step('a pasted block comes in whole and goes in one step', async () => {
+    const before = await plan.year(2026);
+    await plan.paste(2026, 0, '1.234,5\t2.000,0\n(12)\tlots');
+    await expect(plan.cell(2026, 0)).toHaveText('1,234.50');
+    await expect(plan.cell(2027, 1)).toHaveAttribute('title', 'expected a number; found lots');
+    await plan.undoPaste();
+    await expect.poll(() => plan.year(2026)).toEqual(before);
+  });
+
+  await test.step('a rule fills a regressor, and ends with Undo when a cell under it is typed', async () => {
+    await plan.grow('capex', '5');
+    await expect(plan.rule(/Capex grows 5 % a year from FY2025’s/)).toBeVisible();
+    await plan.typeCell(2027, 0, '300');
+    await expect(plan.rule(/Capex is entered year by year/)).toBeVisible();
+    await plan.undo();
+    await expect(plan.rule(/Capex grows 5 % a year/)).toBeVisible();
+    await plan.reset();
+  });
+
   await test.step('a plan that is not saved comes back after a reload', async () => {
     const before = await plan.year(2026);
     await plan.press('Capex FY2026', 'PageUp');
@@ -59,5 +78,15 @@ test('plans, keeps the unsaved plan, warns, saves, copies, deletes and takes it 
     await plan.undo();
     await expect(plan.nameBox).toHaveValue('Lower payout');
     await expect.poll(() => plan.year(2029)).toEqual(saved);
+  });
+
+  await test.step('an earlier version comes back as a new one', async () => {
+    const first = await plan.year(2026);
+    await plan.typeCell(2026, 0, '300');
+    await plan.save();
+    await plan.expectDifferent(2026, first);
+    await plan.putBack(1);
+    await expect.poll(() => plan.year(2026)).toEqual(first);
+    await expect(page.getByText(/Saved as version 3/)).toBeVisible();
   });
 });

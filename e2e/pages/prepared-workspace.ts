@@ -16,6 +16,12 @@ const sampleOwnCompany = 'Velmara';
 const longestImportMs = 30_000;
 const longestFitMs = 60_000;
 
+interface CallOptions {
+  readonly path?: Record<string, string>;
+  readonly body?: unknown;
+  readonly file?: { readonly name: string; readonly mimeType: string; readonly buffer: Buffer };
+}
+
 /**
  * The API as the signed-in browser calls it, for journeys that begin where another one ends. It shares the page's
  * cookies, so that whoever signs up or joins here is signed in on the page too.
@@ -65,8 +71,21 @@ export class PreparedWorkspace {
     return this.#fit(PeerGroupReply.parse(saved).id);
   }
 
+  /** A panel from a CSV file, mapped as the body says. @returns the panel version's id. */
+  async importCsv(csv: string, mapping: object): Promise<string> {
+    const file = { name: 'panel.csv', mimeType: 'text/csv', buffer: Buffer.from(csv) };
+    const uploaded = await this.#call(apiRoutes.uploadFile, { file });
+    const { id: importId } = ImportReply.parse(uploaded);
+    await this.#call(apiRoutes.checkImport, { path: { importId }, body: mapping });
+    return this.#commit(importId);
+  }
+
   async #importSample(): Promise<string> {
     const { id: importId } = ImportReply.parse(await this.#call(apiRoutes.useSample));
+    return this.#commit(importId);
+  }
+
+  async #commit(importId: string): Promise<string> {
     await this.#call(apiRoutes.commitImport, { path: { importId }, body: { note: '' } });
     const until = Date.now() + longestImportMs;
     while (Date.now() < until) {
@@ -93,10 +112,7 @@ export class PreparedWorkspace {
     throw new Error('the fit did not end in time');
   }
 
-  async #call(
-    route: ApiRoute,
-    { path = {}, body }: { readonly path?: Record<string, string>; readonly body?: unknown } = {},
-  ): Promise<unknown> {
+  async #call(route: ApiRoute, { path = {}, body, file }: CallOptions = {}): Promise<unknown> {
     const address = route.path.replace(/:(\w+)/g, (_, name: string) => path[name]);
     const cookies = await this.page.context().cookies();
     const token = cookies.find(({ name }) => name === '__Host-XSRF')?.value ?? '';
@@ -105,6 +121,7 @@ export class PreparedWorkspace {
       method: route.method,
       headers: { Origin: origin, 'X-XSRF-TOKEN': decodeURIComponent(token) },
       ...(body === undefined ? {} : { data: body }),
+      ...(file === undefined ? {} : { multipart: { file } }),
     });
     if (!reply.ok())
       throw new Error(`${route.method} ${address}: ${reply.status()} ${await reply.text()}`);

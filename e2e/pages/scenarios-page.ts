@@ -41,6 +41,64 @@ export class ScenariosPage extends CheckedPage {
     await this.box(label).press('Enter');
   }
 
+  /** A cell of the grid by year and column, from 0. */
+  cell(year: number, column: number): Locator {
+    return this.page
+      .getByRole('grid', { name: 'Plan by year' })
+      .getByRole('row', { name: new RegExp(`^FY${year}`) })
+      .getByRole('gridcell')
+      .nth(column);
+  }
+
+  /** Types into a cell by keys alone, and leaves it with Enter. */
+  async typeCell(year: number, column: number, text: string): Promise<void> {
+    await this.cell(year, column).focus();
+    await this.cell(year, column).click();
+    await this.page.keyboard.press('F2');
+    await this.page.keyboard.press('ControlOrMeta+a');
+    await this.page.keyboard.type(text);
+    await this.page.keyboard.press('Enter');
+  }
+
+  /** Pastes a block as a spreadsheet puts it on the clipboard, its first cell into this one. */
+  async paste(year: number, column: number, block: string): Promise<void> {
+    await this.cell(year, column).click();
+    await this.cell(year, column).evaluate((cell, text) => {
+      const clipboardData = new DataTransfer();
+      clipboardData.setData('text/plain', text);
+      cell.dispatchEvent(
+        new ClipboardEvent('paste', { clipboardData, bubbles: true, cancelable: true }),
+      );
+    }, block);
+  }
+
+  async undoPaste(): Promise<void> {
+    await this.page.getByRole('button', { name: 'Undo the paste' }).click();
+  }
+
+  async grow(label: string, percent: string): Promise<void> {
+    await this.page.getByRole('button', { name: `Change rule of ${label}` }).click();
+    const form = this.page.getByRole('group', { name: `Rule of ${label}` });
+    await form.getByRole('combobox').first().selectOption('grow');
+    await form.getByRole('textbox').fill(percent);
+    await form.getByRole('button', { name: 'Set rule' }).click();
+  }
+
+  /** What the line of a rule says. */
+  rule(words: RegExp): Locator {
+    return this.page.getByRole('list', { name: 'Rules of the plan' }).getByText(words);
+  }
+
+  async putBack(version: number): Promise<void> {
+    await this.page.getByRole('heading', { name: 'Versions' }).scrollIntoViewIfNeeded();
+    await this.page.getByRole('button', { name: `Compare version ${version}` }).click();
+    await this.page.getByRole('button', { name: `Put version ${version} back` }).click();
+  }
+
+  async reset(): Promise<void> {
+    await this.page.getByRole('button', { name: 'Reset to base' }).click();
+  }
+
   async addYear(year: number): Promise<void> {
     await this.page.getByRole('button', { name: `Add FY${year}` }).click();
   }

@@ -54,6 +54,22 @@ describe('difference bars', () => {
     expect(page.querySelectorAll('rect.bar').length).toBe(3);
     expect(page.querySelectorAll('rect.bar.total').length).toBe(1);
   });
+
+  it('says that figures may not sum only where rounding shows', async () => {
+    const note = async (second: number) => {
+      const { page } = await shown(DifferenceBars, {
+        kind: 'plain',
+        terms: [
+          { name: 'Capex', estimate: 1000.4, low: null, high: null },
+          { name: 'Book equity', estimate: second, low: null, high: null },
+        ],
+        total: { estimate: 1000.4 + second, low: null, high: null },
+      });
+      return page.querySelector('p.kv-caption')?.textContent ?? '';
+    };
+    expect(await note(200.4)).toContain('may not sum');
+    expect(await note(200)).toBe('');
+  });
 });
 
 describe('fit comparison', () => {

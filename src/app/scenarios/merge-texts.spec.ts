@@ -10,7 +10,7 @@ const held: ScenarioText = { name: 'Build-out', note: '', ...heldAsked(planBasis
 const ground = {
   basis: planBasis,
   labels: ['capex', 'book equity'],
-  numbers: { figure: (value: unknown) => String(value), full: (value: unknown) => String(value) },
+  numbers: { shown: (value: number) => value, full: (value: unknown) => String(value) },
 };
 
 function planned(text: ScenarioText, year: number, regressor: number, value: number): ScenarioText {

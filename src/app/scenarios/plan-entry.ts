@@ -13,7 +13,6 @@ import { FamiliarNotes } from '../ui/plan/familiar-notes';
 import { PlanAssumptions } from '../ui/plan/plan-assumptions';
 import { PlanEditor } from '../ui/plan/plan-editor';
 import { capitalised } from '../ui/plan/plan-words';
-import type { PlannedYear } from '../ui/plan/read-plan';
 import { PlanGrid } from './grid/plan-grid';
 import { OutlookForm } from './outlook/outlook-form';
 import { PlanDesk } from './plan-desk';
@@ -61,10 +60,6 @@ export class PlanEntry {
         `${capitalised(labels[regressor])} FY${year}: ${reason}; found ${text || 'nothing'}`,
     );
   });
-
-  protected setPlan(plan: readonly PlannedYear[]): void {
-    this.desk.setPlan(plan);
-  }
 
   protected undo(): void {
     const words = this.edits.undo();

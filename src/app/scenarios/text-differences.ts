@@ -20,7 +20,7 @@ export interface TextDifference {
 export interface DifferenceGround {
   readonly basis: Pick<PredictionBasis, 'held' | 'last'>;
   readonly labels: readonly string[];
-  readonly numbers: Pick<NumberFormat, 'figure' | 'full'>;
+  readonly numbers: Pick<NumberFormat, 'full' | 'shown'>;
 }
 
 const none = '–';

@@ -1,12 +1,19 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
-import { type DifferenceData, type IntervalFigure, differenceBarsLayout } from '@figures';
+import {
+  type DifferenceData,
+  type IntervalFigure,
+  differenceBarsLayout,
+  sumsAsShown,
+} from '@figures';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
 import { figureFormats, withUnit } from '../figure-formats';
 
-/** A plan's difference to the base, regressor by regressor: bars that add up to the total. */
+const roundingNote = 'Figures are rounded one by one and may not sum to the total as shown.';
+
+/** A difference taken apart: bars that add up to the total, and a note where their rounded figures do not. */
 @Component({
   selector: 'kv-difference-bars',
   imports: [ChartFrame, ChartPicture, ChartPoint, ChartPoints],
@@ -31,6 +38,13 @@ export class DifferenceBars {
       this.total().estimate,
     ]),
   );
+  protected readonly note = computed(() => {
+    const parts = this.terms().map(({ estimate }) => estimate);
+    const total = this.total().estimate;
+    const digits = this.#numbers.columnDigits([...parts, total], this.kind());
+    const shown = (value: number) => this.#numbers.shown(value, this.kind());
+    return sumsAsShown(parts.map(shown), shown(total), digits) ? '' : roundingNote;
+  });
   protected readonly layout = computed(() =>
     differenceBarsLayout(
       { terms: this.terms(), total: this.total() },

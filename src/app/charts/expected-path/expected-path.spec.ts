@@ -81,6 +81,12 @@ describe('expected path', () => {
       '12,680',
     ]);
     expect(page.querySelector('.band-area')?.getAttribute('d')).not.toBe('');
+    fixture.componentRef.setInput('bandName', '80 % band of the market value');
+    await chart.toggle();
+    expect(page.querySelector('svg')?.textContent).toContain('80 % band of the market value');
+    expect((await chart.points()).at(-1)).toBe(
+      '2027, Plan B: expected 10,340 (10,040 to 10,640), 80 % band of the market value 8,000 to 12,680',
+    );
   });
 
   it('tells plans apart by the shape of their marks, and what happened by whole and broken lines', async () => {

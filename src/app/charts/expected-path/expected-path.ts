@@ -40,6 +40,10 @@ export class ExpectedPath {
   /** The one in question first: its interval is drawn as an area, those of the others at their ends. */
   readonly plans = input<readonly ExpectedPlan[]>([]);
   readonly kind = input<FigureKind>('money');
+  /** What the band of the first plan is called beside it: `80 % band of the market value`. */
+  readonly bandName = input('band of the market value');
+  /** What an export has to say itself: why there is no band. */
+  readonly note = input('');
 
   readonly yearSelected = output<ExpectedPathChoice>();
 
@@ -48,6 +52,7 @@ export class ExpectedPath {
     ownYears: this.ownYears(),
     base: this.base(),
     plans: this.plans(),
+    bandName: this.bandName(),
   }));
   readonly #formats = computed(() => {
     const { ownYears, plans } = this.#data();
@@ -103,7 +108,11 @@ export class ExpectedPath {
       case 'base':
         return `${point.year}, base: expected ${point.expected}`;
       case 'plan':
-        return `${point.year}, ${this.plans()[point.plan].name}: expected ${point.expected} (${point.bounds})`;
+        return `${point.year}, ${this.plans()[point.plan].name}: expected ${point.expected} (${point.bounds})${this.#bandOf(point)}`;
     }
+  }
+
+  #bandOf({ band }: ExpectedPathPoint): string {
+    return band === '' ? '' : `, ${this.bandName()} ${band}`;
   }
 }

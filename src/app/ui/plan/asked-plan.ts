@@ -1,7 +1,7 @@
 import type { PlanOutlook, PlanUncertainty, RegressorPlan } from '@contract';
 import type { PredictionBasis } from '@prediction';
 import { heldPlan, isSamePlan } from './change-plan';
-import type { PlannedYear } from './read-plan';
+import type { PlannedYear } from './planned-year';
 
 /** All that a plan is read by: its amounts, how they came about, how far they may miss, and how it is looked at. */
 export interface AskedPlan {

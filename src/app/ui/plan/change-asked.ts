@@ -2,7 +2,7 @@ import type { PlanMove, PlanRule, PlanUncertainty, RegressorPlan } from '@contra
 import { type PredictionBasis, applyRules, heldRegressors } from '@prediction';
 import { type AskedPlan, typedByHand } from './asked-plan';
 import { heldPlan, withYearAdded, withYearRemoved } from './change-plan';
-import type { PlannedYear } from './read-plan';
+import type { PlannedYear } from './planned-year';
 
 /** What a change of a plan comes to, or why there is none. */
 export type AskedChange =

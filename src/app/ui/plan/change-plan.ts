@@ -1,5 +1,5 @@
 import { type PredictionBasis, heldRegressors } from '@prediction';
-import type { PlannedYear } from './read-plan';
+import type { PlannedYear } from './planned-year';
 
 export const mostYears = 5;
 

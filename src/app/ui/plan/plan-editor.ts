@@ -3,7 +3,7 @@ import { type PredictionBasis, heldRegressors } from '@prediction';
 import { PlanSlider } from '../plan-slider/plan-slider';
 import { heldPlan, mostYears, withValue, withYearAdded, withYearRemoved } from './change-plan';
 import { capitalised } from './plan-words';
-import type { PlannedYear } from './read-plan';
+import type { PlannedYear } from './planned-year';
 import { regressorKind } from './regressor-labels';
 import { sliderRange } from './slider-range';
 
@@ -63,6 +63,8 @@ export class PlanEditor {
   readonly labels = input.required<readonly string[]>();
   readonly plan = input.required<readonly PlannedYear[]>();
   readonly planChanged = output<readonly PlannedYear[]>();
+  /** Before the plan changes to the base, for who keeps more than amounts: rules, ranges. */
+  readonly heldAgain = output();
 
   protected readonly mostYears = mostYears;
   protected readonly nextYear = computed(() => this.basis().last.year + 1 + this.plan().length);
@@ -97,6 +99,7 @@ export class PlanEditor {
   }
 
   protected holdLast(): void {
+    this.heldAgain.emit();
     this.planChanged.emit(heldPlan(this.basis(), this.plan().length));
   }
 }

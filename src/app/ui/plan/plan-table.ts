@@ -4,7 +4,7 @@ import { Figure } from '../figure';
 import { type Bounded, asDifference, differenceKind } from '../model-form';
 import { NumberFormat } from '../number-format';
 import { capitalised, expectedName } from './plan-words';
-import type { PlannedYear } from './read-plan';
+import type { PlannedYear } from './planned-year';
 import { regressorKind } from './regressor-labels';
 
 /** A planned year with its figures, from the screen or as they were stored. */

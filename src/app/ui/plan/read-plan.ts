@@ -15,12 +15,9 @@ import {
   predict,
 } from '@prediction';
 import { heldPlan, mostYears } from './change-plan';
+import type { PlannedYear } from './planned-year';
 
-/** Planned regressors of one year, in the fit's order and the panel's unit. */
-export interface PlannedYear {
-  readonly year: number;
-  readonly values: readonly number[];
-}
+export type { PlannedYear } from './planned-year';
 
 /** What the fit says about one planned year. */
 export interface ReadYear extends PlannedYear {

@@ -1,7 +1,7 @@
 import { moveWords, ruleWords } from './rule-words';
 import { planBasis } from './testing/plan-basis';
 
-const numbers = { figure: (value: unknown) => String(value) };
+const numbers = { shown: (value: number) => value };
 const ruled = {
   basis: planBasis,
   labels: ['capex', 'book equity'],
@@ -19,6 +19,8 @@ describe('rules in words', () => {
     expect(words({ kind: 'total', total: 360, spread: 'rising' })).toBe(
       'comes to 360 over FY2026–FY2028, more every year',
     );
+    const thousands = { shown: (value: number) => value * 1000 };
+    expect(ruleWords({ kind: 'hold' }, ruled, thousands)).toBe('holds FY2025’s 110,000');
     expect(words({ kind: 'share', percent: 12, of: 1 })).toBe(
       'is 12 % of book equity of the same year',
     );

@@ -1,6 +1,6 @@
 import type { PlanMove, PlanRule } from '@contract';
 import { type PredictionBasis, heldRegressors } from '@prediction';
-import type { NumberFormat } from '../number-format';
+import type { FigureKind, NumberFormat } from '../number-format';
 import { yearsText } from '../phrases';
 import { regressorKind } from './regressor-labels';
 
@@ -16,10 +16,10 @@ export interface RuledRegressor {
 export function ruleWords(
   rule: PlanRule | null,
   { basis, labels, regressor, years }: RuledRegressor,
-  numbers: Pick<NumberFormat, 'figure'>,
+  numbers: Pick<NumberFormat, 'shown'>,
 ): string {
   const kind = regressorKind(regressor);
-  const last = `FY${basis.last.year}’s ${numbers.figure(heldRegressors(basis)[regressor], kind)}`;
+  const last = `FY${basis.last.year}’s ${amountText(heldRegressors(basis)[regressor], kind, numbers)}`;
   switch (rule?.kind) {
     case undefined:
       return 'is entered year by year';
@@ -28,7 +28,7 @@ export function ruleWords(
     case 'grow':
       return `${rule.percent < 0 ? 'shrinks' : 'grows'} ${percentText(Math.abs(rule.percent))} a year from ${last}`;
     case 'total':
-      return `comes to ${numbers.figure(rule.total, kind)} over ${yearsText(...years)}, ${spreads[rule.spread]}`;
+      return `comes to ${amountText(rule.total, kind, numbers)} over ${yearsText(...years)}, ${spreads[rule.spread]}`;
     case 'share':
       return `is ${percentText(rule.percent)} of ${labels[rule.of]} of the same year`;
   }
@@ -44,9 +44,9 @@ export const spreads = {
 export function moveWords(
   { year, amount }: PlanMove,
   regressor: number,
-  numbers: Pick<NumberFormat, 'figure'>,
+  numbers: Pick<NumberFormat, 'shown'>,
 ): string {
-  const size = numbers.figure(Math.abs(amount), regressorKind(regressor));
+  const size = amountText(Math.abs(amount), regressorKind(regressor), numbers);
   if (isBookEquity(regressor))
     return `${amount < 0 ? 'Buyback' : 'Equity raise'} of ${size} in FY${year}`;
   return `${amount < 0 ? 'Lower' : 'Higher'} by ${size} from FY${year} on`;
@@ -55,6 +55,12 @@ export function moveWords(
 /** Equity raises and buybacks move book equity, the second regressor of every fit that has one. */
 export function isBookEquity(regressor: number): boolean {
   return regressor === 1;
+}
+
+/** As it was entered, in the unit shown, without the noise of changing units. */
+function amountText(value: number, kind: FigureKind, numbers: Pick<NumberFormat, 'shown'>): string {
+  const shown = Number(numbers.shown(value, kind).toPrecision(12));
+  return shown.toLocaleString('en', { maximumFractionDigits: 12 }).replace('-', '−');
 }
 
 function percentText(percent: number): string {

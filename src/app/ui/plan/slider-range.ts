@@ -4,7 +4,7 @@ import {
   familiarRange,
   heldRegressors,
 } from '@prediction';
-import type { PlannedYear } from './read-plan';
+import type { PlannedYear } from './planned-year';
 
 export interface SliderRange {
   readonly min: number;
