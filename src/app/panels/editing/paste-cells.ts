@@ -2,12 +2,13 @@ import { leadingColumns } from '../grid-places';
 import { type PanelRow, columnTitle } from '../panel-rows';
 import type { ShownProblem } from '../../ui/problem';
 import { counted } from '../../ui/phrases';
+import { shifted } from '../../ui/shifted';
 import { readBlockText } from './block-text';
 import type { CellRange } from './cell-block';
 import type { ShownGrid } from './copy-cells';
 import type { CellChange } from './panel-edits';
 import { readFigures } from './read-figure';
-import { shiftOf, shifted } from './shown-figure';
+import { shiftOf } from './shown-figure';
 
 export type PasteOutcome =
   | {
