@@ -35,6 +35,7 @@ import { correctionRoutes } from './panels/correction-routes';
 import { exportRoutes } from './panels/export-routes';
 import { importRoutes } from './panels/import-routes';
 import { panelRoutes } from './panels/panel-routes';
+import { tableRoutes } from './panels/table-routes';
 import { peerRoutes } from './peers/peer-routes';
 import { scenarioRoutes } from './scenarios/scenario-routes';
 
@@ -91,6 +92,7 @@ export function createApp(options: AppOptions): Express {
   app.use('/api', authenticator.session() as RequestHandler, loadMember(services.repositories));
   app.use('/api', crossSite.check);
   app.use(largeBody(apiRoutes.saveCorrections, '16mb'));
+  app.use(largeBody(apiRoutes.makeTableFile, '8mb'));
   app.use(express.json({ limit: '2mb' }));
   app.use(
     accountRoutes({
@@ -106,6 +108,7 @@ export function createApp(options: AppOptions): Express {
   app.use(panelRoutes(services.panels));
   app.use(correctionRoutes(services));
   app.use(exportRoutes(services.exports));
+  app.use(tableRoutes(now));
   app.use(peerRoutes(services.peers));
   app.use(fitRoutes(services.fits, services.lineage, now));
   app.use(evidenceRoutes(services.evidence, services.bootstraps, now));

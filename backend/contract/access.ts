@@ -95,6 +95,7 @@ export const apiRoutes = {
     allow: ['analyst'],
   },
   downloadFile: { method: 'GET', path: '/api/files/:fileId', allow: model },
+  makeTableFile: { method: 'POST', path: '/api/tables/:format', allow: 'member' },
 
   listPeerGroups: { method: 'GET', path: '/api/peer-groups', allow: model },
   savePeerGroup: { method: 'POST', path: '/api/peer-groups', allow: ['analyst'] },

@@ -16,3 +16,4 @@ export * from './roles';
 export * from './scenarios';
 export * from './seats';
 export * from './session';
+export * from './tables';

@@ -66,6 +66,23 @@ export class ApiClient {
     return this.#request(route, options).pipe(map(() => undefined));
   }
 
+  /** A call that is answered with a file. */
+  file(route: ApiRoute, options: CallOptions): Observable<Blob> {
+    return this.#http
+      .request(route.method, addressOf(route, options.path ?? {}), {
+        body: options.body,
+        responseType: 'arraybuffer', // a problem in its place can be read at once, which a blob cannot
+        observe: 'response',
+      })
+      .pipe(
+        map(
+          ({ body, headers }) =>
+            new Blob([body ?? ''], { type: headers.get('Content-Type') ?? '' }),
+        ),
+        this.#asProblem(),
+      );
+  }
+
   #request(route: ApiRoute, options: CallOptions): Observable<unknown> {
     return this.#http
       .request(route.method, addressOf(route, options.path ?? {}), {

@@ -39,7 +39,9 @@ export class ApiProblem extends Error {
 export function toApiProblem(error: unknown): ApiProblem {
   if (error instanceof ApiProblem) return error;
   if (!(error instanceof HttpErrorResponse)) throw error;
-  const body: unknown = typeof error.error === 'string' ? readJson(error.error) : error.error;
+  const sent: unknown = error.error;
+  const text = sent instanceof ArrayBuffer ? new TextDecoder().decode(sent) : sent;
+  const body = typeof text === 'string' ? readJson(text) : text;
   const parsed = Problem.safeParse(body);
   if (parsed.success) return new ApiProblem(problemSlug(parsed.data.type), parsed.data);
   return new ApiProblem('unreachable', {

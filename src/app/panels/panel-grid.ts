@@ -29,6 +29,7 @@ import { broughtUp, sparingFocus } from './editing/grid-focus';
 import { type GivenCells, type GridSelection, rowsIn, selectionOf } from './editing/grid-selection';
 import { type PanelEdits, cellKey, noEdits, rowKey } from './editing/panel-edits';
 import { figureText, shiftOf } from './editing/shown-figure';
+import type { SelectedBlock } from './editing/selected-table';
 import { tellSelection } from './editing/told-selection';
 import { gridColumns } from './grid-columns';
 import { areSameColumns, gridColumnIds } from './grid-places';
@@ -259,6 +260,12 @@ export class PanelGrid {
   selectedRows(): readonly PanelRow[] {
     const block = this.block()?.block() ?? null;
     return block === null ? [] : rowsIn(rangeOf(block), this.shown());
+  }
+
+  /** The selected cells; null where none is. */
+  selectedBlock(): SelectedBlock | null {
+    const block = this.block()?.block() ?? null;
+    return block === null ? null : { range: rangeOf(block), grid: this.shown() };
   }
 
   /** Goes to a cell once its row is in the grid. */

@@ -1,3 +1,5 @@
+import { provideHttpClient } from '@angular/common/http';
+import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
 import { ChangeDetectionStrategy, Component, signal } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
 import { ChartFrame, ChartPicture } from './chart-frame';
@@ -98,6 +100,49 @@ describe('chart frame', () => {
     expect(parsed.documentElement.getAttribute('width')).toBe('448');
     const bitmap = await createImageBitmap(await pngFile(picture));
     expect(bitmap.width).toBe(896);
+  });
+
+  describe('exported as a table', () => {
+    beforeEach(() => {
+      TestBed.configureTestingModule({
+        providers: [provideHttpClient(), provideHttpClientTesting()],
+      });
+    });
+
+    it('asks the server for the file and hands it on under the title', async () => {
+      const saved: string[] = [];
+      spyOn(HTMLAnchorElement.prototype, 'click').and.callFake(function (this: HTMLAnchorElement) {
+        saved.push(this.download);
+      });
+      const { fixture, page } = await shown();
+      const http = TestBed.inject(HttpTestingController);
+      for (const format of ['CSV', 'XLSX']) {
+        page.querySelector<HTMLElement>(`[aria-label="Export as ${format}"]`)?.click();
+        await fixture.whenStable();
+        const sent = http.expectOne(`/api/tables/${format.toLowerCase()}`);
+        expect(sent.request.method).toBe('POST');
+        expect((sent.request.body as { name: string }).name).toBe(text.title);
+        sent.flush(new ArrayBuffer(3));
+        await fixture.whenStable();
+      }
+      const name = 'velmara-stands-2-100-700-to-3-400-above-its-peers';
+      await new Promise((resolve) => setTimeout(resolve));
+      expect(saved).toEqual([`${name}.csv`, `${name}.xlsx`]);
+    });
+
+    it('says so where the server does not answer', async () => {
+      const { fixture, page } = await shown();
+      page.querySelector<HTMLElement>('[aria-label="Export as XLSX"]')?.click();
+      await fixture.whenStable();
+      TestBed.inject(HttpTestingController)
+        .expectOne('/api/tables/xlsx')
+        .error(new ProgressEvent('error'));
+      await new Promise((resolve) => setTimeout(resolve));
+      await fixture.whenStable();
+      expect(page.querySelector('.trouble')?.textContent).toBe(
+        'The XLSX file could not be made: The server does not answer. Try again.',
+      );
+    });
   });
 
   it('names the file after the title', () => {

@@ -4,6 +4,7 @@ import {
   DestroyRef,
   Directive,
   ElementRef,
+  Injector,
   afterNextRender,
   computed,
   contentChild,
@@ -13,13 +14,17 @@ import {
   model,
   signal,
 } from '@angular/core';
+import { firstValueFrom } from 'rxjs';
+import { ApiProblem } from '../../api/api-problem';
+import { type TableFormat, TablesApi } from '../../api/tables-api';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { chartTable } from './chart-table';
 import { fileNameOf, pngFile, saveFile, svgFile } from './picture-files';
 import { standalonePicture } from './standalone-picture';
 
 /**
- * What every chart has around it: the same values as a table, export as SVG and PNG, a summary for screen readers,
- * and its width as the container gives it. The chart is the projected `<svg [kvPicture]>`; a heading, where the page
+ * What every chart has around it: the same values as a table, export as SVG, PNG, CSV and XLSX, a summary for screen
+ * readers, and its width as the container gives it. The chart is the projected `<svg [kvPicture]>`; a heading, where the page
  * shows none, goes into `[chartHeading]`.
  */
 @Component({
@@ -30,6 +35,7 @@ import { standalonePicture } from './standalone-picture';
 })
 export class ChartFrame {
   readonly #host = inject<ElementRef<HTMLElement>>(ElementRef);
+  readonly #injector = inject(Injector);
 
   readonly text = input.required<ChartText>();
   /** One or two sentences that say what the chart shows. */
@@ -65,11 +71,18 @@ export class ChartFrame {
   }
 
   protected async saveSvg(): Promise<void> {
-    await this.#save(svgFile, 'svg');
+    await this.#save(async () => svgFile(this.#picture()), 'svg');
   }
 
   protected async savePng(): Promise<void> {
-    await this.#save(pngFile, 'png');
+    await this.#save(async () => pngFile(this.#picture()), 'png');
+  }
+
+  protected async saveTable(format: TableFormat): Promise<void> {
+    const table = chartTable(this.text(), this.columns(), this.rows(), this.note());
+    // Asked for only here: a chart that is looked at needs no server.
+    const tables = this.#injector.get(TablesApi);
+    await this.#save(() => firstValueFrom(tables.fileOf(table, format)), format);
   }
 
   #measure(): void {
@@ -77,18 +90,27 @@ export class ChartFrame {
     if (width > 0) this.width.set(width); // 0 while it is hidden
   }
 
-  async #save(fileOf: (picture: SVGSVGElement) => Promise<Blob>, ending: string): Promise<void> {
+  #picture(): SVGSVGElement {
+    const source = [this.note(), this.text().source].filter((part) => part !== '').join(' ');
+    return standalonePicture(this.picture().nativeElement, { ...this.text(), source });
+  }
+
+  async #save(make: () => Promise<Blob>, ending: string): Promise<void> {
     this.trouble.set('');
     try {
-      const source = [this.note(), this.text().source].filter((part) => part !== '').join(' ');
-      const picture = standalonePicture(this.picture().nativeElement, { ...this.text(), source });
-      saveFile(await fileOf(picture), fileNameOf(this.text().title, ending));
+      saveFile(await make(), fileNameOf(this.text().title, ending));
     } catch (error) {
-      // Fonts that did not load, a canvas the browser refuses: the person can act on it, so it is said here.
-      const found = error instanceof Error ? error.message : String(error);
+      // Fonts that did not load, a canvas the browser refuses, a server that does not answer: the person can act on
+      // it, so it is said here.
+      const found = wordsOf(error);
       this.trouble.set(`The ${ending.toUpperCase()} file could not be made: ${found}. Try again.`);
     }
   }
+}
+
+function wordsOf(error: unknown): string {
+  if (error instanceof ApiProblem) return error.problem.title;
+  return error instanceof Error ? error.message : String(error);
 }
 
 /** The drawing inside a chart's frame: as large as its layout, and called by the chart's title. */

@@ -12,6 +12,7 @@ import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { exactFigure } from '../exact-figure';
 import { figureFormats } from '../figure-formats';
 import { ValueAxes } from '../value-axes';
 
@@ -97,17 +98,24 @@ export class CompanyLines {
   ]);
   protected readonly rows = computed((): ChartRow[] => {
     const [across, up] = [this.#across().value, this.#up().value];
-    const cells = (
+    const row = (
       name: string,
       { from, to }: Pick<CompanyLinesData['companies'][number], 'from' | 'to'>,
-    ) => [name, across(from[0]), across(to[0]), up(from[1]), up(to[1])];
+    ) => ({
+      cells: [name, across(from[0]), across(to[0]), up(from[1]), up(to[1])],
+      values: [
+        name,
+        ...[from[0], to[0]].map((value) => exactFigure(value, this.#numbers, this.xKind())),
+        ...[from[1], to[1]].map((value) => exactFigure(value, this.#numbers, this.yKind())),
+      ],
+    });
     const pooled = this.pooled();
     return [
       ...this.companies().map((line) => ({
         isOwn: line.company === this.ownCompany(),
-        cells: cells(line.company, line),
+        ...row(line.company, line),
       })),
-      ...(pooled === null ? [] : [{ isTotal: true, cells: cells('one line for all', pooled) }]),
+      ...(pooled === null ? [] : [{ isTotal: true, ...row('one line for all', pooled) }]),
     ];
   });
 

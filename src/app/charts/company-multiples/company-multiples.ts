@@ -18,6 +18,7 @@ import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartReadout } from '../chart-frame/chart-readout';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { exactFigure } from '../exact-figure';
 import { withUnit } from '../figure-formats';
 import { type GridPlace, gridMove } from '../grid-move';
 
@@ -126,6 +127,13 @@ export class CompanyMultiples {
           company,
           this.#names()[variable],
           ...points.map(({ value }) => this.#figure(value, variable)),
+        ],
+        values: [
+          company,
+          this.#names()[variable],
+          ...points.map(({ value }) =>
+            exactFigure(value, this.#numbers, this.variables()[variable].kind),
+          ),
         ],
       })),
     ),

@@ -10,13 +10,14 @@ const axis = (title: string, isLog: boolean): PlaneMeasure => ({
   title,
   isLog,
   text: (value) => value.toFixed(2),
+  exact: (value) => value,
   tick: (value) => value.toFixed(1),
 });
 const rows: readonly PlaneRow[] = [
-  { company: 'Velmara', side: 'own', x: 100, y: 0.1, distance: '' },
-  { company: 'Kesdrin', side: 'in', x: 200, y: 0.3, distance: '1.20' },
-  { company: 'Sarvane', side: 'out', x: 50, y: 0.2, distance: '2.40' },
-  { company: 'Tolvane', side: 'out', x: 400, y: 0.15, distance: '' },
+  { company: 'Velmara', side: 'own', x: 100, y: 0.1, distance: '', exactDistance: null },
+  { company: 'Kesdrin', side: 'in', x: 200, y: 0.3, distance: '1.20', exactDistance: 1.2034 },
+  { company: 'Sarvane', side: 'out', x: 50, y: 0.2, distance: '2.40', exactDistance: 2.4 },
+  { company: 'Tolvane', side: 'out', x: 400, y: 0.15, distance: '', exactDistance: null },
 ];
 
 describe('company plane', () => {

@@ -75,6 +75,9 @@ export class CompanyPlane {
   readonly #distances = computed(
     () => new Map(this.rows().map(({ company, distance }) => [company, distance])),
   );
+  readonly #exactDistances = computed(
+    () => new Map(this.rows().map(({ company, exactDistance }) => [company, exactDistance])),
+  );
   /** The company that the keyboard stands on: the own one at first. */
   protected readonly current = computed(() => {
     const { points, own, byX } = this.layout();
@@ -132,6 +135,13 @@ export class CompanyPlane {
         this.across().text(row.x),
         this.up().text(row.y),
         this.#distance(row) || this.#numbers.figure(null),
+      ],
+      values: [
+        row.company,
+        sideWords[row.side],
+        this.across().exact(row.x),
+        this.up().exact(row.y),
+        this.#exactDistances().get(row.company) ?? null,
       ],
     })),
   );

@@ -14,6 +14,8 @@ export interface PlaneMeasure {
   readonly isLog: boolean;
   /** In words: `1,234`, `6.2 %`. */
   readonly text: (value: number) => string;
+  /** With every digit in the same unit, for a file. */
+  readonly exact: (value: number) => number | null;
   readonly tick: (value: number, step: number) => string;
 }
 
@@ -25,4 +27,6 @@ export interface PlaneRow {
   readonly y: number;
   /** `1.85`; empty where there is none. */
   readonly distance: string;
+  /** With every digit; null where there is none. */
+  readonly exactDistance: number | null;
 }

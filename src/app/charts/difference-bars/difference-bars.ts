@@ -9,6 +9,7 @@ import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { exactFigure, exactHeader } from '../exact-figure';
 import { figureFormats, withUnit } from '../figure-formats';
 
 const roundingNote = 'Figures are rounded one by one and may not sum to the total as shown.';
@@ -60,13 +61,29 @@ export class DifferenceBars {
   );
   protected readonly columns = computed((): ChartColumn[] => [
     { label: 'part', isNumber: false },
-    { label: withUnit(this.figureName(), this.#numbers, this.kind()), isNumber: true },
-    { label: 'interval', isNumber: true },
+    {
+      label: withUnit(this.figureName(), this.#numbers, this.kind()),
+      isNumber: true,
+      headers: [this.#header(this.figureName())],
+    },
+    { label: 'interval', isNumber: true, headers: [this.#header('low'), this.#header('high')] },
   ]);
-  protected readonly rows = computed((): ChartRow[] =>
-    this.layout().bars.map(({ name, value, bounds, isTotal }) => ({
-      cells: [name, value, bounds],
-      isTotal,
-    })),
-  );
+  protected readonly rows = computed((): ChartRow[] => {
+    const figures = [...this.terms(), this.total()];
+    return this.layout().bars.map(({ name, value, bounds, isTotal }, place) => {
+      const { estimate, low, high } = figures[place];
+      return {
+        cells: [name, value, bounds],
+        values: [
+          name,
+          ...[estimate, low, high].map((each) => exactFigure(each, this.#numbers, this.kind())),
+        ],
+        isTotal,
+      };
+    });
+  });
+
+  #header(label: string): string {
+    return exactHeader(label, this.#numbers, this.kind());
+  }
 }

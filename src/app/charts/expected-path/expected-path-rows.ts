@@ -1,6 +1,7 @@
 import type { ExpectedPathData } from '@figures';
 import type { FigureKind, NumberFormat } from '../../ui/number-format';
 import type { ChartRow } from '../chart-text';
+import { exactFigure } from '../exact-figure';
 
 /** Whether the band of the market value itself is known of any plan year. */
 export function hasBand(plans: ExpectedPathData['plans']): boolean {
@@ -22,28 +23,34 @@ export function expectedPathRows(
   ];
   const digits = numbers.columnDigits(seen, kind);
   const isBanded = hasBand(plans);
-  const noBand = isBanded ? ['', ''] : [];
-  const figure = (value: number | null | undefined) => numbers.figure(value, kind, digits);
+  const row = (
+    [line, year]: readonly [string, number],
+    figures: readonly (number | null | undefined)[],
+    isOwn = false,
+  ): ChartRow => {
+    const shown = isBanded ? figures : figures.slice(0, 4);
+    return {
+      isOwn,
+      // Undefined is what a line does not have, null what is missing of it.
+      cells: [
+        ...[line, String(year)],
+        ...shown.map((value) => (value === undefined ? '' : numbers.figure(value, kind, digits))),
+      ],
+      values: [line, year, ...shown.map((value) => exactFigure(value, numbers, kind))],
+    };
+  };
+  const none = undefined;
   return [
-    ...ownYears.map(({ year, actual, fitted }) => ({
-      isOwn: true,
-      cells: ['own company', String(year), figure(actual), figure(fitted), '', '', ...noBand],
-    })),
-    ...base.map(({ year, estimate }) => ({
-      cells: ['base', String(year), '', figure(estimate), '', '', ...noBand],
-    })),
+    ...ownYears.map(({ year, actual, fitted }) =>
+      row(['own company', year], [actual, fitted, none, none, none, none], true),
+    ),
+    ...base.map(({ year, estimate }) =>
+      row(['base', year], [none, estimate, none, none, none, none]),
+    ),
     ...plans.flatMap(({ name, years }) =>
-      years.map(({ year, estimate, low, high, bandLow, bandHigh }) => ({
-        cells: [
-          name,
-          String(year),
-          '',
-          figure(estimate),
-          figure(low),
-          figure(high),
-          ...(isBanded ? [figure(bandLow), figure(bandHigh)] : []),
-        ],
-      })),
+      years.map(({ year, estimate, low, high, bandLow, bandHigh }) =>
+        row([name, year], [none, estimate, low, high, bandLow ?? null, bandHigh ?? null]),
+      ),
     ),
   ];
 }

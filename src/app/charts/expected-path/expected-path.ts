@@ -19,6 +19,7 @@ import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartReadout } from '../chart-frame/chart-readout';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { exactHeader } from '../exact-figure';
 import { figureFormats, withUnit } from '../figure-formats';
 import { expectedPathRows, hasBand } from './expected-path-rows';
 
@@ -81,16 +82,11 @@ export class ExpectedPath {
   protected readonly columns = computed((): ChartColumn[] => [
     { label: 'line', isNumber: false },
     { label: 'year', isNumber: false },
-    { label: withUnit('actual', this.#numbers, this.kind()), isNumber: true },
-    { label: 'expected', isNumber: true },
-    { label: 'low', isNumber: true },
-    { label: 'high', isNumber: true },
-    ...(hasBand(this.plans())
-      ? [
-          { label: 'band low', isNumber: true },
-          { label: 'band high', isNumber: true },
-        ]
-      : []),
+    this.#figureColumn('actual', withUnit('actual', this.#numbers, this.kind())),
+    ...['expected', 'low', 'high'].map((label) => this.#figureColumn(label)),
+    ...(hasBand(this.plans()) ? ['band low', 'band high'] : []).map((label) =>
+      this.#figureColumn(label),
+    ),
   ]);
   protected readonly rows = computed((): ChartRow[] =>
     expectedPathRows(this.#data(), this.#numbers, this.kind()),
@@ -114,5 +110,9 @@ export class ExpectedPath {
 
   #bandOf({ band }: ExpectedPathPoint): string {
     return band === '' ? '' : `, ${this.bandName()} ${band}`;
+  }
+
+  #figureColumn(name: string, label = name): ChartColumn {
+    return { label, isNumber: true, headers: [exactHeader(name, this.#numbers, this.kind())] };
   }
 }

@@ -12,6 +12,7 @@ import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { exactFigure, exactHeader } from '../exact-figure';
 import { figureFormats, inWords, withUnit } from '../figure-formats';
 
 /** The own company's gap to its peers, year by year, beside its standing. */
@@ -57,7 +58,11 @@ export class GapPath {
   });
   protected readonly columns = computed((): ChartColumn[] => [
     { label: 'year', isNumber: false },
-    { label: withUnit('gap to peers', this.#numbers, this.kind()), isNumber: true },
+    {
+      label: withUnit('gap to peers', this.#numbers, this.kind()),
+      isNumber: true,
+      headers: [exactHeader('gap to peers', this.#numbers, this.kind())],
+    },
     { label: 'peers present', isNumber: true },
   ]);
   protected readonly rows = computed((): ChartRow[] => {
@@ -65,6 +70,7 @@ export class GapPath {
     const digits = this.#numbers.columnDigits(gaps, this.kind());
     return this.years().map(({ year, gap, peers }) => ({
       cells: [String(year), this.#numbers.figure(gap, this.kind(), digits), String(peers)],
+      values: [year, exactFigure(gap, this.#numbers, this.kind()), peers],
     }));
   });
 }

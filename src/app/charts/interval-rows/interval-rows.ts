@@ -4,6 +4,7 @@ import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { exactFigure, exactHeader } from '../exact-figure';
 import { figureFormats, withUnit } from '../figure-formats';
 import { digitsBy, openBounds } from './open-bounds';
 
@@ -56,28 +57,39 @@ export class IntervalRows {
   readonly #hasRemarks = computed(() => this.rows().some((row) => remarkOf(row) !== ''));
   protected readonly columns = computed((): ChartColumn[] => [
     { label: this.rowName(), isNumber: false },
-    { label: withUnit(this.figureName(), this.#numbers, this.kind()), isNumber: true },
-    { label: 'low', isNumber: true },
-    { label: 'high', isNumber: true },
+    {
+      label: withUnit(this.figureName(), this.#numbers, this.kind()),
+      isNumber: true,
+      headers: [this.#header(this.figureName())],
+    },
+    { label: 'low', isNumber: true, headers: [this.#header('low')] },
+    { label: 'high', isNumber: true, headers: [this.#header('high')] },
     ...(this.#hasRemarks() ? [{ label: 'remark', isNumber: false }] : []),
   ]);
   protected readonly tableRows = computed((): ChartRow[] => {
     const written = (value: number | null | undefined) =>
       this.#numbers.figure(value, this.kind(), this.#digits());
+    const exact = (value: number | null | undefined) =>
+      exactFigure(value, this.#numbers, this.kind());
     return this.rows().map((row) => {
       const { name, figure } = row;
       const [isLowOpen, isHighOpen] = (['low', 'high'] as const).map(
         (end) => figure?.unbounded === end || figure?.unbounded === 'both',
       );
-      const cells = [
+      const cellsBy = <T>(form: (value: number | null | undefined) => T) => [
         name,
-        written(figure?.estimate),
-        isLowOpen ? 'open' : written(figure?.low),
-        isHighOpen ? 'open' : written(figure?.high),
+        form(figure?.estimate),
+        isLowOpen ? 'open' : form(figure?.low),
+        isHighOpen ? 'open' : form(figure?.high),
+        ...(this.#hasRemarks() ? [remarkOf(row)] : []),
       ];
-      return { cells: this.#hasRemarks() ? [...cells, remarkOf(row)] : cells };
+      return { cells: cellsBy(written), values: cellsBy(exact) };
     });
   });
+
+  #header(label: string): string {
+    return exactHeader(label, this.#numbers, this.kind());
+  }
 }
 
 function remarkOf({ note, figure, reason }: IntervalRow): string {

@@ -19,6 +19,7 @@ import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { exactFigure, exactHeader } from '../exact-figure';
 import { figureFormats, inWords, withUnit } from '../figure-formats';
 import { TopAxis } from '../top-axis';
 
@@ -83,8 +84,12 @@ export class LeaveOneOut {
   readonly #hasReasons = computed(() => this.leftOut().some(({ estimate }) => estimate === null));
   protected readonly columns = computed((): ChartColumn[] => [
     { label: `without ${this.rowName()}`, isNumber: false },
-    { label: withUnit(this.figureName(), this.#numbers, this.kind()), isNumber: true },
-    { label: 'change', isNumber: true },
+    {
+      label: withUnit(this.figureName(), this.#numbers, this.kind()),
+      isNumber: true,
+      headers: [this.figureName(), 'low', 'high'].map((label) => this.#header(label)),
+    },
+    { label: 'change', isNumber: true, headers: [this.#header('change')] },
     ...(this.#hasReasons() ? [{ label: 'why none', isNumber: false }] : []),
   ]);
   protected readonly tableRows = computed((): ChartRow[] => {
@@ -98,11 +103,27 @@ export class LeaveOneOut {
     );
     const interval = low === null || high === null ? '' : ` (${formats.bounds(this.full())})`;
     const full = [`${this.fullName()}${interval}`, formats.value(all), '', ''];
+    const shown = <T>(cells: readonly T[]) => (this.#hasReasons() ? cells : cells.slice(0, -1));
+    const exact = (value: number | null) => exactFigure(value, this.#numbers, this.kind());
     return [
-      ...rows.map((cells) => ({ cells: this.#hasReasons() ? cells : cells.slice(0, 3) })),
-      { isTotal: true, cells: this.#hasReasons() ? full : full.slice(0, 3) },
+      ...this.leftOut().map(({ name, estimate, reason }, place) => ({
+        cells: shown(rows[place]),
+        values: shown([
+          ...[name, exact(estimate), null, null],
+          ...(estimate === null ? [null, reason ?? ''] : [exact(estimate - all), '']),
+        ]),
+      })),
+      {
+        isTotal: true,
+        cells: shown(full),
+        values: shown([this.fullName(), exact(all), exact(low), exact(high), null, '']),
+      },
     ];
   });
+
+  #header(label: string): string {
+    return exactHeader(label, this.#numbers, this.kind());
+  }
 
   protected label({ name, x, value, change, reason }: LeaveOneOutRow): string {
     return `without ${name}: ${x === null ? reason : `${value}, ${change}`}`;

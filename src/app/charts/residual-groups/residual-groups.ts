@@ -18,6 +18,7 @@ import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { exactFigure, exactHeader } from '../exact-figure';
 import { figureFormats, withUnit } from '../figure-formats';
 import { TopAxis } from '../top-axis';
 
@@ -92,11 +93,11 @@ export class ResidualGroups {
   });
   protected readonly columns = computed((): ChartColumn[] => [
     { label: this.rowName(), isNumber: false },
-    ...(this.#hasMeans()
-      ? [{ label: withUnit('mean', this.#numbers, this.kind()), isNumber: true }]
-      : []),
-    { label: withUnit('standard deviation', this.#numbers, this.kind()), isNumber: true },
-    { label: withUnit('largest', this.#numbers, this.kind()), isNumber: true },
+    ...[...(this.#hasMeans() ? ['mean'] : []), 'standard deviation', 'largest'].map((label) => ({
+      label: withUnit(label, this.#numbers, this.kind()),
+      isNumber: true,
+      headers: [exactHeader(label, this.#numbers, this.kind())],
+    })),
     { label: 'rows', isNumber: true },
   ]);
   protected readonly tableRows = computed((): ChartRow[] => {
@@ -106,16 +107,21 @@ export class ResidualGroups {
     );
     const figure = (value: number | null | undefined) =>
       this.#numbers.figure(value, this.kind(), digits);
-    return this.groups().map((group) => ({
-      isOwn: group.label === this.ownCompany(),
-      cells: [
-        group.label,
-        ...(this.#hasMeans() ? [figure(group.mean)] : []),
-        figure(group.standardDeviation),
-        figure(group.largest),
-        String(group.count),
-      ],
-    }));
+    return this.groups().map((group) => {
+      const figures = [
+        ...(this.#hasMeans() ? [group.mean] : []),
+        ...[group.standardDeviation, group.largest],
+      ];
+      return {
+        isOwn: group.label === this.ownCompany(),
+        cells: [group.label, ...figures.map(figure), String(group.count)],
+        values: [
+          group.label,
+          ...figures.map((value) => exactFigure(value, this.#numbers, this.kind())),
+          group.count,
+        ],
+      };
+    });
   });
 
   /** `2014: mean 30, standard deviation 60, largest 130`. */

@@ -19,6 +19,7 @@ import { lineText } from '../../ui/phrases';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartReadout } from '../chart-frame/chart-readout';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { exactFigure, exactHeader } from '../exact-figure';
 import { figureFormats, withUnit } from '../figure-formats';
 import { ValueAxes } from '../value-axes';
 import { scatterMove } from './scatter-move';
@@ -101,8 +102,11 @@ export class ResidualScatter {
   protected readonly columns = computed((): ChartColumn[] => [
     { label: 'company', isNumber: false },
     { label: 'year', isNumber: false },
-    { label: withUnit('fitted', this.#numbers, this.kind()), isNumber: true },
-    { label: withUnit('residual', this.#numbers, this.kind()), isNumber: true },
+    ...['fitted', 'residual'].map((label) => ({
+      label: withUnit(label, this.#numbers, this.kind()),
+      isNumber: true,
+      headers: [exactHeader(label, this.#numbers, this.kind())],
+    })),
     { label: 'studentised', isNumber: true },
     { label: 'row of the file', isNumber: true },
   ]);
@@ -117,6 +121,12 @@ export class ResidualScatter {
         value(row.residual),
         this.#studentised(row),
         lineText(row.fileRow),
+      ],
+      values: [
+        ...[row.company, row.year],
+        ...[row.fitted, row.residual].map((each) => exactFigure(each, this.#numbers, this.kind())),
+        row.studentised,
+        row.fileRow === 0 ? lineText(row.fileRow) : row.fileRow,
       ],
     }));
   });

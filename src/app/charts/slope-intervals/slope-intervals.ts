@@ -4,6 +4,7 @@ import { type FigureKind, type IntervalValue, NumberFormat } from '../../ui/numb
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { exactFigure, exactHeader } from '../exact-figure';
 
 type Slope = IntervalValue & { readonly name: string; readonly intervalReason?: string };
 
@@ -37,20 +38,27 @@ export class SlopeIntervals {
   );
   protected readonly summary = computed(() => `${this.labels().join('. ')}.`);
 
-  protected readonly columns: readonly ChartColumn[] = [
+  protected readonly columns = computed((): ChartColumn[] => [
     { label: 'change', isNumber: false },
-    { label: 'goes with', isNumber: true },
-    { label: 'low', isNumber: true },
-    { label: 'high', isNumber: true },
-  ];
+    ...['goes with', 'low', 'high'].map((label) => ({
+      label,
+      isNumber: true,
+      headers: [exactHeader(label, this.#numbers, this.kind())],
+    })),
+  ]);
   protected readonly rows = computed((): ChartRow[] =>
     this.slopes().map((slope) => {
       const { unbounded } = slope;
       const digits = this.#digits(slope);
       const figure = (value: number | null) => this.#numbers.figure(value, this.kind(), digits);
-      const low = unbounded === 'low' ? 'open' : figure(slope.low);
-      const high = unbounded === 'high' ? 'open' : figure(slope.high);
-      return { cells: [slope.name, figure(slope.estimate), low, high] };
+      const exact = (value: number | null) => exactFigure(value, this.#numbers, this.kind());
+      const row = <T>(written: (value: number | null) => T) => [
+        slope.name,
+        written(slope.estimate),
+        unbounded === 'low' ? 'open' : written(slope.low),
+        unbounded === 'high' ? 'open' : written(slope.high),
+      ];
+      return { cells: row(figure), values: row(exact) };
     }),
   );
 

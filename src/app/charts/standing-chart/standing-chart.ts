@@ -12,6 +12,7 @@ import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartPoint, ChartPoints } from '../chart-points';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
+import { exactFigure, exactHeader } from '../exact-figure';
 import { figureFormats, inWords, withUnit } from '../figure-formats';
 import { TopAxis } from '../top-axis';
 
@@ -75,9 +76,13 @@ export class StandingChart {
   );
   protected readonly columns = computed((): ChartColumn[] => [
     { label: 'company', isNumber: false },
-    { label: withUnit('value', this.#numbers, this.kind()), isNumber: true },
-    { label: 'low', isNumber: true },
-    { label: 'high', isNumber: true },
+    {
+      label: withUnit('value', this.#numbers, this.kind()),
+      isNumber: true,
+      headers: [this.#header('value')],
+    },
+    { label: 'low', isNumber: true, headers: [this.#header('low')] },
+    { label: 'high', isNumber: true, headers: [this.#header('high')] },
     ...(this.#hasReasons() ? [{ label: 'why no interval', isNumber: false }] : []),
   ]);
   protected readonly tableRows = computed((): ChartRow[] => {
@@ -90,14 +95,29 @@ export class StandingChart {
     return this.layout().rows.flatMap(({ company, isOwn }) => {
       const row = byCompany.get(company);
       if (row === undefined) return [];
-      const cells = [company, figure(row.estimate), figure(row.low), figure(row.high)];
-      return [{ isOwn, cells: this.#hasReasons() ? [...cells, row.intervalReason ?? ''] : cells }];
+      const reason = this.#hasReasons() ? [row.intervalReason ?? ''] : [];
+      const figures = [row.estimate, row.low, row.high];
+      return [
+        {
+          isOwn,
+          cells: [company, ...figures.map(figure), ...reason],
+          values: [company, ...figures.map((value) => this.#exact(value)), ...reason],
+        },
+      ];
     });
   });
 
   /** Value and interval of a company: `2,970 (1,570 to 4,270)`. */
   protected words(company: string): string {
     return this.#words().get(company) ?? '';
+  }
+
+  #exact(value: number | null): number | null {
+    return exactFigure(value, this.#numbers, this.kind());
+  }
+
+  #header(label: string): string {
+    return exactHeader(label, this.#numbers, this.kind());
   }
 
   /** The row that narrow charts write out in full: the one asked for, else the own company's. */

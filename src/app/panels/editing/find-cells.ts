@@ -1,7 +1,8 @@
+import { shifted } from '../../ui/shifted';
 import { leadingColumns } from '../grid-places';
 import type { GridPlace } from './cell-block';
 import type { ShownGrid } from './copy-cells';
-import { shiftOf, shifted } from './shown-figure';
+import { shiftOf } from './shown-figure';
 
 /**
  * The cells whose company, year or value holds the text, row by row; where it holds a company and a year, as

@@ -41,6 +41,7 @@ import { RowChanges } from './row-changes';
 import { RowChoice } from './row-choice';
 import { type CellFlags, type RowFilter, filteredRows, flagNames, flagsAt } from './row-filter';
 import { SaveBar } from './save-bar';
+import { TakeOut } from './take-out';
 import { UnsavedEdits } from './unsaved-edits';
 
 /** The rows of a panel version: looked through, copied, mended and saved as the next version. */
@@ -57,6 +58,7 @@ import { UnsavedEdits } from './unsaved-edits';
     ProblemNotice,
     RowChoice,
     SaveBar,
+    TakeOut,
   ],
   templateUrl: './panel-desk-grid.html',
   styleUrl: './panel-desk-grid.css',
@@ -169,6 +171,8 @@ export class PanelDeskGrid {
     },
     () => this.digits(),
   );
+
+  protected readonly selectedBlock = () => this.grid().selectedBlock();
 
   constructor() {
     effect(() => {

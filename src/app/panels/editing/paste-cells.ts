@@ -3,11 +3,12 @@ import { type PanelRow, columnTitle } from '../panel-rows';
 import type { ShownProblem } from '../../ui/problem';
 import { counted } from '../../ui/phrases';
 import { readBlockText } from '../../ui/block-text';
+import { readFigures } from '../../ui/read-figures';
+import { shifted } from '../../ui/shifted';
 import type { CellRange } from './cell-block';
 import type { ShownGrid } from './copy-cells';
 import type { CellChange } from './panel-edits';
-import { readFigures } from '../../ui/read-figures';
-import { shiftOf, shifted } from './shown-figure';
+import { shiftOf } from './shown-figure';
 
 export type PasteOutcome =
   | {

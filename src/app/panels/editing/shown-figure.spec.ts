@@ -1,4 +1,5 @@
-import { figureText, shiftOf, shifted } from './shown-figure';
+import { shifted } from '../../ui/shifted';
+import { figureText, shiftOf } from './shown-figure';
 
 describe('figures in the unit that is shown', () => {
   it('keep every digit there and back', () => {

@@ -1,18 +1,11 @@
 import type { PanelColumn } from '@contract';
 import { fullText } from '@figures';
-
+import { shifted } from '../../ui/shifted';
 import { kindOf } from '../panel-rows';
 
 /** What converts figures of a column to the unit that is shown and back: 10 to this power, 0 for what is no money. */
 export function shiftOf(column: PanelColumn, factor: number): number {
   return kindOf(column) === 'money' ? Math.round(Math.log10(factor)) : 0;
-}
-
-/** The value times 10^shift, rounded once: the decimal point moves and no digit changes. */
-export function shifted(value: number, shift: number): number {
-  if (shift === 0) return value;
-  const [mantissa, exponent = '0'] = String(value).split('e');
-  return Number(`${mantissa}e${Number(exponent) + shift}`);
 }
 
 /** With every digit and a decimal point, as spreadsheets and editors take it; empty where there is no value. */

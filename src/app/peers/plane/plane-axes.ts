@@ -1,5 +1,6 @@
 import { fixedText, tickDigits } from '@figures';
 import type { PlaneMeasure } from '../../charts/company-plane/plane-words';
+import { exactFigure } from '../../charts/exact-figure';
 import type { FigureKind, NumberFormat } from '../../ui/number-format';
 import { type PeerMeasure, readValue } from '../nearness/peer-measures';
 import type { PanelCompany } from '../peer-draft';
@@ -18,6 +19,7 @@ export function planeAxisOf(measure: PeerMeasure, numbers: NumberFormat): PlaneM
     title: titleOf(measure, numbers),
     isLog: measure.kind === 'log-money',
     text: (value) => numbers.figure(value, kind),
+    exact: (value) => exactFigure(value, numbers, kind),
     tick: (value, step) => {
       const digits = tickDigits(numbers.shown(step, kind));
       return fixedText(numbers.shown(value, kind), digits, numbers.locale());

@@ -72,6 +72,7 @@ export class PlaneSection {
       x: planeValue(this.across(), company),
       y: planeValue(this.up(), company),
       distance: byCompany.get(company.name)?.distance.toFixed(2) ?? '',
+      exactDistance: byCompany.get(company.name)?.distance ?? null,
     }));
   });
   protected readonly rows = computed(() =>
