@@ -4,6 +4,8 @@ import { wordsWidth } from './text-width';
 
 interface Banded {
   readonly year: number;
+  readonly low: number | null;
+  readonly high: number | null;
   readonly bandLow?: number | null;
   readonly bandHigh?: number | null;
 }
@@ -24,8 +26,17 @@ export function placedBandLabel(
   place: (year: number, value: number) => Point,
   lines: readonly Point[],
 ): PlacedText | null {
-  const banded = (plans.at(0)?.years ?? []).flatMap(({ year, bandLow, bandHigh }) =>
-    bandLow == null || bandHigh == null ? [] : [{ year, low: bandLow, high: bandHigh }],
+  // What an interval at a higher level covers beyond the band is kept free as well.
+  const banded = (plans.at(0)?.years ?? []).flatMap(({ year, low, high, bandLow, bandHigh }) =>
+    bandLow == null || bandHigh == null
+      ? []
+      : [
+          {
+            year,
+            low: Math.min(bandLow, low ?? bandLow),
+            high: Math.max(bandHigh, high ?? bandHigh),
+          },
+        ],
   );
   const end = banded.at(-1);
   if (bandName === undefined || end === undefined) return null;

@@ -1,6 +1,9 @@
 import type { Routes } from '@angular/router';
 
-/** Pages under /board: the edition that matters now, all editions, publishing one, one edition. */
+/**
+ * Pages under /board: the edition that matters now, all editions, composing one, their history, two side by side, one
+ * edition.
+ */
 export const routes: Routes = [
   {
     path: '',
@@ -16,6 +19,16 @@ export const routes: Routes = [
     path: 'publish',
     title: 'Publish an edition',
     loadComponent: async () => (await import('./publish-page')).PublishPage,
+  },
+  {
+    path: 'history',
+    title: 'History of the standing',
+    loadComponent: async () => (await import('./history-page')).HistoryPage,
+  },
+  {
+    path: 'compare/:leftId/:rightId',
+    title: 'Two editions side by side',
+    loadComponent: async () => (await import('./compare-page')).ComparePage,
   },
   {
     path: ':editionId',

@@ -1,4 +1,7 @@
+import { provideHttpClient } from '@angular/common/http';
+import { provideHttpClientTesting } from '@angular/common/http/testing';
 import { TestBed } from '@angular/core/testing';
+import { provideRouter } from '@angular/router';
 import { PageContext } from '../ui/page-context';
 import { EditionSheet } from './edition-sheet';
 import { logEditionContent } from './testing/edition-content';
@@ -7,6 +10,9 @@ describe('an edition on a fit in logs with year effects and the year before', ()
   let page: HTMLElement;
 
   beforeEach(async () => {
+    TestBed.configureTestingModule({
+      providers: [provideHttpClient(), provideHttpClientTesting(), provideRouter([])],
+    });
     TestBed.inject(PageContext).show({ currency: 'EUR', unit: 'millions' });
     const fixture = TestBed.createComponent(EditionSheet);
     fixture.componentRef.setInput('content', logEditionContent);

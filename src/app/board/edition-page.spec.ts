@@ -86,8 +86,147 @@ describe('the page of an edition', () => {
       expect(text()).toContain(words);
   });
 
-  it('has the CFO sign with the password, and says so when it is the wrong one', async () => {
+  it('keeps signing closed until each serious warning is opened', async () => {
     await open('cfo', waiting);
+    expect(text()).toContain('0 of 2 serious warnings opened.');
+    expect(button('Sign edition 7')?.disabled).toBe(true);
+    button('Go to the next one')?.click();
+    expect(document.activeElement?.textContent?.trim()).toBe('Few companies');
+    for (const [title, id] of [
+      ['Few companies', 'few-companies'],
+      ['A sign that hangs on one company', 'sign-change'],
+    ]) {
+      button(title)?.click();
+      await settled();
+      const request = http.expectOne(`${path}/warnings/${id}`);
+      expect(request.request.method).toBe('PUT');
+      request.flush(null);
+      await settled();
+      expect(button(title)?.getAttribute('aria-expanded')).toBe('true');
+    }
+    expect(text()).toContain('2 of 2 serious warnings opened.');
+    expect(button('Sign edition 7')?.disabled).toBe(false);
+    button('Few companies')?.click();
+    await settled();
+    http.expectNone(`${path}/warnings/few-companies`);
+  });
+
+  it('shows warnings open to those who do not sign', async () => {
+    await open('analyst', { ...waiting, maySign: false, mayReturn: false });
+    expect(button('Few companies')).toBeUndefined();
+    expect(text()).toContain('The peer group has 3 companies with figures.');
+  });
+
+  it('takes a comment on a block, and shows the thread with its edition', async () => {
+    const comment = {
+      id: '00000000-0000-4000-8000-0000000000c1',
+      editionId: editionSummary.id,
+      editionNumber: 6,
+      block: 'slopes' as const,
+      text: 'Why did capex fall?',
+      by: 'T. Emmerquist',
+      at: '2026-11-15T09:00:00.000Z',
+    };
+    await open('analyst', { ...waiting, maySign: false, comments: [comment] });
+    const slopes = [...document.querySelectorAll('kv-block-comments')].find((each) =>
+      each.textContent.includes('Why did capex fall?'),
+    )!;
+    expect(slopes.textContent.replace(/\s+/g, ' ')).toContain('T. Emmerquist, 15 Nov 2026');
+    expect(slopes.textContent.replace(/\s+/g, ' ')).toContain('edition 6');
+    button('Answer', slopes)?.click();
+    await settled();
+    const box = slopes.querySelector('textarea')!;
+    expect(document.activeElement).toBe(box);
+    box.value = 'One company left the panel.';
+    box.dispatchEvent(new Event('input'));
+    await settled();
+    button('Send the comment', slopes)?.click();
+    await settled();
+    const request = http.expectOne(`${path}/comments`);
+    expect(request.request.body).toEqual({ block: 'slopes', text: 'One company left the panel.' });
+    const answer = { ...comment, id: editionSummary.id, text: 'One company left the panel.' };
+    request.flush({ ...waiting, comments: [comment, answer] });
+    await settled();
+    expect(slopes.textContent).toContain('One company left the panel.');
+    expect(document.activeElement?.textContent?.trim()).toBe('Answer');
+  });
+
+  it('leads the analyst from a returned edition to its answer', async () => {
+    const decision = {
+      kind: 'returned' as const,
+      by: 'T. Emmerquist',
+      at: '2026-11-15T09:00:00.000Z',
+      comment: 'Say more.',
+    };
+    const edition = { ...editionSummary, state: 'returned' as const, decision };
+    await open('analyst', { ...waiting, edition, maySign: false, mayReturn: false });
+    const link = [...document.querySelectorAll('a')].find(
+      (each) => each.textContent.trim() === 'Answer in a new edition',
+    );
+    expect(link?.getAttribute('href')).toBe(
+      `/board/publish?fit=${waiting.content.fitId}&answers=${edition.id}`,
+    );
+  });
+
+  it('says what checking the record found, with the hashes', async () => {
+    await open('reader', signed);
+    button('Check the record')?.click();
+    await settled();
+    http.expectOne(`${path}/verification`).flush({
+      isUnchanged: false,
+      number: 7,
+      computedSha256: 'a'.repeat(64),
+      storedSha256: 'b'.repeat(64),
+      publishedSha256: 'b'.repeat(64),
+      signedSha256: null,
+      checkedAt: '2026-11-16T09:00:00.000Z',
+      detail: 'Edition 7 was changed.',
+    });
+    await settled();
+    expect(text()).toContain('Edition 7 was changed. Checked 16 Nov 2026');
+    expect(text()).toContain('a'.repeat(64));
+    expect(text()).toContain('recorded when it was signed no record');
+  });
+
+  it('lists who viewed and exported, where the reader is to see it', async () => {
+    const access = [
+      {
+        by: 'T. Emmerquist',
+        kind: 'exported' as const,
+        format: 'pdf',
+        at: '2026-11-15T09:00:00.000Z',
+      },
+      { by: 'M. Oduya', kind: 'viewed' as const, format: null, at: '2026-11-14T09:00:00.000Z' },
+    ];
+    await open('analyst', { ...waiting, access });
+    expect(text()).toContain('2 people opened it, 1 export');
+    expect(text()).toContain('T. Emmerquist exported as PDF 15 Nov 2026');
+  });
+
+  it('gives readers neither comments nor the list of who looked', async () => {
+    await open('reader', { ...signed, access: null });
+    expect(document.querySelector('kv-edition-access')).toBeNull();
+    expect(document.querySelector('kv-block-comments button')).toBeNull();
+  });
+
+  it('exports in the unit shown, and asks first of inside information', async () => {
+    await open('cfo', waiting);
+    const links = () =>
+      [...document.querySelectorAll('kv-edition-exports a')].map((each) =>
+        each.getAttribute('href'),
+      );
+    expect(links()).toEqual([
+      `${path}/export/pdf?unit=millions&paper=a4`,
+      `${path}/export/pdf?unit=millions&paper=letter`,
+      `${path}/export/xlsx?unit=millions`,
+    ]);
+    TestBed.inject(NumberFormat).unit.set('billions');
+    await settled();
+    expect(links().at(2)).toBe(`${path}/export/xlsx?unit=billions`);
+  });
+
+  it('has the CFO sign with the password, and says so when it is the wrong one', async () => {
+    await open('cfo', { ...waiting, openedWarnings: ['few-companies', 'sign-change'] });
     button('Sign edition 7')?.click();
     await settled();
     const dialog = document.querySelector('kv-sign-dialog')!;

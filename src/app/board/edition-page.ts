@@ -1,4 +1,3 @@
-import { DatePipe } from '@angular/common';
 import {
   ChangeDetectionStrategy,
   Component,
@@ -8,22 +7,25 @@ import {
   input,
   signal,
   untracked,
+  viewChild,
 } from '@angular/core';
 import { MatDialog, MatDialogConfig } from '@angular/material/dialog';
 import { RouterLink } from '@angular/router';
 import { type EditionReply, apiRoutes, mayCall } from '@contract';
-import { unitRatio } from '@figures';
+import type { ApiProblem } from '../api/api-problem';
 import { LineageStore } from '../api/lineage-store';
 import { SessionStore } from '../api/session-store';
 import { Mark } from '../ui/mark';
-import { NumberFormat } from '../ui/number-format';
 import { PageContext } from '../ui/page-context';
 import { ProblemNotice } from '../ui/problem-notice';
+import { EditionAccess } from './edition-access';
 import { editionContext } from './edition-context';
+import { EditionExports } from './edition-exports';
 import { type EditionFigure, EditionSheet } from './edition-sheet';
 import { EditionStore } from './edition-store';
 import { EditionTrial } from './edition-trial';
-import { placesText, stateWords } from './edition-words';
+import { EditionVerification } from './edition-verification';
+import { stateWords } from './edition-words';
 import { ReturnDialog, type ReturnQuestion } from './return-dialog';
 import { SignDialog, type SignQuestion } from './sign-dialog';
 import { SignatureBlock } from './signature-block';
@@ -31,7 +33,17 @@ import { SignatureBlock } from './signature-block';
 /** One edition: what do I tell the board? */
 @Component({
   selector: 'kv-edition-page',
-  imports: [DatePipe, EditionSheet, EditionTrial, Mark, ProblemNotice, RouterLink, SignatureBlock],
+  imports: [
+    EditionAccess,
+    EditionExports,
+    EditionSheet,
+    EditionTrial,
+    EditionVerification,
+    Mark,
+    ProblemNotice,
+    RouterLink,
+    SignatureBlock,
+  ],
   templateUrl: './edition-page.html',
   styleUrl: './edition-page.css',
   providers: [EditionStore],
@@ -41,14 +53,20 @@ export class EditionPage {
   readonly #context = inject(PageContext);
   readonly #dialog = inject(MatDialog);
   readonly #lineage = inject(LineageStore);
-  readonly #numbers = inject(NumberFormat);
   readonly #sessions = inject(SessionStore);
   protected readonly store = inject(EditionStore);
 
   readonly editionId = input.required<string>();
 
+  protected readonly sheet = viewChild(EditionSheet);
+
   protected readonly stateWords = stateWords;
   protected readonly isTrying = signal(false);
+  /** What kept an opened warning from being noted. */
+  protected readonly problem = signal<ApiProblem | null>(null);
+  protected readonly mayAnswer = computed(() =>
+    mayCall(apiRoutes.publishEdition, this.#sessions.roles()),
+  );
   readonly #reply = computed(() => {
     const view = this.store.view();
     return view.kind === 'ready' ? view.reply : null;
@@ -75,23 +93,8 @@ export class EditionPage {
     });
   }
 
-  /** What the signed edition before it said, in this edition's unit; null where the currencies differ. */
-  protected beforeOf(before: EditionReply | null, now: EditionReply) {
-    const standing = before?.content.fit.standing ?? null;
-    if (before === null || standing === null) return null;
-    const { edition, content } = before;
-    const { currency, unit } = now.content.panelVersion;
-    if (content.panelVersion.currency !== currency) return null;
-    const ratio = unitRatio(content.panelVersion.unit, unit);
-    const scaled = (bound: number | null) => (bound === null ? null : bound * ratio);
-    const { estimate, low, high } = standing;
-    const value = { estimate: estimate * ratio, low: scaled(low), high: scaled(high) };
-    return {
-      id: edition.id,
-      number: edition.number,
-      signedAt: edition.decision?.at,
-      words: `${this.#numbers.interval(value, 'money', 3)}, ${placesText(content.fit)}`,
-    };
+  protected async noteOpened(warningId: string): Promise<void> {
+    this.problem.set(await this.store.openWarning(warningId));
   }
 
   protected openFigure({ key, planned }: EditionFigure): void {
@@ -102,11 +105,11 @@ export class EditionPage {
     window.print();
   }
 
-  protected askToSign({ edition }: EditionReply, before: EditionReply | null): void {
+  protected askToSign({ edition }: EditionReply, signedNumber: number | null): void {
     const data: SignQuestion = {
       number: edition.number,
       sha256: edition.sha256,
-      supersedes: before?.edition.state === 'signed' ? before.edition.number : null,
+      supersedes: signedNumber,
       sign: (password) => this.store.sign(password),
     };
     this.#dialog.open(SignDialog, dialogOf(data));

@@ -1,25 +1,38 @@
 import { DatePipe } from '@angular/common';
-import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  inject,
+  input,
+  output,
+  viewChild,
+} from '@angular/core';
 import type { EditionContent } from '@contract';
 import type { ExpectedPathChoice } from '@figures';
-import { expectedValue, heldRegressors } from '@prediction';
 import type { PlannedFigure } from '../api/lineage-store';
 import { ExpectedPath } from '../charts/expected-path/expected-path';
 import { Figure } from '../ui/figure';
+import { Mark } from '../ui/mark';
 import { asDifference, differenceKind } from '../ui/model-form';
 import { NumberFormat } from '../ui/number-format';
+import { counted } from '../ui/phrases';
 import { chosenFigure } from '../ui/plan/chosen-figure';
 import { PlanAssumptions } from '../ui/plan/plan-assumptions';
-import { expectedPathData } from '../ui/plan/plan-data';
 import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
 import { decidingYear, expectedName, planFinding } from '../ui/plan/plan-words';
 import { planLineage } from '../ui/plan/planned-figure';
-import { type Remark, RemarkList } from '../ui/remark-list';
+import { regressorKind } from '../ui/plan/regressor-labels';
 import { Sentence, type SentenceFigureWanted } from '../ui/sentence';
+import { BlockComments } from './block-comments';
+import { EditionChanges } from './edition-changes';
 import { EditionLevels } from './edition-levels';
 import { EditionLines } from './edition-lines';
+import { editionBandName, editionPath } from './edition-path';
 import { EditionPeers } from './edition-peers';
+import { EditionWarnings } from './edition-warnings';
 import {
+  confidentialityMeaning,
   confidentialityWords,
   labelsOf,
   modelText,
@@ -27,6 +40,7 @@ import {
   sampleText,
   shareText,
 } from './edition-words';
+import { planMaking } from './plan-making';
 import { plannedIn } from './planned-in';
 
 /** A figure of the edition whose lineage is wanted. */
@@ -42,15 +56,18 @@ export interface EditionFigure {
 @Component({
   selector: 'kv-edition-sheet',
   imports: [
+    BlockComments,
     DatePipe,
+    EditionChanges,
     EditionLevels,
     EditionLines,
     EditionPeers,
+    EditionWarnings,
     ExpectedPath,
     Figure,
+    Mark,
     PlanAssumptions,
     PlanTable,
-    RemarkList,
     Sentence,
   ],
   templateUrl: './edition-sheet.html',
@@ -68,8 +85,16 @@ export class EditionSheet {
   readonly isPreview = input(false);
   /** Whether the headline is being edited in its place: what edits it goes into the slot `editionHeadline`. */
   readonly isHeadlineOpen = input(false);
+  /** Warnings that the person has opened, by id. */
+  readonly openedWarnings = input<readonly string[]>([]);
+  /** Whether the person is to sign, and so has to open the serious warnings. */
+  readonly isToOpen = input(false);
   readonly figureOpened = output<EditionFigure>();
+  readonly warningOpened = output<string>();
 
+  private readonly warnings = viewChild(EditionWarnings);
+
+  protected readonly confidentialityMeaning = confidentialityMeaning;
   protected readonly confidentialityWords = confidentialityWords;
   readonly #form = computed(() => this.content().fit.specification.form);
   protected readonly isLog = computed(() => this.#form() === 'log');
@@ -89,16 +114,30 @@ export class EditionSheet {
   protected readonly places = computed(() => placesText(this.content().fit));
   protected readonly sample = computed(() => sampleText(this.content().fit));
   protected readonly caption = computed(() => `${this.unit()} · ${this.level()} intervals`);
-  protected readonly warnings = computed(() =>
-    this.content().fit.warnings.map(({ detail }): Remark => ({ kind: 'caution', text: detail })),
-  );
-  protected readonly plans = computed(() =>
-    this.content().scenarios.map(({ name, note, plan, years }) => ({
-      name,
-      note,
-      years: years.map((year, index) => ({ ...year, values: plan[index].values })),
-    })),
-  );
+  protected readonly warningsTitle = computed(() => {
+    const { warnings } = this.content();
+    const serious = warnings.filter(({ isSerious }) => isSerious).length;
+    return `${counted(warnings.length, 'warning')}, ${serious} serious`;
+  });
+  protected readonly moneyColumns = computed(() => {
+    const { outcome, slopes } = this.content().fit;
+    const money = slopes.filter((_, index) => regressorKind(index) === 'money');
+    return [outcome, ...money.map(({ name }) => name)];
+  });
+  protected readonly plans = computed(() => {
+    const { scenarios, fit } = this.content();
+    const hasYearEffects = fit.yearEffects !== null;
+    return scenarios.map((scenario) => {
+      const { name, note, version, plan, years } = scenario;
+      return {
+        name,
+        note,
+        version,
+        making: planMaking(scenario, this.labels(), hasYearEffects, this.#numbers),
+        years: years.map((year, index) => ({ ...year, values: plan[index].values })),
+      };
+    });
+  });
   protected readonly planTitle = computed(() => {
     const [first] = this.plans();
     const last = first && decidingYear(first.years);
@@ -107,12 +146,8 @@ export class EditionSheet {
     const form = this.#form();
     return planFinding(first.name, { company: ownCompany, form }, last, this.#numbers);
   });
-  protected readonly path = computed(() => {
-    const { fit } = this.content();
-    if (fit.prediction === null || fit.ownYears === null) return null;
-    const base = expectedValue(fit.prediction, heldRegressors(fit.prediction));
-    return expectedPathData(fit.ownYears, base, this.plans());
-  });
+  protected readonly path = computed(() => editionPath(this.content()));
+  protected readonly bandName = computed(() => editionBandName(this.content()));
 
   protected readonly pathText = computed(() => {
     const { number, fit } = this.content();
@@ -122,6 +157,11 @@ export class EditionSheet {
       source: `Edition ${number}, fit ${fit.hash.slice(0, 6)}`,
     };
   });
+
+  /** Takes the person to the first serious warning that is not opened. */
+  focusNextWarning(): void {
+    this.warnings()?.focusNext();
+  }
 
   /** A year of the chart: what the model expected of it, or expects of it under the plan that was chosen. */
   protected openYear(choice: ExpectedPathChoice): void {

@@ -1,6 +1,6 @@
 import { Injectable, inject, signal } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
-import type { EditionReply, EditionSummary } from '@contract';
+import type { EditionReply, WriteComment } from '@contract';
 import {
   type Observable,
   Subject,
@@ -20,12 +20,15 @@ export type EditionView =
   | {
       readonly kind: 'ready';
       readonly reply: EditionReply;
-      /** The signed edition before this one, where there is one. */
-      readonly before: EditionReply | null;
+      /** Number of the edition that counts now, where another one is signed. */
+      readonly signedNumber: number | null;
     }
   | { readonly kind: 'failed'; readonly problem: ApiProblem };
 
-/** One edition, and what the CFO does with it. */
+/** What an answer makes of the edition that is shown. */
+type Change = (shown: EditionReply) => EditionReply;
+
+/** One edition, and what is done with it. */
 @Injectable()
 export class EditionStore {
   readonly #api = inject(EditionsApi);
@@ -50,22 +53,39 @@ export class EditionStore {
 
   /** @returns the problem that kept it from being signed, or null. */
   sign(password: string): Promise<ApiProblem | null> {
-    return this.#decide((id) => this.#api.sign(id, password));
+    return this.#act((id) => this.#api.sign(id, password).pipe(map(asItIsNow)));
   }
 
   /** @returns the problem that kept it from being returned, or null. */
   sendBack(comment: string): Promise<ApiProblem | null> {
-    return this.#decide((id) => this.#api.sendBack(id, comment));
+    return this.#act((id) => this.#api.sendBack(id, comment).pipe(map(asItIsNow)));
   }
 
-  async #decide(send: (id: string) => Observable<EditionReply>): Promise<ApiProblem | null> {
+  /** @returns the problem that kept the comment from being sent, or null. */
+  comment(body: WriteComment): Promise<ApiProblem | null> {
+    return this.#act((id) => this.#api.comment(id, body).pipe(map(asItIsNow)));
+  }
+
+  /** Notes that the person opened a warning. @returns the problem that kept it from being noted, or null. */
+  openWarning(warningId: string): Promise<ApiProblem | null> {
+    const withOpened: Change = (reply) => ({
+      ...reply,
+      openedWarnings: [...reply.openedWarnings, warningId],
+    });
+    return this.#act((id) => this.#api.openWarning(id, warningId).pipe(map(() => withOpened)));
+  }
+
+  async #act(send: (id: string) => Observable<Change>): Promise<ApiProblem | null> {
     const view = this.#view();
     if (view.kind !== 'ready') return null;
+    const { id } = view.reply.edition;
     try {
-      const reply = await firstValueFrom(send(view.reply.edition.id));
+      const change = await firstValueFrom(send(id));
       // Meanwhile the page may have gone on to another edition.
       this.#view.update((now) =>
-        now.kind === 'ready' && now.reply.edition.id === reply.edition.id ? { ...now, reply } : now,
+        now.kind === 'ready' && now.reply.edition.id === id
+          ? { ...now, reply: change(now.reply) }
+          : now,
       );
       return null;
     } catch (error) {
@@ -76,11 +96,10 @@ export class EditionStore {
 
   #read(id: string): Observable<EditionView> {
     return forkJoin({ reply: this.#api.read(id), list: this.#api.list() }).pipe(
-      switchMap(({ reply, list }) => {
-        const earlier = signedBefore(list.editions, reply.edition.number);
-        const before: Observable<EditionReply | null> =
-          earlier === undefined ? of(null) : this.#api.read(earlier.id);
-        return before.pipe(map((found): EditionView => ({ kind: 'ready', reply, before: found })));
+      map(({ reply, list }): EditionView => {
+        const signed = list.editions.find(({ state }) => state === 'signed');
+        const signedNumber = signed === undefined || signed.id === id ? null : signed.number;
+        return { kind: 'ready', reply, signedNumber };
       }),
       catchError((error: unknown) =>
         of<EditionView>({ kind: 'failed', problem: toApiProblem(error) }),
@@ -90,12 +109,6 @@ export class EditionStore {
   }
 }
 
-function signedBefore(
-  editions: readonly EditionSummary[],
-  number: number,
-): EditionSummary | undefined {
-  return editions
-    .filter((edition) => edition.number < number && edition.decision?.kind === 'signed')
-    .sort((left, right) => right.number - left.number)
-    .at(0);
+function asItIsNow(reply: EditionReply): Change {
+  return () => reply;
 }

@@ -1,4 +1,4 @@
-import type { EditionContent, EditionSummary, FitResult } from '@contract';
+import type { EditionBlock, EditionContent, EditionSummary, FitResult } from '@contract';
 import { modelNotes } from '../ui/model-form';
 import { regressorLabels } from '../ui/plan/regressor-labels';
 import { lagText, listed } from '../ui/phrases';
@@ -66,6 +66,20 @@ export const confidentialityEffect: Readonly<Record<EditionContent['confidential
   confidential: 'Marked on the sheet and on what is exported; who reads it is listed on it.',
   'inside-information':
     'The same, and everybody is asked to mind what it is before they export it. Mail never holds a figure.',
+};
+
+/** The parts of an edition that are spoken of. */
+export const blockWords: Readonly<Record<EditionBlock, string>> = {
+  headline: 'the headline',
+  standing: 'the standing',
+  path: 'actual against expected',
+  slopes: 'the slopes',
+  scenarios: 'the scenarios',
+  evidence: 'the evidence',
+  warnings: 'the warnings',
+  peers: 'the peers',
+  changes: 'what changed',
+  edition: 'the edition as a whole',
 };
 
 export const stateWords: Readonly<Record<EditionSummary['state'], string>> = {

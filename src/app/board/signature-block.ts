@@ -1,14 +1,16 @@
 import { DatePipe } from '@angular/common';
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import { MatButton } from '@angular/material/button';
+import { RouterLink } from '@angular/router';
 import type { EditionReply } from '@contract';
 import { Mark } from '../ui/mark';
+import { counted } from '../ui/phrases';
 import { shortSha } from './edition-words';
 
 /** The foot of an edition: waits for a signature, or who signed or returned it, when, and why. */
 @Component({
   selector: 'kv-signature-block',
-  imports: [DatePipe, Mark, MatButton],
+  imports: [DatePipe, Mark, MatButton, RouterLink],
   template: `
     @let edition = reply().edition;
     <div class="words">
@@ -28,23 +30,50 @@ import { shortSha } from './edition-words';
         <p>Edition {{ edition.supersededBy }} was signed later and supersedes it.</p>
       }
       @if (reply().maySign) {
-        <p>
-          {{ warningsText() }} Signing freezes nothing new: it puts your name and the time under
-          this edition as it stands, SHA-256
-          <span class="kv-number">{{ shortSha(edition.sha256) }}</span>. You did not publish it, so
-          you may sign.
-        </p>
+        @if (serious().length > 0) {
+          <p role="status">{{ countText() }}</p>
+        }
+        @if (left() > 0) {
+          <p>
+            Signing is closed until each is opened.
+            <button type="button" class="kv-link kv-no-print" (click)="nextWanted.emit()">
+              Go to the next one
+            </button>
+          </p>
+        } @else {
+          <p>
+            Signing freezes nothing new: it puts your name and the time under this edition as it
+            stands, SHA-256 <span class="kv-number">{{ shortSha(edition.sha256) }}</span>. You did
+            not publish it, so you may sign.
+          </p>
+        }
       } @else if (edition.decision === null && reply().whyNot) {
         <p>{{ reply().whyNot }}</p>
       }
     </div>
+    @if (edition.state === 'returned' && mayAnswer()) {
+      <div class="actions kv-no-print">
+        <a
+          matButton="filled"
+          routerLink="/board/publish"
+          [queryParams]="{ fit: reply().content.fitId, answers: edition.id }"
+        >
+          Answer in a new edition
+        </a>
+      </div>
+    }
     @if (reply().mayReturn) {
       <div class="actions kv-no-print">
         <button matButton="outlined" type="button" (click)="returnWanted.emit()">
           Return with a comment
         </button>
         @if (reply().maySign) {
-          <button matButton="filled" type="button" (click)="signWanted.emit()">
+          <button
+            matButton="filled"
+            type="button"
+            [disabled]="left() > 0"
+            (click)="signWanted.emit()"
+          >
             Sign edition {{ edition.number }}
           </button>
         }
@@ -84,15 +113,23 @@ import { shortSha } from './edition-words';
 })
 export class SignatureBlock {
   readonly reply = input.required<EditionReply>();
+  /** Whether the person may publish, and so answer a returned edition. */
+  readonly mayAnswer = input(false);
   readonly signWanted = output();
+  /** The person wants to go to the next serious warning that is not opened. */
+  readonly nextWanted = output();
   readonly returnWanted = output();
 
   protected readonly shortSha = shortSha;
-  protected readonly warningsText = computed(() => {
-    const count = this.reply().content.fit.warnings.length;
-    if (count === 0) return 'The fit has no warnings.';
-    return count === 1
-      ? '1 warning stands above: read it first.'
-      : `${count} warnings stand above: read them first.`;
+  protected readonly serious = computed(() =>
+    this.reply().content.warnings.filter(({ isSerious }) => isSerious),
+  );
+  protected readonly left = computed(() => {
+    const { openedWarnings } = this.reply();
+    return this.serious().filter(({ id }) => !openedWarnings.includes(id)).length;
+  });
+  protected readonly countText = computed(() => {
+    const all = this.serious().length;
+    return `${all - this.left()} of ${counted(all, 'serious warning')} opened.`;
   });
 }

@@ -71,6 +71,7 @@ import { storedFigures } from './scenario-text';
                 <input
                   type="checkbox"
                   [checked]="drawn().includes(row.scenario.id)"
+                  [disabled]="isFull() && !drawn().includes(row.scenario.id)"
                   [attr.aria-label]="'Draw ' + row.scenario.name + ' in the chart'"
                   (change)="drawnToggled.emit(row.scenario.id)"
                 />
@@ -130,6 +131,8 @@ export class ScenarioList {
   readonly form = input<PredictionBasis['form']>();
   /** Ids of those that the chart shows. */
   readonly drawn = input.required<readonly string[]>();
+  /** Whether the chart has room for no more. */
+  readonly isFull = input(false);
   readonly mayChange = input(false);
   readonly opened = output<PlannedFigureWanted>();
   readonly drawnToggled = output<string>();

@@ -1,3 +1,4 @@
+import { Clipboard } from '@angular/cdk/clipboard';
 import {
   ChangeDetectionStrategy,
   Component,
@@ -15,27 +16,28 @@ import { Router, RouterLink } from '@angular/router';
 import type { ScenarioReply } from '@contract';
 import type { ExpectedPathChoice } from '@figures';
 import { LineageStore } from '../api/lineage-store';
-import { DifferenceBars } from '../charts/difference-bars/difference-bars';
-import { ExpectedPath } from '../charts/expected-path/expected-path';
 import { CautionLine } from '../ui/caution-line';
 import { EmptyState } from '../ui/empty-state';
-import { levelKind, logUnit } from '../ui/model-form';
 import { NumberFormat } from '../ui/number-format';
 import { PageContext } from '../ui/page-context';
 import { PageHeader } from '../ui/page-header';
-import { withYearSet } from '../ui/plan/change-plan';
 import { chosenFigure } from '../ui/plan/chosen-figure';
-import { FamiliarNotes } from '../ui/plan/familiar-notes';
-import { differenceData, expectedPathData } from '../ui/plan/plan-data';
-import { PlanAssumptions } from '../ui/plan/plan-assumptions';
-import { PlanEditor } from '../ui/plan/plan-editor';
 import { PlanTable, type PlannedFigureWanted } from '../ui/plan/plan-table';
-import { decidingYear, expectedName, planFinding } from '../ui/plan/plan-words';
+import { decidingYear, planFinding } from '../ui/plan/plan-words';
 import { planLineage } from '../ui/plan/planned-figure';
-import type { PlannedYear } from '../ui/plan/read-plan';
 import { ProblemNotice } from '../ui/problem-notice';
 import { UndoNotice } from '../ui/undo-notice';
 import { DraftKeeper } from './draft-keeper';
+import { PlanDesk } from './plan-desk';
+import { PlanEntry } from './plan-entry';
+import { mostCompared } from './results/compared-plans';
+import { PageComparison } from './results/page-comparison';
+import { PlanParts } from './results/plan-parts';
+import { PlanPath } from './results/plan-path';
+import { PlanResults } from './results/plan-results';
+import { PlanSensitivity } from './results/plan-sensitivity';
+import { ReachValue } from './results/reach-value';
+import { UncertainPlan } from './results/uncertain-plan';
 import { ScenarioEdits } from './scenario-edits';
 import { ScenarioList } from './scenario-list';
 import { ScenarioName, nameProblem } from './scenario-name';
@@ -45,37 +47,51 @@ import { ScenarioState } from './scenario-state';
 import { ScenarioStore } from './scenario-store';
 import { storedFigures } from './scenario-text';
 import { contextOf } from './scenario-words';
-import { shortHash } from '../ui/phrases';
-
-const unnamed = 'This plan';
+import { BothVersions } from './versions/both-versions';
+import { CopiedNotice } from './versions/copied-notice';
+import { ScenarioVersions } from './versions/scenario-versions';
 
 /** What would our plan do to the expected value? */
 @Component({
   selector: 'kv-scenarios-page',
   imports: [
     CautionLine,
-    DifferenceBars,
+    BothVersions,
+    CopiedNotice,
     EmptyState,
-    ExpectedPath,
-    FamiliarNotes,
     MatButton,
+    PageComparison,
     PageHeader,
-    PlanAssumptions,
-    PlanEditor,
+    PlanEntry,
+    PlanParts,
+    PlanPath,
+    PlanSensitivity,
     PlanTable,
     ProblemNotice,
+    ReachValue,
     RouterLink,
     ScenarioList,
     ScenarioName,
     ScenarioNotices,
+    ScenarioVersions,
+    UncertainPlan,
   ],
   templateUrl: './scenarios-page.html',
   styleUrl: './scenarios-page.css',
-  providers: [DraftKeeper, ScenarioState, ScenarioEdits, ScenarioShelf, ScenarioStore],
+  providers: [
+    DraftKeeper,
+    ScenarioState,
+    ScenarioEdits,
+    ScenarioShelf,
+    ScenarioStore,
+    PlanDesk,
+    PlanResults,
+  ],
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class ScenariosPage {
   readonly #destroyRef = inject(DestroyRef);
+  readonly #clipboard = inject(Clipboard);
   readonly #context = inject(PageContext);
   readonly #lineage = inject(LineageStore);
   readonly #locale = inject(LOCALE_ID);
@@ -84,6 +100,8 @@ export class ScenariosPage {
   readonly #undo = inject(UndoNotice);
   readonly #shelf = inject(ScenarioShelf);
   protected readonly edits = inject(ScenarioEdits);
+  protected readonly desk = inject(PlanDesk);
+  protected readonly results = inject(PlanResults);
   protected readonly store = inject(ScenarioStore);
 
   /** A saved scenario, from the path. */
@@ -91,32 +109,21 @@ export class ScenariosPage {
   /** The fit of a new plan, from the query. */
   readonly fit = input<string>();
 
+  protected readonly mostBeside = mostCompared - 1;
   protected readonly isTried = signal(false);
+  protected readonly linkSaid = signal('');
+  /** The newest fit, where the scenario stands on an older one. */
+  protected readonly newestFit = computed(() => {
+    const ground = this.store.ground();
+    const newest = ground?.desk.fit?.id;
+    return newest === ground?.fit.fit.id ? undefined : newest;
+  });
   protected readonly drawn = signal<readonly string[]>([]);
-  protected readonly name = computed(() => this.store.text().name.trim() || unnamed);
-  protected readonly form = computed(() => this.store.ground()?.basis.form);
-  protected readonly partsKind = computed(() => levelKind(this.form()));
-  protected readonly partsName = computed(() =>
-    this.form() === 'log' ? `difference, ${logUnit}` : 'difference',
-  );
   protected readonly last = computed(() => decidingYear(this.store.reading()?.years ?? []) ?? null);
   protected readonly finding = computed(() => {
     const [ground, last] = [this.store.ground(), this.last()];
     if (ground === null || last === null) return 'Scenarios';
-    return planFinding(this.name(), ground.basis, last, this.#numbers);
-  });
-  protected readonly confidence = computed(() => {
-    const share = this.store.ground()?.basis.confidence ?? 0;
-    return `${Math.round(share * 1000) / 10} % intervals`;
-  });
-  protected readonly caption = computed(
-    () => `${this.#numbers.unitLabel()} · ${this.confidence()}`,
-  );
-  protected readonly source = computed(() => {
-    const ground = this.store.ground();
-    if (ground === null) return '';
-    const { basis, fit } = ground;
-    return `${this.caption()} · against the base, which holds FY${basis.last.year} · standing held fixed · fit ${shortHash(fit.fit.hash)}`;
+    return planFinding(this.results.name(), ground.basis, last, this.#numbers);
   });
   protected readonly saveLabel = computed(() => {
     const saved = this.store.ground()?.saved ?? null;
@@ -132,7 +139,7 @@ export class ScenariosPage {
     const years = this.store.reading()?.years ?? [];
     return [
       {
-        name: this.name(),
+        name: this.results.name(),
         years: years.map((year) => ({ ...year, familiar: year.familiar.kind })),
       },
     ];
@@ -141,41 +148,17 @@ export class ScenariosPage {
     const ground = this.store.ground();
     return ground?.scenarios.filter(({ id }) => id !== ground.saved?.id) ?? [];
   });
+  /** Saved ones beside the plan on the page, as many as can be compared with it. */
+  protected readonly compared = computed(() =>
+    this.others()
+      .filter(({ id }) => this.drawn().includes(id))
+      .slice(0, this.mostBeside),
+  );
   /** The plans of the chart, the one on the page first. */
-  protected readonly drawnPlans = computed(() => {
-    const compared = this.others().filter(({ id }) => this.drawn().includes(id));
-    return [...this.plans(), ...compared.map(storedFigures)];
-  });
-  protected readonly path = computed(() => {
-    const [ground, reading] = [this.store.ground(), this.store.reading()];
-    if (ground === null || reading === null) return null;
-    const ownYears = ground.fit.result?.ownYears ?? [];
-    return expectedPathData(ownYears, reading.bases, this.drawnPlans());
-  });
-  protected readonly pathText = computed(() => ({
-    title: this.finding(),
-    caption: `Market value, ${this.caption()} of the ${expectedName(this.form()).toLowerCase()}`,
-    source: this.source(),
-  }));
-  protected readonly parts = computed(() => {
-    const [ground, last] = [this.store.ground(), this.last()];
-    return ground === null || last === null
-      ? null
-      : differenceData(last, ground.labels, ground.basis.lag);
-  });
-  protected readonly partsText = computed(() => {
-    const title = `What makes the difference to the base in FY${this.last()?.year ?? ''}`;
-    const source = this.source();
-    // Shares do not add up, logs do.
-    return this.form() === 'log'
-      ? {
-          title: `${title}, in ${logUnit}`,
-          caption: `${logUnit}, whose parts add up: 0.1 is 10.5 % more · ${this.confidence()}`,
-          source,
-        }
-      : { title, caption: this.caption(), source };
-  });
-
+  protected readonly drawnPlans = computed(() => [
+    ...this.plans(),
+    ...this.compared().map(storedFigures),
+  ]);
   constructor() {
     effect(() => {
       const address = { scenarioId: this.scenarioId() ?? null, fitId: this.fit() ?? null };
@@ -186,14 +169,6 @@ export class ScenariosPage {
       if (ground === null) return;
       untracked(() => this.#context.show(contextOf(ground, this.#locale)));
     });
-  }
-
-  protected changePlan(plan: readonly PlannedYear[]): void {
-    this.edits.change({ plan }, { words: 'the plan' });
-  }
-
-  protected setInside({ year, values }: PlannedYear): void {
-    this.changePlan(withYearSet(this.store.text().plan, year, values));
   }
 
   protected openFigure(wanted: PlannedFigureWanted): void {
@@ -236,6 +211,15 @@ export class ScenariosPage {
 
   protected async copy(scenario: ScenarioReply): Promise<void> {
     await this.#follow(() => this.#shelf.copy(scenario));
+  }
+
+  protected async copyOnto(scenario: ScenarioReply, fitId: string): Promise<void> {
+    await this.#follow(() => this.#shelf.copyOnto(scenario, fitId));
+  }
+
+  protected copyLink(): void {
+    const isCopied = this.#clipboard.copy(location.href);
+    this.linkSaid.set(isCopied ? 'Link copied' : 'The link could not be copied');
   }
 
   protected async remove(scenario: ScenarioReply): Promise<void> {

@@ -1,7 +1,14 @@
 import type { Routes, UrlMatchResult, UrlSegment } from '@angular/router';
 
-/** Pages under /scenarios: a new plan, or `:scenarioId`. One route, so that saving a new plan keeps the page. */
+/**
+ * Pages under /scenarios: a new plan, or `:scenarioId`, and `compare?of=id,id`. The first two are one route, so that
+ * saving a new plan keeps the page.
+ */
 export const routes: Routes = [
+  {
+    path: 'compare',
+    loadComponent: async () => (await import('./results/compare-page')).ComparePage,
+  },
   {
     matcher: newOrSaved,
     loadComponent: async () => (await import('./scenarios-page')).ScenariosPage,

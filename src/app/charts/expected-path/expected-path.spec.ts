@@ -83,6 +83,9 @@ describe('expected path', () => {
     expect(page.querySelector('.band-area')?.getAttribute('d')).not.toBe('');
     fixture.componentRef.setInput('bandName', '80 % band of the market value');
     await chart.toggle();
+    // An interval at a higher level may cover the band: its edge stands over both.
+    const shapes = [...page.querySelectorAll('path')].map((path) => path.getAttribute('class'));
+    expect(shapes.indexOf('band-edge')).toBeGreaterThan(shapes.indexOf('interval-area within'));
     expect(page.querySelector('svg')?.textContent).toContain('80 % band of the market value');
     expect((await chart.points()).at(-1)).toBe(
       '2027, Plan B: expected 10,340 (10,040 to 10,640), 80 % band of the market value 8,000 to 12,680',

@@ -64,7 +64,7 @@ export class PlanPath {
       shown === null ? 'expected value' : expectedWords(shown.basis.form, shown.outlook);
     return {
       title: this.finding(),
-      caption: `Market value, ${this.#results.caption()} of the ${words}, ${this.bandName()}`,
+      caption: `Market value, ${this.#results.caption()} of the ${words}, ${this.bandName()} (dotted edge)`,
       source: this.#results.source(),
     };
   });

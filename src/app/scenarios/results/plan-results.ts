@@ -3,6 +3,7 @@ import type { PlanOutlook, PlanUncertainty } from '@contract';
 import type { PredictionBasis } from '@prediction';
 import { NumberFormat } from '../../ui/number-format';
 import { confidenceText, shortHash } from '../../ui/phrases';
+import { isUncertain } from '../../ui/plan/change-asked';
 import type { PlanReading, PlannedYear } from '../../ui/plan/read-plan';
 import { ScenarioState } from '../scenario-state';
 import { outlookWords } from '../outlook/outlook-words';
@@ -32,6 +33,8 @@ export class PlanResults {
   readonly #numbers = inject(NumberFormat);
   readonly #state = inject(ScenarioState);
 
+  /** Whether any amount of the plan has a low and a high. */
+  readonly isUncertain = computed(() => isUncertain(this.#state.text()));
   readonly name = computed(() => this.#state.text().name.trim() || unnamed);
   readonly caption = computed(() =>
     resultCaption(this.#numbers.unitLabel(), this.#state.text().outlook),

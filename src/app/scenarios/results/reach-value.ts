@@ -36,7 +36,10 @@ export class ReachValue {
 
   readonly #typed = signal<number | null>(null);
   protected readonly isUnreadable = signal(false);
-  protected readonly regressor = signal(0);
+  readonly #regressor = signal(0);
+  protected readonly regressor = this.#regressor.asReadonly();
+  /** What is told to those who cannot see it: the answer after a choice made here, not after every move of a slider. */
+  protected readonly said = signal('');
   protected readonly labels = computed(() => this.#results.shown()?.labels.map(capitalised) ?? []);
   /** Years whose planned amounts the model reads, with what it reads. */
   readonly #readable = computed(() => {
@@ -86,10 +89,32 @@ export class ReachValue {
     };
   });
 
+  protected setRegressor(regressor: number): void {
+    this.#regressor.set(regressor);
+    this.#say();
+  }
+
+  protected setYear(year: number): void {
+    this.chosen.choose(year);
+    this.#say();
+  }
+
   protected setTarget(text: string): void {
     const value = readNumber(text);
     this.isUnreadable.set(value === undefined);
-    if (value !== undefined) this.#typed.set(this.numbers.toPanelUnit(value));
+    if (value === undefined) return;
+    this.#typed.set(this.numbers.toPanelUnit(value));
+    this.#say();
+  }
+
+  protected use(amount: PlannedAmount, cell: string): void {
+    this.amountWanted.emit(amount);
+    this.said.set(`${cell} is set in the plan.`);
+  }
+
+  #say(): void {
+    const answer = this.answer();
+    this.said.set(answer === null ? '' : `${answer.words} ${answer.range}`);
   }
 
   #familiarOf(reach: Reach, year: number, regressors: readonly number[]) {
