@@ -117,6 +117,12 @@ export class MultiplesSection {
     source: this.source(),
   }));
 
+  /** At either end the button stays for the focus, and does nothing. */
+  protected turn(companies: number): void {
+    const first = this.first() + companies;
+    if (first >= 0 && first < this.found().length) this.first.set(first);
+  }
+
   protected choose(title: string): void {
     this.chosen.set(title);
   }
