@@ -91,6 +91,8 @@ export interface FileFinding {
   readonly code: FindingCode;
   readonly detail: string;
   readonly isBlocking: boolean;
+  /** Of a duplicate: line of the first row with the same company and year; absent on that row itself. */
+  readonly sameAs?: number;
 }
 
 export interface CellDifference {
