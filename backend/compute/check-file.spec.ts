@@ -61,6 +61,24 @@ describe('checkFile', () => {
     ]);
   });
 
+  it('says of a row that stands again where it stands first', () => {
+    const figures = ['1', '2', '3'];
+    const { findings } = check(
+      tableOf(
+        plainHeader,
+        ['A', '2020', ...figures],
+        ['B', '2020', ...figures],
+        ['A', '2020', ...figures],
+        ['A', 'FY2020', ...figures],
+      ),
+    );
+    expect(findings.map(({ row, code, sameAs }) => [row, code, sameAs])).toEqual([
+      [2, 'duplicate', undefined],
+      [4, 'duplicate', 2],
+      [5, 'duplicate', 2],
+    ]);
+  });
+
   it('shows the rows of its findings, whether they are taken, and those that are mended or left out', () => {
     const result = check(
       tableOf(

@@ -7,6 +7,7 @@ import { panelOfTable, type TablePanel } from './parsing/panel-of-table';
 import { reviewRows } from './parsing/review-rows';
 import { similarCompanies } from './parsing/spelling/similar-companies';
 import { findSpellings } from './parsing/spelling/spelling-findings';
+import { findSums } from './parsing/sum-findings';
 import type { Table } from './parsing/table';
 
 const mostFindings = 500;
@@ -29,7 +30,9 @@ export function checkFile(
   const panel = panelOfTable(file.table, recipe, findings);
   const { table } = panel.mended;
   const similar = similarCompanies(panel, current?.companies);
-  findSpellings(table, panel, table.header.indexOf(recipe.company), similar, findings);
+  const companyIndex = table.header.indexOf(recipe.company);
+  findSums(table, panel, companyIndex, findings);
+  findSpellings(table, panel, companyIndex, similar, findings);
   if (file.formulaCells > 0) findFormulas(table, mappedHeaders(recipe), findings);
   const listed = findings.first();
   return {

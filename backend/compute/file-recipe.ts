@@ -7,6 +7,8 @@ export type TableLayout =
   | { readonly kind: 'years-in-columns'; readonly item: string | null }
   | { readonly kind: 'sheet-a-variable'; readonly sheets: readonly string[] };
 
+export type TextEncoding = 'utf-8' | 'windows-1252' | 'utf-16';
+
 /** How a file becomes a table: sheet, header and layout. */
 export interface TableReading {
   /** Null for a CSV file. */
@@ -15,6 +17,8 @@ export interface TableReading {
   readonly headerRow: number;
   readonly layout: TableLayout;
   readonly decimalSign: 'as-found' | '.' | ',';
+  /** Of a CSV file; absent for a workbook, or to have it recognised. */
+  readonly encoding?: TextEncoding;
 }
 
 /** What a column measures: a flow is converted at the average rate of its year, a stock at the year-end one. */

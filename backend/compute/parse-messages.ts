@@ -75,6 +75,10 @@ export type FindingCode =
   | 'spelling'
   | 'no-rate'
   | 'currency'
+  /** A figure with the sign or code of another currency. */
+  | 'other-currency'
+  /** A company’s name that says it is a sum or a mean of others. */
+  | 'sum'
   | 'no-price-index'
   | 'formula'
   /** A mended cell or a left-out line that the file, as it is read, does not have. */
@@ -87,6 +91,8 @@ export interface FileFinding {
   readonly code: FindingCode;
   readonly detail: string;
   readonly isBlocking: boolean;
+  /** Of a duplicate: line of the first row with the same company and year; absent on that row itself. */
+  readonly sameAs?: number;
 }
 
 export interface CellDifference {

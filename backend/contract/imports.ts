@@ -23,6 +23,9 @@ export const TableLayout = z.discriminatedUnion('kind', [
 ]);
 export type TableLayout = z.infer<typeof TableLayout>;
 
+export const TextEncoding = z.enum(['utf-8', 'windows-1252', 'utf-16']);
+export type TextEncoding = z.infer<typeof TextEncoding>;
+
 /** How a file becomes a table: sheet, header and layout. */
 export const TableReading = z.strictObject({
   /** Null for a CSV file. */
@@ -32,6 +35,8 @@ export const TableReading = z.strictObject({
   layout: TableLayout,
   /** `as-found` decides by each column's own numbers. */
   decimalSign: z.enum(['as-found', '.', ',']),
+  /** How the text of a CSV file is written; absent for a workbook, or to have it recognised. */
+  encoding: TextEncoding.optional(),
 });
 export type TableReading = z.infer<typeof TableReading>;
 
@@ -177,6 +182,10 @@ export const ImportFinding = z.object({
     'spelling',
     'no-rate',
     'currency',
+    /** A figure with the sign or code of another currency. */
+    'other-currency',
+    /** A company’s name that says it is a sum or a mean of others. */
+    'sum',
     'no-price-index',
     'formula',
     /** A mended cell or a left-out line that the file, as it is read, does not have. */
@@ -185,6 +194,8 @@ export const ImportFinding = z.object({
   detail: z.string(),
   /** Whether the panel cannot be brought in while this stands. */
   isBlocking: z.boolean(),
+  /** Of a duplicate: line of the first row with the same company and year; absent on that row itself. */
+  sameAs: z.number().int().optional(),
 });
 export type ImportFinding = z.infer<typeof ImportFinding>;
 

@@ -1,16 +1,6 @@
-import { group, max } from 'd3';
+import { type CoverageEntry, type CoverageTable, nameSize } from './coverage-map-table';
 import type { PlacedTick } from './figure-types';
-import { clippedWords, wordsWidth } from './text-width';
-
-/** A row of the panel, by what it lacks. A company and year without a row lack everything. */
-export interface CoverageCell {
-  readonly company: string;
-  readonly year: number;
-  /** Names of the variables without a value. */
-  readonly missing: readonly string[];
-  /** Names of the variables with a value that someone should look at, and of what else is so in the row. */
-  readonly flagged?: readonly string[];
-}
+import { clippedWords } from './text-width';
 
 /** Consecutive years in which all of some companies have every figure. */
 export interface CoverageFrame {
@@ -19,25 +9,24 @@ export interface CoverageFrame {
   readonly companies: readonly string[];
 }
 
-export interface CoverageData {
-  readonly cells: readonly CoverageCell[];
-  /** Every variable that is wanted. */
-  readonly variables: readonly string[];
-  /** Only this variable counts; null counts all. */
-  readonly variable: string | null;
-  readonly ownCompany: string | null;
-  /** Drawn as an outline. */
-  readonly frame?: CoverageFrame | null;
+/** Places of companies in the order of the table. */
+export interface CoverageSpan {
+  readonly first: number;
+  /** Not among them. */
+  readonly end: number;
 }
 
-export type CoverageState = 'complete' | 'some' | 'none';
+export interface CoverageMapOptions {
+  /** Of the container, CSS pixels. */
+  readonly width: number;
+  /** Drawn as an outline. */
+  readonly frame?: CoverageFrame | null;
+  /** Only these companies are drawn, under the years; all without it. */
+  readonly shown?: CoverageSpan;
+}
 
-export interface PlacedCoverageCell {
-  readonly year: number;
+export interface PlacedCoverageCell extends CoverageEntry {
   readonly x: number;
-  readonly state: CoverageState;
-  readonly missing: readonly string[];
-  readonly flagged: readonly string[];
 }
 
 export interface CoverageRow {
@@ -48,17 +37,27 @@ export interface CoverageRow {
   readonly cells: readonly PlacedCoverageCell[];
 }
 
-export interface CoverageMapLayout {
+export interface CoverageSpaces {
   readonly width: number;
-  readonly height: number;
+  /** Before a name is clipped. */
+  readonly nameWidth: number;
+  /** Where the cells begin. */
+  readonly left: number;
   readonly cellWidth: number;
   readonly cellHeight: number;
+}
+
+export interface CoverageMapLayout extends CoverageSpaces {
+  /** Of what is drawn. */
+  readonly height: number;
+  /** Of all companies below one another. */
+  readonly fullHeight: number;
   readonly markSize: number;
   readonly nameX: number;
-  readonly left: number;
   readonly top: number;
   readonly years: readonly PlacedTick[];
-  /** Own company first, the others in the order of the alphabet. */
+  /** What is drawn of the companies. */
+  readonly shown: CoverageSpan;
   readonly rows: readonly CoverageRow[];
   /** Around the frame: one outline for each run of its companies that stand together. */
   readonly frame: readonly FrameBox[];
@@ -73,79 +72,63 @@ export interface FrameBox {
 
 const leastCell = 18;
 const mostCell = 32;
+const mostRow = 24;
 const yearLabel = 40;
+const nameX = 18;
 const headHeight = 28;
+const footHeight = 6;
 
-function stateOf({ missing }: Pick<CoverageCell, 'missing'>, wanted: number): CoverageState {
-  if (missing.length === 0) return 'complete';
-  return missing.length >= wanted ? 'none' : 'some';
-}
-
-/** What is flagged that counts: of one variable alone where one is looked at. */
-function flaggedOf(cell: CoverageCell | undefined, variable: string | null): readonly string[] {
-  const flagged = cell?.flagged ?? [];
-  return variable === null ? flagged : flagged.filter((name) => name === variable);
+/** How much room names and cells get, whichever companies are drawn. */
+export function coverageSpaces(
+  { longestName, years }: Pick<CoverageTable, 'longestName' | 'years'>,
+  width: number,
+): CoverageSpaces {
+  const nameWidth = Math.min(longestName, Math.max(84, width * 0.24));
+  const left = nameX + nameWidth + 10;
+  const room = (width - left - 8) / Math.max(1, years.length);
+  const cellWidth = Math.floor(Math.min(mostCell, Math.max(leastCell, room)));
+  return {
+    width: Math.max(left + years.length * cellWidth + 14, Math.min(width, left + 60)),
+    nameWidth,
+    left,
+    cellWidth,
+    cellHeight: Math.min(cellWidth, mostRow),
+  };
 }
 
 /** One row a company, one column a year of the whole span, and whether the values are there. */
-export function coverageMapLayout(data: CoverageData, width: number): CoverageMapLayout {
-  const wanted =
-    data.variable === null
-      ? data.variables
-      : data.variables.filter((variable) => variable === data.variable);
-  const byCompany = group(data.cells, (cell) => cell.company);
-  const companies = [...byCompany.keys()].sort(
-    (a, b) =>
-      Number(b === data.ownCompany) - Number(a === data.ownCompany) || a.localeCompare(b, 'en'),
-  );
-  const seen = data.cells.map((cell) => cell.year);
-  const first = seen.reduce((least, year) => Math.min(least, year), Infinity);
-  const last = seen.reduce((most, year) => Math.max(most, year), -Infinity);
-  const years =
-    seen.length === 0 ? [] : Array.from({ length: last - first + 1 }, (_, k) => first + k);
-
-  const longest = max(companies, (company) => wordsWidth(company, 13)) ?? 0;
-  const nameWidth = Math.min(longest, Math.max(84, width * 0.24));
-  const left = 18 + nameWidth + 10;
-  const room = (width - left - 8) / Math.max(1, years.length);
-  const cellWidth = Math.floor(Math.min(mostCell, Math.max(leastCell, room)));
-  const rowHeight = Math.min(cellWidth, 24);
+export function coverageMapLayout(
+  table: CoverageTable,
+  { width, frame = null, shown = { first: 0, end: table.companies.length } }: CoverageMapOptions,
+): CoverageMapLayout {
+  const { companies, ownCompany, years, entriesOf } = table;
+  const spaces = coverageSpaces(table, width);
+  const { nameWidth, left, cellWidth, cellHeight } = spaces;
   const step = Math.max(1, Math.ceil(yearLabel / cellWidth));
+  const [first, last] = [years.at(0) ?? 0, years.at(-1) ?? 0];
   const placeOf = (year: number) => left + (year - first + 0.5) * cellWidth;
+  const drawn = companies.slice(shown.first, shown.end);
+  const heightOf = (rows: number) => headHeight + rows * cellHeight + footHeight;
 
   return {
-    width: Math.max(left + years.length * cellWidth + 14, Math.min(width, left + 60)),
-    height: headHeight + companies.length * rowHeight + 6,
-    cellWidth,
-    cellHeight: rowHeight,
-    markSize: rowHeight - 8,
-    nameX: 18,
-    left,
+    ...spaces,
+    height: heightOf(drawn.length),
+    fullHeight: heightOf(companies.length),
+    markSize: cellHeight - 8,
+    nameX,
     top: headHeight,
     years: years
       .filter((year) => (last - year) % step === 0)
       .map((year) => ({ value: year, position: placeOf(year), label: String(year) })),
-    rows: companies.map((company, place) => {
-      const ofYear = new Map(byCompany.get(company)?.map((cell) => [cell.year, cell]));
-      return {
-        company,
-        name: clippedWords(company, nameWidth + 2, 13),
-        isOwn: company === data.ownCompany,
-        y: headHeight + (place + 0.5) * rowHeight,
-        cells: years.map((year) => {
-          const cell = ofYear.get(year);
-          const missing = wanted.filter((name) => cell?.missing.includes(name) ?? true);
-          return {
-            year,
-            x: placeOf(year),
-            state: stateOf({ missing }, wanted.length),
-            missing,
-            flagged: flaggedOf(cell, data.variable),
-          };
-        }),
-      };
-    }),
-    frame: frameBoxes(data.frame ?? null, companies, { first, left, cellWidth, rowHeight }),
+    shown: { first: shown.first, end: shown.first + drawn.length },
+    rows: drawn.map((company, place) => ({
+      company,
+      name: clippedWords(company, nameWidth + 2, nameSize),
+      isOwn: company === ownCompany,
+      y: headHeight + (place + 0.5) * cellHeight,
+      cells: entriesOf(shown.first + place).map((entry) => ({ ...entry, x: placeOf(entry.year) })),
+    })),
+    frame: frameBoxes(frame, drawn, { first, left, cellWidth, rowHeight: cellHeight }),
   };
 }
 

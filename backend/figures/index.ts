@@ -3,6 +3,14 @@ export * from './company-multiples-layout';
 export type { CompanySeries, MultiplesLine, MultiplesPoint } from './company-multiples-lines';
 export * from './company-plane-layout';
 export * from './coverage-map-layout';
+export {
+  type CoverageCell,
+  type CoverageData,
+  type CoverageEntry,
+  type CoverageState,
+  type CoverageTable,
+  coverageTable,
+} from './coverage-map-table';
 export * from './difference-bars-layout';
 export * from './expected-path-layout';
 export type { EndLabel } from './expected-path-labels';

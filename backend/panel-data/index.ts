@@ -10,5 +10,6 @@ export { similarNames } from './names/similar-names';
 export * from './matched-columns';
 export * from './panel-cells';
 export * from './panel-differences';
+export { isPercent } from './numbers/currency-mark';
 export { decimalSignIn } from './numbers/decimal-sign-in';
 export { type DecimalSign, parseNumber } from './numbers/parse-number';

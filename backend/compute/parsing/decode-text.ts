@@ -1,14 +1,17 @@
 import { TextDecoder } from 'node:util';
+import type { TextEncoding } from '../file-recipe';
 import { TableError } from './table-error';
 import { utf16Of } from './utf16';
 
 /**
- * Decodes a byte stream as UTF-8, or as UTF-16 where its byte order mark or its zeros say so; the mark is taken off,
- * and every line end becomes a line feed.
+ * Decodes a byte stream; the byte order mark is taken off, and every line end becomes a line feed.
+ *
+ * @param encoding  where it is left out, UTF-16 where the byte order mark or zeros say so, and else UTF-8.
  * @throws {TableError} 'csv-invalid' for bytes that are no text, or a NUL character, with its line.
  */
 export async function* decodeText(
   source: AsyncIterable<Uint8Array> | Iterable<Uint8Array>,
+  encoding?: TextEncoding,
 ): AsyncGenerator<string> {
   let decoder: TextDecoder | undefined;
   let head: Uint8Array = new Uint8Array(0);
@@ -27,21 +30,22 @@ export async function* decodeText(
     if (decoder === undefined) {
       head = Buffer.concat([head, chunk]);
       if (head.length < 3) continue;
-      decoder = decoderFor(head);
+      decoder = decoderFor(head, encoding);
       yield decode(decoder, head);
     } else {
       yield decode(decoder, chunk);
     }
   }
   if (decoder === undefined) {
-    decoder = decoderFor(head);
+    decoder = decoderFor(head, encoding);
     yield decode(decoder, head);
   }
   yield decode(decoder);
 }
 
-function decoderFor(head: Uint8Array): TextDecoder {
-  return new TextDecoder(utf16Of(head) ?? 'utf-8', { fatal: true });
+function decoderFor(head: Uint8Array, encoding?: TextEncoding): TextDecoder {
+  const name = encoding === 'utf-16' ? (utf16Of(head) ?? 'utf-16le') : encoding;
+  return new TextDecoder(name ?? utf16Of(head) ?? 'utf-8', { fatal: true });
 }
 
 function decodeStrictly(decoder: TextDecoder, bytes: Uint8Array | undefined, line: number): string {
@@ -49,7 +53,7 @@ function decodeStrictly(decoder: TextDecoder, bytes: Uint8Array | undefined, lin
     return bytes === undefined ? decoder.decode() : decoder.decode(bytes, { stream: true });
   } catch (error) {
     if (!(error instanceof TypeError)) throw error;
-    const message = `expected text in UTF-8, or UTF-16; found other bytes after line ${line}. Save the file as “CSV UTF-8” and try again`;
+    const message = `expected text in ${decoder.encoding.toUpperCase()}; found other bytes after line ${line}. Choose the encoding that it has, or save the file as “CSV UTF-8” and try again`;
     throw new TableError('csv-invalid', message, { row: line });
   }
 }

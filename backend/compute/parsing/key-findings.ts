@@ -31,7 +31,11 @@ export function findDuplicates(
         }),
         isBlocking: true,
       });
-      findings.add(isOneFiscalYear ? { ...finding, found: String(keys.year[row]) } : finding);
+      findings.add({
+        ...finding,
+        ...(isOneFiscalYear && { found: String(keys.year[row]) }),
+        ...(row !== rows[0] && { sameAs: table.lines[keys.tableRow[rows[0]]] }),
+      });
     }
   }
 }

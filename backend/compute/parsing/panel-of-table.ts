@@ -1,6 +1,7 @@
 import { type FileRecipe, numericColumns } from '../file-recipe';
 import { textIndices } from './column-indices';
 import { type ConvertedPanel, convertPanel } from './conversion/convert-panel';
+import { findForeignMarks } from './conversion/foreign-marks';
 import type { FindingList } from './finding-list';
 import { companyNames } from './mending/company-names';
 import { mendTable, type Mended } from './mending/mend-table';
@@ -37,6 +38,7 @@ export function panelOfTable(table: Table, recipe: FileRecipe, findings: Finding
   const { company, year } = recipe;
   const mapping = { company, year, numbers: numericColumns(recipe) };
   const { numbers, ...keys } = readPanel(mended.table, mapping, terms, findings);
+  findForeignMarks(mended.table, { ...keys, numbers }, recipe, findings);
   const converted = convertPanel(mended.table, { ...keys, numbers }, recipe, findings);
   return { ...keys, ...converted, mended };
 }

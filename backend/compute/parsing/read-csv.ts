@@ -1,6 +1,7 @@
 import { CsvError, parse } from 'csv-parse';
 import { Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
+import type { TextEncoding } from '../file-recipe';
 import { addUnquotedLines } from './add-unquoted-lines';
 import { decodeText } from './decode-text';
 import { sniffDelimiter } from './sniff-delimiter';
@@ -18,16 +19,18 @@ const pieceLength = 65_536;
 const longestRecord = 4_194_304;
 
 /**
- * Reads a CSV file: comma, semicolon or tab, quoted fields, UTF-8 or UTF-16, as a stream.
+ * Reads a CSV file: comma, semicolon or tab, quoted fields, as a stream.
  *
  * @param source  the file's bytes, or a stream of them.
+ * @param encoding  how its text is written; UTF-16 is recognised, and else UTF-8 expected, where it is left out.
  * @throws {TableError} 'csv-invalid' with the line, or 'table-too-large' as soon as a limit is passed.
  */
 export async function readCsv(
   source: Uint8Array | AsyncIterable<Uint8Array>,
   limits: TableLimits = tableLimits,
+  encoding?: TextEncoding,
 ): Promise<{ readonly grid: Grid; readonly delimiter: Delimiter }> {
-  const text = decodeText(source instanceof Uint8Array ? piecesOf(source) : source);
+  const text = decodeText(source instanceof Uint8Array ? piecesOf(source) : source, encoding);
   try {
     const { head, isWhole } = await readHead(text);
     const delimiter = sniffDelimiter(head);

@@ -37,9 +37,37 @@ describe('a text file', () => {
       expect(table.header).toEqual(['Company', 'Year', 'Börsenwert']);
       expect(table.rows[1]).toEqual(['Birch', '2020', '2.5']);
       expect(reading.sheet).toBeNull();
+      expect(reading.encoding).toBe(encoding.startsWith('UTF-8') ? 'utf-8' : 'utf-16');
       expect(sheets).toEqual([]);
     });
   }
+
+  it('is read in Windows-1252 where it is no UTF-8, signs of money and quotes too', async () => {
+    const content = Buffer.from(
+      'Firma,Jahr,B\xf6rsenwert\nM\xfcller \x93A\x94,2020,\x805\n',
+      'latin1',
+    );
+    const { table, reading } = await readFile(content, 'peers.csv', null);
+    expect(table.header[2]).toBe('Börsenwert');
+    expect(table.rows[0]).toEqual(['Müller “A”', '2020', '€5']);
+    expect(reading.encoding).toBe('windows-1252');
+  });
+
+  it('is read in the encoding that is chosen, and refused where it is not in that', async () => {
+    const { reading } = await readFile(bytes(text), 'peers.csv', null);
+    const asWindows = await readFile(bytes(text), 'peers.csv', {
+      ...reading,
+      encoding: 'windows-1252',
+    });
+    expect(asWindows.table.header[2]).toBe('BÃ¶rsenwert');
+    const older = Buffer.from(text, 'latin1');
+    await expectAsync(
+      readFile(older, 'peers.csv', { ...reading, encoding: 'utf-8' }),
+    ).toBeRejectedWith(jasmine.objectContaining({ code: 'csv_invalid' }));
+    const { encoding, ...unsaid } = reading;
+    expect(encoding).toBe('utf-8');
+    expect((await readFile(older, 'peers.csv', unsaid)).table.header[2]).toBe('Börsenwert');
+  });
 
   it('is read below its titles, lines being those of the file', async () => {
     const { table, reading, topLines } = await readFile(
@@ -64,6 +92,7 @@ describe('a text file', () => {
       headerRow: 3,
       layout: { kind: 'long' },
       decimalSign: ',',
+      encoding: 'utf-8',
     };
     const file = await readFile(bytes(text), 'peers.csv', reading);
     expect(file.table.header).toEqual(['Birch', '2020', '2.5']);
@@ -91,7 +120,10 @@ describe('a text file', () => {
     expect(await codeOf(Buffer.alloc(10_000_000, 'a'), 'a.csv')).toBe('csv_invalid');
     expect(await codeOf(Buffer.alloc(10_000_000, 'a,'), 'a.csv')).toBe('csv_invalid');
     expect(await codeOf(bytes(`a,b\n1,${'x'.repeat(65_537)}\n`), 'a.csv')).toBe('csv_invalid');
-    expect(await codeOf(Buffer.from('Börse,b\n1,2\n', 'latin1'), 'a.csv')).toBe('csv_invalid');
+    expect(await codeOf(Buffer.from('B\x90rse,b\n1,2\n', 'latin1'), 'a.csv')).toBe('csv_invalid');
+    expect(await codeOf(Buffer.from('\xef\xbb\xbfB\xf6rse,b\n', 'latin1'), 'a.csv')).toBe(
+      'csv_invalid',
+    );
     expect(await codeOf(bytes(''), 'a.csv')).toBe('csv_invalid');
   });
 

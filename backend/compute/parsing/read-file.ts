@@ -4,7 +4,8 @@ import { fileKind } from './file-kind';
 import { FileRefusal } from './file-refusal';
 import { readCsv } from './read-csv';
 import { readSheets, type SheetsTable } from './read-sheets';
-import type { Delimiter, Table } from './table';
+import { type Delimiter, type Table, tableLimits } from './table';
+import { textEncodingOf } from './text-encoding';
 import { TableError } from './table-error';
 import type { Sheet } from './workbook/read-workbook';
 
@@ -43,9 +44,10 @@ export async function readFile(
 }
 
 async function readText(bytes: Uint8Array, reading: TableReading | null): Promise<FileTable> {
-  const { grid, delimiter } = await readCsv(bytes);
-  const sheet = { name: null, isHidden: false, grid };
-  return fileTable(readSheets([sheet], reading), delimiter, []);
+  const encoding = reading?.encoding ?? textEncodingOf(bytes);
+  const { grid, delimiter } = await readCsv(bytes, tableLimits, encoding);
+  const read = readSheets([{ name: null, isHidden: false, grid }], reading);
+  return fileTable({ ...read, reading: { ...read.reading, encoding } }, delimiter, []);
 }
 
 async function readXlsx(bytes: Uint8Array, reading: TableReading | null): Promise<FileTable> {

@@ -23,14 +23,14 @@ export function rowsWithGaps(
   rows: readonly PanelRow[],
   titles: readonly string[],
 ): readonly RowWithGap[] {
-  return rows
-    .map((row) => ({
-      company: row.company,
-      year: row.year,
-      fileRow: row.fileRow,
-      missing: missingIn(row, titles),
-    }))
-    .filter(({ missing }) => missing.length > 0);
+  const found: RowWithGap[] = [];
+  for (const row of rows) {
+    const missing = missingIn(row, titles);
+    if (missing.length === 0) continue;
+    const { company, year, fileRow } = row;
+    found.push({ company, year, fileRow, missing });
+  }
+  return found;
 }
 
 /** Every company that enters late, leaves early or skips a year. */
@@ -39,7 +39,9 @@ export function shorterCompanies(rows: readonly PanelRow[]): readonly ShorterCom
   const allYears = new Set<number>();
   for (const { company, year } of rows) {
     allYears.add(year);
-    yearsOf.set(company, (yearsOf.get(company) ?? new Set<number>()).add(year));
+    const years = yearsOf.get(company);
+    if (years === undefined) yearsOf.set(company, new Set([year]));
+    else years.add(year);
   }
   const [first, last] = span(allYears);
   return [...yearsOf].flatMap(([company, years]) => {

@@ -27,13 +27,21 @@ export function kindOf(column: PanelColumn): FigureKind {
   return column.role === 'other' ? 'plain' : 'money';
 }
 
-export function panelRows({ rows }: PanelVersionReply): readonly PanelRow[] {
-  return rows.fileRow.map((fileRow, row) => ({
-    fileRow,
-    company: rows.company[row],
-    year: rows.year[row],
-    values: rows.values.map((column) => column[row]),
+const rowsOf = new WeakMap<PanelVersionReply, readonly PanelRow[]>();
+
+/** The same rows each time for the same version: whoever shows them sees that nothing has changed. */
+export function panelRows(panel: PanelVersionReply): readonly PanelRow[] {
+  const known = rowsOf.get(panel);
+  if (known !== undefined) return known;
+  const { fileRow, company, year, values } = panel.rows;
+  const rows = fileRow.map((line, row) => ({
+    fileRow: line,
+    company: company[row],
+    year: year[row],
+    values: values.map((column) => column[row]),
   }));
+  rowsOf.set(panel, rows);
+  return rows;
 }
 
 /** The titles of the columns in which the row has no value. */

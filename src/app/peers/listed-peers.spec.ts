@@ -76,6 +76,8 @@ describe('members and candidates on the Peers page', () => {
     expect(ask.calls.mostRecent().args[0].companies).toEqual(shown);
     expect(ask.calls.mostRecent().args[0].reasons).toContain('Same customers');
     expect(words()).toContain(`${10 + shown.length} in, ${9 - shown.length} out`);
+    expect(document.activeElement?.id).toBe('peers-in');
+    expect(words()).toContain(`${shown.length} companies taken in.`);
     await press('Save peer group');
     const { body } = sent();
     for (const peer of body.peers.filter(({ company }) => shown.includes(company)))
@@ -89,6 +91,9 @@ describe('members and candidates on the Peers page', () => {
     expect(nearest.length).toBe(20);
     await press('List 9 more');
     const all = listedIn('out');
+    expect(document.activeElement?.getAttribute('aria-label')).toBe(
+      `Why ${all[20].company} is out`,
+    );
     expect(all.slice(0, 20)).toEqual(nearest);
     expect(all.length).toBe(29);
     reopen(all[25].company);
@@ -105,5 +110,15 @@ describe('members and candidates on the Peers page', () => {
     spyOn(TestBed.inject(AskReason), 'ask').and.resolveTo(null);
     await press('Leave all 9 out with one reason…');
     expect(words()).toContain('10 in, 9 out, 18 reasons missing.');
+  });
+
+  it('goes to what the choice is once the changes are discarded', async () => {
+    start(['analyst']);
+    await loadMany();
+    await press(`Take ${listedIn('out')[0].company} in`);
+    expect(words()).toContain('11 in, 8 out');
+    await press('Discard changes');
+    expect(document.activeElement?.textContent).toContain('10 in, 9 out');
+    expect(words()).toContain('The changes are discarded.');
   });
 });

@@ -1,6 +1,7 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  type ElementRef,
   Injector,
   afterNextRender,
   computed,
@@ -17,6 +18,7 @@ import { apiRoutes, mayCall } from '@contract';
 import { SessionStore } from '../api/session-store';
 import { Confirm } from '../ui/confirm';
 import { EmptyState } from '../ui/empty-state';
+import { catchLostFocus } from '../ui/lost-focus';
 import { Mark } from '../ui/mark';
 import { PageContext } from '../ui/page-context';
 import { PageHeader } from '../ui/page-header';
@@ -85,8 +87,11 @@ export class PeersPage {
   readonly company = input<string>();
 
   private readonly sides = viewChild(PeerSides);
+  private readonly counts = viewChild<ElementRef<HTMLElement>>('counts');
 
   protected readonly note = signal('');
+  /** What was done last with several companies at once, for the ear. */
+  protected readonly said = signal('');
   protected readonly hasAllParts = signal(false);
   protected readonly isReadOnly = computed(
     () => !mayCall(apiRoutes.savePeerGroup, this.#session.roles()),
@@ -187,7 +192,17 @@ export class PeersPage {
       reasons: this.store.reasons(),
       written: writtenCount(view.draft, companies, isIncluded),
     });
-    if (answer !== null) this.store.changeAll(companies, { isIncluded, ...answer });
+    if (answer === null) return;
+    this.store.changeAll(companies, { isIncluded, ...answer });
+    this.said.set(isIncluded ? `${who} taken in.` : `${who} left out.`);
+    this.sides()?.catchFocus(isIncluded);
+  }
+
+  /** The button leaves with the changes: the focus goes to what the choice is now. */
+  protected discard(): void {
+    this.store.discardChanges();
+    this.said.set('The changes are discarded.');
+    catchLostFocus(this.#injector, () => this.counts()?.nativeElement);
   }
 
   protected async save(): Promise<void> {

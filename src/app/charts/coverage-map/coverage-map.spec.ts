@@ -93,6 +93,80 @@ describe('coverage map', () => {
   });
 });
 
+describe('coverage map of a large panel', () => {
+  const companies = 1000;
+  const nameOf = (place: number) => `Company ${String(place).padStart(4, '0')}`;
+
+  async function shown() {
+    const fixture = TestBed.createComponent(CoverageMap);
+    const inputs = {
+      text: { title: 'Coverage', caption: '', source: '' },
+      cells: Array.from({ length: companies * 2 }, (_, k) => ({
+        company: nameOf(Math.floor(k / 2)),
+        year: 2024 + (k % 2),
+        missing: k % 2 === 1 ? ['capex'] : [],
+      })),
+      variables,
+    };
+    for (const [name, value] of Object.entries(inputs)) fixture.componentRef.setInput(name, value);
+    const chart = await TestbedHarnessEnvironment.loader(fixture).getHarness(ChartHarness);
+    const page = fixture.nativeElement as HTMLElement;
+    const names = () =>
+      [...page.querySelectorAll('text.name')].map((name) => name.textContent.trim());
+    return { fixture, chart, page, names, grid: await chart.grid() };
+  }
+
+  it('draws the companies in view alone, and says how many there are', async () => {
+    const { fixture, page, names } = await shown();
+    expect(names().length).toBeLessThan(100);
+    expect(page.querySelector('[role="grid"]')?.getAttribute('aria-rowcount')).toBe('1000');
+    const scroller = page.querySelector('.scroller')!;
+    scroller.scrollTop = 20_000;
+    scroller.dispatchEvent(new Event('scroll'));
+    await fixture.whenStable();
+    const box = scroller.getBoundingClientRect();
+    const within = [...page.querySelectorAll('text.name')].filter((name) => {
+      const { top, bottom } = name.getBoundingClientRect();
+      return top >= box.top && bottom <= box.bottom;
+    });
+    expect(within.length).toBeGreaterThan(15);
+    expect(names().length).toBeLessThan(100);
+    expect(names()).not.toContain(nameOf(0));
+  });
+
+  it('leads the keys to every company, and shows it', async () => {
+    const { page, names, grid } = await shown();
+    const current = () => {
+      const id = page.querySelector('[role="grid"]')?.getAttribute('aria-activedescendant');
+      return page.querySelector(`#${id}`)?.getAttribute('aria-label');
+    };
+    const end = (key: string) =>
+      page
+        .querySelector('[role="grid"]')!
+        .dispatchEvent(new KeyboardEvent('keydown', { key, ctrlKey: true, cancelable: true }));
+    end('End');
+    await grid.sendKeys(TestKey.LEFT_ARROW);
+    expect(current()).toBe(`${nameOf(999)} 2024: complete`);
+    expect(names()).toContain(nameOf(999));
+    await grid.sendKeys(TestKey.PAGE_UP);
+    expect(current()).toBe(`${nameOf(989)} 2024: complete`);
+    end('Home');
+    await grid.sendKeys(TestKey.DOWN_ARROW);
+    expect(current()).toBe(`${nameOf(1)} 2024: complete`);
+    expect(names()).toContain(nameOf(1));
+  });
+
+  it('says what a picture and the table hold, and holds it', async () => {
+    const { chart, page, names } = await shown();
+    const said = /picture holds 1 to (\d+), a table 1 to (\d+)/.exec(page.textContent);
+    expect(said?.slice(1)).toEqual([String(names().length), '200']);
+    await chart.toggle();
+    const table = await chart.table();
+    expect(table.length).toBe(200);
+    expect(table[199]).toEqual([nameOf(199), 'complete', 'no capex']);
+  });
+});
+
 describe('moving in a grid', () => {
   const at = { row: 5, column: 5 };
   const press = (key: string, ctrlKey = false) => gridMove({ key, ctrlKey }, at, 120, 30);

@@ -10,27 +10,39 @@ import {
 } from '@angular/core';
 import {
   type CoverageCell,
+  type CoverageEntry,
   type CoverageFrame,
-  type CoverageRow,
-  type PlacedCoverageCell,
   coverageMapLayout,
+  coverageSpaces,
+  coverageTable,
   diamondPath,
 } from '@figures';
 import { ChartFrame, ChartPicture } from '../chart-frame/chart-frame';
 import { ChartReadout } from '../chart-frame/chart-readout';
 import type { ChartColumn, ChartRow, ChartText } from '../chart-text';
-import { coverageCells } from './coverage-cells';
 import { type GridPlace, gridMove } from '../grid-move';
+import { companiesDrawn, companiesTold } from './companies-drawn';
+import { coverageCells } from './coverage-cells';
+import { entryWords, partWords, summaryWords } from './coverage-words';
 
 export interface SelectedCell {
   readonly company: string;
   readonly year: number;
 }
 
+/** A cell of the map, drawn or not. */
+interface CellAt extends GridPlace {
+  readonly company: string;
+  readonly entry: CoverageEntry;
+}
+
 /** Maps so far: each needs an id of its own for the cell that has the keyboard. */
 let maps = 0;
 
-/** Which company has values in which year: a grid that arrow keys walk, one tab stop. */
+/**
+ * Which company has values in which year: a grid that arrow keys walk, one tab stop. Of a large panel it draws the
+ * companies in view.
+ */
 @Component({
   selector: 'kv-coverage-map',
   imports: [ChartFrame, ChartPicture, ChartReadout],
@@ -61,18 +73,33 @@ export class CoverageMap {
   readonly #place = signal<GridPlace>({ row: 0, column: 0 });
   readonly #hovered = signal<GridPlace | null>(null);
 
-  protected readonly layout = computed(() =>
-    coverageMapLayout(
-      {
-        cells: this.cells(),
-        variables: this.variables(),
-        variable: this.variable(),
-        ownCompany: this.ownCompany(),
-        frame: this.frame(),
-      },
-      this.width(),
-    ),
+  protected readonly table = computed(() =>
+    coverageTable({
+      cells: this.cells(),
+      variables: this.variables(),
+      variable: this.variable(),
+      ownCompany: this.ownCompany(),
+    }),
   );
+  readonly #rowHeight = computed(() => coverageSpaces(this.table(), this.width()).cellHeight);
+  /** The same while it is scrolled within what is drawn. */
+  readonly #drawn = computed(
+    () =>
+      companiesDrawn(
+        this.table().companies.length,
+        Math.floor(this.scrolled().y / this.#rowHeight()),
+      ),
+    { equal: (left, right) => left.first === right.first && left.end === right.end },
+  );
+  protected readonly layout = computed(() =>
+    coverageMapLayout(this.table(), {
+      width: this.width(),
+      frame: this.frame(),
+      shown: this.#drawn(),
+    }),
+  );
+  /** How far down the picture of the drawn companies stands among all of them. */
+  protected readonly offset = computed(() => this.#drawn().first * this.#rowHeight());
   protected readonly marks = computed(() => coverageCells(this.layout()));
   /** The cell that the keyboard stands on; null in an empty map. */
   protected readonly current = computed(() => this.#at(this.#place()));
@@ -86,43 +113,32 @@ export class CoverageMap {
     return at === null ? '' : this.describe(at);
   });
 
-  readonly #counts = computed(() => {
-    const counts = { complete: 0, some: 0, none: 0, flagged: 0 };
-    for (const row of this.layout().rows)
-      for (const cell of row.cells) {
-        counts[cell.state] += 1;
-        if (cell.flagged.length > 0) counts.flagged += 1;
-      }
-    return counts;
-  });
-  protected readonly summary = computed(() => {
-    const { complete, some, none, flagged } = this.#counts();
-    const years = this.layout().rows.at(0)?.cells.length ?? 0;
-    const what = this.variable() ?? 'all values';
-    return [
-      `${this.layout().rows.length} companies in ${years} years.`,
-      `${what}: complete in ${complete} company years, partly missing in ${some}, none in ${none}.`,
-      ...(flagged === 0 ? [] : [`Flagged in ${flagged}.`]),
-    ].join(' ');
-  });
+  protected readonly summary = computed(() => summaryWords(this.table(), this.variable()));
+  readonly #told = computed(() => companiesTold(this.table().companies.length, this.#drawn()));
+  protected readonly part = computed(() =>
+    partWords(this.table().companies.length, this.#drawn(), this.#told()),
+  );
   /** The signs in words, for a picture that leaves the page without the line above the map. */
   protected readonly note = computed(() => {
     const signs = 'Full square: complete. Half: some missing. Dash: none. Small triangle: flagged.';
-    return this.layout().frame.length === 0 ? signs : `${signs} Outline: fully covered.`;
+    const outline = this.layout().frame.length === 0 ? '' : 'Outline: fully covered.';
+    return [signs, outline, this.part()].filter((words) => words !== '').join(' ');
   });
   protected readonly columns = computed((): ChartColumn[] => [
     { label: 'company', isNumber: false },
-    ...(this.layout().rows.at(0)?.cells ?? []).map(({ year }) => ({
-      label: String(year),
-      isNumber: false,
-    })),
+    ...this.table().years.map((year) => ({ label: String(year), isNumber: false })),
   ]);
-  protected readonly rows = computed((): ChartRow[] =>
-    this.layout().rows.map((row) => ({
-      isOwn: row.isOwn,
-      cells: [row.company, ...row.cells.map((cell) => this.#words(cell))],
-    })),
-  );
+  /** In words only once they are read: scrolling makes new rows, and nobody may ever ask for the table. */
+  protected readonly rows = computed((): ChartRow[] => {
+    const { companies, ownCompany, entriesOf } = this.table();
+    const { first, end } = this.#told();
+    return companies.slice(first, end).map((company, place) => ({
+      isOwn: company === ownCompany,
+      get cells() {
+        return [company, ...entriesOf(first + place).map(entryWords)];
+      },
+    }));
+  });
 
   protected move(event: KeyboardEvent): void {
     if (event.key === 'Enter' || event.key === ' ') {
@@ -130,8 +146,8 @@ export class CoverageMap {
       this.#select(this.#place());
       return;
     }
-    const { rows } = this.layout();
-    const next = gridMove(event, this.#place(), rows.length, rows.at(0)?.cells.length ?? 0);
+    const { companies, years } = this.table();
+    const next = gridMove(event, this.#place(), companies.length, years.length);
     if (next === null) return;
     event.preventDefault();
     this.#place.set(next);
@@ -158,24 +174,21 @@ export class CoverageMap {
     this.scrolled.set({ x: scrollLeft, y: scrollTop });
   }
 
-  protected describe({ row, cell }: { row: CoverageRow; cell: PlacedCoverageCell }): string {
-    return `${row.company} ${cell.year}: ${this.#words(cell)}`;
+  protected describe({ company, entry }: CellAt): string {
+    return `${company} ${entry.year}: ${entryWords(entry)}`;
   }
 
-  #words({ state, missing, flagged }: PlacedCoverageCell): string {
-    const words = state === 'some' ? `no ${missing.join(', no ')}` : state;
-    return flagged.length === 0 ? words : `${words}, flagged: ${flagged.join(', ')}`;
-  }
-
-  #at({ row: rowPlace, column }: GridPlace) {
-    const row = this.layout().rows.at(rowPlace);
-    const cell = row?.cells.at(column);
-    return row === undefined || cell === undefined ? null : { row, cell, rowPlace, column };
+  #at({ row, column }: GridPlace): CellAt | null {
+    const { companies, entriesOf } = this.table();
+    const company = companies.at(row);
+    if (company === undefined) return null;
+    const entry = entriesOf(row).at(column);
+    return entry === undefined ? null : { row, column, company, entry };
   }
 
   #select(place: GridPlace): void {
     const at = this.#at(place);
-    if (at !== null) this.cellSelected.emit({ company: at.row.company, year: at.cell.year });
+    if (at !== null) this.cellSelected.emit({ company: at.company, year: at.entry.year });
   }
 
   /** Names and years stay in sight while the map scrolls; what lies under them is no cell. */
@@ -199,5 +212,6 @@ export class CoverageMap {
       left: Math.max(x + chart.cellWidth - roomX, Math.min(view.scrollLeft, x)),
       top: Math.max(y + chart.cellHeight - roomY, Math.min(view.scrollTop, y)),
     });
+    this.follow(); // the event comes later than the next picture
   }
 }

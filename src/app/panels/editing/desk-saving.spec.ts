@@ -141,6 +141,7 @@ describe('the changes of a panel on the desk', () => {
         versions: [made, version],
       });
       expect(document.activeElement).toBe(held);
+      expect(desk.page.querySelector('.said')?.textContent).toBe('Version 5 saved');
       expect(desk.cell(2, 'figure-1').textContent).toContain('8');
       await desk.type('5');
       expect(desk.words).toContain('1 cell changed in version 5');

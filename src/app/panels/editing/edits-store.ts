@@ -55,9 +55,12 @@ export class EditsStore {
   readonly edits = computed(() => this.#history().now);
   readonly count = computed(() => countEdits(this.edits()));
   /** The version's rows as they would be saved. */
-  readonly rows = computed(() =>
-    editedRows(this.savedRows(), this.#saved(), this.#panel()?.columns.length ?? 0, this.edits()),
-  );
+  readonly rows = computed(() => {
+    // Without edits nobody needs a key for each of the rows.
+    if (this.count() === 0) return this.savedRows();
+    const columns = this.#panel()?.columns.length ?? 0;
+    return editedRows(this.savedRows(), this.#saved(), columns, this.edits());
+  });
   /** What Undo would take back, and Redo would do again; empty where there is nothing. */
   readonly undoWords = computed(() => this.#history().past.at(-1)?.words ?? '');
   readonly redoWords = computed(() => this.#history().future.at(-1)?.words ?? '');

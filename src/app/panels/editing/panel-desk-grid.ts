@@ -247,13 +247,18 @@ export class PanelDeskGrid {
 
   protected async save(): Promise<void> {
     const result = await this.#dialogs.save(this.panel());
-    if (result?.kind === 'saved') this.#goOn(result.panelVersionId);
-    else if (result?.kind === 'carry') await this.carry();
+    if (result?.kind === 'saved') {
+      this.said.set(`Version ${this.panel().version.number + 1} saved`);
+      this.#goOn(result.panelVersionId);
+    }
+    if (result?.kind === 'carry') await this.carry();
   }
 
   protected async carry(): Promise<void> {
     const newerId = this.newerId();
-    if (newerId !== null && (await this.#dialogs.carry(this.panel(), newerId))) this.#goOn(newerId);
+    if (newerId === null || !(await this.#dialogs.carry(this.panel(), newerId))) return;
+    this.said.set('The changes are carried onto the newer version');
+    this.#goOn(newerId);
   }
 
   protected openHistory(): void {

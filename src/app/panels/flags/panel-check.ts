@@ -64,25 +64,25 @@ export class PanelCheck {
     computation: () => null,
   });
   readonly #flaggedTitles = computed(() => {
-    const titles = new Map<string, string[]>();
+    const titles = new Map<string, Map<number, string[]>>();
     for (const list of this.store.byCell().values()) {
-      const [flag] = list.filter(({ facts }) => facts.code !== 'missing');
+      const flag = list.find(({ facts }) => facts.code !== 'missing');
       if (flag === undefined) continue;
-      const key = rowKey(flag);
-      const title = flag.column === null ? 'company name' : this.titles()[flag.column];
-      titles.set(key, [...(titles.get(key) ?? []), title]);
+      const { company, year, column } = flag;
+      const title = column === null ? 'company name' : this.titles()[column];
+      const ofYear = titles.get(company) ?? new Map<number, string[]>();
+      titles.set(company, ofYear.set(year, [...(ofYear.get(year) ?? []), title]));
     }
     return titles;
   });
   protected readonly cells = computed((): readonly CoverageCell[] => {
-    const flagged = this.#flaggedTitles();
-    const only = this.store.only();
+    const [flagged, titles, only] = [this.#flaggedTitles(), this.titles(), this.store.only()];
     const rows = only === null ? this.rows() : this.rows().filter(withinWindow(only));
     return rows.map((row) => ({
       company: row.company,
       year: row.year,
-      missing: missingIn(row, this.titles()),
-      flagged: flagged.size === 0 ? [] : (flagged.get(rowKey(row)) ?? []),
+      missing: missingIn(row, titles),
+      flagged: flagged.get(row.company)?.get(row.year) ?? [],
     }));
   });
   /** Years without a row in between are flags; this is who comes late or leaves early. */
@@ -92,9 +92,10 @@ export class PanelCheck {
       ({ firstYear, lastYear }) => firstYear > first || lastYear < last,
     );
   });
+  readonly #saved = computed(() => new Map(this.savedRows().map((row) => [rowKey(row), row])));
   protected readonly isSaved = computed((): ((flag: Flag) => boolean) => {
     if (this.rows() === this.savedRows()) return () => true;
-    const saved = new Map(this.savedRows().map((row) => [rowKey(row), row]));
+    const saved = this.#saved();
     return (flag) =>
       flag.column === null
         ? saved.has(rowKey(flag)) === (flag.facts.code !== 'year-gap')

@@ -41,7 +41,11 @@ describe('every company over time', () => {
   }
 
   function press(page: HTMLElement, name: string): Promise<void> {
-    [...page.querySelectorAll('button')].find((each) => each.textContent.trim() === name)?.click();
+    const button = [...page.querySelectorAll('button')].find(
+      (each) => each.textContent.trim() === name,
+    );
+    button?.focus();
+    button?.click();
     return fixture.whenStable();
   }
 
@@ -50,10 +54,15 @@ describe('every company over time', () => {
     expect(names(page).length).toBe(24);
     expect(names(page)[0]).toBe('Company 29');
     expect(page.querySelector('[role=status]')?.textContent).toBe('1 to 24 of 30 companies');
-    await press(page, 'On');
+    await press(page, 'More companies');
     expect(names(page)).toEqual([23, 24, 25, 26, 27, 28].map((company) => `Company ${company}`));
-    await press(page, 'Back');
-    expect(names(page)[0]).toBe('Company 29');
+    await press(page, 'More companies');
+    expect(names(page).length).toBe(6);
+    for (const time of ['once', 'once too often']) {
+      await press(page, 'Earlier companies');
+      expect(names(page)[0]).withContext(time).toBe('Company 29');
+    }
+    expect(document.activeElement?.textContent.trim()).toBe('Earlier companies');
   });
 
   it('finds companies by name, and says where none is called so', async () => {

@@ -78,12 +78,11 @@ export class MultiplesSection {
   /** The own company first. */
   protected readonly found = computed(() => {
     const [own, wanted] = [this.ownCompany(), this.search().trim().toLowerCase()];
+    // One collator for all: asked name by name, a panel of thousands takes long to sort.
+    const { compare } = new Intl.Collator('en');
     return [...this.#rowsOf().keys()]
       .filter((company) => company.toLowerCase().includes(wanted))
-      .sort(
-        (left, right) =>
-          Number(right === own) - Number(left === own) || left.localeCompare(right, 'en'),
-      );
+      .sort((left, right) => Number(right === own) - Number(left === own) || compare(left, right));
   });
   protected readonly first = linkedSignal({ source: this.found, computation: () => 0 });
   readonly #shown = computed(() =>
@@ -117,6 +116,12 @@ export class MultiplesSection {
       .join(', ')} · ${yearsText(...this.years())}`,
     source: this.source(),
   }));
+
+  /** At either end the button stays for the focus, and does nothing. */
+  protected turn(companies: number): void {
+    const first = this.first() + companies;
+    if (first >= 0 && first < this.found().length) this.first.set(first);
+  }
 
   protected choose(title: string): void {
     this.chosen.set(title);

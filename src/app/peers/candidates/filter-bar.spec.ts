@@ -79,8 +79,11 @@ describe('the filter bar', () => {
     expect(await fields[3].getValue()).toBe('6');
     await fields[0].setValue('vane');
     expect(names()).toEqual(['Tolvane']);
-    page.querySelector<HTMLButtonElement>('button.kv-link')?.click();
+    const all = page.querySelector<HTMLButtonElement>('button.kv-link');
+    all?.focus();
+    all?.click();
     expect(names()).toEqual(['Kesdrin', 'Sarvane', 'Tolvane']);
     expect(await address()).toBe('/');
+    expect(await fields[0].isFocused()).toBeTrue();
   });
 });

@@ -31,6 +31,12 @@ export class FilterBar {
       `${this.store.candidates().length} of ${this.store.candidateCount()} ${this.store.candidateCount() === 1 ? 'candidate' : 'candidates'}`,
   );
 
+  /** The button leaves with the filters: the focus goes to the first of their fields. */
+  protected showAll(nameBox: HTMLElement): void {
+    this.store.showAll();
+    nameBox.focus();
+  }
+
   protected chosen(header: string): readonly string[] {
     return this.store.filters().attributes[header] ?? [];
   }

@@ -1,12 +1,17 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  type ElementRef,
+  Injector,
+  afterNextRender,
   computed,
   inject,
   input,
   output,
+  viewChild,
   viewChildren,
 } from '@angular/core';
+import { catchLostFocus } from '../../ui/lost-focus';
 import { counted } from '../../ui/phrases';
 import { CandidatesStore } from '../candidates/candidates-store';
 import { NearnessStore } from '../nearness/nearness-store';
@@ -23,6 +28,7 @@ import { PeerTable } from '../table/peer-table';
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class PeerSides {
+  readonly #injector = inject(Injector);
   protected readonly store = inject(PeersStore);
   protected readonly nearness = inject(NearnessStore);
   protected readonly candidates = inject(CandidatesStore);
@@ -44,6 +50,8 @@ export class PeerSides {
   }>();
 
   private readonly tables = viewChildren(PeerTable);
+  private readonly inHeading = viewChild.required<ElementRef<HTMLElement>>('inHeading');
+  private readonly outHeading = viewChild.required<ElementRef<HTMLElement>>('outHeading');
 
   protected readonly counted = counted;
   /** What leaving each out changes: of the saved choice alone, as long as it is the one on the screen. */
@@ -70,6 +78,25 @@ export class PeerSides {
   /** Goes to where a company's reason is written; its row where it can only be read. */
   focusReason(company: string): void {
     for (const table of this.tables()) table.focusReason(company);
+  }
+
+  /** After several companies went to a side at once: where the button for it is gone, to the head of that side. */
+  catchFocus(isIncluded: boolean): void {
+    catchLostFocus(
+      this.#injector,
+      () => (isIncluded ? this.inHeading() : this.outHeading()).nativeElement,
+    );
+  }
+
+  /** Goes on to the first of the companies that are listed now. */
+  protected listAll(): void {
+    const known = this.page().outside.length;
+    this.candidates.listAll();
+    const goOn = (): void => {
+      const next = this.page().outside.at(known)?.company.name;
+      if (next !== undefined) this.focusReason(next);
+    };
+    afterNextRender(goOn, { injector: this.#injector });
   }
 
   protected orderMembers(by: string): void {

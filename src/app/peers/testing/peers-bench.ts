@@ -166,6 +166,7 @@ export function peersBench() {
       (each) => (each.getAttribute('aria-label') ?? each.textContent ?? '').trim() === name,
     );
     if (button === undefined) throw new Error(`expected a button “${name}”; found none`);
+    button.focus();
     button.click();
     await settled();
   }

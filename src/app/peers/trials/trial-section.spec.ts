@@ -56,8 +56,14 @@ describe('what each choice would change, on the page', () => {
       (cell.firstChild?.textContent ?? '').trim(),
     );
 
+  function press(name: string): void {
+    const pressed = button(name);
+    pressed?.focus();
+    pressed?.click();
+  }
+
   async function compute(name: string): Promise<TestRequest> {
-    button(name)?.click();
+    press(name);
     await settled();
     http.expectOne('/api/desk').flush({
       panelVersion: flowControl,
@@ -87,6 +93,7 @@ describe('what each choice would change, on the page', () => {
     const { peers: sent } = request.request.body as { peers: string[] };
     expect([...sent].sort()).toEqual(['Company 2', 'Company 3', 'Company 4', 'Company 5']);
     await flush(request, exampleTrial());
+    expect(words()).toContain('The changes are computed.');
     expect(page.querySelector('h2')?.textContent).toContain(
       'The standing moves most by leaving Company 3 out and taking Company 6 in',
     );
@@ -129,7 +136,9 @@ describe('what each choice would change, on the page', () => {
     await flush(await compute('Compute the changes'), running);
     expect(words()).toContain('Groups fitted: 2 of 7');
     expect(words()).toContain('not computed yet');
-    button('Cancel')?.click();
+    expect(document.activeElement?.tagName).toBe('H2');
+    expect(words()).toContain('The changes are being computed.');
+    press('Cancel');
     await settled();
     http.expectOne({ method: 'DELETE', url: trialPath }).flush(null);
     await new Promise((resolve) => setTimeout(resolve, 550));
@@ -137,6 +146,7 @@ describe('what each choice would change, on the page', () => {
     await settled();
     expect(words()).toContain('Cancelled: what was computed until then is shown.');
     expect(button('Compute for this choice')).toBeDefined();
+    expect(document.activeElement?.tagName).toBe('H2');
   });
 
   it('stays marked as of an earlier choice once the choice is another one', async () => {

@@ -1,16 +1,37 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  DOCUMENT,
+  ElementRef,
+  Injector,
+  computed,
+  effect,
+  inject,
+  input,
+  output,
+  signal,
+  untracked,
+  viewChild,
+} from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { CautionLine } from '../../ui/caution-line';
+import { catchLostFocus } from '../../ui/lost-focus';
 import { Mark } from '../../ui/mark';
 import { NumberFormat } from '../../ui/number-format';
-import { counted } from '../../ui/phrases';
 import { ProblemNotice } from '../../ui/problem-notice';
 import { ProgressLine } from '../../ui/progress-line';
 import { PeersStore } from '../peers-store';
 import { trialChanges } from './trial-changes';
 import { TrialStore } from './trial-store';
 import { TrialTable } from './trial-table';
-import { baseText, notTriedText, trialCaption, trialFinding, trialState } from './trial-words';
+import {
+  baseText,
+  groupsFitted,
+  notTriedText,
+  trialCaption,
+  trialFinding,
+  trialState,
+} from './trial-words';
 
 /** What leaving each member out, and taking each of the nearest candidates in, would change before anything is saved. */
 @Component({
@@ -22,6 +43,9 @@ import { baseText, notTriedText, trialCaption, trialFinding, trialState } from '
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class TrialSection {
+  readonly #document = inject(DOCUMENT);
+  readonly #host = inject<ElementRef<HTMLElement>>(ElementRef);
+  readonly #injector = inject(Injector);
   readonly #numbers = inject(NumberFormat);
   readonly #peers = inject(PeersStore);
   protected readonly store = inject(TrialStore);
@@ -31,7 +55,9 @@ export class TrialSection {
   /** A company to be moved in or out. */
   readonly moved = output<{ readonly company: string; readonly isIncluded: boolean }>();
 
-  protected readonly counted = counted;
+  private readonly heading = viewChild.required<ElementRef<HTMLElement>>('heading');
+
+  protected readonly groupsFitted = groupsFitted;
   protected readonly shown = computed(() => {
     const trial = this.store.trial();
     if (trial === null) return null;
@@ -69,4 +95,27 @@ export class TrialSection {
       new Set(choices.filter(([, each]) => each.isIncluded === isIncluded).map(([name]) => name));
     return { inside: on(true), outside: on(false) };
   });
+  /** That it began and that it is done, for the ear. */
+  protected readonly said = signal('');
+
+  constructor() {
+    let wasUnderWay = false;
+    effect(() => {
+      const isUnderWay = this.store.isUnderWay();
+      untracked(() => {
+        if (isUnderWay !== wasUnderWay) this.#tellTurn(isUnderWay);
+        wasUnderWay = isUnderWay;
+      });
+    });
+  }
+
+  /** The button that starts it leaves as it begins, the one that cancels it as it ends: the focus stays in the section. */
+  #tellTurn(isUnderWay: boolean): void {
+    const isDone = this.store.trial()?.state === 'done';
+    this.said.set(
+      isUnderWay ? 'The changes are being computed.' : isDone ? 'The changes are computed.' : '',
+    );
+    if (this.#host.nativeElement.contains(this.#document.activeElement))
+      catchLostFocus(this.#injector, () => this.heading().nativeElement);
+  }
 }

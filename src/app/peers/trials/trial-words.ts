@@ -4,6 +4,7 @@ import { differenceKind, differenceUnit, modelNotes } from '../../ui/model-form'
 import type { NumberFormat } from '../../ui/number-format';
 import { confidenceText, counted, lagText, listed, shortHash } from '../../ui/phrases';
 import { regressorWord } from './regressor-word';
+import type { TriedGroup } from './trial-question';
 import type { Places, TrialChange, TrialChanges } from './trial-changes';
 
 /** The section's finding: who moves the standing most; before there are figures, what they will say. */
@@ -89,6 +90,21 @@ export function trialState(
         ? 'Other companies are the nearest candidates now.'
         : '';
   return [ended, overtaken].filter((part) => part !== '').join(' ');
+}
+
+/** Which groups are fitted, in words: as it is, without each member, with each of the nearest candidates. */
+export function groupsFitted({
+  peers,
+  candidates,
+}: Pick<TriedGroup, 'peers' | 'candidates'>): string {
+  const out = peers.length === 1 ? 'its only member' : `each of its ${peers.length} members`;
+  const near =
+    candidates.length === 1
+      ? 'the nearest candidate'
+      : `each of the nearest ${candidates.length} candidates`;
+  return candidates.length === 0
+    ? `as it is, and without ${out}`
+    : `as it is, without ${out}, and with ${near}`;
 }
 
 /** Says where not every member was left out; empty where each was. */
