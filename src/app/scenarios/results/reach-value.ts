@@ -64,7 +64,7 @@ export class ReachValue {
   });
   protected readonly expectedName = computed(() => {
     const shown = this.#results.shown();
-    return shown === null ? '' : expectedWords(shown.basis.form, shown.outlook);
+    return shown === null ? '' : capitalised(expectedWords(shown.basis.form, shown.outlook));
   });
   protected readonly answer = computed(() => {
     const [shown, target, regressor] = [this.#results.shown(), this.#target(), this.regressor()];
