@@ -1,4 +1,4 @@
-import { readFigures } from './read-figure';
+import { misfitOf, readFigures } from './read-figure';
 
 const read = (text: string) => readFigures([[text]])[0][0];
 
@@ -33,5 +33,15 @@ describe('figures as people write them', () => {
     expect(readFigures([['1.234', '5,5']])).toEqual([[1234, 5.5]]);
     expect(readFigures([['1,234'], ['5.5']])).toEqual([[1234], [5.5]]);
     expect(readFigures([['1.5', '2.5', '3,5']])).toEqual([[1.5, 2.5, undefined]]);
+  });
+});
+
+describe('a share in per cent', () => {
+  it('is no amount of money, and fits a column that is none', () => {
+    const money = { name: 'capex', role: 'capex' } as const;
+    expect(misfitOf('12%', money)).toContain('per cent');
+    expect(misfitOf('(3 %)', money)).toContain('per cent');
+    expect(misfitOf('12', money)).toBeUndefined();
+    expect(misfitOf('12%', { name: 'growth', role: 'other' })).toBeUndefined();
   });
 });

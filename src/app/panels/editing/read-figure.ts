@@ -1,4 +1,6 @@
-import { type DecimalSign, decimalSignIn, parseNumber } from '@panel-data';
+import type { PanelColumn } from '@contract';
+import { type DecimalSign, decimalSignIn, isPercent, parseNumber } from '@panel-data';
+import { kindOf } from '../panel-rows';
 
 /**
  * Reads a block of figures as people write them. Which of point and comma is the decimal sign, the block decides as a
@@ -18,6 +20,12 @@ export function readFigures(
       return Number.isNaN(value) ? null : value + 0;
     }),
   );
+}
+
+/** Why a text that reads as a number is none of the column: `12%` is no amount of money. Undefined where it is one. */
+export function misfitOf(text: string, column: PanelColumn): string | undefined {
+  if (kindOf(column) !== 'money' || !isPercent(text)) return undefined;
+  return 'a share in per cent is no amount of money';
 }
 
 function decimalSignOf(cells: readonly string[]): DecimalSign {
