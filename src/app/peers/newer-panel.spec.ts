@@ -31,6 +31,7 @@ describe('the Peers page on an older panel', () => {
       ],
     });
     expect(words()).toContain('Kesdrin: 1 cell changed');
+    expect(document.activeElement?.textContent).toContain('Kesdrin: 1 cell changed');
   });
 
   it('compares no versions of different panels', async () => {

@@ -231,11 +231,17 @@ export class PeersPage {
   }
 
   async #show(savedId: string | null, savedNote: string): Promise<void> {
-    if (savedId === null) return;
+    if (savedId === null) {
+      catchLostFocus(this.#injector, () => this.counts()?.nativeElement);
+      return;
+    }
     if (this.note() === savedNote) this.note.set('');
     this.#isGoingOn = true;
     try {
       await this.#router.navigate(['/peers', savedId], { replaceUrl: true });
+      const view = this.store.view();
+      if (view.kind === 'ready' && view.ground.saved !== null)
+        this.said.set(`Version ${view.ground.saved.number} saved.`);
     } finally {
       this.#isGoingOn = false;
     }

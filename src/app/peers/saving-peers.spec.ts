@@ -50,6 +50,7 @@ describe('saving a choice of peers', () => {
     await settled();
     await answer('/api/peer-groups', { versions: [next, saved] });
     expect(words()).toContain('Version 2 shown');
+    expect(words()).toContain('Version 2 saved.');
     expect(words()).not.toContain('Save peer group');
   });
 
@@ -78,6 +79,7 @@ describe('saving a choice of peers', () => {
     request.flush(null, { status: 503, statusText: 'Unavailable' });
     await settled();
     expect(words()).toContain('The server does not answer');
+    expect(document.activeElement?.textContent).toContain('1 in, 1 out');
     expect(words()).toContain('1 in, 1 out');
   });
 

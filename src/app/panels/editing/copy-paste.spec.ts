@@ -2,7 +2,7 @@ import type { PanelColumn } from '@contract';
 import type { PanelRow } from '../panel-rows';
 import { type ShownGrid, copiedText } from './copy-cells';
 import { findCells } from './find-cells';
-import { pastedCells } from './paste-cells';
+import { pastedCells, typedFigure } from './paste-cells';
 
 const columns: readonly PanelColumn[] = [
   { name: 'mv', role: 'marketValue' },
@@ -79,9 +79,24 @@ describe('pasting cells', () => {
   it('refuses the whole block for one text that is no number, and names the cell', () => {
     const outcome = pastedCells('1\t2\n3\tabout 4', range(0, 0, 2, 2), grid());
     expect(outcome.kind === 'refused' && outcome.problem).toEqual({
-      title: 'Nothing is pasted: 1 cell of the block is no number',
+      title: 'Nothing is pasted: 1 cell of the block is no number of its column',
       places: ['Kesdrin 2021, Capex: found “about 4”'],
     });
+  });
+
+  it('refuses a share in per cent where money stands, typed or pasted, and takes it elsewhere', () => {
+    const outcome = pastedCells('1\t12%\t12%', range(0, 0, 2, 2), grid());
+    expect(outcome.kind === 'refused' && outcome.problem.places).toEqual([
+      'Kesdrin 2020, Capex: found “12%”, a share in per cent is no amount of money',
+    ]);
+    expect(typedFigure('12%', rows[0], 1, grid())).toEqual({
+      problem: {
+        title: 'Not taken: a share in per cent is no amount of money',
+        places: ['Kesdrin 2020, Capex: found “12%”'],
+      },
+    });
+    const place = { company: 'Kesdrin', year: 2020, column: 2 };
+    expect(typedFigure('12%', rows[0], 2, grid())).toEqual({ place, value: 0.12 });
   });
 });
 

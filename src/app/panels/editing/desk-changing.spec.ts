@@ -86,6 +86,11 @@ describe('the figures of a panel on the desk', () => {
       desk = await DeskGridHarness.open();
       expect(desk.words).toContain('Changed before and not saved yet: 1 cell.');
       expect(desk.edited[0].values[1]).toBe(8);
+      desk.named('Close').focus();
+      desk.named('Close').click();
+      await desk.settled();
+      expect(desk.words).not.toContain('Changed before');
+      expect(document.activeElement?.closest('kv-panel-grid')).not.toBeNull();
     });
   });
 

@@ -210,6 +210,17 @@ export class PanelDeskGrid {
     this.refusal.set(null);
   }
 
+  /** What closes takes its button along: the focus goes to the cells. */
+  protected dismissRefusal(): void {
+    this.closeRefusal();
+    this.grid().focus();
+  }
+
+  protected dismissRestored(): void {
+    this.store.dismissRestored();
+    this.grid().focus();
+  }
+
   protected undo(): void {
     const words = this.store.undoWords();
     if (words === '') return;

@@ -8,6 +8,7 @@ import { shifted } from '../../ui/shifted';
 import type { CellRange } from './cell-block';
 import type { ShownGrid } from './copy-cells';
 import type { CellChange } from './panel-edits';
+import { misfitOf } from './misfit';
 import { shiftOf } from './shown-figure';
 
 export type PasteOutcome =
@@ -51,8 +52,10 @@ export function pastedCells(text: string, range: CellRange, grid: ShownGrid): Pa
       // A line of the block that is shorter than the others says nothing about its last cells.
       if (cell >= block[line].length) continue;
       const figure = figures[line][cell];
-      if (figure === undefined)
-        faults.push(`${placeWords(row, column, grid)}: found “${block[line][cell].trim()}”`);
+      const text = block[line][cell];
+      const misfit = misfitOf(text, grid.columns[column]);
+      if (figure === undefined || misfit !== undefined)
+        faults.push(faultWords(text, misfit, placeWords(row, column, grid)));
       else
         changes.push({
           place: { company: row.company, year: row.year, column },
@@ -63,7 +66,7 @@ export function pastedCells(text: string, range: CellRange, grid: ShownGrid): Pa
   if (faults.length === 0) return { kind: 'fits', changes, range: target };
   const title = `Nothing is pasted: ${counted(faults.length, 'cell')} of the block ${
     faults.length === 1 ? 'is no number' : 'are no numbers'
-  }`;
+  } of ${faults.length === 1 ? 'its column' : 'their columns'}`;
   return refused(title, faults);
 }
 
@@ -91,15 +94,21 @@ export function typedFigure(
   grid: ShownGrid,
 ): CellChange | { readonly problem: ShownProblem } {
   const [[figure]] = readFigures([[text]]);
-  if (figure === undefined)
+  const misfit = misfitOf(text, grid.columns[column]);
+  if (figure === undefined || misfit !== undefined)
     return {
       problem: {
-        title: 'Not taken: a cell holds a number, or nothing',
-        places: [`${placeWords(row, column, grid)}: found “${text.trim()}”`],
+        title: `Not taken: ${misfit ?? 'a cell holds a number, or nothing'}`,
+        places: [faultWords(text, undefined, placeWords(row, column, grid))],
       },
     };
   const place = { company: row.company, year: row.year, column };
   return { place, value: panelValue(figure, row, column, grid) };
+}
+
+/** `Kesdrin 2021, Capex: found “about 4”`, and why that is not taken where it is a number. */
+function faultWords(text: string, misfit: string | undefined, place: string): string {
+  return `${place}: found “${text.trim()}”${misfit === undefined ? '' : `, ${misfit}`}`;
 }
 
 /** `Kesdrin 2021, Capex`. */

@@ -1,4 +1,5 @@
 import { Injectable, Injector, inject } from '@angular/core';
+import { firstValueFrom } from 'rxjs';
 import type { DismissQuestion } from './dismiss-dialog';
 
 /** Asks why flagged figures are right; the dialog loads on first use. */
@@ -6,7 +7,8 @@ import type { DismissQuestion } from './dismiss-dialog';
 export class AskDismissal {
   readonly #injector = inject(Injector);
 
-  async ask(question: DismissQuestion): Promise<void> {
+  /** @returns how many flags were put aside; 0 where the flag is kept. */
+  async ask(question: DismissQuestion): Promise<number> {
     const [{ MatDialog, MatDialogConfig }, { DismissDialog }] = await Promise.all([
       import('@angular/material/dialog'),
       import('./dismiss-dialog'),
@@ -16,6 +18,9 @@ export class AskDismissal {
       width: '560px',
       maxWidth: '96vw',
     });
-    this.#injector.get(MatDialog).open(DismissDialog, config);
+    const opened = this.#injector
+      .get(MatDialog)
+      .open<unknown, DismissQuestion, number>(DismissDialog, config);
+    return (await firstValueFrom(opened.afterClosed(), { defaultValue: 0 })) ?? 0;
   }
 }

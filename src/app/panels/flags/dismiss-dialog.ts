@@ -61,7 +61,7 @@ export interface DismissQuestion {
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class DismissDialog {
-  readonly #dialog = inject<MatDialogRef<DismissDialog>>(MatDialogRef);
+  readonly #dialog = inject<MatDialogRef<DismissDialog, number>>(MatDialogRef);
   protected readonly question = inject<DismissQuestion>(MAT_DIALOG_DATA);
 
   protected readonly reason = signal('');
@@ -88,9 +88,10 @@ export class DismissDialog {
     const reason = this.reason().trim();
     if (this.isRunning() || reason === '') return;
     this.isRunning.set(true);
-    const problem = await this.question.dismiss([this.question.flag, ...this.chosen()], reason);
+    const flags = [this.question.flag, ...this.chosen()];
+    const problem = await this.question.dismiss(flags, reason);
     this.isRunning.set(false);
     this.problem.set(problem);
-    if (problem === null) this.#dialog.close();
+    if (problem === null) this.#dialog.close(flags.length);
   }
 }

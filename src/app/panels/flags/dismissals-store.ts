@@ -50,8 +50,9 @@ export class DismissalsStore {
     }
   }
 
-  async takeBack({ id }: FlagDismissal): Promise<void> {
-    await this.#try(async () => {
+  /** @returns whether it is taken back. */
+  async takeBack({ id }: FlagDismissal): Promise<boolean> {
+    return this.#try(async () => {
       await firstValueFrom(this.#panels.takeBackDismissal(this.#panelId, id), {
         defaultValue: undefined,
       });
@@ -59,12 +60,15 @@ export class DismissalsStore {
     });
   }
 
-  async #try(work: () => Promise<void>): Promise<void> {
+  /** @returns whether it could be done. */
+  async #try(work: () => Promise<void>): Promise<boolean> {
     this.#problem.set(null);
     try {
       await work();
+      return true;
     } catch (error) {
       this.#problem.set(toApiProblem(error));
+      return false;
     }
   }
 }

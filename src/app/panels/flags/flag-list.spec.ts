@@ -56,9 +56,11 @@ describe('the list of flags', () => {
     const many = Array.from({ length: 20 }, (_, place) => ({ ...missing, year: 2000 + place }));
     const page = await show({ flags: { open: [...many, jump], dismissed: [] } });
     expect(page.querySelectorAll('li').length).toBe(8);
+    button(page, 'Show more of 20').focus();
     button(page, 'Show more of 20').click();
     await fixture.whenStable();
     expect(page.querySelectorAll('li').length).toBe(20);
+    expect(document.activeElement?.textContent).toContain('Sarvane FY2008');
     button(page, '1 figure jumps as the company’s figures rarely do').click();
     await fixture.whenStable();
     expect(page.querySelectorAll('li').length).toBe(21);
@@ -85,6 +87,51 @@ describe('the list of flags', () => {
     expect(page.textContent).toContain('Ilvo Brenn');
   });
 
+  it('goes on to what stands next once flags are put aside, and says what is left', async () => {
+    const [first, second] = [slip(2018), slip(2019)];
+    const page = await show({ flags: { open: [missing, first, second], dismissed: [] } });
+    const list = fixture.componentInstance;
+    const putAside = async (flag: Flag, open: readonly Flag[]): Promise<string> => {
+      const from = list.placeOf(flag);
+      fixture.componentRef.setInput('flags', { open, dismissed: [] });
+      await fixture.whenStable();
+      list.goOnFrom(from, 1);
+      await fixture.whenStable();
+      return (document.activeElement?.textContent ?? '').replace(/\s+/g, ' ').trim();
+    };
+    const said = () => page.querySelector('[role=status]')?.textContent;
+    expect(await putAside(first, [missing, second])).toContain('FY2019');
+    expect(said()).toBe('1 flag put aside as right. 2 flags left.');
+    (document.activeElement as HTMLElement).blur();
+    expect(await putAside(second, [missing])).toBe('1 cell is missing');
+    expect(await putAside(missing, [])).toBe('What to look at');
+    expect(said()).toContain('Nothing is left to look at.');
+  });
+
+  it('goes on to the next dismissal once one is taken back, and to the head after the last', async () => {
+    const other = { ...dismissalOfJump, id: 'other' };
+    const open = [missing];
+    const dismissed = [
+      { flag: jump, dismissal: dismissalOfJump },
+      { flag: slip(2018), dismissal: other },
+    ];
+    const page = await show({ flags: { open, dismissed }, mayDismiss: true });
+    page.querySelector('details')!.open = true;
+    for (const [left, next] of [
+      [dismissed.slice(0, 1), 'Kesdrin FY2016'],
+      [[], 'What to look at'],
+    ] as const) {
+      fixture.componentRef.setInput('flags', { open, dismissed: left });
+      fixture.componentInstance.goOnAfterTakingBack(jump, left.length);
+      await fixture.whenStable();
+      expect(document.activeElement?.textContent).toContain(next);
+      (document.activeElement as HTMLElement).blur();
+    }
+    expect(page.querySelector('[role=status]')?.textContent).toContain(
+      'Kesdrin FY2016 capex is to be',
+    );
+  });
+
   it('says that there is nothing, and that it is still looking', async () => {
     const page = await show({ flags: null });
     expect(page.querySelector('[role=status]')?.textContent).toContain('Looking through');
@@ -105,7 +152,7 @@ describe('putting flags aside', () => {
       status: 409,
     });
     const [flag, other] = [slip(2018), slip(2019)];
-    void TestBed.inject(AskDismissal).ask({
+    const answer = TestBed.inject(AskDismissal).ask({
       flag,
       alike: [other],
       line: ({ company, year }) => `${company} ${year}`,
@@ -133,5 +180,6 @@ describe('putting flags aside', () => {
     while (document.querySelector('kv-dismiss-dialog') !== null)
       await new Promise((resolve) => setTimeout(resolve, 5));
     expect(asked.length).toBe(2);
+    expect(await answer).toBe(2);
   });
 });

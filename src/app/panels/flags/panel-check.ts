@@ -6,8 +6,9 @@ import {
   input,
   linkedSignal,
   output,
+  viewChild,
 } from '@angular/core';
-import type { PanelVersionReply } from '@contract';
+import type { FlagDismissal, PanelVersionReply } from '@contract';
 import type { CoverageCell } from '@figures';
 import type { Flag } from '@panel-data';
 import type { ChartText } from '../../charts/chart-text';
@@ -56,6 +57,8 @@ export class PanelCheck {
   readonly mayDismiss = input(false);
 
   readonly placeWanted = output<WantedPlace>();
+
+  private readonly list = viewChild.required(FlagList);
 
   protected readonly titles = computed(() => this.panel().columns.map(columnTitle));
   /** The column that the map looks at; null for all. */
@@ -106,13 +109,22 @@ export class PanelCheck {
     this.variable.set(title === '' ? null : title);
   }
 
-  protected dismiss(flag: Flag): void {
+  protected async dismiss(flag: Flag): Promise<void> {
+    const from = this.list().placeOf(flag);
     const open = this.store.flags()?.open ?? [];
-    void this.#askDismissal.ask({
+    const count = await this.#askDismissal.ask({
       flag,
       alike: alike(flag, open).filter(this.isSaved()),
       line: (each) => flagLine(each, this.titles(), this.#numbers),
       dismiss: (flags, reason) => this.dismissals.dismiss(flags, reason),
     });
+    if (count > 0) this.list().goOnFrom(from, count);
+  }
+
+  protected async takeBack(dismissal: FlagDismissal): Promise<void> {
+    const dismissed = this.store.flags()?.dismissed ?? [];
+    const from = dismissed.findIndex((each) => each.dismissal.id === dismissal.id);
+    if (await this.dismissals.takeBack(dismissal))
+      this.list().goOnAfterTakingBack(dismissed[from].flag, from);
   }
 }

@@ -25,7 +25,7 @@ describe('the line of the fully covered window', () => {
     fixture.componentInstance.allWanted.subscribe(() => asked.push('all'));
     const page = fixture.nativeElement as HTMLElement;
     const button = page.querySelector('button');
-    return { page, button, asked };
+    return { page, button, asked, fixture };
   }
 
   it('offers to show nothing else, where there is anything else', async () => {
@@ -42,5 +42,19 @@ describe('the line of the fully covered window', () => {
     expect(page.querySelector('[role=status]')?.textContent).toContain('only');
     button?.click();
     expect(asked).toEqual(['all']);
+  });
+
+  it('keeps the focus on its button both ways, and says each turn but not how it began', async () => {
+    const rows = rowsOf(['Kesdrin', 'Sarvane'], 2010, 2015);
+    const { page, button, fixture } = await shown(rows);
+    const said = () => page.querySelector('[role=status]')?.textContent;
+    expect(said()).toBe('');
+    button?.focus();
+    for (const isAlone of [true, false]) {
+      fixture.componentRef.setInput('isAlone', isAlone);
+      await fixture.whenStable();
+      expect(document.activeElement).toBe(button);
+      expect(said()).toContain(isAlone ? 'only' : 'all companies and years');
+    }
   });
 });

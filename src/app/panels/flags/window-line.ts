@@ -1,4 +1,11 @@
-import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  input,
+  linkedSignal,
+  output,
+} from '@angular/core';
 import type { PanelColumn } from '@contract';
 import type { CoverageWindow } from '@panel-data';
 import { counted, yearsText } from '../../ui/phrases';
@@ -14,12 +21,10 @@ const mostListed = 60;
   template: `
     <p>
       {{ words() }}
-      @if (isAlone()) {
-        <button type="button" class="kv-link" (click)="allWanted.emit()">
-          Show all companies and years
+      @if (isAlone() || others().length > 0 || hasFurtherYears()) {
+        <button type="button" class="kv-link" (click)="turn()">
+          {{ isAlone() ? 'Show all companies and years' : 'Show only these' }}
         </button>
-      } @else if (others().length > 0 || hasFurtherYears()) {
-        <button type="button" class="kv-link" (click)="onlyWanted.emit()">Show only these</button>
       }
     </p>
     <p class="kv-visually-hidden" role="status">{{ said() }}</p>
@@ -74,10 +79,23 @@ export class WindowLine {
     const { firstYear, lastYear } = this.window();
     return this.rows().some(({ year }) => year < firstYear || year > lastYear);
   });
-  protected readonly said = computed(() =>
-    this.isAlone() ? 'Map and rows show these companies and years only.' : '',
-  );
+  /** Nothing before the first turn: what stands from the start is no news. */
+  protected readonly said = linkedSignal<boolean, string>({
+    source: this.isAlone,
+    computation: (isAlone, before) =>
+      isAlone
+        ? 'Map and rows show these companies and years only.'
+        : before === undefined
+          ? ''
+          : 'Map and rows show all companies and years.',
+  });
   protected readonly others = computed(() =>
     leftOut(this.window(), this.rows(), modelColumns(this.columns())),
   );
+
+  /** One button for both ways, so that the focus stays on it. */
+  protected turn(): void {
+    if (this.isAlone()) this.allWanted.emit();
+    else this.onlyWanted.emit();
+  }
 }

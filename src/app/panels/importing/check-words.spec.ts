@@ -43,6 +43,16 @@ describe('words of a check', () => {
     );
   });
 
+  it('says in one sum what becomes of the rows while findings keep the file out', () => {
+    const kept = { ...check, findingCount: 9, blockingCount: 9 };
+    expect(leftOutWords(kept)).toBe(
+      'Nothing comes in yet: 9 findings keep the file out. Of its 246 rows 246 name a company and a year.',
+    );
+    expect(leftOutWords({ ...kept, blockingCount: 1, rows: 243, leftOutRows: 3 })).toBe(
+      'Nothing comes in yet: 1 finding keeps the file out. Of its 246 rows 243 name a company and a year, and 3 are left out or have no company or year that can be read.',
+    );
+  });
+
   it('says what would change against the newest version', () => {
     const none = { addedRows: 0, removedRows: 0, changedCells: 0, listed: [] };
     const changes = { panelVersionId: uuid(1), number: 3, ...none };

@@ -19,13 +19,26 @@ export function countWords(check: ImportCheck): string {
 }
 
 /** What of the file stays outside, and what of its formulas is not read. */
-export function leftOutWords({ leftOutRows, formulaCells }: ImportCheck): string {
-  const left =
-    leftOutRows === 0
-      ? 'No row of the file is left out.'
-      : `${counted(leftOutRows, 'row')} of the file ${leftOutRows === 1 ? 'is' : 'are'} left out: excluded, or without company or year.`;
+export function leftOutWords(check: ImportCheck): string {
+  const { formulaCells } = check;
+  const left = check.blockingCount === 0 ? leftOutOf(check) : keptOutOf(check);
   if (formulaCells === 0) return left;
   return `${left} ${counted(formulaCells, 'cell')} ${formulaCells === 1 ? 'holds a formula' : 'hold formulas'}: the value stored for ${formulaCells === 1 ? 'it' : 'them'} is taken.`;
+}
+
+function leftOutOf({ leftOutRows }: ImportCheck): string {
+  if (leftOutRows === 0) return 'No row of the file is left out.';
+  return `${counted(leftOutRows, 'row')} of the file ${leftOutRows === 1 ? 'is' : 'are'} left out: excluded, or without company or year.`;
+}
+
+/** Rows of the file in one sum, where findings keep all of them out. */
+function keptOutOf({ rows, leftOutRows, blockingCount }: ImportCheck): string {
+  const left =
+    leftOutRows === 0
+      ? ''
+      : `, and ${leftOutRows.toLocaleString('en')} ${leftOutRows === 1 ? 'is' : 'are'} left out or ${leftOutRows === 1 ? 'has' : 'have'} no company or year that can be read`;
+  const all = counted(rows + leftOutRows, 'row');
+  return `Nothing comes in yet: ${counted(blockingCount, 'finding')} ${blockingCount === 1 ? 'keeps' : 'keep'} the file out. Of its ${all} ${rows.toLocaleString('en')} ${rows === 1 ? 'names' : 'name'} a company and a year${left}.`;
 }
 
 /** `Against version 3: 14 rows come, none goes, 2 cells change.` */

@@ -136,7 +136,7 @@ function canonical(mapping: ImportMapping): string {
     [mapping.panelName, mapping.currency, mapping.unit],
     [...mapping.others].sort(),
     [...mapping.attributes].sort(),
-    [reading.sheet, reading.headerRow, reading.decimalSign, layout.kind],
+    [reading.sheet, reading.headerRow, reading.decimalSign, reading.encoding, layout.kind],
     layout.kind === 'years-in-columns' ? layout.item : null,
     layout.kind === 'sheet-a-variable' ? layout.sheets : null,
     sorted(conversion.columns.flatMap(told), ({ column, unit, measure }) => [

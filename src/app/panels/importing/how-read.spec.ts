@@ -45,6 +45,21 @@ describe('how a file is read', () => {
     expect(host.textContent).not.toContain('a sheet for each variable');
   });
 
+  it('says that the text is no UTF-8, and lets that be corrected', async () => {
+    const reading = { ...flowDraft.reading, encoding: 'windows-1252' } as const;
+    const host = await show({ ...flowDraft, reading });
+    expect(host.textContent).toContain(
+      'Read from the file, its text in Windows-1252, with the columns named in line 1',
+    );
+    choose(host, 'Encoding of the text', 'utf-16');
+    expect(asked).toEqual([{ ...reading, encoding: 'utf-16' }]);
+  });
+
+  it('offers no encoding for a workbook', async () => {
+    const host = await show(workbook);
+    expect(host.textContent).not.toContain('Encoding of the text');
+  });
+
   it('chooses another sheet, with its size beside its name', async () => {
     const host = await show(workbook);
     expect(host.textContent).toContain('Capex (1,200 × 19)');

@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import type { ImportReply, TableLayout, TableReading } from '@contract';
+import { type ImportReply, type TableLayout, type TableReading, TextEncoding } from '@contract';
 import { counted } from '../../ui/phrases';
-import { isSameReading, layoutWords, readingWords } from './reading-words';
+import { encodingWords, isSameReading, layoutWords, readingWords } from './reading-words';
 
 /** Columns of a line that the choice of the header shows. */
 const shownColumns = 12;
@@ -20,6 +20,8 @@ export class HowRead {
   readonly readingChanged = output<TableReading>();
 
   protected readonly layoutWords = layoutWords;
+  protected readonly encodingWords = encodingWords;
+  protected readonly encodings = TextEncoding.options;
   protected readonly words = computed(() => readingWords(this.draft()));
   protected readonly reading = computed(() => this.draft().reading);
   protected readonly sheets = computed(() =>

@@ -1,5 +1,5 @@
 import { TestBed } from '@angular/core/testing';
-import { type FileMending, noMending } from '@contract';
+import { type FileMending, type ImportFinding, noMending } from '@contract';
 import { ChangeTable } from './change-table';
 import { CurrencyPart } from './currency-part';
 import { FiscalYearPart } from './fiscal-year-part';
@@ -178,6 +178,76 @@ describe('the rows to look at', () => {
     await fixture.whenStable();
     const lines = [...host.querySelectorAll('tbody th')].map((each) => each.textContent);
     expect(lines).toEqual(['3']);
+  });
+});
+
+describe('many rows to look at', () => {
+  const found = (row: number, change: Partial<ImportFinding>): ImportFinding => ({
+    ...{ row, column: 'fy', found: 'FY-19', code: 'year', detail: 'Expected a year.' },
+    ...{ isBlocking: true, ...change },
+  });
+
+  async function show(findings: readonly ImportFinding[]): Promise<{
+    readonly host: HTMLElement;
+    readonly mending: () => FileMending;
+    readonly press: (name: string) => Promise<void>;
+  }> {
+    const fixture = TestBed.createComponent(ReviewTable);
+    const host = fixture.nativeElement as HTMLElement;
+    let mending = noMending;
+    const cells = ['A', 'FY-19', '1', '2', '3', '7', 'EUR'];
+    const reviewRows = findings.map(({ row }) => ({
+      ...{ row, cells, isTaken: false, isExcluded: false },
+    }));
+    const { length } = findings;
+    const check = { ...flowCheck, findings: [...findings], findingCount: length, reviewRows };
+    fixture.componentRef.setInput('check', check);
+    fixture.componentRef.setInput('headers', flowDraft.headers);
+    fixture.componentRef.setInput('usedHeaders', ['firm', 'fy', 'mv']);
+    fixture.componentRef.setInput('yearHeader', 'fy');
+    fixture.componentRef.setInput('mending', mending);
+    fixture.componentInstance.mendingChanged.subscribe((changed) => {
+      mending = changed;
+      fixture.componentRef.setInput('mending', changed);
+    });
+    await fixture.whenStable();
+    const press = async (name: string): Promise<void> => {
+      pressIn(host, name);
+      await fixture.whenStable();
+    };
+    return { host, mending: () => mending, press };
+  }
+
+  it('are left out at once, said, and taken again at once, the focus staying there', async () => {
+    const { host, mending, press } = await show([
+      found(2, { code: 'duplicate' }),
+      found(3, { code: 'duplicate', sameAs: 2 }),
+      found(4, { code: 'duplicate', sameAs: 2 }),
+    ]);
+    document.body.append(host);
+    await press('Leave out the 2 later lines, keep the first of each: A company and year twice');
+    expect(mending().excludedRows).toEqual([3, 4]);
+    expect(host.querySelector('[role=status]')?.textContent).toContain('2 lines are left out.');
+    expect(document.activeElement?.className).toBe('bulk');
+    await press('Undo');
+    expect(mending()).toEqual(noMending);
+    expect(host.querySelector('[role=status]')?.textContent.trim()).toBe('');
+    host.remove();
+  });
+
+  it('are mended by one text where they read the same', async () => {
+    const { host, mending, press } = await show([found(2, {}), found(3, {}), found(4, {})]);
+    expect(host.textContent).not.toContain('Use this for all');
+    setField(host, 'Line 3, fy: reads', '2019');
+    await new Promise((done) => setTimeout(done));
+    await press('Use this for all 3 cells that read “FY-19”');
+    expect(mending().cells.map(({ row, text }) => [row, text])).toEqual([
+      [3, '2019'],
+      [2, '2019'],
+      [4, '2019'],
+    ]);
+    await press('Undo');
+    expect(mending().cells.map(({ row }) => row)).toEqual([3]);
   });
 });
 

@@ -18,7 +18,7 @@ const advice: Readonly<Record<string, string>> = {
   sheet_limit:
     'A table may have 200,000 rows and 200 columns. Bring it in in parts, or leave out columns that the panel does not need.',
   csv_invalid:
-    'Save the table as CSV in UTF-8, with one delimiter and quotes around texts that hold it, and choose it again.',
+    'Save the table as CSV, in UTF-8 best, with one delimiter and quotes around texts that hold it, and choose it again.',
   parse_timeout: 'Reading took too long. Save the one sheet that is needed as CSV and choose that.',
   parse_memory:
     'Reading took too much memory. Save the one sheet that is needed as CSV and choose that.',

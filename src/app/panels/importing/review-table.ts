@@ -1,14 +1,30 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  type ElementRef,
+  Injector,
+  afterNextRender,
   computed,
+  inject,
   input,
   linkedSignal,
   output,
   signal,
+  viewChild,
 } from '@angular/core';
 import type { FileMending, ImportCheck, ImportFinding } from '@contract';
 import { Mark } from '../../ui/mark';
+import {
+  type BulkAct,
+  type BulkOffer,
+  afterAct,
+  alikeFindings,
+  beforeAct,
+  isStanding,
+  leaveOutOffers,
+  textKey,
+  useForAllOffer,
+} from './bulk-mending';
 import { mendedText, withCell, withLine, withoutCell, withoutLine } from './mending';
 import { type ReviewedRow, kindCounts, reviewOf } from './review';
 
@@ -23,6 +39,7 @@ const shownAtOnce = 50;
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class ReviewTable {
+  readonly #injector = inject(Injector);
   readonly check = input.required<ImportCheck>();
   readonly headers = input.required<readonly string[]>();
   /** Headers that the panel is made of: the columns of the table. */
@@ -61,6 +78,18 @@ export class ReviewTable {
       used.has(header) || found.has(place) ? [{ header, place }] : [],
     );
   });
+
+  protected readonly offers = computed(() =>
+    leaveOutOffers(this.check().findings, this.mending(), this.kind()),
+  );
+  readonly #alike = computed(() => alikeFindings(this.check().findings));
+  readonly #lastAct = signal<BulkAct | null>(null);
+  /** The last act on many at once, while anything of it stands. */
+  protected readonly undoable = computed(() => {
+    const act = this.#lastAct();
+    return act !== null && isStanding(this.mending(), act) ? act : null;
+  });
+  private readonly bulk = viewChild<ElementRef<HTMLElement>>('bulk');
 
   protected choose(code: ImportFinding['code']): void {
     this.kind.update((kind) => (kind === code ? null : code));
@@ -104,6 +133,29 @@ export class ReviewTable {
         ? mending
         : withCell(mending, finding, text.slice(0, 500)),
     );
+  }
+
+  /** Using the cell's mended text for all that read the same. */
+  protected forAll(finding: ImportFinding): BulkOffer | undefined {
+    const alike = this.#alike().get(textKey(finding));
+    return alike && useForAllOffer(finding, alike, this.mending());
+  }
+
+  protected act(act: BulkAct): void {
+    this.#lastAct.set(act);
+    this.mendingChanged.emit(afterAct(this.mending(), act));
+    this.#focusBulk();
+  }
+
+  protected undo(act: BulkAct): void {
+    this.#lastAct.set(null);
+    this.mendingChanged.emit(beforeAct(this.mending(), act));
+    this.#focusBulk();
+  }
+
+  /** The button that was pressed is gone: the focus goes to what was said of it. */
+  #focusBulk(): void {
+    afterNextRender(() => this.bulk()?.nativeElement.focus(), { injector: this.#injector });
   }
 
   protected restore(cell: { readonly row: number; readonly column: string }): void {

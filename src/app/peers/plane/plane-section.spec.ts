@@ -61,12 +61,20 @@ describe('the picture of companies on the page', () => {
   });
 
   it('selects nobody whom the filters took out of the picture', async () => {
-    const { fixture, chart, candidates, words } = await shown();
+    const { fixture, page, chart, candidates, words } = await shown();
     const cloud = await chart.cloud();
     await cloud.sendKeys(TestKey.HOME, ' ');
     for (let step = 0; step < 19; step++) await cloud.sendKeys(TestKey.RIGHT_ARROW, ' ');
     await fixture.whenStable();
     expect(words()).toMatch(/\d+ companies selected/);
+    const none = [...page.querySelectorAll('button')].find(
+      (each) => each.textContent === 'Select none',
+    );
+    none?.focus();
+    none?.click();
+    await fixture.whenStable();
+    expect(document.activeElement?.textContent).toContain('Draw a rectangle around companies');
+    await cloud.sendKeys(TestKey.HOME, ' ', TestKey.RIGHT_ARROW, ' ');
     candidates.filter({ name: 'nobody' });
     await fixture.whenStable();
     expect(words()).not.toContain('selected');

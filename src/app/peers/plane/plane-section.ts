@@ -119,7 +119,12 @@ export class PlaneSection {
   });
 
   protected readonly counted = counted;
-  protected readonly none: ReadonlySet<string> = new Set();
+
+  /** The buttons leave with the selection: the focus goes to the line that told it. */
+  protected selectNone(told: HTMLElement): void {
+    this.selected.set(new Set());
+    told.focus();
+  }
 
   protected setAcross(key: string): void {
     this.#across.set(key);

@@ -25,6 +25,7 @@ describe('the table of peers', () => {
     const text = await shown({ fitName: '6f3a91', kind: 'money', standing });
     expect(text).toContain('1,811 (1,172 to 2,450) EUR m by fit 6f3a91');
     expect(text).toContain('Standing without it, EUR m');
+    expect(text).toContain('the estimate alone, with no interval of its own');
     expect(text).toContain(shortCaution);
     expect(await shown(null)).not.toContain(shortCaution);
   });

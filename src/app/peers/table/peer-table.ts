@@ -14,6 +14,7 @@ import { fixedText } from '@figures';
 import { CautionLine } from '../../ui/caution-line';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
 import { yearsText } from '../../ui/phrases';
+import { TableScroll } from '../../ui/table-scroll';
 import type { PeerMeasure } from '../nearness/peer-measures';
 import type { Nearness } from '../nearness/peer-nearness-of';
 import type { PanelCompany } from '../peer-draft';
@@ -36,7 +37,7 @@ export interface PeerRow {
 /** The companies of one side, in or out: each with its reason and the facts to defend it by. */
 @Component({
   selector: 'kv-peer-table',
-  imports: [CautionLine, DistanceParts, MatButton, ReasonField],
+  imports: [CautionLine, DistanceParts, MatButton, ReasonField, TableScroll],
   templateUrl: './peer-table.html',
   styleUrl: './peer-table.css',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -85,7 +86,7 @@ export class PeerTable {
       ...(without === null
         ? []
         : [
-            `the standing with all peers is ${this.#numbers.interval(without.standing, without.kind)}${without.kind === 'money' ? ` ${this.#numbers.unitLabel()}` : ''} by fit ${without.fitName}`,
+            `the standing with all peers is ${this.#numbers.interval(without.standing, without.kind)}${without.kind === 'money' ? ` ${this.#numbers.unitLabel()}` : ''} by fit ${without.fitName}; without one peer the fit gives the estimate alone, with no interval of its own`,
           ]),
     ]
       .map((part, place) => (place === 0 ? part.charAt(0).toUpperCase() + part.slice(1) : part))

@@ -13,6 +13,7 @@ import { Figure } from '../../ui/figure';
 import { Mark } from '../../ui/mark';
 import { differenceKind, differenceUnit } from '../../ui/model-form';
 import { type FigureKind, NumberFormat } from '../../ui/number-format';
+import { TableScroll } from '../../ui/table-scroll';
 import type { Places, TrialBase, TrialChange } from './trial-changes';
 import { type TrialOrder, type TrialOrderKey, largestFirst, ordered, pressed } from './trial-order';
 import { placesText } from './trial-words';
@@ -27,7 +28,7 @@ const nothingToSay = 'None of these moves places, a sign, or zero in or out of t
 /** What leaving each member out, or taking each candidate in, would change: one row each, in an order to choose. */
 @Component({
   selector: 'kv-trial-table',
-  imports: [Figure, Mark, MatButton],
+  imports: [Figure, Mark, MatButton, TableScroll],
   templateUrl: './trial-table.html',
   styleUrl: './trial-table.css',
   changeDetection: ChangeDetectionStrategy.OnPush,

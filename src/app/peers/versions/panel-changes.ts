@@ -1,11 +1,13 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  type ElementRef,
   computed,
   effect,
   inject,
   input,
   untracked,
+  viewChild,
 } from '@angular/core';
 import type { PanelVersionSummary } from '@contract';
 import { ProblemNotice } from '../../ui/problem-notice';
@@ -27,7 +29,7 @@ import { PanelChangesStore } from './panel-changes-store';
         </button>
       }
     </p>
-    <div role="status">
+    <div #outcome tabindex="-1" role="status">
       @if (view.kind === 'loading') {
         <p class="kv-caption">Comparing the two versions…</p>
       }
@@ -75,6 +77,8 @@ export class PanelChanges {
   /** The own company and its peers. */
   readonly companies = input.required<readonly string[]>();
 
+  private readonly outcome = viewChild.required<ElementRef<HTMLElement>>('outcome');
+
   protected readonly nothingListed =
     'Nothing is listed for these companies; there are more differences than are listed.';
   protected readonly found = computed(() => {
@@ -92,7 +96,9 @@ export class PanelChanges {
     });
   }
 
+  /** The button leaves: the focus goes to where the changes will stand. */
   protected load(): void {
     void this.store.load(this.older().id, this.newer().id);
+    this.outcome().nativeElement.focus();
   }
 }
