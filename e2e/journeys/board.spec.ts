@@ -49,7 +49,7 @@ test('an edition is returned with comments, answered by a new one, warned of, si
     await answer.editHeadline((made) => `As of now: ${made}`);
     const edition = await answer.publish(2);
     await expect(edition.headline).toHaveText(/^As of now: The market values Velmara/);
-    await expect(edition.text(/answers edition 1$/)).toBeVisible();
+    await expect(edition.text(/answers edition 1\s*$/)).toBeVisible();
     await edition.comment('the slopes', 'Nothing but the newest year.');
   });
 
