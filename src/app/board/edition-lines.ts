@@ -19,7 +19,7 @@ import { Sentence, type SentenceFigureWanted } from '../ui/sentence';
             <kv-sentence [sentence]="line.sentence" (opened)="opened.emit($event)" />
             @if (line.figure; as figure) {
               @if (isUnlinked(line)) {
-                <button
+                &ngsp;<button
                   type="button"
                   class="kv-link kv-no-print"
                   (click)="opened.emit({ figure, value: 0 })"
