@@ -131,6 +131,7 @@ test('from a file to a signed edition, with the figures that R gives', async ({
     await cfoPage.goto('/');
     const edition = await new EditionPage(cfoPage).read(1);
     await expect(edition.text('The slopes rest on few degrees of freedom.')).toBeVisible();
+    expect(await edition.openSeriousWarnings()).toBeGreaterThan(0);
     await edition.sign(1, cfo.password);
     await expect(edition.signature).toHaveText(/Signed by Piet Kalderon on/);
     const list = await new EditionsPage(page).open();
