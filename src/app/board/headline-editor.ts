@@ -21,7 +21,7 @@ import { Sentence, type SentenceFigureWanted } from '../ui/sentence';
   selector: 'kv-headline-editor',
   imports: [Mark, MatFormField, MatHint, MatInput, MatLabel, Sentence],
   template: `
-    <mat-form-field appearance="outline">
+    <mat-form-field appearance="outline" subscriptSizing="dynamic">
       <mat-label>Headline</mat-label>
       <textarea
         #box
@@ -44,7 +44,7 @@ import { Sentence, type SentenceFigureWanted } from '../ui/sentence';
             <li>
               <kv-mark kind="error" />
               <span
-                ><q>{{ problem.found }}</q> {{ problem.detail }}
+                >{{ detailOf(problem) }}
                 <button
                   type="button"
                   class="kv-link"
@@ -127,6 +127,11 @@ export class HeadlineEditor {
 
   focus(): void {
     this.box().nativeElement.focus();
+  }
+
+  /** Names the place where the detail does not. */
+  protected detailOf({ found, detail }: HeadlineProblem): string {
+    return detail.includes(found) ? detail : `“${found}”: ${detail}`;
   }
 
   /** Shows the place in the text; the problem's offsets are those of the text as it was sent. */
