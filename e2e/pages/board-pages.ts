@@ -48,6 +48,8 @@ export class PublishPage extends CheckedPage {
 
   async publish(number: number): Promise<EditionPage> {
     await this.page.getByRole('button', { name: `Publish edition ${number}` }).click();
+    // The preview on this page has the same headings as the edition that comes.
+    await this.page.waitForURL(/\/board\/[0-9a-f-]{36}$/);
     return new EditionPage(this.page).read(number);
   }
 }
