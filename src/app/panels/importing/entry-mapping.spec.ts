@@ -77,6 +77,11 @@ describe('entries as a mapping', () => {
     if (mapping === null) throw new Error('expected a mapping');
     expect(isSameMapping(mapping, { ...mapping, others: ['cur', 'staff'] })).toBeTrue();
     expect(isSameMapping(mapping, { ...mapping, unit: 'units' })).toBeFalse();
+    const utf8 = { ...mapping, reading: { ...mapping.reading, encoding: 'utf-8' } } as const;
+    const unsaid = { ...mapping, reading: { ...mapping.reading, encoding: undefined } };
+    expect(isSameMapping(utf8, unsaid)).toBeTrue();
+    const utf16 = { ...mapping, reading: { ...mapping.reading, encoding: 'utf-16' } } as const;
+    expect(isSameMapping(utf8, utf16)).toBeFalse();
     const mending = { ...noMending, excludedRows: [2] };
     expect(isSameMapping(mapping, { ...mapping, mending })).toBeFalse();
     expect(isSameMapping(null, mapping)).toBeFalse();

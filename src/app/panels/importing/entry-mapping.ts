@@ -68,7 +68,17 @@ export function readEntry(
 /** Whether two mappings ask for the same panel, whatever the order of what has none. */
 export function isSameMapping(left: ImportMapping | null, right: Partial<ImportMapping>): boolean {
   const parsed = ImportMapping.safeParse(right);
-  return left !== null && parsed.success && canonical(left) === canonical(parsed.data);
+  if (left === null || !parsed.success) return false;
+  return canonical(left) === canonical(withEncoding(parsed.data, left.reading.encoding));
+}
+
+/** Where a mapping left the encoding to be recognised, the recognised one is no change. */
+function withEncoding(
+  mapping: ImportMapping,
+  encoding: ImportMapping['reading']['encoding'],
+): ImportMapping {
+  const { reading } = mapping;
+  return { ...mapping, reading: { ...reading, encoding: reading.encoding ?? encoding } };
 }
 
 function readCurrencies({ currencyColumn, rates }: MappingEntry): {
