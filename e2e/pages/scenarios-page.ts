@@ -96,7 +96,7 @@ export class ScenariosPage extends CheckedPage {
   }
 
   async reset(): Promise<void> {
-    await this.page.getByRole('button', { name: 'Reset to base' }).click();
+    await this.page.getByRole('button', { name: 'Reset to base', exact: true }).click();
   }
 
   async addYear(year: number): Promise<void> {
